@@ -1,0 +1,27 @@
+import { CopyButton } from "./copy-button";
+
+interface CodeBlockProps {
+  readonly code: string;
+  /** What the code is, for its caption and for the copy button: "curl", "the answer". */
+  readonly label: string;
+}
+
+/** Code to read and to copy; long lines scroll inside the block. */
+export function CodeBlock({ code, label }: CodeBlockProps) {
+  return (
+    <figure className="rounded border border-rule bg-sheet">
+      <figcaption className="flex items-center justify-between border-b border-rule ps-2 pe-0.5 text-small text-ink-soft">
+        {label}
+        <CopyButton text={code} what={label} />
+      </figcaption>
+      <pre
+        // Reachable by keyboard, since it scrolls.
+        tabIndex={0}
+        aria-label={label}
+        className="overflow-x-auto px-2 py-1.5 text-small"
+      >
+        <code>{code}</code>
+      </pre>
+    </figure>
+  );
+}

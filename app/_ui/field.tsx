@@ -1,0 +1,49 @@
+import { type ReactNode, useId } from "react";
+
+/** What a control inside a field must carry, so that its label, help and error are read with it. */
+export interface ControlProps {
+  readonly id: string;
+  readonly "aria-describedby"?: string;
+  readonly "aria-invalid"?: true;
+}
+
+interface FieldProps {
+  readonly label: ReactNode;
+  readonly help?: ReactNode;
+  /** A sentence: what was wrong and what is allowed. */
+  readonly error?: string;
+  readonly className?: string;
+  readonly children: (control: ControlProps) => ReactNode;
+}
+
+/** A labelled control with its help and its error; the error keeps its line, so that nothing jumps. */
+export function Field({ label, help, error, className = "", children }: FieldProps) {
+  const id = useId();
+  const helpId = `${id}-help`;
+  const errorId = `${id}-error`;
+  const describedBy = [error ? errorId : null, help ? helpId : null].filter(Boolean).join(" ");
+  return (
+    <div className={className}>
+      <label htmlFor={id} className="mb-0.5 block text-table">
+        {label}
+      </label>
+      {children({
+        id,
+        ...(describedBy ? { "aria-describedby": describedBy } : {}),
+        ...(error ? { "aria-invalid": true } : {}),
+      })}
+      {help ? (
+        <p id={helpId} className="mt-0.5 text-small text-ink-soft">
+          {help}
+        </p>
+      ) : null}
+      <p id={errorId} className="mt-0.5 min-h-2.5 text-small text-oxide">
+        {error}
+      </p>
+    </div>
+  );
+}
+
+/** The look shared by text inputs and selects. */
+export const CONTROL =
+  "block min-h-5 w-full rounded border border-edge bg-sheet px-1 py-0.5 font-mono text-table text-ink hover:border-ink aria-invalid:border-oxide aria-invalid:border-2 disabled:opacity-55";

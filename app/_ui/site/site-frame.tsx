@@ -1,0 +1,70 @@
+import Link from "next/link";
+import type { ReactNode } from "react";
+import type { Theme } from "../theme";
+import { ThemeSwitch } from "../theme-switch";
+import { Mark } from "./mark";
+
+const NAVIGATION = [
+  { href: "/docs", label: "Docs" },
+  { href: "/docs/api", label: "API reference" },
+] as const;
+
+const FOOTER = [
+  { href: "/docs/problems", label: "Problems" },
+  { href: "/docs/changelog", label: "Changelog" },
+] as const;
+
+/** Header, main region and footer of every public page. */
+export function SiteFrame({ theme, children }: { readonly theme: Theme; readonly children: ReactNode }) {
+  return (
+    <div className="flex min-h-dvh flex-col">
+      <a
+        href="#content"
+        className="absolute start-2 top-2 z-10 -translate-y-20 rounded border border-edge bg-sheet px-2 py-1 focus:translate-y-0"
+      >
+        Skip to content
+      </a>
+      <header className="border-b border-rule print:hidden">
+        <div className="mx-auto flex max-w-page flex-wrap items-center gap-x-3 gap-y-1 px-2 py-1.5 medium:px-4">
+          <Link href="/" className="flex items-center gap-1 rounded text-lead font-semibold tracking-tight">
+            <Mark className="h-2.5 w-3.5" />
+            Rhoform
+          </Link>
+          <nav aria-label="Site" className="flex grow flex-wrap gap-x-2.5 text-table">
+            {NAVIGATION.map(({ href, label }) => (
+              <Link
+                key={href}
+                href={href}
+                className="rounded py-0.5 text-ink-soft hover:text-ink hover:underline"
+              >
+                {label}
+              </Link>
+            ))}
+          </nav>
+          <ThemeSwitch initial={theme} />
+        </div>
+      </header>
+      <main
+        id="content"
+        tabIndex={-1}
+        className="mx-auto w-full max-w-page grow px-2 py-5 outline-none medium:px-4 medium:py-7"
+      >
+        {children}
+      </main>
+      <footer className="border-t border-rule text-small text-ink-soft print:hidden">
+        <div className="mx-auto flex max-w-page flex-wrap items-baseline justify-between gap-x-4 gap-y-1 px-2 py-3 medium:px-4">
+          <p className="max-w-prose">
+            Results are DC resistances under the stated assumptions, and no proof of compliance.
+          </p>
+          <nav aria-label="More" className="flex gap-x-2.5">
+            {FOOTER.map(({ href, label }) => (
+              <Link key={href} href={href} className="rounded hover:text-ink hover:underline">
+                {label}
+              </Link>
+            ))}
+          </nav>
+        </div>
+      </footer>
+    </div>
+  );
+}

@@ -1,0 +1,35 @@
+import type { Metadata, Viewport } from "next";
+import type { ReactNode } from "react";
+import { mono, sans, sansExtended } from "./fonts";
+import { readerTheme } from "./reader-theme";
+import "./globals.css";
+
+export const metadata: Metadata = {
+  title: { default: "Rhoform", template: "%s · Rhoform" },
+  description:
+    "From a shape, a material and two terminals to a DC resistance that can be defended: one number with its bounds, its method and its sources.",
+};
+
+export const viewport: Viewport = {
+  width: "device-width",
+  initialScale: 1,
+  themeColor: [
+    { media: "(prefers-color-scheme: light)", color: "#faf8f3" },
+    { media: "(prefers-color-scheme: dark)", color: "#14181a" },
+  ],
+};
+
+/** Reading the cookie here makes every page render per request, which the nonce of its scripts needs. */
+export default async function RootLayout({ children }: { readonly children: ReactNode }) {
+  const theme = await readerTheme();
+  return (
+    <html
+      lang="en"
+      data-theme={theme === "system" ? undefined : theme}
+      className={`${sans.variable} ${sansExtended.variable} ${mono.variable}`}
+      suppressHydrationWarning
+    >
+      <body>{children}</body>
+    </html>
+  );
+}
