@@ -1,0 +1,128 @@
+import type { Domain } from "../outline/domain";
+import { constrain } from "./constrain";
+import { insertionOrder } from "./insertion-order";
+import { nextEdge, Triangulation } from "./triangulation";
+
+/** The first four vertices of a triangulation are the far corners around it. */
+export const FAR_VERTICES = 4;
+
+/** Vertices 4… of the answer are the domain's points in their order, joined by all its segments; nothing is removed. */
+export function triangulateGraph(domain: Domain): Triangulation {
+  const count = domain.xy.length / 2;
+  const mesh = new Triangulation(count);
+  insertPoints(mesh, domain.xy);
+  const { segments } = domain;
+  for (let s = 0; s < segments.length / 2; s++) {
+    constrainThrough(mesh, segments[2 * s] + FAR_VERTICES, segments[2 * s + 1] + FAR_VERTICES, s + 1);
+  }
+  return mesh;
+}
+
+/**
+ * Inserts points as vertices 4…. Answers the pairs (point, earlier point) that coincide; the later one of a pair is
+ * stored, but not connected.
+ */
+export function insertPoints(mesh: Triangulation, xy: Float64Array): Array<[number, number]> {
+  const count = xy.length / 2;
+  for (let i = 0; i < count; i++) mesh.addVertex(xy[2 * i], xy[2 * i + 1]);
+  const order = insertionOrder(xy, count);
+  const coincident: Array<[number, number]> = [];
+  let hint = 0;
+  for (let k = 0; k < count; k++) {
+    const i = order[k];
+    const x = xy[2 * i];
+    const y = xy[2 * i + 1];
+    const t = mesh.locate(x, y, hint, false);
+    if (t < 0) throw new Error("point outside the frame");
+    const twinVertex = vertexAt(mesh, t, x, y);
+    if (twinVertex >= 0) {
+      coincident.push([i, twinVertex - FAR_VERTICES]);
+      continue;
+    }
+    mesh.openCavity(x, y, t, -1);
+    mesh.fill(i + FAR_VERTICES, -1, -1, 0);
+    hint = mesh.created[0];
+  }
+  return coincident;
+}
+
+function vertexAt(mesh: Triangulation, t: number, x: number, y: number): number {
+  for (let h = 3 * t; h < 3 * t + 3; h++) {
+    const v = mesh.corner[h];
+    if (mesh.xy[2 * v] === x && mesh.xy[2 * v + 1] === y) return v;
+  }
+  return -1;
+}
+
+/** Constrains a–b piece by piece through the vertices that lie on it. */
+function constrainThrough(mesh: Triangulation, a: number, b: number, mark: number): void {
+  let from = a;
+  let to = b;
+  const waiting: number[] = [];
+  for (;;) {
+    const obstacle = constrain(mesh, from, to, mark);
+    if (obstacle === null) {
+      from = to;
+      const next = waiting.pop();
+      if (next === undefined) return;
+      to = next;
+    } else if (obstacle.kind === "vertex") {
+      waiting.push(to);
+      to = obstacle.vertex;
+    } else {
+      throw new Error("segments of the domain cross");
+    }
+  }
+}
+
+/**
+ * Removes everything outside the conductor and labels each triangle with its medium: 0, or the number of the region.
+ */
+export function carveDomain(mesh: Triangulation, domain: Domain): void {
+  const { segments, segmentSide, regionEdges } = domain;
+  const { label } = mesh;
+  label.fill(-1);
+  const seeds: number[] = [];
+  for (let s = 0; s < segmentSide.length; s++) {
+    if (segmentSide[s] < 0) continue;
+    const h = mesh.findEdge(segments[2 * s] + FAR_VERTICES, segments[2 * s + 1] + FAR_VERTICES);
+    if (h >= 0) seeds.push((h / 3) | 0);
+  }
+  flood(mesh, seeds, 0, (mark) => mark > 0 && segmentSide[mark - 1] >= 0);
+  mesh.carve();
+  const byRegion = new Map<number, number[]>();
+  for (let i = 0; i < regionEdges.length; i += 3) {
+    const h = mesh.findEdge(regionEdges[i] + FAR_VERTICES, regionEdges[i + 1] + FAR_VERTICES);
+    if (h < 0) continue;
+    const list = byRegion.get(regionEdges[i + 2]);
+    if (list) list.push((h / 3) | 0);
+    else byRegion.set(regionEdges[i + 2], [(h / 3) | 0]);
+  }
+  for (const [region, list] of byRegion) flood(mesh, list, region, (mark) => mark > 0);
+}
+
+/** Gives a label to all triangles that can be reached from the seeds without crossing a wall. */
+function flood(mesh: Triangulation, seeds: number[], value: number, isWall: (mark: number) => boolean): void {
+  const { label, twin, mark } = mesh;
+  const stack: number[] = [];
+  for (const t of seeds) {
+    if (label[t] === value) continue;
+    label[t] = value;
+    stack.push(t);
+  }
+  while (stack.length > 0) {
+    const t = stack.pop() as number;
+    for (let h = 3 * t; h < 3 * t + 3; h++) {
+      if (twin[h] < 0 || isWall(mark[h])) continue;
+      const n = (twin[h] / 3) | 0;
+      if (label[n] === value) continue;
+      label[n] = value;
+      stack.push(n);
+    }
+  }
+}
+
+/** The far end of a half-edge. */
+export function headOf(mesh: Triangulation, h: number): number {
+  return mesh.corner[nextEdge(h)];
+}
