@@ -121,7 +121,8 @@ export interface FlowTubes {
   readonly across: readonly AcrossFlow[];
 }
 
-export type BoundsBasis = "rounding" | "quadrature" | "rayleigh" | "formula-accuracy" | "energy" | "energy-quadrature";
+export type BoundsBasis =
+  "rounding" | "quadrature" | "rayleigh" | "formula-accuracy" | "energy" | "energy-quadrature";
 
 /** A resistance over its resistivity (1/m), in squares (sheet), or in ohms (two media), with how sure it is. */
 export interface Factor {
@@ -227,7 +228,10 @@ export interface ShapeDefinition<D extends Dimensions> {
 }
 
 /** A shape with its type parameter forgotten, as the catalogue keeps it. */
-export interface Shape extends Omit<ShapeDefinition<Dimensions>, "answer" | "drawing" | "alternatives" | "constraints"> {
+export interface Shape extends Omit<
+  ShapeDefinition<Dimensions>,
+  "answer" | "drawing" | "alternatives" | "constraints"
+> {
   readonly alternatives: readonly Alternative<Dimensions>[];
   readonly constraints: readonly Constraint<Dimensions>[];
   readonly answer: ShapeAnswer<Dimensions>;

@@ -86,7 +86,10 @@ export function circle(center: Point, radius: number): DrawingPath {
 
 /** The arc of a circle from one polar angle to another (radians, counter-clockwise). */
 export function arc(center: Point, radius: number, start: number, end: number): DrawingPath {
-  const at = (angle: number): Point => [center[0] + radius * Math.cos(angle), center[1] + radius * Math.sin(angle)];
+  const at = (angle: number): Point => [
+    center[0] + radius * Math.cos(angle),
+    center[1] + radius * Math.sin(angle),
+  ];
   const middle = (start + end) / 2;
   return {
     from: at(start),

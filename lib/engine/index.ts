@@ -1,0 +1,75 @@
+/** The engine's public surface: from a shape, a medium and two terminals to a resistance with bounds. Pure. */
+export { CATALOGUE_VERSION, ENGINE_VERSION } from "./version";
+export { CheckFailure, InputError, pointerTo, Problems, type Problem } from "./failure";
+
+export {
+  parseQuantity,
+  readQuantity,
+  type QuantityOptions,
+  type QuantityReading,
+} from "./quantity/parse-quantity";
+export { formatQuantity, type FormatOptions, type TextUnit } from "./quantity/format-quantity";
+export { QUANTITY_KINDS, type QuantityKindName } from "./quantity/quantity-kind";
+export { anyQuantitySchema, quantitySchema } from "./quantity/quantity-schema";
+
+export type { Dimension, Dimensions, Family, Resolved, Shape } from "./shape/define-shape";
+export type { Drawing } from "./shape/drawing";
+export { catalogue, findShape } from "./shape/catalogue";
+export { nearestNames } from "./shape/nearest-names";
+export { resolveDimensions } from "./shape/resolve-dimensions";
+export {
+  dimensionEntrySchema,
+  exampleRequest,
+  shapeEntry,
+  shapeEntrySchema,
+  shapeMedia,
+  type DimensionEntry,
+  type ShapeEntry,
+} from "./shape/shape-entry";
+
+export {
+  coversTemperature,
+  materialSchema,
+  resistivityAt,
+  resistivityModelSchema,
+  type Material,
+  type ResistivityModel,
+} from "./medium/material";
+export { libraryMaterial, libraryMaterials } from "./medium/library/materials";
+export { gradedSchema, mediumSchema, type GradedInput, type MediumInput } from "./medium/medium-schema";
+export { profileKinds, profileSchema } from "./medium/profiles/profile-kinds";
+export type { ProfileKind } from "./medium/profile";
+
+export {
+  addZodIssues,
+  dimensionsSchema,
+  includeSchema,
+  mediaSchema,
+  operatingSchema,
+  recordRequestSchema,
+  requirementSchema,
+  resistanceRequestSchema,
+  type ResistanceRequest,
+} from "./resistance/request-schema";
+export {
+  boundedResistanceSchema,
+  boundsBasisSchema,
+  checkSchema,
+  conductanceSchema,
+  methodSchema,
+  operatingPointSchema,
+  peakSchema,
+  profileResultSchema,
+  resistanceResultSchema,
+  sourceSchema,
+  stepSchema,
+  usedMaterialSchema,
+  verdictSchema,
+  type Check,
+  type Peak,
+  type ProfileResult,
+  type ResistanceResult,
+  type Step,
+  type UsedMaterial,
+} from "./resistance/result-schema";
+export { computeResistance, type ComputeContext } from "./resistance/compute-resistance";
