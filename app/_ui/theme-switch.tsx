@@ -1,7 +1,7 @@
 "use client";
 
 import { type ReactNode, useId, useState } from "react";
-import { THEMES, THEME_COOKIE, type Theme } from "./theme";
+import { THEMES, type Theme, applyTheme } from "./theme";
 
 const LABELS: Record<Theme, string> = { system: "As the device", light: "Light", dark: "Dark" };
 
@@ -20,9 +20,7 @@ export function ThemeSwitch({ initial }: { readonly initial: Theme }) {
 
   function choose(next: Theme) {
     setTheme(next);
-    if (next === "system") delete document.documentElement.dataset.theme;
-    else document.documentElement.dataset.theme = next;
-    document.cookie = `${THEME_COOKIE}=${next}; path=/; max-age=31536000; samesite=lax`;
+    applyTheme(next);
   }
 
   return (
