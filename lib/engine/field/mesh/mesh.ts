@@ -11,6 +11,8 @@ export interface BoundarySide {
   readonly ring: number;
   /** Index of the terminal in the request, or -1 for an insulated side. */
   readonly terminal: number;
+  /** The side lies on the axis x = 0 of an axisymmetric outline; no current passes it. Its terminal is -1. */
+  readonly axis?: true;
 }
 
 export interface FieldMesh {

@@ -77,52 +77,70 @@ function constrainThrough(mesh: Triangulation, a: number, b: number, mark: numbe
 
 /**
  * Removes everything outside the conductor and labels each triangle with its medium: 0, or the number of the region.
+ * Answers two regions that overlap, or null.
  */
-export function carveDomain(mesh: Triangulation, domain: Domain): void {
-  const { segments, segmentSide, regionEdges } = domain;
+export function carveDomain(mesh: Triangulation, domain: Domain): [number, number] | null {
+  const { segmentSide, segmentRegion } = domain;
   const { label } = mesh;
   label.fill(-1);
-  const seeds: number[] = [];
-  for (let s = 0; s < segmentSide.length; s++) {
-    if (segmentSide[s] < 0) continue;
-    const h = mesh.findEdge(segments[2 * s] + FAR_VERTICES, segments[2 * s + 1] + FAR_VERTICES);
-    if (h >= 0) seeds.push((h / 3) | 0);
-  }
-  flood(mesh, seeds, 0, (mark) => mark > 0 && segmentSide[mark - 1] >= 0);
-  mesh.carve();
+  const inside: number[] = [];
   const byRegion = new Map<number, number[]>();
-  for (let i = 0; i < regionEdges.length; i += 3) {
-    const h = mesh.findEdge(regionEdges[i] + FAR_VERTICES, regionEdges[i + 1] + FAR_VERTICES);
-    if (h < 0) continue;
-    const list = byRegion.get(regionEdges[i + 2]);
+  for (let h = 0; h < 3 * mesh.triangleSlots; h++) {
+    if (mesh.corner[h] < 0 || mesh.mark[h] === 0) continue;
+    const s = mesh.mark[h] - 1;
+    const along = runsAlong(mesh, domain, h, s);
+    if (segmentSide[s] >= 0 && along) inside.push((h / 3) | 0);
+    const region = segmentRegion[2 * s + (along ? 0 : 1)];
+    if (region === 0) continue;
+    const list = byRegion.get(region);
     if (list) list.push((h / 3) | 0);
-    else byRegion.set(regionEdges[i + 2], [(h / 3) | 0]);
+    else byRegion.set(region, [(h / 3) | 0]);
   }
-  for (const [region, list] of byRegion) flood(mesh, list, region, (mark) => mark > 0);
+  flood(mesh, inside, 0, (s) => segmentSide[s] >= 0);
+  let overlap: [number, number] | null = null;
+  for (const [region, seeds] of byRegion) {
+    const isOwnBorder = (s: number): boolean =>
+      segmentSide[s] >= 0 || segmentRegion[2 * s] === region || segmentRegion[2 * s + 1] === region;
+    const other = flood(mesh, seeds, region, isOwnBorder);
+    if (other > 0) overlap ??= [region, other];
+  }
+  mesh.carve();
+  return overlap;
 }
 
-/** Gives a label to all triangles that can be reached from the seeds without crossing a wall. */
-function flood(mesh: Triangulation, seeds: number[], value: number, isWall: (mark: number) => boolean): void {
+/** Whether half-edge h, a piece of segment s, has the segment's direction. */
+function runsAlong(mesh: Triangulation, domain: Domain, h: number, s: number): boolean {
+  const { xy } = mesh;
+  const a = mesh.corner[h];
+  const b = mesh.corner[nextEdge(h)];
+  const p = domain.segments[2 * s] + FAR_VERTICES;
+  const q = domain.segments[2 * s + 1] + FAR_VERTICES;
+  const dx = xy[2 * q] - xy[2 * p];
+  const dy = xy[2 * q + 1] - xy[2 * p + 1];
+  return (xy[2 * b] - xy[2 * a]) * dx + (xy[2 * b + 1] - xy[2 * a + 1]) * dy > 0;
+}
+
+/**
+ * Gives a label to all triangles that can be reached from the seeds without crossing a wall (a segment). Answers a
+ * positive label that was there before, or 0.
+ */
+function flood(mesh: Triangulation, seeds: number[], value: number, isWall: (s: number) => boolean): number {
   const { label, twin, mark } = mesh;
   const stack: number[] = [];
-  for (const t of seeds) {
-    if (label[t] === value) continue;
+  let other = 0;
+  const visit = (t: number): void => {
+    if (label[t] === value) return;
+    if (label[t] > 0) other = label[t];
     label[t] = value;
     stack.push(t);
-  }
+  };
+  for (const t of seeds) visit(t);
   while (stack.length > 0) {
     const t = stack.pop() as number;
     for (let h = 3 * t; h < 3 * t + 3; h++) {
-      if (twin[h] < 0 || isWall(mark[h])) continue;
-      const n = (twin[h] / 3) | 0;
-      if (label[n] === value) continue;
-      label[n] = value;
-      stack.push(n);
+      if (twin[h] < 0 || (mark[h] !== 0 && isWall(mark[h] - 1))) continue;
+      visit((twin[h] / 3) | 0);
     }
   }
-}
-
-/** The far end of a half-edge. */
-export function headOf(mesh: Triangulation, h: number): number {
-  return mesh.corner[nextEdge(h)];
+  return other;
 }

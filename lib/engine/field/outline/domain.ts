@@ -12,8 +12,8 @@ export interface Domain {
   /** Side of each segment, or -1 for a border between regions inside the conductor. */
   readonly segmentSide: Int32Array;
   readonly sides: readonly BoundarySide[];
-  /** Region borders, three integers each: points a, b and the number k ≥ 1 of the region on the left of a→b. */
-  readonly regionEdges: Int32Array;
+  /** Two integers a segment: the region on its left and on its right whose border it is, or 0. */
+  readonly segmentRegion: Int32Array;
   /** Length of one unit of the domain, in metres. */
   readonly unitM: number;
   /** Point of the outline, in its own unit, that is the domain's origin. */

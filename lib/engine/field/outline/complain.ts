@@ -1,0 +1,84 @@
+import type { Conflict } from "./conflicts";
+import type { Drawing } from "./draw";
+import { showDomainPoint, type Frame } from "./frame";
+import type { Ring } from "./ring";
+import type { OutlineError } from "./schema";
+
+/** Sentences about segments that meet; at most one for each pair of different rings. */
+export function describeConflicts(
+  conflicts: readonly Conflict[],
+  drawing: Drawing,
+  rings: readonly Ring[],
+  frame: Frame,
+): OutlineError[] {
+  const errors: OutlineError[] = [];
+  const pairs = new Set<string>();
+  for (const conflict of conflicts) {
+    const { segmentRing, segmentEdge } = drawing;
+    let [s, r] = [conflict.first, conflict.second];
+    if (segmentRing[s] > segmentRing[r]) [s, r] = [r, s];
+    const first = rings[segmentRing[s]];
+    const second = rings[segmentRing[r]];
+    const i = first.source[segmentEdge[s]];
+    const j = second.source[segmentEdge[r]];
+    const where = showDomainPoint(frame, conflict.x, conflict.y);
+    const verb = conflict.kind === "cross" ? "cross" : "touch";
+    if (first === second) {
+      const [low, high] = [Math.min(i, j), Math.max(i, j)];
+      errors.push({
+        pointer: `${first.pointer}/${high}`,
+        detail:
+          low === high
+            ? `Edge ${low} of the ${first.title} touches itself at ${where}. A ring may not touch itself.`
+            : `Edges ${low} and ${high} of the ${first.title} ${verb} at ${where}. ` +
+              `A ring may neither cross nor touch itself; its edges meet only at the vertex they share.`,
+      });
+      continue;
+    }
+    const pair = `${first.number} ${second.number}`;
+    if (pairs.has(pair)) continue;
+    pairs.add(pair);
+    const rule =
+      first.number === 0
+        ? "A hole must lie inside the outer ring without touching it."
+        : "Holes may neither overlap nor touch.";
+    errors.push({
+      pointer: `${second.pointer}/${j}`,
+      detail:
+        `Edge ${j} of ${second.title} ${conflict.kind === "cross" ? "crosses" : "touches"} edge ${i} of ` +
+        `${first.number === 0 ? "the outer ring" : first.title} at ${where}. ${rule}`,
+    });
+  }
+  return errors;
+}
+
+/** Complaints about holes that are not inside the outer ring alone. `around` as `nestRings` answers it. */
+export function describeNesting(
+  around: ReadonlyArray<readonly number[]>,
+  rings: readonly Ring[],
+  frame: Frame,
+): OutlineError[] {
+  const errors: OutlineError[] = [];
+  for (let r = 1; r < rings.length; r++) {
+    const ring = rings[r];
+    const where = showDomainPoint(frame, ring.xy[0], ring.xy[1]);
+    if (!around[r].includes(0)) {
+      const how = around[0].includes(r) ? "surrounds the outer ring" : "lies outside the outer ring";
+      errors.push({
+        pointer: ring.pointer,
+        detail: `${capital(ring.title)}, which begins at ${where}, ${how}. A hole must lie inside the outer ring.`,
+      });
+    } else if (around[r].length > 1) {
+      const other = rings[around[r][around[r].length - 1]];
+      errors.push({
+        pointer: ring.pointer,
+        detail: `${capital(ring.title)}, which begins at ${where}, lies inside ${other.title}. Holes may not overlap.`,
+      });
+    }
+  }
+  return errors;
+}
+
+function capital(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
+}
