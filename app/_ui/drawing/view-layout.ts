@@ -86,7 +86,10 @@ function attempt(
   const taken: Rect[] = [];
   const obstacles: Obstacles = {
     rects: taken,
-    edges: [...bodies, ...paper.high, ...paper.low].flatMap(edgePoints),
+    edges: [
+      ...[...bodies, ...paper.high, ...paper.low].flatMap(edgePoints),
+      ...paper.flow.flatMap(({ from, to }) => edgePoints({ from, steps: [{ to }] })),
+    ],
     inBody: insideOf(bodies),
   };
   const dimensions: PlacedDimension[] = [];

@@ -1,0 +1,87 @@
+/**
+ * `npm test`: sets itself up, then checks formatting, lint, types, generated files and the build, and runs every test.
+ * The last line it prints is `N passed, N failed`, where each of those checks counts as one.
+ */
+import { spawnSync } from "node:child_process";
+import { existsSync, mkdtempSync, readFileSync, rmSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
+import { ROOT, SetupError, checkNode, ensureBuilt, ensureInstalled, onPath, run } from "./setup.mjs";
+
+const CHROMIUM = "/usr/bin/chromium";
+
+function ensureChromium() {
+  if (existsSync(CHROMIUM)) return;
+  const command = "apt-get install -y --no-install-recommends chromium";
+  if (process.getuid?.() !== 0 || !onPath("apt-get")) {
+    throw new SetupError(`The browser tests need Chromium at ${CHROMIUM}. On Debian: ${command}`);
+  }
+  console.log("Installing Chromium for the browser tests …");
+  const env = { DEBIAN_FRONTEND: "noninteractive" };
+  run(["apt-get", "update"], { quiet: true, env });
+  run(command.split(" "), { quiet: true, env });
+}
+
+const bin = (name) => join("node_modules", ".bin", name);
+
+const CHECKS = [
+  ["format", [bin("prettier"), "--check", "--log-level", "warn", "."]],
+  ["lint", [bin("eslint"), ".", "--max-warnings", "0"]],
+  ["types", [bin("tsc"), "--noEmit", "-p", "."]],
+  ["generated files", [bin("tsx"), "lib/cli/generate.ts", "--check"]],
+];
+
+/** Runs one check; its output is shown as it comes. */
+function passes(name, [program, ...args]) {
+  console.log(`\n── ${name}`);
+  return spawnSync(program, args, { cwd: ROOT, stdio: ["ignore", "inherit", "inherit"] }).status === 0;
+}
+
+/** Runs all tests and counts them from vitest's own report. */
+function runTests() {
+  const folder = mkdtempSync(join(tmpdir(), "rhoform-report-"));
+  const report = join(folder, "report.json");
+  console.log("\n── tests");
+  const args = ["run", "--reporter=default", "--reporter=json", `--outputFile.json=${report}`];
+  const { status } = spawnSync(bin("vitest"), args, { cwd: ROOT, stdio: ["ignore", "inherit", "inherit"] });
+  try {
+    const { numPassedTests, numTotalTests, success } = JSON.parse(readFileSync(report, "utf8"));
+    const failed = numTotalTests - numPassedTests;
+    // A file that could not be loaded, or an error between tests, fails the run without failing a test.
+    const unseen = failed === 0 && (status !== 0 || !success) ? 1 : 0;
+    return { passed: numPassedTests, failed: failed + unseen };
+  } catch {
+    return { passed: 0, failed: 1 };
+  } finally {
+    rmSync(folder, { recursive: true, force: true });
+  }
+}
+
+function main() {
+  process.chdir(ROOT);
+  process.env.NEXT_TELEMETRY_DISABLED = "1";
+  let passed = 0;
+  let failed = 0;
+  try {
+    checkNode();
+    ensureInstalled();
+    ensureChromium();
+    for (const [name, command] of CHECKS) {
+      if (passes(name, command)) passed += 1;
+      else failed += 1;
+    }
+    console.log("\n── build");
+    ensureBuilt();
+    passed += 1;
+    const tests = runTests();
+    passed += tests.passed;
+    failed += tests.failed;
+  } catch (error) {
+    console.error(error instanceof SetupError ? error.message : error);
+    failed += 1;
+  }
+  console.log(`${passed} passed, ${failed} failed`);
+  process.exit(failed === 0 ? 0 : 1);
+}
+
+main();
