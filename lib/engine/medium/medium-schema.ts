@@ -9,12 +9,9 @@ export const gradedSchema = z
       description: "A coordinate of the shape, along or across the flow; `GET /shapes/{shape}` lists them.",
       example: "radius",
     }),
-    quantity: z
-      .enum(["conductivity", "resistivity"])
-      .optional()
-      .meta({
-        description: "What the profile's values are; not needed for `temperature` and `dopant` profiles.",
-      }),
+    quantity: z.enum(["conductivity", "resistivity"]).optional().meta({
+      description: "What the profile's values are; not needed for `temperature` and `dopant` profiles.",
+    }),
     profile: profileSchema,
   })
   .meta({ description: "A medium that varies along one coordinate of the shape." });

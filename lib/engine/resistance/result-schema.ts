@@ -151,11 +151,9 @@ export const quadratureSchema = z
   })
   .meta({ description: "How the integral went; only where the method is quadrature." });
 
-export const verdictSchema = z
-  .enum(["met", "not-met", "undecided"])
-  .meta({
-    description: "Whether the requirement is met; decided only if the bounds lie wholly on one side.",
-  });
+export const verdictSchema = z.enum(["met", "not-met", "undecided"]).meta({
+  description: "Whether the requirement is met; decided only if the bounds lie wholly on one side.",
+});
 
 export const resistanceResultSchema = z
   .object({
