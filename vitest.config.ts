@@ -1,9 +1,13 @@
 import { fileURLToPath } from "node:url";
 import { defineConfig } from "vitest/config";
 
-const alias = { "@": fileURLToPath(new URL(".", import.meta.url)).replace(/\/$/, "") };
+const alias = {
+  "@": fileURLToPath(new URL(".", import.meta.url)).replace(/\/$/, ""),
+  // Resolves only inside Next; in tests a server module is a module.
+  "server-only": fileURLToPath(new URL("tests/support/server-only.ts", import.meta.url)),
+};
 
-/** One project a kind of test; `server` projects share a built server started by their global setup. */
+/** One project a kind of test; `server` tests share one built server that their global setup starts. */
 export default defineConfig({
   resolve: { alias },
   test: {
@@ -18,7 +22,25 @@ export default defineConfig({
       },
       {
         resolve: { alias },
+        test: {
+          name: "units",
+          include: ["tests/ui/**/*.test.ts", "tests/lib/**/*.test.ts", "tests/cli/**/*.test.ts"],
+          testTimeout: 60_000,
+        },
+      },
+      {
+        resolve: { alias },
         test: { name: "db", include: ["tests/db/**/*.test.ts"], testTimeout: 30_000 },
+      },
+      {
+        resolve: { alias },
+        test: {
+          name: "server",
+          include: ["tests/api/**/*.test.ts", "tests/sdk/**/*.test.ts", "tests/browser/**/*.test.ts"],
+          globalSetup: ["tests/support/start-server.ts"],
+          testTimeout: 60_000,
+          hookTimeout: 60_000,
+        },
       },
     ],
   },

@@ -89,6 +89,7 @@ const SOURCES = [
   "lib",
   "public",
   "instrumentation.ts",
+  "instrumentation-node.ts",
   "next.config.ts",
   "package-lock.json",
   "postcss.config.mjs",

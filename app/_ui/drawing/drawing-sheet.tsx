@@ -163,7 +163,7 @@ function Dimension({
         y={round(box.y + box.height / 2 + 0.35 * FONT_SIZE)}
         textAnchor="middle"
         fill="currentColor"
-        className="tabular-nums"
+        className="tabular-nums [word-spacing:0.12em]"
       >
         {symbolParts(label.symbol).map((part, index, parts) => (
           <tspan

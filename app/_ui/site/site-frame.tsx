@@ -3,6 +3,7 @@ import type { ReactNode } from "react";
 import type { Theme } from "../theme";
 import { ThemeSwitch } from "../theme-switch";
 import { Mark } from "./mark";
+import { SiteLink } from "./site-link";
 
 const NAVIGATION = [
   { href: "/docs", label: "Docs" },
@@ -25,20 +26,23 @@ export function SiteFrame({ theme, children }: { readonly theme: Theme; readonly
         Skip to content
       </a>
       <header className="border-b border-rule print:hidden">
-        <div className="mx-auto flex max-w-page flex-wrap items-center gap-x-3 gap-y-1 px-2 py-1.5 medium:px-4">
+        <div className="mx-auto flex max-w-page flex-wrap items-center justify-between gap-x-3 gap-y-0.5 px-2 py-1.5 medium:px-4">
           <Link href="/" className="flex items-center gap-1 rounded text-lead font-semibold tracking-tight">
             <Mark className="h-2.5 w-3.5" />
             Rhoform
           </Link>
-          <nav aria-label="Site" className="flex grow flex-wrap gap-x-2.5 text-table">
+          <nav
+            aria-label="Site"
+            className="order-last flex w-full grow flex-wrap gap-x-2.5 text-table medium:order-none medium:w-auto"
+          >
             {NAVIGATION.map(({ href, label }) => (
-              <Link
+              <SiteLink
                 key={href}
                 href={href}
                 className="rounded py-0.5 text-ink-soft hover:text-ink hover:underline"
               >
                 {label}
-              </Link>
+              </SiteLink>
             ))}
           </nav>
           <ThemeSwitch initial={theme} />

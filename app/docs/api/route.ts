@@ -1,0 +1,108 @@
+import { readFile } from "node:fs/promises";
+import { join } from "node:path";
+import { ApiReference } from "@scalar/nextjs-api-reference";
+import type { NextRequest } from "next/server";
+import { THEME_COOKIE, parseTheme } from "../../_ui/theme";
+import { referenceScript } from "./reference-script";
+
+const TITLE = "API reference · Rhoform";
+
+/** The interactive reference: the package's own page, with everything served from here. */
+export async function GET(request: NextRequest): Promise<Response> {
+  const theme = parseTheme(request.cookies.get(THEME_COOKIE)?.value);
+  const nonce = request.headers.get("X-Nonce") ?? "";
+  const { path } = await referenceScript();
+  // Wider than the adapter's own type, which lags behind the script that reads it.
+  const configuration = {
+    url: "/api/v1/openapi.json",
+    cdn: path,
+    pageTitle: TITLE,
+    theme: "none" as const,
+    customCss: CSS,
+    withDefaultFonts: false,
+    telemetry: false,
+    showDeveloperTools: "never" as const,
+    agent: { disabled: true },
+    mcp: { disabled: true },
+    hideClientButton: true,
+    hideDarkModeToggle: true,
+    ...(theme === "system" ? {} : { forceDarkModeState: theme }),
+    defaultHttpClient: { targetKey: "shell", clientKey: "curl" } as const,
+    metaData: { title: TITLE },
+  };
+  const page = await ApiReference(configuration)().text();
+  const tokens = await readFile(join(process.cwd(), "app/_ui/tokens.css"), "utf8");
+  const html = page
+    .replace("<html>", `<html lang="en"${theme === "system" ? "" : ` data-theme="${theme}"`}>`)
+    .replace(
+      "</head>",
+      `<link rel="icon" href="/icon.svg" type="image/svg+xml"><style>${tokens}${FRAME_CSS}</style></head>`,
+    )
+    .replace("<body>", `<body>${HEADER}`)
+    .replaceAll("<script", `<script nonce="${nonce}"`);
+  return new Response(html, {
+    headers: { "Content-Type": "text/html; charset=utf-8", "Cache-Control": "no-store" },
+  });
+}
+
+const HEADER = `
+    <header class="frame">
+      <a class="frame-home" href="/">Rhoform</a>
+      <a href="/docs">Docs</a>
+      <h1>API reference</h1>
+    </header>
+    <noscript><p class="frame-note">The interactive reference needs scripts. The same contract is the
+      <a href="/api/v1/openapi.json">OpenAPI document</a>.</p></noscript>`;
+
+const FRAME_CSS = `
+body { margin: 0; background: var(--paper); color: var(--ink); font-family: system-ui, sans-serif; }
+.frame { display: flex; flex-wrap: wrap; align-items: baseline; gap: 4px 20px; padding: 12px 24px;
+  border-bottom: 1px solid var(--rule); font-size: 14px; }
+.frame a { color: var(--ink-soft); }
+.frame a.frame-home { color: var(--ink); font-size: 19px; font-weight: 600; text-decoration: none; }
+.frame h1 { font-size: 14px; font-weight: 600; margin: 0; }
+.frame-note { padding: 24px; }
+`;
+
+/** The package's colours, set to ours. */
+const CSS = `
+.light-mode, .dark-mode {
+  --scalar-background-1: var(--paper);
+  --scalar-background-2: var(--sheet);
+  --scalar-background-3: color-mix(in oklab, var(--rule) 55%, var(--sheet));
+  --scalar-background-accent: color-mix(in oklab, var(--verdigris) 14%, var(--sheet));
+  --scalar-color-1: var(--ink);
+  --scalar-color-2: var(--ink-soft);
+  --scalar-color-3: var(--ink-soft);
+  --scalar-color-accent: var(--verdigris);
+  --scalar-link-color: var(--verdigris);
+  --scalar-border-color: var(--rule);
+  --scalar-button-1: var(--copper);
+  --scalar-button-1-color: var(--sheet);
+  --scalar-button-1-hover: var(--ink);
+  --scalar-color-green: var(--verdigris);
+  --scalar-color-red: var(--oxide);
+  --scalar-color-yellow: var(--amber);
+  --scalar-color-orange: var(--amber);
+  --scalar-color-blue: var(--verdigris);
+  --scalar-color-purple: var(--copper);
+  --scalar-scrollbar-color: var(--rule);
+  --scalar-scrollbar-color-active: var(--edge);
+  --scalar-radius: 2px;
+  --scalar-radius-lg: 2px;
+  --scalar-radius-xl: 2px;
+  --scalar-shadow-1: none;
+  --scalar-shadow-2: 0 0 0 1px var(--rule);
+}
+.sidebar {
+  --scalar-sidebar-background-1: var(--paper);
+  --scalar-sidebar-color-1: var(--ink);
+  --scalar-sidebar-color-2: var(--ink-soft);
+  --scalar-sidebar-color-active: var(--ink);
+  --scalar-sidebar-item-hover-background: var(--sheet);
+  --scalar-sidebar-item-active-background: var(--sheet);
+  --scalar-sidebar-border-color: var(--rule);
+  --scalar-sidebar-search-background: var(--sheet);
+  --scalar-sidebar-search-border-color: var(--edge);
+}
+`;

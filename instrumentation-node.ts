@@ -1,0 +1,25 @@
+import type { Instrumentation } from "next";
+import { stampPeerAddresses } from "@/lib/http/peer-stamp";
+import { closeSharedService, sharedService } from "@/lib/service/service";
+
+/** Opens and migrates the database, and sees to it that it is closed at the end. */
+export function openForRequests(): void {
+  stampPeerAddresses();
+  sharedService();
+  process.once("exit", closeSharedService);
+}
+
+/** Writes a failed page to the structured log; the path without its query, which may carry a key. */
+export function logPageFailure(
+  ...[error, request, context]: Parameters<Instrumentation.onRequestError>
+): void {
+  sharedService().log.error({
+    event: "page-failed",
+    path: request.path.split("?")[0],
+    method: request.method,
+    route: context.routePath,
+    digest:
+      typeof error === "object" && error !== null && "digest" in error ? String(error.digest) : undefined,
+    error: error instanceof Error ? (error.stack ?? error.message) : String(error),
+  });
+}

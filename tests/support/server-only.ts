@@ -1,0 +1,2 @@
+/** Stands in for the package of that name, which refuses to load outside Next's server bundle. */
+export {};
