@@ -1,6 +1,7 @@
 /** What a graded medium's profile is to the engine: pieces along one coordinate, each with its own law. */
 import type { z } from "zod";
 import type { Problems } from "../failure";
+import type { Smoothness } from "../numeric/piecewise-integral";
 import type { QuantityKindName } from "../quantity/quantity-kind";
 import type { Material } from "./material";
 
@@ -39,6 +40,8 @@ export interface ProfileLaw {
   readonly quantity: LawQuantity;
   /** Largest over smallest value in a piece, where that is known: tells how fine a rule must be. */
   readonly spread?: (piece: number) => number;
+  /** What kind of function the law is inside a piece; `reciprocal` where nothing is said. */
+  readonly smoothness?: Smoothness;
   /** The law is one constant in each piece. */
   readonly stepwise?: boolean;
   /** Inside a piece the law may have kinks or jumps (an expression). */

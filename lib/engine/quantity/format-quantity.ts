@@ -75,6 +75,13 @@ export function formatQuantity(value: number, unit: TextUnit, options: FormatOpt
   return `${mantissa}×10${superscript(exponent)}${space}${symbol}`;
 }
 
+/** A coordinate for people: metres with a prefix, or degrees. */
+export function siText(value: number, unit: "m" | "rad", digits = 12): string {
+  return unit === "rad"
+    ? formatQuantity((value / Math.PI) * 180, "degree", { digits })
+    : formatQuantity(value, "metre", { digits });
+}
+
 /** A number as TeX with up to six significant digits and a power of ten where it is far from 1. */
 export function texNumber(value: number, digits = 6): string {
   if (value === 0) return "0";

@@ -24,6 +24,10 @@ interface Group {
   readonly derive: Readonly<Record<string, ((d: Resolved<Dimensions>) => number) | undefined>>;
 }
 
+/** Sizes beyond these (m, m², rad) leave no room in a double for their products and quotients. */
+const SMALLEST = { length: 1e-100, area: 1e-200, angle: 1e-100 } as const;
+const LARGEST = { length: 1e100, area: 1e200, angle: 1e100 } as const;
+
 interface Reader {
   readonly inputs: ReadonlyMap<string, Input>;
   readonly groups: readonly Group[];
@@ -186,6 +190,10 @@ function readValue(
 function quantityComplaint(dimension: QuantityDimension, value: number, factor: number): string | null {
   if (value < 0 || (value === 0 && !dimension.zero)) {
     return dimension.zero ? "must be 0 or greater." : "must be greater than 0.";
+  }
+  if (value !== 0 && !(value >= SMALLEST[dimension.kind] && value <= LARGEST[dimension.kind])) {
+    const unit = dimension.kind === "angle" ? "rad" : dimension.kind === "area" ? "m^2" : "m";
+    return `must be between ${SMALLEST[dimension.kind]} and ${LARGEST[dimension.kind]} ${unit}.`;
   }
   if (dimension.max !== undefined && value > dimension.max) {
     const most = dimension.max / factor;

@@ -66,7 +66,6 @@ export const bar = defineShape({
         start: 0,
         extent: length,
         section: () => width * thickness,
-        line: "anywhere in the section",
       },
       across: [
         {

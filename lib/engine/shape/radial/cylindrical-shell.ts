@@ -96,7 +96,6 @@ export const cylindricalShell = defineShape({
           start: innerRadius,
           extent: wall,
           section: (x) => angle * length * (innerRadius + x),
-          line: "at the inner surface",
         },
         across: [
           {

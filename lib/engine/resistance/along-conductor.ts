@@ -1,0 +1,77 @@
+/**
+ * A conductor whose resistivity varies along the flow only (or not at all): R = ∫ρ dx/section. Everything about it, the
+ * total, the potential, the field, comes from integrals of ρ/section over parts of the range.
+ */
+import type { ProfileLaw } from "../medium/profile";
+import type { IntegrateOptions, Integral } from "../numeric/gauss-kronrod";
+import type { AlongFlow } from "../shape/define-shape";
+import { LawIntegral, pieceAt, UnfitValue } from "./law-integral";
+
+/** A medium of one resistivity as a law of one piece. */
+export function uniformLaw(resistivity: number, extent: number): ProfileLaw {
+  return {
+    count: 1,
+    from: [0],
+    width: [extent],
+    at: () => resistivity,
+    quantity: "resistivity",
+    spread: () => 1,
+    stepwise: true,
+    tex: "",
+  };
+}
+
+export class AlongConductor {
+  private readonly integral: LawIntegral;
+  private readonly resistivity: (piece: number, t: number) => number;
+
+  constructor(
+    readonly flow: AlongFlow,
+    readonly law: ProfileLaw,
+  ) {
+    const { from, at } = law;
+    const { section } = flow;
+    const fit = (x: number, value: number): number => {
+      if (value > 0 && value < Infinity) return value;
+      throw new UnfitValue(x, value);
+    };
+    const rho: (piece: number, t: number) => number =
+      law.quantity === "resistivity"
+        ? (piece, t) => fit(from[piece] + t, at(piece, t))
+        : (piece, t) => 1 / fit(from[piece] + t, at(piece, t));
+    this.resistivity = rho;
+    this.integral = new LawIntegral({
+      law,
+      extent: flow.extent,
+      density: (piece, t) => rho(piece, t) / section(from[piece] + t),
+      weight: section,
+      breaks: flow.breaks,
+    });
+  }
+
+  /** Resistivity at x past the start, ohm m. @throws UnfitValue */
+  resistivityAt(x: number): number {
+    const piece = pieceAt(this.law, x);
+    return this.resistivity(piece, x - this.law.from[piece]);
+  }
+
+  /** dR/dx at x: resistance per unit of the coordinate. @throws UnfitValue */
+  densityAt(x: number): number {
+    return this.resistivityAt(x) / this.flow.section(x);
+  }
+
+  /** Resistance of the whole, ohms. @throws UnfitValue where the law leaves what a medium can have. */
+  total(options: IntegrateOptions = {}): Integral {
+    return this.integral.total(options);
+  }
+
+  /** The same with other nodes. */
+  secondTotal(): Integral {
+    return this.integral.secondTotal();
+  }
+
+  /** Resistance between two places of the range, ohms. */
+  between(x0: number, x1: number, options: IntegrateOptions = {}): Integral {
+    return this.integral.between(x0, x1, options);
+  }
+}

@@ -1,0 +1,31 @@
+/** Shapes known by a potential-theory result for a uniform medium. */
+import type { UniformMedium } from "../medium/resolve-medium";
+import type { Dimensions, FactorAnswer, Resolved } from "../shape/define-shape";
+import { around, between } from "./bounds";
+import type { Solution } from "./solution";
+
+/** R = ρ·factor (1/m), or sheet resistance times squares. */
+export function solveFactor(
+  answer: FactorAnswer<Dimensions>,
+  dimensions: Resolved<Dimensions>,
+  medium: UniformMedium,
+  sheet: boolean,
+): Solution {
+  const factor = answer.factor(dimensions);
+  const relative = factor.relativeError + medium.relativeError;
+  const scale = medium.value;
+  const bounds =
+    factor.lower !== undefined && factor.upper !== undefined
+      ? between(factor.value * scale, factor.lower * scale, factor.upper * scale, relative)
+      : around(factor.value * scale, relative);
+  return {
+    ...bounds,
+    boundsBasis: factor.boundsBasis,
+    proved: factor.proved,
+    method: factor.method,
+    cautions: factor.cautions ?? [],
+    assumptions: factor.accuracy ? [factor.accuracy] : [],
+    dimensions,
+    view: { kind: "factor", answer, factor, medium, sheet },
+  };
+}
