@@ -24,7 +24,12 @@ export default defineConfig({
         resolve: { alias },
         test: {
           name: "units",
-          include: ["tests/ui/**/*.test.ts", "tests/lib/**/*.test.ts", "tests/cli/**/*.test.ts"],
+          include: [
+            "tests/ui/**/*.test.ts",
+            "tests/lib/**/*.test.ts",
+            "tests/cli/**/*.test.ts",
+            "tests/sdk/**/*.test.ts",
+          ],
           testTimeout: 60_000,
         },
       },
@@ -34,9 +39,13 @@ export default defineConfig({
       },
       {
         resolve: { alias },
+        test: { name: "api", include: ["tests/api/**/*.test.ts"], testTimeout: 60_000, hookTimeout: 60_000 },
+      },
+      {
+        resolve: { alias },
         test: {
           name: "server",
-          include: ["tests/api/**/*.test.ts", "tests/sdk/**/*.test.ts", "tests/browser/**/*.test.ts"],
+          include: ["tests/api/**/*.test.ts", "tests/server/**/*.test.ts", "tests/browser/**/*.test.ts"],
           globalSetup: ["tests/support/start-server.ts"],
           testTimeout: 60_000,
           hookTimeout: 60_000,
