@@ -1,0 +1,55 @@
+import { migrateDatabase, openDatabase } from "@/db/client";
+import { insertTeam } from "@/db/queries/teams";
+import { SHELL } from "@/lib/activity/append";
+import { issueKey } from "@/lib/auth/manage-keys";
+import { SCOPE_NAMES } from "@/lib/auth/scope";
+import { readConfig } from "@/lib/config/environment";
+import { type Bucket, type BucketState, Limiter } from "@/lib/limits/limiter";
+import { openLog } from "@/lib/service/log";
+import { assembleService, type Service } from "@/lib/service/service";
+
+export interface Scratch {
+  readonly service: Service;
+  /** A key with every scope. */
+  readonly key: string;
+  readonly close: () => void;
+}
+
+/** A Monday noon: dates in examples never change. */
+const MOMENT = Date.UTC(2026, 2, 2, 12);
+
+/** Counts as usual, but every window looks as if it had just begun: examples do not depend on how long they take. */
+class SteadyLimiter extends Limiter {
+  override async look(bucket: Bucket): Promise<BucketState> {
+    const state = await super.look(bucket);
+    return { ...state, resetSeconds: bucket.windowSeconds };
+  }
+}
+
+/** A service in memory with one team and one key, on which the document's examples are computed. */
+export function scratchService(origin: string): Scratch {
+  const db = openDatabase(":memory:");
+  migrateDatabase(db);
+  const config = readConfig({
+    RHOFORM_ORIGIN: origin,
+    RHOFORM_SECRET: "a secret of no consequence",
+    RHOFORM_LOG: "off",
+  });
+  // One second a call, so that lists have an order.
+  let now = MOMENT;
+  const clock = () => (now += 1000);
+  const service = { ...assembleService(config, db, openLog("off"), clock), limiter: new SteadyLimiter(db) };
+  const teamId = "team_0000000000000000";
+  insertTeam(db, { id: teamId, slug: "busbar", name: "Busbar", createdAt: MOMENT });
+  const { text } = issueKey(db, {
+    teamId,
+    settings: {
+      name: "Design automation",
+      scopes: [...SCOPE_NAMES],
+      quotas: { minute: 100_000, month: 1_000_000 },
+    },
+    actor: SHELL,
+    now: MOMENT,
+  });
+  return { service, key: text, close: () => db.$client.close() };
+}

@@ -1,0 +1,37 @@
+import { deleteKey, listKeys, postKey, postRotation, readKey } from "./operations/keys";
+import { deleteMaterial, patchMaterial, postMaterial } from "./operations/material-changes";
+import { listMaterials, readMaterial } from "./operations/materials";
+import { readHealth } from "./operations/health";
+import { readOpenApi } from "./operations/openapi";
+import { deleteRecord, listRecords, patchRecord, readRecord, replayRecord } from "./operations/records";
+import { postResistance } from "./operations/resistance";
+import { getResistance } from "./operations/resistance-query";
+import { listShapes, readShape } from "./operations/shapes";
+import { readUsage } from "./operations/usage";
+import { RouteTable } from "./route-table";
+
+/** Every operation of version 1: what the servers, the document, the reference and the clients are made from. */
+export const registry = new RouteTable([
+  listShapes,
+  readShape,
+  postResistance,
+  getResistance,
+  listMaterials,
+  postMaterial,
+  readMaterial,
+  patchMaterial,
+  deleteMaterial,
+  listRecords,
+  readRecord,
+  patchRecord,
+  deleteRecord,
+  replayRecord,
+  listKeys,
+  postKey,
+  readKey,
+  postRotation,
+  deleteKey,
+  readUsage,
+  readOpenApi,
+  readHealth,
+]);

@@ -1,0 +1,124 @@
+import { z } from "zod";
+import {
+  boundedResistanceSchema,
+  catalogue,
+  includeSchema,
+  mediumSchema,
+  operatingSchema,
+  recordRequestSchema,
+  requirementSchema,
+  resistanceResultSchema,
+  type Shape,
+  shapeEntry,
+  shapeEntrySchema,
+} from "@/lib/engine";
+
+const optional = {
+  operating: operatingSchema.optional(),
+  include: includeSchema.optional(),
+  record: recordRequestSchema.optional(),
+  requirement: requirementSchema.optional(),
+};
+
+type Entry = z.infer<typeof shapeEntrySchema>;
+type Dimension = Entry["dimensions"][number];
+
+/** The type of one dimension, with the words of the catalogue. */
+function dimensionSchema(dimension: Dimension): z.ZodType {
+  const { label, symbol, help, unit, type, choices, range } = dimension;
+  const standard = dimension.default === null ? "" : ` Left out: ${dimension.default}${bareUnit(unit)}.`;
+  const description = `${label} (${symbol}). ${help}${standard}`;
+  if (type === "choice") {
+    return z.enum((choices ?? []).map(({ value }) => value)).meta({ description });
+  }
+  if (type === "integer") {
+    return z
+      .int()
+      .min(range?.min ?? 0)
+      .max(range?.max ?? Number.MAX_SAFE_INTEGER)
+      .meta({ description });
+  }
+  const bare = unit === "1" ? "" : ` A bare number is in ${unit}; a text carries its unit.`;
+  return z.union([z.number(), z.string()]).meta({ description: description + bare });
+}
+
+function bareUnit(unit: string | null): string {
+  return unit === null || unit === "1" ? "" : ` ${unit}`;
+}
+
+/** `cylindrical-shell` as `CylindricalShell`. */
+function pascal(id: string): string {
+  return id.replace(/(?:^|-)(.)/g, (_, letter: string) => letter.toUpperCase());
+}
+
+/** The body of a resistance request for one shape, with its dimensions by name. */
+function requestFor(shape: Shape) {
+  const entry = shapeEntry(shape);
+  const alternatives = new Set(entry.alternatives.flat());
+  const dimensions = Object.fromEntries(
+    entry.dimensions.map((dimension) => {
+      const schema = dimensionSchema(dimension);
+      const required = dimension.required && !alternatives.has(dimension.name);
+      return [dimension.name, required ? schema : schema.optional()];
+    }),
+  );
+  const groups = entry.alternatives.map((names) => `exactly one of ${names.join(", ")}`).join("; ");
+  const medium =
+    entry.media.kind === "two"
+      ? {
+          media: z
+            .strictObject(Object.fromEntries(entry.media.names.map(({ name }) => [name, mediumSchema])))
+            .meta({
+              description: entry.media.names.map(({ name, label }) => `${name}: ${label}`).join("; "),
+            }),
+        }
+      : { medium: mediumSchema };
+  return z
+    .strictObject({
+      shape: z.literal(shape.id),
+      dimensions: z.strictObject(dimensions).meta({
+        description: groups === "" ? "The shape's dimensions." : `The shape's dimensions; ${groups}.`,
+      }),
+      ...medium,
+      ...optional,
+    })
+    .meta({ id: `${pascal(shape.id)}Request`, description: shape.summary });
+}
+
+/** Every shape's request, told apart by `shape`: what clients get their types from. Made when first asked for. */
+export function documentedResistanceRequest(): z.ZodType {
+  const [first, ...rest] = catalogue.map(requestFor);
+  return z.discriminatedUnion("shape", [first, ...rest]).meta({
+    id: "ResistanceRequest",
+    description: "A shape, its dimensions and medium, and what to answer.",
+  });
+}
+
+export const resistanceResult = resistanceResultSchema.meta({
+  id: "ResistanceResult",
+  description: "A resistance, how sure it is and how it came about.",
+});
+
+/** The answer of `POST /resistance`: the result, and the record where one was asked for. */
+export const answeredResistance = z
+  .object({
+    ...resistanceResultSchema.shape,
+    record: z
+      .object({ id: z.string(), url: z.string().meta({ description: "Path of the stored record." }) })
+      .optional()
+      .meta({ description: "Where the calculation was stored; only if `record` was in the request." }),
+  })
+  .meta({ id: "AnsweredResistance", description: "A resistance, how sure it is and how it came about." });
+
+export const shapeSchema = shapeEntrySchema.meta({ id: "Shape", description: "One entry of the catalogue." });
+
+/** Gives the engine's shared parts names of their own in the document, so that clients share the types. */
+export function nameComponents(): void {
+  const parts: readonly (readonly [z.ZodType, string])[] = [
+    [mediumSchema, "Medium"],
+    [operatingSchema, "Operating"],
+    [requirementSchema, "Requirement"],
+    [boundedResistanceSchema, "BoundedResistance"],
+  ];
+  for (const [schema, id] of parts) z.globalRegistry.add(schema, { ...z.globalRegistry.get(schema), id });
+}

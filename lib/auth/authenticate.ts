@@ -1,0 +1,100 @@
+import { type KeyRow, keyWithSecrets } from "@/db/queries/keys";
+import { Refusal } from "../service/refusal";
+import type { Service } from "../service/service";
+import { parseKey, secretMatches } from "./key-text";
+import type { Principal } from "./principal";
+import { isScope, type Scope } from "./scope";
+import { checkSiteToken } from "./site-token";
+import { signedOutLimits } from "./signed-out-limits";
+
+/** What a signed-out page may do, by its token. */
+const SIGNED_OUT_SCOPES: readonly Scope[] = ["compute", "materials:read"];
+
+/** A hash of nothing, compared with when the key is unknown: both answers take the same time. */
+const NO_HASH = "0".repeat(64);
+
+/**
+ * Who calls, by `Authorization: Bearer` or `?key=`. Throws a Refusal for credentials that do not count;
+ * no credentials at all make an anonymous caller.
+ */
+export async function authenticate(
+  service: Service,
+  call: { readonly headers: Headers; readonly url: URL; readonly address: string },
+): Promise<Principal> {
+  const { address } = call;
+  const header = call.headers.get("authorization");
+  const inUrl = call.url.searchParams.getAll("key");
+  if (header !== null && inUrl.length > 0) {
+    throw new Refusal(
+      "ambiguous-credentials",
+      "Send the key once: in the Authorization header or as ?key=, not both.",
+    );
+  }
+  if (header === null && inUrl.length === 0) return { kind: "anonymous", address };
+  if (inUrl.length > 1) throw new Refusal("ambiguous-credentials", "The parameter key may be given once.");
+
+  const bearer = header === null ? inUrl[0] : /^Bearer +([^\s]+) *$/i.exec(header)?.[1];
+  if (bearer === undefined) {
+    throw new Refusal("invalid-key", 'The Authorization header must read "Bearer" and a key.');
+  }
+  if (header !== null && bearer.startsWith("ey")) return await signedOut(service, bearer, address);
+  return keyPrincipal(service, bearer, header === null, address);
+}
+
+async function signedOut(service: Service, token: string, address: string): Promise<Principal> {
+  const verdict = await checkSiteToken(service.config.secret, token, service.now());
+  if (verdict === "expired")
+    throw new Refusal("invalid-token", "The page's token has expired: ask for the next one.");
+  if (verdict === "wrong") throw new Refusal("invalid-token", "The token is not one of this service.");
+  return { kind: "signed-out", scopes: SIGNED_OUT_SCOPES, address, ...signedOutLimits(service.db) };
+}
+
+function keyPrincipal(service: Service, text: string, inUrl: boolean, address: string): Principal {
+  const unknown = new Refusal("invalid-key", "The key is not known here.");
+  const given = parseKey(text);
+  if (!given) throw unknown;
+  const found = keyWithSecrets(service.db, given.id);
+  if (!found) {
+    secretMatches(given.secret, NO_HASH);
+    throw unknown;
+  }
+  const now = service.now();
+  const secret = found.secrets.find(({ hash }) => secretMatches(given.secret, hash));
+  if (!secret) throw unknown;
+  const { key } = found;
+  refuseEnded(key, secret.validUntil, now);
+  if (inUrl && !key.allowedInUrl) {
+    throw new Refusal(
+      "key-not-allowed-in-url",
+      "This key may not travel in an address. Send it in the Authorization header, and rotate it: logs may have seen it.",
+    );
+  }
+  return {
+    kind: "key",
+    id: key.id,
+    name: key.name,
+    teamId: key.teamId,
+    team: key.team,
+    scopes: key.scopes.filter(isScope),
+    origins: key.origins,
+    minuteQuota: key.minuteQuota,
+    monthQuota: key.monthQuota,
+    address,
+  };
+}
+
+/** Told only to a caller that has the secret. */
+function refuseEnded(key: KeyRow, validUntil: number | null, now: number): void {
+  if (key.revokedAt !== null) {
+    throw new Refusal("revoked-key", `The key was revoked on ${new Date(key.revokedAt).toISOString()}.`);
+  }
+  if (key.expiresAt !== null && key.expiresAt <= now) {
+    throw new Refusal("expired-key", `The key expired on ${new Date(key.expiresAt).toISOString()}.`);
+  }
+  if (validUntil !== null && validUntil <= now) {
+    throw new Refusal(
+      "expired-key",
+      `This secret of the key was replaced by rotation and ended on ${new Date(validUntil).toISOString()}.`,
+    );
+  }
+}

@@ -1,0 +1,30 @@
+import { createServer, type Server } from "node:http";
+import { BASE_PATH } from "@/api/base-path";
+import { dispatch } from "@/api/dispatch";
+import { registry } from "@/api/registry";
+import type { Service } from "../service/service";
+import { toRequest, writeResponse } from "./node-bridge";
+
+/**
+ * The API on plain node:http, without the pages: the same registry, the same dispatcher, the same answers, several
+ * times the calls a second.
+ */
+export function createApiServer(service: Service): Server {
+  return createServer((incoming, outgoing) => {
+    const answer = async () => {
+      const request = toRequest(incoming, service.config.origin);
+      if (!new URL(request.url).pathname.startsWith(`${BASE_PATH}/`)) {
+        outgoing.writeHead(404, { "Content-Type": "text/plain; charset=utf-8" });
+        outgoing.end("This process serves the API only.\n");
+        return;
+      }
+      await writeResponse(await dispatch(request, service, registry), outgoing);
+    };
+    answer().catch((error: unknown) => {
+      // A request that cannot even be represented, such as one with a method the standard forbids.
+      service.log.warn({ error: String(error) });
+      if (!outgoing.headersSent) outgoing.writeHead(400, { "Content-Type": "text/plain; charset=utf-8" });
+      outgoing.end();
+    });
+  });
+}

@@ -1,0 +1,34 @@
+import { limitedAddress } from "../http/client-address";
+import type { Bucket } from "./limiter";
+
+/** Highest quotas a key may have. */
+export const LARGEST_QUOTA = 1_000_000_000;
+export const LARGEST_MINUTE_QUOTA = 1_000_000;
+
+/** What a key gets where nothing else is said. */
+export const DEFAULT_MINUTE_QUOTA = 600;
+export const DEFAULT_MONTH_QUOTA = 100_000;
+
+/** Requests a minute. */
+export function minuteBucket(subject: string, quota: number): Bucket {
+  return { policy: "minute", subject, quota, windowSeconds: 60 };
+}
+
+/** Computations in the calendar month (UTC) of that moment (Unix ms): its counter carries the month's name. */
+export function monthBucket(subject: string, quota: number, now: number): Bucket {
+  const date = new Date(now);
+  const endsAt = Date.UTC(date.getUTCFullYear(), date.getUTCMonth() + 1, 1);
+  return {
+    policy: "month",
+    subject: `${subject}:${date.toISOString().slice(0, 7)}`,
+    quota,
+    // A day longer, so that a clock that is set back at the turn of the month finds the count still there.
+    windowSeconds: Math.ceil((endsAt - now) / 1000) + 86_400,
+    endsAt,
+  };
+}
+
+/** Requests a minute from an address without a key. */
+export function addressBucket(address: string, quota: number): Bucket {
+  return { policy: "address", subject: limitedAddress(address), quota, windowSeconds: 60 };
+}

@@ -1,0 +1,36 @@
+import { randomBytes } from "node:crypto";
+
+const ALPHABET = "0123456789ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz";
+
+/** Random letters and digits, without bias. */
+export function randomText(length: number): string {
+  let text = "";
+  while (text.length < length) {
+    for (const byte of randomBytes(length - text.length + 8)) {
+      // 248 = 4·62: bytes above it would favour the first letters.
+      if (byte < 248 && text.length < length) text += ALPHABET[byte % 62];
+    }
+  }
+  return text;
+}
+
+/** 32 bytes as 43 letters and digits (62^43 > 2^256). */
+export function bytesToText(bytes: Uint8Array): string {
+  let value = BigInt(`0x${Buffer.from(bytes).toString("hex")}`);
+  let text = "";
+  for (let i = 0; i < 43; i++) {
+    text = ALPHABET[Number(value % 62n)] + text;
+    value /= 62n;
+  }
+  return text;
+}
+
+/** An id that cannot be guessed: `rec_` and 95 random bits. */
+export function newId(prefix: "act" | "mat" | "per" | "rec" | "req" | "sec" | "team"): string {
+  return `${prefix}_${randomText(16)}`;
+}
+
+/** A key's id: letters and digits only, since `_` separates the parts of a key. */
+export function newKeyId(): string {
+  return `k${randomText(15)}`;
+}
