@@ -27,9 +27,6 @@ export interface SolvedPair {
   readonly operations: number;
 }
 
-/** Triangles' unknowns that a leaf of the dissection may hold. */
-const LEAF_WEIGHT = 60;
-
 export interface PairInput {
   readonly mesh: FieldMesh;
   /** Order wanted in each triangle. */
@@ -44,9 +41,7 @@ export function solvePair(input: PairInput): SolvedPair {
   const set = makeElements(input.mesh, input.order);
   const runs = findBoundaryRuns(input.mesh);
   const matrices = condenseElements(set);
-  const weight = new Float64Array(set.triangleCount);
-  for (let t = 0; t < set.triangleCount; t++) weight[t] = set.layouts[t].outer / 2;
-  const tree = dissect(input.mesh, weight, LEAF_WEIGHT);
+  const tree = dissect(set);
   const fields = input.terminalCount - 1;
 
   const potentialSystem = makeSystem(set, potentialUnknowns(set, runs, fields), tree, matrices, input.sigma);

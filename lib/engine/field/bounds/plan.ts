@@ -1,0 +1,190 @@
+/**
+ * What to refine next: layers towards singular vertices, a higher order where the field is smooth, bisection where it
+ * is not, and of all that just as much as the tolerance asks for.
+ *
+ * The gap of each triangle is known exactly. What it becomes is predicted: a layer multiplies the gap of a star by
+ * 2^(-2α); one order more multiplies the gap of a smooth element by the decay of its solution's own polynomial
+ * coefficients; bisecting at order p divides it by 4^p at best.
+ */
+
+import type { FieldMesh } from "../mesh/mesh";
+import type { SingularVertex } from "./exponents";
+
+export interface RefinementPlan {
+  readonly vertices: Int32Array;
+  readonly layers: Int32Array;
+  /** Order wanted in the innermost star and of the rings around it: index 0 is the outermost ring. */
+  readonly ringOrders: readonly Uint8Array[];
+  /** Bisection marks of the mesh as it is: 0, 1 (one edge) or 2 (three edges). */
+  readonly marks: Uint8Array;
+  readonly order: Uint8Array;
+  /** Nothing is left that could be refined. */
+  readonly empty: boolean;
+}
+
+export interface PlanInput {
+  readonly mesh: FieldMesh;
+  readonly order: Uint8Array;
+  readonly gap: Float64Array;
+  readonly decay: Float64Array;
+  readonly singular: readonly SingularVertex[];
+  /** Sum that the gaps should come down to. */
+  readonly target: number;
+  readonly highestOrder: number;
+}
+
+/** Part of the target that the stars of singular vertices may use up together. */
+const SHARE_OF_STARS = 0.3;
+
+/** Factor by which one order more reduces the gap in a ring of layers of ratio one half (measured: 1/25 to 1/30). */
+const RING_DECAY = 1 / 24;
+
+/** Gap of the outermost ring at order 2, as a part of the gap of the star at order 3 before it was layered. */
+const RING_START = 0.04;
+
+/** Order of the innermost star of a layered vertex. */
+export const STAR_ORDER = 3;
+
+/** A solution whose coefficients fall more slowly than this is bisected, not raised in order. */
+const SLOW_DECAY = 0.42;
+
+export function planRefinement(input: PlanInput): RefinementPlan {
+  const { gap, singular, target } = input;
+  const count = gap.length;
+  const stars = starGaps(input);
+  const shareOfStar = chooseThreshold(stars.gaps, SHARE_OF_STARS * target);
+  const elements = new Float64Array(count);
+  for (let t = 0; t < count; t++) elements[t] = stars.owner[t] >= 0 ? 0 : gap[t];
+  const vertices: number[] = [];
+  const layers: number[] = [];
+  const ringOrders: Uint8Array[] = [];
+  const order = Uint8Array.from(input.order);
+  const marks = new Uint8Array(count);
+  const budget = (1 - SHARE_OF_STARS) * target;
+  const shareOfElement = elementThreshold(input, elements, budget);
+  const shareOfRing = Math.min(shareOfElement, budget / (2 * count + 100));
+  let planned = 0;
+  singular.forEach(({ vertex, exponent }, i) => {
+    const g = stars.gaps[i];
+    if (!(g > shareOfStar)) return;
+    const wanted = Math.ceil(Math.log2(g / shareOfStar) / (2 * exponent));
+    const p0 = stars.orders[i];
+    // The gap of a star falls with its order like p^(-4α): refer it to order 3.
+    const reference = RING_START * g * (p0 / 3) ** (4 * exponent);
+    const rings = new Uint8Array(wanted);
+    for (let j = 0; j < wanted; j++) {
+      const atTwo = (reference * 2 ** (-2 * exponent * j)) / stars.sizes[i];
+      rings[j] = clampOrder(2 + Math.ceil(Math.log(atTwo / shareOfRing) / -Math.log(RING_DECAY)), input.highestOrder);
+    }
+    vertices.push(vertex);
+    layers.push(wanted);
+    ringOrders.push(rings);
+    planned++;
+  });
+  for (let t = 0; t < count; t++) {
+    if (!(elements[t] > shareOfElement)) continue;
+    const step = elementStep(input, t, elements[t], shareOfElement);
+    order[t] = step.order;
+    marks[t] = step.mark;
+    if (step.order !== input.order[t] || step.mark > 0) planned++;
+  }
+  return {
+    vertices: Int32Array.from(vertices),
+    layers: Int32Array.from(layers),
+    ringOrders,
+    marks,
+    order,
+    empty: planned === 0,
+  };
+}
+
+function clampOrder(p: number, highest: number): number {
+  return Math.max(2, Math.min(highest, p));
+}
+
+interface Stars {
+  readonly gaps: Float64Array;
+  readonly sizes: Int32Array;
+  /** Mean order in the star. */
+  readonly orders: Float64Array;
+  /** Which singular vertex a triangle belongs to, or -1. */
+  readonly owner: Int32Array;
+}
+
+function starGaps({ mesh, gap, order, singular }: PlanInput): Stars {
+  const { triangles } = mesh;
+  const count = gap.length;
+  const number = new Int32Array(mesh.xy.length / 2).fill(-1);
+  singular.forEach(({ vertex }, i) => (number[vertex] = i));
+  const owner = new Int32Array(count).fill(-1);
+  const gaps = new Float64Array(singular.length);
+  const sizes = new Int32Array(singular.length);
+  const orders = new Float64Array(singular.length);
+  for (let t = 0; t < count; t++) {
+    // A triangle between two singular vertices goes to the stronger singularity.
+    for (let i = 0; i < 3; i++) {
+      const s = number[triangles[3 * t + i]];
+      if (s < 0) continue;
+      if (owner[t] < 0 || singular[s].exponent < singular[owner[t]].exponent) owner[t] = s;
+    }
+    if (owner[t] >= 0) {
+      gaps[owner[t]] += gap[t];
+      orders[owner[t]] += order[t];
+      sizes[owner[t]]++;
+    }
+  }
+  for (let i = 0; i < orders.length; i++) if (sizes[i] > 0) orders[i] /= sizes[i];
+  return { gaps, sizes, orders, owner };
+}
+
+/** The largest cap such that values cut down to it add up to at most `budget`. */
+function chooseThreshold(values: Float64Array, budget: number): number {
+  const sorted = Float64Array.from(values).sort();
+  let below = 0;
+  for (let k = 0; k < sorted.length; k++) {
+    const cap = (budget - below) / (sorted.length - k);
+    if (sorted[k] >= cap) return Math.max(cap, 0);
+    below += sorted[k];
+  }
+  return Infinity;
+}
+
+interface Step {
+  readonly order: number;
+  readonly mark: number;
+  /** Gap that is expected afterwards. */
+  readonly expected: number;
+}
+
+function elementStep(input: PlanInput, t: number, gap: number, share: number): Step {
+  const p = input.order[t];
+  const decay = Math.max(0.02, input.decay[t]);
+  if (decay < SLOW_DECAY && p < input.highestOrder) {
+    const wanted = Math.max(1, Math.ceil(Math.log(gap / share) / -Math.log(decay)));
+    const order = Math.min(input.highestOrder, p + Math.min(wanted, 3));
+    return { order, mark: 0, expected: gap * decay ** (order - p) };
+  }
+  return { order: p, mark: 2, expected: gap * 4 ** -Math.min(p, 3) };
+}
+
+/** The largest threshold for which the expected sum is within the budget. */
+function elementThreshold(input: PlanInput, elements: Float64Array, budget: number): number {
+  let high = 0;
+  let total = 0;
+  for (const g of elements) {
+    total += g;
+    if (g > high) high = g;
+  }
+  if (total <= budget) return Infinity;
+  let low = (0.1 * budget) / elements.length;
+  for (let k = 0; k < 40 && high > 1.05 * low; k++) {
+    const middle = Math.sqrt(low * high);
+    let sum = 0;
+    for (let t = 0; t < elements.length; t++) {
+      sum += elements[t] > middle ? elementStep(input, t, elements[t], middle).expected : elements[t];
+    }
+    if (sum <= budget) low = middle;
+    else high = middle;
+  }
+  return low;
+}
