@@ -35,7 +35,7 @@ function trailingOnes(bits: number): number {
 }
 
 /** Position along a Hilbert curve of 2^14 by 2^14 cells over [-1, 1]². */
-function hilbertIndex(x: number, y: number): number {
+export function hilbertIndex(x: number, y: number): number {
   let column = Math.max(0, Math.min(16383, ((x + 1) * 8192) | 0));
   let row = Math.max(0, Math.min(16383, ((y + 1) * 8192) | 0));
   let index = 0;

@@ -75,11 +75,17 @@ function constrainThrough(mesh: Triangulation, a: number, b: number, mark: numbe
   }
 }
 
+/** A region that covers part of another one, or, where `other` is -1, something outside the conductor. */
+export interface RegionFault {
+  readonly region: number;
+  readonly other: number;
+}
+
 /**
  * Removes everything outside the conductor and labels each triangle with its medium: 0, or the number of the region.
- * Answers two regions that overlap, or null.
+ * Answers what is wrong with the regions; nothing, for a checked domain.
  */
-export function carveDomain(mesh: Triangulation, domain: Domain): [number, number] | null {
+export function carveDomain(mesh: Triangulation, domain: Domain): RegionFault[] {
   const { segmentSide, segmentRegion } = domain;
   const { label } = mesh;
   label.fill(-1);
@@ -97,15 +103,15 @@ export function carveDomain(mesh: Triangulation, domain: Domain): [number, numbe
     else byRegion.set(region, [(h / 3) | 0]);
   }
   flood(mesh, inside, 0, (s) => segmentSide[s] >= 0);
-  let overlap: [number, number] | null = null;
+  const faults: RegionFault[] = [];
   for (const [region, seeds] of byRegion) {
     const isOwnBorder = (s: number): boolean =>
       segmentSide[s] >= 0 || segmentRegion[2 * s] === region || segmentRegion[2 * s + 1] === region;
     const other = flood(mesh, seeds, region, isOwnBorder);
-    if (other > 0) overlap ??= [region, other];
+    if (other !== 0) faults.push({ region, other });
   }
   mesh.carve();
-  return overlap;
+  return faults;
 }
 
 /** Whether half-edge h, a piece of segment s, has the segment's direction. */
@@ -122,7 +128,7 @@ function runsAlong(mesh: Triangulation, domain: Domain, h: number, s: number): b
 
 /**
  * Gives a label to all triangles that can be reached from the seeds without crossing a wall (a segment). Answers a
- * positive label that was there before, or 0.
+ * label other than 0 that was there before, or 0.
  */
 function flood(mesh: Triangulation, seeds: number[], value: number, isWall: (s: number) => boolean): number {
   const { label, twin, mark } = mesh;
@@ -130,7 +136,7 @@ function flood(mesh: Triangulation, seeds: number[], value: number, isWall: (s: 
   let other = 0;
   const visit = (t: number): void => {
     if (label[t] === value) return;
-    if (label[t] > 0) other = label[t];
+    if (label[t] !== 0) other = label[t];
     label[t] = value;
     stack.push(t);
   };

@@ -6,6 +6,7 @@ import { frameFor, showNumber, showPoint, type Box, type Frame } from "./frame";
 import { mergeStretches } from "./merge-runs";
 import { checkArcs, elementPoint, growBox, readRing } from "./read-ring";
 import { edgeCount, type Ring } from "./ring";
+import { readRegions } from "./region-net";
 import { LENGTH_UNITS_M, type OutlineError, type OutlineRequest, type RingElement } from "./schema";
 import { readStretches, type Stretch } from "./terminal-runs";
 import { checkTerminalList } from "./terminal-list";
@@ -70,7 +71,8 @@ function checkDrawing(
   repairs: string[],
 ): OutlineCheck {
   const names = request.terminals.map((terminal) => terminal.name);
-  const stretches = readStretches(request.terminals, rings, new EdgeIndex(rings), frame, errors);
+  const index = new EdgeIndex(rings);
+  const stretches = readStretches(request.terminals, rings, index, frame, errors);
   if (axisymmetric) errors.push(...stretches.flatMap((stretch) => checkAxis(stretch, rings[stretch.ring])));
   const runs = mergeStretches(stretches, rings, names, frame, errors);
   const curved = rings.some((ring) => ring.arcs.some((arc) => arc !== null));
@@ -80,6 +82,7 @@ function checkDrawing(
     axisymmetric,
     rings,
     runs,
+    regions: readRegions(request.regions ?? [], rings, runs, index, frame, errors),
     leastChords,
     terminalNames: names,
     repairs,

@@ -1,5 +1,6 @@
+import { carveDomain } from "../mesh/planar-graph";
 import { chordCount } from "./arc";
-import { describeConflicts, describeNesting } from "./complain";
+import { describeConflicts, describeNesting, describeRegionFaults } from "./complain";
 import { findConflicts, type Conflict } from "./conflicts";
 import { drawOutline, type DrawnOutline, type Drawing, type Role } from "./draw";
 import { nestRings } from "./nesting";
@@ -24,10 +25,15 @@ export function drawClear(
       if (refineArcs(outline, drawing, conflicts, chordTolerance)) continue;
       return { drawing, errors: describeConflicts(conflicts, drawing, outline.rings, outline.frame) };
     }
-    if (outline.rings.length === 1) return { drawing, errors: [] };
-    const around = nestRings(mesh, drawing, outline.rings.length);
-    const errors = describeNesting(around, outline.rings, outline.frame);
-    // A small hole may lie between an arc and its chord.
+    const errors: OutlineError[] = [];
+    if (outline.rings.length > 1) {
+      const around = nestRings(mesh, drawing, outline.rings.length);
+      errors.push(...describeNesting(around, outline.rings, outline.frame));
+    }
+    if (outline.regions.borders.length > 0 && errors.length === 0) {
+      errors.push(...describeRegionFaults(carveDomain(mesh, drawing.domain), drawing.overlaps));
+    }
+    // A small hole, or a region, may lie between an arc and its chord.
     if (errors.length > 0 && refineAll(outline, chordTolerance)) continue;
     return { drawing, errors };
   }

@@ -1,6 +1,8 @@
+import type { RegionFault } from "../mesh/planar-graph";
 import type { Conflict } from "./conflicts";
 import type { Drawing } from "./draw";
 import { showDomainPoint, type Frame } from "./frame";
+import { regionPointer } from "./region-net";
 import type { Ring } from "./ring";
 import type { OutlineError } from "./schema";
 
@@ -16,6 +18,13 @@ export function describeConflicts(
   for (const conflict of conflicts) {
     const { segmentRing, segmentEdge } = drawing;
     let [s, r] = [conflict.first, conflict.second];
+    if (segmentRing[s] < 0 || segmentRing[r] < 0) {
+      if (segmentRing[s] > segmentRing[r]) [s, r] = [r, s];
+      const error = describeRegionConflict(conflict, drawing, s, r, rings, frame);
+      if (!pairs.has(error.pointer)) errors.push(error);
+      pairs.add(error.pointer);
+      continue;
+    }
     if (segmentRing[s] > segmentRing[r]) [s, r] = [r, s];
     const first = rings[segmentRing[s]];
     const second = rings[segmentRing[r]];
@@ -50,6 +59,62 @@ export function describeConflicts(
     });
   }
   return errors;
+}
+
+/** Segment s is the border of a region; r is another border, or a piece of a ring. */
+function describeRegionConflict(
+  conflict: Conflict,
+  drawing: Drawing,
+  s: number,
+  r: number,
+  rings: readonly Ring[],
+  frame: Frame,
+): OutlineError {
+  const { segmentRing, segmentEdge } = drawing;
+  const region = -1 - segmentRing[s];
+  const where = showDomainPoint(frame, conflict.x, conflict.y);
+  const pointer = `${regionPointer(region)}/${segmentEdge[s]}`;
+  const verb = conflict.kind === "cross" ? "crosses" : "touches";
+  if (segmentRing[r] >= 0) {
+    const ring = rings[segmentRing[r]];
+    const detail =
+      `Edge ${segmentEdge[s]} of region ${region} ${verb} edge ${ring.source[segmentEdge[r]]} of the ${ring.title} ` +
+      `at ${where}. A region lies inside the conductor; it may touch the border but not stick out.`;
+    return { pointer, detail };
+  }
+  const other = -1 - segmentRing[r];
+  const detail =
+    other === region
+      ? `Edges ${segmentEdge[s]} and ${segmentEdge[r]} of region ${region} ${conflict.kind} at ${where}. ` +
+        `The border of a region may neither cross nor touch itself.`
+      : `Edge ${segmentEdge[s]} of region ${region} ${verb} edge ${segmentEdge[r]} of region ${other} at ${where}. ` +
+        `Regions may touch, but not overlap.`;
+  return { pointer, detail };
+}
+
+/** Complaints about regions that cover each other or reach outside; at most one for each region. */
+export function describeRegionFaults(
+  faults: readonly RegionFault[],
+  overlaps: ReadonlyArray<readonly [number, number]>,
+): OutlineError[] {
+  const errors = new Map<number, OutlineError>();
+  const overlap = (a: number, b: number): void => {
+    const later = Math.max(a, b);
+    const detail =
+      a === b
+        ? `Region ${a} runs along one line twice; its border must enclose an area.`
+        : `Regions ${Math.min(a, b)} and ${later} overlap. Regions may touch, but not overlap.`;
+    errors.set(later, { pointer: regionPointer(later), detail });
+  };
+  for (const [a, b] of overlaps) overlap(a, b);
+  for (const { region, other } of faults) {
+    if (other > 0) overlap(region - 1, other - 1);
+    else {
+      const detail = `Region ${region - 1} reaches outside the conductor; it may touch the border, but not stick out.`;
+      errors.set(region - 1, { pointer: regionPointer(region - 1), detail });
+    }
+  }
+  return [...errors.values()];
 }
 
 /** Complaints about holes that are not inside the outer ring alone. `around` as `nestRings` answers it. */

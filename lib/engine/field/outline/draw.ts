@@ -1,8 +1,9 @@
-import type { BoundarySide } from "../mesh/mesh";
 import { arcPolygon, chordCount, type Arc } from "./arc";
 import type { Domain } from "./domain";
 import type { Frame } from "./frame";
 import type { Run } from "./merge-runs";
+import type { RegionNet } from "./region-net";
+import { AXIS, INSULATED, Pen } from "./pen";
 import { edgeCount, ringPoint, type Ring } from "./ring";
 
 /**
@@ -19,6 +20,7 @@ export interface DrawnOutline {
   readonly rings: readonly Ring[];
   /** Terminal runs of each ring. */
   readonly runs: ReadonlyArray<readonly Run[]>;
+  readonly regions: RegionNet;
   /** Least number of chords of each edge of each ring, where the neighbourhood demands it. */
   readonly leastChords: readonly Int32Array[];
 }
@@ -26,23 +28,25 @@ export interface DrawnOutline {
 /** A domain that knows where its segments come from. */
 export interface Drawing {
   readonly domain: Domain;
-  /** Ring and edge of the cleaned outline of each segment. */
+  /** Ring and edge of the cleaned outline of each segment; for the border of region k, -1 - k and the submitted edge. */
   readonly segmentRing: Int32Array;
   readonly segmentEdge: Int32Array;
+  /** Pairs of regions that claim the same side of one segment. */
+  readonly overlaps: ReadonlyArray<readonly [number, number]>;
 }
-
-const INSULATED = -1;
-const AXIS = -2;
 
 /** Draws an outline as straight segments; `chordTolerance` in units of the domain. */
 export function drawOutline(outline: DrawnOutline, role: Role, chordTolerance: number): Drawing {
   const pen = new Pen();
+  const { nodes, borders, edges } = outline.regions;
   outline.rings.forEach((ring, r) => {
+    const cuts = nodes.filter((node) => node.ring === r).map((node) => node.position);
     const forward = ring.area > 0 === (ring.number === 0);
     pen.beginRing(ring.number);
-    for (const { edge, from, to, terminal } of piecesOf(ring, outline.runs[r], forward)) {
+    for (const { edge, from, to, terminal } of piecesOf(ring, outline.runs[r], cuts, forward)) {
       const arc = ring.arcs[edge];
       const onAxis = outline.axisymmetric && isOnAxis(ring, edge);
+      pen.notePosition(edge + from);
       pen.put(ringPoint(ring, edge, from), edge, terminal >= 0 ? terminal : onAxis ? AXIS : INSULATED);
       if (arc === null) continue;
       const chords = chordCount(arc, Math.abs(to - from), chordTolerance, outline.leastChords[r][edge]);
@@ -50,8 +54,16 @@ export function drawOutline(outline: DrawnOutline, role: Role, chordTolerance: n
       const corners = arcPolygon(arc, from, to, chords, outside);
       for (let k = 0; k < corners.length; k += 2) pen.put([corners[k], corners[k + 1]]);
     }
-    pen.endRing();
+    pen.endRing(edgeCount(ring));
   });
+  const points = nodes.map((node) => pen.pointOf(node));
+  borders.forEach((border, k) =>
+    pen.addBorder(
+      border.map((n) => points[n]),
+      edges[k],
+      k,
+    ),
+  );
   return pen.finish(outline);
 }
 
@@ -62,19 +74,25 @@ interface Piece {
   readonly terminal: number;
 }
 
-/** The edges of a ring cut where terminals begin and end, with the conductor on their left. */
-function piecesOf(ring: Ring, runs: readonly Run[], forward: boolean): Piece[] {
+/** The edges of a ring cut where terminals begin and end and regions touch, with the conductor on their left. */
+function piecesOf(ring: Ring, runs: readonly Run[], cuts: readonly number[], forward: boolean): Piece[] {
   const pieces: Piece[] = [];
-  let next = 0;
+  const stops = [...runs.flatMap((run) => [run.start, run.end]), ...cuts].sort((p, q) => p - q);
+  let nextRun = 0;
+  let nextStop = 0;
   for (let edge = 0; edge < edgeCount(ring); edge++) {
     let at = edge;
     while (at < edge + 1) {
-      while (next < runs.length && runs[next].end <= at) next++;
-      const run = next < runs.length ? runs[next] : null;
-      const isTerminal = run !== null && run.start <= at;
-      const border = run === null ? edge + 1 : isTerminal ? run.end : run.start;
-      const stop = Math.min(edge + 1, border);
-      pieces.push({ edge, from: at - edge, to: stop - edge, terminal: isTerminal ? run.terminal : -1 });
+      while (nextRun < runs.length && runs[nextRun].end <= at) nextRun++;
+      while (nextStop < stops.length && stops[nextStop] <= at) nextStop++;
+      const isTerminal = nextRun < runs.length && runs[nextRun].start <= at;
+      const stop = Math.min(edge + 1, nextStop < stops.length ? stops[nextStop] : Infinity);
+      pieces.push({
+        edge,
+        from: at - edge,
+        to: stop - edge,
+        terminal: isTerminal ? runs[nextRun].terminal : -1,
+      });
       at = stop;
     }
   }
@@ -94,73 +112,4 @@ function goesOutsideArc(arc: Arc, forward: boolean, isTerminal: boolean, role: R
   // With the conductor on the left, an arc that turns left bulges out of it, and its tangents enlarge it.
   const bulgesOut = arc.sweep > 0 === forward;
   return conductorGrows === bulgesOut;
-}
-
-/** Collects points ring by ring and groups their segments into sides. */
-class Pen {
-  private readonly xy: number[] = [];
-  private readonly segments: number[] = [];
-  private readonly segmentSide: number[] = [];
-  private readonly segmentRing: number[] = [];
-  private readonly segmentEdge: number[] = [];
-  private readonly sides: BoundarySide[] = [];
-  private ring = 0;
-  private first = 0;
-  private kinds: number[] = [];
-  private edges: number[] = [];
-
-  beginRing(ring: number): void {
-    this.ring = ring;
-    this.first = this.xy.length / 2;
-    this.kinds = [];
-    this.edges = [];
-  }
-
-  /** A point, and what the segment that leaves it is; by default the same as before. */
-  put(
-    point: readonly [number, number],
-    edge = this.edges[this.edges.length - 1],
-    kind = this.kinds.at(-1),
-  ): void {
-    this.xy.push(point[0], point[1]);
-    this.edges.push(edge);
-    this.kinds.push(kind ?? INSULATED);
-  }
-
-  endRing(): void {
-    const { kinds, edges, first, ring } = this;
-    const n = kinds.length;
-    let begin = 0;
-    while (begin < n && kinds[begin] === kinds[(begin + n - 1) % n]) begin++;
-    for (let step = 0; step < n; step++) {
-      const k = (begin + step) % n;
-      if (step === 0 || kinds[k] !== kinds[(k + n - 1) % n]) {
-        const terminal = Math.max(INSULATED, kinds[k]);
-        this.sides.push(kinds[k] === AXIS ? { ring, terminal, axis: true } : { ring, terminal });
-      }
-      this.segments.push(first + k, first + ((k + 1) % n));
-      this.segmentSide.push(this.sides.length - 1);
-      this.segmentRing.push(ring);
-      this.segmentEdge.push(edges[k]);
-    }
-  }
-
-  finish(outline: DrawnOutline): Drawing {
-    const { frame } = outline;
-    return {
-      domain: {
-        xy: Float64Array.from(this.xy),
-        segments: Int32Array.from(this.segments),
-        segmentSide: Int32Array.from(this.segmentSide),
-        segmentRegion: new Int32Array(this.segments.length),
-        sides: this.sides,
-        unitM: frame.unitM,
-        origin: [frame.originX, frame.originY],
-        scale: frame.scale,
-        axisymmetric: outline.axisymmetric,
-      },
-      segmentRing: Int32Array.from(this.segmentRing),
-      segmentEdge: Int32Array.from(this.segmentEdge),
-    };
-  }
 }
