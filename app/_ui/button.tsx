@@ -4,7 +4,7 @@ import type { ComponentProps } from "react";
 type Variant = "primary" | "plain" | "quiet" | "danger";
 
 const BASE =
-  "inline-flex min-h-5 items-center justify-center gap-1 rounded border px-2 py-1 text-table font-medium no-underline cursor-pointer disabled:cursor-not-allowed disabled:opacity-55";
+  "inline-flex min-h-5.5 medium:min-h-5 items-center justify-center gap-1 rounded border px-2 py-1 text-table font-medium no-underline cursor-pointer disabled:cursor-not-allowed disabled:opacity-55";
 
 const VARIANTS: Record<Variant, string> = {
   primary: "border-copper bg-copper text-sheet hover:border-ink hover:bg-ink",

@@ -13,20 +13,25 @@ interface FieldProps {
   /** A sentence: what was wrong and what is allowed. */
   readonly error?: string;
   readonly className?: string;
+  /** Stands at the end of the label's line, outside the label: a help button, a choice of what is given. */
+  readonly beside?: ReactNode;
   readonly children: (control: ControlProps) => ReactNode;
 }
 
 /** A labelled control with its help and its error; the error keeps its line, so that nothing jumps. */
-export function Field({ label, help, error, className = "", children }: FieldProps) {
+export function Field({ label, help, error, className = "", beside, children }: FieldProps) {
   const id = useId();
   const helpId = `${id}-help`;
   const errorId = `${id}-error`;
   const describedBy = [error ? errorId : null, help ? helpId : null].filter(Boolean).join(" ");
   return (
     <div className={className}>
-      <label htmlFor={id} className="mb-0.5 block text-table">
-        {label}
-      </label>
+      <div className="mb-0.5 flex items-center gap-1">
+        <label htmlFor={id} className="block grow text-table">
+          {label}
+        </label>
+        {beside}
+      </div>
       {children({
         id,
         ...(describedBy ? { "aria-describedby": describedBy } : {}),
@@ -46,4 +51,4 @@ export function Field({ label, help, error, className = "", children }: FieldPro
 
 /** The look shared by text inputs and selects. */
 export const CONTROL =
-  "block min-h-5 w-full rounded border border-edge bg-sheet px-1 py-0.5 font-mono text-table text-ink hover:border-ink aria-invalid:border-oxide aria-invalid:border-2 disabled:opacity-55";
+  "block min-h-5.5 medium:min-h-5 w-full rounded border border-edge bg-sheet px-1 py-0.5 font-mono text-table text-ink hover:border-ink aria-invalid:border-oxide aria-invalid:border-2 disabled:opacity-55";

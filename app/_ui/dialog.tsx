@@ -1,0 +1,53 @@
+"use client";
+
+import type { ReactNode } from "react";
+import { Dialog as Primitive } from "radix-ui";
+import { X } from "lucide-react";
+
+interface DialogProps {
+  readonly open: boolean;
+  readonly onOpenChange: (open: boolean) => void;
+  readonly title: string;
+  /** What it is about, in a sentence; read with the title. */
+  readonly description?: string;
+  readonly children: ReactNode;
+  /** The buttons, the one that goes on last. */
+  readonly actions?: ReactNode;
+  readonly wide?: boolean;
+}
+
+/** A question or a task that must be finished or left first; focus stays inside and returns afterwards. */
+export function Dialog({ open, onOpenChange, title, description, children, actions, wide }: DialogProps) {
+  return (
+    <Primitive.Root open={open} onOpenChange={onOpenChange}>
+      <Primitive.Portal>
+        <Primitive.Overlay className="fixed inset-0 z-30 bg-[rgb(0_0_0/0.5)]" />
+        <Primitive.Content
+          {...(description ? {} : { "aria-describedby": undefined })}
+          className={`fixed inset-x-2 top-1/2 z-40 mx-auto flex max-h-[calc(100dvh-32px)] -translate-y-1/2 flex-col rounded border border-ink bg-sheet outline-none ${wide ? "max-w-[52rem]" : "max-w-[32rem]"}`}
+        >
+          <div className="flex items-start gap-2 border-b border-rule px-2 py-1.5">
+            <div className="grow">
+              <Primitive.Title className="text-h3">{title}</Primitive.Title>
+              {description ? (
+                <Primitive.Description className="mt-0.5 text-table text-ink-soft">
+                  {description}
+                </Primitive.Description>
+              ) : null}
+            </div>
+            <Primitive.Close
+              aria-label="Close"
+              className="grid size-5.5 shrink-0 cursor-pointer place-items-center rounded text-ink-soft hover:text-ink medium:size-4"
+            >
+              <X aria-hidden size={18} />
+            </Primitive.Close>
+          </div>
+          <div className="overflow-y-auto px-2 py-2">{children}</div>
+          {actions ? (
+            <div className="flex flex-wrap justify-end gap-1 border-t border-rule px-2 py-1.5">{actions}</div>
+          ) : null}
+        </Primitive.Content>
+      </Primitive.Portal>
+    </Primitive.Root>
+  );
+}

@@ -1,0 +1,281 @@
+"use client";
+
+import { type KeyboardEvent, type PointerEvent, useEffect, useId, useMemo, useRef, useState } from "react";
+import { scaleLinear, scaleLog } from "d3-scale";
+import { line } from "d3-shape";
+import { type AxisUnit, axisUnit, domainOf, powerLabel, readOff } from "./axis";
+
+export interface PlotAxis {
+  readonly label: string;
+  /** Plain unit of the values, "V/m"; the axis chooses the prefix. */
+  readonly unit: string;
+}
+
+export interface PlotSeries {
+  readonly label: string;
+  readonly values: readonly number[];
+}
+
+interface LinePlotProps {
+  readonly title: string;
+  readonly x: PlotAxis & { readonly values: readonly number[] };
+  readonly y: PlotAxis;
+  readonly series: readonly PlotSeries[];
+  readonly logX: boolean;
+  readonly logY: boolean;
+  /** Index of the sample that is read off. */
+  readonly cursor: number | null;
+  readonly onCursor: (index: number | null) => void;
+}
+
+const HEIGHT = 220;
+const MARGIN = { left: 62, right: 14, top: 10, bottom: 40 };
+const STROKES = [
+  { className: "stroke-copper" },
+  { className: "stroke-verdigris", strokeDasharray: "7 3" },
+  { className: "stroke-ink", strokeDasharray: "2 3" },
+  { className: "stroke-amber", strokeDasharray: "9 3 2 3" },
+] as const;
+
+/** One or a few lines over one coordinate. Pointer and arrow keys move a hair line that reads the values off. */
+export function LinePlot(props: LinePlotProps) {
+  const { title, x, y, series, logX, logY, cursor, onCursor } = props;
+  const frame = useRef<HTMLDivElement>(null);
+  const clip = useId();
+  const width = useWidth(frame);
+
+  const plot = useMemo(() => {
+    const all = series.flatMap(({ values }) => values);
+    const xUnit = axisUnit(x.values, x.unit);
+    const yUnit = axisUnit(all, y.unit);
+    const scale = (log: boolean, domain: readonly [number, number], range: readonly [number, number]) =>
+      log ? scaleLog(domain, range) : scaleLinear(domain, range);
+    const xs = x.values.map((value) => value * xUnit.factor);
+    const horizontal = scale(logX, domainOf(xs, logX, false), [MARGIN.left, width - MARGIN.right]);
+    const vertical = scale(
+      logY,
+      domainOf(
+        all.map((value) => value * yUnit.factor),
+        logY,
+        true,
+      ),
+      [HEIGHT - MARGIN.bottom, MARGIN.top],
+    ).nice();
+    const paths = series.map(({ values }) => {
+      const draw = line<number>()
+        .x((_, i) => horizontal(xs[i]))
+        .y((value) => vertical(value * yUnit.factor))
+        .defined(
+          (value, i) => Number.isFinite(vertical(value * yUnit.factor)) && Number.isFinite(horizontal(xs[i])),
+        );
+      return draw(values as number[]) ?? "";
+    });
+    return {
+      xUnit,
+      yUnit,
+      xs,
+      horizontal,
+      vertical,
+      paths,
+      xTicks: ticksOf(horizontal, logX, Math.max(3, Math.floor(width / 90))),
+      yTicks: ticksOf(vertical, logY, 5),
+    };
+  }, [x, y, series, logX, logY, width]);
+
+  const { xUnit, yUnit, xs, horizontal, vertical, paths } = plot;
+  const last = x.values.length - 1;
+  const reading =
+    cursor === null || cursor > last ? null : readingText(cursor, x, series, y, { xUnit, yUnit }, xs[cursor]);
+
+  function follow(event: PointerEvent<SVGSVGElement>) {
+    const box = event.currentTarget.getBoundingClientRect();
+    const at = ((event.clientX - box.left) / box.width) * width;
+    let nearest = 0;
+    let distance = Infinity;
+    xs.forEach((value, index) => {
+      const away = Math.abs(horizontal(value) - at);
+      if (away < distance) [nearest, distance] = [index, away];
+    });
+    onCursor(nearest);
+  }
+
+  function step(event: KeyboardEvent) {
+    const from = cursor ?? 0;
+    const large = Math.max(1, Math.round(last / 10));
+    const next = {
+      ArrowRight: from + 1,
+      ArrowUp: from + 1,
+      ArrowLeft: from - 1,
+      ArrowDown: from - 1,
+      PageUp: from + large,
+      PageDown: from - large,
+      Home: 0,
+      End: last,
+    }[event.key];
+    if (event.key === "Escape") onCursor(null);
+    if (next === undefined) return;
+    event.preventDefault();
+    onCursor(Math.min(last, Math.max(0, next)));
+  }
+
+  return (
+    <div ref={frame} className="relative">
+      <p aria-hidden className="min-h-2.5 truncate ps-[62px] font-mono text-small text-ink-soft">
+        {reading ?? ""}
+      </p>
+      <svg
+        viewBox={`0 0 ${width} ${HEIGHT}`}
+        height={HEIGHT}
+        role="slider"
+        aria-label={`${title}: read off a value`}
+        aria-orientation="horizontal"
+        aria-valuemin={0}
+        aria-valuemax={last}
+        aria-valuenow={cursor ?? 0}
+        aria-valuetext={reading ?? "No position chosen"}
+        tabIndex={0}
+        onPointerMove={follow}
+        onPointerDown={follow}
+        onPointerLeave={(event) => event.pointerType === "mouse" && onCursor(null)}
+        onKeyDown={step}
+        className="block w-full cursor-crosshair touch-pan-y font-sans text-[12px]"
+      >
+        <clipPath id={clip}>
+          <rect
+            x={MARGIN.left}
+            y={MARGIN.top - 2}
+            width={Math.max(0, width - MARGIN.left - MARGIN.right)}
+            height={HEIGHT - MARGIN.top - MARGIN.bottom + 4}
+          />
+        </clipPath>
+        <g className="fill-ink-soft stroke-rule" strokeWidth="1">
+          {plot.yTicks.map(({ value, label }) => (
+            <g key={value} transform={`translate(0 ${vertical(value)})`}>
+              <path d={`M${MARGIN.left} 0H${width - MARGIN.right}`} />
+              <text x={MARGIN.left - 6} dy="0.35em" textAnchor="end" stroke="none">
+                {label}
+              </text>
+            </g>
+          ))}
+          {plot.xTicks.map(({ value, label }) => (
+            <g key={value} transform={`translate(${horizontal(value)} ${HEIGHT - MARGIN.bottom})`}>
+              <path d="M0 0V5" className="stroke-edge" />
+              <text y="18" textAnchor="middle" stroke="none">
+                {label}
+              </text>
+            </g>
+          ))}
+        </g>
+        <path
+          d={`M${MARGIN.left} ${MARGIN.top}V${HEIGHT - MARGIN.bottom}H${width - MARGIN.right}`}
+          fill="none"
+          className="stroke-edge"
+        />
+        <text x={width - MARGIN.right} y={HEIGHT - 6} textAnchor="end" className="fill-ink">
+          {x.label} / {xUnit.label}
+        </text>
+        <text transform={`translate(12 ${MARGIN.top}) rotate(-90)`} textAnchor="end" className="fill-ink">
+          {y.label} / {yUnit.label}
+        </text>
+        <g clipPath={`url(#${clip})`} fill="none" strokeWidth="2" strokeLinejoin="round">
+          {paths.map((path, index) => (
+            <path key={index} d={path} {...STROKES[index % STROKES.length]} />
+          ))}
+        </g>
+        {cursor !== null && cursor <= last ? (
+          <g pointerEvents="none" data-cursor="">
+            <path
+              d={`M${horizontal(xs[cursor])} ${MARGIN.top}V${HEIGHT - MARGIN.bottom}`}
+              className="stroke-ink"
+              strokeDasharray="3 3"
+            />
+            {series.map(({ label, values }) => (
+              <circle
+                key={label}
+                cx={horizontal(xs[cursor])}
+                cy={vertical(values[cursor] * yUnit.factor)}
+                r="4"
+                className="fill-sheet stroke-ink"
+                strokeWidth="1.5"
+              />
+            ))}
+          </g>
+        ) : null}
+      </svg>
+      {series.length > 1 ? <Legend series={series} /> : null}
+    </div>
+  );
+}
+
+function Legend({ series }: { readonly series: readonly PlotSeries[] }) {
+  return (
+    <ul className="flex flex-wrap gap-x-2 gap-y-0.5 ps-[62px] text-small text-ink-soft">
+      {series.map(({ label }, index) => (
+        <li key={label} className="inline-flex items-center gap-0.5">
+          <svg viewBox="0 0 28 6" aria-hidden className="h-[6px] w-[28px]">
+            <path d="M0 3H28" strokeWidth="2" {...STROKES[index % STROKES.length]} />
+          </svg>
+          {label}
+        </li>
+      ))}
+    </ul>
+  );
+}
+
+interface Tick {
+  readonly value: number;
+  readonly label: string;
+}
+
+function ticksOf(
+  scale: ReturnType<typeof scaleLinear<number, number>> | ReturnType<typeof scaleLog<number, number>>,
+  log: boolean,
+  count: number,
+): readonly Tick[] {
+  if (!log) {
+    const format = scale.tickFormat(count);
+    return scale.ticks(count).map((value) => ({ value, label: format(value) }));
+  }
+  const [from, to] = scale.domain();
+  const decades = Math.log10(to / from);
+  const wanted = scale.ticks().filter((value) => {
+    const power = Math.log10(value);
+    const whole = Math.abs(power - Math.round(power)) < 1e-9;
+    const every = Math.max(1, Math.ceil(decades / count));
+    return whole ? Math.round(power) % every === 0 : decades < 2;
+  });
+  return wanted.map((value) => ({
+    value,
+    label: decades < 2 ? String(Number(value.toPrecision(3))) : powerLabel(value),
+  }));
+}
+
+function readingText(
+  index: number,
+  x: LinePlotProps["x"],
+  series: readonly PlotSeries[],
+  y: PlotAxis,
+  { xUnit, yUnit }: { readonly xUnit: AxisUnit; readonly yUnit: AxisUnit },
+  position: number,
+): string {
+  const values = series.map(({ label, values: all }) => {
+    const text = `${readOff(all[index] * yUnit.factor)} ${yUnit.label}`;
+    return series.length > 1 ? `${label} ${text}` : text;
+  });
+  return `${x.label} ${readOff(position)} ${xUnit.label}: ${y.label.toLowerCase()} ${values.join("; ")}`;
+}
+
+/** Width of the frame in pixels; text in the plot then has its true size everywhere. */
+function useWidth(frame: { readonly current: HTMLElement | null }): number {
+  const [width, setWidth] = useState(600);
+  useEffect(() => {
+    const element = frame.current;
+    if (!element) return;
+    const observer = new ResizeObserver(([entry]) =>
+      setWidth(Math.max(220, Math.round(entry.contentRect.width))),
+    );
+    observer.observe(element);
+    return () => observer.disconnect();
+  }, [frame]);
+  return width;
+}

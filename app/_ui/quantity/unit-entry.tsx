@@ -1,0 +1,168 @@
+"use client";
+
+import { useState } from "react";
+import type { ControlProps } from "../field";
+import { convertUnit } from "./convert";
+import { joinQuantity, splitQuantity } from "./quantity-text";
+import { readTyped } from "./read-typed";
+import { FIRST_UNIT, findUnit, type Unit, type UnitKind, unitsOf } from "./units";
+
+interface UnitEntryProps {
+  readonly control: ControlProps;
+  readonly label: string;
+  readonly kind: UnitKind;
+  /** One text that the API reads: "0.25 mm". */
+  readonly value: string;
+  readonly onChange: (text: string) => void;
+  /** Unit of a number that has none, and of an empty field. */
+  readonly bareUnit?: string;
+  /** Whether a foil's weight is a unit here. */
+  readonly foil?: boolean;
+  readonly name?: string;
+  readonly placeholder?: string;
+  readonly onFocusChange?: (focused: boolean) => void;
+}
+
+/** The size that the menu converts from: what was typed last, so that there and back is no rounding. */
+interface Origin {
+  readonly text: string;
+  readonly number: string;
+  readonly unit: Unit;
+}
+
+/**
+ * A number with its unit beside it. The menu converts; a unit typed or pasted with the number ("12,5 mm", "1/2 in")
+ * sets the menu. While the field has focus it shows what was typed, afterwards the number as it was understood.
+ */
+export function UnitEntry(props: UnitEntryProps) {
+  const {
+    control,
+    label,
+    kind,
+    value,
+    onChange,
+    foil = false,
+    bareUnit,
+    name,
+    placeholder,
+    onFocusChange,
+  } = props;
+  const units = unitsOf(kind, foil);
+  const [draft, setDraft] = useState<string | null>(null);
+  const [emptyUnit, setEmptyUnit] = useState(bareUnit ?? FIRST_UNIT[kind]);
+  const [origin, setOrigin] = useState<Origin | null>(null);
+
+  const parts = splitQuantity(value, units);
+  const gauge = /AWG/i.test(value);
+  const bare = findUnit(bareUnit ?? BASE_UNITS[kind] ?? "", units);
+  const current =
+    parts.unit ??
+    (parts.foreign !== undefined || gauge
+      ? undefined
+      : parts.number === ""
+        ? findUnit(emptyUnit, units)
+        : bare);
+  const foreign = gauge ? "AWG" : parts.foreign;
+  const invalid = control["aria-invalid"] === true;
+
+  function type(text: string) {
+    setDraft(text);
+    setOrigin(null);
+    const typed = readTyped(text, decimalComma());
+    if (typed.kind === "empty") {
+      if (current) setEmptyUnit(current.id);
+      onChange("");
+    } else if (typed.kind !== "quantity") onChange(typed.text);
+    else {
+      const known = findUnit(typed.unit, units);
+      const unit = typed.unit === "" ? (current?.id ?? parts.foreign ?? "") : (known?.id ?? typed.unit);
+      onChange(joinQuantity(typed.number, unit));
+    }
+  }
+
+  function convertTo(id: string) {
+    const target = findUnit(id, units);
+    if (!target) return;
+    setDraft(null);
+    if (parts.number === "") {
+      setEmptyUnit(id);
+      return;
+    }
+    const from =
+      origin?.text === value ? origin : current && { text: value, number: parts.number, unit: current };
+    const number = from ? convertUnit(from.number, from.unit, target) : parts.number;
+    if (number === null) return;
+    const text = joinQuantity(number, target.id);
+    onChange(text);
+    setOrigin(from ? { ...from, text } : null);
+  }
+
+  const shown = units.filter((unit) => !unit.hidden || unit.id === current?.id);
+  return (
+    <div className="flex items-stretch rounded border border-edge bg-sheet hover:border-ink has-[input[aria-invalid]]:border-oxide has-[input[aria-invalid]]:outline-1 has-[input[aria-invalid]]:outline-oxide has-[input[aria-invalid]]:-outline-offset-2">
+      <input
+        {...control}
+        name={name}
+        value={draft ?? (gauge ? value : parts.number)}
+        placeholder={placeholder}
+        onChange={(event) => type(event.target.value)}
+        onFocus={() => onFocusChange?.(true)}
+        onBlur={() => {
+          setDraft(null);
+          onFocusChange?.(false);
+        }}
+        type="text"
+        inputMode={kind === "number" ? "decimal" : "text"}
+        autoComplete="off"
+        autoCapitalize="off"
+        spellCheck={false}
+        className="min-h-5.5 w-full min-w-0 rounded bg-transparent px-1 font-mono text-table text-ink placeholder:text-ink-soft medium:min-h-5"
+      />
+      {units.length > 0 ? (
+        <select
+          aria-label={`Unit of ${label}`}
+          value={foreign ?? current?.id ?? ""}
+          // A unit that only the API knows cannot be converted here; a wrong one may be replaced.
+          disabled={foreign !== undefined && !gauge && !invalid}
+          title={
+            foreign !== undefined && !gauge && !invalid
+              ? "Type another unit after the number to change it"
+              : undefined
+          }
+          onChange={(event) => convertTo(event.target.value)}
+          className="min-h-5.5 shrink-0 cursor-pointer rounded border-s border-rule bg-transparent ps-0.5 font-mono text-table text-ink medium:min-h-5"
+        >
+          {foreign !== undefined ? <option value={foreign}>{foreign}</option> : null}
+          {shown.map((unit) => (
+            <option key={unit.id} value={unit.id}>
+              {unit.label}
+            </option>
+          ))}
+        </select>
+      ) : null}
+    </div>
+  );
+}
+
+/** What a number without unit means to the API. */
+const BASE_UNITS: Partial<Record<UnitKind, string>> = {
+  length: "m",
+  area: "m^2",
+  angle: "deg",
+  temperature: "degC",
+  temperatureCoefficient: "1/K",
+  resistivity: "ohm m",
+  conductivity: "S/m",
+  sheetResistance: "ohm/sq",
+  resistance: "ohm",
+  voltage: "V",
+  current: "A",
+  power: "W",
+  density: "1/cm^3",
+};
+
+/** Whether the reader's language writes "1,5". */
+function decimalComma(): boolean {
+  if (typeof navigator === "undefined") return false;
+  return new Intl.NumberFormat(navigator.language).format(1.5).includes(",");
+}
