@@ -44,7 +44,8 @@ export async function collectExamples(
         key,
       ]);
       if (first && operation.scope !== "none") {
-        const { accept, ...call } = first;
+        // As JSON, whatever the example asks for: the problem document is what is shown.
+        const call = { ...first, accept: undefined };
         calls.push([{ ...call, ...WITHOUT_KEY }, undefined], [{ ...call, ...WRONG_KEY }, UNKNOWN_KEY]);
       }
       const answered: AnsweredExample[] = [];
