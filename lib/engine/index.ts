@@ -39,6 +39,11 @@ export { libraryMaterial, libraryMaterials } from "./medium/library/materials";
 export { gradedSchema, mediumSchema, type GradedInput, type MediumInput } from "./medium/medium-schema";
 export { profileKinds, profileSchema } from "./medium/profiles/profile-kinds";
 export type { ProfileKind } from "./medium/profile";
+export {
+  compileExpression,
+  type CompiledExpression,
+  type ExpressionReading,
+} from "./medium/expression/compile-expression";
 
 export {
   addZodIssues,

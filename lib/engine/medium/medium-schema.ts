@@ -25,12 +25,15 @@ export const MEDIUM_MEMBERS = [
   "graded",
 ] as const;
 
-const COMPANIONS: Readonly<Record<string, readonly (typeof MEDIUM_MEMBERS)[number][]>> = {
-  extrapolate: ["material"],
-  thickness: ["material", "resistivity", "conductivity"],
-  temperatureCoefficient: ["resistivity", "conductivity"],
-  referenceTemperature: ["resistivity", "conductivity"],
-};
+/** Members that go only with some of these. */
+const COMPANIONS: readonly (readonly [Companion, readonly Member[]])[] = [
+  ["extrapolate", ["material"]],
+  ["thickness", ["material", "resistivity", "conductivity"]],
+  ["temperatureCoefficient", ["resistivity", "conductivity"]],
+  ["referenceTemperature", ["resistivity", "conductivity"]],
+];
+type Member = (typeof MEDIUM_MEMBERS)[number];
+type Companion = "extrapolate" | "thickness" | "temperatureCoefficient" | "referenceTemperature";
 
 export const mediumSchema = z
   .strictObject({
@@ -79,8 +82,8 @@ export const mediumSchema = z
       });
       return;
     }
-    for (const [name, hosts] of Object.entries(COMPANIONS)) {
-      if (medium[name as keyof typeof medium] === undefined || hosts.includes(given[0])) continue;
+    for (const [name, hosts] of COMPANIONS) {
+      if (medium[name] === undefined || hosts.includes(given[0])) continue;
       context.addIssue({
         code: "custom",
         path: [name],

@@ -29,6 +29,10 @@ const POINTS: Readonly<Record<Smoothness, readonly (readonly [number, number])[]
     [1.9706, 10],
     [2.4952, 12],
     [3.8378, 16],
+    [5.5623, 20],
+    [7.6642, 24],
+    [12.9958, 32],
+    [19.8277, 40],
   ],
   cubic: [
     [1.0005, 4],
@@ -38,6 +42,10 @@ const POINTS: Readonly<Record<Smoothness, readonly (readonly [number, number])[]
     [1.2147, 10],
     [1.4065, 12],
     [1.9443, 16],
+    [2.6666, 20],
+    [3.563, 24],
+    [5.864, 32],
+    [8.8371, 40],
   ],
 };
 const GAUSS_ERROR = 2e-14;

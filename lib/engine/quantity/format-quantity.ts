@@ -61,18 +61,18 @@ export function formatQuantity(value: number, unit: TextUnit, options: FormatOpt
   const space = symbol === "" || symbol === "°" ? "" : THIN_SPACE;
   if (value === 0) return `0${space}${symbol}`;
   if (!Number.isFinite(value)) return `${value > 0 ? "" : "−"}∞${space}${symbol}`;
-  const { digits, limited } = significantDigits(value, options);
-  const rounded = roundTo(value, digits);
-  const exponent = exponentOf(rounded);
+  const cap = options.digits ?? 5;
+  const limit = significantDigits(value, options);
+  const { negative, digits, exponent } = roundedDigits(value, Math.min(cap, limit));
+  const kept = limit < cap ? digits : digits.replace(/0+$/, "");
+  const sign = negative ? "−" : "";
   const thousand = Math.floor(exponent / 3) * 3;
-  const usesPrefix = thousand >= least && thousand <= most && PREFIX[thousand] !== undefined;
-  if (usesPrefix || (exponent >= -3 && exponent < 6 && least === 0)) {
-    const shift = usesPrefix ? thousand : 0;
-    const text = decimalText(rounded, shift, digits - 1 - (exponent - shift), limited);
-    return `${text}${space}${usesPrefix ? PREFIX[thousand] : ""}${symbol}`;
+  if (thousand >= least && thousand <= most) {
+    return `${sign}${placePoint(kept, exponent - thousand)}${space}${PREFIX[thousand]}${symbol}`;
   }
-  const mantissa = decimalText(rounded, exponent, digits - 1, limited);
-  return `${mantissa}×10${superscript(exponent)}${space}${symbol}`;
+  if (exponent >= -3 && exponent < 6 && least === 0)
+    return `${sign}${placePoint(kept, exponent)}${space}${symbol}`;
+  return `${sign}${placePoint(kept, 0)}×10${superscript(exponent)}${space}${symbol}`;
 }
 
 /** A coordinate for people: metres with a prefix, or degrees. */
@@ -83,44 +83,42 @@ export function siText(value: number, unit: "m" | "rad", digits = 12): string {
 }
 
 /** A number as TeX with up to six significant digits and a power of ten where it is far from 1. */
-export function texNumber(value: number, digits = 6): string {
+export function texNumber(value: number, most = 6): string {
   if (value === 0) return "0";
-  const rounded = roundTo(value, digits);
-  const exponent = exponentOf(rounded);
-  if (exponent >= -3 && exponent < 6)
-    return decimalText(rounded, 0, digits - 1 - exponent, false).replace("−", "-");
-  const mantissa = decimalText(rounded, exponent, digits - 1, false).replace("−", "-");
-  return mantissa === "1" ? `10^{${exponent}}` : `${mantissa}\\cdot 10^{${exponent}}`;
+  const { negative, digits, exponent } = roundedDigits(value, most);
+  const kept = digits.replace(/0+$/, "");
+  const sign = negative ? "-" : "";
+  if (exponent >= -3 && exponent < 6) return sign + placePoint(kept, exponent);
+  const mantissa = placePoint(kept, 0);
+  return mantissa === "1" ? `${sign}10^{${exponent}}` : `${sign}${mantissa}\\cdot 10^{${exponent}}`;
 }
 
-function significantDigits(value: number, options: FormatOptions): { digits: number; limited: boolean } {
-  const cap = options.digits ?? 5;
-  const { lower, upper } = options;
-  if (lower === undefined || upper === undefined) return { digits: cap, limited: false };
+/** Digits that the bounds leave: down to the second significant digit of their half-width; at least one. */
+function significantDigits(value: number, { lower, upper }: FormatOptions): number {
+  if (lower === undefined || upper === undefined) return Infinity;
   const halfWidth = Math.max(value - lower, upper - value);
-  if (!(halfWidth > 0)) return { digits: cap, limited: false };
-  const last = exponentOf(roundTo(halfWidth, 2)) - 1;
-  const wanted = exponentOf(value) - last + 1;
-  return wanted >= cap ? { digits: cap, limited: false } : { digits: Math.max(1, wanted), limited: true };
+  // Rounded to two digits first, since 0.0996 is one of the tenths. Far below the value it does not matter.
+  if (!(halfWidth > 1e-9 * Math.abs(value))) return Infinity;
+  const last = roundedDigits(halfWidth, 2).exponent - 1;
+  return Math.max(1, roundedDigits(value, 17).exponent - last + 1);
 }
 
-/** Decimal exponent of the leading digit. */
-function exponentOf(value: number): number {
-  const text = value.toExponential();
-  return Number(text.slice(text.indexOf("e") + 1));
+/** The value rounded to so many digits, as a row of digits and the decimal exponent of the first. */
+function roundedDigits(
+  value: number,
+  count: number,
+): { negative: boolean; digits: string; exponent: number } {
+  const text = Math.abs(value).toExponential(Math.min(100, Math.max(0, count - 1)));
+  const at = text.indexOf("e");
+  const digits = count > 1 ? text[0] + text.slice(2, at) : text[0];
+  return { negative: value < 0, digits, exponent: Number(text.slice(at + 1)) };
 }
 
-function roundTo(value: number, digits: number): number {
-  return Number(value.toPrecision(Math.min(100, Math.max(1, digits))));
-}
-
-function decimalText(value: number, shift: number, decimals: number, keepZeros: boolean): string {
-  // Shifting the decimal point in the text avoids a second rounding.
-  const [mantissa, exponent] = value.toExponential().split("e");
-  const shifted = Number(`${mantissa}e${Number(exponent) - shift}`);
-  const text = shifted.toFixed(Math.min(100, Math.max(0, decimals)));
-  const trimmed = keepZeros || !text.includes(".") ? text : text.replace(/\.?0+$/, "");
-  return trimmed.replace("-", "−");
+/** The digits with a decimal point so that the first stands at 10^exponent. */
+function placePoint(digits: string, exponent: number): string {
+  if (exponent < 0) return `0.${"0".repeat(-exponent - 1)}${digits}`;
+  if (digits.length <= exponent + 1) return digits + "0".repeat(exponent + 1 - digits.length);
+  return `${digits.slice(0, exponent + 1)}.${digits.slice(exponent + 1)}`;
 }
 
 function superscript(exponent: number): string {

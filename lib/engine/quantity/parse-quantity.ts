@@ -24,10 +24,14 @@ const AWG = /^(?:AWG\s*(\d{1,2}|[1-4]\/0)|(\d{1,2}|[1-4]\/0)\s*AWG)$/i;
 const FOIL = /^oz\s*\/\s*ft\s*(?:\^\s*)?2$/;
 const SUPERSCRIPTS = "⁰¹²³⁴⁵⁶⁷⁸⁹";
 
-/** How to turn a decimal in this unit into the kind's value; kept per kind and unit text, since callers repeat them. */
-type Conversion = ((decimal: Decimal) => number) | string;
-const conversions = new Map<string, Conversion>();
-const MOST_CONVERSIONS = 2000;
+/** How to turn a decimal in some unit into the kind's value: by a power of ten alone, by a function, or why not. */
+type Conversion = number | ((decimal: Decimal) => number) | string;
+/** Kept per kind and unit text, since callers repeat them. */
+const conversions = new Map<QuantityKindName, Map<string, Conversion>>();
+const MOST_CONVERSIONS = 500;
+
+/** The commonest spelling, plain digits and a unit already met, goes without any normalising. */
+const COMMON = /^(\d+(?:\.\d*)?) ?([A-Za-z^/%*][ -~]*)$/;
 
 /**
  * Reads one quantity.
@@ -57,6 +61,12 @@ export function readQuantity(
   if (typeof input !== "string") return refuse(`must be ${expected(kind)}; got ${describeType(input)}.`);
   if (input.length > LONGEST_TEXT)
     return refuse(`is longer than the ${LONGEST_TEXT} characters a quantity may have.`);
+  const common = COMMON.exec(input);
+  if (common) {
+    const shift = conversions.get(name)?.get(common[2]);
+    if (typeof shift === "number")
+      return finish(Number(`${common[1]}e${shift}`), !/[1-9]/.test(common[1]), kind);
+  }
   const text = normalise(input);
   if (text === "") return refuse(`is empty; give ${expected(kind)}.`);
   const match = TEXT.exec(text);
@@ -74,7 +84,7 @@ export function readQuantity(
     if (gauge) return gauge;
     const conversion = conversionFor(name, kind, unit);
     if (typeof conversion === "string") return refuse(conversion);
-    value = conversion(decimal);
+    value = typeof conversion === "number" ? scaleByPowerOfTen(decimal, conversion) : conversion(decimal);
   }
   return finish(value, /^0*$/.test(decimal.digits), kind);
 }
@@ -168,13 +178,17 @@ function misspeltNumber(text: string): string {
 }
 
 function conversionFor(name: QuantityKindName, kind: QuantityKind, unit: string): Conversion {
-  const key = `${name} ${unit}`;
-  const known = conversions.get(key);
-  if (known !== undefined) return known;
+  let known = conversions.get(name);
+  if (!known) {
+    known = new Map();
+    conversions.set(name, known);
+  }
+  const found = known.get(unit);
+  if (found !== undefined) return found;
   const conversion = makeConversion(kind, unit);
   // Callers' texts must not grow the table without bound.
-  if (conversions.size >= MOST_CONVERSIONS) conversions.clear();
-  conversions.set(key, conversion);
+  if (known.size >= MOST_CONVERSIONS) known.clear();
+  known.set(unit, conversion);
   return conversion;
 }
 
@@ -200,7 +214,7 @@ function scaling(kind: QuantityKind, scale: UnitScale): Conversion {
   }
   const offset = kind.temperature === "absolute" && scale.offset !== 0n ? scale.offset : undefined;
   if (scale.numerator === scale.denominator && offset === undefined) {
-    if (scale.factor === 1) return (decimal) => scaleByPowerOfTen(decimal, shift);
+    if (scale.factor === 1) return shift;
     return (decimal) => scaleByPowerOfTen(decimal, shift) * scale.factor;
   }
   const ratio = { numerator: scale.numerator, denominator: scale.denominator, shift, offset };

@@ -2,8 +2,12 @@
 import { InputError, pointerTo, Problems } from "../failure";
 import type { Material } from "../medium/material";
 import { materialStatements } from "../medium/material-statements";
-import type { MediumInput } from "../medium/medium-schema";
-import { resolveMedium, type CoordinateRange, type ResolvedMedium } from "../medium/resolve-medium";
+import {
+  resolveMedium,
+  type CoordinateRange,
+  type MediumSite,
+  type ResolvedMedium,
+} from "../medium/resolve-medium";
 import { formatQuantity } from "../quantity/format-quantity";
 import { catalogue, findShape } from "../shape/catalogue";
 import type { Dimensions, Resolved, Shape } from "../shape/define-shape";
@@ -94,7 +98,7 @@ export function computeResistance(request: unknown, context: ComputeContext): Re
     operating,
     cautions: [...shape.cautions, ...solution.cautions, ...collected.cautions],
     assumptions: [...shape.assumptions, ...solution.assumptions, ...collected.assumptions],
-    sources: shape.sources.map((source) => ({ ...source })),
+    sources: [...shape.sources],
     materials: collected.used,
     engine: ENGINE_VERSION,
     catalogue: CATALOGUE_VERSION,
@@ -172,26 +176,24 @@ function readMedia(
   problems: Problems,
 ): Media | null {
   const takes = shapeMedia(shape);
-  const resolve = (medium: MediumInput, pointer: string): ResolvedMedium | null =>
-    resolveMedium(medium, {
-      shape,
-      pointer,
-      temperatureC,
-      sheet: takes.kind === "sheet",
-      gradable: takes.gradable,
-      range: (coordinate) => (dimensions ? rangeOf(shape, dimensions, coordinate) : null),
-      problems,
-      material: context.material,
-      use: (material) => collected.use(material),
-      caution: (sentence) => collected.caution(sentence),
-    });
+  const site: Omit<MediumSite, "pointer"> = {
+    shape,
+    temperatureC,
+    sheet: takes.kind === "sheet",
+    gradable: takes.gradable,
+    range: (coordinate) => (dimensions ? rangeOf(shape, dimensions, coordinate) : null),
+    problems,
+    material: context.material,
+    use: (material) => collected.use(material),
+    caution: (sentence) => collected.caution(sentence),
+  };
   if (takes.kind !== "two") {
     if (body.media) problems.add("#/media", `is for shapes of two media; ${shape.id} takes one medium.`);
     if (!body.medium) {
       if (!body.media) problems.add("#/medium", `is required: what fills ${shape.id}.`);
       return null;
     }
-    const single = resolve(body.medium, "#/medium");
+    const single = resolveMedium(body.medium, { ...site, pointer: "#/medium" });
     return single && { single };
   }
   const names = takes.names.map(({ name }) => name);
@@ -218,7 +220,7 @@ function readMedia(
     const given = body.media[name];
     if (!given) problems.add(pointerTo("#/media", name), "is required.");
     else {
-      const medium = resolve(given, pointerTo("#/media", name));
+      const medium = resolveMedium(given, { ...site, pointer: pointerTo("#/media", name) });
       if (medium) named[name] = medium;
     }
   }

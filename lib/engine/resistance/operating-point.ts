@@ -30,10 +30,9 @@ export function readOperating(operating: ResistanceRequest["operating"], problem
   for (const kind of DRIVES) {
     const given = operating?.[kind];
     if (given === undefined) continue;
-    const pointer = pointerTo("#/operating", kind);
     const reading = readQuantity(given, kind);
-    if (!reading.ok) problems.add(pointer, reading.detail);
-    else if (!(reading.value > 0)) problems.add(pointer, "must be greater than 0.");
+    if (!reading.ok) problems.add(pointerTo("#/operating", kind), reading.detail);
+    else if (!(reading.value > 0)) problems.add(pointerTo("#/operating", kind), "must be greater than 0.");
     else drive = { kind, value: reading.value };
   }
   return { temperatureC, drive };
@@ -61,9 +60,13 @@ export function operatingPoint(
         ? value / resistance
         : Math.sqrt(value) / Math.sqrt(resistance);
   const power = kind === "power" ? value : voltage * current;
-  for (const [name, size] of Object.entries({ voltage, current, power })) {
-    if (Number.isFinite(size) && size > 0) continue;
-    problems.add(pointerTo("#/operating", kind), `gives a ${name} that a double cannot hold (${size}).`);
+  const sizes = { voltage, current, power };
+  for (const name of DRIVES) {
+    if (Number.isFinite(sizes[name]) && sizes[name] > 0) continue;
+    problems.add(
+      pointerTo("#/operating", kind),
+      `gives a ${name} that a double cannot hold (${sizes[name]}).`,
+    );
   }
   return { temperature, voltage, current, power };
 }

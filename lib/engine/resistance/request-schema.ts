@@ -5,6 +5,8 @@ import { mediumSchema } from "../medium/medium-schema";
 import { anyQuantitySchema, quantitySchema } from "../quantity/quantity-schema";
 import { suggestion } from "../shape/nearest-names";
 
+const DRIVES = ["voltage", "current", "power"] as const;
+
 export const operatingSchema = z
   .strictObject({
     temperature: quantitySchema(
@@ -17,7 +19,7 @@ export const operatingSchema = z
     power: quantitySchema("power", "Power turned to heat", "1.5 W").optional(),
   })
   .superRefine((operating, context) => {
-    const given = (["voltage", "current", "power"] as const).filter((name) => operating[name] !== undefined);
+    const given = DRIVES.filter((name) => operating[name] !== undefined);
     if (given.length > 1) {
       context.addIssue({
         code: "custom",

@@ -7,11 +7,12 @@ import type { Dimensions, FlowAnswer, FlowTubes, Resolved } from "../shape/defin
 import { AcrossConductor } from "./across-conductor";
 import { AlongConductor, uniformLaw } from "./along-conductor";
 import { around, between, CLOSED_FORM_ERROR, QUADRATURE_FLOOR, type Bounds } from "./bounds";
-import { UnfitValue } from "./law-integral";
-import type { Solution } from "./solution";
+import { PROMISED_ACCURACY, UnfitValue } from "./law-integral";
+import type { AlongView, Solution } from "./solution";
 
 /** An integral whose estimate is worse than this is refused rather than shown with wide bounds. */
 const WORST_RELATIVE_ERROR = 1e-3;
+const NONE: readonly string[] = [];
 
 /** Solves a flow shape. @throws InputError where the medium's law cannot be integrated. */
 export function solveFlow(
@@ -36,26 +37,49 @@ function solveUniform(
   medium: UniformMedium,
 ): Solution {
   const closed = medium.value * answer.uniform(dimensions);
-  const relative = CLOSED_FORM_ERROR + medium.relativeError;
-  let tubes: FlowTubes | null = null;
-  let conductor: AlongConductor | null = null;
-  const flow = (): FlowTubes => (tubes ??= answer.flow(dimensions));
-  return {
-    ...bracket(answer, dimensions, closed, relative),
-    ...basis(answer, "rounding", true),
-    method: "closed-form",
-    ...statements(answer, dimensions),
+  const { value, lower, upper } = bracket(
+    answer,
     dimensions,
-    view: {
-      kind: "along",
-      tubes: flow,
-      conductor: () =>
-        (conductor ??= new AlongConductor(flow().along, uniformLaw(medium.value, flow().along.extent))),
-      integralOhm: closed,
-      medium,
-      answer,
-    },
+    closed,
+    CLOSED_FORM_ERROR + medium.relativeError,
+  );
+  const { boundsBasis, proved } = basis(answer, "rounding", true);
+  const { cautions, assumptions } = statements(answer, dimensions);
+  return {
+    value,
+    lower,
+    upper,
+    boundsBasis,
+    proved,
+    method: "closed-form",
+    cautions,
+    assumptions,
+    dimensions,
+    view: new UniformView(answer, dimensions, medium, closed),
   };
+}
+
+/** The flow of a uniform conductor, made only when a check, a plot or a peak asks for it. */
+class UniformView implements AlongView {
+  readonly kind = "along";
+  private madeTubes: FlowTubes | null = null;
+  private madeConductor: AlongConductor | null = null;
+
+  constructor(
+    readonly answer: FlowAnswer<Dimensions>,
+    private readonly dimensions: Resolved<Dimensions>,
+    readonly medium: UniformMedium,
+    readonly integralOhm: number,
+  ) {}
+
+  tubes(): FlowTubes {
+    return (this.madeTubes ??= this.answer.flow(this.dimensions));
+  }
+
+  conductor(): AlongConductor {
+    const { along } = this.tubes();
+    return (this.madeConductor ??= new AlongConductor(along, uniformLaw(this.medium.value, along.extent)));
+  }
 }
 
 function solveAlong(
@@ -154,9 +178,10 @@ function statements(
   dimensions: Resolved<Dimensions>,
 ): Pick<Solution, "cautions" | "assumptions"> {
   const accuracy = answer.accuracy?.(dimensions);
+  const own = answer.cautions?.(dimensions) ?? NONE;
   return {
-    cautions: accuracy?.cautions ?? [],
-    assumptions: accuracy?.accuracy ? [accuracy.accuracy] : [],
+    cautions: accuracy?.cautions ? [...accuracy.cautions, ...own] : own,
+    assumptions: accuracy?.accuracy ? [accuracy.accuracy] : NONE,
   };
 }
 
@@ -174,7 +199,7 @@ function judge(
     const detail = `varies too fast to be integrated: after ${evaluations} evaluations the error is still about ${(100 * relative).toPrecision(2)} %.`;
     throw new InputError([{ pointer: lawPointer(medium), detail }]);
   }
-  const limited = status === "limit" || relative > 1e-9;
+  const limited = status === "limit" || relative > PROMISED_ACCURACY;
   return {
     relative: relative + QUADRATURE_FLOOR,
     cautions: limited

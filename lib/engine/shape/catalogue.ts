@@ -3,24 +3,87 @@ import type { Shape } from "./define-shape";
 
 // axial
 import { bar } from "./axial/bar";
+import { boxTube } from "./axial/box-tube";
+import { cladWire } from "./axial/clad-wire";
+import { etchedTrace } from "./axial/etched-trace";
+import { flatSpiral } from "./axial/flat-spiral";
+import { helicalWinding } from "./axial/helical-winding";
+import { parallelPlates } from "./axial/parallel-plates";
+import { prism } from "./axial/prism";
+import { roundWire } from "./axial/round-wire";
+import { strandedConductor } from "./axial/stranded-conductor";
+import { tube } from "./axial/tube";
+import { viaBarrel } from "./axial/via-barrel";
 
 // tapered
+import { coneFrustum } from "./tapered/cone-frustum";
+import { taperedStrip } from "./tapered/tapered-strip";
 
 // radial
+import { arcBar } from "./radial/arc-bar";
 import { cylindricalShell } from "./radial/cylindrical-shell";
+import { sphericalShell } from "./radial/spherical-shell";
 
 // spreading
 
 // sheet
 
 // earthing
+import { earthGrid } from "./earthing/earth-grid";
+import { earthHemisphere } from "./earthing/earth-hemisphere";
+import { earthPlate } from "./earthing/earth-plate";
+import { earthRing } from "./earthing/earth-ring";
+import { earthRod } from "./earthing/earth-rod";
+import { earthRodGroup } from "./earthing/earth-rod-group";
+import { earthRodLayered } from "./earthing/earth-rod-layered";
+import { earthRodPair } from "./earthing/earth-rod-pair";
+import { earthStar } from "./earthing/earth-star";
+import { earthWire } from "./earthing/earth-wire";
 
-const axial: readonly Shape[] = [bar];
-const tapered: readonly Shape[] = [];
-const radial: readonly Shape[] = [cylindricalShell];
-const spreading: readonly Shape[] = [];
-const sheet: readonly Shape[] = [];
-const earthing: readonly Shape[] = [];
+const axial: readonly Shape[] = [
+  bar,
+  roundWire,
+  tube,
+  prism,
+  etchedTrace,
+  viaBarrel,
+  strandedConductor,
+  parallelPlates,
+  boxTube,
+  cladWire,
+  helicalWinding,
+  flatSpiral,
+];
+
+const tapered: readonly Shape[] = [taperedStrip, coneFrustum];
+
+const radial: readonly Shape[] = [
+  cylindricalShell,
+  sphericalShell,
+  arcBar,
+  // further radial shapes
+];
+
+const spreading: readonly Shape[] = [
+  // spreading shapes
+];
+
+const sheet: readonly Shape[] = [
+  // sheet shapes
+];
+
+const earthing: readonly Shape[] = [
+  earthHemisphere,
+  earthRod,
+  earthRodPair,
+  earthRodGroup,
+  earthWire,
+  earthRing,
+  earthPlate,
+  earthStar,
+  earthRodLayered,
+  earthGrid,
+];
 
 export const catalogue: readonly Shape[] = [
   ...axial,

@@ -159,6 +159,8 @@ export interface FlowAnswer<D extends Dimensions> {
     readonly lowerRatio: number;
     readonly upperRatio: number;
   };
+  /** Cautions that depend on these dimensions. */
+  readonly cautions?: (d: Resolved<D>) => readonly string[];
 }
 
 /** Known by potential theory for a uniform medium only. */

@@ -3,7 +3,7 @@
  * complaint for each one that is unknown, missing, doubled, of the wrong kind or out of range.
  */
 import { InputError, pointerTo, Problems } from "../failure";
-import { radiansToDegrees, readQuantity } from "../quantity/parse-quantity";
+import { radiansToDegrees, readQuantity, type QuantityOptions } from "../quantity/parse-quantity";
 import type { Constraint, Dimension, Dimensions, QuantityDimension, Resolved, Shape } from "./define-shape";
 import { suggestion } from "./nearest-names";
 
@@ -13,6 +13,7 @@ interface Input {
   readonly dimension: string;
   /** Value of the dimension = value given·factor. */
   readonly factor: number;
+  readonly options: QuantityOptions;
   readonly group: Group;
 }
 
@@ -88,9 +89,9 @@ export function readDimensions(
       continue;
     }
     used.set(input.group, name);
-    const dimension = shape.dimensions[input.dimension];
-    const value = readValue(dimension, name, raw, pointerTo(pointer, name), problems, input.factor);
-    if (value !== null) values[input.dimension] = value;
+    const reading = readValue(shape.dimensions[input.dimension], input, raw);
+    if ("value" in reading) values[input.dimension] = reading.value;
+    else problems.add(pointerTo(pointer, name), reading.complaint);
   }
   for (const group of reader.groups) {
     if (used.has(group)) continue;
@@ -157,34 +158,23 @@ function blame(constraint: Constraint<Dimensions>, reader: Reader, used: Readonl
   return constraint.names[0];
 }
 
-function readValue(
-  dimension: Dimension,
-  name: string,
-  raw: unknown,
-  pointer: string,
-  problems: Problems,
-  factor: number,
-): number | string | null {
+type ValueReading = { readonly value: number | string } | { readonly complaint: string };
+
+function readValue(dimension: Dimension, input: Input, raw: unknown): ValueReading {
   if (dimension.type === "choice") {
     const values = dimension.choices.map(({ value }) => value);
-    if (typeof raw === "string" && values.includes(raw)) return raw;
-    problems.add(pointer, `must be one of ${list(values.map((value) => `"${value}"`))}.`);
-    return null;
+    if (typeof raw === "string" && values.includes(raw)) return { value: raw };
+    return { complaint: `must be one of ${list(values.map((value) => `"${value}"`))}.` };
   }
   const kind = dimension.type === "quantity" ? dimension.kind : "number";
-  const reading = readQuantity(raw, kind, { gauge: gaugeOf(name) });
-  if (!reading.ok) {
-    problems.add(pointer, reading.detail);
-    return null;
-  }
-  const value = reading.value * factor;
+  const reading = readQuantity(raw, kind, input.options);
+  if (!reading.ok) return { complaint: reading.detail };
+  const value = reading.value * input.factor;
   const complaint =
     dimension.type === "quantity"
-      ? quantityComplaint(dimension, value, factor)
+      ? quantityComplaint(dimension, value, input.factor)
       : numberComplaint(dimension, value);
-  if (complaint === null) return value;
-  problems.add(pointer, complaint);
-  return null;
+  return complaint === null ? { value } : { complaint };
 }
 
 function quantityComplaint(dimension: QuantityDimension, value: number, factor: number): string | null {
@@ -248,7 +238,13 @@ function makeReader(shape: Shape): Reader {
       grouped.add(name);
       for (const [input, factor] of namesOf(name, shape.dimensions[name])) {
         group.names.push(input);
-        inputs.set(input, { name: input, dimension: name, factor, group });
+        inputs.set(input, {
+          name: input,
+          dimension: name,
+          factor,
+          options: { gauge: gaugeOf(input) },
+          group,
+        });
       }
     }
     groups.push(group);

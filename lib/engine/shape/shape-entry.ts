@@ -116,8 +116,18 @@ export function exampleRequest(shape: Shape): Record<string, unknown> {
   return { shape: shape.id, dimensions: { ...dimensions }, ...(media ? { media } : { medium }) };
 }
 
+const media = new WeakMap<Shape, ShapeEntry["media"]>();
+
 /** Whether the shape takes a bulk medium, a sheet's, or two media by name, and where it may be graded. */
 export function shapeMedia(shape: Shape): ShapeEntry["media"] {
+  const known = media.get(shape);
+  if (known) return known;
+  const made = makeShapeMedia(shape);
+  media.set(shape, made);
+  return made;
+}
+
+function makeShapeMedia(shape: Shape): ShapeEntry["media"] {
   const { answer } = shape;
   if (answer.kind === "media") {
     return {

@@ -31,17 +31,26 @@ const schema = z
     kind: z.literal("dopant"),
     type: z.enum(["n", "p"]).meta({ description: "n: donors (phosphorus), p: acceptors (boron)." }),
     profile: z
-      .discriminatedUnion("kind", [
-        constantProfile.schema,
-        linearProfile.schema,
-        exponentialProfile.schema,
-        powerProfile.schema,
-        gaussianProfile.schema,
-        complementaryErrorProfile.schema,
-        layersProfile.schema,
-        tableProfile.schema,
-        expressionProfile.schema,
-      ])
+      .discriminatedUnion(
+        "kind",
+        [
+          constantProfile.schema,
+          linearProfile.schema,
+          exponentialProfile.schema,
+          powerProfile.schema,
+          gaussianProfile.schema,
+          complementaryErrorProfile.schema,
+          layersProfile.schema,
+          tableProfile.schema,
+          expressionProfile.schema,
+        ],
+        {
+          error: (issue) =>
+            issue.code === "invalid_union"
+              ? `must be one of ${densityKinds.map(({ kind }) => `"${kind}"`).join(", ")}.`
+              : undefined,
+        },
+      )
       .meta({ description: "Dopant density in 1/cm³ along the coordinate, by any other kind of profile." }),
     model: z.enum(["f723", "masetti"]).optional().meta({
       description:

@@ -13,21 +13,31 @@ import { powerProfile } from "./power";
 import { tableProfile } from "./table";
 import { temperatureProfile } from "./temperature";
 
+/** Complaint about a kind that there is not. */
+const unknownKind = (issue: { readonly code?: string }): string | undefined =>
+  issue.code === "invalid_union"
+    ? `must be one of ${profileKinds.map(({ kind }) => `"${kind}"`).join(", ")}.`
+    : undefined;
+
 /** Any profile. */
 export const profileSchema = z
-  .discriminatedUnion("kind", [
-    constantProfile.schema,
-    linearProfile.schema,
-    exponentialProfile.schema,
-    powerProfile.schema,
-    gaussianProfile.schema,
-    complementaryErrorProfile.schema,
-    layersProfile.schema,
-    tableProfile.schema,
-    expressionProfile.schema,
-    temperatureProfile.schema,
-    dopantProfile.schema,
-  ])
+  .discriminatedUnion(
+    "kind",
+    [
+      constantProfile.schema,
+      linearProfile.schema,
+      exponentialProfile.schema,
+      powerProfile.schema,
+      gaussianProfile.schema,
+      complementaryErrorProfile.schema,
+      layersProfile.schema,
+      tableProfile.schema,
+      expressionProfile.schema,
+      temperatureProfile.schema,
+      dopantProfile.schema,
+    ],
+    { error: unknownKind },
+  )
   .meta({ description: "How the quantity varies along the coordinate." });
 
 /** Forgets the schema's type: a law is only ever built from a profile that this very schema has parsed. */

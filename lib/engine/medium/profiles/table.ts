@@ -12,20 +12,12 @@ const MOST_POINTS = 100_000;
 const schema = z
   .strictObject({
     kind: z.literal("table"),
-    positions: z
-      .array(anyQuantitySchema)
-      .min(2)
-      .max(MOST_POINTS)
-      .meta({
-        description: "Positions along the coordinate, increasing (bare numbers in m, degrees for an angle).",
-      }),
-    values: z
-      .array(anyQuantitySchema)
-      .min(2)
-      .max(MOST_POINTS)
-      .meta({
-        description: "The value at each position (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).",
-      }),
+    positions: z.array(anyQuantitySchema).min(2).max(MOST_POINTS).meta({
+      description: "Positions along the coordinate, increasing (bare numbers in m, degrees for an angle).",
+    }),
+    values: z.array(anyQuantitySchema).min(2).max(MOST_POINTS).meta({
+      description: "The value at each position (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).",
+    }),
     interpolation: z
       .enum(["linear", "log", "monotone-cubic"])
       .default("linear")

@@ -1,5 +1,6 @@
 import { defineShape } from "../define-shape";
 import { rectangle } from "../drawing";
+import { sideView } from "../side-view";
 
 /** A straight bar of rectangular section: the field is the same everywhere, R = ρL/(wt). */
 export const bar = defineShape({
@@ -104,20 +105,7 @@ export const bar = defineShape({
   },
   drawing: ({ length, width, thickness }) => ({
     views: [
-      {
-        title: "side view",
-        conductor: [rectangle(0, 0, length, width)],
-        high: [{ from: [0, 0], steps: [{ to: [0, width] }] }],
-        low: [{ from: [length, 0], steps: [{ to: [length, width] }] }],
-        flow: [
-          { from: [length * 0.2, width / 2], to: [length * 0.4, width / 2] },
-          { from: [length * 0.6, width / 2], to: [length * 0.8, width / 2] },
-        ],
-        dimensions: [
-          { name: "length", from: [length, 0], to: [0, 0], kind: "linear", offset: 1 },
-          { name: "width", from: [length, width], to: [length, 0], kind: "linear", offset: 1 },
-        ],
-      },
+      sideView({ length, height: width, along: "length", across: "width" }),
       {
         title: "section",
         conductor: [rectangle(0, 0, thickness, width)],
