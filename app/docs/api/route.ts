@@ -28,6 +28,7 @@ export async function GET(request: NextRequest): Promise<Response> {
     hideDarkModeToggle: true,
     ...(theme === "system" ? {} : { forceDarkModeState: theme }),
     defaultHttpClient: { targetKey: "shell", clientKey: "curl" } as const,
+    authentication: { preferredSecurityScheme: "key" },
     metaData: { title: TITLE },
   };
   const page = await ApiReference(configuration)().text();
@@ -39,6 +40,8 @@ export async function GET(request: NextRequest): Promise<Response> {
       `<link rel="icon" href="/icon.svg" type="image/svg+xml"><style>${tokens}${FRAME_CSS}</style></head>`,
     )
     .replace("<body>", `<body>${HEADER}`)
+    // In the place where the script mounts its own: the page has one first heading, before and after.
+    .replace('<div id="app"></div>', '<div id="app"><h1>Rhoform API reference</h1></div>')
     .replaceAll("<script", `<script nonce="${nonce}"`);
   return new Response(html, {
     headers: { "Content-Type": "text/html; charset=utf-8", "Cache-Control": "no-store" },
@@ -49,24 +52,33 @@ const HEADER = `
     <header class="frame">
       <a class="frame-home" href="/">Rhoform</a>
       <a href="/docs">Docs</a>
-      <h1>API reference</h1>
+      <span aria-current="page">API reference</span>
     </header>
     <noscript><p class="frame-note">The interactive reference needs scripts. The same contract is the
       <a href="/api/v1/openapi.json">OpenAPI document</a>.</p></noscript>`;
 
 const FRAME_CSS = `
-body { margin: 0; background: var(--paper); color: var(--ink); font-family: system-ui, sans-serif; }
+@font-face { font-family: "Spline Sans"; font-weight: 300 700; font-display: swap;
+  src: url("/fonts/spline-sans.woff2") format("woff2"); }
+@font-face { font-family: "Spline Sans Mono"; font-weight: 400; font-display: swap;
+  src: url("/fonts/spline-sans-mono-400.woff2") format("woff2"); }
+@font-face { font-family: "Spline Sans Mono"; font-weight: 600; font-display: swap;
+  src: url("/fonts/spline-sans-mono-600.woff2") format("woff2"); }
+body { margin: 0; background: var(--paper); color: var(--ink); font-family: "Spline Sans", system-ui, sans-serif; }
 .frame { display: flex; flex-wrap: wrap; align-items: baseline; gap: 4px 20px; padding: 12px 24px;
   border-bottom: 1px solid var(--rule); font-size: 14px; }
 .frame a { color: var(--ink-soft); }
 .frame a.frame-home { color: var(--ink); font-size: 19px; font-weight: 600; text-decoration: none; }
-.frame h1 { font-size: 14px; font-weight: 600; margin: 0; }
+.frame [aria-current] { font-weight: 600; }
+#app > h1 { padding: 24px; margin: 0; font-size: 34px; font-weight: 600; }
 .frame-note { padding: 24px; }
 `;
 
 /** The package's colours, set to ours. */
 const CSS = `
 .light-mode, .dark-mode {
+  --scalar-font: "Spline Sans", system-ui, sans-serif;
+  --scalar-font-code: "Spline Sans Mono", ui-monospace, monospace;
   --scalar-background-1: var(--paper);
   --scalar-background-2: var(--sheet);
   --scalar-background-3: color-mix(in oklab, var(--rule) 55%, var(--sheet));
