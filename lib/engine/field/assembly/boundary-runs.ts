@@ -46,7 +46,8 @@ export function findBoundaryRuns(mesh: FieldMesh): BoundaryRuns {
   const insulatedRun = new Int32Array(vertexCount).fill(-1);
   const terminalOf = new Int32Array(vertexCount).fill(-1);
   const terminalAfter = new Int32Array(vertexCount).fill(-1);
-  for (let v = 0; v < vertexCount; v++) if (sideAfter[v] >= 0) terminalAfter[v] = sides[sideAfter[v]].terminal;
+  for (let v = 0; v < vertexCount; v++)
+    if (sideAfter[v] >= 0) terminalAfter[v] = sides[sideAfter[v]].terminal;
   const visited = new Uint8Array(vertexCount);
   const runs: BoundaryRun[] = [];
   let rings = 0;

@@ -2,20 +2,23 @@
  * The loop: solve, bracket, refine where the gap is, until the bracket is as narrow as asked or a cap is met.
  */
 
-import { countFunctions } from "../assembly/elements";
+import { countFunctions, makeElements } from "../assembly/elements";
+import type { MediumList } from "../assembly/medium";
 import type { FieldMesh } from "../mesh/mesh";
+import { InterruptedError } from "../solve/factor";
 import { solvePair, type SolvedPair } from "../solve/pair";
-import { currentOf, lowerBound, upperBound } from "./bracket";
+import type { BoundaryReference } from "./displacement";
 import { fieldEnergies, type FieldEnergies } from "./energies";
-import { singularVertices } from "./exponents";
-import { applyPlan } from "./grade";
+import { singularVertices, type SingularVertex } from "./exponents";
+import { Goal, type ReachedBounds } from "./goal";
+import { applyPlan, type OrderedMesh } from "./grade";
 import { planRefinement } from "./plan";
 
 export interface AdaptiveLimits {
   /** Most unknowns of one problem, interior functions included. */
   readonly unknowns: number;
   readonly refinements: number;
-  /** Asked before every step; true ends the work with the bracket reached. */
+  /** Asked before every step and within long ones; true ends the work with the bracket reached. */
   readonly shouldStop: () => boolean;
 }
 
@@ -29,63 +32,128 @@ export interface AdaptiveProgress {
 
 export interface AdaptiveInput {
   readonly mesh: FieldMesh;
-  /** Conductivity of each medium: index 0 the background, k the k-th region. */
-  readonly sigma: readonly number[];
+  readonly medium: MediumList;
   readonly terminalCount: number;
   /** Relative width of the bracket that is wanted. */
   readonly accuracy: number;
-  readonly startOrder: number;
-  readonly highestOrder: number;
   readonly limits: AdaptiveLimits;
+  /** Where the boundary of the outline is, to take its rounding into account. */
+  readonly reference?: BoundaryReference;
+  readonly startOrder?: number;
+  readonly highestOrder?: number;
   readonly onProgress?: (progress: AdaptiveProgress) => void;
 }
 
-export interface AdaptiveResult extends AdaptiveProgress {
+export interface AdaptiveResult {
   readonly status: "done" | "limited";
+  /** Why the work ended before the accuracy was met. */
+  readonly limit: "none" | "unknowns" | "refinements" | "stopped" | "rounding";
+  readonly bounds: ReachedBounds;
+  readonly unknowns: number;
+  readonly triangles: number;
+  readonly refinements: number;
   readonly pair: SolvedPair;
   readonly energies: FieldEnergies;
 }
 
+/** Order of all elements in the first solution. */
+const START_ORDER = 3;
+const HIGHEST_ORDER = 8;
+
+/** The refinement aims at this part of the accuracy, since its predictions scatter. */
+const AIM = 0.6;
+
+/** Steps without a gain of a tenth after which rounding is taken to be in the way. */
+const IDLE_STEPS = 3;
+
 export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
-  let mesh = input.mesh;
-  let order: Uint8Array = new Uint8Array(mesh.triangles.length / 3).fill(input.startOrder);
-  let lower = 0;
-  let upper = Infinity;
+  const { limits, medium, terminalCount } = input;
+  const order = new Uint8Array(input.mesh.triangles.length / 3).fill(input.startOrder ?? START_ORDER);
+  let current: OrderedMesh = { mesh: input.mesh, order };
+  let singular: readonly SingularVertex[] | null = null;
+  let last: AdaptiveResult | null = null;
+  const goal = new Goal();
+  let narrowest = Infinity;
+  let idle = 0;
   for (let refinements = 0; ; refinements++) {
-    const sigma = Float64Array.from(mesh.region, (k) => input.sigma[k]);
-    const pair = solvePair({ mesh, order, sigma, terminalCount: input.terminalCount });
-    const energies = fieldEnergies(
-      pair.potentialSystem,
-      pair.potentials,
-      pair.streamSystem,
-      pair.streams,
-      pair.potentials.map(() => 1),
-      null,
-    );
-    lower = Math.max(lower, lowerBound(energies.potential[0]));
-    upper = Math.min(
-      upper,
-      upperBound(energies.stream[0], currentOf(pair.streamSystem, pair.streams[0], pair.currents[0])),
-    );
-    const unknowns = countFunctions(pair.set);
-    const progress = { lower, upper, unknowns, triangles: order.length, refinements };
+    let pair: SolvedPair;
+    try {
+      pair = solvePair({ ...current, medium, terminalCount, shouldStop: limits.shouldStop });
+    } catch (error) {
+      if (!(error instanceof InterruptedError) || !last) throw error;
+      return { ...last, status: "limited", limit: "stopped" };
+    }
+    const displacement = input.reference ? input.reference.displacements(current.mesh) : null;
+    const weight = last ? fieldWeights(last.energies, terminalCount - 1) : pair.potentials.map(() => 1);
+    const energies = fieldEnergies(pair, weight, displacement);
+    goal.update(pair, energies);
+    const { resistance } = goal.reached;
+    const triangles = current.order.length;
+    const progress = { ...resistance, unknowns: countFunctions(pair.set), triangles, refinements };
     input.onProgress?.(progress);
-    const done = upper - lower <= input.accuracy * lower;
-    const result = { ...progress, pair, energies };
-    if (done) return { ...result, status: "done" };
-    if (refinements >= input.limits.refinements || input.limits.shouldStop()) return { ...result, status: "limited" };
+    const result = { ...progress, bounds: goal.reached, pair, energies };
+    const { width } = goal;
+    if (width <= input.accuracy) return { ...result, status: "done", limit: "none" };
+    idle = width < 0.9 * narrowest ? 0 : idle + 1;
+    narrowest = Math.min(narrowest, width);
+    last = { ...result, status: "limited", limit: "rounding" };
+    if (idle >= IDLE_STEPS) return last;
+    if (refinements >= limits.refinements) return { ...last, limit: "refinements" };
+    if (limits.shouldStop()) return { ...last, limit: "stopped" };
+    singular ??= singularVertices(current.mesh, pair.runs, representativeSigma(current.mesh, medium));
+    const next = refineWithin(input, current, energies, singular, (AIM * input.accuracy) / width);
+    if (next === null) return { ...last, limit: "unknowns" };
+    if (next === current) return last;
+    current = next;
+  }
+}
+
+/** Weights that make the gaps of all fields relative ones. */
+function fieldWeights(energies: FieldEnergies, fields: number): number[] {
+  return Array.from({ length: fields }, (_, a) => 1 / energies.potential[a * fields + a].value);
+}
+
+/** One conductivity a triangle, for the exponents: a medium that varies counts as one medium. */
+function representativeSigma(mesh: FieldMesh, medium: MediumList): Float64Array {
+  const known = new Map<number, number>();
+  return Float64Array.from(mesh.region, (k, t) => {
+    const m = medium[k];
+    if (typeof m === "number") return m;
+    let value = known.get(k);
+    if (value === undefined) {
+      const v = mesh.triangles[3 * t];
+      value = m(mesh.xy[2 * v], mesh.xy[2 * v + 1]);
+      known.set(k, value);
+    }
+    return value;
+  });
+}
+
+/**
+ * The next mesh for a sum of gaps reduced by `factor`, or for less if that would take too many unknowns; null if not
+ * even the least step has room, and the mesh as it is if there is nothing to refine.
+ */
+function refineWithin(
+  input: AdaptiveInput,
+  current: OrderedMesh,
+  energies: FieldEnergies,
+  singular: readonly SingularVertex[],
+  factor: number,
+): OrderedMesh | null {
+  let total = 0;
+  for (const g of energies.gap) total += g;
+  for (let target = factor * total; target < total; target *= 3) {
     const plan = planRefinement({
-      mesh,
-      order,
+      ...current,
       gap: energies.gap,
       decay: energies.decay,
-      singular: singularVertices(mesh, pair.runs, sigma),
-      target: 0.6 * input.accuracy * energies.potential[0].value,
-      highestOrder: input.highestOrder,
+      singular,
+      target,
+      highestOrder: input.highestOrder ?? HIGHEST_ORDER,
     });
-    if (plan.empty) return { ...result, status: "limited" };
-    const next = applyPlan(mesh, plan);
-    mesh = next.mesh;
-    order = next.order;
+    if (plan.empty) return current;
+    const next = applyPlan(current.mesh, plan);
+    if (countFunctions(makeElements(next.mesh, next.order)) <= input.limits.unknowns) return next;
   }
+  return null;
 }

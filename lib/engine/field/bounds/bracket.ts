@@ -8,7 +8,7 @@
 
 import type { CurrentForm } from "../assembly/stream";
 import type { LinearSystem } from "../solve/assemble";
-import type { DiscreteField } from "./element-field";
+import type { DiscreteField } from "../solve/pair";
 import { ROUNDING, down, up, type Approximate } from "./interval";
 
 export interface Bracket {

@@ -10,18 +10,11 @@
 import { fillStiffness, LARGEST_ELEMENT, recoverInterior } from "../element/condense";
 import { ALL_MODES } from "../element/modes";
 import { localUnknowns, MOST_OUTER, type LinearSystem } from "../solve/assemble";
+import type { DiscreteField } from "../solve/pair";
 import { ROUNDING } from "./interval";
 
 /** Bound of the error of the tabulated gradient coefficients, relative to the root of the sum of their squares. */
 export const TABLE_ERROR = 64 * ROUNDING;
-
-/** One solution of a system. */
-export interface DiscreteField {
-  /** Unknowns in elimination order. */
-  readonly x: Float64Array;
-  /** Prescribed values by number. */
-  readonly prescribed: readonly number[];
-}
 
 /** Scratch space for one evaluator of fields. */
 export class ElementField {
@@ -65,10 +58,20 @@ export class ElementField {
     }
   }
 
-  /** Finds the interior values for a conductivity that is constant in the triangle. */
+  /** Finds the interior values, those that minimise the element's energy. */
   recover(system: LinearSystem, t: number): void {
     const layout = system.set.layouts[t];
-    if (layout.interior === 0) return;
+    const { interior, outer } = layout;
+    if (interior === 0) return;
+    if (system.sampled?.functionOf[t]) {
+      const { recovery, recoveryStart } = system.sampled;
+      for (let i = 0, at = recoveryStart[t]; i < interior; i++) {
+        let s = 0;
+        for (let j = 0; j < outer; j++, at++) s += recovery[at] * this.values[interior + j];
+        this.values[i] = s;
+      }
+      return;
+    }
     const { xy, triangles } = system.set.mesh;
     const a = 2 * triangles[3 * t];
     const b = 2 * triangles[3 * t + 1];

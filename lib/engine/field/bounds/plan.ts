@@ -74,7 +74,10 @@ export function planRefinement(input: PlanInput): RefinementPlan {
     const rings = new Uint8Array(wanted);
     for (let j = 0; j < wanted; j++) {
       const atTwo = (reference * 2 ** (-2 * exponent * j)) / stars.sizes[i];
-      rings[j] = clampOrder(2 + Math.ceil(Math.log(atTwo / shareOfRing) / -Math.log(RING_DECAY)), input.highestOrder);
+      rings[j] = clampOrder(
+        2 + Math.ceil(Math.log(atTwo / shareOfRing) / -Math.log(RING_DECAY)),
+        input.highestOrder,
+      );
     }
     vertices.push(vertex);
     layers.push(wanted);

@@ -127,8 +127,7 @@ export function evaluateBasis(
     // s grows by 2 with x and by 1 with y; t falls by 1 with y.
     const next = (ca * s + cb * t) * q - cc * t * t * qBefore;
     const nextX = (ca * s + cb * t) * qx + 2 * ca * q - cc * t * t * qxBefore;
-    const nextY =
-      (ca * s + cb * t) * qy + (ca - cb) * q - cc * (t * t * qyBefore - 2 * t * qBefore);
+    const nextY = (ca * s + cb * t) * qy + (ca - cb) * q - cc * (t * t * qyBefore - 2 * t * qBefore);
     qBefore = q;
     qxBefore = qx;
     qyBefore = qy;

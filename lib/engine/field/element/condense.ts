@@ -78,7 +78,12 @@ export function eliminate(size: number, rows: number, interior: number, work: Fl
  * the outer ones from `interior` on; the interior ones are filled in. `work` holds the full matrix (lower triangle)
  * and is overwritten in its interior block.
  */
-export function recoverInterior(size: number, interior: number, work: Float64Array, values: Float64Array): void {
+export function recoverInterior(
+  size: number,
+  interior: number,
+  work: Float64Array,
+  values: Float64Array,
+): void {
   if (interior === 0) return;
   for (let i = 0; i < interior; i++) values[i] = 0;
   for (let i = interior; i < size; i++) {

@@ -3,6 +3,7 @@
  */
 
 import type { CondensedMatrices, ElementSet } from "../assembly/elements";
+import type { SampledElements } from "../assembly/medium";
 import type { UnknownMap } from "../assembly/unknowns";
 import { EDGE_MODES } from "../element/basis";
 import type { FrontStructure } from "./symbolic";
@@ -14,6 +15,8 @@ export interface LinearSystem {
   readonly structure: FrontStructure;
   readonly matrices: CondensedMatrices;
   readonly weight: Float64Array;
+  /** Triangles whose weight varies and is part of their matrix (their entry of `weight` is one); null for none. */
+  readonly sampled: SampledElements | null;
 }
 
 /** Most functions on the border of an element. */
@@ -140,7 +143,8 @@ function addWithJumps(
       if (column > row) continue;
       const i = Math.max(terms.local[p], terms.local[q]);
       const j = Math.min(terms.local[p], terms.local[q]);
-      const value = weight[t] * terms.sign[p] * terms.sign[q] * matrices.values[start + (i * (i + 1)) / 2 + j];
+      const value =
+        weight[t] * terms.sign[p] * terms.sign[q] * matrices.values[start + (i * (i + 1)) / 2 + j];
       if (column < k) panel[panelAt + row * k + column] += value;
       else border[borderAt + (row - k) * m + (column - k)] += value;
     }

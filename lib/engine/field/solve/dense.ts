@@ -112,16 +112,26 @@ export function subtractBorder(
   border: Float64Array,
   to: number,
 ): void {
-  const m = n - k;
-  const base = at + k * k;
+  subtractSquare(panel, at + k * k, k, n - k, border, to);
+}
+
+/** target -= R·Rᵗ with R the m rows of k numbers from `base`; target has stride m, lower triangle. */
+export function subtractSquare(
+  rowsOf: Float64Array,
+  base: number,
+  k: number,
+  m: number,
+  target: Float64Array,
+  to: number,
+): void {
   for (let i = 0; i < m; i += 3) {
     const rows = Math.min(3, m - i);
     for (let j = 0; j <= i; j += 3) {
       const columns = Math.min(3, m - j);
       if (rows === 3 && columns === 3) {
-        tile(panel, base + i * k, base + j * k, k, k, border, to + i * m + j, m);
+        tile(rowsOf, base + i * k, base + j * k, k, k, target, to + i * m + j, m);
       } else {
-        corner(panel, base + i * k, base + j * k, k, k, rows, columns, border, to + i * m + j, m);
+        corner(rowsOf, base + i * k, base + j * k, k, k, rows, columns, target, to + i * m + j, m);
       }
     }
   }

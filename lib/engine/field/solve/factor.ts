@@ -19,7 +19,15 @@ export class SingularMatrixError extends Error {
   override readonly name = "SingularMatrixError";
 }
 
-export function factorise(system: LinearSystem): Factor {
+/** Raised when the caller wants to stop. */
+export class InterruptedError extends Error {
+  override readonly name = "InterruptedError";
+}
+
+/** Operations after which the caller is asked whether to go on: some milliseconds. */
+const ASK_AFTER = 3e7;
+
+export function factorise(system: LinearSystem, shouldStop: () => boolean = () => false): Factor {
   const { structure } = system;
   const { tree, ownFirst, borderStart, border, panelStart } = structure;
   const panels = new Float64Array(structure.factorSize);
@@ -27,6 +35,7 @@ export function factorise(system: LinearSystem): Factor {
   const frontPlace = new Int32Array(structure.unknowns);
   const local = new Int32Array(MOST_OUTER);
   let top = 0;
+  let work = 0;
   for (let node = 0; node < tree.nodeCount; node++) {
     const own = ownFirst[node + 1] - ownFirst[node];
     const rest = borderStart[node + 1] - borderStart[node];
@@ -49,6 +58,11 @@ export function factorise(system: LinearSystem): Factor {
       target = place - sizeA - sizeB;
       extendAdd(structure, a, stack, target, frontPlace, panels, at, own, place, rest);
       extendAdd(structure, b, stack, target + sizeA, frontPlace, panels, at, own, place, rest);
+    }
+    work += (own + 3) * (own + rest) ** 2;
+    if (work > ASK_AFTER) {
+      work = 0;
+      if (shouldStop()) throw new InterruptedError("stopped");
     }
     if (own > 0) {
       if (!factorPanel(panels, at, own, own + rest)) throw new SingularMatrixError("pivot not positive");

@@ -3,7 +3,13 @@
  */
 
 import { findBoundaryRuns, type BoundaryRuns } from "../assembly/boundary-runs";
-import { condenseElements, makeElements, type CondensedMatrices, type ElementSet } from "../assembly/elements";
+import {
+  condenseElements,
+  makeElements,
+  type CondensedMatrices,
+  type ElementSet,
+} from "../assembly/elements";
+import { sampleElements, type MediumList, type SampledElements } from "../assembly/medium";
 import { potentialUnknowns } from "../assembly/potential";
 import { streamUnknowns, type CurrentForm } from "../assembly/stream";
 import { listTriangleEntities, type UnknownMap } from "../assembly/unknowns";
@@ -12,7 +18,14 @@ import { loadPrescribed, type LinearSystem } from "./assemble";
 import { dissect, type DissectionTree } from "./dissection";
 import { factorise, substitute } from "./factor";
 import { analyse } from "./symbolic";
-import type { DiscreteField } from "../bounds/element-field";
+
+/** One solution of a system. */
+export interface DiscreteField {
+  /** Unknowns in elimination order. */
+  readonly x: Float64Array;
+  /** Prescribed values by number. */
+  readonly prescribed: readonly number[];
+}
 
 /** A discrete solution of both problems; field a belongs to terminal a at one volt and all others at zero. */
 export interface SolvedPair {
@@ -31,28 +44,61 @@ export interface PairInput {
   readonly mesh: FieldMesh;
   /** Order wanted in each triangle. */
   readonly order: Uint8Array;
-  /** Conductivity of each triangle. */
-  readonly sigma: Float64Array;
+  readonly medium: MediumList;
   readonly terminalCount: number;
+  /** Asked now and then during the factorisations; true raises `InterruptedError`. */
+  readonly shouldStop: () => boolean;
 }
 
 /** Solves for all terminals but the last, whose fields follow from the sum. */
 export function solvePair(input: PairInput): SolvedPair {
-  const set = makeElements(input.mesh, input.order);
-  const runs = findBoundaryRuns(input.mesh);
-  const matrices = condenseElements(set);
+  const { mesh, medium, terminalCount, shouldStop } = input;
+  const set = makeElements(mesh, input.order);
+  const runs = findBoundaryRuns(mesh);
+  const shared = condenseElements(set);
   const tree = dissect(set);
-  const fields = input.terminalCount - 1;
+  const fields = terminalCount - 1;
+  const sigma = Float64Array.from(mesh.region, (k) => constantOf(medium[k]) ?? 1);
+  const rho = sigma.map((value) => 1 / value);
+  const sampled = medium.some((m) => typeof m === "function")
+    ? sampleElements(
+        set,
+        shared,
+        Array.from(mesh.region, (k) => functionOf(medium[k])),
+      )
+    : null;
 
-  const potentialSystem = makeSystem(set, potentialUnknowns(set, runs, fields), tree, matrices, input.sigma);
-  const potentials = solvePotentials(potentialSystem, fields);
+  const potentialMap = potentialUnknowns(set, runs, fields);
+  const potentialSystem = makeSystem(
+    set,
+    potentialMap,
+    tree,
+    sampled?.potential.matrices ?? shared,
+    sigma,
+    sampled?.potential.sampled ?? null,
+  );
+  const potentials = solvePotentials(potentialSystem, fields, shouldStop);
 
-  const { map, currents } = streamUnknowns(set, runs, input.terminalCount);
-  const rho = input.sigma.map((sigma) => 1 / sigma);
-  const streamSystem = makeSystem(set, map, tree, matrices, rho);
-  const streams = solveStreams(streamSystem, currents.slice(0, fields));
+  const { map, currents } = streamUnknowns(set, runs, terminalCount);
+  const streamSystem = makeSystem(
+    set,
+    map,
+    tree,
+    sampled?.stream.matrices ?? shared,
+    rho,
+    sampled?.stream.sampled ?? null,
+  );
+  const streams = solveStreams(streamSystem, currents.slice(0, fields), shouldStop);
   const operations = potentialSystem.structure.operations + streamSystem.structure.operations;
   return { set, runs, potentialSystem, potentials, streamSystem, streams, currents, operations };
+}
+
+function constantOf(medium: MediumList[number]): number | null {
+  return typeof medium === "number" ? medium : null;
+}
+
+function functionOf(medium: MediumList[number]): Exclude<MediumList[number], number> | null {
+  return typeof medium === "number" ? null : medium;
 }
 
 function makeSystem(
@@ -61,13 +107,14 @@ function makeSystem(
   tree: DissectionTree,
   matrices: CondensedMatrices,
   weight: Float64Array,
+  sampled: SampledElements | null,
 ): LinearSystem {
   const entities = listTriangleEntities(map, set.mesh.triangles, set.edges.edgeOf);
-  return { set, map, structure: analyse(tree, entities, map.entitySize), matrices, weight };
+  return { set, map, structure: analyse(tree, entities, map.entitySize), matrices, weight, sampled };
 }
 
-function solvePotentials(system: LinearSystem, fields: number): DiscreteField[] {
-  const factor = factorise(system);
+function solvePotentials(system: LinearSystem, fields: number, shouldStop: () => boolean): DiscreteField[] {
+  const factor = factorise(system, shouldStop);
   return Array.from({ length: fields }, (_, a) => {
     const x = new Float64Array(system.structure.unknowns);
     loadPrescribed(system, a, x);
@@ -76,8 +123,12 @@ function solvePotentials(system: LinearSystem, fields: number): DiscreteField[] 
   });
 }
 
-function solveStreams(system: LinearSystem, forms: readonly CurrentForm[]): DiscreteField[] {
-  const factor = factorise(system);
+function solveStreams(
+  system: LinearSystem,
+  forms: readonly CurrentForm[],
+  shouldStop: () => boolean,
+): DiscreteField[] {
+  const factor = factorise(system, shouldStop);
   return forms.map((form) => {
     const x = new Float64Array(system.structure.unknowns);
     for (let k = 0; k < form.entity.length; k++) {

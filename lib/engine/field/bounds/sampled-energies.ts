@@ -1,0 +1,118 @@
+/**
+ * Energies and gap of a triangle in which the conductivity varies, by quadrature.
+ *
+ * Two rules are used, that of the matrices and a higher one. The higher one counts; the difference is taken as the
+ * error of the integrals. It is an estimate, not a bound: brackets that rest on it are not proved.
+ */
+
+import {
+  assemblyDegree,
+  cornerAndEdges,
+  sampleConductivity,
+  type ConductivityFunction,
+} from "../assembly/medium";
+import type { ElementSet } from "../assembly/elements";
+import { sampleTable } from "../element/sampled";
+import type { ElementField } from "./element-field";
+
+/** How much higher the degree of the second rule is. */
+const EXTRA_DEGREE = 6;
+
+export interface SampledEnergies {
+  /** ∫σ∇V_a·∇V_b by the higher rule and by the lower one. */
+  readonly potential: Float64Array;
+  readonly potentialLow: Float64Array;
+  readonly stream: Float64Array;
+  readonly streamLow: Float64Array;
+  /** ∫ρ|σ∇V - rot ψ|² of each field. */
+  readonly gap: Float64Array;
+  /** Mean conductivity at the points, for the look at the solution's smoothness. */
+  sigma: number;
+}
+
+export function makeSampledEnergies(fields: number): SampledEnergies {
+  const square = (): Float64Array => new Float64Array(fields * fields);
+  return {
+    potential: square(),
+    potentialLow: square(),
+    stream: square(),
+    streamLow: square(),
+    gap: new Float64Array(fields),
+    sigma: 1,
+  };
+}
+
+/** Evaluates triangle t from the gradients in v and s; fills `out`. */
+export function sampleEnergies(
+  set: ElementSet,
+  t: number,
+  sigma: ConductivityFunction,
+  v: readonly ElementField[],
+  s: readonly ElementField[],
+  out: SampledEnergies,
+): void {
+  const { order, modes } = set.layouts[t];
+  const low = assemblyDegree(order);
+  integrate(set, t, sigma, v, s, modes, low, out.potentialLow, out.streamLow, null, out);
+  out.gap.fill(0);
+  integrate(set, t, sigma, v, s, modes, low + EXTRA_DEGREE, out.potential, out.stream, out.gap, out);
+}
+
+function integrate(
+  set: ElementSet,
+  t: number,
+  sigma: ConductivityFunction,
+  v: readonly ElementField[],
+  s: readonly ElementField[],
+  modes: number,
+  degree: number,
+  potential: Float64Array,
+  stream: Float64Array,
+  gap: Float64Array | null,
+  out: SampledEnergies,
+): void {
+  const table = sampleTable(degree);
+  const { count, weights, xi, eta } = table.rule;
+  const samples = new Float64Array(count);
+  sampleConductivity(sigma, xi, eta, count, cornerAndEdges(set, t), samples);
+  const fields = v.length;
+  const vx = v.map((field) => valuesAt(field.p, modes, table.modes, count));
+  const vy = v.map((field) => valuesAt(field.q, modes, table.modes, count));
+  const jx = s.map((field) => valuesAt(field.q, modes, table.modes, count));
+  const jy = s.map((field) => valuesAt(field.p, modes, table.modes, count));
+  let mean = 0;
+  for (let q = 0; q < count; q++) mean += 2 * weights[q] * samples[q];
+  out.sigma = mean;
+  for (let a = 0; a < fields; a++) {
+    for (let b = 0; b < fields; b++) {
+      let ofV = 0;
+      let ofJ = 0;
+      for (let q = 0; q < count; q++) {
+        ofV += weights[q] * samples[q] * (vx[a][q] * vx[b][q] + vy[a][q] * vy[b][q]);
+        ofJ += (weights[q] / samples[q]) * (jx[a][q] * jx[b][q] + jy[a][q] * jy[b][q]);
+      }
+      potential[a * fields + b] = ofV;
+      stream[a * fields + b] = ofJ;
+    }
+    if (!gap) continue;
+    for (let q = 0; q < count; q++) {
+      const dx = samples[q] * vx[a][q] - jx[a][q];
+      const dy = samples[q] * vy[a][q] + jy[a][q];
+      gap[a] += (weights[q] / samples[q]) * (dx * dx + dy * dy);
+    }
+  }
+}
+
+function valuesAt(
+  coefficients: Float64Array,
+  modes: number,
+  table: Float64Array,
+  count: number,
+): Float64Array {
+  const values = new Float64Array(count);
+  for (let k = 0, at = 0; k < modes; k++) {
+    const c = coefficients[k];
+    for (let q = 0; q < count; q++, at++) values[q] += c * table[at];
+  }
+  return values;
+}
