@@ -2,7 +2,7 @@ import { dispatch } from "../dispatch";
 import type { Example } from "../documentation";
 import type { Operation } from "../operation";
 import type { RouteTable } from "../route-table";
-import { exampleTarget, makeFixtures, performExample, type Fixtures, type Send } from "./perform";
+import { makeFixtures, performExample, type Fixtures, type Send } from "./perform";
 import { SampleIds } from "./sample-ids";
 import { scratchService } from "./scratch-service";
 
@@ -26,7 +26,10 @@ const WITHOUT_KEY = { name: "noKey", summary: "Without a key", status: 401 };
 const WRONG_KEY = { name: "unknownKey", summary: "With a key that was never issued", status: 401 };
 const UNKNOWN_KEY = `rho_k${"0".repeat(15)}_${"0".repeat(43)}`;
 
-/** Makes every operation's examples on a service in memory and collects the answers, by operation. */
+/**
+ * Makes every operation's examples on a service in memory and collects the answers, by operation. One that is not
+ * answered with its status is left out: the document stays true, and a test misses it.
+ */
 export async function collectExamples(
   routes: RouteTable,
   origin: string,
@@ -50,7 +53,8 @@ export async function collectExamples(
       }
       const answered: AnsweredExample[] = [];
       for (const [example, credentials] of calls) {
-        answered.push(await perform(send, operation, example, fixtures, credentials, ids));
+        const call = await perform(send, operation, example, fixtures, credentials, ids);
+        if (call.answer.status === example.status) answered.push(call);
       }
       collected.set(operation.id, answered);
     }
@@ -70,12 +74,6 @@ async function perform(
 ): Promise<AnsweredExample> {
   const response = await performExample(send, operation, example, fixtures, key);
   const text = ids.replace(await response.text());
-  if (response.status !== example.status) {
-    const target = exampleTarget(operation, example, fixtures);
-    throw new Error(
-      `The example ${operation.id}.${example.name} (${target}) got ${response.status}: ${text}`,
-    );
-  }
   const mediaType = (response.headers.get("content-type") ?? "").split(";")[0];
   const path = Object.entries(example.path ?? {}).map(([name, value]) => {
     const fixture = fixtures[value];

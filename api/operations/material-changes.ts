@@ -6,6 +6,7 @@ import { materialChangeSchema, newMaterialSchema } from "@/lib/materials/input";
 import { readMeasuredTable } from "@/lib/materials/measured-table";
 import { changeMaterial, createMaterial, retireMaterial } from "@/lib/materials/team-materials";
 import { BASE_PATH } from "../base-path";
+import { bodyRefusal } from "../body";
 import { ifMatchVersion, requiredVersion, versionTag } from "../if-match";
 import { type CallContext, defineOperation, json } from "../operation";
 import { materialAnswer, materialId, versionHeader } from "./materials";
@@ -202,6 +203,9 @@ export const patchMaterial = defineOperation({
   handler: ({ path, body }, context) => {
     const by = write(context);
     const from = requiredVersion(context.headers);
+    if (Object.keys(body).length === 0) {
+      throw bodyRefusal([{ pointer: "#", detail: "must change at least one member." }]);
+    }
     return {
       commit: () => {
         const material = changeMaterial(context.service.db, by, path.id, from, body);

@@ -9,8 +9,7 @@ export const newMaterialSchema = materialSchema
 /** Any of it, to make the next version; what is left out stays. */
 export const materialChangeSchema = newMaterialSchema
   .partial()
-  .refine((change) => Object.keys(change).length > 0, { error: "must change at least one member." })
-  .meta({ description: "The members to change." });
+  .meta({ description: "The members to change, at least one.", minProperties: 1 });
 
 /** A material as it is answered. */
 export const materialViewSchema = z

@@ -1,0 +1,119 @@
+import { afterAll, beforeAll, describe, expect, test } from "vitest";
+import { call, expectProblem } from "../support/call";
+import { startServer, type TestServer } from "../support/server";
+
+let server: TestServer;
+let key: string;
+beforeAll(async () => {
+  server = await startServer();
+  key = server.issue().key;
+});
+afterAll(() => server.stop());
+
+const get = (path: string, headers: Record<string, string> = {}) =>
+  call(server, "get", `/resistance/${path}`, { key, headers });
+const SLEEVE = "cylindrical-shell?innerRadius=2mm&outerRadius=5mm&length=1m";
+
+describe("GET /resistance/{shape} 200", () => {
+  test("the same as POST, with units in the values", async () => {
+    const query = await get(
+      `${SLEEVE}&material=copper-annealed&temperature=75&voltage=1%20mV&include=steps,checks`,
+    );
+    expect(query.status).toBe(200);
+    const body = await call(server, "post", "/resistance", {
+      key,
+      body: {
+        shape: "cylindrical-shell",
+        dimensions: { innerRadius: "2mm", outerRadius: "5mm", length: "1m" },
+        medium: { material: "copper-annealed" },
+        operating: { temperature: 75, voltage: "1 mV" },
+        include: ["steps", "checks"],
+      },
+    });
+    expect(query.body).toEqual(body.body);
+  });
+
+  test("bare numbers are in SI, a dimension named thickness is the shape's", async () => {
+    const response = await get("bar?length=1&width=0.05&thickness=0.01&resistivity=1.72e-8");
+    expect(response.body.resistance.value).toBeCloseTo((1.72e-8 * 1) / (0.05 * 0.01), 15);
+    const conductivity = await get("bar?length=1&width=0.05&thickness=0.01&conductivity=58%20MS/m");
+    expect(conductivity.status).toBe(200);
+  });
+
+  test("a bare number as text, by Accept or by format", async () => {
+    for (const response of [
+      await get(`${SLEEVE}&conductivity=1e-12`, { Accept: "text/plain" }),
+      await get(`${SLEEVE}&conductivity=1e-12&format=text`),
+      await get(`${SLEEVE}&conductivity=1e-12&format=text`, { Accept: "application/json" }),
+    ]) {
+      expect(response.status).toBe(200);
+      expect(response.headers["content-type"]).toMatch(/^text\/plain/);
+      expect(response.text).toMatch(/^\d+(\.\d+)?$/);
+      expect(Number(response.text) / ((1e12 * Math.log(2.5)) / (2 * Math.PI))).toBeCloseTo(1, 12);
+    }
+    const json = await get(`${SLEEVE}&conductivity=1e-12&format=json`, { Accept: "text/plain" });
+    expect(json.type).toBe("application/json");
+  });
+});
+
+describe("GET /resistance/{shape} 422", () => {
+  const refused = async (path: string, ...parameters: string[]) => {
+    const response = await get(path);
+    expectProblem(response, 422, "invalid-input");
+    const errors: { parameter?: string; pointer?: string; detail: string }[] = response.body.errors;
+    expect(errors.map(({ parameter }) => parameter)).toEqual(parameters);
+    expect(errors.every(({ pointer }) => pointer === undefined)).toBe(true);
+    return errors.map(({ detail }) => detail).join(" ");
+  };
+
+  test("an unknown parameter, with the nearest dimension", async () => {
+    expect(await refused(`${SLEEVE}&lenght=1&conductivity=1`, "lenght")).toContain("length");
+  });
+  test("a missing dimension", async () => {
+    await refused("bar?length=1&width=1&resistivity=1", "thickness");
+  });
+  test("a wrong unit", async () => {
+    await refused("bar?length=1kg&width=1&thickness=1&resistivity=1", "length");
+    await refused("bar?length=1&width=1&thickness=1&resistivity=1m", "resistivity");
+    await refused("bar?length=1&width=1&thickness=1&resistivity=1&temperature=5kg", "temperature");
+  });
+  test("no medium, an unknown material, a wrong include, a value twice", async () => {
+    await refused("bar?length=1&width=1&thickness=1", "material");
+    await refused("bar?length=1&width=1&thickness=1&material=unobtainium", "material");
+    await refused("bar?length=1&width=1&thickness=1&resistivity=1&include=stepz", "include");
+    await refused("bar?length=1&length=2&width=1&thickness=1&resistivity=1", "length");
+    await refused("bar?length=1&width=1&thickness=1&resistivity=1&extrapolate=maybe", "extrapolate");
+    await refused("bar?length=1&width=1&thickness=1&resistivity=1&format=xml", "format");
+  });
+  test("two media", async () => {
+    const response = await get("bar?length=1&width=1&thickness=1&resistivity=1&conductivity=1");
+    expectProblem(response, 422, "invalid-input");
+    expect(["resistivity", "conductivity"]).toContain(response.body.errors[0].parameter);
+  });
+});
+
+describe("errors in text form keep their status and are one line", () => {
+  test.each([
+    ["422", "bar?length=1kg&width=1&thickness=1&resistivity=1&format=text", 422],
+    ["404", "nothing?format=text", 404],
+  ])("%s", async (_, path, status) => {
+    const response = await get(path);
+    expect(response.status).toBe(status);
+    expect(response.headers["content-type"]).toMatch(/^text\/plain/);
+    expect(response.text).toMatch(/^error: [^\n]+$/);
+  });
+
+  test("401 and 429 too, with their headers", async () => {
+    const response = await call(server, "get", "/resistance/bar?length=1&format=text");
+    expect(response.status).toBe(401);
+    expect(response.text).toMatch(/^error: /);
+    expect(response.headers["www-authenticate"]).toBe('Bearer realm="rhoform"');
+    const narrow = server.issue({ quotas: { minute: 1, month: 10 } }).key;
+    const path = "/resistance/bar?length=1&width=1&thickness=1&resistivity=1&format=text";
+    expect((await call(server, "get", path, { key: narrow })).status).toBe(200);
+    const limited = await call(server, "get", path, { key: narrow });
+    expect(limited.status).toBe(429);
+    expect(limited.text).toMatch(/^error: /);
+    expect(Number(limited.headers["retry-after"])).toBeGreaterThan(0);
+  });
+});
