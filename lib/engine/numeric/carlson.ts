@@ -40,7 +40,8 @@ export function carlsonRC(x: number, y: number): number {
     const mean = a / 3 + (2 * b) / 3;
     const s = (b - a) / (3 * mean);
     if (Math.abs(s) < SPREAD_RC) {
-      const series = s * s * (3 / 10 + s * (1 / 7 + s * (3 / 8 + s * (9 / 22 + s * (159 / 208 + (s * 9) / 8)))));
+      const series =
+        s * s * (3 / 10 + s * (1 / 7 + s * (3 / 8 + s * (9 / 22 + s * (159 / 208 + (s * 9) / 8)))));
       return (1 + series) / Math.sqrt(mean);
     }
     const shift = 2 * Math.sqrt(a) * Math.sqrt(b) + b;

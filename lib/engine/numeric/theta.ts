@@ -11,7 +11,10 @@
 const MOST_TERMS = 200;
 
 /** θ₁(v, q)/(2q^(1/4)), θ₂(v, q)/(2q^(1/4)), θ₃(v, q), θ₄(v, q): the factor 2q^(1/4) is left out so that it cannot underflow. */
-export function theta(v: number, q: number): { first: number; second: number; third: number; fourth: number } {
+export function theta(
+  v: number,
+  q: number,
+): { first: number; second: number; third: number; fourth: number } {
   let [first, second, third, fourth] = [Math.sin(v), Math.cos(v), 1, 1];
   for (let n = 1; n < MOST_TERMS; n++) {
     const odd = q ** (n * (n + 1));

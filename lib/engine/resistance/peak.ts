@@ -32,6 +32,7 @@ export function findPeak(solution: Solution, voltage: number, per: Peak["per"]):
 function alongPeak(solution: Solution, view: AlongView, voltage: number, per: Peak["per"]): Peak {
   const conductor = view.conductor();
   const { flow } = conductor;
+  if (flow.unboundedAt !== undefined) return unboundedPeak(flow.unboundedAt, per);
   const current = voltage / solution.value;
   const density = (x: number): number => current / (flow.section(x) * (flow.scale?.(x) ?? 1));
   const field = (x: number): number => density(x) * conductor.resistivityAt(x);
@@ -55,6 +56,17 @@ function alongPeak(solution: Solution, view: AlongView, voltage: number, per: Pe
     currentDensity: densityQuantity(densityValue, false),
     position: position(largestField),
     currentDensityPosition: position(largestDensity),
+    per,
+  };
+}
+
+function unboundedPeak(text: string, per: Peak["per"]): Peak {
+  const position: PeakPosition = { coordinate: null, value: null, unit: null, text };
+  return {
+    field: fieldQuantity(null),
+    currentDensity: densityQuantity(null, false),
+    position,
+    currentDensityPosition: position,
     per,
   };
 }

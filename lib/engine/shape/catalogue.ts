@@ -21,8 +21,13 @@ import { taperedStrip } from "./tapered/tapered-strip";
 
 // radial
 import { arcBar } from "./radial/arc-bar";
+import { bentTube } from "./radial/bent-tube";
+import { confocalShell } from "./radial/confocal-shell";
+import { conicalShell } from "./radial/conical-shell";
 import { cylindricalShell } from "./radial/cylindrical-shell";
+import { hyperbolicNeck } from "./radial/hyperbolic-neck";
 import { sphericalShell } from "./radial/spherical-shell";
+import { torusArc } from "./radial/torus-arc";
 
 // spreading
 
@@ -60,8 +65,12 @@ const tapered: readonly Shape[] = [taperedStrip, coneFrustum];
 const radial: readonly Shape[] = [
   cylindricalShell,
   sphericalShell,
+  confocalShell,
   arcBar,
-  // further radial shapes
+  conicalShell,
+  bentTube,
+  hyperbolicNeck,
+  torusArc,
 ];
 
 const spreading: readonly Shape[] = [

@@ -103,6 +103,8 @@ export interface AlongFlow {
   readonly breaks?: readonly number[];
   /** Position of that line, for people: "at the inner radius". */
   readonly line?: string;
+  /** Where the field grows without bound, for people; `scale` then tells another line, where it stays finite. */
+  readonly unboundedAt?: string;
 }
 
 /** Flow in parallel tubes labelled by a coordinate across it: G = ∫σ·tube dx. */

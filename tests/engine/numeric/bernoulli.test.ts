@@ -26,7 +26,8 @@ describe("Bernoulli numbers", () => {
 
 describe("Bernoulli polynomials", () => {
   it("B₂(t) = t² − t + 1/6", () => {
-    for (const t of [0, 0.25, 0.5, 0.9, 1]) expect(bernoulliPolynomial(1, t)).toBeCloseTo(t * t - t + 1 / 6, 15);
+    for (const t of [0, 0.25, 0.5, 0.9, 1])
+      expect(bernoulliPolynomial(1, t)).toBeCloseTo(t * t - t + 1 / 6, 15);
   });
 
   it("agree with 40-digit values (mpmath)", () => {
@@ -38,7 +39,9 @@ describe("Bernoulli polynomials", () => {
   it("end in the Bernoulli numbers and take their middle value at ½", () => {
     for (let k = 1; k <= LARGEST_BERNOULLI; k++) {
       const scale = Math.abs(bernoulliNumber(k));
-      expect(Math.abs(bernoulliPolynomial(k, 0) - bernoulliNumber(k))).toBeLessThan(1e-12 * Math.max(scale, 1));
+      expect(Math.abs(bernoulliPolynomial(k, 0) - bernoulliNumber(k))).toBeLessThan(
+        1e-12 * Math.max(scale, 1),
+      );
       expect(bernoulliPolynomial(k, 1)).toBe(bernoulliPolynomial(k, 0));
       expect(Math.abs(bernoulliPolynomial(k, 0.5) / bernoulliAtHalf(k) - 1)).toBeLessThan(2e-15);
     }
