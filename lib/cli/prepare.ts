@@ -2,8 +2,22 @@
  * What happens before the server starts: settings are checked, the database is migrated, the demo seeded on the first
  * start. Prints one JSON object for the start script.
  */
+import { demoKey, seedDemo } from "@/db/seed";
+import { exampleRequest, findShape } from "@/lib/engine";
 import { ConfigError, readConfig } from "../config/environment";
-import { closeService, openService } from "../service/service";
+import { closeService, openService, type Service } from "../service/service";
+
+/** Shape of the call that the start prints. */
+const SHAPE = "cylindrical-shell";
+
+/** Seeds the demo, if it is wanted, and tells what is needed to call with its key. */
+function demo(service: Service): { key: string; request: object } | undefined {
+  if (!service.config.demo) return undefined;
+  seedDemo(service);
+  const key = demoKey(service);
+  const shape = findShape(SHAPE);
+  return key && shape ? { key, request: exampleRequest(shape) } : undefined;
+}
 
 function main(): void {
   const config = readConfig(process.env);
@@ -16,6 +30,7 @@ function main(): void {
         origin: config.origin,
         // Where this machine reaches the server, whatever its public origin.
         localBase: readConfig({ ...process.env, RHOFORM_ORIGIN: "" }).origin,
+        demo: demo(service),
       }),
     );
   } finally {

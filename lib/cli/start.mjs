@@ -36,7 +36,6 @@ function greet({ origin, demo }) {
     lines.push(
       "",
       `Demo key: ${demo.key}`,
-      ...(demo.signIn ? [`Demo sign-in: ${demo.signIn.email} with ${demo.signIn.password}`] : []),
       "",
       "One call to try:",
       "",
