@@ -214,7 +214,7 @@ function presentSolution(
     triangles: result.triangles,
     refinements: result.refinements,
     checks: fieldChecks(pair, energies, bounds),
-    map: makeFieldMap(pair, pictureCombination(result), unit, frameOfMap),
+    map: makeFieldMap(pair, pictureCombination(result), unit, result.singular, frameOfMap),
   };
 }
 

@@ -54,6 +54,7 @@ export interface AdaptiveResult {
   readonly refinements: number;
   readonly pair: SolvedPair;
   readonly energies: FieldEnergies;
+  readonly singular: readonly SingularVertex[];
 }
 
 /** Order of all elements in the first solution. */
@@ -70,7 +71,7 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
   const { limits, medium, terminalCount } = input;
   const order = new Uint8Array(input.mesh.triangles.length / 3).fill(input.startOrder ?? START_ORDER);
   let current: OrderedMesh = { mesh: input.mesh, order };
-  let singular: readonly SingularVertex[] | null = null;
+  let singular: readonly SingularVertex[] = [];
   let last: AdaptiveResult | null = null;
   const goal = new Goal();
   let narrowest = Infinity;
@@ -83,6 +84,9 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
       if (!(error instanceof InterruptedError) || !last) throw error;
       return { ...last, status: "limited", limit: "stopped" };
     }
+    if (refinements === 0) {
+      singular = singularVertices(current.mesh, pair.runs, representativeSigma(current.mesh, medium));
+    }
     const displacement = input.reference ? input.reference.displacements(current.mesh) : null;
     const weight = last ? fieldWeights(last.energies, terminalCount - 1) : pair.potentials.map(() => 1);
     const energies = fieldEnergies(pair, weight, displacement);
@@ -91,7 +95,7 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
     const triangles = current.order.length;
     const progress = { ...resistance, unknowns: countFunctions(pair.set), triangles, refinements };
     input.onProgress?.(progress);
-    const result = { ...progress, bounds: goal.reached, pair, energies };
+    const result = { ...progress, bounds: goal.reached, pair, energies, singular };
     const { width } = goal;
     if (width <= input.accuracy) return { ...result, status: "done", limit: "none" };
     idle = width < 0.9 * narrowest ? 0 : idle + 1;
@@ -100,7 +104,6 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
     if (idle >= IDLE_STEPS) return last;
     if (refinements >= limits.refinements) return { ...last, limit: "refinements" };
     if (limits.shouldStop()) return { ...last, limit: "stopped" };
-    singular ??= singularVertices(current.mesh, pair.runs, representativeSigma(current.mesh, medium));
     const next = refineWithin(input, current, energies, singular, (AIM * input.accuracy) / width);
     if (next === null) return { ...last, limit: "unknowns" };
     if (next === current) return last;

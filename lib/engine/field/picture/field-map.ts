@@ -6,6 +6,7 @@
  */
 
 import { ElementField } from "../bounds/element-field";
+import type { SingularVertex } from "../bounds/exponents";
 import { elementLayout, type ElementLayout } from "../element/layout";
 import type { BoundarySide } from "../mesh/mesh";
 import type { DiscreteField, SolvedPair } from "../solve/pair";
@@ -36,6 +37,9 @@ export interface FieldMap {
   readonly axisymmetric: boolean;
   /** Terminals between which the current flows: high, low. */
   readonly between: readonly [number, number];
+  /** Vertices at which the potential goes like r^exponent with an exponent that is no whole number. */
+  readonly singularVertex: Int32Array;
+  readonly singularExponent: Float64Array;
 }
 
 export interface MapFrame {
@@ -54,6 +58,7 @@ export function makeFieldMap(
   pair: SolvedPair,
   combination: readonly number[],
   conductance: number,
+  singular: readonly SingularVertex[],
   frame: MapFrame,
 ): FieldMap {
   const { set } = pair;
@@ -95,6 +100,8 @@ export function makeFieldMap(
     potential,
     stream,
     current,
+    singularVertex: Int32Array.from(singular, ({ vertex }) => vertex),
+    singularExponent: Float64Array.from(singular, ({ exponent }) => exponent),
     ...frame,
   };
 }

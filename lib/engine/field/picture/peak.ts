@@ -1,0 +1,126 @@
+/**
+ * Where the current crowds.
+ *
+ * At a vertex where the potential goes like r^α with α < 1 (re-entrant corners, ends of terminals) the density is
+ * unbounded; then the value at a stated distance from the worst of them is given. Otherwise it is the greatest value
+ * found.
+ */
+
+import type { FieldMap } from "./field-map";
+import { FieldSampler } from "./sampler";
+
+export interface DensityPeak {
+  /** The density grows without limit towards `position`. */
+  readonly unbounded: boolean;
+  /** In the outline's unit. */
+  readonly position: [number, number];
+  /** A/m (sheet) or A/m² (axisymmetric) for one volt: at `distanceM` from the position, or at it. */
+  readonly density: number;
+  readonly fieldVperM: number;
+  /** Distance in metres at which an unbounded peak was read; 0 for a bounded one. */
+  readonly distanceM: number;
+}
+
+/** Exponents nearer to one than this are too weak to be told from none. */
+const WEAKEST = 1e-3;
+
+/** Distance from a corner as a part of the outline's extent, unless other corners are near. */
+const DISTANCE = 0.005;
+
+export function densityPeak(map: FieldMap): DensityPeak {
+  const sampler = new FieldSampler(map);
+  const unbounded: number[] = [];
+  map.singularVertex.forEach((v, k) => {
+    if (map.singularExponent[k] < 1 - WEAKEST) unbounded.push(v);
+  });
+  return unbounded.length > 0 ? worstCorner(map, sampler, unbounded) : greatest(map, sampler);
+}
+
+function worstCorner(map: FieldMap, sampler: FieldSampler, corners: readonly number[]): DensityPeak {
+  const { xy } = map;
+  const distance = commonDistance(map, corners);
+  let best: DensityPeak | null = null;
+  for (const v of corners) {
+    const found = aroundCorner(map, sampler, v, distance);
+    if (!found || (best && found.density <= best.density)) continue;
+    best = {
+      unbounded: true,
+      position: inOutline(map, xy[2 * v], xy[2 * v + 1]),
+      distanceM: distance * map.unitM,
+      ...found,
+    };
+  }
+  return best ?? greatest(map, sampler);
+}
+
+/** One distance for all corners: a part of the extent, but no more than a quarter of the way to the next corner. */
+function commonDistance(map: FieldMap, corners: readonly number[]): number {
+  const { xy } = map;
+  let nearest = DISTANCE * 4;
+  const sorted = [...corners].sort((a, b) => xy[2 * a] - xy[2 * b]);
+  for (let i = 0; i < sorted.length; i++) {
+    const a = sorted[i];
+    for (let j = i + 1; j < sorted.length && xy[2 * sorted[j]] - xy[2 * a] < nearest; j++) {
+      const b = sorted[j];
+      nearest = Math.min(nearest, Math.hypot(xy[2 * a] - xy[2 * b], xy[2 * a + 1] - xy[2 * b + 1]));
+    }
+  }
+  return nearest / 4;
+}
+
+const DIRECTIONS = 72;
+
+/** The greatest density on the circle of the given radius around a vertex, inside the conductor. */
+function aroundCorner(
+  map: FieldMap,
+  sampler: FieldSampler,
+  v: number,
+  radius: number,
+): { density: number; fieldVperM: number } | null {
+  let best: { density: number; fieldVperM: number } | null = null;
+  for (let k = 0; k < DIRECTIONS; k++) {
+    const angle = (2 * Math.PI * k) / DIRECTIONS;
+    const x = map.xy[2 * v] + radius * Math.cos(angle);
+    const y = map.xy[2 * v + 1] + radius * Math.sin(angle);
+    const values = sampler.atDomain(x, y);
+    if (!values) continue;
+    const density = Math.hypot(...values.density);
+    if (!best || density > best.density) best = { density, fieldVperM: Math.hypot(...values.field) };
+  }
+  return best;
+}
+
+/** The greatest density over all vertices and middles of the triangles. */
+function greatest(map: FieldMap, sampler: FieldSampler): DensityPeak {
+  const { xy, triangles } = map;
+  let best: DensityPeak = {
+    unbounded: false,
+    position: inOutline(map, xy[0], xy[1]),
+    density: 0,
+    fieldVperM: 0,
+    distanceM: 0,
+  };
+  for (let t = 0; t < triangles.length / 3; t++) {
+    const [a, b, c] = [2 * triangles[3 * t], 2 * triangles[3 * t + 1], 2 * triangles[3 * t + 2]];
+    const points: [number, number][] = [a, b, c].map((v) => [xy[v], xy[v + 1]]);
+    points.push([(xy[a] + xy[b] + xy[c]) / 3, (xy[a + 1] + xy[b + 1] + xy[c + 1]) / 3]);
+    for (const [x, y] of points) {
+      if (map.axisymmetric && x === 0) continue;
+      const values = sampler.inTriangle(t, x, y);
+      const density = Math.hypot(...values.density);
+      if (density <= best.density) continue;
+      best = {
+        unbounded: false,
+        position: inOutline(map, x, y),
+        density,
+        fieldVperM: Math.hypot(...values.field),
+        distanceM: 0,
+      };
+    }
+  }
+  return best;
+}
+
+function inOutline(map: FieldMap, x: number, y: number): [number, number] {
+  return [x * map.scale + map.origin[0], y * map.scale + map.origin[1]];
+}
