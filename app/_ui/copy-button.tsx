@@ -7,8 +7,16 @@ type State = "idle" | "copied" | "failed";
 
 const TEXT: Record<State, string> = { idle: "Copy", copied: "Copied", failed: "Select and copy by hand" };
 
+interface CopyButtonProps {
+  readonly text: string;
+  /** What is copied, for the button's name. */
+  readonly what: string;
+  /** Shown in place of "Copy", and then the button's whole name. */
+  readonly label?: string;
+}
+
 /** Copies a text to the clipboard and says whether it did. */
-export function CopyButton({ text, what }: { readonly text: string; readonly what: string }) {
+export function CopyButton({ text, what, label }: CopyButtonProps) {
   const [state, setState] = useState<State>("idle");
 
   useEffect(() => {
@@ -31,9 +39,9 @@ export function CopyButton({ text, what }: { readonly text: string; readonly wha
       variant="quiet"
       onClick={copy}
       className="min-w-9"
-      aria-label={state === "idle" ? `Copy ${what}` : undefined}
+      aria-label={state === "idle" && !label ? `Copy ${what}` : undefined}
     >
-      <span aria-live="polite">{TEXT[state]}</span>
+      <span aria-live="polite">{state === "idle" ? (label ?? TEXT.idle) : TEXT[state]}</span>
     </Button>
   );
 }

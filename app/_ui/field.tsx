@@ -3,6 +3,8 @@ import { type ReactNode, useId } from "react";
 /** What a control inside a field must carry, so that its label, help and error are read with it. */
 export interface ControlProps {
   readonly id: string;
+  /** Only where no label stands beside the control, as in a table's cell. */
+  readonly "aria-label"?: string;
   readonly "aria-describedby"?: string;
   readonly "aria-invalid"?: true;
 }

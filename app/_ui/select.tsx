@@ -13,7 +13,7 @@ export function Select({ label, options, help, error, className, ...rest }: Sele
   return (
     <Field label={label} help={help} error={error} className={className}>
       {(control) => (
-        <select {...control} {...rest} className={`${CONTROL} pe-3`}>
+        <select {...control} {...rest} className={`${CONTROL} pe-3 font-sans!`}>
           {options.map((option) => (
             <option key={option.value} value={option.value}>
               {option.label}

@@ -1,7 +1,12 @@
 import { describe, expect, it } from "vitest";
 import fc from "fast-check";
 import { convertUnit, textInUnit } from "@/app/_ui/quantity/convert";
-import { compactQuantity, joinQuantity, splitQuantity } from "@/app/_ui/quantity/quantity-text";
+import {
+  compactQuantity,
+  joinQuantity,
+  spaceQuantity,
+  splitQuantity,
+} from "@/app/_ui/quantity/quantity-text";
 import { decimalText, rational } from "@/app/_ui/quantity/rational";
 import { readTyped } from "@/app/_ui/quantity/read-typed";
 import { FIRST_UNIT, findUnit, UNITS, unitsOf, type UnitKind } from "@/app/_ui/quantity/units";
@@ -204,9 +209,14 @@ describe("quantity texts", () => {
       for (const unit of UNITS[kind]) {
         const text = `2.5 ${unit.id}`;
         expect(readQuantity(compactQuantity(text), kind)).toEqual(readQuantity(text, kind));
+        expect(spaceQuantity(compactQuantity(text))).toBe(text);
       }
     }
     expect(compactQuantity("2.5 mm")).toBe("2.5mm");
+    for (const text of ["1e-12", "2.5", "copper-annealed", "AWG 24", "58e6/(1+3*u^2)", "1e3", "1/K"]) {
+      expect(compactQuantity(text)).toBe(text);
+      expect(spaceQuantity(text)).toBe(text);
+    }
     expect(compactQuantity("1.72e-8 ohm m")).toBe("1.72e-8ohm m");
     expect(compactQuantity("0.00393 1/K")).toBe("0.00393 1/K");
   });

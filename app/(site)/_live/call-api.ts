@@ -13,13 +13,23 @@ export class ApiProblem extends Error {
   }
 }
 
-/** Posts a body to an operation of the API on behalf of this page. Throws ApiProblem when it is refused. */
-export async function postApi<Result>(path: string, body: string): Promise<Result> {
-  const first = await send(path, body);
-  if (first.status !== 401) return read(first);
-  // The token may have ended while the page slept: one new one, once.
-  dropSiteToken();
-  return read(await send(path, body));
+/**
+ * Posts a body to an operation of the API on behalf of this page. Throws ApiProblem when it is refused.
+ * @param observe Told the headers of the answer, refused or not: what is left of the limits.
+ */
+export async function postApi<Result>(
+  path: string,
+  body: string,
+  observe?: (headers: Headers) => void,
+): Promise<Result> {
+  let response = await send(path, body);
+  if (response.status === 401) {
+    // The token may have ended while the page slept: one new one, once.
+    dropSiteToken();
+    response = await send(path, body);
+  }
+  observe?.(response.headers);
+  return read(response);
 }
 
 async function send(path: string, body: string): Promise<Response> {

@@ -50,7 +50,7 @@ export function PlotFigure(props: PlotFigureProps) {
 
   return (
     <figure className="border-t border-rule pt-1.5">
-      <figcaption className="flex flex-wrap items-center gap-x-2">
+      <figcaption className="flex min-h-5.5 flex-wrap items-center gap-x-2 medium:min-h-4">
         <span className="grow text-table font-semibold">{title}</span>
         <span className="flex flex-wrap items-center gap-x-2 print:hidden">
           {canLogX ? <Toggle label={<>log x</>} checked={logX} onChange={setLogX} /> : null}
@@ -71,7 +71,7 @@ export function PlotFigure(props: PlotFigureProps) {
       </div>
       <div className="flex flex-wrap items-center gap-x-0.5 print:hidden">
         <Button variant="quiet" aria-expanded={table} onClick={() => setTable(!table)}>
-          {table ? "Hide the numbers" : "Show the numbers"}
+          {table ? "Hide numbers" : "Numbers"}
         </Button>
         <Button
           variant="quiet"

@@ -34,5 +34,5 @@ export function compactQuantity(text: string): string {
 
 /** The inverse: "0.25mm" as "0.25 mm". */
 export function spaceQuantity(text: string): string {
-  return text.replace(/^([+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)(?=[A-Za-z%])/, "$1 ");
+  return text.replace(/^([+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)(?![eE][+-]?\d)(?=[A-Za-z%])/, "$1 ");
 }

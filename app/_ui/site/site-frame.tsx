@@ -6,6 +6,7 @@ import { Mark } from "./mark";
 import { SiteLink } from "./site-link";
 
 const NAVIGATION = [
+  { href: "/calculate", label: "Calculate" },
   { href: "/docs", label: "Docs" },
   { href: "/docs/api", label: "API reference" },
 ] as const;

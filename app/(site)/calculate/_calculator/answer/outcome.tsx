@@ -1,0 +1,35 @@
+"use client";
+
+import type { Complaint } from "../../_model/complaints";
+import type { Answer } from "../use-answer";
+import { Facts } from "./facts";
+import { Headline, Verdict } from "./headline";
+import { Cautions } from "./statements";
+import { TroubleNotice } from "./trouble-notice";
+
+interface OutcomeProps {
+  readonly answer: Answer;
+  readonly elsewhere: readonly Complaint[];
+  readonly className: string;
+}
+
+/** The answer with what belongs beside the number: verdict, trouble, facts, cautions. */
+export function Outcome({ answer, elsewhere, className }: OutcomeProps) {
+  const { result, stale, trouble, retry } = answer;
+  return (
+    <section aria-label="Answer" className={`grid gap-1.5 ${className}`}>
+      <Headline result={result} stale={stale} />
+      {result ? <Verdict result={result} /> : null}
+      {trouble ? (
+        <TroubleNotice
+          trouble={trouble}
+          elsewhere={elsewhere}
+          answered={result !== undefined}
+          retry={retry}
+        />
+      ) : null}
+      {result ? <Facts result={result} /> : null}
+      {result ? <Cautions cautions={result.cautions} /> : null}
+    </section>
+  );
+}

@@ -1,0 +1,148 @@
+"use client";
+
+import { type ReactNode, useMemo, useState } from "react";
+import { SWRConfig } from "swr";
+import type { ShapeEntry } from "@/lib/engine";
+import { LiveRegion } from "../../../_ui/live-region";
+import { sortComplaints } from "../_model/complaints";
+import type { Parameters } from "../_model/parameters";
+import { INCLUDE, requestBody } from "../_model/request";
+import type { PageState } from "../_model/variants";
+import type { FirstAnswer } from "../_server/first-answer";
+import type { FormDimension, ProfileFacts } from "../_server/form-facts";
+import type { Geometry } from "../_server/geometry";
+import type { MaterialChoice } from "../_server/material-choices";
+import { AnswerStrip } from "./answer/headline";
+import { Outcome } from "./answer/outcome";
+import { CompareTable } from "./compare/compare-table";
+import { VariantBar } from "./compare/variant-bar";
+import { Details } from "./details";
+import { DimensionFields } from "./dimension-fields";
+import { DrawingPane } from "./drawing-pane";
+import { Elsewhere } from "./elsewhere";
+import { FormProvider, type FormState } from "./form-context";
+import { MediumFields } from "./medium-fields";
+import { OperatingFields } from "./operating-fields";
+import { PageTools } from "./page-tools";
+import { RequirementFields } from "./requirement-fields";
+import { useAnswers } from "./use-answers";
+import { useGeometry } from "./use-geometry";
+import { useMaterials } from "./use-materials";
+import { usePageState } from "./use-page-state";
+
+interface CalculatorProps {
+  readonly entry: ShapeEntry;
+  readonly dimensions: readonly FormDimension[];
+  readonly example: Parameters;
+  readonly start: PageState;
+  /** Of each variant, as the server found them. */
+  readonly answers: readonly (FirstAnswer | null)[];
+  readonly geometry: Geometry | null;
+  readonly materials: readonly MaterialChoice[];
+  readonly profiles: readonly ProfileFacts[];
+  readonly origin: string;
+  /** The law, typeset. */
+  readonly formula: ReactNode;
+}
+
+/** One shape: its fields, its drawing, its answer while the fields change, and what stands behind the answer. */
+export function Calculator(props: CalculatorProps) {
+  return (
+    <SWRConfig value={{ dedupingInterval: 500 }}>
+      <LiveCalculator {...props} />
+    </SWRConfig>
+  );
+}
+
+function LiveCalculator(props: CalculatorProps) {
+  const { entry, dimensions, example, start, origin } = props;
+  const [state, actions] = usePageState(start, entry, example);
+  const [focused, setFocused] = useState<string>();
+  const { variants, active } = state;
+  const parameters = variants[active];
+  const bodies = useMemo(() => variants.map((variant) => requestBody(entry, variant)), [variants, entry]);
+  const answers = useAnswers(
+    bodies.map((body) => JSON.stringify({ ...body, include: INCLUDE })),
+    props.answers,
+  );
+  const answer = answers[active];
+  const geometry = useGeometry(entry.id, bodies[active].dimensions, props.geometry);
+  const materials = useMaterials(parameters.temperature, props.materials);
+  const { trouble } = answer;
+  const complaints = useMemo(
+    () => sortComplaints(trouble?.kind === "input" ? trouble.complaints : []),
+    [trouble],
+  );
+
+  const form: FormState = useMemo(
+    () => ({
+      entry,
+      dimensions,
+      parameters,
+      change: actions.change,
+      errorAt: (name) => complaints.atField.get(name),
+      materials,
+      profiles: props.profiles,
+      values: geometry?.values ?? {},
+      ranges: geometry?.ranges ?? {},
+      onFocus: setFocused,
+    }),
+    [entry, dimensions, parameters, actions.change, complaints, materials, props.profiles, geometry],
+  );
+
+  return (
+    <FormProvider value={form}>
+      <div className="mt-2 flex flex-wrap items-center justify-between gap-1 print:hidden">
+        <VariantBar count={variants.length} active={active} actions={actions} />
+        <PageTools state={state} entry={entry} onRestart={actions.restart} />
+      </div>
+      <AnswerStrip result={answer.result} stale={answer.stale} />
+      <div className="mt-2 grid items-start gap-x-5 gap-y-3 wide:grid-cols-[24rem_minmax(0,1fr)]">
+        <form
+          key={active}
+          aria-label="Inputs"
+          className="order-2 grid gap-2 wide:order-none"
+          onSubmit={(event) => event.preventDefault()}
+        >
+          <DimensionFields />
+          <MediumFields />
+          <OperatingFields />
+          <RequirementFields />
+        </form>
+        <div className="contents wide:sticky wide:top-2 wide:grid wide:gap-3">
+          <DrawingPane entry={entry} geometry={geometry} focused={focused} className="order-1 wide:order-2" />
+          <Outcome answer={answer} elsewhere={complaints.elsewhere} className="order-3 wide:order-1" />
+        </div>
+      </div>
+      {variants.length > 1 ? (
+        <section aria-labelledby="compare" className="mt-4">
+          <h2 id="compare" className="mb-1">
+            Side by side
+          </h2>
+          <CompareTable
+            entry={entry}
+            dimensions={dimensions}
+            variants={variants}
+            answers={answers}
+            active={active}
+          />
+        </section>
+      ) : null}
+      <Details entry={entry} result={answer.result} formula={props.formula} />
+      <section aria-labelledby="elsewhere" className="mt-5 print:hidden">
+        <h2 id="elsewhere" className="mb-1">
+          Use this elsewhere
+        </h2>
+        <Elsewhere entry={entry} parameters={parameters} origin={origin} />
+      </section>
+      <LiveRegion text={spoken(answer)} />
+    </FormProvider>
+  );
+}
+
+/** What a reader hears once an answer has settled. */
+function spoken({ result, stale, trouble }: ReturnType<typeof useAnswers>[number]): string {
+  if (trouble?.kind === "input") return "No answer to this input.";
+  if (trouble) return "No new answer for now.";
+  return result && !stale ? `Resistance ${result.resistance.text}` : "";
+}

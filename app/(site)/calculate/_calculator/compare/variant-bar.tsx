@@ -1,0 +1,54 @@
+"use client";
+
+import { Plus, X } from "lucide-react";
+import { Button } from "../../../../_ui/button";
+import { VARIANT_NAMES } from "../../_model/variants";
+import type { PageActions } from "../use-page-state";
+
+interface VariantBarProps {
+  readonly count: number;
+  readonly active: number;
+  readonly actions: PageActions;
+}
+
+/** Which variant the fields show; a copy of it can be added and changed. */
+export function VariantBar({ count, active, actions }: VariantBarProps) {
+  if (count === 1) {
+    return (
+      <Button onClick={actions.add}>
+        <Plus aria-hidden size={15} /> Compare with a variant
+      </Button>
+    );
+  }
+  return (
+    <div className="flex flex-wrap items-center gap-0.5">
+      <div role="group" aria-label="Variant shown" className="flex flex-wrap gap-0.5">
+        {VARIANT_NAMES.slice(0, count).map((name, index) => (
+          <span key={name} className="inline-flex">
+            <Button
+              aria-pressed={index === active}
+              variant={index === active ? "primary" : "plain"}
+              onClick={() => actions.show(index)}
+            >
+              Variant {name}
+            </Button>
+            {index === active ? (
+              <Button
+                aria-label={`Remove variant ${name}`}
+                className="px-0.5!"
+                onClick={() => actions.remove(index)}
+              >
+                <X aria-hidden size={15} />
+              </Button>
+            ) : null}
+          </span>
+        ))}
+      </div>
+      {count < VARIANT_NAMES.length ? (
+        <Button variant="quiet" onClick={actions.add}>
+          <Plus aria-hidden size={15} /> Variant
+        </Button>
+      ) : null}
+    </div>
+  );
+}

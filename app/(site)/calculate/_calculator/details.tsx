@@ -1,0 +1,69 @@
+"use client";
+
+import dynamic from "next/dynamic";
+import type { ReactNode } from "react";
+import type { ShapeEntry } from "@/lib/engine";
+import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
+import { Loading } from "../../../_ui/states";
+import { Checks, Grounds } from "./answer/statements";
+import { WhenSeen } from "./when-seen";
+
+const FlowPlots = dynamic(() => import("./answer/flow-plots").then((module) => module.FlowPlots), {
+  ssr: false,
+  loading: () => <Loading what="the plots" className="min-h-[640px]" />,
+});
+const Steps = dynamic(() => import("./answer/steps").then((module) => module.Steps), {
+  ssr: false,
+  loading: () => <Loading what="the steps" className="min-h-30" />,
+});
+
+interface DetailsProps {
+  readonly entry: ShapeEntry;
+  readonly result: ResistanceResult | undefined;
+  readonly formula: ReactNode;
+}
+
+/** What stands behind the number: law and steps, plots along the flow, checks, assumptions, sources. */
+export function Details({ entry, result, formula }: DetailsProps) {
+  return (
+    <div className="mt-5 grid grid-cols-1 gap-5 border-t border-rule pt-3">
+      <section aria-labelledby="law">
+        <h2 id="law" className="mb-1">
+          How the number came about
+        </h2>
+        <div className="mb-2 text-lead [&_.katex-display]:m-0 [&_.katex-display>.katex]:text-left!">
+          {formula}
+        </div>
+        {result?.steps ? (
+          <WhenSeen fallback={<Loading what="the steps" className="min-h-30" />}>
+            <Steps steps={result.steps} />
+          </WhenSeen>
+        ) : null}
+      </section>
+      {result?.profile ? (
+        <section aria-labelledby="plots">
+          <h2 id="plots" className="mb-1">
+            Along the flow
+          </h2>
+          <WhenSeen fallback={<Loading what="the plots" className="min-h-[640px]" />}>
+            <FlowPlots entry={entry} profile={result.profile} />
+          </WhenSeen>
+        </section>
+      ) : null}
+      {result?.checks ? (
+        <section aria-labelledby="checks">
+          <h2 id="checks" className="mb-1">
+            Checks on this answer
+          </h2>
+          <Checks checks={result.checks} />
+        </section>
+      ) : null}
+      <section aria-labelledby="grounds">
+        <h2 id="grounds" className="mb-1">
+          What it rests on
+        </h2>
+        <Grounds entry={entry} result={result} />
+      </section>
+    </div>
+  );
+}

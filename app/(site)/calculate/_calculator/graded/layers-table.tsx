@@ -1,0 +1,146 @@
+"use client";
+
+import { ArrowUp, Plus, X } from "lucide-react";
+import { Button } from "../../../../_ui/button";
+import { readRows, writeRows } from "../../_model/profile-forms";
+import { useForm } from "../form-context";
+import { baseValue } from "../use-medium-switch";
+import { CellInput } from "./cell-input";
+import { type FieldSite, positionKind, VALUE_UNITS } from "./profile-fields";
+import { spanText } from "./use-profile-switch";
+
+type Rows = readonly (readonly [string, string])[];
+
+/** Allowed difference between the sum of the thicknesses and the range, relative: the API's. */
+const TOLERANCE = 1e-9;
+
+/** Layers from the coordinate's start to its end, one row each. */
+export function LayersTable({ name, site }: { readonly name: string; readonly site: FieldSite }) {
+  const { parameters, change, errorAt } = useForm();
+  const rows = readRows(parameters[name] ?? "");
+  const kind = positionKind(site.span);
+  const base = site.span?.unit ?? "m";
+  const set = (next: Rows) => change({ [name]: writeRows(next) });
+  const sizes = rows.map(([thickness]) => baseValue(thickness, kind, base));
+  const sum = sizes.every((size) => size !== null)
+    ? sizes.reduce((total, size) => total + (size ?? 0), 0)
+    : null;
+  const extent = site.span?.extent;
+  const fits = sum !== null && extent !== undefined && Math.abs(sum / extent - 1) <= TOLERANCE;
+
+  function moveUp(index: number) {
+    const next = [...rows];
+    [next[index - 1], next[index]] = [next[index], next[index - 1]];
+    set(next);
+  }
+
+  function scaleToFit() {
+    if (sum === null || !site.span) return;
+    const { span } = site;
+    set(rows.map(([, value], i) => [spanText(((sizes[i] ?? 0) * span.extent) / sum, span), value] as const));
+  }
+
+  return (
+    <div className="mb-1.5">
+      <table className="w-full border-collapse text-table">
+        <caption className="mb-0.5 text-start text-table">
+          Layers, from the coordinate&rsquo;s start to its end
+        </caption>
+        <thead className="text-start text-small text-ink-soft">
+          <tr>
+            <th scope="col" className="w-2.5 text-start font-normal">
+              <span className="sr-only">Number</span>
+            </th>
+            <th scope="col" className="text-start font-normal">
+              Thickness
+            </th>
+            <th scope="col" className="text-start font-normal">
+              Value
+            </th>
+            <th scope="col">
+              <span className="sr-only">Change</span>
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {rows.map((row, index) => (
+            <tr key={index} className="align-top">
+              <th scope="row" className="pt-1 text-start text-small font-normal text-ink-soft">
+                {index + 1}
+              </th>
+              {(["thickness", "value"] as const).map((column, place) => (
+                <td key={column} className="pe-0.5 pb-0.5">
+                  <CellInput
+                    label={`Layer ${index + 1}, ${column}`}
+                    kind={place === 0 ? kind : site.values}
+                    bareUnit={place === 0 ? base : VALUE_UNITS[site.values]}
+                    value={row[place]}
+                    error={errorAt(`${name}/${index}/${column}`)}
+                    onChange={(text) =>
+                      set(
+                        rows.map((own, i) =>
+                          i !== index ? own : place === 0 ? [text, own[1]] : [own[0], text],
+                        ),
+                      )
+                    }
+                  />
+                </td>
+              ))}
+              <td className="w-px pb-0.5 whitespace-nowrap">
+                <RowButton
+                  label={`Move layer ${index + 1} up`}
+                  disabled={index === 0}
+                  onPress={() => moveUp(index)}
+                >
+                  <ArrowUp aria-hidden size={15} />
+                </RowButton>
+                <RowButton
+                  label={`Remove layer ${index + 1}`}
+                  disabled={rows.length === 1}
+                  onPress={() => set(rows.filter((_, i) => i !== index))}
+                >
+                  <X aria-hidden size={15} />
+                </RowButton>
+              </td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+      <p className="min-h-2.5 text-small text-oxide">{errorAt(name)}</p>
+      <div className="flex flex-wrap items-center gap-1">
+        <Button onClick={() => set([...rows, rows.at(-1) ?? ["", ""]])}>
+          <Plus aria-hidden size={15} /> Layer
+        </Button>
+        <Button onClick={scaleToFit} disabled={sum === null || extent === undefined || fits}>
+          Scale to fit
+        </Button>
+        <p className={`text-small ${fits ? "text-ink-soft" : "text-amber"}`}>
+          {site.span === undefined || sum === null
+            ? "The sum is not known yet."
+            : `Together ${spanText(sum, site.span)} of ${spanText(site.span.extent, site.span)}`}
+        </p>
+      </div>
+    </div>
+  );
+}
+
+interface RowButtonProps {
+  readonly label: string;
+  readonly disabled: boolean;
+  readonly onPress: () => void;
+  readonly children: React.ReactNode;
+}
+
+export function RowButton({ label, disabled, onPress, children }: RowButtonProps) {
+  return (
+    <button
+      type="button"
+      aria-label={label}
+      disabled={disabled}
+      onClick={onPress}
+      className="inline-grid min-h-5.5 min-w-3 cursor-pointer place-items-center rounded text-ink-soft hover:text-ink disabled:cursor-not-allowed disabled:opacity-40 medium:min-h-5"
+    >
+      {children}
+    </button>
+  );
+}

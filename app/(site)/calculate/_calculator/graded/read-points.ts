@@ -1,0 +1,75 @@
+/** Two columns of measured points from a file or a pasted text, each cell as a quantity that the API reads. */
+import { joinQuantity } from "../../../../_ui/quantity/quantity-text";
+import { readTyped } from "../../../../_ui/quantity/read-typed";
+
+export interface PointsReading {
+  readonly rows: readonly (readonly [string, string])[];
+  /** What could not be read, with its line. */
+  readonly problems: readonly string[];
+  /** What was understood of the head, for people. */
+  readonly note?: string;
+}
+
+const MOST_POINTS = 100_000;
+
+/**
+ * Reads text with a point a line. Columns are parted by a tab, a semicolon, a comma or spaces; a head may name units
+ * ("radius/mm", "conductivity (S/m)"); with tabs or semicolons the decimal mark may be a comma.
+ */
+export async function readPoints(text: string): Promise<PointsReading> {
+  const { default: papa } = await import("papaparse");
+  const delimiter = delimiterOf(text);
+  const parsed = papa.parse<string[]>(text.trim(), { delimiter, skipEmptyLines: "greedy" });
+  const lines = parsed.data.map((cells) => cells.map((cell) => cell.trim()).filter((cell) => cell !== ""));
+  const commas = delimiter !== ",";
+  const numeric = (cell: string | undefined) =>
+    cell !== undefined && readTyped(cell, commas).kind === "quantity";
+  const hasHead = lines.length > 0 && !lines[0].some(numeric);
+  const units = hasHead ? lines[0].map(unitOf) : [];
+  const rows: (readonly [string, string])[] = [];
+  const problems: string[] = [];
+  lines.slice(hasHead ? 1 : 0).forEach((cells, index) => {
+    const line = index + (hasHead ? 2 : 1);
+    if (cells.length < 2) {
+      problems.push(
+        `Line ${line} has ${cells.length === 1 ? "one column" : "no column"}; a point needs two.`,
+      );
+      return;
+    }
+    const pair = cells.slice(0, 2).map((cell, column) => quantityOf(cell, units[column] ?? "", commas));
+    const bad = pair.findIndex((cell) => cell === null);
+    if (bad >= 0)
+      problems.push(`Line ${line}, column ${bad + 1}: "${cells[bad].slice(0, 30)}" is no number.`);
+    else rows.push([pair[0] ?? "", pair[1] ?? ""]);
+  });
+  if (rows.length > MOST_POINTS) {
+    return {
+      rows: [],
+      problems: [`${rows.length} points are more than the ${MOST_POINTS} a table may have.`],
+    };
+  }
+  if (rows.length === 0 && problems.length === 0) problems.push("There is no line with two numbers.");
+  const note = hasHead ? `Columns taken: ${lines[0].slice(0, 2).join(" and ")}.` : undefined;
+  return { rows, problems, ...(note ? { note } : {}) };
+}
+
+function delimiterOf(text: string): string {
+  const sample = text.trim().split(/\r?\n/).slice(0, 20);
+  for (const delimiter of ["\t", ";"]) if (sample.every((line) => line.includes(delimiter))) return delimiter;
+  if (sample.every((line) => line.includes(","))) return ",";
+  return sample.every((line) => /\S\s+\S/.test(line.trim())) ? " " : ",";
+}
+
+/** The unit in a head such as "radius/mm", "radius (mm)" or "radius [mm]"; empty where there is none. */
+function unitOf(head: string): string {
+  const inBrackets = /[([]([^)\]]+)[)\]]\s*$/.exec(head);
+  if (inBrackets) return inBrackets[1].trim();
+  const behind = /^[^/]*\/\s*(.+)$/.exec(head);
+  return behind ? behind[1].trim() : "";
+}
+
+function quantityOf(cell: string, unit: string, decimalComma: boolean): string | null {
+  const typed = readTyped(cell, decimalComma);
+  if (typed.kind !== "quantity") return null;
+  return joinQuantity(typed.number, typed.unit === "" ? unit : typed.unit);
+}

@@ -1,0 +1,28 @@
+"use client";
+
+import { type ReactNode, useEffect, useRef, useState } from "react";
+
+/** Shows its content once its place comes near the window, so that what nobody looks at is not loaded. */
+export function WhenSeen({
+  children,
+  fallback,
+}: {
+  readonly children: ReactNode;
+  readonly fallback: ReactNode;
+}) {
+  const place = useRef<HTMLDivElement>(null);
+  const [seen, setSeen] = useState(false);
+  useEffect(() => {
+    const element = place.current;
+    if (!element || seen) return;
+    const observer = new IntersectionObserver(
+      ([entry]) => {
+        if (entry.isIntersecting) setSeen(true);
+      },
+      { rootMargin: "400px" },
+    );
+    observer.observe(element);
+    return () => observer.disconnect();
+  }, [seen]);
+  return <div ref={place}>{seen ? children : fallback}</div>;
+}

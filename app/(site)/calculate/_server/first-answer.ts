@@ -1,0 +1,28 @@
+import "server-only";
+import {
+  CheckFailure,
+  computeResistance,
+  InputError,
+  libraryMaterial,
+  type ResistanceResult,
+} from "@/lib/engine";
+import { INCLUDE, type RequestBody } from "../_model/request";
+import type { Complaint } from "../_model/complaints";
+
+/** What the page shows before its script runs: the answer, or the complaints about what the address holds. */
+export type FirstAnswer =
+  { readonly result: ResistanceResult } | { readonly complaints: readonly Complaint[] };
+
+/** Computes with the library's materials; a team's own are the API's, which the page then asks. */
+export function firstAnswer(body: RequestBody): FirstAnswer | null {
+  try {
+    return { result: computeResistance({ ...body, include: INCLUDE }, { material: libraryMaterial }) };
+  } catch (error) {
+    if (error instanceof InputError) {
+      const unknownMaterial = error.errors.some(({ pointer }) => pointer.endsWith("/material"));
+      return unknownMaterial ? null : { complaints: error.errors };
+    }
+    if (error instanceof CheckFailure) return null;
+    throw error;
+  }
+}
