@@ -17,6 +17,7 @@ export type { Drawing } from "./shape/drawing";
 export { catalogue, findShape } from "./shape/catalogue";
 export { nearestNames } from "./shape/nearest-names";
 export { resolveDimensions } from "./shape/resolve-dimensions";
+export { readableDrawing, type ReadableDrawing } from "./shape/readable";
 export {
   dimensionEntrySchema,
   exampleRequest,

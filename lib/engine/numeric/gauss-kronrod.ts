@@ -20,7 +20,10 @@ export interface IntegrateOptions {
   readonly absolute?: number;
   /** Cap on evaluations beyond the first pass over all segments, 20,000 by default. */
   readonly evaluations?: number;
-  /** Places where the integrand has a kink or changes fast. */
+  /**
+   * Places where the integrand jumps, has a kink or changes fast. A jump must be given: one that lies within 0.2 % of a
+   * segment's end is beyond the outermost node and cannot be seen.
+   */
   readonly breaks?: readonly number[];
 }
 

@@ -62,16 +62,32 @@ export class AlongConductor {
 
   /** Resistance of the whole, ohms. @throws UnfitValue where the law leaves what a medium can have. */
   total(options: IntegrateOptions = {}): Integral {
-    return this.integral.total(options);
+    return this.doubted(this.integral.total(options));
   }
 
   /** The same with other nodes. */
   secondTotal(): Integral {
-    return this.integral.secondTotal();
+    return this.doubted(this.integral.secondTotal());
   }
 
   /** Resistance between two places of the range, ohms. */
   between(x0: number, x1: number, options: IntegrateOptions = {}): Integral {
     return this.integral.between(x0, x1, options);
   }
+
+  /**
+   * Adds to the error what the last digit of x does: a place near the far end is known to an ulp of the whole extent,
+   * and where the section narrows to almost nothing there, that is seen.
+   */
+  private doubted(integral: Integral): Integral {
+    const { extent } = this.flow;
+    const steepness = Math.log(this.densityAt(extent) / this.densityAt(extent * (1 - NEAR_END))) / NEAR_END;
+    if (!(steepness > STEEP)) return integral;
+    return { ...integral, error: integral.error + 4 * Number.EPSILON * steepness * integral.value };
+  }
 }
+
+/** Distance from the far end over which the density is compared, as a part of the extent. */
+const NEAR_END = 1e-12;
+/** Below this relative steepness rounding of x is lost in the other roundings. */
+const STEEP = 100;

@@ -12,6 +12,8 @@ import type { AlongView, FactorView, MediaView, Solution } from "./solution";
 const VOLTAGE_TOLERANCE = 1e-12;
 const CONTINUITY_TOLERANCE = 1e-8;
 const ROUTE_TOLERANCE = 1e-9;
+/** Estimated relative error beyond which an integral says nothing about a closed form. */
+const WORST_DOUBT = 1e-6;
 /** The two assumed voltages; any two would do. */
 const VOLTAGES = [1, 1234.5] as const;
 /** Parts of the range at which currents are compared; odd ones, so that they seldom meet a border. */
@@ -127,6 +129,11 @@ function alongRoute(solution: Solution, view: AlongView): Check {
     const tubes = integrate(tube, 0, extent, { relative: 1e-11, evaluations: 5000 });
     deviation = Math.max(deviation, Math.abs((tubes.value / resistivity) * view.integralOhm - 1));
     doubt = Math.max(doubt, tubes.error / tubes.value);
+  }
+  // A section that falls by many decades within the last digit of the coordinate cannot be integrated in doubles.
+  if (!(doubt <= WORST_DOUBT)) {
+    const reason = "These proportions are too extreme for the integral along the flow to be resolved.";
+    return { name: "second-route", applies: false, reason };
   }
   return outcome("second-route", deviation, Math.max(ROUTE_TOLERANCE, 3 * doubt));
 }

@@ -11,9 +11,11 @@ export function nearestNames(name: string, candidates: readonly string[], limit 
     const other = candidate.toLowerCase();
     const contained =
       Math.min(wanted.length, other.length) >= 3 && (other.includes(wanted) || wanted.includes(other));
+    const longest = Math.max(wanted.length, other.length);
+    // So many insertions at least: no need to count the rest.
+    if (!contained && Math.abs(wanted.length - other.length) > longest / 3) continue;
     const distance = contained ? 0.5 : alignmentDistance(wanted, other);
-    if (contained || distance <= Math.max(wanted.length, other.length) / 3)
-      scored.push({ candidate, distance });
+    if (contained || distance <= longest / 3) scored.push({ candidate, distance });
   }
   scored.sort((a, b) => a.distance - b.distance || a.candidate.localeCompare(b.candidate, "en"));
   return scored.slice(0, limit).map(({ candidate }) => candidate);

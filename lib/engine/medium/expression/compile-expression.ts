@@ -21,8 +21,8 @@ export interface CompiledExpression {
   readonly evaluate: Evaluate;
   /** Number of nodes, a measure of the cost of one value. */
   readonly nodes: number;
-  /** Whether it has if, abs, min or max, and so may have kinks or jumps. */
-  readonly kinked: boolean;
+  /** Functions whose zeros are the places where if, abs, min or max switch: there may be kinks and jumps, nowhere else. */
+  readonly switches: readonly Evaluate[];
 }
 
 export type ExpressionReading =
@@ -56,7 +56,7 @@ export function compileExpression(text: string, variables: readonly [string, str
     const tree = parseTree(plain);
     const compiler = new Compiler(plain, variables);
     const evaluate = compiler.compile(tree);
-    return { ok: true, expression: { evaluate, nodes: compiler.nodes, kinked: compiler.kinked } };
+    return { ok: true, expression: { evaluate, nodes: compiler.nodes, switches: compiler.switches } };
   } catch (error) {
     if (error instanceof Refusal) return { ok: false, detail: error.message };
     throw error;
@@ -82,7 +82,7 @@ function parseTree(text: string): AnyNode {
 
 class Compiler {
   nodes = 0;
-  kinked = false;
+  readonly switches: Evaluate[] = [];
 
   constructor(
     private readonly text: string,
@@ -204,16 +204,17 @@ class Compiler {
     if (known.one) {
       const f = known.one;
       const a = inner[0];
-      if (name === "abs") this.kinked = true;
+      if (name === "abs") this.switches.push(a);
       return (x, y) => f(a(x, y));
     }
-    this.kinked = true;
     const f = known.fold ?? Math.min;
-    return inner.reduce((a, b) => (x, y) => f(a(x, y), b(x, y)));
+    return inner.reduce((a, b) => {
+      this.switches.push((x, y) => a(x, y) - b(x, y));
+      return (x, y) => f(a(x, y), b(x, y));
+    });
   }
 
   private condition(args: readonly AnyNode[], depth: number): Evaluate {
-    this.kinked = true;
     const [test, yes, no] = args;
     const holds = this.comparison(test, depth + 1);
     const a = this.compile(yes, depth + 1);
@@ -231,6 +232,7 @@ class Compiler {
     }
     const a = this.compile(node.args[0], depth + 1);
     const b = this.compile(node.args[1], depth + 1);
+    this.switches.push((x, y) => a(x, y) - b(x, y));
     return (x, y) => compare(a(x, y), b(x, y));
   }
 

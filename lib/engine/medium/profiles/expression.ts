@@ -1,6 +1,6 @@
 import { z } from "zod";
 import { pointerTo } from "../../failure";
-import { compileExpression } from "../expression/compile-expression";
+import { compileExpression, type Evaluate } from "../expression/compile-expression";
 import { defineProfile } from "../profile";
 import { complaintAt } from "./smooth-law";
 
@@ -47,7 +47,7 @@ export const expressionProfile = defineProfile({
       site.problems.add(pointer, reading.detail);
       return null;
     }
-    const { evaluate, nodes } = reading.expression;
+    const { evaluate, nodes, switches } = reading.expression;
     const { start, extent } = site;
     const at = (x: number): number => evaluate(start + x, x / extent);
     for (const u of SAMPLES) {
@@ -65,8 +65,42 @@ export const expressionProfile = defineProfile({
       quantity: site.values,
       rough: true,
       cost: Math.max(1, nodes / 4),
-      hints: CUTS.map((u) => u * extent),
+      hints: [...CUTS.map((u) => u * extent), ...switchPlaces(switches, start, extent)],
       tex: "\\text{expression}",
     };
   },
 });
+
+/** Most places where an expression may switch; more are left to the adaptive rule. */
+const MOST_SWITCHES = 400;
+
+/**
+ * Places x where a switch changes sign, to the last digit: a jump must be a border of the integration, since no rule
+ * sees one that lies beyond its outermost node.
+ */
+function switchPlaces(switches: readonly Evaluate[], start: number, extent: number): number[] {
+  const places: number[] = [];
+  for (const evaluate of switches) {
+    const at = (u: number): number => Math.sign(evaluate(start + u * extent, u));
+    let before = at(0);
+    for (let i = 1; i < SAMPLES.length && places.length < MOST_SWITCHES; i++) {
+      const sign = at(SAMPLES[i]);
+      if (sign === 0) places.push(SAMPLES[i] * extent);
+      else if (before !== 0 && sign !== before)
+        places.push(bisect(at, SAMPLES[i - 1], SAMPLES[i], before) * extent);
+      before = sign;
+    }
+  }
+  return places;
+}
+
+/** Where the sign leaves `before` between low and high. */
+function bisect(at: (u: number) => number, low: number, high: number, before: number): number {
+  for (let i = 0; i < 60; i++) {
+    const middle = (low + high) / 2;
+    if (middle <= low || middle >= high) break;
+    if (at(middle) === before) low = middle;
+    else high = middle;
+  }
+  return high;
+}
