@@ -49,8 +49,12 @@ export function checkOutline(request: OutlineRequest): OutlineCheck {
   const box: Box = { minX: Infinity, minY: Infinity, maxX: -Infinity, maxY: -Infinity };
   for (const ring of rings) growBox(box, ring);
   if (axisymmetric) errors.push(...rings.flatMap((ring, r) => checkRadii(ring, pointers[r], box)));
+  if (box.maxX === box.minX && box.maxY === box.minY) {
+    errors.push({ pointer: pointers[0], detail: "The outline is a single point; it must enclose an area." });
+    return { ok: false, errors };
+  }
   const frame = frameFor(box, outline.unit, axisymmetric);
-  errors.push(...checkExtent(frame, box));
+  errors.push(...checkExtent(frame));
   if (errors.some((e) => e.pointer.startsWith("#/outline"))) return { ok: false, errors };
   const repairs: string[] = [];
   const read: Ring[] = [];
@@ -144,12 +148,9 @@ function checkCoordinates(
   return errors.length > 0 ? errors : checkArcs(ring, pointer);
 }
 
-function checkExtent(frame: Frame, box: Box): OutlineError[] {
+function checkExtent(frame: Frame): OutlineError[] {
   const extentM = frame.extent * frame.unitM;
   const pointer = "#/outline/outer";
-  if (box.maxX === box.minX && box.maxY === box.minY) {
-    return [{ pointer, detail: "The outline is a single point; it must enclose an area." }];
-  }
   if (!(extentM >= SMALLEST_EXTENT_M && extentM <= LARGEST_M)) {
     const detail = `The outline's largest extent is ${showNumber(extentM)} m; allowed are 1e-12 m to 1e12 m.`;
     return [{ pointer, detail }];

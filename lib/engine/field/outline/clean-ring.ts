@@ -126,7 +126,13 @@ export function dropCollinear(xy: Float64Array, chain: Chain, frame: Frame): Cha
       k++;
     }
   }
-  return { source: keptSource, arcs: keptArcs };
+  // Back to the submitted order.
+  let turn = 0;
+  for (let i = 1; i < keptSource.length; i++) if (keptSource[i] < keptSource[turn]) turn = i;
+  return {
+    source: [...keptSource.slice(turn), ...keptSource.slice(0, turn)],
+    arcs: [...keptArcs.slice(turn), ...keptArcs.slice(0, turn)],
+  };
 }
 
 /** For each submitted edge the edge of the cleaned ring that covers it, or -1 where it has no length. */

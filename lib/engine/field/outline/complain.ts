@@ -126,7 +126,7 @@ export function describeNesting(
   const errors: OutlineError[] = [];
   for (let r = 1; r < rings.length; r++) {
     const ring = rings[r];
-    const where = showDomainPoint(frame, ring.xy[0], ring.xy[1]);
+    const where = showDomainPoint(frame, ring.submitted[0], ring.submitted[1]);
     if (!around[r].includes(0)) {
       const how = around[0].includes(r) ? "surrounds the outer ring" : "lies outside the outer ring";
       errors.push({

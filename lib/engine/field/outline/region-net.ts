@@ -1,7 +1,7 @@
 import type { EdgeIndex } from "./edge-index";
-import { showPoint, toDomainX, toDomainY, type Frame } from "./frame";
+import { showPoint, toDomainX, toDomainY, type Box, type Frame } from "./frame";
 import type { Run } from "./merge-runs";
-import { edgeCount, edgeLength, ringPoint, type Ring } from "./ring";
+import { edgeBox, edgeCount, edgeLength, ringPoint, type Ring } from "./ring";
 import type { OutlineError, Point } from "./schema";
 
 /** A corner of a region border, or a point of the boundary or of another border that lies on one. */
@@ -54,6 +54,7 @@ class Net {
   private readonly edges: number[][] = [];
   /** Points of the boundary where it is cut anyway: vertices and ends of terminals. */
   private readonly fixed: RegionNode[] = [];
+  private readonly box: Box = { minX: Infinity, minY: Infinity, maxX: -Infinity, maxY: -Infinity };
   private readonly nodeAt = new Map<string, number>();
 
   constructor(
@@ -63,6 +64,13 @@ class Net {
     private readonly frame: Frame,
   ) {
     rings.forEach((ring, r) => {
+      for (let e = 0; e < edgeCount(ring); e++) {
+        const { minX, minY, maxX, maxY } = edgeBox(ring, e);
+        this.box.minX = Math.min(this.box.minX, minX);
+        this.box.minY = Math.min(this.box.minY, minY);
+        this.box.maxX = Math.max(this.box.maxX, maxX);
+        this.box.maxY = Math.max(this.box.maxY, maxY);
+      }
       for (let v = 0; v < edgeCount(ring); v++) this.addFixed(r, v);
       for (const { start, end } of runs[r]) {
         this.addFixed(r, start);
@@ -91,7 +99,15 @@ class Net {
   addRegion(points: readonly Point[], k: number, errors: OutlineError[]): void {
     const border: number[] = [];
     const edges: number[] = [];
+    const far = points.findIndex((point) => !this.isWithinReach(point));
+    if (far >= 0) {
+      const detail =
+        `The point ${showPoint(...points[far])} of region ${k} lies outside the outline. ` +
+        `A region lies inside the conductor; it may touch the border but not stick out.`;
+      errors.push({ pointer: `${regionPointer(k)}/${far}`, detail });
+    }
     points.forEach(([px, py], i) => {
+      if (far >= 0) return;
       const node = this.place(toDomainX(this.frame, px), toDomainY(this.frame, py));
       if (border.at(-1) === node) edges[edges.length - 1] = i;
       else {
@@ -108,6 +124,7 @@ class Net {
     const area = this.area(border);
     const pointer = regionPointer(k);
     const repeated = border.findIndex((node, i) => border.indexOf(node) !== i);
+    if (far >= 0) return;
     if (border.length < 3 || area === 0) {
       errors.push({
         pointer,
@@ -124,6 +141,15 @@ class Net {
       const last = edges.pop() as number;
       edges.reverse().push(last);
     }
+  }
+
+  /** Whether a point lies in the box around the outline, which reaches from -1 to 1 at most. */
+  private isWithinReach([px, py]: Point): boolean {
+    const { box, frame } = this;
+    const x = toDomainX(frame, px);
+    const y = toDomainY(frame, py);
+    const { snap } = frame;
+    return x >= box.minX - snap && x <= box.maxX + snap && y >= box.minY - snap && y <= box.maxY + snap;
   }
 
   /** The node at a point: on the boundary or on an earlier border when it is near enough to be meant to lie on it. */
