@@ -5,7 +5,7 @@
  * The figures for a rod come from a comparison inside the project (kept as a test): a boundary element solution of the
  * whole surface of the cylinder, its end face included, with its image in the ground surface; converged to 1e-6. Between
  * the figures the excess is taken straight over the logarithm of length/radius, and a margin of 3 % of itself plus
- * 0.0005 covers what the chord cuts off. Below L/a = 1.3 the rod is a disc rather than a rod, and the value lies below
+ * 0.0005 covers what the chord cuts off. Below L/a = 1.2 the rod is a disc rather than a rod, and the value lies below
  * the true one.
  */
 
@@ -14,10 +14,16 @@ const ROD: readonly (readonly [number, number])[] = [
   [0.05, -0.3111],
   [0.1, -0.273],
   [0.2, -0.21271],
+  [0.3, -0.16597],
   [0.5, -0.09937],
+  [0.7, -0.05616],
   [1, -0.0163],
+  [1.2, 0.00056],
+  [1.5, 0.01751],
   [2, 0.03344],
+  [2.5, 0.04162],
   [3, 0.04597],
+  [4, 0.04941],
   [5, 0.04984],
   [7, 0.04798],
   [10, 0.04404],

@@ -16,11 +16,11 @@ export function parallelMean(length: number, distance: number): number {
   return (2 * (Math.asinh(x) - x / (1 + Math.hypot(1, x)))) / length;
 }
 
-/** asinh p − asinh q for p ≥ q ≥ 0, to full relative precision. */
-export function asinhDifference(p: number, q: number): number {
+/** asinh(q + step) − asinh q for q, step ≥ 0, to full relative precision however small the step is. */
+export function asinhIncrease(q: number, step: number): number {
+  const p = q + step;
   const rootP = Math.hypot(1, p);
   const rootQ = Math.hypot(1, q);
-  const step = p - q;
   return Math.log1p((step + (step * (p + q)) / (rootP + rootQ)) / (q + rootQ));
 }
 
@@ -29,7 +29,7 @@ function integralOfAsinh(x: number, step: number, distance: number): number {
   const end = x + step;
   return (
     step * Math.asinh(end / distance) +
-    x * asinhDifference(end / distance, x / distance) -
+    x * asinhIncrease(x / distance, step / distance) -
     step * ((x + end) / (Math.hypot(end, distance) + Math.hypot(x, distance)))
   );
 }
@@ -47,7 +47,7 @@ export function inlineMean(gap: number, first: number, second: number, distance:
     let sum = 0;
     for (let i = 0; i < 16; i++) {
       const x = gap + short * OUTER.nodes[i];
-      sum += OUTER.weights[i] * asinhDifference((x + long) / distance, x / distance);
+      sum += OUTER.weights[i] * asinhIncrease(x / distance, long / distance);
     }
     return sum / long;
   }
@@ -77,7 +77,8 @@ export function inclinedMean(length: number, angle: number, distance: number): n
       const start = (-x * cosine) / reach;
       const end = (1 - x * cosine) / reach;
       sum +=
-        FAR.weights[i] * (start >= 0 ? asinhDifference(end, start) : Math.asinh(end) + Math.asinh(-start));
+        FAR.weights[i] *
+        (start >= 0 ? asinhIncrease(start, 1 / reach) : Math.asinh(end) + Math.asinh(-start));
     }
     return sum / length;
   }
