@@ -35,62 +35,75 @@ const COMPANIONS: readonly (readonly [Companion, readonly Member[]])[] = [
 type Member = (typeof MEDIUM_MEMBERS)[number];
 type Companion = "extrapolate" | "thickness" | "temperatureCoefficient" | "referenceTemperature";
 
+/** Exactly one of `members`, and companions only beside those they go with. */
+export function oneMedium<Name extends string>(
+  medium: { readonly [K in Name]?: unknown },
+  members: readonly Name[],
+  companions: readonly (readonly [Name, readonly Name[]])[],
+  context: z.RefinementCtx,
+): void {
+  const given = members.filter((name) => medium[name] !== undefined);
+  if (given.length !== 1) {
+    const found = given.length === 0 ? "none of them is given" : `${given.join(" and ")} are given`;
+    context.addIssue({
+      code: "custom",
+      path: given.length === 0 ? [] : [given[1]],
+      message: `must have exactly one of ${members.join(", ")}; ${found}.`,
+    });
+    return;
+  }
+  for (const [name, hosts] of companions) {
+    if (medium[name] === undefined || hosts.includes(given[0])) continue;
+    context.addIssue({
+      code: "custom",
+      path: [name],
+      message: `goes only with ${hosts.join(", ")}, not with ${given[0]}.`,
+    });
+  }
+}
+
+/** Members of a medium that is the same everywhere. */
+export const uniformMediumFields = {
+  material: z
+    .string()
+    .min(1)
+    .max(64)
+    .optional()
+    .meta({ description: "Id of a material of the library or the team.", example: "copper-annealed" }),
+  extrapolate: z
+    .boolean()
+    .optional()
+    .meta({ description: "Allow a temperature outside the material's range, with a caution." }),
+  resistivity: quantitySchema("resistivity", "Resistivity", "1.72e-8 ohm m").optional(),
+  conductivity: quantitySchema("conductivity", "Conductivity", "58 MS/m").optional(),
+  temperatureCoefficient: quantitySchema(
+    "temperatureCoefficient",
+    "Temperature coefficient of the resistivity at the reference temperature",
+    "0.00393 1/K",
+  ).optional(),
+  referenceTemperature: quantitySchema(
+    "temperature",
+    "Temperature at which the resistivity or conductivity is given, 20 °C by default",
+    20,
+  ).optional(),
+  sheetResistance: quantitySchema(
+    "sheetResistance",
+    "Sheet resistance, for sheet shapes",
+    "50 ohm/sq",
+  ).optional(),
+  thickness: quantitySchema(
+    "length",
+    "Thickness of the sheet, for sheet shapes, beside a material, resistivity or conductivity",
+    "35 um",
+  ).optional(),
+};
+
 export const mediumSchema = z
   .strictObject({
-    material: z
-      .string()
-      .min(1)
-      .max(64)
-      .optional()
-      .meta({ description: "Id of a material of the library or the team.", example: "copper-annealed" }),
-    extrapolate: z
-      .boolean()
-      .optional()
-      .meta({ description: "Allow a temperature outside the material's range, with a caution." }),
-    resistivity: quantitySchema("resistivity", "Resistivity", "1.72e-8 ohm m").optional(),
-    conductivity: quantitySchema("conductivity", "Conductivity", "58 MS/m").optional(),
-    temperatureCoefficient: quantitySchema(
-      "temperatureCoefficient",
-      "Temperature coefficient of the resistivity at the reference temperature",
-      "0.00393 1/K",
-    ).optional(),
-    referenceTemperature: quantitySchema(
-      "temperature",
-      "Temperature at which the resistivity or conductivity is given, 20 °C by default",
-      20,
-    ).optional(),
-    sheetResistance: quantitySchema(
-      "sheetResistance",
-      "Sheet resistance, for sheet shapes",
-      "50 ohm/sq",
-    ).optional(),
-    thickness: quantitySchema(
-      "length",
-      "Thickness of the sheet, for sheet shapes, beside a material, resistivity or conductivity",
-      "35 um",
-    ).optional(),
+    ...uniformMediumFields,
     graded: gradedSchema.optional(),
   })
-  .superRefine((medium, context) => {
-    const given = MEDIUM_MEMBERS.filter((name) => medium[name] !== undefined);
-    if (given.length !== 1) {
-      const found = given.length === 0 ? "none of them is given" : `${given.join(" and ")} are given`;
-      context.addIssue({
-        code: "custom",
-        path: given.length === 0 ? [] : [given[1]],
-        message: `must have exactly one of ${MEDIUM_MEMBERS.join(", ")}; ${found}.`,
-      });
-      return;
-    }
-    for (const [name, hosts] of COMPANIONS) {
-      if (medium[name] === undefined || hosts.includes(given[0])) continue;
-      context.addIssue({
-        code: "custom",
-        path: [name],
-        message: `goes only with ${hosts.join(", ")}, not with ${given[0]}.`,
-      });
-    }
-  })
+  .superRefine((medium, context) => oneMedium(medium, MEDIUM_MEMBERS, COMPANIONS, context))
   .meta({
     description:
       "What fills the shape: exactly one of `material`, `resistivity`, `conductivity`, `sheetResistance` (sheet shapes) and `graded`.",
@@ -100,3 +113,6 @@ export const mediumSchema = z
 
 export type MediumInput = z.infer<typeof mediumSchema>;
 export type GradedInput = z.infer<typeof gradedSchema>;
+
+/** A medium without grading. */
+export type UniformMediumInput = Omit<MediumInput, "graded">;

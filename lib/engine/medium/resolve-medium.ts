@@ -6,7 +6,7 @@ import type { QuantityKindName } from "../quantity/quantity-kind";
 import type { Coordinate, Shape } from "../shape/define-shape";
 import { suggestion } from "../shape/nearest-names";
 import { resistivityAt } from "./material";
-import type { GradedInput, MediumInput } from "./medium-schema";
+import type { GradedInput, MediumInput, UniformMediumInput } from "./medium-schema";
 import type { ProfileLaw } from "./profile";
 import { buildProfile, profileKinds, SELF_DESCRIBING } from "./profiles/profile-kinds";
 import { checkTemperature, findMaterial, type MaterialUse } from "./use-material";
@@ -39,12 +39,18 @@ export interface GradedMedium {
 
 export type ResolvedMedium = UniformMedium | GradedMedium;
 
-export interface MediumSite extends MaterialUse {
-  readonly shape: Shape;
+/** Where a uniform medium is asked for. */
+export interface UniformSite extends MaterialUse {
+  /** What it fills, for complaints: a shape's id, "a plan outline". */
+  readonly subject: string;
   readonly pointer: string;
   readonly temperatureC: number;
   /** Whether a sheet resistance is wanted. */
   readonly sheet: boolean;
+}
+
+export interface MediumSite extends UniformSite {
+  readonly shape: Shape;
   /** Coordinates in which the medium may vary. */
   readonly gradable: readonly string[];
   /** The range of a coordinate; null while the dimensions have complaints of their own. */
@@ -65,6 +71,11 @@ export function resolveMedium(medium: MediumInput, site: MediumSite): ResolvedMe
     );
     return null;
   }
+  return resolveUniform(medium, site);
+}
+
+/** A medium without grading: ohm metres, or ohms a square where a sheet is wanted; null after complaints. */
+export function resolveUniform(medium: UniformMediumInput, site: UniformSite): UniformMedium | null {
   if (medium.sheetResistance !== undefined) {
     if (site.sheet) {
       const value = read(medium.sheetResistance, "sheetResistance", "sheetResistance", site);
@@ -72,7 +83,7 @@ export function resolveMedium(medium: MediumInput, site: MediumSite): ResolvedMe
     }
     site.problems.add(
       pointerTo(site.pointer, "sheetResistance"),
-      `is for sheet shapes; ${site.shape.id} needs a material, a resistivity, a conductivity or a grading.`,
+      `is for sheets; ${site.subject} needs a material, a resistivity or a conductivity.`,
     );
     return null;
   }
@@ -91,15 +102,15 @@ function uniform(value: number, tex: () => string): UniformMedium {
   return { kind: "uniform", value, relativeError: ROUNDING, tex };
 }
 
-function resolveThickness(medium: MediumInput, site: MediumSite): number | null {
+function resolveThickness(medium: UniformMediumInput, site: UniformSite): number | null {
   const pointer = pointerTo(site.pointer, "thickness");
   if (!site.sheet) {
     if (medium.thickness === undefined) return 1;
-    site.problems.add(pointer, `goes with sheet shapes only; ${site.shape.id} has its own dimensions.`);
+    site.problems.add(pointer, `goes with sheets only; ${site.subject} has its own dimensions.`);
     return null;
   }
   if (medium.thickness === undefined) {
-    site.problems.add(pointer, "is required for a sheet shape, unless a sheetResistance is given instead.");
+    site.problems.add(pointer, "is required for a sheet, unless a sheetResistance is given instead.");
     return null;
   }
   return read(medium.thickness, "length", "thickness", site, { gauge: "foil" });
@@ -109,7 +120,7 @@ function read(
   input: unknown,
   kind: QuantityKindName,
   name: string,
-  site: MediumSite,
+  site: UniformSite,
   options: { readonly gauge?: "foil"; readonly any?: boolean } = {},
 ): number | null {
   const reading = readQuantity(input, kind, { gauge: options.gauge });
@@ -130,7 +141,7 @@ function read(
   return value;
 }
 
-function resolveBulk(medium: MediumInput, site: MediumSite): UniformMedium | null {
+function resolveBulk(medium: UniformMediumInput, site: UniformSite): UniformMedium | null {
   if (medium.material !== undefined) {
     const material = findMaterial(medium.material, pointerTo(site.pointer, "material"), site);
     if (!material) return null;

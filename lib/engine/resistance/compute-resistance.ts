@@ -178,6 +178,7 @@ function readMedia(
   const takes = shapeMedia(shape);
   const site: Omit<MediumSite, "pointer"> = {
     shape,
+    subject: shape.id,
     temperatureC,
     sheet: takes.kind === "sheet",
     gradable: takes.gradable,
