@@ -26,7 +26,7 @@ export const MEDIUM_MEMBERS = [
 ] as const;
 
 /** Members that go only with some of these. */
-const COMPANIONS: readonly (readonly [Companion, readonly Member[]])[] = [
+export const MEDIUM_COMPANIONS: readonly (readonly [Companion, readonly Member[]])[] = [
   ["extrapolate", ["material"]],
   ["thickness", ["material", "resistivity", "conductivity"]],
   ["temperatureCoefficient", ["resistivity", "conductivity"]],
@@ -36,10 +36,10 @@ type Member = (typeof MEDIUM_MEMBERS)[number];
 type Companion = "extrapolate" | "thickness" | "temperatureCoefficient" | "referenceTemperature";
 
 /** Exactly one of `members`, and companions only beside those they go with. */
-export function oneMedium<Name extends string>(
-  medium: { readonly [K in Name]?: unknown },
-  members: readonly Name[],
-  companions: readonly (readonly [Name, readonly Name[]])[],
+export function oneMedium(
+  medium: Readonly<Record<string, unknown>>,
+  members: readonly string[],
+  companions: readonly (readonly [string, readonly string[]])[],
   context: z.RefinementCtx,
 ): void {
   const given = members.filter((name) => medium[name] !== undefined);
@@ -103,7 +103,7 @@ export const mediumSchema = z
     ...uniformMediumFields,
     graded: gradedSchema.optional(),
   })
-  .superRefine((medium, context) => oneMedium(medium, MEDIUM_MEMBERS, COMPANIONS, context))
+  .superRefine((medium, context) => oneMedium(medium, MEDIUM_MEMBERS, MEDIUM_COMPANIONS, context))
   .meta({
     description:
       "What fills the shape: exactly one of `material`, `resistivity`, `conductivity`, `sheetResistance` (sheet shapes) and `graded`.",

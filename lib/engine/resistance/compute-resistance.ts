@@ -1,7 +1,7 @@
 /** A request to a resistance with its bounds: reads everything, refuses with every complaint, then evaluates. */
 import { InputError, pointerTo, Problems } from "../failure";
 import type { Material } from "../medium/material";
-import { materialStatements } from "../medium/material-statements";
+import { Collected } from "../medium/collected";
 import {
   resolveMedium,
   type CoordinateRange,
@@ -26,7 +26,7 @@ import {
   type ResistanceRequest,
 } from "./request-schema";
 import { readRequirement, verdictOf } from "./requirement";
-import type { ResistanceResult, UsedMaterial } from "./result-schema";
+import type { ResistanceResult } from "./result-schema";
 import type { Solution } from "./solution";
 import { solveFactor } from "./solve-factor";
 import { solveFlow } from "./solve-flow";
@@ -142,25 +142,6 @@ function parseRequest(request: unknown, problems: Problems): ResistanceRequest {
     }
   }
   throw new InputError(problems.list);
-}
-
-/** Materials, cautions and assumptions met on the way, each once. */
-class Collected {
-  readonly used: UsedMaterial[] = [];
-  readonly cautions: string[] = [];
-  readonly assumptions: string[] = [];
-
-  use(material: Material): void {
-    if (this.used.some(({ id }) => id === material.id)) return;
-    this.used.push({ id: material.id, version: material.version, name: material.name });
-    const statements = materialStatements(material);
-    this.assumptions.push(...statements.assumptions);
-    this.cautions.push(...statements.cautions);
-  }
-
-  caution(sentence: string): void {
-    if (!this.cautions.includes(sentence)) this.cautions.push(sentence);
-  }
 }
 
 type Media =
