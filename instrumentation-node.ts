@@ -1,10 +1,10 @@
 import type { Instrumentation } from "next";
-import { stampPeerAddresses } from "@/lib/http/peer-stamp";
+import { prepareIncomingRequests } from "@/lib/http/incoming-requests";
 import { closeSharedService, sharedService } from "@/lib/service/service";
 
 /** Opens and migrates the database, and sees to it that it is closed at the end. */
 export function openForRequests(): void {
-  stampPeerAddresses();
+  prepareIncomingRequests();
   sharedService();
   process.once("exit", closeSharedService);
 }

@@ -4,6 +4,8 @@ import { assetHeaders } from "./lib/http/security-headers";
 const config: NextConfig = {
   poweredByHeader: false,
   reactStrictMode: true,
+  // The API answers every address itself, also one with a slash too many; a page answers with or without it.
+  skipTrailingSlashRedirect: true,
   // `npm run typecheck` checks the whole tree, tests included; a start need not wait for it.
   typescript: { ignoreBuildErrors: true },
   // Workers start files of their own and native modules load binaries: neither survives bundling.

@@ -41,14 +41,10 @@ export async function receiveBody(request: Request, readers: BodyReaders): Promi
   const limit = readers.maxBytes ?? DEFAULT_MAX_BYTES;
   const mediaType = checkMediaType(request.headers, readers);
   const declared = Number(request.headers.get("content-length") ?? "0");
-  const tooLarge = new Refusal(
-    "body-too-large",
-    `The body may have at most ${limit.toLocaleString("en")} bytes.`,
-  );
   if (!request.body) return missing(readers);
   if (declared > limit) {
     await drain(request.body.getReader(), 0);
-    throw tooLarge;
+    throw tooLarge(limit);
   }
   const reader = request.body.getReader();
   const chunks: Uint8Array[] = [];
@@ -59,13 +55,17 @@ export async function receiveBody(request: Request, readers: BodyReaders): Promi
     size += value.byteLength;
     if (size > limit) {
       await drain(reader, size);
-      throw tooLarge;
+      throw tooLarge(limit);
     }
     chunks.push(value);
   }
   if (size === 0) return missing(readers);
   if (mediaType === undefined) throw unsupported(readers);
   return { mediaType, bytes: chunks.length === 1 ? chunks[0] : Buffer.concat(chunks, size) };
+}
+
+function tooLarge(limit: number): Refusal {
+  return new Refusal("body-too-large", `The body may have at most ${limit.toLocaleString("en")} bytes.`);
 }
 
 function missing(readers: BodyReaders): undefined {

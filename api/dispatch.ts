@@ -1,4 +1,3 @@
-import { transact } from "@/db/client";
 import { insertUsage } from "@/db/queries/usage";
 import { requireAccess } from "@/lib/auth/access";
 import { SIGNED_OUT_ID } from "@/lib/auth/principal";
@@ -51,7 +50,7 @@ export async function dispatch(request: Request, service: Service, registry: Rou
   }
   try {
     await call.settle(report.computations);
-    if (!report.counted) transact(service.db, () => count(call, report, answer.status));
+    await countOnce(call, report, answer.status);
     log(call, report, answer.status);
     return await finished(call, notModified(call, answer), request.method === "HEAD");
   } catch (error) {
@@ -102,15 +101,14 @@ async function work(
   const fingerprint = fingerprintOf(request.method, url.pathname + url.search, body?.bytes);
   const repeated = startOrRepeat(service.db, key, fingerprint, call.now);
   if (repeated) return repeated;
-  let kept = false;
   try {
     return await perform(call, registry, prepared, report, (answer, outcome) => {
       const body = outcome.repeat === undefined ? String(answer.body ?? "") : JSON.stringify(outcome.repeat);
       finish(service.db, key, { status: answer.status, headers: answer.headers, body }, call.now);
-      kept = true;
     });
-  } finally {
-    if (!kept) abandon(service.db, key);
+  } catch (error) {
+    abandon(service.db, key);
+    throw error;
   }
 }
 
@@ -135,17 +133,17 @@ async function perform(
     accepts: report.accepts,
     registry,
   });
-  return transact(service.db, () => {
+  const done = await service.commits.run(() => {
     const outcome = "commit" in handled ? handled.commit() : handled;
     const answer = answerOf(outcome.status, outcome.content, outcome.headers);
     keep?.(answer, outcome);
-    const shape = outcome.shape ?? null;
-    const computations = outcome.computations ?? 0;
-    count(call, { ...report, shape, computations }, answer.status);
-    // Only what cannot fail any more may follow: the report must stay untouched by a rollback.
-    Object.assign(report, { shape, computations, counted: true });
-    return answer;
+    const facts = { shape: outcome.shape ?? null, computations: outcome.computations ?? 0 };
+    count(call, { ...report, ...facts }, answer.status);
+    return { answer, facts };
   });
+  // Only now, when nothing can be rolled back any more.
+  Object.assign(report, done.facts, { counted: true });
+  return done.answer;
 }
 
 /** Agreed before the caller is known, so that a refusal to a spreadsheet is text as well; told after. */
@@ -156,6 +154,13 @@ function negotiation(operation: Operation, call: Call): string | Refusal {
     if (error instanceof Refusal) return error;
     throw error;
   }
+}
+
+/** Counts a call that ended without a change of its own. */
+async function countOnce(call: Call, report: Report, status: number): Promise<void> {
+  const { principal, service } = call;
+  if (report.counted || !principal || principal.kind === "anonymous") return;
+  await service.commits.run(() => count(call, report, status));
 }
 
 function count(call: Call, report: Report, status: number): void {

@@ -5,12 +5,12 @@ import type { Content } from "./operation";
 import { PROBLEMS } from "./problem";
 
 /** Headers of every answer: an answer is data, never a document to render or to frame. */
-const SECURITY_HEADERS: readonly (readonly [string, string])[] = [
-  ["X-Content-Type-Options", "nosniff"],
-  ["Content-Security-Policy", "default-src 'none'; frame-ancestors 'none'"],
-  ["Referrer-Policy", "no-referrer"],
-  ["Permissions-Policy", "camera=(), microphone=(), geolocation=()"],
-];
+const SECURITY_HEADERS = {
+  "X-Content-Type-Options": "nosniff",
+  "Content-Security-Policy": "default-src 'none'; frame-ancestors 'none'",
+  "Referrer-Policy": "no-referrer",
+  "Permissions-Policy": "camera=(), microphone=(), geolocation=()",
+};
 
 export interface Answer {
   readonly status: number;
@@ -84,14 +84,17 @@ export interface Envelope {
 
 /** The response with everything that every answer carries. */
 export function respond(answer: Answer, envelope: Envelope): Response {
-  const headers = new Headers(answer.headers);
-  for (const [name, value] of SECURITY_HEADERS) headers.set(name, value);
-  if (envelope.secure) headers.set("Strict-Transport-Security", "max-age=31536000; includeSubDomains");
-  headers.set("Request-Id", envelope.requestId);
-  if (!headers.has("Cache-Control")) headers.set("Cache-Control", "no-store");
-  headers.set("Vary", "Accept, Authorization, Origin");
-  for (const [name, value] of rateLimitHeaders(envelope.limits)) headers.set(name, value);
-  for (const [name, value] of envelope.cors) headers.set(name, value);
-  if (typeof answer.body === "string") headers.set("Content-Length", String(Buffer.byteLength(answer.body)));
-  return new Response(envelope.bodyless ? null : answer.body, { status: answer.status, headers });
+  const { body, status } = answer;
+  const headers: Record<string, string> = {
+    ...SECURITY_HEADERS,
+    "Cache-Control": "no-store",
+    Vary: "Accept, Authorization, Origin",
+    ...answer.headers,
+    "Request-Id": envelope.requestId,
+    ...Object.fromEntries(rateLimitHeaders(envelope.limits)),
+    ...Object.fromEntries(envelope.cors),
+  };
+  if (envelope.secure) headers["Strict-Transport-Security"] = "max-age=31536000; includeSubDomains";
+  if (typeof body === "string") headers["Content-Length"] = String(Buffer.byteLength(body));
+  return new Response(envelope.bodyless ? null : body, { status, headers });
 }

@@ -18,6 +18,9 @@ export function openDatabase(path: string): Database {
   client.pragma("busy_timeout = 5000");
   client.pragma("foreign_keys = ON");
   client.pragma("synchronous = NORMAL");
+  client.pragma("cache_size = -32000");
+  // A checkpoint waits for the disk: every 40 MB of log instead of every 4.
+  client.pragma("wal_autocheckpoint = 10000");
   return drizzle({ client });
 }
 

@@ -166,7 +166,7 @@ CREATE TABLE `usage_days` (
 CREATE INDEX `usage_days_team` ON `usage_days` (`team_id`,`day`);--> statement-breakpoint
 CREATE INDEX `usage_days_day` ON `usage_days` (`day`);--> statement-breakpoint
 CREATE TABLE `usage_events` (
-	`id` integer PRIMARY KEY AUTOINCREMENT NOT NULL,
+	`id` integer PRIMARY KEY NOT NULL,
 	`at` integer NOT NULL,
 	`request_id` text NOT NULL,
 	`key_id` text NOT NULL,
@@ -181,7 +181,6 @@ CREATE TABLE `usage_events` (
 --> statement-breakpoint
 CREATE INDEX `usage_events_key` ON `usage_events` (`key_id`,`at`);--> statement-breakpoint
 CREATE INDEX `usage_events_team` ON `usage_events` (`team_id`,`at`);--> statement-breakpoint
-CREATE INDEX `usage_events_at` ON `usage_events` (`at`);--> statement-breakpoint
 CREATE TABLE `usage_hour_latencies` (
 	`hour` integer NOT NULL,
 	`team_id` text NOT NULL,

@@ -4,7 +4,8 @@ import { index, integer, primaryKey, sqliteTable, text } from "drizzle-orm/sqlit
 export const usageEvents = sqliteTable(
   "usage_events",
   {
-    id: integer().primaryKey({ autoIncrement: true }),
+    /** In the order of time. */
+    id: integer().primaryKey(),
     at: integer().notNull(),
     requestId: text("request_id").notNull(),
     /** A key's id, or `signed-out` for the pages' own calls. */
@@ -22,7 +23,6 @@ export const usageEvents = sqliteTable(
   (table) => [
     index("usage_events_key").on(table.keyId, table.at),
     index("usage_events_team").on(table.teamId, table.at),
-    index("usage_events_at").on(table.at),
   ],
 );
 

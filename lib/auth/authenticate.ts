@@ -50,17 +50,16 @@ async function signedOut(service: Service, token: string, address: string): Prom
 }
 
 function keyPrincipal(service: Service, text: string, inUrl: boolean, address: string): Principal {
-  const unknown = new Refusal("invalid-key", "The key is not known here.");
   const given = parseKey(text);
-  if (!given) throw unknown;
+  if (!given) throw unknownKey();
   const found = keyWithSecrets(service.db, given.id);
   if (!found) {
     secretMatches(given.secret, NO_HASH);
-    throw unknown;
+    throw unknownKey();
   }
   const now = service.now();
   const secret = found.secrets.find(({ hash }) => secretMatches(given.secret, hash));
-  if (!secret) throw unknown;
+  if (!secret) throw unknownKey();
   const { key } = found;
   refuseEnded(key, secret.validUntil, now);
   if (inUrl && !key.allowedInUrl) {
@@ -81,6 +80,10 @@ function keyPrincipal(service: Service, text: string, inUrl: boolean, address: s
     monthQuota: key.monthQuota,
     address,
   };
+}
+
+function unknownKey(): Refusal {
+  return new Refusal("invalid-key", "The key is not known here.");
 }
 
 /** Told only to a caller that has the secret. */

@@ -35,7 +35,11 @@ export class Limiter {
   private readonly limiters = new Map<string, RateLimiterSQLite>();
   private spendings = 0;
 
-  constructor(private readonly db: Database) {}
+  private readonly store: object;
+
+  constructor(private readonly db: Database) {
+    this.store = storeOf(db);
+  }
 
   /** One limiter a policy and quota; rate-limiter-flexible fixes the quota at construction. */
   private limiterOf(bucket: Bucket): RateLimiterSQLite {
@@ -43,7 +47,7 @@ export class Limiter {
     let limiter = this.limiters.get(name);
     if (!limiter) {
       limiter = new RateLimiterSQLite({
-        storeClient: this.db.$client,
+        storeClient: this.store,
         storeType: "better-sqlite3",
         tableName: "rate_limits",
         tableCreated: true,
@@ -88,6 +92,22 @@ export class Limiter {
     if (!result) return stateOf(bucket, bucket.quota, bucket.windowSeconds * 1000);
     return stateOf(bucket, bucket.quota - result.consumedPoints, result.msBeforeNext);
   }
+}
+
+/**
+ * The database as the limiter uses it, with what costs most left out: every statement is prepared once, and a single
+ * statement, which is atomic by itself, gets no transaction around it.
+ */
+function storeOf({ $client }: Database): object {
+  const statements = new Map<string, ReturnType<typeof $client.prepare>>();
+  return {
+    prepare: (text: string) => {
+      let statement = statements.get(text);
+      if (!statement) statements.set(text, (statement = $client.prepare(text)));
+      return statement;
+    },
+    transaction: <Work>(work: Work): Work => work,
+  };
 }
 
 function stateOf(bucket: Bucket, remaining: number, msBeforeNext: number): BucketState {

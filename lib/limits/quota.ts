@@ -14,13 +14,35 @@ export function minuteBucket(subject: string, quota: number): Bucket {
   return { policy: "minute", subject, quota, windowSeconds: 60 };
 }
 
+interface Month {
+  /** `2025-03` */
+  readonly name: string;
+  /** Unix ms. */
+  readonly startsAt: number;
+  readonly endsAt: number;
+}
+
+let latest: Month | undefined;
+
+/** The calendar month (UTC) of a moment; the one asked for last is remembered. */
+function monthOf(now: number): Month {
+  if (latest && latest.startsAt <= now && now < latest.endsAt) return latest;
+  const date = new Date(now);
+  const [year, month] = [date.getUTCFullYear(), date.getUTCMonth()];
+  latest = {
+    name: date.toISOString().slice(0, 7),
+    startsAt: Date.UTC(year, month, 1),
+    endsAt: Date.UTC(year, month + 1, 1),
+  };
+  return latest;
+}
+
 /** Computations in the calendar month (UTC) of that moment (Unix ms): its counter carries the month's name. */
 export function monthBucket(subject: string, quota: number, now: number): Bucket {
-  const date = new Date(now);
-  const endsAt = Date.UTC(date.getUTCFullYear(), date.getUTCMonth() + 1, 1);
+  const { name, endsAt } = monthOf(now);
   return {
     policy: "month",
-    subject: `${subject}:${date.toISOString().slice(0, 7)}`,
+    subject: `${subject}:${name}`,
     quota,
     // A day longer, so that a clock that is set back at the turn of the month finds the count still there.
     windowSeconds: Math.ceil((endsAt - now) / 1000) + 86_400,

@@ -2,14 +2,25 @@ import { randomBytes } from "node:crypto";
 
 const ALPHABET = "0123456789ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz";
 
+/** Random bytes are drawn many at a time: a draw costs more than what is drawn. */
+let pool = Buffer.alloc(0);
+let drawn = 0;
+
+function randomByte(): number {
+  if (drawn === pool.length) {
+    pool = randomBytes(4096);
+    drawn = 0;
+  }
+  return pool[drawn++];
+}
+
 /** Random letters and digits, without bias. */
 export function randomText(length: number): string {
   let text = "";
   while (text.length < length) {
-    for (const byte of randomBytes(length - text.length + 8)) {
-      // 248 = 4·62: bytes above it would favour the first letters.
-      if (byte < 248 && text.length < length) text += ALPHABET[byte % 62];
-    }
+    const byte = randomByte();
+    // 248 = 4·62: bytes above it would favour the first letters.
+    if (byte < 248) text += ALPHABET[byte % 62];
   }
   return text;
 }

@@ -1,4 +1,5 @@
 import { type Database, migrateDatabase, sharedDatabase } from "@/db/client";
+import { GroupCommit } from "@/db/group-commit";
 import { type Config, readConfig } from "../config/environment";
 import { AddressBook } from "../http/client-address";
 import { Limiter } from "../limits/limiter";
@@ -8,6 +9,8 @@ import { type Log, openLog } from "./log";
 export interface Service {
   readonly config: Config;
   readonly db: Database;
+  /** Where calls write what they change and what they cost. */
+  readonly commits: GroupCommit;
   readonly log: Log;
   readonly limiter: Limiter;
   readonly addresses: AddressBook;
@@ -27,6 +30,7 @@ export function assembleService(config: Config, db: Database, log: Log, now: () 
   return {
     config,
     db,
+    commits: new GroupCommit(db),
     log,
     limiter: new Limiter(db),
     addresses: new AddressBook(config.trustedProxies),
@@ -34,9 +38,8 @@ export function assembleService(config: Config, db: Database, log: Log, now: () 
   };
 }
 
-/** Ends a service: logs written, the write-ahead log folded into the database file. */
+/** Ends a service: the write-ahead log is folded into the database file. */
 export function closeService(service: Service): void {
-  service.log.flush();
   if (service.db.$client.open) service.db.$client.close();
 }
 

@@ -44,14 +44,20 @@ describe("400", () => {
 });
 
 describe("404", () => {
-  test.each(["/nothing", "/shapes/bar/more", "/", "/resistance/", "/%zz", "/records//replay", "/Shapes"])(
-    "the unknown path %s",
-    async (path) => {
-      const response = await call(server, "get", path, { key });
-      expect(response.status).toBe(404);
-      expect(response.headers["content-type"]).toMatch(/^application\/problem\+json/);
-    },
-  );
+  test.each([
+    "/nothing",
+    "/shapes/bar/more",
+    "/",
+    "/resistance/",
+    "/%zz",
+    "/%ff%fe",
+    "/records/rec_1/nothing",
+    "/Shapes",
+  ])("the unknown path %s", async (path) => {
+    const response = await call(server, "get", path, { key });
+    expect(response.status).toBe(404);
+    expect(response.headers["content-type"]).toMatch(/^application\/problem\+json/);
+  });
 
   test("without a key as well", async () => {
     expectProblem(await call(server, "get", "/nothing"), 404, "unknown-path");
