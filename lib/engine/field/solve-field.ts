@@ -140,7 +140,7 @@ function scaleMedium({ outline, conductance }: FieldProblem): ScaledMedium {
   const length = axisymmetric ? frame.unitM : 1;
   const [first] = conductance;
   if (conductance.length === 1 && typeof first === "number") {
-    return { list: [1], unit: first * length, uniform: true };
+    return { list: revolved([1], axisymmetric), unit: first * length, uniform: true };
   }
   const sizes = conductance.map((c) => {
     if (typeof c === "number") return c;
@@ -149,11 +149,21 @@ function scaleMedium({ outline, conductance }: FieldProblem): ScaledMedium {
   });
   const logarithms = sizes.filter((size) => size > 0 && size < Infinity).map(Math.log2);
   const unit = 2 ** Math.round(logarithms.reduce((a, b) => a + b, 0) / Math.max(1, logarithms.length));
-  const list = conductance.map((c) => {
+  const list: MediumList = conductance.map((c) => {
     if (typeof c === "number") return c / unit;
     return (x: number, y: number) => c(...toMetres(frame, x, y)) / unit;
   });
-  return { list, unit: unit * length, uniform: false };
+  return { list: revolved(list, axisymmetric), unit: unit * length, uniform: false };
+}
+
+/** The half section of a body of revolution is a sheet of conductance 2πr·σ. */
+function revolved(list: MediumList, axisymmetric: boolean): MediumList {
+  if (!axisymmetric) return list;
+  return list.map((m) =>
+    typeof m === "number"
+      ? (x: number) => 2 * Math.PI * x * m
+      : (x: number, y: number) => 2 * Math.PI * x * m(x, y),
+  );
 }
 
 function toMetres(frame: Frame, x: number, y: number): [number, number] {
@@ -181,7 +191,7 @@ function presentSolution(
   const { bounds, pair, energies } = result;
   const { frame, axisymmetric } = outline;
   const { unit } = medium;
-  const proved = conductance.every((c) => typeof c === "number");
+  const proved = !axisymmetric && conductance.every((c) => typeof c === "number");
   const { terminals } = bounds;
   const count = outline.terminalNames.length;
   const frameOfMap = {
@@ -191,6 +201,7 @@ function presentSolution(
     axisymmetric,
     between: [0, 1] as const,
   };
+  const drive = pictureDrive(result);
   return {
     status: result.status,
     limit: result.limit,
@@ -214,15 +225,21 @@ function presentSolution(
     triangles: result.triangles,
     refinements: result.refinements,
     checks: fieldChecks(pair, energies, bounds),
-    map: makeFieldMap(pair, pictureCombination(result), unit, result.singular, frameOfMap),
+    map: makeFieldMap(pair, drive.combination, drive.shift, unit, result.singular, frameOfMap),
   };
 }
 
-/** Fields of the picture: one volt between the first two terminals, all others without current. */
-function pictureCombination({ pair, energies }: AdaptiveResult): number[] {
-  if (pair.potentials.length === 1) return [1];
+interface PictureDrive {
+  readonly combination: readonly number[];
+  readonly shift: number;
+}
+
+/** Fields of the picture: the first terminal at one volt, the second at zero, all others without current. */
+function pictureDrive({ pair, energies }: AdaptiveResult): PictureDrive {
   const phi = new PowerBounds(pair, energies).floatingPotentials(0, 1);
-  if (!phi) return pair.potentials.map((_, a) => (a === 0 ? 1 : 0));
-  const drop = phi[0] - phi[1];
-  return phi.map((value) => value / drop);
+  if (!phi) return { combination: pair.potentials.map((_, a) => (a === 0 ? 1 : 0)), shift: 0 };
+  // The last terminal is at zero here; it is the second one if there are only two.
+  const low = phi.length > 1 ? phi[1] : 0;
+  const drop = phi[0] - low;
+  return { combination: phi.map((value) => value / drop), shift: -low / drop };
 }

@@ -2,8 +2,10 @@
  * Conductivity on a mesh: one number a triangle where it is constant, samples at quadrature points where it varies.
  */
 
+import { condenseAtAxis } from "../element/axis-interior";
 import { condense, LARGEST_ELEMENT } from "../element/condense";
 import { fillSampledStiffness, interiorFromOuter, sampleTable } from "../element/sampled";
+import { axisEdgeOf, axisVertexOf, type AxisEdges } from "./axis";
 import { allocateCondensed, turnEdges, type CondensedMatrices, type ElementSet } from "./elements";
 
 /** Conductivity as a function of the domain's coordinates. */
@@ -31,6 +33,9 @@ export interface SampledElements {
   /** Start of the matrix that gives the interior values from the outer ones. */
   readonly recoveryStart: Int32Array;
   readonly recovery: Float64Array;
+  /** The body is one of revolution: the conductivity contains the factor 2πx. */
+  readonly revolution: boolean;
+  readonly axis: AxisEdges | null;
 }
 
 export interface SampledMatrices {
@@ -38,9 +43,36 @@ export interface SampledMatrices {
   readonly sampled: SampledElements;
 }
 
-/** Degree of the rule by which matrices of elements of order p are integrated. */
-export function assemblyDegree(p: number): number {
-  return 2 * p + 4;
+/** Degree of the rule above that of the squared gradient, for a smooth conductivity. */
+const EXTRA_DEGREE = 6;
+/** The same for 1/x, at most; near the axis. */
+const MOST_EXTRA_DEGREE = 24;
+
+export interface ElementRule {
+  readonly degree: number;
+  readonly crowdedVertex: number;
+}
+
+/** The quadrature by which the matrices of triangle t are integrated. */
+export function elementRule(
+  set: ElementSet,
+  t: number,
+  revolution: boolean,
+  axis: AxisEdges | null,
+): ElementRule {
+  const gradients = 2 * set.layouts[t].order - 2;
+  if (!revolution) return { degree: gradients + EXTRA_DEGREE, crowdedVertex: 2 };
+  const { xy, triangles } = set.mesh;
+  const [a, b, c] = [0, 1, 2].map((i) => xy[2 * triangles[3 * t + i]]);
+  const near = Math.min(a, b, c);
+  const far = Math.max(a, b, c);
+  const touches = axis ? axisVertexOf(set, axis, t) : -1;
+  if (near === 0) return { degree: gradients + MOST_EXTRA_DEGREE / 2, crowdedVertex: Math.max(0, touches) };
+  // Polynomials approach 1/x on [near, far] like rho^-n; 27.6 is the logarithm of 1e12.
+  const kappa = (far + near) / (far - near);
+  const rho = kappa + Math.sqrt(kappa * kappa - 1);
+  const extra = Math.min(MOST_EXTRA_DEGREE, Math.max(EXTRA_DEGREE, Math.ceil(27.6 / Math.log(rho))));
+  return { degree: gradients + extra, crowdedVertex: 2 };
 }
 
 /** Conductivity at the points of a rule in a triangle; throws if one is not positive. */
@@ -79,6 +111,8 @@ export function sampleElements(
   set: ElementSet,
   shared: CondensedMatrices,
   functionOf: ReadonlyArray<ConductivityFunction | null>,
+  revolution: boolean,
+  axis: AxisEdges | null,
 ): { potential: SampledMatrices; stream: SampledMatrices } {
   const recoveryStart = new Int32Array(set.triangleCount + 1);
   for (let t = 0; t < set.triangleCount; t++) {
@@ -89,7 +123,7 @@ export function sampleElements(
     const matrices = allocateCondensed(set);
     matrices.values.set(shared.values);
     const recovery = new Float64Array(recoveryStart[set.triangleCount]);
-    return { matrices, sampled: { functionOf, recoveryStart, recovery } };
+    return { matrices, sampled: { functionOf, recoveryStart, recovery, revolution, axis } };
   };
   const result = { potential: make(), stream: make() };
   const work = new Float64Array(LARGEST_ELEMENT * LARGEST_ELEMENT);
@@ -98,7 +132,8 @@ export function sampleElements(
     const sigma = functionOf[t];
     if (!sigma) continue;
     const layout = set.layouts[t];
-    const table = sampleTable(assemblyDegree(layout.order));
+    const rule = elementRule(set, t, revolution, axis);
+    const table = sampleTable(rule.degree, rule.crowdedVertex);
     const { count, xi, eta } = table.rule;
     const samples = new Float64Array(count);
     const corner = cornerAndEdges(set, t);
@@ -107,8 +142,14 @@ export function sampleElements(
     for (const target of [result.potential, result.stream]) {
       fillSampledStiffness(layout, table, samples, corner[2], corner[3], corner[4], corner[5], rows, work);
       const { values, start } = target.matrices;
-      condense(layout.size, layout.interior, work, values, start[t]);
-      interiorFromOuter(layout.size, layout.interior, work, target.sampled.recovery, recoveryStart[t]);
+      const { recovery } = target.sampled;
+      const edge = axis && target === result.stream ? axisEdgeOf(set, axis, t) : -1;
+      if (edge >= 0) {
+        condenseAtAxis(layout, edge, work, recovery, recoveryStart[t], values, start[t]);
+      } else {
+        condense(layout.size, layout.interior, work, values, start[t]);
+        interiorFromOuter(layout.size, layout.interior, work, recovery, recoveryStart[t]);
+      }
       turnEdges(layout, set.reversed[t], values, start[t]);
       for (let q = 0; q < count; q++) samples[q] = 1 / samples[q];
     }

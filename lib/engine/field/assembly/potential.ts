@@ -28,7 +28,14 @@ export function potentialUnknowns(
   }
   for (let e = 0; e < edges.count; e++) entitySize[vertexCount + e] = set.edgeOrder[e] - 1;
   clearBoundaryEdges(set, runs, (terminal) => terminal >= 0, entitySize);
-  return { entityCount: entitySize.length, entitySize, vertexEntity, firstEdge: vertexCount, jumps: null };
+  return {
+    entityCount: entitySize.length,
+    entitySize,
+    vertexEntity,
+    firstEdge: vertexCount,
+    jumps: null,
+    axis: null,
+  };
 }
 
 /** Takes away the unknowns of boundary edges whose run is selected: there the function is constant. */

@@ -9,6 +9,7 @@
  * ½∫ρ|rot ψ|² - Σ φ_t I_t(ψ), a symmetric positive definite system for any number of terminals, pieces and rings.
  */
 
+import type { AxisEdges } from "./axis";
 import type { BoundaryRuns } from "./boundary-runs";
 import { cutOffsets, cutPaths, vertexFans, type CutOffsets } from "./cuts";
 import type { ElementSet } from "./elements";
@@ -27,7 +28,13 @@ export interface StreamUnknowns {
   readonly currents: readonly CurrentForm[];
 }
 
-export function streamUnknowns(set: ElementSet, runs: BoundaryRuns, terminalCount: number): StreamUnknowns {
+/** `axis` is given for a body of revolution that reaches its axis. */
+export function streamUnknowns(
+  set: ElementSet,
+  runs: BoundaryRuns,
+  terminalCount: number,
+  axis: AxisEdges | null = null,
+): StreamUnknowns {
   const { vertexCount, edges } = set;
   const firstShared = vertexCount + edges.count;
   // Shared entities: one a run (used by the insulated ones), then one a ring (used by rings with a cut).
@@ -41,6 +48,9 @@ export function streamUnknowns(set: ElementSet, runs: BoundaryRuns, terminalCoun
   }
   for (let e = 0; e < edges.count; e++) entitySize[vertexCount + e] = set.edgeOrder[e] - 1;
   clearBoundaryEdges(set, runs, (terminal) => terminal < 0, entitySize);
+  for (let e = 0; axis && e < edges.count; e++) {
+    if (axis.end[e] > 0 && entitySize[vertexCount + e] > 0) entitySize[vertexCount + e]--;
+  }
 
   const active = activeRings(runs);
   const root = chooseRoot(runs, active);
@@ -74,6 +84,7 @@ export function streamUnknowns(set: ElementSet, runs: BoundaryRuns, terminalCoun
     vertexEntity,
     firstEdge: vertexCount,
     jumps: cutRings.length > 0 ? collectJumps(set.triangleCount, offsets) : null,
+    axis,
   };
   return { map, currents: currentForms(set, runs, map, offsets, terminalCount) };
 }

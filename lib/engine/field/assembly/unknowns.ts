@@ -6,6 +6,8 @@
  * vertices, then edges, then shared values.
  */
 
+import type { AxisEdges } from "./axis";
+
 export interface UnknownMap {
   readonly entityCount: number;
   /** Unknowns of each entity; 0 where it is prescribed or absent. */
@@ -18,6 +20,8 @@ export interface UnknownMap {
   readonly firstEdge: number;
   /** Values added to a vertex within single triangles (jumps across cuts), or null where there are none. */
   readonly jumps: VertexJumps | null;
+  /** Edges whose function of order 2 depends on the others (stream function of a body of revolution), or null. */
+  readonly axis: AxisEdges | null;
 }
 
 /**

@@ -34,6 +34,8 @@ export interface AdaptiveInput {
   readonly mesh: FieldMesh;
   readonly medium: MediumList;
   readonly terminalCount: number;
+  /** A body of revolution about x = 0; the medium then contains the factor 2πx. */
+  readonly revolution?: boolean;
   /** Relative width of the bracket that is wanted. */
   readonly accuracy: number;
   readonly limits: AdaptiveLimits;
@@ -79,7 +81,8 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
   for (let refinements = 0; ; refinements++) {
     let pair: SolvedPair;
     try {
-      pair = solvePair({ ...current, medium, terminalCount, shouldStop: limits.shouldStop });
+      const { revolution = false } = input;
+      pair = solvePair({ ...current, medium, terminalCount, revolution, shouldStop: limits.shouldStop });
     } catch (error) {
       if (!(error instanceof InterruptedError) || !last) throw error;
       return { ...last, status: "limited", limit: "stopped" };
@@ -124,8 +127,11 @@ function representativeSigma(mesh: FieldMesh, medium: MediumList): Float64Array 
     if (typeof m === "number") return m;
     let value = known.get(k);
     if (value === undefined) {
-      const v = mesh.triangles[3 * t];
-      value = m(mesh.xy[2 * v], mesh.xy[2 * v + 1]);
+      const [a, b, c] = [0, 1, 2].map((i) => 2 * mesh.triangles[3 * t + i]);
+      value = m(
+        (mesh.xy[a] + mesh.xy[b] + mesh.xy[c]) / 3,
+        (mesh.xy[a + 1] + mesh.xy[b + 1] + mesh.xy[c + 1]) / 3,
+      );
       known.set(k, value);
     }
     return value;

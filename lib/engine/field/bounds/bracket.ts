@@ -7,7 +7,7 @@
  */
 
 import type { CurrentForm } from "../assembly/stream";
-import type { LinearSystem } from "../solve/assemble";
+import type { LinearSystem } from "../solve/system";
 import type { DiscreteField } from "../solve/pair";
 import { ROUNDING, down, up, type Approximate } from "./interval";
 

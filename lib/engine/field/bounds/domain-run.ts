@@ -18,5 +18,6 @@ export interface DomainRun {
 export function solveDomain(run: DomainRun): AdaptiveResult {
   const { domain, ...rest } = run;
   const { mesh } = meshDomain(domain);
-  return solveAdaptively({ ...rest, mesh, reference: new BoundaryReference(domain, mesh) });
+  const revolution = domain.axisymmetric;
+  return solveAdaptively({ ...rest, mesh, revolution, reference: new BoundaryReference(domain, mesh) });
 }

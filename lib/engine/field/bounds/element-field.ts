@@ -9,7 +9,9 @@
 
 import { fillStiffness, LARGEST_ELEMENT, recoverInterior } from "../element/condense";
 import { ALL_MODES } from "../element/modes";
-import { localUnknowns, MOST_OUTER, type LinearSystem } from "../solve/assemble";
+import { localUnknowns, MOST_OUTER } from "../solve/assemble";
+import type { LinearSystem } from "../solve/system";
+import { dependentEdges, hasTerms } from "../solve/terms";
 import type { DiscreteField } from "../solve/pair";
 import { ROUNDING } from "./interval";
 
@@ -48,6 +50,13 @@ export class ElementField {
           this.values[interior + i] = before + jump;
           this.vertexError += 2 * ROUNDING * (Math.abs(before) + 2 * Math.abs(jump));
         }
+      }
+    }
+    if (map.axis && hasTerms(system, t)) {
+      for (const { place, low, high, weights } of dependentEdges(system, t)) {
+        let sum = weights.low * this.values[interior + low] + weights.high * this.values[interior + high];
+        weights.modes.forEach((w, m) => (sum += w * this.values[interior + place + 1 + m]));
+        this.values[interior + place] = sum;
       }
     }
     const reversed = set.reversed[t];

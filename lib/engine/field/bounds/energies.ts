@@ -44,7 +44,7 @@ export function fieldEnergies(
   const decay = new Float64Array(set.triangleCount);
   const byDegree = new Float64Array(32);
   const sampled = makeSampledEnergies(count);
-  const functionOf = potentialSystem.sampled?.functionOf;
+  const elements = potentialSystem.sampled;
   for (let t = 0; t < set.triangleCount; t++) {
     const { modes, order } = set.layouts[t];
     byDegree.fill(0);
@@ -57,9 +57,8 @@ export function fieldEnergies(
       s[f].gradient(streamSystem, t);
     }
     const moved = displacement ? displacement[t] : 0;
-    const sigma = functionOf?.[t];
-    if (sigma) {
-      sampleEnergies(set, t, sigma, v, s, sampled);
+    if (elements?.functionOf[t]) {
+      sampleEnergies(set, elements, t, v, s, sampled);
       for (let f = 0; f < count; f++) {
         work[f] += compareFields(v[f], s[f], modes, Math.sqrt(sampled.sigma), fieldWeight[f], byDegree).work;
         gap[t] += fieldWeight[f] * sampled.gap[f];

@@ -5,14 +5,9 @@
  * error of the integrals. It is an estimate, not a bound: brackets that rest on it are not proved.
  */
 
-import {
-  assemblyDegree,
-  cornerAndEdges,
-  sampleConductivity,
-  type ConductivityFunction,
-} from "../assembly/medium";
+import { cornerAndEdges, elementRule, sampleConductivity, type SampledElements } from "../assembly/medium";
 import type { ElementSet } from "../assembly/elements";
-import { sampleTable } from "../element/sampled";
+import { sampleTable, type SampleTable } from "../element/sampled";
 import type { ElementField } from "./element-field";
 
 /** How much higher the degree of the second rule is. */
@@ -42,36 +37,48 @@ export function makeSampledEnergies(fields: number): SampledEnergies {
   };
 }
 
-/** Evaluates triangle t from the gradients in v and s; fills `out`. */
+/** Evaluates triangle t, whose conductivity varies, from the gradients in v and s; fills `out`. */
 export function sampleEnergies(
   set: ElementSet,
+  sampled: SampledElements,
   t: number,
-  sigma: ConductivityFunction,
   v: readonly ElementField[],
   s: readonly ElementField[],
   out: SampledEnergies,
 ): void {
-  const { order, modes } = set.layouts[t];
-  const low = assemblyDegree(order);
-  integrate(set, t, sigma, v, s, modes, low, out.potentialLow, out.streamLow, null, out);
+  const { degree, crowdedVertex } = elementRule(set, t, sampled.revolution, sampled.axis);
+  integrate(
+    set,
+    sampled,
+    t,
+    sampleTable(degree, crowdedVertex),
+    v,
+    s,
+    out.potentialLow,
+    out.streamLow,
+    null,
+    out,
+  );
   out.gap.fill(0);
-  integrate(set, t, sigma, v, s, modes, low + EXTRA_DEGREE, out.potential, out.stream, out.gap, out);
+  const higher = sampleTable(degree + EXTRA_DEGREE, crowdedVertex);
+  integrate(set, sampled, t, higher, v, s, out.potential, out.stream, out.gap, out);
 }
 
 function integrate(
   set: ElementSet,
+  sampled: SampledElements,
   t: number,
-  sigma: ConductivityFunction,
+  table: SampleTable,
   v: readonly ElementField[],
   s: readonly ElementField[],
-  modes: number,
-  degree: number,
   potential: Float64Array,
   stream: Float64Array,
   gap: Float64Array | null,
   out: SampledEnergies,
 ): void {
-  const table = sampleTable(degree);
+  const sigma = sampled.functionOf[t];
+  if (!sigma) throw new Error(`triangle ${t} has a constant conductivity`);
+  const { modes } = set.layouts[t];
   const { count, weights, xi, eta } = table.rule;
   const samples = new Float64Array(count);
   sampleConductivity(sigma, xi, eta, count, cornerAndEdges(set, t), samples);

@@ -19,11 +19,16 @@ export interface SampleTable {
 
 const tables = new Map<number, SampleTable>();
 
-/** Table for a rule of at least this degree. */
-export function sampleTable(degree: number): SampleTable {
-  const rule = triangleRule(degree);
-  const known = tables.get(rule.count);
+/**
+ * Table for a rule of at least this degree. The rule's points crowd at one vertex, 2 unless another is asked for: an
+ * integrand that is homogeneous around that vertex is then integrated well, whether smooth there or not.
+ */
+export function sampleTable(degree: number, crowdedVertex = 2): SampleTable {
+  const base = triangleRule(degree);
+  const key = 3 * base.count + crowdedVertex;
+  const known = tables.get(key);
   if (known) return known;
+  const rule = turned(base, crowdedVertex);
   const { count } = rule;
   const table = {
     rule,
@@ -42,8 +47,15 @@ export function sampleTable(degree: number): SampleTable {
     }
     for (let k = 0; k < ALL_MODES; k++) table.modes[k * count + q] = modes[k];
   }
-  tables.set(count, table);
+  tables.set(key, table);
   return table;
+}
+
+/** The rule with its vertices renamed such that vertex 2 becomes `vertex`. */
+function turned(rule: TriangleRule, vertex: number): TriangleRule {
+  if (vertex === 2) return rule;
+  const bary = [rule.xi.map((x, q) => 1 - x - rule.eta[q]), rule.xi, rule.eta];
+  return { ...rule, xi: bary[(1 + 2 - vertex) % 3], eta: bary[(2 + 2 - vertex) % 3] };
 }
 
 /**

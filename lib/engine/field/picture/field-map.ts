@@ -51,12 +51,13 @@ export interface MapFrame {
 }
 
 /**
- * The map of one combination of a solution's fields: potential Σ c_a V_a, stream function conductance·Σ c_a ψ_a. The
- * stream function is turned so that its rotation is the current density -σ∇V.
+ * The map of one combination of a solution's fields: potential shift + Σ c_a V_a, stream function
+ * conductance·Σ c_a ψ_a. The stream function is turned so that its rotation is the current density -σ∇V.
  */
 export function makeFieldMap(
   pair: SolvedPair,
   combination: readonly number[],
+  shift: number,
   conductance: number,
   singular: readonly SingularVertex[],
   frame: MapFrame,
@@ -79,6 +80,8 @@ export function makeFieldMap(
     element.load(pair.potentialSystem, v, t);
     element.recover(pair.potentialSystem, t);
     potential.set(element.values.subarray(0, size), start[t]);
+    const vertices = start[t] + set.layouts[t].interior;
+    for (let i = 0; i < 3; i++) potential[vertices + i] += shift;
     element.load(pair.streamSystem, s, t);
     element.recover(pair.streamSystem, t);
     stream.set(element.values.subarray(0, size), start[t]);

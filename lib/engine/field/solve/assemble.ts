@@ -2,29 +2,16 @@
  * From elements to fronts: which unknown each local function is, and the addition of element matrices.
  */
 
-import type { CondensedMatrices, ElementSet } from "../assembly/elements";
-import type { SampledElements } from "../assembly/medium";
-import type { UnknownMap } from "../assembly/unknowns";
 import { EDGE_MODES } from "../element/basis";
-import type { FrontStructure } from "./symbolic";
-
-/** One linear system on a mesh: structure, matrices and their weights (conductivity or resistivity of a triangle). */
-export interface LinearSystem {
-  readonly set: ElementSet;
-  readonly map: UnknownMap;
-  readonly structure: FrontStructure;
-  readonly matrices: CondensedMatrices;
-  readonly weight: Float64Array;
-  /** Triangles whose weight varies and is part of their matrix (their entry of `weight` is one); null for none. */
-  readonly sampled: SampledElements | null;
-}
+import type { LinearSystem } from "./system";
+import { addTerms, hasTerms } from "./terms";
 
 /** Most functions on the border of an element. */
 export const MOST_OUTER = 3 + 3 * EDGE_MODES;
 
 /**
  * Unknown of each outer local function of triangle t: its number, -1 for a zero, or -2-k for prescribed value k.
- * Jumps are not part of it.
+ * Jumps and functions that depend on others are not part of it (see `terms`).
  */
 export function localUnknowns(system: LinearSystem, t: number, out: Int32Array): number {
   const { set, map, structure } = system;
@@ -42,7 +29,9 @@ export function localUnknowns(system: LinearSystem, t: number, out: Int32Array):
     const size = map.entitySize[e];
     const first = entityFirst[e];
     const functions = edgeOrder[i] - 1;
-    for (let m = 0; m < functions; m++) out[n++] = size === 0 ? -1 : first + m;
+    // On an edge that leaves the axis the first function depends on the others.
+    const skipped = map.axis && map.axis.end[edgeOf[3 * t + i]] > 0 ? 1 : 0;
+    for (let m = 0; m < functions; m++) out[n++] = size === 0 || m < skipped ? -1 : first + m - skipped;
   }
   return n;
 }
@@ -60,10 +49,10 @@ export function addElement(
   borderAt: number,
   m: number,
 ): void {
-  const { map, matrices, weight } = system;
+  const { matrices, weight } = system;
   const n = localUnknowns(system, t, local);
-  if (map.jumps && map.jumps.start[3 * t + 3] > map.jumps.start[3 * t]) {
-    addWithJumps(system, t, n, frontPlace, local, panel, panelAt, k, border, borderAt, m);
+  if (hasTerms(system, t)) {
+    addTerms(system, t, n, frontPlace, local, panel, panelAt, k, border, borderAt, m);
     return;
   }
   for (let i = 0; i < n; i++) local[i] = local[i] < 0 ? -1 : frontPlace[local[i]];
@@ -83,68 +72,6 @@ export function addElement(
       const value = c === r && i !== j ? 2 * w * values[at] : w * values[at];
       const row = r > c ? r : c;
       const column = r > c ? c : r;
-      if (column < k) panel[panelAt + row * k + column] += value;
-      else border[borderAt + (row - k) * m + (column - k)] += value;
-    }
-  }
-}
-
-/** The terms of a triangle's outer values: local function, unknown and sign, jumps included. */
-export interface LocalTerms {
-  readonly count: number;
-  readonly local: number[];
-  readonly unknown: number[];
-  readonly sign: number[];
-}
-
-export function localTerms(system: LinearSystem, t: number, n: number, unknowns: Int32Array): LocalTerms {
-  const local: number[] = [];
-  const unknown: number[] = [];
-  const sign: number[] = [];
-  for (let i = 0; i < n; i++) {
-    if (unknowns[i] < 0) continue;
-    local.push(i);
-    unknown.push(unknowns[i]);
-    sign.push(1);
-  }
-  const { jumps } = system.map;
-  if (jumps) {
-    for (let i = 0; i < 3; i++) {
-      for (let p = jumps.start[3 * t + i]; p < jumps.start[3 * t + i + 1]; p++) {
-        local.push(i);
-        unknown.push(system.structure.entityFirst[jumps.entity[p]]);
-        sign.push(jumps.sign[p]);
-      }
-    }
-  }
-  return { count: local.length, local, unknown, sign };
-}
-
-function addWithJumps(
-  system: LinearSystem,
-  t: number,
-  n: number,
-  frontPlace: Int32Array,
-  unknowns: Int32Array,
-  panel: Float64Array,
-  panelAt: number,
-  k: number,
-  border: Float64Array,
-  borderAt: number,
-  m: number,
-): void {
-  const { matrices, weight } = system;
-  const terms = localTerms(system, t, n, unknowns);
-  const start = matrices.start[t];
-  for (let p = 0; p < terms.count; p++) {
-    const row = frontPlace[terms.unknown[p]];
-    for (let q = 0; q < terms.count; q++) {
-      const column = frontPlace[terms.unknown[q]];
-      if (column > row) continue;
-      const i = Math.max(terms.local[p], terms.local[q]);
-      const j = Math.min(terms.local[p], terms.local[q]);
-      const value =
-        weight[t] * terms.sign[p] * terms.sign[q] * matrices.values[start + (i * (i + 1)) / 2 + j];
       if (column < k) panel[panelAt + row * k + column] += value;
       else border[borderAt + (row - k) * m + (column - k)] += value;
     }

@@ -5,7 +5,8 @@
  * its own unknowns are eliminated, and the remaining border matrix waits on a stack for the parent.
  */
 
-import { MOST_OUTER, addElement, type LinearSystem } from "./assemble";
+import { MOST_OUTER, addElement } from "./assemble";
+import type { LinearSystem } from "./system";
 import { factorPanel, subtractBorder } from "./dense";
 import type { FrontStructure } from "./symbolic";
 

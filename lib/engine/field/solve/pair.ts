@@ -2,6 +2,7 @@
  * Both problems on one mesh: the potential and its conjugate, solved over one dissection.
  */
 
+import { findAxisEdges } from "../assembly/axis";
 import { findBoundaryRuns, type BoundaryRuns } from "../assembly/boundary-runs";
 import {
   condenseElements,
@@ -14,7 +15,8 @@ import { potentialUnknowns } from "../assembly/potential";
 import { streamUnknowns, type CurrentForm } from "../assembly/stream";
 import { listTriangleEntities, type UnknownMap } from "../assembly/unknowns";
 import type { FieldMesh } from "../mesh/mesh";
-import { loadPrescribed, type LinearSystem } from "./assemble";
+import { loadPrescribed } from "./assemble";
+import type { LinearSystem } from "./system";
 import { dissect, type DissectionTree } from "./dissection";
 import { factorise, substitute } from "./factor";
 import { analyse } from "./symbolic";
@@ -46,13 +48,15 @@ export interface PairInput {
   readonly order: Uint8Array;
   readonly medium: MediumList;
   readonly terminalCount: number;
+  /** A body of revolution about x = 0: the conductivity contains the factor 2πx. */
+  readonly revolution: boolean;
   /** Asked now and then during the factorisations; true raises `InterruptedError`. */
   readonly shouldStop: () => boolean;
 }
 
 /** Solves for all terminals but the last, whose fields follow from the sum. */
 export function solvePair(input: PairInput): SolvedPair {
-  const { mesh, medium, terminalCount, shouldStop } = input;
+  const { mesh, medium, terminalCount, revolution, shouldStop } = input;
   const set = makeElements(mesh, input.order);
   const runs = findBoundaryRuns(mesh);
   const shared = condenseElements(set);
@@ -60,11 +64,14 @@ export function solvePair(input: PairInput): SolvedPair {
   const fields = terminalCount - 1;
   const sigma = Float64Array.from(mesh.region, (k) => constantOf(medium[k]) ?? 1);
   const rho = sigma.map((value) => 1 / value);
+  const axis = revolution ? findAxisEdges(set) : null;
   const sampled = medium.some((m) => typeof m === "function")
     ? sampleElements(
         set,
         shared,
         Array.from(mesh.region, (k) => functionOf(medium[k])),
+        revolution,
+        axis,
       )
     : null;
 
@@ -79,7 +86,7 @@ export function solvePair(input: PairInput): SolvedPair {
   );
   const potentials = solvePotentials(potentialSystem, fields, shouldStop);
 
-  const { map, currents } = streamUnknowns(set, runs, terminalCount);
+  const { map, currents } = streamUnknowns(set, runs, terminalCount, axis);
   const streamSystem = makeSystem(
     set,
     map,
