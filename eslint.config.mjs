@@ -82,6 +82,8 @@ const config = [
       ".data/**",
       "coverage/**",
       "next-env.d.ts",
+      // Wrong on purpose, for the test of these rules.
+      "tests/fixtures/cycle/**",
       "db/migrations/**",
       "sdk/typescript/src/generated/**",
     ],
@@ -91,6 +93,9 @@ const config = [
   {
     plugins: { "import-x": importX },
     settings: {
+      // Without these two the cycle rule would not look into our files.
+      "import-x/extensions": [".ts", ".tsx", ".mjs"],
+      "import-x/parsers": { "@typescript-eslint/parser": [".ts", ".tsx"] },
       "import-x/resolver-next": [createTypeScriptImportResolver({ project: "./tsconfig.json" })],
     },
     rules: {

@@ -47,3 +47,13 @@ describe("import directions", () => {
     expect(await complaints(file, statement)).toEqual([]);
   });
 });
+
+describe("cycles", () => {
+  it("are errors", async () => {
+    const results = await new ESLint({ ignore: false }).lintFiles("tests/fixtures/cycle/*.ts");
+    expect(results.map(({ messages }) => messages.map(({ ruleId }) => ruleId))).toEqual([
+      ["import-x/no-cycle"],
+      ["import-x/no-cycle"],
+    ]);
+  });
+});
