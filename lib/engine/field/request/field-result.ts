@@ -1,0 +1,172 @@
+/** A finished field solution as it is answered. */
+import { CheckFailure, Problems } from "../../failure";
+import { formatQuantity } from "../../quantity/format-quantity";
+import { operatingPoint } from "../../resistance/operating-point";
+import { verdictOf } from "../../resistance/requirement";
+import { ENGINE_VERSION } from "../../version";
+import { down, up } from "../bounds/interval";
+import { densityPeak } from "../picture/peak";
+import type { BoundedValue, FieldSolution } from "../solve-field";
+import type { FieldResult } from "./field-result-schema";
+import type { PreparedField } from "./prepare-field";
+
+const ASSUMPTIONS = [
+  "Direct current, steady, in a medium at rest; the terminals are equipotentials and no current leaves anywhere else.",
+];
+const PLAN = "The conductor is a sheet: the current density does not vary across its thickness.";
+const AXISYMMETRIC = "The conductor is the body swept by the outline around the axis x = 0.";
+const ESTIMATED =
+  "The conductivity varies inside the elements, so the integrals behind the bounds are estimated and the bracket is not proved.";
+const CAUTION =
+  "The result is a DC resistance under the stated assumptions and no proof of compliance: ampacity, temperature rise, insulation and protection are for the local code and a licensed or otherwise competent engineer.";
+
+/** Names of what may end the work early, for people. */
+const LIMITS: Readonly<Record<string, string>> = {
+  unknowns: "the cap on unknowns",
+  refinements: "the cap on refinements",
+  stopped: "the time it may take",
+  rounding: "the rounding of the arithmetic",
+};
+
+/**
+ * Makes the answer.
+ * @param seconds how long the solution took.
+ * @throws CheckFailure where one of the engine's checks failed, InputError where the operating point leaves a double.
+ */
+export function presentField(prepared: PreparedField, solution: FieldSolution, seconds: number): FieldResult {
+  for (const { name, passed, deviation, tolerance } of solution.checks) {
+    if (!passed) throw new CheckFailure(name, deviation, tolerance);
+  }
+  const { problem, mediumError, collected, requirement } = prepared;
+  const { outline } = problem;
+  const resistance = solution.resistance && widened(solution.resistance, mediumError);
+  const problems = new Problems();
+  const operating = resistance
+    ? operatingPoint(prepared.operating, resistance.value, problems)
+    : { temperature: prepared.operating.temperatureC };
+  problems.throwIfAny();
+  const result: FieldResult = {
+    method: "field",
+    operating,
+    mesh: {
+      triangles: solution.triangles,
+      unknowns: solution.unknowns,
+      refinements: solution.refinements,
+    },
+    seconds,
+    checks: solution.checks.map((check) => ({ ...check, applies: true })),
+    repairs: [...outline.repairs],
+    cautions: [CAUTION, ...(solution.proved ? [] : [ESTIMATED]), ...collected.cautions],
+    assumptions: [...ASSUMPTIONS, outline.axisymmetric ? AXISYMMETRIC : PLAN, ...collected.assumptions],
+    materials: collected.used,
+    engine: ENGINE_VERSION,
+  };
+  if (solution.status === "limited") result.limit = LIMITS[solution.limit ?? ""] ?? "a cap on the work";
+  if (resistance) {
+    const { value, lower, upper } = resistance;
+    result.resistance = {
+      value,
+      unit: "ohm",
+      text: formatQuantity(value, "ohm", { lower, upper }),
+      lower,
+      upper,
+      boundsBasis: solution.boundsBasis,
+      proved: solution.proved,
+    };
+    if (requirement) result.verdict = verdictOf(requirement, resistance);
+    const voltage = operating.voltage ?? 1;
+    result.peak = peakOf(
+      prepared,
+      solution,
+      voltage,
+      operating.voltage === undefined ? "volt" : "operating-point",
+    );
+  }
+  if (solution.squares) {
+    const { value, lower, upper } = widened(solution.squares, 0);
+    const text = `${formatQuantity(value, "1", { lower, upper }).trim()} squares`;
+    result.squares = { value, unit: "square", text, lower, upper };
+  }
+  if (solution.conductance && solution.pairs) addMatrix(result, prepared, solution);
+  return result;
+}
+
+function addMatrix(result: FieldResult, prepared: PreparedField, solution: FieldSolution): void {
+  const { problem, mediumError } = prepared;
+  const names = problem.outline.terminalNames;
+  const matrix = (solution.conductance ?? []).map((row) =>
+    row.map((entry) => widenedSigned(entry, mediumError)),
+  );
+  result.conductance = matrix.map((row) => row.map(({ value }) => value));
+  result.conductanceBounds = {
+    lower: matrix.map((row) => row.map(({ lower }) => lower)),
+    upper: matrix.map((row) => row.map(({ upper }) => upper)),
+  };
+  result.pairs = (solution.pairs ?? []).map(({ between, floating, grounded }) => ({
+    between: [names[between[0]], names[between[1]]],
+    floating: pairResistance(widened(floating, mediumError)),
+    grounded: pairResistance(widened(grounded, mediumError)),
+  }));
+}
+
+function pairResistance({
+  value,
+  lower,
+  upper,
+}: BoundedValue): NonNullable<FieldResult["pairs"]>[number]["floating"] {
+  if (Number.isFinite(upper)) {
+    return { value, unit: "ohm", text: formatQuantity(value, "ohm", { lower, upper }), lower, upper };
+  }
+  return { value: null, unit: "ohm", text: `above ${formatQuantity(lower, "ohm")}`, lower, upper: null };
+}
+
+/** Bounds of a positive value, widened by a relative error and never of zero width. */
+function widened({ value, lower, upper }: BoundedValue, error: number): BoundedValue {
+  return { value, lower: down(down(lower * (1 - error))), upper: up(up(upper * (1 + error))) };
+}
+
+/** The same for a value of any sign. */
+function widenedSigned({ value, lower, upper }: BoundedValue, error: number): BoundedValue {
+  return {
+    value,
+    lower: down(down(lower - Math.abs(lower) * error)),
+    upper: up(up(upper + Math.abs(upper) * error)),
+  };
+}
+
+function peakOf(
+  { problem, request }: PreparedField,
+  { map }: FieldSolution,
+  voltage: number,
+  per: "operating-point" | "volt",
+): FieldResult["peak"] {
+  const { unbounded, position, density, fieldVperM, distanceM } = densityPeak(map);
+  const { axisymmetric, frame } = problem.outline;
+  const unit = axisymmetric ? "A/m^2" : "A/m";
+  const [x, y] = position.map((coordinate) => Number(coordinate.toPrecision(9)));
+  const place = `(${x}, ${y}) ${request.outline?.unit ?? frame.unit}`;
+  const currentDensity = {
+    value: density * voltage,
+    unit,
+    text: formatQuantity(density * voltage, unit),
+  } as const;
+  const field = {
+    value: fieldVperM * voltage,
+    unit: "V/m",
+    text: formatQuantity(fieldVperM * voltage, "V/m"),
+  } as const;
+  const distance = unbounded
+    ? ({ value: distanceM, unit: "m", text: formatQuantity(distanceM, "metre") } as const)
+    : null;
+  return {
+    unbounded,
+    position: { x, y, unit: frame.unit, text: place },
+    distance,
+    field,
+    currentDensity,
+    per,
+    text: distance
+      ? `Unbounded at ${place}; ${currentDensity.text} at ${distance.text} from it.`
+      : `Largest at ${place}: ${currentDensity.text}.`,
+  };
+}
