@@ -5,8 +5,8 @@ import { bodyComplaints } from "./issues";
 /** Largest body where an operation names no other limit, bytes. */
 export const DEFAULT_MAX_BYTES = 1_000_000;
 
-/** How much of an oversized body is read and thrown away before the answer, bytes; beyond it the stream is cut. */
-const LARGEST_DRAIN = 256_000_000;
+/** How much of an unwanted body is read and thrown away before the answer, bytes; beyond it the connection is cut. */
+const LARGEST_DRAIN = 64_000_000;
 
 /** How the body of an operation is read. */
 export interface BodyReaders<Schema extends z.ZodType = z.ZodType> {
@@ -36,16 +36,13 @@ export interface ReceivedBody {
   readonly bytes: Uint8Array;
 }
 
-/** Reads the body of a call up to its limit. Throws a Refusal of 413 once the rest has been drained, 415 before reading. */
+/** Reads the body of a call up to its limit. Throws a Refusal of 413, 415 or 400. */
 export async function receiveBody(request: Request, readers: BodyReaders): Promise<ReceivedBody | undefined> {
   const limit = readers.maxBytes ?? DEFAULT_MAX_BYTES;
   const mediaType = checkMediaType(request.headers, readers);
   const declared = Number(request.headers.get("content-length") ?? "0");
   if (!request.body) return missing(readers);
-  if (declared > limit) {
-    await drain(request.body.getReader(), 0);
-    throw tooLarge(limit);
-  }
+  if (declared > limit) throw tooLarge(limit);
   const reader = request.body.getReader();
   const chunks: Uint8Array[] = [];
   let size = 0;
@@ -71,6 +68,14 @@ function tooLarge(limit: number): Refusal {
 function missing(readers: BodyReaders): undefined {
   if (readers.optional) return undefined;
   throw new Refusal("malformed-json", "The body is empty.");
+}
+
+/**
+ * Throws away a body that nobody has read, because the call was refused before: the client gets to see the answer, and
+ * the connection can be used again.
+ */
+export async function discardBody(request: Request): Promise<void> {
+  if (request.body && !request.bodyUsed && !request.body.locked) await drain(request.body.getReader(), 0);
 }
 
 /** Reads on without keeping anything, so that the client gets to see the answer instead of a broken connection. */

@@ -6,7 +6,7 @@ import { abandon, finish, fingerprintOf, readIdempotencyKey, startOrRepeat } fro
 import { Refusal } from "@/lib/service/refusal";
 import type { Service } from "@/lib/service/service";
 import { clientKind } from "@/lib/usage/client-kind";
-import { bodyRefusal, receiveBody } from "./body";
+import { bodyRefusal, discardBody, receiveBody } from "./body";
 import { Call } from "./call";
 import { corsHeaders, isPreflight, preflightHeaders, requireOrigin } from "./cors";
 import { BASE_PATH } from "./base-path";
@@ -49,6 +49,7 @@ export async function dispatch(request: Request, service: Service, registry: Rou
     answer = problemAnswer(refusal, call.requestId, service.config.origin, report.accepts);
   }
   try {
+    await discardBody(request);
     await call.settle(report.computations);
     await countOnce(call, report, answer.status);
     log(call, report, answer.status);

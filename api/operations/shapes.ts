@@ -3,8 +3,12 @@ import { z } from "zod";
 import { catalogue, findShape, nearestNames, shapeEntry } from "@/lib/engine";
 import { Refusal } from "@/lib/service/refusal";
 import { defineOperation, type Outcome } from "../operation";
-import { pageOf } from "../schemas/page";
+import { decodeCursor, encodeCursor, page } from "../pagination";
+import { pageOf, pageQuery } from "../schemas/page";
 import { shapeSchema } from "../schemas/resistance";
+
+/** More shapes than there will ever be. */
+const LARGEST_PAGE = 1000;
 
 interface Written {
   readonly text: string;
@@ -36,19 +40,30 @@ export const listShapes = defineOperation({
   tag: "Shapes",
   summary: "List the catalogue",
   description:
-    "Every shape with everything a form needs: dimensions with labels, units and ranges, alternatives, coordinates, terminals, constraints, formula, validity, cautions, sources and a request that works. It fits one page.",
+    "Every shape with everything a form needs: dimensions with labels, units and ranges, alternatives, coordinates, terminals, constraints, formula, validity, cautions, sources and a request that works. Without a limit it fits one page.",
   scope: "none",
-  request: {},
+  request: { query: z.strictObject(pageQuery(LARGEST_PAGE, LARGEST_PAGE)) },
   responses: {
     200: {
       description: "The catalogue.",
       content: { "application/json": pageOf(shapeSchema, "The whole catalogue.").meta({ id: "Catalogue" }) },
-      headers: { ETag: "Changes when the catalogue does; send it back in If-None-Match." },
+      headers: {
+        ETag: "Changes when the catalogue does; send it back in If-None-Match.",
+        Link: "The next page, where a limit was given and there is one.",
+      },
     },
   },
   errors: [],
   examples: [{ name: "catalogue", summary: "The whole catalogue", status: 200 }],
-  handler: () => answer("", () => ({ items: catalogue.map(shapeEntry), next: null })),
+  handler: ({ query: { limit, cursor } }, { url }) => {
+    if (cursor === undefined && limit >= catalogue.length) {
+      return answer("", () => ({ items: catalogue.map(shapeEntry), next: null }));
+    }
+    const start = decodeCursor(cursor)?.at ?? 0;
+    const end = start + limit;
+    const next = end < catalogue.length ? encodeCursor({ at: end, id: "" }) : null;
+    return page(url, catalogue.slice(start, end).map(shapeEntry), next);
+  },
 });
 
 export const readShape = defineOperation({

@@ -160,3 +160,45 @@ export function daysOfKey(db: Database, keyId: string, since: number): DaySum[] 
     .all()
     .map((row) => ({ ...row, day: new Date(row.day * DAY_MS).toISOString().slice(0, 10) }));
 }
+
+/** Adds computations that end after their call was counted: to the sums, as no call of its own. */
+export function addComputations(
+  db: Database,
+  at: number,
+  { keyId, teamId, operation, status, computations }: LateComputations,
+): void {
+  const hour = Math.floor(at / HOUR_MS);
+  const day = Math.floor(at / DAY_MS);
+  const more = { computations: sql`computations + ${computations}` };
+  const none = { requests: 0, refused: 0, failed: 0, latencyUs: 0, computations };
+  db.insert(usageHours)
+    .values({ hour, keyId, teamId, ...none })
+    .onConflictDoUpdate({ target: [usageHours.keyId, usageHours.hour], set: more })
+    .run();
+  db.insert(usageDays)
+    .values({ day, keyId, teamId, ...none })
+    .onConflictDoUpdate({ target: [usageDays.keyId, usageDays.day], set: more })
+    .run();
+  db.insert(usageDayDetails)
+    .values({ day, teamId, operation, shape: "", status, requests: 0, computations })
+    .onConflictDoUpdate({
+      target: [
+        usageDayDetails.teamId,
+        usageDayDetails.day,
+        usageDayDetails.operation,
+        usageDayDetails.shape,
+        usageDayDetails.status,
+      ],
+      set: more,
+    })
+    .run();
+}
+
+/** Computations of a job, at the moment it ended. */
+export interface LateComputations {
+  readonly keyId: string;
+  readonly teamId: string;
+  readonly operation: string;
+  readonly status: number;
+  readonly computations: number;
+}

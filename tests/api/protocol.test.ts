@@ -1,3 +1,4 @@
+import { Agent, request as httpRequest } from "node:http";
 import { connect } from "node:net";
 import request from "supertest";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
@@ -140,6 +141,38 @@ describe("413", () => {
       socket.write("0\r\n\r\n");
     });
     expect(answer).toMatch(/^HTTP\/1\.1 413/);
+  });
+
+  test("a refused body of any kind leaves the connection usable", async () => {
+    const agent = new Agent({ keepAlive: true, maxSockets: 1 });
+    const send = (path: string, body: string, headers: Record<string, string>) =>
+      new Promise<number | undefined>((resolve, reject) => {
+        const options = {
+          method: "POST",
+          agent,
+          headers: { "Content-Type": "application/json", ...headers },
+        };
+        const sent = httpRequest(`${server.base}/api/v1${path}`, options, (answer) => {
+          answer.resume();
+          answer.once("end", () => resolve(answer.statusCode));
+        });
+        sent.once("error", reject);
+        sent.end(body);
+      });
+    const large = JSON.stringify({ padding: "x".repeat(900_000) });
+    const huge = "x".repeat(5_000_000);
+    const known = { Authorization: `Bearer ${key}` };
+    const statuses = [
+      await send("/resistance", large, {}),
+      await send("/resistance", large, { Authorization: "Bearer rho_wrong" }),
+      await send("/nothing", large, known),
+      await send("/shapes", large, known),
+      await send("/resistance", large, { ...known, "Content-Type": "text/xml" }),
+      await send("/resistance", huge, known),
+      await send("/resistance", JSON.stringify(SLEEVE), known),
+    ];
+    agent.destroy();
+    expect(statuses).toEqual([401, 401, 404, 405, 415, 413, 200]);
   });
 
   test("one just below the limit is read", async () => {

@@ -18,6 +18,19 @@ describe("GET /shapes 200", () => {
     expect(response.body.items.map(({ id }: { id: string }) => id)).toEqual(catalogue.map(({ id }) => id));
   });
 
+  test("page by page where a limit is given", async () => {
+    const found: string[] = [];
+    let path = "/shapes?limit=7";
+    while (path !== "") {
+      const { status, body, headers } = await call(server, "get", path);
+      expect(status).toBe(200);
+      found.push(...body.items.map(({ id }: { id: string }) => id));
+      path = /^<\/api\/v1([^>]+)>; rel="next"$/.exec(headers.link ?? "")?.[1] ?? "";
+      expect(path === "").toBe(body.next === null);
+    }
+    expect(found).toEqual(catalogue.map(({ id }) => id));
+  });
+
   test("every entry has what a form needs", async () => {
     const { body } = await call(server, "get", "/shapes");
     for (const item of body.items) {
