@@ -163,8 +163,8 @@ function curvatureFactor(d: Spiral): number {
   return half < 1e-4 ? 1 - (half * half) / 3 : half / Math.atanh(half);
 }
 
-/** At most so many turns are drawn; the picture says how many there are. */
-const DRAWN_TURNS = 30;
+/** At most so many whole turns are drawn, with the part of a turn that is left; the picture says how many there are. */
+const DRAWN_TURNS = 5;
 
 function drawSpiral({
   turns,
@@ -173,7 +173,7 @@ function drawSpiral({
   width,
   thickness,
 }: Spiral & { readonly thickness: number }): Drawing {
-  const drawn = Math.min(turns, DRAWN_TURNS);
+  const drawn = turns < DRAWN_TURNS + 1 ? turns : DRAWN_TURNS + (turns % 1);
   const b = pitch / (2 * Math.PI);
   const edge = (turn: number, side: number): Point => {
     const phi = 2 * Math.PI * turn;
@@ -207,7 +207,15 @@ function drawSpiral({
         dimensions: [
           { name: "innerRadius", from: [0, 0], to: edge(0, 0), kind: "linear", offset: 0 },
           ...(drawn >= 1
-            ? [{ name: "pitch", from: edge(0, 0), to: edge(1, 0), kind: "linear" as const, offset: 0 }]
+            ? [
+                {
+                  name: "pitch",
+                  from: edge(drawn - 1, 0),
+                  to: edge(drawn, 0),
+                  kind: "linear" as const,
+                  offset: 0,
+                },
+              ]
             : []),
         ],
       },
@@ -223,6 +231,6 @@ function drawSpiral({
         ],
       },
     ],
-    description: `A flat spiral of ${turns} turns in plan${turns > DRAWN_TURNS ? `, the inner ${DRAWN_TURNS} of them drawn` : ""}; the current follows the strip from the inner end to the outer one.`,
+    description: `A flat spiral of ${turns} turns in plan${turns > drawn ? `, the inner ${DRAWN_TURNS} or so of them drawn` : ""}; the current follows the strip from the inner end to the outer one.`,
   };
 }

@@ -141,7 +141,7 @@ function curvatureFactor({ meanDiameter, pitch, wireDiameter }: Helix): number {
 }
 
 /** At most so many turns are drawn; the picture says how many there are. */
-const DRAWN_TURNS = 12;
+const DRAWN_TURNS = 8;
 
 function drawHelix({ turns, meanDiameter, pitch, wireDiameter }: Helix): Drawing {
   const drawn = Math.min(turns, DRAWN_TURNS);

@@ -2,7 +2,7 @@ import { defineShape } from "../define-shape";
 import { lengthDimension } from "../dimension";
 import { polyline, rectangle } from "../drawing";
 import { EARTHING_CAUTIONS, REMOTE_EARTH, SOIL_ASSUMPTION } from "./earthing-texts";
-import { groundLine } from "./ground-drawing";
+import { downArrows, groundLine } from "./ground-drawing";
 
 /** A buried grid of bare conductors: Sverak's formula as in IEEE Std 80, with the factor for its depth. */
 export const earthGrid = defineShape({
@@ -73,10 +73,10 @@ export const earthGrid = defineShape({
     dimensions: { area: 4900, conductorLength: "1540 m", depth: "0.5 m" },
     medium: { resistivity: "400 ohm m" },
   },
-  drawing: ({ area, conductorLength, depth }) => {
+  drawing: ({ area, depth }) => {
     const side = Math.sqrt(area);
-    // A square grid of that length: 2(n+1) conductors of one side each.
-    const meshes = Math.min(20, Math.max(1, Math.round(conductorLength / side / 2 - 1)));
+    // A symbol of a grid: area and conductor length do not tell how its meshes lie.
+    const meshes = 4;
     const steps = Array.from({ length: meshes + 1 }, (_, i) => (side * i) / meshes);
     const wires = steps.flatMap((at) => [
       polyline([
@@ -97,7 +97,10 @@ export const earthGrid = defineShape({
           high: [rectangle(0, 0, side, side), ...wires],
           low: [],
           flow: [],
-          dimensions: [],
+          dimensions: [
+            { name: "area", from: [side / 2, side / 2], to: [side, side], kind: "leader" },
+            { name: "conductorLength", from: [side / 2, side / 2], to: [side, side / 2], kind: "leader" },
+          ],
         },
         {
           title: "section",
@@ -110,14 +113,11 @@ export const earthGrid = defineShape({
             ]),
           ],
           low: [],
-          flow: [0.2, 0.5, 0.8].map((part) => ({
-            from: [part * side, -depth - 0.05 * side],
-            to: [part * side, -depth - 0.25 * side],
-          })),
+          flow: downArrows(0, side, -depth, 0.25 * side),
           dimensions: [{ name: "depth", from: [side, 0], to: [side, -depth], kind: "linear", offset: 1 }],
         },
       ],
-      description: `An earth grid in plan, drawn as a square of ${meshes} by ${meshes} meshes of the same area and conductor length, and in section; the current spreads from it into the soil below the surface.`,
+      description: `An earth grid in plan, drawn as a square of ${meshes} by ${meshes} meshes whatever the conductor length, and in section; the current spreads from it into the soil below the surface.`,
     };
   },
 });

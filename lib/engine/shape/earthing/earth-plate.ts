@@ -9,7 +9,7 @@ import {
   REMOTE_EARTH,
   SOIL_ASSUMPTION,
 } from "./earthing-texts";
-import { groundLine, line, spreadingArrows } from "./ground-drawing";
+import { downArrows, groundLine, line } from "./ground-drawing";
 
 /** A thin round plate laid flat in the ground, both faces in the soil: Love's integral equation, solved to rounding. */
 export const earthPlate = defineShape({
@@ -93,7 +93,11 @@ export const earthPlate = defineShape({
           lines: [groundLine(-2 * a, 2 * a), line([0, 0.1 * a], [0, -depth - 0.5 * a], "axis")],
           high: [plate],
           low: [],
-          flow: spreadingArrows(0, -depth, 1.6 * a),
+          flow: [
+            ...downArrows(-a, a, -depth, 0.8 * a),
+            { from: [1.1 * a, -depth], to: [1.8 * a, -depth] },
+            { from: [-1.1 * a, -depth], to: [-1.8 * a, -depth] },
+          ],
           dimensions: [
             { name: "diameter", from: [a, -depth], to: [-a, -depth], kind: "linear", offset: 1 },
             { name: "depth", from: [a, 0], to: [a, -depth], kind: "linear", offset: 1 },

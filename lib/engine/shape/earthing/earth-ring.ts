@@ -11,7 +11,7 @@ import {
   REMOTE_EARTH,
   SOIL_ASSUMPTION,
 } from "./earthing-texts";
-import { groundLine, line } from "./ground-drawing";
+import { groundLine, line, wireArrows } from "./ground-drawing";
 import { depthCaution, shallowCautions } from "./rod-validity";
 
 /** A closed ring of wire in the ground: exact potential of the thin ring by the arithmetic–geometric mean. */
@@ -139,7 +139,7 @@ export const earthRing = defineShape({
           ],
           high: cuts,
           low: [],
-          flow: [],
+          flow: [-radius, radius].flatMap((x) => wireArrows(x, -depth, a, 0.3 * radius)),
           dimensions: [
             { name: "depth", from: [radius, 0], to: [radius, -depth], kind: "linear", offset: 1 },
             { name: "wireDiameter", from: [-radius, -depth], to: [-radius, -depth - a], kind: "leader" },

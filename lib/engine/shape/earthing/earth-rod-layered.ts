@@ -8,7 +8,7 @@ import {
   EARTHING_CAUTIONS,
   REMOTE_EARTH,
 } from "./earthing-texts";
-import { groundLine, line, rodAt, spreadingArrows } from "./ground-drawing";
+import { groundLine, line, rodAt, rodArrows } from "./ground-drawing";
 import { equalSegments, gradedSegments, layeredRodResistance, type LayeredSoil } from "./layered-rod";
 import { resistanceByImages } from "./layered-rod-images";
 import { rodCautions } from "./rod-validity";
@@ -117,7 +117,7 @@ export const earthRodLayered = defineShape({
             ]),
           ],
           low: [],
-          flow: spreadingArrows(0, -0.6 * length, 0.35 * length),
+          flow: rodArrows(0, length, diameter),
           dimensions: [
             {
               name: "length",

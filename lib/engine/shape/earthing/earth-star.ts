@@ -10,7 +10,7 @@ import {
   REMOTE_EARTH,
   SOIL_ASSUMPTION,
 } from "./earthing-texts";
-import { groundLine } from "./ground-drawing";
+import { downArrows, groundLine } from "./ground-drawing";
 import { inclinedMean, parallelMean } from "./line-potential";
 import { depthCaution, wireCautions } from "./rod-validity";
 
@@ -99,9 +99,6 @@ export const earthStar = defineShape({
   },
   drawing: ({ arms, armLength, wireDiameter, depth }) => {
     const paths = armAngles(arms).map((phi) => armPath(phi, armLength, wireDiameter));
-    const [first, second] = armAngles(arms);
-    const middle = (first + second) / 2;
-    const at = (radius: number): Point => [radius * Math.cos(middle), radius * Math.sin(middle)];
     const wire = rectangle(0, -depth - wireDiameter / 2, armLength, wireDiameter);
     return {
       views: [
@@ -110,7 +107,10 @@ export const earthStar = defineShape({
           conductor: paths,
           high: paths,
           low: [],
-          flow: [{ from: at(0.45 * armLength), to: at(0.8 * armLength) }],
+          flow: [1, -1].map((side) => ({
+            from: [0.85 * armLength, side * (0.6 * wireDiameter + 0.02 * armLength)],
+            to: [0.85 * armLength, side * (0.6 * wireDiameter + 0.25 * armLength)],
+          })),
           dimensions: [{ name: "armLength", from: [0, 0], to: [armLength, 0], kind: "linear", offset: -1 }],
         },
         {
@@ -119,7 +119,7 @@ export const earthStar = defineShape({
           lines: [groundLine(-0.1 * armLength, 1.1 * armLength)],
           high: [wire],
           low: [],
-          flow: [],
+          flow: downArrows(0, armLength, -depth - wireDiameter / 2, 0.2 * armLength),
           dimensions: [
             { name: "depth", from: [armLength, 0], to: [armLength, -depth], kind: "linear", offset: 1 },
             {

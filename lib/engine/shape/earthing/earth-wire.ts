@@ -10,7 +10,7 @@ import {
   REMOTE_EARTH,
   SOIL_ASSUMPTION,
 } from "./earthing-texts";
-import { groundLine, line, spreadingArrows } from "./ground-drawing";
+import { downArrows, groundLine, line, wireArrows } from "./ground-drawing";
 import { depthCaution, wireCautions } from "./rod-validity";
 
 /** A straight horizontal wire in the ground: (ρ/4π)·[M(ℓ, a) + M(ℓ, 2h)], its image included. */
@@ -91,7 +91,7 @@ export const earthWire = defineShape({
           ],
           high: [wire],
           low: [],
-          flow: spreadingArrows(0, -depth, 0.25 * length),
+          flow: downArrows(-length / 2, length / 2, -depth - diameter / 2, 0.2 * length),
           dimensions: [
             {
               name: "length",
@@ -109,7 +109,7 @@ export const earthWire = defineShape({
           lines: [groundLine(-depth, depth)],
           high: [circle([0, -depth], diameter / 2)],
           low: [],
-          flow: spreadingArrows(0, -depth, 0.7 * depth),
+          flow: wireArrows(0, -depth, diameter / 2, 0.6 * depth),
           dimensions: [
             { name: "diameter", from: [0, -depth], to: [0, -depth - diameter / 2], kind: "leader" },
           ],

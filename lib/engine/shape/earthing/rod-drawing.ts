@@ -1,10 +1,9 @@
 import type { Drawing, DrawingDimension, Point } from "../drawing";
 import { circle, polyline } from "../drawing";
-import { groundLine, line, rodAt, spreadingArrows } from "./ground-drawing";
+import { groundLine, line, rodAt, rodArrows } from "./ground-drawing";
 
 /**
  * One or more equal rods in section; `plan` gives the places of a group's rods in plan, none for no plan.
- * @param spacingName the dimension shown between the first two rods, where there are two.
  */
 export function drawRods(
   length: number,
@@ -15,6 +14,9 @@ export function drawRods(
 ): Drawing {
   const left = Math.min(...places);
   const right = Math.max(...places);
+  // Half the length of the centre marks in plan.
+  const mark =
+    plan.length > 1 ? 0.3 * Math.hypot(plan[1][0] - plan[0][0], plan[1][1] - plan[0][1]) : diameter;
   const margin = Math.max(0.4 * length, 0.2 * (right - left));
   const spaced: DrawingDimension[] =
     places.length > 1
@@ -38,7 +40,7 @@ export function drawRods(
           ]),
         ),
         low: [],
-        flow: spreadingArrows(right, -0.6 * length, 0.35 * length),
+        flow: rodArrows(right, length, diameter),
         dimensions: [
           {
             name: "length",
@@ -56,6 +58,10 @@ export function drawRods(
             {
               title: "plan",
               conductor: plan.map((place) => circle(place, diameter / 2)),
+              lines: plan.flatMap(([x, y]) => [
+                line([x - mark, y], [x + mark, y], "axis"),
+                line([x, y - mark], [x, y + mark], "axis"),
+              ]),
               high: plan.map((place) => circle(place, diameter / 2)),
               low: [],
               flow: [],
