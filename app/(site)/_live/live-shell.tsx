@@ -3,6 +3,7 @@
 import { useMemo, useState } from "react";
 import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
 import { cylindricalShell } from "@/lib/engine/shape/radial/cylindrical-shell";
+import { readableDrawing } from "@/lib/engine/shape/readable";
 import { resolveDimensions } from "@/lib/engine/shape/resolve-dimensions";
 import { CodeBlock } from "../../_ui/code-block";
 import { ShapeDrawing } from "../../_ui/drawing/shape-drawing";
@@ -99,7 +100,8 @@ function drawingOf(dimensions: Pick<ShellInput, "innerRadius" | "outerRadius" | 
         { symbol: cylindricalShell.dimensions[name].symbol, value: value.trim() },
       ]),
     );
-    return { drawing: cylindricalShell.drawing(resolved), labels };
+    const { drawing, toScale } = readableDrawing(cylindricalShell, resolved);
+    return { drawing, toScale, labels };
   } catch {
     return undefined;
   }

@@ -6,6 +6,7 @@ import type { ViewLayout } from "./view-layout";
 
 interface DrawingSheetProps {
   readonly sheet: Sheet;
+  readonly toScale: boolean;
   /** Prefix of the ids inside, unique on the page. */
   readonly id: string;
   readonly description: string;
@@ -14,12 +15,12 @@ interface DrawingSheetProps {
 }
 
 /** One laid-out sheet as SVG. Colours come from the tokens, so it follows the theme and prints dark on light. */
-export function DrawingSheet({ sheet, id, description, focused, className }: DrawingSheetProps) {
+export function DrawingSheet({ sheet, toScale, id, description, focused, className }: DrawingSheetProps) {
   const values = sheet.views
     .flatMap(({ view }) => view.dimensions)
     .filter(({ label }) => label.value)
     .map(({ label }) => `${label.symbol} = ${label.value}`);
-  const note = sheet.distorted ? " Not to scale." : "";
+  const note = toScale ? "" : " Not to scale.";
   const text = `${description}${values.length > 0 ? ` Dimensions: ${[...new Set(values)].join(", ")}.` : ""}${note}`;
   return (
     <svg
@@ -103,6 +104,9 @@ function Body({ view, id }: { readonly view: ViewLayout; readonly id: string }) 
       />
       {view.lines.map(({ path, style }, index) => (
         <path key={index} d={path} {...LINE_STYLES[style]} />
+      ))}
+      {view.soil.map((path, index) => (
+        <path key={index} d={path} className="stroke-ink" strokeWidth="0.8" />
       ))}
       {view.high.map((path, index) => (
         <path key={index} d={path} className="stroke-copper" strokeWidth="4.5" />

@@ -30,6 +30,8 @@ const WALL = 20;
 const BODY = 44;
 /** An angle smaller than this (radians) is opened up to it. */
 const ANGLE = 0.42;
+/** With more slanting sides than this a view has curves made of short straight sides, which widening would dent. */
+const SLANTING = 16;
 
 export function readable(view: DrawingView, width: number, height: number): ReadableView {
   const box = boxOf([
@@ -142,9 +144,10 @@ function perAxis(
   width: number,
   height: number,
 ): Mapped {
-  const needs = [axisNeeds(view, arcs, 0), axisNeeds(view, arcs, 1)] as const;
-  const whole = (low: number, high: number): Need[] =>
-    high > low ? [{ from: low, to: high, pixels: BODY }] : [];
+  const needs = isCurved(view) ? [[], []] : [axisNeeds(view, arcs, 0), axisNeeds(view, arcs, 1)];
+  // A circle keeps its shape only where both axes ask for the same.
+  const pixels = arcs.some(({ sweep }) => Math.abs(sweep) > 3) ? DIMENSION : BODY;
+  const whole = (low: number, high: number): Need[] => (high > low ? [{ from: low, to: high, pixels }] : []);
   const x = stretch(box.left, box.right, scale, width, [...needs[0], ...whole(box.left, box.right)]);
   const y = stretch(box.bottom, box.top, scale, height, [...needs[1], ...whole(box.bottom, box.top)]);
   const distorted = x.distorted || y.distorted;
@@ -161,6 +164,13 @@ function perAxis(
     }),
   });
   return { view: mapView(view, point, path), distorted };
+}
+
+function isCurved(view: DrawingView): boolean {
+  const slanting = [...view.conductor, ...(view.second ?? []), ...view.high, ...view.low].flatMap((path) =>
+    sides(path).filter(({ from, step }) => !step.bulge && from[0] !== step.to[0] && from[1] !== step.to[1]),
+  );
+  return slanting.length > SLANTING;
 }
 
 /** What has to stay apart along one axis: dimensioned distances, parallel faces, circles. */

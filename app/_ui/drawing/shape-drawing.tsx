@@ -6,6 +6,8 @@ import { DrawingSheet } from "./drawing-sheet";
 
 interface ShapeDrawingProps {
   readonly drawing: Drawing;
+  /** Whether the drawing handed over has the true proportions; it may lose them here as well. */
+  readonly toScale?: boolean;
   /** Symbol and value of each dimension by its name; a dimension without one is not drawn. */
   readonly labels: Readonly<Record<string, LabelText>>;
   /** Name of the dimension whose field has focus. */
@@ -22,14 +24,16 @@ const WIDE = 560;
  * The drawing of a shape: conductor, terminals, current, dimensions. Laid out twice, for narrow and for wide places,
  * and the container decides, so that it needs no script and prints as it stands.
  */
-export function ShapeDrawing({ drawing, labels, focused, terminals }: ShapeDrawingProps) {
+export function ShapeDrawing({ drawing, toScale = true, labels, focused, terminals }: ShapeDrawingProps) {
   const id = useId();
   const narrow = layoutSheet(drawing, labels, NARROW);
   const wide = layoutSheet(drawing, labels, WIDE);
+  const proportional = toScale && !narrow.distorted && !wide.distorted;
   return (
     <figure className="@container">
       <DrawingSheet
         sheet={narrow}
+        toScale={proportional}
         id={`${id}n`}
         focused={focused}
         description={drawing.description}
@@ -37,6 +41,7 @@ export function ShapeDrawing({ drawing, labels, focused, terminals }: ShapeDrawi
       />
       <DrawingSheet
         sheet={wide}
+        toScale={proportional}
         id={`${id}w`}
         focused={focused}
         description={drawing.description}
@@ -56,7 +61,7 @@ export function ShapeDrawing({ drawing, labels, focused, terminals }: ShapeDrawi
           </svg>
           low terminal{terminals ? `: ${terminals.low}` : ""}
         </span>
-        {narrow.distorted || wide.distorted ? <span>not to scale</span> : null}
+        {proportional ? null : <span>not to scale</span>}
       </figcaption>
     </figure>
   );

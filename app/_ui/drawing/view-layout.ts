@@ -14,6 +14,8 @@ export interface ViewLayout {
   readonly conductor: string;
   readonly second: string;
   readonly lines: readonly { readonly path: string; readonly style: "axis" | "hidden" | "thin" | "ground" }[];
+  /** Short slanting marks under each ground line. */
+  readonly soil: readonly string[];
   readonly high: readonly string[];
   readonly low: readonly string[];
   readonly flow: readonly { readonly from: Point; readonly to: Point }[];
@@ -24,6 +26,10 @@ export interface ViewLayout {
 }
 
 const PADDING = 4;
+/** Room that the body gets even where the labels ask for all of it, pixels. */
+const SMALLEST_BODY = 48;
+const SOIL_MARK = 6;
+const SOIL_SPACING = 9;
 
 /**
  * @param labels What to write at each dimension, by its name.
@@ -37,10 +43,12 @@ export function layoutView(
   maxHeight: number,
 ): ViewLayout {
   // Dimension lines stand outside the body, and how far is known only once they are placed: shrink until it fits.
-  let inner = width - 2 * PADDING;
+  const room = width - 2 * PADDING;
+  let inner = room;
   let laid = attempt(view, labels, inner, maxHeight);
-  for (let round = 0; round < 6 && laid.ink.width > width - 2 * PADDING; round += 1) {
-    inner = Math.max(40, inner - (laid.ink.width - (width - 2 * PADDING)));
+  for (let tries = 0; tries < 16 && laid.ink.width > room && inner > SMALLEST_BODY; tries += 1) {
+    // A label that changes its place may undo a small step.
+    inner = Math.max(SMALLEST_BODY, inner - Math.max(6, laid.ink.width - room));
     laid = attempt(view, labels, inner, maxHeight);
   }
   const { ink, paper, dimensions, distorted } = laid;
@@ -52,6 +60,7 @@ export function layoutView(
     conductor: paper.conductor.map(svgPath).join(""),
     second: (paper.second ?? []).map(svgPath).join(""),
     lines: (paper.lines ?? []).map((line) => ({ path: svgPath(line), style: line.style })),
+    soil: (paper.lines ?? []).filter(({ style }) => style === "ground").map(soilMarks),
     high: paper.high.map(svgPath),
     low: paper.low.map(svgPath),
     flow: paper.flow.map(({ from, to }) => visibleArrow(from, to)),
@@ -102,7 +111,7 @@ function attempt(
   }
   const all = outlinePoints(pathsOf(paper));
   const ink = union([
-    rectOf(all, 3),
+    rectOf(all, paper.lines?.some(({ style }) => style === "ground") ? SOIL_MARK : 3),
     ...paper.flow.map(({ from, to }) => rectOf([from, to], 3)),
     ...dimensions.flatMap((placed) => [
       placed.box,
@@ -134,6 +143,20 @@ function svgPath(path: DrawingPath): string {
     return `A${radius} ${radius} 0 ${large} ${arc.sweep > 0 ? 1 : 0} ${at(step.to)}`;
   });
   return `M${at(path.from)}${steps.join("")}${path.closed ? "Z" : ""}`;
+}
+
+function soilMarks(line: DrawingPath): string {
+  const marks = sides(line).flatMap(({ from, step }) => {
+    const length = Math.hypot(step.to[0] - from[0], step.to[1] - from[1]);
+    const count = Math.floor(length / SOIL_SPACING);
+    return Array.from({ length: count }, (_, index) => {
+      const share = (index + 1) / (count + 1);
+      const x = from[0] + share * (step.to[0] - from[0]);
+      const y = from[1] + share * (step.to[1] - from[1]);
+      return `M${round(x)} ${round(y)}l${-SOIL_MARK} ${SOIL_MARK}`;
+    });
+  });
+  return marks.join("");
 }
 
 /** An arrow keeps a length at which its direction can be seen. */
