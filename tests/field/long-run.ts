@@ -68,7 +68,11 @@ function tryOutline(seed: number, tally: Tally): void {
   }
   for (const solution of brackets) {
     tally.solutions++;
-    if (solution.status === "limited") tally.limited++;
+    if (solution.status === "limited") {
+      tally.limited++;
+      const { lower, upper } = bracketOf(solution);
+      report("limited", { by: solution.limit, width: upper / lower - 1, unknowns: solution.unknowns });
+    }
     const failed = solution.checks.filter((check) => !check.passed);
     if (failed.length > 0) {
       tally.failedChecks++;
