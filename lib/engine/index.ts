@@ -79,3 +79,39 @@ export {
   type UsedMaterial,
 } from "./resistance/result-schema";
 export { computeResistance, type ComputeContext } from "./resistance/compute-resistance";
+
+export { checkOutline, type OutlineCheck } from "./field/outline/check-outline";
+export {
+  outlineSchema,
+  terminalSchema,
+  type OutlineInput,
+  type OutlineRequest,
+  type TerminalInput,
+} from "./field/outline/schema";
+export {
+  fieldMediumSchema,
+  fieldRequestSchema,
+  type FieldRequest,
+} from "./field/request/field-request-schema";
+export { fieldPeakSchema, fieldResultSchema, type FieldResult } from "./field/request/field-result-schema";
+export { presentField } from "./field/request/field-result";
+export {
+  prepareField,
+  type FieldContext,
+  type PreparedField,
+  type StoredOutline,
+} from "./field/request/prepare-field";
+export { cleanOutline, outlineRequestSchema, type CleanedOutline } from "./field/request/store-outline";
+export {
+  FieldMediumError,
+  solveField,
+  type FieldOptions,
+  type FieldProgress,
+  type FieldSolution,
+} from "./field/solve-field";
+export { boundaryFlux } from "./field/picture/boundary-flux";
+export { fieldLines } from "./field/picture/contours";
+export type { FieldMap } from "./field/picture/field-map";
+export { sampleLine } from "./field/picture/line";
+export { densityPeak } from "./field/picture/peak";
+export { densityRaster } from "./field/picture/raster";

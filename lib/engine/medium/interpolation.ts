@@ -23,12 +23,14 @@ export function intervalLaw(
     }
     return (i, t) => values[i] * Math.exp(slopes[i] * t);
   }
-  for (let i = 0; i < n - 1; i++) slopes[i] = (values[i + 1] - values[i]) / (positions[i + 1] - positions[i]);
+  const widths = new Float64Array(n - 1);
+  for (let i = 0; i < n - 1; i++) {
+    widths[i] = positions[i + 1] - positions[i];
+    slopes[i] = (values[i + 1] - values[i]) / widths[i];
+  }
   // Measured from the nearer end, so that a value close to zero at the far end keeps its digits.
-  return (i, t) => {
-    const width = positions[i + 1] - positions[i];
-    return 2 * t <= width ? values[i] + slopes[i] * t : values[i + 1] - slopes[i] * (width - t);
-  };
+  return (i, t) =>
+    2 * t <= widths[i] ? values[i] + slopes[i] * t : values[i + 1] - slopes[i] * (widths[i] - t);
 }
 
 /** ln(b/a) that keeps its digits where b is close to a. */

@@ -5,11 +5,11 @@ export interface Rule {
   readonly weights: Float64Array;
 }
 
-const rules = new Map<number, Rule>();
+const rules: (Rule | undefined)[] = [];
 
 /** The n-point rule, 1 ≤ n ≤ 200, computed once by Newton's method on the Legendre polynomial; good to a few ulp. */
 export function gaussLegendre(n: number): Rule {
-  const known = rules.get(n);
+  const known = rules[n];
   if (known) return known;
   if (!Number.isInteger(n) || n < 1 || n > 200) throw new RangeError(`no Gauss–Legendre rule of ${n} points`);
   const nodes = new Float64Array(n);
@@ -29,7 +29,7 @@ export function gaussLegendre(n: number): Rule {
     weights[n - 1 - i] = 1 / ((1 - x * x) * slope * slope);
   }
   const rule = { nodes, weights };
-  rules.set(n, rule);
+  rules[n] = rule;
   return rule;
 }
 

@@ -31,19 +31,22 @@ export class AlongConductor {
   ) {
     const { from, at } = law;
     const { section } = flow;
-    const fit = (x: number, value: number): number => {
-      if (value > 0 && value < Infinity) return value;
-      throw new UnfitValue(x, value);
+    const inverse = law.quantity !== "resistivity";
+    this.resistivity = (piece, t) => {
+      const value = at(piece, t);
+      if (!(value > 0 && value < Infinity)) throw new UnfitValue(from[piece] + t, value);
+      return inverse ? 1 / value : value;
     };
-    const rho: (piece: number, t: number) => number =
-      law.quantity === "resistivity"
-        ? (piece, t) => fit(from[piece] + t, at(piece, t))
-        : (piece, t) => 1 / fit(from[piece] + t, at(piece, t));
-    this.resistivity = rho;
     this.integral = new LawIntegral({
       law,
       extent: flow.extent,
-      density: (piece, t) => rho(piece, t) / section(from[piece] + t),
+      // Written out rather than by `resistivity`: a table asks for it tens of thousands of times.
+      density: (piece, t) => {
+        const x = from[piece] + t;
+        const value = at(piece, t);
+        if (!(value > 0 && value < Infinity)) throw new UnfitValue(x, value);
+        return inverse ? 1 / (value * section(x)) : value / section(x);
+      },
       weight: section,
       breaks: flow.breaks,
     });

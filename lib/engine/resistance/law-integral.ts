@@ -110,7 +110,7 @@ export class LawIntegral {
    */
   secondTotal(): Integral {
     const { law, density } = this.parts;
-    if (law.count > 24) return this.total({}, 2);
+    if (law.count > 24) return this.total({}, 1);
     let value = 0;
     let error = 0;
     let evaluations = 0;

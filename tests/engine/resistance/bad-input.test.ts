@@ -192,13 +192,13 @@ describe("the medium", () => {
       "a sheet resistance for a body",
       medium({ sheetResistance: 50 }),
       "#/medium/sheetResistance",
-      /for sheet shapes/,
+      /for sheets/,
     ],
     [
       "a thickness for a body",
       medium({ resistivity: 1, thickness: "1 mm" }),
       "#/medium/thickness",
-      /sheet shapes only/,
+      /sheets only/,
     ],
     [
       "a coefficient beside a material",

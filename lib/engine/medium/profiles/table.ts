@@ -150,7 +150,7 @@ function lawOf(
     count,
     from,
     width,
-    at: (piece, t) => law(first + piece, piece === 0 ? t + offset : t),
+    at: first === 0 && offset === 0 ? law : (piece, t) => law(first + piece, piece === 0 ? t + offset : t),
     quantity: site.values,
     spread: (piece) => {
       const a = values[first + piece];
