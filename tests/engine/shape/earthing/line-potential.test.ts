@@ -7,7 +7,7 @@ import {
   inlineMean,
   parallelMean,
 } from "@/lib/engine/shape/earthing/line-potential";
-import { D, deviationFrom, exact } from "../../../support/shape-law";
+import { type D, deviationFrom, exact } from "../../../support/shape-law";
 import { armMean } from "../../../support/thin-wires";
 
 const decade = (from: number, to: number) =>
