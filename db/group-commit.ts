@@ -11,9 +11,18 @@ interface Job {
  * until its write is committed, so an answer that went out is in the database, whatever happens next.
  */
 export class GroupCommit {
+  private static readonly groups = new WeakMap<Database, GroupCommit>();
+
   private jobs: Job[] = [];
 
   constructor(private readonly db: Database) {}
+
+  /** The one that everybody who writes to a database shares. */
+  static of(db: Database): GroupCommit {
+    let group = GroupCommit.groups.get(db);
+    if (!group) GroupCommit.groups.set(db, (group = new GroupCommit(db)));
+    return group;
+  }
 
   /**
    * Runs `work` (synchronous) in the next group. If it throws, only its own writes are rolled back and the promise

@@ -1,5 +1,6 @@
 import { RateLimiterRes, RateLimiterSQLite } from "rate-limiter-flexible";
 import type { Database } from "@/db/client";
+import { GroupCommit } from "@/db/group-commit";
 import { forgetExpired } from "@/db/queries/rate-limits";
 
 /** A counter with a quota: who spends from it, how much there is, for how long. */
@@ -95,10 +96,12 @@ export class Limiter {
 }
 
 /**
- * The database as the limiter uses it, with what costs most left out: every statement is prepared once, and a single
- * statement, which is atomic by itself, gets no transaction around it.
+ * The database as the limiter uses it, with what costs most shared: every statement is prepared once, and spendings of
+ * calls that come at about the same time are committed together (the limiter waits for what a transaction returns).
  */
-function storeOf({ $client }: Database): object {
+function storeOf(db: Database): object {
+  const { $client } = db;
+  const commits = GroupCommit.of(db);
   const statements = new Map<string, ReturnType<typeof $client.prepare>>();
   return {
     prepare: (text: string) => {
@@ -106,7 +109,10 @@ function storeOf({ $client }: Database): object {
       if (!statement) statements.set(text, (statement = $client.prepare(text)));
       return statement;
     },
-    transaction: <Work>(work: Work): Work => work,
+    transaction:
+      <Result>(work: () => Result) =>
+      () =>
+        commits.run(work),
   };
 }
 

@@ -13,7 +13,7 @@ beforeEach(() => {
   folder = mkdtempSync(join(tmpdir(), "rhoform-group-"));
   db = openDatabase(join(folder, "rhoform.sqlite"));
   migrateDatabase(db);
-  commits = new GroupCommit(db);
+  commits = GroupCommit.of(db);
 });
 afterEach(() => {
   db.$client.close();
