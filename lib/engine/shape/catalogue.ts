@@ -30,8 +30,26 @@ import { sphericalShell } from "./radial/spherical-shell";
 import { torusArc } from "./radial/torus-arc";
 
 // spreading
+import { contactSpot } from "./spreading/contact-spot";
+import { cylinderInSquare } from "./spreading/cylinder-in-square";
+import { cylinderPlane } from "./spreading/cylinder-plane";
+import { eccentricCylinders } from "./spreading/eccentric-cylinders";
+import { ellipticContactSpot } from "./spreading/elliptic-contact-spot";
+import { parallelCylinders } from "./spreading/parallel-cylinders";
+import { sphereBuried } from "./spreading/sphere-buried";
+import { spherePair } from "./spreading/sphere-pair";
+import { spherePlane } from "./spreading/sphere-plane";
+import { spheroid } from "./spreading/spheroid";
 
 // sheet
+import { sheetBend } from "./sheet/sheet-bend";
+import { sheetDisc } from "./sheet/sheet-disc";
+import { sheetEndTerminal } from "./sheet/sheet-end-terminal";
+import { sheetMeander } from "./sheet/sheet-meander";
+import { sheetSlit } from "./sheet/sheet-slit";
+import { sheetStep } from "./sheet/sheet-step";
+import { sheetStrip } from "./sheet/sheet-strip";
+import { sheetTee } from "./sheet/sheet-tee";
 
 // earthing
 import { earthGrid } from "./earthing/earth-grid";
@@ -74,11 +92,27 @@ const radial: readonly Shape[] = [
 ];
 
 const spreading: readonly Shape[] = [
-  // spreading shapes
+  cylinderInSquare,
+  eccentricCylinders,
+  parallelCylinders,
+  cylinderPlane,
+  spherePlane,
+  sphereBuried,
+  spherePair,
+  spheroid,
+  contactSpot,
+  ellipticContactSpot,
 ];
 
 const sheet: readonly Shape[] = [
-  // sheet shapes
+  sheetStrip,
+  sheetBend,
+  sheetStep,
+  sheetMeander,
+  sheetEndTerminal,
+  sheetTee,
+  sheetSlit,
+  sheetDisc,
 ];
 
 const earthing: readonly Shape[] = [

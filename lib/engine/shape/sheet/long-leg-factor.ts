@@ -1,0 +1,48 @@
+/** A long-leg formula in squares with the bounds that its short legs leave. */
+import type { Factor } from "../define-shape";
+import { exactFactor, ROUNDING } from "../exact-factor";
+
+export interface LongLegs {
+  /** Squares with endless legs. */
+  readonly squares: number;
+  /** Most by which ending the current-carrying legs with terminals lowers it. */
+  readonly lowered: number;
+  /** Most by which ending floating legs with edges, or squeezing the flow into nearness, raises it. */
+  readonly raised?: number;
+  /** What conducting sheets across the legs leave: nothing can be lower. */
+  readonly least: number;
+  /** What insulating walls across floating legs leave: nothing can be higher. */
+  readonly most?: number;
+}
+
+/** Below this share of the value the legs are long to rounding. */
+const NEGLIGIBLE = 1e-15;
+/** From this share on a caution says that the legs are short. */
+const NOTEWORTHY = 1e-3;
+
+export function longLegFactor(legs: LongLegs): Factor {
+  const { squares, lowered, raised = 0, least, most = Infinity } = legs;
+  if (lowered + raised <= NEGLIGIBLE * squares) return exactFactor(squares);
+  // Dirichlet's principle gives R²/(R+Δ), a little more than R − Δ.
+  const lower = Math.min(squares, Math.max(least, squares * (squares / (squares + lowered))));
+  const upper = Math.max(squares, Math.min(most, squares + raised));
+  const share = (upper - lower) / squares;
+  return {
+    value: squares,
+    relativeError: ROUNDING,
+    lower,
+    upper,
+    boundsBasis: "formula-accuracy",
+    proved: false,
+    method: "closed-form",
+    accuracy:
+      "The value is exact for endless legs; the bounds hold what legs of this length can change, by Rayleigh's theorem and trial flows made from the modes of the junction.",
+    ...(share > NOTEWORTHY
+      ? {
+          cautions: [
+            `The legs are short against their width: the long-leg formula may be off by up to ${(100 * share).toPrecision(2)} %. A field solution on the outline gives closer bounds.`,
+          ],
+        }
+      : {}),
+  };
+}
