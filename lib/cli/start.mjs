@@ -17,16 +17,18 @@ function prepare() {
 
 /** Waits until the service answers; throws if it does not within a minute. */
 async function answers(base) {
+  let last = "there is no answer";
   for (let tries = 0; tries < 300; tries += 1) {
     try {
       const response = await fetch(`${base}/api/v1/health`);
       if (response.ok) return;
+      last = `the answer is ${response.status}`;
     } catch {
       // Not listening yet.
     }
     await new Promise((resolve) => setTimeout(resolve, 200));
   }
-  throw new SetupError(`The service does not answer at ${base}.`);
+  throw new SetupError(`The service is not well at ${base}: ${last}. The log in the data folder says more.`);
 }
 
 function greet({ origin, demo }) {

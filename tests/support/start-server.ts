@@ -28,10 +28,13 @@ export interface StartedService {
 export async function startService(
   variables: Readonly<Record<string, string>> = {},
   patience = 300_000,
+  /** Folder of the project to start, this one unless a copy is meant. */
+  project = process.cwd(),
 ): Promise<StartedService> {
   const port = await freePort();
   const folder = mkdtempSync(join(tmpdir(), "rhoform-server-"));
   const child = spawn(process.execPath, ["lib/cli/start.mjs"], {
+    cwd: project,
     env: { ...process.env, NODE_ENV: "production", PORT: String(port), RHOFORM_DATA: folder, ...variables },
     stdio: ["ignore", "pipe", "pipe"],
   });

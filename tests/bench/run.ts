@@ -1,0 +1,19 @@
+/** `npm run bench`: every measured promise, each against its limit; fails if one is missed. */
+import { benchEngine, printMeasurements } from "./engine.bench";
+import { benchServer } from "./server.bench";
+
+async function main(): Promise<void> {
+  const measurements = benchEngine();
+  console.log(printMeasurements(measurements));
+  const { empty, resistance, share, limit, passed } = await benchServer();
+  console.log(
+    `${passed ? "ok  " : "over"} POST /resistance ${resistance.toFixed(0)} calls/s, an empty route ${empty.toFixed(0)} calls/s: ` +
+      `${(100 * share).toFixed(0)} % (at least ${100 * limit} %)`,
+  );
+  if (!passed || measurements.some((measurement) => !measurement.passed)) process.exitCode = 1;
+}
+
+main().catch((error: unknown) => {
+  console.error(error);
+  process.exitCode = 1;
+});

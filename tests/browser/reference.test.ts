@@ -1,0 +1,63 @@
+import AxeBuilder from "@axe-core/playwright";
+import { afterAll, describe, expect, it } from "vitest";
+import { startServer } from "../support/server";
+import { base, closeBrowser, visit } from "./browser";
+
+afterAll(closeBrowser);
+
+describe("/docs/api", () => {
+  it("has a title, a language and one first heading before its script, and says what it needs", async () => {
+    const { page, close } = await visit("/docs/api", { scripts: false });
+    expect(await page.title()).toBe("API reference · Rhoform");
+    expect(await page.locator("html").getAttribute("lang")).toBe("en");
+    expect(await page.locator("h1").allTextContents()).toEqual(["Rhoform API reference"]);
+    expect(await page.locator("a[href='/api/v1/openapi.json']").count()).toBe(1);
+    await close();
+  });
+
+  it("is served wholly from this host, under the policy, and shows the operations", async () => {
+    const { page, requests, complaints, close } = await visit("/docs/api");
+    await page.getByText("Compute one resistance").first().waitFor({ timeout: 30_000 });
+    await page.waitForTimeout(2000);
+    expect(requests.filter((url) => !/^(data|blob):/.test(url) && !url.startsWith(base()))).toEqual([]);
+    expect(requests).toContain(`${base()}/api/v1/openapi.json`);
+    expect(complaints).toEqual([]);
+    expect(await page.locator("h1").count()).toBe(1);
+    await close();
+  });
+
+  it("sends a call with a key to this host", async () => {
+    const server = await startServer();
+    const { page, close } = await visit("/docs/api#tag/resistance/POST/resistance");
+    const button = page.getByRole("button", { name: /Test Request.*resistance/i }).first();
+    await button.waitFor({ timeout: 30_000 });
+    await page.getByPlaceholder("Token").first().fill(server.issue().key);
+    await button.click();
+    const answered = page.waitForResponse((response) => response.url().endsWith("/api/v1/resistance"));
+    await page.getByRole("button", { name: /^Send/ }).first().click();
+    expect((await answered).status()).toBe(200);
+    await close();
+    await server.stop();
+  });
+
+  // The package's own markup has faults of structure that we cannot mend; its colours are ours.
+  it.each(["light", "dark"] as const)("has the contrast of our colours in %s", async (colorScheme) => {
+    const { page, close } = await visit("/docs/api", { colorScheme });
+    await page.getByText("Compute one resistance").first().waitFor({ timeout: 30_000 });
+    const { violations } = await new AxeBuilder({ page })
+      .withRules(["color-contrast", "html-has-lang"])
+      .analyze();
+    expect(violations.flatMap(({ nodes }) => nodes.map(({ html }) => html))).toEqual([]);
+    await close();
+  });
+
+  it.each([360, 768, 1440])("fits %i px without scrolling sideways", async (width) => {
+    const { page, close } = await visit("/docs/api", { width });
+    await page.getByText("Compute one resistance").first().waitFor({ state: "attached", timeout: 30_000 });
+    const excess = await page.evaluate(
+      () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+    );
+    expect(excess).toBe(0);
+    await close();
+  });
+});
