@@ -94,7 +94,8 @@ export class Call {
   }
 }
 
-function subjectOf(principal: Exclude<Principal, { kind: "anonymous" }>): string {
+/** Whom a caller's counters belong to. */
+export function subjectOf(principal: Exclude<Principal, { kind: "anonymous" }>): string {
   return principal.kind === "key" ? `key:${principal.id}` : `address:${limitedAddress(principal.address)}`;
 }
 

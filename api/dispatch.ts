@@ -21,6 +21,8 @@ interface Report {
   accepts: string;
   shape: string | null;
   computations: number;
+  /** Reserved computations that a job goes on holding. */
+  held: number;
   /** The call was counted in the transaction that made its change. */
   counted: boolean;
 }
@@ -39,6 +41,7 @@ export async function dispatch(request: Request, service: Service, registry: Rou
     accepts: "application/json",
     shape: null,
     computations: 0,
+    held: 0,
     counted: false,
   };
   let answer: Answer;
@@ -50,7 +53,7 @@ export async function dispatch(request: Request, service: Service, registry: Rou
   }
   try {
     await discardBody(request);
-    await call.settle(report.computations);
+    await call.settle(report.computations + report.held);
     await countOnce(call, report, answer.status);
     log(call, report, answer.status);
     return await finished(call, notModified(call, answer), request.method === "HEAD");
@@ -138,7 +141,11 @@ async function perform(
     const outcome = "commit" in handled ? handled.commit() : handled;
     const answer = answerOf(outcome.status, outcome.content, outcome.headers);
     keep?.(answer, outcome);
-    const facts = { shape: outcome.shape ?? null, computations: outcome.computations ?? 0 };
+    const facts = {
+      shape: outcome.shape ?? null,
+      computations: outcome.computations ?? 0,
+      held: outcome.held ?? 0,
+    };
     count(call, { ...report, ...facts }, answer.status);
     return { answer, facts };
   });

@@ -41,6 +41,8 @@ export interface Outcome {
   readonly shape?: string;
   /** Computations that count against the month; what was reserved beyond them is given back. */
   readonly computations?: number;
+  /** Reserved computations that a job holds on to; it settles them at its end. */
+  readonly held?: number;
   /** What is kept for a repeat with the same Idempotency-Key where it differs from the answer: no secrets. */
   readonly repeat?: unknown;
 }

@@ -101,6 +101,12 @@ export const PROBLEMS: Readonly<Record<RefusalCode, ProblemKind>> = {
       "There is nothing under this id that the caller may see. What another team owns looks the same.",
     remedy: "Check the id, and that the key belongs to the right team.",
   },
+  "not-ready": {
+    status: 409,
+    title: "Not ready",
+    description: "The field solution has no picture: it is not finished yet, or it ended without a result.",
+    remedy: "Wait for its end (`Prefer: wait=30` on the solution, or its events) and ask again.",
+  },
   "unknown-path": {
     status: 404,
     title: "No such address",

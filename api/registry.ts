@@ -1,8 +1,11 @@
+import { readFieldEvents, readFieldLine, readFieldMap, readFieldPlot } from "./operations/field-pictures";
+import { deleteField, postField, readField } from "./operations/fields";
 import { deleteKey, listKeys, postKey, postRotation, readKey } from "./operations/keys";
 import { deleteMaterial, patchMaterial, postMaterial } from "./operations/material-changes";
 import { listMaterials, readMaterial } from "./operations/materials";
 import { readHealth } from "./operations/health";
 import { readOpenApi } from "./operations/openapi";
+import { postOutline, readOutline } from "./operations/outlines";
 import { deleteRecord, listRecords, patchRecord, readRecord, replayRecord } from "./operations/records";
 import { postResistance } from "./operations/resistance";
 import { getResistance } from "./operations/resistance-query";
@@ -16,6 +19,15 @@ export const registry = new RouteTable([
   readShape,
   postResistance,
   getResistance,
+  postOutline,
+  readOutline,
+  postField,
+  readField,
+  deleteField,
+  readFieldMap,
+  readFieldPlot,
+  readFieldLine,
+  readFieldEvents,
   listMaterials,
   postMaterial,
   readMaterial,

@@ -26,6 +26,43 @@ const FIXTURE_MATERIAL = {
   provenance: "measured",
 };
 
+const FIXTURE_OUTLINE = {
+  unit: "mm",
+  outer: [
+    [0, 0],
+    [40, 0],
+    [40, 10],
+    [10, 10],
+    [10, 40],
+    [0, 40],
+  ],
+};
+
+const FIXTURE_FIELD = {
+  outline: FIXTURE_OUTLINE,
+  terminals: [
+    {
+      name: "in",
+      segments: [
+        [
+          [40, 0],
+          [40, 10],
+        ],
+      ],
+    },
+    {
+      name: "out",
+      segments: [
+        [
+          [10, 40],
+          [0, 40],
+        ],
+      ],
+    },
+  ],
+  medium: { sheetResistance: 50 },
+};
+
 const FIXTURE_KEY = { name: "Nightly check", scopes: ["compute", "records:read"] };
 
 /** Makes what the examples speak of, by calls of the API itself. */
@@ -33,7 +70,7 @@ export async function makeFixtures(send: Send, key: string): Promise<Fixtures> {
   const make = async (path: string, body: unknown, member: (answer: Made) => string | undefined) => {
     const response = await send(BASE_PATH + path, {
       method: "POST",
-      headers: { Authorization: `Bearer ${key}`, "Content-Type": "application/json" },
+      headers: { Authorization: `Bearer ${key}`, "Content-Type": "application/json", Prefer: "wait=30" },
       body: JSON.stringify(body),
     });
     const text = await response.text();
@@ -43,12 +80,16 @@ export async function makeFixtures(send: Send, key: string): Promise<Fixtures> {
   };
   const record = () => make("/resistance", FIXTURE_RECORD, (answer) => answer.record?.id);
   const material = () => make("/materials", FIXTURE_MATERIAL, (answer) => answer.id);
+  const field = () => make("/fields", FIXTURE_FIELD, (answer) => answer.id);
   const issued = () => make("/keys", FIXTURE_KEY, (answer) => answer.id);
   return {
     $record: await record(),
     $oldRecord: await record(),
     $material: await material(),
     $oldMaterial: await material(),
+    $outline: await make("/outlines", { outline: FIXTURE_OUTLINE }, (answer) => answer.id),
+    $field: await field(),
+    $oldField: await field(),
     $key: await issued(),
     $oldKey: await issued(),
   };

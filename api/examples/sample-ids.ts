@@ -1,6 +1,7 @@
 import { createHash } from "node:crypto";
 
-const RANDOM = /\b(?:(?:act|mat|per|rec|req|sec|team)_[0-9A-Za-z]{16}|mat-[0-9a-z]{20}|k[0-9A-Za-z]{15})\b/g;
+const RANDOM =
+  /\b(?:(?:act|fld|mat|out|per|rec|req|sec|team)_[0-9A-Za-z]{16}|mat-[0-9a-z]{20}|k[0-9A-Za-z]{15})\b/g;
 const CURSOR = /"next":"([\w-]+)"/g;
 const KEY = /\brho_(k[0-9A-Za-z]{15})_[0-9A-Za-z]{43}\b/g;
 

@@ -5,6 +5,7 @@ import { issueKey } from "@/lib/auth/manage-keys";
 import { SCOPE_NAMES } from "@/lib/auth/scope";
 import { readConfig } from "@/lib/config/environment";
 import { type Bucket, type BucketState, Limiter } from "@/lib/limits/limiter";
+import { InlineRunner } from "@/lib/jobs/worker-pool";
 import { openLog } from "@/lib/service/log";
 import { assembleService, type Service } from "@/lib/service/service";
 
@@ -38,7 +39,10 @@ export function scratchService(origin: string): Scratch {
   // One second a call, so that lists have an order.
   let now = MOMENT;
   const clock = () => (now += 1000);
-  const service = { ...assembleService(config, db, openLog("off"), clock), limiter: new SteadyLimiter(db) };
+  const service = assembleService(config, db, openLog("off"), clock, {
+    limiter: new SteadyLimiter(db),
+    runner: new InlineRunner(),
+  });
   const teamId = "team_0000000000000000";
   insertTeam(db, { id: teamId, slug: "busbar", name: "Busbar", createdAt: MOMENT });
   const { text } = issueKey(db, {

@@ -9,6 +9,7 @@ const DEADLINE_MS = 10_000;
 function main(): void {
   const service = openService(readConfig(process.env));
   const { host, port } = service.config;
+  service.fields.open();
   const server = createApiServer(service);
   server.listen(port, host, () => {
     const address = server.address();
@@ -20,6 +21,7 @@ function main(): void {
   const stop = () => {
     if (stopping) return;
     stopping = true;
+    service.fields.close();
     server.close(() => closeService(service));
     server.closeIdleConnections();
     setTimeout(() => server.closeAllConnections(), DEADLINE_MS).unref();

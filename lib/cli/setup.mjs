@@ -102,7 +102,11 @@ const STAMP = join(ROOT, ".next", "rhoform-sources");
 /** Builds the pages if their sources changed since the last build. */
 export function ensureBuilt() {
   const hash = hashSources();
-  const built = existsSync(STAMP) && existsSync(join(ROOT, ".next", "BUILD_ID"));
+  const built = [
+    STAMP,
+    join(ROOT, ".next", "BUILD_ID"),
+    join(ROOT, "dist", "workers", "field-worker.mjs"),
+  ].every((path) => existsSync(path));
   if (built && readFileSync(STAMP, "utf8") === hash) return;
   console.error("Building …");
   build(hash);
@@ -110,11 +114,16 @@ export function ensureBuilt() {
 
 /** Builds in any case, and remembers from what. */
 export function build(hash = hashSources()) {
+  buildWorkers();
   runNode("node_modules/next/dist/bin/next", ["build"], {
     quiet: true,
     env: { NODE_ENV: "production", NEXT_TELEMETRY_DISABLED: "1" },
   });
   writeFileSync(STAMP, hash);
+}
+
+export function buildWorkers() {
+  runNode("lib/cli/build-workers.mjs", [], { quiet: true });
 }
 
 function hashSources() {

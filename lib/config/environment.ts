@@ -1,3 +1,4 @@
+import { availableParallelism } from "node:os";
 import { isAbsolute, join, resolve } from "node:path";
 import { z } from "zod";
 import { keptSecret } from "./secret";
@@ -19,6 +20,10 @@ export interface Config {
   readonly log: string;
   /** Requests a minute that an address has without a key: the catalogue, the document, refused credentials. */
   readonly addressMinuteQuota: number;
+  /** Threads that solve fields. */
+  readonly workers: number;
+  /** Longest time a field solution may take, s. */
+  readonly fieldSeconds: number;
 }
 
 const flag = z.enum(["0", "1", "false", "true"]).transform((value) => value === "1" || value === "true");
@@ -44,6 +49,19 @@ const environment = z.object({
   RHOFORM_ADDRESS_QUOTA: z.preprocess(
     (value) => (value === "" ? undefined : value),
     z.coerce.number().int().min(1).max(1_000_000).default(600),
+  ),
+  RHOFORM_WORKERS: z.preprocess(
+    (value) => (value === "" ? undefined : value),
+    z.coerce
+      .number()
+      .int()
+      .min(1)
+      .max(64)
+      .default(Math.max(1, Math.min(4, availableParallelism() - 1))),
+  ),
+  RHOFORM_FIELD_SECONDS: z.preprocess(
+    (value) => (value === "" ? undefined : value),
+    z.coerce.number().min(1).max(3600).default(120),
   ),
 });
 
@@ -75,8 +93,11 @@ export function readConfig(variables: Readonly<Record<string, string | undefined
     secret: settings.RHOFORM_SECRET ?? keptSecret(dataFolder),
     demo: settings.RHOFORM_DEMO,
     trustedProxies: (settings.RHOFORM_TRUSTED_PROXIES ?? "").split(/[\s,]+/).filter((entry) => entry !== ""),
-    log: log === "stdout" || log === "off" || isAbsolute(log) ? log : resolve(/* turbopackIgnore: true */ log),
+    log:
+      log === "stdout" || log === "off" || isAbsolute(log) ? log : resolve(/* turbopackIgnore: true */ log),
     addressMinuteQuota: settings.RHOFORM_ADDRESS_QUOTA,
+    workers: settings.RHOFORM_WORKERS,
+    fieldSeconds: settings.RHOFORM_FIELD_SECONDS,
   };
 }
 

@@ -113,5 +113,6 @@ export { boundaryFlux } from "./field/picture/boundary-flux";
 export { fieldLines } from "./field/picture/contours";
 export type { FieldMap } from "./field/picture/field-map";
 export { sampleLine } from "./field/picture/line";
+export { plotSvg, type PlotText } from "./field/picture/plot-svg";
 export { densityPeak } from "./field/picture/peak";
 export { densityRaster } from "./field/picture/raster";

@@ -14,6 +14,7 @@ export type RefusalCode =
   | "team-required"
   | "library-read-only"
   | "not-found"
+  | "not-ready"
   | "unknown-path"
   | "method-not-allowed"
   | "not-acceptable"

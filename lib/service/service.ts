@@ -1,7 +1,10 @@
+import { join } from "node:path";
 import { type Database, migrateDatabase, sharedDatabase } from "@/db/client";
 import { GroupCommit } from "@/db/group-commit";
 import { type Config, readConfig } from "../config/environment";
 import { AddressBook } from "../http/client-address";
+import { FieldJobs } from "../jobs/field-jobs";
+import { type TaskRunner, WorkerPool } from "../jobs/worker-pool";
 import { Limiter } from "../limits/limiter";
 import { type Log, openLog } from "./log";
 
@@ -14,6 +17,8 @@ export interface Service {
   readonly log: Log;
   readonly limiter: Limiter;
   readonly addresses: AddressBook;
+  /** Field solutions; nothing runs before the first one comes or `open` is called. */
+  readonly fields: FieldJobs;
   /** Unix time, ms. */
   readonly now: () => number;
 }
@@ -26,21 +31,40 @@ export function openService(config: Config, now: () => number = Date.now): Servi
 }
 
 /** A service on a database that is open and migrated. */
-export function assembleService(config: Config, db: Database, log: Log, now: () => number): Service {
+export function assembleService(
+  config: Config,
+  db: Database,
+  log: Log,
+  now: () => number,
+  parts: { readonly limiter?: Limiter; readonly runner?: TaskRunner } = {},
+): Service {
+  const limiter = parts.limiter ?? new Limiter(db);
+  const fields = new FieldJobs({
+    db,
+    limiter,
+    log,
+    folder: join(config.dataFolder, "fields"),
+    runner: parts.runner ?? new WorkerPool(config.workers),
+    secondsAllowed: config.fieldSeconds,
+    now,
+  });
   return {
     config,
     db,
-    commits: new GroupCommit(db),
+    commits: GroupCommit.of(db),
     log,
-    limiter: new Limiter(db),
+    limiter,
     addresses: new AddressBook(config.trustedProxies),
+    fields,
     now,
   };
 }
 
-/** Ends a service: the write-ahead log is folded into the database file. */
+/** Ends a service: unfinished field solutions are handed back and the write-ahead log is folded into the database file. */
 export function closeService(service: Service): void {
-  if (service.db.$client.open) service.db.$client.close();
+  if (!service.db.$client.open) return;
+  service.fields.close();
+  service.db.$client.close();
 }
 
 const SHARED = Symbol.for("rhoform.service");

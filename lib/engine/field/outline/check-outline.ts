@@ -35,14 +35,18 @@ export type OutlineCheck =
 
 /**
  * Checks an outline with its terminals, repairs what is harmless and refuses the rest with pointers into the request.
- * The request must have passed `outlineSchema` and `terminalSchema`. Takes n log n time.
+ * The request must have passed `outlineSchema` and `terminalSchema`. Takes n log n time. An outline that is only
+ * stored needs no terminals yet.
  */
-export function checkOutline(request: OutlineRequest): OutlineCheck {
+export function checkOutline(
+  request: OutlineRequest,
+  { leastTerminals = 2 }: { readonly leastTerminals?: number } = {},
+): OutlineCheck {
   const { outline, terminals } = request;
   const rings = [outline.outer, ...outline.holes];
   const pointers = rings.map((_, r) => ringPointer(r));
   const axisymmetric = outline.symmetry === "axisymmetric";
-  const errors: OutlineError[] = [...checkSize(request, rings), ...checkTerminalList(terminals)];
+  const errors: OutlineError[] = [...checkSize(request, rings), ...checkTerminalList(terminals, leastTerminals)];
   if (errors.some((e) => e.pointer === "#/outline")) return { ok: false, errors };
   rings.forEach((ring, r) => errors.push(...checkCoordinates(ring, pointers[r], outline.unit)));
   if (errors.some((e) => e.pointer.startsWith("#/outline"))) return { ok: false, errors };

@@ -1,9 +1,9 @@
 import type { OutlineError, TerminalInput } from "./schema";
 
 /** Complaints about the list of terminals as such: how many, their names, whether each names some boundary. */
-export function checkTerminalList(terminals: readonly TerminalInput[]): OutlineError[] {
+export function checkTerminalList(terminals: readonly TerminalInput[], least = 2): OutlineError[] {
   const errors: OutlineError[] = [];
-  if (terminals.length < 2) {
+  if (terminals.length < least) {
     errors.push({
       pointer: "#/terminals",
       detail: `${terminals.length === 0 ? "There is no terminal" : "There is only one terminal"}; a resistance needs at least two.`,

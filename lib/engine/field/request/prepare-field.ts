@@ -26,6 +26,8 @@ export interface FieldContext {
 
 export interface PreparedField {
   readonly request: FieldRequest;
+  /** The same problem as a body that needs nothing stored: to be solved later, or again. */
+  readonly body: Omit<FieldRequest, "outlineId" | "record">;
   readonly problem: FieldProblem;
   /** Largest relative rounding error of the medium's numbers; the bounds are widened by it. */
   readonly mediumError: number;
@@ -85,8 +87,10 @@ export function prepareField(body: unknown, context: FieldContext): PreparedFiel
   }
   problems.throwIfAny();
   if (!check.ok || !medium) throw new InputError(problems.list);
+  const { outlineId: _id, record: _record, ...rest } = request;
   return {
     request,
+    body: { ...rest, outline, terminals: [...terminals] },
     problem: { outline: check.outline, conductance: medium.conductance },
     mediumError: medium.relativeError,
     operating,

@@ -1,0 +1,241 @@
+/** The finished picture of a field solution: legible alone, with scale bar, terminals and legend. */
+import { contours } from "d3-contour";
+import { formatQuantity } from "../../quantity/format-quantity";
+import { boundaryRings } from "./boundary-rings";
+import { densityRamp } from "./color-ramp";
+import { fieldLines } from "./contours";
+import type { FieldMap } from "./field-map";
+import { densityRaster, type DensityRaster } from "./raster";
+
+export interface PlotText {
+  /** First line, such as "R = 327.94 Ω". */
+  readonly title: string;
+  /** Second line: bounds and their basis. */
+  readonly subtitle: string;
+  readonly terminalNames: readonly string[];
+  /** The outline's unit. */
+  readonly unit: string;
+}
+
+const WIDTH = 960;
+const MARGIN = 56;
+const HEAD = 76;
+const FOOT = 108;
+/** Tallest and flattest drawing, as height over width; longer ones are fitted into the frame. */
+const TALLEST = 1;
+const FLATTEST = 0.22;
+const BANDS = 9;
+const LINES = 20;
+/** Densities above this share of the raster's cells are one colour: a corner would swallow the scale. */
+const TOP_SHARE = 0.985;
+
+/** SVG text of the picture. */
+export function plotSvg(map: FieldMap, text: PlotText): string {
+  const { rings, pieces } = boundaryRings(map);
+  const box = boxOf(rings);
+  const inner = WIDTH - 2 * MARGIN;
+  const shape = (box.maxY - box.minY) / (box.maxX - box.minX);
+  const height = inner * Math.min(TALLEST, Math.max(FLATTEST, shape));
+  const scale = Math.min(inner / (box.maxX - box.minX), height / (box.maxY - box.minY));
+  const left = MARGIN + (inner - scale * (box.maxX - box.minX)) / 2;
+  const top = HEAD + (height - scale * (box.maxY - box.minY)) / 2;
+  const px = (x: number): number => left + scale * (x - box.minX);
+  const py = (y: number): number => top + scale * (box.maxY - y);
+  const path = (line: readonly number[], closed = false): string => {
+    let d = "";
+    for (let k = 0; k < line.length; k += 2)
+      d += `${k === 0 ? "M" : "L"}${n(px(line[k]))} ${n(py(line[k + 1]))}`;
+    return closed ? `${d}Z` : d;
+  };
+  const outline = rings.map((ring) => path(ring, true)).join("");
+  const raster = densityRaster(map, 200);
+  const bands = densityBands(raster);
+  const lines = fieldLines(map, LINES, LINES);
+  const equipotentials = lines.equipotentials
+    .flatMap((level) => level.lines.map((line) => path(line)))
+    .join("");
+  const streamlines = lines.streamlines.map((line) => path(line)).join("");
+  const total = HEAD + height + FOOT;
+  const terminals = pieces.map(({ terminal, line }) => {
+    const high = terminal === map.between[0];
+    const [x, y] = middleOf(line);
+    const colour = high ? "#9c4a1f" : "#1f6f62";
+    const anchor = px(x) < WIDTH / 2 ? "start" : "end";
+    const dx = px(x) < WIDTH / 2 ? 10 : -10;
+    return (
+      `<path d="${path(line)}" fill="none" stroke="${colour}" stroke-width="6" stroke-linecap="round"/>` +
+      `<text x="${n(px(x) + dx)}" y="${n(py(y) + 5)}" text-anchor="${anchor}" class="name" fill="${colour}">${escape(text.terminalNames[terminal] ?? "")}</text>`
+    );
+  });
+  const axis = map.axisymmetric
+    ? `<path d="M${n(px(0))} ${n(top)}V${n(top + scale * (box.maxY - box.minY))}" stroke="#566067" stroke-dasharray="14 4 3 4"/>`
+    : "";
+  return [
+    `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${WIDTH} ${n(total)}" width="${WIDTH}" height="${n(total)}" role="img" aria-labelledby="t d">`,
+    `<title id="t">${escape(text.title)}</title>`,
+    `<desc id="d">${escape(text.subtitle)} ${LINES - 1} equipotentials and ${LINES} stream lines over the current density.</desc>`,
+    `<style>text{font:14px "Spline Sans",system-ui,sans-serif;fill:#1b2226}.title{font-size:22px;font-weight:600}.soft{fill:#566067}.name{font-weight:600;paint-order:stroke;stroke:#faf8f3;stroke-width:4px}</style>`,
+    `<rect width="${WIDTH}" height="${n(total)}" fill="#faf8f3"/>`,
+    `<text x="${MARGIN}" y="34" class="title">${escape(text.title)}</text>`,
+    `<text x="${MARGIN}" y="57" class="soft">${escape(text.subtitle)}</text>`,
+    `<clipPath id="c"><path d="${outline}" clip-rule="evenodd"/></clipPath>`,
+    `<g clip-path="url(#c)">`,
+    `<path d="${outline}" fill="${bands.colours[0]}"/>`,
+    ...bands.levels.map(
+      ({ colour, polygons }) =>
+        `<path d="${bandPath(polygons, raster, path)}" fill="${colour}" fill-rule="evenodd"/>`,
+    ),
+    `<path d="${equipotentials}" fill="none" stroke="#1b2226" stroke-width="0.8"/>`,
+    `<path d="${streamlines}" fill="none" stroke="#1f6f62" stroke-width="0.8" stroke-dasharray="6 3"/>`,
+    `</g>`,
+    `<path d="${outline}" fill="none" stroke="#1b2226" stroke-width="1.5" stroke-linejoin="round"/>`,
+    axis,
+    ...terminals,
+    scaleBar(scale, total, text.unit),
+    legend(bands, total, map),
+    `</svg>`,
+  ].join("\n");
+}
+
+interface Box {
+  readonly minX: number;
+  readonly minY: number;
+  readonly maxX: number;
+  readonly maxY: number;
+}
+
+function boxOf(rings: readonly number[][]): Box {
+  const box = { minX: Infinity, minY: Infinity, maxX: -Infinity, maxY: -Infinity };
+  for (const ring of rings) {
+    for (let k = 0; k < ring.length; k += 2) {
+      box.minX = Math.min(box.minX, ring[k]);
+      box.maxX = Math.max(box.maxX, ring[k]);
+      box.minY = Math.min(box.minY, ring[k + 1]);
+      box.maxY = Math.max(box.maxY, ring[k + 1]);
+    }
+  }
+  return box;
+}
+
+interface Bands {
+  readonly colours: readonly string[];
+  /** Lower limits of the bands, for one volt. */
+  readonly limits: readonly number[];
+  readonly levels: readonly { readonly colour: string; readonly polygons: number[][][][] }[];
+}
+
+function densityBands(raster: DensityRaster): Bands {
+  const { columns, rows } = raster;
+  const known = raster.density.filter((value) => value !== null).sort((a, b) => a - b);
+  const most = known[Math.min(known.length - 1, Math.floor(TOP_SHARE * known.length))] ?? 1;
+  const colours = densityRamp(BANDS);
+  const limits = colours.map((_, k) => (k / BANDS) * most);
+  const values = filled(raster);
+  const make = contours().size([columns, rows]).smooth(true);
+  const levels = colours.slice(1).map((colour, k) => ({
+    colour,
+    polygons: make.contour(values, limits[k + 1]).coordinates,
+  }));
+  return { colours, limits, levels };
+}
+
+/** Cells outside the conductor take the value of a neighbour inside, so that bands run on to its edge. */
+function filled({ columns, rows, density }: DensityRaster): number[] {
+  const values = density.slice();
+  for (let round = 0; round < 3; round++) {
+    const before = values.slice();
+    for (let j = 0; j < rows; j++) {
+      for (let i = 0; i < columns; i++) {
+        if (before[j * columns + i] !== null) continue;
+        let sum = 0;
+        let count = 0;
+        for (const [di, dj] of [
+          [1, 0],
+          [-1, 0],
+          [0, 1],
+          [0, -1],
+          [1, 1],
+          [-1, -1],
+          [1, -1],
+          [-1, 1],
+        ]) {
+          const [a, b] = [i + di, j + dj];
+          const value = a < 0 || b < 0 || a >= columns || b >= rows ? null : before[b * columns + a];
+          if (value === null) continue;
+          sum += value;
+          count++;
+        }
+        if (count > 0) values[j * columns + i] = sum / count;
+      }
+    }
+  }
+  return values.map((value) => value ?? 0);
+}
+
+/** Grid coordinates of d3-contour have cell k between k and k + 1. */
+function bandPath(
+  polygons: number[][][][],
+  { origin, cell }: DensityRaster,
+  path: (line: readonly number[], closed: boolean) => string,
+): string {
+  const place = ([x, y]: number[]): number[] => [origin[0] + (x - 0.5) * cell, origin[1] + (y - 0.5) * cell];
+  return polygons.flatMap((rings) => rings.map((ring) => path(ring.flatMap(place), true))).join("");
+}
+
+/** The point half way along a line. */
+function middleOf(line: readonly number[]): [number, number] {
+  const lengths: number[] = [];
+  for (let k = 2; k < line.length; k += 2)
+    lengths.push(Math.hypot(line[k] - line[k - 2], line[k + 1] - line[k - 1]));
+  let rest = lengths.reduce((a, b) => a + b, 0) / 2;
+  for (let k = 0; k < lengths.length; k++) {
+    if (rest <= lengths[k] && lengths[k] > 0) {
+      const t = rest / lengths[k];
+      return [
+        line[2 * k] + t * (line[2 * k + 2] - line[2 * k]),
+        line[2 * k + 1] + t * (line[2 * k + 3] - line[2 * k + 1]),
+      ];
+    }
+    rest -= lengths[k];
+  }
+  return [line[0], line[1]];
+}
+
+function scaleBar(scale: number, total: number, unit: string): string {
+  const wanted = 180 / scale;
+  const power = 10 ** Math.floor(Math.log10(wanted));
+  const length = [5, 2, 1].map((f) => f * power).find((l) => l <= wanted) ?? power;
+  const y = total - 64;
+  const width = length * scale;
+  return (
+    `<path d="M${MARGIN} ${n(y - 5)}v10m0 -5h${n(width)}m0 -5v10" stroke="#1b2226" fill="none"/>` +
+    `<text x="${MARGIN}" y="${n(y + 24)}">${Number(length.toPrecision(3))}\u2009${escape(unit)}</text>`
+  );
+}
+
+function legend(bands: Bands, total: number, map: FieldMap): string {
+  const x = WIDTH - MARGIN - 360;
+  const y = total - 76;
+  const width = 360 / BANDS;
+  const unit = map.axisymmetric ? "A/m^2" : "A/m";
+  const boxes = bands.colours.map(
+    (colour, k) =>
+      `<rect x="${n(x + k * width)}" y="${n(y)}" width="${n(width)}" height="14" fill="${colour}"/>`,
+  );
+  const top = bands.limits[BANDS - 1];
+  return [
+    ...boxes,
+    `<rect x="${n(x)}" y="${n(y)}" width="360" height="14" fill="none" stroke="#857f73"/>`,
+    `<text x="${n(x)}" y="${n(y + 32)}">0</text>`,
+    `<text x="${n(x + 360)}" y="${n(y + 32)}" text-anchor="end">${escape(formatQuantity(top, unit, { digits: 3 }))} and more, at one volt</text>`,
+    `<text x="${n(x + 360)}" y="${n(y + 54)}" text-anchor="end" class="soft">solid: equipotentials, ${100 / LINES} % of the voltage apart · dashed: stream lines, ${100 / LINES} % of the current apart</text>`,
+  ].join("\n");
+}
+
+function n(value: number): string {
+  return String(Math.round(value * 100) / 100);
+}
+
+function escape(text: string): string {
+  return text.replace(/[&<>"']/g, (c) => `&#${c.charCodeAt(0)};`);
+}

@@ -1,0 +1,34 @@
+import type { FieldRow, OutlineRow } from "@/db/queries/fields";
+import type { CleanedOutline } from "@/lib/engine";
+
+/** A field solution as it is answered. */
+export function fieldView(row: FieldRow, recordUrl: (id: string) => string) {
+  return {
+    id: row.id,
+    status: row.status,
+    createdAt: new Date(row.createdAt).toISOString(),
+    finishedAt: row.finishedAt === null ? null : new Date(row.finishedAt).toISOString(),
+    progress: row.progress,
+    result: row.result === null ? null : (JSON.parse(row.result) as unknown),
+    ...(row.failure === null ? {} : { failure: row.failure }),
+    ...(row.recordId === null ? {} : { record: { id: row.recordId, url: recordUrl(row.recordId) } }),
+  };
+}
+
+export function contentOf(row: OutlineRow): CleanedOutline {
+  // Written by this application only, from what `cleanOutline` made.
+  return JSON.parse(row.content) as CleanedOutline;
+}
+
+/** A stored outline as it is answered. */
+export function outlineView(row: OutlineRow) {
+  const { outline, terminals, repairs } = contentOf(row);
+  return {
+    id: row.id,
+    createdAt: new Date(row.createdAt).toISOString(),
+    outline,
+    terminals,
+    regions: [],
+    repairs,
+  };
+}
