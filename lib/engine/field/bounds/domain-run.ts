@@ -17,7 +17,9 @@ export interface DomainRun {
 
 export function solveDomain(run: DomainRun): AdaptiveResult {
   const { domain, ...rest } = run;
-  const { mesh } = meshDomain(domain);
+  // A medium that is a function may vary along a stretch, all the more in narrow parts; a body of revolution always has one.
+  const spanChannels = domain.axisymmetric || run.medium.every((m) => typeof m === "number");
+  const { mesh } = meshDomain(domain, { spanChannels });
   const revolution = domain.axisymmetric;
   return solveAdaptively({ ...rest, mesh, revolution, reference: new BoundaryReference(domain, mesh) });
 }

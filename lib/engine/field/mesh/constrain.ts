@@ -147,29 +147,27 @@ function flipAway(mesh: Triangulation, a: number, b: number, crossing: number[])
 /** Flips the given edges (vertex pairs), and what they upset, until each is locally Delaunay or constrained. */
 function restore(mesh: Triangulation, edges: number[]): void {
   const { corner, twin, mark, xy } = mesh;
+  // Three numbers each: the ends, and the half-edge where they were seen last.
+  const stack: number[] = [];
+  for (let i = 0; i < edges.length; i += 2) stack.push(edges[i], edges[i + 1], -1);
   // Lawson's flips end by themselves; the limit only guards against a broken structure.
   let budget = 64 * edges.length + 1000;
-  while (edges.length > 0 && budget-- > 0) {
-    const v = edges.pop() as number;
-    const u = edges.pop() as number;
-    const h = mesh.findEdge(u, v);
+  while (stack.length > 0 && budget-- > 0) {
+    let h = stack.pop() as number;
+    const b = stack.pop() as number;
+    const a = stack.pop() as number;
+    if (h < 0 || corner[h] !== a || corner[nextEdge(h)] !== b) h = mesh.findEdge(a, b);
     if (h < 0 || mark[h] !== 0 || twin[h] < 0) continue;
-    const a = corner[h];
-    const b = corner[nextEdge(h)];
     const c = corner[previousEdge(h)];
     const d = corner[previousEdge(twin[h])];
-    const inside = inCircle(
-      xy[2 * a],
-      xy[2 * a + 1],
-      xy[2 * b],
-      xy[2 * b + 1],
-      xy[2 * c],
-      xy[2 * c + 1],
-      xy[2 * d],
-      xy[2 * d + 1],
-    );
-    if (inside <= 0) continue;
+    const ax = xy[2 * a];
+    const ay = xy[2 * a + 1];
+    const bx = xy[2 * b];
+    const by = xy[2 * b + 1];
+    if (!(inCircle(ax, ay, bx, by, xy[2 * c], xy[2 * c + 1], xy[2 * d], xy[2 * d + 1]) > 0)) continue;
+    const t = h - (h % 3);
+    const s = twin[h] - (twin[h] % 3);
     flip(mesh, h);
-    edges.push(a, d, d, b, b, c, c, a);
+    stack.push(d, b, t, b, c, t + 1, c, a, s, a, d, s + 1);
   }
 }

@@ -1,4 +1,5 @@
 import type { Domain } from "../outline/domain";
+import { FROZEN, spanChannels } from "./channels";
 import type { FieldMesh } from "./mesh";
 import { carveDomain, triangulateGraph } from "./planar-graph";
 import { refineQuality, type MeshStatus, type QualityOptions } from "./quality";
@@ -9,14 +10,29 @@ export interface MeshedDomain {
   readonly status: MeshStatus;
 }
 
+export interface MeshOptions extends Partial<QualityOptions> {
+  /**
+   * Span long straight stretches between parallel borders by single cells (default true). Only where the medium is
+   * uniform is the field nearly linear there; for one that varies along the stretch, say false.
+   */
+  readonly spanChannels?: boolean;
+}
+
 /**
- * The first mesh of a domain: constrained Delaunay, refined to the smallest angle asked for (default 20°, where the
- * outline is not sharper itself). The allowance of vertices defaults to 30,000 plus ten for each point of the domain.
+ * The first mesh of a domain: constrained Delaunay, refined to the smallest angle asked for (default 20°), except at sharper
+ * corners of the outline itself and in spanned channels, whose triangles have one angle near 90° instead. The
+ * allowance of vertices defaults to 30,000 plus ten for each point of the domain; running into it is a status.
  */
-export function meshDomain(domain: Domain, options: Partial<QualityOptions> = {}): MeshedDomain {
+export function meshDomain(domain: Domain, options: MeshOptions = {}): MeshedDomain {
   const triangulation = triangulateGraph(domain);
   carveDomain(triangulation, domain);
-  const status = refineQuality(triangulation, domain, {
+  const firstMark = domain.segmentSide.length + 1;
+  const cuts =
+    options.spanChannels === false ? [] : spanChannels(triangulation, firstMark, domain.axisymmetric);
+  const segments = new Int32Array(domain.segments.length + cuts.length);
+  segments.set(domain.segments);
+  segments.set(cuts, domain.segments.length);
+  const status = refineQuality(triangulation, segments, {
     minimumAngleDeg: options.minimumAngleDeg ?? 20,
     maximumVertices: options.maximumVertices ?? 30_000 + 5 * domain.xy.length,
   });
@@ -45,7 +61,7 @@ function extractMesh(source: Triangulation, domain: Domain): FieldMesh {
       }
       triangles[3 * k + i] = number[v];
     }
-    region[k++] = label[t];
+    region[k++] = label[t] & (FROZEN - 1);
   }
   return {
     xy: points.slice(0, 2 * vertexCount),

@@ -1,4 +1,4 @@
-import type { Domain } from "../outline/domain";
+import { FROZEN } from "./channels";
 import { orient } from "./predicates";
 import { FAR_VERTICES } from "./planar-graph";
 import { nextEdge, previousEdge, type Triangulation } from "./triangulation";
@@ -26,9 +26,14 @@ const BUCKETS = 48;
  * itself is that sharp. J. Ruppert, Journal of Algorithms 18 (1995) 548; off-centres after A. Üngör, LATIN 2004;
  * segments at sharp corners are split on concentric circles, and a triangle whose shortest edge joins two such
  * points of one circle is left alone (G. L. Miller, S. E. Pav, N. J. Walkington, 2003), so that it ends.
+ * `segments` are the two points of each constraint, in the order of the marks; frozen triangles are left as they are.
  */
-export function refineQuality(mesh: Triangulation, domain: Domain, options: QualityOptions): MeshStatus {
-  return new Refiner(mesh, domain, options).run();
+export function refineQuality(
+  mesh: Triangulation,
+  segments: Int32Array,
+  options: QualityOptions,
+): MeshStatus {
+  return new Refiner(mesh, segments, options).run();
 }
 
 class Refiner {
@@ -47,11 +52,11 @@ class Refiner {
 
   constructor(
     private readonly mesh: Triangulation,
-    domain: Domain,
+    segments: Int32Array,
     options: QualityOptions,
   ) {
-    this.segments = domain.segments;
-    this.sharp = new Uint8Array(domain.segments.length);
+    this.segments = segments;
+    this.sharp = new Uint8Array(segments.length);
     this.vertexSegment = new Int32Array(Math.max(64, 2 * mesh.vertexCount)).fill(INPUT, 0, mesh.vertexCount);
     const cosine = Math.cos((options.minimumAngleDeg * Math.PI) / 180);
     this.cosineSquared = cosine * cosine;
@@ -105,16 +110,16 @@ class Refiner {
       if (dot <= ACUTE_COSINE * Math.sqrt((px * px + py * py) * (qx * qx + qy * qy))) continue;
       if (orient(xy[2 * v], xy[2 * v + 1], xy[2 * p], xy[2 * p + 1], xy[2 * q], xy[2 * q + 1]) <= 0) continue;
       for (const m of [mark[h], mark[g]]) {
-        const first = segments[2 * (m - 1)] + FAR_VERTICES;
-        sharp[2 * (m - 1) + (first === v ? 0 : 1)] = 1;
+        if (segments[2 * (m - 1)] + FAR_VERTICES === v) sharp[2 * (m - 1)] = 1;
+        if (segments[2 * (m - 1) + 1] + FAR_VERTICES === v) sharp[2 * (m - 1) + 1] = 1;
       }
     }
   }
 
   /** Queues half-edge h when it is constrained and the apex of its triangle lies inside its diametral circle. */
   private checkEdge(h: number): void {
-    const { mark, corner, xy } = this.mesh;
-    if (mark[h] === 0) return;
+    const { mark, corner, xy, label } = this.mesh;
+    if (mark[h] === 0 || label[(h / 3) | 0] >= FROZEN) return;
     const a = corner[h];
     const b = corner[nextEdge(h)];
     const c = corner[previousEdge(h)];
@@ -140,7 +145,7 @@ class Refiner {
   }
 
   private splitSegment(h: number): void {
-    const { mesh, segments, sharp } = this;
+    const { mesh } = this;
     const { corner, xy, mark } = mesh;
     const a = corner[h];
     const b = corner[nextEdge(h)];
@@ -149,9 +154,8 @@ class Refiner {
     const dy = xy[2 * b + 1] - xy[2 * a + 1];
     const length = Math.sqrt(dx * dx + dy * dy);
     if (length < 2 * SHORTEST) return;
-    const first = segments[2 * segment] + FAR_VERTICES;
-    const sharpA = this.vertexSegment[a] === INPUT && sharp[2 * segment + (first === a ? 0 : 1)] === 1;
-    const sharpB = this.vertexSegment[b] === INPUT && sharp[2 * segment + (first === b ? 0 : 1)] === 1;
+    const sharpA = this.isSharpEnd(segment, a);
+    const sharpB = this.isSharpEnd(segment, b);
     let share = 0.5;
     if (sharpA || sharpB) {
       const shell = 2 ** Math.round(Math.log2(length / 2));
@@ -165,6 +169,13 @@ class Refiner {
     this.noteVertex(v, segment);
     mesh.fill(v, a, b, segment + 1);
     this.inspectCreated();
+  }
+
+  /** Vertex v is an end of the whole segment at which it makes a sharp corner. */
+  private isSharpEnd(segment: number, v: number): boolean {
+    const { segments, sharp } = this;
+    if (segments[2 * segment] + FAR_VERTICES === v) return sharp[2 * segment] === 1;
+    return segments[2 * segment + 1] + FAR_VERTICES === v && sharp[2 * segment + 1] === 1;
   }
 
   private noteVertex(v: number, segment: number): void {
@@ -248,7 +259,8 @@ class Refiner {
 
   /** Queues triangle t when an angle of it is too small and may be improved. */
   private checkTriangle(t: number): void {
-    const { corner, xy } = this.mesh;
+    const { corner, xy, label } = this.mesh;
+    if (label[t] >= FROZEN) return;
     const a = corner[3 * t];
     const b = corner[3 * t + 1];
     const c = corner[3 * t + 2];

@@ -313,23 +313,39 @@ export class Triangulation {
     return t;
   }
 
-  /** The half-edge from a to b, or -1. Turns around a, at a border in both directions. */
+  /**
+   * The half-edge from a to b, or -1. Turns around both ends by turns, so that it costs the smaller of their degrees: some
+   * vertices have thousands of neighbours.
+   */
   findEdge(a: number, b: number): number {
     const { corner, twin, vertexEdge } = this;
-    const start = vertexEdge[a];
-    if (start < 0) return -1;
-    let h = start;
-    do {
+    const startA = vertexEdge[a];
+    const startB = vertexEdge[b];
+    if (startA < 0 || startB < 0) return -1;
+    let h = startA;
+    let g = startB;
+    let forward = true;
+    let forwardB = true;
+    for (;;) {
       if (corner[nextEdge(h)] === b) return h;
-      h = twin[previousEdge(h)];
-    } while (h >= 0 && h !== start);
-    if (h === start) return -1;
-    h = start;
-    while (twin[h] >= 0) {
-      h = nextEdge(twin[h]);
-      if (corner[nextEdge(h)] === b) return h;
+      if (g >= 0 && corner[nextEdge(g)] === a) return twin[g];
+      let next = forward ? twin[previousEdge(h)] : twin[h] < 0 ? -1 : nextEdge(twin[h]);
+      if (next === startA) return -1;
+      if (next < 0) {
+        // At a border: back to the start, and round the other way.
+        if (!forward || twin[startA] < 0) return -1;
+        forward = false;
+        next = nextEdge(twin[startA]);
+      }
+      h = next;
+      if (g < 0) continue;
+      let nextB = forwardB ? twin[previousEdge(g)] : twin[g] < 0 ? -1 : nextEdge(twin[g]);
+      if (nextB < 0 && forwardB && twin[startB] >= 0) {
+        forwardB = false;
+        nextB = nextEdge(twin[startB]);
+      }
+      g = nextB === startB ? -1 : nextB;
     }
-    return -1;
   }
 }
 

@@ -8,6 +8,8 @@ export interface MeshReport {
   readonly area: number;
   /** Smallest angle of all triangles, in degrees. */
   readonly minimumAngleDeg: number;
+  /** The same among triangles with an angle above 100°, which alone harm a solution; 180 if there are none. */
+  readonly minimumObtuseDeg: number;
   readonly triangles: number;
   readonly vertices: number;
 }
@@ -25,11 +27,14 @@ export function validateMesh(mesh: FieldMesh): MeshReport {
   if (mesh.region.length !== count) faults.push("the media do not match the triangles");
   let area = 0;
   let smallest = 180;
+  let obtuse = 180;
   for (let t = 0; t < count; t++) {
     const twice = orientOf(xy, triangles, t);
     if (!(twice > 0)) faults.push(`triangle ${t} is not counter-clockwise`);
     area += twice / 2;
-    smallest = Math.min(smallest, smallestAngleDeg(xy, triangles, t));
+    const [least, greatest] = angleRangeDeg(xy, triangles, t);
+    smallest = Math.min(smallest, least);
+    if (greatest > 100) obtuse = Math.min(obtuse, least);
   }
   for (let i = 0; i < xy.length; i++)
     if (!Number.isFinite(xy[i])) faults.push(`coordinate ${i} is not finite`);
@@ -40,7 +45,7 @@ export function validateMesh(mesh: FieldMesh): MeshReport {
   if (Math.abs(enclosed - area) > 1e-13 * (1 + boundary.length / 100)) {
     faults.push(`the boundary encloses ${enclosed}, the triangles ${area}`);
   }
-  return { faults, area, minimumAngleDeg: smallest, triangles: count, vertices };
+  return { faults, area, minimumAngleDeg: smallest, minimumObtuseDeg: obtuse, triangles: count, vertices };
 }
 
 function orientOf(xy: Float64Array, triangles: Int32Array, t: number): number {
@@ -50,9 +55,10 @@ function orientOf(xy: Float64Array, triangles: Int32Array, t: number): number {
   return orient(xy[2 * a], xy[2 * a + 1], xy[2 * b], xy[2 * b + 1], xy[2 * c], xy[2 * c + 1]);
 }
 
-/** Smallest angle of triangle t in degrees. */
-export function smallestAngleDeg(xy: Float64Array, triangles: Int32Array, t: number): number {
+/** Smallest and largest angle of triangle t in degrees. */
+function angleRangeDeg(xy: Float64Array, triangles: Int32Array, t: number): [number, number] {
   let smallest = Math.PI;
+  let largest = 0;
   for (let i = 0; i < 3; i++) {
     const a = triangles[3 * t + i];
     const b = triangles[3 * t + ((i + 1) % 3)];
@@ -61,9 +67,11 @@ export function smallestAngleDeg(xy: Float64Array, triangles: Int32Array, t: num
     const py = xy[2 * b + 1] - xy[2 * a + 1];
     const qx = xy[2 * c] - xy[2 * a];
     const qy = xy[2 * c + 1] - xy[2 * a + 1];
-    smallest = Math.min(smallest, Math.abs(Math.atan2(px * qy - py * qx, px * qx + py * qy)));
+    const angle = Math.abs(Math.atan2(px * qy - py * qx, px * qx + py * qy));
+    smallest = Math.min(smallest, angle);
+    largest = Math.max(largest, angle);
   }
-  return (smallest * 180) / Math.PI;
+  return [(smallest * 180) / Math.PI, (largest * 180) / Math.PI];
 }
 
 function checkEdges(mesh: FieldMesh, faults: string[]): void {

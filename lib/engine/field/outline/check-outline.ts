@@ -46,7 +46,10 @@ export function checkOutline(
   const rings = [outline.outer, ...outline.holes];
   const pointers = rings.map((_, r) => ringPointer(r));
   const axisymmetric = outline.symmetry === "axisymmetric";
-  const errors: OutlineError[] = [...checkSize(request, rings), ...checkTerminalList(terminals, leastTerminals)];
+  const errors: OutlineError[] = [
+    ...checkSize(request, rings),
+    ...checkTerminalList(terminals, leastTerminals),
+  ];
   if (errors.some((e) => e.pointer === "#/outline")) return { ok: false, errors };
   rings.forEach((ring, r) => errors.push(...checkCoordinates(ring, pointers[r], outline.unit)));
   if (errors.some((e) => e.pointer.startsWith("#/outline"))) return { ok: false, errors };

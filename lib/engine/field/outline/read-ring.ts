@@ -103,7 +103,8 @@ export function readRing(
   }
   const kept = dropCollinear(submitted, distinct, frame);
   if (kept.source.length < distinct.source.length) {
-    const dropped = distinct.source.filter((i) => !kept.source.includes(i));
+    const left = new Set(kept.source);
+    const dropped = distinct.source.filter((i) => !left.has(i));
     if (kept.source.length >= 3 || hasArc) repairs.push(describeDropped(dropped, title));
   }
   const xy = new Float64Array(2 * kept.source.length);
