@@ -103,14 +103,19 @@ function uniform(value: number, tex: () => string): UniformMedium {
 }
 
 function resolveThickness(medium: UniformMediumInput, site: UniformSite): number | null {
-  const pointer = pointerTo(site.pointer, "thickness");
   if (!site.sheet) {
     if (medium.thickness === undefined) return 1;
-    site.problems.add(pointer, `goes with sheets only; ${site.subject} has its own dimensions.`);
+    site.problems.add(
+      pointerTo(site.pointer, "thickness"),
+      `goes with sheets only; ${site.subject} has its own dimensions.`,
+    );
     return null;
   }
   if (medium.thickness === undefined) {
-    site.problems.add(pointer, "is required for a sheet, unless a sheetResistance is given instead.");
+    site.problems.add(
+      pointerTo(site.pointer, "thickness"),
+      "is required for a sheet, unless a sheetResistance is given instead.",
+    );
     return null;
   }
   return read(medium.thickness, "length", "thickness", site, { gauge: "foil" });

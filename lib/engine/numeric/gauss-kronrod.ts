@@ -55,9 +55,9 @@ const GAUSS = [
 ];
 
 const EPSILON = Number.EPSILON;
-/** Scratch for the values of one rule; the engine runs on one thread. */
-const below = new Float64Array(10);
-const above = new Float64Array(10);
+/** Scratch for the values of one rule at each depth of nesting: an integrand may itself be an integral. */
+const scratch: Float64Array[] = [];
+let nesting = 0;
 
 interface RuleResult {
   value: number;
@@ -65,11 +65,27 @@ interface RuleResult {
 }
 
 /** One 21-point rule with its error estimate. */
-export function kronrod21(
+function kronrod21(
   f: (piece: number, t: number) => number,
   piece: number,
   start: number,
   width: number,
+): RuleResult {
+  const values = (scratch[nesting] ??= new Float64Array(20));
+  nesting++;
+  try {
+    return applyRule(f, piece, start, width, values);
+  } finally {
+    nesting--;
+  }
+}
+
+function applyRule(
+  f: (piece: number, t: number) => number,
+  piece: number,
+  start: number,
+  width: number,
+  values: Float64Array,
 ): RuleResult {
   const half = width / 2;
   const center = start + half;
@@ -78,19 +94,20 @@ export function kronrod21(
   let gauss = 0;
   let absolute = Math.abs(kronrod);
   for (let j = 0; j < 10; j++) {
-    const offset = half * NODES[j];
     // Measured from the start, so that a segment at 0 sees its first nodes without cancellation.
     const low = f(piece, start + half * (1 - NODES[j]));
-    const high = f(piece, center + offset);
-    below[j] = low;
-    above[j] = high;
+    const high = f(piece, center + half * NODES[j]);
+    values[2 * j] = low;
+    values[2 * j + 1] = high;
     kronrod += KRONROD[j] * (low + high);
     absolute += KRONROD[j] * (Math.abs(low) + Math.abs(high));
     if (j % 2 === 1) gauss += GAUSS[(j - 1) / 2] * (low + high);
   }
   const mean = kronrod / 2;
   let spread = KRONROD[10] * Math.abs(middle - mean);
-  for (let j = 0; j < 10; j++) spread += KRONROD[j] * (Math.abs(below[j] - mean) + Math.abs(above[j] - mean));
+  for (let j = 0; j < 10; j++) {
+    spread += KRONROD[j] * (Math.abs(values[2 * j] - mean) + Math.abs(values[2 * j + 1] - mean));
+  }
   absolute *= half;
   spread *= half;
   let error = Math.abs((kronrod - gauss) * half);

@@ -12,7 +12,7 @@ import { gaussLegendre } from "./gauss-legendre";
 export type Smoothness = "reciprocal" | "cubic";
 
 /** From so many segments on the Gauss rules pay off. */
-const MANY = 64;
+export const MANY = 64;
 
 /**
  * [largest ratio, points]: relative error below 1e-14 for 1/v and 1/v² of a linear or exponential v (`reciprocal`), or

@@ -157,7 +157,8 @@ function readMedia(
   problems: Problems,
 ): Media | null {
   const takes = shapeMedia(shape);
-  const site: Omit<MediumSite, "pointer"> = {
+  const site: MediumSite = {
+    pointer: "#/medium",
     shape,
     subject: shape.id,
     temperatureC,
@@ -175,7 +176,7 @@ function readMedia(
       if (!body.media) problems.add("#/medium", `is required: what fills ${shape.id}.`);
       return null;
     }
-    const single = resolveMedium(body.medium, { ...site, pointer: "#/medium" });
+    const single = resolveMedium(body.medium, site);
     return single && { single };
   }
   const names = takes.names.map(({ name }) => name);

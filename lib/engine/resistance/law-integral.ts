@@ -2,7 +2,7 @@
  * Integrals of a graded medium's law times a weight of the shape, over all or part of the coordinate's range, piece by
  * piece of the law.
  */
-import { integratePieces, type PieceHints } from "../numeric/piecewise-integral";
+import { integratePieces, MANY, type PieceHints } from "../numeric/piecewise-integral";
 import type { IntegrateOptions, Integral, Segments } from "../numeric/gauss-kronrod";
 import { findInterval } from "../medium/interpolation";
 import type { ProfileLaw } from "../medium/profile";
@@ -110,7 +110,7 @@ export class LawIntegral {
    */
   secondTotal(): Integral {
     const { law, density } = this.parts;
-    if (law.count > 24) return this.total({}, 1);
+    if (law.count > MANY) return this.total({}, 1);
     let value = 0;
     let error = 0;
     let evaluations = 0;

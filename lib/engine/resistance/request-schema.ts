@@ -1,6 +1,6 @@
 /** The body of a resistance request. Which dimensions and coordinates exist is the shape's affair, checked after this. */
 import { z } from "zod";
-import { Problems, pointerTo } from "../failure";
+import { pointerTo, type Problems } from "../failure";
 import { mediumSchema } from "../medium/medium-schema";
 import { anyQuantitySchema, quantitySchema } from "../quantity/quantity-schema";
 import { suggestion } from "../shape/nearest-names";

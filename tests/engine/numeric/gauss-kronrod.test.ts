@@ -70,6 +70,12 @@ describe("adaptive Gauss–Kronrod quadrature", () => {
     expect(value).toBeCloseTo(2, 14);
   });
 
+  it("may be nested", () => {
+    const inner = (x: number): number => integrate((y) => Math.exp(x * y), 0, 1).value;
+    // ∫∫exp(xy) over the unit square = Ei(1) − γ (40-digit arithmetic).
+    expect(integrate(inner, 0, 1).value).toBeCloseTo(1.3179021514544038949, 14);
+  });
+
   it("passes on what the integrand throws", () => {
     expect(() =>
       integrate(
