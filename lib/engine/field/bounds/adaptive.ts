@@ -162,6 +162,7 @@ function refineWithin(
     });
     if (plan.empty) return current;
     const next = applyPlan(current.mesh, plan);
+    if (next.mesh === current.mesh && next.order.every((p, t) => p === current.order[t])) return current;
     if (countFunctions(makeElements(next.mesh, next.order)) <= input.limits.unknowns) return next;
   }
   return null;

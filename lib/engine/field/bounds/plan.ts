@@ -49,25 +49,28 @@ export const STAR_ORDER = 3;
 const SLOW_DECAY = 0.42;
 
 export function planRefinement(input: PlanInput): RefinementPlan {
-  const { gap, singular, target } = input;
+  const { gap, singular } = input;
   const count = gap.length;
   const stars = starGaps(input);
+  // What cannot be reduced is no reason to drive the rest far below it.
+  const target = Math.max(input.target, stars.fixedGap);
   const shareOfStar = chooseThreshold(stars.gaps, SHARE_OF_STARS * target);
   const elements = new Float64Array(count);
-  for (let t = 0; t < count; t++) elements[t] = stars.owner[t] >= 0 ? 0 : gap[t];
+  for (let t = 0; t < count; t++) elements[t] = stars.kind[t] === STAR ? 0 : gap[t];
   const vertices: number[] = [];
   const layers: number[] = [];
   const ringOrders: Uint8Array[] = [];
   const order = Uint8Array.from(input.order);
   const marks = new Uint8Array(count);
   const budget = (1 - SHARE_OF_STARS) * target;
-  const shareOfElement = elementThreshold(input, elements, budget);
+  const shareOfElement = elementThreshold(input, stars.kind, elements, budget);
   const shareOfRing = Math.min(shareOfElement, budget / (2 * count + 100));
   let planned = 0;
   singular.forEach(({ vertex, exponent }, i) => {
     const g = stars.gaps[i];
     if (!(g > shareOfStar)) return;
-    const wanted = Math.ceil(Math.log2(g / shareOfStar) / (2 * exponent));
+    const feasible = Math.floor(Math.log2(stars.reach[i] / SMALLEST_REACH));
+    const wanted = Math.min(feasible, Math.ceil(Math.log2(g / shareOfStar) / (2 * exponent)));
     const p0 = stars.orders[i];
     // The gap of a star falls with its order like p^(-4α): refer it to order 3.
     const reference = RING_START * g * (p0 / 3) ** (4 * exponent);
@@ -86,7 +89,7 @@ export function planRefinement(input: PlanInput): RefinementPlan {
   });
   for (let t = 0; t < count; t++) {
     if (!(elements[t] > shareOfElement)) continue;
-    const step = elementStep(input, t, elements[t], shareOfElement);
+    const step = elementStep(input, stars.kind[t], t, elements[t], shareOfElement);
     order[t] = step.order;
     marks[t] = step.mark;
     if (step.order !== input.order[t] || step.mark > 0) planned++;
@@ -110,34 +113,70 @@ interface Stars {
   readonly sizes: Int32Array;
   /** Mean order in the star. */
   readonly orders: Float64Array;
-  /** Which singular vertex a triangle belongs to, or -1. */
-  readonly owner: Int32Array;
+  /** ELEMENT, STAR or FIXED. */
+  readonly kind: Int8Array;
+  /** Shortest edge at the vertex. */
+  readonly reach: Float64Array;
+  /** Sum of the gaps of stars that cannot be layered any more. */
+  readonly fixedGap: number;
 }
+
+/** A triangle away from singular vertices, one at a singular vertex, and one there that cannot be layered any more. */
+const ELEMENT = 0;
+const STAR = 1;
+const FIXED = 2;
+
+/** Stars with an edge shorter than twice this are not layered (`refineTowards` keeps to 2^-42). */
+const SMALLEST_REACH = 2 ** -41;
 
 function starGaps({ mesh, gap, order, singular }: PlanInput): Stars {
   const { triangles } = mesh;
   const count = gap.length;
   const number = new Int32Array(mesh.xy.length / 2).fill(-1);
   singular.forEach(({ vertex }, i) => (number[vertex] = i));
-  const owner = new Int32Array(count).fill(-1);
+  const reach = shortestEdges(mesh, number, singular.length);
+  const kind = new Int8Array(count);
   const gaps = new Float64Array(singular.length);
   const sizes = new Int32Array(singular.length);
   const orders = new Float64Array(singular.length);
+  let fixedGap = 0;
   for (let t = 0; t < count; t++) {
-    // A triangle between two singular vertices goes to the stronger singularity.
+    let weights = 0;
     for (let i = 0; i < 3; i++) {
       const s = number[triangles[3 * t + i]];
       if (s < 0) continue;
-      if (owner[t] < 0 || singular[s].exponent < singular[owner[t]].exponent) owner[t] = s;
+      if (reach[s] >= 2 * SMALLEST_REACH) weights += 4 ** -singular[s].exponent;
+      else if (kind[t] === ELEMENT) kind[t] = FIXED;
     }
-    if (owner[t] >= 0) {
-      gaps[owner[t]] += gap[t];
-      orders[owner[t]] += order[t];
-      sizes[owner[t]]++;
+    if (weights === 0) {
+      if (kind[t] === FIXED) fixedGap += gap[t];
+      continue;
+    }
+    kind[t] = STAR;
+    // The gap of a triangle between singular vertices goes to all of them, more of it to the stronger.
+    for (let i = 0; i < 3; i++) {
+      const s = number[triangles[3 * t + i]];
+      if (s < 0 || reach[s] < 2 * SMALLEST_REACH) continue;
+      gaps[s] += (gap[t] * 4 ** -singular[s].exponent) / weights;
+      orders[s] += order[t];
+      sizes[s]++;
     }
   }
   for (let i = 0; i < orders.length; i++) if (sizes[i] > 0) orders[i] /= sizes[i];
-  return { gaps, sizes, orders, owner };
+  return { gaps, sizes, orders, kind, reach, fixedGap };
+}
+
+function shortestEdges({ xy, triangles }: FieldMesh, number: Int32Array, count: number): Float64Array {
+  const shortest = new Float64Array(count).fill(Infinity);
+  for (let h = 0; h < triangles.length; h++) {
+    const base = h - (h % 3);
+    const a = triangles[h];
+    const b = triangles[base + ((h + 1) % 3)];
+    if (number[a] < 0 && number[b] < 0) continue;
+    const length = Math.hypot(xy[2 * a] - xy[2 * b], xy[2 * a + 1] - xy[2 * b + 1]);
+    for (const s of [number[a], number[b]]) if (s >= 0 && length < shortest[s]) shortest[s] = length;
+  }
+  return shortest;
 }
 
 /** The largest cap such that values cut down to it add up to at most `budget`. */
@@ -159,8 +198,12 @@ interface Step {
   readonly expected: number;
 }
 
-function elementStep(input: PlanInput, t: number, gap: number, share: number): Step {
+function elementStep(input: PlanInput, kind: number, t: number, gap: number, share: number): Step {
   const p = input.order[t];
+  if (kind === FIXED) {
+    const order = Math.min(input.highestOrder, p + 2);
+    return { order, mark: 0, expected: (gap * p) / order };
+  }
   const decay = Math.max(0.02, input.decay[t]);
   if (decay < SLOW_DECAY && p < input.highestOrder) {
     const wanted = Math.max(1, Math.ceil(Math.log(gap / share) / -Math.log(decay)));
@@ -171,7 +214,7 @@ function elementStep(input: PlanInput, t: number, gap: number, share: number): S
 }
 
 /** The largest threshold for which the expected sum is within the budget. */
-function elementThreshold(input: PlanInput, elements: Float64Array, budget: number): number {
+function elementThreshold(input: PlanInput, kind: Int8Array, elements: Float64Array, budget: number): number {
   let high = 0;
   let total = 0;
   for (const g of elements) {
@@ -184,7 +227,8 @@ function elementThreshold(input: PlanInput, elements: Float64Array, budget: numb
     const middle = Math.sqrt(low * high);
     let sum = 0;
     for (let t = 0; t < elements.length; t++) {
-      sum += elements[t] > middle ? elementStep(input, t, elements[t], middle).expected : elements[t];
+      sum +=
+        elements[t] > middle ? elementStep(input, kind[t], t, elements[t], middle).expected : elements[t];
     }
     if (sum <= budget) low = middle;
     else high = middle;

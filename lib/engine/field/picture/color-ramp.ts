@@ -2,9 +2,9 @@
 
 type Triple = readonly [number, number, number];
 
-/** Paper to dark copper: light for little current, dark for much. */
+/** Paper to copper: light for little current, deep for much; lines stay legible on both. */
 const PAPER = "#f6f1e7";
-const COPPER = "#6a2a0c";
+const COPPER = "#c0733f";
 
 /** Colours at `count` even places, as #rrggbb. */
 export function densityRamp(count: number): string[] {
