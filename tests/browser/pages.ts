@@ -1,7 +1,13 @@
 /** Every kind of public page, for the checks that hold for all of them. */
 export const PAGES = [
   "/",
+  "/calculate",
+  "/calculate/cylindrical-shell",
+  "/calculate/bar?length=250mm&width=5kg&thickness=5mm&graded=length&quantity=conductivity&profile=layers&profile.layers=100mm:58MS/m,100mm:30MS/m",
+  "/calculate/tapered-strip?B&B.length=30mm&max=10mohm&current=2A",
+  "/calculate/clad-wire",
   "/docs",
+  "/docs/design",
   "/docs/problems",
   "/docs/problems/invalid-input",
   "/docs/changelog",

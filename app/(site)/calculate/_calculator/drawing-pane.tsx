@@ -40,6 +40,7 @@ export function DrawingPane({ entry, geometry, focused, className }: DrawingPane
         {geometry ? (
           <ShapeDrawing
             drawing={geometry.drawing}
+            toScale={geometry.toScale}
             labels={geometry.labels}
             focused={focused}
             terminals={entry.terminals}

@@ -6,7 +6,7 @@ import { DataTable } from "../../../_ui/data-table";
 import { Dialog } from "../../../_ui/dialog";
 import { CONTROL, Field } from "../../../_ui/field";
 import type { MaterialChoice } from "../_server/material-choices";
-import { spreadText } from "./material-picker";
+import { spreadText } from "./material-words";
 
 interface MaterialBrowserProps {
   readonly materials: readonly MaterialChoice[];

@@ -7,6 +7,7 @@ import { CONTROL, Field } from "../../../_ui/field";
 import { Toggle } from "../../../_ui/toggle";
 import type { MaterialChoice } from "../_server/material-choices";
 import { useForm } from "./form-context";
+import { spreadText } from "./material-words";
 
 const MaterialBrowser = dynamic(() => import("./material-browser").then((module) => module.MaterialBrowser));
 
@@ -101,19 +102,4 @@ function MaterialCard({ material }: { readonly material: MaterialChoice }) {
       ) : null}
     </dl>
   );
-}
-
-/** Ratios of true to nominal resistivity for people. */
-export function spreadText({ lower, upper }: MaterialChoice["uncertainty"]): string {
-  const below = (1 - lower) * 100;
-  const above = (upper - 1) * 100;
-  if (below === 0 && above === 0) return "none stated";
-  if (above >= 100) return `${round(lower)} to ${round(upper)} times the nominal value`;
-  return Math.abs(below - above) < 0.05 * above
-    ? `± ${round(above)} % (nominal)`
-    : `−${round(below)} … +${round(above)} % (nominal)`;
-}
-
-function round(value: number): string {
-  return String(Number(value.toPrecision(2)));
 }

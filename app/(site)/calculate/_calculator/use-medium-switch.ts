@@ -1,9 +1,10 @@
 "use client";
 
 import { useRef } from "react";
-import { convertUnit, numberText } from "../../../_ui/quantity/convert";
+import { convertUnit, textInUnit } from "../../../_ui/quantity/convert";
 import { splitQuantity } from "../../../_ui/quantity/quantity-text";
-import { findUnit, UNITS } from "../../../_ui/quantity/units";
+import { toNumber } from "../../../_ui/quantity/rational";
+import { findUnit, type Unit, UNITS } from "../../../_ui/quantity/units";
 import { mediumKind, type MediumKind, ofMedium, type Parameters } from "../_model/parameters";
 import { useForm } from "./form-context";
 import type { Patch } from "./use-page-state";
@@ -36,20 +37,18 @@ export function useMediumSwitch(prefix: string): (kind: MediumKind) => void {
 
   function startOf(kind: MediumKind): Parameters {
     const resistivity = resistivityNow();
-    const text = (value: number | null, unit: string) =>
-      value === null ? "" : `${numberText(value, 12)} ${unit}`;
     const inverse = resistivity === null ? null : 1 / resistivity;
     switch (kind) {
       case "material":
         return { [`${prefix}material`]: materials[0]?.id ?? "" };
       case "resistivity":
-        return { [`${prefix}resistivity`]: text(resistivity, "ohm m") };
+        return { [`${prefix}resistivity`]: neatText(resistivity, "resistivity", "ohm m") };
       case "conductivity":
-        return { [`${prefix}conductivity`]: text(inverse, "S/m") };
+        return { [`${prefix}conductivity`]: neatText(inverse, "conductivity", "S/m") };
       case "sheetResistance":
-        return { [`${prefix}sheetResistance`]: text(sheetNow(resistivity), "ohm/sq") };
+        return { [`${prefix}sheetResistance`]: neatText(sheetNow(resistivity), "sheetResistance", "ohm/sq") };
       case "graded": {
-        const value = text(inverse, "S/m");
+        const value = neatText(inverse, "conductivity", "S/m");
         const coordinate = entry.media.gradable.find((name) => name in ranges) ?? entry.media.gradable[0];
         return {
           [`${prefix}graded`]: coordinate,
@@ -76,6 +75,23 @@ export function useMediumSwitch(prefix: string): (kind: MediumKind) => void {
     const thickness = baseValue(parameters[`${prefix}thickness`], "length", "m");
     return resistivity === null || thickness === null ? null : resistivity / thickness;
   }
+}
+
+/** A value in the prefix that reads best, with the digits that it has. */
+function neatText(
+  value: number | null,
+  kind: "resistivity" | "conductivity" | "sheetResistance",
+  base: string,
+): string {
+  if (value === null) return "";
+  const prefixed = UNITS[kind].filter((unit) => !unit.hidden && unit.id.endsWith(base));
+  const size = (unit: Unit) => (typeof unit.scale === "number" ? unit.scale : toNumber(unit.scale));
+  const sorted = [...prefixed].sort((a, b) => size(b) - size(a));
+  const unit = sorted.find((own) => value / size(own) >= 1) ?? sorted.at(-1);
+  if (!unit) return "";
+  const short = textInUnit(value, unit, 12);
+  const exact = Math.abs((Number(short) * size(unit)) / value - 1) < 1e-14;
+  return `${exact ? short : textInUnit(value, unit, 15)} ${unit.id}`;
 }
 
 /** The number that a field's text stands for in the unit of bare numbers; null where it is none greater than 0. */

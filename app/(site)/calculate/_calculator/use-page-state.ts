@@ -4,6 +4,7 @@ import { useCallback, useEffect, useState } from "react";
 import type { ShapeEntry } from "@/lib/engine";
 import type { Parameters } from "../_model/parameters";
 import { joinAddress, splitAddress } from "../_model/address";
+import { replaceAddress } from "../replace-address";
 import { type PageState, readState, stateQuery, VARIANT_NAMES } from "../_model/variants";
 
 /** What a change sets; undefined takes a parameter away. */
@@ -28,18 +29,21 @@ export function usePageState(
 ): readonly [PageState, PageActions] {
   const [state, setState] = useState(start);
 
-  // Long tables travel behind the "#", which the server does not see.
+  // Long tables travel behind the "#", which the server does not see; and after a step back in the history the page
+  // comes as it was first made, while the address has what it became.
   useEffect(() => {
-    function readBehind() {
-      const behind = window.location.hash.slice(1);
-      if (!behind.includes("=")) return;
-      setState(readState(joinAddress(window.location.search, behind), entry, example));
+    function readAddress() {
+      const { search, hash } = window.location;
+      const behind = hash.includes("=") ? hash.slice(1) : "";
+      const told = readState(joinAddress(search, behind), entry, example);
+      const query = stateQuery(told, entry);
+      setState((before) => (stateQuery(before, entry) === query ? before : told));
     }
-    const timer = setTimeout(readBehind);
-    window.addEventListener("hashchange", readBehind);
+    const timer = setTimeout(readAddress);
+    window.addEventListener("hashchange", readAddress);
     return () => {
       clearTimeout(timer);
-      window.removeEventListener("hashchange", readBehind);
+      window.removeEventListener("hashchange", readAddress);
     };
   }, [entry, example]);
 
@@ -48,7 +52,7 @@ export function usePageState(
       const { query, behind } = splitAddress(stateQuery(state, entry));
       const next = `${window.location.pathname}?${query}${behind === "" ? "" : `#${behind}`}`;
       const now = `${window.location.pathname}${window.location.search}${window.location.hash}`;
-      if (next !== now && state !== start) window.history.replaceState(null, "", next);
+      if (next !== now && state !== start) replaceAddress(next);
     }, ADDRESS_MS);
     return () => clearTimeout(timer);
   }, [state, start, entry]);

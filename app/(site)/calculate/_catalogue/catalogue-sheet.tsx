@@ -5,6 +5,7 @@ import Link from "next/link";
 import { Button } from "../../../_ui/button";
 import { CONTROL, Field } from "../../../_ui/field";
 import { EmptyState } from "../../../_ui/states";
+import { replaceAddress } from "../replace-address";
 import { matches } from "./search";
 
 export interface CatalogueSection {
@@ -37,11 +38,17 @@ export function CatalogueSheet({ sections, start }: CatalogueSheetProps) {
     const timer = setTimeout(() => {
       const query = search.trim() === "" ? "" : `?q=${encodeURIComponent(search.trim())}`;
       if (query !== window.location.search) {
-        window.history.replaceState(null, "", `${window.location.pathname}${query}`);
+        replaceAddress(`${window.location.pathname}${query}`);
       }
     }, ADDRESS_MS);
     return () => clearTimeout(timer);
   }, [search]);
+
+  // After a step back in the history the page comes as it was first made; the address has what it became.
+  useEffect(() => {
+    const timer = setTimeout(() => setSearch(new URLSearchParams(window.location.search).get("q") ?? ""));
+    return () => clearTimeout(timer);
+  }, []);
 
   useEffect(() => {
     function toSearch(event: globalThis.KeyboardEvent) {

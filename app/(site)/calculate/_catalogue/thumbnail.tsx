@@ -1,5 +1,5 @@
 import "server-only";
-import { resolveDimensions, type Shape } from "@/lib/engine";
+import { readableDrawing, resolveDimensions, type Shape } from "@/lib/engine";
 import { DrawingSheet } from "../../../_ui/drawing/drawing-sheet";
 import { layoutView } from "../../../_ui/drawing/view-layout";
 
@@ -9,7 +9,7 @@ const HEIGHT = 110;
 
 /** A shape's first view with its example's dimensions, symbols only. */
 export function Thumbnail({ shape }: { readonly shape: Shape }) {
-  const drawing = shape.drawing(resolveDimensions(shape, shape.example.dimensions));
+  const { drawing, toScale } = readableDrawing(shape, resolveDimensions(shape, shape.example.dimensions));
   const labels = Object.fromEntries(
     Object.entries(shape.dimensions).map(([name, { symbol }]) => [name, { symbol }]),
   );
@@ -22,6 +22,7 @@ export function Thumbnail({ shape }: { readonly shape: Shape }) {
         views: [{ view, x: 0, y: 0, title: "", titleY: 0 }],
         distorted: view.distorted,
       }}
+      toScale={toScale && !view.distorted}
       id={`thumb-${shape.id}`}
       description={drawing.description}
       className="block h-full max-h-[170px] w-full"

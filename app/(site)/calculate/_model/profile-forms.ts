@@ -3,7 +3,7 @@ export type ProfileField =
   | {
       readonly name: string;
       readonly label: string;
-      readonly type: "value" | "position" | "number" | "temperature" | "material" | "expression";
+      readonly type: "value" | "position" | "number" | "temperature" | "density" | "material" | "expression";
       readonly optional?: true;
       readonly help?: string;
     }
@@ -97,6 +97,22 @@ export const PROFILE_FORMS: Readonly<Record<string, readonly ProfileField[]>> = 
       ],
     },
     { name: "profile", label: "Dopant density", type: "profile" },
+    {
+      name: "model",
+      label: "Conductivity by",
+      type: "choice",
+      choices: [
+        { value: "f723", label: "ASTM F723" },
+        { value: "masetti", label: "Masetti 1983" },
+      ],
+    },
+    {
+      name: "background",
+      label: "Density of the other type",
+      type: "density",
+      optional: true,
+      help: "All over, and less than the dopant everywhere; for the model of Masetti only. 0 where it is left empty.",
+    },
   ],
 };
 

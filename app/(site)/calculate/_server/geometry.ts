@@ -1,6 +1,7 @@
 import "server-only";
 import {
   InputError,
+  readableDrawing,
   resolveDimensions,
   shapeEntry,
   type Drawing,
@@ -12,6 +13,8 @@ import { dimensionTexts } from "./dimension-texts";
 /** What a page needs of a shape's dimensions beside the answer: its drawing, every member's value, the ranges. */
 export interface Geometry {
   readonly drawing: Drawing;
+  /** Whether the drawing has the proportions of the dimensions. */
+  readonly toScale: boolean;
   /** Symbol and value for each dimension line. */
   readonly labels: Readonly<Record<string, { readonly symbol: string; readonly value: string }>>;
   /** Value of every name that the request may use, in the entry's unit; choices are left out. */
@@ -36,7 +39,8 @@ export function readGeometry(shape: Shape, dimensions: Readonly<Record<string, u
     const resolved = resolveDimensions(shape, dimensions);
     const spans = coordinateSpans(shape, resolved);
     const { labels, values } = dimensionTexts(shape, shapeEntry(shape), resolved, dimensions);
-    return { ok: true, geometry: { drawing: shape.drawing(resolved), labels, values, ranges: spans } };
+    const { drawing, toScale } = readableDrawing(shape, resolved);
+    return { ok: true, geometry: { drawing, toScale, labels, values, ranges: spans } };
   } catch (error) {
     if (error instanceof InputError) return { ok: false, errors: error.errors };
     throw error;

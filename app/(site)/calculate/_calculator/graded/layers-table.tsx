@@ -6,7 +6,8 @@ import { readRows, writeRows } from "../../_model/profile-forms";
 import { useForm } from "../form-context";
 import { baseValue } from "../use-medium-switch";
 import { CellInput } from "./cell-input";
-import { type FieldSite, positionKind, VALUE_UNITS } from "./profile-fields";
+import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
+import { RowButton } from "./row-button";
 import { spanText } from "./use-profile-switch";
 
 type Rows = readonly (readonly [string, string])[];
@@ -121,26 +122,5 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
         </p>
       </div>
     </div>
-  );
-}
-
-interface RowButtonProps {
-  readonly label: string;
-  readonly disabled: boolean;
-  readonly onPress: () => void;
-  readonly children: React.ReactNode;
-}
-
-export function RowButton({ label, disabled, onPress, children }: RowButtonProps) {
-  return (
-    <button
-      type="button"
-      aria-label={label}
-      disabled={disabled}
-      onClick={onPress}
-      className="inline-grid min-h-5.5 min-w-3 cursor-pointer place-items-center rounded text-ink-soft hover:text-ink disabled:cursor-not-allowed disabled:opacity-40 medium:min-h-5"
-    >
-      {children}
-    </button>
   );
 }

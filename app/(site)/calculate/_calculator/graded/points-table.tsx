@@ -7,8 +7,8 @@ import { CONTROL, Field } from "../../../../_ui/field";
 import { readRows, writeRows } from "../../_model/profile-forms";
 import { useForm } from "../form-context";
 import { CellInput } from "./cell-input";
-import { RowButton } from "./layers-table";
-import { type FieldSite, positionKind, VALUE_UNITS } from "./profile-fields";
+import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
+import { RowButton } from "./row-button";
 import { readPoints, type PointsReading } from "./read-points";
 
 type Rows = readonly (readonly [string, string])[];

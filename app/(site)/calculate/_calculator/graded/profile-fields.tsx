@@ -6,27 +6,12 @@ import { Segmented } from "../../../../_ui/segmented";
 import { Select } from "../../../../_ui/select";
 import { Toggle } from "../../../../_ui/toggle";
 import { PROFILE_FORMS, type ProfileField } from "../../_model/profile-forms";
-import type { CoordinateSpan } from "../../_server/geometry";
 import { useForm } from "../form-context";
 import { MaterialPicker } from "../material-picker";
+import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
 import { LayersTable } from "./layers-table";
 import { PointsTable } from "./points-table";
 import { useProfileSwitch } from "./use-profile-switch";
-
-/** Where a profile's fields stand: what its values measure, and the range of its coordinate once it is known. */
-export interface FieldSite {
-  readonly values: "conductivity" | "resistivity" | "density";
-  readonly span: CoordinateSpan | undefined;
-  /** Prefix of the medium's parameters. */
-  readonly prefix: string;
-}
-
-/** Units of values and positions without unit. */
-export const VALUE_UNITS = { conductivity: "S/m", resistivity: "ohm m", density: "1/cm^3" } as const;
-
-export function positionKind(span: CoordinateSpan | undefined): "length" | "angle" {
-  return span?.unit === "deg" ? "angle" : "length";
-}
 
 /** The fields of the profile whose parameters begin with `name`. */
 export function ProfileFields({ name, site }: { readonly name: string; readonly site: FieldSite }) {
@@ -101,12 +86,14 @@ function OneField({ field, name, site }: OneFieldProps) {
         position: positionKind(site.span),
         number: "number",
         temperature: "temperature",
+        density: "density",
       } as const;
       const units = {
         value: VALUE_UNITS[site.values],
         position: site.span?.unit ?? "m",
         number: undefined,
         temperature: "degC",
+        density: "1/cm^3",
       };
       return (
         <QuantityInput
