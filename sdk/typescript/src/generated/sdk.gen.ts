@@ -2,7 +2,7 @@
 
 import { client } from './client.gen.js';
 import type { Client, Options as Options2, TDataShape } from './client/index.js';
-import type { ChangeMaterialData, ChangeMaterialErrors, ChangeMaterialResponses, ComputeResistanceData, ComputeResistanceErrors, ComputeResistanceResponses, CreateMaterialData, CreateMaterialErrors, CreateMaterialResponses, DeleteRecordData, DeleteRecordErrors, DeleteRecordResponses, IssueKeyData, IssueKeyErrors, IssueKeyResponses, ListKeysData, ListKeysErrors, ListKeysResponses, ListMaterialsData, ListMaterialsErrors, ListMaterialsResponses, ListRecordsData, ListRecordsErrors, ListRecordsResponses, ListShapesData, ListShapesErrors, ListShapesResponses, ReadHealthData, ReadHealthErrors, ReadHealthResponses, ReadKeyData, ReadKeyErrors, ReadKeyResponses, ReadMaterialData, ReadMaterialErrors, ReadMaterialResponses, ReadOpenApiData, ReadOpenApiErrors, ReadOpenApiResponses, ReadRecordData, ReadRecordErrors, ReadRecordResponses, ReadResistanceData, ReadResistanceErrors, ReadResistanceResponses, ReadShapeData, ReadShapeErrors, ReadShapeResponses, ReadUsageData, ReadUsageErrors, ReadUsageResponses, RelabelRecordData, RelabelRecordErrors, RelabelRecordResponses, ReplayRecordData, ReplayRecordErrors, ReplayRecordResponses, RetireMaterialData, RetireMaterialErrors, RetireMaterialResponses, RevokeKeyData, RevokeKeyErrors, RevokeKeyResponses, RotateKeyData, RotateKeyErrors, RotateKeyResponses } from './types.gen.js';
+import type { ChangeMaterialData, ChangeMaterialErrors, ChangeMaterialResponses, ComputeResistanceData, ComputeResistanceErrors, ComputeResistanceResponses, CreateMaterialData, CreateMaterialErrors, CreateMaterialResponses, DeleteFieldData, DeleteFieldErrors, DeleteFieldResponses, DeleteRecordData, DeleteRecordErrors, DeleteRecordResponses, IssueKeyData, IssueKeyErrors, IssueKeyResponses, ListKeysData, ListKeysErrors, ListKeysResponses, ListMaterialsData, ListMaterialsErrors, ListMaterialsResponses, ListRecordsData, ListRecordsErrors, ListRecordsResponses, ListShapesData, ListShapesErrors, ListShapesResponses, ReadFieldData, ReadFieldErrors, ReadFieldEventsData, ReadFieldEventsErrors, ReadFieldEventsResponse, ReadFieldEventsResponses, ReadFieldLineData, ReadFieldLineErrors, ReadFieldLineResponses, ReadFieldMapData, ReadFieldMapErrors, ReadFieldMapResponses, ReadFieldPlotData, ReadFieldPlotErrors, ReadFieldPlotResponses, ReadFieldResponses, ReadHealthData, ReadHealthErrors, ReadHealthResponses, ReadKeyData, ReadKeyErrors, ReadKeyResponses, ReadMaterialData, ReadMaterialErrors, ReadMaterialResponses, ReadOpenApiData, ReadOpenApiErrors, ReadOpenApiResponses, ReadOutlineData, ReadOutlineErrors, ReadOutlineResponses, ReadRecordData, ReadRecordErrors, ReadRecordResponses, ReadResistanceData, ReadResistanceErrors, ReadResistanceResponses, ReadShapeData, ReadShapeErrors, ReadShapeResponses, ReadUsageData, ReadUsageErrors, ReadUsageResponses, RelabelRecordData, RelabelRecordErrors, RelabelRecordResponses, ReplayRecordData, ReplayRecordErrors, ReplayRecordResponses, RetireMaterialData, RetireMaterialErrors, RetireMaterialResponses, RevokeKeyData, RevokeKeyErrors, RevokeKeyResponses, RotateKeyData, RotateKeyErrors, RotateKeyResponses, SolveFieldData, SolveFieldErrors, SolveFieldResponses, StoreOutlineData, StoreOutlineErrors, StoreOutlineResponses } from './types.gen.js';
 
 export type Options<TData extends TDataShape = TDataShape, ThrowOnError extends boolean = boolean, TResponse = unknown> = Options2<TData, ThrowOnError, TResponse> & {
     /**
@@ -21,7 +21,7 @@ export type Options<TData extends TDataShape = TDataShape, ThrowOnError extends 
 /**
  * List the catalogue
  *
- * Every shape with everything a form needs: dimensions with labels, units and ranges, alternatives, coordinates, terminals, constraints, formula, validity, cautions, sources and a request that works. It fits one page. Needs no key.
+ * Every shape with everything a form needs: dimensions with labels, units and ranges, alternatives, coordinates, terminals, constraints, formula, validity, cautions, sources and a request that works. Without a limit it fits one page. Needs no key.
  */
 export const listShapes = <ThrowOnError extends boolean = true>(options?: Options<ListShapesData, ThrowOnError>) => (options?.client ?? client).get<ListShapesResponses, ListShapesErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',
@@ -83,6 +83,158 @@ export const readResistance = <ThrowOnError extends boolean = true>(options: Opt
             type: 'apiKey'
         }],
     url: '/resistance/{shape}',
+    ...options
+});
+
+/**
+ * Store an outline
+ *
+ * Checks a plan drawing, repairs what is harmless (repeated and collinear vertices) and stores it for field solutions. The answer is the cleaned outline; terminals come back on its edges. Needs the scope `field`.
+ */
+export const storeOutline = <ThrowOnError extends boolean = true>(options: Options<StoreOutlineData, ThrowOnError>) => (options.client ?? client).post<StoreOutlineResponses, StoreOutlineErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/outlines',
+    ...options,
+    headers: {
+        'Content-Type': 'application/json',
+        ...options.headers
+    }
+});
+
+/**
+ * Read a stored outline
+ *
+ * The cleaned outline with its terminals and what was repaired. Needs the scope `field`.
+ */
+export const readOutline = <ThrowOnError extends boolean = true>(options: Options<ReadOutlineData, ThrowOnError>) => (options.client ?? client).get<ReadOutlineResponses, ReadOutlineErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/outlines/{id}',
+    ...options
+});
+
+/**
+ * Solve the field on an outline
+ *
+ * From any outline, its terminals and a medium to a resistance between a lower and an upper bound from two independent field solutions. Everything about the outline, the terminals and the medium is checked at once; then the solution runs as a job. `Prefer: wait=N` waits up to N seconds (at most 30) for its end: 200 if it is ready, else 202 with `Location`. It counts against the month by its unknowns: 1 computation up to 20,000, 5 up to 100,000, 20 up to 500,000; the most is reserved before, the rest given back at the end. Needs the scope `field`.
+ */
+export const solveField = <ThrowOnError extends boolean = true>(options: Options<SolveFieldData, ThrowOnError>) => (options.client ?? client).post<SolveFieldResponses, SolveFieldErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/fields',
+    ...options,
+    headers: {
+        'Content-Type': 'application/json',
+        ...options.headers
+    }
+});
+
+/**
+ * Cancel or delete a field solution
+ *
+ * Cancels one that waits or runs: its status becomes `cancelled` and what it reserved is given back. Deletes one that is finished. Needs the scope `field`.
+ */
+export const deleteField = <ThrowOnError extends boolean = true>(options: Options<DeleteFieldData, ThrowOnError>) => (options.client ?? client).delete<DeleteFieldResponses, DeleteFieldErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/fields/{id}',
+    ...options
+});
+
+/**
+ * Read a field solution
+ *
+ * Its status, the bracket so far and, once it is finished, the result. `Prefer: wait=N` waits up to N seconds (at most 30) for its end. Needs the scope `field`.
+ */
+export const readField = <ThrowOnError extends boolean = true>(options: Options<ReadFieldData, ThrowOnError>) => (options.client ?? client).get<ReadFieldResponses, ReadFieldErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/fields/{id}',
+    ...options
+});
+
+/**
+ * Read a field solution's map
+ *
+ * Equipotentials, stream lines with equal shares of the current, a raster of the current density and the flux through each piece of the terminals, all for one volt between the first two terminals. Needs the scope `field`.
+ */
+export const readFieldMap = <ThrowOnError extends boolean = true>(options: Options<ReadFieldMapData, ThrowOnError>) => (options.client ?? client).get<ReadFieldMapResponses, ReadFieldMapErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/fields/{id}/map.json',
+    ...options
+});
+
+/**
+ * Read a field solution's picture
+ *
+ * The finished picture: outline, terminals, current density, equipotentials and stream lines, with scale bar and legend. Needs the scope `field`.
+ */
+export const readFieldPlot = <ThrowOnError extends boolean = true>(options: Options<ReadFieldPlotData, ThrowOnError>) => (options.client ?? client).get<ReadFieldPlotResponses, ReadFieldPlotErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/fields/{id}/plot.svg',
+    ...options
+});
+
+/**
+ * Read a field solution along a line
+ *
+ * Potential and current density along a straight line, for one volt between the first two terminals. Needs the scope `field`.
+ */
+export const readFieldLine = <ThrowOnError extends boolean = true>(options: Options<ReadFieldLineData, ThrowOnError>) => (options.client ?? client).get<ReadFieldLineResponses, ReadFieldLineErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/fields/{id}/line',
+    ...options
+});
+
+/**
+ * Follow a field solution
+ *
+ * Server-sent events: `progress` with the solution as `GET /fields/{id}` answers it, each time the bracket narrows, and `end` with the finished one; then the stream closes. Needs the scope `field`.
+ */
+export const readFieldEvents = <ThrowOnError extends boolean = true>(options: Options<ReadFieldEventsData, ThrowOnError, ReadFieldEventsResponse>) => (options.client ?? client).sse.get<ReadFieldEventsResponses, ReadFieldEventsErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/fields/{id}/events',
     ...options
 });
 

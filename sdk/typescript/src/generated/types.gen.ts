@@ -429,8 +429,106 @@ export type BoundedResistance = {
 export type ResistanceRequest = ({
     shape: 'bar';
 } & BarRequest) | ({
+    shape: 'round-wire';
+} & RoundWireRequest) | ({
+    shape: 'tube';
+} & TubeRequest) | ({
+    shape: 'prism';
+} & PrismRequest) | ({
+    shape: 'etched-trace';
+} & EtchedTraceRequest) | ({
+    shape: 'via-barrel';
+} & ViaBarrelRequest) | ({
+    shape: 'stranded-conductor';
+} & StrandedConductorRequest) | ({
+    shape: 'parallel-plates';
+} & ParallelPlatesRequest) | ({
+    shape: 'box-tube';
+} & BoxTubeRequest) | ({
+    shape: 'clad-wire';
+} & CladWireRequest) | ({
+    shape: 'helical-winding';
+} & HelicalWindingRequest) | ({
+    shape: 'flat-spiral';
+} & FlatSpiralRequest) | ({
+    shape: 'tapered-strip';
+} & TaperedStripRequest) | ({
+    shape: 'cone-frustum';
+} & ConeFrustumRequest) | ({
     shape: 'cylindrical-shell';
-} & CylindricalShellRequest);
+} & CylindricalShellRequest) | ({
+    shape: 'spherical-shell';
+} & SphericalShellRequest) | ({
+    shape: 'confocal-shell';
+} & ConfocalShellRequest) | ({
+    shape: 'arc-bar';
+} & ArcBarRequest) | ({
+    shape: 'conical-shell';
+} & ConicalShellRequest) | ({
+    shape: 'bent-tube';
+} & BentTubeRequest) | ({
+    shape: 'hyperbolic-neck';
+} & HyperbolicNeckRequest) | ({
+    shape: 'torus-arc';
+} & TorusArcRequest) | ({
+    shape: 'cylinder-in-square';
+} & CylinderInSquareRequest) | ({
+    shape: 'eccentric-cylinders';
+} & EccentricCylindersRequest) | ({
+    shape: 'parallel-cylinders';
+} & ParallelCylindersRequest) | ({
+    shape: 'cylinder-plane';
+} & CylinderPlaneRequest) | ({
+    shape: 'sphere-plane';
+} & SpherePlaneRequest) | ({
+    shape: 'sphere-buried';
+} & SphereBuriedRequest) | ({
+    shape: 'sphere-pair';
+} & SpherePairRequest) | ({
+    shape: 'spheroid';
+} & SpheroidRequest) | ({
+    shape: 'contact-spot';
+} & ContactSpotRequest) | ({
+    shape: 'elliptic-contact-spot';
+} & EllipticContactSpotRequest) | ({
+    shape: 'spot-in-cylinder';
+} & SpotInCylinderRequest) | ({
+    shape: 'sheet-strip';
+} & SheetStripRequest) | ({
+    shape: 'sheet-bend';
+} & SheetBendRequest) | ({
+    shape: 'sheet-step';
+} & SheetStepRequest) | ({
+    shape: 'sheet-meander';
+} & SheetMeanderRequest) | ({
+    shape: 'sheet-end-terminal';
+} & SheetEndTerminalRequest) | ({
+    shape: 'sheet-tee';
+} & SheetTeeRequest) | ({
+    shape: 'sheet-slit';
+} & SheetSlitRequest) | ({
+    shape: 'sheet-disc';
+} & SheetDiscRequest) | ({
+    shape: 'earth-hemisphere';
+} & EarthHemisphereRequest) | ({
+    shape: 'earth-rod';
+} & EarthRodRequest) | ({
+    shape: 'earth-rod-pair';
+} & EarthRodPairRequest) | ({
+    shape: 'earth-rod-group';
+} & EarthRodGroupRequest) | ({
+    shape: 'earth-wire';
+} & EarthWireRequest) | ({
+    shape: 'earth-ring';
+} & EarthRingRequest) | ({
+    shape: 'earth-plate';
+} & EarthPlateRequest) | ({
+    shape: 'earth-star';
+} & EarthStarRequest) | ({
+    shape: 'earth-rod-layered';
+} & EarthRodLayeredRequest) | ({
+    shape: 'earth-grid';
+} & EarthGridRequest);
 
 /**
  * A straight bar or strip of rectangular section; the current enters and leaves through the whole end faces.
@@ -819,6 +917,592 @@ export type Requirement = {
 };
 
 /**
+ * A straight solid wire of circular section; the current enters and leaves through the whole end faces.
+ */
+export type RoundWireRequest = {
+    shape: 'round-wire';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of the wire between the two terminals. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Diameter (d). Diameter of the bare conductor; a gauge may be given, such as AWG 24. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of the bare conductor; a gauge may be given, such as AWG 24. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A straight round tube; the current runs along its wall and enters and leaves through the ring-shaped end faces.
+ */
+export type TubeRequest = {
+    shape: 'tube';
+    /**
+     * The shape's dimensions; exactly one of outerDiameter, outerRadius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of the tube between the two terminals. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Outer diameter (D). Outer diameter of the tube. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string;
+        /**
+         * Outer radius (D/2). Outer radius of the tube. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string;
+        /**
+         * Wall (t). Thickness of the wall, less than half the outer diameter. A bare number is in m; a text carries its unit.
+         */
+        wall: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A straight conductor of any constant section, known by its area; the current enters and leaves through the whole end faces.
+ */
+export type PrismRequest = {
+    shape: 'prism';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Area of the section (S). Area of the conductor's section, such as 95 mm^2. A bare number is in m^2; a text carries its unit.
+         */
+        area: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A straight board trace with the trapezoidal section that etching leaves; the current enters and leaves through the whole end faces.
+ */
+export type EtchedTraceRequest = {
+    shape: 'etched-trace';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Base width (b). Width of the foot of the section, on the laminate. With an etch factor F the top is narrower by 2t/F. A bare number is in m; a text carries its unit.
+         */
+        baseWidth: number | string;
+        /**
+         * Top width (c). Width of the section at its top; it may also be the wider one (undercut). A bare number is in m; a text carries its unit.
+         */
+        topWidth: number | string;
+        /**
+         * Thickness (t). Height of the section: foil and plating together. A foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
+         */
+        thickness: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * The plated wall of a hole through a board, or several equal holes in parallel; the current runs along the barrel from one side of the board to the other.
+ */
+export type ViaBarrelRequest = {
+    shape: 'via-barrel';
+    /**
+     * The shape's dimensions; exactly one of holeDiameter, holeRadius.
+     */
+    dimensions: {
+        /**
+         * Height (H). Length of the barrel between the two layers that it joins; for a through hole the board's thickness. A bare number is in m; a text carries its unit.
+         */
+        height: number | string;
+        /**
+         * Finished hole diameter (d). Diameter of the FINISHED hole, inside the plating. The drill is larger: drill diameter less twice the plating gives the finished hole. A bare number is in m; a text carries its unit.
+         */
+        holeDiameter?: number | string;
+        /**
+         * Finished hole radius (d/2). Radius of the FINISHED hole, inside the plating. The drill is larger: drill radius less twice the plating gives the finished hole. A bare number is in m; a text carries its unit.
+         */
+        holeRadius?: number | string;
+        /**
+         * Plating (p). Thickness of the plating on the wall of the hole, outside the finished diameter. A bare number is in m; a text carries its unit.
+         */
+        plating: number | string;
+        /**
+         * Number of holes (n). Equal holes side by side, each carrying its share. Left out: 1.
+         */
+        count?: number;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * Equal round strands laid up into one conductor and joined at both ends; each strand is longer than the conductor by the lay factor.
+ */
+export type StrandedConductorRequest = {
+    shape: 'stranded-conductor';
+    /**
+     * The shape's dimensions; exactly one of strandDiameter, strandRadius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of the finished conductor, not of a strand. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Strands (n). Number of equal strands.
+         */
+        strands: number;
+        /**
+         * Strand diameter (d). Diameter of the bare metal of one strand, without tin or enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
+         */
+        strandDiameter?: number | string;
+        /**
+         * Strand radius (d/2). Radius of the bare metal of one strand, without tin or enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
+         */
+        strandRadius?: number | string;
+        /**
+         * Lay factor (k). Mean length of a strand over the length of the conductor: √(1+(π/m)²) for a lay of m mean diameters, averaged over the strands. Left out: 1.02.
+         */
+        layFactor?: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * The medium that fills the gap between two parallel plates of one area; the current crosses from plate to plate.
+ */
+export type ParallelPlatesRequest = {
+    shape: 'parallel-plates';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Gap (g). Distance between the two plates, the thickness of the medium. A bare number is in m; a text carries its unit.
+         */
+        gap: number | string;
+        /**
+         * Area (S). Area of each plate. A bare number is in m^2; a text carries its unit.
+         */
+        area: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A straight hollow bar of rectangular section with an even wall and square corners; the current runs along it.
+ */
+export type BoxTubeRequest = {
+    shape: 'box-tube';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Outer width (W). Outer width of the section. A bare number is in m; a text carries its unit.
+         */
+        outerWidth: number | string;
+        /**
+         * Outer height (H). Outer height of the section. A bare number is in m; a text carries its unit.
+         */
+        outerHeight: number | string;
+        /**
+         * Wall (t). Thickness of the wall, the same on all four sides. A bare number is in m; a text carries its unit.
+         */
+        wall: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A round wire of one metal clad with another, such as copper on aluminium or on steel; both carry current in parallel along the wire.
+ */
+export type CladWireRequest = {
+    shape: 'clad-wire';
+    /**
+     * The shape's dimensions; exactly one of coreDiameter, coreRadius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Core diameter (d). Diameter of the core alone; the finished wire is thicker by twice the cladding. A bare number is in m; a text carries its unit.
+         */
+        coreDiameter?: number | string;
+        /**
+         * Core radius (d/2). Radius of the core alone; the finished wire is thicker by twice the cladding. A bare number is in m; a text carries its unit.
+         */
+        coreRadius?: number | string;
+        /**
+         * Cladding thickness (t). Thickness of the cladding around the core, radially. A bare number is in m; a text carries its unit.
+         */
+        claddingThickness: number | string;
+    };
+    /**
+     * core: Core; cladding: Cladding
+     */
+    media: {
+        core: Medium;
+        cladding: Medium;
+    };
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A round wire wound into a helix with insulated turns; the current follows the wire from one end to the other.
+ */
+export type HelicalWindingRequest = {
+    shape: 'helical-winding';
+    /**
+     * The shape's dimensions; exactly one of meanDiameter, meanRadius; exactly one of wireDiameter, wireRadius.
+     */
+    dimensions: {
+        /**
+         * Turns (N). Number of turns; it need not be whole.
+         */
+        turns: number | string;
+        /**
+         * Mean diameter (D). Diameter of the helix at the centre of the wire: former diameter plus one wire diameter. A bare number is in m; a text carries its unit.
+         */
+        meanDiameter?: number | string;
+        /**
+         * Mean radius (D/2). Radius of the helix at the centre of the wire: former radius plus one wire radius. A bare number is in m; a text carries its unit.
+         */
+        meanRadius?: number | string;
+        /**
+         * Pitch (p). Advance along the axis per turn. A bare number is in m; a text carries its unit.
+         */
+        pitch: number | string;
+        /**
+         * Wire diameter (d). Diameter of the bare metal, without enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
+         */
+        wireDiameter?: number | string;
+        /**
+         * Wire radius (d/2). Radius of the bare metal, without enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
+         */
+        wireRadius?: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A strip of constant width laid out as an Archimedean spiral; the current follows the strip from the inner end to the outer one.
+ */
+export type FlatSpiralRequest = {
+    shape: 'flat-spiral';
+    /**
+     * The shape's dimensions; exactly one of innerRadius, innerDiameter.
+     */
+    dimensions: {
+        /**
+         * Turns (N). Number of turns; it need not be whole.
+         */
+        turns: number | string;
+        /**
+         * Inner radius (r₀). Radius of the centre line at the inner end: inner edge plus half the width. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string;
+        /**
+         * Inner diameter (2r₀). Diameter of the centre line at the inner end: inner edge plus half the width. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string;
+        /**
+         * Pitch (p). Growth of the radius per turn: width plus gap. A bare number is in m; a text carries its unit.
+         */
+        pitch: number | string;
+        /**
+         * Width (w). Width of the strip. A bare number is in m; a text carries its unit.
+         */
+        width: number | string;
+        /**
+         * Thickness (t). Thickness of the strip; a copper foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
+         */
+        thickness: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A strip whose width changes evenly and symmetrically between two straight ends, through which the current enters and leaves.
+ */
+export type TaperedStripRequest = {
+    shape: 'tapered-strip';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two straight ends. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Start width (w₁). Width at the high end. A bare number is in m; a text carries its unit.
+         */
+        startWidth: number | string;
+        /**
+         * End width (w₂). Width at the low end. A bare number is in m; a text carries its unit.
+         */
+        endWidth: number | string;
+        /**
+         * Thickness (t). Thickness of the strip; a copper foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
+         */
+        thickness: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A straight cone cut off by two flat end faces, through which the current enters and leaves; or a wire whose diameter changes evenly.
+ */
+export type ConeFrustumRequest = {
+    shape: 'cone-frustum';
+    /**
+     * The shape's dimensions; exactly one of startDiameter, startRadius; exactly one of endDiameter, endRadius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two flat end faces. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Start diameter (d₁). Diameter at the high end. A bare number is in m; a text carries its unit.
+         */
+        startDiameter?: number | string;
+        /**
+         * Start radius (d₁/2). Radius at the high end. A bare number is in m; a text carries its unit.
+         */
+        startRadius?: number | string;
+        /**
+         * End diameter (d₂). Diameter at the low end. A bare number is in m; a text carries its unit.
+         */
+        endDiameter?: number | string;
+        /**
+         * End radius (d₂/2). Radius at the low end. A bare number is in m; a text carries its unit.
+         */
+        endRadius?: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
  * The wall between two coaxial cylinders, or a sector of it; the current runs radially from the inner to the outer surface.
  */
 export type CylindricalShellRequest = {
@@ -872,6 +1556,2395 @@ export type CylindricalShellRequest = {
         label: string;
     };
     requirement?: Requirement;
+};
+
+/**
+ * The wall between two concentric spheres, or the part of it inside a cone; the current runs radially from the inner to the outer surface.
+ */
+export type SphericalShellRequest = {
+    shape: 'spherical-shell';
+    /**
+     * The shape's dimensions; exactly one of innerRadius, innerDiameter; exactly one of outerRadius, outerDiameter, wall.
+     */
+    dimensions: {
+        /**
+         * Inner radius (a). Radius of the inner surface. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string;
+        /**
+         * Inner diameter (2a). Diameter of the inner surface. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string;
+        /**
+         * Outer radius (b). Radius of the outer surface; or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string;
+        /**
+         * Outer diameter (2b). Diameter of the outer surface; or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string;
+        /**
+         * Wall (t). Thickness of the wall, outer less inner radius; keeps its digits however thin it is. A bare number is in m; a text carries its unit.
+         */
+        wall?: number | string;
+        /**
+         * Half angle (θ). Half the opening angle of the cone that cuts the shell out: 180° the whole shell, 90° a hemisphere. Left out: 180 deg. A bare number is in deg; a text carries its unit.
+         */
+        halfAngle?: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * The wall between two elliptic cylinders with common foci, such as the insulation of a flattened conductor; the current runs from the inner to the outer surface along hyperbolas.
+ */
+export type ConfocalShellRequest = {
+    shape: 'confocal-shell';
+    /**
+     * The shape's dimensions; exactly one of outerMajor, wall.
+     */
+    dimensions: {
+        /**
+         * Inner semi-major axis (a₁). Half the larger axis of the inner ellipse. A bare number is in m; a text carries its unit.
+         */
+        innerMajor: number | string;
+        /**
+         * Inner semi-minor axis (b₁). Half the smaller axis of the inner ellipse; at most the semi-major axis. A bare number is in m; a text carries its unit.
+         */
+        innerMinor: number | string;
+        /**
+         * Outer semi-major axis (a₂). Half the larger axis of the outer ellipse; its smaller axis follows from the common foci. Or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerMajor?: number | string;
+        /**
+         * Wall on the major axis (t). Difference of the two semi-major axes; keeps its digits however thin it is. A bare number is in m; a text carries its unit.
+         */
+        wall?: number | string;
+        /**
+         * Length (L). Length along the cylinders. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A bar of rectangular section bent to a circular arc; the current runs around the bend between the two radial end faces and crowds towards the inner edge.
+ */
+export type ArcBarRequest = {
+    shape: 'arc-bar';
+    /**
+     * The shape's dimensions; exactly one of innerRadius, innerDiameter; exactly one of outerRadius, outerDiameter, width.
+     */
+    dimensions: {
+        /**
+         * Inner radius (a). Radius of the inner edge of the bend. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string;
+        /**
+         * Inner diameter (2a). Diameter of the inner edge of the bend. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string;
+        /**
+         * Outer radius (b). Radius of the outer edge of the bend; or give the width. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string;
+        /**
+         * Outer diameter (2b). Diameter of the outer edge of the bend; or give the width. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string;
+        /**
+         * Width (w). Width of the bar in the plane of the bend, outer less inner radius. A bare number is in m; a text carries its unit.
+         */
+        width?: number | string;
+        /**
+         * Thickness (t). Thickness of the bar along the axis of the bend. A bare number is in m; a text carries its unit.
+         */
+        thickness: number | string;
+        /**
+         * Angle (φ). Angle of the bend between the two end faces. A bare number is in deg; a text carries its unit.
+         */
+        angle: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * The space between two coaxial cones with a common apex, cut off by two spheres round the apex; the current runs away from the apex, from the inner to the outer sphere.
+ */
+export type ConicalShellRequest = {
+    shape: 'conical-shell';
+    /**
+     * The shape's dimensions; exactly one of innerRadius, innerDiameter; exactly one of outerRadius, outerDiameter, wall.
+     */
+    dimensions: {
+        /**
+         * Inner radius (a). Distance of the inner spherical face from the apex, along the cone. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string;
+        /**
+         * Inner diameter (2a). Distance of the inner spherical face from the apex, along the cone. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string;
+        /**
+         * Outer radius (b). Distance of the outer spherical face from the apex; or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string;
+        /**
+         * Outer diameter (2b). Distance of the outer spherical face from the apex; or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string;
+        /**
+         * Wall (t). Length along the cone, outer less inner radius; keeps its digits however short it is. A bare number is in m; a text carries its unit.
+         */
+        wall?: number | string;
+        /**
+         * Inner half-angle (θ₁). Angle between the axis and the inner cone; 0 for a solid cone. A bare number is in deg; a text carries its unit.
+         */
+        innerHalfAngle: number | string;
+        /**
+         * Outer half-angle (θ₂). Angle between the axis and the outer cone; beyond 90° it opens backwards. A bare number is in deg; a text carries its unit.
+         */
+        outerHalfAngle: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A round tube bent to an arc of a circle; the current enters and leaves through the cut end faces and runs round the bend.
+ */
+export type BentTubeRequest = {
+    shape: 'bent-tube';
+    /**
+     * The shape's dimensions; exactly one of bendRadius, bendDiameter; exactly one of outerDiameter, outerRadius.
+     */
+    dimensions: {
+        /**
+         * Bend radius (R₀). Radius of the centre line of the tube; greater than half the outer diameter. A bare number is in m; a text carries its unit.
+         */
+        bendRadius?: number | string;
+        /**
+         * Bend diameter (2R₀). Diameter of the centre line of the tube; greater than half the outer diameter. A bare number is in m; a text carries its unit.
+         */
+        bendDiameter?: number | string;
+        /**
+         * Outer diameter (D). Outer diameter of the tube. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string;
+        /**
+         * Outer radius (D/2). Outer radius of the tube. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string;
+        /**
+         * Wall (t). Thickness of the wall; less than half the outer diameter. A bare number is in m; a text carries its unit.
+         */
+        wall: number | string;
+        /**
+         * Bend angle (φ). Angle of the bend between its two end faces. A bare number is in deg; a text carries its unit.
+         */
+        angle: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A body whose wall is a hyperboloid round the axis, narrowest at the throat; the current runs along the axis between caps that are oblate spheroids confocal with the wall.
+ */
+export type HyperbolicNeckRequest = {
+    shape: 'hyperbolic-neck';
+    /**
+     * The shape's dimensions; exactly one of throatRadius, throatDiameter.
+     */
+    dimensions: {
+        /**
+         * Throat radius (a). Radius at the narrowest place. A bare number is in m; a text carries its unit.
+         */
+        throatRadius?: number | string;
+        /**
+         * Throat diameter (2a). Diameter at the narrowest place. A bare number is in m; a text carries its unit.
+         */
+        throatDiameter?: number | string;
+        /**
+         * Opening angle (β). Angle between the axis and the cone that the wall approaches; 90° is a hole in a thin insulating plane. A bare number is in deg; a text carries its unit.
+         */
+        openingAngle: number | string;
+        /**
+         * Length of one side (z). Distance on the axis from the throat to the cap, one side. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Sides (n). 2: the neck widens on both sides of the throat; 1: the throat is a terminal. Left out: 2.
+         */
+        sides?: number;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A round bar bent to an arc of a circle, a part of a torus; the current enters and leaves through the cut end faces and runs round the bend.
+ */
+export type TorusArcRequest = {
+    shape: 'torus-arc';
+    /**
+     * The shape's dimensions; exactly one of bendRadius, bendDiameter; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Bend radius (R₀). Radius of the centre line of the bar; greater than half its diameter. A bare number is in m; a text carries its unit.
+         */
+        bendRadius?: number | string;
+        /**
+         * Bend diameter (2R₀). Diameter of the centre line of the bar; greater than half its diameter. A bare number is in m; a text carries its unit.
+         */
+        bendDiameter?: number | string;
+        /**
+         * Diameter (d). Diameter of the bar. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of the bar. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * Bend angle (φ). Angle of the bend between its two end faces. A bare number is in deg; a text carries its unit.
+         */
+        angle: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A round cylinder in the middle of a square duct, such as a conductor cast in a square block; the current runs from the cylinder to the four sides.
+ */
+export type CylinderInSquareRequest = {
+    shape: 'cylinder-in-square';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Diameter (d). Diameter of the cylinder; less than the side. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of the cylinder; less than the side. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * Side (w). Inside width of the square duct. A bare number is in m; a text carries its unit.
+         */
+        side: number | string;
+        /**
+         * Length (L). Length along the axis. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * The space between two cylinders with parallel axes, one inside the other and out of centre, such as the insulation of an off-centre core; the current runs from the inner to the outer one.
+ */
+export type EccentricCylindersRequest = {
+    shape: 'eccentric-cylinders';
+    /**
+     * The shape's dimensions; exactly one of innerDiameter, innerRadius; exactly one of outerDiameter, outerRadius; exactly one of offset, gap.
+     */
+    dimensions: {
+        /**
+         * Inner diameter (d). Diameter of the inner cylinder. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string;
+        /**
+         * Inner radius (d/2). Radius of the inner cylinder. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string;
+        /**
+         * Outer diameter (D). Inside diameter of the outer cylinder. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string;
+        /**
+         * Outer radius (D/2). Inside radius of the outer cylinder. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string;
+        /**
+         * Offset (e). Distance between the two axes; 0 is concentric. A bare number is in m; a text carries its unit.
+         */
+        offset?: number | string;
+        /**
+         * Smallest gap (g). Smallest distance between the two surfaces; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string;
+        /**
+         * Length (L). Length along the axes. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * Two long cylinders beside each other in a medium that reaches far on all sides; the current runs from one to the other.
+ */
+export type ParallelCylindersRequest = {
+    shape: 'parallel-cylinders';
+    /**
+     * The shape's dimensions; exactly one of diameter1, radius1; exactly one of diameter2, radius2; exactly one of spacing, gap.
+     */
+    dimensions: {
+        /**
+         * First diameter (d₁). Diameter of the first cylinder. A bare number is in m; a text carries its unit.
+         */
+        diameter1?: number | string;
+        /**
+         * First radius (d₁/2). Radius of the first cylinder. A bare number is in m; a text carries its unit.
+         */
+        radius1?: number | string;
+        /**
+         * Second diameter (d₂). Diameter of the second cylinder. A bare number is in m; a text carries its unit.
+         */
+        diameter2?: number | string;
+        /**
+         * Second radius (d₂/2). Radius of the second cylinder. A bare number is in m; a text carries its unit.
+         */
+        radius2?: number | string;
+        /**
+         * Spacing (s). Distance between the two axes. A bare number is in m; a text carries its unit.
+         */
+        spacing?: number | string;
+        /**
+         * Gap (g). Smallest distance between the two surfaces; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string;
+        /**
+         * Length (L). Length along the axes. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A long cylinder parallel to a plane electrode, in a medium that fills the space on its side; the current runs from the cylinder to the plane.
+ */
+export type CylinderPlaneRequest = {
+    shape: 'cylinder-plane';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius; exactly one of height, gap.
+     */
+    dimensions: {
+        /**
+         * Diameter (d). Diameter of the cylinder. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of the cylinder. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * Height (h). Distance from the axis to the plane. A bare number is in m; a text carries its unit.
+         */
+        height?: number | string;
+        /**
+         * Gap (g). Smallest distance between the surface and the plane; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string;
+        /**
+         * Length (L). Length along the axis. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A sphere above a plane electrode, in a medium that fills the space on its side; the current runs from the sphere to the plane.
+ */
+export type SpherePlaneRequest = {
+    shape: 'sphere-plane';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius; exactly one of height, gap.
+     */
+    dimensions: {
+        /**
+         * Diameter (d). Diameter of the sphere. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of the sphere. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * Height (h). Distance from the centre to the plane. A bare number is in m; a text carries its unit.
+         */
+        height?: number | string;
+        /**
+         * Gap (g). Smallest distance between the surface and the plane; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A sphere below the insulating surface of a half-space, such as an electrode in the ground or under water; the current spreads from it to infinity.
+ */
+export type SphereBuriedRequest = {
+    shape: 'sphere-buried';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius; exactly one of depth, cover.
+     */
+    dimensions: {
+        /**
+         * Diameter (d). Diameter of the sphere. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of the sphere. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * Depth (h). Distance from the surface down to the centre. A bare number is in m; a text carries its unit.
+         */
+        depth?: number | string;
+        /**
+         * Cover (g). Thickness of the medium above the sphere; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        cover?: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * Two spheres in a medium that reaches far on all sides; the current runs from one to the other, and none to infinity.
+ */
+export type SpherePairRequest = {
+    shape: 'sphere-pair';
+    /**
+     * The shape's dimensions; exactly one of diameter1, radius1; exactly one of diameter2, radius2; exactly one of spacing, gap.
+     */
+    dimensions: {
+        /**
+         * First diameter (d₁). Diameter of the first sphere. A bare number is in m; a text carries its unit.
+         */
+        diameter1?: number | string;
+        /**
+         * First radius (d₁/2). Radius of the first sphere. A bare number is in m; a text carries its unit.
+         */
+        radius1?: number | string;
+        /**
+         * Second diameter (d₂). Diameter of the second sphere. A bare number is in m; a text carries its unit.
+         */
+        diameter2?: number | string;
+        /**
+         * Second radius (d₂/2). Radius of the second sphere. A bare number is in m; a text carries its unit.
+         */
+        radius2?: number | string;
+        /**
+         * Spacing (s). Distance between the two centres. A bare number is in m; a text carries its unit.
+         */
+        spacing?: number | string;
+        /**
+         * Gap (g). Smallest distance between the two surfaces; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * An ellipsoid of revolution, slender or flat, in a medium without bounds, or half of it below an insulating plane through its centre; the current spreads from it to infinity.
+ */
+export type SpheroidRequest = {
+    shape: 'spheroid';
+    /**
+     * The shape's dimensions; exactly one of polarDiameter, polarRadius; exactly one of equatorialDiameter, equatorialRadius.
+     */
+    dimensions: {
+        /**
+         * Polar diameter (d_p). Length along the axis of revolution. A bare number is in m; a text carries its unit.
+         */
+        polarDiameter?: number | string;
+        /**
+         * Polar radius (d_p/2). Length along the axis of revolution. A bare number is in m; a text carries its unit.
+         */
+        polarRadius?: number | string;
+        /**
+         * Equatorial diameter (d_e). Diameter across the axis of revolution. A bare number is in m; a text carries its unit.
+         */
+        equatorialDiameter?: number | string;
+        /**
+         * Equatorial radius (d_e/2). Radius across the axis of revolution. A bare number is in m; a text carries its unit.
+         */
+        equatorialRadius?: number | string;
+        /**
+         * Space (n). full: medium on all sides; half: an insulating plane through the centre, such as the ground surface. Left out: full.
+         */
+        space?: 'full' | 'half';
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A round spot through which two large bodies touch, or a round electrode on one; the current narrows to the spot and spreads again.
+ */
+export type ContactSpotRequest = {
+    shape: 'contact-spot';
+    /**
+     * The shape's dimensions; exactly one of spotDiameter, spotRadius.
+     */
+    dimensions: {
+        /**
+         * Spot diameter (d). Diameter of the conducting spot. A bare number is in m; a text carries its unit.
+         */
+        spotDiameter?: number | string;
+        /**
+         * Spot radius (d/2). Radius of the conducting spot. A bare number is in m; a text carries its unit.
+         */
+        spotRadius?: number | string;
+        /**
+         * Sides (n). 2: bodies on both sides of the spot; 1: an electrode on one body. Left out: 2.
+         */
+        sides?: number;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * An elliptic spot through which two large bodies touch, such as crossed or grooved cylinders pressed together; the current narrows to the spot and spreads again.
+ */
+export type EllipticContactSpotRequest = {
+    shape: 'elliptic-contact-spot';
+    /**
+     * The shape's dimensions; exactly one of majorDiameter, majorRadius; exactly one of minorDiameter, minorRadius.
+     */
+    dimensions: {
+        /**
+         * Major diameter (d₁). Longer axis of the conducting ellipse. A bare number is in m; a text carries its unit.
+         */
+        majorDiameter?: number | string;
+        /**
+         * Major radius (d₁/2). Longer axis of the conducting ellipse. A bare number is in m; a text carries its unit.
+         */
+        majorRadius?: number | string;
+        /**
+         * Minor diameter (d₂). Shorter axis; at most the longer one. A bare number is in m; a text carries its unit.
+         */
+        minorDiameter?: number | string;
+        /**
+         * Minor radius (d₂/2). Shorter axis; at most the longer one. A bare number is in m; a text carries its unit.
+         */
+        minorRadius?: number | string;
+        /**
+         * Sides (n). 2: bodies on both sides of the spot; 1: an electrode on one body. Left out: 2.
+         */
+        sides?: number;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A round spot in the middle of the end faces through which two equal round bars touch; the resistance is what the narrowing to the spot adds to the bars' own.
+ */
+export type SpotInCylinderRequest = {
+    shape: 'spot-in-cylinder';
+    /**
+     * The shape's dimensions; exactly one of spotDiameter, spotRadius; exactly one of cylinderDiameter, cylinderRadius.
+     */
+    dimensions: {
+        /**
+         * Spot diameter (d). Diameter of the conducting spot; less than that of the bar. A bare number is in m; a text carries its unit.
+         */
+        spotDiameter?: number | string;
+        /**
+         * Spot radius (d/2). Radius of the conducting spot; less than that of the bar. A bare number is in m; a text carries its unit.
+         */
+        spotRadius?: number | string;
+        /**
+         * Bar diameter (D). Diameter of the round bar. A bare number is in m; a text carries its unit.
+         */
+        cylinderDiameter?: number | string;
+        /**
+         * Bar radius (D/2). Radius of the round bar. A bare number is in m; a text carries its unit.
+         */
+        cylinderRadius?: number | string;
+        /**
+         * Sides (n). 2: bars on both sides of the spot; 1: an electrode on the end of one bar. Left out: 2.
+         */
+        sides?: number;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A straight strip of a thin sheet; the current enters and leaves across its whole ends.
+ */
+export type SheetStripRequest = {
+    shape: 'sheet-strip';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two ends. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Width (w). Width of the strip. A bare number is in m; a text carries its unit.
+         */
+        width: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * Two strips of a thin sheet that meet at a right angle with a full corner; the current enters across the end of one leg and leaves across the end of the other.
+ */
+export type SheetBendRequest = {
+    shape: 'sheet-bend';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * First leg (L₁). Length of the first leg from the inner corner, corner excluded. A bare number is in m; a text carries its unit.
+         */
+        legLength1: number | string;
+        /**
+         * Second leg (L₂). Length of the second leg from the inner corner, corner excluded. A bare number is in m; a text carries its unit.
+         */
+        legLength2: number | string;
+        /**
+         * First width (w₁). Width of the first leg. A bare number is in m; a text carries its unit.
+         */
+        width1: number | string;
+        /**
+         * Second width (w₂). Width of the second leg. A bare number is in m; a text carries its unit.
+         */
+        width2: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A strip of a thin sheet that changes its width abruptly, on one side or on both; the current runs along it between its two whole ends.
+ */
+export type SheetStepRequest = {
+    shape: 'sheet-step';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * First length (L₁). Length of the first part, from its end to the step. A bare number is in m; a text carries its unit.
+         */
+        length1: number | string;
+        /**
+         * First width (w₁). Width of the first part. A bare number is in m; a text carries its unit.
+         */
+        width1: number | string;
+        /**
+         * Second length (L₂). Length of the second part, from the step to its end. A bare number is in m; a text carries its unit.
+         */
+        length2: number | string;
+        /**
+         * Second width (w₂). Width of the second part. A bare number is in m; a text carries its unit.
+         */
+        width2: number | string;
+        /**
+         * Alignment (m). edge: the step is on one side; centre: half of it on each side.
+         */
+        alignment: 'edge' | 'centre';
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A strip of thin sheet folded into parallel legs with square turns, such as a film resistor or a heater; the current enters across the free end of the first leg and leaves across that of the last.
+ */
+export type SheetMeanderRequest = {
+    shape: 'sheet-meander';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Legs (n). Number of parallel legs.
+         */
+        legs: number;
+        /**
+         * Leg length (ℓ). Length of each leg between the corners, corners excluded; the first and last from their free end to the corner. A bare number is in m; a text carries its unit.
+         */
+        legLength: number | string;
+        /**
+         * Width (w). Width of the strip, in legs and turns. A bare number is in m; a text carries its unit.
+         */
+        width: number | string;
+        /**
+         * Gap (g). Clear distance between neighbouring legs. A bare number is in m; a text carries its unit.
+         */
+        gap: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A rectangular sheet with one whole end as a terminal and the other end covered in part only, in its middle or from one edge on; the current crowds towards the partial terminal.
+ */
+export type SheetEndTerminalRequest = {
+    shape: 'sheet-end-terminal';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two ends. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Width (W). Width of the sheet. A bare number is in m; a text carries its unit.
+         */
+        width: number | string;
+        /**
+         * Terminal width (c). Width of the partial terminal; at most that of the sheet. A bare number is in m; a text carries its unit.
+         */
+        terminalWidth: number | string;
+        /**
+         * Position (m). Where the partial terminal lies on its end.
+         */
+        position: 'centre' | 'edge';
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A straight bar of thin sheet with a stub at a right angle; the current runs through the bar, from its left arm into the stub, or from both arms together into the stub.
+ */
+export type SheetTeeRequest = {
+    shape: 'sheet-tee';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Bar width (a). Width of the bar that runs straight through. A bare number is in m; a text carries its unit.
+         */
+        barWidth: number | string;
+        /**
+         * Stub width (b). Width of the stub. A bare number is in m; a text carries its unit.
+         */
+        stubWidth: number | string;
+        /**
+         * Left arm (L₁). Length of the bar's left arm, from the inner corner to its end. A bare number is in m; a text carries its unit.
+         */
+        leftLength: number | string;
+        /**
+         * Right arm (L₂). Length of the bar's right arm, from the inner corner to its end. A bare number is in m; a text carries its unit.
+         */
+        rightLength: number | string;
+        /**
+         * Stub (L₃). Length of the stub, from the inner corners to its end. A bare number is in m; a text carries its unit.
+         */
+        stubLength: number | string;
+        /**
+         * Path (p). Which ends are terminals; the end of a floating arm is an insulated edge.
+         */
+        path: 'through' | 'branch' | 'both';
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A strip of thin sheet with a thin insulating cut across it at mid-length, such as a laser trim: from one edge, inside, or from both edges; the current runs along the strip through what is left.
+ */
+export type SheetSlitRequest = {
+    shape: 'sheet-slit';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two ends of the strip. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Width (W). Width of the strip. A bare number is in m; a text carries its unit.
+         */
+        width: number | string;
+        /**
+         * Opening (d). Total width that is left uncut at the slit; at most that of the strip. A bare number is in m; a text carries its unit.
+         */
+        opening: number | string;
+        /**
+         * Kind (m). centre leaves half of the opening at each edge, iris all of it in the middle; both have the same resistance.
+         */
+        kind: 'edge' | 'centre' | 'iris';
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A round thin sheet with two terminals along its rim, centred opposite each other; the current runs across the disc from one arc to the other.
+ */
+export type SheetDiscRequest = {
+    shape: 'sheet-disc';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Diameter (d). Diameter of the disc; the resistance does not depend on it. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of the disc; the resistance does not depend on it. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * First terminal (t₁). Angle at the centre that the first terminal spans. A bare number is in deg; a text carries its unit.
+         */
+        terminalAngle1: number | string;
+        /**
+         * Second terminal (t₂). Angle at the centre that the second terminal spans. A bare number is in deg; a text carries its unit.
+         */
+        terminalAngle2: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A metal hemisphere with its flat side flush with the ground; the current spreads radially into the soil. The model for a compact electrode.
+ */
+export type EarthHemisphereRequest = {
+    shape: 'earth-hemisphere';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Diameter (D). Diameter of the hemisphere at the surface. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (D/2). Radius of the hemisphere at the surface. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A round metal rod driven straight down from the surface; the current spreads into the soil along its whole length.
+ */
+export type EarthRodRequest = {
+    shape: 'earth-rod';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of the rod in the soil. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Diameter (d). Diameter of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * Two equal rods driven from the surface and joined together, taken as one terminal; valid for every spacing.
+ */
+export type EarthRodPairRequest = {
+    shape: 'earth-rod-pair';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of each rod in the soil. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Diameter (d). Diameter of each rod. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of each rod. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * Spacing (s). Distance between the axes of the two rods. A bare number is in m; a text carries its unit.
+         */
+        spacing: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * Equal rods driven from the surface in a line, a ring or a square grid and joined together, taken as one terminal.
+ */
+export type EarthRodGroupRequest = {
+    shape: 'earth-rod-group';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of each rod in the soil. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Diameter (d). Diameter of each rod. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of each rod. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * Spacing (s). Distance between the axes of neighbouring rods; in a ring straight across, not along the circle. A bare number is in m; a text carries its unit.
+         */
+        spacing: number | string;
+        /**
+         * Number of rods (n). How many rods; for a square grid a square number such as 4, 9 or 16.
+         */
+        count: number;
+        /**
+         * Arrangement (). How the rods stand: in a straight line, evenly on a ring, or in a square grid of equal rows. Left out: line.
+         */
+        arrangement?: 'line' | 'ring' | 'square';
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A straight bare wire laid horizontally in the ground; the current spreads into the soil along it.
+ */
+export type EarthWireRequest = {
+    shape: 'earth-wire';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (ℓ). Whole length of the wire, from end to end. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Wire diameter (d). Diameter of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Wire radius (d/2). Radius of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * Depth (h). Depth of the wire's axis below the surface. A bare number is in m; a text carries its unit.
+         */
+        depth: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A closed ring of bare round wire laid horizontally in the ground, such as a foundation's ring electrode.
+ */
+export type EarthRingRequest = {
+    shape: 'earth-ring';
+    /**
+     * The shape's dimensions; exactly one of ringDiameter, ringRadius; exactly one of wireDiameter, wireRadius.
+     */
+    dimensions: {
+        /**
+         * Ring diameter (D). Diameter of the ring at the centre of the wire. A bare number is in m; a text carries its unit.
+         */
+        ringDiameter?: number | string;
+        /**
+         * Ring radius (D/2). Radius of the ring at the centre of the wire. A bare number is in m; a text carries its unit.
+         */
+        ringRadius?: number | string;
+        /**
+         * Wire diameter (d). Diameter of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        wireDiameter?: number | string;
+        /**
+         * Wire radius (d/2). Radius of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        wireRadius?: number | string;
+        /**
+         * Depth (h). Depth of the ring below the surface, to the centre of the wire. A bare number is in m; a text carries its unit.
+         */
+        depth: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A thin round metal plate laid flat in the ground with both faces in the soil; the current leaves from both, mostly near the rim.
+ */
+export type EarthPlateRequest = {
+    shape: 'earth-plate';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Diameter (D). Diameter of the plate; a square plate acts like a round one of the same area to about 2 %. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (D/2). Radius of the plate; a square plate acts like a round one of the same area to about 2 %. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * Depth (h). Depth of the plate below the surface. A bare number is in m; a text carries its unit.
+         */
+        depth: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * Equal straight bare wires laid horizontally in the ground from one common point; two arms stand at a right angle, more are spread evenly.
+ */
+export type EarthStarRequest = {
+    shape: 'earth-star';
+    /**
+     * The shape's dimensions; exactly one of wireDiameter, wireRadius.
+     */
+    dimensions: {
+        /**
+         * Arms (n). Number of arms: 2 (at a right angle), 3, 4, 6 or 8.
+         */
+        arms: number;
+        /**
+         * Arm length (L). Length of each arm from the common point. A bare number is in m; a text carries its unit.
+         */
+        armLength: number | string;
+        /**
+         * Wire diameter (d). Diameter of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        wireDiameter?: number | string;
+        /**
+         * Wire radius (d/2). Radius of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        wireRadius?: number | string;
+        /**
+         * Depth (h). Depth of the wires' axes below the surface. A bare number is in m; a text carries its unit.
+         */
+        depth: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A round rod driven from the surface of a soil of two horizontal layers; it may end in the upper layer or reach into the lower one.
+ */
+export type EarthRodLayeredRequest = {
+    shape: 'earth-rod-layered';
+    /**
+     * The shape's dimensions; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of the rod in the soil. A bare number is in m; a text carries its unit.
+         */
+        length: number | string;
+        /**
+         * Diameter (d). Diameter of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string;
+        /**
+         * Radius (d/2). Radius of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string;
+        /**
+         * Depth of the upper layer (h). Thickness of the upper layer, from the surface down. A bare number is in m; a text carries its unit.
+         */
+        upperDepth: number | string;
+    };
+    /**
+     * upper: Upper layer; lower: Lower layer
+     */
+    media: {
+        upper: Medium;
+        lower: Medium;
+    };
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A horizontal grid of bare conductors under a site, joined where they cross; estimated from its area, its depth and the length of its conductors.
+ */
+export type EarthGridRequest = {
+    shape: 'earth-grid';
+    /**
+     * The shape's dimensions.
+     */
+    dimensions: {
+        /**
+         * Area (A). Area that the grid encloses. A bare number is in m^2; a text carries its unit.
+         */
+        area: number | string;
+        /**
+         * Conductor length (L). Total length of buried bare conductors; for a rectangle of m by n meshes (m+1) lengths and (n+1) widths. A bare number is in m; a text carries its unit.
+         */
+        conductorLength: number | string;
+        /**
+         * Depth (h). Depth of the grid below the surface. A bare number is in m; a text carries its unit.
+         */
+        depth: number | string;
+    };
+    medium: Medium;
+    operating?: Operating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+};
+
+/**
+ * A stored outline.
+ */
+export type Outline = {
+    id: string;
+    createdAt: string;
+    /**
+     * The outline as it was cleaned.
+     */
+    outline: {
+        unit?: 'km' | 'm' | 'dm' | 'cm' | 'mm' | 'um' | 'µm' | 'μm' | 'nm' | 'in' | 'mil' | 'ft';
+        outer: Array<[
+            number,
+            number
+        ] | {
+            arcTo: [
+                number,
+                number
+            ];
+            center: [
+                number,
+                number
+            ];
+            clockwise?: boolean;
+        }>;
+        holes?: Array<Array<[
+            number,
+            number
+        ] | {
+            arcTo: [
+                number,
+                number
+            ];
+            center: [
+                number,
+                number
+            ];
+            clockwise?: boolean;
+        }>>;
+        symmetry?: 'plan' | 'axisymmetric';
+    };
+    terminals: Array<{
+        name: string;
+        segments?: Array<[
+            [
+                number,
+                number
+            ],
+            [
+                number,
+                number
+            ]
+        ]>;
+        parts?: Array<{
+            ring: number;
+            edge: number;
+            from?: number;
+            to?: number;
+        }>;
+    }>;
+    /**
+     * Regions found on the drawing; none for JSON.
+     */
+    regions: Array<unknown>;
+    /**
+     * What was put right, as sentences.
+     */
+    repairs: Array<string>;
+};
+
+/**
+ * An outline to store.
+ */
+export type OutlineRequest = {
+    outline: {
+        unit?: 'km' | 'm' | 'dm' | 'cm' | 'mm' | 'um' | 'µm' | 'μm' | 'nm' | 'in' | 'mil' | 'ft';
+        outer: Array<[
+            number,
+            number
+        ] | {
+            arcTo: [
+                number,
+                number
+            ];
+            center: [
+                number,
+                number
+            ];
+            clockwise?: boolean;
+        }>;
+        holes?: Array<Array<[
+            number,
+            number
+        ] | {
+            arcTo: [
+                number,
+                number
+            ];
+            center: [
+                number,
+                number
+            ];
+            clockwise?: boolean;
+        }>>;
+        symmetry?: 'plan' | 'axisymmetric';
+    };
+    /**
+     * Terminals to keep with the outline; a field solution may bring its own.
+     */
+    terminals?: Array<{
+        name: string;
+        segments?: Array<[
+            [
+                number,
+                number
+            ],
+            [
+                number,
+                number
+            ]
+        ]>;
+        parts?: Array<{
+            ring: number;
+            edge: number;
+            from?: number;
+            to?: number;
+        }>;
+    }>;
+};
+
+/**
+ * A field solution, finished or on its way.
+ */
+export type Field = {
+    id: string;
+    /**
+     * `limited`: a cap on unknowns or time was met; the bracket reached stands. `failed`: `failure` says why.
+     */
+    status: 'queued' | 'running' | 'done' | 'limited' | 'failed' | 'cancelled';
+    createdAt: string;
+    finishedAt: string | null;
+    /**
+     * The bracket so far; null before the first one.
+     */
+    progress: {
+        /**
+         * Lower bound so far, in ohms.
+         */
+        lower: number;
+        /**
+         * Upper bound so far, in ohms.
+         */
+        upper: number;
+        unknowns: number;
+        refinements: number;
+    } | null;
+    result: FieldResult;
+    /**
+     * Why there is no result, for a status `failed`.
+     */
+    failure?: string;
+    /**
+     * The record, where one was asked for and the solution is finished.
+     */
+    record?: {
+        id: string;
+        url: string;
+    };
+};
+
+/**
+ * A field solution.
+ */
+export type FieldResult = {
+    /**
+     * Between the two terminals; left out for three and more.
+     */
+    resistance?: {
+        /**
+         * Resistance in ohms; lower ≤ value ≤ upper.
+         */
+        value: number;
+        unit: 'ohm';
+        /**
+         * The value for people, rounded as its bounds allow.
+         */
+        text: string;
+        /**
+         * Lower bound in ohms, below the upper one always.
+         */
+        lower: number;
+        /**
+         * Upper bound in ohms.
+         */
+        upper: number;
+        /**
+         * Where the bounds come from: rounding (closed form or converged series), quadrature (error estimate), rayleigh (conducting sheets and insulating walls), formula-accuracy (stated accuracy of a published formula), energy (two field solutions), energy-quadrature (the same with estimated integrals).
+         */
+        boundsBasis: 'rounding' | 'quadrature' | 'rayleigh' | 'formula-accuracy' | 'energy' | 'energy-quadrature';
+        /**
+         * Whether the bounds are proved for the stated problem.
+         */
+        proved: boolean;
+    };
+    /**
+     * The resistance over the sheet resistance, for a uniform sheet.
+     */
+    squares?: {
+        /**
+         * Resistance in squares; lower ≤ value ≤ upper.
+         */
+        value: number;
+        unit: 'square';
+        text: string;
+        lower: number;
+        upper: number;
+    };
+    /**
+     * For three terminals and more: the current into terminal i in amperes for one volt at terminal j, all others at zero.
+     */
+    conductance?: Array<Array<number>>;
+    /**
+     * Bounds of each entry of `conductance`, in siemens.
+     */
+    conductanceBounds?: {
+        lower: Array<Array<number>>;
+        upper: Array<Array<number>>;
+    };
+    /**
+     * For three terminals and more: each pair.
+     */
+    pairs?: Array<{
+        /**
+         * Names of two terminals.
+         */
+        between: [
+            string,
+            string
+        ];
+        /**
+         * With the other terminals left open.
+         */
+        floating: {
+            /**
+             * Resistance in ohms; null where the coupling could not be told from none.
+             */
+            value: number | null;
+            unit: 'ohm';
+            text: string;
+            /**
+             * Lower bound in ohms.
+             */
+            lower: number;
+            /**
+             * Upper bound in ohms; null where there is none.
+             */
+            upper: number | null;
+        };
+        /**
+         * One volt over the current that reaches the second, with all others at zero.
+         */
+        grounded: {
+            /**
+             * Resistance in ohms; null where the coupling could not be told from none.
+             */
+            value: number | null;
+            unit: 'ohm';
+            text: string;
+            /**
+             * Lower bound in ohms.
+             */
+            lower: number;
+            /**
+             * Upper bound in ohms; null where there is none.
+             */
+            upper: number | null;
+        };
+    }>;
+    method: 'field';
+    /**
+     * The operating point; voltage, current and power only where the request gave one of them.
+     */
+    operating: {
+        /**
+         * Temperature in °C at which the medium was evaluated.
+         */
+        temperature: number;
+        /**
+         * Voltage across the terminals in volts.
+         */
+        voltage?: number;
+        /**
+         * Current in amperes.
+         */
+        current?: number;
+        /**
+         * Power in watts.
+         */
+        power?: number;
+    };
+    /**
+     * Where the current crowds.
+     */
+    peak?: {
+        /**
+         * Whether the density grows without limit towards the position, as it does at re-entrant corners and where a terminal ends on an edge.
+         */
+        unbounded: boolean;
+        /**
+         * A place on the outline.
+         */
+        position: {
+            /**
+             * In the outline's unit.
+             */
+            x: number;
+            /**
+             * In the outline's unit.
+             */
+            y: number;
+            /**
+             * The outline's unit.
+             */
+            unit: string;
+            text: string;
+        };
+        /**
+         * Distance from the position at which the values were read.
+         */
+        distance: {
+            value: number;
+            unit: 'm';
+            /**
+             * The value for people.
+             */
+            text: string;
+        } | null;
+        /**
+         * Field strength.
+         */
+        field: {
+            value: number;
+            unit: 'V/m';
+            /**
+             * The value for people.
+             */
+            text: string;
+        };
+        /**
+         * Current density: of the sheet in A/m, or in A/m² where the outline is axisymmetric.
+         */
+        currentDensity: {
+            value: number;
+            unit: 'A/m' | 'A/m^2';
+            /**
+             * The value for people.
+             */
+            text: string;
+        };
+        /**
+         * Whether the values hold at the operating point or at one volt.
+         */
+        per: 'operating-point' | 'volt';
+        /**
+         * The peak in one sentence.
+         */
+        text: string;
+    };
+    /**
+     * Whether the requirement is met; decided only if the bounds lie wholly on one side.
+     */
+    verdict?: 'met' | 'not-met' | 'undecided';
+    /**
+     * The mesh of the last refinement.
+     */
+    mesh: {
+        triangles: number;
+        /**
+         * Unknowns of one of the two solutions.
+         */
+        unknowns: number;
+        refinements: number;
+    };
+    /**
+     * Which cap ended the work before the wanted accuracy, for a status `limited`.
+     */
+    limit?: string;
+    /**
+     * Time the solution took, in seconds.
+     */
+    seconds: number;
+    checks: Array<{
+        name: 'voltage-independence' | 'current-continuity' | 'second-route';
+        /**
+         * false where the shape has nothing to compare; then `reason` says why.
+         */
+        applies: boolean;
+        passed?: boolean;
+        /**
+         * Relative deviation found.
+         */
+        deviation?: number;
+        /**
+         * Largest relative deviation that passes.
+         */
+        tolerance?: number;
+        reason?: string;
+    }>;
+    /**
+     * What was put right on the outline, as sentences.
+     */
+    repairs: Array<string>;
+    cautions: Array<string>;
+    assumptions: Array<string>;
+    materials: Array<{
+        id: string;
+        version: number;
+        name: string;
+    }>;
+    engine: string;
+} | null;
+
+/**
+ * An outline, its terminals and medium, and how narrow the bracket shall be.
+ */
+export type FieldRequest = {
+    /**
+     * The plan drawing, or `outlineId`.
+     */
+    outline?: {
+        unit?: 'km' | 'm' | 'dm' | 'cm' | 'mm' | 'um' | 'µm' | 'μm' | 'nm' | 'in' | 'mil' | 'ft';
+        outer: Array<[
+            number,
+            number
+        ] | {
+            arcTo: [
+                number,
+                number
+            ];
+            center: [
+                number,
+                number
+            ];
+            clockwise?: boolean;
+        }>;
+        holes?: Array<Array<[
+            number,
+            number
+        ] | {
+            arcTo: [
+                number,
+                number
+            ];
+            center: [
+                number,
+                number
+            ];
+            clockwise?: boolean;
+        }>>;
+        symmetry?: 'plan' | 'axisymmetric';
+    };
+    /**
+     * Id of a stored outline, in place of `outline`.
+     */
+    outlineId?: string;
+    /**
+     * Two terminals, or more; each on edges of the outline. They may be left out where a stored outline has its own.
+     */
+    terminals?: Array<{
+        name: string;
+        segments?: Array<[
+            [
+                number,
+                number
+            ],
+            [
+                number,
+                number
+            ]
+        ]>;
+        parts?: Array<{
+            ring: number;
+            edge: number;
+            from?: number;
+            to?: number;
+        }>;
+    }>;
+    /**
+     * What fills the outline: a sheet resistance; a material, resistivity or conductivity with a thickness (without one where the outline is axisymmetric); or an expression with its quantity and thickness.
+     */
+    medium: {
+        /**
+         * Id of a material of the library or the team.
+         */
+        material?: string;
+        /**
+         * Allow a temperature outside the material's range, with a caution.
+         */
+        extrapolate?: boolean;
+        /**
+         * Resistivity (a resistivity; a bare number is in ohm m, or a text with a unit).
+         */
+        resistivity?: number | string;
+        /**
+         * Conductivity (a conductivity; a bare number is in S/m, or a text with a unit).
+         */
+        conductivity?: number | string;
+        /**
+         * Temperature coefficient of the resistivity at the reference temperature (a temperature coefficient; a bare number is in 1/K, or a text with a unit).
+         */
+        temperatureCoefficient?: number | string;
+        /**
+         * Temperature at which the resistivity or conductivity is given, 20 °C by default (a temperature; a bare number is in degC, or a text with a unit).
+         */
+        referenceTemperature?: number | string;
+        /**
+         * Sheet resistance, for sheet shapes (a sheet resistance; a bare number is in ohm/sq, or a text with a unit).
+         */
+        sheetResistance?: number | string;
+        /**
+         * Thickness of the sheet, for sheet shapes, beside a material, resistivity or conductivity (a length; a bare number is in m, or a text with a unit).
+         */
+        thickness?: number | string;
+        /**
+         * An expression in x and y, the position in metres, giving SI values.
+         */
+        expression?: string;
+        /**
+         * What the expression's values are.
+         */
+        quantity?: 'conductivity' | 'resistivity';
+        /**
+         * Regions of another medium; they may touch the border and each other, not overlap.
+         */
+        regions?: Array<{
+            /**
+             * Border of the region, a polygon in the outline's unit.
+             */
+            ring: Array<[
+                number,
+                number
+            ]>;
+            /**
+             * Medium of a region: a sheet resistance, or a material, resistivity or conductivity with a thickness.
+             */
+            medium: {
+                /**
+                 * Id of a material of the library or the team.
+                 */
+                material?: string;
+                /**
+                 * Allow a temperature outside the material's range, with a caution.
+                 */
+                extrapolate?: boolean;
+                /**
+                 * Resistivity (a resistivity; a bare number is in ohm m, or a text with a unit).
+                 */
+                resistivity?: number | string;
+                /**
+                 * Conductivity (a conductivity; a bare number is in S/m, or a text with a unit).
+                 */
+                conductivity?: number | string;
+                /**
+                 * Temperature coefficient of the resistivity at the reference temperature (a temperature coefficient; a bare number is in 1/K, or a text with a unit).
+                 */
+                temperatureCoefficient?: number | string;
+                /**
+                 * Temperature at which the resistivity or conductivity is given, 20 °C by default (a temperature; a bare number is in degC, or a text with a unit).
+                 */
+                referenceTemperature?: number | string;
+                /**
+                 * Sheet resistance, for sheet shapes (a sheet resistance; a bare number is in ohm/sq, or a text with a unit).
+                 */
+                sheetResistance?: number | string;
+                /**
+                 * Thickness of the sheet, for sheet shapes, beside a material, resistivity or conductivity (a length; a bare number is in m, or a text with a unit).
+                 */
+                thickness?: number | string;
+            };
+        }>;
+    };
+    /**
+     * (upper − lower)/value that is wanted, 1e-2 … 1e-8.
+     */
+    accuracy?: number;
+    operating?: Operating;
+    requirement?: Requirement;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+};
+
+/**
+ * A field solution as lines, raster and fluxes.
+ */
+export type FieldMap = {
+    /**
+     * Unit of all coordinates here.
+     */
+    unit: string;
+    per: 'volt';
+    /**
+     * The high and the low terminal.
+     */
+    between: [
+        string,
+        string
+    ];
+    equipotentials: Array<{
+        /**
+         * Volts, for one volt.
+         */
+        potential: number;
+        lines: Array<Array<number>>;
+    }>;
+    /**
+     * From the high terminal; the same current passes between any two neighbours.
+     */
+    streamlines: Array<Array<number>>;
+    /**
+     * In amperes, for one volt.
+     */
+    currentBetweenStreamlines: number;
+    /**
+     * The current density on a grid.
+     */
+    raster: {
+        /**
+         * Centre of the first cell, lower left.
+         */
+        origin: [
+            number,
+            number
+        ];
+        /**
+         * Size of a cell.
+         */
+        cell: number;
+        columns: number;
+        rows: number;
+        /**
+         * Size of the current density for one volt, row by row from below, in A/m (A/m² where axisymmetric); null outside.
+         */
+        density: Array<number | null>;
+    };
+    /**
+     * Pieces of the terminals with the current through each.
+     */
+    edges: Array<{
+        from: [
+            number,
+            number
+        ];
+        to: [
+            number,
+            number
+        ];
+        ring: number;
+        terminal: string;
+        /**
+         * Into the conductor, in amperes for one volt.
+         */
+        current: number;
+    }>;
+};
+
+/**
+ * Potential and current density along a straight line.
+ */
+export type FieldLine = {
+    unit: string;
+    per: 'volt';
+    /**
+     * From the start, in metres.
+     */
+    distance: Array<number>;
+    /**
+     * In the outline's unit.
+     */
+    points: Array<[
+        number,
+        number
+    ]>;
+    /**
+     * Volts for one volt; null outside.
+     */
+    potential: Array<number | null>;
+    /**
+     * Size of the current density for one volt, A/m (A/m² where axisymmetric).
+     */
+    density: Array<number | null>;
+    /**
+     * Its component along the line.
+     */
+    densityAlong: Array<number | null>;
 };
 
 /**
@@ -1128,7 +4201,7 @@ export type NewMaterial = {
 };
 
 /**
- * The members to change.
+ * The members to change, at least one.
  */
 export type MaterialChange = {
     name?: string;
@@ -1827,7 +4900,16 @@ export type Health = {
 export type ListShapesData = {
     body?: never;
     path?: never;
-    query?: never;
+    query?: {
+        /**
+         * Most entries of a page, 1 to 1000.
+         */
+        limit?: number;
+        /**
+         * `next` of the page before.
+         */
+        cursor?: string;
+    };
     url: '/shapes';
 };
 
@@ -2175,6 +5257,750 @@ export type ReadResistanceResponses = {
 };
 
 export type ReadResistanceResponse = ReadResistanceResponses[keyof ReadResistanceResponses];
+
+export type StoreOutlineData = {
+    /**
+     * An outline and, if they are known, its terminals.
+     */
+    body: OutlineRequest;
+    headers?: {
+        /**
+         * A text of the caller's choice; a repeat with it within a day gets the same answer.
+         */
+        'Idempotency-Key'?: string;
+    };
+    path?: never;
+    query?: never;
+    url: '/outlines';
+};
+
+export type StoreOutlineErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     *
+     * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
+     *
+     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     */
+    403: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `request-in-progress`: A call with this Idempotency-Key has started and not finished.
+     */
+    409: Problem;
+    /**
+     * `body-too-large`: The body is longer than this call takes.
+     */
+    413: Problem;
+    /**
+     * `unsupported-media-type`: The body's Content-Type is not one that this call reads.
+     */
+    415: Problem;
+    /**
+     * `idempotency-key-reused`: The Idempotency-Key was used before with another body or another path.
+     *
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type StoreOutlineError = StoreOutlineErrors[keyof StoreOutlineErrors];
+
+export type StoreOutlineResponses = {
+    /**
+     * Stored.
+     */
+    201: Outline;
+};
+
+export type StoreOutlineResponse = StoreOutlineResponses[keyof StoreOutlineResponses];
+
+export type ReadOutlineData = {
+    body?: never;
+    path: {
+        /**
+         * Id of the outline.
+         */
+        id: string;
+    };
+    query?: never;
+    url: '/outlines/{id}';
+};
+
+export type ReadOutlineErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     */
+    403: Problem;
+    /**
+     * `not-found`: There is nothing under this id that the caller may see. What another team owns looks the same.
+     */
+    404: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type ReadOutlineError = ReadOutlineErrors[keyof ReadOutlineErrors];
+
+export type ReadOutlineResponses = {
+    /**
+     * The outline.
+     */
+    200: Outline;
+};
+
+export type ReadOutlineResponse = ReadOutlineResponses[keyof ReadOutlineResponses];
+
+export type SolveFieldData = {
+    /**
+     * What to solve.
+     */
+    body: FieldRequest;
+    headers?: {
+        /**
+         * A text of the caller's choice; a repeat with it within a day gets the same answer.
+         */
+        'Idempotency-Key'?: string;
+    };
+    path?: never;
+    query?: never;
+    url: '/fields';
+};
+
+export type SolveFieldErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     *
+     * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
+     *
+     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     *
+     * `team-required`: The call concerns what a team owns, and it came without a key of a team.
+     */
+    403: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `request-in-progress`: A call with this Idempotency-Key has started and not finished.
+     */
+    409: Problem;
+    /**
+     * `body-too-large`: The body is longer than this call takes.
+     */
+    413: Problem;
+    /**
+     * `unsupported-media-type`: The body's Content-Type is not one that this call reads.
+     */
+    415: Problem;
+    /**
+     * `idempotency-key-reused`: The Idempotency-Key was used before with another body or another path.
+     *
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `quota-exhausted`: The call would need more computations than are left of the calendar month (UTC).
+     *
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type SolveFieldError = SolveFieldErrors[keyof SolveFieldErrors];
+
+export type SolveFieldResponses = {
+    /**
+     * Finished within the time that the caller was ready to wait.
+     */
+    200: Field;
+    /**
+     * On its way; ask for it at `Location`.
+     */
+    202: Field;
+};
+
+export type SolveFieldResponse = SolveFieldResponses[keyof SolveFieldResponses];
+
+export type DeleteFieldData = {
+    body?: never;
+    path: {
+        /**
+         * Id of the field solution.
+         */
+        id: string;
+    };
+    query?: never;
+    url: '/fields/{id}';
+};
+
+export type DeleteFieldErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     */
+    403: Problem;
+    /**
+     * `not-found`: There is nothing under this id that the caller may see. What another team owns looks the same.
+     */
+    404: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type DeleteFieldError = DeleteFieldErrors[keyof DeleteFieldErrors];
+
+export type DeleteFieldResponses = {
+    /**
+     * Cancelled or deleted.
+     */
+    204: void;
+};
+
+export type DeleteFieldResponse = DeleteFieldResponses[keyof DeleteFieldResponses];
+
+export type ReadFieldData = {
+    body?: never;
+    path: {
+        /**
+         * Id of the field solution.
+         */
+        id: string;
+    };
+    query?: never;
+    url: '/fields/{id}';
+};
+
+export type ReadFieldErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     */
+    403: Problem;
+    /**
+     * `not-found`: There is nothing under this id that the caller may see. What another team owns looks the same.
+     */
+    404: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type ReadFieldError = ReadFieldErrors[keyof ReadFieldErrors];
+
+export type ReadFieldResponses = {
+    /**
+     * The solution.
+     */
+    200: Field;
+};
+
+export type ReadFieldResponse = ReadFieldResponses[keyof ReadFieldResponses];
+
+export type ReadFieldMapData = {
+    body?: never;
+    path: {
+        /**
+         * Id of the field solution.
+         */
+        id: string;
+    };
+    query?: {
+        /**
+         * Shares of voltage and of current between lines, 2 to 100.
+         */
+        lines?: number;
+        /**
+         * Cells along the raster's longer side, 8 to 512.
+         */
+        resolution?: number;
+    };
+    url: '/fields/{id}/map.json';
+};
+
+export type ReadFieldMapErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     */
+    403: Problem;
+    /**
+     * `not-found`: There is nothing under this id that the caller may see. What another team owns looks the same.
+     */
+    404: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `not-ready`: The field solution has no picture: it is not finished yet, or it ended without a result.
+     */
+    409: Problem;
+    /**
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type ReadFieldMapError = ReadFieldMapErrors[keyof ReadFieldMapErrors];
+
+export type ReadFieldMapResponses = {
+    /**
+     * The map.
+     */
+    200: FieldMap;
+};
+
+export type ReadFieldMapResponse = ReadFieldMapResponses[keyof ReadFieldMapResponses];
+
+export type ReadFieldPlotData = {
+    body?: never;
+    path: {
+        /**
+         * Id of the field solution.
+         */
+        id: string;
+    };
+    query?: never;
+    url: '/fields/{id}/plot.svg';
+};
+
+export type ReadFieldPlotErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     */
+    403: Problem;
+    /**
+     * `not-found`: There is nothing under this id that the caller may see. What another team owns looks the same.
+     */
+    404: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `not-ready`: The field solution has no picture: it is not finished yet, or it ended without a result.
+     */
+    409: Problem;
+    /**
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type ReadFieldPlotError = ReadFieldPlotErrors[keyof ReadFieldPlotErrors];
+
+export type ReadFieldPlotResponses = {
+    /**
+     * SVG.
+     */
+    200: Blob | File;
+};
+
+export type ReadFieldPlotResponse = ReadFieldPlotResponses[keyof ReadFieldPlotResponses];
+
+export type ReadFieldLineData = {
+    body?: never;
+    path: {
+        /**
+         * Id of the field solution.
+         */
+        id: string;
+    };
+    query: {
+        /**
+         * Start of the line, x,y in the outline's unit.
+         */
+        from: string;
+        /**
+         * End of the line, x,y in the outline's unit.
+         */
+        to: string;
+        /**
+         * Samples at equal steps, 2 to 10000.
+         */
+        samples?: number;
+    };
+    url: '/fields/{id}/line';
+};
+
+export type ReadFieldLineErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     */
+    403: Problem;
+    /**
+     * `not-found`: There is nothing under this id that the caller may see. What another team owns looks the same.
+     */
+    404: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `not-ready`: The field solution has no picture: it is not finished yet, or it ended without a result.
+     */
+    409: Problem;
+    /**
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type ReadFieldLineError = ReadFieldLineErrors[keyof ReadFieldLineErrors];
+
+export type ReadFieldLineResponses = {
+    /**
+     * The samples.
+     */
+    200: FieldLine;
+};
+
+export type ReadFieldLineResponse = ReadFieldLineResponses[keyof ReadFieldLineResponses];
+
+export type ReadFieldEventsData = {
+    body?: never;
+    path: {
+        /**
+         * Id of the field solution.
+         */
+        id: string;
+    };
+    query?: never;
+    url: '/fields/{id}/events';
+};
+
+export type ReadFieldEventsErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     */
+    403: Problem;
+    /**
+     * `not-found`: There is nothing under this id that the caller may see. What another team owns looks the same.
+     */
+    404: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type ReadFieldEventsError = ReadFieldEventsErrors[keyof ReadFieldEventsErrors];
+
+export type ReadFieldEventsResponses = {
+    /**
+     * Server-sent events.
+     */
+    200: string;
+};
+
+export type ReadFieldEventsResponse = ReadFieldEventsResponses[keyof ReadFieldEventsResponses];
 
 export type ListMaterialsData = {
     body?: never;
