@@ -29,6 +29,7 @@ export {
 } from "./shape/shape-entry";
 
 export {
+  conductivityAt,
   coversTemperature,
   materialSchema,
   resistivityAt,

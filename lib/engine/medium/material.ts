@@ -155,7 +155,12 @@ export function resistivityAt(material: Material, temperatureC: number): number 
   return resistivityLaw(material)(temperatureC);
 }
 
-/** The same as a function, for many temperatures. */
+/** Conductivity in S/m at a temperature in °C, with the same care outside of the range as `resistivityAt`. */
+export function conductivityAt(material: Material, temperatureC: number): number {
+  return 1 / resistivityAt(material, temperatureC);
+}
+
+/** The resistivity as a function, for many temperatures. */
 export function resistivityLaw(material: Material): (temperatureC: number) => number {
   const model = material.resistivity;
   switch (model.model) {
