@@ -39,7 +39,13 @@ export default defineConfig({
       },
       {
         resolve: { alias },
-        test: { name: "api", include: ["tests/api/**/*.test.ts"], testTimeout: 60_000, hookTimeout: 60_000 },
+        test: {
+          name: "api",
+          include: ["tests/api/**/*.test.ts"],
+          globalSetup: ["tests/support/worker-bundle.ts"],
+          testTimeout: 60_000,
+          hookTimeout: 60_000,
+        },
       },
       {
         resolve: { alias },

@@ -60,9 +60,8 @@ export function prepareField(body: unknown, context: FieldContext): PreparedFiel
   const requirement = readRequirement(request.requirement, problems);
   const outline = request.outline ?? stored?.outline;
   const terminals = request.terminals ?? stored?.terminals;
-  if (stored && (!terminals || terminals.length === 0)) {
-    problems.add("#/terminals", "is required: the stored outline has no terminals of its own.");
-  }
+  const without = stored !== undefined && request.terminals === undefined && terminals?.length === 0;
+  if (without) problems.add("#/terminals", "is required: the stored outline has no terminals of its own.");
   const collected = new Collected();
   const medium = resolveFieldMedium(request.medium, {
     axisymmetric: outline?.symmetry === "axisymmetric",
@@ -71,7 +70,8 @@ export function prepareField(body: unknown, context: FieldContext): PreparedFiel
     collected,
     problems,
   });
-  if (!outline || !terminals || terminals.length === 0) throw new InputError(problems.list);
+  // The schema saw to it that only an unknown outline leaves these open, and that was told above.
+  if (!outline || !terminals || without) throw new InputError(problems.list);
   const check = checkOutline({
     outline,
     terminals,
