@@ -40,6 +40,7 @@ import { sphereBuried } from "./spreading/sphere-buried";
 import { spherePair } from "./spreading/sphere-pair";
 import { spherePlane } from "./spreading/sphere-plane";
 import { spheroid } from "./spreading/spheroid";
+import { spotInCylinder } from "./spreading/spot-in-cylinder";
 
 // sheet
 import { sheetBend } from "./sheet/sheet-bend";
@@ -102,6 +103,7 @@ const spreading: readonly Shape[] = [
   spheroid,
   contactSpot,
   ellipticContactSpot,
+  spotInCylinder,
 ];
 
 const sheet: readonly Shape[] = [

@@ -109,7 +109,7 @@ export const spherePair = defineShape({
 function nearestField(d: Pair): number {
   const [a, b] = ordered(d);
   const { gap } = d;
-  if (gap < 1e-5 * a) return (1 + (gap * (2 / a - 1 / b)) / 3) / gap;
+  if (gap < 1e-4 * a) return (1 + (gap * (2 / a - 1 / b)) / 3) / gap;
   const { smaller, larger } = pairCharges(a, b, gap);
   const share = larger / (smaller + larger);
   return poleField(sphereImages(a, b, gap, share, share - 1), gap);

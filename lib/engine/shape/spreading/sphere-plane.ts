@@ -87,7 +87,7 @@ export const spherePlane = defineShape({
 /** Field at the foot of the sphere at one volt, 1/m. */
 function nearestField(a: number, gap: number): number {
   // The lubrication expansion leaves out (gap/a)², far below what a peak is used for.
-  if (gap < 1e-5 * a) return (1 + (2 * gap) / (3 * a)) / gap;
+  if (gap < 1e-4 * a) return (1 + (2 * gap) / (3 * a)) / gap;
   return poleField(sphereImages(a, a, 2 * gap, 1, -1), 2 * gap);
 }
 
