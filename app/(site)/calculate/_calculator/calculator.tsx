@@ -4,6 +4,7 @@ import { type ReactNode, useMemo, useState } from "react";
 import { SWRConfig } from "swr";
 import type { ShapeEntry } from "@/lib/engine";
 import { LiveRegion } from "../../../_ui/live-region";
+import { ToastArea } from "../../../_ui/toast";
 import { sortComplaints } from "../_model/complaints";
 import type { Parameters } from "../_model/parameters";
 import { INCLUDE, requestBody } from "../_model/request";
@@ -49,7 +50,9 @@ interface CalculatorProps {
 export function Calculator(props: CalculatorProps) {
   return (
     <SWRConfig value={{ dedupingInterval: 500 }}>
-      <LiveCalculator {...props} />
+      <ToastArea>
+        <LiveCalculator {...props} />
+      </ToastArea>
     </SWRConfig>
   );
 }
@@ -93,8 +96,8 @@ function LiveCalculator(props: CalculatorProps) {
   return (
     <FormProvider value={form}>
       <div className="mt-2 flex flex-wrap items-center justify-between gap-1 print:hidden">
-        <VariantBar count={variants.length} active={active} actions={actions} />
-        <PageTools state={state} entry={entry} onRestart={actions.restart} />
+        <VariantBar state={state} actions={actions} />
+        <PageTools state={state} entry={entry} actions={actions} />
       </div>
       <AnswerStrip result={answer.result} stale={answer.stale} />
       <div className="mt-2 grid items-start gap-x-5 gap-y-3 wide:grid-cols-[24rem_minmax(0,1fr)]">

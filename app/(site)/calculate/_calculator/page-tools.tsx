@@ -1,21 +1,22 @@
 "use client";
 
-import { useState } from "react";
 import { Link2, RotateCcw } from "lucide-react";
 import type { ShapeEntry } from "@/lib/engine";
 import { Button } from "../../../_ui/button";
 import { splitAddress } from "../_model/address";
 import { type PageState, stateQuery } from "../_model/variants";
+import { useToast } from "../../../_ui/toast";
+import type { PageActions } from "./use-page-state";
 
 interface PageToolsProps {
   readonly state: PageState;
   readonly entry: ShapeEntry;
-  readonly onRestart: () => void;
+  readonly actions: PageActions;
 }
 
 /** A link to exactly this state, and the way back to the example. */
-export function PageTools({ state, entry, onRestart }: PageToolsProps) {
-  const [said, setSaid] = useState("");
+export function PageTools({ state, entry, actions }: PageToolsProps) {
+  const toast = useToast();
 
   async function copyLink() {
     const { query, behind } = splitAddress(stateQuery(state, entry));
@@ -24,22 +25,24 @@ export function PageTools({ state, entry, onRestart }: PageToolsProps) {
       await navigator.clipboard.writeText(
         `${origin}${pathname}?${query}${behind === "" ? "" : `#${behind}`}`,
       );
-      setSaid("Link copied");
+      toast("The link is copied. It reproduces this page.");
     } catch {
-      setSaid("The address bar has the link");
+      toast("The browser does not let the page copy; the address bar has the link.");
     }
-    setTimeout(() => setSaid(""), 2500);
+  }
+
+  function restart() {
+    const before = state;
+    actions.restart();
+    toast("The example stands again.", { undo: () => actions.restore(before) });
   }
 
   return (
     <div className="flex flex-wrap items-center gap-x-0.5">
-      <span role="status" className="px-1 text-small text-ink-soft">
-        {said}
-      </span>
       <Button variant="quiet" onClick={copyLink}>
         <Link2 aria-hidden size={16} /> Copy link
       </Button>
-      <Button variant="quiet" onClick={onRestart}>
+      <Button variant="quiet" onClick={restart}>
         <RotateCcw aria-hidden size={16} /> Start over
       </Button>
     </div>

@@ -17,6 +17,8 @@ export interface PageActions {
   readonly add: () => void;
   readonly remove: (index: number) => void;
   readonly restart: () => void;
+  /** Takes back a removal or a restart. */
+  readonly restore: (state: PageState) => void;
 }
 
 const ADDRESS_MS = 250;
@@ -90,7 +92,7 @@ export function usePageState(
     [],
   );
   const restart = useCallback(() => setState({ variants: [example], active: 0 }), [example]);
-  return [state, { change, show, add, remove, restart }];
+  return [state, { change, show, add, remove, restart, restore: setState }];
 }
 
 function patched(variant: Parameters, patch: Patch): Parameters {

@@ -2,17 +2,26 @@
 
 import { Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
-import { VARIANT_NAMES } from "../../_model/variants";
+import { useToast } from "../../../../_ui/toast";
+import { type PageState, VARIANT_NAMES } from "../../_model/variants";
 import type { PageActions } from "../use-page-state";
 
 interface VariantBarProps {
-  readonly count: number;
-  readonly active: number;
+  readonly state: PageState;
   readonly actions: PageActions;
 }
 
 /** Which variant the fields show; a copy of it can be added and changed. */
-export function VariantBar({ count, active, actions }: VariantBarProps) {
+export function VariantBar({ state, actions }: VariantBarProps) {
+  const toast = useToast();
+  const { active } = state;
+  const count = state.variants.length;
+
+  function remove(index: number) {
+    actions.remove(index);
+    toast(`Variant ${VARIANT_NAMES[index]} is removed.`, { undo: () => actions.restore(state) });
+  }
+
   if (count === 1) {
     return (
       <Button onClick={actions.add}>
@@ -33,11 +42,7 @@ export function VariantBar({ count, active, actions }: VariantBarProps) {
               Variant {name}
             </Button>
             {index === active ? (
-              <Button
-                aria-label={`Remove variant ${name}`}
-                className="px-0.5!"
-                onClick={() => actions.remove(index)}
-              >
+              <Button aria-label={`Remove variant ${name}`} className="px-0.5!" onClick={() => remove(index)}>
                 <X aria-hidden size={15} />
               </Button>
             ) : null}

@@ -53,11 +53,13 @@ export async function readPoints(text: string): Promise<PointsReading> {
   return { rows, problems, ...(note ? { note } : {}) };
 }
 
+/** What parts the columns in most of the first lines; one bad line must not decide. */
 function delimiterOf(text: string): string {
   const sample = text.trim().split(/\r?\n/).slice(0, 20);
-  for (const delimiter of ["\t", ";"]) if (sample.every((line) => line.includes(delimiter))) return delimiter;
-  if (sample.every((line) => line.includes(","))) return ",";
-  return sample.every((line) => /\S\s+\S/.test(line.trim())) ? " " : ",";
+  const most = (pattern: RegExp) =>
+    2 * sample.filter((line) => pattern.test(line.trim())).length > sample.length;
+  for (const delimiter of ["\t", ";", ","]) if (most(new RegExp(delimiter))) return delimiter;
+  return most(/\S\s+\S/) ? " " : ",";
 }
 
 /** The unit in a head such as "radius/mm", "radius (mm)" or "radius [mm]"; empty where there is none. */
