@@ -10,7 +10,7 @@ import { toRequest, writeResponse } from "./node-bridge";
  * times the calls a second.
  */
 export function createApiServer(service: Service): Server {
-  return createServer((incoming, outgoing) => {
+  const server = createServer((incoming, outgoing) => {
     const answer = async () => {
       const request = toRequest(incoming, service.config.origin);
       if (!new URL(request.url).pathname.startsWith(`${BASE_PATH}/`)) {
@@ -27,4 +27,7 @@ export function createApiServer(service: Service): Server {
       outgoing.end();
     });
   });
+  // Longer than what proxies in front usually keep, so that they never reuse a connection that is just closing.
+  server.keepAliveTimeout = 65_000;
+  return server;
 }

@@ -6,9 +6,8 @@ import { LONGEST_OVERLAP_MS, parseDuration } from "../auth/duration";
 import { keySettings } from "../auth/key-settings";
 import { issueKey, keyView, revokeKey, rotateKey } from "../auth/manage-keys";
 import { SCOPE_NAMES } from "../auth/scope";
-import { ConfigError } from "../config/environment";
-import { Refusal } from "../service/refusal";
-import { closeService, type Service } from "../service/service";
+import type { Service } from "../service/service";
+import { type CommandResult, runCommand, UsageError } from "./command";
 
 const USAGE = `Usage: npm run -s keys -- <command>
 
@@ -20,8 +19,6 @@ const USAGE = `Usage: npm run -s keys -- <command>
         prints the new key; the secret before ends after the overlap (at once where left out)
 
 Scopes: ${SCOPE_NAMES.join(", ")}`;
-
-class UsageError extends Error {}
 
 const listOf = (text: string) => text.split(",").map((part) => part.trim());
 
@@ -130,37 +127,7 @@ function run(service: Service, argv: string[]): string {
   }
 }
 
-export interface CommandResult {
-  readonly code: number;
-  readonly stdout: string;
-  readonly stderr: string;
-}
-
-/** `npm run -s keys -- …`: what was asked for on stdout, or one message on stderr. */
+/** `npm run -s keys -- …` */
 export function keysCommand(argv: string[], open: () => Service): CommandResult {
-  if (argv.length === 0 || argv.includes("--help")) {
-    return { code: argv.length === 0 ? 2 : 0, stdout: "", stderr: USAGE };
-  }
-  let service: Service | undefined;
-  try {
-    service = open();
-    return { code: 0, stdout: run(service, argv), stderr: "" };
-  } catch (error) {
-    return { code: 1, stdout: "", stderr: messageOf(error) };
-  } finally {
-    if (service) closeService(service);
-  }
-}
-
-/** What a person did wrong, in one line or two; anything else is thrown on. */
-function messageOf(error: unknown): string {
-  if (error instanceof Refusal) {
-    const details = (error.more.errors ?? []).map(({ detail }) => detail).join("; ");
-    return details ? `${error.message} (${details})` : error.message;
-  }
-  if (error instanceof UsageError || error instanceof ConfigError) return error.message;
-  const parsing =
-    error instanceof TypeError && "code" in error && String(error.code).startsWith("ERR_PARSE_ARGS");
-  if (parsing) return error.message;
-  throw error;
+  return runCommand(argv, USAGE, open, run);
 }

@@ -40,6 +40,38 @@ describe("GET /resistance/{shape} 200", () => {
     expect(conductivity.status).toBe(200);
   });
 
+  test("two media by prefix, whole numbers, choices, radius or diameter", async () => {
+    const clad = await get(
+      "clad-wire?length=1m&coreDiameter=1mm&claddingThickness=0.1mm&core.resistivity=1e-7&cladding.conductivity=58%20MS/m",
+    );
+    expect(clad.status).toBe(200);
+    const body = await call(server, "post", "/resistance", {
+      key,
+      body: {
+        shape: "clad-wire",
+        dimensions: { length: "1m", coreDiameter: "1mm", claddingThickness: "0.1mm" },
+        media: { core: { resistivity: 1e-7 }, cladding: { conductivity: "58 MS/m" } },
+      },
+    });
+    expect(clad.body).toEqual(body.body);
+    const layered = await get(
+      "earth-rod-layered?length=3&diameter=16mm&upperDepth=5&upper.resistivity=100&lower.resistivity=300&format=text",
+    );
+    // 6-checks, two layers, recomputed: 35.8261386744 Ω
+    expect(Number(layered.text)).toBeCloseTo(35.8261386744, 6);
+    const strands = await get("stranded-conductor?length=1&strands=7&strandDiameter=1mm&resistivity=1.72e-8");
+    expect(strands.status).toBe(200);
+    const group = await get(
+      "earth-rod-group?length=3&diameter=16mm&spacing=3&count=4&arrangement=square&resistivity=100",
+    );
+    expect(group.status).toBe(200);
+    const diameter = await get(
+      "cylindrical-shell?innerDiameter=4mm&outerDiameter=10mm&length=1m&resistivity=1",
+    );
+    const radius = await get("cylindrical-shell?innerRadius=2mm&outerRadius=5mm&length=1m&resistivity=1");
+    expect(diameter.body.resistance.value).toBeCloseTo(radius.body.resistance.value, 12);
+  });
+
   test("a bare number as text, by Accept or by format", async () => {
     for (const response of [
       await get(`${SLEEVE}&conductivity=1e-12`, { Accept: "text/plain" }),
@@ -84,6 +116,26 @@ describe("GET /resistance/{shape} 422", () => {
     await refused("bar?length=1&length=2&width=1&thickness=1&resistivity=1", "length");
     await refused("bar?length=1&width=1&thickness=1&resistivity=1&extrapolate=maybe", "extrapolate");
     await refused("bar?length=1&width=1&thickness=1&resistivity=1&format=xml", "format");
+  });
+  test("the media of a shape with two are told by their prefix", async () => {
+    const wire = "clad-wire?length=1m&coreDiameter=1mm&claddingThickness=0.1mm";
+    await refused(`${wire}&core.material=unobtainium&cladding.resistivity=1`, "core.material");
+    await refused(`${wire}&core.resistivity=5kg&cladding.resistivity=1`, "core.resistivity");
+    const missing = await get(`${wire}&core.resistivity=1`);
+    expectProblem(missing, 422, "invalid-input");
+    expect(missing.body.errors[0].parameter).toMatch(/^cladding/);
+    const wrong = await get(`${wire}&core.resistivity=1&jacket.resistivity=1&cladding.resistivity=1`);
+    expectProblem(wrong, 422, "invalid-input");
+    expect(wrong.body.errors.map(({ parameter }: { parameter: string }) => parameter)).toEqual([
+      "jacket.resistivity",
+    ]);
+    const plain = await get(`${wire}&resistivity=1`);
+    expectProblem(plain, 422, "invalid-input");
+    await refused("stranded-conductor?length=1&strands=2.5&strandDiameter=1mm&resistivity=1", "strands");
+    await refused(
+      "earth-rod-group?length=3&diameter=16mm&spacing=3&count=4&arrangement=circle&resistivity=100",
+      "arrangement",
+    );
   });
   test("two media", async () => {
     const response = await get("bar?length=1&width=1&thickness=1&resistivity=1&conductivity=1");

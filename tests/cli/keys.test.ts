@@ -10,17 +10,24 @@ import { keysCommand } from "@/lib/cli/keys-command";
 import { readConfig } from "@/lib/config/environment";
 import { openService } from "@/lib/service/service";
 
-const TSX = join("node_modules", "tsx", "dist", "cli.mjs");
 const folder = mkdtempSync(join(tmpdir(), "rhoform-keys-"));
 const env = { ...process.env, RHOFORM_DATA: folder, RHOFORM_LOG: "off", PORT: "0" };
 
 function keys(...args: string[]) {
-  const { status, stdout, stderr } = spawnSync(process.execPath, [TSX, "lib/cli/keys.ts", ...args], {
-    env,
-    encoding: "utf8",
-  });
+  const { status, stdout, stderr } = spawnSync(
+    process.execPath,
+    ["--import", "tsx", "lib/cli/keys.ts", ...args],
+    {
+      env,
+      encoding: "utf8",
+    },
+  );
   return { status, stdout, stderr };
 }
+
+/** The same command inside this process, while the server runs in another: as true, and it starts at once. */
+const here = (...args: string[]) =>
+  keysCommand(args, () => openService(readConfig({ RHOFORM_DATA: folder, RHOFORM_LOG: "off" })));
 
 let base: string;
 let server: ReturnType<typeof spawn>;
@@ -29,7 +36,7 @@ beforeAll(async () => {
   migrateDatabase(db);
   insertTeam(db, { id: "team_1", slug: "busbar", name: "Busbar", createdAt: 1 });
   db.$client.close();
-  server = spawn(process.execPath, [TSX, "lib/cli/api-process.ts"], {
+  server = spawn(process.execPath, ["--import", "tsx", "lib/cli/api-process.ts"], {
     env,
     stdio: ["ignore", "pipe", "inherit"],
   });
@@ -76,26 +83,18 @@ describe("npm run -s keys", () => {
   });
 
   test("list, rotate with overlap and revoke, each seen by the next request", async () => {
-    const first = keys(
-      "issue",
-      "--team",
-      "busbar",
-      "--name",
-      "Rotating",
-      "--scopes",
-      "compute",
-    ).stdout.trim();
+    const first = here("issue", "--team", "busbar", "--name", "Rotating", "--scopes", "compute").stdout;
     const id = first.split("_")[1];
-    const list = keys("list", "--team", "busbar").stdout;
+    const list = here("list", "--team", "busbar").stdout;
     expect(list).toMatch(new RegExp(`^${id} +busbar +active +Rotating`, "m"));
     expect(list).not.toContain(first.slice(-43));
-    const rotated = keys("rotate", id, "--overlap", "7d");
-    expect(rotated.stdout).toMatch(new RegExp(`^rho_${id}_[0-9A-Za-z]{43}\n$`));
-    const second = rotated.stdout.trim();
+    const rotated = here("rotate", id, "--overlap", "7d");
+    expect(rotated.stdout).toMatch(new RegExp(`^rho_${id}_[0-9A-Za-z]{43}$`));
+    const second = rotated.stdout;
     expect([await status(first), await status(second)]).toEqual([200, 200]);
-    const third = keys("rotate", id).stdout.trim();
+    const third = here("rotate", id).stdout;
     expect([await status(first), await status(second), await status(third)]).toEqual([401, 401, 200]);
-    expect(keys("revoke", id).status).toBe(0);
+    expect(here("revoke", id).status).toBe(0);
     expect(await status(third)).toBe(401);
     const db = openDatabase(join(folder, "rhoform.sqlite"));
     const acts = activityOfSubject(db, id);
@@ -134,9 +133,7 @@ describe("npm run -s keys", () => {
     [["rotate", "k0", "--overlap", "forever"], /--overlap/],
     [["paint"], /Usage/],
   ])("%j is refused with one message, nothing on stdout", (args, message) => {
-    const result = keysCommand([...args], () =>
-      openService(readConfig({ RHOFORM_DATA: folder, RHOFORM_LOG: "off" })),
-    );
+    const result = here(...args);
     expect([result.code, result.stdout]).toEqual([1, ""]);
     expect(result.stderr).toMatch(message);
   });
