@@ -6,12 +6,16 @@ import { SHELL_START, shellRequest } from "./_live/shell-request";
 
 const NEXT = [
   {
+    href: "/calculate",
+    title: "Calculate",
+    text: "Every shape of the catalogue, with its drawing, its field and the exact call.",
+  },
+  {
     href: "/docs/api",
     title: "API reference",
     text: "Every operation, with calls that can be sent from the page.",
   },
   { href: "/docs/problems", title: "Problems", text: "What each refusal means and what to do about it." },
-  { href: "/docs/changelog", title: "Changelog", text: "What changed, and which numbers with it." },
 ] as const;
 
 export default function Home() {
