@@ -94,7 +94,7 @@ describe("npm run -s keys", () => {
     expect([await status(first), await status(second)]).toEqual([200, 200]);
     const third = here("rotate", id).stdout;
     expect([await status(first), await status(second), await status(third)]).toEqual([401, 401, 200]);
-    expect(here("revoke", id).status).toBe(0);
+    expect(here("revoke", id).code).toBe(0);
     expect(await status(third)).toBe(401);
     const db = openDatabase(join(folder, "rhoform.sqlite"));
     const acts = activityOfSubject(db, id);
