@@ -52,6 +52,7 @@ export function planRefinement(input: PlanInput): RefinementPlan {
   const { gap, singular } = input;
   const count = gap.length;
   const stars = starGaps(input);
+  if (atTheEnd(input, stars)) return emptyPlan(input);
   // What cannot be reduced is no reason to drive the rest far below it.
   const target = Math.max(input.target, stars.fixedGap);
   const shareOfStar = chooseThreshold(stars.gaps, SHARE_OF_STARS * target);
@@ -102,6 +103,27 @@ export function planRefinement(input: PlanInput): RefinementPlan {
     order,
     empty: planned === 0,
   };
+}
+
+function emptyPlan({ order }: PlanInput): RefinementPlan {
+  const none = new Int32Array(0);
+  const marks = new Uint8Array(order.length);
+  return { vertices: none, layers: none, ringOrders: [], marks, order, empty: true };
+}
+
+/**
+ * The stars that cannot be layered any more hold more than the target whatever their order, and most of all that is
+ * left: further work would not help.
+ */
+function atTheEnd({ gap, order, target, highestOrder }: PlanInput, { kind, fixedGap }: Stars): boolean {
+  if (fixedGap < 2 * target) return false;
+  let least = 0;
+  let others = 0;
+  for (let t = 0; t < gap.length; t++) {
+    if (kind[t] === FIXED) least += (gap[t] * order[t]) / highestOrder;
+    else others += gap[t];
+  }
+  return least > 2 * target && others < fixedGap;
 }
 
 function clampOrder(p: number, highest: number): number {
