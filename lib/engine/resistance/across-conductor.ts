@@ -46,8 +46,8 @@ export class AcrossConductor {
     return this.integral.total();
   }
 
-  /** The same with other nodes. */
-  secondTotal(): Integral {
-    return this.integral.secondTotal();
+  /** The same with other nodes, given the first. */
+  secondTotal(first: Integral): Integral {
+    return this.integral.secondTotal(first);
   }
 }

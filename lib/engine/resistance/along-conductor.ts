@@ -68,9 +68,9 @@ export class AlongConductor {
     return this.doubted(this.integral.total(options));
   }
 
-  /** The same with other nodes. */
-  secondTotal(): Integral {
-    return this.doubted(this.integral.secondTotal());
+  /** The same with other nodes, given the first. */
+  secondTotal(first: Integral): Integral {
+    return this.doubted(this.integral.secondTotal(first));
   }
 
   /** Resistance between two places of the range, ohms. */

@@ -3,8 +3,9 @@
  * must cancel, the same current must cross every section, and a second route must lead to the same number.
  */
 import { CheckFailure } from "../failure";
-import { integrate, type Integral } from "../numeric/gauss-kronrod";
+import { integrate } from "../numeric/gauss-kronrod";
 import { gaussLegendre } from "../numeric/gauss-legendre";
+import type { AcrossConductor } from "./across-conductor";
 import { AlongConductor, uniformLaw } from "./along-conductor";
 import type { Check } from "./result-schema";
 import type { AlongView, FactorView, MediaView, Solution } from "./solution";
@@ -46,8 +47,7 @@ export function listChecks(solution: Solution): Check[] {
       const { along } = view.tubes;
       const unit = new AlongConductor(along, uniformLaw(1, along.extent));
       const currents = sectionCurrents(unit, unit.total().value);
-      const second = solution.secondIntegral ?? view.conductor.secondTotal();
-      return [voltageCheck(currents), continuityCheck(currents), compareIntegrals(solution.integral, second)];
+      return [voltageCheck(currents), continuityCheck(currents), integralRoute(solution, view.conductor)];
     }
     case "factor":
       return [
@@ -119,7 +119,7 @@ function continuityCheck({ ratios }: SectionCurrents): Check {
 /** The closed form against ∫ρ dx/section and against each family of parallel tubes; an integral against its twin. */
 function alongRoute(solution: Solution, view: AlongView): Check {
   if (view.medium.kind === "graded") {
-    return compareIntegrals(solution.integral, solution.secondIntegral ?? view.conductor().secondTotal());
+    return integralRoute(solution, view.conductor());
   }
   const resistivity = view.medium.value;
   const series = view.conductor().total({ relative: 1e-11, evaluations: 5000 });
@@ -138,8 +138,11 @@ function alongRoute(solution: Solution, view: AlongView): Check {
   return outcome("second-route", deviation, Math.max(ROUTE_TOLERANCE, 3 * doubt));
 }
 
-function compareIntegrals(first: Integral | undefined, second: Integral): Check {
+/** An integral against the same one with other nodes. */
+function integralRoute(solution: Solution, conductor: AlongConductor | AcrossConductor): Check {
+  const first = solution.integral;
   if (!first) return { name: "second-route", applies: false, reason: "There is no integral to compare." };
+  const second = solution.secondIntegral ?? conductor.secondTotal(first);
   const deviation = Math.abs(second.value / first.value - 1);
   const doubt = (first.error + second.error) / first.value;
   // Where both estimates are poor the answer says so itself, by its bounds and a caution.

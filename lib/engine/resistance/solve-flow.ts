@@ -90,7 +90,7 @@ function solveAlong(
 ): Solution {
   const conductor = new AlongConductor(tubes.along, medium.law);
   const integral = conductor.total();
-  const secondIntegral = medium.law.rough ? conductor.secondTotal() : undefined;
+  const secondIntegral = medium.law.rough ? conductor.secondTotal(integral) : undefined;
   const { relative, cautions } = judge(integral, secondIntegral, medium);
   const { cautions: shapeCautions, assumptions } = statements(answer, dimensions);
   return {
@@ -128,7 +128,7 @@ function solveAcross(
     const pointer = medium.pointer;
     throw new InputError([{ pointer, detail: "is zero everywhere: nothing would conduct." }]);
   }
-  const secondIntegral = medium.law.rough ? conductor.secondTotal() : undefined;
+  const secondIntegral = medium.law.rough ? conductor.secondTotal(integral) : undefined;
   const { relative, cautions } = judge(integral, secondIntegral, medium);
   const { cautions: shapeCautions, assumptions } = statements(answer, dimensions);
   return {
