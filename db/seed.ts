@@ -118,7 +118,7 @@ function seedRecords({ db, config, now }: Service, team: Team, records: DemoTeam
   const actor = { ...SHELL, kind: "key" as const, id: demoKeyId(config.secret, team.slug), name: "Demo" };
   for (const [label, shapeId] of records) {
     const shape = findShape(shapeId);
-    if (!shape) continue;
+    if (!shape) throw new Error(`The demo computes the shape ${shapeId}, which the catalogue lacks.`);
     const request = { ...exampleRequest(shape), include: ["steps", "profile", "checks", "peak"] };
     const result = computeResistance(request, { material: libraryMaterial });
     storeRecord(

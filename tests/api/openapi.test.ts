@@ -186,9 +186,12 @@ describe("GET /openapi.json 200", () => {
   });
 
   test("is the same each time it is made", async () => {
-    const again = await openApiDocument(registry, "https://rhoform.example");
-    const third = await openApiDocument(registry, "https://rhoform.example");
-    expect(JSON.stringify(third)).toBe(JSON.stringify(again));
+    const make = async () => JSON.stringify(await openApiDocument(registry, "https://rhoform.example"));
+    const [first, second] = [await make(), await make()];
+    let same = 0;
+    while (same < first.length && first[same] === second[same]) same++;
+    // The place where they part says more than a million characters.
+    expect(second.slice(same - 80, same + 80)).toBe(first.slice(same - 80, same + 80));
   });
 
   test("carries no secret", () => {
