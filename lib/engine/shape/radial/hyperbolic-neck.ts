@@ -149,8 +149,8 @@ function drawNeck(d: Neck): Drawing {
           { name: "length", from: [0, 0], to: [length, 0], kind: "linear", offset: -1 },
           {
             name: "openingAngle",
-            from: [0.8 * length, 0],
-            to: [0.8 * length * Math.cos(openingAngle), 0.8 * length * Math.sin(openingAngle)],
+            from: [0.55 * length, 0],
+            to: [0.55 * length * Math.cos(openingAngle), 0.55 * length * Math.sin(openingAngle)],
             kind: "angle",
             center: [0, 0],
           },

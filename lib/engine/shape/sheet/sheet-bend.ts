@@ -39,6 +39,7 @@ export const sheetBend = defineShape({
   terminals: { high: "the end of the first leg", low: "the end of the second leg" },
   answer: {
     kind: "factor",
+    planIsWhole: () => true,
     factor: ({ legLength1, legLength2, width1, width2 }) => {
       const corner = cornerSquares(width1, width2);
       const least = legLength1 / width1 + legLength2 / width2;

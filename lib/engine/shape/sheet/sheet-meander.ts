@@ -47,6 +47,7 @@ export const sheetMeander = defineShape({
   terminals: { high: "the free end of the first leg", low: "the free end of the last leg" },
   answer: {
     kind: "factor",
+    planIsWhole: ({ legs }) => legs <= DRAWN_LEGS,
     factor: ({ legs, legLength, width, gap }) => {
       const turns = legs - 1;
       const [leg, turn] = [legLength / width, gap / width];
@@ -148,8 +149,8 @@ function drawMeander({ legs, legLength, width, gap }: Meander): Drawing {
             ? [
                 {
                   name: "gap",
-                  from: [width, legLength / 2] as Point,
-                  to: [pitch, legLength / 2] as Point,
+                  from: [width, 0.92 * legLength] as Point,
+                  to: [pitch, 0.92 * legLength] as Point,
                   kind: "linear" as const,
                   offset: 0,
                 },

@@ -42,6 +42,7 @@ export const sheetStep = defineShape({
   terminals: { high: "the end of the first part", low: "the end of the second part" },
   answer: {
     kind: "factor",
+    planIsWhole: () => true,
     factor: (d) => {
       const { length1, width1, length2, width2 } = d;
       const least = length1 / width1 + length2 / width2;

@@ -3,10 +3,11 @@ import { INSULATION_CAUTION } from "../caution";
 import { defineShape } from "../define-shape";
 import { lengthDimension } from "../dimension";
 import type { Drawing } from "../drawing";
-import { circle, rectangle } from "../drawing";
+import { rectangle } from "../drawing";
+import { ellipse } from "../drawing-curve";
 import { exactFactor } from "../exact-factor";
 import { bipolarSpan, narrowestField } from "./bipolar";
-import { blockWithHoles, radialArrows, segment } from "./circle-views";
+import { radialArrows, segment } from "./circle-views";
 
 function span({ diameter, gap }: { readonly diameter: number; readonly gap: number }): number {
   return bipolarSpan((2 * gap) / diameter);
@@ -95,9 +96,9 @@ function drawAbovePlane(d: {
     views: [
       {
         title: "end view",
-        conductor: blockWithHoles(-wide, 0, wide, h + 2.2 * a, [{ center: [0, h], radius: a }]),
+        conductor: [rectangle(-wide, 0, 2 * wide, h + 2.2 * a), ellipse([0, h], a, a)],
         lines: [{ ...segment([0, -0.1 * a], [0, h + 1.4 * a]), style: "axis" }],
-        high: [circle([0, h], a)],
+        high: [ellipse([0, h], a, a)],
         low: [segment([-wide, 0], [wide, 0])],
         flow: radialArrows([0, h], a + 0.1 * gap, a + 0.8 * gap, [
           -0.5 * Math.PI,

@@ -4,10 +4,11 @@ import { INSULATION_CAUTION } from "../caution";
 import { defineShape } from "../define-shape";
 import { lengthDimension } from "../dimension";
 import type { Drawing } from "../drawing";
-import { circle } from "../drawing";
+import { rectangle } from "../drawing";
+import { ellipse } from "../drawing-curve";
 import { exactFactor } from "../exact-factor";
 import { sphereAbovePlane } from "./bispherical";
-import { blockWithHoles, radialArrows, segment } from "./circle-views";
+import { radialArrows, segment } from "./circle-views";
 import { poleField, sphereImages, totalCharge } from "./sphere-images";
 
 /** A sphere above a conducting plane: the bispherical series, exact. */
@@ -97,9 +98,9 @@ function drawAbovePlane(a: number, h: number, gap: number): Drawing {
     views: [
       {
         title: "section",
-        conductor: blockWithHoles(-wide, 0, wide, h + 2.2 * a, [{ center: [0, h], radius: a }]),
+        conductor: [rectangle(-wide, 0, 2 * wide, h + 2.2 * a), ellipse([0, h], a, a)],
         lines: [{ ...segment([0, -0.1 * a], [0, h + 1.4 * a]), style: "axis" }],
-        high: [circle([0, h], a)],
+        high: [ellipse([0, h], a, a)],
         low: [segment([-wide, 0], [wide, 0])],
         flow: radialArrows([0, h], a + 0.1 * gap, a + 0.8 * gap, [
           -0.5 * Math.PI,

@@ -32,12 +32,12 @@ export const spheroid = defineShape({
   summary:
     "An ellipsoid of revolution, slender or flat, in a medium without bounds, or half of it below an insulating plane through its centre; the current spreads from it to infinity.",
   dimensions: {
-    polarDiameter: lengthDimension("Polar diameter", "d_p", "Length along the axis of revolution.", {
+    polarDiameter: lengthDimension("Polar diameter", "dₚ", "Length along the axis of revolution.", {
       radius: "polarRadius",
     }),
     equatorialDiameter: lengthDimension(
       "Equatorial diameter",
-      "d_e",
+      "dₑ",
       "Diameter across the axis of revolution.",
       { radius: "equatorialRadius" },
     ),
@@ -111,6 +111,7 @@ function drawSpheroid(d: Spheroid): Drawing {
   const wide = e + around;
   const bottom = -p - around;
   const lower = sampled((turn): Point => [e * Math.cos(turn), p * Math.sin(turn)], Math.PI, 2 * Math.PI);
+  const mirrored = sampled((turn): Point => [e * Math.cos(turn), p * Math.sin(turn)], 0, Math.PI);
   const body: readonly DrawingPath[] = half
     ? [
         joined([
@@ -131,7 +132,12 @@ function drawSpheroid(d: Spheroid): Drawing {
         conductor: body,
         lines: [
           { ...segment([0, bottom], [0, half ? 0 : -bottom]), style: "axis" },
-          ...(half ? [{ ...segment([-wide, 0], [wide, 0]), style: "ground" as const }] : []),
+          ...(half
+            ? [
+                { ...segment([-wide, 0], [wide, 0]), style: "ground" as const },
+                { ...mirrored, style: "hidden" as const },
+              ]
+            : []),
         ],
         high: [half ? lower : ellipse([0, 0], e, p)],
         low: half
@@ -144,7 +150,7 @@ function drawSpheroid(d: Spheroid): Drawing {
               ]),
             ]
           : [rectangle(-wide, bottom, 2 * wide, -2 * bottom)],
-        flow: (half ? [0, -0.5, -1] : [0, 0.5, 1, -0.5]).map((turn) => {
+        flow: (half ? [-0.12, -0.5, -0.88] : [0, 0.5, 1, -0.5]).map((turn) => {
           const [x, y] = [Math.cos(turn * Math.PI), Math.sin(turn * Math.PI)];
           return {
             from: [x * (e + 0.15 * around), y * (p + 0.15 * around)],
