@@ -158,7 +158,7 @@ function factorRoute(solution: Solution, view: FactorView): Check {
       reason: "No second route of like accuracy reaches these dimensions.",
     };
   }
-  return outcome("second-route", Math.abs(second.value / view.factor.value - 1), second.tolerance);
+  return outcome("second-route", Math.abs(second.value / view.law.value - 1), second.tolerance);
 }
 
 function mediaChecks(solution: Solution, view: MediaView): Check[] {

@@ -231,7 +231,7 @@ function solve(shape: Shape, dimensions: Resolved<Dimensions>, media: Media): So
   }
   if (answer.kind === "flow") return solveFlow(answer, dimensions, media.single);
   if (answer.kind === "factor" && media.single.kind === "uniform") {
-    return solveFactor(answer, dimensions, media.single, shape.family === "sheet");
+    return solveFactor(shape, answer, dimensions, media.single, shape.family === "sheet");
   }
   throw new Error(`${shape.id} cannot be solved with this medium`);
 }

@@ -44,6 +44,9 @@ export interface AcrossView {
 export interface FactorView {
   readonly kind: "factor";
   readonly answer: FactorAnswer<Dimensions>;
+  /** What the shape's formula gives. */
+  readonly law: Factor;
+  /** What the answer rests on: the formula, or a field solution where that has lost its accuracy. */
   readonly factor: Factor;
   readonly medium: UniformMedium;
   readonly sheet: boolean;

@@ -1,17 +1,20 @@
 /** Shapes known by a potential-theory result for a uniform medium. */
 import type { UniformMedium } from "../medium/resolve-medium";
-import type { Dimensions, FactorAnswer, Resolved } from "../shape/define-shape";
+import type { Dimensions, FactorAnswer, Resolved, Shape } from "../shape/define-shape";
 import { around, between } from "./bounds";
+import { sharpenedFactor } from "./field-factor";
 import type { Solution } from "./solution";
 
 /** R = ρ·factor (1/m), or sheet resistance times squares. */
 export function solveFactor(
+  shape: Shape,
   answer: FactorAnswer<Dimensions>,
   dimensions: Resolved<Dimensions>,
   medium: UniformMedium,
   sheet: boolean,
 ): Solution {
-  const factor = answer.factor(dimensions);
+  const law = answer.factor(dimensions);
+  const factor = sharpenedFactor(shape, answer, dimensions, law);
   const relative = factor.relativeError + medium.relativeError;
   const scale = medium.value;
   const bounds =
@@ -26,6 +29,6 @@ export function solveFactor(
     cautions: factor.cautions ?? [],
     assumptions: factor.accuracy ? [factor.accuracy] : [],
     dimensions,
-    view: { kind: "factor", answer, factor, medium, sheet },
+    view: { kind: "factor", answer, law, factor, medium, sheet },
   };
 }

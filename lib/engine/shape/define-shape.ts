@@ -170,6 +170,11 @@ export interface FactorAnswer<D extends Dimensions> {
   readonly kind: "factor";
   readonly factor: (d: Resolved<D>) => Factor;
   readonly peak?: (d: Resolved<D>) => FactorPeak;
+  /**
+   * For a sheet: whether the plan that the shape draws with these dimensions is the whole conductor, so that a field
+   * solution on it takes the formula's place where that is no longer close. Left out where the formula always is.
+   */
+  readonly planIsWhole?: (d: Resolved<D>) => boolean;
   /** The same number by another route, for the `second-route` check; null where it does not reach. */
   readonly secondRoute?: (d: Resolved<D>) => { readonly value: number; readonly tolerance: number } | null;
 }

@@ -15,6 +15,10 @@ export interface LongLegs {
   readonly most?: number;
 }
 
+/** What the entries of these shapes say of short legs. */
+export const FIELD_TAKES_OVER =
+  "Where the legs are so short that the formula's bounds are wider than 1e-4 of the value, the answer is a field solution on the plan with a proved bracket.";
+
 /** Below this share of the value the legs are long to rounding. */
 const NEGLIGIBLE = 1e-15;
 /** From this share on a caution says that the legs are short. */
@@ -40,7 +44,7 @@ export function longLegFactor(legs: LongLegs): Factor {
     ...(share > NOTEWORTHY
       ? {
           cautions: [
-            `The legs are short against their width: the long-leg formula may be off by up to ${(100 * share).toPrecision(2)} %. A field solution on the outline gives closer bounds.`,
+            `The legs are short against their width: the long-leg formula may be off by up to ${(100 * share).toPrecision(2)} %.`,
           ],
         }
       : {}),

@@ -4,7 +4,7 @@ import { lengthDimension } from "../dimension";
 import type { Drawing } from "../drawing";
 import { cornerModes, cornerSquares } from "./corner-law";
 import { endingChange } from "./leg-modes";
-import { longLegFactor } from "./long-leg-factor";
+import { FIELD_TAKES_OVER, longLegFactor } from "./long-leg-factor";
 import { along, edge, outline, upwards } from "./sheet-drawing";
 
 interface Bend {
@@ -66,6 +66,7 @@ export const sheetBend = defineShape({
     "\\frac{R}{R_\\square} = \\frac{L_1}{w_1}+\\frac{L_2}{w_2}+\\frac1\\pi\\left[2r\\arctan\\frac1r+\\frac2r\\arctan r-\\ln\\frac{16r^2}{(1+r^2)^2}\\right],\\qquad r=\\frac{w_1}{w_2}",
   boundsBasis: "formula-accuracy",
   validity: [
+    FIELD_TAKES_OVER,
     "Exact for legs that are long against their width; the true value lies below by at most the stated bound, about 0.055·exp(−2πL/w) squares for each leg of an equal bend.",
     "The corner counts 1 − (2/π)·ln 2 = 0.5587 squares for equal widths.",
   ],

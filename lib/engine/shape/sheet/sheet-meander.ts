@@ -4,7 +4,7 @@ import { lengthDimension } from "../dimension";
 import type { Drawing, Point } from "../drawing";
 import { cornerModes, cornerSquares } from "./corner-law";
 import { endingChange, type Leg } from "./leg-modes";
-import { longLegFactor } from "./long-leg-factor";
+import { FIELD_TAKES_OVER, longLegFactor } from "./long-leg-factor";
 import { edge, outline, upwards } from "./sheet-drawing";
 
 interface Meander {
@@ -64,6 +64,7 @@ export const sheetMeander = defineShape({
     "\\frac{R}{R_\\square}=n\\,\\frac{\\ell}{w}+(n-1)\\left(\\frac gw+2\\left(1-\\tfrac2\\pi\\ln 2\\right)\\right)",
   boundsBasis: "formula-accuracy",
   validity: [
+    FIELD_TAKES_OVER,
     "Exact where legs and gap are long against the width; the bounds tell how much the nearness of the corners can change.",
     "The two corners of one turn bend alike and lower the resistance a little, about 0.11·exp(−πg/w) squares a turn.",
   ],

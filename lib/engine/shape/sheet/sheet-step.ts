@@ -3,7 +3,7 @@ import { defineShape } from "../define-shape";
 import { lengthDimension } from "../dimension";
 import type { Drawing } from "../drawing";
 import { endingChange } from "./leg-modes";
-import { longLegFactor } from "./long-leg-factor";
+import { FIELD_TAKES_OVER, longLegFactor } from "./long-leg-factor";
 import { along, edge, outline } from "./sheet-drawing";
 import { narrowModes, stepOf, stepSquares, wideModes } from "./step-law";
 
@@ -87,6 +87,7 @@ export const sheetStep = defineShape({
     "\\frac{R}{R_\\square} = \\frac{L_1}{w_1}+\\frac{L_2}{w_2}+\\frac{1}{m\\pi}\\left[\\frac{(1-\\alpha)^2}{\\alpha}\\ln\\frac{1+\\alpha}{1-\\alpha}+2\\ln\\!\\left(1+\\frac{(1-\\alpha)^2}{4\\alpha}\\right)\\right],\\quad \\alpha=\\frac{w_{\\min}}{w_{\\max}},\\; m=1\\text{ (edge)},\\,2\\text{ (centre)}",
   boundsBasis: "formula-accuracy",
   validity: [
+    FIELD_TAKES_OVER,
     "Exact for parts that are long against their width; the true value lies below by at most the stated bound.",
   ],
   cautions: [AMPACITY_CAUTION],

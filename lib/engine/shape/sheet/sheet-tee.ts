@@ -5,7 +5,7 @@ import { lengthDimension } from "../dimension";
 import type { Drawing } from "../drawing";
 import { cornerSquares } from "./corner-law";
 import { endingChange } from "./leg-modes";
-import { longLegFactor } from "./long-leg-factor";
+import { FIELD_TAKES_OVER, longLegFactor } from "./long-leg-factor";
 import { along, edge, outline, upwards } from "./sheet-drawing";
 import { teeOf } from "./tee-law";
 
@@ -65,6 +65,7 @@ export const sheetTee = defineShape({
     "\\frac{R}{R_\\square}=\\frac{L_1}{a}+\\frac{L_2}{a}+T\\;\\text{(through)},\\quad \\frac{L_1}{a}+\\frac{L_3}{b}+B\\;\\text{(branch)},\\qquad T=\\tfrac2\\pi\\!\\left[\\ln\\!\\left(1+\\tfrac1{q^2}\\right)+\\tfrac2q\\arctan q\\right],\\; B=\\tfrac1\\pi\\!\\left[\\tfrac2q\\arctan q+q\\arctan\\tfrac1q+\\tfrac32\\ln(1+q^2)-2\\ln 2q\\right],\\; q=\\tfrac{2a}{b}",
   boundsBasis: "formula-accuracy",
   validity: [
+    FIELD_TAKES_OVER,
     "Exact for arms that are long against their width; the true value lies within the stated bounds.",
     "Short terminal arms lower the resistance, a short floating arm raises it.",
     "Path both: the exact star of T/2 for each arm and B − T/2 for the stub.",
