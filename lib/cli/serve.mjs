@@ -39,10 +39,22 @@ export async function serve({ host, port }) {
   };
   process.on("SIGTERM", stop);
   process.on("SIGINT", stop);
+  if (process.env.npm_lifecycle_event) followParent(stop);
 
   await new Promise((resolve, reject) => {
     server.once("error", reject);
     server.listen(port, host, resolve);
   });
   return server;
+}
+
+/** npm passes a signal on to nobody and just ends: whoever stopped it meant us. */
+function followParent(stop) {
+  const parent = process.ppid;
+  const timer = setInterval(() => {
+    if (process.ppid === parent) return;
+    clearInterval(timer);
+    stop();
+  }, 500);
+  timer.unref();
 }

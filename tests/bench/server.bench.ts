@@ -71,7 +71,10 @@ function round(url: string, key: string): number {
 export async function benchServer(): Promise<Throughput> {
   const copy = copyWithEmptyRoute();
   try {
-    const service = await startService({ RHOFORM_DEMO: "1", RHOFORM_LOG: "off" }, 600_000, copy);
+    const service = await startService(
+      { RHOFORM_DEMO: "1", RHOFORM_LOG: "off" },
+      { patience: 600_000, project: copy },
+    );
     try {
       const issue = [
         "lib/cli/keys.ts",

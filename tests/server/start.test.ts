@@ -108,6 +108,26 @@ describe("SIGTERM", () => {
   });
 });
 
+describe("a signal to npm", () => {
+  it("stops the service too", async () => {
+    const folder = mkdtempSync(join(tmpdir(), "rhoform-start-"));
+    const service = await startService({ RHOFORM_DATA: folder }, { command: ["npm", "start"] });
+    service.process.kill("SIGTERM");
+    await expect
+      .poll(
+        () =>
+          fetch(`${service.base}/api/v1/health`).then(
+            () => "answers",
+            () => "gone",
+          ),
+        { timeout: 20_000 },
+      )
+      .toBe("gone");
+    await expect.poll(() => existsSync(join(folder, "rhoform.sqlite-wal")), { timeout: 20_000 }).toBe(false);
+    rmSync(folder, { recursive: true });
+  });
+});
+
 describe("npm run backup", () => {
   it("copies a running service consistently", async () => {
     const { RHOFORM_TEST_DATA = "" } = process.env;

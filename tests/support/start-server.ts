@@ -24,16 +24,27 @@ export interface StartedService {
   readonly stop: () => Promise<number | null>;
 }
 
+interface StartOptions {
+  /** Program and arguments. */
+  readonly command?: readonly string[];
+  /** Longest wait until it answers, ms. */
+  readonly patience?: number;
+  /** Folder of the project to start, this one unless a copy is meant. */
+  readonly project?: string;
+}
+
 /** Starts the service as `npm start` does, on a free port and a data folder of its own; it builds first if it must. */
 export async function startService(
   variables: Readonly<Record<string, string>> = {},
-  patience = 300_000,
-  /** Folder of the project to start, this one unless a copy is meant. */
-  project = process.cwd(),
+  {
+    command = [process.execPath, "lib/cli/start.mjs"],
+    patience = 300_000,
+    project = process.cwd(),
+  }: StartOptions = {},
 ): Promise<StartedService> {
   const port = await freePort();
   const folder = mkdtempSync(join(tmpdir(), "rhoform-server-"));
-  const child = spawn(process.execPath, ["lib/cli/start.mjs"], {
+  const child = spawn(command[0], command.slice(1), {
     cwd: project,
     env: { ...process.env, NODE_ENV: "production", PORT: String(port), RHOFORM_DATA: folder, ...variables },
     stdio: ["ignore", "pipe", "pipe"],
