@@ -9,14 +9,8 @@ const config: NextConfig = {
   // `npm run typecheck` checks the whole tree, tests included; a start need not wait for it.
   typescript: { ignoreBuildErrors: true },
   // Workers start files of their own and native modules load binaries: neither survives bundling.
-  serverExternalPackages: ["better-sqlite3", "piscina", "pino", "@node-rs/argon2"],
-  turbopack: {
-    root: process.cwd(),
-    // The package's entry is TypeScript source; the built module beside it is what bundlers can read.
-    resolveAlias: {
-      "@kninnug/constrainautor": "./node_modules/@kninnug/constrainautor/lib/Constrainautor.mjs",
-    },
-  },
+  serverExternalPackages: ["better-sqlite3", "piscina", "pino"],
+  turbopack: { root: process.cwd() },
   headers: async () => [{ source: "/_next/static/:path*", headers: assetHeaders() }],
 };
 
