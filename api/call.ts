@@ -74,7 +74,7 @@ export class Call {
     const spending = await this.service.limiter.spend(bucket, computations);
     this.month = spending;
     if (!spending.allowed) throw refused("quota-exhausted", spending, computations);
-    this.reserved = computations;
+    this.reserved += computations;
   }
 
   /** Gives back what was reserved beyond the computations that were made. */

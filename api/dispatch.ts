@@ -136,6 +136,7 @@ async function perform(
     headers: call.headers,
     accepts: report.accepts,
     registry,
+    reserve: (computations) => call.reserve(computations),
   });
   const done = await service.commits.run(() => {
     const outcome = "commit" in handled ? handled.commit() : handled;

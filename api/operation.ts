@@ -23,6 +23,8 @@ export interface CallContext {
   readonly accepts: string;
   /** Everything that is served here, for what describes it. */
   readonly registry: RouteTable;
+  /** Reserves more computations of the month, where only the stored thing tells what the call needs. */
+  readonly reserve: (computations: number) => Promise<void>;
 }
 
 export type Content =

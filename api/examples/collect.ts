@@ -34,8 +34,11 @@ export async function collectExamples(
   routes: RouteTable,
   origin: string,
 ): Promise<ReadonlyMap<string, readonly AnsweredExample[]>> {
-  const { service, key, close } = scratchService(origin);
-  const send: Send = (path, init) => dispatch(new Request(LOCAL + path, init), service, routes);
+  const { service, key, settle, close } = scratchService(origin);
+  const send: Send = async (path, init) => {
+    await settle();
+    return dispatch(new Request(LOCAL + path, init), service, routes);
+  };
   const ids = new SampleIds();
   try {
     const fixtures = await makeFixtures(send, key);
@@ -60,6 +63,7 @@ export async function collectExamples(
     }
     return collected;
   } finally {
+    await settle();
     close();
   }
 }

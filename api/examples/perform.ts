@@ -80,6 +80,10 @@ export async function makeFixtures(send: Send, key: string): Promise<Fixtures> {
   };
   const record = () => make("/resistance", FIXTURE_RECORD, (answer) => answer.record?.id);
   const material = () => make("/materials", FIXTURE_MATERIAL, (answer) => answer.id);
+  const fieldRecord = () => {
+    const body = { ...FIXTURE_FIELD, record: { label: "Track, rev B" } };
+    return make("/fields", body, (answer) => answer.record?.id);
+  };
   const field = () => make("/fields", FIXTURE_FIELD, (answer) => answer.id);
   const issued = () => make("/keys", FIXTURE_KEY, (answer) => answer.id);
   return {
@@ -90,6 +94,7 @@ export async function makeFixtures(send: Send, key: string): Promise<Fixtures> {
     $outline: await make("/outlines", { outline: FIXTURE_OUTLINE }, (answer) => answer.id),
     $field: await field(),
     $oldField: await field(),
+    $fieldRecord: await fieldRecord(),
     $key: await issued(),
     $oldKey: await issued(),
   };

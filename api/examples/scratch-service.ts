@@ -1,3 +1,6 @@
+import { mkdtempSync, rmSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
 import { migrateDatabase, openDatabase } from "@/db/client";
 import { insertTeam } from "@/db/queries/teams";
 import { SHELL } from "@/lib/activity/append";
@@ -7,12 +10,14 @@ import { readConfig } from "@/lib/config/environment";
 import { type Bucket, type BucketState, Limiter } from "@/lib/limits/limiter";
 import { InlineRunner } from "@/lib/jobs/worker-pool";
 import { openLog } from "@/lib/service/log";
-import { assembleService, type Service } from "@/lib/service/service";
+import { assembleService, closeService, type Service } from "@/lib/service/service";
 
 export interface Scratch {
   readonly service: Service;
   /** A key with every scope. */
   readonly key: string;
+  /** Waits until no field solution is at work, and moves the clock on: call it before each call. */
+  readonly settle: () => Promise<void>;
   readonly close: () => void;
 }
 
@@ -31,15 +36,17 @@ class SteadyLimiter extends Limiter {
 export function scratchService(origin: string): Scratch {
   const db = openDatabase(":memory:");
   migrateDatabase(db);
+  // Maps of field solutions are files.
+  const folder = mkdtempSync(join(tmpdir(), "rhoform-examples-"));
   const config = readConfig({
+    RHOFORM_DATA: folder,
     RHOFORM_ORIGIN: origin,
     RHOFORM_SECRET: "a secret of no consequence",
     RHOFORM_LOG: "off",
   });
   // One second a call, so that lists have an order.
   let now = MOMENT;
-  const clock = () => (now += 1000);
-  const service = assembleService(config, db, openLog("off"), clock, {
+  const service = assembleService(config, db, openLog("off"), () => now, {
     limiter: new SteadyLimiter(db),
     runner: new InlineRunner(),
   });
@@ -55,5 +62,13 @@ export function scratchService(origin: string): Scratch {
     actor: SHELL,
     now: MOMENT,
   });
-  return { service, key: text, close: () => db.$client.close() };
+  const settle = async () => {
+    while (service.fields.busy) await new Promise((resolve) => setImmediate(resolve));
+    now += 1000;
+  };
+  const close = () => {
+    closeService(service);
+    rmSync(folder, { recursive: true, force: true });
+  };
+  return { service, key: text, settle, close };
 }

@@ -14,7 +14,8 @@ import { isFinished } from "@/lib/jobs/field-jobs";
 import { Refusal } from "@/lib/service/refusal";
 import { type CallContext, defineOperation, json } from "../operation";
 import { fieldLineSchema, fieldMapSchema } from "../schemas/field";
-import { callersField, fieldId, viewOf } from "./fields";
+import { callersField, viewOf } from "./field-start";
+import { fieldId } from "./fields";
 
 interface Solved {
   readonly map: FieldMap;
@@ -95,7 +96,12 @@ export const readFieldMap = defineOperation({
       streamlines: lines.streamlines,
       currentBetweenStreamlines: lines.currentBetweenLines,
       raster: densityRaster(map, query.resolution),
-      edges: boundaryFlux(map).map(({ terminal, ...edge }) => ({ ...edge, terminal: names[terminal] })),
+      // The engine counts what leaves the conductor; here, as in `conductance`, what a terminal feeds is positive.
+      edges: boundaryFlux(map).map(({ terminal, current, ...edge }) => ({
+        ...edge,
+        terminal: names[terminal],
+        current: 0 - current,
+      })),
     });
   },
 });

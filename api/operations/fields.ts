@@ -1,46 +1,23 @@
 import { z } from "zod";
-import { deleteField as deleteRow, fieldOfOwner, type FieldRow, outlineOfOwner } from "@/db/queries/fields";
-import { keyActor } from "@/lib/activity/append";
-import { requireKey } from "@/lib/auth/access";
-import { type PreparedField, prepareField } from "@/lib/engine";
-import { contentOf, fieldView } from "@/lib/fields/field-view";
-import { chargeOf, requireCaller, requireOwner } from "@/lib/fields/owner";
-import { MOST_COMPUTATIONS } from "@/lib/jobs/field-cost";
+import { deleteField as deleteRow, outlineOfOwner } from "@/db/queries/fields";
+import { prepareField } from "@/lib/engine";
+import { contentOf } from "@/lib/fields/field-view";
+import { requireOwner } from "@/lib/fields/owner";
+import { FIELD_COSTS, MOST_COMPUTATIONS } from "@/lib/jobs/field-cost";
 import { isFinished } from "@/lib/jobs/field-jobs";
 import { usableMaterial } from "@/lib/materials/team-materials";
-import { newId } from "@/lib/service/identifier";
-import { Refusal } from "@/lib/service/refusal";
-import { BASE_PATH } from "../base-path";
-import { subjectOf } from "../call";
-import { type CallContext, defineOperation, json, type Outcome } from "../operation";
+import { type CallContext, defineOperation, json } from "../operation";
 import { preferredWait } from "../prefer";
 import { fieldRequest, fieldSchema } from "../schemas/field";
+import { answerField, callersField, type FieldStart, startField, viewOf } from "./field-start";
 import { bracketOutline, bracketTerminals, OUTLINE_MAX_BYTES } from "./outlines";
 
 export const fieldId = z.object({
   id: z.string().max(64).meta({ description: "Id of the field solution." }),
 });
 
-/** A field solution of the caller; one of somebody else does not exist for it. */
-export function callersField({ service, principal }: CallContext, id: string): FieldRow {
-  const row = fieldOfOwner(service.db, requireOwner(principal, service.config.secret), id);
-  if (row) return row;
-  throw new Refusal("not-found", "There is no field solution of this id.");
-}
-
-export function viewOf(row: FieldRow) {
-  return fieldView(row, (id) => `${BASE_PATH}/records/${id}`);
-}
-
-/** A guess at the work, for the order of the queue: vertices, and digits wanted. */
-function sizeOf({ problem, request }: PreparedField): number {
-  const vertices = problem.outline.rings.reduce((sum, ring) => sum + ring.arcs.length, 0);
-  return Math.round(10 * vertices * Math.log10(request.accuracy) ** 2);
-}
-
 /** Checks the body with what the caller may use; materials it names are kept as they are now. */
-function prepare(body: unknown, context: CallContext) {
-  const { service, principal } = context;
+function prepare(body: unknown, { service, principal }: CallContext): FieldStart {
   const owner = requireOwner(principal, service.config.secret);
   const teamId = principal.kind === "key" ? principal.teamId : undefined;
   const materials = new Map<string, unknown>();
@@ -55,38 +32,15 @@ function prepare(body: unknown, context: CallContext) {
       return row && contentOf(row);
     },
   });
-  return { owner, prepared, materials: [...materials.values()] };
+  return { prepared, materials: [...materials.values()] };
 }
 
-async function start(body: unknown, context: CallContext): Promise<string> {
-  const { service, now } = context;
-  const { owner, prepared, materials } = prepare(body, context);
-  const caller = requireCaller(context.principal);
-  const { record } = prepared.request;
-  const by = record && requireKey(context.principal, "A record");
-  if (!service.fields.hasRoom(owner)) {
-    throw new Refusal("busy", "Too many field solutions are waiting; try again when some are finished.", {
-      headers: { "Retry-After": "10" },
-    });
-  }
-  const id = newId("fld");
-  await service.commits.run(() => {
-    service.fields.insert({
-      id,
-      owner,
-      createdAt: now,
-      request: JSON.stringify(prepared.body),
-      materials,
-      size: sizeOf(prepared),
-      charge: chargeOf(caller, subjectOf(caller), MOST_COMPUTATIONS, now),
-      record:
-        record && by
-          ? { label: record.label, teamId: by.teamId, actor: keyActor(by, context.requestId) }
-          : null,
-    });
-  });
-  service.fields.start(id);
-  return id;
+/** The table of costs in words. */
+function costTable(): string {
+  return FIELD_COSTS.map(
+    ({ upToUnknowns, computations }) =>
+      `${computations} ${computations === 1 ? "computation" : "computations"} up to ${upToUnknowns.toLocaleString("en")} unknowns`,
+  ).join(", ");
 }
 
 const solve = {
@@ -101,8 +55,7 @@ export const postField = defineOperation({
   path: "/fields",
   tag: "Fields",
   summary: "Solve the field on an outline",
-  description:
-    "From any outline, its terminals and a medium to a resistance between a lower and an upper bound from two independent field solutions. Everything about the outline, the terminals and the medium is checked at once; then the solution runs as a job. `Prefer: wait=N` waits up to N seconds (at most 30) for its end: 200 if it is ready, else 202 with `Location`. It counts against the month by its unknowns: 1 computation up to 20,000, 5 up to 100,000, 20 up to 500,000; the most is reserved before, the rest given back at the end.",
+  description: `From any outline, its terminals and a medium to a resistance between a lower and an upper bound from two independent field solutions. Everything about the outline, the terminals and the medium is checked at once; then the solution runs as a job. \`Prefer: wait=N\` waits up to N seconds (at most 30) for its end: 200 if it is ready, else 202 with \`Location\`. It counts against the month by its unknowns: ${costTable()}; the most is reserved before, the rest given back at the end. One that is cancelled, refused or fails costs nothing.`,
   scope: "field",
   request: {
     body: {
@@ -134,6 +87,13 @@ export const postField = defineOperation({
       body: { ...solve, accuracy: 1e-6 },
     },
     {
+      name: "onItsWay",
+      summary: "Without a wait: where to ask",
+      status: 202,
+      headers: { "Idempotency-Key": "track-rev-b-field" },
+      body: solve,
+    },
+    {
       name: "terminalOffTheBoundary",
       summary: "A terminal that does not lie on the outline",
       status: 422,
@@ -156,21 +116,8 @@ export const postField = defineOperation({
   ],
   reserve: () => MOST_COMPUTATIONS,
   stores: () => true,
-  handler: async ({ body }, context): Promise<Outcome> => {
-    const { service, principal, headers } = context;
-    const wait = preferredWait(headers);
-    const id = await start(body, context);
-    if (wait > 0) await service.fields.waitFor(id, wait * 1000);
-    const row = fieldOfOwner(service.db, requireOwner(principal, service.config.secret), id);
-    if (!row) throw new Refusal("not-found", "The field solution was deleted while it was waited for.");
-    return json(isFinished(row) ? 200 : 202, viewOf(row), {
-      held: MOST_COMPUTATIONS,
-      headers: {
-        Location: `${BASE_PATH}/fields/${id}`,
-        ...(wait > 0 ? { "Preference-Applied": `wait=${wait}` } : {}),
-      },
-    });
-  },
+  handler: async ({ body }, context) =>
+    answerField(context, await startField(context, prepare(body, context))),
 });
 
 export const readField = defineOperation({

@@ -2,12 +2,16 @@ import { z } from "zod";
 import { listRecords as listRows } from "@/db/queries/records";
 import { keyActor } from "@/lib/activity/append";
 import { requireKey } from "@/lib/auth/access";
+import { prepareReplay } from "@/lib/fields/replay-field";
+import { MOST_COMPUTATIONS } from "@/lib/jobs/field-cost";
 import { recordView, relabel, removeRecord, teamRecord } from "@/lib/records/records";
 import { replayResistance } from "@/lib/records/replay";
 import { type CallContext, defineOperation, json } from "../operation";
 import { decodeCursor, encodeCursor, page } from "../pagination";
+import { fieldSchema } from "../schemas/field";
 import { pageOf, pageQuery } from "../schemas/page";
 import { recordSchema, relabelSchema, replaySchema } from "../schemas/record";
+import { answerField, startField } from "./field-start";
 
 /** Requests and results of one page together, characters; a page ends early where they would be more. */
 const LARGEST_PAGE = 2_000_000;
@@ -31,7 +35,11 @@ export const listRecords = defineOperation({
   request: {
     query: z.strictObject({
       ...pageQuery(25, 100),
-      operation: z.string().max(40).optional().meta({ description: "Only those of one operation." }),
+      operation: z
+        .string()
+        .max(40)
+        .optional()
+        .meta({ description: "Only those of one operation.", example: "field" }),
       shape: z.string().max(64).optional().meta({ description: "Only those of one shape.", example: "bar" }),
       search: z.string().max(200).optional().meta({ description: "Part of the label.", example: "rev C" }),
     }),
@@ -151,11 +159,19 @@ export const replayRecord = defineOperation({
   tag: "Records",
   summary: "Replay a record",
   description:
-    "Computes the record again with today's engine and the material versions it pinned, and shows the drift. Stores nothing; costs one computation.",
+    "Computes the record again with today's engine and the material versions it pinned, and shows the drift. It stores no record. A resistance costs one computation. A field solution is answered, and costs, as `POST /fields` does: `Prefer: wait=N` waits for its end, 202 has its `Location`, and `replay` in it shows the drift once it is finished; reading it later takes the scope `field`.",
   scope: "compute",
   request: { path: recordId },
   responses: {
-    200: { description: "Before and now.", content: { "application/json": replaySchema } },
+    200: {
+      description: "Before and now; for a field solution, the finished solution with its `replay`.",
+      content: { "application/json": z.union([replaySchema, fieldSchema]) },
+    },
+    202: {
+      description: "A field solution on its way; ask for it at `Location`.",
+      content: { "application/json": fieldSchema },
+      headers: { Location: "Path of the solution.", "Preference-Applied": "The wait that was granted." },
+    },
   },
   errors: ["team-required", "not-found"],
   examples: [
@@ -165,11 +181,33 @@ export const replayRecord = defineOperation({
       status: 200,
       path: { id: "$record" },
     },
+    {
+      name: "fieldReplayed",
+      summary: "A field solution, solved again",
+      status: 200,
+      headers: { Prefer: "wait=20" },
+      path: { id: "$fieldRecord" },
+    },
+    {
+      name: "fieldStarted",
+      summary: "A field solution, on its way",
+      status: 202,
+      path: { id: "$fieldRecord" },
+    },
   ],
-  reserve: () => 1,
-  handler: ({ path }, { service, principal }) => {
+  // What it costs is known once the record is read.
+  reserve: () => 0,
+  handler: async ({ path }, context) => {
+    const { service, principal } = context;
     const { teamId } = requireKey(principal, "A record");
-    const replay = replayResistance(service.db, teamRecord(service.db, teamId, path.id));
+    const row = teamRecord(service.db, teamId, path.id);
+    if (row.operation === "field") {
+      const replay = prepareReplay(service.db, row);
+      await context.reserve(MOST_COMPUTATIONS);
+      return answerField(context, await startField(context, replay));
+    }
+    await context.reserve(1);
+    const replay = replayResistance(service.db, row);
     return json(200, replay, { shape: replay.now.shape, computations: 1 });
   },
 });

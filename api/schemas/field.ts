@@ -10,7 +10,7 @@ import {
 export const fieldRequest = fieldRequestSchema.meta({ id: "FieldRequest" });
 export const outlineRequest = outlineRequestSchema.meta({ id: "OutlineRequest" });
 
-const fieldResult = fieldResultSchema.meta({ id: "FieldResult" });
+export const fieldResult = fieldResultSchema.meta({ id: "FieldResult" });
 
 export const fieldSchema = z
   .object({
@@ -36,6 +36,20 @@ export const fieldSchema = z
       .object({ id: z.string(), url: z.string() })
       .optional()
       .meta({ description: "The record, where one was asked for and the solution is finished." }),
+    replay: z
+      .object({
+        record: z.object({ id: z.string(), url: z.string() }),
+        before: fieldResult.meta({ description: "What the record holds." }),
+        drift: z.number().nullable().meta({
+          description:
+            "(now − before)/before of the resistance, of the pair that changed most for three terminals and more; null until the solution is finished.",
+        }),
+        identical: z.boolean().nullable().meta({
+          description: "Whether values and bounds are the same to the last bit; null until it is finished.",
+        }),
+      })
+      .optional()
+      .meta({ description: "For the replay of a record: what it repeats." }),
   })
   .meta({ id: "Field", description: "A field solution, finished or on its way." });
 

@@ -1,17 +1,22 @@
 import { z } from "zod";
+import { fieldResult } from "./field";
 import { resistanceResult } from "./resistance";
 
 export const recordSchema = z
   .object({
     id: z.string(),
-    operation: z.string().meta({ description: "What computed it: `resistance`." }),
+    operation: z.string().meta({ description: "What computed it: `resistance` or `field`." }),
     label: z.string(),
     createdAt: z.iso.datetime(),
     by: z
       .object({ kind: z.string(), id: z.string(), name: z.string() })
       .meta({ description: "Who stored it." }),
     request: z.record(z.string(), z.unknown()).meta({ description: "What was asked." }),
-    result: resistanceResult,
+    result: z
+      .union([resistanceResult, fieldResult])
+      .meta({
+        description: "What came out: a ResistanceResult, or a FieldResult where `operation` is `field`.",
+      }),
     materials: z
       .array(z.object({ id: z.string(), version: z.int() }))
       .meta({ description: "Materials that went in, with the versions that a replay uses." }),

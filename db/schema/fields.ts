@@ -63,6 +63,8 @@ export const fields = sqliteTable(
       };
     }>(),
     recordId: text("record_id"),
+    /** Record that it repeats, and that record's result, for a replay. */
+    replayOf: text("replay_of", { mode: "json" }).$type<{ recordId: string; before: unknown }>(),
     /** Process that works on it and until when its claim holds, Unix ms. */
     claimedBy: text("claimed_by"),
     claimedUntil: integer("claimed_until").notNull(),

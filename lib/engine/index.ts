@@ -95,7 +95,7 @@ export {
   type FieldRequest,
 } from "./field/request/field-request-schema";
 export { fieldPeakSchema, fieldResultSchema, type FieldResult } from "./field/request/field-result-schema";
-export { presentField } from "./field/request/field-result";
+export { presentField, presentProgress } from "./field/request/field-result";
 export {
   prepareField,
   type FieldContext,

@@ -1,5 +1,6 @@
 import type { FieldRow, OutlineRow } from "@/db/queries/fields";
-import type { CleanedOutline } from "@/lib/engine";
+import type { CleanedOutline, FieldResult } from "@/lib/engine";
+import { fieldDrift } from "./field-drift";
 
 /** A field solution as it is answered. */
 export function fieldView(row: FieldRow, recordUrl: (id: string) => string) {
@@ -12,6 +13,23 @@ export function fieldView(row: FieldRow, recordUrl: (id: string) => string) {
     result: row.result === null ? null : (JSON.parse(row.result) as unknown),
     ...(row.failure === null ? {} : { failure: row.failure }),
     ...(row.recordId === null ? {} : { record: { id: row.recordId, url: recordUrl(row.recordId) } }),
+    ...(row.replayOf === null ? {} : { replay: replayView(row, row.replayOf, recordUrl) }),
+  };
+}
+
+/** A replay beside what it repeats; drift and identity once it is finished. */
+function replayView(
+  { result }: FieldRow,
+  { recordId, before }: NonNullable<FieldRow["replayOf"]>,
+  recordUrl: (id: string) => string,
+) {
+  // Both were made by this application from results of the engine.
+  const drift = result === null ? null : fieldDrift(before as FieldResult, JSON.parse(result) as FieldResult);
+  return {
+    record: { id: recordId, url: recordUrl(recordId) },
+    before,
+    drift: drift && drift.drift,
+    identical: drift && drift.identical,
   };
 }
 

@@ -12,7 +12,7 @@ import {
   updateOpenField,
 } from "@/db/queries/fields";
 import { addComputations } from "@/db/queries/usage";
-import { CheckFailure, type Material, materialSchema } from "@/lib/engine";
+import { CheckFailure, type Material } from "@/lib/engine";
 import type { Limiter } from "../limits/limiter";
 import { monthBucket } from "../limits/quota";
 import { storeRecord } from "../records/records";
@@ -118,7 +118,8 @@ export class FieldJobs {
     let kept = 0;
     const task = this.options.runner.run({
       body: JSON.parse(row.request),
-      materials: row.materials.map((material): Material => materialSchema.parse(material)),
+      // Written by this application only, from materials that had passed their schema.
+      materials: row.materials as Material[],
       secondsAllowed,
       maximumUnknowns: MOST_UNKNOWNS,
       onProgress: (progress) => {
@@ -165,9 +166,13 @@ export class FieldJobs {
       );
       return;
     }
+    // One that was cancelled meanwhile needs no map.
+    const open = fieldById(db, row.id);
+    if (!open || isFinished(open)) return;
     await this.files.write(row.id, outcome.map);
+    if (this.closing) return;
     const { status, result } = outcome;
-    await this.settle(row, fieldCost(result.mesh.unknowns), 200, () => {
+    const ended = await this.settle(row, fieldCost(result.mesh.unknowns), 200, () => {
       const recordId = row.record ? this.storeRecord(row, result) : null;
       return updateOpenField(db, row.id, {
         status,
@@ -177,6 +182,7 @@ export class FieldJobs {
         finishedAt: now(),
       });
     });
+    if (!ended) await this.files.remove(row.id);
   }
 
   private storeRecord(
@@ -200,7 +206,7 @@ export class FieldJobs {
   }
 
   /** The end of a solution and what it cost, in one transaction; then what was reserved beyond it is given back. */
-  private async settle(row: FieldRow, cost: number, status: number, end: () => boolean): Promise<void> {
+  private async settle(row: FieldRow, cost: number, status: number, end: () => boolean): Promise<boolean> {
     const { db, limiter, now } = this.options;
     const { keyId, teamId, subject, quota, reserved, reservedAt } = row.charge;
     const ended = transact(db, () => {
@@ -211,16 +217,15 @@ export class FieldJobs {
     });
     if (ended && reserved > cost)
       await limiter.giveBack(monthBucket(subject, quota, reservedAt), reserved - cost);
+    return ended;
   }
 
   /** Cancels an open solution; false where it was finished already. */
   async cancel(row: FieldRow): Promise<boolean> {
     const { db, now } = this.options;
-    let cancelled = false;
-    await this.settle(row, 0, 200, () => {
-      cancelled = updateOpenField(db, row.id, { status: "cancelled", finishedAt: now() });
-      return cancelled;
-    });
+    const cancelled = await this.settle(row, 0, 200, () =>
+      updateOpenField(db, row.id, { status: "cancelled", finishedAt: now() }),
+    );
     const at = this.waiting.findIndex(({ id }) => id === row.id);
     if (at >= 0) this.waiting.splice(at, 1);
     this.running.get(row.id)?.stop();
@@ -244,20 +249,22 @@ export class FieldJobs {
     return () => this.closers.delete(closer);
   }
 
-  /** Resolves when the solution is finished, or after so many ms. Its row is then in the database. */
+  /** Resolves when the solution is finished, after so many ms, or when the service ends. */
   waitFor(id: string, ms: number): Promise<void> {
     return new Promise((resolve) => {
       const row = fieldById(this.options.db, id);
       if (!row || isFinished(row)) return resolve();
       const done = () => {
         clearTimeout(timer);
-        stop();
+        unwatch();
+        unend();
         resolve();
       };
       const timer = setTimeout(done, ms);
-      const stop = this.watch(id, (now) => {
+      const unwatch = this.watch(id, (now) => {
         if (isFinished(now)) done();
       });
+      const unend = this.onClose(done);
     });
   }
 
@@ -273,6 +280,11 @@ export class FieldJobs {
     if (!listeners || this.closing) return;
     const row = fieldById(this.options.db, id);
     if (row) for (const listener of [...listeners]) listener({ ...row, progress });
+  }
+
+  /** Whether anything waits or runs in this process. */
+  get busy(): boolean {
+    return this.running.size > 0 || this.waiting.length > 0;
   }
 
   /** Whether another solution of this owner may be taken. */

@@ -9,6 +9,7 @@ import {
   type Material,
   prepareField,
   presentField,
+  presentProgress,
   solveField,
 } from "@/lib/engine";
 
@@ -47,17 +48,17 @@ export function runFieldTask(task: FieldTask, clock: () => number = () => perfor
   const started = clock();
   const byId = new Map(task.materials.map((material) => [material.id, material]));
   let told = 0;
-  const tell = (progress: FieldProgress): void => {
-    const now = clock();
-    if (now - told < TELL_EVERY) return;
-    told = now;
-    task.port?.postMessage(progress);
-  };
   try {
     const prepared = prepareField(task.body, {
       material: (id) => byId.get(id),
       outline: () => undefined,
     });
+    const tell = (progress: FieldProgress): void => {
+      const now = clock();
+      if (now - told < TELL_EVERY) return;
+      told = now;
+      task.port?.postMessage(presentProgress(prepared, progress));
+    };
     const solution = solveField(prepared.problem, {
       accuracy: prepared.request.accuracy,
       maximumUnknowns: task.maximumUnknowns,

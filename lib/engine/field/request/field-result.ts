@@ -6,7 +6,7 @@ import { verdictOf } from "../../resistance/requirement";
 import { ENGINE_VERSION } from "../../version";
 import { down, up } from "../bounds/interval";
 import { densityPeak } from "../picture/peak";
-import type { BoundedValue, FieldSolution } from "../solve-field";
+import type { BoundedValue, FieldProgress, FieldSolution } from "../solve-field";
 import type { FieldResult } from "./field-result-schema";
 import type { PreparedField } from "./prepare-field";
 
@@ -118,6 +118,12 @@ function pairResistance({
     return { value, unit: "ohm", text: formatQuantity(value, "ohm", { lower, upper }), lower, upper };
   }
   return { value: null, unit: "ohm", text: `above ${formatQuantity(lower, "ohm")}`, lower, upper: null };
+}
+
+/** The bracket on the way to the answer, widened as the answer is, so that it never lies inside a later one. */
+export function presentProgress({ mediumError }: PreparedField, progress: FieldProgress): FieldProgress {
+  const { lower, upper } = widened({ ...progress, value: progress.lower }, mediumError);
+  return { ...progress, lower, upper };
 }
 
 /** Bounds of a positive value, widened by a relative error and never of zero width. */

@@ -1,0 +1,1 @@
+ALTER TABLE `fields` ADD `replay_of` text;
