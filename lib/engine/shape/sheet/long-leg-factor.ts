@@ -5,10 +5,15 @@ import { exactFactor, ROUNDING } from "../exact-factor";
 export interface LongLegs {
   /** Squares with endless legs. */
   readonly squares: number;
-  /** Most by which ending the current-carrying legs with terminals lowers it. */
-  readonly lowered: number;
-  /** Most by which ending floating legs with edges, or squeezing the flow into nearness, raises it. */
-  readonly raised?: number;
+  /** Length over width of the shortest leg that matters. */
+  readonly shortest: number;
+  /** Asked only where a leg is short. */
+  readonly change: () => {
+    /** Most by which ending the current-carrying legs with terminals lowers the squares. */
+    readonly lowered: number;
+    /** Most by which ending floating legs with edges, or squeezing the flow into nearness, raises them. */
+    readonly raised?: number;
+  };
   /** What conducting sheets across the legs leave: nothing can be lower. */
   readonly least: number;
   /** What insulating walls across floating legs leave: nothing can be higher. */
@@ -19,13 +24,17 @@ export interface LongLegs {
 export const FIELD_TAKES_OVER =
   "Where the legs are so short that the formula's bounds are wider than 1e-4 of the value, the answer is a field solution on the plan with a proved bracket.";
 
+/** From this length over width on, exp(−2πL/w) times any excess is below rounding. */
+const ENDLESS = 7;
 /** Below this share of the value the legs are long to rounding. */
 const NEGLIGIBLE = 1e-15;
 /** From this share on a caution says that the legs are short. */
 const NOTEWORTHY = 1e-3;
 
 export function longLegFactor(legs: LongLegs): Factor {
-  const { squares, lowered, raised = 0, least, most = Infinity } = legs;
+  const { squares, least, most = Infinity } = legs;
+  if (legs.shortest >= ENDLESS) return exactFactor(squares);
+  const { lowered, raised = 0 } = legs.change();
   if (lowered + raised <= NEGLIGIBLE * squares) return exactFactor(squares);
   // Dirichlet's principle gives R²/(R+Δ), a little more than R − Δ.
   const lower = Math.min(squares, Math.max(least, squares * (squares / (squares + lowered))));

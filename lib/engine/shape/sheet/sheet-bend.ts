@@ -43,11 +43,16 @@ export const sheetBend = defineShape({
     factor: ({ legLength1, legLength2, width1, width2 }) => {
       const corner = cornerSquares(width1, width2);
       const least = legLength1 / width1 + legLength2 / width2;
-      const legs = [
+      const legs = () => [
         { modes: cornerModes(width1 / width2), aspect: legLength1 / width1 },
         { modes: cornerModes(width2 / width1), aspect: legLength2 / width2 },
       ];
-      return longLegFactor({ squares: least + corner, lowered: endingChange(legs, corner), least });
+      return longLegFactor({
+        squares: least + corner,
+        shortest: Math.min(legLength1 / width1, legLength2 / width2),
+        change: () => ({ lowered: endingChange(legs(), corner) }),
+        least,
+      });
     },
     peak: () => ({ fieldPerVolt: null, position: "unbounded at the inner corner" }),
     secondRoute: ({ legLength1, legLength2, width1, width2 }) => {

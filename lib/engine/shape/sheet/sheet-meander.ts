@@ -52,8 +52,13 @@ export const sheetMeander = defineShape({
       const turns = legs - 1;
       const [leg, turn] = [legLength / width, gap / width];
       const least = legs * leg + turns * turn;
-      const { lowered, raised } = nearness(turns, leg, turn);
-      return longLegFactor({ squares: least + 2 * turns * CORNER, lowered, raised, least });
+      return longLegFactor({
+        squares: least + 2 * turns * CORNER,
+        // Cut half-way between the corners, so half a leg and half a turn count.
+        shortest: turns === 0 ? Infinity : Math.min(leg, turn) / 2,
+        change: () => nearness(turns, leg, turn),
+        least,
+      });
     },
     peak: ({ legs, legLength }) =>
       legs === 1
@@ -91,10 +96,9 @@ export const sheetMeander = defineShape({
 
 /**
  * Most that cutting the meander half-way between its corners can change. Sheets laid there lower R, walls raise it; the
- * free ends are terminals, which only lower it.
+ * free ends are terminals, which only lower it. There is at least one turn.
  */
 function nearness(turns: number, leg: number, turn: number): { lowered: number; raised: number } {
-  if (turns === 0) return { lowered: 0, raised: 0 };
   const part = (aspect: number): Leg => ({ modes: MODES, aspect });
   const [inTurn, inLeg, atEnd] = [part(turn / 2), part(leg / 2), part(leg)];
   const endless = part(Infinity);

@@ -51,7 +51,7 @@ export const sheetStep = defineShape({
       // The two halves of a centred step are edge steps of half the width, side by side.
       const parts = d.alignment === "centre" ? 2 : 1;
       const excess = stepSquares(step);
-      const legs = [
+      const legs = () => [
         {
           modes: firstIsNarrow ? narrowModes(step) : wideModes(step),
           aspect: (parts * length1) / width1,
@@ -63,7 +63,8 @@ export const sheetStep = defineShape({
       ];
       return longLegFactor({
         squares: least + excess / parts,
-        lowered: endingChange(legs, excess) / parts,
+        shortest: parts * Math.min(length1 / width1, length2 / width2),
+        change: () => ({ lowered: endingChange(legs(), excess) / parts }),
         least,
       });
     },

@@ -7,7 +7,7 @@ import { cornerSquares } from "./corner-law";
 import { endingChange } from "./leg-modes";
 import { FIELD_TAKES_OVER, longLegFactor } from "./long-leg-factor";
 import { along, edge, outline, upwards } from "./sheet-drawing";
-import { teeOf } from "./tee-law";
+import { teeModes, teeOf } from "./tee-law";
 
 interface Junction {
   readonly barWidth: number;
@@ -95,57 +95,74 @@ export const sheetTee = defineShape({
 
 const laws: Readonly<Record<"through" | "branch" | "both", (d: Junction) => Factor>> = {
   through: ({ barWidth, stubWidth, leftLength, rightLength, stubLength }) => {
-    const { through, left, stub } = teeOf(barWidth, stubWidth);
-    const least = leftLength / barWidth + rightLength / barWidth;
-    const arms = [leftLength, rightLength].map((length) => ({
-      modes: left.through,
-      aspect: length / barWidth,
-    }));
-    const floating = [{ modes: stub.through, aspect: stubLength / stubWidth }];
+    const tee = teeOf(barWidth, stubWidth);
+    const { through } = tee;
+    const [l1, l2, l3] = [leftLength / barWidth, rightLength / barWidth, stubLength / stubWidth];
     return longLegFactor({
-      squares: least + through,
-      lowered: endingChange(arms, through, floating),
-      raised: endingChange(floating, through, arms),
-      least,
+      squares: l1 + l2 + through,
+      shortest: Math.min(l1, l2, l3),
+      change: () => {
+        const { left, stub } = teeModes(tee);
+        const arms = [l1, l2].map((aspect) => ({ modes: left.through, aspect }));
+        const floating = [{ modes: stub.through, aspect: l3 }];
+        return {
+          lowered: endingChange(arms, through, floating),
+          raised: endingChange(floating, through, arms),
+        };
+      },
+      least: l1 + l2,
       // A wall across the mouth of the stub leaves the plain bar.
-      most: least + stubWidth / barWidth,
+      most: l1 + l2 + stubWidth / barWidth,
     });
   },
   branch: ({ barWidth, stubWidth, leftLength, rightLength, stubLength }) => {
-    const { branch, left, stub } = teeOf(barWidth, stubWidth);
-    const least = leftLength / barWidth + stubLength / stubWidth;
-    const arms = [
-      { modes: left.fromLeft, aspect: leftLength / barWidth },
-      { modes: stub.fromLeft, aspect: stubLength / stubWidth },
-    ];
-    const floating = [{ modes: left.fromRight, aspect: rightLength / barWidth }];
+    const tee = teeOf(barWidth, stubWidth);
+    const { branch } = tee;
+    const [l1, l2, l3] = [leftLength / barWidth, rightLength / barWidth, stubLength / stubWidth];
     return longLegFactor({
-      squares: least + branch,
-      lowered: endingChange(arms, branch, floating),
-      raised: endingChange(floating, branch, arms),
-      least,
+      squares: l1 + l3 + branch,
+      shortest: Math.min(l1, l2, l3),
+      change: () => {
+        const { left, stub } = teeModes(tee);
+        const arms = [
+          { modes: left.fromLeft, aspect: l1 },
+          { modes: stub.fromLeft, aspect: l3 },
+        ];
+        const floating = [{ modes: left.fromRight, aspect: l2 }];
+        return {
+          lowered: endingChange(arms, branch, floating),
+          raised: endingChange(floating, branch, arms),
+        };
+      },
+      least: l1 + l3,
       // A wall across the mouth of the right arm leaves a bend.
-      most: least + cornerSquares(barWidth, stubWidth),
+      most: l1 + l3 + cornerSquares(barWidth, stubWidth),
     });
   },
   both: ({ barWidth, stubWidth, leftLength, rightLength, stubLength }) => {
-    const { through, branch, left, stub } = teeOf(barWidth, stubWidth);
+    const tee = teeOf(barWidth, stubWidth);
     const [l1, l2, l3] = [leftLength / barWidth, rightLength / barWidth, stubLength / stubWidth];
-    const half = through / 2;
+    const half = tee.through / 2;
     // The left arm's share of the current, and of the squares of both arms side by side.
     const share = (half + l2) / (2 * half + l1 + l2);
-    const squares = (half + l1) * share + (branch - half) + l3;
     const rest = 1 - share;
-    const excess = share * share * half + rest * rest * half + branch - half;
-    const mixed = (own: readonly number[], other: readonly number[], part: number) =>
-      own.map((mode, k) => part * mode + (1 - part) * other[k]);
-    const arms = [
-      { modes: mixed(left.fromLeft, left.fromRight, share), aspect: l1 },
-      { modes: mixed(left.fromLeft, left.fromRight, rest), aspect: l2 },
-      { modes: mixed(stub.fromLeft, stub.fromRight, share), aspect: l3 },
-    ];
-    const least = l3 + l1 * (l2 / (l1 + l2));
-    return longLegFactor({ squares, lowered: endingChange(arms, excess), least });
+    return longLegFactor({
+      squares: (half + l1) * share + (tee.branch - half) + l3,
+      shortest: Math.min(l1, l2, l3),
+      change: () => {
+        const { left, stub } = teeModes(tee);
+        const excess = share * share * half + rest * rest * half + tee.branch - half;
+        const mixed = (own: readonly number[], other: readonly number[], part: number) =>
+          own.map((mode, k) => part * mode + (1 - part) * other[k]);
+        const arms = [
+          { modes: mixed(left.fromLeft, left.fromRight, share), aspect: l1 },
+          { modes: mixed(left.fromLeft, left.fromRight, rest), aspect: l2 },
+          { modes: mixed(stub.fromLeft, stub.fromRight, share), aspect: l3 },
+        ];
+        return { lowered: endingChange(arms, excess) };
+      },
+      least: l3 + l1 * (l2 / (l1 + l2)),
+    });
   },
 };
 

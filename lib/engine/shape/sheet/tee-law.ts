@@ -9,16 +9,16 @@ import { binomialSeries, multiplySeries } from "../../numeric/power-series";
 import { legModes, SERIES_LENGTH } from "./leg-modes";
 
 export interface Tee {
+  /** 2a/b. */
+  readonly q: number;
   /** Squares with the current through the bar and the stub floating. */
   readonly through: number;
   /** Squares with the current from one arm into the stub and the other arm floating. */
   readonly branch: number;
-  /** Modes in the left arm with unit current from left to right, from left to stub, and from right to stub. */
-  readonly left: TeeModes;
-  readonly stub: TeeModes;
 }
 
-export interface TeeModes {
+/** Modes of one arm with unit current from left to right, from left to stub, and from right to stub. */
+export interface ArmModes {
   readonly through: readonly number[];
   readonly fromLeft: readonly number[];
   readonly fromRight: readonly number[];
@@ -34,10 +34,11 @@ export function teeOf(barWidth: number, stubWidth: number): Tee {
       ? Math.log(q) + 1.5 * Math.log1p(inverse * inverse) - 2 * Math.LN2
       : 1.5 * Math.log1p(q * q) - 2 * Math.log(2 * q);
   const branch = ((2 * Math.atan(q)) / q + q * Math.atan(inverse) + logarithm) / Math.PI;
-  return { through, branch, ...modesOf(q, through, branch) };
+  return { q, through, branch };
 }
 
-function modesOf(q: number, through: number, branch: number): Pick<Tee, "left" | "stub"> {
+/** The modes in the left arm of the bar (the right one's are its mirror image) and in the stub. */
+export function teeModes({ q, through, branch }: Tee): { readonly left: ArmModes; readonly stub: ArmModes } {
   const c = Math.hypot(1, q);
   const inner = (q / (1 + c)) * q;
   // Arm: u = distance from its point of the half plane, in units of the nearer of inner corner and opposite arm.

@@ -71,6 +71,8 @@ export const spherePair = defineShape({
     }),
     secondRoute: (d) => {
       const [a, b] = ordered(d);
+      // Near touching the images fall off too slowly to be a cheap check.
+      if (d.gap < 1e-3 * a) return null;
       const one = sphereImages(a, b, d.gap, 1, 0);
       const both = sphereImages(a, b, d.gap, 1, 1);
       if (!one.complete || !both.complete) return null;
