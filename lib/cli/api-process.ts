@@ -23,7 +23,8 @@ function main(): void {
     stopping = true;
     service.fields.close();
     server.close(() => closeService(service));
-    server.closeIdleConnections();
+    // Again and again: a connection whose last answer was on its way becomes idle only after it.
+    setInterval(() => server.closeIdleConnections(), 100).unref();
     setTimeout(() => server.closeAllConnections(), DEADLINE_MS).unref();
   };
   process.on("SIGTERM", stop);

@@ -32,6 +32,8 @@ export async function serve({ host, port }) {
     process.emit("rhoform:stop");
     server.close(() => process.exit(0));
     server.closeIdleConnections();
+    // Connections whose last answer is on its way now become idle only after it.
+    setInterval(() => server.closeIdleConnections(), 100).unref();
     setTimeout(() => {
       server.closeAllConnections();
       process.exit(0);

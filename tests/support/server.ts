@@ -64,7 +64,7 @@ export async function startServer(variables?: Variables): Promise<TestServer> {
   };
 }
 
-function issuer(service: Service): TestServer["issue"] {
+export function issuer(service: Service): TestServer["issue"] {
   return ({ team = "busbar", ...settings } = {}) => {
     const { db } = service;
     if (!teamBySlug(db, team))
