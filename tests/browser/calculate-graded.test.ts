@@ -25,14 +25,21 @@ async function openGraded(query = SHELL) {
 
 const field = (page: Page, name: string) => page.locator(`[name="profile.${name}"]`);
 
+/** The page shows what the API answers to its address; both may lag behind the fields for a moment. */
 async function agrees(page: Page): Promise<string> {
-  const address = await addressOf(page);
-  const shown = await settled(page);
-  const [body] = bodiesOf(address);
-  expect(shown).toBe((await ask(bench.key, body)).resistance.text);
+  await expect
+    .poll(
+      async () => {
+        const [body] = bodiesOf(await addressOf(page));
+        const asked = (await ask(bench.key, body)).resistance.text;
+        return [asked, await settled(page)];
+      },
+      { timeout: 30_000 },
+    )
+    .toSatisfy(([asked, shown]: string[]) => asked === shown);
   // The profile as entered is plotted.
   await page.getByText(/^Profile as entered$/).waitFor();
-  return shown;
+  return settled(page);
 }
 
 describe("the profile editor", () => {
@@ -84,12 +91,12 @@ describe("the profile editor", () => {
   it("edits layers as a table: adds, moves, scales to fit", async () => {
     const { page, close } = await openGraded();
     await page.getByLabel("Law", { exact: true }).selectOption("layers");
-    await page.getByLabel("Layer 1, value").fill("5e-12");
+    await page.getByLabel("Layer 1, value", { exact: true }).fill("5e-12");
     await page.getByRole("button", { name: "Layer", exact: true }).click();
     await page.getByText(/Together 4.5 mm of 3 mm/).waitFor();
     await page.getByText("No answer to this input").waitFor();
     await page.getByRole("button", { name: "Scale to fit" }).click();
-    expect(await page.getByLabel("Layer 1, thickness").inputValue()).toBe("1");
+    expect(await page.getByLabel("Layer 1, thickness", { exact: true }).inputValue()).toBe("1");
     const ordered = await agrees(page);
     await page.getByRole("button", { name: "Move layer 2 up" }).click();
     await settled(page, (text) => text !== ordered);

@@ -13,29 +13,38 @@ export class ApiProblem extends Error {
   }
 }
 
-/**
- * Posts a body to an operation of the API on behalf of this page. Throws ApiProblem when it is refused.
- * @param observe Told the headers of the answer, refused or not: what is left of the limits.
- */
+interface CallOptions {
+  /** Told the headers of the answer, refused or not: what is left of the limits. */
+  readonly observe?: (headers: Headers) => void;
+  /** The same for every repeat of a call that stores something. */
+  readonly idempotencyKey?: string;
+}
+
+/** Posts a body to an operation of the API on behalf of this page. Throws ApiProblem when it is refused. */
 export async function postApi<Result>(
   path: string,
   body: string,
-  observe?: (headers: Headers) => void,
+  { observe, idempotencyKey }: CallOptions = {},
 ): Promise<Result> {
-  let response = await send(path, body);
+  const more: Record<string, string> = idempotencyKey ? { "Idempotency-Key": idempotencyKey } : {};
+  let response = await send(path, body, more);
   if (response.status === 401) {
     // The token may have ended while the page slept: one new one, once.
     dropSiteToken();
-    response = await send(path, body);
+    response = await send(path, body, more);
   }
   observe?.(response.headers);
   return read(response);
 }
 
-async function send(path: string, body: string): Promise<Response> {
+async function send(path: string, body: string, more: Readonly<Record<string, string>>): Promise<Response> {
   return fetch(`/api/v1${path}`, {
     method: "POST",
-    headers: { Authorization: `Bearer ${await siteToken()}`, "Content-Type": "application/json" },
+    headers: {
+      Authorization: `Bearer ${await siteToken()}`,
+      "Content-Type": "application/json",
+      ...more,
+    },
     body,
   });
 }

@@ -14,7 +14,7 @@ import type { FormDimension, ProfileFacts } from "../_server/form-facts";
 import type { Geometry } from "../_server/geometry";
 import type { MaterialChoice } from "../_server/material-choices";
 import { AnswerStrip } from "./answer/headline";
-import { Outcome } from "./answer/outcome";
+import { Outcome, Particulars } from "./answer/outcome";
 import { CompareTable } from "./compare/compare-table";
 import { VariantBar } from "./compare/variant-bar";
 import { Details } from "./details";
@@ -26,6 +26,7 @@ import { MediumFields } from "./medium-fields";
 import { OperatingFields } from "./operating-fields";
 import { PageTools } from "./page-tools";
 import { RequirementFields } from "./requirement-fields";
+import { SaveRecord, type Saving } from "./save-record";
 import { useAnswers } from "./use-answers";
 import { useGeometry } from "./use-geometry";
 import { useMaterials } from "./use-materials";
@@ -44,6 +45,8 @@ interface CalculatorProps {
   readonly origin: string;
   /** The law, typeset. */
   readonly formula: ReactNode;
+  /** How the reader may keep a calculation; left out where nobody can. */
+  readonly saving?: Saving;
 }
 
 /** One shape: its fields, its drawing, its answer while the fields change, and what stands behind the answer. */
@@ -97,7 +100,12 @@ function LiveCalculator(props: CalculatorProps) {
     <FormProvider value={form}>
       <div className="mt-2 flex flex-wrap items-center justify-between gap-1 print:hidden">
         <VariantBar state={state} actions={actions} />
-        <PageTools state={state} entry={entry} actions={actions} />
+        <div className="flex flex-wrap items-center gap-1">
+          <PageTools state={state} entry={entry} actions={actions} />
+          {props.saving ? (
+            <SaveRecord saving={props.saving} body={bodies[active]} title={entry.title} />
+          ) : null}
+        </div>
       </div>
       <AnswerStrip result={answer.result} stale={answer.stale} />
       <div className="mt-2 grid items-start gap-x-5 gap-y-3 wide:grid-cols-[24rem_minmax(0,1fr)]">
@@ -113,8 +121,14 @@ function LiveCalculator(props: CalculatorProps) {
           <RequirementFields />
         </form>
         <div className="contents wide:sticky wide:top-2 wide:grid wide:gap-3">
-          <DrawingPane entry={entry} geometry={geometry} focused={focused} className="order-1 wide:order-2" />
-          <Outcome answer={answer} elsewhere={complaints.elsewhere} className="order-3 wide:order-1" />
+          <Outcome answer={answer} elsewhere={complaints.elsewhere} className="order-3 wide:order-none" />
+          <DrawingPane
+            entry={entry}
+            geometry={geometry}
+            focused={focused}
+            className="order-1 wide:order-none"
+          />
+          <Particulars answer={answer} className="order-4 wide:order-none" />
         </div>
       </div>
       {variants.length > 1 ? (

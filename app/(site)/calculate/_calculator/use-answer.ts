@@ -60,7 +60,7 @@ export function useAnswer(body: string | null, first: FirstAnswer | null): Answe
   const known = asked !== null && asked === start.body ? start.first : null;
   const { data, error, isValidating, mutate } = useSWR<ResistanceResult, Error>(
     asked === null || known ? null : ["/resistance", asked],
-    ([path, text]: [string, string]) => postApi<ResistanceResult>(path, text, observe),
+    ([path, text]: [string, string]) => postApi<ResistanceResult>(path, text, { observe }),
     {
       keepPreviousData: true,
       // The same body has the same answer: what is known is not asked again.

@@ -30,18 +30,23 @@ export function Facts({ result }: { readonly result: ResistanceResult }) {
 
 function PeakFacts({ peak }: { readonly peak: NonNullable<ResistanceResult["peak"]> }) {
   const per = peak.per === "volt" ? " at 1 V" : "";
-  const value = (quantity: { readonly value: number | null; readonly text: string }) =>
-    quantity.value === null ? quantity.text : `${quantity.text}${per}`;
-  const here = peak.position.text;
-  const there = peak.currentDensityPosition.text;
+  const fact = (
+    quantity: { readonly value: number | null; readonly text: string },
+    place: string,
+  ): ReactNode => {
+    // An unbounded peak says so at its place already.
+    if (quantity.value === null && place.startsWith(quantity.text)) return <Place>{place}</Place>;
+    return (
+      <>
+        {quantity.text}
+        {quantity.value === null ? "" : per} <Place>{place}</Place>
+      </>
+    );
+  };
   return (
     <>
-      <Fact title="Peak field">
-        {value(peak.field)} <Place>{here}</Place>
-      </Fact>
-      <Fact title="Peak density">
-        {value(peak.currentDensity)} <Place>{there}</Place>
-      </Fact>
+      <Fact title="Peak field">{fact(peak.field, peak.position.text)}</Fact>
+      <Fact title="Peak density">{fact(peak.currentDensity, peak.currentDensityPosition.text)}</Fact>
     </>
   );
 }

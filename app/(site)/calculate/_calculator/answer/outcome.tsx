@@ -13,7 +13,7 @@ interface OutcomeProps {
   readonly className: string;
 }
 
-/** The answer with what belongs beside the number: verdict, trouble, facts, cautions. */
+/** The answer with what must stand at the number: its verdict, or why there is none. */
 export function Outcome({ answer, elsewhere, className }: OutcomeProps) {
   const { result, stale, trouble, retry } = answer;
   return (
@@ -28,8 +28,18 @@ export function Outcome({ answer, elsewhere, className }: OutcomeProps) {
           retry={retry}
         />
       ) : null}
-      {result ? <Facts result={result} /> : null}
-      {result ? <Cautions cautions={result.cautions} /> : null}
+    </section>
+  );
+}
+
+/** What the answer tells beside the number: operating point, peak, material, and its cautions. */
+export function Particulars({ answer, className }: Pick<OutcomeProps, "answer" | "className">) {
+  const { result } = answer;
+  if (!result) return null;
+  return (
+    <section aria-label="Particulars of the answer" className={`grid gap-1.5 ${className}`}>
+      <Facts result={result} />
+      <Cautions cautions={result.cautions} />
     </section>
   );
 }
