@@ -10,6 +10,7 @@ export const PAGES = [
   "/docs/design",
   "/docs/problems",
   "/docs/problems/invalid-input",
+  "/docs/accuracy",
   "/docs/changelog",
   "/no-such-page",
 ] as const;

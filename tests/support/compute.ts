@@ -1,4 +1,5 @@
 /** Short ways to compute, and to be refused, in tests of the engine. */
+import { note } from "./accuracy";
 import {
   computeResistance,
   InputError,
@@ -44,5 +45,5 @@ export function graded(
 
 /** Relative difference of a number from what was expected. */
 export function deviation(found: number, expected: number | string): number {
-  return Math.abs(found / Number(expected) - 1);
+  return note(Math.abs(found / Number(expected) - 1));
 }

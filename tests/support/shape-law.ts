@@ -4,6 +4,7 @@ import { readFileSync } from "node:fs";
 import { findShape } from "@/lib/engine/shape/catalogue";
 import type { Dimensions, Factor, FlowTubes, Resolved, Shape } from "@/lib/engine/shape/define-shape";
 import { resolveDimensions } from "@/lib/engine/shape/resolve-dimensions";
+import { note } from "./accuracy";
 
 export type Given = Readonly<Record<string, number | string>>;
 
@@ -49,7 +50,7 @@ export function tubes(id: string, given: Given): FlowTubes {
 
 /** Relative deviation of a double from a number of many digits. */
 export function deviationFrom(found: number, expected: Decimal | string): number {
-  return exact(found).div(expected).minus(1).abs().toNumber();
+  return note(exact(found).div(expected).minus(1).abs().toNumber());
 }
 
 interface ReferenceValue {

@@ -15,6 +15,11 @@ const PAGES = [
     text: "What each refusal means and what to do about it. Every error answer links to its page.",
   },
   {
+    href: "/docs/accuracy",
+    title: "Accuracy",
+    text: "How far the engine strays from numbers outside of it, group by group, written from the tests' own results.",
+  },
+  {
     href: "/docs/changelog",
     title: "Changelog",
     text: "What each version brought, and every change of a number by more than its bounds.",
