@@ -7,6 +7,8 @@ import {
   fieldLines,
   type FieldRequest,
   type FieldResult,
+  formatQuantity,
+  type PlotText,
   plotSvg,
   sampleLine,
 } from "@/lib/engine";
@@ -106,6 +108,34 @@ export const readFieldMap = defineOperation({
   },
 });
 
+/** The bracket with as many digits as tell its ends apart, rounded outward. */
+function bracketText({ lower, upper }: { lower: number; upper: number | null }): string {
+  if (upper === null) return `above ${formatQuantity(lower, "ohm")}`;
+  const digits = Math.min(15, Math.max(3, Math.ceil(-Math.log10((upper - lower) / upper)) + 2));
+  const step = 10 ** (Math.floor(Math.log10(upper)) + 1 - digits);
+  const [low, high] = [Math.floor(lower / step) * step, Math.ceil(upper / step) * step];
+  return `${formatQuantity(low, "ohm", { digits })} … ${formatQuantity(high, "ohm", { digits })}`;
+}
+
+/** What the picture says: resistance and bounds, or for three terminals and more those of the pair that it shows. */
+export function plotTextOf(
+  { resistance, squares, pairs }: FieldResult,
+  { between }: FieldMap,
+  names: readonly string[],
+  unit: string,
+): PlotText {
+  const [from, to] = between.map((k) => names[k]);
+  const pair = pairs?.find(({ between: [a, b] }) => a === from && b === to)?.floating;
+  const shown = resistance ?? pair;
+  const title = shown ? `R = ${shown.text}${squares ? ` = ${squares.text}` : ""}` : `From ${from} to ${to}`;
+  const bracket = shown ? `${bracketText(shown)}, ${shown.proved ? "proved" : "estimated"}.` : "";
+  const short = (name: string) => (name.length > 24 ? `${name.slice(0, 23)}…` : name);
+  const subtitle = resistance
+    ? bracket
+    : `From ${short(from)} to ${short(to)}, the others open. ${bracket}`.trim();
+  return { title, subtitle, terminalNames: names, unit };
+}
+
 export const readFieldPlot = defineOperation({
   id: "readFieldPlot",
   method: "GET",
@@ -127,14 +157,7 @@ export const readFieldPlot = defineOperation({
   examples: [...notReady],
   handler: async ({ path }, context) => {
     const { map, request, result, names } = await solved(context, path.id);
-    const { resistance, squares } = result;
-    const title = resistance
-      ? `R = ${resistance.text}${squares ? ` = ${squares.text}` : ""}`
-      : `From ${names[map.between[0]]} to ${names[map.between[1]]}`;
-    const subtitle = resistance
-      ? `${resistance.lower} … ${resistance.upper} ohm, ${resistance.proved ? "proved" : "estimated"} by two field solutions.`
-      : "All other terminals carry no current.";
-    const text = plotSvg(map, { title, subtitle, terminalNames: names, unit: request.outline?.unit ?? "m" });
+    const text = plotSvg(map, plotTextOf(result, map, names, request.outline?.unit ?? "m"));
     return { status: 200, content: { kind: "text", text, mediaType: "image/svg+xml" } };
   },
 });

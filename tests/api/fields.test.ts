@@ -123,6 +123,8 @@ describe("POST /fields 200", () => {
       bounded(floating);
       bounded(grounded);
       expect(floating.value).toBeLessThan(grounded.value);
+      for (const found of [floating, grounded])
+        expect(found).toMatchObject({ unit: "ohm", boundsBasis: "energy", proved: true });
     }
     // A floating tap can only lower the resistance of the bare strip.
     expect(result.pairs[0].floating.value).toBeLessThan(5);

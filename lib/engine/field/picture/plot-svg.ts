@@ -6,6 +6,7 @@ import { densityRamp } from "./color-ramp";
 import { fieldLines } from "./contours";
 import type { FieldMap } from "./field-map";
 import { densityRaster, type DensityRaster } from "./raster";
+import { placeLabel, TERMINAL_COLOURS } from "./terminal-label";
 
 export interface PlotText {
   /** First line, such as "R = 327.94 Ω". */
@@ -19,13 +20,16 @@ export interface PlotText {
 
 const WIDTH = 960;
 const MARGIN = 56;
-const HEAD = 76;
-const FOOT = 108;
+const HEAD = 100;
+const FOOT = 124;
 /** Tallest and flattest drawing, as height over width; longer ones are fitted into the frame. */
 const TALLEST = 1;
 const FLATTEST = 0.22;
 const BANDS = 9;
 const LINES = 20;
+/** Shares of voltage and current that lines may cut, and how near they may come to each other on average, px. */
+const SHARES = [LINES, 10, 5, 4, 2];
+const LEAST_APART = 4;
 /** Densities above this share of the raster's cells are one colour: a corner would swallow the scale. */
 const TOP_SHARE = 0.985;
 
@@ -50,22 +54,23 @@ export function plotSvg(map: FieldMap, text: PlotText): string {
   const outline = rings.map((ring) => path(ring, true)).join("");
   const raster = densityRaster(map, 200);
   const bands = densityBands(raster);
-  const lines = fieldLines(map, LINES, LINES);
+  const { lines, voltages, currents } = legibleLines(map, scale ** 2 * areaOf(rings), scale);
   const equipotentials = lines.equipotentials
     .flatMap((level) => level.lines.map((line) => path(line)))
     .join("");
   const streamlines = lines.streamlines.map((line) => path(line)).join("");
   const total = HEAD + height + FOOT;
+  const frame = { left: MARGIN, right: WIDTH - MARGIN };
   const terminals = pieces.map(({ terminal, line }) => {
-    const high = terminal === map.between[0];
+    const role = ["high", "low"][map.between.indexOf(terminal)] as "high" | "low" | undefined;
+    const colour = TERMINAL_COLOURS[role ?? "open"];
     const [x, y] = middleOf(line);
-    const colour = high ? "#9c4a1f" : "#1f6f62";
-    const anchor = px(x) < WIDTH / 2 ? "start" : "end";
-    const dx = px(x) < WIDTH / 2 ? 10 : -10;
-    return (
-      `<path d="${path(line)}" fill="none" stroke="${colour}" stroke-width="6" stroke-linecap="round"/>` +
-      `<text x="${n(px(x) + dx)}" y="${n(py(y) + 5)}" text-anchor="${anchor}" class="name" fill="${colour}">${escape(text.terminalNames[terminal] ?? "")}</text>`
-    );
+    const shown = line.map((value, k) => (k % 2 === 0 ? px(value) : py(value)));
+    const label = placeLabel(shown, [px(x), py(y)], text.terminalNames[terminal] ?? "", frame);
+    return {
+      bar: `<path d="${path(line)}" fill="none" stroke="${colour}" stroke-width="6" stroke-linecap="round"/>`,
+      name: `<text x="${n(label.x)}" y="${n(label.y)}" text-anchor="${label.anchor}" class="name" style="fill:${colour}">${escape(label.text)}</text>`,
+    };
   });
   const axis = map.axisymmetric
     ? `<path d="M${n(px(0))} ${n(top)}V${n(top + scale * (box.maxY - box.minY))}" stroke="#566067" stroke-dasharray="14 4 3 4"/>`
@@ -73,8 +78,8 @@ export function plotSvg(map: FieldMap, text: PlotText): string {
   return [
     `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${WIDTH} ${n(total)}" width="${WIDTH}" height="${n(total)}" role="img" aria-labelledby="t d">`,
     `<title id="t">${escape(text.title)}</title>`,
-    `<desc id="d">${escape(text.subtitle)} ${LINES - 1} equipotentials and ${LINES} stream lines over the current density.</desc>`,
-    `<style>text{font:14px "Spline Sans",system-ui,sans-serif;fill:#1b2226}.title{font-size:22px;font-weight:600}.soft{fill:#566067}.name{font-weight:600;paint-order:stroke;stroke:#faf8f3;stroke-width:4px}</style>`,
+    `<desc id="d">${escape(text.subtitle)} ${voltages - 1} equipotentials and ${currents} equal shares of the current over the current density.</desc>`,
+    `<style>text{font:14px "Spline Sans",system-ui,sans-serif;fill:#1b2226}.title{font-size:22px;font-weight:600}.soft{fill:#566067}.name{font-weight:600;paint-order:stroke;stroke:#faf8f3;stroke-width:5px}</style>`,
     `<rect width="${WIDTH}" height="${n(total)}" fill="#faf8f3"/>`,
     `<text x="${MARGIN}" y="34" class="title">${escape(text.title)}</text>`,
     `<text x="${MARGIN}" y="57" class="soft">${escape(text.subtitle)}</text>`,
@@ -90,11 +95,47 @@ export function plotSvg(map: FieldMap, text: PlotText): string {
     `</g>`,
     `<path d="${outline}" fill="none" stroke="#1b2226" stroke-width="1.5" stroke-linejoin="round"/>`,
     axis,
-    ...terminals,
+    ...terminals.map(({ bar }) => bar),
+    ...terminals.map(({ name }) => name),
     scaleBar(scale, total, text.unit),
-    legend(bands, total, map),
+    legend(
+      bands,
+      total,
+      map,
+      `solid: equipotentials, ${100 / voltages} % of the voltage apart · dashed: stream lines, ${100 / currents} % of the current apart`,
+    ),
     `</svg>`,
   ].join("\n");
+}
+
+/** As many lines as keep apart from each other: in a long narrow conductor twenty stream lines are one stripe. */
+function legibleLines(map: FieldMap, areaPx: number, scale: number) {
+  const lines = fieldLines(map, LINES, LINES);
+  const lengthOf = (all: readonly (readonly number[])[]): number => {
+    let sum = 0;
+    for (const line of all)
+      for (let k = 2; k < line.length; k += 2)
+        sum += Math.hypot(line[k] - line[k - 2], line[k + 1] - line[k - 1]);
+    return sum * scale;
+  };
+  const allowed = (length: number): number =>
+    SHARES.find((shares) => (areaPx / length) * (LINES / shares) >= LEAST_APART) ?? 2;
+  const voltages = allowed(lengthOf(lines.equipotentials.flatMap(({ lines: parts }) => parts)));
+  const currents = allowed(lengthOf(lines.streamlines));
+  const enough = voltages === LINES && currents === LINES;
+  return { lines: enough ? lines : fieldLines(map, voltages, currents), voltages, currents };
+}
+
+/** Area of the conductor: the rings run with it on their left. */
+function areaOf(rings: readonly number[][]): number {
+  let twice = 0;
+  for (const ring of rings) {
+    for (let k = 0; k < ring.length; k += 2) {
+      const next = (k + 2) % ring.length;
+      twice += ring[k] * ring[next + 1] - ring[next] * ring[k + 1];
+    }
+  }
+  return Math.abs(twice) / 2;
 }
 
 interface Box {
@@ -209,11 +250,19 @@ function scaleBar(scale: number, total: number, unit: string): string {
   const width = length * scale;
   return (
     `<path d="M${MARGIN} ${n(y - 5)}v10m0 -5h${n(width)}m0 -5v10" stroke="#1b2226" fill="none"/>` +
-    `<text x="${MARGIN}" y="${n(y + 24)}">${Number(length.toPrecision(3))}\u2009${escape(unit)}</text>`
+    `<text x="${MARGIN}" y="${n(y + 24)}">${plain(length)}\u2009${escape(unit.replace(/^u/, "µ"))}</text>`
   );
 }
 
-function legend(bands: Bands, total: number, map: FieldMap): string {
+/** 1, 2 or 5 times a power of ten, without rows of zeros. */
+function plain(length: number): string {
+  const power = Math.floor(Math.log10(length) + 1e-9);
+  if (power >= -3 && power < 5) return String(Number(length.toPrecision(3)));
+  const digits = [...String(Math.abs(power))].map((digit) => "⁰¹²³⁴⁵⁶⁷⁸⁹"[Number(digit)]).join("");
+  return `${Math.round(length / 10 ** power)}×10${power < 0 ? "⁻" : ""}${digits}`;
+}
+
+function legend(bands: Bands, total: number, map: FieldMap, lines: string): string {
   const x = WIDTH - MARGIN - 360;
   const y = total - 76;
   const width = 360 / BANDS;
@@ -228,7 +277,7 @@ function legend(bands: Bands, total: number, map: FieldMap): string {
     `<rect x="${n(x)}" y="${n(y)}" width="360" height="14" fill="none" stroke="#857f73"/>`,
     `<text x="${n(x)}" y="${n(y + 32)}">0</text>`,
     `<text x="${n(x + 360)}" y="${n(y + 32)}" text-anchor="end">${escape(formatQuantity(top, unit, { digits: 3 }))} and more, at one volt</text>`,
-    `<text x="${n(x + 360)}" y="${n(y + 54)}" text-anchor="end" class="soft">solid: equipotentials, ${100 / LINES} % of the voltage apart · dashed: stream lines, ${100 / LINES} % of the current apart</text>`,
+    `<text x="${n(x + 360)}" y="${n(y + 54)}" text-anchor="end" class="soft">${lines}</text>`,
   ].join("\n");
 }
 

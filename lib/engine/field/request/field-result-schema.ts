@@ -65,6 +65,8 @@ const pairResistanceSchema = z.object({
   text: z.string(),
   lower: plain("Lower bound in ohms."),
   upper: z.number().nullable().meta({ description: "Upper bound in ohms; null where there is none." }),
+  boundsBasis: z.enum(["energy", "energy-quadrature"]),
+  proved: z.boolean(),
 });
 
 export const fieldResultSchema = z

@@ -104,20 +104,22 @@ function addMatrix(result: FieldResult, prepared: PreparedField, solution: Field
   };
   result.pairs = (solution.pairs ?? []).map(({ between, floating, grounded }) => ({
     between: [names[between[0]], names[between[1]]],
-    floating: pairResistance(widened(floating, mediumError)),
-    grounded: pairResistance(widened(grounded, mediumError)),
+    floating: pairResistance(widened(floating, mediumError), solution),
+    grounded: pairResistance(widened(grounded, mediumError), solution),
   }));
 }
 
-function pairResistance({
-  value,
-  lower,
-  upper,
-}: BoundedValue): NonNullable<FieldResult["pairs"]>[number]["floating"] {
+function pairResistance(
+  { value, lower, upper }: BoundedValue,
+  { boundsBasis, proved }: FieldSolution,
+): NonNullable<FieldResult["pairs"]>[number]["floating"] {
+  const unit = "ohm";
   if (Number.isFinite(upper)) {
-    return { value, unit: "ohm", text: formatQuantity(value, "ohm", { lower, upper }), lower, upper };
+    const text = formatQuantity(value, unit, { lower, upper });
+    return { value, unit, text, lower, upper, boundsBasis, proved };
   }
-  return { value: null, unit: "ohm", text: `above ${formatQuantity(lower, "ohm")}`, lower, upper: null };
+  const text = `above ${formatQuantity(lower, unit)}`;
+  return { value: null, unit, text, lower, upper: null, boundsBasis, proved };
 }
 
 /** The bracket on the way to the answer, widened as the answer is, so that it never lies inside a later one. */
