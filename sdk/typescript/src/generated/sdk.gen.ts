@@ -125,7 +125,7 @@ export const readOutline = <ThrowOnError extends boolean = true>(options: Option
 /**
  * Solve the field on an outline
  *
- * From any outline, its terminals and a medium to a resistance between a lower and an upper bound from two independent field solutions. Everything about the outline, the terminals and the medium is checked at once; then the solution runs as a job. `Prefer: wait=N` waits up to N seconds (at most 30) for its end: 200 if it is ready, else 202 with `Location`. It counts against the month by its unknowns: 1 computation up to 20,000, 5 up to 100,000, 20 up to 500,000; the most is reserved before, the rest given back at the end. Needs the scope `field`.
+ * From any outline, its terminals and a medium to a resistance between a lower and an upper bound from two independent field solutions. Everything about the outline, the terminals and the medium is checked at once; then the solution runs as a job. `Prefer: wait=N` waits up to N seconds (at most 30) for its end: 200 if it is ready, else 202 with `Location`. It counts against the month by its unknowns: 1 computation up to 20,000 unknowns, 5 computations up to 100,000 unknowns, 20 computations up to 500,000 unknowns; the most is reserved before, the rest given back at the end. One that is cancelled, refused or fails costs nothing. Needs the scope `field`.
  */
 export const solveField = <ThrowOnError extends boolean = true>(options: Options<SolveFieldData, ThrowOnError>) => (options.client ?? client).post<SolveFieldResponses, SolveFieldErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',
@@ -397,7 +397,7 @@ export const relabelRecord = <ThrowOnError extends boolean = true>(options: Opti
 /**
  * Replay a record
  *
- * Computes the record again with today's engine and the material versions it pinned, and shows the drift. Stores nothing; costs one computation. Needs the scope `compute`.
+ * Computes the record again with today's engine and the material versions it pinned, and shows the drift. It stores no record. A resistance costs one computation. A field solution is answered, and costs, as `POST /fields` does: `Prefer: wait=N` waits for its end, 202 has its `Location`, and `replay` in it shows the drift once it is finished; reading it later takes the scope `field`. Needs the scope `compute`.
  */
 export const replayRecord = <ThrowOnError extends boolean = true>(options: Options<ReplayRecordData, ThrowOnError>) => (options.client ?? client).post<ReplayRecordResponses, ReplayRecordErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',

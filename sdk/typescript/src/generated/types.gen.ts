@@ -2272,19 +2272,19 @@ export type SpheroidRequest = {
      */
     dimensions: {
         /**
-         * Polar diameter (d_p). Length along the axis of revolution. A bare number is in m; a text carries its unit.
+         * Polar diameter (dₚ). Length along the axis of revolution. A bare number is in m; a text carries its unit.
          */
         polarDiameter?: number | string;
         /**
-         * Polar radius (d_p/2). Length along the axis of revolution. A bare number is in m; a text carries its unit.
+         * Polar radius (dₚ/2). Length along the axis of revolution. A bare number is in m; a text carries its unit.
          */
         polarRadius?: number | string;
         /**
-         * Equatorial diameter (d_e). Diameter across the axis of revolution. A bare number is in m; a text carries its unit.
+         * Equatorial diameter (dₑ). Diameter across the axis of revolution. A bare number is in m; a text carries its unit.
          */
         equatorialDiameter?: number | string;
         /**
-         * Equatorial radius (d_e/2). Radius across the axis of revolution. A bare number is in m; a text carries its unit.
+         * Equatorial radius (dₑ/2). Radius across the axis of revolution. A bare number is in m; a text carries its unit.
          */
         equatorialRadius?: number | string;
         /**
@@ -3412,6 +3412,278 @@ export type Field = {
         id: string;
         url: string;
     };
+    /**
+     * For the replay of a record: what it repeats.
+     */
+    replay?: {
+        record: {
+            id: string;
+            url: string;
+        };
+        /**
+         * What the record holds.
+         */
+        before: {
+            /**
+             * Between the two terminals; left out for three and more.
+             */
+            resistance?: {
+                /**
+                 * Resistance in ohms; lower ≤ value ≤ upper.
+                 */
+                value: number;
+                unit: 'ohm';
+                /**
+                 * The value for people, rounded as its bounds allow.
+                 */
+                text: string;
+                /**
+                 * Lower bound in ohms, below the upper one always.
+                 */
+                lower: number;
+                /**
+                 * Upper bound in ohms.
+                 */
+                upper: number;
+                /**
+                 * Where the bounds come from: rounding (closed form or converged series), quadrature (error estimate), rayleigh (conducting sheets and insulating walls), formula-accuracy (stated accuracy of a published formula), energy (two field solutions), energy-quadrature (the same with estimated integrals).
+                 */
+                boundsBasis: 'rounding' | 'quadrature' | 'rayleigh' | 'formula-accuracy' | 'energy' | 'energy-quadrature';
+                /**
+                 * Whether the bounds are proved for the stated problem.
+                 */
+                proved: boolean;
+            };
+            /**
+             * The resistance over the sheet resistance, for a uniform sheet.
+             */
+            squares?: {
+                /**
+                 * Resistance in squares; lower ≤ value ≤ upper.
+                 */
+                value: number;
+                unit: 'square';
+                text: string;
+                lower: number;
+                upper: number;
+            };
+            /**
+             * For three terminals and more: the current into terminal i in amperes for one volt at terminal j, all others at zero.
+             */
+            conductance?: Array<Array<number>>;
+            /**
+             * Bounds of each entry of `conductance`, in siemens.
+             */
+            conductanceBounds?: {
+                lower: Array<Array<number>>;
+                upper: Array<Array<number>>;
+            };
+            /**
+             * For three terminals and more: each pair.
+             */
+            pairs?: Array<{
+                /**
+                 * Names of two terminals.
+                 */
+                between: [
+                    string,
+                    string
+                ];
+                /**
+                 * With the other terminals left open.
+                 */
+                floating: {
+                    /**
+                     * Resistance in ohms; null where the coupling could not be told from none.
+                     */
+                    value: number | null;
+                    unit: 'ohm';
+                    text: string;
+                    /**
+                     * Lower bound in ohms.
+                     */
+                    lower: number;
+                    /**
+                     * Upper bound in ohms; null where there is none.
+                     */
+                    upper: number | null;
+                    boundsBasis: 'energy' | 'energy-quadrature';
+                    proved: boolean;
+                };
+                /**
+                 * One volt over the current that reaches the second, with all others at zero.
+                 */
+                grounded: {
+                    /**
+                     * Resistance in ohms; null where the coupling could not be told from none.
+                     */
+                    value: number | null;
+                    unit: 'ohm';
+                    text: string;
+                    /**
+                     * Lower bound in ohms.
+                     */
+                    lower: number;
+                    /**
+                     * Upper bound in ohms; null where there is none.
+                     */
+                    upper: number | null;
+                    boundsBasis: 'energy' | 'energy-quadrature';
+                    proved: boolean;
+                };
+            }>;
+            method: 'field';
+            /**
+             * The operating point; voltage, current and power only where the request gave one of them.
+             */
+            operating: {
+                /**
+                 * Temperature in °C at which the medium was evaluated.
+                 */
+                temperature: number;
+                /**
+                 * Voltage across the terminals in volts.
+                 */
+                voltage?: number;
+                /**
+                 * Current in amperes.
+                 */
+                current?: number;
+                /**
+                 * Power in watts.
+                 */
+                power?: number;
+            };
+            /**
+             * Where the current crowds.
+             */
+            peak?: {
+                /**
+                 * Whether the density grows without limit towards the position, as it does at re-entrant corners and where a terminal ends on an edge.
+                 */
+                unbounded: boolean;
+                /**
+                 * A place on the outline.
+                 */
+                position: {
+                    /**
+                     * In the outline's unit.
+                     */
+                    x: number;
+                    /**
+                     * In the outline's unit.
+                     */
+                    y: number;
+                    /**
+                     * The outline's unit.
+                     */
+                    unit: string;
+                    text: string;
+                };
+                /**
+                 * Distance from the position at which the values were read.
+                 */
+                distance: {
+                    value: number;
+                    unit: 'm';
+                    /**
+                     * The value for people.
+                     */
+                    text: string;
+                } | null;
+                /**
+                 * Field strength.
+                 */
+                field: {
+                    value: number;
+                    unit: 'V/m';
+                    /**
+                     * The value for people.
+                     */
+                    text: string;
+                };
+                /**
+                 * Current density: of the sheet in A/m, or in A/m² where the outline is axisymmetric.
+                 */
+                currentDensity: {
+                    value: number;
+                    unit: 'A/m' | 'A/m^2';
+                    /**
+                     * The value for people.
+                     */
+                    text: string;
+                };
+                /**
+                 * Whether the values hold at the operating point or at one volt.
+                 */
+                per: 'operating-point' | 'volt';
+                /**
+                 * The peak in one sentence.
+                 */
+                text: string;
+            };
+            /**
+             * Whether the requirement is met; decided only if the bounds lie wholly on one side.
+             */
+            verdict?: 'met' | 'not-met' | 'undecided';
+            /**
+             * The mesh of the last refinement.
+             */
+            mesh: {
+                triangles: number;
+                /**
+                 * Unknowns of one of the two solutions.
+                 */
+                unknowns: number;
+                refinements: number;
+            };
+            /**
+             * Which cap ended the work before the wanted accuracy, for a status `limited`.
+             */
+            limit?: string;
+            /**
+             * Time the solution took, in seconds.
+             */
+            seconds: number;
+            checks: Array<{
+                name: 'voltage-independence' | 'current-continuity' | 'second-route';
+                /**
+                 * false where the shape has nothing to compare; then `reason` says why.
+                 */
+                applies: boolean;
+                passed?: boolean;
+                /**
+                 * Relative deviation found.
+                 */
+                deviation?: number;
+                /**
+                 * Largest relative deviation that passes.
+                 */
+                tolerance?: number;
+                reason?: string;
+            }>;
+            /**
+             * What was put right on the outline, as sentences.
+             */
+            repairs: Array<string>;
+            cautions: Array<string>;
+            assumptions: Array<string>;
+            materials: Array<{
+                id: string;
+                version: number;
+                name: string;
+            }>;
+            engine: string;
+        };
+        /**
+         * (now − before)/before of the resistance, of the pair that changed most for three terminals and more; null until the solution is finished.
+         */
+        drift: number | null;
+        /**
+         * Whether values and bounds are the same to the last bit; null until it is finished.
+         */
+        identical: boolean | null;
+    };
 };
 
 /**
@@ -3501,6 +3773,8 @@ export type FieldResult = {
              * Upper bound in ohms; null where there is none.
              */
             upper: number | null;
+            boundsBasis: 'energy' | 'energy-quadrature';
+            proved: boolean;
         };
         /**
          * One volt over the current that reaches the second, with all others at zero.
@@ -3520,6 +3794,8 @@ export type FieldResult = {
              * Upper bound in ohms; null where there is none.
              */
             upper: number | null;
+            boundsBasis: 'energy' | 'energy-quadrature';
+            proved: boolean;
         };
     }>;
     method: 'field';
@@ -4330,7 +4606,7 @@ export type RecordPage = {
 export type Record = {
     id: string;
     /**
-     * What computed it: `resistance`.
+     * What computed it: `resistance` or `field`.
      */
     operation: string;
     label: string;
@@ -4349,7 +4625,10 @@ export type Record = {
     request: {
         [key: string]: unknown;
     };
-    result: ResistanceResult;
+    /**
+     * What came out: a ResistanceResult, or a FieldResult where `operation` is `field`.
+     */
+    result: ResistanceResult | FieldResult;
     /**
      * Materials that went in, with the versions that a replay uses.
      */
@@ -6867,9 +7146,13 @@ export type ReplayRecordError = ReplayRecordErrors[keyof ReplayRecordErrors];
 
 export type ReplayRecordResponses = {
     /**
-     * Before and now.
+     * Before and now; for a field solution, the finished solution with its `replay`.
      */
-    200: Replay;
+    200: Replay | Field;
+    /**
+     * A field solution on its way; ask for it at `Location`.
+     */
+    202: Field;
 };
 
 export type ReplayRecordResponse = ReplayRecordResponses[keyof ReplayRecordResponses];
