@@ -8,7 +8,8 @@ let server: TestServer;
 let key: string;
 let keyId: string;
 beforeAll(async () => {
-  server = await startServer();
+  // A data folder of its own: it counts and lists everything stored.
+  server = await startServer({});
   ({ key, id: keyId } = server.issue({ team: "earthing" }));
 });
 afterAll(() => server.stop());

@@ -69,9 +69,9 @@ describe("the start page's snippets", () => {
 
 describe("the README's settings", () => {
   it("are those that the service reads, with their defaults", () => {
-    const rows = [...README.matchAll(/^\| `([A-Z_]+)` +\| `?([^|`]*)`? +\|/gm)].map(([, name, value]) => [
+    const rows = [...README.matchAll(/^\| `([A-Z_]+)` +\| ([^|]*) \|/gm)].map(([, name, value]) => [
       name,
-      value.trim(),
+      value.trim().replaceAll("`", ""),
     ]);
     const config = readConfig({ RHOFORM_DATA: folder });
     expect(Object.fromEntries(rows)).toMatchObject({
