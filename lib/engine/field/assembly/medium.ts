@@ -43,17 +43,22 @@ export interface SampledMatrices {
   readonly sampled: SampledElements;
 }
 
-/** Degree of the rule above that of the squared gradient, for a smooth conductivity. */
+/** Degree of the rule above that of the squared gradient, for the energies of a smooth conductivity. */
 const EXTRA_DEGREE = 6;
+/** The same for the matrices: their errors only enter the energies squared, since fields stay admissible. */
+const EXTRA_DEGREE_OF_MATRICES = 3;
 /** The same for 1/x, at most; near the axis. */
 const MOST_EXTRA_DEGREE = 24;
 
 export interface ElementRule {
-  readonly degree: number;
+  /** Degree for the element's matrices. */
+  readonly matrixDegree: number;
+  /** Degree of the lower of the two rules for its energies. */
+  readonly energyDegree: number;
   readonly crowdedVertex: number;
 }
 
-/** The quadrature by which the matrices of triangle t are integrated. */
+/** The quadrature of triangle t. */
 export function elementRule(
   set: ElementSet,
   t: number,
@@ -61,18 +66,28 @@ export function elementRule(
   axis: AxisEdges | null,
 ): ElementRule {
   const gradients = 2 * set.layouts[t].order - 2;
-  if (!revolution) return { degree: gradients + EXTRA_DEGREE, crowdedVertex: 2 };
+  if (!revolution) {
+    return {
+      matrixDegree: gradients + EXTRA_DEGREE_OF_MATRICES,
+      energyDegree: gradients + EXTRA_DEGREE,
+      crowdedVertex: 2,
+    };
+  }
   const { xy, triangles } = set.mesh;
   const [a, b, c] = [0, 1, 2].map((i) => xy[2 * triangles[3 * t + i]]);
   const near = Math.min(a, b, c);
   const far = Math.max(a, b, c);
   const touches = axis ? axisVertexOf(set, axis, t) : -1;
-  if (near === 0) return { degree: gradients + MOST_EXTRA_DEGREE / 2, crowdedVertex: Math.max(0, touches) };
+  const both = (degree: number): Omit<ElementRule, "crowdedVertex"> => ({
+    matrixDegree: degree,
+    energyDegree: degree,
+  });
+  if (near === 0) return { ...both(gradients + MOST_EXTRA_DEGREE / 2), crowdedVertex: Math.max(0, touches) };
   // Polynomials approach 1/x on [near, far] like rho^-n; 27.6 is the logarithm of 1e12.
   const kappa = (far + near) / (far - near);
   const rho = kappa + Math.sqrt(kappa * kappa - 1);
   const extra = Math.min(MOST_EXTRA_DEGREE, Math.max(EXTRA_DEGREE, Math.ceil(27.6 / Math.log(rho))));
-  return { degree: gradients + extra, crowdedVertex: 2 };
+  return { ...both(gradients + extra), crowdedVertex: 2 };
 }
 
 /** Conductivity at the points of a rule in a triangle; throws if one is not positive. */
@@ -133,7 +148,7 @@ export function sampleElements(
     if (!sigma) continue;
     const layout = set.layouts[t];
     const rule = elementRule(set, t, revolution, axis);
-    const table = sampleTable(rule.degree, rule.crowdedVertex);
+    const table = sampleTable(rule.matrixDegree, rule.crowdedVertex);
     const { count, xi, eta } = table.rule;
     const samples = new Float64Array(count);
     const corner = cornerAndEdges(set, t);

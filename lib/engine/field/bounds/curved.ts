@@ -78,7 +78,9 @@ function solveRole(
   const { outline, medium, terminalCount, limits } = run;
   const onProgress = (progress: AdaptiveProgress): void => {
     best.narrow(role, progress);
-    run.onProgress?.({ ...progress, ...best.bracket });
+    // Until both polygons have been solved once there is only one side.
+    if (best.bracket.lower > 0 && best.bracket.upper < Infinity)
+      run.onProgress?.({ ...progress, ...best.bracket });
   };
   const domain = buildDomain(outline, role, chords);
   return solveDomain({ domain, medium, terminalCount, accuracy, limits, onProgress });

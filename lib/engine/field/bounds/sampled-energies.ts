@@ -23,9 +23,16 @@ export interface SampledEnergies {
   readonly gap: Float64Array;
   /** Mean conductivity at the points, for the look at the solution's smoothness. */
   sigma: number;
+  /** Room for the values at the points: conductivity, and both components of both functions for each field. */
+  readonly samples: Float64Array;
+  readonly values: readonly [Float64Array, Float64Array, Float64Array, Float64Array][];
 }
 
+/** Most points of a rule. */
+const MOST_POINTS = 1024;
+
 export function makeSampledEnergies(fields: number): SampledEnergies {
+  const room = (): Float64Array => new Float64Array(MOST_POINTS);
   const square = (): Float64Array => new Float64Array(fields * fields);
   return {
     potential: square(),
@@ -34,6 +41,8 @@ export function makeSampledEnergies(fields: number): SampledEnergies {
     streamLow: square(),
     gap: new Float64Array(fields),
     sigma: 1,
+    samples: new Float64Array(MOST_POINTS),
+    values: Array.from({ length: fields }, () => [room(), room(), room(), room()]),
   };
 }
 
@@ -46,21 +55,11 @@ export function sampleEnergies(
   s: readonly ElementField[],
   out: SampledEnergies,
 ): void {
-  const { degree, crowdedVertex } = elementRule(set, t, sampled.revolution, sampled.axis);
-  integrate(
-    set,
-    sampled,
-    t,
-    sampleTable(degree, crowdedVertex),
-    v,
-    s,
-    out.potentialLow,
-    out.streamLow,
-    null,
-    out,
-  );
+  const { energyDegree, crowdedVertex } = elementRule(set, t, sampled.revolution, sampled.axis);
+  const lower = sampleTable(energyDegree, crowdedVertex);
+  integrate(set, sampled, t, lower, v, s, out.potentialLow, out.streamLow, null, out);
   out.gap.fill(0);
-  const higher = sampleTable(degree + EXTRA_DEGREE, crowdedVertex);
+  const higher = sampleTable(energyDegree + EXTRA_DEGREE, crowdedVertex);
   integrate(set, sampled, t, higher, v, s, out.potential, out.stream, out.gap, out);
 }
 
@@ -80,46 +79,52 @@ function integrate(
   if (!sigma) throw new Error(`triangle ${t} has a constant conductivity`);
   const { modes } = set.layouts[t];
   const { count, weights, xi, eta } = table.rule;
-  const samples = new Float64Array(count);
+  const { samples } = out;
   sampleConductivity(sigma, xi, eta, count, cornerAndEdges(set, t), samples);
   const fields = v.length;
-  const vx = v.map((field) => valuesAt(field.p, modes, table.modes, count));
-  const vy = v.map((field) => valuesAt(field.q, modes, table.modes, count));
-  const jx = s.map((field) => valuesAt(field.q, modes, table.modes, count));
-  const jy = s.map((field) => valuesAt(field.p, modes, table.modes, count));
+  for (let a = 0; a < fields; a++) {
+    const [vx, vy, jx, jy] = out.values[a];
+    fillValues(v[a].p, modes, table.modes, count, vx);
+    fillValues(v[a].q, modes, table.modes, count, vy);
+    fillValues(s[a].q, modes, table.modes, count, jx);
+    fillValues(s[a].p, modes, table.modes, count, jy);
+  }
   let mean = 0;
   for (let q = 0; q < count; q++) mean += 2 * weights[q] * samples[q];
   out.sigma = mean;
   for (let a = 0; a < fields; a++) {
+    const [vx, vy, jx, jy] = out.values[a];
     for (let b = 0; b < fields; b++) {
+      const [ux, uy, kx, ky] = out.values[b];
       let ofV = 0;
       let ofJ = 0;
       for (let q = 0; q < count; q++) {
-        ofV += weights[q] * samples[q] * (vx[a][q] * vx[b][q] + vy[a][q] * vy[b][q]);
-        ofJ += (weights[q] / samples[q]) * (jx[a][q] * jx[b][q] + jy[a][q] * jy[b][q]);
+        ofV += weights[q] * samples[q] * (vx[q] * ux[q] + vy[q] * uy[q]);
+        ofJ += (weights[q] / samples[q]) * (jx[q] * kx[q] + jy[q] * ky[q]);
       }
       potential[a * fields + b] = ofV;
       stream[a * fields + b] = ofJ;
     }
     if (!gap) continue;
     for (let q = 0; q < count; q++) {
-      const dx = samples[q] * vx[a][q] - jx[a][q];
-      const dy = samples[q] * vy[a][q] + jy[a][q];
+      const dx = samples[q] * vx[q] - jx[q];
+      const dy = samples[q] * vy[q] + jy[q];
       gap[a] += (weights[q] / samples[q]) * (dx * dx + dy * dy);
     }
   }
 }
 
-function valuesAt(
+/** Values of Σ c_k ψ_k at the points of a table. */
+function fillValues(
   coefficients: Float64Array,
   modes: number,
   table: Float64Array,
   count: number,
-): Float64Array {
-  const values = new Float64Array(count);
+  out: Float64Array,
+): void {
+  out.fill(0, 0, count);
   for (let k = 0, at = 0; k < modes; k++) {
     const c = coefficients[k];
-    for (let q = 0; q < count; q++, at++) values[q] += c * table[at];
+    for (let q = 0; q < count; q++, at++) out[q] += c * table[at];
   }
-  return values;
 }
