@@ -21,7 +21,8 @@ export function readDecimal(text: string): Decimal | null {
   return {
     negative: sign === "-",
     digits: whole + fraction,
-    exponent: Number(exponent ?? "0") - fraction.length,
+    // Beyond a million nothing changes any more, and an exponent that needs one itself could not be written out again.
+    exponent: Math.max(-1e6, Math.min(1e6, Number(exponent ?? "0"))) - fraction.length,
   };
 }
 

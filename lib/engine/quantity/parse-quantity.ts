@@ -20,7 +20,8 @@ export interface QuantityOptions {
 const LONGEST_TEXT = 120;
 const ABSOLUTE_ZERO_C = -273.15;
 const TEXT = /^([+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*(.*)$/s;
-const AWG = /^(?:AWG\s*(\d{1,2}|[1-4]\/0)|(\d{1,2}|[1-4]\/0)\s*AWG)$/i;
+const AWG = /^(?:AWG\s*#?(\d{1,2}|0{3,4}|[1-4]\/0)|#?(\d{1,2}|0{3,4}|[1-4]\/0)\s*AWG)$/i;
+const MEANT_AS_AWG = /^AWG\b|\bAWG$/i;
 const FOIL = /^oz\s*\/\s*ft\s*(?:\^\s*)?2$/;
 const SUPERSCRIPTS = "⁰¹²³⁴⁵⁶⁷⁸⁹";
 
@@ -74,7 +75,8 @@ export function readQuantity(
   const decimal = readDecimal(match[1]);
   // "0.00393/K" is "0.00393 1/K".
   const unit = match[2].startsWith("/") ? `1${match[2]}` : match[2];
-  if (!decimal || (/^[\d.,'_]/.test(unit) && !/^1\s*\//.test(unit))) return refuse(misspeltNumber(text));
+  if (!decimal || (/^(?:[\d.,]|['_]\d)/.test(unit) && !/^1\s*\//.test(unit)))
+    return refuse(misspeltNumber(text));
   let value: number;
   if (unit === "") {
     value = scaleByPowerOfTen(decimal, 0);
@@ -135,6 +137,11 @@ function spellPowerOfTen(text: string): string {
 function readWithoutNumber(text: string, kind: QuantityKind, options: QuantityOptions): QuantityReading {
   const gauge = AWG.exec(text);
   if (gauge) return wireGauge(gauge[1] ?? gauge[2], kind, options);
+  if (MEANT_AS_AWG.test(text)) {
+    return refuse(
+      `"${shorten(text)}" is no wire gauge: a whole number to 56, or 1/0 to 4/0, such as "AWG 24".`,
+    );
+  }
   if (/^[+-]?(nan|inf|infinity|∞)\b/i.test(text) || text === "∞")
     return refuse(`must be finite, but is "${text}".`);
   if (/^[+-]?\.?[,'_\d]/.test(text)) return refuse(misspeltNumber(text));
@@ -160,12 +167,13 @@ function readGauge(
   return finish(scaleByRatio(decimal, { numerator: 343n, denominator: 1n, shift: -7 }), false, kind);
 }
 
-/** ASTM B258: d = 0.005 in · 92^((36 − n)/39); 1/0 to 4/0 are n = 0 to −3. */
+/** ASTM B258: d = 0.005 in · 92^((36 − n)/39); 1/0 to 4/0, or 0 to 0000, are n = 0 to −3. */
 function wireGauge(text: string, kind: QuantityKind, options: QuantityOptions): QuantityReading {
   if (kind.noun !== "a length" || options.gauge !== "wire") {
     return refuse(`"AWG ${text}" is the diameter of a wire, which this is not; give ${expected(kind)}.`);
   }
-  const number = text.endsWith("/0") ? 1 - Number(text[0]) : Number(text);
+  const zeros = text.endsWith("/0") ? Number(text[0]) : /^0+$/.test(text) ? text.length : 0;
+  const number = zeros > 0 ? 1 - zeros : Number(text);
   if (number > 56) return refuse(`"AWG ${text}" is beyond the gauges 4/0 to 56.`);
   return { ok: true, value: 0.000127 * Math.pow(92, (36 - number) / 39) };
 }

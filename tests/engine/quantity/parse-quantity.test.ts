@@ -207,3 +207,34 @@ describe("a quantity", () => {
     for (let i = 0; i < 5000; i++) expect(readQuantity(`1 unit${i}`, "length").ok).toBe(false);
   });
 });
+
+describe("wire gauges and far exponents", () => {
+  // ASTM B258: 1/0 is 0.3249 in, 2/0 0.3648 in, 4/0 0.46 in.
+  it.each([
+    ["AWG 0", 0.3249],
+    ["AWG 1/0", 0.3249],
+    ["AWG 00", 0.3648],
+    ["2/0 AWG", 0.3648],
+    ["AWG 0000", 0.46],
+    ["AWG 4/0", 0.46],
+    ["#10 AWG", 0.1019],
+  ])("reads %s", (text, inches) => {
+    const reading = readQuantity(text, "length", { gauge: "wire" });
+    expect(reading.ok && reading.value / 0.0254).toBeCloseTo(inches, 4);
+  });
+
+  it.each(["AWG 5/0", "AWG -1", "AWG 1.5", "AWG"])("says that %s is no gauge", (text) => {
+    expect(detail(text, "length", { gauge: "wire" })).toContain("is no wire gauge");
+  });
+
+  it("tells too small from too large whatever the exponent", () => {
+    expect(detail("1e-999999999999999999999 m", "length")).toContain("too small");
+    expect(detail("1e999999999999999999999 m", "length")).toContain("too large");
+    expect(readQuantity("0e999999999999999999999 V", "voltage")).toEqual({ ok: true, value: 0 });
+    expect(detail("1e-999999999999999999999 degF/ppm", "length")).toContain("must be a length");
+  });
+
+  it("blames the unit, not the number, for a quotation mark", () => {
+    expect(detail("1 '", "length")).toContain("unit");
+  });
+});
