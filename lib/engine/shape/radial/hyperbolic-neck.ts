@@ -22,6 +22,16 @@ function cosine(angle: number): number {
   return isPlane(angle) ? 0 : Math.cos(angle);
 }
 
+/**
+ * first, 10·first, 100·first … below the end: the integrand falls with the square of the distance, and over many
+ * decades at once an integration rule would see nothing of it.
+ */
+function decades(first: number, end: number): number[] {
+  const places: number[] = [];
+  for (let x = first; x < end; x *= 10) places.push(x);
+  return places;
+}
+
 /** Flow through a hyperboloid of one sheet: oblate spheroidal coordinates with focal radius c = a/sin β. */
 export const hyperbolicNeck = defineShape({
   id: "hyperbolic-neck",
@@ -78,7 +88,7 @@ export const hyperbolicNeck = defineShape({
           scale: (x) =>
             isPlane(openingAngle) ? sides : (sides * Math.hypot(x / focal, wall)) / Math.hypot(x / focal, 1),
           ...(isPlane(openingAngle) ? { unboundedAt: "unbounded at the rim of the hole" } : {}),
-          breaks: [0.1, 1, 10, 100, 1000].map((part) => part * focal).filter((x) => x < length),
+          breaks: decades(0.1 * focal, length),
           line: "on the wall, at the throat",
         },
         across: [],

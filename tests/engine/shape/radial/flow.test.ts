@@ -140,3 +140,16 @@ describe("peak", () => {
     expect(deviation(field.value ?? 0, String(expected))).toBeLessThan(1e-9);
   });
 });
+
+describe("hyperbolic-neck far longer than its throat", () => {
+  // The tail beyond 1000 focal radii carries 6e-4 of the whole; a rule that spans it at once sees nothing of it.
+  it.each([1e6, 1e12, 1e17, 1e30])("length %d throat radii: the integral is the closed form", (length) => {
+    for (const openingAngle of [1e-9, 45, 90]) {
+      const shape = { throatRadius: 1, openingAngle, length, sides: 2 };
+      const uniform = compute({ shape: "hyperbolic-neck", dimensions: shape, medium: { resistivity: 1 } });
+      const profile = { kind: "constant", value: 1 };
+      const integral = graded("hyperbolic-neck", shape, "level", "resistivity", profile);
+      expect(deviation(integral.resistance.value, uniform.resistance.value)).toBeLessThan(1e-10);
+    }
+  });
+});
