@@ -1,3 +1,4 @@
+import { InputError } from "../../failure";
 import { defineShape, type Factor } from "../define-shape";
 import { lengthDimension } from "../dimension";
 import { polyline, rectangle } from "../drawing";
@@ -9,7 +10,13 @@ import {
   REMOTE_EARTH,
 } from "./earthing-texts";
 import { groundLine, line, rodAt, rodArrows } from "./ground-drawing";
-import { equalSegments, gradedSegments, layeredRodResistance, type LayeredSoil } from "./layered-rod";
+import {
+  equalSegments,
+  gradedSegments,
+  layeredRodResistance,
+  type LayeredSoil,
+  type RodSegments,
+} from "./layered-rod";
 import { resistanceByImages } from "./layered-rod-images";
 import { rodCautions } from "./rod-validity";
 
@@ -139,8 +146,8 @@ export const earthRodLayered = defineShape({
 function layeredFactor(rod: Rod, soil: LayeredSoil): Factor {
   const { length, diameter, upperDepth } = rod;
   const a = diameter / 2;
-  const value = layeredRodResistance(a, soil, equalSegments(length, upperDepth));
-  const fine = layeredRodResistance(a, soil, gradedSegments(length, a, upperDepth));
+  const value = resolved(a, soil, equalSegments(length, upperDepth));
+  const fine = resolved(a, soil, gradedSegments(length, a, upperDepth));
   const least = Math.min(value, withEndFace(fine, rod, soil)) / (1 + fineError(rod, soil));
   const excess = value / least - 1;
   const slenderness = length / a;
@@ -166,6 +173,22 @@ function layeredFactor(rod: Rod, soil: LayeredSoil): Factor {
         : []),
     ],
   };
+}
+
+/** The rod's resistance; refuses one with parts so unlike in size that a double cannot tell them apart. */
+function resolved(radius: number, soil: LayeredSoil, segments: RodSegments): number {
+  try {
+    return layeredRodResistance(radius, soil, segments);
+  } catch (error) {
+    if (!(error instanceof RangeError)) throw error;
+    throw new InputError([
+      {
+        pointer: "#/dimensions/upperDepth",
+        detail:
+          "leaves a part of the rod in one layer that is too small beside the rest to be resolved; choose a depth that differs more from the rod's length, or a rod of ordinary proportions.",
+      },
+    ]);
+  }
 }
 
 /** What the finely divided rod itself can be wrong by. */

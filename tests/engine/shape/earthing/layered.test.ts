@@ -1,6 +1,7 @@
 /** The rod in two layers: check values, a second route by images, limits, ratios of 1e-4 to 1e4. */
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
+import { InputError } from "@/lib/engine";
 import { equalSegments, gradedSegments, layeredRodResistance } from "@/lib/engine/shape/earthing/layered-rod";
 import { resistanceByImages } from "@/lib/engine/shape/earthing/layered-rod-images";
 import { mediaFactor } from "../../../support/media-law";
@@ -198,5 +199,14 @@ describe("bounds", () => {
     expect(close.cautions?.join(" ")).toMatch(/near the lower bound/);
     const plain = mediaFactor("earth-rod-layered", { ...rod, upperDepth: 5 }, { upper: 100, lower: 300 });
     expect(plain.cautions).toEqual([]);
+  });
+});
+
+describe("proportions that doubles cannot resolve", () => {
+  it.each([
+    { length: 3.6e9, diameter: 7e-14, upperDepth: 1.5e-5, upper: 4, lower: 1.2e4 },
+    { length: 1.00000001, diameter: 1.0000000000001, upperDepth: 1.0000000000001, upper: 1.7, lower: 1 },
+  ])("refuses %j with a sentence, never an inner error", ({ upper, lower, ...shape }) => {
+    expect(() => mediaFactor("earth-rod-layered", shape, { upper, lower })).toThrow(InputError);
   });
 });
