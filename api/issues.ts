@@ -30,22 +30,51 @@ export function parameterComplaints(schema: z.ZodType, issues: readonly Issue[])
   }));
 }
 
+/** So many unknown members are told; whoever sends more has sent something else. */
+const MOST_UNKNOWN = 50;
+
 interface Found {
   readonly path: Path;
   readonly detail: string;
 }
 
 function flatten(schema: z.ZodType, issues: readonly Issue[], base: Path): Found[] {
+  // What has the wrong type is not told its length as well.
+  const mistyped = issues.filter(({ code }) => code === "invalid_type").map(({ path }) => pointer(path));
   return issues.flatMap((issue): Found[] => {
     const path = [...base, ...issue.path];
     if (issue.code === "unrecognized_keys") {
-      const known = membersAt(schema, issue.path);
-      return issue.keys.map((key) => ({ path: [...path, key], detail: unknownMember(key, known) }));
+      const known = base.length === 0 ? membersAt(schema, path) : [];
+      return issue.keys
+        .slice(0, MOST_UNKNOWN)
+        .map((key) => ({ path: [...path, key], detail: unknownMember(key, known) }));
     }
-    if (issue.code === "invalid_union" && issue.errors.length > 0)
-      return flatten(schema, closest(issue), path);
+    if (issue.code === "invalid_union" && issue.errors.length > 0) {
+      const wrong = discriminated(issue);
+      return wrong
+        ? [{ path: [...path, ...wrong.path], detail: wrong.detail }]
+        : flatten(schema, closest(issue), path);
+    }
+    if (issue.code.startsWith("too_") && mistyped.includes(pointer(issue.path))) return [];
     return [{ path, detail: sentence(issue) }];
   });
+}
+
+/** Where every alternative of a union names itself by one member and none bears the name given: all the names. */
+function discriminated(issue: Extract<Issue, { code: "invalid_union" }>): Found | undefined {
+  const named = issue.errors.map((branch) => branch.find(({ code }) => code === "invalid_value"));
+  const [first] = named;
+  if (!first || issue.errors.length < 2) return undefined;
+  const values: unknown[] = [];
+  for (const entry of named) {
+    if (entry?.code !== "invalid_value" || pointer(entry.path) !== pointer(first.path)) return undefined;
+    values.push(...entry.values);
+  }
+  const names = [...new Set(values)].map((value) => JSON.stringify(value)).join(", ");
+  return {
+    path: first.path,
+    detail: first.input === undefined ? "is required." : `must be one of ${names}.`,
+  };
 }
 
 export function unknownMember(name: string, known: readonly string[]): string {
@@ -59,8 +88,11 @@ export function unknownMember(name: string, known: readonly string[]): string {
 
 /** Of the alternatives of a union, the complaints of the one that the input came nearest to. */
 function closest(issue: Extract<Issue, { code: "invalid_union" }>): readonly Issue[] {
-  const distance = (branch: readonly Issue[]) =>
-    branch.some((entry) => entry.path.length === 0 && entry.code === "invalid_type") ? 1000 : branch.length;
+  const distance = (branch: readonly Issue[]) => {
+    if (branch.some((entry) => entry.path.length === 0 && entry.code === "invalid_type")) return 1000;
+    // An alternative that bears another name is not meant, however few members are wrong for it.
+    return branch.length + (branch.some(({ code }) => code === "invalid_value") ? 500 : 0);
+  };
   const [best] = [...issue.errors].sort((a, b) => distance(a) - distance(b));
   if (distance(best) < 1000) return best;
   const expected = issue.errors
@@ -97,9 +129,9 @@ function sentence(issue: Issue): string {
   switch (issue.code) {
     case "invalid_type":
       if (issue.input === undefined) return "is required.";
-      return issue.expected === "number" && typeof issue.input === "number"
-        ? "must be a finite number."
-        : `must be ${noun(issue.expected)}.`;
+      if (issue.expected !== "number" || typeof issue.input !== "number")
+        return `must be ${noun(issue.expected)}.`;
+      return Number.isNaN(issue.input) ? "must be a number." : "must be a finite number.";
     case "invalid_value":
       if (issue.input === undefined) return "is required.";
       return `must be one of ${issue.values.map((value) => JSON.stringify(value)).join(", ")}.`;

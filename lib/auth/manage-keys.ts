@@ -69,7 +69,7 @@ export function issueKey(db: Database, { teamId, settings, actor, now, largest, 
   const expiresAt = settings.expiresAt === undefined ? null : Date.parse(settings.expiresAt);
   if (expiresAt !== null && expiresAt <= now) {
     throw new Refusal("invalid-input", "The key would be over before it is issued.", {
-      errors: [{ pointer: "#/expiresAt", detail: "lies in the past" }],
+      errors: [{ pointer: "#/expiresAt", detail: "must lie in the future." }],
     });
   }
   const id = fixed?.id ?? newKeyId();
@@ -119,7 +119,7 @@ export function rotateKey(
     const view = keyView(row, now);
     if (view.state !== "active") {
       throw new Refusal("invalid-input", `The key is ${view.state}: issue a new one.`, {
-        errors: [{ pointer: "#", detail: `the key is ${view.state}` }],
+        errors: [{ pointer: "#", detail: `is for keys in use; this one is ${view.state}.` }],
       });
     }
     endSecrets(db, id, until);

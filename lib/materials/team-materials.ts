@@ -12,6 +12,7 @@ import { type Actor, appendActivity } from "../activity/append";
 import { randomText } from "../service/identifier";
 import { Refusal } from "../service/refusal";
 import { type MaterialChange, type MaterialView, type NewMaterial, newMaterialSchema } from "./input";
+import { requireSoundLaw } from "./sound-law";
 
 /** A row with what was checked when it was written. */
 export function materialOf(row: MaterialRow): Material {
@@ -78,6 +79,7 @@ export function createMaterial(
   { teamId, actor, now }: Write,
   input: NewMaterial,
 ): MaterialView {
+  requireSoundLaw(input);
   // Lower case, as ids of the library are: they travel in spreadsheet formulas and addresses.
   const id = `mat-${randomText(20).toLowerCase()}`;
   return transact(db, () => {
@@ -108,6 +110,7 @@ export function changeMaterial(
     requireVersion(before, from);
     const { id: _id, version: _version, owner: _owner, retiredAt: _retiredAt, ...facts } = before;
     const data = { ...facts, ...change };
+    requireSoundLaw(data);
     if (!insertNextVersion(db, id, before.version, { data, createdAt: now, createdBy: actor.name })) {
       throw conflict(before.version);
     }

@@ -246,3 +246,43 @@ describe("DELETE /materials/{id}", () => {
     expectProblem(await call(server, "delete", "/materials/mat-0", { key }), 404, "not-found");
   });
 });
+
+describe("a law that cannot be used", () => {
+  test.each([
+    ["#/resistivity", { resistivity: { ...ALLOY.resistivity, coefficient: -1 } }],
+    ["#/resistivity", { resistivity: { ...ALLOY.resistivity, coefficient: 1e300 } }],
+    ["#/resistivity/reference", { resistivity: { ...ALLOY.resistivity, reference: -300 } }],
+    ["#/range/from", { range: { from: -400, to: 20 } }],
+  ])("422 at %s", async (pointer, over) => {
+    const created = await create({ ...ALLOY, ...over });
+    expectProblem(created, 422, "invalid-input");
+    expect(places(created)).toEqual([pointer]);
+  });
+
+  test("422 for a change that would make it so", async () => {
+    const { body } = await create();
+    const changed = await call(server, "patch", `/materials/${body.id}`, {
+      key,
+      body: { resistivity: { ...ALLOY.resistivity, coefficient: -1 } },
+      headers: { "If-Match": '"1"' },
+    });
+    expectProblem(changed, 422, "invalid-input");
+    expect(places(changed)).toEqual(["#/resistivity"]);
+  });
+
+  test("an unknown model is told all the models, a known one its own members", async () => {
+    const unknown = await create({ ...ALLOY, resistivity: { model: "cubic" } });
+    expect(unknown.body.errors).toEqual([
+      {
+        pointer: "#/resistivity/model",
+        detail: 'must be one of "linear", "polynomial", "table", "constant", "silicon", "sea-water".',
+      },
+    ]);
+    const table = await create({ ...ALLOY, resistivity: { model: "table", temperatures: [0, 100] } });
+    expect(places(table)).toEqual([
+      "#/resistivity/quantity",
+      "#/resistivity/values",
+      "#/resistivity/interpolation",
+    ]);
+  });
+});
