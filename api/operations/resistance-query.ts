@@ -117,7 +117,8 @@ function parameterOf(pointer: string, origins: Map<string, string>): string {
   const known = origins.get(pointer);
   if (known) return known;
   const [place, ...path] = pointer.slice(2).split("/").map(decodeURIComponent);
-  if (place === "media") return path.join(".");
+  // What is wrong with a whole medium is told of the parameter that would have named its material.
+  if (place === "media") return path.length === 1 ? `${path[0]}.material` : path.join(".");
   if (place === "include") return "include";
   return path[0] ?? place;
 }

@@ -169,3 +169,12 @@ describe("errors in text form keep their status and are one line", () => {
     expect(Number(limited.headers["retry-after"])).toBeGreaterThan(0);
   });
 });
+
+describe("a medium that is not given", () => {
+  const wire = "clad-wire?length=1&coreDiameter=1mm&claddingThickness=0.1mm&core.material=copper-annealed";
+  test("is pointed at by the parameter that would name it", async () => {
+    const response = await get(wire);
+    expectProblem(response, 422, "invalid-input");
+    expect(response.body.errors).toEqual([{ parameter: "cladding.material", detail: "is required." }]);
+  });
+});

@@ -93,7 +93,10 @@ export function addZodIssues(issues: readonly z.core.$ZodIssue[], base: string, 
   for (const issue of issues) {
     const pointer = pointerTo(base, ...issue.path);
     if (issue.code === "unrecognized_keys") {
-      for (const key of issue.keys) problems.add(pointerTo(pointer, key), "is not a member known here.");
+      // So many are told; whoever sends more has sent something else.
+      for (const key of issue.keys.slice(0, 50)) {
+        problems.add(pointerTo(pointer, key), "is not a member known here.");
+      }
     } else problems.add(pointer, sentence(issue));
   }
 }
@@ -107,6 +110,8 @@ function sentence(issue: z.core.$ZodIssue): string {
     case "invalid_value":
       return `must be one of ${issue.values.map((value) => `"${String(value)}"`).join(", ")}.`;
     case "too_small":
+      if (issue.minimum === 1 && (issue.origin === "string" || issue.origin === "array"))
+        return "must not be empty.";
       return `must be at least ${String(issue.minimum)}${issue.origin === "string" ? " characters long" : issue.origin === "array" ? " entries long" : ""}.`;
     case "too_big":
       return `must be at most ${String(issue.maximum)}${issue.origin === "string" ? " characters long" : issue.origin === "array" ? " entries long" : ""}.`;

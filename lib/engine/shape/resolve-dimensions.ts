@@ -29,6 +29,9 @@ interface Group {
 const SMALLEST = { length: 1e-100, area: 1e-200, angle: 1e-100 } as const;
 const LARGEST = { length: 1e100, area: 1e200, angle: 1e100 } as const;
 
+/** So many unknown names are told; whoever sends more has sent something else. */
+const MOST_UNKNOWN = 50;
+
 interface Reader {
   readonly inputs: ReadonlyMap<string, Input>;
   readonly groups: readonly Group[];
@@ -69,11 +72,13 @@ export function readDimensions(
   const before = problems.list.length;
   const values: Record<string, number | string> = {};
   const used = new Map<Group, string>();
+  let unknown = 0;
   for (const name of Object.keys(given)) {
     const raw = given[name];
     if (raw === undefined) continue;
     const input = reader.inputs.get(name);
     if (!input) {
+      if (++unknown > MOST_UNKNOWN) continue;
       problems.add(
         pointerTo(pointer, name),
         `is no dimension of ${shape.id}; its dimensions are ${reader.names.join(", ")}.${suggestion(name, reader.names)}`,

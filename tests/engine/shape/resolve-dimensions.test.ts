@@ -193,3 +193,16 @@ describe("dimensions", () => {
     ]);
   });
 });
+
+describe("very many unknown names", () => {
+  it("are told up to fifty", () => {
+    const given = Object.fromEntries(Array.from({ length: 40_000 }, (_, i) => [`d${i}`, 1]));
+    try {
+      resolveDimensions(sample, given);
+      expect.unreachable();
+    } catch (error) {
+      const told = (error as InputError).errors.filter(({ detail }) => detail.includes("is no dimension"));
+      expect(told).toHaveLength(50);
+    }
+  });
+});
