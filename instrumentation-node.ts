@@ -5,13 +5,13 @@ import { closeSharedService, sharedService } from "@/lib/service/service";
 /** What the start script emits on the first signal. */
 const STOP_EVENT = "rhoform:stop";
 
-/** Opens and migrates the database, and sees to it that it is closed at the end. */
-export function openForRequests(): void {
+/** Opens and migrates the database, warms the threads, and sees to it that all of it is closed at the end. */
+export async function openForRequests(): Promise<void> {
   prepareIncomingRequests();
-  sharedService().fields.open();
   process.once("exit", closeSharedService);
   // Event streams and jobs end as soon as the server is told to stop, so that it can.
   process.once(STOP_EVENT, () => sharedService().fields.close());
+  await sharedService().fields.open();
 }
 
 /** Writes a failed page to the structured log; the path without its query, which may carry a key. */

@@ -5,7 +5,7 @@ export async function register(): Promise<void> {
   // Written this way round, bundles for other runtimes leave the import out.
   if (process.env.NEXT_RUNTIME === "nodejs") {
     const { openForRequests } = await import("./instrumentation-node");
-    openForRequests();
+    await openForRequests();
   }
 }
 

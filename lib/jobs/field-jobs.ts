@@ -12,7 +12,7 @@ import {
   updateOpenField,
 } from "@/db/queries/fields";
 import { addComputations } from "@/db/queries/usage";
-import { CheckFailure, type Material } from "@/lib/engine";
+import { CheckFailure, type Material, prepareField } from "@/lib/engine";
 import type { Limiter } from "../limits/limiter";
 import { monthBucket } from "../limits/quota";
 import { storeRecord } from "../records/records";
@@ -21,6 +21,7 @@ import type { Log } from "../service/log";
 import { fieldCost, MOST_UNKNOWNS } from "./field-cost";
 import { FieldFiles } from "./field-files";
 import type { FieldOutcome } from "./field-task";
+import { WARMING_BODY } from "./warming-body";
 import type { RunningTask, TaskRunner } from "./worker-pool";
 
 /** How long a claim holds without being extended, and how often it is, ms. */
@@ -28,6 +29,11 @@ const CLAIM_MS = 20_000;
 const BEAT_MS = 5_000;
 /** Progress goes to the database at most so often, ms; listeners of this process get all of it. */
 const KEEP_EVERY_MS = 300;
+
+/** How long a start waits for warm threads at most, ms. */
+const PATIENCE_MS = 15_000;
+/** How often this thread reads a small request at the start, until the code that checks outlines is compiled. */
+const WARM_READINGS = 40;
 
 /** Most solutions that may wait or run, for one owner and for all. */
 export const MOST_OPEN_OF_OWNER = 200;
@@ -63,12 +69,22 @@ export class FieldJobs {
     this.files = new FieldFiles(options.folder);
   }
 
-  /** Warms the threads and takes over what was left behind. */
-  open(): void {
-    this.options.runner.start();
+  /** Takes over what was left behind and warms up; resolves when the first caller is answered as fast as later ones. */
+  async open(): Promise<void> {
+    // First, so that no job that was left behind comes before it in the threads' queue.
+    const ready = this.options.runner.start();
     this.beat = setInterval(() => this.tend(), BEAT_MS);
     this.beat.unref();
     this.tend();
+    for (let k = 0; k < WARM_READINGS; k++) {
+      prepareField(WARMING_BODY, { material: () => undefined, outline: () => undefined });
+    }
+    try {
+      await Promise.race([ready, new Promise((resolve) => setTimeout(resolve, PATIENCE_MS).unref())]);
+    } catch (error) {
+      // Whoever comes next is told; the service itself goes on without field solutions.
+      if (!this.closing) this.options.log.error({ event: "field-threads", error: describe(error) });
+    }
   }
 
   /** Keeps this process's claims and takes over those of processes that are gone. */

@@ -1,44 +1,12 @@
 /** Entry of a worker thread: bundled to dist/workers/field-worker.mjs, started by piscina. */
 import { type FieldOutcome, type FieldTask, runFieldTask } from "./field-task";
+import { WARMING_BODY } from "./warming-body";
 
 /** A small bend, solved until the code is compiled, so that the first caller does not wait for that. */
 function warmUp(): void {
-  const body = {
-    outline: {
-      outer: [
-        [0, 0],
-        [4, 0],
-        [4, 1],
-        [1, 1],
-        [1, 4],
-        [0, 4],
-      ],
-    },
-    terminals: [
-      {
-        name: "a",
-        segments: [
-          [
-            [4, 0],
-            [4, 1],
-          ],
-        ],
-      },
-      {
-        name: "b",
-        segments: [
-          [
-            [1, 4],
-            [0, 4],
-          ],
-        ],
-      },
-    ],
-    medium: { sheetResistance: 1 },
-  };
   for (const accuracy of [1e-2, 1e-4, 1e-4, 1e-6, 1e-6, 1e-8]) {
     runFieldTask({
-      body: { ...body, accuracy },
+      body: { ...WARMING_BODY, accuracy },
       materials: [],
       cancel: new Int32Array(1),
       secondsAllowed: 5,

@@ -4,6 +4,7 @@ import { MessageChannel } from "node:worker_threads";
 import { Piscina } from "piscina";
 import type { FieldProgress, Material } from "@/lib/engine";
 import { type FieldOutcome, runFieldTask } from "./field-task";
+import { WARMING_BODY } from "./warming-body";
 
 export interface PoolTask {
   readonly body: unknown;
@@ -23,7 +24,8 @@ export interface RunningTask {
 export interface TaskRunner {
   /** How many tasks run at once. */
   readonly threads: number;
-  start(): void;
+  /** Makes ready; resolves when the first task will be worked off as fast as later ones. */
+  start(): Promise<void>;
   run(task: PoolTask): RunningTask;
   close(): Promise<void>;
 }
@@ -32,7 +34,7 @@ export interface TaskRunner {
 export class InlineRunner implements TaskRunner {
   readonly threads = 1;
 
-  start(): void {}
+  async start(): Promise<void> {}
 
   run({ body, materials, secondsAllowed, maximumUnknowns }: PoolTask): RunningTask {
     const cancel = new Int32Array(1);
@@ -49,9 +51,16 @@ export class WorkerPool implements TaskRunner {
 
   constructor(readonly threads: number) {}
 
-  /** Starts the threads; they warm themselves. */
-  start(): void {
-    this.threadPool();
+  /** Starts the threads, which warm themselves, and gives each a task: then the way to them is warm too. */
+  async start(): Promise<void> {
+    const task = {
+      body: WARMING_BODY,
+      materials: [],
+      secondsAllowed: 5,
+      maximumUnknowns: 20_000,
+      onProgress: () => {},
+    };
+    await Promise.all(Array.from({ length: this.threads }, () => this.run(task).outcome));
   }
 
   private threadPool(): Piscina {
