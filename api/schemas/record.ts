@@ -12,11 +12,9 @@ export const recordSchema = z
       .object({ kind: z.string(), id: z.string(), name: z.string() })
       .meta({ description: "Who stored it." }),
     request: z.record(z.string(), z.unknown()).meta({ description: "What was asked." }),
-    result: z
-      .union([resistanceResult, fieldResult])
-      .meta({
-        description: "What came out: a ResistanceResult, or a FieldResult where `operation` is `field`.",
-      }),
+    result: z.union([resistanceResult, fieldResult]).meta({
+      description: "What came out: a ResistanceResult, or a FieldResult where `operation` is `field`.",
+    }),
     materials: z
       .array(z.object({ id: z.string(), version: z.int() }))
       .meta({ description: "Materials that went in, with the versions that a replay uses." }),
