@@ -45,6 +45,12 @@ const edgeScale = Float64Array.from({ length: EDGE_MODES }, (_, m) => Math.sqrt(
 /** Brings the gradients of the interior functions to unit size, so that the matrices stay well scaled. */
 const interiorScale = new Float64Array(interiorCount(MAX_ORDER)).fill(1);
 
+/** Factor by which function f is multiplied, the same in all elements; 1 for vertices. */
+export function functionScale(f: number): number {
+  if (f < 3) return 1;
+  return f < FIRST_INTERIOR ? edgeScale[(f - 3) % EDGE_MODES] : interiorScale[f - FIRST_INTERIOR];
+}
+
 /**
  * Values and reference derivatives of all functions at (x, y), written into three arrays of ALL_FUNCTIONS numbers.
  */
