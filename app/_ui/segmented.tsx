@@ -1,9 +1,9 @@
 "use client";
 
-import { useId } from "react";
+import { type ReactNode, useId } from "react";
 
 interface SegmentedProps<Value extends string> {
-  readonly label: string;
+  readonly label: ReactNode;
   /** Whether the label is shown; it is always read. */
   readonly labelShown?: boolean;
   readonly value: Value;

@@ -69,6 +69,7 @@ describe("the address", () => {
 
   it("keeps an expression letter by letter", () => {
     const parameters = {
+      length: "1 m",
       graded: "radius",
       quantity: "conductivity",
       profile: "expression",

@@ -37,26 +37,28 @@ export default async function ShapePage({ params, searchParams }: PageProps) {
   const drawn = geometry.ok ? geometry.geometry : exampleGeometry.ok ? exampleGeometry.geometry : null;
   const temperature = readQuantity(active.temperature?.trim() || 20, "temperature");
   return (
-    <>
-      <Breadcrumb trail={[{ href: "/calculate", label: "Calculate" }]} />
-      <h1>{entry.title}</h1>
-      <p className="mt-1 max-w-prose text-ink-soft">
-        <span className="sr-only">{FAMILY_TITLES[entry.family]}. </span>
-        {entry.summary}
-      </p>
-      <Calculator
-        entry={entry}
-        dimensions={formDimensions(shape, entry)}
-        example={example}
-        start={state}
-        answers={bodies.map(firstAnswer)}
-        geometry={drawn}
-        materials={materialChoices(libraryMaterials, temperature.ok ? temperature.value : 20)}
-        profiles={entry.media.gradable.length > 0 ? profileFacts() : []}
-        origin={sharedService().config.origin}
-        formula={<Tex tex={entry.formula} display />}
-      />
-    </>
+    <Calculator
+      heading={
+        <>
+          <Breadcrumb trail={[{ href: "/calculate", label: "Calculate" }]} />
+          <h1>{entry.title}</h1>
+          <p className="mt-0.5 max-w-prose text-ink-soft">
+            <span className="sr-only">{FAMILY_TITLES[entry.family]}. </span>
+            {entry.summary}
+          </p>
+        </>
+      }
+      entry={entry}
+      dimensions={formDimensions(shape, entry)}
+      example={example}
+      start={state}
+      answers={bodies.map(firstAnswer)}
+      geometry={drawn}
+      materials={materialChoices(libraryMaterials, temperature.ok ? temperature.value : 20)}
+      profiles={entry.media.gradable.length > 0 ? profileFacts() : []}
+      origin={sharedService().config.origin}
+      formula={<Tex tex={entry.formula} display />}
+    />
   );
 }
 

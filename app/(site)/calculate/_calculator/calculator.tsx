@@ -33,6 +33,8 @@ import { useMaterials } from "./use-materials";
 import { usePageState } from "./use-page-state";
 
 interface CalculatorProps {
+  /** What the page is about: its title and what leads back. */
+  readonly heading: ReactNode;
   readonly entry: ShapeEntry;
   readonly dimensions: readonly FormDimension[];
   readonly example: Parameters;
@@ -98,15 +100,16 @@ function LiveCalculator(props: CalculatorProps) {
 
   return (
     <FormProvider value={form}>
-      <div className="mt-2 flex flex-wrap items-center justify-between gap-1 print:hidden">
-        <VariantBar state={state} actions={actions} />
-        <div className="flex flex-wrap items-center gap-1">
+      <div className="flex flex-wrap items-end gap-x-3 gap-y-1">
+        <div className="min-w-0 grow basis-[28rem]">{props.heading}</div>
+        <div className="flex flex-wrap items-center gap-0.5 print:hidden">
           <PageTools state={state} entry={entry} actions={actions} />
           {props.saving ? (
             <SaveRecord saving={props.saving} body={bodies[active]} title={entry.title} />
           ) : null}
         </div>
       </div>
+      {variants.length > 1 ? <VariantBar state={state} actions={actions} /> : null}
       <AnswerStrip result={answer.result} stale={answer.stale} />
       <div className="mt-2 grid items-start gap-x-5 gap-y-3 wide:grid-cols-[24rem_minmax(0,1fr)]">
         <form

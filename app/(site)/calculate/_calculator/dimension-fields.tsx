@@ -1,11 +1,13 @@
 "use client";
 
 import { QuantityInput } from "../../../_ui/quantity-input";
+import { QuantitySymbol } from "../../../_ui/quantity-symbol";
 import { Segmented } from "../../../_ui/segmented";
 import { Select } from "../../../_ui/select";
 import { textInUnit } from "../../../_ui/quantity/convert";
 import { splitQuantity } from "../../../_ui/quantity/quantity-text";
 import { FIRST_UNIT, findUnit, type UnitKind, unitsOf } from "../../../_ui/quantity/units";
+import { sentence } from "../_model/complaints";
 import { chosenMember, dimensionGroups } from "../_model/parameters";
 import type { FormDimension } from "../_server/form-facts";
 import { useForm } from "./form-context";
@@ -40,12 +42,13 @@ function DimensionField({ dimension, members }: DimensionFieldProps) {
 
   if (type === "choice" && choices) {
     const value = text === "" ? String(fallback ?? choices[0].value) : text;
-    const shared = { label: plainLabel(label, symbol), value };
+    const shared = { label: <LabelText label={label} symbol={symbol} />, value };
+    const options = choices.map((choice) => ({ ...choice, label: sentence(choice.label) }));
     const short = choices.length <= 3 && choices.reduce((sum, choice) => sum + choice.label.length, 0) <= 36;
     return short ? (
       <Segmented
         {...shared}
-        options={choices}
+        options={options}
         onChange={(next) => change({ [name]: next })}
         className="mb-3"
       />
@@ -53,7 +56,7 @@ function DimensionField({ dimension, members }: DimensionFieldProps) {
       <Select
         {...shared}
         help={help}
-        options={choices}
+        options={options}
         error={errorAt(name)}
         onChange={(event) => change({ [name]: event.target.value })}
       />
@@ -83,8 +86,12 @@ function DimensionField({ dimension, members }: DimensionFieldProps) {
   );
 }
 
-function plainLabel(label: string, symbol: string): string {
-  return symbol === "" ? label : `${label} ${symbol}`;
+function LabelText({ label, symbol }: { readonly label: string; readonly symbol: string }) {
+  return (
+    <>
+      {label} {symbol === "" ? null : <QuantitySymbol text={symbol} />}
+    </>
+  );
 }
 
 const KINDS: Readonly<Record<string, UnitKind>> = { m: "length", "m^2": "area", deg: "angle", "1": "number" };

@@ -1,10 +1,11 @@
 "use client";
 
-import { Link2, RotateCcw } from "lucide-react";
+import { Link2, Plus, RotateCcw } from "lucide-react";
 import type { ShapeEntry } from "@/lib/engine";
 import { Button } from "../../../_ui/button";
 import { splitAddress } from "../_model/address";
 import { type PageState, stateQuery } from "../_model/variants";
+import { COMPARE_ID, focusSoon, variantId } from "./compare/focus";
 import { useToast } from "../../../_ui/toast";
 import type { PageActions } from "./use-page-state";
 
@@ -14,7 +15,7 @@ interface PageToolsProps {
   readonly actions: PageActions;
 }
 
-/** A link to exactly this state, and the way back to the example. */
+/** A second variant, a link to exactly this state, and the way back to the example. */
 export function PageTools({ state, entry, actions }: PageToolsProps) {
   const toast = useToast();
 
@@ -37,14 +38,24 @@ export function PageTools({ state, entry, actions }: PageToolsProps) {
     toast("The example stands again.", { undo: () => actions.restore(before) });
   }
 
+  function addVariant() {
+    actions.add();
+    focusSoon(variantId(1));
+  }
+
   return (
-    <div className="flex flex-wrap items-center gap-x-0.5">
+    <>
+      {state.variants.length === 1 ? (
+        <Button id={COMPARE_ID} onClick={addVariant}>
+          <Plus aria-hidden size={16} /> Compare with a variant
+        </Button>
+      ) : null}
       <Button variant="quiet" onClick={copyLink}>
         <Link2 aria-hidden size={16} /> Copy link
       </Button>
       <Button variant="quiet" onClick={restart}>
         <RotateCcw aria-hidden size={16} /> Start over
       </Button>
-    </div>
+    </>
   );
 }

@@ -1,6 +1,14 @@
 /** One to four calculations side by side, and how an address keeps them: the first whole, the others by what differs. */
 import type { ShapeEntry } from "@/lib/engine";
-import { compactValue, orderedPairs, type Parameters, queryText, readParameters } from "./parameters";
+import {
+  compactValue,
+  mediumPrefixes,
+  ofMedium,
+  orderedPairs,
+  type Parameters,
+  queryText,
+  readParameters,
+} from "./parameters";
 
 export const VARIANT_NAMES = ["A", "B", "C", "D"] as const;
 export type VariantName = (typeof VARIANT_NAMES)[number];
@@ -39,7 +47,7 @@ export function readState(
   example: Parameters,
 ): PageState {
   const all = [...pairs];
-  const first = readParameters(all, entry) ?? example;
+  const first = completed(readParameters(all, entry), entry, example);
   const variants: Parameters[] = [first];
   for (const label of VARIANT_NAMES.slice(1)) {
     if (!all.some(([name]) => name === label)) break;
@@ -53,6 +61,16 @@ export function readState(
   const show = all.find(([name]) => name === "show")?.[1];
   const active = VARIANT_NAMES.findIndex((name) => name === show);
   return { variants, active: active > 0 && active < variants.length ? active : 0 };
+}
+
+/** An address without any dimension, or without a medium, means the example's: an emptied field stands in it. */
+function completed(told: Parameters | null, entry: ShapeEntry, example: Parameters): Parameters {
+  if (!told) return example;
+  const isDimension = (name: string) => entry.dimensions.some((dimension) => dimension.name === name);
+  const isMedium = (name: string) => mediumPrefixes(entry).some((prefix) => ofMedium(name, prefix, entry));
+  const missing = [isDimension, isMedium].filter((kind) => !Object.keys(told).some(kind));
+  const added = Object.entries(example).filter(([name]) => missing.some((kind) => kind(name)));
+  return { ...Object.fromEntries(added), ...told };
 }
 
 /** Names whose texts are not the same in all variants, in the order of the page. */

@@ -3,6 +3,7 @@
 import { Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
 import { useToast } from "../../../../_ui/toast";
+import { COMPARE_ID, focusSoon, variantId } from "./focus";
 import { type PageState, VARIANT_NAMES } from "../../_model/variants";
 import type { PageActions } from "../use-page-state";
 
@@ -19,22 +20,17 @@ export function VariantBar({ state, actions }: VariantBarProps) {
 
   function remove(index: number) {
     actions.remove(index);
+    focusSoon(variantId(Math.max(0, index - 1)), COMPARE_ID);
     toast(`Variant ${VARIANT_NAMES[index]} is removed.`, { undo: () => actions.restore(state) });
   }
 
-  if (count === 1) {
-    return (
-      <Button onClick={actions.add}>
-        <Plus aria-hidden size={15} /> Compare with a variant
-      </Button>
-    );
-  }
   return (
-    <div className="flex flex-wrap items-center gap-0.5">
+    <div className="mt-2 flex flex-wrap items-center gap-0.5 print:hidden">
       <div role="group" aria-label="Variant shown" className="flex flex-wrap gap-0.5">
         {VARIANT_NAMES.slice(0, count).map((name, index) => (
           <span key={name} className="inline-flex">
             <Button
+              id={variantId(index)}
               aria-pressed={index === active}
               variant={index === active ? "primary" : "plain"}
               onClick={() => actions.show(index)}
@@ -50,7 +46,13 @@ export function VariantBar({ state, actions }: VariantBarProps) {
         ))}
       </div>
       {count < VARIANT_NAMES.length ? (
-        <Button variant="quiet" onClick={actions.add}>
+        <Button
+          variant="quiet"
+          onClick={() => {
+            actions.add();
+            focusSoon(variantId(count));
+          }}
+        >
           <Plus aria-hidden size={15} /> Variant
         </Button>
       ) : null}
