@@ -92,9 +92,16 @@ describe("the address", () => {
     expect(readState(new URLSearchParams("utm=1&nonsense"), bar, exampleParameters(bar)).variants).toEqual([
       exampleParameters(bar),
     ]);
-    expect(readState(new URLSearchParams("width=1mm&depth=2"), bar, exampleParameters(bar)).variants).toEqual(
-      [{ width: "1 mm" }],
-    );
+    const example = exampleParameters(bar);
+    expect(readState(new URLSearchParams("width=1mm&depth=2"), bar, example).variants).toEqual([
+      { width: "1 mm", material: example.material },
+    ]);
+    expect(readState(new URLSearchParams("current=2A"), bar, example).variants).toEqual([
+      { ...example, current: "2 A" },
+    ]);
+    expect(readState(new URLSearchParams("length=&resistivity="), bar, example).variants).toEqual([
+      { length: "", resistivity: "" },
+    ]);
   });
 
   it("moves long tables behind the #", () => {
