@@ -161,7 +161,38 @@ function needle(random: () => number): UglyOutline {
   return { name: "needle", outer, holes: [] };
 }
 
-const KINDS = [spiky, comb, sieve, maze, ribbon, needle];
+/** Random points, many of them in tight clusters, joined in any order and then uncrossed: sharp and narrow everywhere. */
+function tangle(random: () => number): UglyOutline {
+  const n = 5 + Math.floor(random() * 30);
+  const outer: Polygon = [];
+  for (let i = 0; i < n; i++) {
+    if (outer.length > 0 && random() < 0.4) {
+      const [x, y] = outer[Math.floor(random() * outer.length)];
+      const near = 10 ** (-1 - 4 * random());
+      outer.push([x + near * (random() - 0.5), y + near * (random() - 0.5)]);
+    } else outer.push([random(), random()]);
+  }
+  const crosses = (a: number, b: number, c: number, d: number): boolean => {
+    const side = (p: number, q: number, r: number): number =>
+      (outer[q][0] - outer[p][0]) * (outer[r][1] - outer[p][1]) -
+      (outer[q][1] - outer[p][1]) * (outer[r][0] - outer[p][0]);
+    return side(a, b, c) > 0 !== side(a, b, d) > 0 && side(c, d, a) > 0 !== side(c, d, b) > 0;
+  };
+  // Each reversal shortens the ring, so it ends; the limit is for points that are almost in line.
+  for (let round = 0, again = true; again && round < 500; round++) {
+    again = false;
+    for (let i = 0; i < n && !again; i++) {
+      for (let j = i + 2; j < n && !again; j++) {
+        if ((j + 1) % n === i || !crosses(i, i + 1, j, (j + 1) % n)) continue;
+        outer.splice(i + 1, j - i, ...outer.slice(i + 1, j + 1).reverse());
+        again = true;
+      }
+    }
+  }
+  return { name: "tangle", outer, holes: [] };
+}
+
+const KINDS = [spiky, comb, sieve, maze, ribbon, needle, tangle];
 
 /** One ugly outline for a seed, scaled, turned and moved. */
 export function uglyOutline(seed: number): UglyOutline {

@@ -1,5 +1,8 @@
 import type { FieldMesh } from "./mesh";
 
+/** A triangle flatter than this is not bisected; coordinates are rounded to 2^-54. */
+const SMALLEST_HEIGHT = 2 ** -46;
+
 /** Edges of a mesh: `edgeOf[3t + i]` is the edge opposite corner i of triangle t. */
 export interface EdgeTable {
   readonly count: number;
@@ -52,14 +55,14 @@ export function edgeTable(triangles: Int32Array, vertexCount: number): EdgeTable
  * Newest-vertex bisection: each marked triangle is bisected at its refinement edge (mark 1) or at all three edges
  * (mark 2), and others as far as conformity demands (closure over edges as in S. Funken, D. Praetorius, P. Wissgott,
  * Comput. Methods Appl. Math. 11 (2011) 460). Region, boundary and sides are inherited. The old vertices keep their
- * numbers; the new ones are the midpoints. One loop over the edges' marks, no recursion.
+ * numbers; the new ones are the midpoints. Marks on triangles flatter than 2^-46 are passed over.
  */
 export function refine(mesh: FieldMesh, marked: Uint8Array): FieldMesh {
   const { triangles } = mesh;
   const oldVertices = mesh.xy.length / 2;
   const triangleCount = triangles.length / 3;
   const { count, edgeOf, ends } = edgeTable(triangles, oldVertices);
-  const split = closure(marked, triangleCount, count, edgeOf);
+  const split = closure(withoutFlat(mesh, marked), triangleCount, count, edgeOf);
   const midpoint = new Int32Array(count).fill(-1);
   let vertices = oldVertices;
   for (let e = 0; e < count; e++) if (split[e] === 1) midpoint[e] = vertices++;
@@ -77,6 +80,23 @@ export function refine(mesh: FieldMesh, marked: Uint8Array): FieldMesh {
   const parts = bisectTriangles(mesh, edgeOf, midpoint);
   const boundary = splitBoundary(mesh, edgeOf, midpoint);
   return { xy, triangles: parts.triangles, region: parts.region, boundary, sides: mesh.sides };
+}
+
+/** The marks, less those on triangles so flat that rounding would turn their parts over. */
+function withoutFlat(mesh: FieldMesh, marked: Uint8Array): Uint8Array {
+  const { xy, triangles } = mesh;
+  const kept = Uint8Array.from(marked);
+  for (let t = 0; t < kept.length; t++) {
+    if (kept[t] === 0) continue;
+    const [a, b, c] = [2 * triangles[3 * t], 2 * triangles[3 * t + 1], 2 * triangles[3 * t + 2]];
+    const [ux, uy] = [xy[b] - xy[a], xy[b + 1] - xy[a + 1]];
+    const [vx, vy] = [xy[c] - xy[a], xy[c + 1] - xy[a + 1]];
+    const longest = Math.sqrt(
+      Math.max(ux * ux + uy * uy, vx * vx + vy * vy, (vx - ux) ** 2 + (vy - uy) ** 2),
+    );
+    if (ux * vy - uy * vx < SMALLEST_HEIGHT * longest) kept[t] = 0;
+  }
+  return kept;
 }
 
 function closure(

@@ -13,6 +13,8 @@ const LEAST_LENGTH = 6;
 const TAPER = 1.4;
 const MOST_CELLS = 64;
 const MOST_PASSES = 40;
+/** Triangles that may lie between the two borders before; more are not looked through. */
+const MOST_BETWEEN = 256;
 
 /**
  * Long straight stretches between two nearly parallel borders would take triangles in proportion to length over width, for
@@ -47,19 +49,63 @@ class ChannelBuilder {
     private readonly axisymmetric: boolean,
   ) {}
 
-  /** One look at every edge; true when some channel was found. */
+  /** One look at every border edge; true when some channel was found. */
   sweep(): boolean {
     const { mesh } = this;
     let found = false;
     for (let h = 0; h < 3 * mesh.triangleSlots; h++) {
-      if (mesh.corner[h] < 0 || (mesh.label[(h / 3) | 0] & FROZEN) !== 0) continue;
-      if (mesh.twin[h] < 0 && mesh.twin[previousEdge(h)] < 0 && this.closeTip(h)) found = true;
-      if (mesh.mark[h] !== 0 || mesh.twin[h] < h) continue;
-      const w = mesh.twin[h];
-      const channel = this.facing(nextEdge(h), nextEdge(w)) ?? this.facing(previousEdge(h), previousEdge(w));
-      if (channel !== null && this.build(channel)) found = true;
+      if (mesh.corner[h] < 0 || mesh.twin[h] >= 0 || mesh.label[(h / 3) | 0] >= FROZEN) continue;
+      if (mesh.twin[previousEdge(h)] < 0) found = this.closeTip(h) || found;
+      else found = this.spanFrom(h) || found;
     }
     return found;
+  }
+
+  /** Looks for a channel between border edge h and one of the two border edges at the apex of its triangle. */
+  private spanFrom(h: number): boolean {
+    const { mesh } = this;
+    const { corner, xy, twin } = mesh;
+    const [p, q, v] = [corner[h], corner[nextEdge(h)], corner[previousEdge(h)]];
+    const [ux, uy] = [xy[2 * q] - xy[2 * p], xy[2 * q + 1] - xy[2 * p + 1]];
+    const height = ux * (xy[2 * v + 1] - xy[2 * p + 1]) - uy * (xy[2 * v] - xy[2 * p]);
+    if (height * LEAST_LENGTH > ux * ux + uy * uy) return false;
+    // Round the apex to its border, both ways.
+    let out = nextEdge(nextEdge(h));
+    while (twin[out] >= 0) out = nextEdge(twin[out]);
+    let into = nextEdge(h);
+    while (twin[into] >= 0) into = previousEdge(twin[into]);
+    for (const other of [out, into]) {
+      const channel = this.facing(h, other);
+      if (channel !== null && this.isClear(h, other, channel) && this.build(channel)) return true;
+    }
+    return false;
+  }
+
+  /** Whether nothing lies between the two border edges of a channel, from its first cut to its last. */
+  private isClear(e: number, f: number, { p, q, stations }: Facing): boolean {
+    const { corner, mark, twin, xy } = this.mesh;
+    const [ux, uy] = [xy[2 * q] - xy[2 * p], xy[2 * q + 1] - xy[2 * p + 1]];
+    const squared = ux * ux + uy * uy;
+    const along = (v: number): number =>
+      ((xy[2 * v] - xy[2 * p]) * ux + (xy[2 * v + 1] - xy[2 * p + 1]) * uy) / squared;
+    const [from, to] = [stations[0], stations[stations.length - 1]];
+    const stack = [(e / 3) | 0];
+    const seen = new Set(stack);
+    while (stack.length > 0) {
+      const t = stack.pop() as number;
+      for (let h = 3 * t; h < 3 * t + 3; h++) {
+        const [a, b] = [along(corner[h]), along(corner[nextEdge(h)])];
+        if (a > from && a < to) return false;
+        if (h === e || h === f || Math.min(a, b) >= to || Math.max(a, b) <= from) continue;
+        if (mark[h] !== 0 || twin[h] < 0) return false;
+        const n = (twin[h] / 3) | 0;
+        if (seen.has(n)) continue;
+        if (seen.size >= MOST_BETWEEN) return false;
+        seen.add(n);
+        stack.push(n);
+      }
+    }
+    return true;
   }
 
   /**
@@ -87,14 +133,14 @@ class ChannelBuilder {
     return true;
   }
 
-  /** The channel between two opposite edges of the quadrilateral of two triangles, if both are border and it is long. */
+  /** The channel between two border edges that face each other, if it is long enough. */
   private facing(e: number, f: number): Facing | null {
-    const { corner, twin, xy } = this.mesh;
-    if (twin[e] >= 0 || twin[f] >= 0) return null;
+    const { corner, xy } = this.mesh;
     const p = corner[e];
     const q = corner[nextEdge(e)];
     const r = corner[f];
     const s = corner[nextEdge(f)];
+    if (r === q || s === p) return null;
     const length = Math.hypot(xy[2 * q] - xy[2 * p], xy[2 * q + 1] - xy[2 * p + 1]);
     const ux = (xy[2 * q] - xy[2 * p]) / length;
     const uy = (xy[2 * q + 1] - xy[2 * p + 1]) / length;
@@ -106,6 +152,7 @@ class ChannelBuilder {
     const width = (t: number): number => ws + slope * (t - ts);
     const low = Math.max(0, ts);
     const high = Math.min(length, tr);
+    if (!(high > low) || !(width(low) > 0) || !(width(high) > 0)) return null;
     const from = low + MARGIN * width(low);
     const to = high - MARGIN * width(high);
     if (!(to - from >= LEAST_LENGTH * Math.max(width(low), width(high)))) return null;

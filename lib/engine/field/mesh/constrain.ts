@@ -49,7 +49,13 @@ function ahead(mesh: Triangulation, a: number, b: number, v: number): boolean {
 /** The edges that a→b crosses, as vertex pairs (right of it, left of it). */
 function collectCrossings(mesh: Triangulation, a: number, b: number, crossing: number[]): Obstacle | null {
   const { corner, twin, mark } = mesh;
-  const start = mesh.vertexEdge[a];
+  let start = mesh.vertexEdge[a];
+  // At a border the turn begins at the half-edge that has nothing on its right.
+  for (let g = start; twin[g] >= 0;) {
+    g = nextEdge(twin[g]);
+    if (g === start) break;
+    if (twin[g] < 0) start = g;
+  }
   let h = start;
   let across = -1;
   do {
@@ -57,7 +63,9 @@ function collectCrossings(mesh: Triangulation, a: number, b: number, crossing: n
     const left = corner[previousEdge(h)];
     const sideOfRight = side(mesh, a, b, right);
     if (sideOfRight === 0 && ahead(mesh, a, b, right)) return { kind: "vertex", vertex: right };
-    if (sideOfRight < 0 && side(mesh, a, b, left) > 0) {
+    const sideOfLeft = side(mesh, a, b, left);
+    if (sideOfLeft === 0 && ahead(mesh, a, b, left)) return { kind: "vertex", vertex: left };
+    if (sideOfRight < 0 && sideOfLeft > 0) {
       across = nextEdge(h);
       break;
     }

@@ -2,6 +2,8 @@ import type { FieldMesh } from "./mesh";
 
 /** Layers end when the star of the vertex has shrunk to this size; below it coordinates lose their digits. */
 const SMALLEST_STAR = 2 ** -42;
+/** They end, too, when a triangle of the star has become this flat. Coordinates are rounded to 2^-54. */
+const SMALLEST_HEIGHT = 2 ** -46;
 
 /**
  * Grades the mesh towards single vertices. A layer halves the edges at the vertex v: each triangle (v, a, b) of its star
@@ -72,15 +74,19 @@ class Grading {
     );
   }
 
+  /** Whether halving the star gives triangles that rounding does not distort. */
   private canHalve(v: number, star: number[]): boolean {
     const { triangles, xy } = this;
     for (const t of star) {
-      for (let i = 0; i < 3; i++) {
-        const a = triangles[3 * t + i];
-        if (a === v) continue;
-        const size = Math.hypot(xy[2 * a] - xy[2 * v], xy[2 * a + 1] - xy[2 * v + 1]);
-        if (size < 2 * SMALLEST_STAR) return false;
-      }
+      const k = triangles[3 * t] === v ? 0 : triangles[3 * t + 1] === v ? 1 : 2;
+      const a = triangles[3 * t + ((k + 1) % 3)];
+      const b = triangles[3 * t + ((k + 2) % 3)];
+      const [x, y] = [xy[2 * v], xy[2 * v + 1]];
+      const [ax, ay, bx, by] = [xy[2 * a] - x, xy[2 * a + 1] - y, xy[2 * b] - x, xy[2 * b + 1] - y];
+      const longer = Math.max(Math.hypot(ax, ay), Math.hypot(bx, by));
+      // The least height of the triangle, or what is left of its edges.
+      const height = (ax * by - ay * bx) / Math.max(longer, Math.hypot(bx - ax, by - ay));
+      if (!(height >= SMALLEST_HEIGHT) || longer < 2 * SMALLEST_STAR) return false;
     }
     return star.length > 0;
   }
