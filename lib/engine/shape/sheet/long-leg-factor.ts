@@ -22,7 +22,7 @@ export interface LongLegs {
 
 /** What the entries of these shapes say of short legs. */
 export const FIELD_TAKES_OVER =
-  "Where the legs are so short that the formula's bounds are wider than 1e-4 of the value, the answer is a field solution on the plan with a proved bracket.";
+  "Where the legs are so short that the formula's bounds are wider than 1e-4 of the value, the answer is a field solution on the plan with a proved bracket, as long as no edge is shorter than a thirtieth of the longest and there are at most twelve corners; else the wider bounds stand.";
 
 /** From this length over width on, exp(−2πL/w) times any excess is below rounding. */
 const ENDLESS = 7;

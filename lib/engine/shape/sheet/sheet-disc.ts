@@ -74,7 +74,8 @@ export const sheetDisc = defineShape({
     secondRoute: ({ terminalAngle1, terminalAngle2 }) => {
       // The half plane by the tangent of half the angle, then the elliptic sine: K'(k)/2K(k), k = tan(t₁/4)·tan(t₂/4).
       const k = Math.tan(terminalAngle1 / 4) * Math.tan(terminalAngle2 / 4);
-      if (1 - k < 1e-3) return null;
+      // Near a full circle the tangent loses the digits of the angle.
+      if (1 - k < 1e-3 || Math.max(terminalAngle1, terminalAngle2) > 2 * Math.PI - 1e-3) return null;
       return { value: agm(1, Math.sqrt((1 - k) * (1 + k))) / (2 * agm(1, k)), tolerance: 1e-11 };
     },
   },

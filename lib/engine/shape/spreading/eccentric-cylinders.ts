@@ -91,8 +91,9 @@ export const eccentricCylinders = defineShape({
     },
     secondRoute: (d) => {
       const [a, b, e] = [d.innerDiameter / 2, d.outerDiameter / 2, d.offset];
-      // The foci go to infinity for concentric cylinders, and the two terms then cancel.
-      if (e < 1e-4 * b || b - a < 1e-3 * b) return null;
+      // The foci go to infinity for concentric cylinders, and the two terms then cancel; so they do for a thin wire
+      // that nearly touches.
+      if (e < 1e-4 * b || b - a < 1e-3 * b || a < 1e-4 * b) return null;
       const product = d.gap * (b - a + e) * (b + a - e) * (b + a + e);
       const c = Math.sqrt(product) / (2 * e);
       return { value: spanFromFoci(c, a, b, -1) / (2 * Math.PI) / d.length, tolerance: 1e-9 };
