@@ -82,7 +82,7 @@ export interface FieldSolution {
   readonly map: FieldMap;
 }
 
-/** Raised where a conductance function is not a positive number; the place is given in metres. */
+/** Raised where a conductance is not a positive number; the place in metres, NaN for a medium given as a number. */
 export class FieldMediumError extends Error {
   override readonly name = "FieldMediumError";
   constructor(
@@ -90,14 +90,20 @@ export class FieldMediumError extends Error {
     readonly yM: number,
     readonly value: number,
   ) {
-    super(`The conductance is ${value} at x = ${xM} m, y = ${yM} m; it must be a positive number.`);
+    const place = Number.isNaN(xM) ? "" : ` at x = ${xM} m, y = ${yM} m`;
+    super(`The conductance is ${value}${place}; it must be a positive number.`);
   }
 }
 
 const DEFAULT_UNKNOWNS = 500_000;
 const DEFAULT_REFINEMENTS = 40;
 
-/** Solves a checked outline. Throws `FieldMediumError` only. */
+export { InterruptedError } from "./solve/factor";
+
+/**
+ * Solves a checked outline. Throws `FieldMediumError` if a conductance is not a positive number, and `InterruptedError`
+ * if it is stopped before there is any bracket.
+ */
 export function solveField(problem: FieldProblem, options: FieldOptions): FieldSolution {
   const { outline } = problem;
   const medium = scaleMedium(problem);
@@ -139,6 +145,9 @@ function scaleMedium({ outline, conductance }: FieldProblem): ScaledMedium {
   // The resistance of a body goes with 1/length, that of a sheet does not depend on it.
   const length = axisymmetric ? frame.unitM : 1;
   const [first] = conductance;
+  for (const c of conductance) {
+    if (typeof c === "number" && !(c > 0 && c < Infinity)) throw new FieldMediumError(NaN, NaN, c);
+  }
   if (conductance.length === 1 && typeof first === "number") {
     return { list: revolved([1], axisymmetric), unit: first * length, uniform: true };
   }

@@ -5,12 +5,12 @@
 import { countFunctions, makeElements } from "../assembly/elements";
 import type { MediumList } from "../assembly/medium";
 import type { FieldMesh } from "../mesh/mesh";
-import { InterruptedError } from "../solve/factor";
+import { InterruptedError, SingularMatrixError } from "../solve/factor";
 import { solvePair, type SolvedPair } from "../solve/pair";
 import type { BoundaryReference } from "./displacement";
 import { fieldEnergies, type FieldEnergies } from "./energies";
 import { singularVertices, type SingularVertex } from "./exponents";
-import { Goal, type ReachedBounds } from "./goal";
+import { Goal, widthOf, type ReachedBounds } from "./goal";
 import { applyPlan, type OrderedMesh } from "./grade";
 import { planRefinement } from "./plan";
 
@@ -69,10 +69,13 @@ const AIM = 0.6;
 /** Steps without a gain of a tenth after which rounding is taken to be in the way. */
 const IDLE_STEPS = 3;
 
+/**
+ * Throws `InterruptedError` or `SingularMatrixError` only if there is no bracket yet. A first mesh that is above the
+ * cap even at the lowest order is solved all the same.
+ */
 export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
   const { limits, medium, terminalCount } = input;
-  const order = new Uint8Array(input.mesh.triangles.length / 3).fill(input.startOrder ?? START_ORDER);
-  let current: OrderedMesh = { mesh: input.mesh, order };
+  let current = firstOrders(input);
   let singular: readonly SingularVertex[] = [];
   let last: AdaptiveResult | null = null;
   const goal = new Goal();
@@ -84,8 +87,10 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
       const { revolution = false } = input;
       pair = solvePair({ ...current, medium, terminalCount, revolution, shouldStop: limits.shouldStop });
     } catch (error) {
-      if (!(error instanceof InterruptedError) || !last) throw error;
-      return { ...last, status: "limited", limit: "stopped" };
+      if (!last) throw error;
+      if (error instanceof InterruptedError) return { ...last, limit: "stopped" };
+      if (error instanceof SingularMatrixError) return { ...last, limit: "rounding" };
+      throw error;
     }
     if (refinements === 0) {
       singular = singularVertices(current.mesh, pair.runs, representativeSigma(current.mesh, medium));
@@ -99,7 +104,7 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
     const progress = { ...resistance, unknowns: countFunctions(pair.set), triangles, refinements };
     input.onProgress?.(progress);
     const result = { ...progress, bounds: goal.reached, pair, energies, singular };
-    const { width } = goal;
+    const width = widthOf(goal.reached);
     if (width <= input.accuracy) return { ...result, status: "done", limit: "none" };
     idle = width < 0.9 * narrowest ? 0 : idle + 1;
     narrowest = Math.min(narrowest, width);
@@ -111,6 +116,16 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
     if (next === null) return { ...last, limit: "unknowns" };
     if (next === current) return last;
     current = next;
+  }
+}
+
+/** The first order, or a lower one where the first mesh would otherwise be above the cap. */
+function firstOrders({ mesh, startOrder = START_ORDER, revolution, limits }: AdaptiveInput): OrderedMesh {
+  const count = mesh.triangles.length / 3;
+  const least = revolution ? 2 : 1;
+  for (let p = startOrder; ; p--) {
+    const order = new Uint8Array(count).fill(p);
+    if (p <= least || countFunctions(makeElements(mesh, order)) <= limits.unknowns) return { mesh, order };
   }
 }
 

@@ -9,8 +9,9 @@ import type { CheckedOutline } from "../outline/check-outline";
 import type { AdaptiveLimits, AdaptiveProgress, AdaptiveResult } from "./adaptive";
 import type { Bracket } from "./bracket";
 import type { MediumList } from "../assembly/medium";
+import { InterruptedError } from "../solve/factor";
 import { solveDomain } from "./domain-run";
-import type { ReachedBounds } from "./goal";
+import { widthOf, type ReachedBounds } from "./goal";
 import { PowerBounds, terminalBounds } from "./terminals";
 
 export interface CurvedRun {
@@ -40,15 +41,18 @@ export function solveCurved(run: CurvedRun): AdaptiveResult {
   const best = new CurvedBounds();
   let chords = TRIAL_CHORDS;
   let accuracy = Math.max(run.accuracy * SHARE_OF_SOLUTION, TRIAL_ACCURACY);
+  let last: AdaptiveResult | null = null;
   for (let attempt = 0; ; attempt++) {
-    const low = solveRole(run, "lower", chords, accuracy, best);
-    const high = solveRole(run, "upper", chords, accuracy, best);
+    const both = solveRoles(run, chords, accuracy, best, last);
+    // Stopped on the way: the bracket of the attempt before stands.
+    if ("stopped" in both) return { ...both.stopped, status: "limited", limit: "stopped" };
+    const { low, high } = both;
     const bounds = best.combine(low, high);
-    const width = (bounds.resistance.upper - bounds.resistance.lower) / bounds.resistance.lower;
     const larger = low.unknowns > high.unknowns ? low : high;
     const { unknowns, triangles, refinements } = larger;
     const result = { ...high, bounds, unknowns, triangles, refinements };
-    if (width <= run.accuracy) return { ...result, status: "done", limit: "none" };
+    last = result;
+    if (widthOf(bounds) <= run.accuracy) return { ...result, status: "done", limit: "none" };
     const limited = low.status === "limited" ? low : high;
     if (limited.status === "limited") return { ...result, status: "limited", limit: limited.limit };
     if (run.limits.shouldStop()) return { ...result, status: "limited", limit: "stopped" };
@@ -58,6 +62,30 @@ export function solveCurved(run: CurvedRun): AdaptiveResult {
     const own = relativeDistance(low.bounds.resistance, high.bounds.resistance);
     accuracy = run.accuracy * SHARE_OF_SOLUTION;
     chords = Math.max(FINEST_CHORDS, chords * Math.min(1, (SHARE_OF_CHORDS * run.accuracy) / own));
+  }
+}
+
+interface BothRoles {
+  readonly low: AdaptiveResult;
+  readonly high: AdaptiveResult;
+}
+
+/** Both polygons, or the earlier result to fall back on if the work was stopped within. */
+function solveRoles(
+  run: CurvedRun,
+  chords: number,
+  accuracy: number,
+  best: CurvedBounds,
+  last: AdaptiveResult | null,
+): BothRoles | { readonly stopped: AdaptiveResult } {
+  try {
+    return {
+      low: solveRole(run, "lower", chords, accuracy, best),
+      high: solveRole(run, "upper", chords, accuracy, best),
+    };
+  } catch (error) {
+    if (error instanceof InterruptedError && last) return { stopped: last };
+    throw error;
   }
 }
 

@@ -41,24 +41,24 @@ export class Goal {
   get reached(): ReachedBounds {
     return { resistance: this.resistance, terminals: this.terminals };
   }
+}
 
-  /** The largest relative width of all that is wanted. */
-  get width(): number {
-    if (!this.terminals) return relativeWidth(this.resistance);
-    const { conductance, pairs } = this.terminals;
-    const n = Math.round(Math.sqrt(conductance.length));
-    let worst = 0;
-    for (const { floating, between } of pairs) {
-      worst = Math.max(worst, relativeWidth(floating));
-      const [a, b] = between;
-      const entry = conductance[a * n + b];
-      const scale = Math.sqrt(conductance[a * n + a].lower * conductance[b * n + b].lower);
-      const size = Math.max(Math.min(-entry.upper, -entry.lower), WEAKEST_COUPLING * scale);
-      worst = Math.max(worst, (entry.upper - entry.lower) / size);
-    }
-    for (let a = 0; a < n; a++) worst = Math.max(worst, relativeWidth(conductance[a * n + a]));
-    return worst;
+/** The largest relative width of all that is wanted. */
+export function widthOf({ resistance, terminals }: ReachedBounds): number {
+  if (!terminals) return relativeWidth(resistance);
+  const { conductance, pairs } = terminals;
+  const n = Math.round(Math.sqrt(conductance.length));
+  let worst = 0;
+  for (const { floating, between } of pairs) {
+    worst = Math.max(worst, relativeWidth(floating));
+    const [a, b] = between;
+    const entry = conductance[a * n + b];
+    const scale = Math.sqrt(conductance[a * n + a].lower * conductance[b * n + b].lower);
+    const size = Math.max(Math.min(-entry.upper, -entry.lower), WEAKEST_COUPLING * scale);
+    worst = Math.max(worst, (entry.upper - entry.lower) / size);
   }
+  for (let a = 0; a < n; a++) worst = Math.max(worst, relativeWidth(conductance[a * n + a]));
+  return worst;
 }
 
 function relativeWidth({ lower, upper }: Bracket): number {
