@@ -45,7 +45,7 @@ export function Tabs({ label, tabs }: { readonly label: string; readonly tabs: r
             aria-controls={`${prefix}-panel`}
             tabIndex={tab.id === active ? 0 : -1}
             onClick={() => setActive(tab.id)}
-            className="cursor-pointer border-b-3 border-transparent py-0.5 text-ink-soft hover:text-ink aria-selected:border-copper aria-selected:font-medium aria-selected:text-ink"
+            className="min-h-5.5 cursor-pointer border-b-3 border-transparent py-0.5 text-ink-soft medium:min-h-4 hover:text-ink aria-selected:border-copper aria-selected:font-medium aria-selected:text-ink"
           >
             {tab.label}
           </button>

@@ -115,7 +115,7 @@ function LiveCalculator(props: CalculatorProps) {
         <form
           key={active}
           aria-label="Inputs"
-          className="order-2 grid gap-2 wide:order-none"
+          className="order-2 grid gap-2 wide:order-none [&_:is(input,select,button,textarea)]:scroll-mt-10"
           onSubmit={(event) => event.preventDefault()}
         >
           <DimensionFields />

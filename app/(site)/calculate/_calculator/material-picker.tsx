@@ -27,7 +27,11 @@ export function MaterialPicker({ name }: { readonly name: string }) {
         label="Material"
         error={errorAt(name)}
         beside={
-          <Button variant="quiet" className="-my-1 min-h-3! px-0.5! py-0!" onClick={() => setBrowsing(true)}>
+          <Button
+            variant="quiet"
+            className="relative -my-1 min-h-3! px-0.5! py-0! before:absolute before:inset-x-0 before:-inset-y-1.5 before:content-['']"
+            onClick={() => setBrowsing(true)}
+          >
             Compare all
           </Button>
         }

@@ -24,7 +24,7 @@ export function MemberMenu({ members, chosen, onChoose }: MemberMenuProps) {
           const next = members.find(({ name }) => name === event.target.value);
           if (next) onChoose(next);
         }}
-        className="absolute -inset-y-1 inset-x-0 w-full cursor-pointer opacity-0"
+        className="absolute -inset-y-1.5 inset-x-0 w-full cursor-pointer opacity-0"
       >
         {members.map(({ name, label, symbol }) => (
           <option key={name} value={name}>

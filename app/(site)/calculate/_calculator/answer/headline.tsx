@@ -17,7 +17,7 @@ export function Headline({ result, stale }: HeadlineProps) {
     <div
       id="answer"
       aria-busy={stale}
-      className={`transition-opacity delay-300 duration-100 ${stale && result ? "opacity-60" : ""}`}
+      className={`scroll-mt-8 transition-opacity delay-300 duration-100 ${stale && result ? "opacity-60" : ""}`}
     >
       <h2 className="text-table font-normal text-ink-soft">Resistance between the terminals</h2>
       {result ? <Numbers result={result} /> : <NoNumbers />}

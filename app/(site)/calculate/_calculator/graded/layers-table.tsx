@@ -1,5 +1,6 @@
 "use client";
 
+import { type ReactNode, useState } from "react";
 import { ArrowUp, Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
 import { readRows, writeRows } from "../../_model/profile-forms";
@@ -7,7 +8,9 @@ import { useForm } from "../form-context";
 import { baseValue } from "../use-medium-switch";
 import { CellInput } from "./cell-input";
 import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
+import { type PointsReading, readPoints } from "./read-points";
 import { RowButton } from "./row-button";
+import { FileButton, MOST_ROWS_SHOWN, ReadingNotes, RowsText } from "./rows-text";
 import { spanText } from "./use-profile-switch";
 
 type Rows = readonly (readonly [string, string])[];
@@ -18,6 +21,10 @@ const TOLERANCE = 1e-9;
 /** Layers from the coordinate's start to its end, one row each. */
 export function LayersTable({ name, site }: { readonly name: string; readonly site: FieldSite }) {
   const { parameters, change, errorAt } = useForm();
+  const [notes, setNotes] = useState<PointsReading | null>(null);
+  /** Counts the changes that do not come from the text itself, which then starts anew. */
+  const [revision, setRevision] = useState(0);
+  const [asText, setAsText] = useState(false);
   const rows = readRows(parameters[name] ?? "");
   const kind = positionKind(site.span);
   const base = site.span?.unit ?? "m";
@@ -38,7 +45,42 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
   function scaleToFit() {
     if (sum === null || !site.span) return;
     const { span } = site;
+    setRevision((before) => before + 1);
     set(rows.map(([, value], i) => [spanText(((sizes[i] ?? 0) * span.extent) / sum, span), value] as const));
+  }
+
+  async function readFile(text: string) {
+    await read(text);
+    setRevision((before) => before + 1);
+  }
+
+  async function read(text: string) {
+    const reading = await readPoints(text);
+    setNotes(reading);
+    if (reading.rows.length > 0) set(reading.rows);
+  }
+
+  const long = rows.length > MOST_ROWS_SHOWN;
+  if (asText || long) {
+    return (
+      <div className="mb-1.5">
+        <RowsText
+          key={revision}
+          label="Layers, one a line"
+          columns="Thickness and value"
+          rows={rows}
+          onChange={(text) => {
+            setAsText(true);
+            void read(text);
+          }}
+        />
+        <LayersSum sum={sum} fits={fits} site={site} complaint={errorAt(name)} onFit={scaleToFit}>
+          {long ? null : <Button onClick={() => setAsText(false)}>Edit as a table</Button>}
+          <FileButton onText={readFile} />
+        </LayersSum>
+        <ReadingNotes reading={notes} />
+      </div>
+    );
   }
 
   return (
@@ -107,20 +149,46 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
           ))}
         </tbody>
       </table>
-      <p className="min-h-2.5 text-small text-oxide">{errorAt(name)}</p>
-      <div className="flex flex-wrap items-center gap-1">
+      <LayersSum sum={sum} fits={fits} site={site} complaint={errorAt(name)} onFit={scaleToFit}>
         <Button onClick={() => set([...rows, rows.at(-1) ?? ["", ""]])}>
           <Plus aria-hidden size={15} /> Layer
         </Button>
-        <Button onClick={scaleToFit} disabled={sum === null || extent === undefined || fits}>
+        <Button onClick={() => setAsText(true)}>Edit as text</Button>
+        <FileButton onText={readFile} />
+      </LayersSum>
+      <ReadingNotes reading={notes} />
+    </div>
+  );
+}
+
+interface LayersSumProps {
+  /** Of the thicknesses, in the coordinate's unit; null where one cannot be read. */
+  readonly sum: number | null;
+  readonly fits: boolean;
+  readonly site: FieldSite;
+  readonly complaint: string | undefined;
+  readonly onFit: () => void;
+  readonly children: ReactNode;
+}
+
+/** The buttons below the layers, and whether they fill the range. */
+function LayersSum({ sum, fits, site, complaint, onFit, children }: LayersSumProps) {
+  const { span } = site;
+  const known = span !== undefined && sum !== null;
+  return (
+    <>
+      <p className="min-h-2.5 text-small text-oxide">{complaint}</p>
+      <div className="flex flex-wrap items-center gap-1">
+        {children}
+        <Button onClick={onFit} disabled={!known || fits}>
           Scale to fit
         </Button>
         <p className={`text-small ${fits ? "text-ink-soft" : "text-amber"}`}>
-          {site.span === undefined || sum === null
-            ? "The sum is not known yet."
-            : `Together ${spanText(sum, site.span)} of ${spanText(site.span.extent, site.span)}`}
+          {known
+            ? `Together ${spanText(sum, span)} of ${spanText(span.extent, span)}`
+            : "The sum is not known yet."}
         </p>
       </div>
-    </div>
+    </>
   );
 }

@@ -1,30 +1,33 @@
 "use client";
 
-import { useId, useState } from "react";
+import { useState } from "react";
 import { Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
-import { CONTROL, Field } from "../../../../_ui/field";
 import { readRows, writeRows } from "../../_model/profile-forms";
 import { useForm } from "../form-context";
 import { CellInput } from "./cell-input";
 import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
 import { RowButton } from "./row-button";
+import { FileButton, MOST_ROWS_SHOWN, ReadingNotes, RowsText } from "./rows-text";
 import { readPoints, type PointsReading } from "./read-points";
 
 type Rows = readonly (readonly [string, string])[];
-
-/** Longer tables are edited as text. */
-const MOST_ROWS = 40;
 
 /** Measured points: typed row by row, pasted as text, or read from a CSV file. */
 export function PointsTable({ name, site }: { readonly name: string; readonly site: FieldSite }) {
   const { parameters, change, errorAt } = useForm();
   const [asText, setAsText] = useState(false);
   const [notes, setNotes] = useState<PointsReading | null>(null);
-  const fileId = useId();
+  /** Counts the changes that do not come from the text itself, which then starts anew. */
+  const [revision, setRevision] = useState(0);
   const rows = readRows(parameters[name] ?? "");
-  const long = rows.length > MOST_ROWS;
+  const long = rows.length > MOST_ROWS_SHOWN;
   const set = (next: Rows) => change({ [name]: writeRows(next) });
+
+  async function readFile(text: string) {
+    await read(text);
+    setRevision((before) => before + 1);
+  }
 
   async function read(text: string) {
     const reading = await readPoints(text);
@@ -35,7 +38,16 @@ export function PointsTable({ name, site }: { readonly name: string; readonly si
   return (
     <div className="mb-1.5">
       {asText || long ? (
-        <PointsText key={`${name}${asText}`} rows={rows} onRead={read} />
+        <RowsText
+          key={revision}
+          label="Points, one a line"
+          columns="Position and value"
+          rows={rows}
+          onChange={(text) => {
+            setAsText(true);
+            void read(text);
+          }}
+        />
       ) : (
         <table className="w-full border-collapse text-table">
           <caption className="mb-0.5 text-start text-table">Points, by increasing position</caption>
@@ -93,41 +105,20 @@ export function PointsTable({ name, site }: { readonly name: string; readonly si
       <div className="flex flex-wrap items-center gap-1">
         {long ? null : (
           <>
-            <Button onClick={() => set([...rows, rows.at(-1) ?? ["", ""]])} disabled={asText}>
-              <Plus aria-hidden size={15} /> Point
-            </Button>
+            {asText ? null : (
+              <Button onClick={() => set([...rows, rows.at(-1) ?? ["", ""]])}>
+                <Plus aria-hidden size={15} /> Point
+              </Button>
+            )}
             <Button aria-pressed={asText} onClick={() => setAsText(!asText)}>
               {asText ? "Edit as a table" : "Edit as text"}
             </Button>
           </>
         )}
-        <label
-          htmlFor={fileId}
-          className="inline-flex min-h-5.5 cursor-pointer items-center rounded border border-edge bg-sheet px-2 text-table font-medium hover:border-ink has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-verdigris medium:min-h-5"
-        >
-          Read a CSV file
-          <input
-            id={fileId}
-            type="file"
-            accept=".csv,.txt,.tsv,text/csv,text/plain"
-            className="sr-only"
-            onChange={async (event) => {
-              const file = event.target.files?.[0];
-              event.target.value = "";
-              if (file) await read(await file.text());
-            }}
-          />
-        </label>
+        <FileButton onText={readFile} />
         <p className="text-small text-ink-soft">{rows.length} points</p>
       </div>
-      <div aria-live="polite" className="text-small">
-        {notes?.problems.slice(0, 5).map((problem) => (
-          <p key={problem} className="text-oxide">
-            {problem}
-          </p>
-        ))}
-        {notes?.note ? <p className="text-ink-soft">{notes.note}</p> : null}
-      </div>
+      <ReadingNotes reading={notes} />
     </div>
   );
 }
@@ -145,33 +136,4 @@ function firstInside(
     if (found) return `Point ${i + 1}: ${found}`;
   }
   return undefined;
-}
-
-interface PointsTextProps {
-  readonly rows: Rows;
-  readonly onRead: (text: string) => void;
-}
-
-function PointsText({ rows, onRead }: PointsTextProps) {
-  const [text, setText] = useState(() => rows.map((row) => row.join("; ")).join("\n"));
-  return (
-    <Field
-      label="Points, one a line"
-      help="Position and value, with a tab, a semicolon or a comma between them; a first line may carry names and units, such as radius/mm; conductivity/(S/m)."
-    >
-      {(control) => (
-        <textarea
-          {...control}
-          rows={8}
-          value={text}
-          spellCheck={false}
-          onChange={(event) => {
-            setText(event.target.value);
-            onRead(event.target.value);
-          }}
-          className={`${CONTROL} resize-y`}
-        />
-      )}
-    </Field>
-  );
 }

@@ -1,0 +1,79 @@
+"use client";
+
+import { useId, useState } from "react";
+import { CONTROL, Field } from "../../../../_ui/field";
+import type { PointsReading } from "./read-points";
+
+/** Longer tables are edited as text. */
+export const MOST_ROWS_SHOWN = 40;
+
+interface RowsTextProps {
+  readonly label: string;
+  /** What the two columns are. */
+  readonly columns: string;
+  readonly rows: readonly (readonly [string, string])[];
+  readonly onChange: (text: string) => void;
+}
+
+/** The rows of a table as text: to paste into, and for tables too long to show row by row. */
+export function RowsText({ label, columns, rows, onChange }: RowsTextProps) {
+  const [text, setText] = useState(() => rows.map((row) => row.join("; ")).join("\n"));
+  return (
+    <Field
+      label={label}
+      help={`${columns}, with a tab, a semicolon or a comma between them; a first line may carry names and units, such as radius/mm; conductivity/(S/m).`}
+    >
+      {(control) => (
+        <textarea
+          {...control}
+          rows={8}
+          value={text}
+          spellCheck={false}
+          onChange={(event) => {
+            setText(event.target.value);
+            onChange(event.target.value);
+          }}
+          className={`${CONTROL} resize-y`}
+        />
+      )}
+    </Field>
+  );
+}
+
+/** Reads a CSV file from the reader's disk. */
+export function FileButton({ onText }: { readonly onText: (text: string) => void }) {
+  const id = useId();
+  return (
+    <label
+      htmlFor={id}
+      className="inline-flex min-h-5.5 cursor-pointer items-center rounded border border-edge bg-sheet px-2 text-table font-medium hover:border-ink has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-verdigris medium:min-h-5"
+    >
+      Read a CSV file
+      <input
+        id={id}
+        type="file"
+        accept=".csv,.txt,.tsv,text/csv,text/plain"
+        className="sr-only"
+        onChange={async (event) => {
+          const file = event.target.files?.[0];
+          event.target.value = "";
+          if (file) onText(await file.text());
+        }}
+      />
+    </label>
+  );
+}
+
+/** What was understood of a text, and what was not. */
+export function ReadingNotes({ reading }: { readonly reading: PointsReading | null }) {
+  return (
+    <div aria-live="polite" className="text-small">
+      {reading?.problems.slice(0, 5).map((problem) => (
+        <p key={problem} className="text-oxide">
+          {problem}
+        </p>
+      ))}
+      {reading?.note ? <p className="text-ink-soft">{reading.note}</p> : null}
+    </div>
+  );
+}
