@@ -70,8 +70,13 @@ class ChannelBuilder {
     const height = ux * (xy[2 * v + 1] - xy[2 * p + 1]) - uy * (xy[2 * v] - xy[2 * p]);
     if (height * LEAST_LENGTH > ux * ux + uy * uy) return false;
     // Round the apex to its border, both ways.
-    let out = nextEdge(nextEdge(h));
-    while (twin[out] >= 0) out = nextEdge(twin[out]);
+    const first = nextEdge(nextEdge(h));
+    let out = first;
+    while (twin[out] >= 0) {
+      out = nextEdge(twin[out]);
+      // An apex inside the conductor (a corner of a region) has no border.
+      if (out === first) return false;
+    }
     let into = nextEdge(h);
     while (twin[into] >= 0) into = previousEdge(twin[into]);
     for (const other of [out, into]) {
