@@ -208,6 +208,32 @@ describe("three terminals", () => {
   });
 });
 
+describe("three arcs of a disc", () => {
+  it("of sixty degrees with gaps of sixty: a star of arms 1/√3, since the disc is its own dual", () => {
+    // Terminals and gaps change places under a turn: the triangle 3r of the star r is also its dual 1/r.
+    const at = (k: number): [number, number] => [Math.cos((k * Math.PI) / 3), Math.sin((k * Math.PI) / 3)];
+    const outline = accept(
+      {
+        unit: "m",
+        outer: Array.from({ length: 6 }, (_, k) => ({ arcTo: at(k), center: [0, 0] as [number, number] })),
+        holes: [],
+      },
+      [0, 2, 4].map((edge) => ({ name: `t${edge}`, parts: [{ ring: 0, edge }] })),
+    );
+    for (const accuracy of [1e-2, 1e-4]) {
+      const solution = solveField({ outline, conductance: [1] }, { accuracy });
+      expect(solution.status).toBe("done");
+      expect(solution.proved).toBe(true);
+      for (const { floating, grounded } of solution.pairs ?? []) {
+        expectHolds(floating, 2 / Math.sqrt(3));
+        expectHolds(grounded, Math.sqrt(3));
+        expect((floating.upper - floating.lower) / floating.value).toBeLessThanOrEqual(accuracy);
+        expect((grounded.upper - grounded.lower) / grounded.value).toBeLessThanOrEqual(accuracy * 1.001);
+      }
+    }
+  });
+});
+
 describe("terminals in every position", () => {
   const outer: [number, number][] = [
     [0, 0],
