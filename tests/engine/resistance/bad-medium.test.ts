@@ -95,7 +95,7 @@ describe("graded media", () => {
       at("/layers/1/value"),
       /interrupt/,
     ],
-    ["no layers", profile({ kind: "layers", layers: [] }), at("/layers"), /at least 1/],
+    ["no layers", profile({ kind: "layers", layers: [] }), at("/layers"), /must not be empty/],
     [
       "a table that does not cover the range",
       profile({ kind: "table", positions: [0, 0.9], values: [1, 2] }),
