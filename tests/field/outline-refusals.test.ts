@@ -312,6 +312,14 @@ describe("several complaints at once", () => {
     expect(found.some((f) => f.startsWith("#/outline/outer/2"))).toBe(true);
   });
 
+  it("fifty at most", () => {
+    const segments = Array.from({ length: 300 }, (_, i): [[number, number], [number, number]] => [
+      [100 + i, 100],
+      [100 + i, 101],
+    ]);
+    expect(refusals(BEND, [{ name: "a", segments }, BEND_TERMINALS[1]])).toHaveLength(50);
+  });
+
   it("a sound outline has none", () => {
     expect(refusals(BEND, BEND_TERMINALS)).toEqual([]);
   });

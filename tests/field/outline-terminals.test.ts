@@ -183,6 +183,7 @@ describe("terminals that are refused", () => {
     expect(part({ ring: 0, edge: 1, from: 0.5, to: 0.5 })).toContain(
       "#/terminals/0/parts/0: The part has no length",
     );
+    expect(part({ ring: 0, edge: 1, from: 0.5, to: 0.5 + 1e-13 })).toContain("The part has no length");
     const repeated = { ...BEND, outer: [...BEND.outer.slice(0, 2), BEND.outer[1], ...BEND.outer.slice(2)] };
     expect(refusals(repeated, [{ name: "in", parts: [{ ring: 0, edge: 1 }] }, out])[0]).toContain(
       "Edge 1 of the outer ring has no length",

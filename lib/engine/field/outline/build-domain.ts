@@ -13,7 +13,8 @@ const straight = new WeakMap<CheckedOutline, Domain>();
 /**
  * The outline as straight segments in the domain's frame. Without arcs every role gives the same object. With arcs, "upper"
  * and "lower" give domains whose exact resistances are no smaller and no larger than that of the outline;
- * `chordTolerance` (units of the domain, 1e-12 … 0.1) says how far chords or tangents may stray from an arc.
+ * `chordTolerance` (units of the domain, 1e-12 … 0.1) says how far chords or tangents may stray from
+ * an arc; it is taken coarser where the drawing would have more than 400,000 points.
  */
 export function buildDomain(outline: CheckedOutline, role: Role, chordTolerance = DEFAULT_CHORDS): Domain {
   const known = straight.get(outline);

@@ -17,6 +17,8 @@ const SMALLEST_EXTENT_M = 1e-12;
 const LARGEST_M = 1e12;
 /** The rounding of the coordinates may be this share of the extent at most. */
 const COARSEST_GRAIN = 1e-6;
+/** Complaints that are answered at most; a drawing that is wrong throughout needs no list of all its edges. */
+const MOST_ERRORS = 50;
 /** Chords of the check, in units of the domain; conflicts make them finer. */
 export const CHECK_CHORDS = 1e-3;
 
@@ -35,13 +37,19 @@ export type OutlineCheck =
 
 /**
  * Checks an outline with its terminals, repairs what is harmless and refuses the rest with pointers into the request.
- * The request must have passed `outlineSchema` and `terminalSchema`. Takes n log n time. An outline that is only
- * stored needs no terminals yet.
+ * The request must have passed `outlineSchema` and `terminalSchema`. Takes n log n time; at most 50 complaints. An
+ * outline that is only stored needs no terminals yet.
  */
 export function checkOutline(
   request: OutlineRequest,
   { leastTerminals = 2 }: { readonly leastTerminals?: number } = {},
 ): OutlineCheck {
+  const result = checkStepwise(request, leastTerminals);
+  return result.ok ? result : { ok: false, errors: result.errors.slice(0, MOST_ERRORS) };
+}
+
+/** Later checks rest on earlier ones, so that a failed step may end the list. */
+function checkStepwise(request: OutlineRequest, leastTerminals: number): OutlineCheck {
   const { outline, terminals } = request;
   const rings = [outline.outer, ...outline.holes];
   const pointers = rings.map((_, r) => ringPointer(r));

@@ -2,7 +2,7 @@ import { carveDomain } from "../mesh/planar-graph";
 import { chordCount } from "./arc";
 import { describeConflicts, describeNesting, describeRegionFaults } from "./complain";
 import { findConflicts, type Conflict } from "./conflicts";
-import { drawOutline, type DrawnOutline, type Drawing, type Role } from "./draw";
+import { affordableTolerance, drawOutline, type DrawnOutline, type Drawing, type Role } from "./draw";
 import { nestRings } from "./nesting";
 import type { OutlineError } from "./schema";
 
@@ -19,7 +19,7 @@ export function drawClear(
   chordTolerance: number,
 ): { drawing: Drawing; errors: OutlineError[] } {
   for (;;) {
-    const drawing = drawOutline(outline, role, chordTolerance);
+    const drawing = drawOutline(outline, role, affordableTolerance(outline, chordTolerance));
     const { conflicts, mesh } = findConflicts(drawing.domain, outline.frame.touch);
     if (conflicts.length > 0) {
       if (refineArcs(outline, drawing, conflicts, chordTolerance)) continue;

@@ -35,6 +35,22 @@ export interface Drawing {
   readonly overlaps: ReadonlyArray<readonly [number, number]>;
 }
 
+/** Most points of a drawing; chords are made coarser rather than more. */
+const MOST_POINTS = 400_000;
+
+/** The chord tolerance itself, or the next coarser one by powers of four with which the drawing has not too many points. */
+export function affordableTolerance(outline: DrawnOutline, chordTolerance: number): number {
+  for (let tolerance = chordTolerance; ; tolerance *= 4) {
+    let points = 0;
+    outline.rings.forEach((ring, r) => {
+      ring.arcs.forEach((arc, edge) => {
+        points += arc === null ? 1 : chordCount(arc, 1, tolerance, outline.leastChords[r][edge]);
+      });
+    });
+    if (points <= MOST_POINTS || tolerance > 1) return tolerance;
+  }
+}
+
 /** Draws an outline as straight segments; `chordTolerance` in units of the domain. */
 export function drawOutline(outline: DrawnOutline, role: Role, chordTolerance: number): Drawing {
   const pen = new Pen();

@@ -1,5 +1,13 @@
 import type { EdgeIndex, BoundaryPoint } from "./edge-index";
-import { showDomainPoint, showLength, showPoint, toDomainX, toDomainY, type Frame } from "./frame";
+import {
+  showDomainPoint,
+  showLength,
+  showNumber,
+  showPoint,
+  toDomainX,
+  toDomainY,
+  type Frame,
+} from "./frame";
 import { edgeCount, edgeLength, nearestOnEdge, ringPoint, type Ring } from "./ring";
 import type { OutlineError, Point, TerminalInput } from "./schema";
 
@@ -67,10 +75,10 @@ function readPart(
   const high = Math.max(part.from, part.to);
   const t0 = snapAlong(ring, edge, submittedParameter(ring, edge, part.edge, low), frame.touch);
   const t1 = snapAlong(ring, edge, submittedParameter(ring, edge, part.edge, high), frame.touch);
-  if (!(t1 > t0)) {
+  if (!((t1 - t0) * edgeLength(ring, edge) > frame.touch)) {
     return {
       pointer,
-      detail: `The part has no length: it runs from ${part.from} to ${part.to} of edge ${part.edge}.`,
+      detail: `The part has no length: it runs from ${showNumber(part.from)} to ${showNumber(part.to)} of edge ${part.edge}.`,
     };
   }
   return { ring: ring.number, start: edge + t0, end: edge + t1, terminal, pointer };
