@@ -40,7 +40,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
       role="group"
       aria-label={caption}
       style={{ maxHeight }}
-      className="overflow-auto rounded border border-rule bg-sheet"
+      className="relative overflow-auto rounded border border-rule bg-sheet"
     >
       <table className="w-full border-collapse text-table">
         <caption className={captionShown ? "px-1.5 py-1 text-start text-small text-ink-soft" : "sr-only"}>

@@ -52,7 +52,12 @@ describe("a quantity's field", () => {
     await settled(wire.page);
     const [body] = bodiesOf(await addressOf(wire.page));
     expect(body.dimensions.diameter).toBe("AWG 24");
-    expect(await settled(wire.page)).toBe((await ask(bench.key, body)).resistance.text);
+    const shown = await settled(wire.page);
+    expect(shown).toBe((await ask(bench.key, body)).resistance.text);
+    // A gauge converts to a diameter; it is no number of millimetres.
+    await unitOf(wire.page, "Diameter").selectOption("mm");
+    expect(await input(wire.page, "diameter").inputValue()).toMatch(/^0\.51054/);
+    expect(await settled(wire.page)).toBe(shown);
     await wire.close();
   });
 

@@ -34,6 +34,14 @@ describe.each(catalogue.map((shape) => [shape.id, shape] as const))("%s", (id, s
     const second = await ask(bench.key, body);
     expect(await settled(page)).toBe(second.resistance.text);
     expect(complaints).toEqual([]);
+
+    for (const width of [360, 768]) {
+      await page.setViewportSize({ width, height: 800 });
+      const excess = await page.evaluate(
+        () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+      );
+      expect([width, excess]).toEqual([width, 0]);
+    }
     await close();
   });
 });

@@ -8,6 +8,7 @@ import {
   splitQuantity,
 } from "@/app/_ui/quantity/quantity-text";
 import { decimalText, rational } from "@/app/_ui/quantity/rational";
+import { gaugeMm } from "@/app/_ui/quantity/gauge";
 import { readTyped } from "@/app/_ui/quantity/read-typed";
 import { FIRST_UNIT, findUnit, UNITS, unitsOf, type UnitKind } from "@/app/_ui/quantity/units";
 import { readQuantity } from "@/lib/engine";
@@ -166,6 +167,17 @@ describe("convertUnit", () => {
       ),
       { seed: 5, numRuns: 500 },
     );
+  });
+});
+
+describe("gaugeMm", () => {
+  it("is the diameter that the API reads", () => {
+    for (const gauge of ["AWG 24", "10 AWG", "AWG 0", "AWG 4/0", "awg 36"]) {
+      const reading = readQuantity(gauge, "length", { gauge: "wire" });
+      expect(reading.ok && Math.abs(Number(gaugeMm(gauge)) / 1000 / reading.value - 1)).toBeLessThan(1e-14);
+    }
+    expect(gaugeMm("24 mm")).toBeNull();
+    expect(gaugeMm("")).toBeNull();
   });
 });
 

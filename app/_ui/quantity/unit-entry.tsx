@@ -2,7 +2,8 @@
 
 import { useState } from "react";
 import type { ControlProps } from "../field";
-import { convertUnit } from "./convert";
+import { convertUnit, numberText } from "./convert";
+import { gaugeMm } from "./gauge";
 import { joinQuantity, splitQuantity } from "./quantity-text";
 import { readTyped } from "./read-typed";
 import { FIRST_UNIT, findUnit, type Unit, type UnitKind, unitsOf } from "./units";
@@ -49,21 +50,22 @@ export function UnitEntry(props: UnitEntryProps) {
   } = props;
   const units = unitsOf(kind, foil);
   const [draft, setDraft] = useState<string | null>(null);
-  const [emptyUnit, setEmptyUnit] = useState(bareUnit ?? FIRST_UNIT[kind]);
+  const [emptyUnit, setEmptyUnit] = useState((placeholder && bareUnit) || FIRST_UNIT[kind]);
   const [origin, setOrigin] = useState<Origin | null>(null);
 
   const parts = splitQuantity(value, units);
-  const gauge = /AWG/i.test(value);
+  const gauge = gaugeMm(value);
   const bare = findUnit(bareUnit ?? BASE_UNITS[kind] ?? "", units);
   const current =
     parts.unit ??
-    (parts.foreign !== undefined || gauge
+    (parts.foreign !== undefined || gauge !== null
       ? undefined
       : parts.number === ""
         ? findUnit(emptyUnit, units)
         : bare);
-  const foreign = gauge ? "AWG" : parts.foreign;
-  const invalid = control["aria-invalid"] === true;
+  const foreign = gauge === null ? parts.foreign : "AWG";
+  /** A unit that only the API knows cannot be converted here; one that is wrong may be replaced. */
+  const fixed = parts.foreign !== undefined && gauge === null && control["aria-invalid"] !== true;
 
   function type(text: string) {
     setDraft(text);
@@ -88,13 +90,21 @@ export function UnitEntry(props: UnitEntryProps) {
       setEmptyUnit(id);
       return;
     }
-    const from =
-      origin?.text === value ? origin : current && { text: value, number: parts.number, unit: current };
+    const from = origin?.text === value ? origin : present();
     const number = from ? convertUnit(from.number, from.unit, target) : parts.number;
     if (number === null) return;
     const text = joinQuantity(number, target.id);
     onChange(text);
     setOrigin(from ? { ...from, text } : null);
+  }
+
+  /** What stands in the field, as something to convert; undefined where only the API could tell. */
+  function present(): Origin | undefined {
+    const millimetre = findUnit("mm", units);
+    if (gauge !== null && millimetre) {
+      return { text: value, number: numberText(gauge, 14), unit: millimetre };
+    }
+    return current && { text: value, number: parts.number, unit: current };
   }
 
   const shown = units.filter((unit) => !unit.hidden || unit.id === current?.id);
@@ -103,7 +113,7 @@ export function UnitEntry(props: UnitEntryProps) {
       <input
         {...control}
         name={name}
-        value={draft ?? (gauge ? value : parts.number)}
+        value={draft ?? (gauge === null ? parts.number : value)}
         placeholder={placeholder}
         onChange={(event) => type(event.target.value)}
         onFocus={() => onFocusChange?.(true)}
@@ -122,13 +132,8 @@ export function UnitEntry(props: UnitEntryProps) {
         <select
           aria-label={`Unit of ${label}`}
           value={foreign ?? current?.id ?? ""}
-          // A unit that only the API knows cannot be converted here; a wrong one may be replaced.
-          disabled={foreign !== undefined && !gauge && !invalid}
-          title={
-            foreign !== undefined && !gauge && !invalid
-              ? "Type another unit after the number to change it"
-              : undefined
-          }
+          disabled={fixed}
+          title={fixed ? "Type another unit after the number to change it" : undefined}
           onChange={(event) => convertTo(event.target.value)}
           className="min-h-5.5 shrink-0 cursor-pointer rounded border-s border-rule bg-transparent ps-0.5 font-mono text-table text-ink medium:min-h-5"
         >

@@ -145,6 +145,7 @@ function LiveCalculator(props: CalculatorProps) {
             variants={variants}
             answers={answers}
             active={active}
+            materials={materials}
           />
         </section>
       ) : null}

@@ -22,7 +22,7 @@ export function Cautions({ cautions }: { readonly cautions: readonly string[] })
 /** The engine's checks on this answer. */
 export function Checks({ checks }: { readonly checks: NonNullable<ResistanceResult["checks"]> }) {
   return (
-    <div className="overflow-x-auto" tabIndex={0} role="group" aria-label="Checks">
+    <div className="relative overflow-x-auto" tabIndex={0} role="group" aria-label="Checks">
       <table className="w-full border-collapse text-table">
         <thead className="text-small text-ink-soft">
           <tr>

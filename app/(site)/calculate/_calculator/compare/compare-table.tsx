@@ -8,6 +8,7 @@ import { Toggle } from "../../../../_ui/toggle";
 import { orderedPairs, type Parameters } from "../../_model/parameters";
 import { differingNames, VARIANT_NAMES } from "../../_model/variants";
 import type { FormDimension } from "../../_server/form-facts";
+import type { MaterialChoice } from "../../_server/material-choices";
 import type { Answer } from "../use-answer";
 import { parameterLabel, parameterText } from "./parameter-words";
 import { VERDICTS } from "../answer/words";
@@ -18,10 +19,11 @@ interface CompareTableProps {
   readonly variants: readonly Parameters[];
   readonly answers: readonly Answer[];
   readonly active: number;
+  readonly materials: readonly MaterialChoice[];
 }
 
 /** Two to four variants side by side: inputs, with those that differ marked, and answers against the first. */
-export function CompareTable({ entry, dimensions, variants, answers, active }: CompareTableProps) {
+export function CompareTable({ entry, dimensions, variants, answers, active, materials }: CompareTableProps) {
   const [onlyDifferent, setOnlyDifferent] = useState(true);
   const differing = new Set(differingNames(variants, entry));
   const all = orderedPairs(Object.assign({}, ...variants) as Parameters, entry).map(([name]) => name);
@@ -30,7 +32,7 @@ export function CompareTable({ entry, dimensions, variants, answers, active }: C
   return (
     <>
       <div
-        className="overflow-x-auto rounded border border-rule bg-sheet"
+        className="relative overflow-x-auto rounded border border-rule bg-sheet"
         tabIndex={0}
         role="group"
         aria-label="Comparison"
@@ -78,6 +80,7 @@ export function CompareTable({ entry, dimensions, variants, answers, active }: C
                 name={name}
                 entry={entry}
                 dimensions={dimensions}
+                materials={materials}
                 variants={variants}
                 differs={differing.has(name)}
               />
@@ -146,11 +149,12 @@ interface InputRowProps {
   readonly name: string;
   readonly entry: ShapeEntry;
   readonly dimensions: readonly FormDimension[];
+  readonly materials: readonly MaterialChoice[];
   readonly variants: readonly Parameters[];
   readonly differs: boolean;
 }
 
-function InputRow({ name, entry, dimensions, variants, differs }: InputRowProps) {
+function InputRow({ name, entry, dimensions, materials, variants, differs }: InputRowProps) {
   const { label, symbol } = parameterLabel(name, entry, dimensions);
   return (
     <tr className="border-t border-rule align-top">
@@ -170,7 +174,7 @@ function InputRow({ name, entry, dimensions, variants, differs }: InputRowProps)
           title={variant[name]}
         >
           {name in variant ? (
-            parameterText(name, variant[name], entry)
+            parameterText(name, variant[name], entry, materials)
           ) : (
             <span className="text-ink-soft">–</span>
           )}

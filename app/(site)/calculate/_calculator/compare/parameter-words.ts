@@ -1,6 +1,7 @@
 /** Names and texts of parameters for people. */
 import type { ShapeEntry } from "@/lib/engine";
 import { PROFILE_FORMS, readRows } from "../../_model/profile-forms";
+import type { MaterialChoice } from "../../_server/material-choices";
 import type { FormDimension } from "../../_server/form-facts";
 
 const WORDS: Readonly<Record<string, string>> = {
@@ -57,7 +58,13 @@ const SIGNS: readonly (readonly [RegExp, string])[] = [
 ];
 
 /** A parameter's text as people write it: units with their signs, choices by their labels. */
-export function parameterText(name: string, value: string, entry: ShapeEntry): string {
+export function parameterText(
+  name: string,
+  value: string,
+  entry: ShapeEntry,
+  materials: readonly MaterialChoice[],
+): string {
+  if (/(?:^|\.)material$/.test(name)) return materials.find(({ id }) => id === value)?.name ?? value;
   const dimension = entry.dimensions.find((own) => own.name === name);
   const choice = dimension?.choices?.find((own) => own.value === value);
   if (choice) return choice.label;
