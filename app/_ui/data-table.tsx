@@ -10,6 +10,8 @@ export interface Column<Row> {
   /** What the column sorts by; without it the column does not sort. */
   readonly sortBy?: (row: Row) => number | string;
   readonly align?: "start" | "end";
+  /** A length of CSS; a table wider than its frame scrolls. */
+  readonly minWidth?: string;
 }
 
 interface DataTableProps<Row> {
@@ -59,6 +61,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
               {columns.map((column) => (
                 <td
                   key={column.key}
+                  style={{ minWidth: column.minWidth }}
                   className={`px-1.5 py-0.5 align-top ${column.align === "end" ? "text-end font-mono whitespace-nowrap" : ""}`}
                 >
                   {column.cell(row)}

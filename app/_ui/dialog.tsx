@@ -24,7 +24,7 @@ export function Dialog({ open, onOpenChange, title, description, children, actio
         <Primitive.Overlay className="fixed inset-0 z-30 bg-[rgb(0_0_0/0.5)]" />
         <Primitive.Content
           {...(description ? {} : { "aria-describedby": undefined })}
-          className={`fixed inset-x-2 top-1/2 z-40 mx-auto flex max-h-[calc(100dvh-32px)] -translate-y-1/2 flex-col rounded border border-ink bg-sheet outline-none ${wide ? "max-w-[52rem]" : "max-w-[32rem]"}`}
+          className={`fixed inset-x-2 top-1/2 z-40 mx-auto flex max-h-[calc(100dvh-32px)] -translate-y-1/2 flex-col rounded border border-ink bg-sheet outline-none ${wide ? "max-w-[68rem]" : "max-w-[32rem]"}`}
         >
           <div className="flex items-start gap-2 border-b border-rule px-2 py-1.5">
             <div className="grow">

@@ -52,6 +52,7 @@ export function MaterialBrowser({ materials, chosen, onChoose, onClose }: Materi
           {
             key: "name",
             title: "Material",
+            minWidth: "10rem",
             sortBy: ({ name }) => name,
             cell: (material) => (
               <Button
@@ -63,7 +64,6 @@ export function MaterialBrowser({ materials, chosen, onChoose, onClose }: Materi
               </Button>
             ),
           },
-          { key: "kind", title: "Kind", sortBy: ({ kind }) => kind, cell: ({ kind }) => kind },
           {
             key: "rho",
             title: "ρ",
@@ -71,16 +71,23 @@ export function MaterialBrowser({ materials, chosen, onChoose, onClose }: Materi
             sortBy: ({ resistivityOhmM }) => resistivityOhmM ?? Infinity,
             cell: ({ resistivityText }) => resistivityText ?? "–",
           },
-          { key: "spread", title: "Spread", cell: ({ uncertainty }) => spreadText(uncertainty) },
+          {
+            key: "spread",
+            title: "Spread",
+            minWidth: "7rem",
+            cell: ({ uncertainty }) => spreadText(uncertainty),
+          },
           {
             key: "range",
             title: "Range",
             align: "end",
             cell: ({ range }) => `${range.from} … ${range.to} °C`,
           },
+          { key: "kind", title: "Kind", sortBy: ({ kind }) => kind, cell: ({ kind }) => kind },
           {
             key: "source",
             title: "Source",
+            minWidth: "22rem",
             cell: ({ source, provenance, version }) => `${source} (${provenance}, version ${version})`,
           },
         ]}
