@@ -2,12 +2,8 @@ import { describe, expect, it } from "vitest";
 import { makeElements } from "@/lib/engine/field/assembly/elements";
 import { factorPanel, subtractBorder } from "@/lib/engine/field/solve/dense";
 import { dissect } from "@/lib/engine/field/solve/dissection";
-import {
-  factorise,
-  InterruptedError,
-  SingularMatrixError,
-  substitute,
-} from "@/lib/engine/field/solve/factor";
+import { factorise, SingularMatrixError, substitute } from "@/lib/engine/field/solve/factor";
+import { InterruptedError } from "@/lib/engine/field/solve/interruption";
 import { localUnknowns, MOST_OUTER } from "@/lib/engine/field/solve/assemble";
 import { localTerms } from "@/lib/engine/field/solve/terms";
 import type { LinearSystem } from "@/lib/engine/field/solve/system";

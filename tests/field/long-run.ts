@@ -34,7 +34,7 @@ export function solveRandom(random: RandomOutline, accuracy: number): FieldSolut
   if (!checked.ok) return null;
   return solveField(
     { outline: checked.outline, conductance: random.conductance },
-    { accuracy, maximumUnknowns: 30_000 },
+    { accuracy, maximumUnknowns: 20_000 },
   );
 }
 
@@ -47,7 +47,7 @@ function bracketOf(solution: FieldSolution): { lower: number; upper: number } {
 
 const COARSE = 1e-2;
 /** Every tenth outline is solved more narrowly. */
-const FINE = 1e-4;
+const FINE = 3e-4;
 const FINEST = 1e-6;
 
 function tryOutline(seed: number, tally: Tally): void {

@@ -98,7 +98,7 @@ export class FieldMediumError extends Error {
 const DEFAULT_UNKNOWNS = 500_000;
 const DEFAULT_REFINEMENTS = 40;
 
-export { InterruptedError } from "./solve/factor";
+export { InterruptedError } from "./solve/interruption";
 
 /**
  * Solves a checked outline. Throws `FieldMediumError` if a conductance is not a positive number, and `InterruptedError`

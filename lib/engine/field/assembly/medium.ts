@@ -5,8 +5,12 @@
 import { condenseAtAxis } from "../element/axis-interior";
 import { condense, LARGEST_ELEMENT } from "../element/condense";
 import { fillSampledStiffness, interiorFromOuter, sampleTable } from "../element/sampled";
+import { Interruption } from "../solve/interruption";
 import { axisEdgeOf, axisVertexOf, type AxisEdges } from "./axis";
 import { allocateCondensed, turnEdges, type CondensedMatrices, type ElementSet } from "./elements";
+
+/** Sampled triangles after which the caller is asked whether to go on: some milliseconds. */
+export const ASK_AFTER = 200;
 
 /** Conductivity as a function of the domain's coordinates. */
 export type ConductivityFunction = (x: number, y: number) => number;
@@ -128,6 +132,7 @@ export function sampleElements(
   functionOf: ReadonlyArray<ConductivityFunction | null>,
   revolution: boolean,
   axis: AxisEdges | null,
+  shouldStop: () => boolean,
 ): { potential: SampledMatrices; stream: SampledMatrices } {
   const recoveryStart = new Int32Array(set.triangleCount + 1);
   for (let t = 0; t < set.triangleCount; t++) {
@@ -143,9 +148,11 @@ export function sampleElements(
   const result = { potential: make(), stream: make() };
   const work = new Float64Array(LARGEST_ELEMENT * LARGEST_ELEMENT);
   let rows = new Float64Array(0);
+  const interruption = new Interruption(shouldStop, ASK_AFTER);
   for (let t = 0; t < set.triangleCount; t++) {
     const sigma = functionOf[t];
     if (!sigma) continue;
+    interruption.spend(1);
     const layout = set.layouts[t];
     const rule = elementRule(set, t, revolution, axis);
     const table = sampleTable(rule.matrixDegree, rule.crowdedVertex);

@@ -5,7 +5,8 @@
 import { countFunctions, makeElements } from "../assembly/elements";
 import type { MediumList } from "../assembly/medium";
 import type { FieldMesh } from "../mesh/mesh";
-import { InterruptedError, SingularMatrixError } from "../solve/factor";
+import { SingularMatrixError } from "../solve/factor";
+import { InterruptedError } from "../solve/interruption";
 import { solvePair, type SolvedPair } from "../solve/pair";
 import type { BoundaryReference } from "./displacement";
 import { fieldEnergies, type FieldEnergies } from "./energies";
@@ -66,8 +67,13 @@ const HIGHEST_ORDER = 8;
 /** The refinement aims at this part of the accuracy, since its predictions scatter. */
 const AIM = 0.6;
 
-/** Steps without a gain of a tenth after which rounding is taken to be in the way. */
+/** While the bracket is wider than this, local gaps say little: then they are not brought down further than so in a step. */
+const VAGUE = 0.3;
+const LEAST_FACTOR = 0.05;
+
+/** Steps without a gain of a tenth after which rounding is taken to be in the way; more while the bracket is vague. */
 const IDLE_STEPS = 3;
+const VAGUE_IDLE_STEPS = 12;
 
 /**
  * Throws `InterruptedError` or `SingularMatrixError` only if there is no bracket yet. A first mesh that is above the
@@ -83,9 +89,13 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
   let idle = 0;
   for (let refinements = 0; ; refinements++) {
     let pair: SolvedPair;
+    let energies: FieldEnergies;
     try {
       const { revolution = false } = input;
       pair = solvePair({ ...current, medium, terminalCount, revolution, shouldStop: limits.shouldStop });
+      const displacement = input.reference ? input.reference.displacements(current.mesh) : null;
+      const weight = last ? fieldWeights(last.energies, terminalCount - 1) : pair.potentials.map(() => 1);
+      energies = fieldEnergies(pair, weight, displacement, limits.shouldStop);
     } catch (error) {
       if (!last) throw error;
       if (error instanceof InterruptedError) return { ...last, limit: "stopped" };
@@ -95,9 +105,10 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
     if (refinements === 0) {
       singular = singularVertices(current.mesh, pair.runs, representativeSigma(current.mesh, medium));
     }
-    const displacement = input.reference ? input.reference.displacements(current.mesh) : null;
-    const weight = last ? fieldWeights(last.energies, terminalCount - 1) : pair.potentials.map(() => 1);
-    const energies = fieldEnergies(pair, weight, displacement);
+    // Where a higher order brought hardly anything, the field is not smooth: the next step bisects.
+    for (let t = 0; t < energies.gap.length; t++) {
+      if (energies.gap[t] > current.disappointment[t]) energies.decay[t] = 1;
+    }
     goal.update(pair, energies);
     const { resistance } = goal.reached;
     const triangles = current.order.length;
@@ -109,10 +120,11 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
     idle = width < 0.9 * narrowest ? 0 : idle + 1;
     narrowest = Math.min(narrowest, width);
     last = { ...result, status: "limited", limit: "rounding" };
-    if (idle >= IDLE_STEPS) return last;
+    if (idle >= (width > VAGUE ? VAGUE_IDLE_STEPS : IDLE_STEPS)) return last;
     if (refinements >= limits.refinements) return { ...last, limit: "refinements" };
     if (limits.shouldStop()) return { ...last, limit: "stopped" };
-    const next = refineWithin(input, current, energies, singular, (AIM * input.accuracy) / width);
+    const factor = Math.max((AIM * input.accuracy) / width, width > VAGUE ? LEAST_FACTOR : 0);
+    const next = refineWithin(input, current, energies, singular, factor);
     if (next === null) return { ...last, limit: "unknowns" };
     if (next === current) return last;
     current = next;
@@ -123,9 +135,12 @@ export function solveAdaptively(input: AdaptiveInput): AdaptiveResult {
 function firstOrders({ mesh, startOrder = START_ORDER, revolution, limits }: AdaptiveInput): OrderedMesh {
   const count = mesh.triangles.length / 3;
   const least = revolution ? 2 : 1;
+  const disappointment = new Float64Array(count).fill(Infinity);
   for (let p = startOrder; ; p--) {
     const order = new Uint8Array(count).fill(p);
-    if (p <= least || countFunctions(makeElements(mesh, order)) <= limits.unknowns) return { mesh, order };
+    if (p <= least || countFunctions(makeElements(mesh, order)) <= limits.unknowns) {
+      return { mesh, order, disappointment };
+    }
   }
 }
 

@@ -16,6 +16,16 @@ export interface Bracket {
   readonly upper: number;
 }
 
+/**
+ * A bracket the right way round. Where it rests on estimated integrals its sides can change places; they are then off by
+ * at least their distance, and are moved apart by as much again.
+ */
+export function ordered({ lower, upper }: Bracket): Bracket {
+  if (!(lower > upper)) return { lower, upper };
+  const off = lower - upper;
+  return { lower: upper - off, upper: lower + off };
+}
+
 /** The current of a stream function out of a terminal, and its rounding error. */
 export function currentOf(system: LinearSystem, field: DiscreteField, form: CurrentForm): Approximate {
   let value = 0;

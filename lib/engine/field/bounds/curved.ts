@@ -7,9 +7,9 @@
 import { buildDomain, type Role } from "../outline/build-domain";
 import type { CheckedOutline } from "../outline/check-outline";
 import type { AdaptiveLimits, AdaptiveProgress, AdaptiveResult } from "./adaptive";
-import type { Bracket } from "./bracket";
+import { ordered, type Bracket } from "./bracket";
 import type { MediumList } from "../assembly/medium";
-import { InterruptedError } from "../solve/factor";
+import { InterruptedError } from "../solve/interruption";
 import { solveDomain } from "./domain-run";
 import { widthOf, type ReachedBounds } from "./goal";
 import { PowerBounds, terminalBounds } from "./terminals";
@@ -125,7 +125,7 @@ class CurvedBounds {
   }
 
   get bracket(): Bracket {
-    return { lower: this.lower, upper: this.upper };
+    return ordered({ lower: this.lower, upper: this.upper });
   }
 
   combine(low: AdaptiveResult, high: AdaptiveResult): ReachedBounds {

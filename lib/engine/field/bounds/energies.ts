@@ -6,6 +6,8 @@
  * that minimises ½∫ρ|rot ψ|² - I): it is both the width of the bracket and the indicator for refinement.
  */
 
+import { ASK_AFTER } from "../assembly/medium";
+import { Interruption } from "../solve/interruption";
 import type { SolvedPair } from "../solve/pair";
 import { ElementField } from "./element-field";
 import { Accumulator, ROUNDING, type Approximate } from "./interval";
@@ -24,14 +26,19 @@ export interface FieldEnergies {
   readonly decay: Float64Array;
 }
 
+/** Triangles in which the conductivity varies by more are bisected, not raised in order. */
+const GREATEST_CONTRAST = 30;
+
 /**
  * `fieldWeight` weighs the gaps of the fields in the indicator. `displacement` gives, for each triangle, a bound of the
  * relative change of its energy when its vertices move from where they are to where the outline has them, or null.
+ * `shouldStop` is asked now and then where integrals are sampled; true raises `InterruptedError`.
  */
 export function fieldEnergies(
   pair: SolvedPair,
   fieldWeight: readonly number[],
   displacement: Float64Array | null,
+  shouldStop: () => boolean = () => false,
 ): FieldEnergies {
   const { set, potentialSystem, streamSystem, potentials, streams } = pair;
   const count = potentials.length;
@@ -45,6 +52,7 @@ export function fieldEnergies(
   const byDegree = new Float64Array(32);
   const sampled = makeSampledEnergies(count);
   const elements = potentialSystem.sampled;
+  const interruption = new Interruption(shouldStop, ASK_AFTER);
   for (let t = 0; t < set.triangleCount; t++) {
     const { modes, order } = set.layouts[t];
     byDegree.fill(0);
@@ -56,15 +64,22 @@ export function fieldEnergies(
       s[f].recover(streamSystem, t);
       s[f].gradient(streamSystem, t);
     }
+    let rough = false;
     const moved = displacement ? displacement[t] : 0;
     if (elements?.functionOf[t]) {
+      interruption.spend(1);
       sampleEnergies(set, elements, t, v, s, sampled);
       for (let f = 0; f < count; f++) {
         work[f] += compareFields(v[f], s[f], modes, Math.sqrt(sampled.sigma), fieldWeight[f], byDegree).work;
         gap[t] += fieldWeight[f] * sampled.gap[f];
       }
-      gap[t] += addSampled(sampled.potential, sampled.potentialLow, potentialSums, count, fieldWeight, moved);
-      gap[t] += addSampled(sampled.stream, sampled.streamLow, streamSums, count, fieldWeight, moved);
+      const error =
+        addSampled(sampled.potential, sampled.potentialLow, potentialSums, count, fieldWeight, moved) +
+        addSampled(sampled.stream, sampled.streamLow, streamSums, count, fieldWeight, moved);
+      // Where the integrals themselves are the trouble or the conductivity changes too much (a jump inside the triangle,
+      // a steep slope), a higher order does not help. Towards an axis it falls to nothing as a matter of course.
+      rough = error > gap[t] || (!elements.revolution && sampled.contrast > GREATEST_CONTRAST);
+      gap[t] += error;
     } else {
       const root = Math.sqrt(potentialSystem.weight[t]);
       for (let f = 0; f < count; f++) {
@@ -75,7 +90,7 @@ export function fieldEnergies(
       addPairs(v, modes, potentialSystem.weight[t], potentialSums, moved);
       addPairs(s, modes, streamSystem.weight[t], streamSums, moved);
     }
-    decay[t] = decayRate(byDegree, order);
+    decay[t] = rough ? 1 : decayRate(byDegree, order);
   }
   return {
     potential: potentialSums.map((sum) => sum.result()),

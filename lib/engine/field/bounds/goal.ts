@@ -1,10 +1,11 @@
 /**
  * What is wanted of a solution and how near it has come: the resistance between two terminals, or the conductance
- * matrix and all pairs of three and more. The best bounds of all steps are kept, so both sides are monotone.
+ * matrix and all pairs of three and more. The best bounds of all steps are kept, so both sides are monotone; where
+ * they rest on estimated integrals only the last ones count, since they rest on the best estimates.
  */
 
 import type { SolvedPair } from "../solve/pair";
-import { currentOf, lowerBound, upperBound, type Bracket } from "./bracket";
+import { currentOf, lowerBound, ordered, upperBound, type Bracket } from "./bracket";
 import type { FieldEnergies } from "./energies";
 import { PowerBounds, terminalBounds, type TerminalBounds, type TerminalPair } from "./terminals";
 
@@ -24,9 +25,10 @@ export class Goal {
 
   /** Takes in the bounds of one more solution. */
   update(pair: SolvedPair, energies: FieldEnergies): void {
+    const merge = pair.potentialSystem.sampled ? latest : tighter;
     if (pair.currents.length === 2) {
       const current = currentOf(pair.streamSystem, pair.streams[0], pair.currents[0]);
-      this.resistance = tighter(this.resistance, {
+      this.resistance = merge(this.resistance, {
         lower: lowerBound(energies.potential[0]),
         upper: upperBound(energies.stream[0], current),
       });
@@ -34,7 +36,7 @@ export class Goal {
     }
     const power = new PowerBounds(pair, energies);
     const fresh = terminalBounds(power, power);
-    this.terminals = this.terminals ? tighterTerminals(this.terminals, fresh) : fresh;
+    this.terminals = mergeTerminals(this.terminals ?? fresh, fresh, merge);
     this.resistance = this.terminals.pairs[0].floating;
   }
 
@@ -69,13 +71,21 @@ function tighter(a: Bracket, b: Bracket): Bracket {
   return { lower: Math.max(a.lower, b.lower), upper: Math.min(a.upper, b.upper) };
 }
 
-function tighterTerminals(a: TerminalBounds, b: TerminalBounds): TerminalBounds {
+function latest(_: Bracket, fresh: Bracket): Bracket {
+  return ordered(fresh);
+}
+
+function mergeTerminals(
+  a: TerminalBounds,
+  b: TerminalBounds,
+  merge: (known: Bracket, fresh: Bracket) => Bracket,
+): TerminalBounds {
   return {
-    conductance: a.conductance.map((entry, i) => tighter(entry, b.conductance[i])),
+    conductance: a.conductance.map((entry, i) => merge(entry, b.conductance[i])),
     pairs: a.pairs.map((pair: TerminalPair, i) => ({
       between: pair.between,
-      floating: tighter(pair.floating, b.pairs[i].floating),
-      grounded: tighter(pair.grounded, b.pairs[i].grounded),
+      floating: merge(pair.floating, b.pairs[i].floating),
+      grounded: merge(pair.grounded, b.pairs[i].grounded),
     })),
   };
 }

@@ -10,16 +10,30 @@ import { STAR_ORDER, type RefinementPlan } from "./plan";
 export interface OrderedMesh {
   readonly mesh: FieldMesh;
   readonly order: Uint8Array;
+  /** Gap above which a triangle that was raised in order disappoints; Infinity for the others. */
+  readonly disappointment: Float64Array;
 }
 
 export function applyPlan(mesh: FieldMesh, plan: RefinementPlan): OrderedMesh {
   const bisected = plan.marks.some((mark) => mark > 0) ? inherit(mesh, (m) => refine(m, plan.marks)) : null;
   const middle = bisected ? bisected.mesh : mesh;
-  const middleOrder = bisected ? bisected.parent.map((t) => plan.order[t]) : plan.order;
-  const order = Uint8Array.from(middleOrder);
-  if (plan.vertices.length === 0) return { mesh: middle, order };
+  const order = Uint8Array.from(bisected ? bisected.parent.map((t) => plan.order[t]) : plan.order);
+  let { disappointment } = plan;
+  if (bisected) disappointment = carriedOver(disappointment, bisected.parent);
+  if (plan.vertices.length === 0) return { mesh: middle, order, disappointment };
   const graded = inherit(middle, (m) => refineTowards(m, plan.vertices, plan.layers));
-  return { mesh: graded.mesh, order: ringOrders(middle, order, graded.mesh, graded.parent, plan) };
+  return {
+    mesh: graded.mesh,
+    order: ringOrders(middle, order, graded.mesh, graded.parent, plan),
+    disappointment: carriedOver(disappointment, graded.parent),
+  };
+}
+
+/** Values of triangles that were not divided; Infinity for parts. */
+function carriedOver(values: Float64Array, parent: Int32Array): Float64Array {
+  const parts = new Int32Array(values.length);
+  for (const t of parent) parts[t]++;
+  return Float64Array.from(parent, (t) => (parts[t] === 1 ? values[t] : Infinity));
 }
 
 interface Inherited {

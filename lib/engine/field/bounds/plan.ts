@@ -18,6 +18,8 @@ export interface RefinementPlan {
   /** Bisection marks of the mesh as it is: 0, 1 (one edge) or 2 (three edges). */
   readonly marks: Uint8Array;
   readonly order: Uint8Array;
+  /** The least gap that counts as a disappointment of a triangle that is raised in order; Infinity for the others. */
+  readonly disappointment: Float64Array;
   /** Nothing is left that could be refined. */
   readonly empty: boolean;
 }
@@ -48,6 +50,13 @@ export const STAR_ORDER = 3;
 /** A solution whose coefficients fall more slowly than this is bisected, not raised in order. */
 const SLOW_DECAY = 0.42;
 
+/** A raised element disappoints if its gap is this many times what was expected and hardly less than before. */
+const FAR_ABOVE = 10;
+const HARDLY_LESS = 0.5;
+
+/** Order of the parts of an element that is bisected for its roughness. */
+const ROUGH_ORDER = 3;
+
 export function planRefinement(input: PlanInput): RefinementPlan {
   const { gap, singular } = input;
   const count = gap.length;
@@ -63,6 +72,7 @@ export function planRefinement(input: PlanInput): RefinementPlan {
   const ringOrders: Uint8Array[] = [];
   const order = Uint8Array.from(input.order);
   const marks = new Uint8Array(count);
+  const disappointment = new Float64Array(count).fill(Infinity);
   const budget = (1 - SHARE_OF_STARS) * target;
   const shareOfElement = elementThreshold(input, stars.kind, elements, budget);
   const shareOfRing = Math.min(shareOfElement, budget / (2 * count + 100));
@@ -93,6 +103,9 @@ export function planRefinement(input: PlanInput): RefinementPlan {
     const step = elementStep(input, stars.kind[t], t, elements[t], shareOfElement);
     order[t] = step.order;
     marks[t] = step.mark;
+    if (step.order > input.order[t]) {
+      disappointment[t] = Math.max(FAR_ABOVE * step.expected, HARDLY_LESS * elements[t]);
+    }
     if (step.order !== input.order[t] || step.mark > 0) planned++;
   }
   return {
@@ -101,6 +114,7 @@ export function planRefinement(input: PlanInput): RefinementPlan {
     ringOrders,
     marks,
     order,
+    disappointment,
     empty: planned === 0,
   };
 }
@@ -108,7 +122,8 @@ export function planRefinement(input: PlanInput): RefinementPlan {
 function emptyPlan({ order }: PlanInput): RefinementPlan {
   const none = new Int32Array(0);
   const marks = new Uint8Array(order.length);
-  return { vertices: none, layers: none, ringOrders: [], marks, order, empty: true };
+  const disappointment = new Float64Array(order.length).fill(Infinity);
+  return { vertices: none, layers: none, ringOrders: [], marks, order, disappointment, empty: true };
 }
 
 /**
@@ -232,7 +247,8 @@ function elementStep(input: PlanInput, kind: number, t: number, gap: number, sha
     const order = Math.min(input.highestOrder, p + Math.min(wanted, 3));
     return { order, mark: 0, expected: gap * decay ** (order - p) };
   }
-  return { order: p, mark: 2, expected: gap * 4 ** -Math.min(p, 3) };
+  const order = input.decay[t] < 1 ? p : Math.min(p, ROUGH_ORDER);
+  return { order, mark: 2, expected: gap * 4 ** -Math.min(p, 3) };
 }
 
 /** The largest threshold for which the expected sum is within the budget. */

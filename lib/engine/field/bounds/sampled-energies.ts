@@ -23,6 +23,8 @@ export interface SampledEnergies {
   readonly gap: Float64Array;
   /** Mean conductivity at the points, for the look at the solution's smoothness. */
   sigma: number;
+  /** Greatest conductivity over least at the points of the higher rule. */
+  contrast: number;
   /** Room for the values at the points: conductivity, and both components of both functions for each field. */
   readonly samples: Float64Array;
   readonly values: readonly [Float64Array, Float64Array, Float64Array, Float64Array][];
@@ -41,6 +43,7 @@ export function makeSampledEnergies(fields: number): SampledEnergies {
     streamLow: square(),
     gap: new Float64Array(fields),
     sigma: 1,
+    contrast: 1,
     samples: new Float64Array(MOST_POINTS),
     values: Array.from({ length: fields }, () => [room(), room(), room(), room()]),
   };
@@ -90,8 +93,15 @@ function integrate(
     fillValues(s[a].p, modes, table.modes, count, jy);
   }
   let mean = 0;
-  for (let q = 0; q < count; q++) mean += 2 * weights[q] * samples[q];
+  let least = Infinity;
+  let greatest = 0;
+  for (let q = 0; q < count; q++) {
+    mean += 2 * weights[q] * samples[q];
+    if (samples[q] < least) least = samples[q];
+    if (samples[q] > greatest) greatest = samples[q];
+  }
   out.sigma = mean;
+  out.contrast = greatest / least;
   for (let a = 0; a < fields; a++) {
     const [vx, vy, jx, jy] = out.values[a];
     for (let b = 0; b < fields; b++) {

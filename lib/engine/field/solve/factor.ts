@@ -8,6 +8,7 @@
 import { MOST_OUTER, addElement } from "./assemble";
 import type { LinearSystem } from "./system";
 import { factorPanel, subtractBorder } from "./dense";
+import { Interruption } from "./interruption";
 import type { FrontStructure } from "./symbolic";
 
 export interface Factor {
@@ -18,11 +19,6 @@ export interface Factor {
 /** Raised when a pivot is not positive: the matrix is numerically singular. */
 export class SingularMatrixError extends Error {
   override readonly name = "SingularMatrixError";
-}
-
-/** Raised when the caller wants to stop. */
-export class InterruptedError extends Error {
-  override readonly name = "InterruptedError";
 }
 
 /** Operations after which the caller is asked whether to go on: some milliseconds. */
@@ -36,7 +32,7 @@ export function factorise(system: LinearSystem, shouldStop: () => boolean = () =
   const frontPlace = new Int32Array(structure.unknowns);
   const local = new Int32Array(MOST_OUTER);
   let top = 0;
-  let work = 0;
+  const interruption = new Interruption(shouldStop, ASK_AFTER);
   for (let node = 0; node < tree.nodeCount; node++) {
     const own = ownFirst[node + 1] - ownFirst[node];
     const rest = borderStart[node + 1] - borderStart[node];
@@ -60,11 +56,7 @@ export function factorise(system: LinearSystem, shouldStop: () => boolean = () =
       extendAdd(structure, a, stack, target, frontPlace, panels, at, own, place, rest);
       extendAdd(structure, b, stack, target + sizeA, frontPlace, panels, at, own, place, rest);
     }
-    work += (own + 3) * (own + rest) ** 2;
-    if (work > ASK_AFTER) {
-      work = 0;
-      if (shouldStop()) throw new InterruptedError("stopped");
-    }
+    interruption.spend((own + 3) * (own + rest) ** 2);
     if (own > 0) {
       if (!factorPanel(panels, at, own, own + rest)) throw new SingularMatrixError("pivot not positive");
       if (rest > 0) subtractBorder(panels, at, own, own + rest, stack, place);

@@ -72,6 +72,7 @@ export function solvePair(input: PairInput): SolvedPair {
         Array.from(mesh.region, (k) => functionOf(medium[k])),
         revolution,
         axis,
+        shouldStop,
       )
     : null;
 
