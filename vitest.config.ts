@@ -1,3 +1,4 @@
+import { availableParallelism } from "node:os";
 import { fileURLToPath } from "node:url";
 import { defineConfig } from "vitest/config";
 
@@ -11,6 +12,8 @@ const alias = {
 export default defineConfig({
   resolve: { alias },
   test: {
+    // Half of most tests is waiting for a server, a browser or the database.
+    maxWorkers: Math.max(2, availableParallelism() - 1),
     projects: [
       {
         resolve: { alias },

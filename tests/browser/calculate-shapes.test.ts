@@ -107,8 +107,17 @@ describe("the catalogue", () => {
 
   it("goes by keyboard from the search to a shape and computes there", async () => {
     const { page, close } = await bench.open("/calculate");
-    await page.keyboard.press("/");
+    const search = page.getByLabel("Search by word or symbol");
+    // Until the page's script runs, a key goes nowhere.
+    await expect
+      .poll(async () => {
+        await page.keyboard.press("/");
+        return search.evaluate((field) => field === document.activeElement);
+      })
+      .toBe(true);
+    await search.fill("");
     await page.keyboard.type("spherical shell radial");
+    await expect.poll(() => page.locator("a[data-shape]").count()).toBe(1);
     await page.keyboard.press("ArrowDown");
     expect(await page.evaluate(() => document.activeElement?.getAttribute("data-shape"))).toBe(
       "spherical-shell",

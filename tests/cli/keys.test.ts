@@ -125,7 +125,7 @@ describe("npm run -s keys", () => {
         "--expires",
         "2001-01-01T00:00:00Z",
       ],
-      /past/,
+      /before it is issued.*lie in the future/,
     ],
     [["issue", "--team", "busbar", "--name", "x", "--scopes", "compute", "--colour", "red"], /colour/],
     [["revoke", "k0"], /no such key/],

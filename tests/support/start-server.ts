@@ -90,8 +90,9 @@ export async function startService(
   };
 }
 
-/** Global set-up of the `server` tests: one built server for all of them. */
+/** Global set-up of the `server` tests: one built server for all of them, or the one that RHOFORM_TEST_BASE names. */
 export default async function setup(): Promise<() => Promise<void>> {
+  if (process.env.RHOFORM_TEST_BASE) return () => Promise.resolve();
   const service = await startService({ RHOFORM_DEMO: "0", RHOFORM_ADDRESS_QUOTA: "1000000" });
   process.env.RHOFORM_TEST_BASE = service.base;
   process.env.RHOFORM_TEST_DATA = service.dataFolder;

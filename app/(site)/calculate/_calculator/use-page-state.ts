@@ -34,20 +34,24 @@ export function usePageState(
   // Long tables travel behind the "#", which the server does not see; and after a step back in the history the page
   // comes as it was first made, while the address has what it became.
   useEffect(() => {
-    function readAddress() {
+    function told() {
       const { search, hash } = window.location;
       const behind = hash.includes("=") ? hash.slice(1) : "";
-      const told = readState(joinAddress(search, behind), entry, example);
-      const query = stateQuery(told, entry);
-      setState((before) => (stateQuery(before, entry) === query ? before : told));
+      return readState(joinAddress(search, behind), entry, example);
     }
-    const timer = setTimeout(readAddress);
+    function adopt(before: PageState): PageState {
+      const next = told();
+      return stateQuery(before, entry) === stateQuery(next, entry) ? before : next;
+    }
+    const readAddress = () => setState(adopt);
+    // What the reader has changed by then outranks the address, which follows later.
+    const timer = setTimeout(() => setState((before) => (before === start ? adopt(before) : before)));
     window.addEventListener("hashchange", readAddress);
     return () => {
       clearTimeout(timer);
       window.removeEventListener("hashchange", readAddress);
     };
-  }, [entry, example]);
+  }, [start, entry, example]);
 
   useEffect(() => {
     const timer = setTimeout(() => {
