@@ -10,7 +10,7 @@
 import { checkOutline } from "@/lib/engine/field/outline/check-outline";
 import { outlineSchema, terminalSchema } from "@/lib/engine/field/outline/schema";
 import { solveField, type FieldSolution } from "@/lib/engine/field/solve-field";
-import { conjugate, randomOutline, type RandomOutline } from "./random-outlines";
+import { conductanceOf, conjugate, randomOutline, type RandomOutline } from "./random-outlines";
 
 interface Tally {
   outlines: number;
@@ -27,13 +27,14 @@ interface Tally {
 
 /** Solves a random outline, or null where the outline is refused (features touch or cross). */
 export function solveRandom(random: RandomOutline, accuracy: number): FieldSolution | null {
-  const outline = outlineSchema.parse({ unit: "mm", outer: random.outer, holes: random.holes });
+  const symmetry = random.axisymmetric ? "axisymmetric" : "plan";
+  const outline = outlineSchema.parse({ unit: "m", outer: random.outer, holes: random.holes, symmetry });
   if (random.terminals.some((parts) => parts.length === 0)) return null;
   const terminals = random.terminals.map((parts, k) => terminalSchema.parse({ name: `t${k}`, parts }));
   const checked = checkOutline({ outline, terminals, regions: random.regions });
   if (!checked.ok) return null;
   return solveField(
-    { outline: checked.outline, conductance: random.conductance },
+    { outline: checked.outline, conductance: conductanceOf(random) },
     { accuracy, maximumUnknowns: 20_000 },
   );
 }

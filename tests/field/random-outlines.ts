@@ -1,5 +1,7 @@
 /** Random outlines for property tests and the long run: a seed gives the same outline for ever. */
 
+import type { SheetConductance } from "@/lib/engine/field/solve-field";
+
 export type Ring = [number, number][];
 
 export interface Part {
@@ -19,6 +21,9 @@ export interface RandomOutline {
   regions: Ring[];
   /** Background, then regions. */
   conductance: number[];
+  /** All conductances are multiplied by e^(ax+by), x and y in the outline's unit; null for constant ones. */
+  slope: [number, number] | null;
+  axisymmetric: boolean;
 }
 
 export interface RandomOptions {
@@ -73,7 +78,19 @@ export function randomOutline(seed: number, options: RandomOptions = { conjugabl
     : anyTerminals(outer, holes, between, integer, random);
   const strongest = random() < 0.5 ? 8 : 2;
   const conductance = [1, ...regions.map(() => 10 ** between(-strongest, strongest))];
-  return { seed, kind: make.name, outer, holes, terminals, regions, conductance };
+  const slope: [number, number] | null = random() < 0.15 ? [between(-2, 2), between(-2, 2)] : null;
+  const axisymmetric = !options.conjugable && slope === null && random() < 0.2;
+  if (axisymmetric) {
+    // Against the axis, or away from it.
+    const left = Math.min(...outer.map(([x]) => x)) - (random() < 0.6 ? 0 : between(0.01, 1));
+    const move = ([x, y]: [number, number]): [number, number] => [x - left, y];
+    [outer, holes, regions] = [
+      outer.map(move),
+      holes.map((r) => r.map(move)),
+      regions.map((r) => r.map(move)),
+    ];
+  }
+  return { seed, kind: make.name, outer, holes, terminals, regions, conductance, slope, axisymmetric };
 }
 
 type Between = (low: number, high: number) => number;
@@ -216,6 +233,7 @@ export function conjugate(outline: RandomOutline): RandomOutline {
     ...outline,
     terminals: [partsOf(end(a), start(b), n), partsOf(end(b), start(a) + n, n), ...holes],
     conductance: outline.conductance.map((c) => 1 / c),
+    slope: outline.slope && [-outline.slope[0], -outline.slope[1]],
   };
 }
 
@@ -260,4 +278,11 @@ function anyTerminals(
     }
   });
   return terminals;
+}
+
+/** The conductances with their common slope, if there is one. */
+export function conductanceOf({ conductance, slope }: RandomOutline): SheetConductance[] {
+  if (!slope) return conductance;
+  const [a, b] = slope;
+  return conductance.map((c) => (x: number, y: number) => c * Math.exp(a * x + b * y));
 }

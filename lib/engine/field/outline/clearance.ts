@@ -2,6 +2,7 @@ import { carveDomain } from "../mesh/planar-graph";
 import { chordCount } from "./arc";
 import { describeConflicts, describeNesting, describeRegionFaults } from "./complain";
 import { findConflicts, type Conflict } from "./conflicts";
+import { curvesMeet } from "./curve-meeting";
 import { affordableTolerance, drawOutline, type DrawnOutline, type Drawing, type Role } from "./draw";
 import { nestRings } from "./nesting";
 import type { OutlineError } from "./schema";
@@ -22,6 +23,10 @@ export function drawClear(
     const drawing = drawOutline(outline, role, affordableTolerance(outline, chordTolerance));
     const { conflicts, mesh } = findConflicts(drawing.domain, outline.frame.touch);
     if (conflicts.length > 0) {
+      const genuine = trueMeetings(outline, drawing, conflicts);
+      if (genuine.length > 0) {
+        return { drawing, errors: describeConflicts(genuine, drawing, outline.rings, outline.frame) };
+      }
       if (refineArcs(outline, drawing, conflicts, chordTolerance)) continue;
       return { drawing, errors: describeConflicts(conflicts, drawing, outline.rings, outline.frame) };
     }
@@ -37,6 +42,20 @@ export function drawClear(
     if (errors.length > 0 && refineAll(outline, chordTolerance)) continue;
     return { drawing, errors };
   }
+}
+
+/** The conflicts in which the arcs themselves meet, not only their chords. */
+function trueMeetings(outline: DrawnOutline, drawing: Drawing, conflicts: readonly Conflict[]): Conflict[] {
+  const { rings, frame } = outline;
+  const { segmentRing, segmentEdge } = drawing;
+  return conflicts.flatMap((conflict) => {
+    const { first, second } = conflict;
+    if (segmentRing[first] < 0 || segmentRing[second] < 0) return [];
+    const a = rings[segmentRing[first]];
+    const b = rings[segmentRing[second]];
+    const point = curvesMeet(a, segmentEdge[first], b, segmentEdge[second], frame.touch);
+    return point === null ? [] : [{ ...conflict, x: point[0], y: point[1] }];
+  });
 }
 
 function refineArcs(
