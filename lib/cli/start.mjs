@@ -31,6 +31,11 @@ async function answers(base) {
   throw new SetupError(`The service is not well at ${base}: ${last}. The log in the data folder says more.`);
 }
 
+/** Has the routes of the first calls loaded: a preflight needs no key and counts nowhere. */
+async function loadRoutes(base) {
+  for (const path of ["resistance", "fields"]) await fetch(`${base}/api/v1/${path}`, { method: "OPTIONS" });
+}
+
 function greet({ origin, demo }) {
   const lines = [`Rhoform answers at ${origin}`];
   if (demo) {
@@ -78,6 +83,7 @@ async function main() {
     );
   }
   await answers(settings.localBase);
+  await loadRoutes(settings.localBase);
   greet(settings);
 }
 

@@ -21,7 +21,7 @@ import type { Log } from "../service/log";
 import { fieldCost, MOST_UNKNOWNS } from "./field-cost";
 import { FieldFiles } from "./field-files";
 import type { FieldOutcome } from "./field-task";
-import { WARMING_BODY } from "./warming-body";
+import { WARMING_BEND, WARMING_PLATE } from "./warming-body";
 import type { RunningTask, TaskRunner } from "./worker-pool";
 
 /** How long a claim holds without being extended, and how often it is, ms. */
@@ -77,7 +77,9 @@ export class FieldJobs {
     this.beat.unref();
     this.tend();
     for (let k = 0; k < WARM_READINGS; k++) {
-      prepareField(WARMING_BODY, { material: () => undefined, outline: () => undefined });
+      for (const body of [WARMING_BEND, WARMING_PLATE]) {
+        prepareField(body, { material: () => undefined, outline: () => undefined });
+      }
     }
     try {
       await Promise.race([ready, new Promise((resolve) => setTimeout(resolve, PATIENCE_MS).unref())]);

@@ -4,7 +4,7 @@ import { MessageChannel } from "node:worker_threads";
 import { Piscina } from "piscina";
 import type { FieldProgress, Material } from "@/lib/engine";
 import { type FieldOutcome, runFieldTask } from "./field-task";
-import { WARMING_BODY } from "./warming-body";
+import { WARMING_BEND } from "./warming-body";
 
 export interface PoolTask {
   readonly body: unknown;
@@ -54,7 +54,7 @@ export class WorkerPool implements TaskRunner {
   /** Starts the threads, which warm themselves, and gives each a task: then the way to them is warm too. */
   async start(): Promise<void> {
     const task = {
-      body: WARMING_BODY,
+      body: WARMING_BEND,
       materials: [],
       secondsAllowed: 5,
       maximumUnknowns: 20_000,
