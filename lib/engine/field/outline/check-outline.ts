@@ -7,7 +7,8 @@ import { mergeStretches } from "./merge-runs";
 import { checkArcs, elementPoint, growBox, readRing } from "./read-ring";
 import { edgeCount, type Ring } from "./ring";
 import { readRegions } from "./region-net";
-import { LENGTH_UNITS_M, type OutlineError, type OutlineRequest, type RingElement } from "./schema";
+import { LENGTH_UNITS_M } from "./length-units";
+import type { OutlineError, OutlineRequest, RingElement } from "./schema";
 import { readStretches, type Stretch } from "./terminal-runs";
 import { checkTerminalList } from "./terminal-list";
 

@@ -1,4 +1,4 @@
-import { LENGTH_UNITS_M, type LengthUnit } from "./schema";
+import { LENGTH_UNITS_M, type LengthUnit } from "./length-units";
 
 /**
  * The domain's frame: x' = (x − origin) / scale with a power of two as scale, so that the largest extent lies in
