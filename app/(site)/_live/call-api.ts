@@ -18,42 +18,59 @@ interface CallOptions {
   readonly observe?: (headers: Headers) => void;
   /** The same for every repeat of a call that stores something. */
   readonly idempotencyKey?: string;
+  /** Seconds to wait for an answer that may take its time. */
+  readonly wait?: number;
+  readonly signal?: AbortSignal;
 }
 
 /** Posts a body to an operation of the API on behalf of this page. Throws ApiProblem when it is refused. */
 export async function postApi<Result>(
   path: string,
   body: string,
-  { observe, idempotencyKey }: CallOptions = {},
+  options: CallOptions = {},
 ): Promise<Result> {
-  const more: Record<string, string> = idempotencyKey ? { "Idempotency-Key": idempotencyKey } : {};
-  let response = await send(path, body, more);
+  return (await callApi("POST", path, options, body)).json();
+}
+
+/** Reads from the API on behalf of this page. Throws ApiProblem when it is refused. */
+export async function getApi<Result>(path: string, options: CallOptions = {}): Promise<Result> {
+  return (await callApi("GET", path, options)).json();
+}
+
+/** One call with the page's token; a token that has ended is renewed once. Throws ApiProblem when it is refused. */
+export async function callApi(
+  method: "GET" | "POST" | "DELETE",
+  path: string,
+  { observe, idempotencyKey, wait, signal }: CallOptions = {},
+  body?: string,
+): Promise<Response> {
+  const send = async (): Promise<Response> =>
+    fetch(`/api/v1${path}`, {
+      method,
+      headers: {
+        Authorization: `Bearer ${await siteToken()}`,
+        ...(body === undefined ? {} : { "Content-Type": "application/json" }),
+        ...(idempotencyKey ? { "Idempotency-Key": idempotencyKey } : {}),
+        ...(wait ? { Prefer: `wait=${wait}` } : {}),
+      },
+      body,
+      signal,
+    });
+  let response = await send();
   if (response.status === 401) {
     // The token may have ended while the page slept: one new one, once.
     dropSiteToken();
-    response = await send(path, body, more);
+    response = await send();
   }
   observe?.(response.headers);
-  return read(response);
+  if (!response.ok) throw await problemOf(response);
+  return response;
 }
 
-async function send(path: string, body: string, more: Readonly<Record<string, string>>): Promise<Response> {
-  return fetch(`/api/v1${path}`, {
-    method: "POST",
-    headers: {
-      Authorization: `Bearer ${await siteToken()}`,
-      "Content-Type": "application/json",
-      ...more,
-    },
-    body,
-  });
-}
-
-async function read<Result>(response: Response): Promise<Result> {
-  if (response.ok) return response.json();
+async function problemOf(response: Response): Promise<ApiProblem> {
   const retryAfter = Number(response.headers.get("Retry-After"));
   const problem: ProblemShown = await response
     .json()
     .catch(() => ({ title: `The service answered ${response.status}` }));
-  throw new ApiProblem(response.status, problem, retryAfter > 0 ? retryAfter : null);
+  return new ApiProblem(response.status, problem, retryAfter > 0 ? retryAfter : null);
 }

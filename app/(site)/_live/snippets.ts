@@ -5,9 +5,65 @@ export interface Snippet {
   readonly code: string;
 }
 
+/** What distinguishes the snippets of one operation from those of another. */
+interface SnippetParts {
+  /** Path below `/api/v1`. */
+  readonly path: string;
+  readonly body: object;
+  /** Headers beside key and media type. */
+  readonly headers?: readonly (readonly [string, string])[];
+  /** Lines that use `answer`, after it was received and found good. */
+  readonly typescript: readonly string[];
+  readonly python: readonly string[];
+  /** Longest wait of the Python call, s. */
+  readonly timeout?: number;
+}
+
 export function resistanceSnippets(origin: string, request: object): readonly Snippet[] {
-  const url = `${origin}/api/v1/resistance`;
-  const body = JSON.stringify(request, null, 2);
+  return snippets(origin, {
+    path: "/resistance",
+    body: request,
+    typescript: ["console.log(answer.resistance.text, answer.resistance.lower, answer.resistance.upper);"],
+    python: [
+      'print(answer["resistance"]["text"], answer["resistance"]["lower"], answer["resistance"]["upper"])',
+    ],
+  });
+}
+
+/** A field solution: the call waits for its end as long as the API lets it. */
+export function fieldSnippets(origin: string, request: object, terminals: number): readonly Snippet[] {
+  const several = terminals > 2;
+  return snippets(origin, {
+    path: "/fields",
+    body: request,
+    headers: [["Prefer", "wait=30"]],
+    timeout: 60,
+    typescript: [
+      "// Still on its way after 30 s: ask again at the path in Location.",
+      'if (!answer.result) throw new Error(`${answer.status}: ${response.headers.get("Location")}`);',
+      several
+        ? "for (const { between, floating } of answer.result.pairs) console.log(...between, floating.text);"
+        : "const { resistance } = answer.result;",
+      ...(several ? [] : ["console.log(resistance.text, resistance.lower, resistance.upper);"]),
+    ],
+    python: [
+      "# Still on its way after 30 s: ask again at the path in Location.",
+      'if not answer["result"]:',
+      "    raise SystemExit(f\"{answer['status']}: {response.headers['Location']}\")",
+      ...(several
+        ? ['for pair in answer["result"]["pairs"]:', '    print(*pair["between"], pair["floating"]["text"])']
+        : [
+            'resistance = answer["result"]["resistance"]',
+            'print(resistance["text"], resistance["lower"], resistance["upper"])',
+          ]),
+    ],
+  });
+}
+
+function snippets(origin: string, parts: SnippetParts): readonly Snippet[] {
+  const { path, headers = [], typescript, python, timeout = 30 } = parts;
+  const url = `${origin}/api/v1${path}`;
+  const body = jsonText(parts.body);
   return [
     {
       id: "curl",
@@ -16,44 +72,63 @@ export function resistanceSnippets(origin: string, request: object): readonly Sn
         `curl -s ${url} \\`,
         `  -H "Authorization: Bearer $RHOFORM_KEY" \\`,
         `  -H "Content-Type: application/json" \\`,
+        ...headers.map(([name, value]) => `  -H "${name}: ${value}" \\`),
         `  -d '${body.replaceAll("'", "'\\''")}'`,
       ].join("\n"),
     },
     {
       id: "typescript",
       label: "TypeScript",
-      code: `const response = await fetch("${url}", {
-  method: "POST",
-  headers: {
-    Authorization: \`Bearer \${process.env.RHOFORM_KEY}\`,
-    "Content-Type": "application/json",
-  },
-  body: JSON.stringify(${indent(body, 2)}),
-});
-const answer = await response.json();
-if (!response.ok) throw new Error(answer.detail);
-console.log(answer.resistance.text, answer.resistance.lower, answer.resistance.upper);`,
+      code: [
+        `const response = await fetch("${url}", {`,
+        `  method: "POST",`,
+        `  headers: {`,
+        "    Authorization: `Bearer ${process.env.RHOFORM_KEY}`,",
+        `    "Content-Type": "application/json",`,
+        ...headers.map(([name, value]) => `    ${name}: "${value}",`),
+        `  },`,
+        `  body: JSON.stringify(${indent(body, 2)}),`,
+        `});`,
+        `const answer = await response.json();`,
+        `if (!response.ok) throw new Error(answer.detail);`,
+        ...typescript,
+      ].join("\n"),
     },
     {
       id: "python",
       label: "Python",
-      code: `import json
-import os
-import urllib.request
-
-request = urllib.request.Request(
-    "${url}",
-    data=json.dumps(${indent(body, 4)}).encode(),
-    headers={
-        "Authorization": f"Bearer {os.environ['RHOFORM_KEY']}",
-        "Content-Type": "application/json",
-    },
-)
-with urllib.request.urlopen(request, timeout=30) as response:
-    answer = json.load(response)
-print(answer["resistance"]["text"], answer["resistance"]["lower"], answer["resistance"]["upper"])`,
+      code: [
+        `import json`,
+        `import os`,
+        `import urllib.request`,
+        ``,
+        `request = urllib.request.Request(`,
+        `    "${url}",`,
+        `    data=json.dumps(${indent(pythonLiteral(body), 4)}).encode(),`,
+        `    headers={`,
+        `        "Authorization": f"Bearer {os.environ['RHOFORM_KEY']}",`,
+        `        "Content-Type": "application/json",`,
+        ...headers.map(([name, value]) => `        "${name}": "${value}",`),
+        `    },`,
+        `)`,
+        `with urllib.request.urlopen(request, timeout=${timeout}) as response:`,
+        `    answer = json.load(response)`,
+        ...python,
+      ].join("\n"),
     },
   ];
+}
+
+/** JSON for people: indented, but a pair of numbers on one line. */
+export function jsonText(value: object): string {
+  return JSON.stringify(value, null, 2).replace(/\[\s+(-?[\d.eE+-]+),\s+(-?[\d.eE+-]+)\s+\]/g, "[$1, $2]");
+}
+
+/** JSON's flags as Python spells them; texts are left alone. */
+function pythonLiteral(json: string): string {
+  return json.replace(/"(?:[^"\\]|\\.)*"|\b(?:true|false)\b/g, (token) =>
+    token === "true" ? "True" : token === "false" ? "False" : token,
+  );
 }
 
 function indent(text: string, spaces: number): string {

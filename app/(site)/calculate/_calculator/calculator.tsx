@@ -105,7 +105,7 @@ function LiveCalculator(props: CalculatorProps) {
         <div className="flex flex-wrap items-center gap-0.5 print:hidden">
           <PageTools state={state} entry={entry} actions={actions} />
           {props.saving ? (
-            <SaveRecord saving={props.saving} body={bodies[active]} title={entry.title} />
+            <SaveRecord saving={props.saving} path="/resistance" body={bodies[active]} title={entry.title} />
           ) : null}
         </div>
       </div>

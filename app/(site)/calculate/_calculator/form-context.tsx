@@ -8,15 +8,19 @@ import type { FormDimension, ProfileFacts } from "../_server/form-facts";
 import type { MaterialChoice } from "../_server/material-choices";
 import type { Patch } from "./use-page-state";
 
-/** What the fields of a page share. */
-export interface FormState {
-  readonly entry: ShapeEntry;
-  readonly dimensions: readonly FormDimension[];
+/** What the fields of a medium need. */
+export interface MediumForm {
   readonly parameters: Parameters;
   readonly change: (patch: Patch) => void;
   /** Complaint about a parameter, or about a place inside it ("profile.layers/2/value"). */
   readonly errorAt: (name: string) => string | undefined;
   readonly materials: readonly MaterialChoice[];
+}
+
+/** What the fields of a page share. */
+export interface FormState extends MediumForm {
+  readonly entry: ShapeEntry;
+  readonly dimensions: readonly FormDimension[];
   readonly profiles: readonly ProfileFacts[];
   /** Derived values of all dimensions, in their entries' units. */
   readonly values: Readonly<Record<string, number>>;

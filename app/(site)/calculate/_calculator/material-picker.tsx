@@ -6,14 +6,19 @@ import { Button } from "../../../_ui/button";
 import { CONTROL, Field } from "../../../_ui/field";
 import { Toggle } from "../../../_ui/toggle";
 import type { MaterialChoice } from "../_server/material-choices";
-import { useForm } from "./form-context";
+import type { MediumForm } from "./form-context";
 import { spreadText } from "./material-words";
 
 const MaterialBrowser = dynamic(() => import("./material-browser").then((module) => module.MaterialBrowser));
 
+interface MaterialPickerProps {
+  readonly name: string;
+  readonly form: MediumForm;
+}
+
 /** A material of the library, with what it stands for at the operating temperature. */
-export function MaterialPicker({ name }: { readonly name: string }) {
-  const { parameters, change, errorAt, materials } = useForm();
+export function MaterialPicker({ name, form }: MaterialPickerProps) {
+  const { parameters, change, errorAt, materials } = form;
   const [browsing, setBrowsing] = useState(false);
   const prefix = name.slice(0, -"material".length);
   const extrapolate = `${prefix}extrapolate`;

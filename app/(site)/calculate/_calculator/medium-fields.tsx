@@ -2,12 +2,11 @@
 
 import dynamic from "next/dynamic";
 import { Loading } from "../../../_ui/states";
-import { QuantityInput } from "../../../_ui/quantity-input";
 import { Select } from "../../../_ui/select";
-import type { UnitKind } from "../../../_ui/quantity/units";
 import { mediumKind, type MediumKind, mediumPrefixes } from "../_model/parameters";
 import { useForm } from "./form-context";
 import { MaterialPicker } from "./material-picker";
+import { MediumQuantity, PlainMedium } from "./medium-quantity";
 import { useMediumSwitch } from "./use-medium-switch";
 
 const GradedEditor = dynamic(() => import("./graded/graded-editor").then((module) => module.GradedEditor), {
@@ -38,7 +37,8 @@ export function MediumFields() {
 }
 
 function OneMedium({ prefix }: { readonly prefix: string }) {
-  const { entry, parameters, errorAt } = useForm();
+  const form = useForm();
+  const { entry, parameters, errorAt } = form;
   const switchTo = useMediumSwitch(prefix);
   const sheet = entry.media.kind === "sheet";
   const kinds: readonly MediumKind[] = [
@@ -63,10 +63,13 @@ function OneMedium({ prefix }: { readonly prefix: string }) {
         ]}
         onChange={(event) => switchTo(event.target.value as MediumKind)}
       />
-      {kind === "material" ? <MaterialPicker name={`${prefix}material`} /> : null}
-      {kind === "resistivity" || kind === "conductivity" ? <PlainMedium prefix={prefix} kind={kind} /> : null}
+      {kind === "material" ? <MaterialPicker name={`${prefix}material`} form={form} /> : null}
+      {kind === "resistivity" || kind === "conductivity" ? (
+        <PlainMedium prefix={prefix} kind={kind} form={form} />
+      ) : null}
       {kind === "sheetResistance" ? (
         <MediumQuantity
+          form={form}
           name={`${prefix}sheetResistance`}
           label="Sheet resistance"
           symbol="R□"
@@ -76,6 +79,7 @@ function OneMedium({ prefix }: { readonly prefix: string }) {
       ) : null}
       {sheet && kind && BULK.includes(kind) ? (
         <MediumQuantity
+          form={form}
           name={`${prefix}thickness`}
           label="Thickness"
           symbol="t"
@@ -86,73 +90,5 @@ function OneMedium({ prefix }: { readonly prefix: string }) {
       ) : null}
       {kind === "graded" ? <GradedEditor prefix={prefix} /> : null}
     </>
-  );
-}
-
-function PlainMedium({
-  prefix,
-  kind,
-}: {
-  readonly prefix: string;
-  readonly kind: "resistivity" | "conductivity";
-}) {
-  return (
-    <>
-      <MediumQuantity
-        name={`${prefix}${kind}`}
-        label={kind === "resistivity" ? "Resistivity" : "Conductivity"}
-        symbol={kind === "resistivity" ? "ρ" : "σ"}
-        kind={kind}
-        bareUnit={kind === "resistivity" ? "ohm m" : "S/m"}
-      />
-      <div className="grid grid-cols-2 gap-x-2">
-        <MediumQuantity
-          name={`${prefix}temperatureCoefficient`}
-          label="Coefficient"
-          symbol="α"
-          kind="temperatureCoefficient"
-          bareUnit="1/K"
-          placeholder="0"
-          optional
-          help="Change of the resistivity with temperature, relative to its value at the reference temperature."
-        />
-        <MediumQuantity
-          name={`${prefix}referenceTemperature`}
-          label="at"
-          symbol="ϑ₀"
-          kind="temperature"
-          bareUnit="degC"
-          placeholder="20"
-          optional
-          help="Reference temperature: the one at which the value is given. 20 °C where it is left empty."
-        />
-      </div>
-    </>
-  );
-}
-
-interface MediumQuantityProps {
-  readonly name: string;
-  readonly label: string;
-  readonly symbol: string;
-  readonly kind: UnitKind;
-  readonly bareUnit: string;
-  readonly foil?: boolean;
-  readonly placeholder?: string;
-  readonly optional?: boolean;
-  readonly help?: string;
-}
-
-function MediumQuantity({ name, optional = false, ...field }: MediumQuantityProps) {
-  const { parameters, change, errorAt } = useForm();
-  return (
-    <QuantityInput
-      {...field}
-      name={name}
-      helpOnDemand
-      value={parameters[name] ?? ""}
-      error={errorAt(name)}
-      onChange={(text) => change({ [name]: text === "" && optional ? undefined : text })}
-    />
   );
 }

@@ -8,14 +8,15 @@ import { CONTROL, Field } from "../../../_ui/field";
 import { ProblemNotice } from "../../../_ui/problem-notice";
 import { useToast } from "../../../_ui/toast";
 import { ApiProblem, postApi } from "../../_live/call-api";
-import type { RequestBody } from "../_model/request";
 
 /** Who may save: a reader who is signed in, or one who has to sign in first. */
 export type Saving = { readonly kind: "signed-in" } | { readonly kind: "sign-in"; readonly href: string };
 
 interface SaveRecordProps {
   readonly saving: Saving;
-  readonly body: RequestBody;
+  /** Operation that stores it. */
+  readonly path: "/resistance" | "/fields";
+  readonly body: object;
   /** Proposed name of the record. */
   readonly title: string;
 }
@@ -25,7 +26,7 @@ interface Stored {
 }
 
 /** Stores the calculation for the reader's team. One press stores once, however often it is repeated. */
-export function SaveRecord({ saving, body, title }: SaveRecordProps) {
+export function SaveRecord({ saving, path, body, title }: SaveRecordProps) {
   const [open, setOpen] = useState(false);
   const [label, setLabel] = useState(title);
   /** A repeat of the same text has the same key, so that it stores once; another text is another record. */
@@ -54,7 +55,7 @@ export function SaveRecord({ saving, body, title }: SaveRecordProps) {
     const text = JSON.stringify({ ...body, record: { label: label.trim() } });
     if (attempt.current.text !== text) attempt.current = { text, key: newKey() };
     try {
-      await postApi<Stored>("/resistance", text, { idempotencyKey: attempt.current.key });
+      await postApi<Stored>(path, text, { idempotencyKey: attempt.current.key });
       setOpen(false);
       toast(`“${label.trim()}” is saved as a record.`);
     } catch (failure) {

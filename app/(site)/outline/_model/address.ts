@@ -42,7 +42,9 @@ function encodePlain(text: string): string {
 }
 
 async function pump(bytes: Uint8Array<ArrayBuffer>, through: GenericTransformStream): Promise<Uint8Array> {
-  const stream = new Blob([bytes]).stream().pipeThrough(through as ReadableWritablePair<Uint8Array, BufferSource>);
+  const stream = new Blob([bytes])
+    .stream()
+    .pipeThrough(through as ReadableWritablePair<Uint8Array, BufferSource>);
   return new Uint8Array(await new Response(stream).arrayBuffer());
 }
 

@@ -9,7 +9,12 @@ export interface Complaint {
 export type Place =
   | { readonly kind: "vertex"; readonly ring: RingKey; readonly index: number }
   | { readonly kind: "ring"; readonly ring: RingKey }
-  | { readonly kind: "terminal"; readonly terminal: number; readonly list?: "parts" | "segments"; readonly item?: number }
+  | {
+      readonly kind: "terminal";
+      readonly terminal: number;
+      readonly list?: "parts" | "segments";
+      readonly item?: number;
+    }
   | { readonly kind: "medium"; readonly name: string }
   | { readonly kind: "region"; readonly region: number; readonly name: string }
   | { readonly kind: "setting"; readonly name: string };
@@ -20,7 +25,8 @@ export function placeOf(pointer: string): Place | null {
     .replace(/^#\/?/, "")
     .split("/")
     .map((part) => decodeURIComponent(part).replaceAll("~1", "/").replaceAll("~0", "~"));
-  const number = (k: number): number | undefined => (/^\d+$/.test(path[k] ?? "") ? Number(path[k]) : undefined);
+  const number = (k: number): number | undefined =>
+    /^\d+$/.test(path[k] ?? "") ? Number(path[k]) : undefined;
   const onRing = (ring: RingKey, index: number | undefined): Place =>
     index === undefined ? { kind: "ring", ring } : { kind: "vertex", ring, index };
   switch (path[0]) {

@@ -109,7 +109,9 @@ export function removeVertex(sketch: Sketch, key: RingKey, index: number): Sketc
   const next = (index + 1) % n;
   const [into, out] = [ring[index].arc, ring[next].arc];
   const same = into && out && into.x === out.x && into.y === out.y && into.clockwise === out.clockwise;
-  const joined = left.map((vertex) => (vertex === ring[next] && !same ? { x: vertex.x, y: vertex.y } : vertex));
+  const joined = left.map((vertex) =>
+    vertex === ring[next] && !same ? { x: vertex.x, y: vertex.y } : vertex,
+  );
   if (joined.length < 3 && !joined.some(({ arc }) => arc)) return removeRing(sketch, key);
   const previous = (index + n - 1) % n;
   const merged = index === 0 ? n - 2 : index - 1;
@@ -135,7 +137,9 @@ export function removeRing(sketch: Sketch, key: RingKey): Sketch {
     return { ...sketch, regions: sketch.regions.filter((_, k) => regionKey(k) !== key) };
   }
   const rings =
-    key === 0 ? sketch.rings.map((ring, k) => (k === 0 ? [] : ring)) : sketch.rings.filter((_, k) => k !== key);
+    key === 0
+      ? sketch.rings.map((ring, k) => (k === 0 ? [] : ring))
+      : sketch.rings.filter((_, k) => k !== key);
   return withParts({ ...sketch, rings }, (part) => {
     if (part.ring === key) return [];
     return [key > 0 && part.ring > key ? { ...part, ring: part.ring - 1 } : part];

@@ -129,7 +129,8 @@ class Reader {
     const end = this.point(item.arcTo, `${pointer}/arcTo`);
     const center = this.point(item.center, `${pointer}/center`);
     const clockwise = item.clockwise ?? false;
-    if (typeof clockwise !== "boolean") return this.complain(`${pointer}/clockwise`, "must be true or false.");
+    if (typeof clockwise !== "boolean")
+      return this.complain(`${pointer}/clockwise`, "must be true or false.");
     if (!end || !center) return null;
     return { x: end[0], y: end[1], arc: { x: center[0], y: center[1], clockwise } };
   }
@@ -140,7 +141,8 @@ class Reader {
   }
 
   private terminal(value: unknown, pointer: string, rings: readonly Ring[]): Terminal | null {
-    if (!isRecord(value)) return this.complain(pointer, "must be an object with a name and parts or segments.");
+    if (!isRecord(value))
+      return this.complain(pointer, "must be an object with a name and parts or segments.");
     if (typeof value.name !== "string") return this.complain(`${pointer}/name`, "must be a text.");
     const parts = this.list(value.parts ?? [], `${pointer}/parts`, (part, at) => this.part(part, at));
     const segments = this.list(value.segments ?? [], `${pointer}/segments`, (segment, at) => {

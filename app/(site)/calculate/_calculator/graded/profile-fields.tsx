@@ -29,7 +29,8 @@ interface OneFieldProps {
 }
 
 function OneField({ field, name, site }: OneFieldProps) {
-  const { parameters, change, errorAt } = useForm();
+  const form = useForm();
+  const { parameters, change, errorAt } = form;
   const value = parameters[name] ?? "";
   const error = errorAt(name);
   const set = (text: string) => change({ [name]: text });
@@ -41,7 +42,7 @@ function OneField({ field, name, site }: OneFieldProps) {
     case "profile":
       return <InnerProfile name={name} site={{ ...site, values: "density" }} />;
     case "material":
-      return <MaterialPicker name={name} />;
+      return <MaterialPicker name={name} form={form} />;
     case "flag":
       return (
         <Toggle
