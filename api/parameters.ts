@@ -1,6 +1,7 @@
 import type { z } from "zod";
 import { Refusal } from "@/lib/service/refusal";
-import { parameterComplaints, unknownMember } from "./issues";
+import { unknownMember } from "@/lib/engine";
+import { parameterComplaints } from "./issues";
 
 /** Parameters that the dispatcher reads itself. */
 const RESERVED = new Set(["key", "format"]);

@@ -47,6 +47,7 @@ export {
   type ExpressionReading,
 } from "./medium/expression/compile-expression";
 
+export { schemaComplaints, unknownMember } from "./schema-complaints";
 export {
   addZodIssues,
   dimensionsSchema,

@@ -3,7 +3,7 @@ import { InputError, Problems } from "../../failure";
 import { Collected } from "../../medium/collected";
 import type { Material } from "../../medium/material";
 import { type OperatingInput, readOperating } from "../../resistance/operating-point";
-import { addZodIssues } from "../../resistance/request-schema";
+import { addSchemaComplaints } from "../../schema-complaints";
 import { readRequirement, type Requirement } from "../../resistance/requirement";
 import { checkOutline } from "../outline/check-outline";
 import type { OutlineInput, TerminalInput } from "../outline/schema";
@@ -48,7 +48,7 @@ export function prepareField(body: unknown, context: FieldContext): PreparedFiel
   const problems = new Problems();
   const parsed = fieldRequestSchema.safeParse(body, { reportInput: true });
   if (!parsed.success) {
-    addZodIssues(parsed.error.issues, "#", problems);
+    addSchemaComplaints(fieldRequestSchema, parsed.error.issues, "#", problems);
     throw new InputError(problems.list);
   }
   const request = parsed.data;

@@ -1,7 +1,7 @@
 /** An outline to keep for later: checked, cleaned, its terminals named by what is left of its edges. */
 import { z } from "zod";
 import { InputError, Problems } from "../../failure";
-import { addZodIssues } from "../../resistance/request-schema";
+import { addSchemaComplaints } from "../../schema-complaints";
 import { type CheckedOutline, checkOutline } from "../outline/check-outline";
 import {
   outlineSchema,
@@ -50,7 +50,7 @@ function clean(body: unknown): CleanedOutline {
   const problems = new Problems();
   const parsed = outlineRequestSchema.safeParse(body, { reportInput: true });
   if (!parsed.success) {
-    addZodIssues(parsed.error.issues, "#", problems);
+    addSchemaComplaints(outlineRequestSchema, parsed.error.issues, "#", problems);
     throw new InputError(problems.list);
   }
   const { outline, terminals } = parsed.data;
