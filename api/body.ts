@@ -24,6 +24,7 @@ export interface BodyReaders<Schema extends z.ZodType = z.ZodType> {
       {
         readonly description: string;
         readonly documented: z.ZodType;
+        /** `text` keeps its byte order mark, if it has one. */
         readonly read: (text: string, query: URLSearchParams) => unknown;
       }
     >
@@ -41,7 +42,7 @@ export async function receiveBody(request: Request, readers: BodyReaders): Promi
   const limit = readers.maxBytes ?? DEFAULT_MAX_BYTES;
   const mediaType = checkMediaType(request.headers, readers);
   const declared = Number(request.headers.get("content-length") ?? "0");
-  if (!request.body) return missing(readers);
+  if (!request.body) return empty(readers, mediaType);
   if (declared > limit) throw tooLarge(limit);
   const reader = request.body.getReader();
   const chunks: Uint8Array[] = [];
@@ -56,7 +57,7 @@ export async function receiveBody(request: Request, readers: BodyReaders): Promi
     }
     chunks.push(value);
   }
-  if (size === 0) return missing(readers);
+  if (size === 0) return empty(readers, mediaType);
   if (mediaType === undefined) throw unsupported(readers);
   return { mediaType, bytes: chunks.length === 1 ? chunks[0] : Buffer.concat(chunks, size) };
 }
@@ -65,8 +66,11 @@ function tooLarge(limit: number): Refusal {
   return new Refusal("body-too-large", `The body may have at most ${limit.toLocaleString("en")} bytes.`);
 }
 
-function missing(readers: BodyReaders): undefined {
+/** An empty body. What is not JSON is for its own reader to refuse. */
+function empty(readers: BodyReaders, mediaType: string | undefined): ReceivedBody | undefined {
   if (readers.optional) return undefined;
+  if (mediaType !== undefined && mediaType !== "application/json")
+    return { mediaType, bytes: new Uint8Array() };
   throw new Refusal("malformed-json", "The body is empty.");
 }
 
@@ -144,14 +148,14 @@ export function bodyRefusal(errors: readonly Complaint[]): Refusal {
 function read(readers: BodyReaders, body: ReceivedBody, query: URLSearchParams): unknown {
   let text: string;
   try {
-    text = new TextDecoder("utf-8", { fatal: true }).decode(body.bytes);
+    text = new TextDecoder("utf-8", { fatal: true, ignoreBOM: true }).decode(body.bytes);
   } catch {
     throw new Refusal("malformed-json", "The body is not UTF-8.");
   }
   const other = readers.others?.[body.mediaType];
   if (other) return other.read(text, query);
   try {
-    return JSON.parse(text);
+    return JSON.parse(text.startsWith("\uFEFF") ? text.slice(1) : text);
   } catch (error) {
     const place = /position \d+(?: \(line \d+ column \d+\))?/.exec(
       error instanceof Error ? error.message : "",

@@ -69,6 +69,18 @@ export const PROBLEMS: Readonly<Record<RefusalCode, ProblemKind>> = {
     description: "The short-lived token with which a page of this service calls is over or not one of ours.",
     remedy: "Reload the page. Programs call with a key.",
   },
+  "sign-in-required": {
+    status: 401,
+    title: "Nobody is signed in",
+    description: "The page or call is for people who are signed in, and the session is missing or over.",
+    remedy: "Sign in, then try again. Programs call /api/v1 with a key.",
+  },
+  "sign-in-failed": {
+    status: 401,
+    title: "Sign-in failed",
+    description: "The e-mail address and the password do not belong together.",
+    remedy: "Check both, or have a link sent with which to choose a new password.",
+  },
   "insufficient-scope": {
     status: 403,
     title: "The key lacks a scope",
@@ -80,6 +92,12 @@ export const PROBLEMS: Readonly<Record<RefusalCode, ProblemKind>> = {
     title: "This page may not use the key",
     description: "A browser called from a page whose origin is not among those that the key allows.",
     remedy: "Add the origin (scheme, host and port) to the key, or call from a server.",
+  },
+  "not-permitted": {
+    status: 403,
+    title: "Your role does not allow this",
+    description: "The person is signed in, but their role does not allow the action.",
+    remedy: "Ask an administrator. /docs/permissions says which role may do what.",
   },
   "team-required": {
     status: 403,
@@ -100,6 +118,12 @@ export const PROBLEMS: Readonly<Record<RefusalCode, ProblemKind>> = {
     description:
       "There is nothing under this id that the caller may see. What another team owns looks the same.",
     remedy: "Check the id, and that the key belongs to the right team.",
+  },
+  "embed-withdrawn": {
+    status: 410,
+    title: "The widget was withdrawn",
+    description: "The team that owns this widget has taken it off all pages.",
+    remedy: "Take the frame off the page, or ask the team that owns the widget.",
   },
   "not-ready": {
     status: 409,
@@ -125,6 +149,12 @@ export const PROBLEMS: Readonly<Record<RefusalCode, ProblemKind>> = {
     description: "The Accept header admits none of the media types that this call can answer with.",
     remedy: "Accept application/json, or one of the types that the detail names.",
   },
+  "last-administrator": {
+    status: 409,
+    title: "The last administrator stays",
+    description: "The change would leave the service without an administrator.",
+    remedy: "Make somebody else an administrator first.",
+  },
   "version-conflict": {
     status: 409,
     title: "Changed in the meantime",
@@ -136,6 +166,12 @@ export const PROBLEMS: Readonly<Record<RefusalCode, ProblemKind>> = {
     title: "The same call is still running",
     description: "A call with this Idempotency-Key has started and not finished.",
     remedy: "Wait a moment and repeat the call: the finished answer will be given again.",
+  },
+  "link-over": {
+    status: 410,
+    title: "The link is over",
+    description: "The link was used before, has expired, or was replaced by a newer one.",
+    remedy: "Ask for a new one: from the sign-in page, or from an administrator.",
   },
   "body-too-large": {
     status: 413,
@@ -192,5 +228,12 @@ export const PROBLEMS: Readonly<Record<RefusalCode, ProblemKind>> = {
     title: "The service is busy",
     description: "The service is starting, stopping or has more work than it can take at the moment.",
     remedy: "Repeat the call after the time that Retry-After names.",
+  },
+  "not-computed": {
+    status: 503,
+    title: "Not computed in time",
+    description:
+      "The time that a batch may take was over before this item had its turn. It cost nothing. Only items of a batch are told so; the batch itself is answered.",
+    remedy: "Send the items that are left in another batch.",
   },
 };

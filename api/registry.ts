@@ -1,3 +1,4 @@
+import { postBatch } from "./operations/batch";
 import { readFieldEvents, readFieldLine, readFieldMap, readFieldPlot } from "./operations/field-pictures";
 import { deleteField, postField, readField } from "./operations/fields";
 import { deleteKey, listKeys, postKey, postRotation, readKey } from "./operations/keys";
@@ -19,6 +20,7 @@ export const registry = new RouteTable([
   readShape,
   postResistance,
   getResistance,
+  postBatch,
   postOutline,
   readOutline,
   postField,

@@ -1,6 +1,6 @@
 import type { BucketState } from "@/lib/limits/limiter";
 import { rateLimitHeaders } from "@/lib/limits/rate-limit-headers";
-import type { Refusal } from "@/lib/service/refusal";
+import type { Complaint, Refusal, RefusalCode } from "@/lib/service/refusal";
 import type { Content } from "./operation";
 import { PROBLEMS } from "./problem";
 
@@ -46,7 +46,7 @@ export function answerOf(
 
 /** The problem document of a refusal (RFC 9457), or one line of text where the client asked for text. */
 export function problemAnswer(refusal: Refusal, requestId: string, origin: string, accepts: string): Answer {
-  const { status, title } = PROBLEMS[refusal.code];
+  const { status } = PROBLEMS[refusal.code];
   const headers: Record<string, string> = { ...refusal.more.headers };
   if (status === 401) headers["WWW-Authenticate"] = challenge(refusal);
   if (accepts === "text/plain") {
@@ -54,20 +54,35 @@ export function problemAnswer(refusal: Refusal, requestId: string, origin: strin
     return { status, headers, body: `error: ${refusal.detail.replace(/\s+/g, " ")}` };
   }
   headers["Content-Type"] = "application/problem+json; charset=utf-8";
-  const body = {
+  return { status, headers, body: JSON.stringify(problemDocument(refusal, requestId, origin)) };
+}
+
+export interface ProblemDocument {
+  readonly type: string;
+  readonly title: string;
+  readonly status: number;
+  readonly detail: string;
+  readonly instance: string;
+  readonly errors?: readonly Complaint[];
+}
+
+/** A refusal as its document says it (RFC 9457). */
+export function problemDocument(refusal: Refusal, instance: string, origin: string): ProblemDocument {
+  const { status, title } = PROBLEMS[refusal.code];
+  return {
     type: `${origin}/docs/problems/${refusal.code}`,
     title,
     status,
     detail: refusal.detail,
-    instance: requestId,
+    instance,
     ...(refusal.more.errors ? { errors: refusal.more.errors } : {}),
   };
-  return { status, headers, body: JSON.stringify(body) };
 }
 
 /** RFC 6750, section 3: no error code where no credentials were sent. */
 function challenge(refusal: Refusal): string {
-  return refusal.code === "missing-credentials"
+  const none: readonly RefusalCode[] = ["missing-credentials", "sign-in-required", "sign-in-failed"];
+  return none.includes(refusal.code)
     ? 'Bearer realm="rhoform"'
     : 'Bearer realm="rhoform", error="invalid_token"';
 }

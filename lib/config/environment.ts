@@ -24,6 +24,8 @@ export interface Config {
   readonly workers: number;
   /** Longest time a field solution may take, s. */
   readonly fieldSeconds: number;
+  /** Longest time that the items of one batch may be computed for, s. */
+  readonly batchSeconds: number;
 }
 
 const flag = z.enum(["0", "1", "false", "true"]).transform((value) => value === "1" || value === "true");
@@ -63,6 +65,10 @@ const environment = z.object({
     (value) => (value === "" ? undefined : value),
     z.coerce.number().min(1).max(3600).default(120),
   ),
+  RHOFORM_BATCH_SECONDS: z.preprocess(
+    (value) => (value === "" ? undefined : value),
+    z.coerce.number().min(0.001).max(3600).default(60),
+  ),
 });
 
 export class ConfigError extends Error {
@@ -98,6 +104,7 @@ export function readConfig(variables: Readonly<Record<string, string | undefined
     addressMinuteQuota: settings.RHOFORM_ADDRESS_QUOTA,
     workers: settings.RHOFORM_WORKERS,
     fieldSeconds: settings.RHOFORM_FIELD_SECONDS,
+    batchSeconds: settings.RHOFORM_BATCH_SECONDS,
   };
 }
 

@@ -9,17 +9,23 @@ export type RefusalCode =
   | "revoked-key"
   | "key-not-allowed-in-url"
   | "invalid-token"
+  | "sign-in-required"
+  | "sign-in-failed"
   | "insufficient-scope"
   | "origin-not-allowed"
+  | "not-permitted"
   | "team-required"
   | "library-read-only"
   | "not-found"
+  | "embed-withdrawn"
   | "not-ready"
   | "unknown-path"
   | "method-not-allowed"
   | "not-acceptable"
+  | "last-administrator"
   | "version-conflict"
   | "request-in-progress"
+  | "link-over"
   | "body-too-large"
   | "unsupported-media-type"
   | "invalid-input"
@@ -28,7 +34,8 @@ export type RefusalCode =
   | "too-many-requests"
   | "quota-exhausted"
   | "internal"
-  | "busy";
+  | "busy"
+  | "not-computed";
 
 /** One complaint about an input: a member of the body by JSON pointer, or a query parameter by name. */
 export type Complaint =

@@ -2,7 +2,7 @@
 
 import { client } from './client.gen.js';
 import type { Client, Options as Options2, TDataShape } from './client/index.js';
-import type { ChangeMaterialData, ChangeMaterialErrors, ChangeMaterialResponses, ComputeResistanceData, ComputeResistanceErrors, ComputeResistanceResponses, CreateMaterialData, CreateMaterialErrors, CreateMaterialResponses, DeleteFieldData, DeleteFieldErrors, DeleteFieldResponses, DeleteRecordData, DeleteRecordErrors, DeleteRecordResponses, IssueKeyData, IssueKeyErrors, IssueKeyResponses, ListKeysData, ListKeysErrors, ListKeysResponses, ListMaterialsData, ListMaterialsErrors, ListMaterialsResponses, ListRecordsData, ListRecordsErrors, ListRecordsResponses, ListShapesData, ListShapesErrors, ListShapesResponses, ReadFieldData, ReadFieldErrors, ReadFieldEventsData, ReadFieldEventsErrors, ReadFieldEventsResponse, ReadFieldEventsResponses, ReadFieldLineData, ReadFieldLineErrors, ReadFieldLineResponses, ReadFieldMapData, ReadFieldMapErrors, ReadFieldMapResponses, ReadFieldPlotData, ReadFieldPlotErrors, ReadFieldPlotResponses, ReadFieldResponses, ReadHealthData, ReadHealthErrors, ReadHealthResponses, ReadKeyData, ReadKeyErrors, ReadKeyResponses, ReadMaterialData, ReadMaterialErrors, ReadMaterialResponses, ReadOpenApiData, ReadOpenApiErrors, ReadOpenApiResponses, ReadOutlineData, ReadOutlineErrors, ReadOutlineResponses, ReadRecordData, ReadRecordErrors, ReadRecordResponses, ReadResistanceData, ReadResistanceErrors, ReadResistanceResponses, ReadShapeData, ReadShapeErrors, ReadShapeResponses, ReadUsageData, ReadUsageErrors, ReadUsageResponses, RelabelRecordData, RelabelRecordErrors, RelabelRecordResponses, ReplayRecordData, ReplayRecordErrors, ReplayRecordResponses, RetireMaterialData, RetireMaterialErrors, RetireMaterialResponses, RevokeKeyData, RevokeKeyErrors, RevokeKeyResponses, RotateKeyData, RotateKeyErrors, RotateKeyResponses, SolveFieldData, SolveFieldErrors, SolveFieldResponses, StoreOutlineData, StoreOutlineErrors, StoreOutlineResponses } from './types.gen.js';
+import type { ChangeMaterialData, ChangeMaterialErrors, ChangeMaterialResponses, ComputeBatchData, ComputeBatchErrors, ComputeBatchResponses, ComputeResistanceData, ComputeResistanceErrors, ComputeResistanceResponses, CreateMaterialData, CreateMaterialErrors, CreateMaterialResponses, DeleteFieldData, DeleteFieldErrors, DeleteFieldResponses, DeleteRecordData, DeleteRecordErrors, DeleteRecordResponses, IssueKeyData, IssueKeyErrors, IssueKeyResponses, ListKeysData, ListKeysErrors, ListKeysResponses, ListMaterialsData, ListMaterialsErrors, ListMaterialsResponses, ListRecordsData, ListRecordsErrors, ListRecordsResponses, ListShapesData, ListShapesErrors, ListShapesResponses, ReadFieldData, ReadFieldErrors, ReadFieldEventsData, ReadFieldEventsErrors, ReadFieldEventsResponse, ReadFieldEventsResponses, ReadFieldLineData, ReadFieldLineErrors, ReadFieldLineResponses, ReadFieldMapData, ReadFieldMapErrors, ReadFieldMapResponses, ReadFieldPlotData, ReadFieldPlotErrors, ReadFieldPlotResponses, ReadFieldResponses, ReadHealthData, ReadHealthErrors, ReadHealthResponses, ReadKeyData, ReadKeyErrors, ReadKeyResponses, ReadMaterialData, ReadMaterialErrors, ReadMaterialResponses, ReadOpenApiData, ReadOpenApiErrors, ReadOpenApiResponses, ReadOutlineData, ReadOutlineErrors, ReadOutlineResponses, ReadRecordData, ReadRecordErrors, ReadRecordResponses, ReadResistanceData, ReadResistanceErrors, ReadResistanceResponses, ReadShapeData, ReadShapeErrors, ReadShapeResponses, ReadUsageData, ReadUsageErrors, ReadUsageResponses, RelabelRecordData, RelabelRecordErrors, RelabelRecordResponses, ReplayRecordData, ReplayRecordErrors, ReplayRecordResponses, RetireMaterialData, RetireMaterialErrors, RetireMaterialResponses, RevokeKeyData, RevokeKeyErrors, RevokeKeyResponses, RotateKeyData, RotateKeyErrors, RotateKeyResponses, SolveFieldData, SolveFieldErrors, SolveFieldResponses, StoreOutlineData, StoreOutlineErrors, StoreOutlineResponses } from './types.gen.js';
 
 export type Options<TData extends TDataShape = TDataShape, ThrowOnError extends boolean = boolean, TResponse = unknown> = Options2<TData, ThrowOnError, TResponse> & {
     /**
@@ -84,6 +84,26 @@ export const readResistance = <ThrowOnError extends boolean = true>(options: Opt
         }],
     url: '/resistance/{shape}',
     ...options
+});
+
+/**
+ * Compute up to 10,000 resistances
+ *
+ * Each item is answered or refused on its own, in order, as `POST /resistance` would; only `record` is not for batches. Answers stream out as they are ready. As `text/csv` a row is a request: columns `shape`, the dimensions by name, `material`, `resistivity`, `conductivity`, `sheetResistance`, `thickness`, `core.material` and the like, `temperature`, `voltage`, `current`, `power`, `label`; a unit stands in the cell or in the header (`width/mm`); comma, semicolon or tab separates. The answer has the same rows and columns and behind them what came out. A cell that a spreadsheet would take for a formula gets an apostrophe in front. A table is answered as a table and JSON as JSON, unless `Accept` or `format` says otherwise. Costs one computation for each item that is answered: as many as there are items are reserved before, and what the others reserved is given back. Where the time of a batch is over, the items that are left are told with status 503. Needs the scope `compute`.
+ */
+export const computeBatch = <ThrowOnError extends boolean = true>(options: Options<ComputeBatchData, ThrowOnError>) => (options.client ?? client).post<ComputeBatchResponses, ComputeBatchErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/resistance/batch',
+    ...options,
+    headers: {
+        'Content-Type': 'application/json',
+        ...options.headers
+    }
 });
 
 /**

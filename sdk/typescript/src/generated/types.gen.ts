@@ -211,7 +211,70 @@ export type AnsweredResistance = {
         relativeError: number;
     };
     /**
-     * Whether the requirement is met; decided only if the bounds lie wholly on one side.
+     * How far the resistance strays with the tolerances of the inputs; bounds are a separate statement.
+     */
+    uncertainty?: {
+        method: 'propagation' | 'worst-case' | 'monte-carlo';
+        /**
+         * Standard uncertainty of the resistance in ohms; for `worst-case` that of first-order propagation.
+         */
+        standard: number;
+        /**
+         * Lower end of the range in ohms.
+         */
+        low: number;
+        /**
+         * Upper end of the range in ohms.
+         */
+        high: number;
+        /**
+         * Probability that the range covers the resistance: 0.95; 1 for `worst-case`, whose range is the whole box.
+         */
+        coverage: number;
+        /**
+         * The range for people, rounded by JCGM 100, 7.2.6.
+         */
+        text: string;
+        /**
+         * How the range was found, in one or two sentences.
+         */
+        basis: string;
+        /**
+         * Mean of the trials in ohms; `monte-carlo` only.
+         */
+        mean?: number;
+        /**
+         * Trials made; `monte-carlo` only.
+         */
+        trials?: number;
+        /**
+         * Seed used; `monte-carlo` only.
+         */
+        seed?: number;
+        /**
+         * The budget, largest share first.
+         */
+        contributions: Array<{
+            /**
+             * Place of the input in the request, such as `dimensions.innerRadius`; a material stands for its stated uncertainty.
+             */
+            input: string;
+            /**
+             * Derivative of the resistance by the input at the nominal values, in ohms per SI unit (per radian, per kelvin; for a material per unit of the ratio of true to nominal resistivity).
+             */
+            sensitivity: number;
+            /**
+             * Standard uncertainty of the input in SI (rad, K; a ratio for a material).
+             */
+            standard: number;
+            /**
+             * Part of the whole that is due to this input, 0 … 1: of the variance, or for `worst-case` of the ranges that the inputs span one at a time.
+             */
+            share: number;
+        }>;
+    };
+    /**
+     * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
      */
     verdict?: 'met' | 'not-met' | 'undecided';
     /**
@@ -3245,6 +3308,386 @@ export type EarthGridRequest = {
 };
 
 /**
+ * Every item answered or refused on its own.
+ */
+export type BatchAnswer = {
+    /**
+     * In the order of the request.
+     */
+    items: Array<AnsweredItem | RefusedItem>;
+    counts: {
+        answered: number;
+        refused: number;
+        /**
+         * Items for which the batch's time did not suffice.
+         */
+        notComputed: number;
+    };
+};
+
+/**
+ * An item that was answered.
+ */
+export type AnsweredItem = {
+    /**
+     * Place in the request, from 0.
+     */
+    index: number;
+    status: 200;
+    result: ResistanceResult;
+};
+
+/**
+ * A resistance, how sure it is and how it came about.
+ */
+export type ResistanceResult = {
+    shape: string;
+    resistance: BoundedResistance;
+    /**
+     * The reciprocal of the resistance.
+     */
+    conductance: {
+        /**
+         * Conductance in siemens.
+         */
+        value: number;
+        unit: 'siemens';
+        /**
+         * The value for people.
+         */
+        text: string;
+    };
+    /**
+     * How the value was computed.
+     */
+    method: 'closed-form' | 'quadrature' | 'field';
+    /**
+     * The operating point; voltage, current and power only where the request gave one of them.
+     */
+    operating: {
+        /**
+         * Temperature in °C at which the medium was evaluated.
+         */
+        temperature: number;
+        /**
+         * Voltage across the terminals in volts.
+         */
+        voltage?: number;
+        /**
+         * Current in amperes.
+         */
+        current?: number;
+        /**
+         * Power in watts.
+         */
+        power?: number;
+    };
+    /**
+     * How the integral went; only where the method is quadrature.
+     */
+    quadrature?: {
+        status: 'converged' | 'limit';
+        evaluations: number;
+        /**
+         * Estimated relative error of the integral.
+         */
+        relativeError: number;
+    };
+    /**
+     * How far the resistance strays with the tolerances of the inputs; bounds are a separate statement.
+     */
+    uncertainty?: {
+        method: 'propagation' | 'worst-case' | 'monte-carlo';
+        /**
+         * Standard uncertainty of the resistance in ohms; for `worst-case` that of first-order propagation.
+         */
+        standard: number;
+        /**
+         * Lower end of the range in ohms.
+         */
+        low: number;
+        /**
+         * Upper end of the range in ohms.
+         */
+        high: number;
+        /**
+         * Probability that the range covers the resistance: 0.95; 1 for `worst-case`, whose range is the whole box.
+         */
+        coverage: number;
+        /**
+         * The range for people, rounded by JCGM 100, 7.2.6.
+         */
+        text: string;
+        /**
+         * How the range was found, in one or two sentences.
+         */
+        basis: string;
+        /**
+         * Mean of the trials in ohms; `monte-carlo` only.
+         */
+        mean?: number;
+        /**
+         * Trials made; `monte-carlo` only.
+         */
+        trials?: number;
+        /**
+         * Seed used; `monte-carlo` only.
+         */
+        seed?: number;
+        /**
+         * The budget, largest share first.
+         */
+        contributions: Array<{
+            /**
+             * Place of the input in the request, such as `dimensions.innerRadius`; a material stands for its stated uncertainty.
+             */
+            input: string;
+            /**
+             * Derivative of the resistance by the input at the nominal values, in ohms per SI unit (per radian, per kelvin; for a material per unit of the ratio of true to nominal resistivity).
+             */
+            sensitivity: number;
+            /**
+             * Standard uncertainty of the input in SI (rad, K; a ratio for a material).
+             */
+            standard: number;
+            /**
+             * Part of the whole that is due to this input, 0 … 1: of the variance, or for `worst-case` of the ranges that the inputs span one at a time.
+             */
+            share: number;
+        }>;
+    };
+    /**
+     * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
+     */
+    verdict?: 'met' | 'not-met' | 'undecided';
+    /**
+     * Where the field and the current density are largest.
+     */
+    peak?: {
+        /**
+         * Largest field strength
+         */
+        field: {
+            /**
+             * Largest field strength; null where it is unbounded or not known.
+             */
+            value: number | null;
+            unit: 'V/m';
+            text: string;
+        };
+        currentDensity: {
+            /**
+             * Largest current density; null where it is unbounded or not known.
+             */
+            value: number | null;
+            unit: 'A/m^2';
+            text: string;
+        } | {
+            /**
+             * Largest sheet current density; null where it is unbounded or not known.
+             */
+            value: number | null;
+            unit: 'A/m';
+            text: string;
+        };
+        /**
+         * Where the field is largest.
+         */
+        position: {
+            /**
+             * Coordinate of the shape, or null where it has none.
+             */
+            coordinate: string | null;
+            /**
+             * Value of that coordinate, m or rad.
+             */
+            value: number | null;
+            unit: 'm' | 'rad' | null;
+            /**
+             * The place in words.
+             */
+            text: string;
+        };
+        /**
+         * Where the current density is largest.
+         */
+        currentDensityPosition: {
+            /**
+             * Coordinate of the shape, or null where it has none.
+             */
+            coordinate: string | null;
+            /**
+             * Value of that coordinate, m or rad.
+             */
+            value: number | null;
+            unit: 'm' | 'rad' | null;
+            /**
+             * The place in words.
+             */
+            text: string;
+        };
+        /**
+         * Whether the values hold at the operating point or at one volt.
+         */
+        per: 'operating-point' | 'volt';
+    } | null;
+    steps?: Array<{
+        title: string;
+        /**
+         * The step as TeX.
+         */
+        tex: string;
+        /**
+         * Its outcome for people.
+         */
+        value?: string;
+    }>;
+    /**
+     * 101 samples along the flow, at the operating point or per volt.
+     */
+    profile?: {
+        /**
+         * Name of the coordinate along the flow.
+         */
+        coordinate: string;
+        /**
+         * Unit of the positions.
+         */
+        unit: 'm' | 'rad';
+        per: 'operating-point' | 'volt';
+        /**
+         * Values of the coordinate from the high to the low terminal, m or rad.
+         */
+        position: Array<number>;
+        /**
+         * Potential against the low terminal in volts.
+         */
+        potential: Array<number>;
+        /**
+         * Field strength in V/m.
+         */
+        field: Array<number>;
+        /**
+         * Current density in A/m^2.
+         */
+        currentDensity: Array<number>;
+        /**
+         * Conductivity in S/m.
+         */
+        conductivity: Array<number>;
+        /**
+         * For a medium graded across the flow.
+         */
+        across?: {
+            coordinate: string;
+            unit: 'm' | 'rad';
+            /**
+             * Values of the coordinate across the flow, m or rad.
+             */
+            position: Array<number>;
+            /**
+             * Conductivity in S/m.
+             */
+            conductivity: Array<number>;
+            /**
+             * Current density in A/m^2 where the tube's field is largest.
+             */
+            currentDensity: Array<number>;
+        };
+    } | null;
+    checks?: Array<{
+        name: 'voltage-independence' | 'current-continuity' | 'second-route';
+        /**
+         * false where the shape has nothing to compare; then `reason` says why.
+         */
+        applies: boolean;
+        passed?: boolean;
+        /**
+         * Relative deviation found.
+         */
+        deviation?: number;
+        /**
+         * Largest relative deviation that passes.
+         */
+        tolerance?: number;
+        reason?: string;
+    }>;
+    cautions: Array<string>;
+    assumptions: Array<string>;
+    sources: Array<{
+        title: string;
+        detail?: string;
+        provenance: 'source at hand' | 'from memory' | 'derived here' | 'measured';
+    }>;
+    materials: Array<{
+        id: string;
+        version: number;
+        name: string;
+    }>;
+    engine: string;
+    catalogue: string;
+};
+
+/**
+ * An item that was refused or not computed.
+ */
+export type RefusedItem = {
+    /**
+     * Place in the request, from 0.
+     */
+    index: number;
+    /**
+     * 422 for a mistake in the item; 503 where the batch's time was over before it.
+     */
+    status: number;
+    /**
+     * What was wrong; pointers start at the item.
+     */
+    problem: {
+        /**
+         * Page that explains the problem; its last part is the problem's code.
+         */
+        type: string;
+        title: string;
+        status: number;
+        /**
+         * What happened this time, in one or two sentences.
+         */
+        detail: string;
+        /**
+         * The request id, as in the Request-Id header.
+         */
+        instance: string;
+        /**
+         * Every complaint about the input; the sentence goes on from the name of the place.
+         */
+        errors?: Array<{
+            /**
+             * JSON pointer of the member, as a URI fragment.
+             */
+            pointer: string;
+            detail: string;
+        } | {
+            /**
+             * Name of the query parameter.
+             */
+            parameter: string;
+            detail: string;
+        }>;
+    };
+};
+
+/**
+ * Up to 10,000 requests.
+ */
+export type BatchRequest = {
+    /**
+     * Bodies of `POST /resistance`, without `record`.
+     */
+    items: Array<ResistanceRequest>;
+};
+
+/**
  * A stored outline.
  */
 export type Outline = {
@@ -3623,7 +4066,7 @@ export type Field = {
                 text: string;
             };
             /**
-             * Whether the requirement is met; decided only if the bounds lie wholly on one side.
+             * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
              */
             verdict?: 'met' | 'not-met' | 'undecided';
             /**
@@ -3889,7 +4332,7 @@ export type FieldResult = {
         text: string;
     };
     /**
-     * Whether the requirement is met; decided only if the bounds lie wholly on one side.
+     * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
      */
     verdict?: 'met' | 'not-met' | 'undecided';
     /**
@@ -4644,234 +5087,6 @@ export type Record = {
 };
 
 /**
- * A resistance, how sure it is and how it came about.
- */
-export type ResistanceResult = {
-    shape: string;
-    resistance: BoundedResistance;
-    /**
-     * The reciprocal of the resistance.
-     */
-    conductance: {
-        /**
-         * Conductance in siemens.
-         */
-        value: number;
-        unit: 'siemens';
-        /**
-         * The value for people.
-         */
-        text: string;
-    };
-    /**
-     * How the value was computed.
-     */
-    method: 'closed-form' | 'quadrature' | 'field';
-    /**
-     * The operating point; voltage, current and power only where the request gave one of them.
-     */
-    operating: {
-        /**
-         * Temperature in °C at which the medium was evaluated.
-         */
-        temperature: number;
-        /**
-         * Voltage across the terminals in volts.
-         */
-        voltage?: number;
-        /**
-         * Current in amperes.
-         */
-        current?: number;
-        /**
-         * Power in watts.
-         */
-        power?: number;
-    };
-    /**
-     * How the integral went; only where the method is quadrature.
-     */
-    quadrature?: {
-        status: 'converged' | 'limit';
-        evaluations: number;
-        /**
-         * Estimated relative error of the integral.
-         */
-        relativeError: number;
-    };
-    /**
-     * Whether the requirement is met; decided only if the bounds lie wholly on one side.
-     */
-    verdict?: 'met' | 'not-met' | 'undecided';
-    /**
-     * Where the field and the current density are largest.
-     */
-    peak?: {
-        /**
-         * Largest field strength
-         */
-        field: {
-            /**
-             * Largest field strength; null where it is unbounded or not known.
-             */
-            value: number | null;
-            unit: 'V/m';
-            text: string;
-        };
-        currentDensity: {
-            /**
-             * Largest current density; null where it is unbounded or not known.
-             */
-            value: number | null;
-            unit: 'A/m^2';
-            text: string;
-        } | {
-            /**
-             * Largest sheet current density; null where it is unbounded or not known.
-             */
-            value: number | null;
-            unit: 'A/m';
-            text: string;
-        };
-        /**
-         * Where the field is largest.
-         */
-        position: {
-            /**
-             * Coordinate of the shape, or null where it has none.
-             */
-            coordinate: string | null;
-            /**
-             * Value of that coordinate, m or rad.
-             */
-            value: number | null;
-            unit: 'm' | 'rad' | null;
-            /**
-             * The place in words.
-             */
-            text: string;
-        };
-        /**
-         * Where the current density is largest.
-         */
-        currentDensityPosition: {
-            /**
-             * Coordinate of the shape, or null where it has none.
-             */
-            coordinate: string | null;
-            /**
-             * Value of that coordinate, m or rad.
-             */
-            value: number | null;
-            unit: 'm' | 'rad' | null;
-            /**
-             * The place in words.
-             */
-            text: string;
-        };
-        /**
-         * Whether the values hold at the operating point or at one volt.
-         */
-        per: 'operating-point' | 'volt';
-    } | null;
-    steps?: Array<{
-        title: string;
-        /**
-         * The step as TeX.
-         */
-        tex: string;
-        /**
-         * Its outcome for people.
-         */
-        value?: string;
-    }>;
-    /**
-     * 101 samples along the flow, at the operating point or per volt.
-     */
-    profile?: {
-        /**
-         * Name of the coordinate along the flow.
-         */
-        coordinate: string;
-        /**
-         * Unit of the positions.
-         */
-        unit: 'm' | 'rad';
-        per: 'operating-point' | 'volt';
-        /**
-         * Values of the coordinate from the high to the low terminal, m or rad.
-         */
-        position: Array<number>;
-        /**
-         * Potential against the low terminal in volts.
-         */
-        potential: Array<number>;
-        /**
-         * Field strength in V/m.
-         */
-        field: Array<number>;
-        /**
-         * Current density in A/m^2.
-         */
-        currentDensity: Array<number>;
-        /**
-         * Conductivity in S/m.
-         */
-        conductivity: Array<number>;
-        /**
-         * For a medium graded across the flow.
-         */
-        across?: {
-            coordinate: string;
-            unit: 'm' | 'rad';
-            /**
-             * Values of the coordinate across the flow, m or rad.
-             */
-            position: Array<number>;
-            /**
-             * Conductivity in S/m.
-             */
-            conductivity: Array<number>;
-            /**
-             * Current density in A/m^2 where the tube's field is largest.
-             */
-            currentDensity: Array<number>;
-        };
-    } | null;
-    checks?: Array<{
-        name: 'voltage-independence' | 'current-continuity' | 'second-route';
-        /**
-         * false where the shape has nothing to compare; then `reason` says why.
-         */
-        applies: boolean;
-        passed?: boolean;
-        /**
-         * Relative deviation found.
-         */
-        deviation?: number;
-        /**
-         * Largest relative deviation that passes.
-         */
-        tolerance?: number;
-        reason?: string;
-    }>;
-    cautions: Array<string>;
-    assumptions: Array<string>;
-    sources: Array<{
-        title: string;
-        detail?: string;
-        provenance: 'source at hand' | 'from memory' | 'derived here' | 'measured';
-    }>;
-    materials: Array<{
-        id: string;
-        version: number;
-        name: string;
-    }>;
-    engine: string;
-    catalogue: string;
-};
-
-/**
  * The new label.
  */
 export type RecordChange = {
@@ -5372,6 +5587,10 @@ export type ComputeResistanceErrors = {
      */
     409: Problem;
     /**
+     * `embed-withdrawn`: The team that owns this widget has taken it off all pages.
+     */
+    410: Problem;
+    /**
      * `body-too-large`: The body is longer than this call takes.
      */
     413: Problem;
@@ -5536,6 +5755,91 @@ export type ReadResistanceResponses = {
 };
 
 export type ReadResistanceResponse = ReadResistanceResponses[keyof ReadResistanceResponses];
+
+export type ComputeBatchData = {
+    /**
+     * What to compute.
+     */
+    body: BatchRequest;
+    path?: never;
+    query?: {
+        /**
+         * Form of the answer; goes before the Accept header.
+         */
+        format?: 'json' | 'csv';
+    };
+    url: '/resistance/batch';
+};
+
+export type ComputeBatchErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     *
+     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     */
+    403: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `body-too-large`: The body is longer than this call takes.
+     */
+    413: Problem;
+    /**
+     * `unsupported-media-type`: The body's Content-Type is not one that this call reads.
+     */
+    415: Problem;
+    /**
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `quota-exhausted`: The call would need more computations than are left of the calendar month (UTC).
+     *
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type ComputeBatchError = ComputeBatchErrors[keyof ComputeBatchErrors];
+
+export type ComputeBatchResponses = {
+    /**
+     * Every item, answered or refused.
+     */
+    200: BatchAnswer;
+};
+
+export type ComputeBatchResponse = ComputeBatchResponses[keyof ComputeBatchResponses];
 
 export type StoreOutlineData = {
     /**
