@@ -1,6 +1,7 @@
 import { authenticate } from "@/lib/auth/authenticate";
 import type { Principal } from "@/lib/auth/principal";
 import type { Bucket, BucketState, Spending } from "@/lib/limits/limiter";
+import { embedSubject } from "@/lib/embeds/usage";
 import { addressBucket, minuteBucket, monthBucket } from "@/lib/limits/quota";
 import { limitedAddress } from "@/lib/http/client-address";
 import { newId } from "@/lib/service/identifier";
@@ -46,7 +47,7 @@ export class Call {
     await this.spendMinute(
       principal.kind === "anonymous"
         ? this.addressBucket()
-        : minuteBucket(subjectOf(principal), principal.minuteQuota),
+        : minuteBucket(minuteSubject(principal), principal.minuteQuota),
     );
     return principal;
   }
@@ -96,7 +97,14 @@ export class Call {
 
 /** Whom a caller's counters belong to. */
 export function subjectOf(principal: Exclude<Principal, { kind: "anonymous" }>): string {
+  if (principal.kind === "embed") return embedSubject(principal.id);
   return principal.kind === "key" ? `key:${principal.id}` : `address:${limitedAddress(principal.address)}`;
+}
+
+/** One visitor of a widget does not use up the minute of all others. */
+function minuteSubject(principal: Exclude<Principal, { kind: "anonymous" }>): string {
+  const subject = subjectOf(principal);
+  return principal.kind === "embed" ? `${subject}:${limitedAddress(principal.address)}` : subject;
 }
 
 /** The counters of a caller without spending, for the usage report. */
@@ -105,7 +113,7 @@ export function bucketsOf(
   now: number,
 ): { minute: Bucket; month: Bucket } {
   return {
-    minute: minuteBucket(subjectOf(principal), principal.minuteQuota),
+    minute: minuteBucket(minuteSubject(principal), principal.minuteQuota),
     month: monthBucket(subjectOf(principal), principal.monthQuota, now),
   };
 }

@@ -1,3 +1,4 @@
+import { countEmbedCall } from "@/db/queries/embeds";
 import { insertUsage } from "@/db/queries/usage";
 import { requireAccess } from "@/lib/auth/access";
 import { SIGNED_OUT_ID } from "@/lib/auth/principal";
@@ -91,6 +92,9 @@ async function work(
   }
   requireOrigin(principal, headers, service.config.origin);
   requireAccess(principal, operation.scope);
+  if (principal.kind === "embed" && !operation.widgets && operation.scope !== "none") {
+    throw new Refusal("insufficient-scope", "A widget's frame computes; this call is not for it.");
+  }
   if (negotiated instanceof Refusal) throw negotiated;
 
   const body = operation.request.body && (await receiveBody(request, operation.request.body));
@@ -178,8 +182,8 @@ function count(call: Call, report: Report, status: number): void {
   insertUsage(call.service.db, {
     at: call.now,
     requestId: call.requestId,
-    keyId: principal.kind === "key" ? principal.id : SIGNED_OUT_ID,
-    teamId: principal.kind === "key" ? principal.teamId : "",
+    keyId: principal.kind === "signed-out" ? SIGNED_OUT_ID : principal.id,
+    teamId: principal.kind === "signed-out" ? "" : principal.teamId,
     operation: report.operation?.id ?? "none",
     shape: report.shape,
     status,
@@ -187,6 +191,16 @@ function count(call: Call, report: Report, status: number): void {
     computations: report.computations,
     client: clientKind(call.headers.get("user-agent")),
   });
+  if (principal.kind === "embed") {
+    const { id: embedId, host } = principal;
+    countEmbedCall(call.service.db, {
+      embedId,
+      host,
+      at: call.now,
+      status,
+      computations: report.computations,
+    });
+  }
 }
 
 function log(call: Call, report: Report, status: number): void {
@@ -199,7 +213,10 @@ function log(call: Call, report: Report, status: number): void {
     status,
     ms: Math.round((performance.now() - call.started) * 1000) / 1000,
     computations: report.computations,
-    caller: principal?.kind === "key" ? principal.id : (principal?.kind ?? "refused"),
+    caller:
+      principal?.kind === "key" || principal?.kind === "embed"
+        ? principal.id
+        : (principal?.kind ?? "refused"),
     client: clientKind(call.headers.get("user-agent")),
     address: call.address,
   });

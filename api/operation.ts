@@ -87,6 +87,8 @@ export interface OperationFacts {
   readonly summary: string;
   readonly description: string;
   readonly scope: Access;
+  /** Whether a widget's frame may call it; its body then holds the values of open inputs only. */
+  readonly widgets?: boolean;
   /** Media types it can answer with, the preferred one first; `format=` picks one by its last part. */
   readonly produces: readonly string[];
   /** By status; the problems of `errors` come on top. */

@@ -8,6 +8,7 @@ function impliedCodes(operation: Operation): RefusalCode[] {
   // A key may be sent everywhere; one that does not count is refused everywhere.
   codes.push("ambiguous-credentials", "invalid-key", "expired-key", "revoked-key", "key-not-allowed-in-url");
   codes.push("invalid-token", "origin-not-allowed");
+  if (operation.widgets) codes.push("embed-withdrawn");
   if (scope !== "none") codes.push("missing-credentials");
   if (scope !== "none" && scope !== "any") codes.push("insufficient-scope");
   if (request.body) codes.push("malformed-json", "body-too-large", "unsupported-media-type");

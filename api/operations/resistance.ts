@@ -1,18 +1,38 @@
 import { z } from "zod";
 import { keyActor } from "@/lib/activity/append";
 import { requireKey } from "@/lib/auth/access";
-import { catalogue, computeResistance, exampleRequest, type ResistanceResult } from "@/lib/engine";
+import {
+  catalogue,
+  computeResistance,
+  exampleRequest,
+  InputError,
+  type ResistanceResult,
+} from "@/lib/engine";
+import type { EmbedPrincipal } from "@/lib/auth/principal";
+import { widgetComplaints, widgetRequest } from "@/lib/embeds/enforce";
 import { usableMaterial } from "@/lib/materials/team-materials";
 import { storeRecord } from "@/lib/records/records";
 import { BASE_PATH } from "../base-path";
 import type { Example } from "../documentation";
-import { type CallContext, defineOperation, json } from "../operation";
+import { type CallContext, defineOperation, json, type Outcome } from "../operation";
 import { answeredResistance, documentedResistanceRequest } from "../schemas/resistance";
 
 /** Computes with the materials that the caller may use. */
 export function compute(request: unknown, { service, principal }: CallContext): ResistanceResult {
-  const teamId = principal.kind === "key" ? principal.teamId : undefined;
+  const teamId = principal.kind === "key" || principal.kind === "embed" ? principal.teamId : undefined;
   return computeResistance(request, { material: (id) => usableMaterial(service.db, teamId, id) });
+}
+
+/** The open values of a widget, with everything else as its version fixes it. */
+function computeWidget(body: unknown, context: CallContext, { definition }: EmbedPrincipal): Outcome {
+  const request = widgetRequest(definition, body);
+  try {
+    const result = compute(request, context);
+    return json(200, result, { shape: result.shape, computations: 1 });
+  } catch (error) {
+    if (!(error instanceof InputError)) throw error;
+    throw new InputError(widgetComplaints(definition, error.errors));
+  }
 }
 
 /** The body's own members, if it is an object at all; everything in them is the engine's to check. */
@@ -65,6 +85,7 @@ export const postResistance = defineOperation({
   description:
     "From a shape, a medium and two terminals to a DC resistance with bounds: how it was computed, what it assumes, which cautions apply, and the engine's checks on this very answer. With `record` the calculation is stored for the team and can be replayed later; then an `Idempotency-Key` counts. Costs one computation of the month; a refused request costs none.",
   scope: "compute",
+  widgets: true,
   request: {
     body: {
       description: "What to compute.",
@@ -106,6 +127,7 @@ export const postResistance = defineOperation({
   reserve: () => 1,
   stores: ({ body }) => asksForRecord(body),
   handler: ({ body }, context) => {
+    if (context.principal.kind === "embed") return computeWidget(body, context, context.principal);
     const by = asksForRecord(body) ? requireKey(context.principal, "A record") : undefined;
     const result = compute(body, context);
     const facts = { shape: result.shape, computations: 1 };

@@ -2,6 +2,8 @@ import { type KeyRow, keyWithSecrets } from "@/db/queries/keys";
 import { Refusal } from "../service/refusal";
 import type { Service } from "../service/service";
 import { parseKey, secretMatches } from "./key-text";
+import { embedPrincipal } from "./embed-principal";
+import { isEmbedToken } from "../embeds/token";
 import type { Principal } from "./principal";
 import { isScope, type Scope } from "./scope";
 import { checkSiteToken } from "./site-token";
@@ -37,6 +39,7 @@ export async function authenticate(
   if (bearer === undefined) {
     throw new Refusal("invalid-key", 'The Authorization header must read "Bearer" and a key.');
   }
+  if (header !== null && isEmbedToken(bearer)) return await embedPrincipal(service, bearer, address);
   if (header !== null && bearer.startsWith("ey")) return await signedOut(service, bearer, address);
   return keyPrincipal(service, bearer, header === null, address);
 }

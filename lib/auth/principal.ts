@@ -1,3 +1,4 @@
+import type { EmbedDefinition } from "../embeds/definition";
 import type { Scope } from "./scope";
 
 /** A program with a key. */
@@ -24,13 +25,32 @@ export interface SignedOutPrincipal {
   readonly address: string;
 }
 
+/** The frame of a widget, with its short-lived token: it may compute what its version leaves open, nothing else. */
+export interface EmbedPrincipal {
+  readonly kind: "embed";
+  /** The widget's id. */
+  readonly id: string;
+  readonly version: number;
+  readonly definition: EmbedDefinition;
+  /** Origin of the page around it; empty where the browser did not tell it. */
+  readonly host: string;
+  readonly teamId: string;
+  readonly team: string;
+  readonly scopes: readonly Scope[];
+  /** Requests a minute from one address. */
+  readonly minuteQuota: number;
+  /** Computations a month, all pages together. */
+  readonly monthQuota: number;
+  readonly address: string;
+}
+
 /** Neither key nor token: only what is open to all. */
 export interface AnonymousPrincipal {
   readonly kind: "anonymous";
   readonly address: string;
 }
 
-export type Principal = KeyPrincipal | SignedOutPrincipal | AnonymousPrincipal;
+export type Principal = KeyPrincipal | EmbedPrincipal | SignedOutPrincipal | AnonymousPrincipal;
 
 /** Id under which signed-out calls are counted in the usage. */
 export const SIGNED_OUT_ID = "signed-out";

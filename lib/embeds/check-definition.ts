@@ -53,22 +53,29 @@ function checkRule(
     problems.add(pointer, "cannot have a range: give a list.");
     return;
   }
-  if (ranged && rule.choices) problems.add(`${pointer}/choices`, "stands beside a range; give one or the other.");
+  if (ranged && rule.choices)
+    problems.add(`${pointer}/choices`, "stands beside a range; give one or the other.");
   for (const end of ["min", "max"] as const) {
     const text = rule[end];
     if (text !== undefined && sizeOf(text, input) === undefined) {
       problems.add(`${pointer}/${end}`, unreadable(text, input));
     }
   }
-  const [min, max] = [rule.min, rule.max].map((text) => (text === undefined ? undefined : sizeOf(text, input)));
+  const [min, max] = [rule.min, rule.max].map((text) =>
+    text === undefined ? undefined : sizeOf(text, input),
+  );
   if (min !== undefined && max !== undefined && min > max) {
     problems.add(`${pointer}/max`, "must not be below the smallest value.");
   }
   if (input.type === "material") {
-    if (!rule.choices) problems.add(`${pointer}/choices`, "An open material needs the list of those allowed.");
+    if (!rule.choices)
+      problems.add(`${pointer}/choices`, "An open material needs the list of those allowed.");
     for (const [place, choice] of (rule.choices ?? []).entries()) {
       if (!material(choice.value)) {
-        problems.add(`${pointer}/choices/${place}`, `${choice.value} is not a material that this team may use.`);
+        problems.add(
+          `${pointer}/choices/${place}`,
+          `${choice.value} is not a material that this team may use.`,
+        );
       }
     }
   }

@@ -34,7 +34,9 @@ export const inputRule = z
         .optional(),
     }),
   ])
-  .meta({ description: "Fixed and shown, fixed and not shown, or open: at will, within a range, or a list." });
+  .meta({
+    description: "Fixed and shown, fixed and not shown, or open: at will, within a range, or a list.",
+  });
 
 export type InputRule = z.infer<typeof inputRule>;
 

@@ -8,6 +8,9 @@ import { Refusal } from "../service/refusal";
 type Caller = KeyPrincipal | SignedOutPrincipal;
 
 export function requireCaller(principal: Principal): Caller {
+  if (principal.kind === "embed") {
+    throw new Refusal("insufficient-scope", "A widget's frame computes; this call is not for it.");
+  }
   if (principal.kind !== "anonymous") return principal;
   throw new Refusal("missing-credentials", "This call needs a key: send Authorization: Bearer rho_….");
 }
