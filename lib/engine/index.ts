@@ -48,8 +48,8 @@ export {
 } from "./medium/expression/compile-expression";
 
 export { schemaComplaints, unknownMember } from "./schema-complaints";
+export { addZodIssues } from "./resistance/zod-issues";
 export {
-  addZodIssues,
   dimensionsSchema,
   includeSchema,
   mediaSchema,
@@ -80,7 +80,16 @@ export {
   type Step,
   type UsedMaterial,
 } from "./resistance/result-schema";
-export { computeResistance, type ComputeContext } from "./resistance/compute-resistance";
+export {
+  tolerancedQuantitySchema,
+  tolerancedSchema,
+  uncertaintyRequestSchema,
+  type TolerancedInput,
+  type UncertaintyRequest,
+} from "./resistance/uncertainty/tolerance-schema";
+export { uncertaintySchema, type Uncertainty } from "./resistance/uncertainty/result-schema";
+export type { ComputeContext } from "./resistance/compute-context";
+export { computeResistance } from "./resistance/compute-resistance";
 
 export { checkOutline, type OutlineCheck } from "./field/outline/check-outline";
 export {

@@ -12,9 +12,12 @@ function complain(input: unknown): string {
   if (input === null) return "must be a number or a text with a unit, not null.";
   if (Array.isArray(input)) return "must be a number or a text with a unit, not an array.";
   if (typeof input === "object") {
-    return "tolerance" in input || "plus" in input || "minus" in input
-      ? "has a tolerance; this call takes plain quantities only, a number or a text with a unit."
-      : "must be a number or a text with a unit, not an object.";
+    if ("tolerance" in input || "plus" in input || "minus" in input) {
+      return "value" in input
+        ? "takes no tolerance; give a number or a text with a unit."
+        : "has a tolerance but no value.";
+    }
+    return "must be a number or a text with a unit, not an object.";
   }
   return `must be a number or a text with a unit, not a ${typeof input}.`;
 }

@@ -1,43 +1,26 @@
 /** A request to a resistance with its bounds: reads everything, refuses with every complaint, then evaluates. */
-import { InputError, pointerTo, Problems } from "../failure";
-import type { Material } from "../medium/material";
+import { InputError, Problems } from "../failure";
 import { Collected } from "../medium/collected";
-import {
-  resolveMedium,
-  type CoordinateRange,
-  type MediumSite,
-  type ResolvedMedium,
-} from "../medium/resolve-medium";
 import { formatQuantity } from "../quantity/format-quantity";
 import { catalogue, findShape } from "../shape/catalogue";
-import type { Dimensions, Resolved, Shape } from "../shape/define-shape";
 import { readDimensions } from "../shape/resolve-dimensions";
-import { shapeMedia } from "../shape/shape-entry";
 import { CATALOGUE_VERSION, ENGINE_VERSION } from "../version";
 import { isRepresentable } from "./bounds";
 import { runChecks } from "./checks";
+import type { ComputeContext } from "./compute-context";
 import { operatingPoint, readOperating } from "./operating-point";
 import { findPeak } from "./peak";
 import { sampleProfile } from "./profile-arrays";
-import {
-  addZodIssues,
-  resistanceRequestSchema,
-  unknownShape,
-  type ResistanceRequest,
-} from "./request-schema";
+import { readMedia } from "./read-media";
+import { resistanceRequestSchema, unknownShape, type ResistanceRequest } from "./request-schema";
 import { readRequirement, verdictOf } from "./requirement";
 import type { ResistanceResult } from "./result-schema";
-import type { Solution } from "./solution";
-import { solveFactor } from "./solve-factor";
-import { solveFlow } from "./solve-flow";
-import { solveMedia } from "./solve-media";
+import { solve } from "./solve";
 import { listSteps } from "./steps";
-
-/** What a computation may ask of the world outside the engine. */
-export interface ComputeContext {
-  /** The material of that id which the caller may use, or undefined. */
-  readonly material: (id: string) => Material | undefined;
-}
+import { findUncertainty } from "./uncertainty/find-uncertainty";
+import { materialInputs, readTolerances } from "./uncertainty/input";
+import { separateTolerances } from "./uncertainty/separate-tolerances";
+import { addZodIssues } from "./zod-issues";
 
 /**
  * Computes one resistance.
@@ -46,7 +29,8 @@ export interface ComputeContext {
  */
 export function computeResistance(request: unknown, context: ComputeContext): ResistanceResult {
   const problems = new Problems();
-  const body = parseRequest(request, problems);
+  const { plain, found } = separateTolerances(request, problems);
+  const body = parseRequest(plain, problems);
   const shape = findShape(body.shape);
   if (!shape) {
     const ids = catalogue.map(({ id }) => id);
@@ -55,6 +39,7 @@ export function computeResistance(request: unknown, context: ComputeContext): Re
   const operatingInput = readOperating(body.operating, problems);
   const requirement = readRequirement(body.requirement, problems);
   const dimensions = readDimensions(shape, body.dimensions, "#/dimensions", problems);
+  const tolerances = found.length > 0 ? readTolerances(found, shape, problems) : [];
   const collected = new Collected();
   const media = readMedia(shape, body, dimensions, operatingInput.temperatureC, context, collected, problems);
   if (problems.any || !dimensions || !media) throw new InputError(problems.list);
@@ -74,6 +59,16 @@ export function computeResistance(request: unknown, context: ComputeContext): Re
   }
   const operating = operatingPoint(operatingInput, value, problems);
   problems.throwIfAny();
+
+  const strays =
+    body.uncertainty &&
+    findUncertainty(
+      body.uncertainty,
+      { shape, body, temperatureC: operatingInput.temperatureC },
+      [...tolerances, ...materialInputs(body, context.material)],
+      solution,
+      context,
+    );
 
   const include = body.include ?? ["checks"];
   const voltage = operating.voltage ?? 1;
@@ -96,8 +91,13 @@ export function computeResistance(request: unknown, context: ComputeContext): Re
     },
     method: solution.method,
     operating,
-    cautions: [...shape.cautions, ...solution.cautions, ...collected.cautions],
-    assumptions: [...shape.assumptions, ...solution.assumptions, ...collected.assumptions],
+    cautions: [...shape.cautions, ...solution.cautions, ...collected.cautions, ...(strays?.cautions ?? [])],
+    assumptions: [
+      ...shape.assumptions,
+      ...solution.assumptions,
+      ...collected.assumptions,
+      ...(tolerances.length > 0 && !strays ? [UNUSED_TOLERANCES] : []),
+    ],
     sources: [...shape.sources],
     materials: collected.used,
     engine: ENGINE_VERSION,
@@ -107,13 +107,17 @@ export function computeResistance(request: unknown, context: ComputeContext): Re
     const { status, evaluations, error, value: whole } = solution.integral;
     result.quadrature = { status, evaluations, relativeError: error / whole };
   }
-  if (requirement) result.verdict = verdictOf(requirement, solution);
+  if (strays) result.uncertainty = strays.uncertainty;
+  if (requirement) result.verdict = verdictOf(requirement, solution, strays?.uncertainty);
   if (include.includes("checks")) result.checks = runChecks(solution);
   if (include.includes("peak")) result.peak = findPeak(solution, voltage, per);
   if (include.includes("profile")) result.profile = sampleProfile(solution, shape, voltage, per);
   if (include.includes("steps")) result.steps = listSteps(solution, shape, operating);
   return result;
 }
+
+const UNUSED_TOLERANCES =
+  "The tolerances in the request are not used, since it asks for no uncertainty: the value is that of the nominal inputs.";
 
 /** The body by its schema. What can still be read after a complaint is checked as well, so that all complaints show. */
 function parseRequest(request: unknown, problems: Problems): ResistanceRequest {
@@ -142,96 +146,4 @@ function parseRequest(request: unknown, problems: Problems): ResistanceRequest {
     }
   }
   throw new InputError(problems.list);
-}
-
-type Media =
-  { readonly single: ResolvedMedium } | { readonly named: Readonly<Record<string, ResolvedMedium>> };
-
-function readMedia(
-  shape: Shape,
-  body: ResistanceRequest,
-  dimensions: Resolved<Dimensions> | null,
-  temperatureC: number,
-  context: ComputeContext,
-  collected: Collected,
-  problems: Problems,
-): Media | null {
-  const takes = shapeMedia(shape);
-  const site: MediumSite = {
-    pointer: "#/medium",
-    shape,
-    subject: shape.id,
-    temperatureC,
-    sheet: takes.kind === "sheet",
-    gradable: takes.gradable,
-    range: (coordinate) => (dimensions ? rangeOf(shape, dimensions, coordinate) : null),
-    problems,
-    material: context.material,
-    use: (material) => collected.use(material),
-    caution: (sentence) => collected.caution(sentence),
-  };
-  if (takes.kind !== "two") {
-    if (body.media) problems.add("#/media", `is for shapes of two media; ${shape.id} takes one medium.`);
-    if (!body.medium) {
-      if (!body.media) problems.add("#/medium", `is required: what fills ${shape.id}.`);
-      return null;
-    }
-    const single = resolveMedium(body.medium, site);
-    return single && { single };
-  }
-  const names = takes.names.map(({ name }) => name);
-  if (body.medium)
-    problems.add(
-      "#/medium",
-      `is for shapes of one medium; ${shape.id} has the media ${names.join(" and ")}.`,
-    );
-  if (!body.media) {
-    if (!body.medium)
-      problems.add("#/media", `is required: ${shape.id} has the media ${names.join(" and ")}.`);
-    return null;
-  }
-  const named: Record<string, ResolvedMedium> = {};
-  for (const name of Object.keys(body.media)) {
-    if (!names.includes(name)) {
-      problems.add(
-        pointerTo("#/media", name),
-        `is no medium of ${shape.id}, which has ${names.join(" and ")}.`,
-      );
-    }
-  }
-  for (const name of names) {
-    const given = body.media[name];
-    if (!given) problems.add(pointerTo("#/media", name), "is required.");
-    else {
-      const medium = resolveMedium(given, { ...site, pointer: pointerTo("#/media", name) });
-      if (medium) named[name] = medium;
-    }
-  }
-  return Object.keys(named).length === names.length ? { named } : null;
-}
-
-function rangeOf(shape: Shape, dimensions: Resolved<Dimensions>, coordinate: string): CoordinateRange | null {
-  const { answer } = shape;
-  if (answer.kind === "flow") {
-    const { along, across } = answer.flow(dimensions);
-    return [along, ...across].find((flow) => flow.coordinate === coordinate) ?? null;
-  }
-  if (answer.kind === "media" && answer.parallel) {
-    const { along } = answer.parallel(dimensions);
-    return along.coordinate === coordinate ? along : null;
-  }
-  return null;
-}
-
-function solve(shape: Shape, dimensions: Resolved<Dimensions>, media: Media): Solution {
-  const { answer } = shape;
-  if ("named" in media) {
-    if (answer.kind !== "media") throw new Error(`${shape.id} was given media but takes one medium`);
-    return solveMedia(answer, dimensions, media.named);
-  }
-  if (answer.kind === "flow") return solveFlow(answer, dimensions, media.single);
-  if (answer.kind === "factor" && media.single.kind === "uniform") {
-    return solveFactor(shape, answer, dimensions, media.single, shape.family === "sheet");
-  }
-  throw new Error(`${shape.id} cannot be solved with this medium`);
 }

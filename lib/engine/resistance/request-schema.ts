@@ -1,9 +1,9 @@
 /** The body of a resistance request. Which dimensions and coordinates exist is the shape's affair, checked after this. */
 import { z } from "zod";
-import { pointerTo, type Problems } from "../failure";
 import { mediumSchema } from "../medium/medium-schema";
 import { anyQuantitySchema, quantitySchema } from "../quantity/quantity-schema";
 import { suggestion } from "../shape/nearest-names";
+import { uncertaintyRequestSchema } from "./uncertainty/tolerance-schema";
 
 const DRIVES = ["voltage", "current", "power"] as const;
 
@@ -83,49 +83,11 @@ export const resistanceRequestSchema = z
     include: includeSchema.optional(),
     record: recordRequestSchema.optional(),
     requirement: requirementSchema.optional(),
+    uncertainty: uncertaintyRequestSchema.optional(),
   })
   .meta({ description: "A shape, its dimensions and medium, and what to answer." });
 
 export type ResistanceRequest = z.infer<typeof resistanceRequestSchema>;
-
-/** Members of a strict object are suggested by name; every zod issue becomes one sentence with its own pointer. */
-export function addZodIssues(issues: readonly z.core.$ZodIssue[], base: string, problems: Problems): void {
-  for (const issue of issues) {
-    const pointer = pointerTo(base, ...issue.path);
-    if (issue.code === "unrecognized_keys") {
-      // So many are told; whoever sends more has sent something else.
-      for (const key of issue.keys.slice(0, 50)) {
-        problems.add(pointerTo(pointer, key), "is not a member known here.");
-      }
-    } else problems.add(pointer, sentence(issue));
-  }
-}
-
-function sentence(issue: z.core.$ZodIssue): string {
-  switch (issue.code) {
-    case "invalid_type":
-      return issue.input === undefined && issue.message.includes("undefined")
-        ? "is required."
-        : `must be ${article(issue.expected)}.`;
-    case "invalid_value":
-      return `must be one of ${issue.values.map((value) => `"${String(value)}"`).join(", ")}.`;
-    case "too_small":
-      if (issue.minimum === 1 && (issue.origin === "string" || issue.origin === "array"))
-        return "must not be empty.";
-      return `must be at least ${String(issue.minimum)}${issue.origin === "string" ? " characters long" : issue.origin === "array" ? " entries long" : ""}.`;
-    case "too_big":
-      return `must be at most ${String(issue.maximum)}${issue.origin === "string" ? " characters long" : issue.origin === "array" ? " entries long" : ""}.`;
-    default:
-      return issue.message;
-  }
-}
-
-function article(expected: string): string {
-  if (expected === "array") return "an array";
-  if (expected === "object" || expected === "record") return "an object";
-  if (expected === "int") return "a whole number";
-  return `a ${expected}`;
-}
 
 /** Complaint about a shape id that the catalogue lacks. */
 export function unknownShape(id: string, ids: readonly string[]): string {

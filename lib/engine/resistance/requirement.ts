@@ -36,11 +36,17 @@ export function readRequirement(
   return null;
 }
 
-/** Decided only if the bounds lie wholly on one side of each limit. */
+/**
+ * Decided only if the bounds lie wholly on one side of each limit; with an uncertainty, if its range widened by the
+ * bounds does.
+ */
 export function verdictOf(
   { min, max }: Requirement,
-  { lower, upper }: Bounds,
+  { value, lower, upper }: Bounds,
+  uncertainty?: { readonly low: number; readonly high: number },
 ): "met" | "not-met" | "undecided" {
-  if (lower >= min && upper <= max) return "met";
-  return upper < min || lower > max ? "not-met" : "undecided";
+  const low = uncertainty ? Math.min(uncertainty.low, value) * (lower / value) : lower;
+  const high = uncertainty ? Math.max(uncertainty.high, value) * (upper / value) : upper;
+  if (low >= min && high <= max) return "met";
+  return high < min || low > max ? "not-met" : "undecided";
 }

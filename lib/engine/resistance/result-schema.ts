@@ -1,5 +1,6 @@
 /** What a resistance calculation answers, as zod schemas with descriptions and as types. */
 import { z } from "zod";
+import { uncertaintySchema } from "./uncertainty/result-schema";
 
 const plain = (description: string) => z.number().meta({ description });
 const samples = (description: string) => z.array(z.number()).meta({ description });
@@ -152,7 +153,8 @@ export const quadratureSchema = z
   .meta({ description: "How the integral went; only where the method is quadrature." });
 
 export const verdictSchema = z.enum(["met", "not-met", "undecided"]).meta({
-  description: "Whether the requirement is met; decided only if the bounds lie wholly on one side.",
+  description:
+    "Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.",
 });
 
 export const resistanceResultSchema = z
@@ -163,6 +165,7 @@ export const resistanceResultSchema = z
     method: methodSchema,
     operating: operatingPointSchema,
     quadrature: quadratureSchema.optional(),
+    uncertainty: uncertaintySchema.optional(),
     verdict: verdictSchema.optional(),
     peak: peakSchema.nullable().optional(),
     steps: z.array(stepSchema).optional(),

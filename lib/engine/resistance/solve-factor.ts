@@ -5,16 +5,17 @@ import { around, between } from "./bounds";
 import { sharpenedFactor } from "./field-factor";
 import type { Solution } from "./solution";
 
-/** R = ρ·factor (1/m), or sheet resistance times squares. */
+/** R = ρ·factor (1/m), or sheet resistance times squares; without `sharpen` by the formula alone. */
 export function solveFactor(
   shape: Shape,
   answer: FactorAnswer<Dimensions>,
   dimensions: Resolved<Dimensions>,
   medium: UniformMedium,
   sheet: boolean,
+  sharpen = true,
 ): Solution {
   const law = answer.factor(dimensions);
-  const factor = sharpenedFactor(shape, answer, dimensions, law);
+  const factor = sharpen ? sharpenedFactor(shape, answer, dimensions, law) : law;
   const relative = factor.relativeError + medium.relativeError;
   const scale = medium.value;
   const bounds =

@@ -168,6 +168,8 @@ export interface FlowAnswer<D extends Dimensions> {
 /** Known by potential theory for a uniform medium only. */
 export interface FactorAnswer<D extends Dimensions> {
   readonly kind: "factor";
+  /** How many times a plain closed form's work one value takes, where that is a lot: fewer trials by default. */
+  readonly work?: number;
   readonly factor: (d: Resolved<D>) => Factor;
   readonly peak?: (d: Resolved<D>) => FactorPeak;
   /**
@@ -182,6 +184,8 @@ export interface FactorAnswer<D extends Dimensions> {
 /** Two media of uniform resistivity (ohm metres each). */
 export interface MediaAnswer<D extends Dimensions> {
   readonly kind: "media";
+  /** How many times a plain closed form's work one value takes, where that is a lot: fewer trials by default. */
+  readonly work?: number;
   readonly media: readonly { readonly name: string; readonly label: string }[];
   /** Resistance in ohms. */
   readonly resistance: (d: Resolved<D>, resistivity: Readonly<Record<string, number>>) => Factor;

@@ -8,17 +8,17 @@ import type { Constraint, Dimension, Dimensions, QuantityDimension, Resolved, Sh
 import { suggestion } from "./nearest-names";
 
 /** One name that a request may use for a dimension. */
-interface Input {
+export interface DimensionInput {
   readonly name: string;
   readonly dimension: string;
   /** Value of the dimension = value given·factor. */
   readonly factor: number;
   readonly options: QuantityOptions;
-  readonly group: Group;
+  readonly group: DimensionGroup;
 }
 
 /** Inputs of which exactly one is given; most have one member. */
-interface Group {
+export interface DimensionGroup {
   readonly names: string[];
   readonly dimensions: readonly string[];
   readonly defaulted: string | undefined;
@@ -32,13 +32,13 @@ const LARGEST = { length: 1e100, area: 1e200, angle: 1e100 } as const;
 /** So many unknown names are told; whoever sends more has sent something else. */
 const MOST_UNKNOWN = 50;
 
-interface Reader {
-  readonly inputs: ReadonlyMap<string, Input>;
-  readonly groups: readonly Group[];
+export interface DimensionReader {
+  readonly inputs: ReadonlyMap<string, DimensionInput>;
+  readonly groups: readonly DimensionGroup[];
   readonly names: readonly string[];
 }
 
-const readers = new WeakMap<Shape, Reader>();
+const readers = new WeakMap<Shape, DimensionReader>();
 
 /** Every name a request may use for the shape's dimensions, twins included, grouped: exactly one of each group. */
 export function dimensionGroups(shape: Shape): readonly (readonly string[])[] {
@@ -71,7 +71,7 @@ export function readDimensions(
   const reader = readerOf(shape);
   const before = problems.list.length;
   const values: Record<string, number | string> = {};
-  const used = new Map<Group, string>();
+  const used = new Map<DimensionGroup, string>();
   let unknown = 0;
   for (const name of Object.keys(given)) {
     const raw = given[name];
@@ -94,7 +94,7 @@ export function readDimensions(
       continue;
     }
     used.set(input.group, name);
-    const reading = readValue(shape.dimensions[input.dimension], input, raw);
+    const reading = readDimensionValue(shape.dimensions[input.dimension], input, raw);
     if ("value" in reading) values[input.dimension] = reading.value;
     else problems.add(pointerTo(pointer, name), reading.complaint);
   }
@@ -130,8 +130,8 @@ export function readDimensions(
 /** A derived dimension that no constraint caught must still be a size that a double holds. */
 function checkDerived(
   shape: Shape,
-  group: Group,
-  used: ReadonlyMap<Group, string>,
+  group: DimensionGroup,
+  used: ReadonlyMap<DimensionGroup, string>,
   values: Readonly<Record<string, number | string>>,
   pointer: string,
   problems: Problems,
@@ -149,7 +149,11 @@ function checkDerived(
   }
 }
 
-function blame(constraint: Constraint<Dimensions>, reader: Reader, used: ReadonlyMap<Group, string>): string {
+function blame(
+  constraint: Constraint<Dimensions>,
+  reader: DimensionReader,
+  used: ReadonlyMap<DimensionGroup, string>,
+): string {
   for (const name of constraint.names) {
     const input = reader.inputs.get(name);
     const given = input && used.get(input.group);
@@ -165,7 +169,8 @@ function blame(constraint: Constraint<Dimensions>, reader: Reader, used: Readonl
 
 type ValueReading = { readonly value: number | string } | { readonly complaint: string };
 
-function readValue(dimension: Dimension, input: Input, raw: unknown): ValueReading {
+/** One given value against its dimension, SI (radians). */
+export function readDimensionValue(dimension: Dimension, input: DimensionInput, raw: unknown): ValueReading {
   if (dimension.type === "choice") {
     const values = dimension.choices.map(({ value }) => value);
     if (typeof raw === "string" && values.includes(raw)) return { value: raw };
@@ -175,11 +180,19 @@ function readValue(dimension: Dimension, input: Input, raw: unknown): ValueReadi
   const reading = readQuantity(raw, kind, input.options);
   if (!reading.ok) return { complaint: reading.detail };
   const value = reading.value * input.factor;
-  const complaint =
-    dimension.type === "quantity"
-      ? quantityComplaint(dimension, value, input.factor)
-      : numberComplaint(dimension, value);
+  const complaint = sizeComplaint(dimension, value, input.factor);
   return complaint === null ? { value } : { complaint };
+}
+
+/** Why a value (SI) is no value of that dimension; `factor` as of the name it was given by. */
+export function sizeComplaint(
+  dimension: Exclude<Dimension, { type: "choice" }>,
+  value: number,
+  factor: number,
+): string | null {
+  return dimension.type === "quantity"
+    ? quantityComplaint(dimension, value, factor)
+    : numberComplaint(dimension, value);
 }
 
 function quantityComplaint(dimension: QuantityDimension, value: number, factor: number): string | null {
@@ -224,7 +237,8 @@ function list(names: readonly string[]): string {
   return names.length < 2 ? names.join("") : `${names.slice(0, -1).join(", ")} or ${names[names.length - 1]}`;
 }
 
-function readerOf(shape: Shape): Reader {
+/** The names that a shape's dimensions may be given by, and their groups. */
+export function readerOf(shape: Shape): DimensionReader {
   const known = readers.get(shape);
   if (known) return known;
   const reader = makeReader(shape);
@@ -232,13 +246,13 @@ function readerOf(shape: Shape): Reader {
   return reader;
 }
 
-function makeReader(shape: Shape): Reader {
-  const inputs = new Map<string, Input>();
-  const groups: Group[] = [];
+function makeReader(shape: Shape): DimensionReader {
+  const inputs = new Map<string, DimensionInput>();
+  const groups: DimensionGroup[] = [];
   const grouped = new Set<string>();
-  const add = (dimensions: readonly string[], derive: Group["derive"]): void => {
+  const add = (dimensions: readonly string[], derive: DimensionGroup["derive"]): void => {
     const defaulted = dimensions.find((name) => shape.dimensions[name].default !== undefined);
-    const group: Group = { names: [], dimensions, defaulted, derive };
+    const group: DimensionGroup = { names: [], dimensions, defaulted, derive };
     for (const name of dimensions) {
       grouped.add(name);
       for (const [input, factor] of namesOf(name, shape.dimensions[name])) {
@@ -257,7 +271,7 @@ function makeReader(shape: Shape): Reader {
   for (const name of Object.keys(shape.dimensions)) {
     if (grouped.has(name)) continue;
     const alternative = shape.alternatives.find(({ names }) => names.includes(name));
-    if (alternative) add(alternative.names, alternative.derive as Group["derive"]);
+    if (alternative) add(alternative.names, alternative.derive as DimensionGroup["derive"]);
     else add([name], {});
   }
   return { inputs, groups, names: [...inputs.keys()] };

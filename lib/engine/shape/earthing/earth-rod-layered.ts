@@ -55,6 +55,7 @@ export const earthRodLayered = defineShape({
   terminals: { high: "the rod", low: REMOTE_EARTH },
   answer: {
     kind: "media",
+    work: 100,
     media: [
       { name: "upper", label: "Upper layer" },
       { name: "lower", label: "Lower layer" },

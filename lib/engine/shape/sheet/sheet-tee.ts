@@ -57,6 +57,7 @@ export const sheetTee = defineShape({
   },
   answer: {
     kind: "factor",
+    work: 10,
     planIsWhole: () => true,
     factor: (d) => laws[d.path](d),
     peak: () => ({ fieldPerVolt: null, position: "unbounded at the inner corners" }),

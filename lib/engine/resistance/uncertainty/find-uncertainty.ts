@@ -1,0 +1,153 @@
+/** From a solved resistance and its uncertain inputs to the range in which it lies, with a budget by input. */
+import { formatQuantity } from "../../quantity/format-quantity";
+import { Evaluator, type EvaluatorSource } from "../evaluator";
+import type { ComputeContext } from "../compute-context";
+import type { Solution } from "../solution";
+import type { UncertainInput } from "./input";
+import { COVERAGE, monteCarlo } from "./monte-carlo";
+import { checkEnds, type UncertainResistance } from "./problem-box";
+import { propagate, type Contribution, type Propagated } from "./propagation";
+import type { Uncertainty } from "./result-schema";
+import { DEFAULT_TRIALS, type UncertaintyRequest } from "./tolerance-schema";
+import { worstCase } from "./worst-case";
+
+/** Two-sided 95 % of a normal distribution (JCGM 100, table G.1). */
+const COVERAGE_FACTOR = 1.959963984540054;
+/** Work of an integral over a closed form's. */
+const INTEGRAL_WORK = 10;
+/** Curvature against slope beyond which the first order is said to be too little. */
+const BENT = 0.1;
+
+export interface FoundUncertainty {
+  readonly uncertainty: Uncertainty;
+  readonly cautions: readonly string[];
+}
+
+/**
+ * Evaluates the uncertainty that a request asks for.
+ * @throws InputError where a tolerance reaches beyond what the request may be, or the work takes too long.
+ */
+export function findUncertainty(
+  request: UncertaintyRequest,
+  source: EvaluatorSource,
+  inputs: readonly UncertainInput[],
+  solution: Solution,
+  context: ComputeContext,
+): FoundUncertainty {
+  const sites = inputs.map(({ site }) => site);
+  const evaluator = new Evaluator(source, sites, context);
+  const nominal = Float64Array.from(inputs, (input) => input.nominal);
+  const integral = solution.method === "quadrature" && solution.integral !== undefined;
+  const resistance: UncertainResistance = {
+    inputs,
+    nominal,
+    at: (values) => evaluator.at(values),
+    value: solution.value,
+    noise: integral ? 1e-9 : 1e-12,
+    cost: integral ? evaluator.costAt(nominal) : 0,
+    evaluator,
+    overdue: context.overdue ?? (() => false),
+  };
+  checkEnds(resistance);
+  const propagated = propagate(resistance);
+  const { answer } = source.shape;
+  const work = integral ? INTEGRAL_WORK : answer.kind === "flow" ? 1 : (answer.work ?? 1);
+  const { uncertainty, cautions } = byMethod(request, resistance, propagated, DEFAULT_TRIALS / work);
+  if (inputs.length === 0) cautions.push("No input has a tolerance, so the uncertainty is zero.");
+  if (solution.method === "field") {
+    cautions.push(
+      "The sensitivities are those of the formula; the value is that of the field solution on the nominal plan.",
+    );
+  }
+  return { uncertainty, cautions };
+}
+
+interface ByMethod {
+  readonly uncertainty: Uncertainty;
+  readonly cautions: string[];
+}
+
+function byMethod(
+  request: UncertaintyRequest,
+  resistance: UncertainResistance,
+  propagated: Propagated,
+  defaultTrials: number,
+): ByMethod {
+  const { value } = resistance;
+  const { standard, shift, contributions, curvature } = propagated;
+  const cautions: string[] = [];
+  if (request.method === "worst-case") {
+    const { low, high, spans, basis } = worstCase(resistance);
+    return {
+      uncertainty: {
+        method: "worst-case",
+        standard,
+        ...range(low, high),
+        coverage: 1,
+        basis,
+        contributions: budget(contributions, spans),
+      },
+      cautions,
+    };
+  }
+  if (request.method === "monte-carlo") {
+    const trials = request.trials ?? defaultTrials;
+    const seed = request.seed ?? 1;
+    const { mean, low, high, variances, ...found } = monteCarlo(resistance, trials, seed);
+    return {
+      uncertainty: {
+        method: "monte-carlo",
+        standard: found.standard,
+        ...range(low, high),
+        coverage: COVERAGE,
+        basis: `${trials.toLocaleString("en")} trials with seed ${seed}; the range leaves 2.5 % of them on either side (JCGM 101, 7.7). Shares are the variances that the inputs give one at a time (annex B).`,
+        mean,
+        trials,
+        seed,
+        contributions: budget(contributions, variances),
+      },
+      cautions,
+    };
+  }
+  const low = value + shift - COVERAGE_FACTOR * standard;
+  const high = value + shift + COVERAGE_FACTOR * standard;
+  if (curvature > BENT) {
+    cautions.push(
+      "The resistance is not straight over the tolerances, so first-order propagation is rough here; monte-carlo takes the bend into account.",
+    );
+  }
+  return {
+    uncertainty: {
+      method: "propagation",
+      standard,
+      ...range(low, high),
+      coverage: COVERAGE,
+      basis: `First order (JCGM 100, 5.1.2), the inputs taken as independent; the range is ±1.96 standard uncertainties${shift === 0 ? "" : " about the expectation, which tolerances of unequal sides move"}.`,
+      contributions: budget(
+        contributions,
+        contributions.map((entry) => (entry.sensitivity * entry.standard) ** 2),
+      ),
+    },
+    cautions,
+  };
+}
+
+function range(low: number, high: number): { low: number; high: number; text: string } {
+  const ends = { lower: low, upper: high };
+  return { low, high, text: `${formatQuantity(low, "ohm", ends)} … ${formatQuantity(high, "ohm", ends)}` };
+}
+
+function budget(
+  contributions: readonly Contribution[],
+  parts: readonly number[],
+): Uncertainty["contributions"] {
+  const whole = parts.reduce((sum, part) => sum + part, 0);
+  return contributions
+    .map(({ input, sensitivity, standard }, i) => ({
+      input: input.name,
+      sensitivity,
+      standard,
+      share: whole > 0 ? parts[i] / whole : 0,
+    }))
+    .sort((a, b) => b.share - a.share);
+}
