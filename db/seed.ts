@@ -1,13 +1,15 @@
 import { createHmac } from "node:crypto";
 import { SHELL } from "@/lib/activity/append";
-import { demoSecret, formatKey } from "@/lib/auth/key-text";
+import { demoPassword, demoSecret, formatKey } from "@/lib/auth/key-text";
 import { issueKey } from "@/lib/auth/manage-keys";
+import { hashPasswordNow, passwordMatchesNow } from "@/lib/auth/password";
 import { computeResistance, exampleRequest, findShape, libraryMaterial } from "@/lib/engine";
 import { storeRecord } from "@/lib/records/records";
 import { bytesToText, newId } from "@/lib/service/identifier";
 import type { Service } from "@/lib/service/service";
 import { transact } from "./client";
 import { keyById } from "./queries/keys";
+import { personByEmail, updatePerson } from "./queries/people";
 import { readSetting, writeSetting } from "./queries/settings";
 import { insertMembership, insertPerson, insertTeam, type Team, teamBySlug } from "./queries/teams";
 import type { Role } from "./schema/organisation";
@@ -59,6 +61,9 @@ const TEAMS: readonly DemoTeam[] = [
   },
 ];
 
+/** Whom the printed demo sign-in is for: the demo's administrator. */
+const DEMO_EMAIL = TEAMS[0].people[0].email;
+
 /** Scopes of the demo keys: everything but the management of keys. */
 const DEMO_SCOPES = ["compute", "field", "materials:read", "materials:write", "records:read"] as const;
 
@@ -75,12 +80,21 @@ export function demoKey({ db, config }: Service, slug = "busbar"): string | unde
   return row && row.revokedAt === null ? formatKey({ id, secret: demoSecret(config.secret, id) }) : undefined;
 }
 
+/** The demo sign-in; undefined where the administrator was removed or has another password. */
+export function demoSignIn({ db, config }: Service): { email: string; password: string } | undefined {
+  const person = personByEmail(db, DEMO_EMAIL);
+  const password = demoPassword(config.secret);
+  if (!person || person.removedAt !== null || !passwordMatchesNow(password, person.passwordHash))
+    return undefined;
+  return { email: DEMO_EMAIL, password };
+}
+
 /**
  * Fills an installation with the demo company: teams, people, a key a team, and records that are computed here and now
  * by the engine. What is there already stays as it is.
  */
 export function seedDemo(service: Service): void {
-  const { db, now } = service;
+  const { db, config, now } = service;
   transact(db, () => {
     if (readSetting(db, "organisation") === undefined)
       writeSetting(db, "organisation", { name: COMPANY }, now());
@@ -98,6 +112,10 @@ export function seedDemo(service: Service): void {
       }
       seedKey(service, team);
       if (fresh) seedRecords(service, team, demo.records);
+    }
+    const first = personByEmail(db, DEMO_EMAIL);
+    if (first && first.passwordHash === null) {
+      updatePerson(db, first.id, { passwordHash: hashPasswordNow(demoPassword(config.secret)) });
     }
   });
 }

@@ -51,4 +51,3 @@ export const links = sqliteTable(
   },
   (table) => [uniqueIndex("links_hash").on(table.hash), index("links_person").on(table.personId, table.kind)],
 );
-

@@ -27,6 +27,12 @@ export function demoSecret(serviceSecret: string, keyId: string): string {
   return bytesToText(createHmac("sha256", serviceSecret).update(`rhoform demo key ${keyId}`).digest());
 }
 
+/** The password of the demo's administrator: derived in the same way. 95 bits in four groups. */
+export function demoPassword(serviceSecret: string): string {
+  const digest = createHmac("sha256", serviceSecret).update("rhoform demo password").digest();
+  return (bytesToText(digest).slice(-16).match(/.{4}/g) ?? []).join("-");
+}
+
 /** What is stored of a secret. */
 export function hashSecret(secret: string): string {
   return createHash("sha256").update(secret).digest("hex");

@@ -2,7 +2,8 @@
  * What happens before the server starts: settings are checked, the database is migrated, the demo seeded on the first
  * start. Prints one JSON object for the start script.
  */
-import { demoKey, seedDemo } from "@/db/seed";
+import { countRole } from "@/db/queries/people";
+import { demoKey, demoSignIn, seedDemo } from "@/db/seed";
 import { exampleRequest, findShape } from "@/lib/engine";
 import { ConfigError, readConfig } from "../config/environment";
 import { closeService, openService, type Service } from "../service/service";
@@ -10,13 +11,19 @@ import { closeService, openService, type Service } from "../service/service";
 /** Shape of the call that the start prints. */
 const SHAPE = "cylindrical-shell";
 
-/** Seeds the demo, if it is wanted, and tells what is needed to call with its key. */
-function demo(service: Service): { key: string; request: object } | undefined {
+interface Demo {
+  readonly signIn?: { readonly email: string; readonly password: string };
+  readonly key: string;
+  readonly request: object;
+}
+
+/** Seeds the demo, if it is wanted, and tells what is needed to sign in and to call with its key. */
+function demo(service: Service): Demo | undefined {
   if (!service.config.demo) return undefined;
   seedDemo(service);
   const key = demoKey(service);
   const shape = findShape(SHAPE);
-  return key && shape ? { key, request: exampleRequest(shape) } : undefined;
+  return key && shape ? { signIn: demoSignIn(service), key, request: exampleRequest(shape) } : undefined;
 }
 
 function main(): void {
@@ -31,6 +38,7 @@ function main(): void {
         // Where this machine reaches the server, whatever its public origin.
         localBase: readConfig({ ...process.env, RHOFORM_ORIGIN: "" }).origin,
         demo: demo(service),
+        administrators: countRole(service.db, "admin"),
       }),
     );
   } finally {

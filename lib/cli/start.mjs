@@ -36,10 +36,13 @@ async function loadRoutes(base) {
   for (const path of ["resistance", "fields"]) await fetch(`${base}/api/v1/${path}`, { method: "OPTIONS" });
 }
 
-function greet({ origin, demo }) {
+function greet({ origin, demo, administrators }) {
   const lines = [`Rhoform answers at ${origin}`];
   if (demo) {
     const body = JSON.stringify(demo.request);
+    if (demo.signIn) {
+      lines.push("", `Demo sign-in: ${demo.signIn.email}`, `    password: ${demo.signIn.password}`);
+    }
     lines.push(
       "",
       `Demo key: ${demo.key}`,

@@ -5,7 +5,7 @@ import { forgetExpired } from "@/db/queries/rate-limits";
 
 /** A counter with a quota: who spends from it, how much there is, for how long. */
 export interface Bucket {
-  readonly policy: "minute" | "month" | "address";
+  readonly policy: "minute" | "month" | "address" | "sign-in";
   readonly subject: string;
   readonly quota: number;
   /** How long a window lasts from its first spending, s. */
@@ -55,8 +55,8 @@ export class Limiter {
         keyPrefix: bucket.policy,
         points: bucket.quota,
         duration: 60,
-        // A refused call is remembered without the database; what a month refuses is given back, so not there.
-        inMemoryBlockOnConsumed: bucket.policy === "month" ? 0 : bucket.quota,
+        // A refused call is remembered without the database; what a month or a sign-in gives back is not.
+        inMemoryBlockOnConsumed: bucket.policy === "month" || bucket.policy === "sign-in" ? 0 : bucket.quota,
       });
       this.limiters.set(name, limiter);
     }

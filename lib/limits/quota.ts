@@ -54,3 +54,11 @@ export function monthBucket(subject: string, quota: number, now: number): Bucket
 export function addressBucket(address: string, quota: number): Bucket {
   return { policy: "address", subject: limitedAddress(address), quota, windowSeconds: 60 };
 }
+
+/** How long attempts to sign in are remembered, s. */
+const SIGN_IN_WINDOW = 900;
+
+/** Attempts to sign in, to be counted by account and by address: `account:…`, `address:…`. */
+export function signInBucket(subject: string, quota: number): Bucket {
+  return { policy: "sign-in", subject, quota, windowSeconds: SIGN_IN_WINDOW };
+}

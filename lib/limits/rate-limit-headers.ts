@@ -6,6 +6,7 @@ export const RATE_LIMIT_POLICY = "RateLimit-Policy";
 
 /** The two fields for some counters: `"minute";q=600;w=60` and `"minute";r=599;t=42`. A calendar month has no window. */
 export function rateLimitHeaders(states: readonly BucketState[]): [string, string][] {
+  if (states.length === 0) return [];
   const policies = states.map(({ bucket }) => {
     const window = bucket.endsAt === undefined ? `;w=${bucket.windowSeconds}` : "";
     return `"${bucket.policy}";q=${bucket.quota}${window}`;
