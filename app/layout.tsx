@@ -1,7 +1,7 @@
 import type { Metadata, Viewport } from "next";
 import type { ReactNode } from "react";
 import { mono, sans, sansExtended } from "./fonts";
-import { readerTheme } from "./reader-theme";
+import { documentFacts } from "./document-facts";
 import "./globals.css";
 
 export const metadata: Metadata = {
@@ -19,12 +19,12 @@ export const viewport: Viewport = {
   ],
 };
 
-/** Reading the cookie here makes every page render per request, which the nonce of its scripts needs. */
+/** Reading the request here makes every page render per request, which the nonce of its scripts needs. */
 export default async function RootLayout({ children }: { readonly children: ReactNode }) {
-  const theme = await readerTheme();
+  const { locale, theme } = await documentFacts();
   return (
     <html
-      lang="en"
+      lang={locale}
       data-theme={theme === "system" ? undefined : theme}
       className={`${sans.variable} ${sansExtended.variable} ${mono.variable}`}
       suppressHydrationWarning

@@ -58,7 +58,7 @@ export function documentHeaders(secure: boolean): readonly Header[] {
   ];
 }
 
-/** Headers of built scripts, styles and fonts. */
+/** Headers of built scripts, styles and fonts: public, and a widget's frame in a sandbox has no origin of its own. */
 export function assetHeaders(): { key: string; value: string }[] {
-  return [{ ...NO_SNIFF }];
+  return [{ ...NO_SNIFF }, { key: "Access-Control-Allow-Origin", value: "*" }];
 }

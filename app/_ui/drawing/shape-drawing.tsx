@@ -14,7 +14,11 @@ interface ShapeDrawingProps {
   readonly focused?: string;
   /** The terminals in words, as the shape names them. */
   readonly terminals?: { readonly high: string; readonly low: string };
+  /** The legend's words, where the page speaks another language than English. */
+  readonly words?: { readonly high: string; readonly low: string; readonly notToScale: string };
 }
+
+const WORDS = { high: "high terminal", low: "low terminal", notToScale: "not to scale" };
 
 /** Widths for which the sheet is laid out; in between it scales. */
 const NARROW = 320;
@@ -24,7 +28,8 @@ const WIDE = 560;
  * The drawing of a shape: conductor, terminals, current, dimensions. Laid out twice, for narrow and for wide places,
  * and the container decides, so that it needs no script and prints as it stands.
  */
-export function ShapeDrawing({ drawing, toScale = true, labels, focused, terminals }: ShapeDrawingProps) {
+export function ShapeDrawing(props: ShapeDrawingProps) {
+  const { drawing, toScale = true, labels, focused, terminals, words = WORDS } = props;
   const id = useId();
   const narrow = layoutSheet(drawing, labels, NARROW);
   const wide = layoutSheet(drawing, labels, WIDE);
@@ -52,16 +57,18 @@ export function ShapeDrawing({ drawing, toScale = true, labels, focused, termina
           <svg viewBox="0 0 20 8" aria-hidden className="h-1 w-2.5 shrink-0">
             <path d="M0 4h20" className="stroke-copper" strokeWidth="5" />
           </svg>
-          high terminal{terminals ? `: ${terminals.high}` : ""}
+          {words.high}
+          {terminals ? `: ${terminals.high}` : ""}
         </span>
         <span className="inline-flex items-center gap-1">
           <svg viewBox="0 0 20 8" aria-hidden className="h-1 w-2.5 shrink-0">
             <path d="M0 4h20" className="stroke-verdigris" strokeWidth="6" />
             <path d="M0 4h20" className="stroke-sheet" strokeWidth="1.6" />
           </svg>
-          low terminal{terminals ? `: ${terminals.low}` : ""}
+          {words.low}
+          {terminals ? `: ${terminals.low}` : ""}
         </span>
-        {proportional ? null : <span>not to scale</span>}
+        {proportional ? null : <span>{words.notToScale}</span>}
       </figcaption>
     </figure>
   );

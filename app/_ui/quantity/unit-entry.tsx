@@ -22,6 +22,10 @@ interface UnitEntryProps {
   readonly name?: string;
   readonly placeholder?: string;
   readonly onFocusChange?: (focused: boolean) => void;
+  /** Locale in which numbers are shown and read; left out: shown with a point, read as the browser's language has it. */
+  readonly locale?: string;
+  /** Name of the menu, where the page speaks another language than English. */
+  readonly unitName?: string;
 }
 
 /** The size that the menu converts from: what was typed last, so that there and back is no rounding. */
@@ -47,7 +51,10 @@ export function UnitEntry(props: UnitEntryProps) {
     name,
     placeholder,
     onFocusChange,
+    locale,
+    unitName,
   } = props;
+  const comma = locale !== undefined && commaLocale(locale);
   const units = unitsOf(kind, foil);
   const [draft, setDraft] = useState<string | null>(null);
   const [emptyUnit, setEmptyUnit] = useState((placeholder && bareUnit) || FIRST_UNIT[kind]);
@@ -70,7 +77,7 @@ export function UnitEntry(props: UnitEntryProps) {
   function type(text: string) {
     setDraft(text);
     setOrigin(null);
-    const typed = readTyped(text, decimalComma());
+    const typed = readTyped(text, locale === undefined ? decimalComma() : comma);
     if (typed.kind === "empty") {
       if (current) setEmptyUnit(current.id);
       onChange("");
@@ -113,7 +120,7 @@ export function UnitEntry(props: UnitEntryProps) {
       <input
         {...control}
         name={name}
-        value={draft ?? (gauge === null ? parts.number : value)}
+        value={draft ?? (gauge === null ? (comma ? parts.number.replace(".", ",") : parts.number) : value)}
         placeholder={placeholder}
         onChange={(event) => type(event.target.value)}
         onFocus={() => onFocusChange?.(true)}
@@ -130,10 +137,12 @@ export function UnitEntry(props: UnitEntryProps) {
       />
       {units.length > 0 ? (
         <select
-          aria-label={`Unit of ${label}`}
+          aria-label={unitName ?? `Unit of ${label}`}
           value={foreign ?? current?.id ?? ""}
           disabled={fixed}
-          title={fixed ? "Type another unit after the number to change it" : undefined}
+          title={
+            fixed && unitName === undefined ? "Type another unit after the number to change it" : undefined
+          }
           onChange={(event) => convertTo(event.target.value)}
           className="min-h-5.5 shrink-0 cursor-pointer rounded border-s border-rule bg-transparent ps-0.5 font-mono text-table text-ink medium:min-h-5"
         >
@@ -168,6 +177,9 @@ const BASE_UNITS: Partial<Record<UnitKind, string>> = {
 
 /** Whether the reader's language writes "1,5". */
 function decimalComma(): boolean {
-  if (typeof navigator === "undefined") return false;
-  return new Intl.NumberFormat(navigator.language).format(1.5).includes(",");
+  return typeof navigator !== "undefined" && commaLocale(navigator.language);
+}
+
+function commaLocale(locale: string): boolean {
+  return new Intl.NumberFormat(locale).format(1.5).includes(",");
 }

@@ -1,0 +1,68 @@
+import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
+import type { UnitKind } from "../../_ui/quantity/units";
+import type { ShapeDrawing } from "../../_ui/drawing/shape-drawing";
+import type { ComponentProps } from "react";
+import type { Words } from "../_words/words";
+
+/** An input that visitors may change. */
+export interface OpenInput {
+  readonly name: string;
+  readonly label: string;
+  readonly symbol: string;
+  readonly help: string | null;
+  readonly value: string;
+  readonly type: "quantity" | "integer" | "choice";
+  readonly kind: UnitKind;
+  readonly bareUnit: string | null;
+  readonly foil: boolean;
+  /** Dimension line that shows it. */
+  readonly line: string;
+  /** "50 mm to 4 m", in the reader's locale; null where every value may be tried. */
+  readonly range: string | null;
+  readonly choices: readonly { readonly value: string; readonly label: string }[] | null;
+}
+
+export interface FixedInput {
+  readonly name: string;
+  readonly label: string;
+  readonly symbol: string;
+  readonly text: string;
+}
+
+export interface FrameDrawing {
+  readonly drawing: ComponentProps<typeof ShapeDrawing>["drawing"];
+  readonly toScale: boolean;
+  readonly labels: ComponentProps<typeof ShapeDrawing>["labels"];
+}
+
+/** Everything that a frame shows and knows: nothing of what its version hides. */
+export interface FrameView {
+  readonly embed: string;
+  readonly title: string;
+  readonly intro: string | null;
+  readonly open: readonly OpenInput[];
+  readonly fixed: readonly FixedInput[];
+  readonly requirement: string | null;
+  readonly show: { readonly drawing: boolean; readonly bounds: boolean; readonly plots: boolean };
+  readonly accent: string | null;
+  readonly density: "comfortable" | "compact";
+  readonly locale: string;
+  readonly words: Words;
+  /** "Busbar, Merrow Pike" */
+  readonly owner: string;
+  /** Address of the service's start page. */
+  readonly service: string;
+  /** Cautions of the shape, shown before there is an answer too. */
+  readonly cautions: readonly string[];
+  /** Coordinate along the flow, for the plots. */
+  readonly coordinateLabel: string;
+  readonly preview: boolean;
+  /** Origins whose pages may exchange messages with the frame. */
+  readonly hosts: readonly string[];
+  readonly token: { readonly token: string; readonly expiresAt: string };
+  /** What it opens with: the defaults, or what the page around asked for. */
+  readonly start: Readonly<Record<string, string>>;
+  readonly drawing: FrameDrawing | null;
+}
+
+export type FrameResult = ResistanceResult;

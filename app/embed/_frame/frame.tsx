@@ -1,0 +1,132 @@
+"use client";
+
+import dynamic from "next/dynamic";
+import { type CSSProperties, useCallback, useEffect, useMemo, useRef, useState } from "react";
+import { Button } from "../../_ui/button";
+import { ShapeDrawing } from "../../_ui/drawing/shape-drawing";
+import { QuantitySymbol } from "../../_ui/quantity-symbol";
+import { filled } from "../_words/words";
+import { FrameAnswerPane } from "./answer-pane";
+import { FrameApi, type Values } from "./frame-api";
+import { InputField } from "./input-field";
+import { TroubleCard } from "./trouble-card";
+import { useAnswer, useDrawing } from "./use-answer";
+import { useHost } from "./use-host";
+import type { FrameView } from "./frame-view";
+
+const FramePlots = dynamic(() => import("./frame-plots").then(({ FramePlots: Plots }) => Plots), {
+  ssr: false,
+});
+
+/** One widget: inputs, drawing, answer, cautions, and whose service it is. Complete by keyboard, from 320 px. */
+export function Frame({ view }: { readonly view: FrameView }) {
+  const { words, locale, show } = view;
+  const [values, setValues] = useState<Values>(view.start);
+  const [focused, setFocused] = useState<string>();
+  const [api] = useState(() => new FrameApi(view));
+  const { result, trouble, pending, ask } = useAnswer(api, values);
+  const drawing = useDrawing(api, values, view.drawing);
+  const content = useRef<HTMLElement>(null);
+
+  const names = useMemo(() => new Set(view.open.map(({ name }) => name)), [view.open]);
+  const onSet = useCallback(
+    (given: Values) => {
+      const own = Object.entries(given).filter(([name]) => names.has(name));
+      if (own.length > 0) setValues((before) => ({ ...before, ...Object.fromEntries(own) }));
+    },
+    [names],
+  );
+  const tell = useHost({ embed: view.embed, hosts: view.hosts, content, onSet, onCompute: ask });
+  useEffect(() => {
+    const inputs = view.open.map(({ name, value }) => ({ name, value }));
+    tell("ready", { title: view.title, inputs });
+  }, [tell, view]);
+  useEffect(() => {
+    if (result && !pending && !trouble) tell("result", result);
+  }, [tell, result, pending, trouble]);
+  useEffect(() => {
+    if (!trouble) return;
+    const errors = trouble.kind === "fields" ? trouble.fields : {};
+    const message = trouble.kind === "fields" ? [...Object.values(errors), ...trouble.whole].join(" ") : "";
+    tell("error", { code: trouble.kind, message, errors });
+  }, [tell, trouble]);
+
+  const gap = view.density === "compact" ? "gap-x-2 gap-y-0.5" : "gap-x-3 gap-y-1";
+  const accent = view.accent ?? "var(--copper)";
+  const style: CSSProperties & Record<"--accent", string> = { "--accent": accent };
+  const errors = trouble?.kind === "fields" ? trouble.fields : {};
+  const changed = view.open.some(({ name, value }) => values[name] !== value);
+  return (
+    <main
+      ref={content}
+      style={style}
+      className={`mx-auto max-w-[720px] border-t-3 border-t-(--accent) bg-paper ${view.density === "compact" ? "p-1.5" : "p-2"}`}
+    >
+      <h1 className="text-h3!">{view.title}</h1>
+      {view.intro ? <p className="mt-0.5 text-table text-ink-soft">{view.intro}</p> : null}
+      {view.preview ? <p className="mt-0.5 text-small text-amber">{words.preview}</p> : null}
+      <noscript>
+        <p className="mt-1 border-s-3 border-s-amber ps-1.5 text-table">{words.noScript}</p>
+      </noscript>
+      <div className="mt-1.5 grid gap-x-3 gap-y-1.5 min-[600px]:grid-cols-[minmax(0,17rem)_minmax(0,1fr)]">
+        <form aria-label={words.inputs} onSubmit={(event) => event.preventDefault()}>
+          <div className={`grid ${gap} min-[400px]:max-[600px]:grid-cols-2`}>
+            {view.open.map((input) => (
+              <InputField
+                key={input.name}
+                input={input}
+                value={values[input.name] ?? ""}
+                error={errors[input.name]}
+                words={words}
+                locale={locale}
+                onChange={(text) => setValues((before) => ({ ...before, [input.name]: text }))}
+                onFocusChange={(on) => setFocused(on ? input.line : undefined)}
+              />
+            ))}
+          </div>
+          {view.fixed.length > 0 ? (
+            <dl className="grid grid-cols-[auto_1fr] gap-x-2 text-table" aria-label={words.fixed}>
+              {view.fixed.map(({ name, label, symbol, text }) => (
+                <div key={name} className="contents">
+                  <dt className="text-ink-soft">
+                    {label} {symbol ? <QuantitySymbol text={symbol} /> : null}
+                  </dt>
+                  <dd className="font-mono">{text}</dd>
+                </div>
+              ))}
+            </dl>
+          ) : null}
+          {changed ? (
+            <Button
+              variant="quiet"
+              className="mt-0.5 -ms-2 print:hidden"
+              onClick={() => setValues(Object.fromEntries(view.open.map(({ name, value }) => [name, value])))}
+            >
+              {words.reset}
+            </Button>
+          ) : null}
+        </form>
+        <div className="grid content-start gap-1.5">
+          <FrameAnswerPane view={view} result={result} stale={pending || trouble !== null} />
+          {trouble ? <TroubleCard view={view} trouble={trouble} values={values} onAgain={ask} /> : null}
+          {drawing ? (
+            <ShapeDrawing
+              {...drawing}
+              focused={focused}
+              words={{ high: words.high, low: words.low, notToScale: words.notToScale }}
+            />
+          ) : null}
+        </div>
+      </div>
+      {show.plots && result?.profile ? <FramePlots view={view} profile={result.profile} /> : null}
+      <footer className="mt-2 border-t border-rule pt-1 text-small text-ink-soft">
+        <p>{words.disclaimer}</p>
+        <p>
+          <a href={view.service} target="_blank" rel="noopener" className="link">
+            {filled(words.service, view.owner)}
+          </a>
+        </p>
+      </footer>
+    </main>
+  );
+}
