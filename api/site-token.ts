@@ -1,12 +1,13 @@
 import { issueSiteToken } from "@/lib/auth/site-token";
-import { isOwnOrigin } from "@/lib/http/origin";
+import { signedInBy } from "@/lib/auth/session";
+import { requireSamePage } from "@/lib/http/same-page";
 import { Refusal } from "@/lib/service/refusal";
 import type { Service } from "@/lib/service/service";
 import { Call } from "./call";
 import { answerOf, type Answer, problemAnswer, respond } from "./respond";
 
 /**
- * Gives a page of this service the token with which it calls the API while nobody is signed in. Only for pages of our
+ * Gives a page of this service the token with which it calls the API, and says for which team. Only for pages of our
  * own origin; a browser says so itself and no script can forge it. Counts against the address.
  */
 export async function answerSiteToken(request: Request, service: Service): Promise<Response> {
@@ -15,8 +16,12 @@ export async function answerSiteToken(request: Request, service: Service): Promi
   let answer: Answer;
   try {
     await call.admit();
-    requireOwnPage(request.headers, origin);
-    answer = answerOf(200, { kind: "json", value: await issueSiteToken(secret, call.now) });
+    requireSamePage(request.headers, origin);
+    // Somebody without a team has nothing to compute for: their pages call as everybody's do.
+    const person = await signedInBy(service, request.headers.get("cookie"));
+    const token = await issueSiteToken(secret, call.now, person?.team ? person.sessionId : null);
+    const value = { ...token, team: person?.team?.name ?? null };
+    answer = answerOf(200, { kind: "json", value });
   } catch (error) {
     if (!(error instanceof Refusal)) throw error;
     answer = problemAnswer(error, call.requestId, origin, "application/json");
@@ -28,12 +33,4 @@ export async function answerSiteToken(request: Request, service: Service): Promi
     cors: [],
     bodyless: false,
   });
-}
-
-function requireOwnPage(headers: Headers, configured: string): void {
-  const origin = headers.get("origin");
-  const site = headers.get("sec-fetch-site");
-  const own = origin !== null && isOwnOrigin(origin, headers, configured);
-  if (own && (site === null || site === "same-origin")) return;
-  throw new Refusal("origin-not-allowed", "This token is for pages of this service only.");
 }

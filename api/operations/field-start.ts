@@ -1,6 +1,6 @@
 import { fieldById, fieldOfOwner, type FieldRow } from "@/db/queries/fields";
 import { keyActor } from "@/lib/activity/append";
-import { requireKey } from "@/lib/auth/access";
+import { requireRecorder } from "@/lib/auth/access";
 import type { PreparedField } from "@/lib/engine";
 import { fieldView } from "@/lib/fields/field-view";
 import { chargeOf, requireCaller, requireOwner } from "@/lib/fields/owner";
@@ -49,7 +49,7 @@ export async function startField(
   const owner = requireOwner(principal, service.config.secret);
   const caller = requireCaller(principal);
   const { record } = prepared.request;
-  const by = record && requireKey(principal, "A record");
+  const by = record && requireRecorder(principal);
   if (!service.fields.hasRoom(owner)) {
     throw new Refusal("busy", "Too many field solutions are waiting; try again when some are finished.", {
       headers: { "Retry-After": "10" },

@@ -1,7 +1,7 @@
 import { z } from "zod";
 import { listRecords as listRows } from "@/db/queries/records";
 import { keyActor } from "@/lib/activity/append";
-import { requireKey } from "@/lib/auth/access";
+import { requireKey, requireRecorder } from "@/lib/auth/access";
 import { prepareReplay } from "@/lib/fields/replay-field";
 import { MOST_COMPUTATIONS } from "@/lib/jobs/field-cost";
 import { recordView, relabel, removeRecord, teamRecord } from "@/lib/records/records";
@@ -19,7 +19,7 @@ const LARGEST_PAGE = 2_000_000;
 const recordId = z.object({ id: z.string().max(64).meta({ description: "Id of the record." }) });
 
 function write({ principal, requestId, now }: CallContext) {
-  const key = requireKey(principal, "A record");
+  const key = requireRecorder(principal);
   return { teamId: key.teamId, actor: keyActor(key, requestId), now };
 }
 

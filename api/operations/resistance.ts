@@ -1,6 +1,6 @@
 import { z } from "zod";
 import { keyActor } from "@/lib/activity/append";
-import { requireKey } from "@/lib/auth/access";
+import { requireRecorder } from "@/lib/auth/access";
 import {
   catalogue,
   computeResistance,
@@ -128,7 +128,7 @@ export const postResistance = defineOperation({
   stores: ({ body }) => asksForRecord(body),
   handler: ({ body }, context) => {
     if (context.principal.kind === "embed") return computeWidget(body, context, context.principal);
-    const by = asksForRecord(body) ? requireKey(context.principal, "A record") : undefined;
+    const by = asksForRecord(body) ? requireRecorder(context.principal) : undefined;
     const result = compute(body, context);
     const facts = { shape: result.shape, computations: 1 };
     if (!by) return json(200, result, facts);

@@ -41,7 +41,10 @@ export function appendActivity(db: Database, actor: Actor, act: Act, at: number)
   });
 }
 
+/** Who acts by API: the key, or the person on whose page the call was made. */
 export function keyActor(key: KeyPrincipal, requestId: string): Actor {
+  const { person, address } = key;
+  if (person) return { kind: "person", id: person.id, name: person.name, address, requestId };
   return { kind: "key", id: key.id, name: key.name, address: key.address, requestId };
 }
 

@@ -1,6 +1,7 @@
 import { isOwnOrigin } from "../http/origin";
 import { Refusal } from "../service/refusal";
 import type { KeyPrincipal, Principal } from "./principal";
+import { requireMay } from "./permissions";
 import type { Scope } from "./scope";
 
 /** What an operation asks for: a scope, any key, or nothing. */
@@ -30,6 +31,14 @@ export function requireAccess(principal: Principal, access: Access): void {
 export function requireKey(principal: Principal, purpose: string): KeyPrincipal {
   if (principal.kind === "key") return principal;
   throw new Refusal("team-required", `${purpose} belongs to a team: call with a key of that team.`);
+}
+
+/** The key behind a call that stores, changes or deletes a record; a person's page must be allowed to as well. */
+export function requireRecorder(principal: Principal): KeyPrincipal {
+  const key = requireKey(principal, "A record");
+  const { person } = key;
+  if (person) requireMay({ role: person.role, teamIds: [key.teamId] }, "records.manage", key.teamId);
+  return key;
 }
 
 /** Whether a browser's page of that origin may call as this principal. */

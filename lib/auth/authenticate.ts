@@ -1,16 +1,28 @@
 import { type KeyRow, keyWithSecrets } from "@/db/queries/keys";
+import type { Role } from "@/db/schema/organisation";
 import { Refusal } from "../service/refusal";
 import type { Service } from "../service/service";
 import { parseKey, secretMatches } from "./key-text";
 import { embedPrincipal } from "./embed-principal";
 import { isEmbedToken } from "../embeds/token";
-import type { Principal } from "./principal";
+import { pageCallerId, type Principal } from "./principal";
 import { isScope, type Scope } from "./scope";
+import { signedIn } from "./session";
 import { checkSiteToken } from "./site-token";
 import { signedOutLimits } from "./signed-out-limits";
 
 /** What a signed-out page may do, by its token. */
-const SIGNED_OUT_SCOPES: readonly Scope[] = ["compute", "materials:read"];
+const SIGNED_OUT_SCOPES: readonly Scope[] = ["compute", "field", "materials:read"];
+
+/** What the pages of somebody who is signed in may do, by their role. */
+const SIGNED_IN_SCOPES: Readonly<Record<Role, readonly Scope[]>> = {
+  admin: ["compute", "field", "materials:read", "materials:write", "records:read"],
+  developer: ["compute", "field", "materials:read", "materials:write", "records:read"],
+  viewer: ["compute", "field", "materials:read", "records:read"],
+};
+
+/** Requests a minute and computations a month of one person's pages. */
+const PERSON_QUOTAS = { minuteQuota: 600, monthQuota: 100_000 };
 
 /** A hash of nothing, compared with when the key is unknown: both answers take the same time. */
 const NO_HASH = "0".repeat(64);
@@ -40,16 +52,33 @@ export async function authenticate(
     throw new Refusal("invalid-key", 'The Authorization header must read "Bearer" and a key.');
   }
   if (header !== null && isEmbedToken(bearer)) return await embedPrincipal(service, bearer, address);
-  if (header !== null && bearer.startsWith("ey")) return await signedOut(service, bearer, address);
+  if (header !== null && bearer.startsWith("ey")) return await pagePrincipal(service, bearer, address);
   return keyPrincipal(service, bearer, header === null, address);
 }
 
-async function signedOut(service: Service, token: string, address: string): Promise<Principal> {
+/** A page of our own: on behalf of the person who is signed in to it, or of nobody. */
+async function pagePrincipal(service: Service, token: string, address: string): Promise<Principal> {
   const verdict = await checkSiteToken(service.config.secret, token, service.now());
   if (verdict === "expired")
     throw new Refusal("invalid-token", "The page's token has expired: ask for the next one.");
   if (verdict === "wrong") throw new Refusal("invalid-token", "The token is not one of this service.");
-  return { kind: "signed-out", scopes: SIGNED_OUT_SCOPES, address, ...signedOutLimits(service.db) };
+  if (verdict.sessionId === null) {
+    return { kind: "signed-out", scopes: SIGNED_OUT_SCOPES, address, ...signedOutLimits(service.db) };
+  }
+  const person = signedIn(service.db, verdict.sessionId, service.now());
+  if (!person?.team) throw new Refusal("invalid-token", "The session of this page is over.");
+  return {
+    kind: "key",
+    id: pageCallerId(person.personId, person.team.id),
+    name: person.name,
+    teamId: person.team.id,
+    team: person.team.slug,
+    scopes: SIGNED_IN_SCOPES[person.role],
+    origins: [],
+    ...PERSON_QUOTAS,
+    address,
+    person: { id: person.personId, name: person.name, role: person.role },
+  };
 }
 
 function keyPrincipal(service: Service, text: string, inUrl: boolean, address: string): Principal {

@@ -1,9 +1,11 @@
+import type { Role } from "@/db/schema/organisation";
 import type { EmbedDefinition } from "../embeds/definition";
 import type { Scope } from "./scope";
 
-/** A program with a key. */
+/** A program with a key, or a page of our own on behalf of the person who is signed in to it. */
 export interface KeyPrincipal {
   readonly kind: "key";
+  /** The key's id; for a page the person's and the team's, by which its usage is counted. */
   readonly id: string;
   readonly name: string;
   readonly teamId: string;
@@ -14,6 +16,8 @@ export interface KeyPrincipal {
   readonly minuteQuota: number;
   readonly monthQuota: number;
   readonly address: string;
+  /** Who is signed in to the page that calls; none behind a program's key. */
+  readonly person?: { readonly id: string; readonly name: string; readonly role: Role };
 }
 
 /** A page of our own that nobody is signed in to, with its short-lived token. */
@@ -54,3 +58,8 @@ export type Principal = KeyPrincipal | EmbedPrincipal | SignedOutPrincipal | Ano
 
 /** Id under which signed-out calls are counted in the usage. */
 export const SIGNED_OUT_ID = "signed-out";
+
+/** Id under which the calls of one person's pages for one team are counted in the usage. */
+export function pageCallerId(personId: string, teamId: string): string {
+  return `${personId}:${teamId}`;
+}

@@ -5,6 +5,8 @@ import { deriveKey } from "../config/secret";
 export const SITE_TOKEN_SECONDS = 900;
 
 const PURPOSE = "rhoform:site";
+const SIGNED_OUT = "signed-out";
+const SIGNED_IN = "session";
 
 const KEYS = new Map<string, Uint8Array>();
 
@@ -14,16 +16,20 @@ function signingKey(secret: string): Uint8Array {
   return key;
 }
 
-/** A token with which a page of our own calls the API while nobody is signed in. `now` is Unix ms. */
+/**
+ * A token with which a page of our own calls the API: for the session that is open in the browser, or for nobody.
+ * `now` is Unix ms.
+ */
 export async function issueSiteToken(
   secret: string,
   now: number,
+  sessionId: string | null = null,
 ): Promise<{ token: string; expiresAt: string }> {
   const issued = Math.floor(now / 1000);
   const expires = issued + SITE_TOKEN_SECONDS;
-  const token = await new SignJWT({})
+  const token = await new SignJWT(sessionId === null ? {} : { sid: sessionId })
     .setProtectedHeader({ alg: "HS256", typ: "site+jwt" })
-    .setSubject("signed-out")
+    .setSubject(sessionId === null ? SIGNED_OUT : SIGNED_IN)
     .setAudience(PURPOSE)
     .setIssuedAt(issued)
     .setExpirationTime(expires)
@@ -31,22 +37,24 @@ export async function issueSiteToken(
   return { token, expiresAt: new Date(expires * 1000).toISOString() };
 }
 
-/** Whether a token is ours, meant for this and not yet over. */
+/** Whether a token is ours, meant for this and not yet over; then the session it stands for, if any. */
 export async function checkSiteToken(
   secret: string,
   token: string,
   now: number,
-): Promise<"valid" | "expired" | "wrong"> {
+): Promise<{ readonly sessionId: string | null } | "expired" | "wrong"> {
   try {
-    const { payload } = await jwtVerify(token, signingKey(secret), {
+    const { payload } = await jwtVerify<{ sid?: unknown }>(token, signingKey(secret), {
       algorithms: ["HS256"],
       typ: "site+jwt",
       audience: PURPOSE,
-      subject: "signed-out",
       currentDate: new Date(now),
       requiredClaims: ["exp"],
     });
-    return payload.sub === "signed-out" ? "valid" : "wrong";
+    if (payload.sub === SIGNED_OUT) return { sessionId: null };
+    return payload.sub === SIGNED_IN && typeof payload.sid === "string"
+      ? { sessionId: payload.sid }
+      : "wrong";
   } catch (error) {
     return error instanceof errors.JWTExpired ? "expired" : "wrong";
   }

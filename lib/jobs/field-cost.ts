@@ -8,6 +8,9 @@ export const FIELD_COSTS = [
 /** Most unknowns that a solution may have. */
 export const MOST_UNKNOWNS = FIELD_COSTS[FIELD_COSTS.length - 1].upToUnknowns;
 
+/** Most unknowns of a solution that a page asks for while nobody is signed in. */
+export const SIGNED_OUT_UNKNOWNS = FIELD_COSTS[0].upToUnknowns;
+
 /** The most that a solution can cost: reserved before it starts, the rest given back at its end. */
 export const MOST_COMPUTATIONS = FIELD_COSTS[FIELD_COSTS.length - 1].computations;
 

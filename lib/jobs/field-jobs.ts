@@ -18,7 +18,7 @@ import { monthBucket } from "../limits/quota";
 import { storeRecord } from "../records/records";
 import { newId } from "../service/identifier";
 import type { Log } from "../service/log";
-import { fieldCost, MOST_UNKNOWNS } from "./field-cost";
+import { fieldCost, MOST_UNKNOWNS, SIGNED_OUT_UNKNOWNS } from "./field-cost";
 import { FieldFiles } from "./field-files";
 import type { FieldOutcome } from "./field-task";
 import { WARMING_BEND, WARMING_PLATE } from "./warming-body";
@@ -139,7 +139,7 @@ export class FieldJobs {
       // Written by this application only, from materials that had passed their schema.
       materials: row.materials as Material[],
       secondsAllowed,
-      maximumUnknowns: MOST_UNKNOWNS,
+      maximumUnknowns: row.charge.teamId === "" ? SIGNED_OUT_UNKNOWNS : MOST_UNKNOWNS,
       onProgress: (progress) => {
         if (this.closing || now() - kept < KEEP_EVERY_MS) return this.tellProgress(row.id, progress);
         kept = now();

@@ -4,7 +4,14 @@ import { answerSiteToken } from "@/api/site-token";
 import { deriveKey } from "@/lib/config/secret";
 import { issueSiteToken } from "@/lib/auth/site-token";
 import { signedOutLimits, SIGNED_OUT_SETTING } from "@/lib/auth/signed-out-limits";
+import { openSession } from "@/lib/auth/session";
+import { sessionCookie } from "@/lib/auth/session-cookie";
+import { newId } from "@/lib/service/identifier";
+import { updatePerson } from "@/db/queries/people";
+import { endSessionRow } from "@/db/queries/sessions";
 import { writeSetting } from "@/db/queries/settings";
+import { insertMembership, insertPerson, teamBySlug } from "@/db/queries/teams";
+import type { Role } from "@/db/schema/organisation";
 import { call, expectProblem, SLEEVE } from "../support/call";
 import { startServer, type TestServer } from "../support/server";
 
@@ -47,6 +54,65 @@ describe("POST /api/site/token", () => {
       { "sec-fetch-site": "same-origin" },
     ];
     for (const headers of others) expect((await ask(headers)).status).toBe(403);
+  });
+});
+
+describe("a page of somebody who is signed in", () => {
+  const session = (role: Role, team: string | null = "busbar") => {
+    const { db } = server.service;
+    if (!teamBySlug(db, "busbar")) server.issue();
+    const id = newId("per");
+    insertPerson(db, { id, email: `${id}@merrow-pike.example`, name: "Ines Harrow", role, createdAt: 1 });
+    if (team) insertMembership(db, id, teamBySlug(db, team)?.id ?? "", 1);
+    const about = { personId: id, device: "d", client: "Firefox on Linux", address: "127.0.0.1" };
+    return openSession(db, { ...about, now: Date.now() });
+  };
+  const tokenOf = async (opened: { id: string; personId: string; expiresAt: number }) => {
+    const { config } = server.service;
+    const cookie = (await sessionCookie(config, opened, Date.now())).split(";")[0];
+    const own = { origin: "http://rhoform.test", "sec-fetch-site": "same-origin", cookie };
+    const response = await ask(own);
+    return (await response.json()) as { token: string; team: string | null };
+  };
+
+  test("stores for the team under the person's name, and is counted as theirs", async () => {
+    const opened = session("developer");
+    const { token: key, team } = await tokenOf(opened);
+    expect(team).toBe("busbar");
+    const stored = await compute(key, {}, { ...SLEEVE, record: { label: "From a page" } });
+    expect(stored.status).toBe(200);
+    const record = await call(server, "get", `/records/${stored.body.record.id}`, { key });
+    expect(record.body.by).toMatchObject({ kind: "person", name: "Ines Harrow" });
+    const counted = server.service.db.$client
+      .prepare("select count(*) from usage_events where key_id like ?")
+      .pluck()
+      .get(`${opened.personId}:%`);
+    expect(counted).toBe(2);
+    expectProblem(await call(server, "get", "/keys", { key }), 403, "insufficient-scope");
+  });
+
+  test("403 for a viewer who stores, whose calls are answered all the same", async () => {
+    const { token: key } = await tokenOf(session("viewer"));
+    expect((await compute(key)).status).toBe(200);
+    expectProblem(await compute(key, {}, { ...SLEEVE, record: { label: "x" } }), 403, "not-permitted");
+    expect((await call(server, "get", "/records", { key })).status).toBe(200);
+  });
+
+  test("401 as soon as the session has ended or the person was removed", async () => {
+    const first = session("developer");
+    const { token: one } = await tokenOf(first);
+    endSessionRow(server.service.db, first.id, Date.now());
+    expectProblem(await compute(one), 401, "invalid-token");
+    const second = session("developer");
+    const { token: two } = await tokenOf(second);
+    updatePerson(server.service.db, second.personId, { removedAt: Date.now() });
+    expectProblem(await compute(two), 401, "invalid-token");
+  });
+
+  test("is nobody's page where the person has no team", async () => {
+    const { team, token: key } = await tokenOf(session("developer", null));
+    expect(team).toBeNull();
+    expectProblem(await call(server, "get", "/records", { key }), 403, "insufficient-scope");
   });
 });
 
