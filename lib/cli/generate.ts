@@ -1,15 +1,25 @@
 /**
- * `npm run generate`: what is made from the API's own description, the types and calls of the TypeScript client.
+ * `npm run generate`: what is made from the API's own description, the clients for TypeScript and Python.
  * With `--check` nothing is written; it fails if writing would change a file.
  */
-import { mkdirSync, mkdtempSync, readFileSync, readdirSync, rmSync, writeFileSync } from "node:fs";
+import {
+  existsSync,
+  mkdirSync,
+  mkdtempSync,
+  readFileSync,
+  readdirSync,
+  rmSync,
+  writeFileSync,
+} from "node:fs";
 import { tmpdir } from "node:os";
-import { join, relative } from "node:path";
+import { dirname, join, relative } from "node:path";
 import { createClient } from "@hey-api/openapi-ts";
 import { openApiDocument } from "@/api/openapi";
 import { registry } from "@/api/registry";
+import { pythonClient } from "./python/python-client";
 
 const TYPESCRIPT = "sdk/typescript/src/generated";
+const PYTHON = "sdk/python/rhoform.py";
 
 /** The problem pages' host in the document; the client's types and calls do not depend on it. */
 const ORIGIN = "https://rhoform.example";
@@ -44,33 +54,39 @@ function differences(made: Map<string, string>, kept: Map<string, string>): stri
     .sort();
 }
 
+/** Files to be, by path, and null for those that should be gone. */
+async function generated(work: string): Promise<Map<string, string | null>> {
+  const document = join(work, "openapi.json");
+  const text = JSON.stringify(await openApiDocument(registry, ORIGIN));
+  writeFileSync(document, text);
+  const folder = join(work, "typescript");
+  await generateTypescript(folder, document);
+  const made = filesOf(folder);
+  mkdirSync(TYPESCRIPT, { recursive: true });
+  const changes = new Map<string, string | null>();
+  for (const path of differences(made, filesOf(TYPESCRIPT)))
+    changes.set(join(TYPESCRIPT, path), made.get(path) ?? null);
+  const python = pythonClient(text);
+  if (!existsSync(PYTHON) || readFileSync(PYTHON, "utf8") !== python) changes.set(PYTHON, python);
+  return changes;
+}
+
 async function main(): Promise<number> {
   const work = mkdtempSync(join(tmpdir(), "rhoform-generate-"));
   try {
-    const document = join(work, "openapi.json");
-    writeFileSync(document, JSON.stringify(await openApiDocument(registry, ORIGIN)));
-    const folder = join(work, "typescript");
-    await generateTypescript(folder, document);
-    const made = filesOf(folder);
-    mkdirSync(TYPESCRIPT, { recursive: true });
-    const changed = differences(made, filesOf(TYPESCRIPT));
+    const changes = await generated(work);
     if (process.argv.includes("--check")) {
-      for (const path of changed)
-        console.error(`${join(TYPESCRIPT, path)} is not what npm run generate makes.`);
-      return changed.length === 0 ? 0 : 1;
+      for (const path of changes.keys()) console.error(`${path} is not what npm run generate makes.`);
+      return changes.size === 0 ? 0 : 1;
     }
-    for (const path of changed) {
-      const text = made.get(path);
-      const target = join(TYPESCRIPT, path);
-      if (text === undefined) rmSync(target);
+    for (const [path, text] of changes) {
+      if (text === null) rmSync(path);
       else {
-        mkdirSync(join(target, ".."), { recursive: true });
-        writeFileSync(target, text);
+        mkdirSync(dirname(path), { recursive: true });
+        writeFileSync(path, text);
       }
     }
-    console.log(
-      changed.length === 0 ? "Nothing changed." : changed.map((path) => join(TYPESCRIPT, path)).join("\n"),
-    );
+    console.log(changes.size === 0 ? "Nothing changed." : [...changes.keys()].join("\n"));
     return 0;
   } finally {
     rmSync(work, { recursive: true, force: true });

@@ -53,7 +53,7 @@ export const readShape = <ThrowOnError extends boolean = true>(options: Options<
 /**
  * Compute one resistance
  *
- * From a shape, a medium and two terminals to a DC resistance with bounds: how it was computed, what it assumes, which cautions apply, and the engine's checks on this very answer. With `record` the calculation is stored for the team and can be replayed later; then an `Idempotency-Key` counts. Costs one computation of the month; a refused request costs none. Needs the scope `compute`.
+ * From a shape, a medium and two terminals to a DC resistance with bounds: how it was computed, what it assumes, which cautions apply, and the engine's checks on this very answer. With `record` the calculation is stored for the team and can be replayed later; then an `Idempotency-Key` counts. A dimension, a value of the medium and the temperature may be an object with a tolerance; with `uncertainty` the answer tells how far the resistance strays, the stated uncertainty of the materials included, and what each input contributes. Without `uncertainty` the nominal values alone count. Costs one computation of the month, by Monte Carlo one for each 100,000 trials begun; a refused request costs none. Needs the scope `compute`.
  */
 export const computeResistance = <ThrowOnError extends boolean = true>(options: Options<ComputeResistanceData, ThrowOnError>) => (options.client ?? client).post<ComputeResistanceResponses, ComputeResistanceErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',
@@ -73,7 +73,7 @@ export const computeResistance = <ThrowOnError extends boolean = true>(options: 
 /**
  * Compute one resistance by address
  *
- * The same calculation for spreadsheets and links: every dimension of the shape is a parameter of its own name (`innerRadius=2mm`), a unit may follow the number. Shapes of two media take a prefix (`core.material=…&cladding.resistivity=…`). Graded media need the body of `POST /resistance`. As `text/plain`, or with `format=text`, the answer is the bare number in ohms, and an error is one line that begins with `error:` and keeps its status. Needs the scope `compute`.
+ * The same calculation for spreadsheets and links: every dimension of the shape is a parameter of its own name (`innerRadius=2mm`), a unit may follow the number. Shapes of two media take a prefix (`core.material=…&cladding.resistivity=…`). A tolerance follows its value as `width=50mm±0.4mm` (or `±1%`), and `uncertainty=` names the method. Graded media and other tolerances need the body of `POST /resistance`. As `text/plain`, or with `format=text`, the answer is the bare number in ohms, and an error is one line that begins with `error:` and keeps its status. Needs the scope `compute`.
  */
 export const readResistance = <ThrowOnError extends boolean = true>(options: Options<ReadResistanceData, ThrowOnError>) => (options.client ?? client).get<ReadResistanceResponses, ReadResistanceErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',

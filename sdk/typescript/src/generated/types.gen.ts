@@ -210,69 +210,7 @@ export type AnsweredResistance = {
          */
         relativeError: number;
     };
-    /**
-     * How far the resistance strays with the tolerances of the inputs; bounds are a separate statement.
-     */
-    uncertainty?: {
-        method: 'propagation' | 'worst-case' | 'monte-carlo';
-        /**
-         * Standard uncertainty of the resistance in ohms; for `worst-case` that of first-order propagation.
-         */
-        standard: number;
-        /**
-         * Lower end of the range in ohms.
-         */
-        low: number;
-        /**
-         * Upper end of the range in ohms.
-         */
-        high: number;
-        /**
-         * Probability that the range covers the resistance: 0.95; 1 for `worst-case`, whose range is the whole box.
-         */
-        coverage: number;
-        /**
-         * The range for people, rounded by JCGM 100, 7.2.6.
-         */
-        text: string;
-        /**
-         * How the range was found, in one or two sentences.
-         */
-        basis: string;
-        /**
-         * Mean of the trials in ohms; `monte-carlo` only.
-         */
-        mean?: number;
-        /**
-         * Trials made; `monte-carlo` only.
-         */
-        trials?: number;
-        /**
-         * Seed used; `monte-carlo` only.
-         */
-        seed?: number;
-        /**
-         * The budget, largest share first.
-         */
-        contributions: Array<{
-            /**
-             * Place of the input in the request, such as `dimensions.innerRadius`; a material stands for its stated uncertainty.
-             */
-            input: string;
-            /**
-             * Derivative of the resistance by the input at the nominal values, in ohms per SI unit (per radian, per kelvin; for a material per unit of the ratio of true to nominal resistivity).
-             */
-            sensitivity: number;
-            /**
-             * Standard uncertainty of the input in SI (rad, K; a ratio for a material).
-             */
-            standard: number;
-            /**
-             * Part of the whole that is due to this input, 0 … 1: of the variance, or for `worst-case` of the ranges that the inputs span one at a time.
-             */
-            share: number;
-        }>;
-    };
+    uncertainty?: Uncertainty;
     /**
      * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
      */
@@ -487,6 +425,70 @@ export type BoundedResistance = {
 };
 
 /**
+ * How far the resistance strays with the tolerances of the inputs; bounds are a separate statement.
+ */
+export type Uncertainty = {
+    method: 'propagation' | 'worst-case' | 'monte-carlo';
+    /**
+     * Standard uncertainty of the resistance in ohms; for `worst-case` that of first-order propagation.
+     */
+    standard: number;
+    /**
+     * Lower end of the range in ohms.
+     */
+    low: number;
+    /**
+     * Upper end of the range in ohms.
+     */
+    high: number;
+    /**
+     * Probability that the range covers the resistance: 0.95; 1 for `worst-case`, whose range is the whole box.
+     */
+    coverage: number;
+    /**
+     * The range for people, rounded by JCGM 100, 7.2.6.
+     */
+    text: string;
+    /**
+     * How the range was found, in one or two sentences.
+     */
+    basis: string;
+    /**
+     * Mean of the trials in ohms; `monte-carlo` only.
+     */
+    mean?: number;
+    /**
+     * Trials made; `monte-carlo` only.
+     */
+    trials?: number;
+    /**
+     * Seed used; `monte-carlo` only.
+     */
+    seed?: number;
+    /**
+     * The budget, largest share first.
+     */
+    contributions: Array<{
+        /**
+         * Place of the input in the request, such as `dimensions.innerRadius`; a material stands for its stated uncertainty.
+         */
+        input: string;
+        /**
+         * Derivative of the resistance by the input at the nominal values, in ohms per SI unit (per radian, per kelvin; for a material per unit of the ratio of true to nominal resistivity).
+         */
+        sensitivity: number;
+        /**
+         * Standard uncertainty of the input in SI (rad, K; a ratio for a material).
+         */
+        standard: number;
+        /**
+         * Part of the whole that is due to this input, 0 … 1: of the variance, or for `worst-case` of the ranges that the inputs span one at a time.
+         */
+        share: number;
+    }>;
+};
+
+/**
  * A shape, its dimensions and medium, and what to answer.
  */
 export type ResistanceRequest = ({
@@ -605,18 +607,18 @@ export type BarRequest = {
         /**
          * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Width (w). Width of the section, across the current. A bare number is in m; a text carries its unit.
          */
-        width: number | string;
+        width: number | string | TolerancedQuantity;
         /**
          * Thickness (t). Thickness of the section; a copper foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
          */
-        thickness: number | string;
+        thickness: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -631,41 +633,62 @@ export type BarRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+};
+
+/**
+ * A quantity with a tolerance: `value` with `tolerance`, or with `plus` and `minus`. A tolerance is in the unit of its text (a bare number in SI), or a share of the value such as `1 %`; on a temperature it is a difference.
+ */
+export type TolerancedQuantity = {
+    /**
+     * The nominal value.
+     */
+    value: number | string;
+    /**
+     * ± about the value: a quantity, or a share of the value such as `1 %`.
+     */
+    tolerance?: number | string;
+    /**
+     * How far above the value it may be; 0 if left out.
+     */
+    plus?: number | string;
+    /**
+     * How far below the value it may be; 0 if left out.
+     */
+    minus?: number | string;
+    /**
+     * How the true value is spread over the tolerance; `uniform` by default. For `normal` the tolerance is two standard deviations.
+     */
+    distribution?: 'uniform' | 'normal' | 'triangular';
 };
 
 export type Medium = unknown & {
-    /**
-     * Id of a material of the library or the team.
-     */
     material?: string;
-    /**
-     * Allow a temperature outside the material's range, with a caution.
-     */
     extrapolate?: boolean;
     /**
      * Resistivity (a resistivity; a bare number is in ohm m, or a text with a unit).
      */
-    resistivity?: number | string;
+    resistivity?: number | string | TolerancedQuantity;
     /**
      * Conductivity (a conductivity; a bare number is in S/m, or a text with a unit).
      */
-    conductivity?: number | string;
+    conductivity?: number | string | TolerancedQuantity;
     /**
      * Temperature coefficient of the resistivity at the reference temperature (a temperature coefficient; a bare number is in 1/K, or a text with a unit).
      */
-    temperatureCoefficient?: number | string;
+    temperatureCoefficient?: number | string | TolerancedQuantity;
     /**
      * Temperature at which the resistivity or conductivity is given, 20 °C by default (a temperature; a bare number is in degC, or a text with a unit).
      */
-    referenceTemperature?: number | string;
+    referenceTemperature?: number | string | TolerancedQuantity;
     /**
      * Sheet resistance, for sheet shapes (a sheet resistance; a bare number is in ohm/sq, or a text with a unit).
      */
-    sheetResistance?: number | string;
+    sheetResistance?: number | string | TolerancedQuantity;
     /**
      * Thickness of the sheet, for sheet shapes, beside a material, resistivity or conductivity (a length; a bare number is in m, or a text with a unit).
      */
-    thickness?: number | string;
+    thickness?: number | string | TolerancedQuantity;
     /**
      * A medium that varies along one coordinate of the shape.
      */
@@ -674,9 +697,6 @@ export type Medium = unknown & {
          * A coordinate of the shape, along or across the flow; `GET /shapes/{shape}` lists them.
          */
         coordinate: string;
-        /**
-         * What the profile's values are; not needed for `temperature` and `dopant` profiles.
-         */
         quantity?: 'conductivity' | 'resistivity';
         /**
          * How the quantity varies along the coordinate.
@@ -686,73 +706,73 @@ export type Medium = unknown & {
             /**
              * The value everywhere, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            value: number | string;
+            value: number | string | TolerancedQuantity;
         } | {
             kind: 'linear';
             /**
              * Value at the start of the coordinate, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            from: number | string;
+            from: number | string | TolerancedQuantity;
             /**
              * Value at its end, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            to: number | string;
+            to: number | string | TolerancedQuantity;
         } | {
             kind: 'exponential';
             /**
              * Value at the start of the coordinate, greater than 0, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            from: number | string;
+            from: number | string | TolerancedQuantity;
             /**
              * Value at its end, greater than 0, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            to: number | string;
+            to: number | string | TolerancedQuantity;
         } | {
             kind: 'power';
             /**
              * Value at the position `at`, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            reference: number | string;
+            reference: number | string | TolerancedQuantity;
             /**
              * Position where the value is `reference`, greater than 0, in the coordinate's unit (bare numbers in m, or in degrees for an angle).
              */
-            at: number | string;
+            at: number | string | TolerancedQuantity;
             /**
              * Exponent, a plain number between -100 and 100.
              */
-            exponent: number | string;
+            exponent: number | string | TolerancedQuantity;
         } | {
             kind: 'gaussian';
             /**
              * Value at the centre, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            peak: number | string;
+            peak: number | string | TolerancedQuantity;
             /**
              * Position of the centre, inside the range or not, in the coordinate's unit (bare numbers in m, or in degrees for an angle).
              */
-            center: number | string;
+            center: number | string | TolerancedQuantity;
             /**
              * Standard deviation, greater than 0, in the coordinate's unit (bare numbers in m, or in degrees for an angle).
              */
-            spread: number | string;
+            spread: number | string | TolerancedQuantity;
             /**
              * Value far from the centre, 0 by default, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            background?: number | string;
+            background?: number | string | TolerancedQuantity;
         } | {
             kind: 'complementary-error';
             /**
              * Value at the surface, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            surface: number | string;
+            surface: number | string | TolerancedQuantity;
             /**
              * Diffusion length, greater than 0, in the coordinate's unit (bare numbers in m, or in degrees for an angle).
              */
-            length: number | string;
+            length: number | string | TolerancedQuantity;
             /**
              * Value far from the surface, 0 by default, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            background?: number | string;
+            background?: number | string | TolerancedQuantity;
             /**
              * Which end of the coordinate is the surface.
              */
@@ -770,7 +790,7 @@ export type Medium = unknown & {
                 /**
                  * Value in the layer, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                value: number | string;
+                value: number | string | TolerancedQuantity;
             }>;
         } | {
             kind: 'table';
@@ -781,10 +801,7 @@ export type Medium = unknown & {
             /**
              * The value at each position (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
              */
-            values: Array<number | string>;
-            /**
-             * Between the points: the value, its logarithm, or a Fritsch–Carlson cubic.
-             */
+            values: Array<number | string | TolerancedQuantity>;
             interpolation?: 'linear' | 'log' | 'monotone-cubic';
         } | {
             kind: 'expression';
@@ -801,14 +818,11 @@ export type Medium = unknown & {
             /**
              * Temperature at the coordinate's start (a temperature; a bare number is in degC, or a text with a unit).
              */
-            from: number | string;
+            from: number | string | TolerancedQuantity;
             /**
              * Temperature at its end (a temperature; a bare number is in degC, or a text with a unit).
              */
-            to: number | string;
-            /**
-             * Allow temperatures outside the material's range, with a caution.
-             */
+            to: number | string | TolerancedQuantity;
             extrapolate?: boolean;
         } | {
             kind: 'dopant';
@@ -824,73 +838,73 @@ export type Medium = unknown & {
                 /**
                  * The value everywhere, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                value: number | string;
+                value: number | string | TolerancedQuantity;
             } | {
                 kind: 'linear';
                 /**
                  * Value at the start of the coordinate, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                from: number | string;
+                from: number | string | TolerancedQuantity;
                 /**
                  * Value at its end, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                to: number | string;
+                to: number | string | TolerancedQuantity;
             } | {
                 kind: 'exponential';
                 /**
                  * Value at the start of the coordinate, greater than 0, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                from: number | string;
+                from: number | string | TolerancedQuantity;
                 /**
                  * Value at its end, greater than 0, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                to: number | string;
+                to: number | string | TolerancedQuantity;
             } | {
                 kind: 'power';
                 /**
                  * Value at the position `at`, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                reference: number | string;
+                reference: number | string | TolerancedQuantity;
                 /**
                  * Position where the value is `reference`, greater than 0, in the coordinate's unit (bare numbers in m, or in degrees for an angle).
                  */
-                at: number | string;
+                at: number | string | TolerancedQuantity;
                 /**
                  * Exponent, a plain number between -100 and 100.
                  */
-                exponent: number | string;
+                exponent: number | string | TolerancedQuantity;
             } | {
                 kind: 'gaussian';
                 /**
                  * Value at the centre, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                peak: number | string;
+                peak: number | string | TolerancedQuantity;
                 /**
                  * Position of the centre, inside the range or not, in the coordinate's unit (bare numbers in m, or in degrees for an angle).
                  */
-                center: number | string;
+                center: number | string | TolerancedQuantity;
                 /**
                  * Standard deviation, greater than 0, in the coordinate's unit (bare numbers in m, or in degrees for an angle).
                  */
-                spread: number | string;
+                spread: number | string | TolerancedQuantity;
                 /**
                  * Value far from the centre, 0 by default, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                background?: number | string;
+                background?: number | string | TolerancedQuantity;
             } | {
                 kind: 'complementary-error';
                 /**
                  * Value at the surface, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                surface: number | string;
+                surface: number | string | TolerancedQuantity;
                 /**
                  * Diffusion length, greater than 0, in the coordinate's unit (bare numbers in m, or in degrees for an angle).
                  */
-                length: number | string;
+                length: number | string | TolerancedQuantity;
                 /**
                  * Value far from the surface, 0 by default, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                background?: number | string;
+                background?: number | string | TolerancedQuantity;
                 /**
                  * Which end of the coordinate is the surface.
                  */
@@ -908,7 +922,7 @@ export type Medium = unknown & {
                     /**
                      * Value in the layer, in the graded quantity (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                      */
-                    value: number | string;
+                    value: number | string | TolerancedQuantity;
                 }>;
             } | {
                 kind: 'table';
@@ -919,10 +933,7 @@ export type Medium = unknown & {
                 /**
                  * The value at each position (bare numbers in S/m, ohm m, or 1/cm³ of a dopant).
                  */
-                values: Array<number | string>;
-                /**
-                 * Between the points: the value, its logarithm, or a Fritsch–Carlson cubic.
-                 */
+                values: Array<number | string | TolerancedQuantity>;
                 interpolation?: 'linear' | 'log' | 'monotone-cubic';
             } | {
                 kind: 'expression';
@@ -931,14 +942,11 @@ export type Medium = unknown & {
                  */
                 value: string;
             };
-            /**
-             * f723 (default): resistivity by the fits of ASTM F723 at 23 °C. masetti: carriers times the mobilities of Masetti, Severi and Solmi (1983).
-             */
             model?: 'f723' | 'masetti';
             /**
              * Density of the other type all over, which the dopant must outweigh; needs the model masetti (a dopant density; a bare number is in 1/cm^3, or a text with a unit).
              */
-            background?: number | string;
+            background?: number | string | TolerancedQuantity;
         };
     };
 };
@@ -946,11 +954,11 @@ export type Medium = unknown & {
 /**
  * Temperature, and at most one of voltage, current and power.
  */
-export type Operating = {
+export type TolerancedOperating = {
     /**
      * Temperature of the medium, 20 °C by default (a temperature; a bare number is in degC, or a text with a unit).
      */
-    temperature?: number | string;
+    temperature?: number | string | TolerancedQuantity;
     /**
      * Voltage across the terminals (a voltage; a bare number is in V, or a text with a unit).
      */
@@ -980,6 +988,25 @@ export type Requirement = {
 };
 
 /**
+ * How far the resistance strays with the tolerances of the inputs and the stated uncertainty of the materials.
+ */
+export type UncertaintyRequest = {
+    method: 'propagation';
+} | {
+    method: 'worst-case';
+} | {
+    method: 'monte-carlo';
+    /**
+     * Number of trials; if left out 100,000, or 10,000 for a graded medium and less where one value takes still more work. Each 100,000 begun count one computation.
+     */
+    trials?: number;
+    /**
+     * Start of the random numbers; the same seed gives the same answer. 1 if left out.
+     */
+    seed?: number;
+};
+
+/**
  * A straight solid wire of circular section; the current enters and leaves through the whole end faces.
  */
 export type RoundWireRequest = {
@@ -991,18 +1018,18 @@ export type RoundWireRequest = {
         /**
          * Length (L). Length of the wire between the two terminals. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Diameter (d). Diameter of the bare conductor; a gauge may be given, such as AWG 24. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of the bare conductor; a gauge may be given, such as AWG 24. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1017,6 +1044,7 @@ export type RoundWireRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1031,22 +1059,22 @@ export type TubeRequest = {
         /**
          * Length (L). Length of the tube between the two terminals. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Outer diameter (D). Outer diameter of the tube. A bare number is in m; a text carries its unit.
          */
-        outerDiameter?: number | string;
+        outerDiameter?: number | string | TolerancedQuantity;
         /**
          * Outer radius (D/2). Outer radius of the tube. A bare number is in m; a text carries its unit.
          */
-        outerRadius?: number | string;
+        outerRadius?: number | string | TolerancedQuantity;
         /**
          * Wall (t). Thickness of the wall, less than half the outer diameter. A bare number is in m; a text carries its unit.
          */
-        wall: number | string;
+        wall: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1061,6 +1089,7 @@ export type TubeRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1075,14 +1104,14 @@ export type PrismRequest = {
         /**
          * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Area of the section (S). Area of the conductor's section, such as 95 mm^2. A bare number is in m^2; a text carries its unit.
          */
-        area: number | string;
+        area: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1097,6 +1126,7 @@ export type PrismRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1111,22 +1141,22 @@ export type EtchedTraceRequest = {
         /**
          * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Base width (b). Width of the foot of the section, on the laminate. With an etch factor F the top is narrower by 2t/F. A bare number is in m; a text carries its unit.
          */
-        baseWidth: number | string;
+        baseWidth: number | string | TolerancedQuantity;
         /**
          * Top width (c). Width of the section at its top; it may also be the wider one (undercut). A bare number is in m; a text carries its unit.
          */
-        topWidth: number | string;
+        topWidth: number | string | TolerancedQuantity;
         /**
          * Thickness (t). Height of the section: foil and plating together. A foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
          */
-        thickness: number | string;
+        thickness: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1141,6 +1171,7 @@ export type EtchedTraceRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1155,26 +1186,26 @@ export type ViaBarrelRequest = {
         /**
          * Height (H). Length of the barrel between the two layers that it joins; for a through hole the board's thickness. A bare number is in m; a text carries its unit.
          */
-        height: number | string;
+        height: number | string | TolerancedQuantity;
         /**
          * Finished hole diameter (d). Diameter of the FINISHED hole, inside the plating. The drill is larger: drill diameter less twice the plating gives the finished hole. A bare number is in m; a text carries its unit.
          */
-        holeDiameter?: number | string;
+        holeDiameter?: number | string | TolerancedQuantity;
         /**
          * Finished hole radius (d/2). Radius of the FINISHED hole, inside the plating. The drill is larger: drill radius less twice the plating gives the finished hole. A bare number is in m; a text carries its unit.
          */
-        holeRadius?: number | string;
+        holeRadius?: number | string | TolerancedQuantity;
         /**
          * Plating (p). Thickness of the plating on the wall of the hole, outside the finished diameter. A bare number is in m; a text carries its unit.
          */
-        plating: number | string;
+        plating: number | string | TolerancedQuantity;
         /**
          * Number of holes (n). Equal holes side by side, each carrying its share. Left out: 1.
          */
         count?: number;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1189,6 +1220,7 @@ export type ViaBarrelRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1203,7 +1235,7 @@ export type StrandedConductorRequest = {
         /**
          * Length (L). Length of the finished conductor, not of a strand. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Strands (n). Number of equal strands.
          */
@@ -1211,18 +1243,18 @@ export type StrandedConductorRequest = {
         /**
          * Strand diameter (d). Diameter of the bare metal of one strand, without tin or enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
          */
-        strandDiameter?: number | string;
+        strandDiameter?: number | string | TolerancedQuantity;
         /**
          * Strand radius (d/2). Radius of the bare metal of one strand, without tin or enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
          */
-        strandRadius?: number | string;
+        strandRadius?: number | string | TolerancedQuantity;
         /**
          * Lay factor (k). Mean length of a strand over the length of the conductor: √(1+(π/m)²) for a lay of m mean diameters, averaged over the strands. Left out: 1.02.
          */
-        layFactor?: number | string;
+        layFactor?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1237,6 +1269,7 @@ export type StrandedConductorRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1251,14 +1284,14 @@ export type ParallelPlatesRequest = {
         /**
          * Gap (g). Distance between the two plates, the thickness of the medium. A bare number is in m; a text carries its unit.
          */
-        gap: number | string;
+        gap: number | string | TolerancedQuantity;
         /**
          * Area (S). Area of each plate. A bare number is in m^2; a text carries its unit.
          */
-        area: number | string;
+        area: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1273,6 +1306,7 @@ export type ParallelPlatesRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1287,22 +1321,22 @@ export type BoxTubeRequest = {
         /**
          * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Outer width (W). Outer width of the section. A bare number is in m; a text carries its unit.
          */
-        outerWidth: number | string;
+        outerWidth: number | string | TolerancedQuantity;
         /**
          * Outer height (H). Outer height of the section. A bare number is in m; a text carries its unit.
          */
-        outerHeight: number | string;
+        outerHeight: number | string | TolerancedQuantity;
         /**
          * Wall (t). Thickness of the wall, the same on all four sides. A bare number is in m; a text carries its unit.
          */
-        wall: number | string;
+        wall: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1317,6 +1351,7 @@ export type BoxTubeRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1331,19 +1366,19 @@ export type CladWireRequest = {
         /**
          * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Core diameter (d). Diameter of the core alone; the finished wire is thicker by twice the cladding. A bare number is in m; a text carries its unit.
          */
-        coreDiameter?: number | string;
+        coreDiameter?: number | string | TolerancedQuantity;
         /**
          * Core radius (d/2). Radius of the core alone; the finished wire is thicker by twice the cladding. A bare number is in m; a text carries its unit.
          */
-        coreRadius?: number | string;
+        coreRadius?: number | string | TolerancedQuantity;
         /**
          * Cladding thickness (t). Thickness of the cladding around the core, radially. A bare number is in m; a text carries its unit.
          */
-        claddingThickness: number | string;
+        claddingThickness: number | string | TolerancedQuantity;
     };
     /**
      * core: Core; cladding: Cladding
@@ -1352,7 +1387,7 @@ export type CladWireRequest = {
         core: Medium;
         cladding: Medium;
     };
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1367,6 +1402,7 @@ export type CladWireRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1381,30 +1417,30 @@ export type HelicalWindingRequest = {
         /**
          * Turns (N). Number of turns; it need not be whole.
          */
-        turns: number | string;
+        turns: number | string | TolerancedQuantity;
         /**
          * Mean diameter (D). Diameter of the helix at the centre of the wire: former diameter plus one wire diameter. A bare number is in m; a text carries its unit.
          */
-        meanDiameter?: number | string;
+        meanDiameter?: number | string | TolerancedQuantity;
         /**
          * Mean radius (D/2). Radius of the helix at the centre of the wire: former radius plus one wire radius. A bare number is in m; a text carries its unit.
          */
-        meanRadius?: number | string;
+        meanRadius?: number | string | TolerancedQuantity;
         /**
          * Pitch (p). Advance along the axis per turn. A bare number is in m; a text carries its unit.
          */
-        pitch: number | string;
+        pitch: number | string | TolerancedQuantity;
         /**
          * Wire diameter (d). Diameter of the bare metal, without enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
          */
-        wireDiameter?: number | string;
+        wireDiameter?: number | string | TolerancedQuantity;
         /**
          * Wire radius (d/2). Radius of the bare metal, without enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
          */
-        wireRadius?: number | string;
+        wireRadius?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1419,6 +1455,7 @@ export type HelicalWindingRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1433,30 +1470,30 @@ export type FlatSpiralRequest = {
         /**
          * Turns (N). Number of turns; it need not be whole.
          */
-        turns: number | string;
+        turns: number | string | TolerancedQuantity;
         /**
          * Inner radius (r₀). Radius of the centre line at the inner end: inner edge plus half the width. A bare number is in m; a text carries its unit.
          */
-        innerRadius?: number | string;
+        innerRadius?: number | string | TolerancedQuantity;
         /**
          * Inner diameter (2r₀). Diameter of the centre line at the inner end: inner edge plus half the width. A bare number is in m; a text carries its unit.
          */
-        innerDiameter?: number | string;
+        innerDiameter?: number | string | TolerancedQuantity;
         /**
          * Pitch (p). Growth of the radius per turn: width plus gap. A bare number is in m; a text carries its unit.
          */
-        pitch: number | string;
+        pitch: number | string | TolerancedQuantity;
         /**
          * Width (w). Width of the strip. A bare number is in m; a text carries its unit.
          */
-        width: number | string;
+        width: number | string | TolerancedQuantity;
         /**
          * Thickness (t). Thickness of the strip; a copper foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
          */
-        thickness: number | string;
+        thickness: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1471,6 +1508,7 @@ export type FlatSpiralRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1485,22 +1523,22 @@ export type TaperedStripRequest = {
         /**
          * Length (L). Distance between the two straight ends. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Start width (w₁). Width at the high end. A bare number is in m; a text carries its unit.
          */
-        startWidth: number | string;
+        startWidth: number | string | TolerancedQuantity;
         /**
          * End width (w₂). Width at the low end. A bare number is in m; a text carries its unit.
          */
-        endWidth: number | string;
+        endWidth: number | string | TolerancedQuantity;
         /**
          * Thickness (t). Thickness of the strip; a copper foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
          */
-        thickness: number | string;
+        thickness: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1515,6 +1553,7 @@ export type TaperedStripRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1529,26 +1568,26 @@ export type ConeFrustumRequest = {
         /**
          * Length (L). Distance between the two flat end faces. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Start diameter (d₁). Diameter at the high end. A bare number is in m; a text carries its unit.
          */
-        startDiameter?: number | string;
+        startDiameter?: number | string | TolerancedQuantity;
         /**
          * Start radius (d₁/2). Radius at the high end. A bare number is in m; a text carries its unit.
          */
-        startRadius?: number | string;
+        startRadius?: number | string | TolerancedQuantity;
         /**
          * End diameter (d₂). Diameter at the low end. A bare number is in m; a text carries its unit.
          */
-        endDiameter?: number | string;
+        endDiameter?: number | string | TolerancedQuantity;
         /**
          * End radius (d₂/2). Radius at the low end. A bare number is in m; a text carries its unit.
          */
-        endRadius?: number | string;
+        endRadius?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1563,6 +1602,7 @@ export type ConeFrustumRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1577,34 +1617,34 @@ export type CylindricalShellRequest = {
         /**
          * Inner radius (a). Radius of the inner surface. A bare number is in m; a text carries its unit.
          */
-        innerRadius?: number | string;
+        innerRadius?: number | string | TolerancedQuantity;
         /**
          * Inner diameter (2a). Diameter of the inner surface. A bare number is in m; a text carries its unit.
          */
-        innerDiameter?: number | string;
+        innerDiameter?: number | string | TolerancedQuantity;
         /**
          * Outer radius (b). Radius of the outer surface; or give the wall. A bare number is in m; a text carries its unit.
          */
-        outerRadius?: number | string;
+        outerRadius?: number | string | TolerancedQuantity;
         /**
          * Outer diameter (2b). Diameter of the outer surface; or give the wall. A bare number is in m; a text carries its unit.
          */
-        outerDiameter?: number | string;
+        outerDiameter?: number | string | TolerancedQuantity;
         /**
          * Wall (t). Thickness of the wall, outer less inner radius; keeps its digits however thin it is. A bare number is in m; a text carries its unit.
          */
-        wall?: number | string;
+        wall?: number | string | TolerancedQuantity;
         /**
          * Length (L). Length along the axis. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Angle (φ). Angle of the sector around the axis; the whole shell is 360°. Left out: 360 deg. A bare number is in deg; a text carries its unit.
          */
-        angle?: number | string;
+        angle?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1619,6 +1659,7 @@ export type CylindricalShellRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1633,30 +1674,30 @@ export type SphericalShellRequest = {
         /**
          * Inner radius (a). Radius of the inner surface. A bare number is in m; a text carries its unit.
          */
-        innerRadius?: number | string;
+        innerRadius?: number | string | TolerancedQuantity;
         /**
          * Inner diameter (2a). Diameter of the inner surface. A bare number is in m; a text carries its unit.
          */
-        innerDiameter?: number | string;
+        innerDiameter?: number | string | TolerancedQuantity;
         /**
          * Outer radius (b). Radius of the outer surface; or give the wall. A bare number is in m; a text carries its unit.
          */
-        outerRadius?: number | string;
+        outerRadius?: number | string | TolerancedQuantity;
         /**
          * Outer diameter (2b). Diameter of the outer surface; or give the wall. A bare number is in m; a text carries its unit.
          */
-        outerDiameter?: number | string;
+        outerDiameter?: number | string | TolerancedQuantity;
         /**
          * Wall (t). Thickness of the wall, outer less inner radius; keeps its digits however thin it is. A bare number is in m; a text carries its unit.
          */
-        wall?: number | string;
+        wall?: number | string | TolerancedQuantity;
         /**
          * Half angle (θ). Half the opening angle of the cone that cuts the shell out: 180° the whole shell, 90° a hemisphere. Left out: 180 deg. A bare number is in deg; a text carries its unit.
          */
-        halfAngle?: number | string;
+        halfAngle?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1671,6 +1712,7 @@ export type SphericalShellRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1685,26 +1727,26 @@ export type ConfocalShellRequest = {
         /**
          * Inner semi-major axis (a₁). Half the larger axis of the inner ellipse. A bare number is in m; a text carries its unit.
          */
-        innerMajor: number | string;
+        innerMajor: number | string | TolerancedQuantity;
         /**
          * Inner semi-minor axis (b₁). Half the smaller axis of the inner ellipse; at most the semi-major axis. A bare number is in m; a text carries its unit.
          */
-        innerMinor: number | string;
+        innerMinor: number | string | TolerancedQuantity;
         /**
          * Outer semi-major axis (a₂). Half the larger axis of the outer ellipse; its smaller axis follows from the common foci. Or give the wall. A bare number is in m; a text carries its unit.
          */
-        outerMajor?: number | string;
+        outerMajor?: number | string | TolerancedQuantity;
         /**
          * Wall on the major axis (t). Difference of the two semi-major axes; keeps its digits however thin it is. A bare number is in m; a text carries its unit.
          */
-        wall?: number | string;
+        wall?: number | string | TolerancedQuantity;
         /**
          * Length (L). Length along the cylinders. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1719,6 +1761,7 @@ export type ConfocalShellRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1733,34 +1776,34 @@ export type ArcBarRequest = {
         /**
          * Inner radius (a). Radius of the inner edge of the bend. A bare number is in m; a text carries its unit.
          */
-        innerRadius?: number | string;
+        innerRadius?: number | string | TolerancedQuantity;
         /**
          * Inner diameter (2a). Diameter of the inner edge of the bend. A bare number is in m; a text carries its unit.
          */
-        innerDiameter?: number | string;
+        innerDiameter?: number | string | TolerancedQuantity;
         /**
          * Outer radius (b). Radius of the outer edge of the bend; or give the width. A bare number is in m; a text carries its unit.
          */
-        outerRadius?: number | string;
+        outerRadius?: number | string | TolerancedQuantity;
         /**
          * Outer diameter (2b). Diameter of the outer edge of the bend; or give the width. A bare number is in m; a text carries its unit.
          */
-        outerDiameter?: number | string;
+        outerDiameter?: number | string | TolerancedQuantity;
         /**
          * Width (w). Width of the bar in the plane of the bend, outer less inner radius. A bare number is in m; a text carries its unit.
          */
-        width?: number | string;
+        width?: number | string | TolerancedQuantity;
         /**
          * Thickness (t). Thickness of the bar along the axis of the bend. A bare number is in m; a text carries its unit.
          */
-        thickness: number | string;
+        thickness: number | string | TolerancedQuantity;
         /**
          * Angle (φ). Angle of the bend between the two end faces. A bare number is in deg; a text carries its unit.
          */
-        angle: number | string;
+        angle: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1775,6 +1818,7 @@ export type ArcBarRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1789,34 +1833,34 @@ export type ConicalShellRequest = {
         /**
          * Inner radius (a). Distance of the inner spherical face from the apex, along the cone. A bare number is in m; a text carries its unit.
          */
-        innerRadius?: number | string;
+        innerRadius?: number | string | TolerancedQuantity;
         /**
          * Inner diameter (2a). Distance of the inner spherical face from the apex, along the cone. A bare number is in m; a text carries its unit.
          */
-        innerDiameter?: number | string;
+        innerDiameter?: number | string | TolerancedQuantity;
         /**
          * Outer radius (b). Distance of the outer spherical face from the apex; or give the wall. A bare number is in m; a text carries its unit.
          */
-        outerRadius?: number | string;
+        outerRadius?: number | string | TolerancedQuantity;
         /**
          * Outer diameter (2b). Distance of the outer spherical face from the apex; or give the wall. A bare number is in m; a text carries its unit.
          */
-        outerDiameter?: number | string;
+        outerDiameter?: number | string | TolerancedQuantity;
         /**
          * Wall (t). Length along the cone, outer less inner radius; keeps its digits however short it is. A bare number is in m; a text carries its unit.
          */
-        wall?: number | string;
+        wall?: number | string | TolerancedQuantity;
         /**
          * Inner half-angle (θ₁). Angle between the axis and the inner cone; 0 for a solid cone. A bare number is in deg; a text carries its unit.
          */
-        innerHalfAngle: number | string;
+        innerHalfAngle: number | string | TolerancedQuantity;
         /**
          * Outer half-angle (θ₂). Angle between the axis and the outer cone; beyond 90° it opens backwards. A bare number is in deg; a text carries its unit.
          */
-        outerHalfAngle: number | string;
+        outerHalfAngle: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1831,6 +1875,7 @@ export type ConicalShellRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1845,30 +1890,30 @@ export type BentTubeRequest = {
         /**
          * Bend radius (R₀). Radius of the centre line of the tube; greater than half the outer diameter. A bare number is in m; a text carries its unit.
          */
-        bendRadius?: number | string;
+        bendRadius?: number | string | TolerancedQuantity;
         /**
          * Bend diameter (2R₀). Diameter of the centre line of the tube; greater than half the outer diameter. A bare number is in m; a text carries its unit.
          */
-        bendDiameter?: number | string;
+        bendDiameter?: number | string | TolerancedQuantity;
         /**
          * Outer diameter (D). Outer diameter of the tube. A bare number is in m; a text carries its unit.
          */
-        outerDiameter?: number | string;
+        outerDiameter?: number | string | TolerancedQuantity;
         /**
          * Outer radius (D/2). Outer radius of the tube. A bare number is in m; a text carries its unit.
          */
-        outerRadius?: number | string;
+        outerRadius?: number | string | TolerancedQuantity;
         /**
          * Wall (t). Thickness of the wall; less than half the outer diameter. A bare number is in m; a text carries its unit.
          */
-        wall: number | string;
+        wall: number | string | TolerancedQuantity;
         /**
          * Bend angle (φ). Angle of the bend between its two end faces. A bare number is in deg; a text carries its unit.
          */
-        angle: number | string;
+        angle: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1883,6 +1928,7 @@ export type BentTubeRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1897,26 +1943,26 @@ export type HyperbolicNeckRequest = {
         /**
          * Throat radius (a). Radius at the narrowest place. A bare number is in m; a text carries its unit.
          */
-        throatRadius?: number | string;
+        throatRadius?: number | string | TolerancedQuantity;
         /**
          * Throat diameter (2a). Diameter at the narrowest place. A bare number is in m; a text carries its unit.
          */
-        throatDiameter?: number | string;
+        throatDiameter?: number | string | TolerancedQuantity;
         /**
          * Opening angle (β). Angle between the axis and the cone that the wall approaches; 90° is a hole in a thin insulating plane. A bare number is in deg; a text carries its unit.
          */
-        openingAngle: number | string;
+        openingAngle: number | string | TolerancedQuantity;
         /**
          * Length of one side (z). Distance on the axis from the throat to the cap, one side. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Sides (n). 2: the neck widens on both sides of the throat; 1: the throat is a terminal. Left out: 2.
          */
         sides?: number;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1931,6 +1977,7 @@ export type HyperbolicNeckRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1945,26 +1992,26 @@ export type TorusArcRequest = {
         /**
          * Bend radius (R₀). Radius of the centre line of the bar; greater than half its diameter. A bare number is in m; a text carries its unit.
          */
-        bendRadius?: number | string;
+        bendRadius?: number | string | TolerancedQuantity;
         /**
          * Bend diameter (2R₀). Diameter of the centre line of the bar; greater than half its diameter. A bare number is in m; a text carries its unit.
          */
-        bendDiameter?: number | string;
+        bendDiameter?: number | string | TolerancedQuantity;
         /**
          * Diameter (d). Diameter of the bar. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of the bar. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * Bend angle (φ). Angle of the bend between its two end faces. A bare number is in deg; a text carries its unit.
          */
-        angle: number | string;
+        angle: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -1979,6 +2026,7 @@ export type TorusArcRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -1993,22 +2041,22 @@ export type CylinderInSquareRequest = {
         /**
          * Diameter (d). Diameter of the cylinder; less than the side. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of the cylinder; less than the side. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * Side (w). Inside width of the square duct. A bare number is in m; a text carries its unit.
          */
-        side: number | string;
+        side: number | string | TolerancedQuantity;
         /**
          * Length (L). Length along the axis. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2023,6 +2071,7 @@ export type CylinderInSquareRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2037,34 +2086,34 @@ export type EccentricCylindersRequest = {
         /**
          * Inner diameter (d). Diameter of the inner cylinder. A bare number is in m; a text carries its unit.
          */
-        innerDiameter?: number | string;
+        innerDiameter?: number | string | TolerancedQuantity;
         /**
          * Inner radius (d/2). Radius of the inner cylinder. A bare number is in m; a text carries its unit.
          */
-        innerRadius?: number | string;
+        innerRadius?: number | string | TolerancedQuantity;
         /**
          * Outer diameter (D). Inside diameter of the outer cylinder. A bare number is in m; a text carries its unit.
          */
-        outerDiameter?: number | string;
+        outerDiameter?: number | string | TolerancedQuantity;
         /**
          * Outer radius (D/2). Inside radius of the outer cylinder. A bare number is in m; a text carries its unit.
          */
-        outerRadius?: number | string;
+        outerRadius?: number | string | TolerancedQuantity;
         /**
          * Offset (e). Distance between the two axes; 0 is concentric. A bare number is in m; a text carries its unit.
          */
-        offset?: number | string;
+        offset?: number | string | TolerancedQuantity;
         /**
          * Smallest gap (g). Smallest distance between the two surfaces; keeps its digits however small it is. A bare number is in m; a text carries its unit.
          */
-        gap?: number | string;
+        gap?: number | string | TolerancedQuantity;
         /**
          * Length (L). Length along the axes. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2079,6 +2128,7 @@ export type EccentricCylindersRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2093,34 +2143,34 @@ export type ParallelCylindersRequest = {
         /**
          * First diameter (d₁). Diameter of the first cylinder. A bare number is in m; a text carries its unit.
          */
-        diameter1?: number | string;
+        diameter1?: number | string | TolerancedQuantity;
         /**
          * First radius (d₁/2). Radius of the first cylinder. A bare number is in m; a text carries its unit.
          */
-        radius1?: number | string;
+        radius1?: number | string | TolerancedQuantity;
         /**
          * Second diameter (d₂). Diameter of the second cylinder. A bare number is in m; a text carries its unit.
          */
-        diameter2?: number | string;
+        diameter2?: number | string | TolerancedQuantity;
         /**
          * Second radius (d₂/2). Radius of the second cylinder. A bare number is in m; a text carries its unit.
          */
-        radius2?: number | string;
+        radius2?: number | string | TolerancedQuantity;
         /**
          * Spacing (s). Distance between the two axes. A bare number is in m; a text carries its unit.
          */
-        spacing?: number | string;
+        spacing?: number | string | TolerancedQuantity;
         /**
          * Gap (g). Smallest distance between the two surfaces; keeps its digits however small it is. A bare number is in m; a text carries its unit.
          */
-        gap?: number | string;
+        gap?: number | string | TolerancedQuantity;
         /**
          * Length (L). Length along the axes. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2135,6 +2185,7 @@ export type ParallelCylindersRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2149,26 +2200,26 @@ export type CylinderPlaneRequest = {
         /**
          * Diameter (d). Diameter of the cylinder. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of the cylinder. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * Height (h). Distance from the axis to the plane. A bare number is in m; a text carries its unit.
          */
-        height?: number | string;
+        height?: number | string | TolerancedQuantity;
         /**
          * Gap (g). Smallest distance between the surface and the plane; keeps its digits however small it is. A bare number is in m; a text carries its unit.
          */
-        gap?: number | string;
+        gap?: number | string | TolerancedQuantity;
         /**
          * Length (L). Length along the axis. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2183,6 +2234,7 @@ export type CylinderPlaneRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2197,22 +2249,22 @@ export type SpherePlaneRequest = {
         /**
          * Diameter (d). Diameter of the sphere. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of the sphere. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * Height (h). Distance from the centre to the plane. A bare number is in m; a text carries its unit.
          */
-        height?: number | string;
+        height?: number | string | TolerancedQuantity;
         /**
          * Gap (g). Smallest distance between the surface and the plane; keeps its digits however small it is. A bare number is in m; a text carries its unit.
          */
-        gap?: number | string;
+        gap?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2227,6 +2279,7 @@ export type SpherePlaneRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2241,22 +2294,22 @@ export type SphereBuriedRequest = {
         /**
          * Diameter (d). Diameter of the sphere. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of the sphere. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * Depth (h). Distance from the surface down to the centre. A bare number is in m; a text carries its unit.
          */
-        depth?: number | string;
+        depth?: number | string | TolerancedQuantity;
         /**
          * Cover (g). Thickness of the medium above the sphere; keeps its digits however small it is. A bare number is in m; a text carries its unit.
          */
-        cover?: number | string;
+        cover?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2271,6 +2324,7 @@ export type SphereBuriedRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2285,30 +2339,30 @@ export type SpherePairRequest = {
         /**
          * First diameter (d₁). Diameter of the first sphere. A bare number is in m; a text carries its unit.
          */
-        diameter1?: number | string;
+        diameter1?: number | string | TolerancedQuantity;
         /**
          * First radius (d₁/2). Radius of the first sphere. A bare number is in m; a text carries its unit.
          */
-        radius1?: number | string;
+        radius1?: number | string | TolerancedQuantity;
         /**
          * Second diameter (d₂). Diameter of the second sphere. A bare number is in m; a text carries its unit.
          */
-        diameter2?: number | string;
+        diameter2?: number | string | TolerancedQuantity;
         /**
          * Second radius (d₂/2). Radius of the second sphere. A bare number is in m; a text carries its unit.
          */
-        radius2?: number | string;
+        radius2?: number | string | TolerancedQuantity;
         /**
          * Spacing (s). Distance between the two centres. A bare number is in m; a text carries its unit.
          */
-        spacing?: number | string;
+        spacing?: number | string | TolerancedQuantity;
         /**
          * Gap (g). Smallest distance between the two surfaces; keeps its digits however small it is. A bare number is in m; a text carries its unit.
          */
-        gap?: number | string;
+        gap?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2323,6 +2377,7 @@ export type SpherePairRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2337,26 +2392,26 @@ export type SpheroidRequest = {
         /**
          * Polar diameter (dₚ). Length along the axis of revolution. A bare number is in m; a text carries its unit.
          */
-        polarDiameter?: number | string;
+        polarDiameter?: number | string | TolerancedQuantity;
         /**
          * Polar radius (dₚ/2). Length along the axis of revolution. A bare number is in m; a text carries its unit.
          */
-        polarRadius?: number | string;
+        polarRadius?: number | string | TolerancedQuantity;
         /**
          * Equatorial diameter (dₑ). Diameter across the axis of revolution. A bare number is in m; a text carries its unit.
          */
-        equatorialDiameter?: number | string;
+        equatorialDiameter?: number | string | TolerancedQuantity;
         /**
          * Equatorial radius (dₑ/2). Radius across the axis of revolution. A bare number is in m; a text carries its unit.
          */
-        equatorialRadius?: number | string;
+        equatorialRadius?: number | string | TolerancedQuantity;
         /**
          * Space (n). full: medium on all sides; half: an insulating plane through the centre, such as the ground surface. Left out: full.
          */
         space?: 'full' | 'half';
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2371,6 +2426,7 @@ export type SpheroidRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2385,18 +2441,18 @@ export type ContactSpotRequest = {
         /**
          * Spot diameter (d). Diameter of the conducting spot. A bare number is in m; a text carries its unit.
          */
-        spotDiameter?: number | string;
+        spotDiameter?: number | string | TolerancedQuantity;
         /**
          * Spot radius (d/2). Radius of the conducting spot. A bare number is in m; a text carries its unit.
          */
-        spotRadius?: number | string;
+        spotRadius?: number | string | TolerancedQuantity;
         /**
          * Sides (n). 2: bodies on both sides of the spot; 1: an electrode on one body. Left out: 2.
          */
         sides?: number;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2411,6 +2467,7 @@ export type ContactSpotRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2425,26 +2482,26 @@ export type EllipticContactSpotRequest = {
         /**
          * Major diameter (d₁). Longer axis of the conducting ellipse. A bare number is in m; a text carries its unit.
          */
-        majorDiameter?: number | string;
+        majorDiameter?: number | string | TolerancedQuantity;
         /**
          * Major radius (d₁/2). Longer axis of the conducting ellipse. A bare number is in m; a text carries its unit.
          */
-        majorRadius?: number | string;
+        majorRadius?: number | string | TolerancedQuantity;
         /**
          * Minor diameter (d₂). Shorter axis; at most the longer one. A bare number is in m; a text carries its unit.
          */
-        minorDiameter?: number | string;
+        minorDiameter?: number | string | TolerancedQuantity;
         /**
          * Minor radius (d₂/2). Shorter axis; at most the longer one. A bare number is in m; a text carries its unit.
          */
-        minorRadius?: number | string;
+        minorRadius?: number | string | TolerancedQuantity;
         /**
          * Sides (n). 2: bodies on both sides of the spot; 1: an electrode on one body. Left out: 2.
          */
         sides?: number;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2459,6 +2516,7 @@ export type EllipticContactSpotRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2473,26 +2531,26 @@ export type SpotInCylinderRequest = {
         /**
          * Spot diameter (d). Diameter of the conducting spot; less than that of the bar. A bare number is in m; a text carries its unit.
          */
-        spotDiameter?: number | string;
+        spotDiameter?: number | string | TolerancedQuantity;
         /**
          * Spot radius (d/2). Radius of the conducting spot; less than that of the bar. A bare number is in m; a text carries its unit.
          */
-        spotRadius?: number | string;
+        spotRadius?: number | string | TolerancedQuantity;
         /**
          * Bar diameter (D). Diameter of the round bar. A bare number is in m; a text carries its unit.
          */
-        cylinderDiameter?: number | string;
+        cylinderDiameter?: number | string | TolerancedQuantity;
         /**
          * Bar radius (D/2). Radius of the round bar. A bare number is in m; a text carries its unit.
          */
-        cylinderRadius?: number | string;
+        cylinderRadius?: number | string | TolerancedQuantity;
         /**
          * Sides (n). 2: bars on both sides of the spot; 1: an electrode on the end of one bar. Left out: 2.
          */
         sides?: number;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2507,6 +2565,7 @@ export type SpotInCylinderRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2521,14 +2580,14 @@ export type SheetStripRequest = {
         /**
          * Length (L). Distance between the two ends. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Width (w). Width of the strip. A bare number is in m; a text carries its unit.
          */
-        width: number | string;
+        width: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2543,6 +2602,7 @@ export type SheetStripRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2557,22 +2617,22 @@ export type SheetBendRequest = {
         /**
          * First leg (L₁). Length of the first leg from the inner corner, corner excluded. A bare number is in m; a text carries its unit.
          */
-        legLength1: number | string;
+        legLength1: number | string | TolerancedQuantity;
         /**
          * Second leg (L₂). Length of the second leg from the inner corner, corner excluded. A bare number is in m; a text carries its unit.
          */
-        legLength2: number | string;
+        legLength2: number | string | TolerancedQuantity;
         /**
          * First width (w₁). Width of the first leg. A bare number is in m; a text carries its unit.
          */
-        width1: number | string;
+        width1: number | string | TolerancedQuantity;
         /**
          * Second width (w₂). Width of the second leg. A bare number is in m; a text carries its unit.
          */
-        width2: number | string;
+        width2: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2587,6 +2647,7 @@ export type SheetBendRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2601,26 +2662,26 @@ export type SheetStepRequest = {
         /**
          * First length (L₁). Length of the first part, from its end to the step. A bare number is in m; a text carries its unit.
          */
-        length1: number | string;
+        length1: number | string | TolerancedQuantity;
         /**
          * First width (w₁). Width of the first part. A bare number is in m; a text carries its unit.
          */
-        width1: number | string;
+        width1: number | string | TolerancedQuantity;
         /**
          * Second length (L₂). Length of the second part, from the step to its end. A bare number is in m; a text carries its unit.
          */
-        length2: number | string;
+        length2: number | string | TolerancedQuantity;
         /**
          * Second width (w₂). Width of the second part. A bare number is in m; a text carries its unit.
          */
-        width2: number | string;
+        width2: number | string | TolerancedQuantity;
         /**
          * Alignment (m). edge: the step is on one side; centre: half of it on each side.
          */
         alignment: 'edge' | 'centre';
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2635,6 +2696,7 @@ export type SheetStepRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2653,18 +2715,18 @@ export type SheetMeanderRequest = {
         /**
          * Leg length (ℓ). Length of each leg between the corners, corners excluded; the first and last from their free end to the corner. A bare number is in m; a text carries its unit.
          */
-        legLength: number | string;
+        legLength: number | string | TolerancedQuantity;
         /**
          * Width (w). Width of the strip, in legs and turns. A bare number is in m; a text carries its unit.
          */
-        width: number | string;
+        width: number | string | TolerancedQuantity;
         /**
          * Gap (g). Clear distance between neighbouring legs. A bare number is in m; a text carries its unit.
          */
-        gap: number | string;
+        gap: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2679,6 +2741,7 @@ export type SheetMeanderRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2693,22 +2756,22 @@ export type SheetEndTerminalRequest = {
         /**
          * Length (L). Distance between the two ends. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Width (W). Width of the sheet. A bare number is in m; a text carries its unit.
          */
-        width: number | string;
+        width: number | string | TolerancedQuantity;
         /**
          * Terminal width (c). Width of the partial terminal; at most that of the sheet. A bare number is in m; a text carries its unit.
          */
-        terminalWidth: number | string;
+        terminalWidth: number | string | TolerancedQuantity;
         /**
          * Position (m). Where the partial terminal lies on its end.
          */
         position: 'centre' | 'edge';
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2723,6 +2786,7 @@ export type SheetEndTerminalRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2737,30 +2801,30 @@ export type SheetTeeRequest = {
         /**
          * Bar width (a). Width of the bar that runs straight through. A bare number is in m; a text carries its unit.
          */
-        barWidth: number | string;
+        barWidth: number | string | TolerancedQuantity;
         /**
          * Stub width (b). Width of the stub. A bare number is in m; a text carries its unit.
          */
-        stubWidth: number | string;
+        stubWidth: number | string | TolerancedQuantity;
         /**
          * Left arm (L₁). Length of the bar's left arm, from the inner corner to its end. A bare number is in m; a text carries its unit.
          */
-        leftLength: number | string;
+        leftLength: number | string | TolerancedQuantity;
         /**
          * Right arm (L₂). Length of the bar's right arm, from the inner corner to its end. A bare number is in m; a text carries its unit.
          */
-        rightLength: number | string;
+        rightLength: number | string | TolerancedQuantity;
         /**
          * Stub (L₃). Length of the stub, from the inner corners to its end. A bare number is in m; a text carries its unit.
          */
-        stubLength: number | string;
+        stubLength: number | string | TolerancedQuantity;
         /**
          * Path (p). Which ends are terminals; the end of a floating arm is an insulated edge.
          */
         path: 'through' | 'branch' | 'both';
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2775,6 +2839,7 @@ export type SheetTeeRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2789,22 +2854,22 @@ export type SheetSlitRequest = {
         /**
          * Length (L). Distance between the two ends of the strip. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Width (W). Width of the strip. A bare number is in m; a text carries its unit.
          */
-        width: number | string;
+        width: number | string | TolerancedQuantity;
         /**
          * Opening (d). Total width that is left uncut at the slit; at most that of the strip. A bare number is in m; a text carries its unit.
          */
-        opening: number | string;
+        opening: number | string | TolerancedQuantity;
         /**
          * Kind (m). centre leaves half of the opening at each edge, iris all of it in the middle; both have the same resistance.
          */
         kind: 'edge' | 'centre' | 'iris';
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2819,6 +2884,7 @@ export type SheetSlitRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2833,22 +2899,22 @@ export type SheetDiscRequest = {
         /**
          * Diameter (d). Diameter of the disc; the resistance does not depend on it. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of the disc; the resistance does not depend on it. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * First terminal (t₁). Angle at the centre that the first terminal spans. A bare number is in deg; a text carries its unit.
          */
-        terminalAngle1: number | string;
+        terminalAngle1: number | string | TolerancedQuantity;
         /**
          * Second terminal (t₂). Angle at the centre that the second terminal spans. A bare number is in deg; a text carries its unit.
          */
-        terminalAngle2: number | string;
+        terminalAngle2: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2863,6 +2929,7 @@ export type SheetDiscRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2877,14 +2944,14 @@ export type EarthHemisphereRequest = {
         /**
          * Diameter (D). Diameter of the hemisphere at the surface. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (D/2). Radius of the hemisphere at the surface. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2899,6 +2966,7 @@ export type EarthHemisphereRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2913,18 +2981,18 @@ export type EarthRodRequest = {
         /**
          * Length (L). Length of the rod in the soil. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Diameter (d). Diameter of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2939,6 +3007,7 @@ export type EarthRodRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2953,22 +3022,22 @@ export type EarthRodPairRequest = {
         /**
          * Length (L). Length of each rod in the soil. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Diameter (d). Diameter of each rod. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of each rod. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * Spacing (s). Distance between the axes of the two rods. A bare number is in m; a text carries its unit.
          */
-        spacing: number | string;
+        spacing: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -2983,6 +3052,7 @@ export type EarthRodPairRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -2997,19 +3067,19 @@ export type EarthRodGroupRequest = {
         /**
          * Length (L). Length of each rod in the soil. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Diameter (d). Diameter of each rod. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of each rod. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * Spacing (s). Distance between the axes of neighbouring rods; in a ring straight across, not along the circle. A bare number is in m; a text carries its unit.
          */
-        spacing: number | string;
+        spacing: number | string | TolerancedQuantity;
         /**
          * Number of rods (n). How many rods; for a square grid a square number such as 4, 9 or 16.
          */
@@ -3020,7 +3090,7 @@ export type EarthRodGroupRequest = {
         arrangement?: 'line' | 'ring' | 'square';
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -3035,6 +3105,7 @@ export type EarthRodGroupRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -3049,22 +3120,22 @@ export type EarthWireRequest = {
         /**
          * Length (ℓ). Whole length of the wire, from end to end. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Wire diameter (d). Diameter of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Wire radius (d/2). Radius of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * Depth (h). Depth of the wire's axis below the surface. A bare number is in m; a text carries its unit.
          */
-        depth: number | string;
+        depth: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -3079,6 +3150,7 @@ export type EarthWireRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -3093,26 +3165,26 @@ export type EarthRingRequest = {
         /**
          * Ring diameter (D). Diameter of the ring at the centre of the wire. A bare number is in m; a text carries its unit.
          */
-        ringDiameter?: number | string;
+        ringDiameter?: number | string | TolerancedQuantity;
         /**
          * Ring radius (D/2). Radius of the ring at the centre of the wire. A bare number is in m; a text carries its unit.
          */
-        ringRadius?: number | string;
+        ringRadius?: number | string | TolerancedQuantity;
         /**
          * Wire diameter (d). Diameter of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
          */
-        wireDiameter?: number | string;
+        wireDiameter?: number | string | TolerancedQuantity;
         /**
          * Wire radius (d/2). Radius of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
          */
-        wireRadius?: number | string;
+        wireRadius?: number | string | TolerancedQuantity;
         /**
          * Depth (h). Depth of the ring below the surface, to the centre of the wire. A bare number is in m; a text carries its unit.
          */
-        depth: number | string;
+        depth: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -3127,6 +3199,7 @@ export type EarthRingRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -3141,18 +3214,18 @@ export type EarthPlateRequest = {
         /**
          * Diameter (D). Diameter of the plate; a square plate acts like a round one of the same area to about 2 %. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (D/2). Radius of the plate; a square plate acts like a round one of the same area to about 2 %. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * Depth (h). Depth of the plate below the surface. A bare number is in m; a text carries its unit.
          */
-        depth: number | string;
+        depth: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -3167,6 +3240,7 @@ export type EarthPlateRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -3185,22 +3259,22 @@ export type EarthStarRequest = {
         /**
          * Arm length (L). Length of each arm from the common point. A bare number is in m; a text carries its unit.
          */
-        armLength: number | string;
+        armLength: number | string | TolerancedQuantity;
         /**
          * Wire diameter (d). Diameter of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
          */
-        wireDiameter?: number | string;
+        wireDiameter?: number | string | TolerancedQuantity;
         /**
          * Wire radius (d/2). Radius of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
          */
-        wireRadius?: number | string;
+        wireRadius?: number | string | TolerancedQuantity;
         /**
          * Depth (h). Depth of the wires' axes below the surface. A bare number is in m; a text carries its unit.
          */
-        depth: number | string;
+        depth: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -3215,6 +3289,7 @@ export type EarthStarRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -3229,19 +3304,19 @@ export type EarthRodLayeredRequest = {
         /**
          * Length (L). Length of the rod in the soil. A bare number is in m; a text carries its unit.
          */
-        length: number | string;
+        length: number | string | TolerancedQuantity;
         /**
          * Diameter (d). Diameter of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
          */
-        diameter?: number | string;
+        diameter?: number | string | TolerancedQuantity;
         /**
          * Radius (d/2). Radius of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
          */
-        radius?: number | string;
+        radius?: number | string | TolerancedQuantity;
         /**
          * Depth of the upper layer (h). Thickness of the upper layer, from the surface down. A bare number is in m; a text carries its unit.
          */
-        upperDepth: number | string;
+        upperDepth: number | string | TolerancedQuantity;
     };
     /**
      * upper: Upper layer; lower: Lower layer
@@ -3250,7 +3325,7 @@ export type EarthRodLayeredRequest = {
         upper: Medium;
         lower: Medium;
     };
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -3265,6 +3340,7 @@ export type EarthRodLayeredRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -3279,18 +3355,18 @@ export type EarthGridRequest = {
         /**
          * Area (A). Area that the grid encloses. A bare number is in m^2; a text carries its unit.
          */
-        area: number | string;
+        area: number | string | TolerancedQuantity;
         /**
          * Conductor length (L). Total length of buried bare conductors; for a rectangle of m by n meshes (m+1) lengths and (n+1) widths. A bare number is in m; a text carries its unit.
          */
-        conductorLength: number | string;
+        conductorLength: number | string | TolerancedQuantity;
         /**
          * Depth (h). Depth of the grid below the surface. A bare number is in m; a text carries its unit.
          */
-        depth: number | string;
+        depth: number | string | TolerancedQuantity;
     };
     medium: Medium;
-    operating?: Operating;
+    operating?: TolerancedOperating;
     /**
      * Parts to add to the answer; `["checks"]` by default.
      */
@@ -3305,6 +3381,7 @@ export type EarthGridRequest = {
         label: string;
     };
     requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
 };
 
 /**
@@ -3393,69 +3470,7 @@ export type ResistanceResult = {
          */
         relativeError: number;
     };
-    /**
-     * How far the resistance strays with the tolerances of the inputs; bounds are a separate statement.
-     */
-    uncertainty?: {
-        method: 'propagation' | 'worst-case' | 'monte-carlo';
-        /**
-         * Standard uncertainty of the resistance in ohms; for `worst-case` that of first-order propagation.
-         */
-        standard: number;
-        /**
-         * Lower end of the range in ohms.
-         */
-        low: number;
-        /**
-         * Upper end of the range in ohms.
-         */
-        high: number;
-        /**
-         * Probability that the range covers the resistance: 0.95; 1 for `worst-case`, whose range is the whole box.
-         */
-        coverage: number;
-        /**
-         * The range for people, rounded by JCGM 100, 7.2.6.
-         */
-        text: string;
-        /**
-         * How the range was found, in one or two sentences.
-         */
-        basis: string;
-        /**
-         * Mean of the trials in ohms; `monte-carlo` only.
-         */
-        mean?: number;
-        /**
-         * Trials made; `monte-carlo` only.
-         */
-        trials?: number;
-        /**
-         * Seed used; `monte-carlo` only.
-         */
-        seed?: number;
-        /**
-         * The budget, largest share first.
-         */
-        contributions: Array<{
-            /**
-             * Place of the input in the request, such as `dimensions.innerRadius`; a material stands for its stated uncertainty.
-             */
-            input: string;
-            /**
-             * Derivative of the resistance by the input at the nominal values, in ohms per SI unit (per radian, per kelvin; for a material per unit of the ratio of true to nominal resistivity).
-             */
-            sensitivity: number;
-            /**
-             * Standard uncertainty of the input in SI (rad, K; a ratio for a material).
-             */
-            standard: number;
-            /**
-             * Part of the whole that is due to this input, 0 … 1: of the variance, or for `worst-case` of the ranges that the inputs span one at a time.
-             */
-            share: number;
-        }>;
-    };
+    uncertainty?: Uncertainty;
     /**
      * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
      */
@@ -4559,6 +4574,28 @@ export type FieldRequest = {
          */
         label: string;
     };
+};
+
+/**
+ * Temperature, and at most one of voltage, current and power.
+ */
+export type Operating = {
+    /**
+     * Temperature of the medium, 20 °C by default (a temperature; a bare number is in degC, or a text with a unit).
+     */
+    temperature?: number | string;
+    /**
+     * Voltage across the terminals (a voltage; a bare number is in V, or a text with a unit).
+     */
+    voltage?: number | string;
+    /**
+     * Current through the terminals (a current; a bare number is in A, or a text with a unit).
+     */
+    current?: number | string;
+    /**
+     * Power turned to heat (a power; a bare number is in W, or a text with a unit).
+     */
+    power?: number | string;
 };
 
 /**
@@ -5680,6 +5717,18 @@ export type ReadResistanceData = {
          * Power turned to heat.
          */
         power?: string;
+        /**
+         * How far the resistance strays with the tolerances, by this method.
+         */
+        uncertainty?: 'propagation' | 'worst-case' | 'monte-carlo';
+        /**
+         * Trials of monte-carlo, a whole number.
+         */
+        trials?: string;
+        /**
+         * Seed of monte-carlo, a whole number.
+         */
+        seed?: string;
         /**
          * Parts to add, separated by commas: steps, profile, checks, peak.
          */
