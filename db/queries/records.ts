@@ -1,6 +1,6 @@
 import { and, desc, eq, inArray, like, lt, or, sql } from "drizzle-orm";
 import { type Database, prepared } from "../client";
-import { records } from "../schema/records";
+import { recordMaterials, records } from "../schema/records";
 import type { Mark } from "./keys";
 
 export interface RecordRow {
@@ -43,6 +43,13 @@ export function insertRecord(db: Database, record: RecordRow): void {
       })
       .prepare(),
   ).run({ ...record });
+  const { id: recordId, teamId, createdAt } = record;
+  for (const { id: materialId, version } of record.materials) {
+    db.insert(recordMaterials)
+      .values({ materialId, recordId, version, teamId, createdAt })
+      .onConflictDoNothing()
+      .run();
+  }
 }
 
 export function recordOfTeam(db: Database, teamId: string, id: string): RecordRow | undefined {
@@ -51,6 +58,22 @@ export function recordOfTeam(db: Database, teamId: string, id: string): RecordRo
     .from(records)
     .where(and(eq(records.id, id), eq(records.teamId, teamId)))
     .get();
+}
+
+/** A record of any team; whether the reader may see it is the caller's question. */
+export function recordById(db: Database, id: string): RecordRow | undefined {
+  return db.select().from(records).where(eq(records.id, id)).get();
+}
+
+/** Ids of all records of some teams, newest first. */
+export function recordIdsOfTeams(db: Database, teamIds: readonly string[]): string[] {
+  return db
+    .select({ id: records.id })
+    .from(records)
+    .where(inArray(records.teamId, [...teamIds]))
+    .orderBy(desc(records.createdAt))
+    .all()
+    .map(({ id }) => id);
 }
 
 export interface RecordFilter {

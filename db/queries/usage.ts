@@ -1,6 +1,13 @@
 import { and, asc, eq, gte, sql } from "drizzle-orm";
 import { type Database, prepared } from "../client";
-import { usageDayDetails, usageDays, usageEvents, usageHourLatencies, usageHours } from "../schema/usage";
+import {
+  usageDayClients,
+  usageDayDetails,
+  usageDays,
+  usageEvents,
+  usageHourLatencies,
+  usageHours,
+} from "../schema/usage";
 import { markUsed } from "./keys";
 
 const HOUR_MS = 3_600_000;
@@ -114,6 +121,26 @@ function statements(db: Database) {
         set: { requests: sql`requests + 1` },
       })
       .prepare(),
+    client: db
+      .insert(usageDayClients)
+      .values({
+        day: place("day"),
+        keyId: place("keyId"),
+        teamId: place("teamId"),
+        client: place("client"),
+        requests: sql`1`,
+        computations: place("computations"),
+        lastAt: place("at"),
+      })
+      .onConflictDoUpdate({
+        target: [usageDayClients.keyId, usageDayClients.day, usageDayClients.client],
+        set: {
+          requests: sql`requests + 1`,
+          computations: sql`computations + excluded.computations`,
+          lastAt: sql`max(last_at, excluded.last_at)`,
+        },
+      })
+      .prepare(),
   };
 }
 
@@ -134,6 +161,7 @@ export function insertUsage(db: Database, event: UsageEvent): void {
   run.day.run(row);
   run.detail.run(row);
   run.latency.run(row);
+  run.client.run(row);
   markUsed(db, event.keyId, event.at, event.client);
 }
 

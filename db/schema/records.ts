@@ -1,4 +1,4 @@
-import { index, integer, sqliteTable, text } from "drizzle-orm/sqlite-core";
+import { index, integer, primaryKey, sqliteTable, text } from "drizzle-orm/sqlite-core";
 import { teams } from "./organisation";
 
 /** A stored calculation: what was asked, what came out, with which versions. */
@@ -27,5 +27,24 @@ export const records = sqliteTable(
   (table) => [
     index("records_team").on(table.teamId, table.createdAt, table.id),
     index("records_shape").on(table.teamId, table.shape, table.createdAt),
+  ],
+);
+
+/** Which records used a material, in which version: the same as `materials` there, to be looked up from the other side. */
+export const recordMaterials = sqliteTable(
+  "record_materials",
+  {
+    materialId: text("material_id").notNull(),
+    recordId: text("record_id")
+      .notNull()
+      .references(() => records.id, { onDelete: "cascade" }),
+    version: integer().notNull(),
+    teamId: text("team_id").notNull(),
+    createdAt: integer("created_at").notNull(),
+  },
+  (table) => [
+    primaryKey({ columns: [table.materialId, table.recordId] }),
+    index("record_materials_record").on(table.recordId),
+    index("record_materials_used").on(table.materialId, table.teamId, table.createdAt),
   ],
 );

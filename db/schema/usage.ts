@@ -1,3 +1,4 @@
+import { sql } from "drizzle-orm";
 import { index, integer, primaryKey, sqliteTable, text } from "drizzle-orm/sqlite-core";
 
 /** One call. Sums below are written in the same transaction, so nothing ever has to be counted from here. */
@@ -23,6 +24,10 @@ export const usageEvents = sqliteTable(
   (table) => [
     index("usage_events_key").on(table.keyId, table.at),
     index("usage_events_team").on(table.teamId, table.at),
+    index("usage_events_at").on(table.at),
+    index("usage_events_refused")
+      .on(table.at)
+      .where(sql`status >= 400`),
   ],
 );
 
@@ -93,4 +98,23 @@ export const usageHourLatencies = sqliteTable(
     requests: integer().notNull(),
   },
   (table) => [primaryKey({ columns: [table.teamId, table.hour, table.bucket] })],
+);
+
+/** Which kinds of client a key was called by in a day: whom a revoked key would hurt. */
+export const usageDayClients = sqliteTable(
+  "usage_day_clients",
+  {
+    day: integer().notNull(),
+    keyId: text("key_id").notNull(),
+    teamId: text("team_id").notNull(),
+    client: text().notNull(),
+    requests: integer().notNull(),
+    computations: integer().notNull(),
+    /** The last call of that day. */
+    lastAt: integer("last_at").notNull(),
+  },
+  (table) => [
+    primaryKey({ columns: [table.keyId, table.day, table.client] }),
+    index("usage_day_clients_day").on(table.day),
+  ],
 );
