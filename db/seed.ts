@@ -4,10 +4,14 @@ import { demoPassword, demoSecret, formatKey } from "@/lib/auth/key-text";
 import { issueKey } from "@/lib/auth/manage-keys";
 import { hashPasswordNow, passwordMatchesNow } from "@/lib/auth/password";
 import { computeResistance, exampleRequest, findShape, libraryMaterial } from "@/lib/engine";
+import { DEFAULT_EMBED_QUOTA } from "@/lib/embeds/definition";
+import { DEMO_EMBED, demoEmbedId } from "@/lib/embeds/demo";
+import { createEmbed, publishEmbed } from "@/lib/embeds/manage-embeds";
 import { storeRecord } from "@/lib/records/records";
 import { bytesToText, newId } from "@/lib/service/identifier";
 import type { Service } from "@/lib/service/service";
 import { transact } from "./client";
+import { embedById } from "./queries/embeds";
 import { keyById } from "./queries/keys";
 import { personByEmail, updatePerson } from "./queries/people";
 import { readSetting, writeSetting } from "./queries/settings";
@@ -112,6 +116,7 @@ export function seedDemo(service: Service): void {
       }
       seedKey(service, team);
       if (fresh) seedRecords(service, team, demo.records);
+      if (team.slug === "busbar") seedEmbed(service, team);
     }
     const first = personByEmail(db, DEMO_EMAIL);
     if (first && first.passwordHash === null) {
@@ -130,6 +135,19 @@ function seedKey({ db, config, now }: Service, team: Team): void {
     now: now(),
     fixed: { id, secret: demoSecret(config.secret, id) },
   });
+}
+
+function seedEmbed({ db, config, now }: Service, team: Team): void {
+  const id = demoEmbedId(config.secret);
+  if (embedById(db, id)) return;
+  const by = { actor: { ...SHELL, name: "Demo" }, now: now() };
+  createEmbed(db, by, {
+    id,
+    teamId: team.id,
+    settings: { name: "Busbar section", origins: [], monthQuota: DEFAULT_EMBED_QUOTA },
+    definition: DEMO_EMBED,
+  });
+  publishEmbed(db, by, id);
 }
 
 function seedRecords({ db, config, now }: Service, team: Team, records: DemoTeam["records"]): void {

@@ -39,13 +39,15 @@ export function createEmbed(
     teamId,
     settings,
     definition,
+    id = newId("emb"),
   }: {
     readonly teamId: string;
     readonly settings: EmbedSettings;
     readonly definition: EmbedDefinition;
+    /** For the demo, whose id is derived; random otherwise. */
+    readonly id?: string;
   },
 ): EmbedView {
-  const id = newId("emb");
   return transact(db, () => {
     insertEmbed(db, {
       id,
