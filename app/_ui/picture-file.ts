@@ -53,7 +53,12 @@ export function svgFile(picture: SVGSVGElement): string {
 /** The same as a PNG on white, at twice the size on screen. */
 export async function pngFile(picture: SVGSVGElement): Promise<Blob> {
   const { width, height } = picture.viewBox.baseVal;
-  const url = URL.createObjectURL(new Blob([svgFile(picture)], { type: "image/svg+xml" }));
+  return pngOfSvg(svgFile(picture), width, height);
+}
+
+/** The text of an SVG that stands alone as a PNG on white, at twice its size in pixels. */
+export async function pngOfSvg(text: string, width: number, height: number): Promise<Blob> {
+  const url = URL.createObjectURL(new Blob([text], { type: "image/svg+xml" }));
   try {
     const image = new Image();
     image.src = url;

@@ -5,7 +5,7 @@ export interface Snippet {
   readonly code: string;
 }
 
-/** What distinguishes the snippets of one operation from those of another. */
+/** What tells the snippets of one operation from those of another. */
 interface SnippetParts {
   /** Path below `/api/v1`. */
   readonly path: string;
@@ -125,12 +125,12 @@ export function jsonText(value: object): string {
 }
 
 /** JSON's flags as Python spells them; texts are left alone. */
-function pythonLiteral(json: string): string {
+export function pythonLiteral(json: string): string {
   return json.replace(/"(?:[^"\\]|\\.)*"|\b(?:true|false)\b/g, (token) =>
     token === "true" ? "True" : token === "false" ? "False" : token,
   );
 }
 
-function indent(text: string, spaces: number): string {
+export function indent(text: string, spaces: number): string {
   return text.replaceAll("\n", `\n${" ".repeat(spaces)}`);
 }

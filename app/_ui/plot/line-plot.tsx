@@ -45,7 +45,8 @@ export function LinePlot(props: LinePlotProps) {
   const width = useWidth(frame);
 
   const plot = useMemo(() => {
-    const all = series.flatMap(({ values }) => values);
+    // A place without a value is a gap.
+    const all = series.flatMap(({ values }) => values.filter((value) => Number.isFinite(value)));
     const xUnit = axisUnit(x.values, x.unit);
     const yUnit = axisUnit(all, y.unit);
     const scale = (log: boolean, domain: readonly [number, number], range: readonly [number, number]) =>
@@ -189,16 +190,18 @@ export function LinePlot(props: LinePlotProps) {
               className="stroke-ink"
               strokeDasharray="3 3"
             />
-            {series.map(({ label, values }) => (
-              <circle
-                key={label}
-                cx={horizontal(xs[cursor])}
-                cy={vertical(values[cursor] * yUnit.factor)}
-                r="4"
-                className="fill-sheet stroke-ink"
-                strokeWidth="1.5"
-              />
-            ))}
+            {series
+              .filter(({ values }) => Number.isFinite(values[cursor]))
+              .map(({ label, values }) => (
+                <circle
+                  key={label}
+                  cx={horizontal(xs[cursor])}
+                  cy={vertical(values[cursor] * yUnit.factor)}
+                  r="4"
+                  className="fill-sheet stroke-ink"
+                  strokeWidth="1.5"
+                />
+              ))}
           </g>
         ) : null}
       </svg>
@@ -259,7 +262,8 @@ function readingText(
   position: number,
 ): string {
   const values = series.map(({ label, values: all }) => {
-    const text = `${readOff(all[index] * yUnit.factor)} ${yUnit.label}`;
+    const value = all[index] * yUnit.factor;
+    const text = Number.isFinite(value) ? `${readOff(value)} ${yUnit.label}` : "none here";
     return series.length > 1 ? `${label} ${text}` : text;
   });
   return `${x.label} ${readOff(position)} ${xUnit.label}: ${y.label.toLowerCase()} ${values.join("; ")}`;

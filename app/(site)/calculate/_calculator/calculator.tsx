@@ -120,8 +120,8 @@ function LiveCalculator(props: CalculatorProps) {
         >
           <DimensionFields />
           <MediumFields />
-          <OperatingFields />
-          <RequirementFields />
+          <OperatingFields form={form} />
+          <RequirementFields form={form} />
         </form>
         <div className="contents wide:sticky wide:top-2 wide:grid wide:gap-3">
           <Outcome answer={answer} elsewhere={complaints.elsewhere} className="order-3 wide:order-none" />

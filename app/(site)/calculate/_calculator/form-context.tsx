@@ -8,12 +8,16 @@ import type { FormDimension, ProfileFacts } from "../_server/form-facts";
 import type { MaterialChoice } from "../_server/material-choices";
 import type { Patch } from "./use-page-state";
 
-/** What the fields of a medium need. */
-export interface MediumForm {
+/** What any group of fields needs. */
+export interface PlainForm {
   readonly parameters: Parameters;
   readonly change: (patch: Patch) => void;
   /** Complaint about a parameter, or about a place inside it ("profile.layers/2/value"). */
   readonly errorAt: (name: string) => string | undefined;
+}
+
+/** What the fields of a medium need. */
+export interface MediumForm extends PlainForm {
   readonly materials: readonly MaterialChoice[];
 }
 

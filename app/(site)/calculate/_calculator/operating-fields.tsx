@@ -3,14 +3,14 @@
 import { QuantityInput } from "../../../_ui/quantity-input";
 import { Segmented } from "../../../_ui/segmented";
 import { type Drive, DRIVES } from "../_model/parameters";
-import { useForm } from "./form-context";
+import type { PlainForm } from "./form-context";
 
 const LABELS: Readonly<Record<Drive, string>> = { voltage: "Voltage", current: "Current", power: "Power" };
 const SYMBOLS: Readonly<Record<Drive, string>> = { voltage: "U", current: "I", power: "P" };
 
 /** Temperature, and at most one of voltage, current and power. */
-export function OperatingFields() {
-  const { parameters, change, errorAt } = useForm();
+export function OperatingFields({ form }: { readonly form: PlainForm }) {
+  const { parameters, change, errorAt } = form;
   const drive = DRIVES.find((name) => name in parameters);
   return (
     <fieldset>

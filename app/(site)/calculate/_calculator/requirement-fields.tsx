@@ -1,11 +1,11 @@
 "use client";
 
 import { QuantityInput } from "../../../_ui/quantity-input";
-import { useForm } from "./form-context";
+import type { PlainForm } from "./form-context";
 
 /** Limits that the answer is held against. */
-export function RequirementFields() {
-  const { parameters, change, errorAt } = useForm();
+export function RequirementFields({ form }: { readonly form: PlainForm }) {
+  const { parameters, change, errorAt } = form;
   const field = (name: "min" | "max", label: string) => (
     <QuantityInput
       name={name}

@@ -7,6 +7,7 @@ import { Dialog } from "../../../_ui/dialog";
 import { CONTROL, Field } from "../../../_ui/field";
 import { ProblemNotice } from "../../../_ui/problem-notice";
 import { useToast } from "../../../_ui/toast";
+import { newAttemptKey } from "../../_live/attempt-key";
 import { ApiProblem, postApi } from "../../_live/call-api";
 
 /** Who may save: a reader who is signed in, or one who has to sign in first. */
@@ -53,7 +54,7 @@ export function SaveRecord({ saving, path, body, title }: SaveRecordProps) {
     setBusy(true);
     setProblem(null);
     const text = JSON.stringify({ ...body, record: { label: label.trim() } });
-    if (attempt.current.text !== text) attempt.current = { text, key: newKey() };
+    if (attempt.current.text !== text) attempt.current = { text, key: newAttemptKey() };
     try {
       await postApi<Stored>(path, text, { idempotencyKey: attempt.current.key });
       setOpen(false);
@@ -110,11 +111,4 @@ export function SaveRecord({ saving, path, body, title }: SaveRecordProps) {
       </Dialog>
     </>
   );
-}
-
-/** A name for one act of saving. */
-function newKey(): string {
-  return [...crypto.getRandomValues(new Uint8Array(16))]
-    .map((byte) => byte.toString(16).padStart(2, "0"))
-    .join("");
 }

@@ -20,13 +20,16 @@ export function Headline({ result, stale }: HeadlineProps) {
       className={`scroll-mt-8 transition-opacity delay-300 duration-100 ${stale && result ? "opacity-60" : ""}`}
     >
       <h2 className="text-table font-normal text-ink-soft">Resistance between the terminals</h2>
-      {result ? <Numbers result={result} /> : <NoNumbers />}
+      {result ? <Numbers resistance={result.resistance} method={result.method} /> : <NoNumbers />}
     </div>
   );
 }
 
-function Numbers({ result }: { readonly result: ResistanceResult }) {
-  const { value, lower, upper, text, boundsBasis, proved } = result.resistance;
+type NumbersProps = Pick<ResistanceResult, "resistance" | "method">;
+
+/** A resistance with its bracket, what the bracket means, and both to copy. */
+export function Numbers({ resistance, method }: NumbersProps) {
+  const { value, lower, upper, text, boundsBasis, proved } = resistance;
   const bracket = bracketText(value, lower, upper, "Ω");
   return (
     <>
@@ -39,7 +42,7 @@ function Numbers({ result }: { readonly result: ResistanceResult }) {
         </span>
       </p>
       <p className="mt-0.5 min-h-5 text-table text-ink-soft">
-        {METHODS[result.method]}, bounds {proved ? "proved" : "not proved"}. {BOUNDS_MEANING[boundsBasis]}
+        {METHODS[method]}, bounds {proved ? "proved" : "not proved"}. {BOUNDS_MEANING[boundsBasis]}
       </p>
       <div className="mt-0.5 -ms-2 flex flex-wrap print:hidden">
         <CopyButton text={String(value)} what="the value in ohms" label="Copy ohms" />
@@ -79,7 +82,7 @@ function NoNumbers() {
 }
 
 /** The verdict on the requirement, where one was asked for. */
-export function Verdict({ result }: { readonly result: ResistanceResult }) {
+export function Verdict({ result }: { readonly result: Pick<ResistanceResult, "verdict"> }) {
   if (!result.verdict) return null;
   const { word, sentence } = VERDICTS[result.verdict];
   const tone =

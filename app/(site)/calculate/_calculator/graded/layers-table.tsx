@@ -3,6 +3,7 @@
 import { type ReactNode, useState } from "react";
 import { ArrowUp, Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
+import { FileButton } from "../../../../_ui/file-button";
 import { readRows, writeRows } from "../../_model/profile-forms";
 import { useForm } from "../form-context";
 import { baseValue } from "../use-medium-switch";
@@ -10,7 +11,7 @@ import { CellInput } from "./cell-input";
 import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
 import { type PointsReading, readPoints } from "./read-points";
 import { RowButton } from "./row-button";
-import { FileButton, MOST_ROWS_SHOWN, ReadingNotes, RowsText } from "./rows-text";
+import { MOST_ROWS_SHOWN, ReadingNotes, RowsText } from "./rows-text";
 import { spanText } from "./use-profile-switch";
 
 type Rows = readonly (readonly [string, string])[];
@@ -76,7 +77,7 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
         />
         <LayersSum sum={sum} fits={fits} site={site} complaint={errorAt(name)} onFit={scaleToFit}>
           {long ? null : <Button onClick={() => setAsText(false)}>Edit as a table</Button>}
-          <FileButton onText={readFile} />
+          <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onText={readFile} />
         </LayersSum>
         <ReadingNotes reading={notes} />
       </div>
@@ -154,7 +155,7 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
           <Plus aria-hidden size={15} /> Layer
         </Button>
         <Button onClick={() => setAsText(true)}>Edit as text</Button>
-        <FileButton onText={readFile} />
+        <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onText={readFile} />
       </LayersSum>
       <ReadingNotes reading={notes} />
     </div>

@@ -3,12 +3,13 @@
 import { useState } from "react";
 import { Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
+import { FileButton } from "../../../../_ui/file-button";
 import { readRows, writeRows } from "../../_model/profile-forms";
 import { useForm } from "../form-context";
 import { CellInput } from "./cell-input";
 import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
 import { RowButton } from "./row-button";
-import { FileButton, MOST_ROWS_SHOWN, ReadingNotes, RowsText } from "./rows-text";
+import { MOST_ROWS_SHOWN, ReadingNotes, RowsText } from "./rows-text";
 import { readPoints, type PointsReading } from "./read-points";
 
 type Rows = readonly (readonly [string, string])[];
@@ -115,7 +116,7 @@ export function PointsTable({ name, site }: { readonly name: string; readonly si
             </Button>
           </>
         )}
-        <FileButton onText={readFile} />
+        <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onText={readFile} />
         <p className="text-small text-ink-soft">{rows.length} points</p>
       </div>
       <ReadingNotes reading={notes} />

@@ -1,6 +1,6 @@
 "use client";
 
-import { useId, useState } from "react";
+import { useState } from "react";
 import { CONTROL, Field } from "../../../../_ui/field";
 import type { PointsReading } from "./read-points";
 
@@ -37,30 +37,6 @@ export function RowsText({ label, columns, rows, onChange }: RowsTextProps) {
         />
       )}
     </Field>
-  );
-}
-
-/** Reads a CSV file from the reader's disk. */
-export function FileButton({ onText }: { readonly onText: (text: string) => void }) {
-  const id = useId();
-  return (
-    <label
-      htmlFor={id}
-      className="inline-flex min-h-5.5 cursor-pointer items-center rounded border border-edge bg-sheet px-2 text-table font-medium hover:border-ink has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-verdigris medium:min-h-5"
-    >
-      Read a CSV file
-      <input
-        id={id}
-        type="file"
-        accept=".csv,.txt,.tsv,text/csv,text/plain"
-        className="sr-only"
-        onChange={async (event) => {
-          const file = event.target.files?.[0];
-          event.target.value = "";
-          if (file) onText(await file.text());
-        }}
-      />
-    </label>
   );
 }
 

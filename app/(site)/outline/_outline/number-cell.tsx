@@ -1,0 +1,85 @@
+"use client";
+
+import { type KeyboardEvent, useState } from "react";
+import { LENGTH_UNITS_M, type LengthUnit } from "@/lib/engine/field/outline/length-units";
+import { readTyped } from "../../../_ui/quantity/read-typed";
+import { coordinateText, tidy } from "../_model/sketch";
+
+interface NumberCellProps {
+  readonly label: string;
+  readonly value: number;
+  readonly onCommit: (value: number) => void;
+  /** Unit of the value: a length typed with another one is converted. Left out where it is no length. */
+  readonly unit?: LengthUnit;
+  readonly invalid?: boolean;
+  readonly disabled?: boolean;
+  readonly className?: string;
+  /** What may not be taken, as a sentence; null where all is well. */
+  readonly refuse?: (value: number) => string | null;
+}
+
+/** A number that takes effect when the field is left or Enter pressed; Escape brings the old one back. */
+export function NumberCell(props: NumberCellProps) {
+  const {
+    label,
+    value,
+    onCommit,
+    unit,
+    invalid = false,
+    disabled = false,
+    className = "w-full",
+    refuse,
+  } = props;
+  const [draft, setDraft] = useState<string | null>(null);
+  const [wrong, setWrong] = useState<string | null>(null);
+
+  function commit() {
+    if (draft === null) return;
+    const number = readNumber(draft, unit);
+    const why = number === null ? "This is no number." : (refuse?.(number) ?? null);
+    if (number === null || why !== null) return setWrong(why);
+    setDraft(null);
+    setWrong(null);
+    if (coordinateText(number) !== coordinateText(value)) onCommit(number);
+  }
+
+  function onKeyDown(event: KeyboardEvent) {
+    if (event.key === "Enter") commit();
+    if (event.key !== "Escape" || draft === null) return;
+    setDraft(null);
+    setWrong(null);
+    event.stopPropagation();
+  }
+
+  return (
+    <input
+      aria-label={label}
+      aria-invalid={wrong !== null || invalid ? true : undefined}
+      title={wrong ?? undefined}
+      value={draft ?? coordinateText(value)}
+      disabled={disabled}
+      onChange={(event) => setDraft(event.target.value)}
+      onBlur={commit}
+      onKeyDown={onKeyDown}
+      // Undo is the page's once nothing half-typed stands here.
+      data-cell={draft === null ? "settled" : "draft"}
+      inputMode="text"
+      autoComplete="off"
+      spellCheck={false}
+      className={`min-h-5.5 rounded border border-edge bg-sheet px-0.5 text-end font-mono text-table hover:border-ink disabled:opacity-55 aria-invalid:border-2 aria-invalid:border-oxide medium:min-h-4 ${className}`}
+    />
+  );
+}
+
+/** A typed number in the unit; "1/2 in" in a drawing in mm is 12.7. */
+function readNumber(text: string, unit: LengthUnit | undefined): number | null {
+  const comma =
+    typeof navigator !== "undefined" && new Intl.NumberFormat(navigator.language).format(1.5).includes(",");
+  const typed = readTyped(text, comma);
+  if (typed.kind !== "quantity") return null;
+  const number = Number(typed.number);
+  if (!Number.isFinite(number)) return null;
+  if (typed.unit === "" || typed.unit === unit) return number;
+  if (!unit || !(typed.unit in LENGTH_UNITS_M)) return null;
+  return tidy((number * LENGTH_UNITS_M[typed.unit as LengthUnit]) / LENGTH_UNITS_M[unit]);
+}

@@ -1,0 +1,92 @@
+"use client";
+
+import dynamic from "next/dynamic";
+import { useState } from "react";
+import { Braces, Link2, Redo2, Undo2 } from "lucide-react";
+import { Button } from "../../../_ui/button";
+import { CONTROL } from "../../../_ui/field";
+import { useToast } from "../../../_ui/toast";
+import { sketchToHash } from "../_model/address";
+import type { Sketch } from "../_model/sketch";
+import { EMPTY_SKETCH, START_OUTLINES, startSketch } from "../_model/start-outlines";
+import type { SketchState } from "./use-sketch";
+
+const JsonDialog = dynamic(() => import("./json-dialog").then((module) => module.JsonDialog), { ssr: false });
+
+interface PageToolsProps {
+  readonly state: SketchState;
+  /** Another drawing takes the place of this one. */
+  readonly onReplace: (sketch: Sketch) => void;
+}
+
+/** Another drawing, a step back or forth, JSON, and a link to exactly this state. */
+export function PageTools({ state, onReplace }: PageToolsProps) {
+  const { sketch, undo, redo, canUndo, canRedo } = state;
+  const [json, setJson] = useState(false);
+  const toast = useToast();
+
+  function begin(id: string) {
+    onReplace(id === "empty" ? EMPTY_SKETCH : startSketch(id));
+    toast("Another drawing is there.", { undo });
+  }
+
+  async function copyLink() {
+    const { origin, pathname } = window.location;
+    try {
+      await navigator.clipboard.writeText(`${origin}${pathname}#${await sketchToHash(sketch)}`);
+      toast("The link is copied. It reproduces this page.");
+    } catch {
+      toast("The browser does not let the page copy; the address bar has the link.");
+    }
+  }
+
+  return (
+    <>
+      <select
+        aria-label="Begin with"
+        value=""
+        onChange={(event) => begin(event.target.value)}
+        className={`${CONTROL} w-auto! font-sans!`}
+      >
+        <option value="" disabled>
+          Begin with …
+        </option>
+        <option value="empty">An empty board</option>
+        {START_OUTLINES.map(({ id, title }) => (
+          <option key={id} value={id}>
+            {title}
+          </option>
+        ))}
+      </select>
+      <Button variant="quiet" aria-label="Undo" title="Undo (Ctrl+Z)" disabled={!canUndo} onClick={undo}>
+        <Undo2 aria-hidden size={16} />
+      </Button>
+      <Button
+        variant="quiet"
+        aria-label="Redo"
+        title="Redo (Ctrl+Shift+Z)"
+        disabled={!canRedo}
+        onClick={redo}
+      >
+        <Redo2 aria-hidden size={16} />
+      </Button>
+      <Button variant="quiet" onClick={() => setJson(true)}>
+        <Braces aria-hidden size={16} /> JSON
+      </Button>
+      <Button variant="quiet" onClick={copyLink}>
+        <Link2 aria-hidden size={16} /> Copy link
+      </Button>
+      {json ? (
+        <JsonDialog
+          sketch={sketch}
+          onClose={() => setJson(false)}
+          onTake={(next) => {
+            setJson(false);
+            onReplace(next);
+            toast("The drawing is taken over.", { undo });
+          }}
+        />
+      ) : null}
+    </>
+  );
+}

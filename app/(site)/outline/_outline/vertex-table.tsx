@@ -1,0 +1,161 @@
+"use client";
+
+import { useState } from "react";
+import { Plus, Trash2 } from "lucide-react";
+import { Button } from "../../../_ui/button";
+import { CONTROL } from "../../../_ui/field";
+import { complaintAt } from "../_model/complaints";
+import { boxOf } from "../_model/edges";
+import { addRegion, addRing, removeRing } from "../_model/edit";
+import { type Ring, type RingKey, regionKey, ringOf, ringTitle, type Sketch, tidy } from "../_model/sketch";
+import { useOutline } from "./outline-context";
+import { VertexRow } from "./vertex-row";
+
+/** Rows that are shown at a time. */
+const PAGE = 60;
+
+/** Exact coordinates, ring by ring: everything that the board does, by keyboard. */
+export function VertexTable() {
+  const { sketch, edit, selection, select, complaints } = useOutline();
+  const [chosen, setChosen] = useState<RingKey>(0);
+  const [page, setPage] = useState(0);
+  const [followed, setFollowed] = useState(selection);
+  // The table follows what is marked on the board.
+  if (selection !== followed) {
+    setFollowed(selection);
+    if (selection) {
+      setChosen(selection.ring);
+      setPage(Math.floor(selection.index / PAGE));
+    }
+  }
+  const keys = [...sketch.rings.map((_, k) => k), ...sketch.regions.map((_, k) => regionKey(k))];
+  const key = keys.includes(chosen) ? chosen : 0;
+  const ring = ringOf(sketch, key);
+  const pages = Math.max(1, Math.ceil(ring.length / PAGE));
+  const first = Math.min(page, pages - 1) * PAGE;
+  const complaint = complaintAt(complaints, (place) => place.kind === "ring" && place.ring === key);
+
+  function show(next: RingKey) {
+    setChosen(next);
+    setPage(0);
+    select(null);
+  }
+
+  function add(kind: "hole" | "region") {
+    const square = squareIn(sketch);
+    if (kind === "region") {
+      edit((sketch) => addRegion(sketch, square));
+      show(regionKey(sketch.regions.length));
+    } else {
+      edit((sketch) => addRing(sketch, square));
+      show(sketch.rings[0].length === 0 ? 0 : sketch.rings.length);
+    }
+  }
+
+  return (
+    <section aria-labelledby="coordinates">
+      <div className="mb-1 flex flex-wrap items-center gap-1">
+        <h2 id="coordinates" className="grow text-h3">
+          Coordinates / {sketch.unit === "um" ? "µm" : sketch.unit}
+        </h2>
+        <select
+          aria-label="Ring"
+          value={key}
+          onChange={(event) => show(Number(event.target.value))}
+          className={`${CONTROL} w-auto! font-sans!`}
+        >
+          {keys.map((value) => (
+            <option key={value} value={value}>
+              {ringTitle(value)}
+            </option>
+          ))}
+        </select>
+        <Button onClick={() => add("hole")}>
+          <Plus aria-hidden size={15} /> {sketch.rings[0].length === 0 ? "Square" : "Hole"}
+        </Button>
+        {sketch.rings[0].length === 0 ? null : (
+          <Button onClick={() => add("region")}>
+            <Plus aria-hidden size={15} /> Region
+          </Button>
+        )}
+        {ring.length > 0 ? (
+          <Button
+            variant="quiet"
+            aria-label={`Remove ${ringTitle(key).toLowerCase()}`}
+            onClick={() => {
+              edit((sketch) => removeRing(sketch, key));
+              show(0);
+            }}
+          >
+            <Trash2 aria-hidden size={15} />
+          </Button>
+        ) : null}
+      </div>
+      {complaint ? <p className="mb-0.5 text-small text-oxide">{complaint}</p> : null}
+      {ring.length === 0 ? (
+        <p className="rounded border border-dashed border-edge px-2 py-3 text-table text-ink-soft">
+          There is no outer ring yet. Draw one on the board, add a square to start from, or open JSON.
+        </p>
+      ) : (
+        <div
+          tabIndex={0}
+          role="group"
+          aria-label={`${ringTitle(key)}: coordinates`}
+          className="relative max-h-[26rem] overflow-auto rounded border border-rule bg-sheet"
+        >
+          <table className="w-full border-collapse text-table">
+            <thead className="sticky top-0 z-1 bg-sheet text-small text-ink-soft">
+              <tr>
+                {["Vertex", "x", "y", "Edge from here", ...(key >= 0 ? ["Terminal"] : [])].map((title) => (
+                  <th key={title} scope="col" className="px-0.5 py-0.5 text-start font-normal">
+                    {title}
+                  </th>
+                ))}
+                <th scope="col">
+                  <span className="sr-only">Change</span>
+                </th>
+              </tr>
+            </thead>
+            <tbody>
+              {ring.slice(first, first + PAGE).map((_, k) => (
+                <VertexRow key={first + k} ring={key} index={first + k} />
+              ))}
+            </tbody>
+          </table>
+        </div>
+      )}
+      {pages > 1 ? (
+        <div className="mt-0.5 flex items-center gap-1 text-table">
+          <Button disabled={first === 0} onClick={() => setPage(first / PAGE - 1)}>
+            Earlier
+          </Button>
+          <span>
+            {first} … {Math.min(ring.length, first + PAGE) - 1} of {ring.length}
+          </span>
+          <Button disabled={first + PAGE >= ring.length} onClick={() => setPage(first / PAGE + 1)}>
+            Later
+          </Button>
+        </div>
+      ) : null}
+    </section>
+  );
+}
+
+/** A square to start from: inside the outer ring's box, or one of its own. */
+function squareIn(sketch: Sketch): Ring {
+  const box = boxOf(sketch.rings.slice(0, 1)) ?? { minX: -15, minY: -15, maxX: 55, maxY: 55 };
+  const outer = sketch.rings[0].length > 0;
+  const side = Math.min(box.maxX - box.minX, box.maxY - box.minY) * (outer ? 0.25 : 0.5714285714);
+  const [x, y] = outer
+    ? [box.minX + (box.maxX - box.minX) * 0.125, box.minY + (box.maxY - box.minY) * 0.125]
+    : [0, 0];
+  const corner = (dx: number, dy: number) => ({ x: tidy(x + dx * side), y: tidy(y + dy * side) });
+  return outer
+    ? [corner(0, 0), corner(1, 0), corner(1, 1), corner(0, 1)]
+    : [
+        { x: 0, y: 0 },
+        { x: 40, y: 0 },
+        { x: 40, y: 40 },
+        { x: 0, y: 40 },
+      ];
+}

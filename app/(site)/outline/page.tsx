@@ -1,0 +1,34 @@
+import type { Metadata } from "next";
+import { libraryMaterials } from "@/lib/engine";
+import { sharedService } from "@/lib/service/service";
+import { materialChoices } from "../calculate/_server/material-choices";
+import { startSketch } from "./_model/start-outlines";
+import { OutlinePage } from "./_outline/outline-page";
+
+export const metadata: Metadata = {
+  title: "Outline",
+  description: "Draw any outline, name its terminals and bracket its resistance between two field solutions.",
+};
+
+const START_C = 20;
+const START = startSketch("bend");
+
+export default function Outline() {
+  return (
+    <OutlinePage
+      heading={
+        <>
+          <h1>Outline</h1>
+          <p className="mt-0.5 max-w-prose text-ink-soft">
+            Any shape with holes and arcs, as a sheet or about an axis: draw it, make edges terminals, and
+            solve for a resistance between two proved bounds.
+          </p>
+        </>
+      }
+      start={START}
+      materials={materialChoices(libraryMaterials, START_C)}
+      origin={sharedService().config.origin}
+      saving={{ kind: "sign-in", href: "/sign-in?next=/outline?kept" }}
+    />
+  );
+}
