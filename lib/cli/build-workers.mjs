@@ -1,4 +1,7 @@
-/** Bundles what runs in worker threads: they load one file, whatever the server was started with. */
+/**
+ * Bundles what is loaded as one file: by worker threads, whatever the server was started with, and by the pages of other
+ * teams, which load a widget.
+ */
 import { build } from "esbuild";
 import { ROOT } from "./setup.mjs";
 
@@ -12,5 +15,18 @@ await build({
   format: "esm",
   target: "node20",
   alias: { "@": "." },
+  logLevel: "warning",
+});
+
+await build({
+  absWorkingDir: ROOT,
+  entryPoints: { v1: "app/embed/_loader/main.ts" },
+  outdir: "dist/embed",
+  bundle: true,
+  minify: true,
+  platform: "browser",
+  format: "iife",
+  target: "es2022",
+  charset: "utf8",
   logLevel: "warning",
 });
