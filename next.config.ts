@@ -9,7 +9,7 @@ const config: NextConfig = {
   // `npm run typecheck` checks the whole tree, tests included; a start need not wait for it.
   typescript: { ignoreBuildErrors: true },
   // Workers start files of their own and native modules load binaries: neither survives bundling.
-  serverExternalPackages: ["better-sqlite3", "piscina", "pino"],
+  serverExternalPackages: ["better-sqlite3", "piscina", "pino", "pdfkit", "svg-to-pdfkit"],
   turbopack: { root: process.cwd() },
   headers: async () => [{ source: "/_next/static/:path*", headers: assetHeaders() }],
 };

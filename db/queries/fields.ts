@@ -25,6 +25,11 @@ export function fieldById(db: Database, id: string): FieldRow | undefined {
   return db.select().from(fields).where(eq(fields.id, id)).get();
 }
 
+/** The solution that stored a record, while it is kept. */
+export function fieldOfRecord(db: Database, recordId: string): FieldRow | undefined {
+  return db.select().from(fields).where(eq(fields.recordId, recordId)).get();
+}
+
 /** How many solutions of an owner wait or run. */
 export function countOpenFields(db: Database, owner?: string): number {
   const row = db

@@ -39,7 +39,7 @@ export async function getApi<Result>(path: string, options: CallOptions = {}): P
 
 /** One call with the page's token; a token that has ended is renewed once. Throws ApiProblem when it is refused. */
 export async function callApi(
-  method: "GET" | "POST" | "DELETE",
+  method: "GET" | "POST" | "PATCH" | "DELETE",
   path: string,
   { observe, idempotencyKey, wait, signal }: CallOptions = {},
   body?: string,

@@ -1,0 +1,205 @@
+/** What a record of `field` tells: an outline, its terminals and medium, the bracket of two solutions. */
+import { z } from "zod";
+import { fieldResultSchema, type FieldResult } from "@/lib/engine";
+import { bracketOf, boundedHeadline, checksSection, linesSection, operatingFacts, verdictOf } from "./answer";
+import type { Block, Fact, Headline, Picture, Section, Told } from "./content";
+import { askedTable } from "./inputs";
+import { materialBlocks, mediumBlocks } from "./medium";
+import type { LookUp } from "./of-resistance";
+import { outlineSvg, storedOutline, storedTerminals } from "./outline-svg";
+import { plainNumber } from "./typed";
+
+const given = z.record(z.string(), z.unknown());
+
+const storedRequest = z.object({
+  outline: storedOutline,
+  terminals: storedTerminals,
+  medium: given,
+  accuracy: z.number().optional(),
+  operating: given.optional(),
+  requirement: given.optional(),
+});
+type StoredRequest = z.infer<typeof storedRequest>;
+
+/** `plot` is the finished picture, where its map is still kept; without it the outline is drawn. */
+export function tellField(
+  request: unknown,
+  result: unknown,
+  lookUp: LookUp,
+  plot: string | null,
+): Told | null {
+  const asked = storedRequest.safeParse(request);
+  const answer = fieldResultSchema.safeParse(result);
+  if (!asked.success || !answer.success) return null;
+  const picture: Picture = plot
+    ? {
+        kind: "svg",
+        svg: plot,
+        description: "Current density, equipotentials and stream lines on the outline.",
+      }
+    : {
+        kind: "svg",
+        svg: outlineSvg(asked.data.outline, asked.data.terminals),
+        description: "The outline with its terminals.",
+      };
+  return {
+    subject: asked.data.outline.symmetry === "axisymmetric" ? "Outline about an axis" : "Outline",
+    headline: headlineOf(answer.data),
+    picture,
+    cautions: answer.data.cautions,
+    sections: [...inputs(asked.data, answer.data, lookUp), ...answers(answer.data)],
+  };
+}
+
+function headlineOf(result: FieldResult): Headline {
+  const { resistance, pairs, verdict, limit } = result;
+  const stopped = limit ? [`The wanted accuracy was not reached: ${limit}`] : [];
+  if (resistance) {
+    const headline = boundedHeadline("Resistance between the terminals", resistance, "Field solution");
+    return { ...headline, statements: [...headline.statements, ...stopped], verdict: verdictOf(verdict) };
+  }
+  const first = pairs?.[0];
+  return {
+    title: first ? `From ${first.between[0]} to ${first.between[1]}, the others open` : "Field solution",
+    text: first?.floating.text ?? "",
+    bracket: first ? pairBracket(first.floating) : null,
+    statements: ["All pairs of terminals are listed below.", ...stopped],
+    verdict: verdictOf(verdict),
+  };
+}
+
+function pairBracket({
+  value,
+  lower,
+  upper,
+}: {
+  value: number | null;
+  lower: number;
+  upper: number | null;
+}): string {
+  return value === null || upper === null
+    ? `above ${plainNumber(lower)} Ω`
+    : bracketOf({ value, lower, upper });
+}
+
+/** Longer outlines are in the stored request; a sheet of paper is not the place for ten thousand vertices. */
+const MOST_VERTICES = 120;
+
+function inputs(request: StoredRequest, result: FieldResult, lookUp: LookUp): Section[] {
+  const { outline, terminals, accuracy } = request;
+  const vertices = outline.outer.length + outline.holes.reduce((sum, ring) => sum + ring.length, 0);
+  const facts: Fact[] = [
+    { name: "Unit of the coordinates", value: outline.unit },
+    { name: "Symmetry", value: outline.symmetry === "axisymmetric" ? "about the axis x = 0" : "plan sheet" },
+    {
+      name: "Rings",
+      value: `one outer${outline.holes.length > 0 ? `, holes: ${outline.holes.length}` : ""}`,
+    },
+    { name: "Accuracy wanted", value: plainNumber(accuracy ?? 1e-4), note: "(upper − lower)/value" },
+  ];
+  const rings = [outline.outer, ...outline.holes];
+  const coordinates: Block =
+    vertices > MOST_VERTICES
+      ? { kind: "paragraph", text: `The ${vertices} vertices are in the stored request.` }
+      : {
+          kind: "table",
+          label: `Vertices, ${outline.unit}`,
+          columns: [
+            { title: "Ring", weight: 0.7 },
+            { title: "Vertex", weight: 0.5 },
+            { title: "x, y", numeric: true, weight: 1.4 },
+            { title: "Arrives by", numeric: true, weight: 2 },
+          ],
+          rows: rings.flatMap((ring, index) =>
+            ring.map((vertex, place) => [
+              index === 0 ? "outer" : `hole ${index}`,
+              String(place),
+              Array.isArray(vertex)
+                ? vertex.map(plainNumber).join(", ")
+                : vertex.arcTo.map(plainNumber).join(", "),
+              Array.isArray(vertex)
+                ? "line"
+                : `arc about ${vertex.center.map(plainNumber).join(", ")}${vertex.clockwise ? ", clockwise" : ""}`,
+            ]),
+          ),
+        };
+  const asked = askedTable(request.operating, request.requirement);
+  return [
+    {
+      id: "inputs",
+      title: "Outline and terminals",
+      blocks: [{ kind: "facts", facts }, terminalTable(terminals), coordinates],
+    },
+    {
+      id: "medium",
+      title: "Medium",
+      blocks: [...mediumBlocks(request.medium, undefined), ...materialBlocks(result.materials, lookUp)],
+    },
+    ...(asked.length > 0 ? [{ id: "asked", title: "Asked for", blocks: asked }] : []),
+  ];
+}
+
+function terminalTable(terminals: StoredRequest["terminals"]): Block {
+  const place = ([[ax, ay], [bx, by]]: readonly [readonly [number, number], readonly [number, number]]) =>
+    `${plainNumber(ax)}, ${plainNumber(ay)} to ${plainNumber(bx)}, ${plainNumber(by)}`;
+  return {
+    kind: "table",
+    label: "Terminals",
+    columns: [{ title: "Terminal" }, { title: "Where on the boundary", numeric: true, weight: 2.5 }],
+    rows: terminals.map(({ name, segments, parts }) => [
+      name,
+      [
+        ...(segments ?? []).map(place),
+        ...(parts ?? []).map(
+          ({ ring, edge, from, to }) =>
+            `ring ${ring}, edge ${edge}${from === undefined && to === undefined ? "" : `, ${plainNumber(from ?? 0)} to ${plainNumber(to ?? 1)}`}`,
+        ),
+      ].join("; "),
+    ]),
+  };
+}
+
+function answers(result: FieldResult): Section[] {
+  const { squares, operating, peak, mesh, seconds, pairs } = result;
+  const facts: Fact[] = [
+    ...(squares
+      ? [
+          {
+            name: "Squares",
+            value: squares.text,
+            note: `${plainNumber(squares.lower)} … ${plainNumber(squares.upper)}`,
+          },
+        ]
+      : []),
+    ...operatingFacts(operating),
+    ...(peak ? [{ name: "Peak", value: peak.text }] : []),
+    {
+      name: "Mesh",
+      value: `${mesh.triangles} triangles, ${mesh.unknowns} unknowns, ${mesh.refinements} refinements`,
+    },
+    { name: "Time", value: `${plainNumber(Number(seconds.toPrecision(3)))}\u2009s` },
+  ];
+  const blocks: Block[] = [{ kind: "facts", facts }];
+  if (pairs) {
+    blocks.push({
+      kind: "table",
+      label: "Pairs of terminals",
+      columns: [
+        { title: "Between", weight: 0.9 },
+        { title: "Others open", numeric: true, weight: 1.6 },
+        { title: "Others at zero", numeric: true, weight: 1.6 },
+      ],
+      rows: pairs.map(({ between, floating, grounded }) => [
+        between.join(" and "),
+        `${floating.text} ${pairBracket(floating)}`,
+        `${grounded.text} ${pairBracket(grounded)}`,
+      ]),
+    });
+  }
+  return [
+    { id: "answer", title: "Answer at the operating point", blocks },
+    ...checksSection(result.checks),
+    ...linesSection("repairs", "Put right on the outline", result.repairs),
+    ...linesSection("assumptions", "Assumptions", result.assumptions),
+  ];
+}

@@ -1,0 +1,154 @@
+import { describe, expect, it } from "vitest";
+import { recordContent } from "@/app/(site)/records/_content/build-content";
+import { readRecordCode, recordCode } from "@/app/(site)/records/_content/record-code";
+import { sheetPdf } from "@/app/(site)/records/_sheet/sheet-pdf";
+import { computeResistance, exampleRequest, findShape, libraryMaterial } from "@/lib/engine";
+import type { RecordView } from "@/lib/records/records";
+import { pdfPages, pdfTitle } from "../support/pdf-text";
+
+const INCLUDE = ["steps", "profile", "checks", "peak"];
+const lookUp = (id: string) => libraryMaterial(id);
+
+function recordOf(request: Readonly<Record<string, unknown>>, label = "Main bar, panel 2"): RecordView {
+  const result = computeResistance({ ...request, include: INCLUDE }, { material: libraryMaterial });
+  return {
+    id: "rec_0000000000000001",
+    operation: "resistance",
+    label,
+    createdAt: "2026-03-04T05:06:07.000Z",
+    by: { kind: "person", id: "per_1", name: "Ines Hartwell" },
+    request,
+    result,
+    materials: result.materials,
+    engine: result.engine,
+    catalogue: result.catalogue,
+  };
+}
+
+const contentOf = (record: RecordView, plot: string | null = null) =>
+  recordContent(record, { origin: "https://rho.merrow-pike.example", team: "Busbar", lookUp, plot });
+
+const BAR = {
+  shape: "bar",
+  dimensions: { length: "250 mm", width: { value: "40 mm", tolerance: "0.1 mm" }, thickness: "5 mm" },
+  medium: { material: "copper-annealed" },
+  operating: { temperature: "75 degC", current: "630 A" },
+  requirement: { max: "1 mohm" },
+  uncertainty: { method: "propagation" },
+};
+const SHELL = {
+  shape: "cylindrical-shell",
+  dimensions: { innerRadius: "2 mm", outerRadius: "5 mm", length: "1 m" },
+  medium: {
+    graded: {
+      coordinate: "radius",
+      quantity: "conductivity",
+      profile: {
+        kind: "layers",
+        layers: [
+          { thickness: "1 mm", value: "1 pS/m" },
+          { thickness: "2 mm", value: "3 pS/m" },
+        ],
+      },
+    },
+  },
+};
+
+describe("a record's code", () => {
+  it("has eight characters that nobody mistakes", () => {
+    expect(recordCode("rec_0000000000000001")).toMatch(/^[0-9A-HJKMNP-TV-Z]{4}-[0-9A-HJKMNP-TV-Z]{4}$/);
+    expect(recordCode("rec_0000000000000001")).not.toBe(recordCode("rec_0000000000000002"));
+  });
+
+  it("is read however it was typed", () => {
+    const code = recordCode("rec_0000000000000001");
+    expect(readRecordCode(code.toLowerCase())).toBe(code);
+    expect(readRecordCode(code.replace("-", ""))).toBe(code);
+    expect(readRecordCode("rec_0000000000000001")).toBeNull();
+  });
+});
+
+describe("what a record tells", () => {
+  const content = contentOf(recordOf(BAR));
+  const cells = content.sections.flatMap(({ blocks }) =>
+    blocks.flatMap((block) => (block.kind === "table" ? block.rows : [])),
+  );
+
+  it("has the inputs as typed and in SI", () => {
+    expect(cells).toContainEqual(["Length", "L", "250 mm", "0.25\u2009m"]);
+    expect(cells).toContainEqual(["Width", "w", "40 mm ± 0.1 mm", "0.04\u2009m"]);
+    expect(cells).toContainEqual(["Current", "630 A", "630\u2009A"]);
+    expect(cells).toContainEqual(["Required, at most", "1 mohm", "0.001\u2009Ω"]);
+  });
+
+  it("has the material with version, source and provenance", () => {
+    const facts = content.sections
+      .find(({ id }) => id === "medium")
+      ?.blocks.flatMap((block) => (block.kind === "facts" ? block.facts : []));
+    expect(facts?.map(({ name }) => name)).toEqual(["Material", "Range", "True resistivity", "Source"]);
+    expect(facts?.[0].note).toMatch(/^copper-annealed, version \d+$/);
+  });
+
+  it("has number, bounds, their basis, verdict and the drawing", () => {
+    expect(content.headline.bracket).toMatch(/^\[[\d.]+ … [\d.]+\] µΩ$/);
+    expect(content.headline.statements[0]).toContain("bounds proved");
+    expect(content.headline.verdict?.outcome).toBe("met");
+    expect(content.picture?.kind).toBe("shape");
+    expect(content.sections.map(({ id }) => id)).toEqual(
+      expect.arrayContaining([
+        "inputs",
+        "medium",
+        "uncertainty",
+        "steps",
+        "checks",
+        "assumptions",
+        "sources",
+        "versions",
+      ]),
+    );
+  });
+
+  it("shows what was stored as it is where it does not know the form", () => {
+    const odd = contentOf({ ...recordOf(BAR), operation: "sizing", result: { solutions: [] } });
+    expect(odd.sections.map(({ id }) => id)).toEqual(["request", "result", "versions"]);
+  });
+});
+
+describe.each(["a4", "letter"] as const)("the printed sheet on %s", (paper) => {
+  it("says on paper what the page says", async () => {
+    const content = contentOf(recordOf(BAR));
+    const pdf = await sheetPdf(content, paper);
+    const pages = pdfPages(pdf);
+    const all = pages.join("\n");
+    expect(pdfTitle(pdf)).toBe(`Main bar, panel 2 · ${content.code}`);
+    expect(Buffer.from(pdf).toString("latin1")).toContain(
+      paper === "a4" ? "[0 0 595.28 841.89]" : "[0 0 612 792]",
+    );
+    const figure = content.headline.text.replace("\u2009", "\u00a0");
+    for (const text of [figure, content.headline.bracket, "630 A", "Ines Hartwell", "250 mm"]) {
+      expect(all).toContain(text);
+    }
+    pages.forEach((page, index) => {
+      expect(page).toContain(content.code);
+      expect(page).toContain(`page ${index + 1} of ${pages.length}`);
+    });
+    for (const { title } of content.sections) expect(all).toContain(title);
+  });
+
+  it("carries a graded shell with its layers", async () => {
+    const pages = pdfPages(await sheetPdf(contentOf(recordOf(SHELL, "Sleeve “Ω”, rev Č")), paper));
+    expect(pages.join("\n")).toContain("3 pS/m");
+    expect(pages[0]).toContain("Sleeve “Ω”, rev Č");
+  });
+});
+
+describe("every shape's record", () => {
+  it("has a sheet", async () => {
+    for (const id of ["earth-rod-layered", "clad-wire", "sheet-meander", "eccentric-cylinders"]) {
+      const shape = findShape(id);
+      if (!shape) throw new Error(`The catalogue lacks ${id}.`);
+      const pages = pdfPages(await sheetPdf(contentOf(recordOf(exampleRequest(shape), shape.title)), "a4"));
+      expect(pages[0], id).toContain(shape.title);
+    }
+  });
+});
