@@ -11,6 +11,11 @@ const NEXT = [
     text: "Every shape of the catalogue, with its drawing, its field and the exact call.",
   },
   {
+    href: "/outline",
+    title: "Outline",
+    text: "Draw any shape with holes and arcs, solve the field on it, and see the bracket close.",
+  },
+  {
     href: "/docs/api",
     title: "API reference",
     text: "Every operation, with calls that can be sent from the page.",
@@ -32,7 +37,7 @@ export default function Home() {
       <LiveShell start={SHELL_START} initial={initial} origin={sharedService().config.origin} />
       <section aria-labelledby="next" className="mt-5 border-t border-rule pt-3">
         <h2 id="next">Where to go next</h2>
-        <ul className="mt-2 grid gap-3 medium:grid-cols-3">
+        <ul className="mt-2 grid gap-3 medium:grid-cols-2 wide:grid-cols-4">
           {NEXT.map(({ href, title, text }) => (
             <li key={href}>
               <h3>

@@ -1,4 +1,5 @@
 import type { Metadata } from "next";
+import Link from "next/link";
 import { catalogue, type Shape, shapeEntry } from "@/lib/engine";
 import { CatalogueSheet, type CatalogueSection } from "./_catalogue/catalogue-sheet";
 import { Thumbnail } from "./_catalogue/thumbnail";
@@ -26,7 +27,11 @@ export default async function CataloguePage({ searchParams }: PageProps) {
       <h1>Calculate</h1>
       <p className="mt-1 mb-3 max-w-prose text-ink-soft">
         Pick the shape that carries the current. Each drawing shows its example: copper edge the high
-        terminal, verdigris edge the low one.
+        terminal, verdigris edge the low one. What is not here can be drawn as an{" "}
+        <Link href="/outline" className="link">
+          outline
+        </Link>
+        .
       </p>
       <CatalogueSheet sections={sections} start={typeof q === "string" ? q : ""} />
     </>

@@ -2,7 +2,9 @@ import type { Metadata } from "next";
 import { libraryMaterials } from "@/lib/engine";
 import { sharedService } from "@/lib/service/service";
 import { materialChoices } from "../calculate/_server/material-choices";
+import { savingFor } from "../calculate/_server/saving";
 import { startSketch } from "./_model/start-outlines";
+import { KEPT_QUERY } from "./_model/address";
 import { OutlinePage } from "./_outline/outline-page";
 
 export const metadata: Metadata = {
@@ -13,7 +15,7 @@ export const metadata: Metadata = {
 const START_C = 20;
 const START = startSketch("bend");
 
-export default function Outline() {
+export default async function Outline() {
   return (
     <OutlinePage
       heading={
@@ -28,7 +30,7 @@ export default function Outline() {
       start={START}
       materials={materialChoices(libraryMaterials, START_C)}
       origin={sharedService().config.origin}
-      saving={{ kind: "sign-in", href: "/sign-in?next=/outline?kept" }}
+      saving={await savingFor(`/outline?${KEPT_QUERY}`)}
     />
   );
 }

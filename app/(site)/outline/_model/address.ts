@@ -6,6 +6,9 @@ import { fieldBody } from "./field-body";
 import { readBodyText } from "./read-body";
 import type { Sketch } from "./sketch";
 
+/** The query of an address that asks for what this tab kept before it was left for signing in. */
+export const KEPT_QUERY = "kept";
+
 /** Plain JSON up to this length; packed beyond. */
 const LONGEST_PLAIN = 1500;
 

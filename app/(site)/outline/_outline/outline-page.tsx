@@ -50,7 +50,8 @@ interface OutlinePageProps {
   readonly start: Sketch;
   readonly materials: readonly MaterialChoice[];
   readonly origin: string;
-  readonly saving: Saving;
+  /** How the reader may keep a solution; left out for one who may not. */
+  readonly saving?: Saving;
 }
 
 /** Draw an outline, name its terminals, solve the field on it and read it off. */
@@ -122,7 +123,7 @@ function LiveOutline({ heading, start, materials, origin, saving }: OutlinePageP
         <div className="min-w-0 grow basis-[18rem]">{heading}</div>
         <div className="flex flex-wrap items-center gap-0.5 print:hidden">
           <PageTools state={state} onReplace={state.replace} />
-          <SaveRecord saving={saving} path="/fields" body={body} title="Outline" />
+          {saving ? <SaveRecord saving={saving} path="/fields" body={body} title="Outline" /> : null}
         </div>
       </div>
       <div className="mt-2 grid grid-cols-1 items-start gap-x-4 gap-y-3 wide:grid-cols-[minmax(0,1fr)_22rem]">

@@ -2,14 +2,12 @@
 
 import { useCallback, useEffect, useState } from "react";
 import { replaceAddress } from "../../calculate/replace-address";
-import { sketchFromHash, sketchToHash } from "../_model/address";
+import { KEPT_QUERY, sketchFromHash, sketchToHash } from "../_model/address";
 import { commit, type History, redo, settle, startHistory, undo } from "../_model/history";
 import type { Sketch } from "../_model/sketch";
 
 const ADDRESS_MS = 300;
 const KEPT = "rhoform-outline";
-/** The query of an address that asks for what this tab kept before it was left for signing in. */
-export const KEPT_QUERY = "kept";
 
 export interface SketchState {
   readonly sketch: Sketch;

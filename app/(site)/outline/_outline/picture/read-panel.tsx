@@ -20,7 +20,8 @@ const LinePlots = dynamic(() => import("./line-plots").then((module) => module.L
   loading: () => <Loading what="the plots" className="min-h-34" />,
 });
 
-const PROBE_MS = 120;
+/** A pointer that rests this long asks; calls of a signed-out page are few. */
+const PROBE_MS = 250;
 const SAMPLES = 201;
 
 interface ReadPanelProps {
