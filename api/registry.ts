@@ -10,6 +10,7 @@ import { postOutline, readOutline } from "./operations/outlines";
 import { deleteRecord, listRecords, patchRecord, readRecord, replayRecord } from "./operations/records";
 import { postResistance } from "./operations/resistance";
 import { getResistance } from "./operations/resistance-query";
+import { postSizing } from "./operations/sizing";
 import { listShapes, readShape } from "./operations/shapes";
 import { readUsage } from "./operations/usage";
 import { RouteTable } from "./route-table";
@@ -20,6 +21,7 @@ export const registry = new RouteTable([
   readShape,
   postResistance,
   getResistance,
+  postSizing,
   postBatch,
   postOutline,
   readOutline,

@@ -3,8 +3,12 @@ import { computeResistance } from "@/lib/engine";
 import { usableMaterial } from "@/lib/materials/team-materials";
 import { Refusal } from "@/lib/service/refusal";
 import { bodyRefusal } from "../body";
+import { overdueAfter } from "../deadline";
 import type { CallContext } from "../operation";
 import { type ProblemDocument, problemDocument } from "../respond";
+
+/** An item that takes longer, by the trials it asks for, is refused: the others wait meanwhile. */
+const LONGEST_ITEM_MS = 1_000;
 
 /** What one item of a batch is answered with. */
 export type ItemOutcome =
@@ -29,7 +33,14 @@ export class ItemComputer {
           { pointer: "#/record", detail: "is not for items of a batch: send the request by itself." },
         ]);
       }
-      return { index, status: 200, result: computeResistance(request, { material: this.material }) };
+      return {
+        index,
+        status: 200,
+        result: computeResistance(request, {
+          material: this.material,
+          overdue: overdueAfter(LONGEST_ITEM_MS),
+        }),
+      };
     } catch (error) {
       return this.refused(index, error);
     }

@@ -5,13 +5,14 @@ import { requireKey, requireRecorder } from "@/lib/auth/access";
 import { prepareReplay } from "@/lib/fields/replay-field";
 import { MOST_COMPUTATIONS } from "@/lib/jobs/field-cost";
 import { recordView, relabel, removeRecord, teamRecord } from "@/lib/records/records";
-import { replayResistance } from "@/lib/records/replay";
+import { replayResistance, replaySizing } from "@/lib/records/replay";
 import { type CallContext, defineOperation, json } from "../operation";
 import { decodeCursor, encodeCursor, page } from "../pagination";
 import { fieldSchema } from "../schemas/field";
 import { pageOf, pageQuery } from "../schemas/page";
 import { recordSchema, relabelSchema, replaySchema } from "../schemas/record";
 import { answerField, startField } from "./field-start";
+import { computationsOf } from "./resistance";
 
 /** Requests and results of one page together, characters; a page ends early where they would be more. */
 const LARGEST_PAGE = 2_000_000;
@@ -159,7 +160,7 @@ export const replayRecord = defineOperation({
   tag: "Records",
   summary: "Replay a record",
   description:
-    "Computes the record again with today's engine and the material versions it pinned, and shows the drift. It stores no record. A resistance costs one computation. A field solution is answered, and costs, as `POST /fields` does: `Prefer: wait=N` waits for its end, 202 has its `Location`, and `replay` in it shows the drift once it is finished; reading it later takes the scope `field`.",
+    "Computes the record again with today's engine and the material versions it pinned, and shows the drift. It stores no record. A resistance and a sizing cost what they did. A field solution is answered, and costs, as `POST /fields` does: `Prefer: wait=N` waits for its end, 202 has its `Location`, and `replay` in it shows the drift once it is finished; reading it later takes the scope `field`.",
   scope: "compute",
   request: { path: recordId },
   responses: {
@@ -206,8 +207,15 @@ export const replayRecord = defineOperation({
       await context.reserve(MOST_COMPUTATIONS);
       return answerField(context, await startField(context, replay));
     }
-    await context.reserve(1);
+    if (row.operation === "sizing") {
+      const costs = computationsOf(JSON.parse(row.request));
+      await context.reserve(costs);
+      const replay = replaySizing(service.db, row);
+      return json(200, replay, { shape: replay.now.shape, computations: costs });
+    }
+    const costs = computationsOf(JSON.parse(row.request));
+    await context.reserve(costs);
     const replay = replayResistance(service.db, row);
-    return json(200, replay, { shape: replay.now.shape, computations: 1 });
+    return json(200, replay, { shape: replay.now.shape, computations: costs });
   },
 });

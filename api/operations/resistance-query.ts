@@ -3,7 +3,7 @@ import { findShape, InputError, shapeEntry } from "@/lib/engine";
 import { type CallContext, defineOperation, json, type Outcome } from "../operation";
 import { parameterRefusal, queryObject } from "../parameters";
 import { answeredResistance } from "../schemas/resistance";
-import { compute } from "./resistance";
+import { computationsOf, compute } from "./resistance";
 import { unknownShape } from "./shapes";
 
 const MEDIUM_PARAMETERS = [
@@ -40,6 +40,12 @@ const parameters = z.looseObject({
   voltage: value("Voltage across the terminals; at most one of voltage, current and power."),
   current: value("Current through the terminals."),
   power: value("Power turned to heat."),
+  uncertainty: z
+    .enum(["propagation", "worst-case", "monte-carlo"])
+    .optional()
+    .meta({ description: "How far the resistance strays with the tolerances, by this method." }),
+  trials: value("Trials of monte-carlo, a whole number."),
+  seed: value("Seed of monte-carlo, a whole number."),
   include: value("Parts to add, separated by commas: steps, profile, checks, peak.", "steps,checks"),
 });
 
@@ -64,6 +70,7 @@ function requestOf(shape: string, query: URLSearchParams): Request {
   const medium: Record<string, unknown> = {};
   const media: Record<string, Record<string, unknown>> = {};
   const operating: Record<string, unknown> = {};
+  const uncertainty: Record<string, unknown> = {};
   let include: string[] | undefined;
   const origins = new Map<string, string>();
   const put = (
@@ -81,16 +88,21 @@ function requestOf(shape: string, query: URLSearchParams): Request {
     const [prefix, member] = name.split(".", 2);
     if (types.has(name)) {
       const whole = types.get(name) === "integer" && /^[+-]?\d+$/.test(text.trim());
-      put(dimensions, "#/dimensions", name, whole ? Number(text) : text, name);
+      put(dimensions, "#/dimensions", name, whole ? Number(text) : tolerated(text), name);
     } else if (member !== undefined && mediaNames.includes(prefix)) {
       put((media[prefix] ??= {}), `#/media/${prefix}`, member, mediumValue(name, member, text), name);
       origins.set(`#/media/${prefix}`, name);
     } else if (MEDIUM_PARAMETERS.includes(name))
       put(medium, "#/medium", name, mediumValue(name, name, text), name);
-    else if (OPERATING_PARAMETERS.includes(name)) put(operating, "#/operating", name, text, name);
+    else if (OPERATING_PARAMETERS.includes(name)) put(operating, "#/operating", name, tolerated(text), name);
+    else if (name === "uncertainty") put(uncertainty, "#/uncertainty", "method", text, name);
+    else if (name === "trials" || name === "seed")
+      put(uncertainty, "#/uncertainty", name, /^\d+$/.test(text.trim()) ? Number(text) : text, name);
     else if (name === "include") include = text.split(",").map((part) => part.trim());
     else put(dimensions, "#/dimensions", name, text, name);
   }
+  origins.set("#/uncertainty", "uncertainty");
+  origins.set("#/uncertainty/method", "uncertainty");
   origins.set("#/medium", Object.keys(medium)[0] ?? "material");
   origins.set("#/media", `${mediaNames[0] ?? "core"}.material`);
   return {
@@ -101,13 +113,20 @@ function requestOf(shape: string, query: URLSearchParams): Request {
       ...(Object.keys(media).length > 0 ? { media } : {}),
       ...(Object.keys(operating).length > 0 ? { operating } : {}),
       ...(include ? { include } : {}),
+      ...(Object.keys(uncertainty).length > 0 ? { uncertainty } : {}),
     },
     origins,
   };
 }
 
+/** `10mm±0.1mm`, `10mm±1%` or `10mm+/-0.1mm` as a quantity with its tolerance; every other text as it is. */
+function tolerated(text: string): unknown {
+  const sides = text.split(/±|\+\/-/);
+  return sides.length === 2 ? { value: sides[0].trim(), tolerance: sides[1].trim() } : text;
+}
+
 function mediumValue(parameter: string, member: string, text: string): unknown {
-  if (member !== "extrapolate") return text;
+  if (member !== "extrapolate") return member === "material" ? text : tolerated(text);
   if (text === "true" || text === "false") return text === "true";
   throw parameterRefusal([{ parameter, detail: "must be true or false." }]);
 }
@@ -130,7 +149,7 @@ export const getResistance = defineOperation({
   tag: "Resistance",
   summary: "Compute one resistance by address",
   description:
-    "The same calculation for spreadsheets and links: every dimension of the shape is a parameter of its own name (`innerRadius=2mm`), a unit may follow the number. Shapes of two media take a prefix (`core.material=…&cladding.resistivity=…`). Graded media need the body of `POST /resistance`. As `text/plain`, or with `format=text`, the answer is the bare number in ohms, and an error is one line that begins with `error:` and keeps its status.",
+    "The same calculation for spreadsheets and links: every dimension of the shape is a parameter of its own name (`innerRadius=2mm`), a unit may follow the number. Shapes of two media take a prefix (`core.material=…&cladding.resistivity=…`). A tolerance follows its value as `width=50mm±0.4mm` (or `±1%`), and `uncertainty=` names the method. Graded media and other tolerances need the body of `POST /resistance`. As `text/plain`, or with `format=text`, the answer is the bare number in ohms, and an error is one line that begins with `error:` and keeps its status.",
   scope: "compute",
   produces: ["application/json", "text/plain"],
   request: {
@@ -164,6 +183,19 @@ export const getResistance = defineOperation({
       },
     },
     {
+      name: "tolerance",
+      summary: "With a tolerance",
+      status: 200,
+      path: { shape: "bar" },
+      query: {
+        length: "1m",
+        width: "50mm±0.4mm",
+        thickness: "10mm±1%",
+        material: "copper-annealed",
+        uncertainty: "propagation",
+      },
+    },
+    {
       name: "bareNumber",
       summary: "A bare number for a spreadsheet",
       status: 200,
@@ -187,7 +219,8 @@ export const getResistance = defineOperation({
       query: { innerRadius: "2mm", outerRadius: "5mm", material: "copper-annealed" },
     },
   ],
-  reserve: () => 1,
+  reserve: ({ query }) =>
+    computationsOf({ uncertainty: { method: query.uncertainty, trials: Number(query.trials) } }),
   handler: ({ path, rawQuery }, context) => {
     const { body, origins } = requestOf(path.shape, rawQuery);
     try {
@@ -203,7 +236,7 @@ export const getResistance = defineOperation({
 
 function answer(body: unknown, context: CallContext): Outcome {
   const result = compute(body, context);
-  const facts = { shape: result.shape, computations: 1 };
+  const facts = { shape: result.shape, computations: computationsOf(body) };
   if (context.accepts !== "text/plain") return json(200, result, facts);
   return {
     status: 200,

@@ -13,6 +13,7 @@ import { widgetComplaints, widgetRequest } from "@/lib/embeds/enforce";
 import { usableMaterial } from "@/lib/materials/team-materials";
 import { storeRecord } from "@/lib/records/records";
 import { BASE_PATH } from "../base-path";
+import { overdueAfter } from "../deadline";
 import type { Example } from "../documentation";
 import { type CallContext, defineOperation, json, type Outcome } from "../operation";
 import { answeredResistance, documentedResistanceRequest } from "../schemas/resistance";
@@ -20,8 +21,24 @@ import { answeredResistance, documentedResistanceRequest } from "../schemas/resi
 /** Computes with the materials that the caller may use. */
 export function compute(request: unknown, { service, principal }: CallContext): ResistanceResult {
   const teamId = principal.kind === "key" || principal.kind === "embed" ? principal.teamId : undefined;
-  return computeResistance(request, { material: (id) => usableMaterial(service.db, teamId, id) });
+  return computeResistance(request, {
+    material: (id) => usableMaterial(service.db, teamId, id),
+    overdue: overdueAfter(),
+  });
 }
+
+/** Trials of one computation of the month. */
+const TRIALS_A_COMPUTATION = 100_000;
+
+/** Computations that a request costs: one, and one more for each further 100,000 trials begun. */
+export function computationsOf(body: unknown): number {
+  const trials = manyTrials.safeParse(body);
+  return trials.success ? Math.ceil(trials.data.uncertainty.trials / TRIALS_A_COMPUTATION) : 1;
+}
+
+const manyTrials = z.object({
+  uncertainty: z.object({ method: z.literal("monte-carlo"), trials: z.int().min(1).max(1_000_000) }),
+});
 
 /** The open values of a widget, with everything else as its version fixes it. */
 function computeWidget(body: unknown, context: CallContext, { definition }: EmbedPrincipal): Outcome {
@@ -49,6 +66,19 @@ const sleeve = {
   operating: { temperature: "75 degC", voltage: "500 V" },
 };
 
+const busbar = {
+  shape: "bar",
+  dimensions: {
+    length: { value: "1.2 m", tolerance: "2 mm" },
+    width: { value: "50 mm", tolerance: "0.4 mm", distribution: "normal" },
+    thickness: { value: "10 mm", plus: "0 mm", minus: "0.2 mm" },
+  },
+  medium: { material: "copper-annealed" },
+  operating: { temperature: { value: 65, tolerance: "5 K" } },
+  requirement: { max: "60 uohm" },
+  uncertainty: { method: "worst-case" },
+};
+
 const mistakes: readonly Example[] = [
   {
     name: "unknownShape",
@@ -74,6 +104,15 @@ const mistakes: readonly Example[] = [
     status: 422,
     body: { ...sleeve, medium: { conductivity: 1e-12, material: "copper-annealed" } },
   },
+  {
+    name: "toleranceTooLarge",
+    summary: "A tolerance that lets a length vanish",
+    status: 422,
+    body: {
+      ...busbar,
+      dimensions: { ...busbar.dimensions, thickness: { value: "1 mm", tolerance: "1 mm" } },
+    },
+  },
 ];
 
 export const postResistance = defineOperation({
@@ -83,7 +122,7 @@ export const postResistance = defineOperation({
   tag: "Resistance",
   summary: "Compute one resistance",
   description:
-    "From a shape, a medium and two terminals to a DC resistance with bounds: how it was computed, what it assumes, which cautions apply, and the engine's checks on this very answer. With `record` the calculation is stored for the team and can be replayed later; then an `Idempotency-Key` counts. Costs one computation of the month; a refused request costs none.",
+    "From a shape, a medium and two terminals to a DC resistance with bounds: how it was computed, what it assumes, which cautions apply, and the engine's checks on this very answer. With `record` the calculation is stored for the team and can be replayed later; then an `Idempotency-Key` counts. A dimension, a value of the medium and the temperature may be an object with a tolerance; with `uncertainty` the answer tells how far the resistance strays, the stated uncertainty of the materials included, and what each input contributes. Without `uncertainty` the nominal values alone count. Costs one computation of the month, by Monte Carlo one for each 100,000 trials begun; a refused request costs none.",
   scope: "compute",
   widgets: true,
   request: {
@@ -116,6 +155,18 @@ export const postResistance = defineOperation({
       headers: { "Idempotency-Key": "sleeve-rev-c" },
       body: { ...sleeve, record: { label: "Sleeve, rev C" } },
     },
+    {
+      name: "tolerances",
+      summary: "A busbar with tolerances: how far its resistance strays, held against a requirement",
+      status: 200,
+      body: busbar,
+    },
+    {
+      name: "monteCarlo",
+      summary: "The same by Monte Carlo, repeatable by its seed",
+      status: 200,
+      body: { ...busbar, include: [], uncertainty: { method: "monte-carlo", trials: 20_000, seed: 7 } },
+    },
     ...catalogue.map((shape): Example => ({
       name: shape.id.replace(/-(.)/g, (_, letter: string) => letter.toUpperCase()),
       summary: shape.title,
@@ -124,13 +175,13 @@ export const postResistance = defineOperation({
     })),
     ...mistakes,
   ],
-  reserve: () => 1,
+  reserve: ({ body }) => computationsOf(body),
   stores: ({ body }) => asksForRecord(body),
   handler: ({ body }, context) => {
     if (context.principal.kind === "embed") return computeWidget(body, context, context.principal);
     const by = asksForRecord(body) ? requireRecorder(context.principal) : undefined;
     const result = compute(body, context);
-    const facts = { shape: result.shape, computations: 1 };
+    const facts = { shape: result.shape, computations: computationsOf(body) };
     if (!by) return json(200, result, facts);
 
     const { record, ...request } = bodyMembers.parse(body);

@@ -1,19 +1,23 @@
 import { z } from "zod";
 import { fieldResult } from "./field";
 import { resistanceResult } from "./resistance";
+import { sizingResult } from "./sizing";
 
 export const recordSchema = z
   .object({
     id: z.string(),
-    operation: z.string().meta({ description: "What computed it: `resistance` or `field`." }),
+    operation: z
+      .string()
+      .meta({ description: "What computed it: `resistance`, `sizing` or `field`." }),
     label: z.string(),
     createdAt: z.iso.datetime(),
     by: z
       .object({ kind: z.string(), id: z.string(), name: z.string() })
       .meta({ description: "Who stored it." }),
     request: z.record(z.string(), z.unknown()).meta({ description: "What was asked." }),
-    result: z.union([resistanceResult, fieldResult]).meta({
-      description: "What came out: a ResistanceResult, or a FieldResult where `operation` is `field`.",
+    result: z.union([resistanceResult, sizingResult, fieldResult]).meta({
+      description:
+        "What came out: a ResistanceResult, a SizingResult where `operation` is `sizing`, or a FieldResult where it is `field`.",
     }),
     materials: z
       .array(z.object({ id: z.string(), version: z.int() }))
@@ -29,9 +33,14 @@ export const relabelSchema = z
 
 export const replaySchema = z
   .object({
-    before: resistanceResult,
-    now: resistanceResult,
-    drift: z.number().meta({ description: "(now − before)/before of the resistance." }),
-    identical: z.boolean().meta({ description: "Whether value and bounds are the same to the last bit." }),
+    before: z.union([resistanceResult, sizingResult]),
+    now: z.union([resistanceResult, sizingResult]),
+    drift: z.number().meta({
+      description: "(now − before)/before of the resistance; of a sizing, of the dimension found.",
+    }),
+    identical: z.boolean().meta({
+      description:
+        "Whether value, bounds and uncertainty, or the dimensions found, are the same to the last bit.",
+    }),
   })
   .meta({ id: "Replay", description: "A stored calculation beside the same one computed today." });

@@ -3,7 +3,6 @@ import {
   boundedResistanceSchema,
   catalogue,
   includeSchema,
-  mediumSchema,
   operatingSchema,
   recordRequestSchema,
   requirementSchema,
@@ -11,13 +10,20 @@ import {
   type Shape,
   shapeEntry,
   shapeEntrySchema,
+  sizingFields,
+  sizingSolutionSchema,
+  tolerancedSchema,
+  uncertaintyRequestSchema,
+  uncertaintySchema,
 } from "@/lib/engine";
+import { documentedMedium, documentedOperating } from "./toleranced";
 
 const optional = {
-  operating: operatingSchema.optional(),
+  operating: documentedOperating.optional(),
   include: includeSchema.optional(),
   record: recordRequestSchema.optional(),
   requirement: requirementSchema.optional(),
+  uncertainty: uncertaintyRequestSchema.optional(),
 };
 
 type Entry = z.infer<typeof shapeEntrySchema>;
@@ -39,7 +45,7 @@ function dimensionSchema(dimension: Dimension): z.ZodType {
       .meta({ description });
   }
   const bare = unit === "1" ? "" : ` A bare number is in ${unit}; a text carries its unit.`;
-  return z.union([z.number(), z.string()]).meta({ description: description + bare });
+  return z.union([z.number(), z.string(), tolerancedSchema]).meta({ description: description + bare });
 }
 
 function bareUnit(unit: string | null): string {
@@ -51,14 +57,14 @@ function pascal(id: string): string {
   return id.replace(/(?:^|-)(.)/g, (_, letter: string) => letter.toUpperCase());
 }
 
-/** The body of a resistance request for one shape, with its dimensions by name. */
-function requestFor(shape: Shape) {
+/** The members of a resistance request for one shape, with its dimensions by name, all optional where one is to be found. */
+function membersFor(shape: Shape, sizing: boolean) {
   const entry = shapeEntry(shape);
   const alternatives = new Set(entry.alternatives.flat());
   const dimensions = Object.fromEntries(
     entry.dimensions.map((dimension) => {
       const schema = dimensionSchema(dimension);
-      const required = dimension.required && !alternatives.has(dimension.name);
+      const required = dimension.required && !alternatives.has(dimension.name) && !sizing;
       return [dimension.name, required ? schema : schema.optional()];
     }),
   );
@@ -67,22 +73,42 @@ function requestFor(shape: Shape) {
     entry.media.kind === "two"
       ? {
           media: z
-            .strictObject(Object.fromEntries(entry.media.names.map(({ name }) => [name, mediumSchema])))
+            .strictObject(Object.fromEntries(entry.media.names.map(({ name }) => [name, documentedMedium])))
             .meta({
               description: entry.media.names.map(({ name, label }) => `${name}: ${label}`).join("; "),
             }),
         }
-      : { medium: mediumSchema };
+      : { medium: documentedMedium };
+  return {
+    shape: z.literal(shape.id),
+    dimensions: z.strictObject(dimensions).meta({
+      description: `The shape's dimensions${sizing ? ", without the one to find" : ""}${groups === "" ? "" : `; ${groups}`}.`,
+    }),
+    ...medium,
+    ...optional,
+  };
+}
+
+function requestFor(shape: Shape) {
   return z
-    .strictObject({
-      shape: z.literal(shape.id),
-      dimensions: z.strictObject(dimensions).meta({
-        description: groups === "" ? "The shape's dimensions." : `The shape's dimensions; ${groups}.`,
-      }),
-      ...medium,
-      ...optional,
-    })
+    .strictObject(membersFor(shape, false))
     .meta({ id: `${pascal(shape.id)}Request`, description: shape.summary });
+}
+
+/** The body of a sizing for one shape. */
+function sizingFor(shape: Shape) {
+  return z
+    .strictObject({ ...membersFor(shape, true), ...sizingFields })
+    .meta({ id: `${pascal(shape.id)}Sizing`, description: shape.summary });
+}
+
+/** Every shape's sizing, told apart by `shape`. Made when first asked for. */
+export function documentedSizingRequest(): z.ZodType {
+  const [first, ...rest] = catalogue.map(sizingFor);
+  return z.discriminatedUnion("shape", [first, ...rest]).meta({
+    id: "SizingRequest",
+    description: "A resistance request with one dimension left out, and the resistance that it is to give.",
+  });
 }
 
 /** Every shape's request, told apart by `shape`: what clients get their types from. Made when first asked for. */
@@ -115,8 +141,13 @@ export const shapeSchema = shapeEntrySchema.meta({ id: "Shape", description: "On
 /** Gives the engine's shared parts names of their own in the document, so that clients share the types. */
 export function nameComponents(): void {
   const parts: readonly (readonly [z.ZodType, string])[] = [
-    [mediumSchema, "Medium"],
+    [documentedMedium, "Medium"],
     [operatingSchema, "Operating"],
+    [documentedOperating, "TolerancedOperating"],
+    [tolerancedSchema, "TolerancedQuantity"],
+    [uncertaintyRequestSchema, "UncertaintyRequest"],
+    [uncertaintySchema, "Uncertainty"],
+    [sizingSolutionSchema, "SizingSolution"],
     [requirementSchema, "Requirement"],
     [boundedResistanceSchema, "BoundedResistance"],
   ];

@@ -88,6 +88,15 @@ export {
   type UncertaintyRequest,
 } from "./resistance/uncertainty/tolerance-schema";
 export { uncertaintySchema, type Uncertainty } from "./resistance/uncertainty/result-schema";
+export {
+  sizingFields,
+  sizingRequestSchema,
+  sizingResultSchema,
+  sizingSolutionSchema,
+  type SizingResult,
+  type SizingSolution,
+} from "./resistance/sizing/sizing-schema";
+export { computeSizing } from "./resistance/sizing/compute-sizing";
 export type { ComputeContext } from "./resistance/compute-context";
 export { computeResistance } from "./resistance/compute-resistance";
 

@@ -1,18 +1,31 @@
 import { z } from "zod";
 import type { Database } from "@/db/client";
 import type { RecordRow } from "@/db/queries/records";
-import { boundedResistanceSchema, computeResistance, type ResistanceResult } from "@/lib/engine";
+import {
+  boundedResistanceSchema,
+  computeResistance,
+  computeSizing,
+  type ComputeContext,
+  type ResistanceResult,
+  type SizingResult,
+  sizingResultSchema,
+  uncertaintySchema,
+} from "@/lib/engine";
 import { pinnedMaterial } from "../materials/team-materials";
 
-const storedResult = z.object({ resistance: boundedResistanceSchema });
+const storedResult = z.object({
+  resistance: boundedResistanceSchema,
+  uncertainty: uncertaintySchema.optional(),
+});
+const storedSizing = sizingResultSchema.pick({ solutions: true });
 
 /** A stored calculation beside the same one computed today. */
-export interface Replay {
+export interface Replay<Result = ResistanceResult> {
   readonly before: unknown;
-  readonly now: ResistanceResult;
-  /** (now − before)/before of the resistance. */
+  readonly now: Result;
+  /** (now − before)/before of the resistance; for a sizing the largest such change of a dimension found. */
   readonly drift: number;
-  /** Whether value and bounds are the same to the last bit. */
+  /** Whether value, bounds and uncertainty, or for a sizing the dimensions found, are the same to the last bit. */
   readonly identical: boolean;
 }
 
@@ -22,17 +35,38 @@ export interface Replay {
  */
 export function replayResistance(db: Database, row: RecordRow): Replay {
   const before: unknown = JSON.parse(row.result);
-  const was = storedResult.parse(before).resistance;
-  const pinned = new Map(row.materials.map(({ id, version }) => [id, version]));
+  const { resistance: was, uncertainty } = storedResult.parse(before);
   const request: unknown = JSON.parse(row.request);
-  const now = computeResistance(request, {
-    material: (id) => pinnedMaterial(db, row.teamId, id, pinned.get(id)),
-  });
+  const now = computeResistance(request, pinnedContext(db, row));
   const is = now.resistance;
   return {
     before,
     now,
     drift: (is.value - was.value) / was.value,
-    identical: is.value === was.value && is.lower === was.lower && is.upper === was.upper,
+    identical:
+      is.value === was.value &&
+      is.lower === was.lower &&
+      is.upper === was.upper &&
+      JSON.stringify(now.uncertainty) === JSON.stringify(uncertainty),
   };
+}
+
+/** Finds the dimension of a record of `sizing` again, in the same way. */
+export function replaySizing(db: Database, row: RecordRow): Replay<SizingResult> {
+  const before: unknown = JSON.parse(row.result);
+  const was = storedSizing.parse(before).solutions.map(({ dimension }) => dimension.value);
+  const now = computeSizing(JSON.parse(row.request), pinnedContext(db, row));
+  const is = now.solutions.map(({ dimension }) => dimension.value);
+  const drifts = was.map((value, i) => (is[i] === undefined ? 1 : (is[i] - value) / value));
+  return {
+    before,
+    now,
+    drift: drifts.reduce((most, drift) => (Math.abs(drift) > Math.abs(most) ? drift : most), 0),
+    identical: JSON.stringify(is) === JSON.stringify(was),
+  };
+}
+
+function pinnedContext(db: Database, row: RecordRow): ComputeContext {
+  const pinned = new Map(row.materials.map(({ id, version }) => [id, version]));
+  return { material: (id) => pinnedMaterial(db, row.teamId, id, pinned.get(id)) };
 }

@@ -42,6 +42,12 @@ __version__ = "1.0.0"
 
 __all__ = [
     "AnsweredItem",
+    "AnsweredNetwork",
+    "AnsweredNetworkCheck",
+    "AnsweredNetworkElement",
+    "AnsweredNetworkElementBounds",
+    "AnsweredNetworkNode",
+    "AnsweredNetworkResistance",
     "AnsweredResistance",
     "AnsweredResistanceCheck",
     "AnsweredResistanceConductance",
@@ -58,6 +64,9 @@ __all__ = [
     "AnsweredResistanceQuadrature",
     "AnsweredResistanceRecord",
     "AnsweredResistanceStep",
+    "AnsweredSizing",
+    "AnsweredSizingTarget",
+    "AnsweredSizingWithin",
     "ArcBar",
     "Bar",
     "BatchAnswer",
@@ -131,6 +140,7 @@ __all__ = [
     "MaterialResistivity5",
     "MaterialResistivity6",
     "MaterialUncertainty",
+    "NetworkResult",
     "Outline",
     "OutlineOutline",
     "OutlineOutlineOuter2",
@@ -176,6 +186,8 @@ __all__ = [
     "SheetStep",
     "SheetStrip",
     "SheetTee",
+    "SizingResult",
+    "SizingSolution",
     "SphereBuried",
     "SpherePair",
     "SpherePlane",
@@ -2108,6 +2120,95 @@ class AnsweredResistance:
 
 
 @dataclass(frozen=True)
+class AnsweredSizingTarget:
+    """Part of an answer."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("value", "unit", "text")
+    _FIXED: ClassVar[Mapping[str, Any]] = {"unit": "ohm"}
+    #: Resistance in ohms; lower ≤ value ≤ upper.
+    value: float
+    unit: str
+    #: The value for people, rounded as its bounds allow.
+    text: str
+
+
+@dataclass(frozen=True)
+class AnsweredSizingWithin:
+    """A value of the dimension."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("value", "unit", "text")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    #: Value of the dimension in `unit`; as a bare number it goes back into `dimensions`.
+    value: float
+    unit: str
+    #: The value for people.
+    text: str
+
+
+@dataclass(frozen=True)
+class SizingSolution:
+    """A value of the dimension with the resistance that it gives."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"dimension": "AnsweredSizingWithin", "resistance": "BoundedResistance", "conductance": "AnsweredResistanceConductance", "operating": "AnsweredResistanceOperating", "quadrature": "AnsweredResistanceQuadrature", "uncertainty": "Uncertainty", "peak": "AnsweredResistancePeak", "steps": ("list", "AnsweredResistanceStep"), "profile": "AnsweredResistanceProfile", "checks": ("list", "AnsweredResistanceCheck")}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("dimension", "resistance", "sensitivity", "exact", "conductance", "method", "operating", "cautions")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    #: A value of the dimension.
+    dimension: AnsweredSizingWithin
+    resistance: BoundedResistance
+    #: Derivative of the resistance by the dimension there, in ohms per `unit` of the dimension.
+    sensitivity: float
+    #: Whether the dimension gives the target: false for the whole numbers on either side of it where none does.
+    exact: bool
+    #: The reciprocal of the resistance.
+    conductance: AnsweredResistanceConductance
+    #: How the value was computed.
+    method: str
+    #: The operating point; voltage, current and power only where the request gave one of them.
+    operating: AnsweredResistanceOperating
+    cautions: List[str]
+    #: How the integral went; only where the method is quadrature.
+    quadrature: Optional[AnsweredResistanceQuadrature] = None
+    uncertainty: Optional[Uncertainty] = None
+    #: Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
+    verdict: Optional[str] = None
+    #: Where the field and the current density are largest.
+    peak: Optional[AnsweredResistancePeak] = None
+    steps: Optional[List[AnsweredResistanceStep]] = None
+    #: 101 samples along the flow, at the operating point or per volt.
+    profile: Optional[AnsweredResistanceProfile] = None
+    checks: Optional[List[AnsweredResistanceCheck]] = None
+
+
+@dataclass(frozen=True)
+class AnsweredSizing:
+    """The values of one dimension that give a resistance."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {"solve_for": "solveFor"}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"target": "AnsweredSizingTarget", "within": ("list", "AnsweredSizingWithin"), "solutions": ("list", "SizingSolution"), "sources": ("list", "ShapeSource"), "materials": ("list", "AnsweredResistanceMaterial"), "record": "AnsweredResistanceRecord"}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("shape", "solveFor", "target", "within", "solutions", "assumptions", "sources", "materials", "engine", "catalogue")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    shape: str
+    solve_for: str
+    target: AnsweredSizingTarget
+    #: The range that was searched.
+    within: List[AnsweredSizingWithin]
+    #: All that lie in the range, smallest first.
+    solutions: List[SizingSolution]
+    assumptions: List[str]
+    sources: List[ShapeSource]
+    materials: List[AnsweredResistanceMaterial]
+    engine: str
+    catalogue: str
+    #: Where the calculation was stored; only if `record` was in the request.
+    record: Optional[AnsweredResistanceRecord] = None
+
+
+@dataclass(frozen=True)
 class ResistanceResult:
     """A resistance, how sure it is and how it came about."""
 
@@ -2243,6 +2344,137 @@ class BatchAnswer:
     #: In the order of the request.
     items: List[Union[AnsweredItem, RefusedItem]]
     counts: BatchAnswerCounts
+
+
+@dataclass(frozen=True)
+class AnsweredNetworkResistance:
+    """The resistance between the ports, with its bounds."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {"bounds_basis": "boundsBasis"}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("value", "unit", "text", "lower", "upper", "boundsBasis", "proved")
+    _FIXED: ClassVar[Mapping[str, Any]] = {"unit": "ohm"}
+    #: Resistance in ohms; lower ≤ value ≤ upper.
+    value: float
+    unit: str
+    #: The value for people, rounded as its bounds allow.
+    text: str
+    #: Lower bound in ohms, below the upper one always.
+    lower: float
+    #: Upper bound in ohms.
+    upper: float
+    #: Where the bounds come from: rounding alone, or the elements' own bounds (all at their lowest, all at their highest; a network's resistance never falls when an element's rises) and rounding.
+    bounds_basis: str
+    #: Whether the bounds are proved for the stated problem.
+    proved: bool
+
+
+@dataclass(frozen=True)
+class AnsweredNetworkNode:
+    """A node."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("name", "voltage")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    name: str
+    #: Potential against the second port, V.
+    voltage: float
+
+
+@dataclass(frozen=True)
+class AnsweredNetworkElementBounds:
+    """How sure its resistance is, where a request gave it."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {"bounds_basis": "boundsBasis"}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("lower", "upper", "boundsBasis", "proved")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    #: Lower bound, ohm.
+    lower: float
+    #: Upper bound, ohm.
+    upper: float
+    #: Where the bounds come from: rounding (closed form or converged series), quadrature (error estimate), rayleigh (conducting sheets and insulating walls), formula-accuracy (stated accuracy of a published formula), energy (two field solutions), energy-quadrature (the same with estimated integrals).
+    bounds_basis: str
+    proved: bool
+
+
+@dataclass(frozen=True)
+class AnsweredNetworkElement:
+    """An element with what passes through it."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"bounds": "AnsweredNetworkElementBounds"}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("name", "between", "resistance", "current", "voltage", "power", "share", "sensitivity")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    name: str
+    between: List[str]
+    #: Resistance, ohm.
+    resistance: float
+    #: Current from its first node to its second, A.
+    current: float
+    #: Potential of its first node above its second, V.
+    voltage: float
+    #: Power turned to heat, W.
+    power: float
+    #: Its part of the whole power, 0 … 1.
+    share: float
+    #: By how much the network's resistance rises when its own rises, ohm per ohm: the square of its part of the current.
+    sensitivity: float
+    #: How sure its resistance is, where a request gave it.
+    bounds: Optional[AnsweredNetworkElementBounds] = None
+
+
+@dataclass(frozen=True)
+class AnsweredNetworkCheck:
+    """
+    One of the checks on this very answer: currents at each node add up to nothing (current-law), element
+    voltages are differences of node voltages (voltage-law), the elements' power is that of the ports
+    (power-balance).
+    """
+
+    _NAMES: ClassVar[Mapping[str, str]] = {}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("name", "applies", "passed", "deviation", "tolerance")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    name: str
+    applies: bool
+    passed: bool
+    #: Largest relative deviation found.
+    deviation: float
+    #: Largest deviation that passes.
+    tolerance: float
+
+
+@dataclass(frozen=True)
+class AnsweredNetwork:
+    """The resistance between the ports, element by element."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"resistance": "AnsweredNetworkResistance", "conductance": "AnsweredResistanceConductance", "operating": "AnsweredResistanceOperating", "nodes": ("list", "AnsweredNetworkNode"), "elements": ("list", "AnsweredNetworkElement"), "checks": ("list", "AnsweredNetworkCheck"), "sources": ("list", "ShapeSource"), "materials": ("list", "AnsweredResistanceMaterial"), "record": "AnsweredResistanceRecord"}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("resistance", "conductance", "operating", "per", "nodes", "elements", "checks", "cautions", "assumptions", "sources", "materials", "engine", "catalogue")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    #: The resistance between the ports, with its bounds.
+    resistance: AnsweredNetworkResistance
+    #: The reciprocal of the resistance.
+    conductance: AnsweredResistanceConductance
+    #: The operating point; voltage, current and power only where the request gave one of them.
+    operating: AnsweredResistanceOperating
+    #: Whether nodes and elements are told at the operating point or for one volt between the ports.
+    per: str
+    nodes: List[AnsweredNetworkNode]
+    elements: List[AnsweredNetworkElement]
+    checks: List[AnsweredNetworkCheck]
+    cautions: List[str]
+    assumptions: List[str]
+    sources: List[ShapeSource]
+    materials: List[AnsweredResistanceMaterial]
+    engine: str
+    catalogue: str
+    #: Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
+    verdict: Optional[str] = None
+    #: Where the calculation was stored; only if `record` was in the request.
+    record: Optional[AnsweredResistanceRecord] = None
 
 
 @dataclass(frozen=True)
@@ -2956,6 +3188,57 @@ class RecordBy:
 
 
 @dataclass(frozen=True)
+class SizingResult:
+    """The values of one dimension that give a resistance."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {"solve_for": "solveFor"}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"target": "AnsweredSizingTarget", "within": ("list", "AnsweredSizingWithin"), "solutions": ("list", "SizingSolution"), "sources": ("list", "ShapeSource"), "materials": ("list", "AnsweredResistanceMaterial")}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("shape", "solveFor", "target", "within", "solutions", "assumptions", "sources", "materials", "engine", "catalogue")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    shape: str
+    solve_for: str
+    target: AnsweredSizingTarget
+    #: The range that was searched.
+    within: List[AnsweredSizingWithin]
+    #: All that lie in the range, smallest first.
+    solutions: List[SizingSolution]
+    assumptions: List[str]
+    sources: List[ShapeSource]
+    materials: List[AnsweredResistanceMaterial]
+    engine: str
+    catalogue: str
+
+
+@dataclass(frozen=True)
+class NetworkResult:
+    """The resistance between the ports, and what passes through each element."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"resistance": "AnsweredNetworkResistance", "conductance": "AnsweredResistanceConductance", "operating": "AnsweredResistanceOperating", "nodes": ("list", "AnsweredNetworkNode"), "elements": ("list", "AnsweredNetworkElement"), "checks": ("list", "AnsweredNetworkCheck"), "sources": ("list", "ShapeSource"), "materials": ("list", "AnsweredResistanceMaterial")}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("resistance", "conductance", "operating", "per", "nodes", "elements", "checks", "cautions", "assumptions", "sources", "materials", "engine", "catalogue")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    #: The resistance between the ports, with its bounds.
+    resistance: AnsweredNetworkResistance
+    #: The reciprocal of the resistance.
+    conductance: AnsweredResistanceConductance
+    #: The operating point; voltage, current and power only where the request gave one of them.
+    operating: AnsweredResistanceOperating
+    #: Whether nodes and elements are told at the operating point or for one volt between the ports.
+    per: str
+    nodes: List[AnsweredNetworkNode]
+    elements: List[AnsweredNetworkElement]
+    checks: List[AnsweredNetworkCheck]
+    cautions: List[str]
+    assumptions: List[str]
+    sources: List[ShapeSource]
+    materials: List[AnsweredResistanceMaterial]
+    engine: str
+    catalogue: str
+    #: Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
+    verdict: Optional[str] = None
+
+
+@dataclass(frozen=True)
 class RecordMaterial:
     """Part of an answer."""
 
@@ -2972,11 +3255,11 @@ class Record:
     """A stored calculation."""
 
     _NAMES: ClassVar[Mapping[str, str]] = {"created_at": "createdAt"}
-    _SPECS: ClassVar[Mapping[str, _Spec]] = {"by": "RecordBy", "result": ("any", ("ResistanceResult", "FieldResult",)), "materials": ("list", "RecordMaterial")}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"by": "RecordBy", "result": ("any", ("ResistanceResult", "SizingResult", "NetworkResult", "FieldResult",)), "materials": ("list", "RecordMaterial")}
     _REQUIRED: ClassVar[Tuple[str, ...]] = ("id", "operation", "label", "createdAt", "by", "request", "result", "materials", "engine", "catalogue")
     _FIXED: ClassVar[Mapping[str, Any]] = {}
     id: str
-    #: What computed it: `resistance` or `field`.
+    #: What computed it: `resistance`, `sizing`, `network` or `field`.
     operation: str
     label: str
     created_at: str
@@ -2984,8 +3267,8 @@ class Record:
     by: RecordBy
     #: What was asked.
     request: Dict[str, Any]
-    #: What came out: a ResistanceResult, or a FieldResult where `operation` is `field`.
-    result: Union[ResistanceResult, FieldResult]
+    #: What came out: a ResistanceResult, a SizingResult where `operation` is `sizing`, a NetworkResult where it is `network`, or a FieldResult where it is `field`.
+    result: Union[ResistanceResult, SizingResult, NetworkResult, FieldResult]
     #: Materials that went in, with the versions that a replay uses.
     materials: List[RecordMaterial]
     #: Version of the engine that computed it.
@@ -3011,14 +3294,14 @@ class Replay:
     """A stored calculation beside the same one computed today."""
 
     _NAMES: ClassVar[Mapping[str, str]] = {}
-    _SPECS: ClassVar[Mapping[str, _Spec]] = {"before": "ResistanceResult", "now": "ResistanceResult"}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"before": ("any", ("ResistanceResult", "SizingResult", "NetworkResult",)), "now": ("any", ("ResistanceResult", "SizingResult", "NetworkResult",))}
     _REQUIRED: ClassVar[Tuple[str, ...]] = ("before", "now", "drift", "identical")
     _FIXED: ClassVar[Mapping[str, Any]] = {}
-    before: ResistanceResult
-    now: ResistanceResult
-    #: (now − before)/before of the resistance.
+    before: Union[ResistanceResult, SizingResult, NetworkResult]
+    now: Union[ResistanceResult, SizingResult, NetworkResult]
+    #: (now − before)/before of the resistance; of a sizing, of the dimension found.
     drift: float
-    #: Whether value and bounds are the same to the last bit.
+    #: Whether value, bounds and uncertainty, or the dimensions found, are the same to the last bit.
     identical: bool
 
 
@@ -3256,9 +3539,17 @@ class _Operations(_Transport):
         """Compute one resistance by address: ``GET /resistance/{shape}``."""
         return _read("AnsweredResistance", self.call("GET", f"/resistance/{urllib.parse.quote(shape, safe='')}", query={"material": material, "resistivity": resistivity, "conductivity": conductivity, "sheetResistance": sheet_resistance, "thickness": thickness, "extrapolate": extrapolate, "temperature": temperature, "voltage": voltage, "current": current, "power": power, "uncertainty": uncertainty, "trials": trials, "seed": seed, "include": include, "format": format, **{_api_name(name): value for name, value in dimensions.items()}}))
 
+    def size_dimension(self, body: Any, *, idempotency_key: Optional[str] = None) -> AnsweredSizing:
+        """Find the dimension that gives a resistance: ``POST /sizing``."""
+        return _read("AnsweredSizing", self.call("POST", "/sizing", body=body, headers={"Idempotency-Key": idempotency_key or _new_idempotency_key()}))
+
     def compute_batch(self, body: Union[Mapping[str, Any], str, Any], *, format: Any = None) -> Union[BatchAnswer, str]:
         """Compute up to 10,000 resistances: ``POST /resistance/batch``."""
         return _read("BatchAnswer", self.call("POST", "/resistance/batch", query={"format": format}, body=body, headers={"Content-Type": "text/csv" if isinstance(body, str) else "application/json"}, timeout=_BATCH_SECONDS, repeatable=True))
+
+    def solve_network(self, body: Any, *, idempotency_key: Optional[str] = None) -> AnsweredNetwork:
+        """Solve a network of resistances: ``POST /networks``."""
+        return _read("AnsweredNetwork", self.call("POST", "/networks", body=body, headers={"Idempotency-Key": idempotency_key or _new_idempotency_key()}))
 
     def store_outline(self, body: Any, *, idempotency_key: Optional[str] = None) -> Outline:
         """Store an outline: ``POST /outlines``."""
@@ -3370,7 +3661,9 @@ _OPERATIONS: Dict[str, Tuple[str, str, bool]] = {
     "readShape": ("GET", "/shapes/{shape}", False),
     "computeResistance": ("POST", "/resistance", True),
     "readResistance": ("GET", "/resistance/{shape}", False),
+    "sizeDimension": ("POST", "/sizing", True),
     "computeBatch": ("POST", "/resistance/batch", False),
+    "solveNetwork": ("POST", "/networks", True),
     "storeOutline": ("POST", "/outlines", True),
     "readOutline": ("GET", "/outlines/{id}", False),
     "solveField": ("POST", "/fields", True),

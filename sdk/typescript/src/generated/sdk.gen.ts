@@ -2,7 +2,7 @@
 
 import { client } from './client.gen.js';
 import type { Client, Options as Options2, TDataShape } from './client/index.js';
-import type { ChangeMaterialData, ChangeMaterialErrors, ChangeMaterialResponses, ComputeBatchData, ComputeBatchErrors, ComputeBatchResponses, ComputeResistanceData, ComputeResistanceErrors, ComputeResistanceResponses, CreateMaterialData, CreateMaterialErrors, CreateMaterialResponses, DeleteFieldData, DeleteFieldErrors, DeleteFieldResponses, DeleteRecordData, DeleteRecordErrors, DeleteRecordResponses, IssueKeyData, IssueKeyErrors, IssueKeyResponses, ListKeysData, ListKeysErrors, ListKeysResponses, ListMaterialsData, ListMaterialsErrors, ListMaterialsResponses, ListRecordsData, ListRecordsErrors, ListRecordsResponses, ListShapesData, ListShapesErrors, ListShapesResponses, ReadFieldData, ReadFieldErrors, ReadFieldEventsData, ReadFieldEventsErrors, ReadFieldEventsResponse, ReadFieldEventsResponses, ReadFieldLineData, ReadFieldLineErrors, ReadFieldLineResponses, ReadFieldMapData, ReadFieldMapErrors, ReadFieldMapResponses, ReadFieldPlotData, ReadFieldPlotErrors, ReadFieldPlotResponses, ReadFieldResponses, ReadHealthData, ReadHealthErrors, ReadHealthResponses, ReadKeyData, ReadKeyErrors, ReadKeyResponses, ReadMaterialData, ReadMaterialErrors, ReadMaterialResponses, ReadOpenApiData, ReadOpenApiErrors, ReadOpenApiResponses, ReadOutlineData, ReadOutlineErrors, ReadOutlineResponses, ReadRecordData, ReadRecordErrors, ReadRecordResponses, ReadResistanceData, ReadResistanceErrors, ReadResistanceResponses, ReadShapeData, ReadShapeErrors, ReadShapeResponses, ReadUsageData, ReadUsageErrors, ReadUsageResponses, RelabelRecordData, RelabelRecordErrors, RelabelRecordResponses, ReplayRecordData, ReplayRecordErrors, ReplayRecordResponses, RetireMaterialData, RetireMaterialErrors, RetireMaterialResponses, RevokeKeyData, RevokeKeyErrors, RevokeKeyResponses, RotateKeyData, RotateKeyErrors, RotateKeyResponses, SolveFieldData, SolveFieldErrors, SolveFieldResponses, StoreOutlineData, StoreOutlineErrors, StoreOutlineResponses } from './types.gen.js';
+import type { ChangeMaterialData, ChangeMaterialErrors, ChangeMaterialResponses, ComputeBatchData, ComputeBatchErrors, ComputeBatchResponses, ComputeResistanceData, ComputeResistanceErrors, ComputeResistanceResponses, CreateMaterialData, CreateMaterialErrors, CreateMaterialResponses, DeleteFieldData, DeleteFieldErrors, DeleteFieldResponses, DeleteRecordData, DeleteRecordErrors, DeleteRecordResponses, IssueKeyData, IssueKeyErrors, IssueKeyResponses, ListKeysData, ListKeysErrors, ListKeysResponses, ListMaterialsData, ListMaterialsErrors, ListMaterialsResponses, ListRecordsData, ListRecordsErrors, ListRecordsResponses, ListShapesData, ListShapesErrors, ListShapesResponses, ReadFieldData, ReadFieldErrors, ReadFieldEventsData, ReadFieldEventsErrors, ReadFieldEventsResponse, ReadFieldEventsResponses, ReadFieldLineData, ReadFieldLineErrors, ReadFieldLineResponses, ReadFieldMapData, ReadFieldMapErrors, ReadFieldMapResponses, ReadFieldPlotData, ReadFieldPlotErrors, ReadFieldPlotResponses, ReadFieldResponses, ReadHealthData, ReadHealthErrors, ReadHealthResponses, ReadKeyData, ReadKeyErrors, ReadKeyResponses, ReadMaterialData, ReadMaterialErrors, ReadMaterialResponses, ReadOpenApiData, ReadOpenApiErrors, ReadOpenApiResponses, ReadOutlineData, ReadOutlineErrors, ReadOutlineResponses, ReadRecordData, ReadRecordErrors, ReadRecordResponses, ReadResistanceData, ReadResistanceErrors, ReadResistanceResponses, ReadShapeData, ReadShapeErrors, ReadShapeResponses, ReadUsageData, ReadUsageErrors, ReadUsageResponses, RelabelRecordData, RelabelRecordErrors, RelabelRecordResponses, ReplayRecordData, ReplayRecordErrors, ReplayRecordResponses, RetireMaterialData, RetireMaterialErrors, RetireMaterialResponses, RevokeKeyData, RevokeKeyErrors, RevokeKeyResponses, RotateKeyData, RotateKeyErrors, RotateKeyResponses, SizeDimensionData, SizeDimensionErrors, SizeDimensionResponses, SolveFieldData, SolveFieldErrors, SolveFieldResponses, SolveNetworkData, SolveNetworkErrors, SolveNetworkResponses, StoreOutlineData, StoreOutlineErrors, StoreOutlineResponses } from './types.gen.js';
 
 export type Options<TData extends TDataShape = TDataShape, ThrowOnError extends boolean = boolean, TResponse = unknown> = Options2<TData, ThrowOnError, TResponse> & {
     /**
@@ -87,9 +87,29 @@ export const readResistance = <ThrowOnError extends boolean = true>(options: Opt
 });
 
 /**
+ * Find the dimension that gives a resistance
+ *
+ * The body of `POST /resistance` with one dimension left out, and beside it `solveFor`, `target` and optionally `within`. Answers every value of the dimension in the range that gives the target, each with its resistance and bounds and with what else the request asks for (`include`, `requirement`, `uncertainty`). Of a dimension that is a whole number the two on either side are answered where none gives the target exactly. None is a 422 that states the resistances at both ends. With `record` the sizing is stored for the team; then an `Idempotency-Key` counts. Costs one computation of the month; a refused request costs none. Needs the scope `compute`.
+ */
+export const sizeDimension = <ThrowOnError extends boolean = true>(options: Options<SizeDimensionData, ThrowOnError>) => (options.client ?? client).post<SizeDimensionResponses, SizeDimensionErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/sizing',
+    ...options,
+    headers: {
+        'Content-Type': 'application/json',
+        ...options.headers
+    }
+});
+
+/**
  * Compute up to 10,000 resistances
  *
- * Each item is answered or refused on its own, in order, as `POST /resistance` would; only `record` is not for batches. Answers stream out as they are ready. As `text/csv` a row is a request: columns `shape`, the dimensions by name, `material`, `resistivity`, `conductivity`, `sheetResistance`, `thickness`, `core.material` and the like, `temperature`, `voltage`, `current`, `power`, `label`; a unit stands in the cell or in the header (`width/mm`); comma, semicolon or tab separates. The answer has the same rows and columns and behind them what came out. A cell that a spreadsheet would take for a formula gets an apostrophe in front. A table is answered as a table and JSON as JSON, unless `Accept` or `format` says otherwise. Costs one computation for each item that is answered: as many as there are items are reserved before, and what the others reserved is given back. Where the time of a batch is over, the items that are left are told with status 503. Needs the scope `compute`.
+ * Each item is answered or refused on its own, in order, as `POST /resistance` would; only `record` is not for batches. Answers stream out as they are ready. As `text/csv` a row is a request: columns `shape`, the dimensions by name, `material`, `resistivity`, `conductivity`, `sheetResistance`, `thickness`, `core.material` and the like, `temperature`, `voltage`, `current`, `power`, `label`; a unit stands in the cell or in the header (`width/mm`); comma, semicolon or tab separates. The answer has the same rows and columns and behind them what came out. A cell that a spreadsheet would take for a formula gets an apostrophe in front. A table is answered as a table and JSON as JSON, unless `Accept` or `format` says otherwise. Each answered item costs what it would by itself, as a rule one computation; what all of them would cost is reserved before the work, and what was not needed is given back. Where the time of a batch is over, the items that are left are told with status 503. Needs the scope `compute`.
  */
 export const computeBatch = <ThrowOnError extends boolean = true>(options: Options<ComputeBatchData, ThrowOnError>) => (options.client ?? client).post<ComputeBatchResponses, ComputeBatchErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',
@@ -99,6 +119,26 @@ export const computeBatch = <ThrowOnError extends boolean = true>(options: Optio
             type: 'apiKey'
         }],
     url: '/resistance/batch',
+    ...options,
+    headers: {
+        'Content-Type': 'application/json',
+        ...options.headers
+    }
+});
+
+/**
+ * Solve a network of resistances
+ *
+ * Elements between named nodes, each with a resistance or with a request that gives it, to the resistance between two ports, the voltage of every node, and what passes through every element: current, power, share of the loss, and by how much the whole rises when the element does. Bounds come from all elements at their lowest and at their highest. At most 10,000 elements. With `record` the calculation is stored for the team; then an `Idempotency-Key` counts. Costs one computation, or one for each element with a request where there are more. Needs the scope `compute`.
+ */
+export const solveNetwork = <ThrowOnError extends boolean = true>(options: Options<SolveNetworkData, ThrowOnError>) => (options.client ?? client).post<SolveNetworkResponses, SolveNetworkErrors, ThrowOnError, 'data'>({
+    responseStyle: 'data',
+    security: [{ scheme: 'bearer', type: 'http' }, {
+            in: 'query',
+            name: 'key',
+            type: 'apiKey'
+        }],
+    url: '/networks',
     ...options,
     headers: {
         'Content-Type': 'application/json',
@@ -417,7 +457,7 @@ export const relabelRecord = <ThrowOnError extends boolean = true>(options: Opti
 /**
  * Replay a record
  *
- * Computes the record again with today's engine and the material versions it pinned, and shows the drift. It stores no record. A resistance costs one computation. A field solution is answered, and costs, as `POST /fields` does: `Prefer: wait=N` waits for its end, 202 has its `Location`, and `replay` in it shows the drift once it is finished; reading it later takes the scope `field`. Needs the scope `compute`.
+ * Computes the record again with today's engine and the material versions it pinned, and shows the drift. It stores no record. A resistance and a sizing cost what they did. A field solution is answered, and costs, as `POST /fields` does: `Prefer: wait=N` waits for its end, 202 has its `Location`, and `replay` in it shows the drift once it is finished; reading it later takes the scope `field`. Needs the scope `compute`.
  */
 export const replayRecord = <ThrowOnError extends boolean = true>(options: Options<ReplayRecordData, ThrowOnError>) => (options.client ?? client).post<ReplayRecordResponses, ReplayRecordErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',

@@ -3385,6 +3385,3441 @@ export type EarthGridRequest = {
 };
 
 /**
+ * The values of one dimension that give a resistance.
+ */
+export type AnsweredSizing = {
+    shape: string;
+    solveFor: string;
+    target: {
+        /**
+         * Resistance in ohms; lower ≤ value ≤ upper.
+         */
+        value: number;
+        unit: 'ohm';
+        /**
+         * The value for people, rounded as its bounds allow.
+         */
+        text: string;
+    };
+    /**
+     * The range that was searched.
+     */
+    within: Array<{
+        /**
+         * Value of the dimension in `unit`; as a bare number it goes back into `dimensions`.
+         */
+        value: number;
+        unit: '1' | 'm' | 'm^2' | 'deg';
+        /**
+         * The value for people.
+         */
+        text: string;
+    }>;
+    /**
+     * All that lie in the range, smallest first.
+     */
+    solutions: Array<SizingSolution>;
+    assumptions: Array<string>;
+    sources: Array<{
+        title: string;
+        detail?: string;
+        provenance: 'source at hand' | 'from memory' | 'derived here' | 'measured';
+    }>;
+    materials: Array<{
+        id: string;
+        version: number;
+        name: string;
+    }>;
+    engine: string;
+    catalogue: string;
+    /**
+     * Where the calculation was stored; only if `record` was in the request.
+     */
+    record?: {
+        id: string;
+        /**
+         * Path of the stored record.
+         */
+        url: string;
+    };
+};
+
+/**
+ * A value of the dimension with the resistance that it gives.
+ */
+export type SizingSolution = {
+    /**
+     * A value of the dimension.
+     */
+    dimension: {
+        /**
+         * Value of the dimension in `unit`; as a bare number it goes back into `dimensions`.
+         */
+        value: number;
+        unit: '1' | 'm' | 'm^2' | 'deg';
+        /**
+         * The value for people.
+         */
+        text: string;
+    };
+    resistance: BoundedResistance;
+    /**
+     * Derivative of the resistance by the dimension there, in ohms per `unit` of the dimension.
+     */
+    sensitivity: number;
+    /**
+     * Whether the dimension gives the target: false for the whole numbers on either side of it where none does.
+     */
+    exact: boolean;
+    /**
+     * The reciprocal of the resistance.
+     */
+    conductance: {
+        /**
+         * Conductance in siemens.
+         */
+        value: number;
+        unit: 'siemens';
+        /**
+         * The value for people.
+         */
+        text: string;
+    };
+    /**
+     * How the value was computed.
+     */
+    method: 'closed-form' | 'quadrature' | 'field';
+    /**
+     * The operating point; voltage, current and power only where the request gave one of them.
+     */
+    operating: {
+        /**
+         * Temperature in °C at which the medium was evaluated.
+         */
+        temperature: number;
+        /**
+         * Voltage across the terminals in volts.
+         */
+        voltage?: number;
+        /**
+         * Current in amperes.
+         */
+        current?: number;
+        /**
+         * Power in watts.
+         */
+        power?: number;
+    };
+    /**
+     * How the integral went; only where the method is quadrature.
+     */
+    quadrature?: {
+        status: 'converged' | 'limit';
+        evaluations: number;
+        /**
+         * Estimated relative error of the integral.
+         */
+        relativeError: number;
+    };
+    uncertainty?: Uncertainty;
+    /**
+     * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
+     */
+    verdict?: 'met' | 'not-met' | 'undecided';
+    /**
+     * Where the field and the current density are largest.
+     */
+    peak?: {
+        /**
+         * Largest field strength
+         */
+        field: {
+            /**
+             * Largest field strength; null where it is unbounded or not known.
+             */
+            value: number | null;
+            unit: 'V/m';
+            text: string;
+        };
+        currentDensity: {
+            /**
+             * Largest current density; null where it is unbounded or not known.
+             */
+            value: number | null;
+            unit: 'A/m^2';
+            text: string;
+        } | {
+            /**
+             * Largest sheet current density; null where it is unbounded or not known.
+             */
+            value: number | null;
+            unit: 'A/m';
+            text: string;
+        };
+        /**
+         * Where the field is largest.
+         */
+        position: {
+            /**
+             * Coordinate of the shape, or null where it has none.
+             */
+            coordinate: string | null;
+            /**
+             * Value of that coordinate, m or rad.
+             */
+            value: number | null;
+            unit: 'm' | 'rad' | null;
+            /**
+             * The place in words.
+             */
+            text: string;
+        };
+        /**
+         * Where the current density is largest.
+         */
+        currentDensityPosition: {
+            /**
+             * Coordinate of the shape, or null where it has none.
+             */
+            coordinate: string | null;
+            /**
+             * Value of that coordinate, m or rad.
+             */
+            value: number | null;
+            unit: 'm' | 'rad' | null;
+            /**
+             * The place in words.
+             */
+            text: string;
+        };
+        /**
+         * Whether the values hold at the operating point or at one volt.
+         */
+        per: 'operating-point' | 'volt';
+    } | null;
+    steps?: Array<{
+        title: string;
+        /**
+         * The step as TeX.
+         */
+        tex: string;
+        /**
+         * Its outcome for people.
+         */
+        value?: string;
+    }>;
+    /**
+     * 101 samples along the flow, at the operating point or per volt.
+     */
+    profile?: {
+        /**
+         * Name of the coordinate along the flow.
+         */
+        coordinate: string;
+        /**
+         * Unit of the positions.
+         */
+        unit: 'm' | 'rad';
+        per: 'operating-point' | 'volt';
+        /**
+         * Values of the coordinate from the high to the low terminal, m or rad.
+         */
+        position: Array<number>;
+        /**
+         * Potential against the low terminal in volts.
+         */
+        potential: Array<number>;
+        /**
+         * Field strength in V/m.
+         */
+        field: Array<number>;
+        /**
+         * Current density in A/m^2.
+         */
+        currentDensity: Array<number>;
+        /**
+         * Conductivity in S/m.
+         */
+        conductivity: Array<number>;
+        /**
+         * For a medium graded across the flow.
+         */
+        across?: {
+            coordinate: string;
+            unit: 'm' | 'rad';
+            /**
+             * Values of the coordinate across the flow, m or rad.
+             */
+            position: Array<number>;
+            /**
+             * Conductivity in S/m.
+             */
+            conductivity: Array<number>;
+            /**
+             * Current density in A/m^2 where the tube's field is largest.
+             */
+            currentDensity: Array<number>;
+        };
+    } | null;
+    checks?: Array<{
+        name: 'voltage-independence' | 'current-continuity' | 'second-route';
+        /**
+         * false where the shape has nothing to compare; then `reason` says why.
+         */
+        applies: boolean;
+        passed?: boolean;
+        /**
+         * Relative deviation found.
+         */
+        deviation?: number;
+        /**
+         * Largest relative deviation that passes.
+         */
+        tolerance?: number;
+        reason?: string;
+    }>;
+    cautions: Array<string>;
+};
+
+/**
+ * A resistance request with one dimension left out, and the resistance that it is to give.
+ */
+export type SizingRequest = ({
+    shape: 'bar';
+} & BarSizing) | ({
+    shape: 'round-wire';
+} & RoundWireSizing) | ({
+    shape: 'tube';
+} & TubeSizing) | ({
+    shape: 'prism';
+} & PrismSizing) | ({
+    shape: 'etched-trace';
+} & EtchedTraceSizing) | ({
+    shape: 'via-barrel';
+} & ViaBarrelSizing) | ({
+    shape: 'stranded-conductor';
+} & StrandedConductorSizing) | ({
+    shape: 'parallel-plates';
+} & ParallelPlatesSizing) | ({
+    shape: 'box-tube';
+} & BoxTubeSizing) | ({
+    shape: 'clad-wire';
+} & CladWireSizing) | ({
+    shape: 'helical-winding';
+} & HelicalWindingSizing) | ({
+    shape: 'flat-spiral';
+} & FlatSpiralSizing) | ({
+    shape: 'tapered-strip';
+} & TaperedStripSizing) | ({
+    shape: 'cone-frustum';
+} & ConeFrustumSizing) | ({
+    shape: 'cylindrical-shell';
+} & CylindricalShellSizing) | ({
+    shape: 'spherical-shell';
+} & SphericalShellSizing) | ({
+    shape: 'confocal-shell';
+} & ConfocalShellSizing) | ({
+    shape: 'arc-bar';
+} & ArcBarSizing) | ({
+    shape: 'conical-shell';
+} & ConicalShellSizing) | ({
+    shape: 'bent-tube';
+} & BentTubeSizing) | ({
+    shape: 'hyperbolic-neck';
+} & HyperbolicNeckSizing) | ({
+    shape: 'torus-arc';
+} & TorusArcSizing) | ({
+    shape: 'cylinder-in-square';
+} & CylinderInSquareSizing) | ({
+    shape: 'eccentric-cylinders';
+} & EccentricCylindersSizing) | ({
+    shape: 'parallel-cylinders';
+} & ParallelCylindersSizing) | ({
+    shape: 'cylinder-plane';
+} & CylinderPlaneSizing) | ({
+    shape: 'sphere-plane';
+} & SpherePlaneSizing) | ({
+    shape: 'sphere-buried';
+} & SphereBuriedSizing) | ({
+    shape: 'sphere-pair';
+} & SpherePairSizing) | ({
+    shape: 'spheroid';
+} & SpheroidSizing) | ({
+    shape: 'contact-spot';
+} & ContactSpotSizing) | ({
+    shape: 'elliptic-contact-spot';
+} & EllipticContactSpotSizing) | ({
+    shape: 'spot-in-cylinder';
+} & SpotInCylinderSizing) | ({
+    shape: 'sheet-strip';
+} & SheetStripSizing) | ({
+    shape: 'sheet-bend';
+} & SheetBendSizing) | ({
+    shape: 'sheet-step';
+} & SheetStepSizing) | ({
+    shape: 'sheet-meander';
+} & SheetMeanderSizing) | ({
+    shape: 'sheet-end-terminal';
+} & SheetEndTerminalSizing) | ({
+    shape: 'sheet-tee';
+} & SheetTeeSizing) | ({
+    shape: 'sheet-slit';
+} & SheetSlitSizing) | ({
+    shape: 'sheet-disc';
+} & SheetDiscSizing) | ({
+    shape: 'earth-hemisphere';
+} & EarthHemisphereSizing) | ({
+    shape: 'earth-rod';
+} & EarthRodSizing) | ({
+    shape: 'earth-rod-pair';
+} & EarthRodPairSizing) | ({
+    shape: 'earth-rod-group';
+} & EarthRodGroupSizing) | ({
+    shape: 'earth-wire';
+} & EarthWireSizing) | ({
+    shape: 'earth-ring';
+} & EarthRingSizing) | ({
+    shape: 'earth-plate';
+} & EarthPlateSizing) | ({
+    shape: 'earth-star';
+} & EarthStarSizing) | ({
+    shape: 'earth-rod-layered';
+} & EarthRodLayeredSizing) | ({
+    shape: 'earth-grid';
+} & EarthGridSizing);
+
+/**
+ * A straight bar or strip of rectangular section; the current enters and leaves through the whole end faces.
+ */
+export type BarSizing = {
+    shape: 'bar';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Width (w). Width of the section, across the current. A bare number is in m; a text carries its unit.
+         */
+        width?: number | string | TolerancedQuantity;
+        /**
+         * Thickness (t). Thickness of the section; a copper foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
+         */
+        thickness?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A straight solid wire of circular section; the current enters and leaves through the whole end faces.
+ */
+export type RoundWireSizing = {
+    shape: 'round-wire';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of the wire between the two terminals. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Diameter (d). Diameter of the bare conductor; a gauge may be given, such as AWG 24. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of the bare conductor; a gauge may be given, such as AWG 24. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A straight round tube; the current runs along its wall and enters and leaves through the ring-shaped end faces.
+ */
+export type TubeSizing = {
+    shape: 'tube';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of outerDiameter, outerRadius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of the tube between the two terminals. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Outer diameter (D). Outer diameter of the tube. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Outer radius (D/2). Outer radius of the tube. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Wall (t). Thickness of the wall, less than half the outer diameter. A bare number is in m; a text carries its unit.
+         */
+        wall?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A straight conductor of any constant section, known by its area; the current enters and leaves through the whole end faces.
+ */
+export type PrismSizing = {
+    shape: 'prism';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Area of the section (S). Area of the conductor's section, such as 95 mm^2. A bare number is in m^2; a text carries its unit.
+         */
+        area?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A straight board trace with the trapezoidal section that etching leaves; the current enters and leaves through the whole end faces.
+ */
+export type EtchedTraceSizing = {
+    shape: 'etched-trace';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Base width (b). Width of the foot of the section, on the laminate. With an etch factor F the top is narrower by 2t/F. A bare number is in m; a text carries its unit.
+         */
+        baseWidth?: number | string | TolerancedQuantity;
+        /**
+         * Top width (c). Width of the section at its top; it may also be the wider one (undercut). A bare number is in m; a text carries its unit.
+         */
+        topWidth?: number | string | TolerancedQuantity;
+        /**
+         * Thickness (t). Height of the section: foil and plating together. A foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
+         */
+        thickness?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * The plated wall of a hole through a board, or several equal holes in parallel; the current runs along the barrel from one side of the board to the other.
+ */
+export type ViaBarrelSizing = {
+    shape: 'via-barrel';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of holeDiameter, holeRadius.
+     */
+    dimensions: {
+        /**
+         * Height (H). Length of the barrel between the two layers that it joins; for a through hole the board's thickness. A bare number is in m; a text carries its unit.
+         */
+        height?: number | string | TolerancedQuantity;
+        /**
+         * Finished hole diameter (d). Diameter of the FINISHED hole, inside the plating. The drill is larger: drill diameter less twice the plating gives the finished hole. A bare number is in m; a text carries its unit.
+         */
+        holeDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Finished hole radius (d/2). Radius of the FINISHED hole, inside the plating. The drill is larger: drill radius less twice the plating gives the finished hole. A bare number is in m; a text carries its unit.
+         */
+        holeRadius?: number | string | TolerancedQuantity;
+        /**
+         * Plating (p). Thickness of the plating on the wall of the hole, outside the finished diameter. A bare number is in m; a text carries its unit.
+         */
+        plating?: number | string | TolerancedQuantity;
+        /**
+         * Number of holes (n). Equal holes side by side, each carrying its share. Left out: 1.
+         */
+        count?: number;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * Equal round strands laid up into one conductor and joined at both ends; each strand is longer than the conductor by the lay factor.
+ */
+export type StrandedConductorSizing = {
+    shape: 'stranded-conductor';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of strandDiameter, strandRadius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of the finished conductor, not of a strand. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Strands (n). Number of equal strands.
+         */
+        strands?: number;
+        /**
+         * Strand diameter (d). Diameter of the bare metal of one strand, without tin or enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
+         */
+        strandDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Strand radius (d/2). Radius of the bare metal of one strand, without tin or enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
+         */
+        strandRadius?: number | string | TolerancedQuantity;
+        /**
+         * Lay factor (k). Mean length of a strand over the length of the conductor: √(1+(π/m)²) for a lay of m mean diameters, averaged over the strands. Left out: 1.02.
+         */
+        layFactor?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * The medium that fills the gap between two parallel plates of one area; the current crosses from plate to plate.
+ */
+export type ParallelPlatesSizing = {
+    shape: 'parallel-plates';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Gap (g). Distance between the two plates, the thickness of the medium. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string | TolerancedQuantity;
+        /**
+         * Area (S). Area of each plate. A bare number is in m^2; a text carries its unit.
+         */
+        area?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A straight hollow bar of rectangular section with an even wall and square corners; the current runs along it.
+ */
+export type BoxTubeSizing = {
+    shape: 'box-tube';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Outer width (W). Outer width of the section. A bare number is in m; a text carries its unit.
+         */
+        outerWidth?: number | string | TolerancedQuantity;
+        /**
+         * Outer height (H). Outer height of the section. A bare number is in m; a text carries its unit.
+         */
+        outerHeight?: number | string | TolerancedQuantity;
+        /**
+         * Wall (t). Thickness of the wall, the same on all four sides. A bare number is in m; a text carries its unit.
+         */
+        wall?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A round wire of one metal clad with another, such as copper on aluminium or on steel; both carry current in parallel along the wire.
+ */
+export type CladWireSizing = {
+    shape: 'clad-wire';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of coreDiameter, coreRadius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two end faces, along the current. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Core diameter (d). Diameter of the core alone; the finished wire is thicker by twice the cladding. A bare number is in m; a text carries its unit.
+         */
+        coreDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Core radius (d/2). Radius of the core alone; the finished wire is thicker by twice the cladding. A bare number is in m; a text carries its unit.
+         */
+        coreRadius?: number | string | TolerancedQuantity;
+        /**
+         * Cladding thickness (t). Thickness of the cladding around the core, radially. A bare number is in m; a text carries its unit.
+         */
+        claddingThickness?: number | string | TolerancedQuantity;
+    };
+    /**
+     * core: Core; cladding: Cladding
+     */
+    media: {
+        core: Medium;
+        cladding: Medium;
+    };
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A round wire wound into a helix with insulated turns; the current follows the wire from one end to the other.
+ */
+export type HelicalWindingSizing = {
+    shape: 'helical-winding';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of meanDiameter, meanRadius; exactly one of wireDiameter, wireRadius.
+     */
+    dimensions: {
+        /**
+         * Turns (N). Number of turns; it need not be whole.
+         */
+        turns?: number | string | TolerancedQuantity;
+        /**
+         * Mean diameter (D). Diameter of the helix at the centre of the wire: former diameter plus one wire diameter. A bare number is in m; a text carries its unit.
+         */
+        meanDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Mean radius (D/2). Radius of the helix at the centre of the wire: former radius plus one wire radius. A bare number is in m; a text carries its unit.
+         */
+        meanRadius?: number | string | TolerancedQuantity;
+        /**
+         * Pitch (p). Advance along the axis per turn. A bare number is in m; a text carries its unit.
+         */
+        pitch?: number | string | TolerancedQuantity;
+        /**
+         * Wire diameter (d). Diameter of the bare metal, without enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
+         */
+        wireDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Wire radius (d/2). Radius of the bare metal, without enamel; a gauge such as AWG 24 may be given. A bare number is in m; a text carries its unit.
+         */
+        wireRadius?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A strip of constant width laid out as an Archimedean spiral; the current follows the strip from the inner end to the outer one.
+ */
+export type FlatSpiralSizing = {
+    shape: 'flat-spiral';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of innerRadius, innerDiameter.
+     */
+    dimensions: {
+        /**
+         * Turns (N). Number of turns; it need not be whole.
+         */
+        turns?: number | string | TolerancedQuantity;
+        /**
+         * Inner radius (r₀). Radius of the centre line at the inner end: inner edge plus half the width. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Inner diameter (2r₀). Diameter of the centre line at the inner end: inner edge plus half the width. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Pitch (p). Growth of the radius per turn: width plus gap. A bare number is in m; a text carries its unit.
+         */
+        pitch?: number | string | TolerancedQuantity;
+        /**
+         * Width (w). Width of the strip. A bare number is in m; a text carries its unit.
+         */
+        width?: number | string | TolerancedQuantity;
+        /**
+         * Thickness (t). Thickness of the strip; a copper foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
+         */
+        thickness?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A strip whose width changes evenly and symmetrically between two straight ends, through which the current enters and leaves.
+ */
+export type TaperedStripSizing = {
+    shape: 'tapered-strip';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two straight ends. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Start width (w₁). Width at the high end. A bare number is in m; a text carries its unit.
+         */
+        startWidth?: number | string | TolerancedQuantity;
+        /**
+         * End width (w₂). Width at the low end. A bare number is in m; a text carries its unit.
+         */
+        endWidth?: number | string | TolerancedQuantity;
+        /**
+         * Thickness (t). Thickness of the strip; a copper foil may be given by weight, such as 1 oz/ft^2. A bare number is in m; a text carries its unit.
+         */
+        thickness?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A straight cone cut off by two flat end faces, through which the current enters and leaves; or a wire whose diameter changes evenly.
+ */
+export type ConeFrustumSizing = {
+    shape: 'cone-frustum';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of startDiameter, startRadius; exactly one of endDiameter, endRadius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two flat end faces. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Start diameter (d₁). Diameter at the high end. A bare number is in m; a text carries its unit.
+         */
+        startDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Start radius (d₁/2). Radius at the high end. A bare number is in m; a text carries its unit.
+         */
+        startRadius?: number | string | TolerancedQuantity;
+        /**
+         * End diameter (d₂). Diameter at the low end. A bare number is in m; a text carries its unit.
+         */
+        endDiameter?: number | string | TolerancedQuantity;
+        /**
+         * End radius (d₂/2). Radius at the low end. A bare number is in m; a text carries its unit.
+         */
+        endRadius?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * The wall between two coaxial cylinders, or a sector of it; the current runs radially from the inner to the outer surface.
+ */
+export type CylindricalShellSizing = {
+    shape: 'cylindrical-shell';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of innerRadius, innerDiameter; exactly one of outerRadius, outerDiameter, wall.
+     */
+    dimensions: {
+        /**
+         * Inner radius (a). Radius of the inner surface. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Inner diameter (2a). Diameter of the inner surface. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Outer radius (b). Radius of the outer surface; or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Outer diameter (2b). Diameter of the outer surface; or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Wall (t). Thickness of the wall, outer less inner radius; keeps its digits however thin it is. A bare number is in m; a text carries its unit.
+         */
+        wall?: number | string | TolerancedQuantity;
+        /**
+         * Length (L). Length along the axis. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Angle (φ). Angle of the sector around the axis; the whole shell is 360°. Left out: 360 deg. A bare number is in deg; a text carries its unit.
+         */
+        angle?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * The wall between two concentric spheres, or the part of it inside a cone; the current runs radially from the inner to the outer surface.
+ */
+export type SphericalShellSizing = {
+    shape: 'spherical-shell';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of innerRadius, innerDiameter; exactly one of outerRadius, outerDiameter, wall.
+     */
+    dimensions: {
+        /**
+         * Inner radius (a). Radius of the inner surface. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Inner diameter (2a). Diameter of the inner surface. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Outer radius (b). Radius of the outer surface; or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Outer diameter (2b). Diameter of the outer surface; or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Wall (t). Thickness of the wall, outer less inner radius; keeps its digits however thin it is. A bare number is in m; a text carries its unit.
+         */
+        wall?: number | string | TolerancedQuantity;
+        /**
+         * Half angle (θ). Half the opening angle of the cone that cuts the shell out: 180° the whole shell, 90° a hemisphere. Left out: 180 deg. A bare number is in deg; a text carries its unit.
+         */
+        halfAngle?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * The wall between two elliptic cylinders with common foci, such as the insulation of a flattened conductor; the current runs from the inner to the outer surface along hyperbolas.
+ */
+export type ConfocalShellSizing = {
+    shape: 'confocal-shell';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of outerMajor, wall.
+     */
+    dimensions: {
+        /**
+         * Inner semi-major axis (a₁). Half the larger axis of the inner ellipse. A bare number is in m; a text carries its unit.
+         */
+        innerMajor?: number | string | TolerancedQuantity;
+        /**
+         * Inner semi-minor axis (b₁). Half the smaller axis of the inner ellipse; at most the semi-major axis. A bare number is in m; a text carries its unit.
+         */
+        innerMinor?: number | string | TolerancedQuantity;
+        /**
+         * Outer semi-major axis (a₂). Half the larger axis of the outer ellipse; its smaller axis follows from the common foci. Or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerMajor?: number | string | TolerancedQuantity;
+        /**
+         * Wall on the major axis (t). Difference of the two semi-major axes; keeps its digits however thin it is. A bare number is in m; a text carries its unit.
+         */
+        wall?: number | string | TolerancedQuantity;
+        /**
+         * Length (L). Length along the cylinders. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A bar of rectangular section bent to a circular arc; the current runs around the bend between the two radial end faces and crowds towards the inner edge.
+ */
+export type ArcBarSizing = {
+    shape: 'arc-bar';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of innerRadius, innerDiameter; exactly one of outerRadius, outerDiameter, width.
+     */
+    dimensions: {
+        /**
+         * Inner radius (a). Radius of the inner edge of the bend. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Inner diameter (2a). Diameter of the inner edge of the bend. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Outer radius (b). Radius of the outer edge of the bend; or give the width. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Outer diameter (2b). Diameter of the outer edge of the bend; or give the width. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Width (w). Width of the bar in the plane of the bend, outer less inner radius. A bare number is in m; a text carries its unit.
+         */
+        width?: number | string | TolerancedQuantity;
+        /**
+         * Thickness (t). Thickness of the bar along the axis of the bend. A bare number is in m; a text carries its unit.
+         */
+        thickness?: number | string | TolerancedQuantity;
+        /**
+         * Angle (φ). Angle of the bend between the two end faces. A bare number is in deg; a text carries its unit.
+         */
+        angle?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * The space between two coaxial cones with a common apex, cut off by two spheres round the apex; the current runs away from the apex, from the inner to the outer sphere.
+ */
+export type ConicalShellSizing = {
+    shape: 'conical-shell';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of innerRadius, innerDiameter; exactly one of outerRadius, outerDiameter, wall.
+     */
+    dimensions: {
+        /**
+         * Inner radius (a). Distance of the inner spherical face from the apex, along the cone. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Inner diameter (2a). Distance of the inner spherical face from the apex, along the cone. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Outer radius (b). Distance of the outer spherical face from the apex; or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Outer diameter (2b). Distance of the outer spherical face from the apex; or give the wall. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Wall (t). Length along the cone, outer less inner radius; keeps its digits however short it is. A bare number is in m; a text carries its unit.
+         */
+        wall?: number | string | TolerancedQuantity;
+        /**
+         * Inner half-angle (θ₁). Angle between the axis and the inner cone; 0 for a solid cone. A bare number is in deg; a text carries its unit.
+         */
+        innerHalfAngle?: number | string | TolerancedQuantity;
+        /**
+         * Outer half-angle (θ₂). Angle between the axis and the outer cone; beyond 90° it opens backwards. A bare number is in deg; a text carries its unit.
+         */
+        outerHalfAngle?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A round tube bent to an arc of a circle; the current enters and leaves through the cut end faces and runs round the bend.
+ */
+export type BentTubeSizing = {
+    shape: 'bent-tube';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of bendRadius, bendDiameter; exactly one of outerDiameter, outerRadius.
+     */
+    dimensions: {
+        /**
+         * Bend radius (R₀). Radius of the centre line of the tube; greater than half the outer diameter. A bare number is in m; a text carries its unit.
+         */
+        bendRadius?: number | string | TolerancedQuantity;
+        /**
+         * Bend diameter (2R₀). Diameter of the centre line of the tube; greater than half the outer diameter. A bare number is in m; a text carries its unit.
+         */
+        bendDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Outer diameter (D). Outer diameter of the tube. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Outer radius (D/2). Outer radius of the tube. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Wall (t). Thickness of the wall; less than half the outer diameter. A bare number is in m; a text carries its unit.
+         */
+        wall?: number | string | TolerancedQuantity;
+        /**
+         * Bend angle (φ). Angle of the bend between its two end faces. A bare number is in deg; a text carries its unit.
+         */
+        angle?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A body whose wall is a hyperboloid round the axis, narrowest at the throat; the current runs along the axis between caps that are oblate spheroids confocal with the wall.
+ */
+export type HyperbolicNeckSizing = {
+    shape: 'hyperbolic-neck';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of throatRadius, throatDiameter.
+     */
+    dimensions: {
+        /**
+         * Throat radius (a). Radius at the narrowest place. A bare number is in m; a text carries its unit.
+         */
+        throatRadius?: number | string | TolerancedQuantity;
+        /**
+         * Throat diameter (2a). Diameter at the narrowest place. A bare number is in m; a text carries its unit.
+         */
+        throatDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Opening angle (β). Angle between the axis and the cone that the wall approaches; 90° is a hole in a thin insulating plane. A bare number is in deg; a text carries its unit.
+         */
+        openingAngle?: number | string | TolerancedQuantity;
+        /**
+         * Length of one side (z). Distance on the axis from the throat to the cap, one side. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Sides (n). 2: the neck widens on both sides of the throat; 1: the throat is a terminal. Left out: 2.
+         */
+        sides?: number;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A round bar bent to an arc of a circle, a part of a torus; the current enters and leaves through the cut end faces and runs round the bend.
+ */
+export type TorusArcSizing = {
+    shape: 'torus-arc';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of bendRadius, bendDiameter; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Bend radius (R₀). Radius of the centre line of the bar; greater than half its diameter. A bare number is in m; a text carries its unit.
+         */
+        bendRadius?: number | string | TolerancedQuantity;
+        /**
+         * Bend diameter (2R₀). Diameter of the centre line of the bar; greater than half its diameter. A bare number is in m; a text carries its unit.
+         */
+        bendDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Diameter (d). Diameter of the bar. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of the bar. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * Bend angle (φ). Angle of the bend between its two end faces. A bare number is in deg; a text carries its unit.
+         */
+        angle?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A round cylinder in the middle of a square duct, such as a conductor cast in a square block; the current runs from the cylinder to the four sides.
+ */
+export type CylinderInSquareSizing = {
+    shape: 'cylinder-in-square';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Diameter (d). Diameter of the cylinder; less than the side. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of the cylinder; less than the side. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * Side (w). Inside width of the square duct. A bare number is in m; a text carries its unit.
+         */
+        side?: number | string | TolerancedQuantity;
+        /**
+         * Length (L). Length along the axis. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * The space between two cylinders with parallel axes, one inside the other and out of centre, such as the insulation of an off-centre core; the current runs from the inner to the outer one.
+ */
+export type EccentricCylindersSizing = {
+    shape: 'eccentric-cylinders';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of innerDiameter, innerRadius; exactly one of outerDiameter, outerRadius; exactly one of offset, gap.
+     */
+    dimensions: {
+        /**
+         * Inner diameter (d). Diameter of the inner cylinder. A bare number is in m; a text carries its unit.
+         */
+        innerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Inner radius (d/2). Radius of the inner cylinder. A bare number is in m; a text carries its unit.
+         */
+        innerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Outer diameter (D). Inside diameter of the outer cylinder. A bare number is in m; a text carries its unit.
+         */
+        outerDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Outer radius (D/2). Inside radius of the outer cylinder. A bare number is in m; a text carries its unit.
+         */
+        outerRadius?: number | string | TolerancedQuantity;
+        /**
+         * Offset (e). Distance between the two axes; 0 is concentric. A bare number is in m; a text carries its unit.
+         */
+        offset?: number | string | TolerancedQuantity;
+        /**
+         * Smallest gap (g). Smallest distance between the two surfaces; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string | TolerancedQuantity;
+        /**
+         * Length (L). Length along the axes. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * Two long cylinders beside each other in a medium that reaches far on all sides; the current runs from one to the other.
+ */
+export type ParallelCylindersSizing = {
+    shape: 'parallel-cylinders';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter1, radius1; exactly one of diameter2, radius2; exactly one of spacing, gap.
+     */
+    dimensions: {
+        /**
+         * First diameter (d₁). Diameter of the first cylinder. A bare number is in m; a text carries its unit.
+         */
+        diameter1?: number | string | TolerancedQuantity;
+        /**
+         * First radius (d₁/2). Radius of the first cylinder. A bare number is in m; a text carries its unit.
+         */
+        radius1?: number | string | TolerancedQuantity;
+        /**
+         * Second diameter (d₂). Diameter of the second cylinder. A bare number is in m; a text carries its unit.
+         */
+        diameter2?: number | string | TolerancedQuantity;
+        /**
+         * Second radius (d₂/2). Radius of the second cylinder. A bare number is in m; a text carries its unit.
+         */
+        radius2?: number | string | TolerancedQuantity;
+        /**
+         * Spacing (s). Distance between the two axes. A bare number is in m; a text carries its unit.
+         */
+        spacing?: number | string | TolerancedQuantity;
+        /**
+         * Gap (g). Smallest distance between the two surfaces; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string | TolerancedQuantity;
+        /**
+         * Length (L). Length along the axes. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A long cylinder parallel to a plane electrode, in a medium that fills the space on its side; the current runs from the cylinder to the plane.
+ */
+export type CylinderPlaneSizing = {
+    shape: 'cylinder-plane';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius; exactly one of height, gap.
+     */
+    dimensions: {
+        /**
+         * Diameter (d). Diameter of the cylinder. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of the cylinder. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * Height (h). Distance from the axis to the plane. A bare number is in m; a text carries its unit.
+         */
+        height?: number | string | TolerancedQuantity;
+        /**
+         * Gap (g). Smallest distance between the surface and the plane; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string | TolerancedQuantity;
+        /**
+         * Length (L). Length along the axis. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A sphere above a plane electrode, in a medium that fills the space on its side; the current runs from the sphere to the plane.
+ */
+export type SpherePlaneSizing = {
+    shape: 'sphere-plane';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius; exactly one of height, gap.
+     */
+    dimensions: {
+        /**
+         * Diameter (d). Diameter of the sphere. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of the sphere. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * Height (h). Distance from the centre to the plane. A bare number is in m; a text carries its unit.
+         */
+        height?: number | string | TolerancedQuantity;
+        /**
+         * Gap (g). Smallest distance between the surface and the plane; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A sphere below the insulating surface of a half-space, such as an electrode in the ground or under water; the current spreads from it to infinity.
+ */
+export type SphereBuriedSizing = {
+    shape: 'sphere-buried';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius; exactly one of depth, cover.
+     */
+    dimensions: {
+        /**
+         * Diameter (d). Diameter of the sphere. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of the sphere. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * Depth (h). Distance from the surface down to the centre. A bare number is in m; a text carries its unit.
+         */
+        depth?: number | string | TolerancedQuantity;
+        /**
+         * Cover (g). Thickness of the medium above the sphere; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        cover?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * Two spheres in a medium that reaches far on all sides; the current runs from one to the other, and none to infinity.
+ */
+export type SpherePairSizing = {
+    shape: 'sphere-pair';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter1, radius1; exactly one of diameter2, radius2; exactly one of spacing, gap.
+     */
+    dimensions: {
+        /**
+         * First diameter (d₁). Diameter of the first sphere. A bare number is in m; a text carries its unit.
+         */
+        diameter1?: number | string | TolerancedQuantity;
+        /**
+         * First radius (d₁/2). Radius of the first sphere. A bare number is in m; a text carries its unit.
+         */
+        radius1?: number | string | TolerancedQuantity;
+        /**
+         * Second diameter (d₂). Diameter of the second sphere. A bare number is in m; a text carries its unit.
+         */
+        diameter2?: number | string | TolerancedQuantity;
+        /**
+         * Second radius (d₂/2). Radius of the second sphere. A bare number is in m; a text carries its unit.
+         */
+        radius2?: number | string | TolerancedQuantity;
+        /**
+         * Spacing (s). Distance between the two centres. A bare number is in m; a text carries its unit.
+         */
+        spacing?: number | string | TolerancedQuantity;
+        /**
+         * Gap (g). Smallest distance between the two surfaces; keeps its digits however small it is. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * An ellipsoid of revolution, slender or flat, in a medium without bounds, or half of it below an insulating plane through its centre; the current spreads from it to infinity.
+ */
+export type SpheroidSizing = {
+    shape: 'spheroid';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of polarDiameter, polarRadius; exactly one of equatorialDiameter, equatorialRadius.
+     */
+    dimensions: {
+        /**
+         * Polar diameter (dₚ). Length along the axis of revolution. A bare number is in m; a text carries its unit.
+         */
+        polarDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Polar radius (dₚ/2). Length along the axis of revolution. A bare number is in m; a text carries its unit.
+         */
+        polarRadius?: number | string | TolerancedQuantity;
+        /**
+         * Equatorial diameter (dₑ). Diameter across the axis of revolution. A bare number is in m; a text carries its unit.
+         */
+        equatorialDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Equatorial radius (dₑ/2). Radius across the axis of revolution. A bare number is in m; a text carries its unit.
+         */
+        equatorialRadius?: number | string | TolerancedQuantity;
+        /**
+         * Space (n). full: medium on all sides; half: an insulating plane through the centre, such as the ground surface. Left out: full.
+         */
+        space?: 'full' | 'half';
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A round spot through which two large bodies touch, or a round electrode on one; the current narrows to the spot and spreads again.
+ */
+export type ContactSpotSizing = {
+    shape: 'contact-spot';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of spotDiameter, spotRadius.
+     */
+    dimensions: {
+        /**
+         * Spot diameter (d). Diameter of the conducting spot. A bare number is in m; a text carries its unit.
+         */
+        spotDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Spot radius (d/2). Radius of the conducting spot. A bare number is in m; a text carries its unit.
+         */
+        spotRadius?: number | string | TolerancedQuantity;
+        /**
+         * Sides (n). 2: bodies on both sides of the spot; 1: an electrode on one body. Left out: 2.
+         */
+        sides?: number;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * An elliptic spot through which two large bodies touch, such as crossed or grooved cylinders pressed together; the current narrows to the spot and spreads again.
+ */
+export type EllipticContactSpotSizing = {
+    shape: 'elliptic-contact-spot';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of majorDiameter, majorRadius; exactly one of minorDiameter, minorRadius.
+     */
+    dimensions: {
+        /**
+         * Major diameter (d₁). Longer axis of the conducting ellipse. A bare number is in m; a text carries its unit.
+         */
+        majorDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Major radius (d₁/2). Longer axis of the conducting ellipse. A bare number is in m; a text carries its unit.
+         */
+        majorRadius?: number | string | TolerancedQuantity;
+        /**
+         * Minor diameter (d₂). Shorter axis; at most the longer one. A bare number is in m; a text carries its unit.
+         */
+        minorDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Minor radius (d₂/2). Shorter axis; at most the longer one. A bare number is in m; a text carries its unit.
+         */
+        minorRadius?: number | string | TolerancedQuantity;
+        /**
+         * Sides (n). 2: bodies on both sides of the spot; 1: an electrode on one body. Left out: 2.
+         */
+        sides?: number;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A round spot in the middle of the end faces through which two equal round bars touch; the resistance is what the narrowing to the spot adds to the bars' own.
+ */
+export type SpotInCylinderSizing = {
+    shape: 'spot-in-cylinder';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of spotDiameter, spotRadius; exactly one of cylinderDiameter, cylinderRadius.
+     */
+    dimensions: {
+        /**
+         * Spot diameter (d). Diameter of the conducting spot; less than that of the bar. A bare number is in m; a text carries its unit.
+         */
+        spotDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Spot radius (d/2). Radius of the conducting spot; less than that of the bar. A bare number is in m; a text carries its unit.
+         */
+        spotRadius?: number | string | TolerancedQuantity;
+        /**
+         * Bar diameter (D). Diameter of the round bar. A bare number is in m; a text carries its unit.
+         */
+        cylinderDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Bar radius (D/2). Radius of the round bar. A bare number is in m; a text carries its unit.
+         */
+        cylinderRadius?: number | string | TolerancedQuantity;
+        /**
+         * Sides (n). 2: bars on both sides of the spot; 1: an electrode on the end of one bar. Left out: 2.
+         */
+        sides?: number;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A straight strip of a thin sheet; the current enters and leaves across its whole ends.
+ */
+export type SheetStripSizing = {
+    shape: 'sheet-strip';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two ends. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Width (w). Width of the strip. A bare number is in m; a text carries its unit.
+         */
+        width?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * Two strips of a thin sheet that meet at a right angle with a full corner; the current enters across the end of one leg and leaves across the end of the other.
+ */
+export type SheetBendSizing = {
+    shape: 'sheet-bend';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * First leg (L₁). Length of the first leg from the inner corner, corner excluded. A bare number is in m; a text carries its unit.
+         */
+        legLength1?: number | string | TolerancedQuantity;
+        /**
+         * Second leg (L₂). Length of the second leg from the inner corner, corner excluded. A bare number is in m; a text carries its unit.
+         */
+        legLength2?: number | string | TolerancedQuantity;
+        /**
+         * First width (w₁). Width of the first leg. A bare number is in m; a text carries its unit.
+         */
+        width1?: number | string | TolerancedQuantity;
+        /**
+         * Second width (w₂). Width of the second leg. A bare number is in m; a text carries its unit.
+         */
+        width2?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A strip of a thin sheet that changes its width abruptly, on one side or on both; the current runs along it between its two whole ends.
+ */
+export type SheetStepSizing = {
+    shape: 'sheet-step';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * First length (L₁). Length of the first part, from its end to the step. A bare number is in m; a text carries its unit.
+         */
+        length1?: number | string | TolerancedQuantity;
+        /**
+         * First width (w₁). Width of the first part. A bare number is in m; a text carries its unit.
+         */
+        width1?: number | string | TolerancedQuantity;
+        /**
+         * Second length (L₂). Length of the second part, from the step to its end. A bare number is in m; a text carries its unit.
+         */
+        length2?: number | string | TolerancedQuantity;
+        /**
+         * Second width (w₂). Width of the second part. A bare number is in m; a text carries its unit.
+         */
+        width2?: number | string | TolerancedQuantity;
+        /**
+         * Alignment (m). edge: the step is on one side; centre: half of it on each side.
+         */
+        alignment?: 'edge' | 'centre';
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A strip of thin sheet folded into parallel legs with square turns, such as a film resistor or a heater; the current enters across the free end of the first leg and leaves across that of the last.
+ */
+export type SheetMeanderSizing = {
+    shape: 'sheet-meander';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Legs (n). Number of parallel legs.
+         */
+        legs?: number;
+        /**
+         * Leg length (ℓ). Length of each leg between the corners, corners excluded; the first and last from their free end to the corner. A bare number is in m; a text carries its unit.
+         */
+        legLength?: number | string | TolerancedQuantity;
+        /**
+         * Width (w). Width of the strip, in legs and turns. A bare number is in m; a text carries its unit.
+         */
+        width?: number | string | TolerancedQuantity;
+        /**
+         * Gap (g). Clear distance between neighbouring legs. A bare number is in m; a text carries its unit.
+         */
+        gap?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A rectangular sheet with one whole end as a terminal and the other end covered in part only, in its middle or from one edge on; the current crowds towards the partial terminal.
+ */
+export type SheetEndTerminalSizing = {
+    shape: 'sheet-end-terminal';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two ends. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Width (W). Width of the sheet. A bare number is in m; a text carries its unit.
+         */
+        width?: number | string | TolerancedQuantity;
+        /**
+         * Terminal width (c). Width of the partial terminal; at most that of the sheet. A bare number is in m; a text carries its unit.
+         */
+        terminalWidth?: number | string | TolerancedQuantity;
+        /**
+         * Position (m). Where the partial terminal lies on its end.
+         */
+        position?: 'centre' | 'edge';
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A straight bar of thin sheet with a stub at a right angle; the current runs through the bar, from its left arm into the stub, or from both arms together into the stub.
+ */
+export type SheetTeeSizing = {
+    shape: 'sheet-tee';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Bar width (a). Width of the bar that runs straight through. A bare number is in m; a text carries its unit.
+         */
+        barWidth?: number | string | TolerancedQuantity;
+        /**
+         * Stub width (b). Width of the stub. A bare number is in m; a text carries its unit.
+         */
+        stubWidth?: number | string | TolerancedQuantity;
+        /**
+         * Left arm (L₁). Length of the bar's left arm, from the inner corner to its end. A bare number is in m; a text carries its unit.
+         */
+        leftLength?: number | string | TolerancedQuantity;
+        /**
+         * Right arm (L₂). Length of the bar's right arm, from the inner corner to its end. A bare number is in m; a text carries its unit.
+         */
+        rightLength?: number | string | TolerancedQuantity;
+        /**
+         * Stub (L₃). Length of the stub, from the inner corners to its end. A bare number is in m; a text carries its unit.
+         */
+        stubLength?: number | string | TolerancedQuantity;
+        /**
+         * Path (p). Which ends are terminals; the end of a floating arm is an insulated edge.
+         */
+        path?: 'through' | 'branch' | 'both';
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A strip of thin sheet with a thin insulating cut across it at mid-length, such as a laser trim: from one edge, inside, or from both edges; the current runs along the strip through what is left.
+ */
+export type SheetSlitSizing = {
+    shape: 'sheet-slit';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Length (L). Distance between the two ends of the strip. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Width (W). Width of the strip. A bare number is in m; a text carries its unit.
+         */
+        width?: number | string | TolerancedQuantity;
+        /**
+         * Opening (d). Total width that is left uncut at the slit; at most that of the strip. A bare number is in m; a text carries its unit.
+         */
+        opening?: number | string | TolerancedQuantity;
+        /**
+         * Kind (m). centre leaves half of the opening at each edge, iris all of it in the middle; both have the same resistance.
+         */
+        kind?: 'edge' | 'centre' | 'iris';
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A round thin sheet with two terminals along its rim, centred opposite each other; the current runs across the disc from one arc to the other.
+ */
+export type SheetDiscSizing = {
+    shape: 'sheet-disc';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Diameter (d). Diameter of the disc; the resistance does not depend on it. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of the disc; the resistance does not depend on it. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * First terminal (t₁). Angle at the centre that the first terminal spans. A bare number is in deg; a text carries its unit.
+         */
+        terminalAngle1?: number | string | TolerancedQuantity;
+        /**
+         * Second terminal (t₂). Angle at the centre that the second terminal spans. A bare number is in deg; a text carries its unit.
+         */
+        terminalAngle2?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A metal hemisphere with its flat side flush with the ground; the current spreads radially into the soil. The model for a compact electrode.
+ */
+export type EarthHemisphereSizing = {
+    shape: 'earth-hemisphere';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Diameter (D). Diameter of the hemisphere at the surface. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (D/2). Radius of the hemisphere at the surface. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A round metal rod driven straight down from the surface; the current spreads into the soil along its whole length.
+ */
+export type EarthRodSizing = {
+    shape: 'earth-rod';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of the rod in the soil. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Diameter (d). Diameter of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * Two equal rods driven from the surface and joined together, taken as one terminal; valid for every spacing.
+ */
+export type EarthRodPairSizing = {
+    shape: 'earth-rod-pair';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of each rod in the soil. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Diameter (d). Diameter of each rod. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of each rod. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * Spacing (s). Distance between the axes of the two rods. A bare number is in m; a text carries its unit.
+         */
+        spacing?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * Equal rods driven from the surface in a line, a ring or a square grid and joined together, taken as one terminal.
+ */
+export type EarthRodGroupSizing = {
+    shape: 'earth-rod-group';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of each rod in the soil. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Diameter (d). Diameter of each rod. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of each rod. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * Spacing (s). Distance between the axes of neighbouring rods; in a ring straight across, not along the circle. A bare number is in m; a text carries its unit.
+         */
+        spacing?: number | string | TolerancedQuantity;
+        /**
+         * Number of rods (n). How many rods; for a square grid a square number such as 4, 9 or 16.
+         */
+        count?: number;
+        /**
+         * Arrangement (). How the rods stand: in a straight line, evenly on a ring, or in a square grid of equal rows. Left out: line.
+         */
+        arrangement?: 'line' | 'ring' | 'square';
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A straight bare wire laid horizontally in the ground; the current spreads into the soil along it.
+ */
+export type EarthWireSizing = {
+    shape: 'earth-wire';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (ℓ). Whole length of the wire, from end to end. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Wire diameter (d). Diameter of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Wire radius (d/2). Radius of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * Depth (h). Depth of the wire's axis below the surface. A bare number is in m; a text carries its unit.
+         */
+        depth?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A closed ring of bare round wire laid horizontally in the ground, such as a foundation's ring electrode.
+ */
+export type EarthRingSizing = {
+    shape: 'earth-ring';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of ringDiameter, ringRadius; exactly one of wireDiameter, wireRadius.
+     */
+    dimensions: {
+        /**
+         * Ring diameter (D). Diameter of the ring at the centre of the wire. A bare number is in m; a text carries its unit.
+         */
+        ringDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Ring radius (D/2). Radius of the ring at the centre of the wire. A bare number is in m; a text carries its unit.
+         */
+        ringRadius?: number | string | TolerancedQuantity;
+        /**
+         * Wire diameter (d). Diameter of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        wireDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Wire radius (d/2). Radius of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        wireRadius?: number | string | TolerancedQuantity;
+        /**
+         * Depth (h). Depth of the ring below the surface, to the centre of the wire. A bare number is in m; a text carries its unit.
+         */
+        depth?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A thin round metal plate laid flat in the ground with both faces in the soil; the current leaves from both, mostly near the rim.
+ */
+export type EarthPlateSizing = {
+    shape: 'earth-plate';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Diameter (D). Diameter of the plate; a square plate acts like a round one of the same area to about 2 %. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (D/2). Radius of the plate; a square plate acts like a round one of the same area to about 2 %. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * Depth (h). Depth of the plate below the surface. A bare number is in m; a text carries its unit.
+         */
+        depth?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * Equal straight bare wires laid horizontally in the ground from one common point; two arms stand at a right angle, more are spread evenly.
+ */
+export type EarthStarSizing = {
+    shape: 'earth-star';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of wireDiameter, wireRadius.
+     */
+    dimensions: {
+        /**
+         * Arms (n). Number of arms: 2 (at a right angle), 3, 4, 6 or 8.
+         */
+        arms?: number;
+        /**
+         * Arm length (L). Length of each arm from the common point. A bare number is in m; a text carries its unit.
+         */
+        armLength?: number | string | TolerancedQuantity;
+        /**
+         * Wire diameter (d). Diameter of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        wireDiameter?: number | string | TolerancedQuantity;
+        /**
+         * Wire radius (d/2). Radius of the wire; for a strip take half its width. A bare number is in m; a text carries its unit.
+         */
+        wireRadius?: number | string | TolerancedQuantity;
+        /**
+         * Depth (h). Depth of the wires' axes below the surface. A bare number is in m; a text carries its unit.
+         */
+        depth?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A round rod driven from the surface of a soil of two horizontal layers; it may end in the upper layer or reach into the lower one.
+ */
+export type EarthRodLayeredSizing = {
+    shape: 'earth-rod-layered';
+    /**
+     * The shape's dimensions, without the one to find; exactly one of diameter, radius.
+     */
+    dimensions: {
+        /**
+         * Length (L). Length of the rod in the soil. A bare number is in m; a text carries its unit.
+         */
+        length?: number | string | TolerancedQuantity;
+        /**
+         * Diameter (d). Diameter of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
+         */
+        diameter?: number | string | TolerancedQuantity;
+        /**
+         * Radius (d/2). Radius of the rod, or of its conductive backfill. A bare number is in m; a text carries its unit.
+         */
+        radius?: number | string | TolerancedQuantity;
+        /**
+         * Depth of the upper layer (h). Thickness of the upper layer, from the surface down. A bare number is in m; a text carries its unit.
+         */
+        upperDepth?: number | string | TolerancedQuantity;
+    };
+    /**
+     * upper: Upper layer; lower: Lower layer
+     */
+    media: {
+        upper: Medium;
+        lower: Medium;
+    };
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
+ * A horizontal grid of bare conductors under a site, joined where they cross; estimated from its area, its depth and the length of its conductors.
+ */
+export type EarthGridSizing = {
+    shape: 'earth-grid';
+    /**
+     * The shape's dimensions, without the one to find.
+     */
+    dimensions: {
+        /**
+         * Area (A). Area that the grid encloses. A bare number is in m^2; a text carries its unit.
+         */
+        area?: number | string | TolerancedQuantity;
+        /**
+         * Conductor length (L). Total length of buried bare conductors; for a rectangle of m by n meshes (m+1) lengths and (n+1) widths. A bare number is in m; a text carries its unit.
+         */
+        conductorLength?: number | string | TolerancedQuantity;
+        /**
+         * Depth (h). Depth of the grid below the surface. A bare number is in m; a text carries its unit.
+         */
+        depth?: number | string | TolerancedQuantity;
+    };
+    medium: Medium;
+    operating?: TolerancedOperating;
+    /**
+     * Parts to add to the answer; `["checks"]` by default.
+     */
+    include?: Array<'steps' | 'profile' | 'checks' | 'peak'>;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    requirement?: Requirement;
+    uncertainty?: UncertaintyRequest;
+    /**
+     * The dimension to find, by any of its names; it is left out of `dimensions`.
+     */
+    solveFor: string;
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest value of the dimension to look at; all that the shape admits if left out (lengths from 1e-12 to 1e6 m).
+     */
+    within?: Array<number | string>;
+};
+
+/**
  * Every item answered or refused on its own.
  */
 export type BatchAnswer = {
@@ -3700,6 +7135,341 @@ export type BatchRequest = {
      * Bodies of `POST /resistance`, without `record`.
      */
     items: Array<ResistanceRequest>;
+};
+
+/**
+ * The resistance between the ports, element by element.
+ */
+export type AnsweredNetwork = {
+    /**
+     * The resistance between the ports, with its bounds.
+     */
+    resistance: {
+        /**
+         * Resistance in ohms; lower ≤ value ≤ upper.
+         */
+        value: number;
+        unit: 'ohm';
+        /**
+         * The value for people, rounded as its bounds allow.
+         */
+        text: string;
+        /**
+         * Lower bound in ohms, below the upper one always.
+         */
+        lower: number;
+        /**
+         * Upper bound in ohms.
+         */
+        upper: number;
+        /**
+         * Where the bounds come from: rounding alone, or the elements' own bounds (all at their lowest, all at their highest; a network's resistance never falls when an element's rises) and rounding.
+         */
+        boundsBasis: 'rounding' | 'elements';
+        /**
+         * Whether the bounds are proved for the stated problem.
+         */
+        proved: boolean;
+    };
+    /**
+     * The reciprocal of the resistance.
+     */
+    conductance: {
+        /**
+         * Conductance in siemens.
+         */
+        value: number;
+        unit: 'siemens';
+        /**
+         * The value for people.
+         */
+        text: string;
+    };
+    /**
+     * The operating point; voltage, current and power only where the request gave one of them.
+     */
+    operating: {
+        /**
+         * Temperature in °C at which the medium was evaluated.
+         */
+        temperature: number;
+        /**
+         * Voltage across the terminals in volts.
+         */
+        voltage?: number;
+        /**
+         * Current in amperes.
+         */
+        current?: number;
+        /**
+         * Power in watts.
+         */
+        power?: number;
+    };
+    /**
+     * Whether nodes and elements are told at the operating point or for one volt between the ports.
+     */
+    per: 'operating-point' | 'volt';
+    /**
+     * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
+     */
+    verdict?: 'met' | 'not-met' | 'undecided';
+    nodes: Array<{
+        name: string;
+        /**
+         * Potential against the second port, V.
+         */
+        voltage: number;
+    }>;
+    elements: Array<{
+        name: string;
+        between: Array<string>;
+        /**
+         * Resistance, ohm.
+         */
+        resistance: number;
+        /**
+         * How sure its resistance is, where a request gave it.
+         */
+        bounds?: {
+            /**
+             * Lower bound, ohm.
+             */
+            lower: number;
+            /**
+             * Upper bound, ohm.
+             */
+            upper: number;
+            /**
+             * Where the bounds come from: rounding (closed form or converged series), quadrature (error estimate), rayleigh (conducting sheets and insulating walls), formula-accuracy (stated accuracy of a published formula), energy (two field solutions), energy-quadrature (the same with estimated integrals).
+             */
+            boundsBasis: 'rounding' | 'quadrature' | 'rayleigh' | 'formula-accuracy' | 'energy' | 'energy-quadrature';
+            proved: boolean;
+        };
+        /**
+         * Current from its first node to its second, A.
+         */
+        current: number;
+        /**
+         * Potential of its first node above its second, V.
+         */
+        voltage: number;
+        /**
+         * Power turned to heat, W.
+         */
+        power: number;
+        /**
+         * Its part of the whole power, 0 … 1.
+         */
+        share: number;
+        /**
+         * By how much the network's resistance rises when its own rises, ohm per ohm: the square of its part of the current.
+         */
+        sensitivity: number;
+    }>;
+    checks: Array<{
+        name: 'current-law' | 'voltage-law' | 'power-balance';
+        applies: true;
+        passed: boolean;
+        /**
+         * Largest relative deviation found.
+         */
+        deviation: number;
+        /**
+         * Largest deviation that passes.
+         */
+        tolerance: number;
+    }>;
+    cautions: Array<string>;
+    assumptions: Array<string>;
+    sources: Array<{
+        title: string;
+        detail?: string;
+        provenance: 'source at hand' | 'from memory' | 'derived here' | 'measured';
+    }>;
+    materials: Array<{
+        id: string;
+        version: number;
+        name: string;
+    }>;
+    engine: string;
+    catalogue: string;
+    /**
+     * Where the calculation was stored; only if `record` was in the request.
+     */
+    record?: {
+        id: string;
+        /**
+         * Path of the stored record.
+         */
+        url: string;
+    };
+};
+
+/**
+ * Elements between named nodes, and two ports.
+ */
+export type NetworkRequest = {
+    elements: Array<NetworkElementRequest>;
+    /**
+     * The nodes where current enters and leaves.
+     */
+    ports: Array<string>;
+    /**
+     * At most one of voltage, current and power between the ports; the temperature holds for elements whose request names none.
+     */
+    operating?: {
+        /**
+         * Temperature of the medium, 20 °C by default (a temperature; a bare number is in degC, or a text with a unit).
+         */
+        temperature?: number | string;
+        /**
+         * Voltage across the terminals (a voltage; a bare number is in V, or a text with a unit).
+         */
+        voltage?: number | string;
+        /**
+         * Current through the terminals (a current; a bare number is in A, or a text with a unit).
+         */
+        current?: number | string;
+        /**
+         * Power turned to heat (a power; a bare number is in W, or a text with a unit).
+         */
+        power?: number | string;
+    };
+    requirement?: Requirement;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+};
+
+/**
+ * A resistance between two nodes: exactly one of `resistance` and `request`.
+ */
+export type NetworkElementRequest = {
+    /**
+     * Unique in the network.
+     */
+    name: string;
+    /**
+     * The two nodes; its current counts as positive from the first to the second.
+     */
+    between: Array<string>;
+    /**
+     * Its resistance (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    resistance?: number | string;
+    /**
+     * In place of a resistance: a body of `POST /resistance` that gives it, without record, include, requirement, uncertainty and drive.
+     */
+    request?: ({
+        shape: 'bar';
+    } & BarRequest) | ({
+        shape: 'round-wire';
+    } & RoundWireRequest) | ({
+        shape: 'tube';
+    } & TubeRequest) | ({
+        shape: 'prism';
+    } & PrismRequest) | ({
+        shape: 'etched-trace';
+    } & EtchedTraceRequest) | ({
+        shape: 'via-barrel';
+    } & ViaBarrelRequest) | ({
+        shape: 'stranded-conductor';
+    } & StrandedConductorRequest) | ({
+        shape: 'parallel-plates';
+    } & ParallelPlatesRequest) | ({
+        shape: 'box-tube';
+    } & BoxTubeRequest) | ({
+        shape: 'clad-wire';
+    } & CladWireRequest) | ({
+        shape: 'helical-winding';
+    } & HelicalWindingRequest) | ({
+        shape: 'flat-spiral';
+    } & FlatSpiralRequest) | ({
+        shape: 'tapered-strip';
+    } & TaperedStripRequest) | ({
+        shape: 'cone-frustum';
+    } & ConeFrustumRequest) | ({
+        shape: 'cylindrical-shell';
+    } & CylindricalShellRequest) | ({
+        shape: 'spherical-shell';
+    } & SphericalShellRequest) | ({
+        shape: 'confocal-shell';
+    } & ConfocalShellRequest) | ({
+        shape: 'arc-bar';
+    } & ArcBarRequest) | ({
+        shape: 'conical-shell';
+    } & ConicalShellRequest) | ({
+        shape: 'bent-tube';
+    } & BentTubeRequest) | ({
+        shape: 'hyperbolic-neck';
+    } & HyperbolicNeckRequest) | ({
+        shape: 'torus-arc';
+    } & TorusArcRequest) | ({
+        shape: 'cylinder-in-square';
+    } & CylinderInSquareRequest) | ({
+        shape: 'eccentric-cylinders';
+    } & EccentricCylindersRequest) | ({
+        shape: 'parallel-cylinders';
+    } & ParallelCylindersRequest) | ({
+        shape: 'cylinder-plane';
+    } & CylinderPlaneRequest) | ({
+        shape: 'sphere-plane';
+    } & SpherePlaneRequest) | ({
+        shape: 'sphere-buried';
+    } & SphereBuriedRequest) | ({
+        shape: 'sphere-pair';
+    } & SpherePairRequest) | ({
+        shape: 'spheroid';
+    } & SpheroidRequest) | ({
+        shape: 'contact-spot';
+    } & ContactSpotRequest) | ({
+        shape: 'elliptic-contact-spot';
+    } & EllipticContactSpotRequest) | ({
+        shape: 'spot-in-cylinder';
+    } & SpotInCylinderRequest) | ({
+        shape: 'sheet-strip';
+    } & SheetStripRequest) | ({
+        shape: 'sheet-bend';
+    } & SheetBendRequest) | ({
+        shape: 'sheet-step';
+    } & SheetStepRequest) | ({
+        shape: 'sheet-meander';
+    } & SheetMeanderRequest) | ({
+        shape: 'sheet-end-terminal';
+    } & SheetEndTerminalRequest) | ({
+        shape: 'sheet-tee';
+    } & SheetTeeRequest) | ({
+        shape: 'sheet-slit';
+    } & SheetSlitRequest) | ({
+        shape: 'sheet-disc';
+    } & SheetDiscRequest) | ({
+        shape: 'earth-hemisphere';
+    } & EarthHemisphereRequest) | ({
+        shape: 'earth-rod';
+    } & EarthRodRequest) | ({
+        shape: 'earth-rod-pair';
+    } & EarthRodPairRequest) | ({
+        shape: 'earth-rod-group';
+    } & EarthRodGroupRequest) | ({
+        shape: 'earth-wire';
+    } & EarthWireRequest) | ({
+        shape: 'earth-ring';
+    } & EarthRingRequest) | ({
+        shape: 'earth-plate';
+    } & EarthPlateRequest) | ({
+        shape: 'earth-star';
+    } & EarthStarRequest) | ({
+        shape: 'earth-rod-layered';
+    } & EarthRodLayeredRequest) | ({
+        shape: 'earth-grid';
+    } & EarthGridRequest);
 };
 
 /**
@@ -5086,7 +8856,7 @@ export type RecordPage = {
 export type Record = {
     id: string;
     /**
-     * What computed it: `resistance` or `field`.
+     * What computed it: `resistance`, `sizing`, `network` or `field`.
      */
     operation: string;
     label: string;
@@ -5106,9 +8876,9 @@ export type Record = {
         [key: string]: unknown;
     };
     /**
-     * What came out: a ResistanceResult, or a FieldResult where `operation` is `field`.
+     * What came out: a ResistanceResult, a SizingResult where `operation` is `sizing`, a NetworkResult where it is `network`, or a FieldResult where it is `field`.
      */
-    result: ResistanceResult | FieldResult;
+    result: ResistanceResult | SizingResult | NetworkResult | FieldResult;
     /**
      * Materials that went in, with the versions that a replay uses.
      */
@@ -5124,6 +8894,215 @@ export type Record = {
 };
 
 /**
+ * The values of one dimension that give a resistance.
+ */
+export type SizingResult = {
+    shape: string;
+    solveFor: string;
+    target: {
+        /**
+         * Resistance in ohms; lower ≤ value ≤ upper.
+         */
+        value: number;
+        unit: 'ohm';
+        /**
+         * The value for people, rounded as its bounds allow.
+         */
+        text: string;
+    };
+    /**
+     * The range that was searched.
+     */
+    within: Array<{
+        /**
+         * Value of the dimension in `unit`; as a bare number it goes back into `dimensions`.
+         */
+        value: number;
+        unit: '1' | 'm' | 'm^2' | 'deg';
+        /**
+         * The value for people.
+         */
+        text: string;
+    }>;
+    /**
+     * All that lie in the range, smallest first.
+     */
+    solutions: Array<SizingSolution>;
+    assumptions: Array<string>;
+    sources: Array<{
+        title: string;
+        detail?: string;
+        provenance: 'source at hand' | 'from memory' | 'derived here' | 'measured';
+    }>;
+    materials: Array<{
+        id: string;
+        version: number;
+        name: string;
+    }>;
+    engine: string;
+    catalogue: string;
+};
+
+/**
+ * The resistance between the ports, and what passes through each element.
+ */
+export type NetworkResult = {
+    /**
+     * The resistance between the ports, with its bounds.
+     */
+    resistance: {
+        /**
+         * Resistance in ohms; lower ≤ value ≤ upper.
+         */
+        value: number;
+        unit: 'ohm';
+        /**
+         * The value for people, rounded as its bounds allow.
+         */
+        text: string;
+        /**
+         * Lower bound in ohms, below the upper one always.
+         */
+        lower: number;
+        /**
+         * Upper bound in ohms.
+         */
+        upper: number;
+        /**
+         * Where the bounds come from: rounding alone, or the elements' own bounds (all at their lowest, all at their highest; a network's resistance never falls when an element's rises) and rounding.
+         */
+        boundsBasis: 'rounding' | 'elements';
+        /**
+         * Whether the bounds are proved for the stated problem.
+         */
+        proved: boolean;
+    };
+    /**
+     * The reciprocal of the resistance.
+     */
+    conductance: {
+        /**
+         * Conductance in siemens.
+         */
+        value: number;
+        unit: 'siemens';
+        /**
+         * The value for people.
+         */
+        text: string;
+    };
+    /**
+     * The operating point; voltage, current and power only where the request gave one of them.
+     */
+    operating: {
+        /**
+         * Temperature in °C at which the medium was evaluated.
+         */
+        temperature: number;
+        /**
+         * Voltage across the terminals in volts.
+         */
+        voltage?: number;
+        /**
+         * Current in amperes.
+         */
+        current?: number;
+        /**
+         * Power in watts.
+         */
+        power?: number;
+    };
+    /**
+     * Whether nodes and elements are told at the operating point or for one volt between the ports.
+     */
+    per: 'operating-point' | 'volt';
+    /**
+     * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
+     */
+    verdict?: 'met' | 'not-met' | 'undecided';
+    nodes: Array<{
+        name: string;
+        /**
+         * Potential against the second port, V.
+         */
+        voltage: number;
+    }>;
+    elements: Array<{
+        name: string;
+        between: Array<string>;
+        /**
+         * Resistance, ohm.
+         */
+        resistance: number;
+        /**
+         * How sure its resistance is, where a request gave it.
+         */
+        bounds?: {
+            /**
+             * Lower bound, ohm.
+             */
+            lower: number;
+            /**
+             * Upper bound, ohm.
+             */
+            upper: number;
+            /**
+             * Where the bounds come from: rounding (closed form or converged series), quadrature (error estimate), rayleigh (conducting sheets and insulating walls), formula-accuracy (stated accuracy of a published formula), energy (two field solutions), energy-quadrature (the same with estimated integrals).
+             */
+            boundsBasis: 'rounding' | 'quadrature' | 'rayleigh' | 'formula-accuracy' | 'energy' | 'energy-quadrature';
+            proved: boolean;
+        };
+        /**
+         * Current from its first node to its second, A.
+         */
+        current: number;
+        /**
+         * Potential of its first node above its second, V.
+         */
+        voltage: number;
+        /**
+         * Power turned to heat, W.
+         */
+        power: number;
+        /**
+         * Its part of the whole power, 0 … 1.
+         */
+        share: number;
+        /**
+         * By how much the network's resistance rises when its own rises, ohm per ohm: the square of its part of the current.
+         */
+        sensitivity: number;
+    }>;
+    checks: Array<{
+        name: 'current-law' | 'voltage-law' | 'power-balance';
+        applies: true;
+        passed: boolean;
+        /**
+         * Largest relative deviation found.
+         */
+        deviation: number;
+        /**
+         * Largest deviation that passes.
+         */
+        tolerance: number;
+    }>;
+    cautions: Array<string>;
+    assumptions: Array<string>;
+    sources: Array<{
+        title: string;
+        detail?: string;
+        provenance: 'source at hand' | 'from memory' | 'derived here' | 'measured';
+    }>;
+    materials: Array<{
+        id: string;
+        version: number;
+        name: string;
+    }>;
+    engine: string;
+    catalogue: string;
+};
+
+/**
  * The new label.
  */
 export type RecordChange = {
@@ -5134,14 +9113,14 @@ export type RecordChange = {
  * A stored calculation beside the same one computed today.
  */
 export type Replay = {
-    before: ResistanceResult;
-    now: ResistanceResult;
+    before: ResistanceResult | SizingResult | NetworkResult;
+    now: ResistanceResult | SizingResult | NetworkResult;
     /**
-     * (now − before)/before of the resistance.
+     * (now − before)/before of the resistance; of a sizing, of the dimension found.
      */
     drift: number;
     /**
-     * Whether value and bounds are the same to the last bit.
+     * Whether value, bounds and uncertainty, or the dimensions found, are the same to the last bit.
      */
     identical: boolean;
 };
@@ -5805,6 +9784,102 @@ export type ReadResistanceResponses = {
 
 export type ReadResistanceResponse = ReadResistanceResponses[keyof ReadResistanceResponses];
 
+export type SizeDimensionData = {
+    /**
+     * What to find.
+     */
+    body: SizingRequest;
+    headers?: {
+        /**
+         * A text of the caller's choice; a repeat with it within a day gets the same answer.
+         */
+        'Idempotency-Key'?: string;
+    };
+    path?: never;
+    query?: never;
+    url: '/sizing';
+};
+
+export type SizeDimensionErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     *
+     * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
+     *
+     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     *
+     * `team-required`: The call concerns what a team owns, and it came without a key of a team.
+     */
+    403: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `request-in-progress`: A call with this Idempotency-Key has started and not finished.
+     */
+    409: Problem;
+    /**
+     * `body-too-large`: The body is longer than this call takes.
+     */
+    413: Problem;
+    /**
+     * `unsupported-media-type`: The body's Content-Type is not one that this call reads.
+     */
+    415: Problem;
+    /**
+     * `idempotency-key-reused`: The Idempotency-Key was used before with another body or another path.
+     *
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `quota-exhausted`: The call would need more computations than are left of the calendar month (UTC).
+     *
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type SizeDimensionError = SizeDimensionErrors[keyof SizeDimensionErrors];
+
+export type SizeDimensionResponses = {
+    /**
+     * The solutions, smallest first.
+     */
+    200: AnsweredSizing;
+};
+
+export type SizeDimensionResponse = SizeDimensionResponses[keyof SizeDimensionResponses];
+
 export type ComputeBatchData = {
     /**
      * What to compute.
@@ -5889,6 +9964,102 @@ export type ComputeBatchResponses = {
 };
 
 export type ComputeBatchResponse = ComputeBatchResponses[keyof ComputeBatchResponses];
+
+export type SolveNetworkData = {
+    /**
+     * The network.
+     */
+    body: NetworkRequest;
+    headers?: {
+        /**
+         * A text of the caller's choice; a repeat with it within a day gets the same answer.
+         */
+        'Idempotency-Key'?: string;
+    };
+    path?: never;
+    query?: never;
+    url: '/networks';
+};
+
+export type SolveNetworkErrors = {
+    /**
+     * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
+     *
+     * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
+     *
+     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     */
+    400: Problem;
+    /**
+     * `expired-key`: The key, or the secret of it that a rotation replaced, has reached its end.
+     *
+     * `invalid-key`: The key is misspelt, cut off, or was never issued here.
+     *
+     * `invalid-token`: The short-lived token with which a page of this service calls is over or not one of ours.
+     *
+     * `key-not-allowed-in-url`: Addresses end up in logs and histories, so a key counts there only if it was issued for that.
+     *
+     * `missing-credentials`: The call needs a key and carries none.
+     *
+     * `revoked-key`: The key was ended by a person or a program of its team.
+     */
+    401: Problem;
+    /**
+     * `insufficient-scope`: The key is known, but what it may do does not include this call.
+     *
+     * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
+     *
+     * `team-required`: The call concerns what a team owns, and it came without a key of a team.
+     */
+    403: Problem;
+    /**
+     * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
+     */
+    406: Problem;
+    /**
+     * `request-in-progress`: A call with this Idempotency-Key has started and not finished.
+     */
+    409: Problem;
+    /**
+     * `body-too-large`: The body is longer than this call takes.
+     */
+    413: Problem;
+    /**
+     * `unsupported-media-type`: The body's Content-Type is not one that this call reads.
+     */
+    415: Problem;
+    /**
+     * `idempotency-key-reused`: The Idempotency-Key was used before with another body or another path.
+     *
+     * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
+     */
+    422: Problem;
+    /**
+     * `quota-exhausted`: The call would need more computations than are left of the calendar month (UTC).
+     *
+     * `too-many-requests`: The requests of this minute are used up.
+     */
+    429: Problem;
+    /**
+     * `internal`: Something went wrong that is not the caller's doing. Nothing was stored and nothing counted.
+     */
+    500: Problem;
+    /**
+     * `busy`: The service is starting, stopping or has more work than it can take at the moment.
+     */
+    503: Problem;
+};
+
+export type SolveNetworkError = SolveNetworkErrors[keyof SolveNetworkErrors];
+
+export type SolveNetworkResponses = {
+    /**
+     * The network's resistance, nodes and elements.
+     */
+    200: AnsweredNetwork;
+};
+
+export type SolveNetworkResponse = SolveNetworkResponses[keyof SolveNetworkResponses];
 
 export type StoreOutlineData = {
     /**

@@ -1,0 +1,242 @@
+/** The dimension that gives a resistance: every solution in a range, each computed as any other request. */
+import { InputError, pointerTo, Problems } from "../../failure";
+import { Collected } from "../../medium/collected";
+import { derivative } from "../../numeric/derivative";
+import { brent, findRoots } from "../../numeric/find-roots";
+import { formatQuantity } from "../../quantity/format-quantity";
+import { radiansToDegrees } from "../../quantity/parse-quantity";
+import type { Dimensions, Resolved } from "../../shape/define-shape";
+import { VaryingDimensions } from "../../shape/vary-dimensions";
+import type { ComputeContext } from "../compute-context";
+import { computeResistance } from "../compute-resistance";
+import { Evaluator } from "../evaluator";
+import { readMedia } from "../read-media";
+import { solve } from "../solve";
+import type { ResistanceResult } from "../result-schema";
+import { readSizing, type ReadSizing } from "./read-sizing";
+import { searchGrid, unitOf } from "./search-range";
+import type { SizingResult, SizingSolution } from "./sizing-schema";
+import { findWholeNumbers } from "./whole-numbers";
+
+/** A whole number meets the target where they differ by no more than rounding. */
+const MEETS = 1e-9;
+/** The value of a search and of the finished answer differ by no more than this, unless a field solution steps in. */
+const SAME = 1e-11;
+const BETWEEN_LOOKS = 32;
+const MOST_SOLUTIONS = 50;
+
+interface Place {
+  readonly x: number;
+  /** ln(R/target) */
+  readonly value: number;
+}
+
+/**
+ * Finds the dimension.
+ * @param request the body of `POST /sizing` as it arrived, without `record`.
+ * @throws InputError for everything that the caller can get wrong, and where no value gives the target.
+ */
+export function computeSizing(request: unknown, context: ComputeContext): SizingResult {
+  const problems = new Problems();
+  const read = readSizing(request, context, problems);
+  if (!read) throw new InputError(problems.list);
+  const { dimension, range, target } = read;
+  const evaluator = new Evaluator(read.source, [{ kind: "dimension", name: read.solveFor }], context);
+  const overdue = context.overdue ?? (() => false);
+  let looked = 0;
+  const f = (x: number): number => {
+    if (++looked % BETWEEN_LOOKS === 0 && overdue()) {
+      throw new InputError([
+        {
+          pointer: "#/within",
+          detail: `is too wide for the time a call may take: ${looked} values were tried.`,
+        },
+      ]);
+    }
+    return Math.log(evaluator.at([x]) / target);
+  };
+  const found =
+    dimension.type === "integer" ? wholeNumbers(f, read, evaluator) : realNumbers(f, read, evaluator);
+  const solutions: SizingSolution[] = [];
+  let first: ResistanceResult | undefined;
+  for (const { x, exact } of found) {
+    const place = exact && dimension.type !== "integer" ? sharpened(x, read, context) : x;
+    const value = bare(place, read);
+    const dimensions = { ...(read.body.dimensions as Record<string, unknown>), [read.solveFor]: value };
+    const result = computeResistance({ ...read.body, dimensions }, context);
+    first ??= result;
+    solutions.push(solution(result, place, value, exact, read, evaluator));
+  }
+  if (!first) throw new Error("a search without solutions was not refused");
+  return {
+    shape: first.shape,
+    solveFor: read.solveFor,
+    target: { value: target, unit: "ohm", text: formatQuantity(target, "ohm") },
+    within: [range.from, range.to].map((x) => shown(x, read)),
+    solutions,
+    assumptions: first.assumptions,
+    sources: first.sources,
+    materials: first.materials,
+    engine: first.engine,
+    catalogue: first.catalogue,
+  };
+}
+
+function realNumbers(
+  f: (x: number) => number,
+  read: ReadSizing,
+  evaluator: Evaluator,
+): { x: number; exact: boolean }[] {
+  const grid = searchGrid(read.range, read.source.shape, read.reader, read.source.body.dimensions);
+  const { roots, low, high, ends } = findRoots(f, grid);
+  if (!ends) throw refuseRange(read, evaluator, grid[Math.floor(grid.length / 2)]);
+  if (high.value - low.value <= 1e-12) {
+    throw new InputError([
+      {
+        pointer: "#/solveFor",
+        detail: `does not change the resistance, which is ${ohms(low, read)} for every ${read.solveFor}.`,
+      },
+    ]);
+  }
+  if (roots.length === 0) throw refuseTarget(read, ends, [low, high]);
+  return roots.slice(0, MOST_SOLUTIONS).map((x) => ({ x, exact: true }));
+}
+
+function wholeNumbers(
+  f: (x: number) => number,
+  read: ReadSizing,
+  evaluator: Evaluator,
+): { x: number; exact: boolean }[] {
+  const { from, to } = read.range;
+  const { found, ends } = findWholeNumbers(
+    f,
+    Math.ceil(from),
+    Math.floor(to),
+    (_, value) => Math.abs(value) <= MEETS,
+  );
+  if (!ends) throw refuseRange(read, evaluator, Math.ceil(from));
+  if (found.length === 0) throw refuseTarget(read, ends, []);
+  return found.slice(0, MOST_SOLUTIONS).map(({ n, exact }) => ({ x: n, exact }));
+}
+
+/**
+ * Where a field solution takes the formula's place in the finished answer the root moves a little: it is found again on
+ * the answer itself, as far as its mesh lets it be smooth.
+ */
+function sharpened(
+  x: number,
+  { source, solveFor, target, range }: ReadSizing,
+  context: ComputeContext,
+): number {
+  const { shape, body, temperatureC } = source;
+  if (shape.answer.kind !== "factor" || !shape.answer.planIsWhole) return x;
+  const varying = new VaryingDimensions(shape, body.dimensions, [solveFor]);
+  const value = (at: number): number => {
+    const dimensions: Resolved<Dimensions> | null = varying.at([at]);
+    if (!dimensions) return Number.NaN;
+    const media = readMedia(shape, body, dimensions, temperatureC, context, new Collected(), new Problems());
+    return media ? Math.log(solve(shape, dimensions, media).value / target) : Number.NaN;
+  };
+  const here = { x, value: value(x) };
+  if (!(Math.abs(here.value) > SAME)) return x;
+  for (let reach = 4 * Math.abs(here.value); reach < 0.5; reach *= 4) {
+    for (const side of [1 + reach, 1 / (1 + reach)]) {
+      const at = x * side;
+      if (at < range.from || at > range.to) continue;
+      const there = { x: at, value: value(at) };
+      if (there.value * here.value < 0) return brent(value, here, there);
+    }
+  }
+  return x;
+}
+
+function solution(
+  result: ResistanceResult,
+  x: number,
+  value: number,
+  exact: boolean,
+  read: ReadSizing,
+  evaluator: Evaluator,
+): SizingSolution {
+  const { dimension } = read;
+  const slope =
+    dimension.type === "integer"
+      ? evaluator.at([x + 1]) - evaluator.at([x])
+      : derivative((at) => evaluator.at([at]), x, 0.01 * Math.abs(x)).value;
+  const sensitivity = unitOf(dimension) === "deg" ? (slope * Math.PI) / 180 : slope;
+  if (!Number.isFinite(sensitivity) && dimension.type !== "integer") {
+    throw new InputError([
+      { pointer: "#/solveFor", detail: "has a sensitivity there that a double cannot hold." },
+    ]);
+  }
+  const { resistance, conductance, method, operating, quadrature, uncertainty, verdict, cautions } = result;
+  const { peak, steps, profile, checks } = result;
+  return {
+    dimension: { ...shown(x, read), value },
+    resistance,
+    sensitivity: Number.isFinite(sensitivity) ? sensitivity : 0,
+    exact,
+    conductance,
+    method,
+    operating,
+    quadrature,
+    uncertainty,
+    verdict,
+    peak,
+    steps,
+    profile,
+    checks,
+    cautions,
+  };
+}
+
+function bare(x: number, { dimension }: ReadSizing): number {
+  return unitOf(dimension) === "deg" ? radiansToDegrees(x) : x;
+}
+
+const TEXT_UNITS = { m: "metre", "m^2": "m^2", deg: "degree", "1": "1" } as const;
+
+function shown(x: number, read: ReadSizing): SizingResult["within"][number] {
+  const unit = unitOf(read.dimension);
+  const value = bare(x, read);
+  return { value, unit, text: formatQuantity(value, TEXT_UNITS[unit], { digits: 6 }) };
+}
+
+function ohms(place: Place, { target }: ReadSizing): string {
+  return formatQuantity(target * Math.exp(place.value), "ohm");
+}
+
+function at(place: Place, read: ReadSizing): string {
+  return `${ohms(place, read)} at ${read.solveFor} = ${shown(place.x, read).text}`;
+}
+
+/** Nothing gives the target: the resistances at both ends, and beyond them where they are not the extremes. */
+function refuseTarget(
+  read: ReadSizing,
+  ends: readonly [Place, Place],
+  extremes: readonly Place[],
+): InputError {
+  const inner = extremes.filter((place) => ends.every((end) => Math.abs(end.value - place.value) > 1e-9));
+  const between =
+    inner.length === 0 ? "" : `, and between them ${inner.map((place) => at(place, read)).join(" and ")}`;
+  return new InputError([
+    {
+      pointer: "#/target",
+      detail: `is not reached: the resistance is ${at(ends[0], read)} and ${at(ends[1], read)}${between}.`,
+    },
+  ]);
+}
+
+/** No value in the range is admitted at all. */
+function refuseRange(read: ReadSizing, evaluator: Evaluator, x: number): InputError {
+  const why = evaluator.refusal([x]);
+  const own = pointerTo("#/dimensions", read.solveFor);
+  if (why && why.pointer !== own && !why.pointer.startsWith("#/dimensions")) return new InputError([why]);
+  const reason = why ? ` ${why.pointer.slice(2).replaceAll("/", ".")} ${why.detail}` : "";
+  return new InputError([
+    {
+      pointer: read.givenWithin ? "#/within" : "#/solveFor",
+      detail: `has no value that the shape admits with the other dimensions: at ${read.solveFor} = ${shown(x, read).text}${reason}`,
+    },
+  ]);
+}
