@@ -30,6 +30,18 @@ export function resistanceSnippets(origin: string, request: object): readonly Sn
   });
 }
 
+export function sizingSnippets(origin: string, request: object): readonly Snippet[] {
+  return snippets(origin, {
+    path: "/sizing",
+    body: request,
+    typescript: ["for (const { dimension, resistance } of answer.solutions) console.log(dimension.text, resistance.text);"],
+    python: [
+      'for solution in answer["solutions"]:',
+      '    print(solution["dimension"]["text"], solution["resistance"]["text"])',
+    ],
+  });
+}
+
 /** A field solution: the call waits for its end as long as the API lets it. */
 export function fieldSnippets(origin: string, request: object, terminals: number): readonly Snippet[] {
   const several = terminals > 2;

@@ -1,0 +1,25 @@
+import { Fragment } from "react";
+import { SiteLink } from "../../../_ui/site/site-link";
+
+const MARKUP = /(`[^`]+`|\*\*[^*]+\*\*|\[[^\]]+\]\([^)]+\))/;
+
+/** Running text of the docs: `code`, **strong**, [link](address). */
+export function Inline({ text }: { readonly text: string }) {
+  return text.split(MARKUP).map((part, index) => {
+    if (part.startsWith("`") && part.length > 2) return <code key={index}>{part.slice(1, -1)}</code>;
+    if (part.startsWith("**")) return <strong key={index}>{part.slice(2, -2)}</strong>;
+    const link = /^\[([^\]]+)\]\(([^)]+)\)$/.exec(part);
+    if (link)
+      return (
+        <SiteLink key={index} href={link[2]} className="link">
+          {link[1]}
+        </SiteLink>
+      );
+    return <Fragment key={index}>{part}</Fragment>;
+  });
+}
+
+/** The same without its marks, for search. */
+export function plainText(text: string): string {
+  return text.replace(/\[([^\]]+)\]\([^)]+\)/g, "$1").replace(/[`*]/g, "");
+}
