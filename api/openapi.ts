@@ -15,6 +15,7 @@ const TAGS = [
     name: "Resistance",
     description: "From a shape, a medium and two terminals to a resistance with bounds.",
   },
+  { name: "Networks", description: "Resistances between named nodes." },
   { name: "Shapes", description: "The catalogue." },
   { name: "Materials", description: "The shared library and the team's own materials." },
   { name: "Records", description: "Stored calculations, which can be replayed." },

@@ -5,6 +5,7 @@ import { deleteKey, listKeys, postKey, postRotation, readKey } from "./operation
 import { deleteMaterial, patchMaterial, postMaterial } from "./operations/material-changes";
 import { listMaterials, readMaterial } from "./operations/materials";
 import { readHealth } from "./operations/health";
+import { postNetwork } from "./operations/networks";
 import { readOpenApi } from "./operations/openapi";
 import { postOutline, readOutline } from "./operations/outlines";
 import { deleteRecord, listRecords, patchRecord, readRecord, replayRecord } from "./operations/records";
@@ -23,6 +24,7 @@ export const registry = new RouteTable([
   getResistance,
   postSizing,
   postBatch,
+  postNetwork,
   postOutline,
   readOutline,
   postField,

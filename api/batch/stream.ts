@@ -10,7 +10,13 @@ const SLICE_MS = 8;
 
 /** One step of a batch: an item, or text that belongs between items. */
 export type BatchStep =
-  | { readonly kind: "item"; readonly request: unknown; readonly write: (outcome: ItemOutcome) => string }
+  | {
+      readonly kind: "item";
+      readonly request: unknown;
+      /** Computations that it counts for if it is answered. */
+      readonly cost: number;
+      readonly write: (outcome: ItemOutcome) => string;
+    }
   | { readonly kind: "refused"; readonly error: Error; readonly write: (outcome: ItemOutcome) => string }
   | { readonly kind: "text"; readonly text: string };
 
@@ -22,7 +28,8 @@ export interface Counts {
 
 export interface BatchPlan {
   readonly operation: string;
-  readonly items: number;
+  /** Computations that were reserved. */
+  readonly reserved: number;
   readonly open: string;
   readonly steps: Iterator<BatchStep>;
   readonly close: (counts: Counts) => string;
@@ -40,6 +47,7 @@ export function batchStream(plan: BatchPlan, context: CallContext): ReadableStre
   const limitMs = service.config.batchSeconds * 1000;
   const counts = { answered: 0, refused: 0, notComputed: 0 };
   let index = 0;
+  let cost = 0;
   let spentMs = 0;
   let pending = plan.open;
   let settled = false;
@@ -53,15 +61,17 @@ export function batchStream(plan: BatchPlan, context: CallContext): ReadableStre
     }
     const outcome =
       step.kind === "item" ? computer.compute(at, step.request) : computer.refused(at, step.error);
-    if (outcome.status === 200) counts.answered++;
-    else counts.refused++;
+    if (outcome.status === 200) {
+      counts.answered++;
+      cost += step.kind === "item" ? step.cost : 0;
+    } else counts.refused++;
     return step.write(outcome);
   };
 
   const settle = async (): Promise<void> => {
     if (settled) return;
     settled = true;
-    await settleBatch(context, plan, counts.answered);
+    await settleBatch(context, plan, cost);
   };
 
   return new ReadableStream<Uint8Array>(
@@ -114,22 +124,22 @@ function timeIsUp(seconds: number): Refusal {
 /** Counts what was computed, and gives back what was reserved for the rest. */
 async function settleBatch(
   { service, principal, now }: CallContext,
-  { operation, items }: BatchPlan,
-  answered: number,
+  { operation, reserved }: BatchPlan,
+  cost: number,
 ): Promise<void> {
   if (principal.kind === "anonymous" || !service.db.$client.open) return;
   const key = principal.kind === "key" ? principal : { id: SIGNED_OUT_ID, teamId: "" };
-  if (answered > 0) {
+  if (cost > 0) {
     await service.commits.run(() =>
       addComputations(service.db, service.now(), {
         keyId: key.id,
         teamId: key.teamId,
         operation,
         status: 200,
-        computations: answered,
+        computations: cost,
       }),
     );
   }
   const { month } = bucketsOf(principal, now);
-  if (items > answered) await service.limiter.giveBack(month, items - answered);
+  if (reserved > cost) await service.limiter.giveBack(month, reserved - cost);
 }

@@ -10,6 +10,7 @@ import { csvLine, CsvWriter, resultCells } from "../batch/write-csv";
 import { negotiate } from "../negotiate";
 import { bodyRefusal } from "../body";
 import { defineOperation } from "../operation";
+import { computationsOf } from "./resistance";
 import { batchAnswer, csvTable, documentedBatch } from "../schemas/batch";
 
 const JSON_TYPE = "application/json";
@@ -27,8 +28,10 @@ class UploadedTable {
 
 const batchSchema = z.unknown();
 
-function countItems(body: unknown): number {
-  return body instanceof UploadedTable ? body.items : itemsOf(body).length;
+/** Computations that a body costs if all of it is answered. */
+function reservationOf(body: unknown): number {
+  if (body instanceof UploadedTable) return body.items;
+  return itemsOf(body).reduce((sum: number, item) => sum + computationsOf(item), 0);
 }
 
 /** The requests of a body, each with its row where it came as a table. */
@@ -36,7 +39,9 @@ function* requestsOf(
   body: unknown,
 ): Generator<{ readonly row: readonly string[]; readonly step: Requested }> {
   if (!(body instanceof UploadedTable)) {
-    for (const request of itemsOf(body)) yield { row: [], step: { kind: "item", request } };
+    for (const request of itemsOf(body)) {
+      yield { row: [], step: { kind: "item", request, cost: computationsOf(request) } };
+    }
     return;
   }
   const reader = new RowReader(body.table.columns);
@@ -47,13 +52,13 @@ function* requestsOf(
     }
     const read = reader.request(row);
     yield "body" in read
-      ? { row, step: { kind: "item", request: read.body } }
+      ? { row, step: { kind: "item", request: read.body, cost: 1 } }
       : { row, step: { kind: "refused", error: bodyRefusal([{ pointer: "#", detail: read.complaint }]) } };
   }
 }
 
 type Requested =
-  | { readonly kind: "item"; readonly request: unknown }
+  | { readonly kind: "item"; readonly request: unknown; readonly cost: number }
   | { readonly kind: "refused"; readonly error: Refusal }
   | { readonly kind: "empty" };
 
@@ -64,7 +69,7 @@ function jsonPlan(body: unknown): BatchPlan {
   }
   return {
     operation: OPERATION,
-    items: countItems(body),
+    reserved: reservationOf(body),
     open: '{"items":[\n',
     steps: steps(),
     close: (counts) => `\n],"counts":${JSON.stringify(counts)}}\n`,
@@ -85,7 +90,7 @@ function csvPlan(body: unknown): BatchPlan {
   }
   return {
     operation: OPERATION,
-    items: countItems(body),
+    reserved: reservationOf(body),
     open: writer?.header() ?? csvLine(["index", ...RESULT_COLUMNS]),
     steps: steps(),
     close: () => "",
@@ -114,7 +119,7 @@ export const postBatch = defineOperation({
   tag: "Resistance",
   summary: "Compute up to 10,000 resistances",
   description:
-    "Each item is answered or refused on its own, in order, as `POST /resistance` would; only `record` is not for batches. Answers stream out as they are ready. As `text/csv` a row is a request: columns `shape`, the dimensions by name, `material`, `resistivity`, `conductivity`, `sheetResistance`, `thickness`, `core.material` and the like, `temperature`, `voltage`, `current`, `power`, `label`; a unit stands in the cell or in the header (`width/mm`); comma, semicolon or tab separates. The answer has the same rows and columns and behind them what came out. A cell that a spreadsheet would take for a formula gets an apostrophe in front. A table is answered as a table and JSON as JSON, unless `Accept` or `format` says otherwise. Costs one computation for each item that is answered: as many as there are items are reserved before, and what the others reserved is given back. Where the time of a batch is over, the items that are left are told with status 503.",
+    "Each item is answered or refused on its own, in order, as `POST /resistance` would; only `record` is not for batches. Answers stream out as they are ready. As `text/csv` a row is a request: columns `shape`, the dimensions by name, `material`, `resistivity`, `conductivity`, `sheetResistance`, `thickness`, `core.material` and the like, `temperature`, `voltage`, `current`, `power`, `label`; a unit stands in the cell or in the header (`width/mm`); comma, semicolon or tab separates. The answer has the same rows and columns and behind them what came out. A cell that a spreadsheet would take for a formula gets an apostrophe in front. A table is answered as a table and JSON as JSON, unless `Accept` or `format` says otherwise. Each answered item costs what it would by itself, as a rule one computation; what all of them would cost is reserved before the work, and what was not needed is given back. Where the time of a batch is over, the items that are left are told with status 503.",
   scope: "compute",
   produces: [JSON_TYPE, CSV_TYPE],
   request: {
@@ -166,7 +171,7 @@ export const postBatch = defineOperation({
       body: "shape,lenght,width\r\nbar,1 m,50 mm\r\n",
     },
   ],
-  reserve: ({ body }) => countItems(body),
+  reserve: ({ body }) => reservationOf(body),
   handler: ({ body }, context) => {
     const fromTable = body instanceof UploadedTable;
     const accepts = fromTable
@@ -180,7 +185,7 @@ export const postBatch = defineOperation({
         stream: batchStream(plan, context),
         mediaType: accepts === CSV_TYPE ? `${CSV_TYPE}; charset=utf-8` : `${JSON_TYPE}; charset=utf-8`,
       },
-      held: plan.items,
+      held: plan.reserved,
     };
   },
 });

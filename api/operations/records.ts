@@ -6,12 +6,14 @@ import { prepareReplay } from "@/lib/fields/replay-field";
 import { MOST_COMPUTATIONS } from "@/lib/jobs/field-cost";
 import { recordView, relabel, removeRecord, teamRecord } from "@/lib/records/records";
 import { replayResistance, replaySizing } from "@/lib/records/replay";
+import { replayNetwork } from "@/lib/records/replay-network";
 import { type CallContext, defineOperation, json } from "../operation";
 import { decodeCursor, encodeCursor, page } from "../pagination";
 import { fieldSchema } from "../schemas/field";
 import { pageOf, pageQuery } from "../schemas/page";
 import { recordSchema, relabelSchema, replaySchema } from "../schemas/record";
 import { answerField, startField } from "./field-start";
+import { networkComputations } from "./networks";
 import { computationsOf } from "./resistance";
 
 /** Requests and results of one page together, characters; a page ends early where they would be more. */
@@ -206,6 +208,11 @@ export const replayRecord = defineOperation({
       const replay = prepareReplay(service.db, row);
       await context.reserve(MOST_COMPUTATIONS);
       return answerField(context, await startField(context, replay));
+    }
+    if (row.operation === "network") {
+      const costs = networkComputations(JSON.parse(row.request));
+      await context.reserve(costs);
+      return json(200, await replayNetwork(service.db, row), { computations: costs });
     }
     if (row.operation === "sizing") {
       const costs = computationsOf(JSON.parse(row.request));

@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { fieldResult } from "./field";
+import { networkResult } from "./network";
 import { resistanceResult } from "./resistance";
 import { sizingResult } from "./sizing";
 
@@ -8,16 +9,16 @@ export const recordSchema = z
     id: z.string(),
     operation: z
       .string()
-      .meta({ description: "What computed it: `resistance`, `sizing` or `field`." }),
+      .meta({ description: "What computed it: `resistance`, `sizing`, `network` or `field`." }),
     label: z.string(),
     createdAt: z.iso.datetime(),
     by: z
       .object({ kind: z.string(), id: z.string(), name: z.string() })
       .meta({ description: "Who stored it." }),
     request: z.record(z.string(), z.unknown()).meta({ description: "What was asked." }),
-    result: z.union([resistanceResult, sizingResult, fieldResult]).meta({
+    result: z.union([resistanceResult, sizingResult, networkResult, fieldResult]).meta({
       description:
-        "What came out: a ResistanceResult, a SizingResult where `operation` is `sizing`, or a FieldResult where it is `field`.",
+        "What came out: a ResistanceResult, a SizingResult where `operation` is `sizing`, a NetworkResult where it is `network`, or a FieldResult where it is `field`.",
     }),
     materials: z
       .array(z.object({ id: z.string(), version: z.int() }))
@@ -33,8 +34,8 @@ export const relabelSchema = z
 
 export const replaySchema = z
   .object({
-    before: z.union([resistanceResult, sizingResult]),
-    now: z.union([resistanceResult, sizingResult]),
+    before: z.union([resistanceResult, sizingResult, networkResult]),
+    now: z.union([resistanceResult, sizingResult, networkResult]),
     drift: z.number().meta({
       description: "(now − before)/before of the resistance; of a sizing, of the dimension found.",
     }),

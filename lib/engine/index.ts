@@ -136,3 +136,7 @@ export { sampleLine } from "./field/picture/line";
 export { plotSvg, type PlotText } from "./field/picture/plot-svg";
 export { densityPeak } from "./field/picture/peak";
 export { densityRaster } from "./field/picture/raster";
+
+export { computeNetwork, networkInStretches } from "./network/compute-network";
+export { MOST_ELEMENTS, networkElementSchema, networkRequestSchema } from "./network/request-schema";
+export { networkResultSchema, type NetworkResult } from "./network/result-schema";
