@@ -27,7 +27,8 @@ export interface SecretRow {
   readonly validUntil: number | null;
 }
 
-const columns = {
+/** What is read of a key, joined with its team. */
+export const keyColumns = {
   id: keys.id,
   teamId: keys.teamId,
   team: teams.slug,
@@ -49,7 +50,7 @@ const columns = {
 export function keyWithSecrets(db: Database, id: string): { key: KeyRow; secrets: SecretRow[] } | undefined {
   const rows = prepared(db, "keys.withSecrets", (db) =>
     db
-      .select({ ...columns, hash: keySecrets.hash, validUntil: keySecrets.validUntil })
+      .select({ ...keyColumns, hash: keySecrets.hash, validUntil: keySecrets.validUntil })
       .from(keys)
       .innerJoin(teams, eq(teams.id, keys.teamId))
       .innerJoin(keySecrets, eq(keySecrets.keyId, keys.id))
@@ -64,7 +65,7 @@ export function keyWithSecrets(db: Database, id: string): { key: KeyRow; secrets
 
 export function keyById(db: Database, id: string): KeyRow | undefined {
   return db
-    .select(columns)
+    .select(keyColumns)
     .from(keys)
     .innerJoin(teams, eq(teams.id, keys.teamId))
     .where(eq(keys.id, id))
@@ -84,7 +85,7 @@ export function listKeys(
 ): KeyRow[] {
   const { teamId, limit, after } = options;
   return db
-    .select(columns)
+    .select(keyColumns)
     .from(keys)
     .innerJoin(teams, eq(teams.id, keys.teamId))
     .where(
@@ -145,4 +146,13 @@ export function markUsed(db: Database, id: string, at: number, client: string): 
       .where(eq(keys.id, sql.placeholder("id")))
       .prepare(),
   ).run({ id, at, client });
+}
+
+/** What may change about a key after it was issued. */
+export type KeyChange = Partial<
+  Pick<KeyRow, "name" | "scopes" | "origins" | "allowedInUrl" | "minuteQuota" | "monthQuota" | "expiresAt">
+>;
+
+export function updateKey(db: Database, id: string, change: KeyChange): void {
+  db.update(keys).set(change).where(eq(keys.id, id)).run();
 }

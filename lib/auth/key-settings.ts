@@ -64,3 +64,13 @@ export const keySettings = z.strictObject({
 });
 
 export type KeySettings = z.infer<typeof keySettings>;
+
+/** What may be changed about a key later: any of it; an expiry of null takes the end away. */
+export const keyChange = z
+  .strictObject({
+    ...keySettings.shape,
+    expiresAt: z.iso.datetime({ offset: true }).nullable(),
+  })
+  .partial();
+
+export type KeyChangeInput = z.infer<typeof keyChange>;

@@ -1,10 +1,18 @@
 import { transact, type Database } from "@/db/client";
-import { endSecrets, insertKey, insertSecret, keyById, type KeyRow, markRevoked } from "@/db/queries/keys";
+import {
+  endSecrets,
+  insertKey,
+  insertSecret,
+  keyById,
+  type KeyRow,
+  markRevoked,
+  updateKey,
+} from "@/db/queries/keys";
 import { type Actor, appendActivity } from "../activity/append";
 import { DEFAULT_MINUTE_QUOTA, DEFAULT_MONTH_QUOTA } from "../limits/quota";
 import { newId, newKeyId } from "../service/identifier";
 import { Refusal } from "../service/refusal";
-import type { KeySettings } from "./key-settings";
+import type { KeyChangeInput, KeySettings } from "./key-settings";
 import { formatKey, hashSecret, newSecret } from "./key-text";
 
 /** A key as the API, the console and the shell show it; its secret is not among this. */
@@ -132,6 +140,48 @@ export function rotateKey(
       now,
     );
     return { view, text: formatKey({ id, secret }), previousUntil };
+  });
+}
+
+/** Changes what a key may do, from the next request on; its secret stays. Refuses a revoked key and an end that has passed. */
+export function changeKey(
+  db: Database,
+  { id, actor, now, change }: Change & { readonly change: KeyChangeInput },
+): KeyView {
+  return transact(db, () => {
+    const row = keyById(db, id);
+    if (!row) throw new Refusal("not-found", "There is no such key.");
+    if (row.revokedAt !== null) {
+      throw new Refusal("invalid-input", "The key is revoked: issue a new one.", {
+        errors: [{ pointer: "#", detail: "is for keys that are not revoked." }],
+      });
+    }
+    const { name, scopes, origins, allowedInUrl, quotas, expiresAt } = change;
+    if (typeof expiresAt === "string" && Date.parse(expiresAt) <= now) {
+      throw new Refusal("invalid-input", "The key's end has passed already; revoke it to end it now.", {
+        errors: [{ pointer: "#/expiresAt", detail: "must lie in the future." }],
+      });
+    }
+    const before = keyView(row, now);
+    updateKey(db, id, {
+      name: name ?? row.name,
+      scopes: scopes ? [...new Set(scopes)] : row.scopes,
+      origins: origins ? [...new Set(origins)] : row.origins,
+      allowedInUrl: allowedInUrl ?? row.allowedInUrl,
+      minuteQuota: quotas?.minute ?? row.minuteQuota,
+      monthQuota: quotas?.month ?? row.monthQuota,
+      expiresAt: expiresAt === undefined ? row.expiresAt : expiresAt === null ? null : Date.parse(expiresAt),
+    });
+    const after = mustView(db, id, now);
+    if (JSON.stringify(after) !== JSON.stringify(before)) {
+      appendActivity(
+        db,
+        actor,
+        { action: "key.change", teamId: row.teamId, subject: { kind: "key", id }, before, after },
+        now,
+      );
+    }
+    return after;
   });
 }
 
