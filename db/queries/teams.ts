@@ -42,3 +42,7 @@ export function insertPerson(db: Database, person: NewPerson): void {
 export function insertMembership(db: Database, personId: string, teamId: string, createdAt: number): void {
   db.insert(memberships).values({ personId, teamId, createdAt }).run();
 }
+
+export function renameTeam(db: Database, id: string, name: string): void {
+  db.update(teams).set({ name }).where(eq(teams.id, id)).run();
+}

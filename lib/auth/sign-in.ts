@@ -7,6 +7,8 @@ import { agentName } from "../http/agent-name";
 import { limitedAddress } from "../http/client-address";
 import type { Bucket } from "../limits/limiter";
 import { signInBucket } from "../limits/quota";
+import { newDeviceLetter } from "../mail/letters";
+import { post, sendSoon } from "../mail/outbox";
 import { Refusal } from "../service/refusal";
 import type { Service } from "../service/service";
 import { passwordMatches } from "./password";
@@ -16,6 +18,7 @@ import { deviceOf, sessionCookie } from "./session-cookie";
 /** Attempts in a quarter of an hour: for one account, and from one address (a company's people may share one). */
 const ACCOUNT_ATTEMPTS = 10;
 const ADDRESS_ATTEMPTS = 60;
+const ACCOUNT_RESETS = 3;
 
 /** The call by which somebody signs in, as far as it matters here. */
 export interface SignInCall {
@@ -37,6 +40,15 @@ export function accountBucket(email: string): Bucket {
 
 export function signInAddressBucket(address: string): Bucket {
   return signInBucket(`address:${limitedAddress(address)}`, ADDRESS_ATTEMPTS);
+}
+
+/** Requests for a new password: fewer for one account, since each is a mail. */
+export function resetBuckets(email: string, address: string): Bucket[] {
+  const { subject } = accountBucket(email);
+  return [
+    signInBucket(`reset:address:${limitedAddress(address)}`, ADDRESS_ATTEMPTS),
+    signInBucket(`reset:${subject}`, ACCOUNT_RESETS),
+  ];
 }
 
 /** Spends one attempt of an account and of an address. Refuses with the time to wait. */
@@ -100,7 +112,13 @@ export async function openPersonSession(
       },
       now,
     );
+    if (known.any && !known.same) {
+      const url = `${config.origin}/console/account`;
+      const letter = newDeviceLetter(person, { client, address, at: now, url });
+      post(service, { kind: "new-device", recipient: person.email, letter }, now);
+    }
     return opened;
   });
+  sendSoon(service);
   return { session, setCookies: [await sessionCookie(config, session, now), device.setCookie] };
 }

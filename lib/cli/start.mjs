@@ -52,6 +52,9 @@ function greet({ origin, demo, administrators }) {
       `curl -s ${origin}/api/v1/resistance -H 'Authorization: Bearer ${demo.key}' -H 'Content-Type: application/json' -d '${body}'`,
     );
   }
+  if (administrators === 0) {
+    lines.push("", "Nobody can sign in yet. The first administrator: npm run -s people -- add-admin <email>");
+  }
   console.log(lines.join("\n"));
 }
 

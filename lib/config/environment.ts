@@ -1,6 +1,7 @@
 import { availableParallelism } from "node:os";
 import { isAbsolute, join, resolve } from "node:path";
 import { z } from "zod";
+import { type MailConfig, mailConfig, mailVariables } from "./mail";
 import { keptSecret } from "./secret";
 
 export interface Config {
@@ -26,6 +27,7 @@ export interface Config {
   readonly fieldSeconds: number;
   /** Longest time that the items of one batch may be computed for, s. */
   readonly batchSeconds: number;
+  readonly mail: MailConfig;
 }
 
 const flag = z.enum(["0", "1", "false", "true"]).transform((value) => value === "1" || value === "true");
@@ -69,6 +71,7 @@ const environment = z.object({
     (value) => (value === "" ? undefined : value),
     z.coerce.number().min(0.001).max(3600).default(60),
   ),
+  ...mailVariables,
 });
 
 export class ConfigError extends Error {
@@ -86,6 +89,8 @@ export function readConfig(variables: Readonly<Record<string, string | undefined
     throw new ConfigError(`The environment has wrong settings. ${sentences.join("; ")}`);
   }
   const settings = parsed.data;
+  const mail = mailConfig(settings.RHOFORM_SMTP_URL, settings.RHOFORM_MAIL_FROM);
+  if (typeof mail === "string") throw new ConfigError(`The environment has wrong settings. ${mail}`);
   const host = settings.HOST ?? "127.0.0.1";
   const data = settings.RHOFORM_DATA ?? ".data";
   const dataFolder = isAbsolute(data) ? data : resolve(/* turbopackIgnore: true */ process.cwd(), data);
@@ -105,6 +110,7 @@ export function readConfig(variables: Readonly<Record<string, string | undefined
     workers: settings.RHOFORM_WORKERS,
     fieldSeconds: settings.RHOFORM_FIELD_SECONDS,
     batchSeconds: settings.RHOFORM_BATCH_SECONDS,
+    mail,
   };
 }
 

@@ -1,5 +1,6 @@
 "use client";
 
+import Link from "next/link";
 import { type FormEvent, useState } from "react";
 import { Button } from "../../_ui/button";
 import { TextField } from "../../_ui/text-field";
@@ -47,10 +48,13 @@ export function SignInForm({ next }: { readonly next: string }) {
         error={errors.of("password")}
       />
       <FormProblem problem={errors.general} />
-      <div className="mt-1 flex flex-wrap items-center gap-2">
+      <div className="mt-1 flex flex-wrap items-center justify-between gap-2">
         <Button type="submit" variant="primary" disabled={busy}>
           Sign in
         </Button>
+        <Link href="/forgotten" className="link text-table">
+          Forgotten password
+        </Link>
       </div>
     </form>
   );
