@@ -53,7 +53,7 @@ export function SiteFrame({ theme, children }: { readonly theme: Theme; readonly
       <main
         id="content"
         tabIndex={-1}
-        className="mx-auto w-full max-w-page grow px-2 py-5 outline-none medium:px-4 medium:py-7"
+        className="mx-auto w-full max-w-page grow px-2 py-5 outline-none medium:px-4 medium:py-7 print:p-0!"
       >
         {children}
       </main>

@@ -48,7 +48,10 @@ export function operatingFacts(operating: ResistanceResult["operating"]): Fact[]
   ];
 }
 
-export function checksSection(checks: readonly Check[] | undefined): Section[] {
+/** A check of any operation. */
+type AnyCheck = Omit<Check, "name"> & { readonly name: string };
+
+export function checksSection(checks: readonly AnyCheck[] | undefined): Section[] {
   if (!checks || checks.length === 0) return [];
   const rows = checks.map((check) => [
     CHECK_TITLES[check.name] ?? words(check.name),

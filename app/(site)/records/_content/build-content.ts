@@ -65,7 +65,6 @@ function tell(
       return tellResistance(request, result, lookUp);
     case "sizing":
       return tellSizing(request, result, lookUp);
-    case "networks":
     case "network":
       return tellNetwork(request, result, lookUp);
     case "field":

@@ -97,32 +97,10 @@ function inputs(request: StoredRequest, result: FieldResult, lookUp: LookUp): Se
     },
     { name: "Accuracy wanted", value: plainNumber(accuracy ?? 1e-4), note: "(upper − lower)/value" },
   ];
-  const rings = [outline.outer, ...outline.holes];
   const coordinates: Block =
     vertices > MOST_VERTICES
       ? { kind: "paragraph", text: `The ${vertices} vertices are in the stored request.` }
-      : {
-          kind: "table",
-          label: `Vertices, ${outline.unit}`,
-          columns: [
-            { title: "Ring", weight: 0.7 },
-            { title: "Vertex", weight: 0.5 },
-            { title: "x, y", numeric: true, weight: 1.4 },
-            { title: "Arrives by", numeric: true, weight: 2 },
-          ],
-          rows: rings.flatMap((ring, index) =>
-            ring.map((vertex, place) => [
-              index === 0 ? "outer" : `hole ${index}`,
-              String(place),
-              Array.isArray(vertex)
-                ? vertex.map(plainNumber).join(", ")
-                : vertex.arcTo.map(plainNumber).join(", "),
-              Array.isArray(vertex)
-                ? "line"
-                : `arc about ${vertex.center.map(plainNumber).join(", ")}${vertex.clockwise ? ", clockwise" : ""}`,
-            ]),
-          ),
-        };
+      : vertexTable(outline);
   const asked = askedTable(request.operating, request.requirement);
   return [
     {
@@ -137,6 +115,34 @@ function inputs(request: StoredRequest, result: FieldResult, lookUp: LookUp): Se
     },
     ...(asked.length > 0 ? [{ id: "asked", title: "Asked for", blocks: asked }] : []),
   ];
+}
+
+function vertexTable(outline: StoredRequest["outline"]): Block {
+  const rings = [outline.outer, ...outline.holes];
+  const curved = rings.some((ring) => ring.some((vertex) => !Array.isArray(vertex)));
+  const pair = (point: readonly number[]) => point.map(plainNumber).join(", ");
+  return {
+    kind: "table",
+    label: `Vertices, ${outline.unit}`,
+    columns: [
+      { title: "Ring", weight: 0.7 },
+      { title: "Vertex", weight: 0.5 },
+      { title: `x, y in ${outline.unit}`, numeric: true, weight: 1.4 },
+      ...(curved ? [{ title: "Arrives by", numeric: true, weight: 2 }] : []),
+    ],
+    rows: rings.flatMap((ring, index) =>
+      ring.map((vertex, place) => {
+        const arc = Array.isArray(vertex) ? null : vertex;
+        const way = arc ? `arc about ${pair(arc.center)}${arc.clockwise ? ", clockwise" : ""}` : "line";
+        return [
+          index === 0 ? "outer" : `hole ${index}`,
+          String(place),
+          pair(Array.isArray(vertex) ? vertex : vertex.arcTo),
+          ...(curved ? [way] : []),
+        ];
+      }),
+    ),
+  };
 }
 
 function terminalTable(terminals: StoredRequest["terminals"]): Block {

@@ -1,140 +1,163 @@
-/** What a record of `networks` tells: elements between named nodes, and what each carries. */
+/** What a record of `network` tells: elements between named nodes, and what each carries. */
 import { z } from "zod";
-import { boundedResistanceSchema, checkSchema, findShape } from "@/lib/engine";
+import { findShape, networkResultSchema, type ShapeEntry, shapeEntry } from "@/lib/engine";
 import { engineering } from "../../calculate/_calculator/answer/engineering";
-import { bracketOf, checksSection, linesSection } from "./answer";
-import type { Block, Told } from "./content";
+import { bracketOf, checksSection, linesSection, operatingFacts, sourceLines, verdictOf } from "./answer";
+import type { Block, Section, Told } from "./content";
 import { askedTable } from "./inputs";
-import { type LookUp } from "./of-resistance";
 import { materialBlocks } from "./medium";
-import { typedText, words } from "./typed";
+import type { LookUp } from "./of-resistance";
+import { plainNumber, typedText, words } from "./typed";
 
 const given = z.record(z.string(), z.unknown());
-const bounded = boundedResistanceSchema.partial({ boundsBasis: true, proved: true });
-const reading = z.union([z.number(), z.object({ value: z.number(), text: z.string() })]);
 
 const networkRequest = z.object({
   elements: z.array(
     z.object({
       name: z.string(),
       between: z.array(z.string()),
-      resistance: z.unknown(),
-      request: z.object({ shape: z.string(), dimensions: given.optional() }).optional(),
+      resistance: z.unknown().optional(),
+      request: z
+        .object({ shape: z.string(), dimensions: given.default({}), medium: given.optional() })
+        .optional(),
     }),
   ),
   ports: z.array(z.string()),
   operating: given.optional(),
   requirement: given.optional(),
 });
+type Element = z.infer<typeof networkRequest>["elements"][number];
 
-const networkResult = z.object({
-  resistance: bounded,
-  nodes: z.array(z.object({ name: z.string(), voltage: reading.optional() })).default([]),
-  elements: z
-    .array(
-      z.object({
-        name: z.string(),
-        resistance: bounded,
-        current: reading.optional(),
-        voltage: reading.optional(),
-        power: reading.optional(),
-        share: z.number().optional(),
-      }),
-    )
-    .default([]),
-  checks: z.array(checkSchema).optional(),
-  cautions: z.array(z.string()).default([]),
-  assumptions: z.array(z.string()).default([]),
-  materials: z
-    .array(z.object({ id: z.string(), version: z.number(), name: z.string().optional() }))
-    .default([]),
-});
+/** A sheet of paper is not the place for ten thousand elements; the stored request has them all. */
+const MOST_ROWS = 200;
 
 /** Null where the record was stored in a form that today's service no longer reads. */
 export function tellNetwork(request: unknown, result: unknown, lookUp: LookUp): Told | null {
   const asked = networkRequest.safeParse(request);
-  const answer = networkResult.safeParse(result);
+  const answer = networkResultSchema.safeParse(result);
   if (!asked.success || !answer.success) return null;
   const { ports, elements } = asked.data;
-  const { resistance, nodes, cautions, assumptions, materials, checks } = answer.data;
-  const text = (value: z.infer<typeof reading> | undefined, unit: string) =>
-    value === undefined ? "" : typeof value === "number" ? engineering(value, unit) : value.text;
-  const carried: Block = {
-    kind: "table",
-    label: "Elements",
-    columns: [
-      { title: "Element", weight: 1.2 },
-      { title: "Resistance", numeric: true },
-      { title: "Bounds", numeric: true, weight: 1.6 },
-      { title: "Voltage", numeric: true },
-      { title: "Current", numeric: true },
-      { title: "Power", numeric: true },
-    ],
-    rows: answer.data.elements.map((element) => [
-      element.name,
-      element.resistance.text,
-      bracketOf(element.resistance),
-      text(element.voltage, "V"),
-      text(element.current, "A"),
-      text(element.power, "W"),
-    ]),
-  };
-  const made: Block = {
-    kind: "table",
-    label: "Elements as asked",
-    columns: [
-      { title: "Element", weight: 1 },
-      { title: "Between", weight: 1 },
-      { title: "What it is", numeric: true, weight: 2.4 },
-    ],
-    rows: elements.map(({ name, between, resistance: typed, request: part }) => [
-      name,
-      between.join(" and "),
-      part
-        ? `${findShape(part.shape)?.title ?? words(part.shape)}: ${dimensionsText(part.dimensions)}`
-        : typedText(typed, "resistance"),
-    ]),
-  };
-  const asks = askedTable(asked.data.operating, asked.data.requirement);
+  const { resistance, verdict, cautions, assumptions, sources, materials, checks } = answer.data;
   const used = materialBlocks(materials, lookUp);
+  const { proved, boundsBasis } = resistance;
+  const basis =
+    boundsBasis === "rounding"
+      ? "The bounds hold the rounding of the computation."
+      : "The bounds come from all elements at their lowest and all at their highest: a network\u2019s resistance never falls when an element\u2019s rises.";
   return {
     subject: "Network",
     headline: {
       title: `Resistance from ${ports.join(" to ")}`,
       text: resistance.text,
       bracket: bracketOf(resistance),
-      statements: ["The bounds come from all elements at their lower and all at their upper bounds."],
-      verdict: null,
+      statements: [
+        `Network of ${elements.length} elements, bounds ${proved ? "proved" : "not proved"}. ${basis}`,
+      ],
+      verdict: verdictOf(verdict),
     },
     picture: null,
     cautions,
     sections: [
-      { id: "elements", title: "What the elements carry", blocks: [carried, ...nodeTable(nodes, text)] },
-      { id: "inputs", title: "Inputs", blocks: [made, ...asks] },
+      {
+        id: "inputs",
+        title: "Inputs",
+        blocks: [elementsAsked(elements), ...askedTable(asked.data.operating, asked.data.requirement)],
+      },
       ...(used.length > 0 ? [{ id: "medium", title: "Materials", blocks: used }] : []),
+      ...carriedSections(answer.data),
       ...checksSection(checks),
       ...linesSection("assumptions", "Assumptions", assumptions),
+      ...linesSection("sources", "Sources", sourceLines(sources)),
     ],
   };
 }
 
-function dimensionsText(dimensions: Readonly<Record<string, unknown>> = {}): string {
-  return Object.entries(dimensions)
-    .map(([name, value]) => `${words(name).toLowerCase()} ${typedText(value)}`)
-    .join(", ");
+function elementsAsked(elements: readonly Element[]): Block {
+  return {
+    kind: "table",
+    label: "Elements as asked",
+    columns: [
+      { title: "Element", weight: 1 },
+      { title: "Between", weight: 1 },
+      { title: "What it is", numeric: true, weight: 2.6 },
+    ],
+    rows: shown(elements).map((element) => [
+      element.name,
+      element.between.join(" and "),
+      elementText(element),
+    ]),
+  };
 }
 
-function nodeTable(
-  nodes: z.infer<typeof networkResult>["nodes"],
-  text: (value: z.infer<typeof reading> | undefined, unit: string) => string,
-): Block[] {
-  if (nodes.every(({ voltage }) => voltage === undefined)) return [];
+function elementText({ resistance, request }: Element): string {
+  if (!request) return typedText(resistance, "resistance");
+  const shape = findShape(request.shape);
+  const entry = shape && shapeEntry(shape);
+  const parts = Object.entries(request.dimensions).map(
+    ([name, value]) => `${symbolOf(entry, name)} ${typedText(value)}`,
+  );
+  const medium = Object.values(request.medium ?? {}).filter((value) => typeof value !== "object");
+  return [entry?.title ?? words(request.shape), ...parts, ...medium.map((value) => typedText(value))].join(
+    ", ",
+  );
+}
+
+function symbolOf(entry: ShapeEntry | undefined, name: string): string {
+  return entry?.dimensions.find((dimension) => dimension.name === name)?.label.toLowerCase() ?? words(name);
+}
+
+function carriedSections({
+  elements,
+  nodes,
+  operating,
+  per,
+}: z.infer<typeof networkResultSchema>): Section[] {
+  const carried: Block = {
+    kind: "table",
+    label: "Elements",
+    columns: [
+      { title: "Element", weight: 1.2 },
+      { title: "Resistance", numeric: true, weight: 1.1 },
+      { title: "Voltage", numeric: true },
+      { title: "Current", numeric: true },
+      { title: "Power", numeric: true },
+      { title: "Share of the power", numeric: true, weight: 0.8 },
+    ],
+    rows: shown(elements).map(({ name, resistance, voltage, current, power, share }) => [
+      name,
+      engineering(resistance, "Ω"),
+      engineering(voltage, "V"),
+      engineering(current, "A"),
+      engineering(power, "W"),
+      `${plainNumber(Number((share * 100).toPrecision(3)))} %`,
+    ]),
+  };
+  const table: Block = {
+    kind: "table",
+    label: "Nodes",
+    columns: [{ title: "Node" }, { title: "Voltage against the second port", numeric: true }],
+    rows: shown(nodes).map(({ name, voltage }) => [name, engineering(voltage, "V")]),
+  };
+  const left = elements.length > MOST_ROWS ? `The first ${MOST_ROWS} of ${elements.length} elements. ` : "";
   return [
     {
-      kind: "table",
-      label: "Nodes",
-      columns: [{ title: "Node" }, { title: "Voltage", numeric: true }],
-      rows: nodes.map(({ name, voltage }) => [name, text(voltage, "V")]),
+      id: "answer",
+      title:
+        per === "volt"
+          ? "What the elements carry, for 1\u2009V between the ports"
+          : "What the elements carry",
+      blocks: [
+        { kind: "facts", facts: operatingFacts(operating) },
+        ...(left === ""
+          ? []
+          : [{ kind: "paragraph", text: `${left}The stored result has them all.` } as const]),
+        carried,
+        table,
+      ],
     },
   ];
+}
+
+function shown<Item>(items: readonly Item[]): readonly Item[] {
+  return items.slice(0, MOST_ROWS);
 }

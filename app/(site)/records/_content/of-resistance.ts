@@ -85,7 +85,15 @@ export function inputSections(
   ];
 }
 
-function answerSections(request: StoredRequest, result: ResistanceResult): Section[] {
+/** What an answer has behind its number. */
+export type AnswerParts = Pick<
+  ResistanceResult,
+  "shape" | "conductance" | "operating" | "peak" | "quadrature" | "uncertainty" | "steps" | "checks"
+> &
+  Pick<ResistanceResult, "assumptions" | "sources">;
+
+/** Operating point, tolerances, steps, checks, and what the answer rests on. */
+export function answerSections(request: StoredRequest, result: AnswerParts): Section[] {
   const shape = findShape(result.shape);
   const how: Block[] = [
     ...(shape && isGraded(request)
@@ -113,7 +121,7 @@ function isGraded({ medium, media }: StoredRequest): boolean {
   return [medium, ...Object.values(media ?? {})].some((one) => one?.graded !== undefined);
 }
 
-function pointFacts({ conductance, operating, peak, quadrature }: ResistanceResult): Fact[] {
+function pointFacts({ conductance, operating, peak, quadrature }: AnswerParts): Fact[] {
   const per = peak?.per === "volt" ? " at 1\u2009V" : "";
   const peakFact = (
     name: string,

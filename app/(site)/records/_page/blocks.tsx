@@ -45,7 +45,7 @@ function BlockView({ block }: { readonly block: Block }): ReactNode {
       );
     case "law":
       return (
-        <div className="text-lead print:break-inside-avoid [&_.katex-display]:m-0 [&_.katex-display>.katex]:text-left!">
+        <div className="text-lead print:break-inside-avoid [&_.katex-display]:m-0! [&_.katex-display>.katex]:text-left!">
           <Tex tex={block.tex} display />
         </div>
       );
@@ -78,10 +78,13 @@ interface TableProps {
   readonly rows: readonly (readonly string[])[];
 }
 
+/** A table of so few rows is not spread over two pages. */
+const KEPT_WHOLE = 10;
+
 function Table({ label, columns, rows }: TableProps) {
   return (
     <div
-      className="relative overflow-x-auto print:overflow-visible"
+      className={`relative overflow-x-auto print:overflow-visible ${rows.length <= KEPT_WHOLE ? "print:break-inside-avoid" : ""}`}
       tabIndex={0}
       role="group"
       aria-label={label}

@@ -30,6 +30,8 @@ interface Answer {
 
 interface Result {
   readonly resistance?: Bounded;
+  /** Of a sizing: the values found. */
+  readonly solutions?: readonly { readonly dimension: { readonly text: string } }[];
   readonly engine?: string;
 }
 
@@ -103,25 +105,30 @@ function Outcome({ state }: { readonly state: State }) {
   if (state.kind === "running") return <Notice title="Replay">{state.progress}</Notice>;
   if (state.kind === "failed") return <ProblemNotice problem={state.problem} />;
   const { before, now, drift, identical } = state;
+  const [old, current] = [textOf(before), textOf(now)];
   const was = before?.resistance;
   const is = now?.resistance;
   const within = was && is ? is.value >= was.lower && is.value <= was.upper : false;
   const verdict = identical
-    ? "Identical: value and bounds are the same to the last bit."
+    ? "Identical: the engine of today gives the same numbers to the last bit."
     : `Drift ${driftText(drift)}${within ? ", inside the bounds of the record." : "."}`;
   return (
     <Notice tone={identical || within ? "plain" : "caution"} title="Replay">
       <p>{verdict}</p>
-      {was && is ? (
+      {old && current ? (
         <dl className="mt-0.5 grid w-fit grid-cols-[auto_auto] gap-x-2">
           <dt className="text-ink-soft">In the record{before?.engine ? `, engine ${before.engine}` : ""}</dt>
-          <dd className="font-mono">{was.text}</dd>
+          <dd className="font-mono">{old}</dd>
           <dt className="text-ink-soft">Now{now?.engine ? `, engine ${now.engine}` : ""}</dt>
-          <dd className="font-mono">{is.text}</dd>
+          <dd className="font-mono">{current}</dd>
         </dl>
       ) : null}
     </Notice>
   );
+}
+
+function textOf(result: Result | undefined): string | undefined {
+  return result?.resistance?.text ?? result?.solutions?.map(({ dimension }) => dimension.text).join(" or ");
 }
 
 function driftText(drift: number | null): string {

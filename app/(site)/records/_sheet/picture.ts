@@ -179,7 +179,10 @@ function sizeOf(svg: string): readonly [number, number] {
 }
 
 function drawSvg(pen: Pen, source: string): void {
-  const svg = withSymbols(plainSvg(source, "conductor"));
+  // Its own size would outrank the one on paper, and a halo would be drawn over its letters.
+  const svg = withSymbols(plainSvg(source, "conductor"))
+    .replace(/(<svg[^>]*?) width="[^"]*" height="[^"]*"/, "$1")
+    .replaceAll(' stroke="#faf8f3" stroke-width="5" paint-order="stroke"', "");
   const [width, height] = sizeOf(svg);
   const scale = Math.min(pen.width / width, (TALLEST * 1.25) / height);
   pen.keep(height * scale + 10);

@@ -38,7 +38,10 @@ function drawBlock(pen: Pen, block: Block): void {
     case "steps":
       return block.steps.forEach((step, index) => drawStep(pen, step, index));
     case "code":
-      return pen.paragraph(block.text, CODE);
+      return pen.paragraph(
+        block.text.replace(/^ +/gm, (indent) => "\u00a0".repeat(indent.length)),
+        CODE,
+      );
   }
 }
 

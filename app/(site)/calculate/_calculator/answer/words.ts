@@ -23,14 +23,20 @@ export const CHECK_TITLES: Readonly<Record<string, string>> = {
   "voltage-independence": "The assumed voltage drops out",
   "current-continuity": "The same current crosses every section",
   "second-route": "Two routes agree",
+  "current-law": "Currents at each node add up to nothing",
+  "voltage-law": "Voltages along each loop add up to nothing",
+  "power-balance": "The elements turn to heat what the ports take in",
 };
 
 export const VERDICTS = {
-  met: { word: "met", sentence: "The requirement is met, bounds included." },
-  "not-met": { word: "not met", sentence: "The requirement is not met, bounds included." },
+  met: { word: "met", sentence: "The requirement is met, bounds and evaluated tolerances included." },
+  "not-met": {
+    word: "not met",
+    sentence: "The requirement is not met, bounds and evaluated tolerances included.",
+  },
   undecided: {
     word: "undecided",
-    sentence: "The bounds reach across a limit, so the requirement is undecided.",
+    sentence: "Bounds or tolerances reach across a limit, so the requirement is undecided.",
   },
 } as const;
 
