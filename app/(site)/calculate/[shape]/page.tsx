@@ -13,6 +13,7 @@ import { firstAnswer } from "../_server/first-answer";
 import { formDimensions, profileFacts } from "../_server/form-facts";
 import { readGeometry } from "../_server/geometry";
 import { materialChoices } from "../_server/material-choices";
+import { savingFor } from "../_server/saving";
 
 interface PageProps {
   readonly params: Promise<{ readonly shape: string }>;
@@ -57,6 +58,7 @@ export default async function ShapePage({ params, searchParams }: PageProps) {
       materials={materialChoices(libraryMaterials, temperature.ok ? temperature.value : 20)}
       profiles={entry.media.gradable.length > 0 ? profileFacts() : []}
       origin={sharedService().config.origin}
+      saving={await savingFor(`/calculate/${entry.id}`)}
       formula={<Tex tex={entry.formula} display />}
     />
   );

@@ -5,10 +5,11 @@ import { SWRConfig } from "swr";
 import type { ShapeEntry } from "@/lib/engine";
 import { LiveRegion } from "../../../_ui/live-region";
 import { ToastArea } from "../../../_ui/toast";
+import { splitAddress } from "../_model/address";
 import { sortComplaints } from "../_model/complaints";
 import type { Parameters } from "../_model/parameters";
 import { INCLUDE, requestBody } from "../_model/request";
-import type { PageState } from "../_model/variants";
+import { type PageState, stateQuery } from "../_model/variants";
 import type { FirstAnswer } from "../_server/first-answer";
 import type { FormDimension, ProfileFacts } from "../_server/form-facts";
 import type { Geometry } from "../_server/geometry";
@@ -22,6 +23,7 @@ import { DimensionFields } from "./dimension-fields";
 import { DrawingPane } from "./drawing-pane";
 import { Elsewhere } from "./elsewhere";
 import { FormProvider, type FormState } from "./form-context";
+import { pathBack } from "./kept-address";
 import { MediumFields } from "./medium-fields";
 import { OperatingFields } from "./operating-fields";
 import { PageTools } from "./page-tools";
@@ -105,7 +107,13 @@ function LiveCalculator(props: CalculatorProps) {
         <div className="flex flex-wrap items-center gap-0.5 print:hidden">
           <PageTools state={state} entry={entry} actions={actions} />
           {props.saving ? (
-            <SaveRecord saving={props.saving} path="/resistance" body={bodies[active]} title={entry.title} />
+            <SaveRecord
+              saving={props.saving}
+              path="/resistance"
+              body={{ ...bodies[active], include: INCLUDE }}
+              title={entry.title}
+              back={() => pathBack(splitAddress(stateQuery(state, entry)))}
+            />
           ) : null}
         </div>
       </div>

@@ -6,7 +6,6 @@ import { Button, ButtonLink } from "../../../_ui/button";
 import { Dialog } from "../../../_ui/dialog";
 import { CONTROL, Field } from "../../../_ui/field";
 import { ProblemNotice } from "../../../_ui/problem-notice";
-import { useToast } from "../../../_ui/toast";
 import { newAttemptKey } from "../../_live/attempt-key";
 import { ApiProblem, postApi } from "../../_live/call-api";
 
@@ -20,6 +19,8 @@ interface SaveRecordProps {
   readonly body: object;
   /** Proposed name of the record. */
   readonly title: string;
+  /** Path that leads back to exactly this state after signing in, where the page's own address does not. */
+  readonly back?: () => string;
 }
 
 interface Stored {
@@ -27,18 +28,28 @@ interface Stored {
 }
 
 /** Stores the calculation for the reader's team. One press stores once, however often it is repeated. */
-export function SaveRecord({ saving, path, body, title }: SaveRecordProps) {
+export function SaveRecord({ saving, path, body, title, back }: SaveRecordProps) {
   const [open, setOpen] = useState(false);
   const [label, setLabel] = useState(title);
   /** A repeat of the same text has the same key, so that it stores once; another text is another record. */
   const attempt = useRef({ text: "", key: "" });
   const [busy, setBusy] = useState(false);
   const [problem, setProblem] = useState<ApiProblem | Error | null>(null);
-  const toast = useToast();
+  /** What was stored; its id is null while a field solution is still on its way. */
+  const [stored, setStored] = useState<{ readonly label: string; readonly id: string | null } | null>(null);
 
   if (saving.kind === "sign-in") {
     return (
-      <ButtonLink href={saving.href} variant="primary">
+      <ButtonLink
+        href={saving.href}
+        variant="primary"
+        prefetch={false}
+        onClick={(event) => {
+          if (!back || event.metaKey || event.ctrlKey || event.shiftKey) return;
+          event.preventDefault();
+          window.location.assign(`/sign-in?next=${encodeURIComponent(back())}`);
+        }}
+      >
         <Save aria-hidden size={16} /> Sign in to save
       </ButtonLink>
     );
@@ -47,6 +58,7 @@ export function SaveRecord({ saving, path, body, title }: SaveRecordProps) {
   function start() {
     attempt.current = { text: "", key: "" };
     setProblem(null);
+    setStored(null);
     setOpen(true);
   }
 
@@ -56,9 +68,8 @@ export function SaveRecord({ saving, path, body, title }: SaveRecordProps) {
     const text = JSON.stringify({ ...body, record: { label: label.trim() } });
     if (attempt.current.text !== text) attempt.current = { text, key: newAttemptKey() };
     try {
-      await postApi<Stored>(path, text, { idempotencyKey: attempt.current.key });
-      setOpen(false);
-      toast(`“${label.trim()}” is saved as a record.`);
+      const { record } = await postApi<Stored>(path, text, { idempotencyKey: attempt.current.key, wait: 20 });
+      setStored({ label: label.trim(), id: record?.id ?? null });
     } catch (failure) {
       setProblem(failure instanceof Error ? failure : new Error("The record was not saved."));
     } finally {
@@ -71,44 +82,96 @@ export function SaveRecord({ saving, path, body, title }: SaveRecordProps) {
       <Button variant="primary" onClick={start}>
         <Save aria-hidden size={16} /> Save as a record
       </Button>
-      <Dialog
-        open={open}
-        onOpenChange={setOpen}
-        title="Save as a record"
-        description="A record keeps the request, the answer and all versions; it can be replayed later."
-        actions={
-          <>
-            <Button onClick={() => setOpen(false)}>Not now</Button>
-            <Button variant="primary" onClick={store} disabled={busy || label.trim() === ""}>
-              {busy ? "Saving …" : "Save"}
-            </Button>
-          </>
-        }
-      >
-        <Field label="Name of the record">
-          {(control) => (
-            <input
-              {...control}
-              value={label}
-              maxLength={200}
-              onChange={(event) => setLabel(event.target.value)}
-              className={`${CONTROL} font-sans!`}
+      {stored ? (
+        <StoredDialog open={open} onOpenChange={setOpen} label={stored.label} id={stored.id} />
+      ) : (
+        <Dialog
+          open={open}
+          onOpenChange={setOpen}
+          title="Save as a record"
+          description="A record keeps the request, the answer and all versions; it can be replayed later."
+          actions={
+            <>
+              <Button onClick={() => setOpen(false)}>Not now</Button>
+              <Button variant="primary" onClick={store} disabled={busy || label.trim() === ""}>
+                {busy ? "Saving …" : "Save"}
+              </Button>
+            </>
+          }
+        >
+          <Field label="Name of the record">
+            {(control) => (
+              <input
+                {...control}
+                value={label}
+                maxLength={200}
+                onChange={(event) => setLabel(event.target.value)}
+                onKeyDown={(event) => {
+                  if (event.key === "Enter" && !busy && label.trim() !== "") void store();
+                }}
+                className={`${CONTROL} font-sans!`}
+              />
+            )}
+          </Field>
+          {problem ? (
+            <ProblemNotice
+              problem={
+                problem instanceof ApiProblem
+                  ? problem.problem
+                  : {
+                      title: "The record was not saved",
+                      detail: "The service cannot be reached. Nothing is lost.",
+                    }
+              }
             />
-          )}
-        </Field>
-        {problem ? (
-          <ProblemNotice
-            problem={
-              problem instanceof ApiProblem
-                ? problem.problem
-                : {
-                    title: "The record was not saved",
-                    detail: "The service cannot be reached. Nothing is lost.",
-                  }
-            }
-          />
-        ) : null}
-      </Dialog>
+          ) : null}
+        </Dialog>
+      )}
     </>
+  );
+}
+
+interface StoredDialogProps {
+  readonly open: boolean;
+  readonly onOpenChange: (open: boolean) => void;
+  readonly label: string;
+  readonly id: string | null;
+}
+
+/** What was stored, and where it is. */
+function StoredDialog({ open, onOpenChange, label, id }: StoredDialogProps) {
+  return (
+    <Dialog
+      open={open}
+      onOpenChange={onOpenChange}
+      title={id ? "The record is saved" : "The record is on its way"}
+      description={
+        id
+          ? `“${label}” keeps the request, the answer and all versions.`
+          : `“${label}” is stored once the field is solved; it then stands among the team’s records.`
+      }
+      actions={
+        <>
+          <Button onClick={() => onOpenChange(false)}>Go on here</Button>
+          <ButtonLink href={id ? `/records/${id}` : "/console/records"} variant="primary" prefetch={false}>
+            {id ? "Open the record" : "Open the records"}
+          </ButtonLink>
+        </>
+      }
+    >
+      {id ? (
+        <p className="flex flex-wrap gap-x-2 text-table">
+          Its sheet as PDF:
+          <a className="link" href={`/records/${id}/sheet.pdf?paper=a4`}>
+            A4
+          </a>
+          <a className="link" href={`/records/${id}/sheet.pdf?paper=letter`}>
+            Letter
+          </a>
+        </p>
+      ) : (
+        <p className="text-table">It needs nothing more from this page.</p>
+      )}
+    </Dialog>
   );
 }

@@ -5,6 +5,7 @@ import type { ShapeEntry } from "@/lib/engine";
 import type { Parameters } from "../_model/parameters";
 import { joinAddress, splitAddress } from "../_model/address";
 import { replaceAddress } from "../replace-address";
+import { toldAddress } from "./kept-address";
 import { type PageState, readState, stateQuery, VARIANT_NAMES } from "../_model/variants";
 
 /** What a change sets; undefined takes a parameter away. */
@@ -35,7 +36,7 @@ export function usePageState(
   // comes as it was first made, while the address has what it became.
   useEffect(() => {
     function told() {
-      const { search, hash } = window.location;
+      const { search, hash } = toldAddress();
       const behind = hash.includes("=") ? hash.slice(1) : "";
       return readState(joinAddress(search, behind), entry, example);
     }
