@@ -35,37 +35,40 @@ export function BoardTools({ tool, setTool, drawTarget, setDrawTarget, readable 
   }
 
   return (
-    <div className="flex flex-wrap items-end gap-x-2 gap-y-1 print:hidden">
-      <Segmented
-        label="Tool"
-        labelShown={false}
-        value={tool}
-        options={[
-          { value: "shape", label: "Shape" },
-          { value: "draw", label: "Draw" },
-          { value: "terminal", label: "Terminals" },
-          ...(readable ? [{ value: "read" as const, label: "Read off" }] : []),
-        ]}
-        onChange={setTool}
-      />
-      {tool === "draw" ? (
+    <div className="grid gap-1 print:hidden">
+      {/* A row of its own, so that the board stays where it is when the tool changes. */}
+      <div className="flex flex-wrap gap-x-2 gap-y-1">
         <Segmented
-          label="What is drawn"
+          label="Tool"
           labelShown={false}
-          value={empty ? "outer" : drawTarget}
-          options={
-            empty
-              ? [{ value: "outer", label: "Outer ring" }]
-              : [
-                  { value: "hole", label: "Hole" },
-                  { value: "region", label: "Region" },
-                  { value: "outer", label: "New outer ring" },
-                ]
-          }
-          onChange={setDrawTarget}
+          value={tool}
+          options={[
+            { value: "shape", label: "Shape" },
+            { value: "draw", label: "Draw" },
+            { value: "terminal", label: "Terminals" },
+            ...(readable ? [{ value: "read" as const, label: "Read off" }] : []),
+          ]}
+          onChange={setTool}
         />
-      ) : null}
-      <div className="ms-auto flex flex-wrap items-center gap-x-1.5 gap-y-0.5 text-table">
+        {tool === "draw" ? (
+          <Segmented
+            label="What is drawn"
+            labelShown={false}
+            value={empty ? "outer" : drawTarget}
+            options={
+              empty
+                ? [{ value: "outer", label: "Outer ring" }]
+                : [
+                    { value: "hole", label: "Hole" },
+                    { value: "region", label: "Region" },
+                    { value: "outer", label: "New outer ring" },
+                  ]
+            }
+            onChange={setDrawTarget}
+          />
+        ) : null}
+      </div>
+      <div className="flex flex-wrap items-center gap-x-1.5 gap-y-0.5 text-table">
         <label className="flex items-center gap-0.5">
           Unit
           <select
@@ -93,7 +96,7 @@ export function BoardTools({ tool, setTool, drawTarget, setDrawTarget, readable 
         </span>
         <Toggle label="Snap" checked={grid.snap} onChange={(snap) => setGrid({ ...grid, snap })} />
         <Toggle
-          label="About an axis"
+          label="Axisymmetric"
           checked={sketch.symmetry === "axisymmetric"}
           onChange={(on) => edit((sketch) => withSymmetry(sketch, on))}
         />

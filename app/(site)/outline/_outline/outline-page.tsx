@@ -127,7 +127,7 @@ function LiveOutline({ heading, start, materials, origin, saving }: OutlinePageP
         </div>
       </div>
       <div className="mt-2 grid grid-cols-1 items-start gap-x-4 gap-y-3 wide:grid-cols-[minmax(0,1fr)_22rem]">
-        <div className="contents min-w-0 wide:grid wide:gap-3">
+        <div className="contents min-w-0 wide:grid wide:grid-cols-1 wide:gap-3">
           <div className="grid min-w-0 grid-cols-1 gap-1">
             <BoardTools
               tool={tool}
@@ -162,25 +162,28 @@ function LiveOutline({ heading, start, materials, origin, saving }: OutlinePageP
             ) : null}
             {mapTrouble ? <p className="text-small text-amber">{mapTrouble}</p> : null}
             {tool === "shape" || tool === "terminal" ? <SelectionBar /> : null}
-            {map && field ? (
-              <ReadPanel
-                id={field.id}
-                map={map}
-                readings={readings}
-                setReadings={setReadings}
-                hover={reading}
-              />
-            ) : null}
           </div>
-          <div className="order-3 min-w-0 wide:order-none">
+          {map && field ? (
+            <ReadPanel
+              className="order-3 wide:order-none"
+              id={field.id}
+              map={map}
+              readings={readings}
+              setReadings={setReadings}
+              hover={reading}
+            />
+          ) : null}
+          <div className="order-5 min-w-0 wide:order-none">
             <VertexTable />
           </div>
         </div>
-        <div className="order-2 grid grid-cols-1 gap-3 wide:order-none">
-          <SolvePanel solution={solution} body={text} />
-          <TerminalPanel />
-          <MediumPanel />
-          <GoalPanel />
+        <div className="contents wide:grid wide:grid-cols-1 wide:gap-3">
+          <SolvePanel solution={solution} body={text} className="order-2 wide:order-none" />
+          <div className="order-4 grid grid-cols-1 gap-3 wide:order-none">
+            <TerminalPanel />
+            <MediumPanel />
+            <GoalPanel />
+          </div>
         </div>
       </div>
       {field?.result ? (

@@ -46,7 +46,7 @@ export function PageTools({ state, onReplace }: PageToolsProps) {
         aria-label="Begin with"
         value=""
         onChange={(event) => begin(event.target.value)}
-        className={`${CONTROL} w-auto! font-sans!`}
+        className={`${CONTROL} w-18! font-sans!`}
       >
         <option value="" disabled>
           Begin with …

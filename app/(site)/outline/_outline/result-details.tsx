@@ -15,7 +15,7 @@ interface ResultDetailsProps {
 export function ResultDetails({ result, names }: ResultDetailsProps) {
   const { peak, operating, mesh, seconds, repairs, cautions, assumptions, materials, engine } = result;
   return (
-    <div className="grid gap-3" data-testid="details">
+    <div className="grid grid-cols-1 gap-3" data-testid="details">
       <Cautions cautions={cautions} />
       <div className="grid items-start gap-x-5 gap-y-3 medium:grid-cols-2">
         {peak ? (

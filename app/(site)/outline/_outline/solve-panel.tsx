@@ -18,10 +18,11 @@ interface SolvePanelProps {
   readonly solution: Solution;
   /** The body that the page stands for now. */
   readonly body: string;
+  readonly className: string;
 }
 
 /** Starts and stops the solution, shows the bracket closing, and then the answer. */
-export function SolvePanel({ solution, body }: SolvePanelProps) {
+export function SolvePanel({ solution, body, className }: SolvePanelProps) {
   const { sketch } = useOutline();
   const { phase, field, trouble, lost } = solution;
   const busy =
@@ -31,7 +32,12 @@ export function SolvePanel({ solution, body }: SolvePanelProps) {
   const { resistance, pairs } = field?.result ?? {};
   const asked = solution.body === null ? undefined : (JSON.parse(solution.body) as { accuracy: number });
   return (
-    <section aria-label="Answer" aria-busy={busy} id="answer" className="grid min-h-22 content-start gap-1">
+    <section
+      aria-label="Answer"
+      aria-busy={busy}
+      id="answer"
+      className={`grid min-h-14 scroll-mt-2 grid-cols-1 content-start gap-1 ${className}`}
+    >
       <div className="flex flex-wrap items-center gap-1">
         <Button variant="primary" disabled={busy} onClick={() => solution.solve(body)} className="min-w-12">
           {busy ? "Solving …" : "Solve"}
@@ -54,7 +60,7 @@ export function SolvePanel({ solution, body }: SolvePanelProps) {
       ) : null}
       {trouble ? <Trouble trouble={trouble} current={current} /> : null}
       {phase === "over" && field ? (
-        <div className={`grid gap-1 ${current ? "" : "opacity-60"}`}>
+        <div className={`grid grid-cols-1 gap-1 ${current ? "" : "opacity-60"}`}>
           {resistance ? (
             <div>
               <h2 className="text-table font-normal text-ink-soft">Resistance between the terminals</h2>

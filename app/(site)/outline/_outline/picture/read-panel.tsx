@@ -30,10 +30,11 @@ interface ReadPanelProps {
   readonly readings: Readings;
   readonly setReadings: (readings: Readings) => void;
   readonly hover: HoverStore;
+  readonly className: string;
 }
 
 /** Potential and density at a point, and along a line. */
-export function ReadPanel({ id, map, readings, setReadings, hover }: ReadPanelProps) {
+export function ReadPanel({ id, map, readings, setReadings, hover, className }: ReadPanelProps) {
   const { sketch } = useOutline();
   const over = useSyncExternalStore(hover.subscribe, hover.get, () => null);
   const middle = middleOf(sketch);
@@ -44,7 +45,11 @@ export function ReadPanel({ id, map, readings, setReadings, hover }: ReadPanelPr
   const cell = "w-9";
 
   return (
-    <section aria-labelledby="read-off" className="grid gap-1" data-testid="read-off">
+    <section
+      aria-labelledby="read-off"
+      className={`grid grid-cols-1 gap-1 ${className}`}
+      data-testid="read-off"
+    >
       <h2 id="read-off" className="text-h3">
         Read off
       </h2>

@@ -1,0 +1,219 @@
+import AxeBuilder from "@axe-core/playwright";
+import type { Page } from "playwright-core";
+import { afterAll, beforeAll, describe, expect, it } from "vitest";
+import { closeBrowser } from "./browser";
+import { type Bench, RESISTANCE, startBench } from "./calculation";
+
+let bench: Bench;
+beforeAll(async () => {
+  bench = await startBench();
+});
+afterAll(async () => {
+  await closeBrowser();
+  await bench.stop();
+});
+
+/** Presses places of an empty board, which shows 60 units across its shorter side around (20, 20). */
+async function presser(page: Page): Promise<(x: number, y: number) => Promise<void>> {
+  const box = await page.getByTestId("board").boundingBox();
+  if (!box) throw new Error("There is no board.");
+  const scale = Math.min(box.width, box.height) / 60;
+  return (x, y) =>
+    page.mouse.click(box.x + box.width / 2 + (x - 20) * scale, box.y + box.height / 2 - (y - 20) * scale);
+}
+
+async function solve(page: Page): Promise<void> {
+  await page.getByRole("button", { name: "Solve" }).click();
+  await page.getByTestId("picture").waitFor({ timeout: 30_000 });
+}
+
+/** Violations that axe finds on the page as it is. */
+async function violations(page: Page): Promise<readonly string[]> {
+  const { violations: found } = await new AxeBuilder({ page })
+    .withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa", "best-practice"])
+    .analyze();
+  return found.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => String(target)).join(" | ")}`);
+}
+
+describe("an outline", () => {
+  it("is drawn, gets its terminals by presses, and is solved to the known corner", async () => {
+    const { page, complaints, close } = await bench.open("/outline");
+    await page.getByLabel("Begin with").selectOption("An empty board");
+    const press = await presser(page);
+    for (const [x, y] of [
+      [0, 0],
+      [40, 0],
+      [40, 10],
+      [10, 10],
+      [10, 40],
+      [0, 40],
+      [0, 0],
+    ]) {
+      await press(x, y);
+    }
+    expect(await page.getByLabel("Vertex 3, x").inputValue()).toBe("10");
+    await page.getByText("Terminals", { exact: true }).first().click();
+    await press(40, 5);
+    await page.getByRole("button", { name: "Terminal", exact: true }).click();
+    await press(5, 40);
+    expect(await page.getByLabel("Terminal on edge 4").inputValue()).toBe("1");
+    await page.getByLabel("Width of the bracket").selectOption("0.0001 %");
+    await solve(page);
+    // Six squares of leg and the corner, 1 − (2/π)·ln 2 = 0.558729 squares: P. M. Hall, Thin Solid Films 1 (1968) 277,
+    // from memory.
+    const [, lower, upper] =
+      /\[([\d.]+) … ([\d.]+)\]/.exec((await page.getByTestId("squares").textContent()) ?? "") ?? [];
+    expect(Number(lower) - 6).toBeLessThan(0.55873);
+    expect(Number(upper) - 6).toBeGreaterThan(0.55872);
+    expect(Number(upper) - Number(lower)).toBeLessThan(1e-5);
+    expect(await page.locator(RESISTANCE).textContent()).toBe("327.94\u2009Ω");
+    expect(await page.getByTestId("peak").textContent()).toMatch(/Unbounded at \(10, 10\) mm/);
+
+    // The picture's layers, the probe and the profile.
+    await page.getByText(/^Stream lines/).click();
+    expect(await page.getByTestId("streamlines").count()).toBe(0);
+    await page.getByText("Read off", { exact: true }).first().click();
+    await press(39.9, 5);
+    await page
+      .getByTestId("probe")
+      .getByText(/0\.99\d+ V/)
+      .waitFor();
+    await page.getByRole("button", { name: "Profile across the middle" }).click();
+    await page.getByRole("slider", { name: /Potential along the line/ }).waitFor();
+    expect(await violations(page)).toEqual([]);
+    await page.emulateMedia({ colorScheme: "dark" });
+    expect(await violations(page)).toEqual([]);
+    expect(complaints).toEqual([]);
+    await close();
+  });
+
+  it("is worked on by keyboard alone, step by step back, and travels in its link", async () => {
+    const { page, close } = await bench.open("/outline");
+    const x = page.getByLabel("Vertex 1, x");
+    await x.focus();
+    await page.keyboard.press("Control+A");
+    await page.keyboard.type("1/2 in");
+    await page.keyboard.press("Enter");
+    expect(await x.inputValue()).toBe("12.7");
+    await page.keyboard.press("Control+Z");
+    expect(await x.inputValue()).toBe("40");
+    await page.keyboard.press("Control+Shift+Z");
+    expect(await x.inputValue()).toBe("12.7");
+    await page.keyboard.press("Control+Z");
+    // The marked vertex moves on the board by grid steps; an edge becomes an arc in the table.
+    await page.locator("#board").focus();
+    await page.keyboard.press("ArrowRight");
+    expect(await x.inputValue()).toBe("41");
+    await page.getByLabel("Edge 0", { exact: true }).focus();
+    await page.getByLabel("Edge 0", { exact: true }).selectOption("arc ↻");
+    await page.getByLabel("Edge 0, radius").fill("50");
+    await page.keyboard.press("Enter");
+    await page.getByRole("button", { name: "Add a vertex after 5" }).press("Enter");
+    expect(await page.getByLabel("Vertex 6, y").inputValue()).toBe("20");
+    await page.getByRole("button", { name: "Solve" }).press("Enter");
+    await page.locator(RESISTANCE).waitFor({ timeout: 30_000 });
+    const shown = await page.locator(RESISTANCE).textContent();
+    await page.waitForFunction(() => window.location.hash.includes("41"));
+    const link = new URL(page.url());
+    await close();
+
+    const again = await bench.open(link.pathname + link.hash);
+    await again.page.waitForFunction(
+      () => document.querySelector<HTMLInputElement>('[aria-label="Edge 0, radius"]')?.value === "50",
+    );
+    await solve(again.page);
+    expect(await again.page.locator(RESISTANCE).textContent()).toBe(shown);
+    await again.close();
+  });
+
+  it("says at the place what is wrong, waits out a limit, and takes JSON", async () => {
+    const { page, close } = await bench.open("/outline");
+    await page.getByRole("button", { name: "JSON" }).click();
+    await page.getByRole("textbox", { name: "JSON" }).fill('{"outer": [[0, 0], [1]]}');
+    await page.getByRole("button", { name: "Take over" }).click();
+    await page.getByText("#/outer/1", { exact: true }).waitFor();
+    const crossing = {
+      outline: {
+        unit: "mm",
+        outer: [
+          [0, 0],
+          [10, 10],
+          [10, 0],
+          [0, 10],
+        ],
+      },
+      terminals: [
+        { name: "a", parts: [{ ring: 0, edge: 1 }] },
+        { name: "b", parts: [{ ring: 0, edge: 7 }] },
+      ],
+      medium: { sheetResistance: "5 kg" },
+    };
+    await page.getByRole("textbox", { name: "JSON" }).fill(JSON.stringify(crossing));
+    await page.getByRole("button", { name: "Take over" }).click();
+    await page.getByRole("button", { name: "Solve" }).click();
+    const field = page.getByLabel(/^Sheet resistance/).first();
+    await page.locator("[aria-invalid]").first().waitFor();
+    expect(await field.getAttribute("aria-invalid")).toBe("true");
+    await field.fill("5");
+    await page.getByRole("button", { name: "Solve" }).click();
+    await page.getByRole("button", { name: "Show it" }).first().click();
+    await page.locator("tr", { hasText: "cross at (5, 5)" }).waitFor();
+    expect(await violations(page)).toEqual([]);
+
+    // A limit passes by itself; the same attempt is then answered.
+    let refused = 0;
+    await page.route("**/api/v1/fields", async (route) => {
+      if (refused++ > 0) return route.continue();
+      await route.fulfill({
+        status: 429,
+        headers: { "Retry-After": "1", "Content-Type": "application/problem+json" },
+        body: JSON.stringify({ title: "Too many requests", status: 429 }),
+      });
+    });
+    await page.getByLabel("Begin with").selectOption("Strip with a tap");
+    await page.getByRole("button", { name: "Solve" }).click();
+    await page.getByText("A short pause").waitFor();
+    await page.getByTestId("pairs").waitFor({ timeout: 20_000 });
+    expect(await page.getByTestId("pairs").locator("tbody tr").count()).toBe(3);
+    expect(await page.getByTestId("matrix").locator("tbody tr").count()).toBe(3);
+    expect(refused).toBe(2);
+    await close();
+  });
+
+  it("closes its bracket live and can be stopped", async () => {
+    const { page, close } = await bench.open("/outline");
+    // Three steps of a solution, as the stream tells them, with time to look in between.
+    const view = (status: string, progress: object | null) => ({
+      id: "fld_x",
+      status,
+      progress,
+      result: null,
+    });
+    await page.route("**/api/v1/fields", (route) =>
+      route.fulfill({
+        status: 202,
+        contentType: "application/json",
+        body: JSON.stringify(view("queued", null)),
+      }),
+    );
+    const progress = { lower: 300, upper: 350, unknowns: 1200, refinements: 3 };
+    await page.route("**/api/v1/fields/fld_x/events", (route) =>
+      route.fulfill({
+        contentType: "text/event-stream",
+        body: `event: progress\ndata: ${JSON.stringify(view("running", progress))}\n\n`,
+      }),
+    );
+    let deleted = 0;
+    await page.route("**/api/v1/fields/fld_x", (route) => {
+      deleted += Number(route.request().method() === "DELETE");
+      return route.fulfill({ status: 204 });
+    });
+    await page.getByRole("button", { name: "Solve" }).click();
+    await page.getByTestId("closing").getByText("1,200 unknowns").waitFor();
+    await page.getByText("The connection broke").waitFor();
+    await page.getByRole("button", { name: "Cancel" }).click();
+    await page.getByText("Cancelled").waitFor();
+    await expect.poll(() => deleted).toBe(1);
+    await close();
+  });
+});
