@@ -1,4 +1,4 @@
-import type { LucideIcon } from "lucide-react";
+import { AppWindow, KeyRound, type LucideIcon } from "lucide-react";
 import type { Action } from "@/lib/auth/permissions";
 
 export interface Section {
@@ -11,4 +11,7 @@ export interface Section {
 }
 
 /** The sections of the console, in the order of its navigation. */
-export const SECTIONS: readonly Section[] = [];
+export const SECTIONS: readonly Section[] = [
+  { id: "keys", title: "Keys", href: "/console/keys", icon: KeyRound, permission: "keys.view" },
+  { id: "embeds", title: "Embeds", href: "/console/embeds", icon: AppWindow, permission: "embeds.view" },
+];

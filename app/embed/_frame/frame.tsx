@@ -60,7 +60,7 @@ export function Frame({ view }: { readonly view: FrameView }) {
     <main
       ref={content}
       style={style}
-      className={`mx-auto max-w-[720px] border-t-3 border-t-(--accent) bg-paper ${view.density === "compact" ? "p-1.5" : "p-2"}`}
+      className={`mx-auto max-w-[720px] border-t-3 border-t-(--accent) bg-sheet ${view.density === "compact" ? "p-1.5" : "p-2"}`}
     >
       <h1 className="text-h3!">{view.title}</h1>
       {view.intro ? <p className="mt-0.5 text-table text-ink-soft">{view.intro}</p> : null}

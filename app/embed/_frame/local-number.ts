@@ -15,11 +15,8 @@ function decimalMark(locale: string): string {
 }
 
 const SIGNS: readonly (readonly [RegExp, string])[] = [
-  [/\bu(?=[mΩAVWS])/g, "µ"],
-  [/\bohm\b/g, "Ω"],
-  [/\bmohm\b/g, "mΩ"],
-  [/\bkohm\b/g, "kΩ"],
-  [/\bMohm\b/g, "MΩ"],
+  [/\b([pnumkMGT]?)ohm\b/g, "$1Ω"],
+  [/\bu(?=[mΩAVWSs])/g, "µ"],
   [/\bdegC\b/g, "°C"],
   [/\bdegF\b/g, "°F"],
   [/ ?\bdeg\b/g, "°"],

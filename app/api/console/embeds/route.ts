@@ -1,0 +1,90 @@
+import { z } from "zod";
+import { teamById } from "@/db/queries/teams";
+import { DEFAULT_EMBED_QUOTA, embedSettings } from "@/lib/embeds/definition";
+import { type EmbedRowView, embedRows } from "@/lib/embeds/embed-list";
+import { createEmbed } from "@/lib/embeds/manage-embeds";
+import { startDefinition } from "@/lib/embeds/start-definition";
+import { findShape } from "@/lib/engine";
+import { Refusal } from "@/lib/service/refusal";
+import { json } from "../../_server/page-call";
+import { consoleRoute } from "../_server/console-route";
+import { csvAnswer, listQuery, paging } from "../_server/list-query";
+
+const COLUMNS = ["name", "team", "state", "createdAt", "requests", "remaining"] as const;
+type Column = (typeof COLUMNS)[number];
+
+const VALUES: Readonly<Record<Column, (row: EmbedRowView) => string | number>> = {
+  name: ({ name }) => name.toLowerCase(),
+  team: ({ teamName }) => teamName.toLowerCase(),
+  state: ({ state }) => state,
+  createdAt: ({ createdAt }) => createdAt,
+  requests: ({ requests }) => requests,
+  remaining: ({ month }) => month.remaining,
+};
+
+/** The widgets of the teams that the person sees; a team has dozens, so they are sorted here. */
+export const GET = consoleRoute({
+  action: "embeds.view",
+  query: listQuery(COLUMNS, "-createdAt").extend({
+    state: z.enum(["draft", "published", "withdrawn"]).optional(),
+  }),
+  handle: async ({ service, teamIds, query, now }) => {
+    const text = query.q.toLowerCase();
+    const found = (await embedRows(service, teamIds, now)).filter(
+      ({ id, name, state }) =>
+        (query.state === undefined || state === query.state) &&
+        (text === "" || name.toLowerCase().includes(text) || id.toLowerCase().includes(text)),
+    );
+    const { order, limit, offset } = paging(query);
+    const valueOf = VALUES[COLUMNS.find((name) => name === order.by) ?? "createdAt"];
+    found.sort((a, b) => {
+      const [one, other] = [valueOf(a), valueOf(b)];
+      const sign = one < other ? -1 : one > other ? 1 : 0;
+      return order.descending ? -sign : sign;
+    });
+    const rows = found.slice(offset, offset + limit);
+    if (!query.csv) return { rows, total: found.length };
+    return csvAnswer(
+      "embeds.csv",
+      {
+        Embed: (row: EmbedRowView) => row.id,
+        Name: (row) => row.name,
+        Team: (row) => row.teamName,
+        State: (row) => row.state,
+        Version: (row) => row.version,
+        Origins: (row) => row.origins.join(" "),
+        "Calls in 31 days": (row) => row.requests,
+        "Quota a month": (row) => row.monthQuota,
+        "Left this month": (row) => row.month.remaining,
+        Created: (row) => row.createdAt,
+      },
+      rows,
+    );
+  },
+});
+
+/** Makes a widget with a draft that starts as the shape's example. */
+export const POST = consoleRoute({
+  action: "embeds.manage",
+  body: z.strictObject({
+    teamId: z.string().max(40),
+    name: embedSettings.shape.name,
+    shape: z.string().max(64),
+  }),
+  handle: ({ db, body, actor, now, requireTeam }) => {
+    const { teamId, name, shape: shapeId } = body;
+    requireTeam(teamId);
+    const shape = findShape(shapeId);
+    const errors = [
+      ...(shape ? [] : [{ pointer: "#/shape", detail: "is not a shape of the catalogue." }]),
+      ...(teamById(db, teamId) ? [] : [{ pointer: "#/teamId", detail: "is not a team." }]),
+    ];
+    if (!shape || errors.length > 0)
+      throw new Refusal("invalid-input", "The widget cannot be made.", { errors });
+    const settings = { name, origins: [], monthQuota: DEFAULT_EMBED_QUOTA };
+    return json(
+      createEmbed(db, { actor, now }, { teamId, settings, definition: startDefinition(shape) }),
+      201,
+    );
+  },
+});

@@ -1,0 +1,108 @@
+"use client";
+
+import { useState } from "react";
+import type { EmbedDefinition, InputRule } from "@/lib/embeds/definition";
+import type { EmbedDetail } from "../../../api/console/embeds/_server/embed-detail";
+import { Button } from "../../../_ui/button";
+import { Select } from "../../../_ui/select";
+import { GradedField } from "./graded-field";
+import { InputRuleFields } from "./input-rule-fields";
+import type { Draft } from "./use-draft";
+
+interface RulesProps {
+  readonly detail: EmbedDetail;
+  readonly draft: Draft;
+}
+
+type Inputs = EmbedDefinition["inputs"];
+
+/** Every input of the widget with its rule, in the order in which visitors see them. */
+export function InputRules({ detail, draft }: RulesProps) {
+  const { definition, change, problems } = draft;
+  const used = new Set(definition.inputs.map(({ name }) => name));
+  const others = detail.inputs.filter(({ name }) => !used.has(name));
+  const [adding, setAdding] = useState("");
+  const put = (inputs: Inputs) => change({ inputs });
+
+  function add() {
+    const input = others.find(({ name }) => name === adding) ?? others[0];
+    if (!input) return;
+    const value = firstValue(input.type, input.kind, input.choices[0]?.value);
+    put([...definition.inputs, { name: input.name, rule: { mode: "fixed", value } }]);
+    setAdding("");
+  }
+
+  return (
+    <>
+      <h2 className="text-h3! mt-1 mb-0.5">Inputs</h2>
+      <p className="mb-1 max-w-prose text-small text-ink-soft">
+        Quantities with their unit, such as 250 mm or 65 degC; the unit is the one that visitors start with.
+        Hidden inputs are not shown, but whoever knows the formula can work them out from the result.
+      </p>
+      {definition.inputs.map(({ name, rule }, index) => {
+        const input = detail.inputs.find((known) => known.name === name);
+        const own = problems.filter(({ pointer }) => new RegExp(`^#/inputs/${index}(?:/|$)`).test(pointer));
+        return (
+          <InputRuleFields
+            key={name}
+            name={name}
+            input={input}
+            rule={rule}
+            materials={detail.materials}
+            errors={own.map((problem) => ({
+              place: problem.pointer.split("/")[3] ?? "",
+              detail: problem.detail,
+            }))}
+            onChange={(next: InputRule) =>
+              put(definition.inputs.map((each, at) => (at === index ? { name, rule: next } : each)))
+            }
+            onRemove={() => put(definition.inputs.filter((_, at) => at !== index))}
+            onUp={index === 0 ? undefined : () => put(swapped(definition.inputs, index))}
+          />
+        );
+      })}
+      {others.length > 0 ? (
+        <div className="mt-1 flex flex-wrap items-start gap-1">
+          <Select
+            label="Another input"
+            value={adding || others[0].name}
+            options={others.map(({ name, label }) => ({ value: name, label: `${label} (${name})` }))}
+            onChange={(event) => setAdding(event.target.value)}
+            className="grow"
+          />
+          <Button className="mt-3.5" onClick={add}>
+            Add
+          </Button>
+        </div>
+      ) : null}
+      <GradedField draft={draft} />
+    </>
+  );
+}
+
+function swapped(inputs: Inputs, index: number): Inputs {
+  const next = [...inputs];
+  [next[index - 1], next[index]] = [next[index], next[index - 1]];
+  return next;
+}
+
+const FIRST_VALUES: Readonly<Record<string, string>> = {
+  length: "10 mm",
+  area: "100 mm^2",
+  angle: "90 deg",
+  temperature: "20 degC",
+  temperatureCoefficient: "0.00393 1/K",
+  resistivity: "1.72e-8 ohm m",
+  conductivity: "58 MS/m",
+  sheetResistance: "50 ohm/sq",
+  voltage: "1 V",
+  current: "1 A",
+  power: "1 W",
+};
+
+/** Something that can be computed with, to be changed at once. */
+function firstValue(type: string, kind: string | null, choice: string | undefined): string {
+  if (type === "material") return "copper-annealed";
+  if (type === "flag") return "true";
+  return choice ?? FIRST_VALUES[kind ?? ""] ?? "1";
+}

@@ -1,0 +1,139 @@
+"use client";
+
+import Link from "next/link";
+import { useState } from "react";
+import type { EmbedRowView } from "@/lib/embeds/embed-list";
+import { Button } from "../../_ui/button";
+import { EmptyState } from "../../_ui/states";
+import { useConsole } from "../_shell/use-console";
+import type { ListColumn, ListPage } from "../_table/column";
+import { ConsoleTable } from "../_table/console-table";
+import { ListFilter, ListTools } from "../_table/list-tools";
+import { useListState } from "../_table/use-list-state";
+import { NewEmbed } from "./new-embed";
+import { StateMark } from "./state-mark";
+
+export interface ShapeChoice {
+  readonly id: string;
+  readonly title: string;
+  readonly family: string;
+}
+
+interface EmbedListProps {
+  /** Teams for which the person may make widgets. */
+  readonly teams: readonly { readonly id: string; readonly name: string }[];
+  readonly ownTeam: string;
+  readonly shapes: readonly ShapeChoice[];
+}
+
+const STATES = [
+  { value: "draft", label: "Draft" },
+  { value: "published", label: "Published" },
+  { value: "withdrawn", label: "Withdrawn" },
+];
+
+const COLUMNS: readonly ListColumn<EmbedRowView>[] = [
+  {
+    id: "name",
+    title: "Name",
+    sortable: true,
+    fixed: true,
+    cell: ({ id, name }) => (
+      <Link href={`/console/embeds/${id}`} className="link">
+        {name}
+      </Link>
+    ),
+  },
+  {
+    id: "state",
+    title: "State",
+    sortable: true,
+    cell: ({ state, version }) => <StateMark state={state} version={version} />,
+  },
+  { id: "team", title: "Team", sortable: true, from: "medium", cell: ({ teamName }) => teamName },
+  {
+    id: "requests",
+    title: "Calls, 31 days",
+    sortable: true,
+    align: "end",
+    cell: ({ requests }) => requests.toLocaleString("en"),
+  },
+  {
+    id: "remaining",
+    title: "Left this month",
+    sortable: true,
+    align: "end",
+    from: "medium",
+    cell: ({ month }) => `${month.remaining.toLocaleString("en")} of ${month.quota.toLocaleString("en")}`,
+  },
+  {
+    id: "origins",
+    title: "Origins",
+    from: "wide",
+    cell: ({ origins }) => (origins.length === 0 ? "none yet" : origins.join(", ")),
+  },
+  {
+    id: "createdAt",
+    title: "Made",
+    sortable: true,
+    from: "wide",
+    cell: ({ createdAt, createdBy }) => (
+      <>
+        <time dateTime={createdAt} title={createdAt} suppressHydrationWarning>
+          {new Date(createdAt).toLocaleDateString("en-GB")}
+        </time>{" "}
+        by {createdBy}
+      </>
+    ),
+  },
+];
+
+const FILTERS = ["state"];
+
+/** The widgets of the person's teams, and the way to a new one. */
+export function EmbedList({ teams, ownTeam, shapes }: EmbedListProps) {
+  const state = useListState({ sort: "-createdAt", filters: FILTERS });
+  const { data, error, isValidating, mutate } = useConsole<ListPage<EmbedRowView>>(`embeds?${state.query}`);
+  const [making, setMaking] = useState(false);
+  const mayMake = teams.length > 0;
+  return (
+    <>
+      <div className="mb-2 flex flex-wrap items-start gap-2">
+        <div className="grow">
+          <h1>Embeds</h1>
+          <p className="mt-0.5 max-w-prose text-table text-ink-soft">
+            Calculators of your team for intranet pages and wikis: one shape, your own limits, in a frame.
+          </p>
+        </div>
+        {mayMake ? (
+          <Button variant="primary" onClick={() => setMaking(true)}>
+            New embed
+          </Button>
+        ) : null}
+      </div>
+      <ListTools state={state} columns={COLUMNS} searches="name, id" csv="embeds">
+        <ListFilter state={state} name="state" label="State" options={STATES} />
+      </ListTools>
+      <ConsoleTable
+        caption="Embeds"
+        columns={COLUMNS}
+        state={state}
+        data={data}
+        error={error}
+        busy={isValidating}
+        onRetry={() => void mutate()}
+        rowKey={({ id }) => id}
+        empty={
+          <EmptyState title="No embeds yet">
+            {mayMake
+              ? "Make one: choose a shape, say what visitors may change, publish, and copy the snippet."
+              : "Developers of your team make them; they will stand here."}
+          </EmptyState>
+        }
+      />
+      {making ? (
+        <NewEmbed teams={teams} ownTeam={ownTeam} shapes={shapes} onClose={() => setMaking(false)} />
+      ) : null}
+    </>
+  );
+}
