@@ -62,6 +62,12 @@ function headersOf(operation: Operation): { headers?: z.ZodObject } {
       description: "A text of the caller's choice; a repeat with it within a day gets the same answer.",
     });
   }
+  if (operation.responses[202]) {
+    shape.Prefer = z.string().max(255).optional().meta({
+      description: "`wait=N` waits up to N seconds (at most 30) for the end (RFC 7240).",
+      example: "wait=30",
+    });
+  }
   if (operation.errors.includes("precondition-required") || operation.errors.includes("version-conflict")) {
     const required = operation.errors.includes("precondition-required");
     const schema = z

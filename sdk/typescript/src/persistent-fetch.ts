@@ -66,7 +66,8 @@ function backoff(tries: number): number {
   return 500 * 2 ** tries;
 }
 
-function pause(ms: number, signal: AbortSignal): Promise<void> {
+/** Waits; an abort ends the waiting with the signal's reason. */
+export function pause(ms: number, signal: AbortSignal): Promise<void> {
   return new Promise((resolve, reject) => {
     const stop = () => {
       clearTimeout(timer);

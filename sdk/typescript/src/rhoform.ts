@@ -1,5 +1,6 @@
 import { problemOf } from "./failure.js";
 import { type Client, createClient, createConfig } from "./generated/client/index.js";
+import { withIdempotencyKey } from "./idempotency.js";
 import { persistentFetch } from "./persistent-fetch.js";
 
 export interface RhoformOptions {
@@ -47,6 +48,7 @@ export function rhoform(options: RhoformOptions): Client {
       ),
     }),
   );
+  client.interceptors.request.use(withIdempotencyKey);
   client.interceptors.error.use((error, response) =>
     // Without a response the error is one of ours, or the caller's reason to abort.
     (response as Response | undefined) ? problemOf(error, response) : error,

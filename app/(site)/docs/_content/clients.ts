@@ -15,7 +15,7 @@ export const clients: DocPage = {
             {
               language: "sh",
               label: "download",
-              code: `curl -sO ${origin}/docs/python/rhoform.py`,
+              code: `curl -fsSO ${origin}/docs/python/rhoform.py`,
             },
           ],
         },

@@ -10237,6 +10237,10 @@ export type SolveFieldData = {
          * A text of the caller's choice; a repeat with it within a day gets the same answer.
          */
         'Idempotency-Key'?: string;
+        /**
+         * `wait=N` waits up to N seconds (at most 30) for the end (RFC 7240).
+         */
+        Prefer?: string;
     };
     path?: never;
     query?: never;
@@ -11601,6 +11605,12 @@ export type RelabelRecordResponse = RelabelRecordResponses[keyof RelabelRecordRe
 
 export type ReplayRecordData = {
     body?: never;
+    headers?: {
+        /**
+         * `wait=N` waits up to N seconds (at most 30) for the end (RFC 7240).
+         */
+        Prefer?: string;
+    };
     path: {
         /**
          * Id of the record.
