@@ -6,6 +6,12 @@ import { csvLine } from "./write-csv";
  * the example uses has a column.
  */
 export function csvTemplate(shape: Shape): string {
+  const { header, row } = templateCells(shape);
+  return csvLine(header) + csvLine(row);
+}
+
+/** The same as cells. */
+export function templateCells(shape: Shape): { readonly header: string[]; readonly row: string[] } {
   const { id, dimensions, alternatives, example } = shapeEntry(shape);
   const given = objectAt(example, "dimensions");
   const cells: [string, string][] = [["shape", id]];
@@ -23,7 +29,7 @@ export function csvTemplate(shape: Shape): string {
     }
   }
   cells.push(["temperature", "20 degC"], ["label", shape.title]);
-  return csvLine(cells.map(([name]) => name)) + csvLine(cells.map(([, value]) => value));
+  return { header: cells.map(([name]) => name), row: cells.map(([, value]) => value) };
 }
 
 function cellText(value: unknown): string {

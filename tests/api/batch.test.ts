@@ -1,7 +1,7 @@
 import fc from "fast-check";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { csvTemplate } from "@/api/batch/csv-template";
-import { defused } from "@/api/batch/write-csv";
+import { defused } from "@/api/batch/defuse";
 import { catalogue, exampleRequest } from "@/lib/engine";
 import { call, expectProblem, places } from "../support/call";
 import { startServer, type TestServer } from "../support/server";

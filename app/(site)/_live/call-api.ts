@@ -21,6 +21,9 @@ interface CallOptions {
   /** Seconds to wait for an answer that may take its time. */
   readonly wait?: number;
   readonly signal?: AbortSignal;
+  /** Media type of the body where it is not JSON, and of the answer where it is not the body's. */
+  readonly mediaType?: string;
+  readonly accept?: string;
 }
 
 /** Posts a body to an operation of the API on behalf of this page. Throws ApiProblem when it is refused. */
@@ -41,7 +44,7 @@ export async function getApi<Result>(path: string, options: CallOptions = {}): P
 export async function callApi(
   method: "GET" | "POST" | "PATCH" | "DELETE",
   path: string,
-  { observe, idempotencyKey, wait, signal }: CallOptions = {},
+  { observe, idempotencyKey, wait, signal, mediaType, accept }: CallOptions = {},
   body?: string,
 ): Promise<Response> {
   const send = async (): Promise<Response> =>
@@ -49,7 +52,8 @@ export async function callApi(
       method,
       headers: {
         Authorization: `Bearer ${await siteToken()}`,
-        ...(body === undefined ? {} : { "Content-Type": "application/json" }),
+        ...(body === undefined ? {} : { "Content-Type": mediaType ?? "application/json" }),
+        ...(accept ? { Accept: accept } : {}),
         ...(idempotencyKey ? { "Idempotency-Key": idempotencyKey } : {}),
         ...(wait ? { Prefer: `wait=${wait}` } : {}),
       },

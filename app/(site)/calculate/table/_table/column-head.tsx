@@ -1,0 +1,83 @@
+"use client";
+
+import { X } from "lucide-react";
+import { UNITS } from "../../../../_ui/quantity/units";
+import type { Column } from "../_model/table";
+import { type ColumnChoice, GROUP_TITLES } from "../_model/vocabulary";
+
+interface ColumnHeadProps {
+  readonly column: Column;
+  readonly place: number;
+  readonly choices: readonly ColumnChoice[];
+  /** Names that other columns have. */
+  readonly taken: ReadonlySet<string>;
+  readonly onChange: (change: Partial<Column>) => void;
+  readonly onRemove: () => void;
+}
+
+const CONTROL =
+  "min-h-5.5 w-full rounded border border-edge bg-sheet px-0.5 font-normal hover:border-ink medium:min-h-4";
+
+/** What a column stands for and the unit of its bare numbers. */
+export function ColumnHead({ column, place, choices, taken, onChange, onRemove }: ColumnHeadProps) {
+  const choice = choices.find(({ name }) => name === column.name);
+  const units = choice?.kind
+    ? UNITS[choice.kind].filter(({ hidden, id }) => !hidden || id === column.unit)
+    : [];
+  const foreign = column.unit !== "" && !units.some(({ id }) => id === column.unit);
+  const called = column.title || `column ${place + 1}`;
+  return (
+    <th scope="col" className="min-w-16 px-0.5 py-0.5 text-start align-top">
+      <span className="flex items-center gap-0.5">
+        <select
+          aria-label={`What ${called} is`}
+          value={column.name}
+          onChange={(event) => onChange({ name: event.target.value, unit: "" })}
+          className={`${CONTROL} ${column.name === "" ? "text-amber" : ""}`}
+        >
+          <option value="">left out</option>
+          {Object.entries(GROUP_TITLES).map(([group, title]) => (
+            <optgroup key={group} label={title}>
+              {choices
+                .filter((entry) => entry.group === group)
+                .map(({ name }) => (
+                  <option key={name} value={name} disabled={name !== column.name && taken.has(name)}>
+                    {name}
+                  </option>
+                ))}
+            </optgroup>
+          ))}
+        </select>
+        <button
+          type="button"
+          aria-label={`Remove ${called}`}
+          title="Remove the column"
+          onClick={onRemove}
+          className="grid size-5.5 shrink-0 cursor-pointer place-items-center rounded text-ink-soft hover:text-ink medium:size-3"
+        >
+          <X aria-hidden size={14} />
+        </button>
+      </span>
+      {units.length > 0 || foreign ? (
+        <select
+          aria-label={`Unit of ${called}`}
+          value={column.unit}
+          onChange={(event) => onChange({ unit: event.target.value })}
+          className={`${CONTROL} mt-0.5 text-ink-soft`}
+        >
+          <option value="">
+            {choice?.kind === "temperature" ? "°C, or in the cell" : "SI, or in the cell"}
+          </option>
+          {foreign ? <option value={column.unit}>{column.unit}</option> : null}
+          {units.map(({ id, label }) => (
+            <option key={id} value={id}>
+              {label}
+            </option>
+          ))}
+        </select>
+      ) : column.name === "" && column.title !== "" ? (
+        <span className="mt-0.5 block text-small font-normal text-ink-soft">{column.title}</span>
+      ) : null}
+    </th>
+  );
+}
