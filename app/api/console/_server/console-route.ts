@@ -105,9 +105,10 @@ async function readBody<Body extends z.ZodType>(
 }
 
 async function plainParams(context: Context): Promise<Record<string, string>> {
-  const given = await context.params;
+  // Next gives none where the path has no variable part.
+  const given: Awaited<Context["params"]> | undefined = await context.params;
   return Object.fromEntries(
-    Object.entries(given).map(([name, value]) => [
+    Object.entries(given ?? {}).map(([name, value]) => [
       name,
       Array.isArray(value) ? value.join("/") : (value ?? ""),
     ]),
