@@ -17,6 +17,7 @@ import { fieldChecks, type FieldCheck } from "./checks";
 import { buildDomain } from "./outline/build-domain";
 import type { CheckedOutline } from "./outline/check-outline";
 import type { Frame } from "./outline/frame";
+import { partChordCorners } from "./picture/chord-corners";
 import { makeFieldMap, type FieldMap } from "./picture/field-map";
 
 /**
@@ -211,6 +212,7 @@ function presentSolution(
     between: [0, 1] as const,
   };
   const drive = pictureDrive(result);
+  const singular = partChordCorners(result.singular, pair.set.mesh.xy, outline.rings);
   return {
     status: result.status,
     limit: result.limit,
@@ -234,7 +236,7 @@ function presentSolution(
     triangles: result.triangles,
     refinements: result.refinements,
     checks: fieldChecks(pair, energies, bounds),
-    map: makeFieldMap(pair, drive.combination, drive.shift, unit, result.singular, frameOfMap),
+    map: makeFieldMap(pair, drive.combination, drive.shift, unit, singular, frameOfMap),
   };
 }
 

@@ -6,10 +6,10 @@
  */
 
 import { ElementField } from "../bounds/element-field";
-import type { SingularVertex } from "../bounds/exponents";
 import { elementLayout, type ElementLayout } from "../element/layout";
 import type { BoundarySide } from "../mesh/mesh";
 import type { DiscreteField, SolvedPair } from "../solve/pair";
+import type { PartedVertices } from "./chord-corners";
 
 export interface FieldMap {
   /** Vertices in the domain's frame, interleaved. */
@@ -40,6 +40,8 @@ export interface FieldMap {
   /** Vertices at which the potential goes like r^exponent with an exponent that is no whole number. */
   readonly singularVertex: Int32Array;
   readonly singularExponent: Float64Array;
+  /** Vertices at which only the chords of an arc make the field singular. */
+  readonly chordVertex: Int32Array;
 }
 
 export interface MapFrame {
@@ -59,7 +61,7 @@ export function makeFieldMap(
   combination: readonly number[],
   shift: number,
   conductance: number,
-  singular: readonly SingularVertex[],
+  singular: PartedVertices,
   frame: MapFrame,
 ): FieldMap {
   const { set } = pair;
@@ -103,8 +105,9 @@ export function makeFieldMap(
     potential,
     stream,
     current,
-    singularVertex: Int32Array.from(singular, ({ vertex }) => vertex),
-    singularExponent: Float64Array.from(singular, ({ exponent }) => exponent),
+    singularVertex: Int32Array.from(singular.own, ({ vertex }) => vertex),
+    singularExponent: Float64Array.from(singular.own, ({ exponent }) => exponent),
+    chordVertex: Int32Array.from(singular.ofChords, ({ vertex }) => vertex),
     ...frame,
   };
 }

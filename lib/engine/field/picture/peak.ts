@@ -90,9 +90,13 @@ function aroundCorner(
   return best;
 }
 
-/** The greatest density over all vertices and middles of the triangles. */
+/**
+ * The greatest density over all vertices and middles of the triangles. Vertices of chords have one of their own; there
+ * the middles of the sides stand for the arc.
+ */
 function greatest(map: FieldMap, sampler: FieldSampler): DensityPeak {
   const { xy, triangles } = map;
+  const ofChords = new Set(map.chordVertex);
   let best: DensityPeak = {
     unbounded: false,
     position: inOutline(map, xy[0], xy[1]),
@@ -102,7 +106,17 @@ function greatest(map: FieldMap, sampler: FieldSampler): DensityPeak {
   };
   for (let t = 0; t < triangles.length / 3; t++) {
     const [a, b, c] = [2 * triangles[3 * t], 2 * triangles[3 * t + 1], 2 * triangles[3 * t + 2]];
-    const points: [number, number][] = [a, b, c].map((v) => [xy[v], xy[v + 1]]);
+    const corners = [a, b, c].filter((v) => !ofChords.has(v / 2));
+    const points: [number, number][] = corners.map((v) => [xy[v], xy[v + 1]]);
+    if (corners.length < 3) {
+      for (const [p, q] of [
+        [a, b],
+        [b, c],
+        [c, a],
+      ]) {
+        points.push([(xy[p] + xy[q]) / 2, (xy[p + 1] + xy[q + 1]) / 2]);
+      }
+    }
     points.push([(xy[a] + xy[b] + xy[c]) / 3, (xy[a + 1] + xy[b + 1] + xy[c + 1]) / 3]);
     for (const [x, y] of points) {
       if (map.axisymmetric && x === 0) continue;
