@@ -34,7 +34,9 @@ export function sizingSnippets(origin: string, request: object): readonly Snippe
   return snippets(origin, {
     path: "/sizing",
     body: request,
-    typescript: ["for (const { dimension, resistance } of answer.solutions) console.log(dimension.text, resistance.text);"],
+    typescript: [
+      "for (const { dimension, resistance } of answer.solutions) console.log(dimension.text, resistance.text);",
+    ],
     python: [
       'for solution in answer["solutions"]:',
       '    print(solution["dimension"]["text"], solution["resistance"]["text"])',

@@ -7,7 +7,7 @@ import { Tex } from "../../../_ui/tex";
 import { Calculator } from "../_calculator/calculator";
 import { FAMILY_TITLES } from "../_model/families";
 import { exampleParameters } from "../_model/parameters";
-import { requestBody } from "../_model/request";
+import { plainDimensions, requestBody } from "../_model/request";
 import { readState } from "../_model/variants";
 import { firstAnswer } from "../_server/first-answer";
 import { formDimensions, profileFacts } from "../_server/form-facts";
@@ -33,8 +33,8 @@ export default async function ShapePage({ params, searchParams }: PageProps) {
   const state = readState(pairsOf(await searchParams), entry, example);
   const bodies = state.variants.map((variant) => requestBody(entry, variant));
   const active = state.variants[state.active];
-  const geometry = readGeometry(shape, bodies[state.active].dimensions);
-  const exampleGeometry = readGeometry(shape, requestBody(entry, example).dimensions);
+  const geometry = readGeometry(shape, plainDimensions(entry, active));
+  const exampleGeometry = readGeometry(shape, plainDimensions(entry, example));
   const drawn = geometry.ok ? geometry.geometry : exampleGeometry.ok ? exampleGeometry.geometry : null;
   const temperature = readQuantity(active.temperature?.trim() || 20, "temperature");
   return (

@@ -8,7 +8,7 @@ import { ToastArea } from "../../../_ui/toast";
 import { splitAddress } from "../_model/address";
 import { sortComplaints } from "../_model/complaints";
 import type { Parameters } from "../_model/parameters";
-import { INCLUDE, requestBody } from "../_model/request";
+import { INCLUDE, plainDimensions, requestBody } from "../_model/request";
 import { type PageState, stateQuery } from "../_model/variants";
 import type { FirstAnswer } from "../_server/first-answer";
 import type { FormDimension, ProfileFacts } from "../_server/form-facts";
@@ -28,6 +28,8 @@ import { MediumFields } from "./medium-fields";
 import { OperatingFields } from "./operating-fields";
 import { PageTools } from "./page-tools";
 import { RequirementFields } from "./requirement-fields";
+import { SolveFor } from "./solve-for";
+import { UncertaintyFields } from "./uncertainty-fields";
 import { SaveRecord, type Saving } from "./save-record";
 import { useAnswers } from "./use-answers";
 import { useGeometry } from "./use-geometry";
@@ -76,7 +78,7 @@ function LiveCalculator(props: CalculatorProps) {
     props.answers,
   );
   const answer = answers[active];
-  const geometry = useGeometry(entry.id, bodies[active].dimensions, props.geometry);
+  const geometry = useGeometry(entry.id, plainDimensions(entry, parameters), props.geometry);
   const materials = useMaterials(parameters.temperature, props.materials);
   const { trouble } = answer;
   const complaints = useMemo(
@@ -91,6 +93,7 @@ function LiveCalculator(props: CalculatorProps) {
       parameters,
       change: actions.change,
       errorAt: (name) => complaints.atField.get(name),
+      tolerances: true,
       materials,
       profiles: props.profiles,
       values: geometry?.values ?? {},
@@ -130,6 +133,7 @@ function LiveCalculator(props: CalculatorProps) {
           <MediumFields />
           <OperatingFields form={form} />
           <RequirementFields form={form} />
+          <UncertaintyFields form={form} />
         </form>
         <div className="contents wide:sticky wide:top-2 wide:grid wide:gap-3">
           <Outcome answer={answer} elsewhere={complaints.elsewhere} className="order-3 wide:order-none" />
@@ -157,6 +161,7 @@ function LiveCalculator(props: CalculatorProps) {
           />
         </section>
       ) : null}
+      <SolveFor />
       <Details entry={entry} result={answer.result} formula={props.formula} />
       <section aria-labelledby="elsewhere" className="mt-5 print:hidden">
         <h2 id="elsewhere" className="mb-1">

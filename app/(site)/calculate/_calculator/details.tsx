@@ -5,6 +5,7 @@ import type { ReactNode } from "react";
 import type { ShapeEntry } from "@/lib/engine";
 import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
 import { Loading } from "../../../_ui/states";
+import { Budget } from "./answer/budget";
 import { Checks, Grounds } from "./answer/statements";
 import { WhenSeen } from "./when-seen";
 
@@ -48,6 +49,14 @@ export function Details({ entry, result, formula }: DetailsProps) {
           <WhenSeen fallback={<Loading what="the plots" className="min-h-[640px]" />}>
             <FlowPlots entry={entry} profile={result.profile} />
           </WhenSeen>
+        </section>
+      ) : null}
+      {result?.uncertainty ? (
+        <section aria-labelledby="budget">
+          <h2 id="budget" className="mb-1">
+            Tolerance budget
+          </h2>
+          <Budget uncertainty={result.uncertainty} entry={entry} />
         </section>
       ) : null}
       {result?.checks ? (

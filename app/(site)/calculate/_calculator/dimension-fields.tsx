@@ -12,6 +12,7 @@ import { chosenMember, dimensionGroups } from "../_model/parameters";
 import type { FormDimension } from "../_server/form-facts";
 import { useForm } from "./form-context";
 import { MemberMenu } from "./member-menu";
+import { ToleranceButton, ToleranceRow } from "./tolerance-field";
 
 /** Every dimension of the shape; where it can be given in several ways, the reader chooses which. */
 export function DimensionFields() {
@@ -35,7 +36,8 @@ interface DimensionFieldProps {
 }
 
 function DimensionField({ dimension, members }: DimensionFieldProps) {
-  const { parameters, change, errorAt, onFocus, values } = useForm();
+  const form = useForm();
+  const { parameters, change, errorAt, onFocus, values } = form;
   const { name, label, symbol, help, type, choices } = dimension;
   const text = parameters[name] ?? "";
   const fallback = dimension.default;
@@ -65,8 +67,14 @@ function DimensionField({ dimension, members }: DimensionFieldProps) {
 
   const kind = kindOf(dimension);
   const swap = (next: FormDimension) =>
-    change({ [name]: undefined, [next.name]: memberText(next, values[next.name], parameters[name]) });
-  return (
+    change({
+      [name]: undefined,
+      [`${name}.tolerance`]: undefined,
+      [`${name}.distribution`]: undefined,
+      [next.name]: memberText(next, values[next.name], parameters[name]),
+    });
+  const toleranced = type === "quantity" && text !== "";
+  const field = (
     <QuantityInput
       name={name}
       label={label}
@@ -81,8 +89,19 @@ function DimensionField({ dimension, members }: DimensionFieldProps) {
       error={errorAt(name)}
       onChange={(next) => change({ [name]: next === "" && fallback !== null ? undefined : next })}
       onFocusChange={(focused) => onFocus(focused ? dimension.line : undefined)}
-      beside={members.length > 1 ? <MemberMenu members={members} chosen={dimension} onChoose={swap} /> : null}
+      beside={
+        <>
+          {toleranced ? <ToleranceButton form={form} name={name} label={label} /> : null}
+          {members.length > 1 ? <MemberMenu members={members} chosen={dimension} onChoose={swap} /> : null}
+        </>
+      }
     />
+  );
+  return (
+    <div>
+      {field}
+      {toleranced ? <ToleranceRow form={form} name={name} label={label} /> : null}
+    </div>
   );
 }
 
@@ -106,7 +125,11 @@ function bareUnitOf(dimension: FormDimension): string | undefined {
 }
 
 /** A derived value as the text of its field, in the unit that the field before had. */
-function memberText(dimension: FormDimension, value: number | undefined, before: string | undefined): string {
+export function memberText(
+  dimension: FormDimension,
+  value: number | undefined,
+  before: string | undefined,
+): string {
   if (value === undefined) return "";
   const units = unitsOf(kindOf(dimension), dimension.foil);
   const unit = splitQuantity(before ?? "", units).unit ?? findUnit(FIRST_UNIT[kindOf(dimension)], units);

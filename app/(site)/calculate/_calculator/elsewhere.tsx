@@ -3,10 +3,11 @@
 import type { ShapeEntry } from "@/lib/engine";
 import { CodeBlock } from "../../../_ui/code-block";
 import { Tabs } from "../../../_ui/tabs";
-import { resistanceSnippets } from "../../_live/snippets";
+import { resistanceSnippets, sizingSnippets } from "../../_live/snippets";
 import { addressCall } from "../_model/address-call";
 import type { Parameters } from "../_model/parameters";
 import { requestBody } from "../_model/request";
+import { sizingBody } from "../_model/sizing";
 
 interface ElsewhereProps {
   readonly entry: ShapeEntry;
@@ -18,6 +19,7 @@ interface ElsewhereProps {
 export function Elsewhere({ entry, parameters, origin }: ElsewhereProps) {
   const call = addressCall(origin, entry, parameters);
   const snippets = resistanceSnippets(origin, requestBody(entry, parameters));
+  const sizing = sizingBody(entry, parameters);
   return (
     <>
       <p className="mb-1 max-w-prose text-table text-ink-soft">
@@ -47,6 +49,19 @@ export function Elsewhere({ entry, parameters, origin }: ElsewhereProps) {
           },
         ]}
       />
+      {sizing ? (
+        <>
+          <h3 className="mt-3 mb-1">The dimension for a resistance</h3>
+          <Tabs
+            label="Forms of the sizing"
+            tabs={sizingSnippets(origin, sizing).map(({ id, label, code }) => ({
+              id,
+              label,
+              content: <CodeBlock code={code} label={`${label}, sizing`} />,
+            }))}
+          />
+        </>
+      ) : null}
     </>
   );
 }

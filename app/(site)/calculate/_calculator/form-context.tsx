@@ -14,6 +14,8 @@ export interface PlainForm {
   readonly change: (patch: Patch) => void;
   /** Complaint about a parameter, or about a place inside it ("profile.layers/2/value"). */
   readonly errorAt: (name: string) => string | undefined;
+  /** Whether quantities take tolerances here. */
+  readonly tolerances?: boolean;
 }
 
 /** What the fields of a medium need. */

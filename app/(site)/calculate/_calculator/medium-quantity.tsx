@@ -3,6 +3,7 @@
 import { QuantityInput } from "../../../_ui/quantity-input";
 import type { UnitKind } from "../../../_ui/quantity/units";
 import type { MediumForm } from "./form-context";
+import { ToleranceButton, ToleranceRow } from "./tolerance-field";
 
 interface PlainMediumProps {
   readonly form: MediumForm;
@@ -66,14 +67,19 @@ interface MediumQuantityProps {
 /** One quantity of a medium. */
 export function MediumQuantity({ form, name, optional = false, ...field }: MediumQuantityProps) {
   const { parameters, change, errorAt } = form;
+  const toleranced = (parameters[name] ?? "") !== "";
   return (
-    <QuantityInput
-      {...field}
-      name={name}
-      helpOnDemand
-      value={parameters[name] ?? ""}
-      error={errorAt(name)}
-      onChange={(text) => change({ [name]: text === "" && optional ? undefined : text })}
-    />
+    <div>
+      <QuantityInput
+        {...field}
+        name={name}
+        helpOnDemand
+        value={parameters[name] ?? ""}
+        error={errorAt(name)}
+        onChange={(text) => change({ [name]: text === "" && optional ? undefined : text })}
+        beside={toleranced ? <ToleranceButton form={form} name={name} label={field.label} /> : null}
+      />
+      {toleranced ? <ToleranceRow form={form} name={name} label={field.label} /> : null}
+    </div>
   );
 }

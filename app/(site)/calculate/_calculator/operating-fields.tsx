@@ -4,6 +4,7 @@ import { QuantityInput } from "../../../_ui/quantity-input";
 import { Segmented } from "../../../_ui/segmented";
 import { type Drive, DRIVES } from "../_model/parameters";
 import type { PlainForm } from "./form-context";
+import { ToleranceButton, ToleranceRow } from "./tolerance-field";
 
 const LABELS: Readonly<Record<Drive, string>> = { voltage: "Voltage", current: "Current", power: "Power" };
 const SYMBOLS: Readonly<Record<Drive, string>> = { voltage: "U", current: "I", power: "P" };
@@ -16,19 +17,29 @@ export function OperatingFields({ form }: { readonly form: PlainForm }) {
     <fieldset>
       <legend className="mb-1 font-semibold">Operating point</legend>
       <div className="grid gap-x-2 narrow:max-wide:grid-cols-2">
-        <QuantityInput
-          name="temperature"
-          label="Temperature"
-          symbol="ϑ"
-          kind="temperature"
-          bareUnit="degC"
-          placeholder="20"
-          help="Temperature of the material, at which its resistivity is taken. 20 °C where it is left empty."
-          helpOnDemand
-          value={parameters.temperature ?? ""}
-          error={errorAt("temperature")}
-          onChange={(text) => change({ temperature: text === "" ? undefined : text })}
-        />
+        <div>
+          <QuantityInput
+            name="temperature"
+            label="Temperature"
+            symbol="ϑ"
+            kind="temperature"
+            bareUnit="degC"
+            placeholder="20"
+            help="Temperature of the material, at which its resistivity is taken. 20 °C where it is left empty."
+            helpOnDemand
+            value={parameters.temperature ?? ""}
+            error={errorAt("temperature")}
+            onChange={(text) => change({ temperature: text === "" ? undefined : text })}
+            beside={
+              parameters.temperature ? (
+                <ToleranceButton form={form} name="temperature" label="Temperature" />
+              ) : null
+            }
+          />
+          {parameters.temperature ? (
+            <ToleranceRow form={form} name="temperature" label="Temperature" />
+          ) : null}
+        </div>
         <div>
           <Segmented
             label="Also given"

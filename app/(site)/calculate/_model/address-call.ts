@@ -8,6 +8,7 @@ import {
   type Parameters,
   queryText,
 } from "./parameters";
+import { SIZING_NAMES, tolerancedName } from "./tolerances";
 
 export type AddressCall =
   | { readonly ok: true; readonly address: string; readonly formula: string }
@@ -24,11 +25,19 @@ export function addressCall(origin: string, entry: ShapeEntry, parameters: Param
   const reason = refusal(entry, parameters);
   if (reason) return { ok: false, reason };
   const pairs = orderedPairs(parameters, entry)
-    .filter(([, value]) => value.trim() !== "")
-    .map(([name, value]) => [name, compactValue(name, value.trim())] as const);
+    .filter(([name, value]) => value.trim() !== "" && name === tolerancedName(name))
+    .filter(([name]) => !SIZING_NAMES.includes(name))
+    .map(
+      ([name, value]) => [name, compactValue(name, value.trim()) + toleranceOf(parameters, name)] as const,
+    );
   const query = queryText([...pairs, ["format", "text"]]);
   const address = `${origin}/api/v1/resistance/${entry.id}?${query}&key=`;
   return { ok: true, address, formula: `=NUMBERVALUE(WEBSERVICE(${literals(address)}&$B$1),".")` };
+}
+
+function toleranceOf(parameters: Parameters, name: string): string {
+  const tolerance = parameters[`${name}.tolerance`]?.trim();
+  return tolerance ? `±${compactValue(name, tolerance)}` : "";
 }
 
 function refusal(entry: ShapeEntry, parameters: Parameters): string | null {
@@ -39,6 +48,11 @@ function refusal(entry: ShapeEntry, parameters: Parameters): string | null {
     (name) => /(?:temperatureCoefficient|referenceTemperature)$/.test(name) && parameters[name].trim() !== "",
   );
   if (beyond) return "A temperature coefficient does not fit an address: use one of the other forms.";
+  const shaped = Object.keys(parameters).some((name) => {
+    const own = parameters[name];
+    return name.endsWith(".distribution") && own !== "uniform" && own !== "";
+  });
+  if (shaped) return "Only tolerances without a distribution fit an address: use one of the other forms.";
   if (parameters.min?.trim() || parameters.max?.trim()) {
     return "A requirement does not fit an address, which answers a bare number: use one of the other forms.";
   }

@@ -14,7 +14,14 @@ export function parameterAt(pointer: string): string | undefined {
     case "dimensions":
     case "operating":
     case "requirement":
-      return path[0];
+      return withTolerance(path[0], path[1]);
+    case "uncertainty":
+      return path[0] === "trials" || path[0] === "seed" ? path[0] : "uncertainty";
+    case "solveFor":
+    case "target":
+      return place;
+    case "within":
+      return path[0] === "1" ? "to" : "from";
     case "medium":
       return mediumParameter(path, "");
     case "media":
@@ -24,10 +31,15 @@ export function parameterAt(pointer: string): string | undefined {
   }
 }
 
+/** What is wrong with a tolerance stands at the tolerance's own field. */
+function withTolerance(name: string | undefined, part: string | undefined): string | undefined {
+  return part === "tolerance" || part === "distribution" ? `${name}.tolerance` : name;
+}
+
 function mediumParameter(path: readonly string[], prefix: string): string | undefined {
   const [member, part, ...rest] = path;
   if (member === undefined) return `${prefix}medium`;
-  if (member !== "graded") return `${prefix}${member}`;
+  if (member !== "graded") return withTolerance(`${prefix}${member}`, part);
   if (part === undefined) return `${prefix}graded`;
   if (part === "coordinate") return `${prefix}graded`;
   return part === "profile" ? profileParameter(rest, `${prefix}profile`) : `${prefix}${part}`;

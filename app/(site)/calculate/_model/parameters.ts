@@ -5,6 +5,7 @@
 import { compactQuantity, spaceQuantity } from "../../../_ui/quantity/quantity-text";
 import type { ShapeEntry } from "@/lib/engine";
 import { PROFILE_FORMS } from "./profile-forms";
+import { SIZING_NAMES, tolerancedName, UNCERTAINTY_NAMES } from "./tolerances";
 
 export type Parameters = Readonly<Record<string, string>>;
 
@@ -31,8 +32,9 @@ export function mediumKind(parameters: Parameters, prefix: string): MediumKind |
 
 /** Whether a name belongs to the medium under that prefix; a shape's own thickness does not. */
 export function ofMedium(name: string, prefix: string, entry: Pick<ShapeEntry, "dimensions">): boolean {
-  if (!name.startsWith(prefix) || entry.dimensions.some((dimension) => dimension.name === name)) return false;
-  const rest = name.slice(prefix.length);
+  const own = tolerancedName(name);
+  if (!own.startsWith(prefix) || entry.dimensions.some((dimension) => dimension.name === own)) return false;
+  const rest = own.slice(prefix.length);
   return (
     (MEDIUM_KINDS as readonly string[]).includes(rest) ||
     BESIDE.includes(rest) ||
@@ -133,8 +135,11 @@ function putProfile(
 /** Names that the page of this shape understands; others in an address are left alone and dropped. */
 export function knownParameter(name: string, entry: ShapeEntry): boolean {
   return (
-    entry.dimensions.some((dimension) => dimension.name === name) ||
+    entry.dimensions.some((dimension) => dimension.name === tolerancedName(name)) ||
     ([...OPERATING, ...REQUIREMENT] as readonly string[]).includes(name) ||
+    tolerancedName(name) === "temperature" ||
+    UNCERTAINTY_NAMES.includes(name) ||
+    SIZING_NAMES.includes(name) ||
     mediumPrefixes(entry).some((prefix) => ofMedium(name, prefix, entry))
   );
 }
@@ -199,11 +204,13 @@ export function orderedPairs(
   entry: ShapeEntry,
 ): readonly (readonly [string, string])[] {
   const dimensions = entry.dimensions.map(({ name }) => name);
-  const rank = (name: string): number => {
+  const rank = (full: string): number => {
+    const name = tolerancedName(full);
     const dimension = dimensions.indexOf(name);
     if (dimension >= 0) return dimension;
     if ((OPERATING as readonly string[]).includes(name)) return 2000;
     if ((REQUIREMENT as readonly string[]).includes(name)) return 3000;
+    if (UNCERTAINTY_NAMES.includes(name) || SIZING_NAMES.includes(name)) return 4000;
     return 1000;
   };
   return Object.entries(parameters)

@@ -2,24 +2,41 @@
 import type { ShapeEntry } from "@/lib/engine";
 import { DRIVES, type MediumKind, mediumKind, mediumPrefixes, type Parameters } from "./parameters";
 import { PROFILE_FORMS, readRows, SELF_DESCRIBING } from "./profile-forms";
+import { type Given, given, uncertaintyBody } from "./tolerances";
 
 export interface RequestBody {
   readonly shape: string;
-  readonly dimensions: Readonly<Record<string, string | number>>;
+  readonly dimensions: Readonly<Record<string, Given>>;
   readonly medium?: Readonly<Record<string, unknown>>;
   readonly media?: Readonly<Record<string, Readonly<Record<string, unknown>>>>;
-  readonly operating?: Readonly<Record<string, string>>;
-  readonly requirement?: Readonly<Record<string, string>>;
+  readonly operating?: Readonly<Record<string, Given>>;
+  readonly requirement?: Readonly<Record<string, Given>>;
+  readonly uncertainty?: Readonly<Record<string, unknown>>;
 }
 
-/** Empty fields are left out, so that the API says what is missing. */
-export function requestBody(entry: ShapeEntry, parameters: Parameters): RequestBody {
+/** The dimensions alone, without tolerances: what a drawing needs. */
+export function plainDimensions(
+  entry: ShapeEntry,
+  parameters: Parameters,
+): Readonly<Record<string, string | number>> {
   const dimensions: Record<string, string | number> = {};
   for (const { name, type } of entry.dimensions) {
     const text = parameters[name]?.trim();
     if (!text) continue;
     dimensions[name] = type === "integer" && /^\d{1,15}$/.test(text) ? Number(text) : text;
   }
+  return dimensions;
+}
+
+/** Empty fields are left out, so that the API says what is missing. */
+export function requestBody(entry: ShapeEntry, parameters: Parameters): RequestBody {
+  const dimensions = Object.fromEntries(
+    Object.entries(plainDimensions(entry, parameters)).map(([name, value]) => [
+      name,
+      typeof value === "number" ? value : given(parameters, name, value),
+    ]),
+  );
+  const uncertainty = uncertaintyBody(parameters);
   const sheet = entry.media.kind === "sheet";
   const media = mediumPrefixes(entry).map(
     (prefix) => [prefix.slice(0, -1), mediumBody(parameters, prefix, sheet)] as const,
@@ -30,13 +47,15 @@ export function requestBody(entry: ShapeEntry, parameters: Parameters): RequestB
     ...(entry.media.kind === "two" ? { media: Object.fromEntries(media) } : { medium: media[0][1] }),
     ...group("operating", ["temperature", ...DRIVES], parameters),
     ...group("requirement", ["min", "max"], parameters),
+    ...(uncertainty ? { uncertainty } : {}),
   };
 }
 
 function group(name: string, members: readonly string[], parameters: Parameters): object {
-  const given = members.filter((member) => parameters[member]?.trim());
-  if (given.length === 0) return {};
-  return { [name]: Object.fromEntries(given.map((member) => [member, parameters[member].trim()])) };
+  const set = members.filter((member) => parameters[member]?.trim());
+  if (set.length === 0) return {};
+  const values = set.map((member) => [member, given(parameters, member, parameters[member].trim())]);
+  return { [name]: Object.fromEntries(values) };
 }
 
 const COMPANIONS: Readonly<Record<MediumKind, readonly string[]>> = {
@@ -59,7 +78,7 @@ function mediumBody(
   const thickness = sheet && kind !== "sheetResistance" ? ["thickness"] : [];
   for (const name of [kind, ...COMPANIONS[kind], ...thickness]) {
     const text = parameters[`${prefix}${name}`]?.trim();
-    if (text) medium[name] = text;
+    if (text) medium[name] = name === "material" ? text : given(parameters, `${prefix}${name}`, text);
   }
   // An emptied field is still the chosen one: the API then asks for a value rather than for a choice.
   if (!(kind in medium)) medium[kind] = "";

@@ -132,9 +132,12 @@ function byMethod(
   };
 }
 
+/** The range with its text: both ends to the second significant digit of half the width (JCGM 100, 7.2.6). */
 function range(low: number, high: number): { low: number; high: number; text: string } {
-  const ends = { lower: low, upper: high };
-  return { low, high, text: `${formatQuantity(low, "ohm", ends)} … ${formatQuantity(high, "ohm", ends)}` };
+  const half = (high - low) / 2;
+  const end = (value: number): string =>
+    formatQuantity(value, "ohm", { lower: value - half, upper: value + half });
+  return { low, high, text: `${end(low)} … ${end(high)}` };
 }
 
 function budget(

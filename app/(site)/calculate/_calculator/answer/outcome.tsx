@@ -3,6 +3,7 @@
 import type { Complaint } from "../../_model/complaints";
 import type { Answer } from "../use-answer";
 import { Facts } from "./facts";
+import { StrayRange } from "./budget";
 import { Headline, Verdict } from "./headline";
 import { Cautions } from "./statements";
 import { TroubleNotice } from "./trouble-notice";
@@ -19,6 +20,7 @@ export function Outcome({ answer, elsewhere, className }: OutcomeProps) {
   return (
     <section aria-label="Answer" className={`grid gap-1.5 ${className}`}>
       <Headline result={result} stale={stale} />
+      {result?.uncertainty ? <StrayRange uncertainty={result.uncertainty} /> : null}
       {result ? <Verdict result={result} /> : null}
       {trouble ? (
         <TroubleNotice

@@ -1,6 +1,7 @@
 /** Names and texts of parameters for people. */
 import type { ShapeEntry } from "@/lib/engine";
 import { PROFILE_FORMS, readRows } from "../../_model/profile-forms";
+import { tolerancedName } from "../../_model/tolerances";
 import type { MaterialChoice } from "../../_server/material-choices";
 import type { FormDimension } from "../../_server/form-facts";
 
@@ -22,6 +23,13 @@ const WORDS: Readonly<Record<string, string>> = {
   power: "Power",
   min: "At least",
   max: "At most",
+  uncertainty: "Evaluation of tolerances",
+  trials: "Trials",
+  seed: "Seed",
+  solveFor: "To find",
+  target: "Target",
+  from: "Search from",
+  to: "Search to",
 };
 
 export function parameterLabel(
@@ -29,6 +37,10 @@ export function parameterLabel(
   entry: ShapeEntry,
   dimensions: readonly FormDimension[],
 ): { readonly label: string; readonly symbol?: string } {
+  if (name.endsWith(".tolerance") || name.endsWith(".distribution")) {
+    const of = parameterLabel(tolerancedName(name), entry, dimensions);
+    return { label: `${of.label}: ${name.slice(name.lastIndexOf(".") + 1)}` };
+  }
   const dimension = dimensions.find((own) => own.name === name);
   if (dimension) return { label: dimension.label, symbol: dimension.symbol };
   const medium = entry.media.names.find((own) => name.startsWith(`${own.name}.`));

@@ -4,7 +4,7 @@ import { useEffect, useState } from "react";
 import useSWR from "swr";
 import { PlotFigure } from "../../../../_ui/plot/plot-figure";
 import { Loading } from "../../../../_ui/states";
-import { requestBody } from "../../_model/request";
+import { plainDimensions, requestBody } from "../../_model/request";
 import type { ProfilePreview } from "../../_server/profile-preview";
 import { useForm } from "../form-context";
 
@@ -21,7 +21,10 @@ export function ProfilePlot({ prefix, label }: { readonly prefix: string; readon
   const { entry, parameters } = useForm();
   const body = requestBody(entry, parameters);
   const medium = prefix === "" ? body.medium : body.media?.[prefix.slice(0, -1)];
-  const text = JSON.stringify({ dimensions: body.dimensions, graded: medium?.graded ?? {} });
+  const text = JSON.stringify({
+    dimensions: plainDimensions(entry, parameters),
+    graded: medium?.graded ?? {},
+  });
   const [asked, setAsked] = useState(text);
   useEffect(() => {
     const timer = setTimeout(() => setAsked(text), PAUSE_MS);

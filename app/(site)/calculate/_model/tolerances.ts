@@ -1,0 +1,47 @@
+/** Tolerances among a page's parameters: "width.tolerance" and "width.distribution" stand beside "width". */
+import type { Parameters } from "./parameters";
+
+export const DISTRIBUTIONS = [
+  { value: "uniform", label: "anywhere within" },
+  { value: "normal", label: "normal, 2 standard deviations" },
+  { value: "triangular", label: "triangular" },
+] as const;
+
+export const UNCERTAINTY_METHODS = ["propagation", "worst-case", "monte-carlo"] as const;
+export type UncertaintyMethod = (typeof UNCERTAINTY_METHODS)[number];
+
+/** How the tolerances are evaluated: `uncertainty`, and for Monte Carlo `trials` and `seed`. */
+export const UNCERTAINTY_NAMES: readonly string[] = ["uncertainty", "trials", "seed"];
+
+/** What is looked for: a dimension, the resistance that it is to give, and where to look. */
+export const SIZING_NAMES: readonly string[] = ["solveFor", "target", "from", "to"];
+
+const MEMBERS = /\.(?:tolerance|distribution)$/;
+
+/** The parameter that a tolerance belongs to; the name itself where it is none. */
+export function tolerancedName(name: string): string {
+  return name.replace(MEMBERS, "");
+}
+
+/** A text of the page, or the object with its tolerance that the API takes. */
+export type Given = string | number | { readonly value: string; readonly tolerance: string };
+
+/** The value of a parameter with its tolerance, where it has one. */
+export function given(parameters: Parameters, name: string, text: string): Given {
+  const tolerance = parameters[`${name}.tolerance`]?.trim();
+  if (!tolerance) return text;
+  const distribution = parameters[`${name}.distribution`];
+  return { value: text, tolerance, ...(distribution ? { distribution } : {}) };
+}
+
+/** The member `uncertainty` of a request. */
+export function uncertaintyBody(parameters: Parameters): Readonly<Record<string, unknown>> | undefined {
+  const { uncertainty: method } = parameters;
+  if (!method) return undefined;
+  const numbers = method === "monte-carlo" ? (["trials", "seed"] as const) : [];
+  const set = numbers.flatMap((name) => {
+    const text = parameters[name]?.trim();
+    return text ? [[name, /^\d{1,15}$/.test(text) ? Number(text) : text] as const] : [];
+  });
+  return { method, ...Object.fromEntries(set) };
+}
