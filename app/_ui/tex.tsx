@@ -13,6 +13,8 @@ export function Tex({ tex, display = false }: { readonly tex: string; readonly d
   const Element = display ? "div" : "span";
   return (
     <Element
+      // A wide formula scrolls, so the keyboard must reach it.
+      {...(display ? { tabIndex: 0, role: "group", "aria-label": "Formula" } : {})}
       className={display ? "overflow-x-auto overflow-y-hidden py-0.5" : undefined}
       dangerouslySetInnerHTML={{ __html: html }}
     />
