@@ -32,7 +32,7 @@ export function Placing({ detail, origin, onChanged }: PlacingProps) {
           own pages always may.
         </p>
       </section>
-      <section className="grid min-w-0 content-start gap-1.5">
+      <section className="grid min-w-0 grid-cols-[minmax(0,1fr)] content-start gap-1.5">
         <h2 className="text-h3!">Snippets</h2>
         {embed.state === "published" ? null : (
           <Notice tone="caution" title="Not published">

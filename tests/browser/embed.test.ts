@@ -1,0 +1,445 @@
+import { gzipSync } from "node:zlib";
+import { existsSync, readFileSync } from "node:fs";
+import { AxeBuilder } from "@axe-core/playwright";
+import type { BrowserContext, Frame, Page } from "playwright-core";
+import { afterAll, afterEach, beforeAll, describe, expect, test } from "vitest";
+import { SHELL } from "@/lib/activity/append";
+import type { EmbedDefinition } from "@/lib/embeds/definition";
+import { withdrawEmbed } from "@/lib/embeds/manage-embeds";
+import { startServer, type TestServer } from "../support/server";
+import { BUSBAR, publishedWidget } from "../support/widget";
+import { base, browser, closeBrowser } from "./browser";
+import { type HostServer, loaderPage, startHost } from "./host-page";
+
+interface Told {
+  readonly type: string;
+  readonly id: string;
+  readonly detail: {
+    readonly code?: string;
+    readonly message?: string;
+    readonly resistance?: { readonly text: string; readonly value: number };
+  };
+}
+
+declare global {
+  interface Window {
+    events: Told[];
+  }
+}
+
+let server: TestServer;
+let host: HostServer;
+const open: BrowserContext[] = [];
+
+beforeAll(async () => {
+  server = await startServer();
+  host = await startHost();
+});
+afterEach(async () => {
+  await Promise.all(open.splice(0).map((context) => context.close()));
+});
+afterAll(async () => {
+  await closeBrowser();
+  await host.stop();
+  await server.stop();
+});
+
+async function newPage(locale = "en-US"): Promise<{ page: Page; complaints: string[] }> {
+  const context = await (await browser()).newContext({ locale, viewport: { width: 900, height: 900 } });
+  open.push(context);
+  const page = await context.newPage();
+  const complaints: string[] = [];
+  page.on("pageerror", (error) => complaints.push(String(error)));
+  page.on("console", (message) => {
+    if (message.type() === "error") complaints.push(message.text());
+  });
+  return { page, complaints };
+}
+
+const widget = (change: Partial<EmbedDefinition> = {}, monthQuota = 1000) =>
+  publishedWidget(server, change, { origins: [host.origin, host.otherSite], monthQuota });
+
+const told = (page: Page, type: string, id: string, count = 1) =>
+  page
+    .waitForFunction(
+      ({ type, id, count }) =>
+        window.events.filter((event) => event.type === type && event.id === id).length >= count,
+      { type, id, count },
+      { timeout: 45_000 },
+    )
+    .then(() => page.evaluate(() => window.events));
+
+function frameOf(page: Page, id: string): Frame {
+  const frame = page.frames().find((each) => each.url().includes(id));
+  if (!frame) throw new Error(`No frame of ${id}.`);
+  return frame;
+}
+
+const shownText = (frame: Frame) => frame.getByTestId("resistance").innerText();
+
+describe("a page of another origin", () => {
+  test("shows two widgets by the loader: events, sizes, values, keyboard, and nothing of theirs in the page", async () => {
+    const { page, complaints } = await newPage("de-DE");
+    const [one, two] = [widget().id, widget({ title: "Zweiter", accent: "#1f6f62", theme: "light" }).id];
+    const path = host.serve(
+      loaderPage(
+        base(),
+        `<style>p { color: red } input { width: 1px }</style>
+         <rhoform-embed id="one" embed="${one}" lang="de" style="width: 640px"></rhoform-embed>
+         <rhoform-embed id="two" embed="${two}" values='{"length":"1 m"}' theme="dark" style="width: 320px"></rhoform-embed>`,
+      ),
+    );
+    await page.goto(host.otherSite + path);
+    await told(page, "result", "one");
+    const events = await told(page, "result", "two");
+    expect(events.filter(({ type }) => type === "error")).toEqual([]);
+    const ratio =
+      (events.find(({ type, id }) => type === "result" && id === "two")?.detail.resistance?.value ?? 0) /
+      (events.find(({ type, id }) => type === "result" && id === "one")?.detail.resistance?.value ?? 1);
+    expect(ratio).toBeCloseTo(4, 9);
+
+    // Words and numbers in the page's language, for the first; the second speaks the page's, English.
+    const [first, second] = [frameOf(page, one), frameOf(page, two)];
+    expect(await shownText(first)).toMatch(/^\d+,\d+\s?µΩ$/);
+    expect(await first.locator("label", { hasText: "Länge" }).count()).toBe(1);
+    expect(await second.locator("label", { hasText: "Length" }).count()).toBe(1);
+
+    // The frame is as high as its content, which never scrolls.
+    await page.waitForFunction(() =>
+      [...document.querySelectorAll("rhoform-embed")].every((element) => {
+        const frame = element.shadowRoot?.querySelector("iframe");
+        return frame && frame.style.height !== "320px";
+      }),
+    );
+    for (const frame of [first, second]) {
+      await frame.waitForFunction(
+        () => document.documentElement.scrollHeight <= window.innerHeight + 1,
+        undefined,
+        { timeout: 5_000 },
+      );
+      expect(await frame.evaluate(() => document.documentElement.scrollWidth <= window.innerWidth)).toBe(
+        true,
+      );
+    }
+    expect(await page.evaluate(() => document.querySelectorAll("iframe").length)).toBe(0);
+
+    // Keyboard alone: into the first field, another value with a decimal comma, the answer follows.
+    const before = (await page.evaluate(() => window.events)).length;
+    await first.locator("input").first().focus();
+    await page.keyboard.press("Control+A");
+    await page.keyboard.type("500,5");
+    await page.waitForFunction((count) => window.events.length > count, before);
+    const typed = (await page.evaluate(() => window.events)).at(-1);
+    expect([typed?.type, typed?.id]).toEqual(["result", "one"]);
+    await page.keyboard.press("Tab");
+    expect(await first.evaluate(() => document.activeElement?.tagName)).toBe("SELECT");
+
+    // The page sets open values and asks again; the other widget stays as it was.
+    const text = await shownText(second);
+    await page.evaluate(() => {
+      const element = document.getElementById("one") as HTMLElement & {
+        set: (values: object) => void;
+        compute: () => void;
+      };
+      element.set({ length: "2 m", width: "999 mm", unknown: "1" });
+      element.compute();
+    });
+    const set = await page.waitForFunction(() => {
+      const last = window.events.at(-1);
+      return last?.id === "one" && Math.abs((last.detail.resistance?.value ?? 0) * 1e6 - 101) < 3
+        ? last
+        : null;
+    });
+    expect((await set.jsonValue())?.type).toBe("result");
+    expect(await shownText(second)).toBe(text);
+
+    // Removed and brought back, once more alone: one frame, one listener, and only its own events.
+    const counts = await page.evaluate(async () => {
+      const element = document.getElementById("one");
+      const parent = element?.parentNode;
+      const before = window.events.length;
+      let listeners = 0;
+      const add = window.addEventListener.bind(window);
+      const remove = window.removeEventListener.bind(window);
+      window.addEventListener = ((type: string, ...rest: [never]) => {
+        listeners += type === "message" ? 1 : 0;
+        add(type, ...rest);
+      }) as typeof window.addEventListener;
+      window.removeEventListener = ((type: string, ...rest: [never]) => {
+        listeners -= type === "message" ? 1 : 0;
+        remove(type, ...rest);
+      }) as typeof window.removeEventListener;
+      for (let i = 0; i < 5; i++) {
+        element?.remove();
+        parent?.append(element as Node);
+      }
+      element?.remove();
+      const frames = element?.shadowRoot?.querySelectorAll("iframe").length;
+      return { listeners, frames, events: window.events.length - before };
+    });
+    // Six removals, five additions; what was there before is taken off as well.
+    expect(counts).toEqual({ listeners: -1, frames: 0, events: 0 });
+
+    expect(await page.context().cookies()).toEqual([]);
+    expect(complaints).toEqual([]);
+  });
+
+  test("changes nothing by hostile messages, and reads nothing", async () => {
+    const { page } = await newPage();
+    const { id } = widget();
+    const path = host.serve(
+      loaderPage(
+        base(),
+        `<rhoform-embed id="one" embed="${id}"></rhoform-embed><iframe id="other" src="about:blank"></iframe>`,
+      ),
+    );
+    await page.goto(host.origin + path);
+    await told(page, "result", "one");
+    const frame = frameOf(page, id);
+    const [before, height] = await Promise.all([
+      shownText(frame),
+      page.evaluate(
+        () => document.querySelector("rhoform-embed")?.shadowRoot?.querySelector("iframe")?.style.height,
+      ),
+    ]);
+    const count = (await page.evaluate(() => window.events)).length;
+    await page.evaluate((embed) => {
+      const inside = document
+        .querySelector("rhoform-embed")
+        ?.shadowRoot?.querySelector("iframe")?.contentWindow;
+      const good = { source: "rhoform", version: 1, type: "set", embed, data: { values: { length: "3 m" } } };
+      const bad = [
+        null,
+        "set",
+        42,
+        [],
+        { ...good, version: 2 },
+        { ...good, source: "other" },
+        { ...good, embed: "emb_0000000000000000" },
+        { ...good, data: { values: { length: { toString: 1 } } } },
+        { ...good, data: { values: { length: "9".repeat(500) } } },
+        {
+          ...good,
+          data: { values: Object.fromEntries(Array.from({ length: 99 }, (_, i) => [`x${i}`, "1"])) },
+        },
+        { ...good, data: { values: { width: "1 m", temperature: "0 degC", ["__proto__"]: "1" } } },
+        { ...good, type: "result", data: { resistance: "no" } },
+      ];
+      for (const message of bad) inside?.postMessage(message, "*");
+      // From a window that is not the one around, and to the loader from a window that is not the frame.
+      const other = (document.getElementById("other") as HTMLIFrameElement).contentWindow as Window &
+        typeof globalThis;
+      const script = other.document.createElement("script");
+      script.textContent = `parent.inside.postMessage(${JSON.stringify(good)}, "*");
+        parent.postMessage(${JSON.stringify({ ...good, type: "size", data: { height: 9999 } })}, "*");`;
+      Object.assign(window, { inside });
+      other.document.body.append(script);
+      window.postMessage({ ...good, type: "size", data: { height: 9999 } }, "*");
+      window.postMessage({ ...good, type: "error", data: { code: "x", message: "y" } }, "*");
+    }, id);
+    // A good message comes after all of these, so that whatever they do has been done.
+    await page.evaluate(() =>
+      (document.getElementById("one") as HTMLElement & { compute: () => void }).compute(),
+    );
+    await told(page, "result", "one", 2);
+    expect(await shownText(frame)).toBe(before);
+    const later = await page.evaluate(() => ({
+      height: document.querySelector("rhoform-embed")?.shadowRoot?.querySelector("iframe")?.style.height,
+      events: window.events.length,
+    }));
+    expect(later).toEqual({ height, events: count + 1 });
+    const reading = await page.evaluate(() => {
+      try {
+        return String(
+          document.querySelector("rhoform-embed")?.shadowRoot?.querySelector("iframe")?.contentDocument,
+        );
+      } catch {
+        return "refused";
+      }
+    });
+    expect(["null", "refused"]).toContain(reading);
+  });
+
+  test("that is not allowed gets a calm line in place of the frame, and what is gone a calm card", async () => {
+    const { page } = await newPage();
+    const foreign = publishedWidget(server, {}, { origins: ["https://elsewhere.example"] }).id;
+    const gone = widget().id;
+    withdrawEmbed(server.service.db, { actor: SHELL, now: Date.now() }, gone);
+    const path = host.serve(
+      loaderPage(
+        base(),
+        `<rhoform-embed id="foreign" embed="${foreign}"></rhoform-embed>
+         <rhoform-embed id="gone" embed="${gone}"></rhoform-embed>
+         <rhoform-embed id="none" embed="emb_0000000000000000"></rhoform-embed>`,
+      ),
+    );
+    await page.goto(host.origin + path);
+    await told(page, "error", "gone");
+    await told(page, "error", "none");
+    const events = await told(page, "error", "foreign");
+    const codes = Object.fromEntries(events.map(({ id, detail }) => [id, detail.code]));
+    expect(codes).toEqual({ foreign: "refused", gone: "withdrawn", none: "not-found" });
+    expect(await page.locator("#foreign p").innerText()).toContain(host.origin);
+    expect(await frameOf(page, gone).locator("h1").innerText()).toBe("This calculator was withdrawn");
+    const status = async (id: string) => (await fetch(`${base()}/embed/${id}`)).status;
+    expect([await status(gone), await status("emb_0000000000000000"), await status("%3Cscript%3E")]).toEqual([
+      410, 404, 404,
+    ]);
+    // A draft is nobody's but its team's.
+    expect(await status(`${foreign}?preview=1`)).not.toBe(200);
+  });
+
+  test("with a strict policy needs the three directives and nothing else", async () => {
+    const { page, complaints } = await newPage();
+    const { id } = widget();
+    const policy = [
+      "default-src 'none'",
+      `script-src 'nonce-abc' ${base()}/embed/v1.js`,
+      `frame-src ${base()}`,
+      `connect-src ${base()}`,
+    ].join("; ");
+    const content = `<rhoform-embed id="one" embed="${id}"></rhoform-embed>`;
+    const path = host.serve(loaderPage(base(), content, "abc"), { "Content-Security-Policy": policy });
+    await page.goto(host.origin + path);
+    expect((await told(page, "result", "one")).at(-1)?.detail.resistance?.text).toMatch(/µΩ/);
+    expect(complaints).toEqual([]);
+  });
+
+  test("may put the frame into a sandbox that allows scripts and nothing else", async () => {
+    const { page } = await newPage();
+    const { id } = widget();
+    // The development server keeps its scripts from frames without an origin; the built one does not.
+    if (await isDevelopment(id)) {
+      await page.route(`${base()}/_next/**`, async (route) => {
+        const response = await route.fetch();
+        await route.fulfill({
+          response,
+          headers: { ...response.headers(), "access-control-allow-origin": "*" },
+        });
+      });
+    }
+    const path = host.serve(
+      `<!doctype html><title>x</title><iframe title="w" sandbox="allow-scripts" width="480" height="700" src="${base()}/embed/${id}?length=1m"></iframe>`,
+    );
+    await page.goto(host.origin + path);
+    const frame = page.frameLocator("iframe");
+    await frame.getByTestId("resistance").waitFor({ timeout: 45_000 });
+    expect(await frame.getByTestId("resistance").innerText()).toMatch(/µΩ/);
+    const without = host.serve(
+      `<!doctype html><title>x</title><iframe title="w" sandbox width="480" height="700" src="${base()}/embed/${id}"></iframe>`,
+    );
+    await page.goto(host.origin + without);
+    await page.frameLocator("iframe").getByText("needs scripts").waitFor();
+  });
+});
+
+describe("the frame", () => {
+  test("renews its token, keeps inputs while the service is away, and says when a quota returns", async () => {
+    const { page } = await newPage();
+    const { id } = widget();
+    let refusals = 0;
+    const asked: string[] = [];
+    page.on("request", (request) => asked.push(new URL(request.url()).pathname));
+    await page.route("**/api/v1/resistance", async (route) => {
+      if (refusals++ > 0) return route.fallback();
+      await route.fulfill({ status: 401, contentType: "application/problem+json", body: "{}" });
+    });
+    await page.goto(`${base()}/embed/${id}`);
+    await page.getByTestId("resistance").waitFor({ timeout: 45_000 });
+    expect(asked).toContain("/api/embed/token");
+
+    await page.unroute("**/api/v1/resistance");
+    await page.route("**/api/v1/resistance", (route) => route.abort());
+    const before = await page.getByTestId("resistance").innerText();
+    await page.locator("input").first().fill("1234");
+    await page.getByText("The service cannot be reached").waitFor();
+    expect(await page.locator("input").first().inputValue()).toBe("1234");
+    await page.unroute("**/api/v1/resistance");
+    await page.getByRole("button", { name: "Try again" }).click();
+    await page.waitForFunction(
+      (text) => document.querySelector('[data-testid="resistance"]')?.textContent !== text,
+      before,
+    );
+    expect(await page.getByText("The service cannot be reached").count()).toBe(0);
+
+    await page.locator("input").first().fill("5");
+    await page.getByText("must lie between 50 mm and 4 m", { exact: false }).waitFor();
+
+    const spent = widget({}, 0).id;
+    await page.goto(`${base()}/embed/${spent}`);
+    await page.getByText("This month’s calculations are used up").waitFor({ timeout: 45_000 });
+  });
+
+  test("runs no script that comes with titles, labels, defaults, colours or its address", async () => {
+    const { page, complaints } = await newPage();
+    const evil = `"><img src=x onerror="window.hacked=1"><script>window.hacked=1</script>`;
+    const { id } = widget({
+      title: `${evil}`.slice(0, 100),
+      intro: evil,
+      inputs: BUSBAR.inputs.map(({ name, rule }) => ({
+        name,
+        rule: rule.mode === "hidden" ? rule : { ...rule, label: evil.slice(0, 60) },
+      })),
+    });
+    const query = new URLSearchParams({
+      length: `1 m${evil}`.slice(0, 119),
+      lang: evil,
+      theme: evil,
+      material: "javascript:alert(1)",
+      nothing: evil,
+    });
+    await page.goto(`${base()}/embed/${id}?${query}`);
+    await page.getByRole("heading", { level: 1 }).waitFor();
+    await page.locator("[aria-invalid]").first().waitFor({ timeout: 45_000 });
+    expect(await page.locator("h1").innerText()).toBe(evil.slice(0, 100));
+    expect(await page.evaluate(() => "hacked" in window)).toBe(false);
+    expect(await page.locator("img").count()).toBe(0);
+    expect(complaints.filter((text) => !text.includes("422"))).toEqual([]);
+  });
+
+  test.each([
+    [320, "light"],
+    [720, "dark"],
+  ] as const)("has no accessibility complaint at %i px, %s", async (width, theme) => {
+    const { page } = await newPage();
+    await page.setViewportSize({ width, height: 900 });
+    const { id } = widget({
+      requirement: { max: "40 uohm" },
+      show: { drawing: true, bounds: true, plots: true },
+      language: theme === "dark" ? "de" : "en",
+    });
+    await page.goto(`${base()}/embed/${id}?theme=${theme}`);
+    await page.getByTestId("resistance").waitFor({ timeout: 45_000 });
+    await page.getByRole("slider").first().waitFor({ timeout: 45_000 });
+    const { violations } = await new AxeBuilder({ page }).analyze();
+    expect(violations.map(({ id: rule, nodes }) => [rule, nodes.map(({ html }) => html)])).toEqual([]);
+    expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(width);
+  });
+
+  test("loads at most 60 kB of script beyond the framework's own", async () => {
+    const { page } = await newPage();
+    const { id } = widget({ show: { drawing: true, bounds: true, plots: false } });
+    // Only what was built for production has a size to speak of.
+    if ((await isDevelopment(id)) || !existsSync(".next/build-manifest.json")) return;
+    const manifest: { rootMainFiles: string[]; polyfillFiles: string[] } = JSON.parse(
+      readFileSync(".next/build-manifest.json", "utf8"),
+    );
+    const framework = new Set([...manifest.rootMainFiles, ...manifest.polyfillFiles]);
+    const sizes = new Map<string, number>();
+    page.on("response", async (response) => {
+      const path = new URL(response.url()).pathname.replace(/^\/_next\//, "");
+      if (!path.endsWith(".js") || framework.has(path)) return;
+      sizes.set(path, gzipSync(await response.body()).byteLength);
+    });
+    await page.goto(`${base()}/embed/${id}`, { waitUntil: "networkidle" });
+    await page.getByTestId("resistance").waitFor();
+    const total = [...sizes.values()].reduce((sum, size) => sum + size, 0);
+    expect(total, JSON.stringify([...sizes])).toBeLessThanOrEqual(60_000);
+    expect(total).toBeGreaterThan(1_000);
+  });
+});
+
+async function isDevelopment(id: string): Promise<boolean> {
+  const response = await fetch(`${base()}/embed/${id}`);
+  return response.headers.get("content-security-policy")?.includes("'unsafe-eval'") ?? false;
+}
