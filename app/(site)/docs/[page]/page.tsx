@@ -43,7 +43,11 @@ export default async function Guide({ params }: Props) {
           <section key={id} className="prose">
             <h2 id={id} className="scroll-mt-2">
               {title}{" "}
-              <a href={`#${id}`} aria-label={`Address of “${title}”`} className="text-ink-soft no-underline">
+              <a
+                href={`#${id}`}
+                aria-label={`Address of “${title}”`}
+                className="text-table font-normal text-ink-soft no-underline"
+              >
                 #
               </a>
             </h2>

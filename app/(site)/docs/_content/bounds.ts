@@ -42,6 +42,11 @@ export const bounds: DocPage = {
                 "the same where the conductivity varies inside the elements, so that their integrals are estimated",
                 "no",
               ],
+              [
+                "`elements`",
+                "of a network: all elements at their lowest and all at their highest",
+                "where all theirs are",
+              ],
               ["`quadrature`", "the error estimate of a numerical integral", "no"],
               ["`formula-accuracy`", "a published formula and its stated accuracy", "no"],
             ],

@@ -3,17 +3,20 @@ import { authentication } from "./authentication";
 import { batches } from "./batches";
 import { bounds } from "./bounds";
 import { clients } from "./clients";
+import { embedding } from "./embedding";
 import { errors } from "./errors";
 import { fields } from "./fields";
 import { limits } from "./limits";
 import { materials } from "./materials";
 import { media } from "./media";
 import { methods } from "./methods";
+import { networks } from "./networks";
 import { operatingPoint } from "./operating-point";
 import { type DocPage, type Existing, type Group, hrefOf } from "./page";
 import { quantities } from "./quantities";
 import { records } from "./records";
 import { running } from "./running";
+import { sizing } from "./sizing";
 import { spreadsheets } from "./spreadsheets";
 import { start } from "./start";
 import { uncertainty } from "./uncertainty";
@@ -21,7 +24,7 @@ import { versioning } from "./versioning";
 
 /** All pages in the order of the contents. */
 export const GROUPS: readonly Group[] = [
-  { title: "Ways in", pages: [start, clients, spreadsheets, authentication] },
+  { title: "Ways in", pages: [start, clients, spreadsheets, embedding, authentication] },
   {
     title: "One resistance",
     pages: [
@@ -35,9 +38,10 @@ export const GROUPS: readonly Group[] = [
       operatingPoint,
       bounds,
       uncertainty,
+      sizing,
     ],
   },
-  { title: "More than one", pages: [batches, fields] },
+  { title: "More than one", pages: [batches, networks, fields] },
   { title: "What is kept", pages: [materials, records] },
   {
     title: "The protocol",

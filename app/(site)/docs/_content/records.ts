@@ -10,7 +10,7 @@ export const records: DocPage = {
       id: "store",
       title: "Store one",
       blocks: [
-        "A calculation is stored only if the request asks for it:",
+        "A resistance, a sizing, a network or a field solution is stored only if its request asks for it:",
         resistanceBlock(
           origin,
           {

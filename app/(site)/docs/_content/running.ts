@@ -54,6 +54,18 @@ export const running: DocPage = {
       ],
     },
     {
+      id: "people",
+      title: "People and mail",
+      blocks: [
+        "The first administrator is made in a shell. The command prints a link with which to choose a password; it works once.",
+        shell(
+          "shell, while the service runs",
+          ["npm run -s people -- add-admin ada@company.example", "npm run -s people -- list"].join("\n"),
+        ),
+        "Everyone else is invited in the console. Invitations and links for new passwords go out by the mail server of `RHOFORM_SMTP_URL`, from the address in `RHOFORM_MAIL_FROM`. Without them no mail leaves: administrators read the messages in the console and pass the links on.",
+      ],
+    },
+    {
       id: "teams",
       title: "Teams and keys in a shell",
       blocks: [

@@ -19,7 +19,7 @@ export function SearchForm({
         type="search"
         defaultValue={query}
         autoFocus={focus}
-        placeholder="Search the docs"
+        placeholder="Words"
         className="min-h-5.5 w-full min-w-0 rounded border border-edge bg-sheet px-1 text-table medium:min-h-4"
       />
       <button

@@ -25,7 +25,7 @@ export function Dimensions({ entry }: { readonly entry: ShapeEntry }) {
                 <td>
                   <i>{dimension.symbol}</i>
                 </td>
-                <td>
+                <td className="min-w-24">
                   {dimension.label}. {dimension.help} <Allowed dimension={dimension} />
                 </td>
                 <td className="whitespace-nowrap">
@@ -94,7 +94,7 @@ export function Coordinates({ entry }: { readonly entry: ShapeEntry }) {
                 <td>
                   <code>{name}</code>
                 </td>
-                <td>{label}</td>
+                <td className="min-w-16">{label}</td>
                 <td>{start}</td>
                 <td>{end}</td>
                 <td>{role} the flow</td>

@@ -4,13 +4,13 @@ import { Tex } from "../../../_ui/tex";
 
 /** The shape's example as the engine computes it now. */
 export function WorkedExample({ result }: { readonly result: ResistanceResult }) {
-  const { resistance, steps = [], method, cautions } = result;
+  const { resistance, steps = [], method } = result;
   return (
     <>
       <p>
         With the dimensions of the drawing: <strong>{resistance.text}</strong>, between{" "}
-        <span className="font-mono">{exact(resistance.lower)}</span> and{" "}
-        <span className="font-mono">{exact(resistance.upper)}</span>&#8239;Ω. Method {method}, bounds{" "}
+        <span className="font-mono">{digits(resistance.lower)}</span> and{" "}
+        <span className="font-mono">{digits(resistance.upper)}</span>&#8239;Ω. Method {method}, bounds{" "}
         <SiteLink href="/docs/bounds#bases">{resistance.boundsBasis}</SiteLink>,{" "}
         {resistance.proved ? "proved" : "not proved"}.
       </p>
@@ -23,18 +23,11 @@ export function WorkedExample({ result }: { readonly result: ResistanceResult })
           </li>
         ))}
       </ol>
-      {cautions.length > 0 ? (
-        <ul>
-          {cautions.map((text) => (
-            <li key={text}>{text}</li>
-          ))}
-        </ul>
-      ) : null}
     </>
   );
 }
 
-/** All digits that a double holds, with the exponent where the number is long. */
-function exact(value: number): string {
-  return String(Number(value.toPrecision(15)));
+/** Enough digits to see how far the bounds lie apart. */
+function digits(value: number): string {
+  return String(Number(value.toPrecision(12)));
 }
