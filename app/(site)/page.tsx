@@ -16,6 +16,16 @@ const NEXT = [
     text: "Draw any shape with holes and arcs, solve the field on it, and see the bracket close.",
   },
   {
+    href: "/network",
+    title: "Network",
+    text: "The whole current path: bars, joints and braids between nodes, and where the loss is.",
+  },
+  {
+    href: "/calculate/table",
+    title: "Table",
+    text: "Paste or upload up to 10,000 rows; each gets a number or a precise complaint.",
+  },
+  {
     href: "/docs/api",
     title: "API reference",
     text: "Every operation, with calls that can be sent from the page.",
@@ -37,7 +47,7 @@ export default function Home() {
       <LiveShell start={SHELL_START} initial={initial} origin={sharedService().config.origin} />
       <section aria-labelledby="next" className="mt-5 border-t border-rule pt-3">
         <h2 id="next">Where to go next</h2>
-        <ul className="mt-2 grid gap-3 medium:grid-cols-2 wide:grid-cols-4">
+        <ul className="mt-2 grid gap-3 medium:grid-cols-2 wide:grid-cols-3">
           {NEXT.map(({ href, title, text }) => (
             <li key={href}>
               <h3>

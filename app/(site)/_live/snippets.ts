@@ -44,6 +44,23 @@ export function sizingSnippets(origin: string, request: object): readonly Snippe
   });
 }
 
+/** A network: its resistance, and what each element loses. */
+export function networkSnippets(origin: string, request: object): readonly Snippet[] {
+  return snippets(origin, {
+    path: "/networks",
+    body: request,
+    typescript: [
+      "console.log(answer.resistance.text, answer.resistance.lower, answer.resistance.upper);",
+      "for (const { name, current, share } of answer.elements) console.log(name, current, share);",
+    ],
+    python: [
+      'print(answer["resistance"]["text"], answer["resistance"]["lower"], answer["resistance"]["upper"])',
+      'for element in answer["elements"]:',
+      '    print(element["name"], element["current"], element["share"])',
+    ],
+  });
+}
+
 /** A field solution: the call waits for its end as long as the API lets it. */
 export function fieldSnippets(origin: string, request: object, terminals: number): readonly Snippet[] {
   const several = terminals > 2;

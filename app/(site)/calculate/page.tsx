@@ -31,6 +31,14 @@ export default async function CataloguePage({ searchParams }: PageProps) {
         <Link href="/outline" className="link">
           outline
         </Link>
+        . For many at once there is the{" "}
+        <Link href="/calculate/table" className="link">
+          table
+        </Link>
+        , for a whole current path the{" "}
+        <Link href="/network" className="link">
+          network
+        </Link>
         .
       </p>
       <CatalogueSheet sections={sections} start={typeof q === "string" ? q : ""} />

@@ -8,6 +8,7 @@ import { SiteLink } from "./site-link";
 const NAVIGATION = [
   { href: "/calculate", label: "Calculate" },
   { href: "/outline", label: "Outline" },
+  { href: "/network", label: "Network" },
   { href: "/docs", label: "Docs" },
   { href: "/docs/api", label: "API reference" },
 ] as const;

@@ -15,7 +15,7 @@ export type Saving = { readonly kind: "signed-in" } | { readonly kind: "sign-in"
 interface SaveRecordProps {
   readonly saving: Saving;
   /** Operation that stores it. */
-  readonly path: "/resistance" | "/fields";
+  readonly path: "/resistance" | "/fields" | "/networks";
   readonly body: object;
   /** Proposed name of the record. */
   readonly title: string;

@@ -65,9 +65,7 @@ export function ColumnHead({ column, place, choices, taken, onChange, onRemove }
           onChange={(event) => onChange({ unit: event.target.value })}
           className={`${CONTROL} mt-0.5 text-ink-soft`}
         >
-          <option value="">
-            {choice?.kind === "temperature" ? "°C, or in the cell" : "SI, or in the cell"}
-          </option>
+          <option value="">{choice?.kind === "temperature" ? "own, or °C" : "own, or SI"}</option>
           {foreign ? <option value={column.unit}>{column.unit}</option> : null}
           {units.map(({ id, label }) => (
             <option key={id} value={id}>

@@ -18,7 +18,6 @@ interface RunBarProps {
 
 /** Starts and stops the computation, says how far it is, and hands over what came out. */
 export function RunBar({ run, full, open, refused, onStart, onStop, onSave }: RunBarProps) {
-  const first = open === full;
   return (
     <div className="mt-2 border-t border-rule pt-2">
       <div className="flex flex-wrap items-center gap-1">
@@ -29,7 +28,7 @@ export function RunBar({ run, full, open, refused, onStart, onStop, onSave }: Ru
         ) : (
           <Button variant="primary" disabled={open === 0} onClick={onStart}>
             <Play aria-hidden size={14} />
-            {first ? `Compute ${count(full, "row")}` : `Compute the ${count(open, "open row")}`}
+            {startText(full, open)}
           </Button>
         )}
         <Button disabled={full === 0} onClick={onSave}>
@@ -54,6 +53,12 @@ export function RunBar({ run, full, open, refused, onStart, onStop, onSave }: Ru
       ) : null}
     </div>
   );
+}
+
+function startText(full: number, open: number): string {
+  if (full === 0) return "Compute";
+  if (open === full) return `Compute ${count(full, "row")}`;
+  return open === 0 ? "All rows are answered" : `Compute the ${count(open, "open row")}`;
 }
 
 function progressText(run: Run, answered: number, refused: number): string {

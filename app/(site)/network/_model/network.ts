@@ -1,0 +1,115 @@
+/** A network as the page keeps it: everything as it was typed. */
+
+/** What gives an element its resistance. */
+export type Value =
+  | { readonly kind: "resistance"; readonly text: string }
+  /** A shape with the state of its calculation page, behind `/calculate/`: `bar?length=1m&…`. */
+  | { readonly kind: "shape"; readonly address: string };
+
+export interface Element {
+  readonly id: number;
+  readonly name: string;
+  readonly from: string;
+  readonly to: string;
+  readonly value: Value;
+}
+
+export type DriveKind = "none" | "current" | "voltage" | "power";
+
+export interface Network {
+  readonly elements: readonly Element[];
+  readonly ports: readonly [string, string];
+  readonly drive: { readonly kind: DriveKind; readonly text: string };
+  readonly temperature: string;
+}
+
+let lastId = 0;
+
+export function newElement(element: Omit<Element, "id">): Element {
+  return { id: ++lastId, ...element };
+}
+
+const plain = (name: string, from: string, to: string, text: string) =>
+  newElement({ name, from, to, value: { kind: "resistance", text } });
+
+/** What the page starts with: a bolted busbar joint with a braid, at its rated current. */
+export const START: Network = {
+  elements: [
+    plain("bar A", "in", "joint", "42 uohm"),
+    newElement({
+      name: "bar B",
+      from: "in",
+      to: "joint",
+      value: {
+        kind: "shape",
+        address: "bar?length=1.2m&width=50mm&thickness=10mm&material=copper-annealed",
+      },
+    }),
+    plain("bolts", "joint", "lug", "6 uohm"),
+    plain("braid left", "lug", "out", "36 uohm"),
+    plain("braid right", "lug", "out", "38 uohm"),
+  ],
+  ports: ["in", "out"],
+  drive: { kind: "current", text: "630 A" },
+  temperature: "65 degC",
+};
+
+/** Names of all nodes, ports first, in the order of the elements. */
+export function nodeNames({ elements, ports }: Network): readonly string[] {
+  const names = [...ports, ...elements.flatMap(({ from, to }) => [from, to])];
+  return [...new Set(names.map((name) => name.trim()).filter((name) => name !== ""))];
+}
+
+/** A name that no element has yet. */
+export function freeName({ elements }: Network): string {
+  const taken = new Set(elements.map(({ name }) => name));
+  for (let k = elements.length + 1; ; k++) if (!taken.has(`element ${k}`)) return `element ${k}`;
+}
+
+/** A pasted link to a calculation as the part behind `/calculate/`; null for anything else. */
+export function addressOf(text: string): string | null {
+  const match = /^(?:https?:\/\/[^/\s]+)?\/calculate\/([a-z0-9-]+(?:\?[^#\s]*)?)(?:#\S*)?$/.exec(text.trim());
+  return match && !match[1].startsWith("table") ? match[1] : null;
+}
+
+/** Behind the "#" of the address and in this tab's store: JSON without the row ids. */
+export function toText({ elements, ports, drive, temperature }: Network): string {
+  const rows = elements.map(({ name, from, to, value }) => [
+    name,
+    from,
+    to,
+    value.kind === "shape" ? `/calculate/${value.address}` : value.text,
+  ]);
+  return JSON.stringify({ elements: rows, ports, drive, temperature });
+}
+
+/** The inverse; null where the text is none of ours. */
+export function fromText(text: string): Network | null {
+  try {
+    const { elements, ports, drive, temperature } = JSON.parse(text) as {
+      elements: string[][];
+      ports: [string, string];
+      drive: Network["drive"];
+      temperature: string;
+    };
+    const kinds: readonly DriveKind[] = ["none", "current", "voltage", "power"];
+    const texts = [...elements.flat(), ...ports, drive.text, temperature];
+    if (ports.length !== 2 || !kinds.includes(drive.kind)) return null;
+    if (texts.some((entry) => typeof entry !== "string") || elements.length > 10_000) return null;
+    return {
+      elements: elements.map(([name = "", from = "", to = "", value = ""]) =>
+        newElement({ name, from, to, value: readValue(value) }),
+      ),
+      ports: [ports[0], ports[1]],
+      drive: { kind: drive.kind, text: drive.text },
+      temperature,
+    };
+  } catch {
+    return null;
+  }
+}
+
+export function readValue(text: string): Value {
+  const address = addressOf(text);
+  return address === null ? { kind: "resistance", text } : { kind: "shape", address };
+}

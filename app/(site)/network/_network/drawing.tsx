@@ -1,0 +1,196 @@
+"use client";
+
+import { useMemo } from "react";
+import { formatQuantity } from "@/lib/engine/quantity/format-quantity";
+import type { NetworkResult } from "@/lib/engine/network/result-schema";
+import { layOut, type PlacedElement } from "../_model/layout";
+import type { Network } from "../_model/network";
+
+interface DrawingProps {
+  readonly network: Network;
+  readonly result: NetworkResult | undefined;
+  readonly stale: boolean;
+  readonly focused: number | null;
+  readonly onPick: (id: number) => void;
+}
+
+/** Beyond so many elements a drawing says nothing any more. */
+export const MOST_DRAWN = 120;
+/** Beyond so many, labels would cover each other. */
+const MOST_LABELLED = 40;
+const BODY = { length: 46, width: 15 };
+
+/** The network with its answers: voltages at the nodes, current and share of the loss at the elements. */
+export function NetworkDrawing({ network, result, stale, focused, onPick }: DrawingProps) {
+  const layout = useMemo(() => layOut(network), [network]);
+  const answers = useMemo(
+    () => new Map(result?.elements.map((element) => [element.name, element]) ?? []),
+    [result],
+  );
+  const voltages = useMemo(
+    () => new Map(result?.nodes.map(({ name, voltage }) => [name, voltage]) ?? []),
+    [result],
+  );
+  const labelled = network.elements.length <= MOST_LABELLED;
+  const largest = Math.max(1e-300, ...(result?.elements.map(({ current }) => Math.abs(current)) ?? []));
+  return (
+    <div
+      role="group"
+      tabIndex={0}
+      aria-label="Drawing of the network"
+      className="overflow-x-auto rounded border border-rule bg-sheet"
+    >
+      <svg
+        role="img"
+        aria-label={describe(network, result)}
+        viewBox={`0 0 ${layout.width} ${layout.height}`}
+        style={{ minWidth: Math.min(layout.width, 900), maxHeight: "34rem" }}
+        className={`mx-auto block w-full font-sans ${stale ? "opacity-60" : ""}`}
+        fontSize={13}
+      >
+        {layout.elements.map((placed) => {
+          const element = network.elements[placed.index];
+          const answer = answers.get(element.name.trim());
+          return (
+            <Branch
+              key={placed.id}
+              placed={placed}
+              name={element.name}
+              labelled={labelled}
+              focused={placed.id === focused}
+              current={answer?.current}
+              share={answer?.share}
+              weight={answer ? Math.abs(answer.current) / largest : 0}
+              onPick={() => onPick(placed.id)}
+            />
+          );
+        })}
+        {layout.nodes.map(({ name, x, y }, k) => {
+          const voltage = voltages.get(name);
+          const look = k === 0 ? "fill-copper" : k === 1 ? "fill-verdigris" : "fill-ink";
+          return (
+            <g key={name}>
+              <circle cx={x} cy={y} r={k < 2 ? 7 : 4.5} className={look} />
+              {labelled || k < 2 ? <Label x={x} y={y - 14} text={name} strong /> : null}
+              {voltage !== undefined && (labelled || k < 2) ? (
+                <Label x={x} y={y + 23} text={formatQuantity(voltage, "volt", { digits: 4 })} mono />
+              ) : null}
+            </g>
+          );
+        })}
+      </svg>
+    </div>
+  );
+}
+
+interface BranchProps {
+  readonly placed: PlacedElement;
+  readonly name: string;
+  readonly labelled: boolean;
+  readonly focused: boolean;
+  readonly current: number | undefined;
+  readonly share: number | undefined;
+  /** Its current over the largest. */
+  readonly weight: number;
+  readonly onPick: () => void;
+}
+
+function Branch({ placed, name, labelled, focused, current, share, weight, onPick }: BranchProps) {
+  const { from, to, bend } = placed;
+  const [dx, dy] = [to.x - from.x, to.y - from.y];
+  const length = Math.hypot(dx, dy) || 1;
+  const [nx, ny] = [-dy / length, dx / length];
+  const [mx, my] = [(from.x + to.x) / 2 + nx * bend, (from.y + to.y) / 2 + ny * bend];
+  const [cx, cy] = [(from.x + to.x) / 2 + 2 * nx * bend, (from.y + to.y) / 2 + 2 * ny * bend];
+  const angle = (Math.atan2(dy, dx) * 180) / Math.PI;
+  const upright = angle > 90 || angle <= -90 ? angle + 180 : angle;
+  const width = 1.2 + 2.3 * weight;
+  const backwards = (current ?? 0) < 0;
+  return (
+    <g onClick={onPick} className="cursor-pointer">
+      <path
+        d={`M${from.x} ${from.y}Q${cx} ${cy} ${to.x} ${to.y}`}
+        fill="none"
+        strokeWidth={width}
+        className="stroke-ink"
+      />
+      <g transform={`translate(${mx} ${my}) rotate(${angle})`}>
+        <rect
+          x={-BODY.length / 2}
+          y={-BODY.width / 2}
+          width={BODY.length}
+          height={BODY.width}
+          strokeWidth={focused ? 3 : 1.4}
+          className={focused ? "fill-sheet stroke-verdigris" : "fill-sheet stroke-copper"}
+        />
+        {share ? (
+          <rect
+            x={-BODY.length / 2}
+            y={-BODY.width / 2}
+            width={BODY.length * share}
+            height={BODY.width}
+            className="fill-copper"
+          />
+        ) : null}
+        {current ? (
+          <path d={backwards ? "M-36 -5L-44 0L-36 5Z" : "M36 -5L44 0L36 5Z"} className="fill-ink" />
+        ) : null}
+      </g>
+      {labelled ? (
+        <g transform={`translate(${mx} ${my}) rotate(${Math.abs(upright) > 60 ? 0 : upright})`}>
+          <Label
+            x={Math.abs(upright) > 60 ? 34 : 0}
+            y={Math.abs(upright) > 60 ? -3 : -14}
+            text={name}
+            start={Math.abs(upright) > 60}
+          />
+          {current !== undefined && share !== undefined ? (
+            <Label
+              x={Math.abs(upright) > 60 ? 34 : 0}
+              y={Math.abs(upright) > 60 ? 13 : 23}
+              text={`${formatQuantity(Math.abs(current), "ampere", { digits: 4 })} · ${percent(share)}`}
+              start={Math.abs(upright) > 60}
+              mono
+            />
+          ) : null}
+        </g>
+      ) : null}
+    </g>
+  );
+}
+
+interface LabelProps {
+  readonly x: number;
+  readonly y: number;
+  readonly text: string;
+  readonly strong?: boolean;
+  readonly mono?: boolean;
+  readonly start?: boolean;
+}
+
+/** A text with the ground around it cleared of lines. */
+function Label({ x, y, text, strong = false, mono = false, start = false }: LabelProps) {
+  return (
+    <text
+      x={x}
+      y={y}
+      textAnchor={start ? "start" : "middle"}
+      paintOrder="stroke"
+      strokeWidth={4}
+      strokeLinejoin="round"
+      className={`fill-ink stroke-sheet ${strong ? "font-semibold" : ""} ${mono ? "font-mono text-[12px]" : ""}`}
+    >
+      {text.length > 26 ? `${text.slice(0, 25)}…` : text}
+    </text>
+  );
+}
+
+export function percent(share: number): string {
+  if (share === 0) return "0 %";
+  return share < 0.0005 ? "< 0.1 %" : `${(100 * share).toFixed(1)} %`;
+}
+
+function describe({ elements, ports }: Network, result: NetworkResult | undefined): string {
+  const start = `Network of ${elements.length} elements between ${ports[0]} and ${ports[1]}.`;
+  return result ? `${start} Resistance ${result.resistance.text}.` : start;
+}

@@ -1,0 +1,132 @@
+"use client";
+
+import { useEffect, useMemo, useState } from "react";
+import useSWR from "swr";
+import type { NetworkResult } from "@/lib/engine/network/result-schema";
+import type { ProblemShown } from "../../../_ui/problem-notice";
+import { ApiProblem, postApi } from "../../_live/call-api";
+import { networkBody, type ShapeRequest } from "../_model/body";
+import type { Network } from "../_model/network";
+
+/** How long typing may pause before a call is made, ms. */
+const PAUSE_MS = 350;
+
+export interface Solution {
+  readonly body: Readonly<Record<string, unknown>> | null;
+  /** Of what was typed last, or of what stood there before. */
+  readonly result: NetworkResult | undefined;
+  readonly stale: boolean;
+  readonly problem: ProblemShown | null;
+  /** Complaints by element, by what they concern. */
+  readonly complaints: ReadonlyMap<number, Complaints>;
+  readonly portComplaints: readonly string[];
+  readonly requests: ReadonlyMap<string, ShapeRequest>;
+}
+
+export interface Complaints {
+  readonly name?: string;
+  readonly between?: string;
+  readonly value?: string;
+}
+
+/** Solves the network whenever it changes; requests of shapes are read from their addresses first. */
+export function useSolution(network: Network): Solution {
+  const requests = useRequests(network);
+  const body = useMemo(() => networkBody(network, requests), [network, requests]);
+  const text = body === null ? null : JSON.stringify(body);
+  const [asked, setAsked] = useState<string | null>(null);
+  useEffect(() => {
+    const timer = setTimeout(() => setAsked(text), PAUSE_MS);
+    return () => clearTimeout(timer);
+  }, [text]);
+  const { data, error, isLoading } = useSWR<NetworkResult, unknown>(
+    asked === null ? null : ["/networks", asked],
+    ([path, wanted]: [string, string]) => postApi<NetworkResult>(path, wanted),
+    { keepPreviousData: true, revalidateOnFocus: false, shouldRetryOnError: false },
+  );
+  const problem = error === undefined ? null : shown(error);
+  const sorted = useMemo(() => sortComplaints(problem), [problem]);
+  return {
+    body,
+    result: data,
+    stale: isLoading || asked !== text || problem !== null,
+    problem: sorted.rest,
+    complaints: sorted.complaints,
+    portComplaints: sorted.ports,
+    requests,
+  };
+}
+
+function shown(error: unknown): ProblemShown {
+  if (error instanceof ApiProblem) return error.problem;
+  return {
+    title: "The service cannot be reached",
+    detail: "The network is still here. Try again in a moment.",
+  };
+}
+
+const NOTHING: ReadonlyMap<number, Complaints> = new Map();
+
+/** Complaints that have a place on the page go there; what is left is told as a whole. */
+function sortComplaints(problem: ProblemShown | null): {
+  readonly complaints: ReadonlyMap<number, Complaints>;
+  readonly ports: readonly string[];
+  readonly rest: ProblemShown | null;
+} {
+  const errors = problem?.errors ?? [];
+  if (!problem || errors.length === 0) return { complaints: NOTHING, ports: [], rest: problem };
+  const complaints = new Map<number, Complaints>();
+  const ports: string[] = [];
+  const rest: { pointer?: string; detail: string }[] = [];
+  for (const { pointer = "#", detail } of errors) {
+    const [, index, member, ...path] =
+      /^#\/elements\/(\d+)(?:\/(name|between|resistance|request))?(.*)$/.exec(pointer) ?? [];
+    if (index === undefined) {
+      if (pointer.startsWith("#/ports")) ports.push(detail);
+      else rest.push({ pointer, detail });
+      continue;
+    }
+    const place = member === "name" || member === "between" ? member : "value";
+    const within = path.join("").split("/").pop() ?? "";
+    const known = complaints.get(Number(index)) ?? {};
+    if (known[place] === undefined) {
+      complaints.set(Number(index), { ...known, [place]: `${within} ${detail}`.trim() });
+    }
+  }
+  return {
+    complaints,
+    ports,
+    rest: rest.length > 0 ? { ...problem, detail: undefined, errors: rest } : null,
+  };
+}
+
+/** What the addresses of shapes ask for, read by the service; kept once known. */
+function useRequests(network: Network): ReadonlyMap<string, ShapeRequest> {
+  const [known, setKnown] = useState<ReadonlyMap<string, ShapeRequest>>(new Map());
+  const missing = network.elements.flatMap(({ value }) =>
+    value.kind === "shape" && !known.has(value.address) ? [value.address] : [],
+  );
+  const wanted = [...new Set(missing)].join("\n");
+  useEffect(() => {
+    if (wanted === "") return;
+    let current = true;
+    void Promise.all(wanted.split("\n").map(readRequest)).then((found) => {
+      if (current) setKnown((before) => new Map([...before, ...found]));
+    });
+    return () => {
+      current = false;
+    };
+  }, [wanted]);
+  return known;
+}
+
+async function readRequest(address: string): Promise<readonly [string, ShapeRequest]> {
+  const [shape, query = ""] = address.split("?", 2);
+  try {
+    const response = await fetch(`/network/request?shape=${shape}&${query}`);
+    if (response.ok) return [address, await response.json()];
+  } catch {
+    // Told by the API, which gets the shape's name alone.
+  }
+  return [address, { title: shape, request: { shape, dimensions: {} } }];
+}
