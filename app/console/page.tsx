@@ -1,6 +1,10 @@
-import { redirect } from "next/navigation";
+import type { Metadata } from "next";
+import { requireSession } from "./_shell/require-session";
+import { OverviewPage } from "./_overview/overview-page";
 
-/** The first thing to see. */
-export default function Console(): never {
-  redirect("/console/account");
+export const metadata: Metadata = { title: "Overview" };
+
+export default async function Overview() {
+  await requireSession("overview.view");
+  return <OverviewPage />;
 }

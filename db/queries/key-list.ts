@@ -57,7 +57,7 @@ export function pageOfKeys(db: Database, filter: KeyFilter): { rows: ListedKey[]
     })
     .from(keys)
     .innerJoin(teams, eq(teams.id, keys.teamId))
-    .leftJoin(rateLimits, eq(rateLimits.key, sql`'month:' || ${keys.id} || ':' || ${month}`))
+    .leftJoin(rateLimits, eq(rateLimits.key, sql`'month:key:' || ${keys.id} || ':' || ${month}`))
     .where(
       and(
         inArray(keys.teamId, [...teamIds]),
@@ -97,7 +97,7 @@ export function keysInNeed(
     .select({ ...keyColumns, teamName: teams.name, monthUsed: sql<number>`${used}` })
     .from(keys)
     .innerJoin(teams, eq(teams.id, keys.teamId))
-    .leftJoin(rateLimits, eq(rateLimits.key, sql`'month:' || ${keys.id} || ':' || ${month}`))
+    .leftJoin(rateLimits, eq(rateLimits.key, sql`'month:key:' || ${keys.id} || ':' || ${month}`))
     .where(
       and(
         inArray(keys.teamId, [...teamIds]),
@@ -114,13 +114,13 @@ export function keysInNeed(
     .all();
 }
 
-/** What a caller has used of a month, reserved computations included. */
-export function monthUsed(db: Database, subject: string, month: string): number {
+/** What a key has used of a month, reserved computations included. */
+export function monthUsed(db: Database, keyId: string, month: string): number {
   return (
     db
       .select({ points: rateLimits.points })
       .from(rateLimits)
-      .where(eq(rateLimits.key, `month:${subject}:${month}`))
+      .where(eq(rateLimits.key, `month:key:${keyId}:${month}`))
       .get()?.points ?? 0
   );
 }

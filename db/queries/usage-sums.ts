@@ -209,7 +209,8 @@ export function latencyBuckets(
 ): { at: number; bucket: number; requests: number }[] {
   const table = usageHourLatencies;
   const at = {
-    all: sql<number>`0`,
+    // Not a bare 0: ORDER BY would take it for a column's number.
+    all: sql<number>`${table.hour} * 0`,
     day: sql<number>`${table.hour} / 24`,
     hour: sql<number>`${table.hour}`,
   }[by];

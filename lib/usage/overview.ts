@@ -109,7 +109,7 @@ function failedCalls(total: number, more: boolean): Attention[] {
     {
       kind: "failed",
       text: `${calls} failed in the last 24 hours by a fault of the service.`,
-      href: "/console/usage?statuses=5xx",
+      href: "/console/usage?requests-statuses=5xx",
     },
   ];
 }

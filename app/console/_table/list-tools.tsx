@@ -15,12 +15,14 @@ interface ListToolsProps<Row> {
   readonly searches?: string;
   /** Path below /api/console that answers the list as CSV with `csv=1`. */
   readonly csv?: string;
+  /** What the page adds to the list's own query: `from=…&to=…`. */
+  readonly more?: string;
   /** The list's own filters. */
   readonly children?: ReactNode;
 }
 
 /** Search, filters, columns and export above a list. */
-export function ListTools<Row>({ state, columns, searches, csv, children }: ListToolsProps<Row>) {
+export function ListTools<Row>({ state, columns, searches, csv, more, children }: ListToolsProps<Row>) {
   return (
     <div className="mb-1.5 flex flex-wrap items-end gap-1.5">
       {searches ? <SearchBox state={state} searches={searches} /> : null}
@@ -34,7 +36,7 @@ export function ListTools<Row>({ state, columns, searches, csv, children }: List
       <ColumnChoice state={state} columns={columns} />
       {csv ? (
         <a
-          href={`/api/console/${csv}?${exported(state.query)}`}
+          href={`/api/console/${csv}?${exported(state.query, more)}`}
           download
           className="inline-flex min-h-5.5 items-center gap-1 rounded border border-transparent px-1 text-table font-medium text-ink-soft hover:border-edge hover:text-ink medium:min-h-5"
         >
@@ -51,8 +53,8 @@ function cleared(state: ListState): Record<string, string> {
   return Object.fromEntries(names.map((name) => [name, ""]));
 }
 
-function exported(query: string): string {
-  const params = new URLSearchParams(query);
+function exported(query: string, more = ""): string {
+  const params = new URLSearchParams(`${query}&${more}`);
   params.delete("page");
   params.delete("size");
   params.set("csv", "1");
@@ -123,13 +125,12 @@ export function ListFilter({ state, name, label, options, all = "All" }: FilterP
   );
 }
 
-function ColumnChoice<Row>({
-  state,
-  columns,
-}: {
+interface ColumnChoiceProps<Row> {
   readonly state: ListState;
   readonly columns: readonly ListColumn<Row>[];
-}) {
+}
+
+function ColumnChoice<Row>({ state, columns }: ColumnChoiceProps<Row>) {
   const free = columns.filter(({ fixed }) => !fixed);
   if (free.length === 0) return null;
   return (
@@ -147,22 +148,27 @@ function ColumnChoice<Row>({
           aria-label="Columns"
           className="z-20 flex max-h-[60dvh] flex-col overflow-y-auto rounded border border-ink bg-sheet px-1.5 py-1 text-table outline-none"
         >
-          {free.map((column) => (
-            <label key={column.id} className="flex min-h-4 cursor-pointer items-center gap-1">
-              <input
-                type="checkbox"
-                checked={visible(shownFrom(column, state.columns))}
-                onChange={(event) =>
-                  state.change({ columns: withChoice(column, state.columns, event.target.checked) })
-                }
-              />
-              {column.title}
-            </label>
-          ))}
+          <ColumnBoxes state={state} columns={free} />
         </Popover.Content>
       </Popover.Portal>
     </Popover.Root>
   );
+}
+
+/** Made only once the choice is open, and so in the browser: it asks how wide the window is. */
+function ColumnBoxes<Row>({ state, columns }: ColumnChoiceProps<Row>) {
+  return columns.map((column) => (
+    <label key={column.id} className="flex min-h-4 cursor-pointer items-center gap-1">
+      <input
+        type="checkbox"
+        checked={visible(shownFrom(column, state.columns))}
+        onChange={(event) =>
+          state.change({ columns: withChoice(column, state.columns, event.target.checked) })
+        }
+      />
+      {column.title}
+    </label>
+  ));
 }
 
 /** Whether a column is to be seen at the width that the window has now. */
