@@ -1,5 +1,6 @@
 "use client";
 
+import type { ReactNode } from "react";
 import { Button } from "../../../../_ui/button";
 import { superscript } from "../../../../_ui/plot/axis";
 import { saveFile } from "../../../../_ui/picture-file";
@@ -7,13 +8,14 @@ import { Toggle } from "../../../../_ui/toggle";
 import { useToast } from "../../../../_ui/toast";
 import { engineering } from "../../../calculate/_calculator/answer/engineering";
 import { callApi } from "../../../_live/call-api";
-import type { FieldMapView, RasterView } from "../../_model/field-view";
+import type { RasterView } from "../../_model/field-view";
+import type { LegibleMap } from "../use-field-map";
 import { MOST_OPACITY, topDensity } from "./raster-image";
 import type { Shown } from "./shown";
 
 interface PictureBarProps {
   readonly id: string;
-  readonly map: FieldMapView;
+  readonly map: LegibleMap;
   readonly axisymmetric: boolean;
   readonly shown: Shown;
   readonly setShown: (shown: Shown) => void;
@@ -24,8 +26,6 @@ export function PictureBar({ id, map, axisymmetric, shown, setShown }: PictureBa
   const toast = useToast();
   const unit = axisymmetric ? "A/m²" : "A/m";
   const top = topDensity(map.raster);
-  const levels = map.equipotentials.length + 1;
-  const current = map.currentBetweenStreamlines;
 
   async function save(kind: "svg" | "png" | "json" | "csv") {
     try {
@@ -50,7 +50,7 @@ export function PictureBar({ id, map, axisymmetric, shown, setShown }: PictureBa
         <Toggle
           label={
             <Legend mark="stroke-ink" dash={undefined}>
-              Equipotentials, every {Number((100 / levels).toPrecision(3))} % of the voltage
+              Equipotentials, every {Number((100 * map.voltageStep).toPrecision(3))} % of the voltage
             </Legend>
           }
           checked={shown.equipotentials}
@@ -59,7 +59,7 @@ export function PictureBar({ id, map, axisymmetric, shown, setShown }: PictureBa
         <Toggle
           label={
             <Legend mark="stroke-verdigris" dash="6 3">
-              Stream lines, {engineering(current, "A")} between two at 1 V
+              Stream lines, {engineering(map.currentBetweenStreamlines, "A")} between two at 1 V
             </Legend>
           }
           checked={shown.streamlines}
@@ -106,7 +106,7 @@ const FILES = {
 interface LegendProps {
   readonly mark: string;
   readonly dash: string | undefined;
-  readonly children: React.ReactNode;
+  readonly children: ReactNode;
 }
 
 function Legend({ mark, dash, children }: LegendProps) {
