@@ -1,0 +1,125 @@
+"use client";
+
+import { useState } from "react";
+import { CONTROL } from "../../../_ui/field";
+import { LocalTime } from "../../../_ui/local-time";
+import { EmptyState } from "../../../_ui/states";
+import { PageHead } from "../../_parts/page-head";
+import type { TeamChoice } from "../../_shell/team-choices";
+import { useConsole } from "../../_shell/use-console";
+import type { ListColumn, ListPage } from "../../_table/column";
+import { ConsoleTable } from "../../_table/console-table";
+import { ListFilter, ListTools } from "../../_table/list-tools";
+import { type ListState, useListState } from "../../_table/use-list-state";
+import { ActDialog } from "./act-dialog";
+import { ACT_KINDS, actionWords, ACTOR_KINDS, type ActShown } from "./activity-words";
+
+const FILTERS = ["team", "kind", "actor", "subject", "from", "to"] as const;
+
+interface ActivityListProps {
+  readonly teams: readonly TeamChoice[];
+  /** Whether everything is shown, or the acts of the reader's teams. */
+  readonly all: boolean;
+}
+
+/** Who did what, newest first; nothing in it can be changed or removed. */
+export function ActivityList({ teams, all }: ActivityListProps) {
+  const state = useListState({ sort: "-at", filters: FILTERS });
+  const { data, error, isLoading, mutate } = useConsole<ListPage<ActShown>>(`activity?${state.query}`, {
+    refreshInterval: 30_000,
+  });
+  const [open, setOpen] = useState<ActShown | null>(null);
+  const columns = columnsFor(setOpen);
+
+  return (
+    <>
+      <PageHead title="Activity">
+        {all ? "Every change, by whom and from where." : "Changes of your teams, and your own."} Entries
+        cannot be altered.
+      </PageHead>
+      <ListTools state={state} columns={columns} searches="who, what, id" csv="activity">
+        {teams.length > 1 ? (
+          <ListFilter
+            state={state}
+            name="team"
+            label="Team"
+            options={teams.map(({ id, name }) => ({ value: id, label: name }))}
+          />
+        ) : null}
+        <ListFilter state={state} name="kind" label="About" options={ACT_KINDS} />
+        <ListFilter state={state} name="actor" label="By" options={ACTOR_KINDS} />
+        <DayFilter state={state} name="from" label="From (UTC)" />
+        <DayFilter state={state} name="to" label="To (UTC)" />
+      </ListTools>
+      <ConsoleTable
+        caption="Activity"
+        columns={columns}
+        state={state}
+        data={data}
+        error={error}
+        busy={isLoading}
+        onRetry={() => void mutate()}
+        rowKey={({ id }) => id}
+        empty={
+          <EmptyState title="Nothing yet">Changes are listed here as soon as somebody makes one.</EmptyState>
+        }
+      />
+      {open ? <ActDialog act={open} onClose={() => setOpen(null)} /> : null}
+    </>
+  );
+}
+
+function DayFilter({
+  state,
+  name,
+  label,
+}: {
+  readonly state: ListState;
+  readonly name: string;
+  readonly label: string;
+}) {
+  return (
+    <label className="block text-table">
+      <span className="block text-small text-ink-soft">{label}</span>
+      <input
+        type="date"
+        value={state.filter(name)}
+        onChange={(event) => state.change({ filters: { [name]: event.target.value } })}
+        className={`${CONTROL} max-w-20`}
+      />
+    </label>
+  );
+}
+
+function columnsFor(onOpen: (act: ActShown) => void): readonly ListColumn<ActShown>[] {
+  return [
+    { id: "at", title: "When", sortable: true, fixed: true, cell: ({ at }) => <LocalTime at={at} /> },
+    {
+      id: "actor",
+      title: "Who",
+      fixed: true,
+      cell: ({ actor }) => (
+        <>
+          {actor.name}
+          {actor.kind === "key" ? <span className="text-ink-soft"> (key)</span> : null}
+        </>
+      ),
+    },
+    {
+      id: "action",
+      title: "What",
+      fixed: true,
+      cell: (act) => (
+        <button type="button" onClick={() => onOpen(act)} className="link cursor-pointer rounded text-start">
+          {actionWords(act.action)}
+          {act.subject.id === act.actor.id ? null : (
+            <span className="[overflow-wrap:anywhere]"> {act.subject.name ?? act.subject.id}</span>
+          )}
+        </button>
+      ),
+    },
+    { id: "team", title: "Team", from: "medium", cell: ({ team }) => team?.name ?? "" },
+    { id: "address", title: "From", from: "wide", cell: ({ address }) => <code>{address ?? ""}</code> },
+    { id: "subject", title: "Id", from: "extra", cell: ({ subject }) => <code>{subject.id}</code> },
+  ];
+}
