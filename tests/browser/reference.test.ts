@@ -40,6 +40,21 @@ describe("/docs/api", () => {
     await server.stop();
   });
 
+  it("takes the key that was typed on the start page, and it stays in the browser", async () => {
+    const server = await startServer();
+    const { key } = server.issue();
+    const { page, requests, close } = await visit("/docs/start");
+    await page.getByLabel("Your key").fill(key);
+    await page.getByText(`export RHOFORM_KEY=${key}`).waitFor();
+    await page.goto(`${base()}/docs/api#tag/resistance/POST/resistance`);
+    const token = page.getByPlaceholder("Token").first();
+    await token.waitFor({ timeout: 30_000 });
+    expect(await token.inputValue()).toBe(key);
+    expect(requests.filter((url) => url.includes(key))).toEqual([]);
+    await close();
+    await server.stop();
+  });
+
   // The package's own markup has faults of structure that we cannot mend; its colours are ours.
   it.each(["light", "dark"] as const)("has the contrast of our colours in %s", async (colorScheme) => {
     const { page, close } = await visit("/docs/api", { colorScheme });

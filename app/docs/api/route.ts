@@ -2,6 +2,7 @@ import { readFile } from "node:fs/promises";
 import { join } from "node:path";
 import { ApiReference } from "@scalar/nextjs-api-reference";
 import type { NextRequest } from "next/server";
+import { KEY_PLACE } from "../../_ui/docs-key";
 import { THEME_COOKIE, parseTheme } from "../../_ui/theme";
 import { referenceScript } from "./reference-script";
 
@@ -42,6 +43,8 @@ export async function GET(request: NextRequest): Promise<Response> {
     .replace("<body>", `<body>${HEADER}`)
     // In the place where the script mounts its own: the page has one first heading, before and after.
     .replace('<div id="app"></div>', '<div id="app"><h1>Rhoform API reference</h1></div>')
+    .replace("Scalar.createApiReference(", "createWithKey(Scalar.createApiReference, ")
+    .replace("</header>", `</header><script>${WITH_KEY}</script>`)
     .replaceAll("<script", `<script nonce="${nonce}"`);
   return new Response(html, {
     headers: { "Content-Type": "text/html; charset=utf-8", "Cache-Control": "no-store" },
@@ -56,6 +59,15 @@ const HEADER = `
     </header>
     <noscript><p class="frame-note">The interactive reference needs scripts. The same contract is the
       <a href="/api/v1/openapi.json">OpenAPI document</a>.</p></noscript>`;
+
+/** The key that the reader typed on the start page, from this tab's own storage: it is in no answer of the server. */
+const WITH_KEY = `
+function createWithKey(create, place, configuration) {
+  let key = null;
+  try { key = sessionStorage.getItem("${KEY_PLACE}"); } catch { /* Storage may be forbidden. */ }
+  if (key) configuration.authentication.securitySchemes = { key: { token: key } };
+  return create(place, configuration);
+}`;
 
 const FRAME_CSS = `
 @font-face { font-family: "Spline Sans"; font-weight: 300 700; font-display: swap;

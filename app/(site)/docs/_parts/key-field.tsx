@@ -2,9 +2,8 @@
 
 import { useId, useState, useSyncExternalStore } from "react";
 import { CodeBlock } from "../../../_ui/code-block";
+import { KEY_PLACE } from "../../../_ui/docs-key";
 
-/** Kept for this tab of the browser alone, and gone with it; the reference takes it from here too. */
-const PLACE = "rhoform-docs-key";
 const CHANGED = "rhoform-docs-key-changed";
 const KEY = /^rho_[A-Za-z0-9_-]+$/;
 
@@ -15,7 +14,7 @@ function subscribe(listener: () => void): () => void {
 
 function read(): string {
   try {
-    return sessionStorage.getItem(PLACE) ?? "";
+    return sessionStorage.getItem(KEY_PLACE) ?? "";
   } catch {
     // Storage may be forbidden; then the field forgets with the page.
     return "";
@@ -34,8 +33,8 @@ export function KeyField() {
     setTyped(value);
     if (value !== "" && !KEY.test(value)) return;
     try {
-      if (value === "") sessionStorage.removeItem(PLACE);
-      else sessionStorage.setItem(PLACE, value);
+      if (value === "") sessionStorage.removeItem(KEY_PLACE);
+      else sessionStorage.setItem(KEY_PLACE, value);
       window.dispatchEvent(new Event(CHANGED));
     } catch {
       // See above.
