@@ -17,7 +17,8 @@ export interface MaterialRow {
   readonly retiredAt: number | null;
 }
 
-const columns = {
+/** What is read of a version, joined with its material and team. */
+export const materialColumns = {
   id: materials.id,
   teamId: materials.teamId,
   team: teams.slug,
@@ -32,7 +33,7 @@ const columns = {
 export function currentMaterial(db: Database, teamId: string, id: string): MaterialRow | undefined {
   return prepared(db, "materials.current", (db) =>
     db
-      .select(columns)
+      .select(materialColumns)
       .from(materials)
       .innerJoin(teams, eq(teams.id, materials.teamId))
       .innerJoin(
@@ -52,7 +53,7 @@ export function materialVersion(
   version: number,
 ): MaterialRow | undefined {
   return db
-    .select(columns)
+    .select(materialColumns)
     .from(materials)
     .innerJoin(teams, eq(teams.id, materials.teamId))
     .innerJoin(materialVersions, eq(materialVersions.materialId, materials.id))
@@ -63,7 +64,7 @@ export function materialVersion(
 /** Materials of a team that are in use, oldest first. */
 export function listMaterials(db: Database, teamId: string, limit: number, after?: Mark): MaterialRow[] {
   return db
-    .select(columns)
+    .select(materialColumns)
     .from(materials)
     .innerJoin(teams, eq(teams.id, materials.teamId))
     .innerJoin(
