@@ -20,12 +20,17 @@ await build({
 
 await build({
   absWorkingDir: ROOT,
-  entryPoints: { v1: "app/embed/_loader/main.ts" },
+  entryPoints: {
+    v1: "app/embed/_loader/main.ts",
+    "react-example": "sdk/typescript/examples/embed-react.tsx",
+  },
   outdir: "dist/embed",
   bundle: true,
   minify: true,
   platform: "browser",
   format: "iife",
+  jsx: "automatic",
+  define: { "process.env.NODE_ENV": '"production"' },
   target: "es2022",
   charset: "utf8",
   logLevel: "warning",

@@ -15,7 +15,8 @@ export async function startHost(): Promise<HostServer> {
   const pages = new Map<string, { body: string; headers: Readonly<Record<string, string>> }>();
   const server = createServer((request: IncomingMessage, response: ServerResponse) => {
     const page = pages.get((request.url ?? "").split("?")[0]);
-    if (!page) return void response.writeHead(404).end();
+    // A browser asks for an icon by itself.
+    if (!page) return void response.writeHead(request.url === "/favicon.ico" ? 204 : 404).end();
     response.writeHead(200, { "Content-Type": "text/html; charset=utf-8", ...page.headers }).end(page.body);
   });
   await new Promise<void>((resolve) => server.listen(0, resolve));
