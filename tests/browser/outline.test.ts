@@ -1,8 +1,12 @@
+import { execFile } from "node:child_process";
+import { promisify } from "node:util";
 import AxeBuilder from "@axe-core/playwright";
 import type { Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
-import { closeBrowser } from "./browser";
+import { base, closeBrowser } from "./browser";
 import { type Bench, RESISTANCE, startBench } from "./calculation";
+
+const run = promisify(execFile);
 
 let bench: Bench;
 beforeAll(async () => {
@@ -128,7 +132,7 @@ describe("an outline", () => {
 
   it("says at the place what is wrong, waits out a limit, and takes JSON", async () => {
     const { page, close } = await bench.open("/outline");
-    await page.getByRole("button", { name: "JSON" }).click();
+    await page.getByRole("button", { name: "JSON", exact: true }).click();
     await page.getByRole("textbox", { name: "JSON" }).fill('{"outer": [[0, 0], [1]]}');
     await page.getByRole("button", { name: "Take over" }).click();
     await page.getByText("#/outer/1", { exact: true }).waitFor();
@@ -178,6 +182,25 @@ describe("an outline", () => {
     expect(await page.getByTestId("matrix").locator("tbody tr").count()).toBe(3);
     expect(refused).toBe(2);
     await close();
+  });
+
+  it("gives calls that work elsewhere", async () => {
+    const { page, close } = await bench.open("/outline");
+    const codes: string[] = [];
+    for (const tab of ["curl", "Python"]) {
+      await page.getByRole("tab", { name: tab }).click();
+      codes.push((await page.locator("section[aria-labelledby=elsewhere] pre").textContent()) ?? "");
+    }
+    await close();
+    // The page tells the address of the configuration; the test's server may be reached by another name.
+    const [curl, python] = codes.map((code) => code.replaceAll(/https?:\/\/[^/"' ]+(?=\/api\/v1)/g, base()));
+    const env = { ...process.env, RHOFORM_KEY: bench.key, PYTHONIOENCODING: "utf-8" };
+    const answer = JSON.parse((await run("bash", ["-c", curl], { env })).stdout);
+    expect(answer.result.resistance.text).toBe("327.94\u2009Ω");
+    const { lower, upper } = answer.result.resistance;
+    expect((await run("python3", ["-c", python], { env })).stdout.trim()).toBe(
+      `327.94\u2009Ω ${lower} ${upper}`,
+    );
   });
 
   it("closes its bracket live and can be stopped", async () => {

@@ -28,7 +28,6 @@ export function SolvePanel({ solution, body, className }: SolvePanelProps) {
   const busy =
     phase === "starting" || phase === "running" || (trouble?.kind === "wait" && trouble.seconds !== null);
   const current = solution.body === body;
-  const first = useFirstWidth(solution);
   const { resistance, pairs } = field?.result ?? {};
   const asked = solution.body === null ? undefined : (JSON.parse(solution.body) as { accuracy: number });
   return (
@@ -48,7 +47,11 @@ export function SolvePanel({ solution, body, className }: SolvePanelProps) {
         ) : null}
       </div>
       {busy && field?.progress ? (
-        <ClosingBar progress={field.progress} first={first} goal={asked?.accuracy ?? sketch.accuracy} />
+        <ClosingBar
+          progress={field.progress}
+          first={solution.firstWidth ?? 1}
+          goal={asked?.accuracy ?? sketch.accuracy}
+        />
       ) : null}
       {phase === "starting" || (phase === "running" && !field?.progress) ? (
         <p className="text-table text-ink-soft" role="status">
@@ -205,14 +208,4 @@ function Countdown({ seconds }: { readonly seconds: number | null }) {
   }, [seconds]);
   if (seconds === null) return "They come back later, or after signing in.";
   return left > 0 ? `The page asks again in ${Math.round(left)} s.` : "The page asks again now.";
-}
-
-/** Width of the first bracket of the present run. */
-function useFirstWidth({ field }: Solution): number {
-  const [first, setFirst] = useState<{ readonly id: string; readonly width: number } | null>(null);
-  if (field?.progress && first?.id !== field.id) {
-    const { lower, upper } = field.progress;
-    setFirst({ id: field.id, width: (2 * (upper - lower)) / (upper + lower) });
-  }
-  return first?.width ?? 1;
 }

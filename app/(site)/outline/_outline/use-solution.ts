@@ -23,6 +23,8 @@ export interface SolutionState {
   /** The stream of events broke; the page looks again by itself. */
   readonly lost: boolean;
   readonly trouble: SolveTrouble | null;
+  /** Relative width of the first bracket, from which it closes; null before. */
+  readonly firstWidth: number | null;
 }
 
 export interface Solution extends SolutionState {
@@ -30,7 +32,14 @@ export interface Solution extends SolutionState {
   readonly cancel: () => void;
 }
 
-const IDLE: SolutionState = { phase: "idle", body: null, field: null, lost: false, trouble: null };
+const IDLE: SolutionState = {
+  phase: "idle",
+  body: null,
+  field: null,
+  lost: false,
+  trouble: null,
+  firstWidth: null,
+};
 const LONGEST_WAIT_S = 120;
 const LONGEST_BACK_OFF_S = 15;
 
@@ -55,7 +64,12 @@ export function useSolution(): Solution {
       const controller = new AbortController();
       run.current = controller;
       const update = (change: Partial<SolutionState>) => {
-        if (!controller.signal.aborted) setState((before) => ({ ...before, ...change }));
+        if (controller.signal.aborted) return;
+        setState((before) => ({
+          ...before,
+          ...change,
+          firstWidth: before.firstWidth ?? widthOf(change.field?.progress),
+        }));
       };
       setState({ ...IDLE, phase: "starting", body });
       const key = newAttemptKey();
@@ -141,6 +155,10 @@ function troubleOf(failure: unknown): SolveTrouble {
     return { kind: "wait", seconds, problem: failure };
   }
   return { kind: "service", problem: failure };
+}
+
+function widthOf(progress: FieldView["progress"] | undefined): number | null {
+  return progress ? (2 * (progress.upper - progress.lower)) / (progress.upper + progress.lower) : null;
 }
 
 function pause(seconds: number, signal: AbortSignal): Promise<void> {
