@@ -2,7 +2,9 @@ import { z } from "zod";
 import { listRecords as listRows } from "@/db/queries/records";
 import { keyActor } from "@/lib/activity/append";
 import { requireKey, requireRecorder } from "@/lib/auth/access";
+import { MOST_FIELD_SOLUTIONS } from "@/lib/engine";
 import { prepareReplay } from "@/lib/fields/replay-field";
+import { isFieldSizing } from "@/lib/fields/size-field";
 import { MOST_COMPUTATIONS } from "@/lib/jobs/field-cost";
 import { recordView, relabel, removeRecord, teamRecord } from "@/lib/records/records";
 import { replayResistance, replaySizing } from "@/lib/records/replay";
@@ -215,9 +217,10 @@ export const replayRecord = defineOperation({
       return json(200, await replayNetwork(service.db, row), { computations: costs });
     }
     if (row.operation === "sizing") {
-      const costs = computationsOf(JSON.parse(row.request));
-      await context.reserve(costs);
-      const replay = replaySizing(service.db, row);
+      const request: unknown = JSON.parse(row.request);
+      await context.reserve(isFieldSizing(request) ? MOST_FIELD_SOLUTIONS : computationsOf(request));
+      const { computations, ...replay } = await replaySizing(service.db, service.fields, row);
+      const costs = isFieldSizing(request) ? computations : computationsOf(request);
       return json(200, replay, { shape: replay.now.shape, computations: costs });
     }
     const costs = computationsOf(JSON.parse(row.request));

@@ -2,6 +2,7 @@ import { z } from "zod";
 import {
   boundedResistanceSchema,
   catalogue,
+  fieldRequestSchema,
   includeSchema,
   operatingSchema,
   recordRequestSchema,
@@ -102,12 +103,32 @@ function sizingFor(shape: Shape) {
     .meta({ id: `${pascal(shape.id)}Sizing`, description: shape.summary });
 }
 
+const fieldSizing = z
+  .strictObject({
+    ...fieldRequestSchema.shape,
+    solveFor: z.enum(["scale", "scaleX", "scaleY"]).meta({ description: "Which way the drawing is scaled." }),
+    target: sizingFields.target,
+    within: z
+      .array(z.number())
+      .length(2)
+      .optional()
+      .meta({
+        description: "Smallest and largest scale to look at; 0.01 to 100 if left out.",
+        example: [0.5, 2],
+      }),
+  })
+  .meta({ id: "FieldSizingRequest", description: "A field request with the scale to find." });
+
 /** Every shape's sizing, told apart by `shape`. Made when first asked for. */
 export function documentedSizingRequest(): z.ZodType {
   const [first, ...rest] = catalogue.map(sizingFor);
-  return z.discriminatedUnion("shape", [first, ...rest]).meta({
-    id: "SizingRequest",
+  const onShape = z.discriminatedUnion("shape", [first, ...rest]).meta({
+    id: "ShapeSizingRequest",
     description: "A resistance request with one dimension left out, and the resistance that it is to give.",
+  });
+  return z.union([onShape, fieldSizing]).meta({
+    id: "SizingRequest",
+    description: "What to find on a shape or on an outline, and the resistance that it is to give.",
   });
 }
 

@@ -129,6 +129,9 @@ export {
   type FieldProgress,
   type FieldSolution,
 } from "./field/solve-field";
+export { findScale, MOST_FIELD_SOLUTIONS } from "./field/sizing/find-scale";
+export { readFieldSizing } from "./field/sizing/read-field-sizing";
+export type { FieldBody } from "./field/sizing/scale-body";
 export { boundaryFlux } from "./field/picture/boundary-flux";
 export { fieldLines } from "./field/picture/contours";
 export type { FieldMap } from "./field/picture/field-map";

@@ -22,7 +22,7 @@ import { fieldCost, MOST_UNKNOWNS, SIGNED_OUT_UNKNOWNS } from "./field-cost";
 import { FieldFiles } from "./field-files";
 import type { FieldOutcome } from "./field-task";
 import { WARMING_BEND, WARMING_PLATE } from "./warming-body";
-import type { RunningTask, TaskRunner } from "./worker-pool";
+import type { PoolTask, RunningTask, TaskRunner } from "./worker-pool";
 
 /** How long a claim holds without being extended, and how often it is, ms. */
 const CLAIM_MS = 20_000;
@@ -298,6 +298,11 @@ export class FieldJobs {
     if (!listeners || this.closing) return;
     const row = fieldById(this.options.db, id);
     if (row) for (const listener of [...listeners]) listener({ ...row, progress });
+  }
+
+  /** Solves a body on the same threads, beside the queue; nothing of it is stored. */
+  solve(task: Omit<PoolTask, "onProgress">): Promise<FieldOutcome> {
+    return this.options.runner.run({ ...task, onProgress: () => {} }).outcome;
   }
 
   /** Whether anything waits or runs in this process. */

@@ -11,6 +11,8 @@ import {
   sizingResultSchema,
   uncertaintySchema,
 } from "@/lib/engine";
+import { isFieldSizing, sizeField } from "../fields/size-field";
+import type { FieldJobs } from "../jobs/field-jobs";
 import { pinnedMaterial } from "../materials/team-materials";
 
 const storedResult = z.object({
@@ -51,11 +53,20 @@ export function replayResistance(db: Database, row: RecordRow): Replay {
   };
 }
 
-/** Finds the dimension of a record of `sizing` again, in the same way. */
-export function replaySizing(db: Database, row: RecordRow): Replay<SizingResult> {
+/** Finds the dimension of a record of `sizing` again, in the same way; on an outline by field solutions. */
+export async function replaySizing(
+  db: Database,
+  fields: FieldJobs,
+  row: RecordRow,
+): Promise<Replay<SizingResult> & { readonly computations: number }> {
   const before: unknown = JSON.parse(row.result);
+  const request: unknown = JSON.parse(row.request);
+  const { material } = pinnedContext(db, row);
   const was = storedSizing.parse(before).solutions.map(({ dimension }) => dimension.value);
-  const now = computeSizing(JSON.parse(row.request), pinnedContext(db, row));
+  const again = isFieldSizing(request)
+    ? await sizeField(request, { fields, material, outline: () => undefined })
+    : { result: computeSizing(request, { material }), computations: 1 };
+  const now = again.result;
   const is = now.solutions.map(({ dimension }) => dimension.value);
   const drifts = was.map((value, i) => (is[i] === undefined ? 1 : (is[i] - value) / value));
   return {
@@ -63,6 +74,7 @@ export function replaySizing(db: Database, row: RecordRow): Replay<SizingResult>
     now,
     drift: drifts.reduce((most, drift) => (Math.abs(drift) > Math.abs(most) ? drift : most), 0),
     identical: JSON.stringify(is) === JSON.stringify(was),
+    computations: again.computations,
   };
 }
 

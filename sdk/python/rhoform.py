@@ -2190,9 +2190,8 @@ class AnsweredSizing:
 
     _NAMES: ClassVar[Mapping[str, str]] = {"solve_for": "solveFor"}
     _SPECS: ClassVar[Mapping[str, _Spec]] = {"target": "AnsweredSizingTarget", "within": ("list", "AnsweredSizingWithin"), "solutions": ("list", "SizingSolution"), "sources": ("list", "ShapeSource"), "materials": ("list", "AnsweredResistanceMaterial"), "record": "AnsweredResistanceRecord"}
-    _REQUIRED: ClassVar[Tuple[str, ...]] = ("shape", "solveFor", "target", "within", "solutions", "assumptions", "sources", "materials", "engine", "catalogue")
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("solveFor", "target", "within", "solutions", "assumptions", "sources", "materials", "engine", "catalogue")
     _FIXED: ClassVar[Mapping[str, Any]] = {}
-    shape: str
     solve_for: str
     target: AnsweredSizingTarget
     #: The range that was searched.
@@ -2204,6 +2203,8 @@ class AnsweredSizing:
     materials: List[AnsweredResistanceMaterial]
     engine: str
     catalogue: str
+    #: The shape; left out for an outline.
+    shape: Optional[str] = None
     #: Where the calculation was stored; only if `record` was in the request.
     record: Optional[AnsweredResistanceRecord] = None
 
@@ -3193,9 +3194,8 @@ class SizingResult:
 
     _NAMES: ClassVar[Mapping[str, str]] = {"solve_for": "solveFor"}
     _SPECS: ClassVar[Mapping[str, _Spec]] = {"target": "AnsweredSizingTarget", "within": ("list", "AnsweredSizingWithin"), "solutions": ("list", "SizingSolution"), "sources": ("list", "ShapeSource"), "materials": ("list", "AnsweredResistanceMaterial")}
-    _REQUIRED: ClassVar[Tuple[str, ...]] = ("shape", "solveFor", "target", "within", "solutions", "assumptions", "sources", "materials", "engine", "catalogue")
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("solveFor", "target", "within", "solutions", "assumptions", "sources", "materials", "engine", "catalogue")
     _FIXED: ClassVar[Mapping[str, Any]] = {}
-    shape: str
     solve_for: str
     target: AnsweredSizingTarget
     #: The range that was searched.
@@ -3207,6 +3207,8 @@ class SizingResult:
     materials: List[AnsweredResistanceMaterial]
     engine: str
     catalogue: str
+    #: The shape; left out for an outline.
+    shape: Optional[str] = None
 
 
 @dataclass(frozen=True)

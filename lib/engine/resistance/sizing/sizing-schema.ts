@@ -95,7 +95,7 @@ export const sizingSolutionSchema = z
 
 export const sizingResultSchema = z
   .object({
-    shape: z.string(),
+    shape: z.string().optional().meta({ description: "The shape; left out for an outline." }),
     solveFor: z.string(),
     target: boundedResistanceSchema.pick({ value: true, unit: true, text: true }),
     within: z.array(found).length(2).meta({ description: "The range that was searched." }),

@@ -89,7 +89,9 @@ export const readResistance = <ThrowOnError extends boolean = true>(options: Opt
 /**
  * Find the dimension that gives a resistance
  *
- * The body of `POST /resistance` with one dimension left out, and beside it `solveFor`, `target` and optionally `within`. Answers every value of the dimension in the range that gives the target, each with its resistance and bounds and with what else the request asks for (`include`, `requirement`, `uncertainty`). Of a dimension that is a whole number the two on either side are answered where none gives the target exactly. None is a 422 that states the resistances at both ends. With `record` the sizing is stored for the team; then an `Idempotency-Key` counts. Costs one computation of the month; a refused request costs none. Needs the scope `compute`.
+ * The body of `POST /resistance` with one dimension left out, and beside it `solveFor`, `target` and optionally `within`. Answers every value of the dimension in the range that gives the target, each with its resistance and bounds and with what else the request asks for (`include`, `requirement`, `uncertainty`). Of a dimension that is a whole number the two on either side are answered where none gives the target exactly. None is a 422 that states the resistances at both ends. With `record` the sizing is stored for the team; then an `Idempotency-Key` counts. Needs the scope `compute`, and costs one computation of the month.
+ *
+ * Or the body of `POST /fields` with two terminals and `solveFor` one of `scaleX`, `scaleY` (the drawing is stretched one way) and `scale` (it is scaled evenly, and the thickness with it; a plan sheet does not change then). An expression stays where it is in metres. This needs the scope `field`, and costs one computation for each field solution made, at most 60. A refused request costs none. Needs a key.
  */
 export const sizeDimension = <ThrowOnError extends boolean = true>(options: Options<SizeDimensionData, ThrowOnError>) => (options.client ?? client).post<SizeDimensionResponses, SizeDimensionErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',

@@ -3388,7 +3388,10 @@ export type EarthGridRequest = {
  * The values of one dimension that give a resistance.
  */
 export type AnsweredSizing = {
-    shape: string;
+    /**
+     * The shape; left out for an outline.
+     */
+    shape?: string;
     solveFor: string;
     target: {
         /**
@@ -3682,111 +3685,9 @@ export type SizingSolution = {
 };
 
 /**
- * A resistance request with one dimension left out, and the resistance that it is to give.
+ * What to find on a shape or on an outline, and the resistance that it is to give.
  */
-export type SizingRequest = ({
-    shape: 'bar';
-} & BarSizing) | ({
-    shape: 'round-wire';
-} & RoundWireSizing) | ({
-    shape: 'tube';
-} & TubeSizing) | ({
-    shape: 'prism';
-} & PrismSizing) | ({
-    shape: 'etched-trace';
-} & EtchedTraceSizing) | ({
-    shape: 'via-barrel';
-} & ViaBarrelSizing) | ({
-    shape: 'stranded-conductor';
-} & StrandedConductorSizing) | ({
-    shape: 'parallel-plates';
-} & ParallelPlatesSizing) | ({
-    shape: 'box-tube';
-} & BoxTubeSizing) | ({
-    shape: 'clad-wire';
-} & CladWireSizing) | ({
-    shape: 'helical-winding';
-} & HelicalWindingSizing) | ({
-    shape: 'flat-spiral';
-} & FlatSpiralSizing) | ({
-    shape: 'tapered-strip';
-} & TaperedStripSizing) | ({
-    shape: 'cone-frustum';
-} & ConeFrustumSizing) | ({
-    shape: 'cylindrical-shell';
-} & CylindricalShellSizing) | ({
-    shape: 'spherical-shell';
-} & SphericalShellSizing) | ({
-    shape: 'confocal-shell';
-} & ConfocalShellSizing) | ({
-    shape: 'arc-bar';
-} & ArcBarSizing) | ({
-    shape: 'conical-shell';
-} & ConicalShellSizing) | ({
-    shape: 'bent-tube';
-} & BentTubeSizing) | ({
-    shape: 'hyperbolic-neck';
-} & HyperbolicNeckSizing) | ({
-    shape: 'torus-arc';
-} & TorusArcSizing) | ({
-    shape: 'cylinder-in-square';
-} & CylinderInSquareSizing) | ({
-    shape: 'eccentric-cylinders';
-} & EccentricCylindersSizing) | ({
-    shape: 'parallel-cylinders';
-} & ParallelCylindersSizing) | ({
-    shape: 'cylinder-plane';
-} & CylinderPlaneSizing) | ({
-    shape: 'sphere-plane';
-} & SpherePlaneSizing) | ({
-    shape: 'sphere-buried';
-} & SphereBuriedSizing) | ({
-    shape: 'sphere-pair';
-} & SpherePairSizing) | ({
-    shape: 'spheroid';
-} & SpheroidSizing) | ({
-    shape: 'contact-spot';
-} & ContactSpotSizing) | ({
-    shape: 'elliptic-contact-spot';
-} & EllipticContactSpotSizing) | ({
-    shape: 'spot-in-cylinder';
-} & SpotInCylinderSizing) | ({
-    shape: 'sheet-strip';
-} & SheetStripSizing) | ({
-    shape: 'sheet-bend';
-} & SheetBendSizing) | ({
-    shape: 'sheet-step';
-} & SheetStepSizing) | ({
-    shape: 'sheet-meander';
-} & SheetMeanderSizing) | ({
-    shape: 'sheet-end-terminal';
-} & SheetEndTerminalSizing) | ({
-    shape: 'sheet-tee';
-} & SheetTeeSizing) | ({
-    shape: 'sheet-slit';
-} & SheetSlitSizing) | ({
-    shape: 'sheet-disc';
-} & SheetDiscSizing) | ({
-    shape: 'earth-hemisphere';
-} & EarthHemisphereSizing) | ({
-    shape: 'earth-rod';
-} & EarthRodSizing) | ({
-    shape: 'earth-rod-pair';
-} & EarthRodPairSizing) | ({
-    shape: 'earth-rod-group';
-} & EarthRodGroupSizing) | ({
-    shape: 'earth-wire';
-} & EarthWireSizing) | ({
-    shape: 'earth-ring';
-} & EarthRingSizing) | ({
-    shape: 'earth-plate';
-} & EarthPlateSizing) | ({
-    shape: 'earth-star';
-} & EarthStarSizing) | ({
-    shape: 'earth-rod-layered';
-} & EarthRodLayeredSizing) | ({
-    shape: 'earth-grid';
-} & EarthGridSizing);
+export type SizingRequest = BarSizing | RoundWireSizing | TubeSizing | PrismSizing | EtchedTraceSizing | ViaBarrelSizing | StrandedConductorSizing | ParallelPlatesSizing | BoxTubeSizing | CladWireSizing | HelicalWindingSizing | FlatSpiralSizing | TaperedStripSizing | ConeFrustumSizing | CylindricalShellSizing | SphericalShellSizing | ConfocalShellSizing | ArcBarSizing | ConicalShellSizing | BentTubeSizing | HyperbolicNeckSizing | TorusArcSizing | CylinderInSquareSizing | EccentricCylindersSizing | ParallelCylindersSizing | CylinderPlaneSizing | SpherePlaneSizing | SphereBuriedSizing | SpherePairSizing | SpheroidSizing | ContactSpotSizing | EllipticContactSpotSizing | SpotInCylinderSizing | SheetStripSizing | SheetBendSizing | SheetStepSizing | SheetMeanderSizing | SheetEndTerminalSizing | SheetTeeSizing | SheetSlitSizing | SheetDiscSizing | EarthHemisphereSizing | EarthRodSizing | EarthRodPairSizing | EarthRodGroupSizing | EarthWireSizing | EarthRingSizing | EarthPlateSizing | EarthStarSizing | EarthRodLayeredSizing | EarthGridSizing | FieldSizingRequest;
 
 /**
  * A straight bar or strip of rectangular section; the current enters and leaves through the whole end faces.
@@ -6820,6 +6721,216 @@ export type EarthGridSizing = {
 };
 
 /**
+ * A field request with the scale to find.
+ */
+export type FieldSizingRequest = {
+    /**
+     * The plan drawing, or `outlineId`.
+     */
+    outline?: {
+        unit?: 'km' | 'm' | 'dm' | 'cm' | 'mm' | 'um' | 'µm' | 'μm' | 'nm' | 'in' | 'mil' | 'ft';
+        outer: Array<[
+            number,
+            number
+        ] | {
+            arcTo: [
+                number,
+                number
+            ];
+            center: [
+                number,
+                number
+            ];
+            clockwise?: boolean;
+        }>;
+        holes?: Array<Array<[
+            number,
+            number
+        ] | {
+            arcTo: [
+                number,
+                number
+            ];
+            center: [
+                number,
+                number
+            ];
+            clockwise?: boolean;
+        }>>;
+        symmetry?: 'plan' | 'axisymmetric';
+    };
+    /**
+     * Id of a stored outline, in place of `outline`.
+     */
+    outlineId?: string;
+    /**
+     * Two terminals, or more; each on edges of the outline. They may be left out where a stored outline has its own.
+     */
+    terminals?: Array<{
+        name: string;
+        segments?: Array<[
+            [
+                number,
+                number
+            ],
+            [
+                number,
+                number
+            ]
+        ]>;
+        parts?: Array<{
+            ring: number;
+            edge: number;
+            from?: number;
+            to?: number;
+        }>;
+    }>;
+    /**
+     * What fills the outline: a sheet resistance; a material, resistivity or conductivity with a thickness (without one where the outline is axisymmetric); or an expression with its quantity and thickness.
+     */
+    medium: {
+        /**
+         * Id of a material of the library or the team.
+         */
+        material?: string;
+        /**
+         * Allow a temperature outside the material's range, with a caution.
+         */
+        extrapolate?: boolean;
+        /**
+         * Resistivity (a resistivity; a bare number is in ohm m, or a text with a unit).
+         */
+        resistivity?: number | string;
+        /**
+         * Conductivity (a conductivity; a bare number is in S/m, or a text with a unit).
+         */
+        conductivity?: number | string;
+        /**
+         * Temperature coefficient of the resistivity at the reference temperature (a temperature coefficient; a bare number is in 1/K, or a text with a unit).
+         */
+        temperatureCoefficient?: number | string;
+        /**
+         * Temperature at which the resistivity or conductivity is given, 20 °C by default (a temperature; a bare number is in degC, or a text with a unit).
+         */
+        referenceTemperature?: number | string;
+        /**
+         * Sheet resistance, for sheet shapes (a sheet resistance; a bare number is in ohm/sq, or a text with a unit).
+         */
+        sheetResistance?: number | string;
+        /**
+         * Thickness of the sheet, for sheet shapes, beside a material, resistivity or conductivity (a length; a bare number is in m, or a text with a unit).
+         */
+        thickness?: number | string;
+        /**
+         * An expression in x and y, the position in metres, giving SI values.
+         */
+        expression?: string;
+        /**
+         * What the expression's values are.
+         */
+        quantity?: 'conductivity' | 'resistivity';
+        /**
+         * Regions of another medium; they may touch the border and each other, not overlap.
+         */
+        regions?: Array<{
+            /**
+             * Border of the region, a polygon in the outline's unit.
+             */
+            ring: Array<[
+                number,
+                number
+            ]>;
+            /**
+             * Medium of a region: a sheet resistance, or a material, resistivity or conductivity with a thickness.
+             */
+            medium: {
+                /**
+                 * Id of a material of the library or the team.
+                 */
+                material?: string;
+                /**
+                 * Allow a temperature outside the material's range, with a caution.
+                 */
+                extrapolate?: boolean;
+                /**
+                 * Resistivity (a resistivity; a bare number is in ohm m, or a text with a unit).
+                 */
+                resistivity?: number | string;
+                /**
+                 * Conductivity (a conductivity; a bare number is in S/m, or a text with a unit).
+                 */
+                conductivity?: number | string;
+                /**
+                 * Temperature coefficient of the resistivity at the reference temperature (a temperature coefficient; a bare number is in 1/K, or a text with a unit).
+                 */
+                temperatureCoefficient?: number | string;
+                /**
+                 * Temperature at which the resistivity or conductivity is given, 20 °C by default (a temperature; a bare number is in degC, or a text with a unit).
+                 */
+                referenceTemperature?: number | string;
+                /**
+                 * Sheet resistance, for sheet shapes (a sheet resistance; a bare number is in ohm/sq, or a text with a unit).
+                 */
+                sheetResistance?: number | string;
+                /**
+                 * Thickness of the sheet, for sheet shapes, beside a material, resistivity or conductivity (a length; a bare number is in m, or a text with a unit).
+                 */
+                thickness?: number | string;
+            };
+        }>;
+    };
+    /**
+     * (upper − lower)/value that is wanted, 1e-2 … 1e-8.
+     */
+    accuracy?: number;
+    operating?: Operating;
+    requirement?: Requirement;
+    /**
+     * Store this calculation as a record.
+     */
+    record?: {
+        /**
+         * What the record is called.
+         */
+        label: string;
+    };
+    /**
+     * Which way the drawing is scaled.
+     */
+    solveFor: 'scale' | 'scaleX' | 'scaleY';
+    /**
+     * The resistance to reach (a resistance; a bare number is in ohm, or a text with a unit).
+     */
+    target: number | string;
+    /**
+     * Smallest and largest scale to look at; 0.01 to 100 if left out.
+     */
+    within?: Array<number>;
+};
+
+/**
+ * Temperature, and at most one of voltage, current and power.
+ */
+export type Operating = {
+    /**
+     * Temperature of the medium, 20 °C by default (a temperature; a bare number is in degC, or a text with a unit).
+     */
+    temperature?: number | string;
+    /**
+     * Voltage across the terminals (a voltage; a bare number is in V, or a text with a unit).
+     */
+    voltage?: number | string;
+    /**
+     * Current through the terminals (a current; a bare number is in A, or a text with a unit).
+     */
+    current?: number | string;
+    /**
+     * Power turned to heat (a power; a bare number is in W, or a text with a unit).
+     */
+    power?: number | string;
+};
+
+/**
  * Every item answered or refused on its own.
  */
 export type BatchAnswer = {
@@ -8347,28 +8458,6 @@ export type FieldRequest = {
 };
 
 /**
- * Temperature, and at most one of voltage, current and power.
- */
-export type Operating = {
-    /**
-     * Temperature of the medium, 20 °C by default (a temperature; a bare number is in degC, or a text with a unit).
-     */
-    temperature?: number | string;
-    /**
-     * Voltage across the terminals (a voltage; a bare number is in V, or a text with a unit).
-     */
-    voltage?: number | string;
-    /**
-     * Current through the terminals (a current; a bare number is in A, or a text with a unit).
-     */
-    current?: number | string;
-    /**
-     * Power turned to heat (a power; a bare number is in W, or a text with a unit).
-     */
-    power?: number | string;
-};
-
-/**
  * A field solution as lines, raster and fluxes.
  */
 export type FieldMap = {
@@ -8897,7 +8986,10 @@ export type Record = {
  * The values of one dimension that give a resistance.
  */
 export type SizingResult = {
-    shape: string;
+    /**
+     * The shape; left out for an outline.
+     */
+    shape?: string;
     solveFor: string;
     target: {
         /**
@@ -9824,8 +9916,6 @@ export type SizeDimensionErrors = {
      */
     401: Problem;
     /**
-     * `insufficient-scope`: The key is known, but what it may do does not include this call.
-     *
      * `origin-not-allowed`: A browser called from a page whose origin is not among those that the key allows.
      *
      * `team-required`: The call concerns what a team owns, and it came without a key of a team.
