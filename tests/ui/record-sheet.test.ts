@@ -108,6 +108,14 @@ describe("what a record tells", () => {
     );
   });
 
+  it("opens again with the same inputs", () => {
+    expect(content.openHref).toBe(
+      "/calculate/bar?length=250mm&width=40mm&width.tolerance=0.1mm&thickness=5mm&material=copper-annealed&temperature=75degC&current=630A&max=1mohm&uncertainty=propagation",
+    );
+    const uneven = { ...BAR, dimensions: { ...BAR.dimensions, width: { value: "40 mm", plus: "1 mm" } } };
+    expect(contentOf(recordOf(uneven)).openHref).toBeUndefined();
+  });
+
   it("shows what was stored as it is where it does not know the form", () => {
     const odd = contentOf({ ...recordOf(BAR), operation: "sizing", result: { solutions: [] } });
     expect(odd.sections.map(({ id }) => id)).toEqual(["request", "result", "versions"]);

@@ -32,7 +32,12 @@ export default async function RecordPage({ params }: PageProps) {
       </div>
       <p className="text-small text-ink-soft">{content.subject}</p>
       <h1 className="[overflow-wrap:anywhere]">{content.label}</h1>
-      <RecordActions id={content.id} label={content.label} readOnly={readOnly(rights, content.team)} />
+      <RecordActions
+        id={content.id}
+        label={content.label}
+        openHref={content.openHref}
+        readOnly={readOnly(rights, content.team)}
+      />
       <RecordSheet content={content} />
     </article>
   );

@@ -20,6 +20,7 @@ import {
 import type { Block, Fact, Section, Told } from "./content";
 import { askedTable, dimensionsTable, shapePicture } from "./inputs";
 import { materialBlocks, mediumBlocks } from "./medium";
+import { calculatorHref } from "./open-again";
 import { words } from "./typed";
 
 const given = z.record(z.string(), z.unknown());
@@ -32,6 +33,7 @@ export const storedRequest = z.object({
   media: z.record(z.string(), given).optional(),
   operating: given.optional(),
   requirement: given.optional(),
+  uncertainty: given.optional(),
 });
 export type StoredRequest = z.infer<typeof storedRequest>;
 
@@ -52,6 +54,7 @@ export function tellResistance(request: unknown, result: unknown, lookUp: LookUp
     },
     picture: shapePicture(asked.data.shape, asked.data.dimensions),
     cautions,
+    openHref: calculatorHref(asked.data),
     sections: [
       ...inputSections(asked.data, answer.data.materials, lookUp),
       ...answerSections(asked.data, answer.data),

@@ -2,8 +2,8 @@
 
 import { useRouter } from "next/navigation";
 import { useState } from "react";
-import { Download, PenLine, Printer, RotateCw, Trash2 } from "lucide-react";
-import { Button } from "../../../_ui/button";
+import { Download, PenLine, Printer, RotateCw, SquarePen, Trash2 } from "lucide-react";
+import { Button, ButtonLink } from "../../../_ui/button";
 import { Dialog } from "../../../_ui/dialog";
 import { CONTROL, Field } from "../../../_ui/field";
 import { ProblemNotice, type ProblemShown } from "../../../_ui/problem-notice";
@@ -14,6 +14,8 @@ import { Replay } from "./replay";
 interface RecordActionsProps {
   readonly id: string;
   readonly label: string;
+  /** The same calculation on its page, to go on with it. */
+  readonly openHref?: string;
   /** Why the reader cannot replay, relabel and delete; null where they can. */
   readonly readOnly: string | null;
 }
@@ -27,7 +29,7 @@ export function RecordActions(props: RecordActionsProps) {
   );
 }
 
-function Actions({ id, label, readOnly }: RecordActionsProps) {
+function Actions({ id, label, openHref, readOnly }: RecordActionsProps) {
   const [asking, setAsking] = useState<"relabel" | "delete" | null>(null);
   const [replaying, setReplaying] = useState(0);
   return (
@@ -38,6 +40,11 @@ function Actions({ id, label, readOnly }: RecordActionsProps) {
         <Button variant="quiet" onClick={() => window.print()}>
           <Printer aria-hidden size={16} /> Print
         </Button>
+        {openHref ? (
+          <ButtonLink href={openHref} variant="quiet" prefetch={false}>
+            <SquarePen aria-hidden size={16} /> Open in Calculate
+          </ButtonLink>
+        ) : null}
         {readOnly === null ? (
           <>
             <Button variant="quiet" onClick={() => setReplaying((count) => count + 1)}>
