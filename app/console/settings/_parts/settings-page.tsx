@@ -45,7 +45,12 @@ export function SettingsPage() {
           title="Organisation"
           group="organisation"
           fields={[
-            { name: "name", label: "Name", value: data.organisation.name, help: "Stands on printed sheets." },
+            {
+              name: "name",
+              label: "Name",
+              value: data.organisation.name,
+              help: "Whose service this is, as widgets say it.",
+            },
           ]}
           onSaved={saved}
         />
