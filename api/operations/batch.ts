@@ -1,5 +1,5 @@
 import { z } from "zod";
-import { Refusal } from "@/lib/service/refusal";
+import { type Refusal } from "@/lib/service/refusal";
 import { RESULT_COLUMNS } from "../batch/columns";
 import { BATCH_MAX_BYTES, itemsOf } from "../batch/items";
 import type { ItemOutcome } from "../batch/outcome";

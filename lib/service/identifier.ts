@@ -38,7 +38,8 @@ export function bytesToText(bytes: Uint8Array): string {
 
 /** An id that cannot be guessed: `rec_` and 95 random bits. */
 export function newId(
-  prefix: "act" | "emb" | "fld" | "lnk" | "mail" | "mat" | "out" | "per" | "rec" | "req" | "sec" | "ses" | "team",
+  prefix:
+    "act" | "emb" | "fld" | "lnk" | "mail" | "mat" | "out" | "per" | "rec" | "req" | "sec" | "ses" | "team",
 ): string {
   return `${prefix}_${randomText(16)}`;
 }

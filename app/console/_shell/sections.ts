@@ -1,4 +1,15 @@
-import { Activity, AppWindow, ChartColumn, FileText, Gauge, KeyRound, Layers, Settings, Users, type LucideIcon } from "lucide-react";
+import {
+  Activity,
+  AppWindow,
+  ChartColumn,
+  FileText,
+  Gauge,
+  KeyRound,
+  Layers,
+  Settings,
+  Users,
+  type LucideIcon,
+} from "lucide-react";
 import type { Action } from "@/lib/auth/permissions";
 
 export interface Section {
@@ -16,7 +27,13 @@ export const SECTIONS: readonly Section[] = [
   { id: "keys", title: "Keys", href: "/console/keys", icon: KeyRound, permission: "keys.view" },
   { id: "embeds", title: "Embeds", href: "/console/embeds", icon: AppWindow, permission: "embeds.view" },
   { id: "usage", title: "Usage", href: "/console/usage", icon: ChartColumn, permission: "usage.view" },
-  { id: "materials", title: "Materials", href: "/console/materials", icon: Layers, permission: "materials.view" },
+  {
+    id: "materials",
+    title: "Materials",
+    href: "/console/materials",
+    icon: Layers,
+    permission: "materials.view",
+  },
   { id: "records", title: "Records", href: "/console/records", icon: FileText, permission: "records.view" },
   { id: "people", title: "People", href: "/console/people", icon: Users, permission: "people.view" },
   {

@@ -104,7 +104,12 @@ describe("dimensions", () => {
     ["an angle over the full circle", dims({ angle: 361 }), "#/dimensions/angle", /at most 360 deg/],
     ["a list", dims({ length: [1] }), "#/dimensions/length", /not an array/],
     ["null", dims({ length: null }), "#/dimensions/length", /null/],
-    ["a tolerance without a value", dims({ length: { tolerance: "1 %" } }), "#/dimensions/length", /tolerance/],
+    [
+      "a tolerance without a value",
+      dims({ length: { tolerance: "1 %" } }),
+      "#/dimensions/length",
+      /tolerance/,
+    ],
     ["a decimal comma", dims({ length: "1,5 m" }), "#/dimensions/length", /decimal comma/],
     ["a prototype's name", dims({ constructor: 1 }), "#/dimensions/constructor", /is no dimension/],
     ["a name with a slash", dims({ "a/b": 1 }), "#/dimensions/a~1b", /is no dimension/],

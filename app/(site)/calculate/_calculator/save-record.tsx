@@ -2,6 +2,7 @@
 
 import { useRef, useState } from "react";
 import { Save } from "lucide-react";
+import { useRouter } from "next/navigation";
 import { Button, ButtonLink } from "../../../_ui/button";
 import { Dialog } from "../../../_ui/dialog";
 import { CONTROL, Field } from "../../../_ui/field";
@@ -29,6 +30,7 @@ interface Stored {
 
 /** Stores the calculation for the reader's team. One press stores once, however often it is repeated. */
 export function SaveRecord({ saving, path, body, title, back }: SaveRecordProps) {
+  const router = useRouter();
   const [open, setOpen] = useState(false);
   const [label, setLabel] = useState(title);
   /** A repeat of the same text has the same key, so that it stores once; another text is another record. */
@@ -47,7 +49,7 @@ export function SaveRecord({ saving, path, body, title, back }: SaveRecordProps)
         onClick={(event) => {
           if (!back || event.metaKey || event.ctrlKey || event.shiftKey) return;
           event.preventDefault();
-          window.location.assign(`/sign-in?next=${encodeURIComponent(back())}`);
+          router.push(`/sign-in?next=${encodeURIComponent(back())}`);
         }}
       >
         <Save aria-hidden size={16} /> Sign in to save

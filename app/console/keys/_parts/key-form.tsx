@@ -4,7 +4,7 @@ import { useState } from "react";
 import { CONTROL, Field } from "../../../_ui/field";
 import { TextField } from "../../../_ui/text-field";
 import { Toggle } from "../../../_ui/toggle";
-import { useFormErrors } from "../../_shell/use-form-errors";
+import { type useFormErrors } from "../../_shell/use-form-errors";
 
 /** What each scope allows, as the form and the document say it. */
 const SCOPES: readonly (readonly [string, string])[] = [

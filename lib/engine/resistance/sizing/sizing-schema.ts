@@ -11,14 +11,10 @@ import {
 import { anyQuantitySchema } from "../../quantity/quantity-schema";
 
 export const sizingFields = {
-  solveFor: z
-    .string()
-    .min(1)
-    .max(64)
-    .meta({
-      description: "The dimension to find, by any of its names; it is left out of `dimensions`.",
-      example: "width",
-    }),
+  solveFor: z.string().min(1).max(64).meta({
+    description: "The dimension to find, by any of its names; it is left out of `dimensions`.",
+    example: "width",
+  }),
   target: quantitySchema("resistance", "The resistance to reach", "5 mohm"),
   within: z
     .array(anyQuantitySchema)
@@ -42,11 +38,9 @@ export type SizingRequest = z.infer<typeof sizingRequestSchema>;
 
 const found = z
   .object({
-    value: z
-      .number()
-      .meta({
-        description: "Value of the dimension in `unit`; as a bare number it goes back into `dimensions`.",
-      }),
+    value: z.number().meta({
+      description: "Value of the dimension in `unit`; as a bare number it goes back into `dimensions`.",
+    }),
     unit: z.enum(["m", "m^2", "deg", "1"]),
     text: z.string().meta({ description: "The value for people." }),
   })
