@@ -1,9 +1,10 @@
 /** `npm run bench`: every measured promise, each against its limit; fails if one is missed. */
 import { benchEngine, printMeasurements } from "./engine.bench";
 import { benchServer } from "./server.bench";
+import { benchUncertainty } from "./uncertainty.bench";
 
 async function main(): Promise<void> {
-  const measurements = benchEngine();
+  const measurements = [...benchEngine(), ...benchUncertainty()];
   console.log(printMeasurements(measurements));
   const { empty, resistance, share, limit, passed } = await benchServer();
   console.log(
