@@ -2,6 +2,7 @@ import type { Metadata } from "next";
 import { catalogue } from "@/lib/engine";
 import { sharedService } from "@/lib/service/service";
 import { savingFor } from "../calculate/_server/saving";
+import { firstSolution } from "./_server/first-solution";
 import { NetworkPage } from "./_network/network-page";
 
 export const metadata: Metadata = {
@@ -23,6 +24,7 @@ export default async function Network() {
         </>
       }
       shapes={catalogue.map(({ id, title }) => ({ id, title }))}
+      first={firstSolution()}
       origin={sharedService().config.origin}
       saving={await savingFor("/network")}
     />

@@ -38,13 +38,13 @@ export function NetworkDrawing({ network, result, stale, focused, onPick }: Draw
       role="group"
       tabIndex={0}
       aria-label="Drawing of the network"
-      className="overflow-x-auto rounded border border-rule bg-sheet"
+      className="relative overflow-x-auto rounded border border-rule bg-sheet"
     >
       <svg
         role="img"
         aria-label={describe(network, result)}
         viewBox={`0 0 ${layout.width} ${layout.height}`}
-        style={{ minWidth: Math.min(layout.width, 900), maxHeight: "34rem" }}
+        style={{ minWidth: Math.min(layout.width, 700), maxHeight: "34rem" }}
         className={`mx-auto block w-full font-sans ${stale ? "opacity-60" : ""}`}
         fontSize={13}
       >

@@ -44,7 +44,7 @@ export function ElementTable(props: ElementTableProps) {
       role="group"
       tabIndex={0}
       aria-label="Elements"
-      className="overflow-x-auto rounded border border-rule bg-sheet text-table"
+      className="relative overflow-x-auto rounded border border-rule bg-sheet text-table"
     >
       <table className="w-full border-collapse">
         <caption className="sr-only">Elements of the network and what passes through them</caption>

@@ -15,12 +15,13 @@ import { ElementTable } from "./element-table";
 import { Elsewhere } from "./elsewhere";
 import { NetworkHeadline, Statements } from "./outcome";
 import { useNetwork } from "./use-network";
-import { useSolution } from "./use-solution";
+import { type FirstSolution, useSolution } from "./use-solution";
 
 interface NetworkPageProps {
   readonly heading: ReactNode;
   /** Shapes with the address of their example. */
   readonly shapes: readonly { readonly id: string; readonly title: string }[];
+  readonly first: FirstSolution;
   readonly origin: string;
   /** How the reader may keep a calculation; left out where nobody can. */
   readonly saving?: Saving;
@@ -37,9 +38,12 @@ export function NetworkPage(props: NetworkPageProps) {
   );
 }
 
-function LiveNetwork({ heading, shapes, origin, saving }: NetworkPageProps) {
+function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProps) {
   const [network, edit] = useNetwork();
-  const { body, result, stale, problem, complaints, portComplaints, requests } = useSolution(network);
+  const { body, result, stale, refused, problem, complaints, portComplaints, requests } = useSolution(
+    network,
+    first,
+  );
   const [focused, setFocused] = useState<number | null>(null);
   const [page, setPage] = useState(0);
   const [shape, setShape] = useState("bar");
@@ -111,7 +115,7 @@ function LiveNetwork({ heading, shapes, origin, saving }: NetworkPageProps) {
         {elements.length === 0 ? null : elements.length <= MOST_DRAWN ? (
           <NetworkDrawing
             network={network}
-            result={result}
+            result={refused ? undefined : result}
             stale={stale}
             focused={focused}
             onPick={(id) => {
@@ -152,7 +156,7 @@ function LiveNetwork({ heading, shapes, origin, saving }: NetworkPageProps) {
             aria-label="Shape of the next element"
             value={shape}
             onChange={(event) => setShape(event.target.value)}
-            className="min-h-5.5 max-w-24 rounded border border-edge bg-sheet px-0.5 text-table hover:border-ink medium:min-h-5"
+            className="min-h-5.5 w-20 min-w-0 rounded border border-edge bg-sheet px-0.5 text-table hover:border-ink medium:min-h-5"
           >
             {shapes.map(({ id, title }) => (
               <option key={id} value={id}>
@@ -161,6 +165,7 @@ function LiveNetwork({ heading, shapes, origin, saving }: NetworkPageProps) {
             ))}
           </select>
           <Button
+            className="whitespace-nowrap"
             onClick={() =>
               add({ kind: "shape", address: shape }, shapes.find(({ id }) => id === shape)?.title)
             }

@@ -16,6 +16,8 @@ export interface Solution {
   /** Of what was typed last, or of what stood there before. */
   readonly result: NetworkResult | undefined;
   readonly stale: boolean;
+  /** What was typed last has no answer. */
+  readonly refused: boolean;
   readonly problem: ProblemShown | null;
   /** Complaints by element, by what they concern. */
   readonly complaints: ReadonlyMap<number, Complaints>;
@@ -29,12 +31,19 @@ export interface Complaints {
   readonly value?: string;
 }
 
+/** What the server has solved already. */
+export interface FirstSolution {
+  readonly text: string;
+  readonly result: NetworkResult;
+  readonly requests: readonly (readonly [string, ShapeRequest])[];
+}
+
 /** Solves the network whenever it changes; requests of shapes are read from their addresses first. */
-export function useSolution(network: Network): Solution {
-  const requests = useRequests(network);
+export function useSolution(network: Network, first: FirstSolution): Solution {
+  const requests = useRequests(network, first.requests);
   const body = useMemo(() => networkBody(network, requests), [network, requests]);
   const text = body === null ? null : JSON.stringify(body);
-  const [asked, setAsked] = useState<string | null>(null);
+  const [asked, setAsked] = useState<string | null>(first.text);
   useEffect(() => {
     const timer = setTimeout(() => setAsked(text), PAUSE_MS);
     return () => clearTimeout(timer);
@@ -42,7 +51,13 @@ export function useSolution(network: Network): Solution {
   const { data, error, isLoading } = useSWR<NetworkResult, unknown>(
     asked === null ? null : ["/networks", asked],
     ([path, wanted]: [string, string]) => postApi<NetworkResult>(path, wanted),
-    { keepPreviousData: true, revalidateOnFocus: false, shouldRetryOnError: false },
+    {
+      keepPreviousData: true,
+      fallbackData: asked === first.text ? first.result : undefined,
+      revalidateOnMount: false,
+      revalidateOnFocus: false,
+      shouldRetryOnError: false,
+    },
   );
   const problem = error === undefined ? null : shown(error);
   const sorted = useMemo(() => sortComplaints(problem), [problem]);
@@ -50,6 +65,7 @@ export function useSolution(network: Network): Solution {
     body,
     result: data,
     stale: isLoading || asked !== text || problem !== null,
+    refused: problem !== null,
     problem: sorted.rest,
     complaints: sorted.complaints,
     portComplaints: sorted.ports,
@@ -101,8 +117,8 @@ function sortComplaints(problem: ProblemShown | null): {
 }
 
 /** What the addresses of shapes ask for, read by the service; kept once known. */
-function useRequests(network: Network): ReadonlyMap<string, ShapeRequest> {
-  const [known, setKnown] = useState<ReadonlyMap<string, ShapeRequest>>(new Map());
+function useRequests(network: Network, first: FirstSolution["requests"]): ReadonlyMap<string, ShapeRequest> {
+  const [known, setKnown] = useState<ReadonlyMap<string, ShapeRequest>>(() => new Map(first));
   const missing = network.elements.flatMap(({ value }) =>
     value.kind === "shape" && !known.has(value.address) ? [value.address] : [],
   );

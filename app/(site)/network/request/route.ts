@@ -1,30 +1,11 @@
-import { findShape, shapeEntry } from "@/lib/engine";
-import { exampleParameters } from "../../calculate/_model/parameters";
-import { requestBody } from "../../calculate/_model/request";
-import { readState } from "../../calculate/_model/variants";
-
-/** Members of a single calculation that an element of a network does not take. */
-const OWN = ["include", "record", "requirement", "uncertainty"];
-const DRIVES = ["voltage", "current", "power"];
+import { shapeRequest } from "../_server/shape-request";
 
 /** What the address of a calculation page asks for: `?shape=bar&length=1m&…`. */
 export function GET(request: Request): Response {
   const query = new URL(request.url).searchParams;
-  const shape = findShape(query.get("shape") ?? "");
-  if (!shape) return Response.json({ title: "There is no such shape." }, { status: 404 });
+  const shape = query.get("shape") ?? "";
   query.delete("shape");
-  const entry = shapeEntry(shape);
-  const { variants, active } = readState([...query], entry, exampleParameters(entry));
-  const body: Record<string, unknown> = { ...requestBody(entry, variants[active]) };
-  for (const name of OWN) delete body[name];
-  const { operating } = body;
-  if (typeof operating === "object" && operating !== null) {
-    const kept = Object.entries(operating).filter(([name]) => !DRIVES.includes(name));
-    if (kept.length > 0) body.operating = Object.fromEntries(kept);
-    else delete body.operating;
-  }
-  return Response.json(
-    { title: entry.title, request: body },
-    { headers: { "Cache-Control": "private, max-age=300" } },
-  );
+  const found = shapeRequest(shape, query);
+  if (!found) return Response.json({ title: "There is no such shape." }, { status: 404 });
+  return Response.json(found, { headers: { "Cache-Control": "private, max-age=300" } });
 }

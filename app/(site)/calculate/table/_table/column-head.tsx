@@ -1,6 +1,5 @@
 "use client";
 
-import { X } from "lucide-react";
 import { UNITS } from "../../../../_ui/quantity/units";
 import type { Column } from "../_model/table";
 import { type ColumnChoice, GROUP_TITLES } from "../_model/vocabulary";
@@ -15,6 +14,9 @@ interface ColumnHeadProps {
   readonly onRemove: () => void;
 }
 
+/** In the menu of names: takes the column away. No name has a space. */
+const REMOVE = "remove it";
+
 const CONTROL =
   "min-h-5.5 w-full rounded border border-edge bg-sheet px-0.5 font-normal hover:border-ink medium:min-h-4";
 
@@ -27,37 +29,29 @@ export function ColumnHead({ column, place, choices, taken, onChange, onRemove }
   const foreign = column.unit !== "" && !units.some(({ id }) => id === column.unit);
   const called = column.title || `column ${place + 1}`;
   return (
-    <th scope="col" className="min-w-16 px-0.5 py-0.5 text-start align-top">
-      <span className="flex items-center gap-0.5">
-        <select
-          aria-label={`What ${called} is`}
-          value={column.name}
-          onChange={(event) => onChange({ name: event.target.value, unit: "" })}
-          className={`${CONTROL} ${column.name === "" ? "text-amber" : ""}`}
-        >
-          <option value="">left out</option>
-          {Object.entries(GROUP_TITLES).map(([group, title]) => (
-            <optgroup key={group} label={title}>
-              {choices
-                .filter((entry) => entry.group === group)
-                .map(({ name }) => (
-                  <option key={name} value={name} disabled={name !== column.name && taken.has(name)}>
-                    {name}
-                  </option>
-                ))}
-            </optgroup>
-          ))}
-        </select>
-        <button
-          type="button"
-          aria-label={`Remove ${called}`}
-          title="Remove the column"
-          onClick={onRemove}
-          className="grid size-5.5 shrink-0 cursor-pointer place-items-center rounded text-ink-soft hover:text-ink medium:size-3"
-        >
-          <X aria-hidden size={14} />
-        </button>
-      </span>
+    <th scope="col" className="min-w-13 px-0.5 py-0.5 text-start align-top">
+      <select
+        aria-label={`What ${called} is`}
+        value={column.name}
+        onChange={(event) =>
+          event.target.value === REMOVE ? onRemove() : onChange({ name: event.target.value, unit: "" })
+        }
+        className={`${CONTROL} ${column.name === "" ? "text-amber" : ""}`}
+      >
+        <option value="">left out</option>
+        <option value={REMOVE}>remove the column</option>
+        {Object.entries(GROUP_TITLES).map(([group, title]) => (
+          <optgroup key={group} label={title}>
+            {choices
+              .filter((entry) => entry.group === group)
+              .map(({ name }) => (
+                <option key={name} value={name} disabled={name !== column.name && taken.has(name)}>
+                  {name}
+                </option>
+              ))}
+          </optgroup>
+        ))}
+      </select>
       {units.length > 0 || foreign ? (
         <select
           aria-label={`Unit of ${called}`}

@@ -195,7 +195,7 @@ function LiveTable({ vocabulary, shape, heading }: TablePageProps) {
         role="group"
         tabIndex={0}
         aria-label="The table"
-        className="overflow-x-auto rounded border border-rule bg-sheet text-table"
+        className="relative overflow-x-auto rounded border border-rule bg-sheet text-table"
       >
         <table className="w-full border-collapse">
           <caption className="sr-only">Requests, one a row, and what came out</caption>
@@ -224,7 +224,7 @@ function LiveTable({ vocabulary, shape, heading }: TablePageProps) {
               <th scope="col" className="px-1 py-1 text-start align-top font-medium">
                 Resistance
               </th>
-              <th scope="col" className="py-0.5 pe-0.5 text-end align-top">
+              <th scope="col" className="sticky end-0 bg-sheet py-0.5 pe-0.5 text-end align-top">
                 <button
                   type="button"
                   aria-label="Add a column"

@@ -61,7 +61,7 @@ export const TableRow = memo(function TableRow(props: TableRowProps) {
           </span>
         )}
       </td>
-      <td className="pe-0.5 text-end">
+      <td className="sticky end-0 bg-sheet pe-0.5 text-end">
         <button
           type="button"
           aria-label={`Remove row ${number}`}
