@@ -445,3 +445,33 @@ async function isDevelopment(id: string): Promise<boolean> {
   const response = await fetch(`${base()}/embed/${id}`);
   return response.headers.get("content-security-policy")?.includes("'unsafe-eval'") ?? false;
 }
+
+describe("the examples", () => {
+  test.each(["plain", "react", "strict-policy", "two-widgets"])("%s runs as it is served", async (name) => {
+    const { page, complaints } = await newPage();
+    const { id } = widget({
+      inputs: [
+        ...BUSBAR.inputs,
+        { name: "current", rule: { mode: "open", value: "630 A", min: "1 A", max: "4 kA" } },
+      ],
+    });
+    await page.addInitScript(() => {
+      window.events = [];
+      document.addEventListener("rhoform:result", (event) => {
+        window.events.push({ type: "result", id: "", detail: (event as CustomEvent).detail });
+      });
+    });
+    await page.goto(`${base()}/embed-examples/${name}?embed=${id}`);
+    await page.waitForFunction((count) => window.events.length >= count, name === "two-widgets" ? 2 : 1, {
+      timeout: 45_000,
+    });
+    if (name === "two-widgets") {
+      const second = page.frames().find((frame) => frame.url().includes("length=1"));
+      await second?.locator('input[name="current"]').fill("1000");
+      await page.waitForFunction(
+        () => window.events.filter(({ detail }) => Object(detail).operating.current === 1000).length >= 2,
+      );
+    }
+    expect(complaints).toEqual([]);
+  });
+});

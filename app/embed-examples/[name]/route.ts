@@ -19,7 +19,7 @@ export async function GET(request: Request, { params }: Context): Promise<Respon
   const service = sharedService();
   const asked = new URL(request.url).searchParams.get("embed");
   const shown = publishedEmbed(service.db, asked ?? demoEmbedId(service.config.secret));
-  if (!shown) return page(noWidgetPage(), 404, "default-src 'none'");
+  if (!shown) return page(noWidgetPage(), 200, "default-src 'none'");
   const nonce = crypto.randomUUID().replaceAll("-", "");
   const facts = { origin: originOf(request, service.config.origin), embed: shown.embed.id, nonce };
   const usual = `default-src 'self'; style-src 'nonce-${nonce}'; script-src 'self' 'nonce-${nonce}'`;

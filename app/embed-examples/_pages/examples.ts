@@ -117,7 +117,7 @@ export function examplePage(example: Example, facts: ExampleFacts): string {
 <meta charset="utf-8">
 <meta name="viewport" content="width=device-width, initial-scale=1">
 <title>${example.title} · widgets</title>
-<style nonce="${facts.nonce}">${STYLE}</style>
+${example.policy ? "" : '<link rel="icon" href="/icon.svg">\n'}<style nonce="${facts.nonce}">${STYLE}</style>
 </head>
 <body>
 <main>

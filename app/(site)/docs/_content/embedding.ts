@@ -78,6 +78,67 @@ export const embedding: DocPage = {
       ],
     },
     {
+      id: "iframe",
+      title: "Without scripts, or in a sandbox",
+      blocks: [
+        "Where a page or a wiki allows no scripts of its own, a plain frame does; it cannot follow its content's height, and values go into its address:",
+        {
+          snippets: [
+            {
+              language: "text",
+              label: "HTML with a plain iframe",
+              code: [
+                `<iframe src="${origin}/embed/emb_…?length=1.2m&lang=de&theme=light"`,
+                '  title="Busbar section" width="480" height="720"',
+                '  style="border: 0; max-width: 100%"></iframe>',
+              ].join("\n"),
+              shownOnly: true,
+            },
+          ],
+        },
+        "A frame with `sandbox` needs `allow-scripts` and nothing else; without it the frame says what is missing. With `allow-popups` its link to this service opens.",
+        "Files opened from a disk have no origin, so no widget can name them: serve the page.",
+      ],
+    },
+    {
+      id: "errors",
+      title: "When there is no answer",
+      blocks: [
+        "`rhoform:error` carries a `code` and a `message`; the frame says the same calmly and keeps what was typed.",
+        {
+          table: {
+            head: ["`code`", "meaning"],
+            rows: [
+              ["`fields`", "a value cannot be used; `errors` names the inputs"],
+              ["`quota`", "the month's computations are used up; the frame says when they return"],
+              ["`pause`", "too many calls in this minute; the frame asks again by itself"],
+              ["`away`", "the service cannot be reached; it is asked again"],
+              ["`stale`", "another version was published; the frame offers to reload"],
+              ["`gone`, `withdrawn`", "the widget was withdrawn, while it was open or before"],
+              ["`not-found`", "no widget is published under this id"],
+              ["`refused`", "the page's origin is not among those of the widget"],
+              ["`policy`", "the page's own policy has no `frame-src` for this service"],
+            ],
+          },
+        },
+      ],
+    },
+    {
+      id: "examples",
+      title: "Examples",
+      blocks: [
+        {
+          list: [
+            "[Plain HTML](/embed-examples/plain)",
+            "[React](/embed-examples/react), by `RhoformEmbed` of `@rhoform/client/react`",
+            "[A page with a strict policy](/embed-examples/strict-policy)",
+            "[Two widgets that feed each other](/embed-examples/two-widgets)",
+          ],
+        },
+        "They show the demo's widget, or yours: add `?embed=emb_…` to the address. `@rhoform/client/embed` has the types of the element and its events, and `loadEmbeds(origin)`, which loads it once.",
+      ],
+    },
+    {
       id: "withdraw",
       title: "Withdraw it",
       blocks: [
