@@ -2,8 +2,9 @@ import { describe, expect, it } from "vitest";
 import { recordContent } from "@/app/(site)/records/_content/build-content";
 import { readRecordCode, recordCode } from "@/app/(site)/records/_content/record-code";
 import { sheetPdf } from "@/app/(site)/records/_sheet/sheet-pdf";
-import { computeResistance, exampleRequest, findShape, libraryMaterial } from "@/lib/engine";
+import { computeResistance, computeSizing, exampleRequest, findShape, libraryMaterial } from "@/lib/engine";
 import type { RecordView } from "@/lib/records/records";
+import { BEND } from "../support/field";
 import { pdfPages, pdfTitle } from "../support/pdf-text";
 
 const INCLUDE = ["steps", "profile", "checks", "peak"];
@@ -119,6 +120,46 @@ describe("what a record tells", () => {
   it("shows what was stored as it is where it does not know the form", () => {
     const odd = contentOf({ ...recordOf(BAR), operation: "sizing", result: { solutions: [] } });
     expect(odd.sections.map(({ id }) => id)).toEqual(["request", "result", "versions"]);
+  });
+});
+
+describe("a sizing's record", () => {
+  const sizing = (request: Readonly<Record<string, unknown>>, result: unknown) =>
+    contentOf({ ...recordOf(BAR, "Width of the link"), operation: "sizing", request, result });
+
+  it("has the dimension found, what was looked for, and the shape with it", () => {
+    const { requirement: _requirement, uncertainty: _uncertainty, ...rest } = BAR;
+    const request = {
+      ...rest,
+      dimensions: { length: "250 mm", thickness: "5 mm" },
+      solveFor: "width",
+      target: "20 uohm",
+    };
+    const result = computeSizing(request, { material: libraryMaterial });
+    const content = sizing(request, result);
+    expect(content.headline.title).toBe("Width for 20\u2009µΩ");
+    expect(content.headline.text).toBe(result.solutions[0].dimension.text);
+    expect(content.picture?.kind).toBe("shape");
+    expect(content.sections.map(({ id }) => id)).toEqual(
+      expect.arrayContaining(["solutions", "inputs", "checks"]),
+    );
+  });
+
+  it("draws the outline that was scaled", () => {
+    const { solutions, ...rest } = computeSizing(
+      {
+        shape: "bar",
+        dimensions: { length: 1, thickness: 1 },
+        medium: { resistivity: 1 },
+        solveFor: "width",
+        target: 1,
+      },
+      { material: libraryMaterial },
+    );
+    const result = { ...rest, shape: undefined, solveFor: "scaleX", solutions };
+    const content = sizing({ ...BEND, solveFor: "scaleX", target: "400 ohm" }, result);
+    expect(content.subject).toBe("Outline: sizing");
+    expect(content.picture?.kind === "svg" && content.picture.svg).toContain("<tspan");
   });
 });
 

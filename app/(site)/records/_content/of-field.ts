@@ -11,7 +11,8 @@ import { plainNumber } from "./typed";
 
 const given = z.record(z.string(), z.unknown());
 
-const storedRequest = z.object({
+/** The members of a field request that a record tells. */
+export const storedFieldRequest = z.object({
   outline: storedOutline,
   terminals: storedTerminals,
   medium: given,
@@ -19,7 +20,7 @@ const storedRequest = z.object({
   operating: given.optional(),
   requirement: given.optional(),
 });
-type StoredRequest = z.infer<typeof storedRequest>;
+type StoredRequest = z.infer<typeof storedFieldRequest>;
 
 /** `plot` is the finished picture, where its map is still kept; without it the outline is drawn. */
 export function tellField(
@@ -28,7 +29,7 @@ export function tellField(
   lookUp: LookUp,
   plot: string | null,
 ): Told | null {
-  const asked = storedRequest.safeParse(request);
+  const asked = storedFieldRequest.safeParse(request);
   const answer = fieldResultSchema.safeParse(result);
   if (!asked.success || !answer.success) return null;
   const picture: Picture = plot
@@ -47,7 +48,7 @@ export function tellField(
     headline: headlineOf(answer.data),
     picture,
     cautions: answer.data.cautions,
-    sections: [...inputs(asked.data, answer.data, lookUp), ...answers(answer.data)],
+    sections: [...outlineSections(asked.data, answer.data.materials, lookUp), ...answers(answer.data)],
   };
 }
 
@@ -85,7 +86,12 @@ function pairBracket({
 /** Longer outlines are in the stored request; a sheet of paper is not the place for ten thousand vertices. */
 const MOST_VERTICES = 120;
 
-function inputs(request: StoredRequest, result: FieldResult, lookUp: LookUp): Section[] {
+/** Outline, terminals, medium with its materials, and what was asked for. */
+export function outlineSections(
+  request: StoredRequest,
+  materials: FieldResult["materials"],
+  lookUp: LookUp,
+): Section[] {
   const { outline, terminals, accuracy } = request;
   const vertices = outline.outer.length + outline.holes.reduce((sum, ring) => sum + ring.length, 0);
   const facts: Fact[] = [
@@ -111,7 +117,7 @@ function inputs(request: StoredRequest, result: FieldResult, lookUp: LookUp): Se
     {
       id: "medium",
       title: "Medium",
-      blocks: [...mediumBlocks(request.medium, undefined), ...materialBlocks(result.materials, lookUp)],
+      blocks: [...mediumBlocks(request.medium, undefined), ...materialBlocks(materials, lookUp)],
     },
     ...(asked.length > 0 ? [{ id: "asked", title: "Asked for", blocks: asked }] : []),
   ];

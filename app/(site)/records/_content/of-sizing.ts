@@ -1,83 +1,93 @@
-/** What a record of `sizing` tells: the dimension that was looked for, its solutions, and the shape at the first. */
+/** What a record of `sizing` tells: the dimension or scale that was looked for, its solutions, and what it rests on. */
 import { z } from "zod";
-import { findShape, shapeEntry, sizingResultSchema } from "@/lib/engine";
-import { bracketOf, verdictOf } from "./answer";
-import type { Block, Told } from "./content";
+import { findShape, shapeEntry, sizingResultSchema, type SizingResult } from "@/lib/engine";
+import { checksSection, linesSection, operatingFacts, sourceLines } from "./answer";
+import type { Told } from "./content";
 import { shapePicture } from "./inputs";
-import { INPUT_COLUMNS } from "./medium";
+import { outlineSections, storedFieldRequest } from "./of-field";
 import { answerSections, inputSections, type LookUp, storedRequest } from "./of-resistance";
-import { plainNumber, siText, typedText, words } from "./typed";
+import { outlineSvg } from "./outline-svg";
+import { allCautions, lookedFor, sizingHeadline, solutionsTable } from "./sizing-answer";
+import { words } from "./typed";
 
-const sizingRequest = storedRequest.extend({
-  solveFor: z.string(),
-  target: z.unknown().optional(),
-  within: z.array(z.unknown()).optional(),
-});
+const sought = { solveFor: z.string(), target: z.unknown().optional() };
+const onShape = storedRequest.extend(sought);
+const onOutline = storedFieldRequest.extend(sought);
 
 /** Null where the record was stored in a form that today's service no longer reads. */
 export function tellSizing(request: unknown, result: unknown, lookUp: LookUp): Told | null {
-  const asked = sizingRequest.safeParse(request);
   const answer = sizingResultSchema.safeParse(result);
-  const first = answer.data?.solutions[0];
-  if (!asked.success || !answer.success || !first) return null;
-  const { shape: shapeId, dimensions, solveFor, target } = asked.data;
-  const { solutions, within, materials } = answer.data;
+  if (!answer.success || answer.data.solutions.length === 0) return null;
+  const shape = onShape.safeParse(request);
+  if (shape.success) return ofShape(shape.data, answer.data, lookUp);
+  const outline = onOutline.safeParse(request);
+  return outline.success ? ofOutline(outline.data, answer.data, lookUp) : null;
+}
+
+function ofShape(asked: z.infer<typeof onShape>, result: SizingResult, lookUp: LookUp): Told {
+  const { shape: shapeId, dimensions, solveFor, target } = asked;
+  const [first] = result.solutions;
   const shape = findShape(shapeId);
   const dimension = shape && shapeEntry(shape).dimensions.find(({ name }) => name === solveFor);
   const label = dimension?.label ?? words(solveFor);
-  const looked: Block = {
-    kind: "table",
-    label: "What was looked for",
-    columns: INPUT_COLUMNS,
-    rows: [
-      ["Looked for", label, ""],
-      ["Target", typedText(target, "resistance"), siText(target, "resistance")],
-      ["Searched", `${within[0].text} to ${within[1].text}`, ""],
-    ],
-  };
-  const unit = first.dimension.unit === "1" ? "unit" : first.dimension.unit.replace("m^2", "m²");
-  const found: Block = {
-    kind: "table",
-    label: "Solutions",
-    columns: [
-      { title: label, numeric: true },
-      { title: "Resistance", numeric: true },
-      { title: "Bounds", numeric: true, weight: 2 },
-      { title: `Change, Ω per ${unit}`, numeric: true },
-    ],
-    rows: solutions.map(({ dimension: at, resistance, sensitivity }) => [
-      at.text,
-      resistance.text,
-      bracketOf(resistance),
-      plainNumber(Number(sensitivity.toPrecision(4))),
-    ]),
-  };
-  const [inputs, ...others] = inputSections(asked.data, materials, lookUp);
-  const rest = { shape: shapeId, assumptions: answer.data.assumptions, sources: answer.data.sources };
+  const [inputs, ...others] = inputSections(asked, result.materials, lookUp);
+  const rest = { shape: shapeId, assumptions: result.assumptions, sources: result.sources };
   return {
     subject: `${shape?.title ?? words(shapeId)}: sizing`,
-    headline: {
-      title: `${label} for ${answer.data.target.text}`,
-      text: solutions.map(({ dimension: at }) => at.text).join(" or "),
-      bracket: null,
-      statements: [
-        `There the resistance is ${first.resistance.text} ${bracketOf(first.resistance)}.`,
-        ...(solutions.length > 1
-          ? [`${solutions.length} values lie in the range; the drawing has the first.`]
-          : []),
-        ...(first.exact ? [] : ["No whole number gives the target; these lie on either side of it."]),
-      ],
-      verdict: verdictOf(first.verdict),
-    },
+    headline: sizingHeadline(label, result),
     picture: shapePicture(shapeId, { ...dimensions, [solveFor]: first.dimension.value }),
-    cautions: [...new Set(solutions.flatMap(({ cautions }) => cautions))],
+    cautions: allCautions(result),
     sections: [
-      { id: "solutions", title: "Solutions", blocks: [found] },
-      { ...inputs, blocks: [looked, ...inputs.blocks] },
+      { id: "solutions", title: "Solutions", blocks: [solutionsTable(label, result)] },
+      { ...inputs, blocks: [lookedFor(label, target, result), ...inputs.blocks] },
       ...others,
-      ...answerSections(asked.data, { ...first, ...rest }).map((section) =>
+      ...answerSections(asked, { ...first, ...rest }).map((section) =>
         section.id === "answer" ? { ...section, title: `Answer at ${first.dimension.text}` } : section,
       ),
+    ],
+  };
+}
+
+const SCALES: Readonly<Record<string, string>> = {
+  scale: "Scale",
+  scaleX: "Scale in x",
+  scaleY: "Scale in y",
+};
+
+function ofOutline(asked: z.infer<typeof onOutline>, result: SizingResult, lookUp: LookUp): Told {
+  const { outline, terminals, solveFor, target } = asked;
+  const [first] = result.solutions;
+  const label = SCALES[solveFor] ?? words(solveFor);
+  const [inputs, ...others] = outlineSections(asked, result.materials, lookUp);
+  return {
+    subject: "Outline: sizing",
+    headline: sizingHeadline(label, result),
+    picture: {
+      kind: "svg",
+      svg: outlineSvg(outline, terminals),
+      description: "The outline with its terminals, before it is scaled.",
+    },
+    cautions: allCautions(result),
+    sections: [
+      { id: "solutions", title: "Solutions", blocks: [solutionsTable(label, result)] },
+      { ...inputs, blocks: [lookedFor(label, target, result), ...inputs.blocks] },
+      ...others,
+      {
+        id: "answer",
+        title: `Answer at the scale ${first.dimension.text}`,
+        blocks: [
+          {
+            kind: "facts",
+            facts: [
+              { name: "Conductance", value: first.conductance.text },
+              ...operatingFacts(first.operating),
+            ],
+          },
+        ],
+      },
+      ...checksSection(first.checks),
+      ...linesSection("assumptions", "Assumptions", result.assumptions),
+      ...linesSection("sources", "Sources", sourceLines(result.sources)),
     ],
   };
 }

@@ -1,9 +1,13 @@
 "use client";
 
 import { useState } from "react";
+import { FileButton } from "../../../../_ui/file-button";
+import { Help } from "../../../../_ui/help";
+import { LocalTime } from "../../../../_ui/local-time";
 import { QuantityInput } from "../../../../_ui/quantity-input";
 import { Segmented } from "../../../../_ui/segmented";
 import { Select } from "../../../../_ui/select";
+import { TextField } from "../../../../_ui/text-field";
 import { Toggle } from "../../../../_ui/toggle";
 import { Exhibit } from "./exhibit";
 
@@ -12,7 +16,7 @@ const CHOICES = [
   { value: "centre", label: "Centre" },
 ] as const;
 
-/** Fields: quantities with their units, choices, switches. */
+/** Fields: quantities with their units, texts, files, choices, switches. */
 export function FieldExhibits() {
   const [length, setLength] = useState("12.5 mm");
   const [foil, setFoil] = useState("1 oz/ft^2");
@@ -21,6 +25,7 @@ export function FieldExhibits() {
   const [resistivity, setResistivity] = useState("1.72e-8 ohm m");
   const [choice, setChoice] = useState<"edge" | "centre">("edge");
   const [on, setOn] = useState(true);
+  const [read, setRead] = useState<string | null>(null);
   return (
     <>
       <Exhibit
@@ -74,6 +79,32 @@ export function FieldExhibits() {
         <p className="text-small text-ink-soft">
           Texts for the API: <code>{[length, foil, temperature, resistivity, wrong].join(" · ")}</code>
         </p>
+      </Exhibit>
+      <Exhibit title="Texts and files" note="A moment is shown in the reader’s own time, its zone on hover.">
+        <div className="grid items-start gap-x-3 gap-y-2 medium:grid-cols-2 wide:grid-cols-3">
+          <TextField label="Name of the record" defaultValue="Main bar, panel 2" />
+          <TextField
+            label="With a complaint"
+            defaultValue="ines.hartwell"
+            help="An e-mail address."
+            error="Must be an e-mail address, such as ines.hartwell@merrow-pike.example."
+          />
+          <TextField label="Not available" defaultValue="Busbar" disabled />
+          <div>
+            <p className="text-table font-medium">Help behind a button</p>
+            <Help about="the record" text="A record keeps the request, the answer and all versions." />
+          </div>
+          <div>
+            <p className="mb-0.5 text-table font-medium">A file</p>
+            <FileButton label="Read a CSV file" accept=".csv,text/csv" onText={setRead} />
+            <p className="mt-0.5 text-small text-ink-soft">
+              {read === null ? "Nothing is read yet." : `${read.length} characters are read.`}
+            </p>
+          </div>
+          <p className="text-table">
+            Stored <LocalTime at="2026-03-04T05:06:07.000Z" />
+          </p>
+        </div>
       </Exhibit>
       <Exhibit title="Choices" note="Few short ones stand in sight; more go into a list.">
         <div className="grid gap-x-3 gap-y-2 medium:grid-cols-2 wide:grid-cols-3">
