@@ -62,14 +62,16 @@ function TerminalItem({ terminal, index }: { readonly terminal: Terminal; readon
   return (
     <li className={`border-s-4 ps-1 ${MARKS[Math.min(index, 2)]}`}>
       <div className="flex items-center gap-0.5">
-        <input
-          type="radio"
-          name="terminal"
-          aria-label={`Edges go to ${name}`}
-          checked={index === current}
-          onChange={() => setTerminal(index)}
-          className="size-2.5 shrink-0 accent-copper max-medium:m-1.5"
-        />
+        <label className="grid min-h-5.5 min-w-5.5 cursor-pointer place-items-center medium:min-h-4 medium:min-w-3">
+          <input
+            type="radio"
+            name="terminal"
+            aria-label={`Edges go to ${name}`}
+            checked={index === current}
+            onChange={() => setTerminal(index)}
+            className="size-2.5 accent-copper"
+          />
+        </label>
         <input
           aria-label={`Name of terminal ${index + 1}`}
           aria-invalid={complaint ? true : undefined}

@@ -5,6 +5,7 @@ import { boundaryRings } from "./boundary-rings";
 import { densityRamp } from "./color-ramp";
 import { fieldLines } from "./contours";
 import type { FieldMap } from "./field-map";
+import { regionBorders } from "./region-borders";
 import { densityRaster, type DensityRaster } from "./raster";
 import { placeLabel, TERMINAL_COLOURS } from "./terminal-label";
 
@@ -59,6 +60,9 @@ export function plotSvg(map: FieldMap, text: PlotText): string {
     .flatMap((level) => level.lines.map((line) => path(line)))
     .join("");
   const streamlines = lines.streamlines.map((line) => path(line)).join("");
+  const borders = regionBorders(map)
+    .map((segment) => path(segment))
+    .join("");
   const total = HEAD + height + FOOT;
   const frame = { left: MARGIN, right: WIDTH - MARGIN };
   const terminals = pieces.map(({ terminal, line }) => {
@@ -92,6 +96,9 @@ export function plotSvg(map: FieldMap, text: PlotText): string {
     ),
     `<path d="${equipotentials}" fill="none" stroke="#1b2226" stroke-width="0.8"/>`,
     `<path d="${streamlines}" fill="none" stroke="#1f6f62" stroke-width="0.8" stroke-dasharray="6 3"/>`,
+    borders === ""
+      ? ""
+      : `<path d="${borders}" fill="none" stroke="#1b2226" stroke-width="2" stroke-linecap="round"/>`,
     `</g>`,
     `<path d="${outline}" fill="none" stroke="#1b2226" stroke-width="1.5" stroke-linejoin="round"/>`,
     axis,
