@@ -62,6 +62,28 @@ describe("several solutions, one and none", () => {
     }
   });
 
+  // Wide ends of a steep taper: the bracket's middle rises again, since the walls bound does.
+  it.each([
+    ["tapered-strip", "startWidth", { length: "80 mm", endWidth: "10 mm", thickness: "2 mm" }],
+    ["tapered-strip", "endWidth", { length: "80 mm", startWidth: "30 mm", thickness: "2 mm" }],
+    ["cone-frustum", "startDiameter", { length: "80 mm", endDiameter: "20 mm" }],
+  ])("finds both of %s: %s", (shape, solveFor, dimensions) => {
+    const medium = { resistivity: 1.7e-8 };
+    const at = (size: number): number =>
+      compute({ shape, dimensions: { ...dimensions, [solveFor]: size }, medium, include: [] }).resistance
+        .value;
+    const sizes = Array.from({ length: 2000 }, (_, k) => 1e-3 * 1.005 ** k);
+    const least = Math.min(...sizes.map(at));
+    for (const target of [least * 1.01, least * 1.2]) {
+      const found = size({ shape, dimensions, medium, include: [], solveFor, target }).solutions;
+      expect(found).toHaveLength(2);
+      for (const { resistance } of found) expect(Math.abs(resistance.value / target - 1)).toBeLessThan(1e-12);
+    }
+    expect(
+      refused({ shape, dimensions, medium, solveFor, target: least * 0.9, within: ["1 mm", "20 m"] }),
+    ).toMatch(/at \w+ = 1 mm and .* at \w+ = 20 m, and between them /);
+  });
+
   it("follows a shape to the edge where it vanishes", () => {
     // A wall of 1e-9 of the radius, found by the outer radius alone.
     const { solutions } = size({

@@ -110,6 +110,22 @@ describe("worst case where the resistance is not monotone", () => {
     expect(basis).toMatch(/rises and falls with operating\.temperature/);
   });
 
+  it("in a dimension: the wide end of a steep taper", () => {
+    const body = (startWidth: unknown): Body => ({
+      shape: "tapered-strip",
+      dimensions: { length: "80 mm", endWidth: "10 mm", thickness: "2 mm", startWidth },
+      medium: { resistivity: 1.7e-8 },
+    });
+    const { low, high, basis } = uncertaintyOf(body({ value: 0.2, plus: 2, minus: 0.15 }), {
+      method: "worst-case",
+    });
+    const [least, most] = dense(steps(0.05, 2.2), body);
+    expect(low).toBeLessThanOrEqual(least);
+    expect(Math.abs(low / least - 1)).toBeLessThan(1e-5);
+    expect(Math.abs(high / most - 1)).toBeLessThan(1e-12);
+    expect(basis).toMatch(/both rises and falls with dimensions\.startWidth/);
+  });
+
   it("in the centre of a bell across the length of a bar", () => {
     const body = (center: unknown): Body => ({
       shape: "bar",
