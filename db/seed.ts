@@ -17,6 +17,7 @@ import { personByEmail, updatePerson } from "./queries/people";
 import { readSetting, writeSetting } from "./queries/settings";
 import { insertMembership, insertPerson, insertTeam, type Team, teamBySlug } from "./queries/teams";
 import type { Role } from "./schema/organisation";
+import { seedHistory } from "./seed-history";
 
 interface DemoTeam {
   readonly slug: string;
@@ -115,7 +116,10 @@ export function seedDemo(service: Service): void {
         }
       }
       seedKey(service, team);
-      if (fresh) seedRecords(service, team, demo.records);
+      if (fresh) {
+        seedHistory(db, team, { ...SHELL, name: "Demo" }, now());
+        seedRecords(service, team, demo.records);
+      }
       if (team.slug === "busbar") seedEmbed(service, team);
     }
     const first = personByEmail(db, DEMO_EMAIL);

@@ -2,7 +2,7 @@ import { and, desc, eq, gte, inArray, lt, type SQL, sql } from "drizzle-orm";
 import type { Database } from "../client";
 import { usageEvents, usageHourLatencies } from "../schema/usage";
 import { latencyBucket } from "./usage";
-import type { UsageScope } from "./usage-sums";
+import { eachTeam, type UsageScope } from "./usage-sums";
 
 export type UsageEventRow = typeof usageEvents.$inferSelect;
 
@@ -96,13 +96,7 @@ export function slowestEvents(
   const buckets = db
     .select({ hour: table.hour, teamId: table.teamId, bucket: table.bucket, requests: table.requests })
     .from(table)
-    .where(
-      and(
-        gte(table.hour, hours.from),
-        lt(table.hour, hours.to + 1),
-        scope.teamIds === "all" ? undefined : inArray(table.teamId, [...scope.teamIds]),
-      ),
-    )
+    .where(and(gte(table.hour, hours.from), lt(table.hour, hours.to + 1), eachTeam(scope, table.teamId)))
     .orderBy(desc(table.bucket))
     .limit(most)
     .all();

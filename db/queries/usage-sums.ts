@@ -2,7 +2,15 @@ import { and, asc, eq, gte, inArray, lte, type SQL, sql } from "drizzle-orm";
 import type { SQLiteColumn } from "drizzle-orm/sqlite-core";
 import type { Database } from "../client";
 import { keys } from "../schema/keys";
-import { usageDayClients, usageDayDetails, usageDays, usageHourLatencies, usageHours } from "../schema/usage";
+import { teams } from "../schema/organisation";
+import {
+  usageDayClients,
+  usageDayDetails,
+  usageDayLatencies,
+  usageDays,
+  usageHourLatencies,
+  usageHours,
+} from "../schema/usage";
 
 /** Whose usage is asked for: of some teams, or of everybody, signed-out pages included; perhaps of one key. */
 export interface UsageScope {
@@ -194,35 +202,47 @@ export function usageShares(db: Database, scope: UsageScope, days: Days, by: Bre
     db
       .select({ name: column, ...sums })
       .from(table)
-      .where(and(within(scope, table.teamId), between(table.day, days)))
+      .where(and(eachTeam(scope, table.teamId), between(table.day, days)))
       .groupBy(column)
       .all(),
   );
 }
 
-/** Requests by bucket of latency over some days, whole or day by day (`at`), lowest bucket first. */
+/** Requests by bucket of latency over some days, whole or day by day or hour by hour (`at`), lowest bucket first. */
 export function latencyBuckets(
   db: Database,
   scope: UsageScope,
   days: Days,
   by: "all" | "day" | "hour",
 ): { at: number; bucket: number; requests: number }[] {
-  const table = usageHourLatencies;
-  const at = {
-    // Not a bare 0: ORDER BY would take it for a column's number.
-    all: sql<number>`${table.hour} * 0`,
-    day: sql<number>`${table.hour} / 24`,
-    hour: sql<number>`${table.hour}`,
-  }[by];
+  if (by === "hour") {
+    const table = usageHourLatencies;
+    const hours = { from: days.from * 24, to: days.to * 24 + 23 };
+    return db
+      .select({ at: table.hour, bucket: table.bucket, requests: sql<number>`sum(${table.requests})` })
+      .from(table)
+      .where(and(eachTeam(scope, table.teamId), between(table.hour, hours)))
+      .groupBy(table.hour, table.bucket)
+      .orderBy(asc(table.hour), asc(table.bucket))
+      .all();
+  }
+  const table = usageDayLatencies;
+  // Not a bare 0: ORDER BY would take it for a column's number.
+  const at = by === "day" ? sql<number>`${table.day}` : sql<number>`${table.day} * 0`;
   return db
     .select({ at, bucket: table.bucket, requests: sql<number>`sum(${table.requests})` })
     .from(table)
-    .where(
-      and(within(scope, table.teamId), between(table.hour, { from: days.from * 24, to: days.to * 24 + 23 })),
-    )
+    .where(and(eachTeam(scope, table.teamId), between(table.day, days)))
     .groupBy(at, table.bucket)
     .orderBy(asc(at), asc(table.bucket))
     .all();
+}
+
+/** The teams of a scope one by one, so that an index that begins with the team serves everybody's usage as well. */
+export function eachTeam({ teamIds }: UsageScope, column: SQLiteColumn): SQL {
+  return teamIds === "all"
+    ? sql`${column} in (select ${teams.id} from ${teams} union all select '')`
+    : inArray(column, [...teamIds]);
 }
 
 /** Kinds of client that called with a key since a day, the latest first. */

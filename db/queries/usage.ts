@@ -3,6 +3,7 @@ import { type Database, prepared } from "../client";
 import {
   usageDayClients,
   usageDayDetails,
+  usageDayLatencies,
   usageDays,
   usageEvents,
   usageHourLatencies,
@@ -121,6 +122,14 @@ function statements(db: Database) {
         set: { requests: sql`requests + 1` },
       })
       .prepare(),
+    dayLatency: db
+      .insert(usageDayLatencies)
+      .values({ day: place("day"), teamId: place("teamId"), bucket: place("bucket"), requests: sql`1` })
+      .onConflictDoUpdate({
+        target: [usageDayLatencies.teamId, usageDayLatencies.day, usageDayLatencies.bucket],
+        set: { requests: sql`requests + 1` },
+      })
+      .prepare(),
     client: db
       .insert(usageDayClients)
       .values({
@@ -161,6 +170,7 @@ export function insertUsage(db: Database, event: UsageEvent): void {
   run.day.run(row);
   run.detail.run(row);
   run.latency.run(row);
+  run.dayLatency.run(row);
   run.client.run(row);
   markUsed(db, event.keyId, event.at, event.client);
 }

@@ -118,3 +118,15 @@ export const usageDayClients = sqliteTable(
     index("usage_day_clients_day").on(table.day),
   ],
 );
+
+/** The same histogram by day, for months: an hour's is too many rows there. */
+export const usageDayLatencies = sqliteTable(
+  "usage_day_latencies",
+  {
+    day: integer().notNull(),
+    teamId: text("team_id").notNull(),
+    bucket: integer().notNull(),
+    requests: integer().notNull(),
+  },
+  (table) => [primaryKey({ columns: [table.teamId, table.day, table.bucket] })],
+);

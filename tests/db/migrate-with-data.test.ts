@@ -26,7 +26,7 @@ function migrationsBefore(name: string): string {
   return folder;
 }
 
-test("an installation in use gets its clients by day and its records by material", () => {
+test("an installation in use gets its clients and latencies by day and its records by material", () => {
   const db = openDatabase(":memory:");
   opened.push(db);
   migrateDatabase(db, migrationsBefore("0006"));
@@ -40,6 +40,8 @@ test("an installation in use gets its clients by day and its records by material
       (${at + 9}, 'r2', 'k1', 't1', 'computeResistance', 'bar', 200, 900, 4, 'python'),
       (${at + 7}, 'r3', 'k1', 't1', 'computeResistance', null, 422, 200, 0, 'browser'),
       (${at + 86_400_000}, 'r4', 'k1', 't1', 'computeResistance', 'bar', 200, 900, 1, 'python');
+    insert into usage_hour_latencies (hour, team_id, bucket, requests) values
+      (${day * 24}, 't1', 39, 2), (${day * 24 + 23}, 't1', 39, 1), (${day * 24 + 24}, 't1', 30, 5);
     insert into records
       (id, team_id, operation, label, shape, created_at, by_kind, by_id, by_name, request, result, materials, engine, catalogue)
       values ('rec1', 't1', 'resistance', 'A', 'bar', 10, 'key', 'k1', 'K', '{}', '{}',
@@ -58,6 +60,10 @@ test("an installation in use gets its clients by day and its records by material
   expect(all("select material_id, record_id, version, created_at from record_materials order by 1")).toEqual([
     ["copper-annealed", "rec1", 1, 10],
     ["mat-x", "rec1", 3, 10],
+  ]);
+  expect(all("select day, bucket, requests from usage_day_latencies order by day")).toEqual([
+    [day, 39, 3],
+    [day + 1, 30, 5],
   ]);
   db.$client.prepare("delete from records where id = 'rec1'").run();
   expect(all("select * from record_materials")).toEqual([]);
