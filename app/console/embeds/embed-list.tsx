@@ -1,6 +1,7 @@
 "use client";
 
 import Link from "next/link";
+import { useSearchParams } from "next/navigation";
 import { useState } from "react";
 import type { EmbedRowView } from "@/lib/embeds/embed-list";
 import { Button } from "../../_ui/button";
@@ -94,7 +95,10 @@ const FILTERS = ["state"];
 export function EmbedList({ teams, ownTeam, shapes }: EmbedListProps) {
   const state = useListState({ sort: "-createdAt", filters: FILTERS });
   const { data, error, isValidating, mutate } = useConsole<ListPage<EmbedRowView>>(`embeds?${state.query}`);
-  const [making, setMaking] = useState(false);
+  // A calculation page leads here with its shape and its values.
+  const address = useSearchParams();
+  const wanted = shapes.find(({ id }) => id === address.get("shape"));
+  const [making, setMaking] = useState(wanted !== undefined);
   const mayMake = teams.length > 0;
   return (
     <>
@@ -131,8 +135,15 @@ export function EmbedList({ teams, ownTeam, shapes }: EmbedListProps) {
           </EmptyState>
         }
       />
-      {making ? (
-        <NewEmbed teams={teams} ownTeam={ownTeam} shapes={shapes} onClose={() => setMaking(false)} />
+      {making && mayMake ? (
+        <NewEmbed
+          teams={teams}
+          ownTeam={ownTeam}
+          shapes={shapes}
+          shape={wanted?.id}
+          values={wanted ? Object.fromEntries(address) : {}}
+          onClose={() => setMaking(false)}
+        />
       ) : null}
     </>
   );

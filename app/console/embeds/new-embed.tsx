@@ -16,11 +16,14 @@ interface NewEmbedProps {
   readonly teams: readonly { readonly id: string; readonly name: string }[];
   readonly ownTeam: string;
   readonly shapes: readonly ShapeChoice[];
+  /** Shape and values of the calculation page that led here. */
+  readonly shape: string | undefined;
+  readonly values: Readonly<Record<string, string>>;
   readonly onClose: () => void;
 }
 
 /** Asks for what a new widget needs; everything else is the builder's. */
-export function NewEmbed({ teams, ownTeam, shapes, onClose }: NewEmbedProps) {
+export function NewEmbed({ teams, ownTeam, shapes, shape, values, onClose }: NewEmbedProps) {
   const router = useRouter();
   const form = useId();
   const errors = useFormErrors();
@@ -37,6 +40,8 @@ export function NewEmbed({ teams, ownTeam, shapes, onClose }: NewEmbedProps) {
         name: String(data.get("name") ?? ""),
         shape: String(data.get("shape") ?? ""),
         teamId: String(data.get("teamId") ?? ""),
+        // Of another shape than the page's the values would mean nothing.
+        ...(data.get("shape") === shape ? { values: short(values) } : {}),
       });
       router.push(`/console/embeds/${embed.id}`);
     } catch (error) {
@@ -69,6 +74,8 @@ export function NewEmbed({ teams, ownTeam, shapes, onClose }: NewEmbedProps) {
         <Select
           label="Shape"
           name="shape"
+          defaultValue={shape}
+          help={shape === undefined ? undefined : "With the values of the calculation you came from."}
           error={errors.of("shape")}
           options={shapes.map(({ id, title }) => ({ value: id, label: title }))}
         />
@@ -83,4 +90,9 @@ export function NewEmbed({ teams, ownTeam, shapes, onClose }: NewEmbedProps) {
       </form>
     </Dialog>
   );
+}
+
+/** Long profiles and lists are for the builder. */
+function short(values: Readonly<Record<string, string>>): Record<string, string> {
+  return Object.fromEntries(Object.entries(values).filter(([, value]) => value.length <= 120));
 }

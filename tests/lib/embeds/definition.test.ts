@@ -1,11 +1,12 @@
 import { describe, expect, test } from "vitest";
-import { catalogue, exampleRequest, libraryMaterial } from "@/lib/engine";
+import { catalogue, exampleRequest, findShape, libraryMaterial } from "@/lib/engine";
 import { definitionProblems } from "@/lib/embeds/check-definition";
 import { accentContrasts, contrastOf } from "@/lib/embeds/contrast";
 import { embedDefinition, embedSettings, type InputRule } from "@/lib/embeds/definition";
 import { widgetRequest } from "@/lib/embeds/enforce";
 import { inputsOf } from "@/lib/embeds/inputs";
 import { speechOf } from "@/lib/embeds/language";
+import { startDefinition } from "@/lib/embeds/start-definition";
 import { BUSBAR, definition } from "../../support/widget";
 
 const problems = (change: Parameters<typeof definition>[0]) =>
@@ -132,5 +133,34 @@ describe("speechOf", () => {
     expect(speechOf("ja", "de", null)).toEqual({ language: "ja", locale: "ja" });
     expect(speechOf("reader", "xx-<b>", "zh;q=oops, *;q=0.1")).toEqual({ language: "en", locale: "en" });
     expect(speechOf("reader", "de-x-y-z-a-b-c-d", "de-AT")).toEqual({ language: "de", locale: "de-AT" });
+  });
+});
+
+describe("startDefinition", () => {
+  test("of every shape can be published as it is", () => {
+    for (const shape of catalogue) {
+      const found = definitionProblems(startDefinition(shape), libraryMaterial);
+      expect([shape.id, found]).toEqual([shape.id, []]);
+    }
+  });
+
+  test("takes the values of a calculation page, and leaves what it does not know", () => {
+    const bar = findShape("bar");
+    if (!bar) throw new Error("The catalogue lacks the bar.");
+    const values = {
+      length: "1 m",
+      width: "2 mm",
+      thickness: "1 mm",
+      resistivity: "2e-8",
+      A: "x",
+      shape: "bar",
+    };
+    const { inputs } = startDefinition(bar, values);
+    expect(inputs).toEqual([
+      { name: "length", rule: { mode: "open", value: "1 m" } },
+      { name: "width", rule: { mode: "open", value: "2 mm" } },
+      { name: "thickness", rule: { mode: "open", value: "1 mm" } },
+      { name: "resistivity", rule: { mode: "fixed", value: "2e-8" } },
+    ]);
   });
 });

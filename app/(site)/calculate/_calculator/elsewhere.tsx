@@ -2,10 +2,12 @@
 
 import type { ShapeEntry } from "@/lib/engine";
 import { CodeBlock } from "../../../_ui/code-block";
+import { SiteLink } from "../../../_ui/site/site-link";
 import { Tabs } from "../../../_ui/tabs";
+import { resistanceClientSnippets } from "../../_live/client-snippets";
 import { resistanceSnippets, sizingSnippets } from "../../_live/snippets";
 import { addressCall } from "../_model/address-call";
-import type { Parameters } from "../_model/parameters";
+import { compactValue, orderedPairs, type Parameters, queryText } from "../_model/parameters";
 import { requestBody } from "../_model/request";
 import { sizingBody } from "../_model/sizing";
 
@@ -18,14 +20,19 @@ interface ElsewhereProps {
 /** The exact call of this page for other programs. */
 export function Elsewhere({ entry, parameters, origin }: ElsewhereProps) {
   const call = addressCall(origin, entry, parameters);
-  const snippets = resistanceSnippets(origin, requestBody(entry, parameters));
+  const body = requestBody(entry, parameters);
+  const snippets = [...resistanceSnippets(origin, body), ...resistanceClientSnippets(origin, body)];
   const sizing = sizingBody(entry, parameters);
   return (
     <>
       <p className="mb-1 max-w-prose text-table text-ink-soft">
         Each of these asks for exactly this calculation. Set <code>RHOFORM_KEY</code> to a key of your team
         with the scope <code>compute</code>; the spreadsheet takes it from cell B1, and there the key must be
-        allowed to travel in an address.
+        allowed to travel in an address. The clients are under{" "}
+        <SiteLink href="/docs/clients" className="link">
+          Clients
+        </SiteLink>
+        .
       </p>
       <Tabs
         label="Forms of the call"
@@ -47,6 +54,11 @@ export function Elsewhere({ entry, parameters, origin }: ElsewhereProps) {
               <p className="rounded border border-dashed border-edge px-2 py-3 text-table">{call.reason}</p>
             ),
           },
+          {
+            id: "page",
+            label: "iframe",
+            content: <FrameSnippet entry={entry} parameters={parameters} origin={origin} />,
+          },
         ]}
       />
       {sizing ? (
@@ -63,5 +75,27 @@ export function Elsewhere({ entry, parameters, origin }: ElsewhereProps) {
         </>
       ) : null}
     </>
+  );
+}
+
+/** A frame for pages of others: it shows a widget, which the team makes once. */
+function FrameSnippet({ entry, parameters, origin }: ElsewhereProps) {
+  const dimensions = orderedPairs(parameters, entry).filter(([name]) =>
+    entry.dimensions.some((dimension) => dimension.name === name),
+  );
+  const query = queryText(dimensions.map(([name, value]) => [name, compactValue(name, value)] as const));
+  const code = `<iframe src="${origin}/embed/emb_…?${query.replaceAll("&", "&amp;")}"\n  title="${entry.title}" width="480" height="720"\n  style="border: 0; max-width: 100%"></iframe>`;
+  const start = queryText([["shape", entry.id], ...orderedPairs(parameters, entry)]);
+  return (
+    <div className="grid gap-1">
+      <CodeBlock code={code} label="HTML for an intranet page or a wiki" />
+      <p className="max-w-prose text-table text-ink-soft">
+        The frame shows a widget of your team, without a key in the page:{" "}
+        <a href={`/console/embeds?${start}`} className="link">
+          make one from this calculation
+        </a>
+        , publish it, and put its id in place of <code>emb_…</code>.
+      </p>
+    </div>
   );
 }

@@ -70,9 +70,11 @@ export const POST = consoleRoute({
     teamId: z.string().max(40),
     name: embedSettings.shape.name,
     shape: z.string().max(64),
+    /** Of a calculation page, by the names of inputs. */
+    values: z.record(z.string().max(90), z.string().max(120)).optional(),
   }),
   handle: ({ db, body, actor, now, requireTeam }) => {
-    const { teamId, name, shape: shapeId } = body;
+    const { teamId, name, shape: shapeId, values } = body;
     requireTeam(teamId);
     const shape = findShape(shapeId);
     const errors = [
@@ -83,7 +85,7 @@ export const POST = consoleRoute({
       throw new Refusal("invalid-input", "The widget cannot be made.", { errors });
     const settings = { name, origins: [], monthQuota: DEFAULT_EMBED_QUOTA };
     return json(
-      createEmbed(db, { actor, now }, { teamId, settings, definition: startDefinition(shape) }),
+      createEmbed(db, { actor, now }, { teamId, settings, definition: startDefinition(shape, values) }),
       201,
     );
   },
