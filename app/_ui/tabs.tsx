@@ -30,7 +30,7 @@ export function Tabs({ label, tabs }: { readonly label: string; readonly tabs: r
 
   return (
     <div>
-      <div role="tablist" aria-label={label} onKeyDown={move} className="flex gap-2 text-table">
+      <div role="tablist" aria-label={label} onKeyDown={move} className="flex flex-wrap gap-x-2 text-table">
         {tabs.map((tab) => (
           <button
             key={tab.id}

@@ -90,7 +90,7 @@ describe("variants", () => {
 describe("use this elsewhere", () => {
   const codeOf = async (path: string, tab: string): Promise<readonly string[]> => {
     const { page, close } = await bench.open(path);
-    await page.getByRole("tab", { name: tab }).click();
+    await page.getByRole("tab", { name: tab, exact: true }).click();
     const codes = await page.locator("section[aria-labelledby=elsewhere] pre").allTextContents();
     await close();
     return codes;

@@ -1,5 +1,5 @@
 import { execFile } from "node:child_process";
-import { copyFileSync, mkdtempSync, rmSync, writeFileSync } from "node:fs";
+import { copyFileSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join, resolve } from "node:path";
 import { build } from "esbuild";
@@ -97,6 +97,23 @@ describe("the snippets of a guide run and print what they should", () => {
     expect(guides.flatMap(({ snippets }) => snippets).filter(({ language }) => !run.has(language))).toEqual(
       [],
     );
+  });
+});
+
+describe("the snippets of the clients' READMEs run", () => {
+  it.each(["sdk/typescript/README.md", "sdk/python/README.md"])("%s", async (file) => {
+    writeFileSync(
+      join(folder, "parts.csv"),
+      "shape,length,width,thickness,material\nbar,1 m,5 mm,1 mm,copper-annealed\n",
+    );
+    const found = [...readFileSync(file, "utf8").matchAll(/```(ts|python|sh)\n([\s\S]*?)```/g)];
+    expect(found.length).toBeGreaterThan(1);
+    for (const [, language, code] of found) {
+      const here = code.replaceAll("http://127.0.0.1:3000", server.base);
+      const text = language === "sh" ? `export RHOFORM_URL=${server.base}\n${here}` : here;
+      const known = (["ts", "python", "sh"] as const).find((name) => name === language);
+      await perform({ language: known ?? expect.fail(language), label: file, code: text });
+    }
   });
 });
 

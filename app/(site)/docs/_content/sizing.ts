@@ -44,7 +44,15 @@ export const sizing: DocPage = {
       blocks: [
         "Every value of the dimension in the range that gives the target, smallest first: some shapes have more than one. Each has its `resistance` with bounds and a `sensitivity`, how much the resistance changes with the dimension. `include`, `requirement` and `uncertainty` work as in a resistance.",
         "A dimension that is a whole number rarely gives the target exactly; then the two numbers on either side are answered.",
+        "A sizing can be stored as a [record](/docs/records) as well.",
         "A target out of reach is a 422 that states the resistances at both ends of the range, so that you see on which side to look.",
+      ],
+    },
+    {
+      id: "outline",
+      title: "The scale of an outline",
+      blocks: [
+        "With the body of [`POST /fields`](/docs/fields) and two terminals, `solveFor` is `scaleX` or `scaleY`, which stretch the drawing one way, or `scale`, which scales it evenly and the thickness with it. A plan sheet under an even `scale` does not change its resistance, and is refused. It needs the scope `field`, and costs a computation for each field solution made, at most 60.",
       ],
     },
   ],

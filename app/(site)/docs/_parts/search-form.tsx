@@ -1,15 +1,16 @@
 /** Asks the docs' own search; needs no script. */
 export function SearchForm({
   id,
+  label = "Search from the contents",
   query = "",
-  focus = false,
 }: {
   readonly id: string;
+  /** Tells the forms of one page apart. */
+  readonly label?: string;
   readonly query?: string;
-  readonly focus?: boolean;
 }) {
   return (
-    <form action="/docs/search" role="search" className="flex gap-0.5 print:hidden">
+    <form action="/docs/search" role="search" aria-label={label} className="flex gap-0.5 print:hidden">
       <label htmlFor={id} className="sr-only">
         Search the docs
       </label>
@@ -18,7 +19,6 @@ export function SearchForm({
         name="q"
         type="search"
         defaultValue={query}
-        autoFocus={focus}
         placeholder="Words"
         className="min-h-5.5 w-full min-w-0 rounded border border-edge bg-sheet px-1 text-table medium:min-h-4"
       />

@@ -19,7 +19,7 @@ export default async function Search({ searchParams }: Props) {
       <Breadcrumb trail={[{ href: "/docs", label: "Docs" }]} />
       <h1>Search the docs</h1>
       <div className="mt-2 max-w-prose">
-        <SearchForm id="docs-search-page" query={query} />
+        <SearchForm id="docs-search-page" label="Search the docs" query={query} />
       </div>
       {query.trim() === "" ? (
         <p className="mt-3 max-w-prose text-ink-soft">
