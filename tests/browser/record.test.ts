@@ -1,3 +1,4 @@
+import AxeBuilder from "@axe-core/playwright";
 import { execFile } from "node:child_process";
 import { existsSync, mkdtempSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
@@ -93,6 +94,16 @@ describe("a record", () => {
     for (const part of ["250 mm", "0.25", recordCode(id), "Ines Hartwell", "IEC 60028", "Two routes agree"]) {
       expect(text).toContain(part);
     }
+
+    await page.setViewportSize({ width: 360, height: 800 });
+    const { violations } = await new AxeBuilder({ page }).exclude("nextjs-portal").analyze();
+    expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => String(target))}`)).toEqual(
+      [],
+    );
+    const excess = await page.evaluate(
+      () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+    );
+    expect(excess).toBe(0);
 
     const cookie = await cookieOf(page);
     for (const paper of ["a4", "letter"]) {

@@ -7,7 +7,7 @@ import { LiveRegion } from "../../../_ui/live-region";
 import { ToastArea } from "../../../_ui/toast";
 import { splitAddress } from "../_model/address";
 import { sortComplaints } from "../_model/complaints";
-import type { Parameters } from "../_model/parameters";
+import { mediumKind, mediumPrefixes, type Parameters } from "../_model/parameters";
 import { INCLUDE, plainDimensions, requestBody } from "../_model/request";
 import { type PageState, stateQuery } from "../_model/variants";
 import type { FirstAnswer } from "../_server/first-answer";
@@ -162,7 +162,12 @@ function LiveCalculator(props: CalculatorProps) {
         </section>
       ) : null}
       <SolveFor />
-      <Details entry={entry} result={answer.result} formula={props.formula} />
+      <Details
+        entry={entry}
+        result={answer.result}
+        formula={props.formula}
+        graded={mediumPrefixes(entry).some((prefix) => mediumKind(parameters, prefix) === "graded")}
+      />
       <section aria-labelledby="elsewhere" className="mt-5 print:hidden">
         <h2 id="elsewhere" className="mb-1">
           Use this elsewhere

@@ -22,16 +22,21 @@ interface DetailsProps {
   readonly entry: ShapeEntry;
   readonly result: ResistanceResult | undefined;
   readonly formula: ReactNode;
+  /** Whether the medium varies, so that the law is not the one that was used. */
+  readonly graded: boolean;
 }
 
 /** What stands behind the number: law and steps, plots along the flow, checks, assumptions, sources. */
-export function Details({ entry, result, formula }: DetailsProps) {
+export function Details({ entry, result, formula, graded }: DetailsProps) {
   return (
     <div className="mt-5 grid grid-cols-1 gap-5 border-t border-rule pt-3">
       <section aria-labelledby="law">
         <h2 id="law" className="mb-1">
           How the number came about
         </h2>
+        {graded ? (
+          <p className="text-table text-ink-soft">The law of a uniform medium, for comparison:</p>
+        ) : null}
         <div className="mb-2 text-lead [&_.katex-display]:m-0 [&_.katex-display>.katex]:text-left!">
           {formula}
         </div>

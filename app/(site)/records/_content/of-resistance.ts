@@ -100,7 +100,7 @@ export function answerSections(request: StoredRequest, result: AnswerParts): Sec
   const shape = findShape(result.shape);
   const how: Block[] = [
     ...(shape && isGraded(request)
-      ? [{ kind: "paragraph", text: "The law of a uniform medium:" } as const]
+      ? [{ kind: "paragraph", text: "The law of a uniform medium, for comparison:" } as const]
       : []),
     ...(shape ? [{ kind: "law", tex: shape.formula } as const] : []),
     ...(result.steps ? [{ kind: "steps", steps: result.steps } as const] : []),

@@ -37,6 +37,7 @@ export function outlineSvg(outline: OutlineInput, terminals: readonly TerminalIn
   );
   return [
     `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${WIDTH} ${n(height)}" width="${WIDTH}" height="${n(height)}">`,
+    `<rect width="${WIDTH}" height="${n(height)}" fill="#faf8f3"/>`,
     `<path d="${path}" fill="#9C4A1F" fill-opacity="0.12" fill-rule="evenodd" stroke="#1B2226" stroke-width="1.2"/>`,
     ...marks,
     `<text x="${WIDTH / 2}" y="${n(height - 10)}" text-anchor="middle" font-family="Spline Sans, system-ui, sans-serif" font-size="13">${names.join("")}</text>`,

@@ -2,7 +2,6 @@
 
 import { useState } from "react";
 import { FileButton } from "../../../../_ui/file-button";
-import { Help } from "../../../../_ui/help";
 import { LocalTime } from "../../../../_ui/local-time";
 import { QuantityInput } from "../../../../_ui/quantity-input";
 import { Segmented } from "../../../../_ui/segmented";
@@ -90,10 +89,6 @@ export function FieldExhibits() {
             error="Must be an e-mail address, such as ines.hartwell@merrow-pike.example."
           />
           <TextField label="Not available" defaultValue="Busbar" disabled />
-          <div>
-            <p className="text-table font-medium">Help behind a button</p>
-            <Help about="the record" text="A record keeps the request, the answer and all versions." />
-          </div>
           <div>
             <p className="mb-0.5 text-table font-medium">A file</p>
             <FileButton label="Read a CSV file" accept=".csv,text/csv" onText={setRead} />
