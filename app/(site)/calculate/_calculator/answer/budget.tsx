@@ -62,12 +62,14 @@ export function Budget({ uncertainty, entry }: BudgetProps) {
                       </span>
                     </td>
                     <td className="py-0.5 pe-2 text-end font-mono whitespace-nowrap">
-                      {number(own)}
-                      {unit === "" ? "" : `\u2009${unit}`}
+                      {input.endsWith("material") ? (
+                        <Figure value={100 * own} unit="%" />
+                      ) : (
+                        <Figure value={own} unit={unit} />
+                      )}
                     </td>
                     <td className="py-0.5 text-end font-mono whitespace-nowrap">
-                      {number(sensitivity)}
-                      {`\u2009Ω${unit === "" ? "" : `/${unit}`}`}
+                      <Figure value={sensitivity} unit={`Ω${unit === "" ? "" : `/${unit}`}`} />
                     </td>
                   </tr>
                 );
@@ -79,7 +81,9 @@ export function Budget({ uncertainty, entry }: BudgetProps) {
                   Standard uncertainty of the resistance
                 </th>
                 <td />
-                <td className="py-0.5 pe-2 text-end font-mono whitespace-nowrap">{`${number(standard)}\u2009Ω`}</td>
+                <td className="py-0.5 pe-2 text-end font-mono whitespace-nowrap">
+                  <Figure value={standard} unit="Ω" />
+                </td>
                 <td />
               </tr>
             </tfoot>
@@ -122,13 +126,19 @@ function percent(share: number): string {
   return share > 0 && share < 0.001 ? "<0.1 %" : `${(100 * share).toFixed(1)} %`;
 }
 
-/** Three significant digits, with a power of ten where it is far from 1. */
-function number(value: number): string {
-  const text = value.toPrecision(3);
-  const [mantissa, exponent] = (
-    Math.abs(value) >= 1e4 || (value !== 0 && Math.abs(value) < 1e-2) ? value.toExponential(2) : text
-  ).split("e");
-  const plain = mantissa.replace("-", "−");
-  if (exponent === undefined) return plain;
-  return `${plain}·10${[...String(Number(exponent))].map((c) => (c === "-" ? "⁻" : "⁰¹²³⁴⁵⁶⁷⁸⁹"[Number(c)])).join("")}`;
+/** Three significant digits, with a power of ten where it is far from 1, and the unit. */
+function Figure({ value, unit }: { readonly value: number; readonly unit: string }) {
+  const far = Math.abs(value) >= 1e4 || (value !== 0 && Math.abs(value) < 1e-2);
+  const [mantissa, exponent] = (far ? value.toExponential(2) : value.toPrecision(3)).split("e");
+  return (
+    <>
+      {mantissa.replace("-", "−")}
+      {exponent === undefined ? null : (
+        <>
+          ·10<sup>{String(Number(exponent)).replace("-", "−")}</sup>
+        </>
+      )}
+      {unit === "" ? "" : `\u2009${unit}`}
+    </>
+  );
 }
