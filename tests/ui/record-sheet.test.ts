@@ -191,6 +191,22 @@ describe.each(["a4", "letter"] as const)("the printed sheet on %s", (paper) => {
   });
 });
 
+describe("an odd record", () => {
+  it("of ten thousand layers, or with a label without end, has a sheet of few pages", async () => {
+    const layers = Array.from({ length: 10_000 }, (_, k) => ({ thickness: 3e-7, value: 1 + (k % 7) }));
+    const request = {
+      ...SHELL,
+      medium: {
+        graded: { coordinate: "radius", quantity: "conductivity", profile: { kind: "layers", layers } },
+      },
+    };
+    const label = `${"Ω".repeat(99)}\ud800\u0000${"字".repeat(99)}`;
+    const pages = pdfPages(await sheetPdf(contentOf(recordOf(request, label)), "a4"));
+    expect(pages.length).toBeLessThan(10);
+    expect(pages[0]).toContain("ΩΩΩ");
+  });
+});
+
 describe("every shape's record", () => {
   it("has a sheet", async () => {
     for (const id of ["earth-rod-layered", "clad-wire", "sheet-meander", "eccentric-cylinders"]) {

@@ -93,13 +93,22 @@ function asStored({ operation, request, result }: RecordView): Told {
       {
         id: "request",
         title: "Request",
-        blocks: [{ kind: "code", label: "request", text: JSON.stringify(request, null, 2) }],
+        blocks: [{ kind: "code", label: "request", text: storedText(request) }],
       },
       {
         id: "result",
         title: "Result",
-        blocks: [{ kind: "code", label: "result", text: JSON.stringify(result, null, 2) }],
+        blocks: [{ kind: "code", label: "result", text: storedText(result) }],
       },
     ],
   };
+}
+
+const MOST_CHARACTERS = 20_000;
+
+function storedText(value: unknown): string {
+  const text = JSON.stringify(value, null, 2);
+  return text.length > MOST_CHARACTERS
+    ? `${text.slice(0, MOST_CHARACTERS)}\n… (the API answers all of it)`
+    : text;
 }

@@ -28,6 +28,8 @@ export type Block =
   | {
       readonly kind: "table";
       readonly label: string;
+      /** Shown below where rows were left out. */
+      readonly remark?: string;
       readonly columns: readonly Column[];
       readonly rows: readonly (readonly string[])[];
     }

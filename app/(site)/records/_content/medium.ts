@@ -98,22 +98,30 @@ function profileRows(
   }
 }
 
+/** Rows of layers or regions that a sheet of paper takes; the stored request has them all. */
+const MOST_ROWS = 120;
+
 function layersTable(layers: readonly Given[], kind: QuantityKindName): Block {
   return {
     kind: "table",
     label: "Layers",
+    ...(layers.length > MOST_ROWS
+      ? { remark: `The first ${MOST_ROWS} of ${layers.length} layers; the stored request has them all.` }
+      : {}),
     columns: [
       { title: "Layer", weight: 0.4 },
       { title: "Thickness", numeric: true },
       { title: words(kind), numeric: true },
       { title: `${words(kind)} in SI`, numeric: true },
     ],
-    rows: layers.map(({ thickness, value }, index) => [
-      String(index + 1),
-      typedText(thickness),
-      typedText(value, kind),
-      siText(value, kind),
-    ]),
+    rows: layers
+      .slice(0, MOST_ROWS)
+      .map(({ thickness, value }, index) => [
+        String(index + 1),
+        typedText(thickness),
+        typedText(value, kind),
+        siText(value, kind),
+      ]),
   };
 }
 
@@ -131,7 +139,10 @@ function pointsTable(
     .filter((index) => index % step === 0 || index === positions.length - 1);
   return {
     kind: "table",
-    label: step === 1 ? "Points" : `Points: ${shown.length} of ${positions.length}`,
+    label: "Points",
+    ...(step === 1
+      ? {}
+      : { remark: `${shown.length} of ${positions.length} points; the stored request has them all.` }),
     columns: [
       { title: "Point", weight: 0.4 },
       { title: "Position", numeric: true },
@@ -148,11 +159,12 @@ function pointsTable(
 }
 
 function regionRows(regions: readonly Given[], rows: InputRow[]): void {
-  regions.forEach((region, index) => {
+  regions.slice(0, MOST_ROWS).forEach((region, index) => {
     for (const [name, value] of Object.entries((region.medium ?? {}) as Given)) {
       rows.push(plainRow(`Region ${index + 1}: `, name, value));
     }
   });
+  if (regions.length > MOST_ROWS) rows.push(["Further regions", String(regions.length - MOST_ROWS), ""]);
 }
 
 /** Where the materials' numbers come from, each at the version that was used. */

@@ -151,6 +151,15 @@ function vertexTable(outline: StoredRequest["outline"]): Block {
   };
 }
 
+const MOST_PLACES = 20;
+
+type Part = NonNullable<StoredRequest["terminals"][number]["parts"]>[number];
+
+function partText({ ring, edge, from, to }: Part): string {
+  const share = from === 0 && to === 1 ? "" : `, ${plainNumber(from)} to ${plainNumber(to)}`;
+  return `ring ${ring}, edge ${edge}${share}`;
+}
+
 function terminalTable(terminals: StoredRequest["terminals"]): Block {
   const place = ([[ax, ay], [bx, by]]: readonly [readonly [number, number], readonly [number, number]]) =>
     `${plainNumber(ax)}, ${plainNumber(ay)} to ${plainNumber(bx)}, ${plainNumber(by)}`;
@@ -158,16 +167,11 @@ function terminalTable(terminals: StoredRequest["terminals"]): Block {
     kind: "table",
     label: "Terminals",
     columns: [{ title: "Terminal" }, { title: "Where on the boundary", numeric: true, weight: 2.5 }],
-    rows: terminals.map(({ name, segments, parts }) => [
-      name,
-      [
-        ...(segments ?? []).map(place),
-        ...(parts ?? []).map(
-          ({ ring, edge, from, to }) =>
-            `ring ${ring}, edge ${edge}${from === undefined && to === undefined ? "" : `, ${plainNumber(from ?? 0)} to ${plainNumber(to ?? 1)}`}`,
-        ),
-      ].join("; "),
-    ]),
+    rows: terminals.map(({ name, segments = [], parts = [] }) => {
+      const places = [...segments.map(place), ...parts.map(partText)];
+      const more = places.length > MOST_PLACES ? [`and ${places.length - MOST_PLACES} more`] : [];
+      return [name, [...places.slice(0, MOST_PLACES), ...more].join("; ")];
+    }),
   };
 }
 

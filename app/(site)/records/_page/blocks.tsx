@@ -26,7 +26,7 @@ function BlockView({ block }: { readonly block: Block }): ReactNode {
     case "facts":
       return <Facts facts={block.facts} />;
     case "table":
-      return <Table label={block.label} columns={block.columns} rows={block.rows} />;
+      return <Table label={block.label} remark={block.remark} columns={block.columns} rows={block.rows} />;
     case "lines":
       return (
         <ul className="grid max-w-[90ch] list-disc gap-0.5 ps-2 text-table">
@@ -74,6 +74,7 @@ function Facts({ facts }: { readonly facts: readonly Fact[] }) {
 
 interface TableProps {
   readonly label: string;
+  readonly remark?: string;
   readonly columns: readonly Column[];
   readonly rows: readonly (readonly string[])[];
 }
@@ -81,7 +82,7 @@ interface TableProps {
 /** A table of so few rows is not spread over two pages. */
 const KEPT_WHOLE = 10;
 
-function Table({ label, columns, rows }: TableProps) {
+function Table({ label, remark, columns, rows }: TableProps) {
   return (
     <div
       className={`relative overflow-x-auto print:overflow-visible ${rows.length <= KEPT_WHOLE ? "print:break-inside-avoid" : ""}`}
@@ -115,6 +116,7 @@ function Table({ label, columns, rows }: TableProps) {
           ))}
         </tbody>
       </table>
+      {remark ? <p className="mt-0.5 text-small text-ink-soft">{remark}</p> : null}
     </div>
   );
 }

@@ -28,7 +28,9 @@ function drawBlock(pen: Pen, block: Block): void {
     case "facts":
       return drawFacts(pen, block.facts);
     case "table":
-      return drawTable(pen, block.columns, block.rows);
+      drawTable(pen, block.columns, block.rows);
+      if (block.remark) pen.paragraph(block.remark, NOTE);
+      return;
     case "lines":
       return block.lines.forEach((line) => drawItem(pen, line));
     case "paragraph":

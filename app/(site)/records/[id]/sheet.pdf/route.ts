@@ -16,16 +16,20 @@ export async function GET(request: Request, { params }: Context): Promise<Respon
   if (record.kind === "elsewhere") return leadTo(`/records/${record.id}/sheet.pdf${search}`);
   if (record.kind === "unknown") return plain(404, "There is no record under this id that you may see.");
   const { content } = record;
-  const name =
-    content.label
+  // By whole characters: half of one could not be written into a header.
+  const name = [
+    ...content.label
       .replace(/[^\p{L}\p{N} ._-]+/gu, " ")
-      .trim()
-      .slice(0, 80) || content.code;
+      .replace(/ +/g, " ")
+      .trim(),
+  ]
+    .slice(0, 80)
+    .join("");
   const ascii = name.replace(/[^ -~]/g, "_");
   return new Response(await sheetPdf(content, paper), {
     headers: {
       "Content-Type": "application/pdf",
-      "Content-Disposition": `inline; filename="${ascii} ${content.code}.pdf"; filename*=UTF-8''${encodeURIComponent(`${name} ${content.code}.pdf`)}`,
+      "Content-Disposition": `inline; filename="${ascii || "Record"} ${content.code}.pdf"; filename*=UTF-8''${encodeURIComponent(`${name || "Record"} ${content.code}.pdf`)}`,
       "Cache-Control": "private, no-store",
     },
   });
