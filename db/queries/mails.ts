@@ -29,7 +29,7 @@ export function latestMails(
       sentAt: mails.sentAt,
     })
     .from(mails)
-    .orderBy(desc(mails.createdAt), desc(mails.id))
+    .orderBy(desc(mails.createdAt), desc(sql`rowid`))
     .limit(limit)
     .all();
 }

@@ -21,6 +21,10 @@ export const PAGES = [
   "/docs/problems",
   "/docs/problems/invalid-input",
   "/docs/accuracy",
+  "/docs/permissions",
+  "/sign-in",
+  "/forgotten",
+  "/invitation/a-link-that-is-over",
   "/docs/changelog",
   "/no-such-page",
 ] as const;

@@ -65,6 +65,11 @@ export const GROUPS: readonly Group[] = [
     title: "About the service",
     pages: [
       running,
+      {
+        href: "/docs/permissions",
+        title: "Roles and permissions",
+        summary: "Who may do what to whose things: the table that pages and calls ask.",
+      },
       methods,
       {
         href: "/docs/accuracy",
