@@ -16,6 +16,7 @@ import { EventReader } from "@/app/(site)/outline/_model/events";
 import { fieldBody } from "@/app/(site)/outline/_model/field-body";
 import { commit, redo, startHistory, undo } from "@/app/(site)/outline/_model/history";
 import { readBody, readBodyText } from "@/app/(site)/outline/_model/read-body";
+import { roomiest } from "@/app/(site)/outline/_model/room";
 import type { Sketch } from "@/app/(site)/outline/_model/sketch";
 import { EMPTY_SKETCH, START_OUTLINES, startSketch } from "@/app/(site)/outline/_model/start-outlines";
 import { partOfSegment, toggleEdge } from "@/app/(site)/outline/_model/terminals";
@@ -125,6 +126,18 @@ describe("arcs", () => {
     expect(accepted(more)).toBe(true);
     // Its two halves share the centre, so taking it out gives the same arc again.
     expect(removeVertex(more, 1, 1)).toEqual(plate);
+  });
+});
+
+describe("room", () => {
+  it("is found inside the conductor, away from edges and holes", () => {
+    const inBend = roomiest(bend.rings);
+    expect(inBend?.x).toBeLessThan(10);
+    expect(inBend?.y).toBeLessThan(10);
+    expect(inBend?.distance).toBeGreaterThan(4.5);
+    const inPlate = roomiest(startSketch("plate").rings);
+    expect(Math.hypot((inPlate?.x ?? 40) - 40, (inPlate?.y ?? 20) - 20)).toBeGreaterThan(18);
+    expect(roomiest([[]])).toBeNull();
   });
 });
 

@@ -15,8 +15,8 @@ export function SelectionBar() {
   if (!selection || selection.index >= ring.length) {
     return (
       <p className="flex min-h-5.5 items-center text-small text-ink-soft">
-        Drag a corner to move it, press an edge to mark it, double-press an edge for a new corner. The wheel
-        zooms once the board has focus; drag empty ground to pan.
+        Drag a corner to move it, with Shift its whole ring; press an edge to mark it, twice for a new corner.
+        Empty ground pans; the wheel zooms once the board has focus.
       </p>
     );
   }

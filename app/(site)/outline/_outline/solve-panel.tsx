@@ -9,6 +9,7 @@ import { Numbers, Verdict } from "../../calculate/_calculator/answer/headline";
 import { sentence } from "../../calculate/_model/complaints";
 import { type PlacedComplaint, placeOf } from "../_model/complaints";
 import type { FieldView } from "../_model/field-view";
+import { ringOf } from "../_model/sketch";
 import { ClosingBar } from "./closing-bar";
 import { useOutline } from "./outline-context";
 import { PairTable } from "./pair-table";
@@ -171,7 +172,7 @@ function Refusal({
 }: {
   readonly complaints: readonly Pick<PlacedComplaint, "pointer" | "detail">[];
 }) {
-  const { select } = useOutline();
+  const { sketch, select } = useOutline();
   return (
     <Notice tone="problem" title="This cannot be solved yet">
       <ul className="grid gap-0.5">
@@ -180,11 +181,18 @@ function Refusal({
           return (
             <li key={k}>
               {sentence(detail)}{" "}
-              {place?.kind === "vertex" ? (
+              {place?.kind === "vertex" ||
+              (place?.kind === "ring" && ringOf(sketch, place.ring).length > 0) ? (
                 <button
                   type="button"
                   className="link cursor-pointer rounded"
-                  onClick={() => select({ kind: "vertex", ring: place.ring, index: place.index })}
+                  onClick={() =>
+                    select({
+                      kind: "vertex",
+                      ring: place.ring,
+                      index: place.kind === "vertex" ? place.index : 0,
+                    })
+                  }
                 >
                   Show it
                 </button>

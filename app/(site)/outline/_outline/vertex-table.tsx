@@ -5,9 +5,10 @@ import { Plus, Trash2 } from "lucide-react";
 import { Button } from "../../../_ui/button";
 import { CONTROL } from "../../../_ui/field";
 import { complaintAt } from "../_model/complaints";
-import { boxOf } from "../_model/edges";
 import { addRegion, addRing, removeRing } from "../_model/edit";
+import { roomiest } from "../_model/room";
 import { type Ring, type RingKey, regionKey, ringOf, ringTitle, type Sketch, tidy } from "../_model/sketch";
+import { roundLength } from "../_model/view";
 import { useOutline } from "./outline-context";
 import { VertexRow } from "./vertex-row";
 
@@ -41,8 +42,8 @@ export function VertexTable() {
     select(null);
   }
 
-  function add(kind: "hole" | "region") {
-    const square = squareIn(sketch);
+  function add(kind: "hole" | "round" | "region") {
+    const square = kind === "round" ? circleIn(sketch) : squareIn(sketch);
     if (kind === "region") {
       edit((sketch) => addRegion(sketch, square));
       show(regionKey(sketch.regions.length));
@@ -72,6 +73,9 @@ export function VertexTable() {
         </select>
         <Button onClick={() => add("hole")}>
           <Plus aria-hidden size={15} /> {sketch.rings[0].length === 0 ? "Square" : "Hole"}
+        </Button>
+        <Button onClick={() => add("round")}>
+          <Plus aria-hidden size={15} /> {sketch.rings[0].length === 0 ? "Disc" : "Round hole"}
         </Button>
         {sketch.rings[0].length === 0 ? null : (
           <Button onClick={() => add("region")}>
@@ -141,21 +145,29 @@ export function VertexTable() {
   );
 }
 
-/** A square to start from: inside the outer ring's box, or one of its own. */
+/** Middle and half width of a ring to start from: where the conductor has most room, or one of its own. */
+function placeIn(sketch: Sketch): readonly [number, number, number] {
+  const room = roomiest([...sketch.rings, ...sketch.regions.map(({ ring }) => ring)]);
+  // Half of the room is left around a square's corners, on a grid that reads well.
+  return room ? [room.x, room.y, roundLength(1, 0.35 * room.distance)] : [20, 20, 20];
+}
+
 function squareIn(sketch: Sketch): Ring {
-  const box = boxOf(sketch.rings.slice(0, 1)) ?? { minX: -15, minY: -15, maxX: 55, maxY: 55 };
-  const outer = sketch.rings[0].length > 0;
-  const side = Math.min(box.maxX - box.minX, box.maxY - box.minY) * (outer ? 0.25 : 0.5714285714);
-  const [x, y] = outer
-    ? [box.minX + (box.maxX - box.minX) * 0.125, box.minY + (box.maxY - box.minY) * 0.125]
-    : [0, 0];
-  const corner = (dx: number, dy: number) => ({ x: tidy(x + dx * side), y: tidy(y + dy * side) });
-  return outer
-    ? [corner(0, 0), corner(1, 0), corner(1, 1), corner(0, 1)]
-    : [
-        { x: 0, y: 0 },
-        { x: 40, y: 0 },
-        { x: 40, y: 40 },
-        { x: 0, y: 40 },
-      ];
+  const [x, y, half] = placeIn(sketch);
+  return [
+    [-1, -1],
+    [1, -1],
+    [1, 1],
+    [-1, 1],
+  ].map(([dx, dy]) => ({ x: tidy(x + dx * half), y: tidy(y + dy * half) }));
+}
+
+/** Two half circles. */
+function circleIn(sketch: Sketch): Ring {
+  const [x, y, half] = placeIn(sketch).map(tidy);
+  return [-1, 1].map((side) => ({
+    x: tidy(x + side * half),
+    y,
+    arc: { x, y, clockwise: false },
+  }));
 }

@@ -2,7 +2,7 @@
 
 import { type KeyboardEvent, type PointerEvent, useEffect, useRef, useState } from "react";
 import { bowThrough, edgeOf, pointAt } from "../../_model/edges";
-import { bowEdge, insertVertex, moveVertex, removeVertex, setArc } from "../../_model/edit";
+import { bowEdge, insertVertex, moveVertex, removeVertex, setArc, shiftRing } from "../../_model/edit";
 import { type Hit, hitEdge, hitTest } from "../../_model/hit";
 import { type Point, ringOf } from "../../_model/sketch";
 import { addTerminal, terminalOn, toggleEdge } from "../../_model/terminals";
@@ -106,6 +106,12 @@ export function useGestures(options: GestureOptions) {
         if (!far) return;
         const { ring, index } = drag.current.hit;
         const [x, y] = inPlane(at, event.altKey);
+        if (event.shiftKey) {
+          return edit((sketch) => {
+            const { x: fromX, y: fromY } = ringOf(sketch, ring)[index];
+            return shiftRing(sketch, ring, x - fromX, y - fromY);
+          }, `shift ${ring}`);
+        }
         return edit((sketch) => moveVertex(sketch, ring, index, x, y), `drag ${ring} ${index}`);
       }
       case "bow":
