@@ -1,7 +1,6 @@
 import { and, desc, eq, gte, inArray, lt, type SQL, sql } from "drizzle-orm";
 import type { Database } from "../client";
 import { usageEvents, usageHourLatencies } from "../schema/usage";
-import { latencyBucket } from "./usage";
 import { eachTeam, type UsageScope } from "./usage-sums";
 
 export type UsageEventRow = typeof usageEvents.$inferSelect;
@@ -83,8 +82,8 @@ export function latestEvents(db: Database, filter: EventFilter, most: number): U
 }
 
 /**
- * The slowest requests of some hours (since 1970, UTC; both included). The histograms tell in which hours they lie, so
- * that only those are read and never the whole time.
+ * The slowest requests of some hours (since 1970, UTC; both included). The histograms tell from which latency on there
+ * are enough, and in which hours those lie: only these hours are read.
  */
 export function slowestEvents(
   db: Database,
@@ -93,25 +92,24 @@ export function slowestEvents(
   most: number,
 ): UsageEventRow[] {
   const table = usageHourLatencies;
-  const buckets = db
-    .select({ hour: table.hour, teamId: table.teamId, bucket: table.bucket, requests: table.requests })
+  const counted = db
+    .select({ hour: table.hour, bucket: table.bucket, requests: sql<number>`sum(${table.requests})` })
     .from(table)
-    .where(and(gte(table.hour, hours.from), lt(table.hour, hours.to + 1), eachTeam(scope, table.teamId)))
+    .where(and(eachTeam(scope, table.teamId), gte(table.hour, hours.from), lt(table.hour, hours.to + 1)))
+    .groupBy(table.hour, table.bucket)
     .orderBy(desc(table.bucket))
-    .limit(most)
     .all();
-  // Every bucket holds a request at least, so the slowest ones lie in the first buckets.
-  const places = new Map(buckets.map(({ hour, teamId }) => [`${hour} ${teamId}`, { hour, teamId }]));
-  const lowest = buckets.at(-1)?.bucket ?? 0;
-  const found = [...places.values()].flatMap(({ hour, teamId }) =>
+  let enough = 0;
+  const lowest = counted.find(({ requests }) => (enough += requests) >= most)?.bucket ?? 0;
+  const slow = new Set(counted.filter(({ bucket }) => bucket >= lowest).map(({ hour }) => hour));
+  const found = [...slow].flatMap((hour) =>
     db
       .select()
       .from(usageEvents)
       .where(
         and(
-          eq(usageEvents.teamId, teamId),
-          gte(usageEvents.at, hour * 3_600_000),
-          lt(usageEvents.at, (hour + 1) * 3_600_000),
+          matches({ scope, from: hour * 3_600_000, to: (hour + 1) * 3_600_000 }),
+          // A hair below the bucket's edge, whose logarithm may round either way.
           gte(usageEvents.latencyUs, Math.floor(2 ** (lowest / 4)) - 1),
         ),
       )
@@ -119,8 +117,5 @@ export function slowestEvents(
       .limit(most)
       .all(),
   );
-  return found
-    .filter(({ latencyUs }) => latencyBucket(latencyUs) >= lowest)
-    .sort((a, b) => b.latencyUs - a.latencyUs)
-    .slice(0, most);
+  return found.sort((a, b) => b.latencyUs - a.latencyUs).slice(0, most);
 }

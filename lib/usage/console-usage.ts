@@ -23,7 +23,7 @@ export const MOST_DAYS = 366;
 /** Longest time that is shown hour by hour, days. */
 export const MOST_HOURLY_DAYS = 7;
 /** Calls of one caller from which its shares and percentiles are made: sums are kept by team. */
-export const SAMPLED_CALLS = 20_000;
+export const SAMPLED_CALLS = 5_000;
 
 export interface Period extends Percentiles {
   /** Start, ISO 8601 (UTC). */
@@ -48,11 +48,33 @@ function period(sums: Counters, percentiles: Percentiles): Total {
 
 /** Sums and percentiles of some days. One caller's percentiles are those of its latest calls in these days. */
 export function totalOf(db: Database, scope: UsageScope, days: Days): Total {
-  const percentiles =
-    scope.keyId === undefined
-      ? percentilesOf(latencyBuckets(db, scope, days, "all"))
-      : exactPercentiles(sampleOf(db, scope, days).map(({ latencyUs }) => latencyUs));
-  return period(usageTotal(db, scope, days), percentiles);
+  return period(usageTotal(db, scope, days), percentilesIn(db, scope, days));
+}
+
+function percentilesIn(db: Database, scope: UsageScope, days: Days): Percentiles {
+  return scope.keyId === undefined
+    ? percentilesOf(latencyBuckets(db, scope, days, "all"))
+    : exactPercentiles(sampleOf(db, scope, days).map(({ latencyUs }) => latencyUs));
+}
+
+/** Some days whole and one by one (or hour by hour): the sums are read once, the whole is their sum. */
+export function usageOf(
+  db: Database,
+  scope: UsageScope,
+  days: Days,
+  by: "day" | "hour",
+  now: number,
+): { total: Total; periods: Period[] } {
+  const periods = periodsOf(db, scope, days, by, now);
+  const sum = (of: (each: Period) => number) => periods.reduce((total, each) => total + of(each), 0);
+  const sums: Counters = {
+    requests: sum(({ requests }) => requests),
+    computations: sum(({ computations }) => computations),
+    refused: sum(({ refused }) => refused),
+    failed: sum(({ failed }) => failed),
+    latencyUs: sum(({ requests, meanMs }) => 1000 * requests * (meanMs ?? 0)),
+  };
+  return { total: period(sums, percentilesIn(db, scope, days)), periods };
 }
 
 /** The days or hours of a time one by one, quiet ones included; those of the future are left out. */

@@ -1,6 +1,6 @@
 import { z } from "zod";
 import { callerNames } from "@/lib/usage/caller-names";
-import { MOST_HOURLY_DAYS, periodsOf, totalOf } from "@/lib/usage/console-usage";
+import { MOST_HOURLY_DAYS, usageOf } from "@/lib/usage/console-usage";
 import { Refusal } from "@/lib/service/refusal";
 import { consoleRoute } from "../_server/console-route";
 import { csvAnswer } from "../_server/list-query";
@@ -22,7 +22,7 @@ export const GET = consoleRoute({
       throw new Refusal("invalid-input", detail, { errors: [{ parameter: "by", detail }] });
     }
     const scope = scopeOf(call, query);
-    const periods = periodsOf(db, scope, days, query.by, now);
+    const { total, periods } = usageOf(db, scope, days, query.by, now);
     const span = isoDays(days);
     if (query.csv) {
       return csvAnswer(
@@ -46,7 +46,7 @@ export const GET = consoleRoute({
       ...span,
       by: query.by,
       caller: query.caller === undefined ? null : callerNames(db)(query.caller),
-      total: totalOf(db, scope, days),
+      total,
       periods,
     };
   },
