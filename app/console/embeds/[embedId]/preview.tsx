@@ -46,7 +46,13 @@ export function Preview({ embedId, version, savedAt }: PreviewProps) {
         <Segmented label="Width, px" value={width} options={WIDTHS} onChange={setWidth} />
         <Segmented label="Page around" value={theme} options={THEMES} onChange={setTheme} />
       </div>
-      <div className="overflow-x-auto rounded border border-rule p-1">
+      <div
+        // Reachable by keyboard, since it scrolls where the screen is narrower.
+        tabIndex={0}
+        role="group"
+        aria-label={`Frame of ${width} px`}
+        className="overflow-x-auto rounded border border-rule p-1"
+      >
         <iframe
           ref={frame}
           title="Preview of the embed"
