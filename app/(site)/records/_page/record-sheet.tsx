@@ -129,7 +129,7 @@ function PictureView({ picture, id }: { readonly picture: Picture; readonly id: 
 /** What every printed page says at its edges. */
 function pageRules({ label, code, address }: RecordContent): string {
   const text = (value: string) =>
-    `"${value.replace(/[\\"<>\n]/g, (c) => `\\${c.charCodeAt(0).toString(16)} `)}"`;
+    `"${value.replace(/\p{C}/gu, " ").replace(/[\\"<>]/g, (c) => `\\${c.charCodeAt(0).toString(16)} `)}"`;
   const font = "font: 8pt system-ui, sans-serif; color: #566067;";
   return `@page { margin: 18mm 15mm 20mm;
     @top-left { content: ${text(`Rhoform record · ${label.slice(0, 80)}`)}; ${font} }

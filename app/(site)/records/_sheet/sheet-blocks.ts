@@ -11,7 +11,7 @@ const HEADING: TextStyle = { face: "strong", size: 11.5 };
 
 /** One section under its title; the title never stands alone at the foot of a page. */
 export function drawSection(pen: Pen, { title, blocks }: Section): void {
-  pen.keep(60);
+  pen.keep(34 + leadHeight(blocks[0]));
   pen.y += 10;
   pen.line(title, pen.left, pen.y + 10, HEADING);
   pen.y += 15;
@@ -21,6 +21,12 @@ export function drawSection(pen: Pen, { title, blocks }: Section): void {
     if (index > 0) pen.y += 6;
     drawBlock(pen, block);
   });
+}
+
+/** Height that a block takes at least before a page may end in it; rather more than less. */
+function leadHeight(block: Block | undefined): number {
+  if (block?.kind !== "table") return block?.kind === "steps" ? 60 : 30;
+  return Math.min(block.rows.length * 26 + 18, KEPT_WHOLE);
 }
 
 function drawBlock(pen: Pen, block: Block): void {
