@@ -8,7 +8,7 @@ import {
   type Parameters,
   queryText,
 } from "./parameters";
-import { SIZING_NAMES, tolerancedName } from "./tolerances";
+import { SIZING_NAMES, tolerancedName, toleranceText } from "./tolerances";
 
 export type AddressCall =
   | { readonly ok: true; readonly address: string; readonly formula: string }
@@ -36,8 +36,8 @@ export function addressCall(origin: string, entry: ShapeEntry, parameters: Param
 }
 
 function toleranceOf(parameters: Parameters, name: string): string {
-  const tolerance = parameters[`${name}.tolerance`]?.trim();
-  return tolerance ? `±${compactValue(name, tolerance)}` : "";
+  const tolerance = toleranceText(parameters[`${name}.tolerance`] ?? "", parameters[name]);
+  return tolerance === "" ? "" : `±${compactValue(name, tolerance)}`;
 }
 
 function refusal(entry: ShapeEntry, parameters: Parameters): string | null {

@@ -28,10 +28,22 @@ export type Given = string | number | { readonly value: string; readonly toleran
 
 /** The value of a parameter with its tolerance, where it has one. */
 export function given(parameters: Parameters, name: string, text: string): Given {
-  const tolerance = parameters[`${name}.tolerance`]?.trim();
-  if (!tolerance) return text;
+  const tolerance = toleranceText(parameters[`${name}.tolerance`] ?? "", text);
+  if (tolerance === "") return text;
   const distribution = parameters[`${name}.distribution`];
   return { value: text, tolerance, ...(distribution ? { distribution } : {}) };
+}
+
+const DECIMAL_COMMA = /^(\d+),(\d+)(?=[^\d,]|$)/;
+const BARE = /^\d+\.?\d*(?:[eE][+-]?\d+)?$/;
+const UNIT = /^[+-]?[\d.]+(?:[eE][+-]?\d+)?\s*([A-Za-zµμΩ°%].*)$/;
+
+/** A tolerance as the API takes it: people write decimal commas, and mean the value's unit where they name none. */
+export function toleranceText(typed: string, value: string): string {
+  const text = typed.trim().replace(DECIMAL_COMMA, "$1.$2");
+  const unit = UNIT.exec(value.trim())?.[1];
+  // A bare difference of temperatures is in kelvins, which is what °C means here.
+  return BARE.test(text) && unit && !/^(?:deg|°)C$/.test(unit) ? `${text} ${unit}` : text;
 }
 
 /** The member `uncertainty` of a request. */
