@@ -117,7 +117,7 @@ const config = [
     },
   },
   {
-    files: ["lib/cli/**", "tests/**", "sdk/typescript/scripts/**"],
+    files: ["lib/cli/**", "tests/**", "sdk/typescript/scripts/**", "sdk/typescript/examples/**"],
     rules: { "no-console": "off" },
   },
   {

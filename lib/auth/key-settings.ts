@@ -4,6 +4,8 @@ import {
   DEFAULT_MONTH_QUOTA,
   LARGEST_MINUTE_QUOTA,
   LARGEST_QUOTA,
+  URL_MINUTE_QUOTA,
+  URL_MONTH_QUOTA,
 } from "../limits/quota";
 import { SCOPE_NAMES } from "./scope";
 
@@ -36,13 +38,17 @@ export const keySettings = z.strictObject({
         .min(1)
         .max(LARGEST_MINUTE_QUOTA)
         .optional()
-        .meta({ description: `Requests a minute; ${DEFAULT_MINUTE_QUOTA} where left out.` }),
+        .meta({
+          description: `Requests a minute; where left out ${DEFAULT_MINUTE_QUOTA}, or ${URL_MINUTE_QUOTA} with \`allowedInUrl\`.`,
+        }),
       month: z
         .int()
         .min(0)
         .max(LARGEST_QUOTA)
         .optional()
-        .meta({ description: `Computations a calendar month (UTC); ${DEFAULT_MONTH_QUOTA} where left out.` }),
+        .meta({
+          description: `Computations a calendar month (UTC); where left out ${DEFAULT_MONTH_QUOTA}, or ${URL_MONTH_QUOTA} with \`allowedInUrl\`.`,
+        }),
     })
     .optional(),
   origins: z

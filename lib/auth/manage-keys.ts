@@ -9,7 +9,12 @@ import {
   updateKey,
 } from "@/db/queries/keys";
 import { type Actor, appendActivity } from "../activity/append";
-import { DEFAULT_MINUTE_QUOTA, DEFAULT_MONTH_QUOTA } from "../limits/quota";
+import {
+  DEFAULT_MINUTE_QUOTA,
+  DEFAULT_MONTH_QUOTA,
+  URL_MINUTE_QUOTA,
+  URL_MONTH_QUOTA,
+} from "../limits/quota";
 import { newId, newKeyId } from "../service/identifier";
 import { Refusal } from "../service/refusal";
 import type { KeyChangeInput, KeySettings } from "./key-settings";
@@ -82,6 +87,8 @@ export function issueKey(db: Database, { teamId, settings, actor, now, largest, 
   }
   const id = fixed?.id ?? newKeyId();
   const secret = fixed?.secret ?? newSecret();
+  const minute = settings.allowedInUrl ? URL_MINUTE_QUOTA : DEFAULT_MINUTE_QUOTA;
+  const month = settings.allowedInUrl ? URL_MONTH_QUOTA : DEFAULT_MONTH_QUOTA;
   return transact(db, () => {
     insertKey(db, {
       id,
@@ -90,8 +97,8 @@ export function issueKey(db: Database, { teamId, settings, actor, now, largest, 
       scopes: [...new Set(settings.scopes)],
       origins: [...new Set(settings.origins ?? [])],
       allowedInUrl: settings.allowedInUrl ?? false,
-      minuteQuota: settings.quotas?.minute ?? Math.min(DEFAULT_MINUTE_QUOTA, largest?.minute ?? Infinity),
-      monthQuota: settings.quotas?.month ?? Math.min(DEFAULT_MONTH_QUOTA, largest?.month ?? Infinity),
+      minuteQuota: settings.quotas?.minute ?? Math.min(minute, largest?.minute ?? Infinity),
+      monthQuota: settings.quotas?.month ?? Math.min(month, largest?.month ?? Infinity),
       createdAt: now,
       createdBy: actor.name,
       expiresAt,

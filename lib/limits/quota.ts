@@ -9,6 +9,10 @@ export const LARGEST_MINUTE_QUOTA = 1_000_000;
 export const DEFAULT_MINUTE_QUOTA = 600;
 export const DEFAULT_MONTH_QUOTA = 100_000;
 
+/** The same for a key that may travel in an address: a sheet's worth, since such keys get about. */
+export const URL_MINUTE_QUOTA = 120;
+export const URL_MONTH_QUOTA = 5_000;
+
 /** Requests a minute. */
 export function minuteBucket(subject: string, quota: number): Bucket {
   return { policy: "minute", subject, quota, windowSeconds: 60 };

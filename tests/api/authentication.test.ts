@@ -92,6 +92,12 @@ describe("credentials that count", () => {
     expect(Number(response.text)).toBeCloseTo(1e5, 6);
   });
 
+  test("which has small quotas where nothing else is said", async () => {
+    const { key } = server.issue({ allowedInUrl: true, quotas: undefined });
+    const { body } = await call(server, "get", "/usage", { key });
+    expect([body.minute.quota, body.month.quota]).toEqual([120, 5_000]);
+  });
+
   test("400 with a key in both places, or twice", async () => {
     const { key } = server.issue({ allowedInUrl: true });
     expectProblem(await call(server, "get", `/usage?key=${key}`, { key }), 400, "ambiguous-credentials");

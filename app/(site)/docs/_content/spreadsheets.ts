@@ -1,3 +1,4 @@
+import { URL_MINUTE_QUOTA, URL_MONTH_QUOTA } from "@/lib/limits/quota";
 import type { DocPage } from "./page";
 
 const ADDRESS =
@@ -12,13 +13,14 @@ export const spreadsheets: DocPage = {
       id: "key",
       title: "A key that may travel in an address",
       blocks: [
-        "A formula can send an address and nothing else, so the key has to be part of it. Addresses end up in histories and in files that are passed on. Therefore a key may do this only if it was issued so, which is off by default; give it the scope `compute` alone, a small quota, and an end date.",
+        "A formula can send an address and nothing else, so the key has to be part of it. Addresses end up in histories and in files that are passed on. Therefore a key may do this only if it was issued so, which is off by default; give it the scope `compute` alone, a small quota, and an end date. " +
+          `Where nothing else is said it has ${URL_MINUTE_QUOTA} requests a minute and ${URL_MONTH_QUOTA.toLocaleString("en")} computations a month.`,
         {
           snippets: [
             {
               language: "sh",
               label: "shell, on the service’s machine",
-              code: 'npm run -s keys -- issue --team busbar --name "Cost sheet" --scopes compute --minute 60 --month 2000 --in-url',
+              code: 'npm run -s keys -- issue --team busbar --name "Cost sheet" --scopes compute --in-url',
               shownOnly: true,
             },
           ],

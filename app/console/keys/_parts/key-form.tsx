@@ -156,11 +156,19 @@ export function KeyFields({ start, errors, onChange }: KeyFieldsProps) {
       <Toggle
         label="May travel in a URL, as ?key="
         checked={draft.allowedInUrl}
-        onChange={(allowedInUrl) => change({ allowedInUrl })}
+        onChange={(allowedInUrl) => change({ allowedInUrl, ...quotasFor(draft, allowedInUrl) })}
         help="For spreadsheets that cannot send headers. Logs and histories on the way then see the key."
       />
     </>
   );
+}
+
+/** A key that may travel gets the small quotas, unless others were typed. */
+function quotasFor({ minute, month }: KeyDraft, allowedInUrl: boolean): Partial<KeyDraft> {
+  const small = { minute: "120", month: "5000" };
+  const usual = { minute: NEW_KEY.minute, month: NEW_KEY.month };
+  const [before, after] = allowedInUrl ? [usual, small] : [small, usual];
+  return minute === before.minute && month === before.month ? after : {};
 }
 
 function originsError({ of }: Errors): string | undefined {

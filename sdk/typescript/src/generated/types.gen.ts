@@ -9358,11 +9358,11 @@ export type NewKey = {
     scopes: Array<'compute' | 'field' | 'materials:read' | 'materials:write' | 'records:read' | 'keys:manage'>;
     quotas?: {
         /**
-         * Requests a minute; 600 where left out.
+         * Requests a minute; where left out 600, or 120 with `allowedInUrl`.
          */
         minute?: number;
         /**
-         * Computations a calendar month (UTC); 100000 where left out.
+         * Computations a calendar month (UTC); where left out 100000, or 5000 with `allowedInUrl`.
          */
         month?: number;
     };
