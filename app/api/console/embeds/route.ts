@@ -70,7 +70,7 @@ export const POST = consoleRoute({
     teamId: z.string().max(40),
     name: embedSettings.shape.name,
     shape: z.string().max(64),
-    /** Of a calculation page, by the names of inputs. */
+    /** Values of a calculation page, by the names of inputs. */
     values: z.record(z.string().max(90), z.string().max(120)).optional(),
   }),
   handle: ({ db, body, actor, now, requireTeam }) => {
