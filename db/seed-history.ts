@@ -12,6 +12,7 @@ import {
 import { storeRecord } from "@/lib/records/records";
 import { newId } from "@/lib/service/identifier";
 import type { Database } from "./client";
+import { updateKey } from "./queries/keys";
 import { insertUsage } from "./queries/usage";
 import type { Team } from "./queries/teams";
 import { rateLimits } from "./schema/journal";
@@ -41,7 +42,7 @@ interface DemoKey {
   readonly revokedDaysAgo?: number;
   /** Ends this many days from now. */
   readonly endsInDays?: number;
-  /** Share of its month that is spent. */
+  /** Share of its month that is spent: its quota follows from its calls. */
   readonly monthShare?: number;
 }
 
@@ -170,20 +171,26 @@ function seedCalls(
   });
   const pick = (from: readonly string[]) => from[Math.floor(random() * from.length)];
   const last = now - (demo.revokedDaysAgo ?? 0) * DAY_MS;
+  const today = new Date(now);
+  const monthStart = Date.UTC(today.getUTCFullYear(), today.getUTCMonth(), 1);
+  let used = 0;
   for (let day = DAYS; day >= 0; day--) {
     const weekday = new Date(now - day * DAY_MS).getUTCDay();
     const working = weekday !== 0 && weekday !== 6;
     const calls = Math.round(demo.calls * (working ? 0.7 + 0.6 * random() : demo.always ? 0.5 : 0.04));
-    const midnight = Math.floor(now / DAY_MS - day) * DAY_MS;
-    for (let i = 0; i < calls; i++) {
+    const midnight = (Math.floor(now / DAY_MS) - day) * DAY_MS;
+    const times = Array.from({ length: calls }, () => {
       const hour = demo.always ? 24 * random() : 6 + 5 * (random() + random());
-      const at = Math.floor(midnight + hour * HOUR_MS);
-      if (at >= last) continue;
+      return Math.floor(midnight + hour * HOUR_MS);
+    });
+    for (const at of times.filter((time) => time < last).sort((a, b) => a - b)) {
       const refused = random() < demo.refused;
       const operation = pick(demo.operations);
       const shaped = SHAPED.has(operation);
       // Latencies of services spread by factors: log-normal, the wider the slower.
       const spread = Math.sqrt(-2 * Math.log(1 - random())) * Math.cos(2 * Math.PI * random());
+      const computations = refused || !shaped ? 0 : 1 + Math.floor(random() * (demo.computations ?? 1));
+      if (at >= monthStart) used += computations;
       insertUsage(db, {
         at,
         requestId: newId("req"),
@@ -193,13 +200,14 @@ function seedCalls(
         shape: shaped && !refused ? pick(demo.shapes) : null,
         status: refused ? (random() < 0.8 ? 422 : 429) : 200,
         latencyUs: Math.round(1000 * demo.latencyMs * Math.exp(0.7 * spread)),
-        computations: refused || !shaped ? 0 : 1 + Math.floor(random() * (demo.computations ?? 1)),
+        computations,
         client: demo.client,
       });
     }
   }
-  if (demo.monthShare !== undefined)
-    spendMonth(db, view.id, Math.round(demo.monthShare * view.quotas.month), now);
+  if (used > 0) spendMonth(db, view.id, used, now);
+  if (used > 0 && demo.monthShare !== undefined)
+    updateKey(db, view.id, { monthQuota: Math.ceil(used / demo.monthShare) });
   if (demo.revokedDaysAgo !== undefined) revokeKey(db, { id: view.id, actor, now: last });
 }
 

@@ -78,15 +78,27 @@ export function resistivityText(ohmM: number): string {
 export function factsOf(version: MaterialVersion): readonly (readonly [string, string])[] {
   const { resistivity, range, uncertainty } = version;
   const { model, ...law } = resistivity;
-  const plain = (value: unknown) =>
-    Array.isArray(value)
+  const units: Readonly<Record<string, string>> = {
+    resistivity: "Ω·m",
+    coefficient: "1/K",
+    reference: "°C",
+    density: "1/cm³",
+    temperatures: "°C",
+    values: law.quantity === "conductivity" ? "S/m" : "Ω·m",
+    // Of the powers of the temperature: the first has this unit, the next ones per K, per K² …
+    coefficients: law.quantity === "conductivity" ? "S/m, S/(m·K), …" : "Ω·m, Ω·m/K, …",
+  };
+  const plain = (name: string, value: unknown) => {
+    const text = Array.isArray(value)
       ? `${value.length} values: ${value.slice(0, 6).join(", ")}${value.length > 6 ? " …" : ""}`
       : String(value);
+    return units[name] ? `${text} ${units[name]}` : text;
+  };
   return [
     ["Name", version.name],
     ["Kind", version.kind],
     ["Law", model],
-    ...Object.entries(law).map(([name, value]) => [`Law: ${name}`, plain(value)] as const),
+    ...Object.entries(law).map(([name, value]) => [`Law: ${name}`, plain(name, value)] as const),
     ["Holds", `${range.from} °C to ${range.to} °C`],
     ["Uncertainty", `${uncertainty.lower} to ${uncertainty.upper} times; ${uncertainty.note}`],
     ["Source", version.source],
