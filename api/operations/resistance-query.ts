@@ -88,13 +88,13 @@ function requestOf(shape: string, query: URLSearchParams): Request {
     const [prefix, member] = name.split(".", 2);
     if (types.has(name)) {
       const whole = types.get(name) === "integer" && /^[+-]?\d+$/.test(text.trim());
-      put(dimensions, "#/dimensions", name, whole ? Number(text) : tolerated(text), name);
+      put(dimensions, "#/dimensions", name, whole ? Number(text) : toleranced(text), name);
     } else if (member !== undefined && mediaNames.includes(prefix)) {
       put((media[prefix] ??= {}), `#/media/${prefix}`, member, mediumValue(name, member, text), name);
       origins.set(`#/media/${prefix}`, name);
     } else if (MEDIUM_PARAMETERS.includes(name))
       put(medium, "#/medium", name, mediumValue(name, name, text), name);
-    else if (OPERATING_PARAMETERS.includes(name)) put(operating, "#/operating", name, tolerated(text), name);
+    else if (OPERATING_PARAMETERS.includes(name)) put(operating, "#/operating", name, toleranced(text), name);
     else if (name === "uncertainty") put(uncertainty, "#/uncertainty", "method", text, name);
     else if (name === "trials" || name === "seed")
       put(uncertainty, "#/uncertainty", name, /^\d+$/.test(text.trim()) ? Number(text) : text, name);
@@ -120,13 +120,13 @@ function requestOf(shape: string, query: URLSearchParams): Request {
 }
 
 /** `10mm±0.1mm`, `10mm±1%` or `10mm+/-0.1mm` as a quantity with its tolerance; every other text as it is. */
-function tolerated(text: string): unknown {
+function toleranced(text: string): unknown {
   const sides = text.split(/±|\+\/-/);
   return sides.length === 2 ? { value: sides[0].trim(), tolerance: sides[1].trim() } : text;
 }
 
 function mediumValue(parameter: string, member: string, text: string): unknown {
-  if (member !== "extrapolate") return member === "material" ? text : tolerated(text);
+  if (member !== "extrapolate") return member === "material" ? text : toleranced(text);
   if (text === "true" || text === "false") return text === "true";
   throw parameterRefusal([{ parameter, detail: "must be true or false." }]);
 }

@@ -49,6 +49,14 @@ describe("POST /resistance with uncertainty", () => {
     expect(first.body.uncertainty).toMatchObject({ trials: 150_000, seed: 5 });
   });
 
+  test("200 stored, and replayed to the last bit", async () => {
+    const uncertainty = { method: "monte-carlo", trials: 2000, seed: 11 };
+    const { body } = await compute({ uncertainty, record: { label: "Busbar with tolerances" } });
+    const replay = await call(server, "post", `/records/${body.record.id}/replay`, { key });
+    expect(replay.body).toMatchObject({ identical: true, drift: 0 });
+    expect(replay.body.now.uncertainty).toEqual(body.uncertainty);
+  });
+
   test("200 without it the tolerance is taken and the nominal value answered", async () => {
     const { status, body } = await compute({});
     expect(status).toBe(200);
