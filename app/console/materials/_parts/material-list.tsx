@@ -34,7 +34,13 @@ const COLUMNS: readonly ListColumn<ListedMaterial>[] = [
       </>
     ),
   },
-  { id: "owner", title: "Owner", sortable: true, from: "medium", cell: ({ teamName }) => teamName ?? "library" },
+  {
+    id: "owner",
+    title: "Owner",
+    sortable: true,
+    from: "medium",
+    cell: ({ teamName }) => teamName ?? "library",
+  },
   { id: "version", title: "Version", align: "end", from: "medium", cell: ({ version }) => version },
   { id: "kind", title: "Kind", sortable: true, from: "medium", cell: ({ kind }) => kind },
   {
