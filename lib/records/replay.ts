@@ -49,7 +49,8 @@ export function replayResistance(db: Database, row: RecordRow): Replay {
       is.value === was.value &&
       is.lower === was.lower &&
       is.upper === was.upper &&
-      JSON.stringify(now.uncertainty) === JSON.stringify(uncertainty),
+      // Both as the schema reads them, so that their members stand in one order.
+      JSON.stringify(storedResult.parse(now).uncertainty) === JSON.stringify(uncertainty),
   };
 }
 
