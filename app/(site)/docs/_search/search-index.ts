@@ -23,7 +23,10 @@ const EXCERPT = 180;
 
 let kept: MiniSearch<Entry> | undefined;
 
-/** The best places for a query, each once; words may be begun only, and mistyped by a letter. */
+/**
+ * The best places for a query, each once; words may be begun only, and mistyped by a letter. All words must be there,
+ * or, where that finds nothing, any of them.
+ */
 export function searchDocs(query: string): readonly Hit[] {
   const words = query.trim();
   if (words === "") return [];

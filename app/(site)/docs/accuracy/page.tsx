@@ -1,6 +1,8 @@
 import type { Metadata } from "next";
 import { Breadcrumb } from "../../../_ui/breadcrumb";
 import table from "./table.json";
+import { neighbours } from "../_content/pages";
+import { PageLinks } from "../_parts/page-links";
 
 export const metadata: Metadata = { title: "Accuracy" };
 
@@ -59,6 +61,7 @@ export default function Accuracy() {
           </section>
         );
       })}
+      <PageLinks {...neighbours("/docs/accuracy")} />
     </>
   );
 }

@@ -2,6 +2,8 @@ import type { Metadata } from "next";
 import { Breadcrumb } from "../../../_ui/breadcrumb";
 import { ProseText } from "../../../_ui/prose-text";
 import { type ChangelogBlock, readChangelog } from "./read-changelog";
+import { neighbours } from "../_content/pages";
+import { PageLinks } from "../_parts/page-links";
 
 export const metadata: Metadata = { title: "Changelog" };
 
@@ -16,6 +18,7 @@ export default async function Changelog() {
           <Block key={index} block={block} />
         ))}
       </article>
+      <PageLinks {...neighbours("/docs/changelog")} />
     </>
   );
 }

@@ -2,6 +2,8 @@ import type { Metadata } from "next";
 import Link from "next/link";
 import { PROBLEMS } from "@/api/problem";
 import { Breadcrumb } from "../../../_ui/breadcrumb";
+import { neighbours } from "../_content/pages";
+import { PageLinks } from "../_parts/page-links";
 
 export const metadata: Metadata = { title: "Problems" };
 
@@ -43,6 +45,7 @@ export default function Problems() {
           </tbody>
         </table>
       </div>
+      <PageLinks {...neighbours("/docs/problems")} />
     </>
   );
 }
