@@ -47,6 +47,13 @@ describe("npm start", () => {
     const output = first.output();
     expect(output).toContain(`Rhoform answers at ${first.base}\n`);
     expect(output.match(/curl/g)).toHaveLength(1);
+    const [, email, password] = /^Demo sign-in: (\S+\.example)\n +password: (\S+)$/m.exec(output) ?? [];
+    const signIn = await fetch(`${first.base}/api/auth/sign-in`, {
+      method: "POST",
+      headers: { Origin: first.base, "Content-Type": "application/json" },
+      body: JSON.stringify({ email, password }),
+    });
+    expect(signIn.status).toBe(200);
     const command = output.split("\n").find((line) => line.startsWith("curl ")) ?? "";
     const answer: unknown = JSON.parse(execFileSync("sh", ["-c", command], { encoding: "utf8" }));
     // R = ln(5/2)/(2π·1e-12·1) = 145.83 GΩ (closed form, by hand).
@@ -64,6 +71,7 @@ describe("npm start", () => {
     const service = await startService({ RHOFORM_DEMO: "0" });
     expect(service.output()).not.toContain("rho_");
     expect(service.output()).not.toContain("curl");
+    expect(service.output()).toContain("npm run -s people -- add-admin");
     expect(await service.stop()).toBe(0);
   });
 
