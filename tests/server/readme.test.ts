@@ -80,7 +80,9 @@ describe("the README's settings", () => {
       RHOFORM_DEMO: config.demo ? "1" : "0",
       RHOFORM_ADDRESS_QUOTA: String(config.addressMinuteQuota),
     });
-    const source = ["environment", "mail"].map((name) => readFileSync(`lib/config/${name}.ts`, "utf8")).join("");
+    const source = ["environment", "mail"]
+      .map((name) => readFileSync(`lib/config/${name}.ts`, "utf8"))
+      .join("");
     const read = [...source.matchAll(/^ {2}([A-Z_]+): /gm)].map(([, name]) => name);
     expect(rows.map(([name]) => name).sort()).toEqual([...new Set(read)].sort());
   });
