@@ -70,13 +70,13 @@ describe("a quantity's field", () => {
     await width.blur();
     expect(await width.getAttribute("aria-invalid")).toBe("true");
     expect(await page.locator(RESISTANCE).textContent()).toBe(before);
-    await page.getByText("No answer to this input").waitFor();
+    await page.getByText("No answer to this input", { exact: true }).waitFor();
     await width.fill("1,234");
     await page.getByText(/thousands separator or a decimal comma/).waitFor();
     await width.blur();
     expect(await width.inputValue()).toBe("1,234");
     await width.fill("40 mm");
-    await page.getByText("No answer to this input").waitFor({ state: "detached" });
+    await page.getByText("No answer to this input", { exact: true }).waitFor({ state: "detached" });
     expect(await settled(page)).toBe(before);
     await close();
   });
