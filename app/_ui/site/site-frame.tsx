@@ -11,6 +11,7 @@ const NAVIGATION = [
   { href: "/network", label: "Network" },
   { href: "/docs", label: "Docs" },
   { href: "/docs/api", label: "API reference" },
+  { href: "/console", label: "Console" },
 ] as const;
 
 const FOOTER = [

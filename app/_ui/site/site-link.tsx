@@ -1,8 +1,8 @@
 import Link from "next/link";
 import type { ReactNode } from "react";
 
-/** Addresses that are served whole and not as pages of the application: the browser loads them anew. */
-const WHOLE = ["/docs/api", "/api/"];
+/** Addresses that the browser loads anew: those served whole, and the console, which leads elsewhere when signed out. */
+const WHOLE = ["/docs/api", "/api/", "/console"];
 
 interface SiteLinkProps {
   readonly href: string;

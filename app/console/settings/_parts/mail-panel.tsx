@@ -97,7 +97,6 @@ export function MailPanel({
                 minWidth: "9rem",
                 cell: ({ createdAt }) => <LocalTime at={createdAt} />,
               },
-              { key: "to", title: "To", cell: ({ recipient }) => recipient },
               {
                 key: "subject",
                 title: "Subject",
@@ -115,6 +114,7 @@ export function MailPanel({
                     mail.subject
                   ),
               },
+              { key: "to", title: "To", cell: ({ recipient }) => recipient },
               {
                 key: "state",
                 title: "State",
