@@ -155,7 +155,7 @@ function statements(db: Database) {
 
 /** Writes a call and every sum it belongs to. Call it inside a transaction: they stand or fall together. */
 export function insertUsage(db: Database, event: UsageEvent): void {
-  const run = prepared(db, "usage.insert", statements);
+  const run = prepared(db, "usage.event-and-sums", statements);
   const row = {
     ...event,
     hour: Math.floor(event.at / HOUR_MS),
