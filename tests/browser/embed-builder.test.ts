@@ -53,10 +53,10 @@ describe("the builder", () => {
     // A contradiction stands in the way of publishing, at its field and above the preview.
     const length = page.getByRole("group", { name: "Length", exact: true });
     await length.getByLabel("Visitors").selectOption({ label: "Open within a range" });
-    await length.getByLabel("To").fill("100 mm");
+    await length.getByLabel("To", { exact: true }).fill("100 mm");
     await page.getByText("Before it can be published").waitFor(LONG);
     expect(await page.getByRole("button", { name: "Publish version 1" }).isDisabled()).toBe(true);
-    await length.getByLabel("To").fill("2 m");
+    await length.getByLabel("To", { exact: true }).fill("2 m");
     await page.getByText("Before it can be published").waitFor({ state: "detached", ...LONG });
     await page.getByRole("button", { name: "Publish version 1" }).click();
     await page.getByText("published, version 1").waitFor(LONG);
@@ -92,7 +92,7 @@ describe("the builder", () => {
     await page.getByRole("tab", { name: "Usage" }).click();
     await page.getByRole("cell", { name: host.origin }).waitFor(LONG);
     await close();
-  });
+  }, 120_000);
 
   test("has no accessibility complaint at 360 px", async () => {
     const team = `axe-${Date.now()}`;

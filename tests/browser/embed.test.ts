@@ -2,7 +2,7 @@ import { gzipSync } from "node:zlib";
 import { existsSync, readFileSync } from "node:fs";
 import { AxeBuilder } from "@axe-core/playwright";
 import type { BrowserContext, Frame, Page } from "playwright-core";
-import { afterAll, afterEach, beforeAll, describe, expect, test } from "vitest";
+import { afterAll, afterEach, beforeAll, describe, expect, test, vi } from "vitest";
 import { SHELL } from "@/lib/activity/append";
 import type { EmbedDefinition } from "@/lib/embeds/definition";
 import { withdrawEmbed } from "@/lib/embeds/manage-embeds";
@@ -26,6 +26,9 @@ declare global {
     events: Told[];
   }
 }
+
+// Several pages a test, on two busy cores.
+vi.setConfig({ testTimeout: 120_000 });
 
 let server: TestServer;
 let host: HostServer;
