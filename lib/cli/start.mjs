@@ -4,7 +4,15 @@
  */
 import { spawn } from "node:child_process";
 import { join } from "node:path";
-import { ROOT, SetupError, checkNode, ensureBuilt, ensureInstalled, runNode } from "./setup.mjs";
+import {
+  ROOT,
+  SetupError,
+  buildWorkers,
+  checkNode,
+  ensureBuilt,
+  ensureInstalled,
+  runNode,
+} from "./setup.mjs";
 import { serve } from "./serve.mjs";
 
 const TSX = "node_modules/tsx/dist/cli.mjs";
@@ -75,7 +83,8 @@ async function main() {
   process.env.NEXT_TELEMETRY_DISABLED = "1";
   checkNode();
   ensureInstalled();
-  if (!dev) ensureBuilt();
+  if (dev) buildWorkers();
+  else ensureBuilt();
   const settings = prepare();
   if (dev) return develop(settings);
 
