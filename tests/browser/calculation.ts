@@ -52,7 +52,7 @@ export async function startBench(): Promise<Bench> {
 }
 
 /** Waits until the page's script has taken over what the server sent, so that fields answer to typing. */
-async function alive(page: Page): Promise<void> {
+export async function alive(page: Page): Promise<void> {
   await page.waitForFunction(() => {
     const control = document.querySelector("main form :is(input, select), main input, main button");
     return control === null || Object.keys(control).some((key) => key.startsWith("__reactProps"));

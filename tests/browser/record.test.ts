@@ -73,6 +73,17 @@ describe("a record", () => {
     await close();
   });
 
+  it("keeps a dimension that was found", async () => {
+    const { page, close } = await openAs("busbar", `${BAR}&solveFor=width&target=20uohm`);
+    await page.getByTestId("solutions").waitFor();
+    await page.getByRole("button", { name: "Save what was found" }).click();
+    await page.getByRole("button", { name: "Save", exact: true }).click();
+    await page.getByRole("link", { name: "Open the record" }).click();
+    await page.waitForURL("**/records/rec_*");
+    await page.getByRole("heading", { level: 1, name: "Rectangular bar: width for 20uohm" }).waitFor();
+    await close();
+  });
+
   it("is stored from the page, stands alone, prints, replays, is relabelled and deleted", async () => {
     const { page, close, complaints } = await openAs("busbar", BAR);
     await page.getByRole("button", { name: "Save as a record" }).click();

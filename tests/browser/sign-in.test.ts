@@ -8,6 +8,7 @@ import { newId } from "@/lib/service/identifier";
 import { startServer, type TestServer } from "../support/server";
 import { signedInCookie } from "../support/signed-in";
 import { base, closeBrowser, visit } from "./browser";
+import { alive } from "./calculation";
 
 const PASSWORD = "copper on drawing paper";
 
@@ -92,6 +93,8 @@ describe("an administrator", () => {
     await page.getByLabel("E-mail address").fill(email);
     await page.getByLabel("Password").fill(PASSWORD);
     await page.getByRole("button", { name: "Sign in" }).click();
+    await page.getByRole("button", { name: "New team" }).waitFor();
+    await alive(page);
     await page.getByRole("button", { name: "New team" }).click();
     await page.getByLabel("Name", { exact: true }).fill(`Team ${slug}`);
     await page.getByLabel("Short name").fill("No Short Name");

@@ -103,6 +103,8 @@ function LiveCalculator(props: CalculatorProps) {
     [entry, dimensions, parameters, actions.change, complaints, materials, props.profiles, geometry],
   );
 
+  const back = () => pathBack(splitAddress(stateQuery(state, entry)));
+
   return (
     <FormProvider value={form}>
       <div className="flex flex-wrap items-end gap-x-3 gap-y-1">
@@ -115,7 +117,7 @@ function LiveCalculator(props: CalculatorProps) {
               path="/resistance"
               body={{ ...bodies[active], include: INCLUDE }}
               title={entry.title}
-              back={() => pathBack(splitAddress(stateQuery(state, entry)))}
+              back={back}
             />
           ) : null}
         </div>
@@ -161,7 +163,7 @@ function LiveCalculator(props: CalculatorProps) {
           />
         </section>
       ) : null}
-      <SolveFor />
+      <SolveFor saving={props.saving} back={back} />
       <Details
         entry={entry}
         result={answer.result}

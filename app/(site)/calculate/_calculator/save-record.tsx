@@ -16,12 +16,14 @@ export type Saving = { readonly kind: "signed-in" } | { readonly kind: "sign-in"
 interface SaveRecordProps {
   readonly saving: Saving;
   /** Operation that stores it. */
-  readonly path: "/resistance" | "/fields" | "/networks";
+  readonly path: "/resistance" | "/sizing" | "/fields" | "/networks";
   readonly body: object;
   /** Proposed name of the record. */
   readonly title: string;
   /** Path that leads back to exactly this state after signing in, where the page's own address does not. */
   readonly back?: () => string;
+  /** Words of the button where the page has more than one thing to save. */
+  readonly action?: string;
 }
 
 interface Stored {
@@ -29,7 +31,14 @@ interface Stored {
 }
 
 /** Stores the calculation for the reader's team. One press stores once, however often it is repeated. */
-export function SaveRecord({ saving, path, body, title, back }: SaveRecordProps) {
+export function SaveRecord({
+  saving,
+  path,
+  body,
+  title,
+  back,
+  action = "Save as a record",
+}: SaveRecordProps) {
   const router = useRouter();
   const [open, setOpen] = useState(false);
   const [label, setLabel] = useState(title);
@@ -82,7 +91,7 @@ export function SaveRecord({ saving, path, body, title, back }: SaveRecordProps)
   return (
     <>
       <Button variant="primary" onClick={start}>
-        <Save aria-hidden size={16} /> Save as a record
+        <Save aria-hidden size={16} /> {action}
       </Button>
       {stored ? (
         <StoredDialog open={open} onOpenChange={setOpen} label={stored.label} id={stored.id} />

@@ -12,11 +12,18 @@ import { dimensionGroups } from "../_model/parameters";
 import { sizingBody } from "../_model/sizing";
 import { kindOf, memberText } from "./dimension-fields";
 import { useForm } from "./form-context";
+import { SaveRecord, type Saving } from "./save-record";
 
 const PAUSE_MS = 300;
 
+interface SolveForProps {
+  readonly saving: Saving | undefined;
+  /** Path that leads back to the page's state. */
+  readonly back: () => string;
+}
+
 /** The other way round: the dimension that gives a resistance, and one press puts it in. */
-export function SolveFor() {
+export function SolveFor({ saving, back }: SolveForProps) {
   const { entry, dimensions, parameters, change } = useForm();
   const { solveFor } = parameters;
   const findable = dimensions.filter(({ type }) => type !== "choice");
@@ -104,7 +111,21 @@ export function SolveFor() {
       </div>
       <div aria-live="polite" aria-busy={isValidating} className="min-h-5">
         {body && !error && data && chosen ? (
-          <Solutions result={data} label={chosen.label} onUse={use} />
+          <>
+            <Solutions result={data} label={chosen.label} onUse={use} />
+            {saving ? (
+              <div className="mt-1">
+                <SaveRecord
+                  saving={saving}
+                  path="/sizing"
+                  body={body}
+                  title={`${entry.title}: ${chosen.label.toLowerCase()} for ${parameters.target ?? ""}`}
+                  back={back}
+                  action="Save what was found"
+                />
+              </div>
+            ) : null}
+          </>
         ) : null}
         {body && [...others, ...elsewhere.map(({ detail }) => sentence(detail))].length > 0 ? (
           <p className="text-table text-oxide">
