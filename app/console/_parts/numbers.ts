@@ -9,11 +9,11 @@ export function msText(value: number | null): string {
   return value >= 1000 ? `${(value / 1000).toPrecision(3)} s` : `${Number(value.toPrecision(3))} ms`;
 }
 
-/** A share of a whole, whole per cent below the next, so that 100 % means all of it. */
+/** A share of a whole in whole per cent; 100 % means all of it. */
 export function shareText(part: number, whole: number): string {
   if (whole === 0) return "–";
   const percent = (100 * part) / whole;
-  return percent > 0 && percent < 1 ? "< 1 %" : `${Math.floor(percent)} %`;
+  return percent > 0 && percent < 1 ? "< 1 %" : `${Math.min(Math.round(percent), part < whole ? 99 : 100)} %`;
 }
 
 const CLIENTS: Readonly<Record<string, string>> = {

@@ -20,7 +20,8 @@ export function useFormErrors(): FormErrors {
 
   const take = useCallback((error: unknown, form: HTMLFormElement) => {
     if (!(error instanceof ConsoleProblem)) throw error;
-    const found = error.fieldErrors();
+    // A complaint about one entry of a list stands at the list's field.
+    const found = new Map([...error.fieldErrors()].map(([name, text]) => [name.replace(/\/\d+$/, ""), text]));
     const controls = [...form.elements].filter(
       (element): element is HTMLInputElement => "name" in element && found.has(String(element.name)),
     );

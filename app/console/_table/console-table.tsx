@@ -91,7 +91,7 @@ export function ConsoleTable<Row extends object>(props: ConsoleTableProps<Row>) 
 
   if (error && !data) return <Failed error={error} onRetry={onRetry} />;
   if (!data) return <Loading what={caption.toLowerCase()} className="h-40" />;
-  if (data.total === 0 && !state.filtered) return <>{empty}</>;
+  if (data.total === 0 && !state.filtered && state.page === 1) return <>{empty}</>;
   return (
     <div>
       {error ? <Failed error={error} onRetry={onRetry} /> : null}
@@ -150,7 +150,9 @@ export function ConsoleTable<Row extends object>(props: ConsoleTableProps<Row>) 
             {data.rows.length === 0 ? (
               <tr className="border-t border-rule">
                 <td colSpan={columns.length} className="px-1.5 py-3 text-center text-ink-soft">
-                  {data.total > 0 ? "This page is past the end." : "Nothing fits the search and the filters."}
+                  {data.total > 0 || state.page > 1
+                    ? "This page is past the end."
+                    : "Nothing fits the search and the filters."}
                 </td>
               </tr>
             ) : null}

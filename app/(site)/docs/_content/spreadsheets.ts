@@ -50,7 +50,7 @@ export const spreadsheets: DocPage = {
           ],
         },
         '`NUMBERVALUE(…,".")` reads the point as the decimal sign whatever the sheet’s language. Cells that hold decimal commas must be written with a point before they go into the address: `SUBSTITUTE(A4,",",".")`. A refusal is one line that begins with `error:`, which the spreadsheet shows as an error value; open the address without `format=text` to read all of it.',
-        "Every shape’s formula stands under *Use this elsewhere* on its [calculator page](/calculate). Two media take a prefix, `core.material=…&cladding.resistivity=…`. Graded media need the body of a call and do not fit an address.",
+        "Every shape’s formula stands under “Use this elsewhere” on its [calculator page](/calculate). Two media take a prefix, `core.material=…&cladding.resistivity=…`. Graded media need the body of a call and do not fit an address.",
         "To try an address in a shell, with a key that may travel:",
         {
           snippets: [

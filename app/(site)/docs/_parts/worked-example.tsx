@@ -1,16 +1,18 @@
 import type { ResistanceResult } from "@/lib/engine";
+import { bracketText } from "../../../_ui/bracket";
 import { SiteLink } from "../../../_ui/site/site-link";
 import { Tex } from "../../../_ui/tex";
 
 /** The shape's example as the engine computes it now. */
 export function WorkedExample({ result }: { readonly result: ResistanceResult }) {
   const { resistance, steps = [], method } = result;
+  const { lower, upper, unit } = bracketText(resistance.value, resistance.lower, resistance.upper, "Ω");
   return (
     <>
       <p>
         With the dimensions of the drawing: <strong>{resistance.text}</strong>, between{" "}
-        <span className="font-mono">{digits(resistance.lower)}</span> and{" "}
-        <span className="font-mono">{digits(resistance.upper)}</span>&#8239;Ω. Method {method}, bounds{" "}
+        <span className="font-mono">{lower}</span> and <span className="font-mono">{upper}</span>&#8239;
+        {unit}. Method {method}, bounds{" "}
         <SiteLink href="/docs/bounds#bases">{resistance.boundsBasis}</SiteLink>,{" "}
         {resistance.proved ? "proved" : "not proved"}.
       </p>
@@ -25,9 +27,4 @@ export function WorkedExample({ result }: { readonly result: ResistanceResult })
       </ol>
     </>
   );
-}
-
-/** Enough digits to see how far the bounds lie apart. */
-function digits(value: number): string {
-  return String(Number(value.toPrecision(12)));
 }

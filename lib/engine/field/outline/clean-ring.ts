@@ -61,7 +61,9 @@ export function dropRepeated(
   }
   // A tail of equal vertices before the first one: the last kept edge must end in the first vertex kept.
   if (source.length > 0 && source[0] === 0 && anchor !== 0 && arcs.length > 0) closeChain(xy, source, arcs);
-  if (closing) repairs.push(`The ${title} repeats its first vertex at the end; the repetition was left out.`);
+  // An arc that closes the ring has to end in the first vertex; a vertex that does repeats it.
+  if (closing && Array.isArray(elements[n - 1]))
+    repairs.push(`The ${title} repeats its first vertex at the end; the repetition was left out.`);
   if (repeated.length > 0)
     repairs.push(
       `The ${title}: ${listIndices(repeated)} repeated the one before and ${repeated.length > 1 ? "were" : "was"} left out.`,

@@ -15,8 +15,6 @@ import { worstCase } from "./worst-case";
 const COVERAGE_FACTOR = 1.959963984540054;
 /** Work of an integral over a closed form's. */
 const INTEGRAL_WORK = 10;
-/** Curvature against slope beyond which the first order is said to be too little. */
-const BENT = 0.1;
 
 export interface FoundUncertainty {
   readonly uncertainty: Uncertainty;
@@ -74,7 +72,7 @@ function byMethod(
   defaultTrials: number,
 ): ByMethod {
   const { value } = resistance;
-  const { standard, shift, contributions, curvature } = propagated;
+  const { standard, shift, contributions, bent } = propagated;
   const cautions: string[] = [];
   if (request.method === "worst-case") {
     const { low, high, spans, basis } = worstCase(resistance);
@@ -109,11 +107,14 @@ function byMethod(
       cautions,
     };
   }
-  const low = value + shift - COVERAGE_FACTOR * standard;
-  const high = value + shift + COVERAGE_FACTOR * standard;
-  if (curvature > BENT) {
+  let low = value + shift - COVERAGE_FACTOR * standard;
+  let high = value + shift + COVERAGE_FACTOR * standard;
+  if (bent) {
+    // No verdict may rest on a range that the tolerances' own ends leave.
+    low = Math.min(low, propagated.low);
+    high = Math.max(high, propagated.high);
     cautions.push(
-      "The resistance is not straight over the tolerances, so first-order propagation is rough here; monte-carlo takes the bend into account.",
+      "The resistance is not straight over the tolerances, so first-order propagation is rough here; its range is widened to the values at their ends. monte-carlo takes the bend into account.",
     );
   }
   return {

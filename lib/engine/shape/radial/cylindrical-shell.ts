@@ -1,3 +1,4 @@
+import { INSULATION_CAUTION } from "../caution";
 import { defineShape } from "../define-shape";
 import { arc, circle, polyline, rectangle, type Drawing, type DrawingPath, type Point } from "../drawing";
 
@@ -120,7 +121,7 @@ export const cylindricalShell = defineShape({
   formula: "R = \\frac{\\rho}{\\varphi L}\\,\\ln\\frac{b}{a}",
   boundsBasis: "rounding",
   validity: ["Exact for radial flow: the end faces, and the side faces of a sector, carry no current."],
-  cautions: [],
+  cautions: [INSULATION_CAUTION],
   assumptions: [
     "Each of the two cylindrical surfaces is at one potential; nothing leaks through the end faces.",
   ],

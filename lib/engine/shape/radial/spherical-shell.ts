@@ -1,3 +1,4 @@
+import { INSULATION_CAUTION } from "../caution";
 import { defineShape } from "../define-shape";
 import { arc, circle, polyline, type DrawingPath, type Point } from "../drawing";
 
@@ -107,7 +108,7 @@ export const sphericalShell = defineShape({
   formula: "R = \\frac{\\rho\\,(b - a)}{\\Omega\\,a\\,b},\\quad \\Omega = 2\\pi(1 - \\cos\\theta)",
   boundsBasis: "rounding",
   validity: ["Exact for radial flow: the conical side of a part of the shell carries no current."],
-  cautions: [],
+  cautions: [INSULATION_CAUTION],
   assumptions: ["Each of the two spherical surfaces is at one potential."],
   sources: [
     {

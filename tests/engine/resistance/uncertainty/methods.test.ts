@@ -217,6 +217,35 @@ describe("what joins in", () => {
     expect(verdict(value * 0.97, { method: "worst-case" })).toBe("not-met");
   });
 
+  it("propagation rests no verdict on a first order that is nothing", () => {
+    // Inner cylinder off the axis by up to 1 mm: R falls with the square of the offset, to acosh((a²+b²-e²)/(2ab))/(2πσL).
+    const cylinders = {
+      shape: "eccentric-cylinders",
+      dimensions: {
+        innerRadius: "2 mm",
+        outerRadius: "5 mm",
+        offset: { value: "0 mm", plus: "1 mm" },
+        length: "1 m",
+      },
+      medium: { resistivity: 1 },
+      requirement: { min: "145 mohm" },
+      uncertainty: { method: "propagation" },
+    };
+    const offAxis = compute(cylinders);
+    expect(offAxis.verdict).toBe("undecided");
+    expect(offAxis.uncertainty?.low).toBeCloseTo(Math.acosh((4 + 25 - 1) / 20) / (2 * Math.PI), 9);
+    expect(offAxis.cautions.join()).toMatch(/not straight/);
+    // Neither a coefficient about zero nor a temperature at its reference does anything alone.
+    const hot = compute({
+      ...bar,
+      medium: { resistivity: 1.7e-8, temperatureCoefficient: { value: 0, tolerance: 0.004 } },
+      operating: { temperature: { value: 20, tolerance: 50 } },
+      requirement: { max: compute(bar).resistance.value * 1.1 },
+      uncertainty: { method: "propagation" },
+    });
+    expect(hot.verdict).toBe("undecided");
+  });
+
   it("a tolerance of unequal sides moves the range", () => {
     const body = { ...bar, medium: { resistivity: { value: 1.7e-8, plus: "2 %" } } };
     const { low, high, value } = uncertaintyOf(body, { method: "worst-case" });
