@@ -18,9 +18,11 @@ This file is made by ``npm run generate`` in Rhoform's repository; the parts it 
 
 from __future__ import annotations
 
+import csv
 import dataclasses
 import email.utils
 import http.client
+import io
 import json
 import os
 import re
@@ -3889,7 +3891,7 @@ _USAGE = """usage: python -m rhoform [--url URL] COMMAND ...
                                     any operation of the API, such as listMaterials
 
 The address comes from --url or RHOFORM_URL (else http://127.0.0.1:3000), the key from RHOFORM_KEY.
-FILE may be - for the input. Exit code: 0 answered, 1 refused or not reached, 2 a mistake in the command."""
+FILE may be - for the input. Exit code: 0 answered, 1 refused (of a table: a row) or not reached, 2 a mistake in the command."""
 
 
 def _pairs(arguments: Sequence[str]) -> Dict[str, str]:
@@ -3939,6 +3941,13 @@ def _print_resistance(client: Client, arguments: Sequence[str]) -> None:
     print(f"{found.lower!r} ... {found.upper!r} ohm, {'proved' if found.proved else 'not proved'} ({found.bounds_basis})")
     for caution in answer.cautions:
         print(f"caution: {caution}", file=sys.stderr)
+
+
+def _refused_rows(table: str) -> int:
+    text = table.lstrip("\ufeff")
+    delimiter = max(",;\t", key=text.split("\n", 1)[0].count)
+    rows = csv.DictReader(io.StringIO(text), delimiter=delimiter)
+    return sum(1 for row in rows if row.get("status") not in (None, "", "200"))
 
 
 def _solve(client: Client, arguments: Sequence[str]) -> None:
@@ -4009,6 +4018,10 @@ def main(arguments: Optional[Sequence[str]] = None) -> int:
                 repeatable=True,
             )
             sys.stdout.write(table)
+            refused = _refused_rows(table)
+            if refused:
+                print(f"{refused} {'row was' if refused == 1 else 'rows were'} not answered.", file=sys.stderr)
+                return 1
         elif command == "field":
             _solve(client, rest)
         elif command == "call":

@@ -1,3 +1,4 @@
+import { join } from "node:path";
 import { afterEach, describe, expect, it } from "vitest";
 import {
   type AnsweringService,
@@ -304,6 +305,18 @@ describe("python -m rhoform", () => {
     );
     expect(ran).toEqual({ code: 0, out: "1 Ω\n0.9 ... 1.1 ohm, proved (rounding)\n", err: "" });
     expect(served.calls[0].url).toBe("/api/v1/resistance/bar?length=1m&core.material=x");
+  });
+
+  it("a table with a row that was refused leaves with 1", async () => {
+    const table = "shape;status;problem\r\nbar;200;\r\nbar;422;no\r\n";
+    const served = await service((_request, response) => {
+      response.writeHead(200, { "Content-Type": "text/csv; charset=utf-8" });
+      response.end(table);
+    });
+    const variables = { RHOFORM_URL: served.baseUrl, RHOFORM_KEY: KEY };
+    const ran = await python(["-m", "rhoform", "batch", join(process.cwd(), "README.md")], variables);
+    expect([ran.code, ran.err]).toEqual([1, "1 row was not answered.\n"]);
+    expect(ran.out).toContain("bar;422;no");
   });
 
   it("refusals leave with 1, mistakes with 2, and neither shows the key", async () => {

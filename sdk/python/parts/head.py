@@ -18,9 +18,11 @@ This file is made by ``npm run generate`` in Rhoform's repository; the parts it 
 
 from __future__ import annotations
 
+import csv
 import dataclasses
 import email.utils
 import http.client
+import io
 import json
 import os
 import re

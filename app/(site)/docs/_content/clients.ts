@@ -137,5 +137,25 @@ export const clients: DocPage = {
         },
       ],
     },
+    {
+      id: "examples",
+      title: "Examples to start from",
+      blocks: [
+        {
+          table: {
+            head: ["script", "what it does"],
+            rows: [
+              ["`sweep`", "sweeps one dimension and prints a table"],
+              ["`parts_list`, `parts-list`", "reads a parts list from CSV; exits with 1 if a row is refused"],
+              [
+                "`replay_records`, `replay-records`",
+                "replays records, as a nightly job; exits with 1 on drift",
+              ],
+            ],
+          },
+        },
+        "They stand in `sdk/python/examples` and `sdk/typescript/examples`, and in the packed TypeScript client.",
+      ],
+    },
   ],
 };
