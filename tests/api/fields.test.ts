@@ -42,6 +42,8 @@ describe("POST /fields 200", () => {
     // The inner corner is the only place where the current crowds without limit.
     expect(peak).toMatchObject({ unbounded: true, position: { x: 1, y: 1, unit: "mm" }, per: "volt" });
     expect(peak.distance.value).toBeGreaterThan(0);
+    // Density and field obey Ohm's law on the sheet of 50 ohm/sq.
+    expect(peak.currentDensity.value / (peak.field.value / 50)).toBeCloseTo(1, 12);
     expect(body.progress.upper).toBe(resistance.upper);
     expect((await get(`/fields/${body.id}`)).body).toEqual(body);
   });

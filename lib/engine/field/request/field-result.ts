@@ -142,6 +142,9 @@ function widenedSigned({ value, lower, upper }: BoundedValue, error: number): Bo
   };
 }
 
+/** Digits of a density or a field that only one of the two solutions tells. */
+const DIGITS_OF_ONE_SOLUTION = 3;
+
 function peakOf(
   { problem, request }: PreparedField,
   { map }: FieldSolution,
@@ -153,16 +156,22 @@ function peakOf(
   const unit = axisymmetric ? "A/m^2" : "A/m";
   const [x, y] = position.map((coordinate) => Number(coordinate.toPrecision(9)));
   const place = `(${x}, ${y}) ${request.outline?.unit ?? frame.unit}`;
-  const currentDensity = {
-    value: density * voltage,
-    unit,
-    text: formatQuantity(density * voltage, unit),
-  } as const;
-  const field = {
-    value: fieldVperM * voltage,
-    unit: "V/m",
-    text: formatQuantity(fieldVperM * voltage, "V/m"),
-  } as const;
+  // The field comes from the potential, the density from the stream function. Where one conductance links them, both
+  // tell the middle of the two, to the digits in which they agree.
+  const [only] = problem.conductance;
+  const linked = problem.conductance.length === 1 && typeof only === "number" ? only : null;
+  const middle = linked === null ? null : (fieldVperM + density / linked) / 2;
+  const apart = linked === null || middle === null ? null : Math.abs(density / linked / middle - 1);
+  const quantity = <Unit extends "A/m" | "A/m^2" | "V/m">(atOneVolt: number, of: Unit) => {
+    const value = atOneVolt * voltage;
+    const digits =
+      apart === null
+        ? { digits: DIGITS_OF_ONE_SOLUTION }
+        : { lower: value - Math.abs(value) * apart, upper: value + Math.abs(value) * apart };
+    return { value, unit: of, text: formatQuantity(value, of, digits) };
+  };
+  const currentDensity = quantity(linked === null || middle === null ? density : middle * linked, unit);
+  const field = quantity(middle ?? fieldVperM, "V/m");
   const distance = unbounded
     ? ({ value: distanceM, unit: "m", text: formatQuantity(distanceM, "metre") } as const)
     : null;
