@@ -2,17 +2,17 @@ import { countEmbedCall } from "@/db/queries/embeds";
 import { insertUsage } from "@/db/queries/usage";
 import { requireAccess } from "@/lib/auth/access";
 import { SIGNED_OUT_ID } from "@/lib/auth/principal";
-import { CheckFailure, InputError } from "@/lib/engine";
 import { abandon, finish, fingerprintOf, readIdempotencyKey, startOrRepeat } from "@/lib/idempotency/repeat";
 import { Refusal } from "@/lib/service/refusal";
 import type { Service } from "@/lib/service/service";
 import { clientKind } from "@/lib/usage/client-kind";
-import { bodyRefusal, discardBody, receiveBody } from "./body";
+import { discardBody, receiveBody } from "./body";
 import { Call } from "./call";
 import { corsHeaders, isPreflight, preflightHeaders, requireOrigin } from "./cors";
 import { BASE_PATH } from "./base-path";
 import { negotiate } from "./negotiate";
 import type { Handled, Operation, Outcome, Prepared } from "./operation";
+import { refusalOf } from "./refusal-of";
 import type { Match, RouteTable } from "./route-table";
 import { answerOf, type Answer, problemAnswer, respond } from "./respond";
 
@@ -220,26 +220,6 @@ function log(call: Call, report: Report, status: number): void {
     client: clientKind(call.headers.get("user-agent")),
     address: call.address,
   });
-}
-
-/** What the caller may know of an error; a defect is logged with its stack and told without. */
-function refusalOf(error: unknown, call: Call): Refusal {
-  if (error instanceof Refusal) return error;
-  if (error instanceof InputError) return bodyRefusal(error.errors);
-  call.service.log.error({
-    requestId: call.requestId,
-    path: call.url.pathname,
-    error:
-      error instanceof Error
-        ? { name: error.name, message: error.message, stack: error.stack }
-        : String(error),
-  });
-  if (error instanceof Error && "code" in error && error.code === "SQLITE_BUSY") {
-    return new Refusal("busy", "The database is busy.", { headers: { "Retry-After": "1" } });
-  }
-  const what =
-    error instanceof CheckFailure ? "One of the engine's own checks on the answer failed" : "The call failed";
-  return new Refusal("internal", `${what}. Please report the request id.`);
 }
 
 /** RFC 9110, 13.1.2: what the client has already is not sent again. */

@@ -48,7 +48,6 @@ export {
 } from "./medium/expression/compile-expression";
 
 export { schemaComplaints, unknownMember } from "./schema-complaints";
-export { addZodIssues } from "./resistance/zod-issues";
 export {
   dimensionsSchema,
   includeSchema,

@@ -45,7 +45,9 @@ function flatten(schema: z.ZodType, issues: readonly Issue[], base: Path): Schem
         .slice(0, MOST_UNKNOWN)
         .map((key) => ({ path: [...path, key], detail: unknownMember(key, known) }));
     }
-    if (issue.code === "invalid_union" && issue.errors.length > 0) {
+    // A union that has words of its own is told by them.
+    const plain = issue.message === "Invalid input";
+    if (issue.code === "invalid_union" && issue.errors.length > 0 && plain) {
       const wrong = discriminated(issue);
       return wrong
         ? [{ path: [...path, ...wrong.path], detail: wrong.detail }]
@@ -133,6 +135,8 @@ function sentence(issue: Issue): string {
       if (issue.input === undefined) return "is required.";
       return `must be one of ${issue.values.map((value) => JSON.stringify(value)).join(", ")}.`;
     case "too_small":
+      if (issue.minimum === 1 && issue.inclusive !== false && measure(issue.origin) !== "")
+        return "must not be empty.";
       return `must ${issue.inclusive === false ? "be more than" : "be at least"} ${issue.minimum}${measure(issue.origin)}.`;
     case "too_big":
       return `must ${issue.inclusive === false ? "be less than" : "be at most"} ${issue.maximum}${measure(issue.origin)}.`;

@@ -1,11 +1,9 @@
 import "server-only";
-import { bodyRefusal } from "@/api/body";
 import type { Content } from "@/api/operation";
+import { refusalOf } from "@/api/refusal-of";
 import { answerOf, type Answer, problemAnswer, respond } from "@/api/respond";
-import { InputError } from "@/lib/engine";
 import type { BucketState } from "@/lib/limits/limiter";
 import { newId } from "@/lib/service/identifier";
-import { Refusal } from "@/lib/service/refusal";
 import { type Service, sharedService } from "@/lib/service/service";
 
 /** A call of one of our own pages on its way: what is known before anything of it is read. */
@@ -101,21 +99,4 @@ export async function answerPageCall(
   });
   for (const cookie of setCookies) response.headers.append("Set-Cookie", cookie);
   return response;
-}
-
-function refusalOf(error: unknown, call: PageCall): Refusal {
-  if (error instanceof Refusal) return error;
-  if (error instanceof InputError) return bodyRefusal(error.errors);
-  call.service.log.error({
-    requestId: call.requestId,
-    path: call.url.pathname,
-    error:
-      error instanceof Error
-        ? { name: error.name, message: error.message, stack: error.stack }
-        : String(error),
-  });
-  if (error instanceof Error && "code" in error && error.code === "SQLITE_BUSY") {
-    return new Refusal("busy", "The database is busy.", { headers: { "Retry-After": "1" } });
-  }
-  return new Refusal("internal", "The call failed. Please report the request id.");
 }

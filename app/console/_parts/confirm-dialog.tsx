@@ -9,16 +9,28 @@ import { ConsoleProblem } from "../_shell/call-console";
 interface ConfirmDialogProps {
   /** A question: "Remove Tomas Vell?" */
   readonly title: string;
-  /** What follows from a yes. */
+  /** What follows from a yes, in a sentence below the question. */
+  readonly description?: string;
+  /** The rest of what follows. */
   readonly children: ReactNode;
   /** The yes, as a verb: "Remove". */
   readonly action: string;
+  /** The no. */
+  readonly decline?: string;
   readonly onConfirm: () => Promise<void>;
   readonly onClose: () => void;
 }
 
 /** Asks before what cannot simply be undone; stays open with the reason where it is refused. */
-export function ConfirmDialog({ title, children, action, onConfirm, onClose }: ConfirmDialogProps) {
+export function ConfirmDialog({
+  title,
+  description,
+  children,
+  action,
+  decline = "Cancel",
+  onConfirm,
+  onClose,
+}: ConfirmDialogProps) {
   const [busy, setBusy] = useState(false);
   const [problem, setProblem] = useState<ConsoleProblem | null>(null);
 
@@ -39,9 +51,10 @@ export function ConfirmDialog({ title, children, action, onConfirm, onClose }: C
       open
       onOpenChange={(open) => !open && onClose()}
       title={title}
+      description={description}
       actions={
         <>
-          <Button onClick={onClose}>Cancel</Button>
+          <Button onClick={onClose}>{decline}</Button>
           <Button variant="danger" onClick={confirm} disabled={busy}>
             {action}
           </Button>

@@ -5,7 +5,7 @@ import { between, isRepresentable } from "../resistance/bounds";
 import type { ComputeContext } from "../resistance/compute-context";
 import { operatingPoint, readOperating } from "../resistance/operating-point";
 import { readRequirement, verdictOf } from "../resistance/requirement";
-import { addZodIssues } from "../resistance/zod-issues";
+import { addSchemaComplaints } from "../schema-complaints";
 import { CATALOGUE_VERSION, ENGINE_VERSION } from "../version";
 import { carryingElements, incidenceOf, reachedFrom, type Incidence } from "./branches";
 import { checkFlow, flowOf, spreadPotential } from "./flow";
@@ -40,9 +40,9 @@ export function* networkInStretches(
   context: ComputeContext,
 ): Generator<void, NetworkResult> {
   const problems = new Problems();
-  const parsed = networkRequestSchema.safeParse(request);
+  const parsed = networkRequestSchema.safeParse(request, { reportInput: true });
   if (!parsed.success) {
-    addZodIssues(parsed.error.issues.slice(0, MOST_COMPLAINTS), "#", problems);
+    addSchemaComplaints(networkRequestSchema, parsed.error.issues.slice(0, MOST_COMPLAINTS), "#", problems);
     throw new InputError(problems.list);
   }
   const body = parsed.data;

@@ -20,7 +20,7 @@ import { listSteps } from "./steps";
 import { findUncertainty } from "./uncertainty/find-uncertainty";
 import { materialInputs, readTolerances } from "./uncertainty/input";
 import { separateTolerances } from "./uncertainty/separate-tolerances";
-import { addZodIssues } from "./zod-issues";
+import { addSchemaComplaints } from "../schema-complaints";
 
 /**
  * Computes one resistance.
@@ -121,9 +121,9 @@ const UNUSED_TOLERANCES =
 
 /** The body by its schema. What can still be read after a complaint is checked as well, so that all complaints show. */
 function parseRequest(request: unknown, problems: Problems): ResistanceRequest {
-  const parsed = resistanceRequestSchema.safeParse(request);
+  const parsed = resistanceRequestSchema.safeParse(request, { reportInput: true });
   if (parsed.success) return parsed.data;
-  addZodIssues(parsed.error.issues, "#", problems);
+  addSchemaComplaints(resistanceRequestSchema, parsed.error.issues, "#", problems);
   const shape =
     typeof request === "object" && request !== null ? (request as { shape?: unknown }).shape : undefined;
   const dimensions =

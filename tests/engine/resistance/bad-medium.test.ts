@@ -33,7 +33,12 @@ describe("graded media", () => {
       at(""),
       /required|must be an object/,
     ],
-    ["an unknown member", profile({ kind: "constant", value: 1, colour: 1 }), at("/colour"), /not a member/],
+    [
+      "an unknown member",
+      profile({ kind: "constant", value: 1, colour: 1 }),
+      at("/colour"),
+      /is not known here/,
+    ],
     [
       "zero along the flow",
       profile({ kind: "linear", from: 0, to: 1 }),
@@ -278,7 +283,7 @@ describe("expressions", () => {
     ["a global name", "globalThis", /unknown name/],
   ])("%s", (_, value, pattern) => expectComplaint(expression(value), pointer, pattern));
 
-  it("a value that is no text", () => expectComplaint(expression(5), pointer, /must be a string/));
+  it("a value that is no text", () => expectComplaint(expression(5), pointer, /must be a text/));
 
   it("is allowed to be zero in a part of the section", () => {
     const request = expression("max(0, u-0.5)", "thickness");

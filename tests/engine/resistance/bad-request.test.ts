@@ -14,9 +14,10 @@ describe("the body", () => {
     ["null", null, "#", /must be an object/],
     ["a text", "bar", "#", /must be an object/],
     ["no shape", { ...good, shape: undefined }, "#/shape", /required/],
-    ["a shape that is a number", { ...good, shape: 7 }, "#/shape", /must be a string/],
+    ["a shape that is a number", { ...good, shape: 7 }, "#/shape", /must be a text/],
     ["an unknown shape", { ...good, shape: "cylinder-shell" }, "#/shape", /"cylindrical-shell"/],
-    ["an unknown member", { ...good, colour: "red" }, "#/colour", /not a member/],
+    ["an unknown member", { ...good, colour: "red" }, "#/colour", /known are shape, dimensions, medium/],
+    ["a member misspelt", { ...good, operatin: {} }, "#/operatin", /Did you mean "operating"/],
     [
       "an unknown method of uncertainty",
       { ...good, uncertainty: { method: "guess" } },
@@ -166,7 +167,12 @@ describe("the medium", () => {
       "#/media",
       /takes one medium/,
     ],
-    ["an unknown member", medium({ conductivity: 1, colour: 2 }), "#/medium/colour", /not a member/],
+    [
+      "an unknown member",
+      medium({ conductivity: 1, colour: 2 }),
+      "#/medium/colour",
+      /known are material, extrapolate/,
+    ],
     ["an unknown material", medium({ material: "unobtainium" }), "#/medium/material", /no material/],
     [
       "the wrong unit",
@@ -217,7 +223,7 @@ describe("the operating point", () => {
     ["three drives", { voltage: 1, current: 1, power: 2 }, "#/operating/current", /at most one/],
     ["a wrong unit", { voltage: "1 A" }, "#/operating/voltage", /must be a voltage/],
     ["a negative one", { power: -1 }, "#/operating/power", /greater than 0/],
-    ["an unknown member", { volts: 1 }, "#/operating/volts", /not a member/],
+    ["an unknown member", { volts: 1 }, "#/operating/volts", /known are temperature, voltage/],
     ["a current that overflows the power", { current: 1e200 }, "#/operating/current", /cannot hold/],
   ])("%s", (_, operating, pointer, pattern) => expectComplaint({ ...good, operating }, pointer, pattern));
 });

@@ -1,21 +1,9 @@
+import type { KeyView } from "@/lib/auth/manage-keys";
+
 /** A key as the console's JSON has it. */
-export interface Key {
-  readonly id: string;
-  readonly name: string;
-  readonly team: string;
+export interface Key extends KeyView {
   readonly teamId: string;
   readonly teamName: string;
-  readonly scopes: readonly string[];
-  readonly quotas: { readonly minute: number; readonly month: number };
-  readonly origins: readonly string[];
-  readonly allowedInUrl: boolean;
-  readonly state: "active" | "expired" | "revoked";
-  readonly createdAt: string;
-  readonly createdBy: string;
-  readonly expiresAt: string | null;
-  readonly revokedAt: string | null;
-  readonly lastUsedAt: string | null;
-  readonly lastClient: string | null;
   readonly monthUsed: number;
 }
 

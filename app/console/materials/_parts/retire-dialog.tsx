@@ -1,11 +1,8 @@
 "use client";
 
-import { useState } from "react";
-import { Button } from "../../../_ui/button";
-import { Dialog } from "../../../_ui/dialog";
-import { ProblemNotice } from "../../../_ui/problem-notice";
-import { callConsole, ConsoleProblem } from "../../_shell/call-console";
+import { ConfirmDialog } from "../../_parts/confirm-dialog";
 import { countText } from "../../_parts/numbers";
+import { callConsole } from "../../_shell/call-console";
 import type { MaterialHistory, MaterialVersion } from "./material";
 
 interface RetireDialogProps {
@@ -17,40 +14,20 @@ interface RetireDialogProps {
 
 /** Asks before a material is withdrawn, and says what goes on and what does not. */
 export function RetireDialog({ history, current, onClose, onRetired }: RetireDialogProps) {
-  const [busy, setBusy] = useState(false);
-  const [problem, setProblem] = useState<ConsoleProblem | null>(null);
   const records = history.uses.reduce((sum, use) => sum + use.records, 0);
-
-  async function retire() {
-    setBusy(true);
-    setProblem(null);
-    try {
-      await callConsole("POST", `materials/${history.id}/retire`, { from: current.version });
-      onRetired();
-    } catch (failure) {
-      if (!(failure instanceof ConsoleProblem)) throw failure;
-      setProblem(failure);
-      setBusy(false);
-    }
-  }
-
   return (
-    <Dialog
-      open
-      onOpenChange={onClose}
+    <ConfirmDialog
       title={`Retire ${current.name}?`}
       description="It cannot be brought back; add a new material instead."
-      actions={
-        <>
-          <Button onClick={onClose}>Keep it</Button>
-          <Button variant="danger" onClick={retire} disabled={busy}>
-            {busy ? "Retiring …" : "Retire for good"}
-          </Button>
-        </>
-      }
+      action="Retire for good"
+      decline="Keep it"
+      onConfirm={async () => {
+        await callConsole("POST", `materials/${history.id}/retire`, { from: current.version });
+        onRetired();
+      }}
+      onClose={onClose}
     >
-      {problem ? <ProblemNotice problem={problem.problem} /> : null}
-      <ul className="list-disc ps-2 text-table">
+      <ul className="list-disc ps-2">
         <li>
           Requests, scripts and embeds that name <code>{history.id}</code> are refused from now on.
         </li>
@@ -60,6 +37,6 @@ export function RetireDialog({ history, current, onClose, onRetired }: RetireDia
             : `${countText(records)} record${records === 1 ? "" : "s"} used it: they stay, and replay with the version they pinned.`}
         </li>
       </ul>
-    </Dialog>
+    </ConfirmDialog>
   );
 }

@@ -18,7 +18,7 @@ import { readMedia } from "../read-media";
 import { unknownShape } from "../request-schema";
 import { readRequirement } from "../requirement";
 import { separateTolerances } from "../uncertainty/separate-tolerances";
-import { addZodIssues } from "../zod-issues";
+import { addSchemaComplaints } from "../../schema-complaints";
 import { readRange, type FindableDimension, type SearchRange } from "./search-range";
 import { sizingRequestSchema } from "./sizing-schema";
 
@@ -40,9 +40,9 @@ export interface ReadSizing {
 /** Null after complaints. */
 export function readSizing(request: unknown, context: ComputeContext, problems: Problems): ReadSizing | null {
   const { plain } = separateTolerances(request, problems);
-  const parsed = sizingRequestSchema.safeParse(plain);
+  const parsed = sizingRequestSchema.safeParse(plain, { reportInput: true });
   if (!parsed.success) {
-    addZodIssues(parsed.error.issues, "#", problems);
+    addSchemaComplaints(sizingRequestSchema, parsed.error.issues, "#", problems);
     return null;
   }
   const body = parsed.data;

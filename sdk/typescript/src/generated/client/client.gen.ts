@@ -233,7 +233,6 @@ export const createClient = (config: Config = {}): Client => {
       throw finalError;
     }
 
-    // TODO: we probably want to return error and improve types
     return opts.responseStyle === 'data'
       ? undefined
       : {
