@@ -1,5 +1,5 @@
-/** Every kind of public page, for the checks that hold for all of them. */
-export const PAGES = [
+/** The pages for work, and those around them. */
+export const WORK_PAGES = [
   "/",
   "/calculate",
   "/calculate/cylindrical-shell",
@@ -10,6 +10,14 @@ export const PAGES = [
   "/network",
   "/calculate/bar?width=50mm&width.tolerance=0.4mm&width.distribution=normal&length=1m&thickness=10mm&uncertainty=worst-case&solveFor=width&target=30uohm",
   "/outline",
+  "/sign-in",
+  "/forgotten",
+  "/invitation/a-link-that-is-over",
+  "/no-such-page",
+] as const;
+
+/** The pages that are read. */
+export const DOCS_PAGES = [
   "/docs",
   "/docs/start",
   "/docs/fields",
@@ -22,9 +30,8 @@ export const PAGES = [
   "/docs/problems/invalid-input",
   "/docs/accuracy",
   "/docs/permissions",
-  "/sign-in",
-  "/forgotten",
-  "/invitation/a-link-that-is-over",
   "/docs/changelog",
-  "/no-such-page",
 ] as const;
+
+/** Every kind of public page, for the checks that hold for all of them. */
+export const PAGES = [...WORK_PAGES, ...DOCS_PAGES] as const;

@@ -1,0 +1,4 @@
+import { checkPages } from "./page-checks";
+import { DOCS_PAGES } from "./pages";
+
+checkPages(DOCS_PAGES);

@@ -1,0 +1,55 @@
+import AxeBuilder from "@axe-core/playwright";
+import { afterAll, beforeAll, describe, expect, it } from "vitest";
+import { base, closeBrowser, visit, type Visit } from "./browser";
+
+/** What holds for every page: own host only, a heading before any script, axe in both themes, three widths. */
+export function checkPages(paths: readonly string[]): void {
+  afterAll(closeBrowser);
+
+  describe.each(paths)("%s", (path) => {
+    let opened: Visit;
+    beforeAll(async () => {
+      opened = await visit(path);
+    });
+    afterAll(() => opened.close());
+
+    it("asks no other host, breaks no policy, throws nothing", async () => {
+      const { page, requests, complaints } = opened;
+      await page.waitForTimeout(800);
+      expect(requests.filter((url) => !url.startsWith(base()) && !url.startsWith("data:"))).toEqual([]);
+      // The browser itself notes the status of the page that is not there, and of an input that is wrong on purpose.
+      const expected = path === "/no-such-page" ? "404" : path.includes("5kg") ? "422" : undefined;
+      expect(complaints.filter((text) => expected === undefined || !text.includes(expected))).toEqual([]);
+    });
+
+    it("has a title, a language and one first heading, before any script", async () => {
+      const { page, close } = await visit(path, { scripts: false });
+      expect(await page.title()).toMatch(/Rhoform/);
+      expect(await page.locator("html").getAttribute("lang")).toBe("en");
+      expect(await page.locator("h1").count()).toBe(1);
+      await close();
+    });
+
+    it.each(["light", "dark"] as const)("passes axe in %s", async (colorScheme) => {
+      const { page, context } = opened;
+      await page.emulateMedia({ colorScheme, reducedMotion: "reduce" });
+      await page.waitForTimeout(300);
+      const { violations } = await new AxeBuilder({ page })
+        .withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa", "best-practice"])
+        .analyze();
+      expect(
+        violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => String(target)).join(" | ")}`),
+      ).toEqual([]);
+      expect(context.pages()).toHaveLength(1);
+    });
+
+    it.each([1440, 768, 360])("fits %i px without scrolling sideways", async (width) => {
+      const { page } = opened;
+      await page.setViewportSize({ width, height: 900 });
+      const excess = await page.evaluate(
+        () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+      );
+      expect(excess).toBe(0);
+    });
+  });
+}

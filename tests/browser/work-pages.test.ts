@@ -1,0 +1,4 @@
+import { checkPages } from "./page-checks";
+import { WORK_PAGES } from "./pages";
+
+checkPages(WORK_PAGES);
