@@ -1,5 +1,5 @@
 import { z } from "zod";
-import { gradedSchema } from "@/lib/engine";
+import { distributionSchema, FEWEST_TRIALS, gradedSchema, terminalSchema } from "@/lib/engine";
 import { LARGEST_QUOTA } from "../limits/quota";
 import { LANGUAGES } from "./language";
 
@@ -40,38 +40,102 @@ export const inputRule = z
 
 export type InputRule = z.infer<typeof inputRule>;
 
-/** What a version of a widget says: everything its visitors see and may change. */
-export const embedDefinition = z.strictObject({
-  shape: z.string().max(64),
-  title: line(100).min(1),
-  intro: line(300).optional(),
-  /** In the order in which they are shown. */
-  inputs: z
-    .array(z.strictObject({ name: inputName, rule: inputRule }))
-    .max(40)
-    .superRefine((inputs, context) => {
-      inputs.forEach(({ name }, index) => {
-        if (inputs.findIndex((other) => other.name === name) === index) return;
-        context.addIssue({ code: "custom", path: [index, "name"], message: `is there twice: ${name}.` });
-      });
+/** One call of a widget costs one computation, so it makes no more trials than one buys. */
+export const MOST_WIDGET_TRIALS = 100_000;
+
+/**
+ * The tolerance of one input: ± a quantity or a share of the value, as the API spells them ("0.1 mm", "1 %"). Visitors
+ * may change an open one within its limits, of which `min` is 0 if left out.
+ */
+export const toleranceRule = z.discriminatedUnion("mode", [
+  z.strictObject({
+    mode: z.literal("fixed"),
+    value: quantity,
+    distribution: distributionSchema.optional(),
+  }),
+  z.strictObject({
+    mode: z.literal("open"),
+    value: quantity,
+    min: quantity.optional(),
+    max: quantity.optional(),
+    distribution: distributionSchema.optional(),
+  }),
+]);
+
+export type ToleranceRule = z.infer<typeof toleranceRule>;
+
+const tolerances = z.strictObject({
+  uncertainty: z.discriminatedUnion("method", [
+    z.strictObject({ method: z.literal("propagation") }),
+    z.strictObject({ method: z.literal("worst-case") }),
+    z.strictObject({
+      method: z.literal("monte-carlo"),
+      trials: z.int().min(FEWEST_TRIALS).max(MOST_WIDGET_TRIALS).optional(),
+      seed: z.int().min(0).max(4_294_967_295).optional(),
     }),
-  /** A graded medium is fixed as a whole. */
-  graded: gradedSchema.optional(),
-  requirement: z
-    .strictObject({ min: quantity.optional(), max: quantity.optional() })
-    .refine(({ min, max }) => min !== undefined || max !== undefined, "must have min, max or both.")
-    .optional(),
-  show: z.strictObject({ drawing: z.boolean(), bounds: z.boolean(), plots: z.boolean() }),
-  theme: z.enum(["host", "light", "dark"]),
-  accent: z
-    .string()
-    .regex(/^#[0-9a-f]{6}$/, "must be a colour such as #9c4a1f")
-    .optional(),
-  density: z.enum(["comfortable", "compact"]),
-  language: z.enum(["reader", ...LANGUAGES]),
+  ]),
+  /** Whether visitors see what each input contributes. */
+  budget: z.boolean(),
+  inputs: z
+    .array(z.strictObject({ name: inputName, rule: toleranceRule }))
+    .max(40)
+    .superRefine(refuseTwins),
 });
 
+export type Tolerances = z.infer<typeof tolerances>;
+
+/** What a version of a widget says: everything its visitors see and may change. */
+export const embedDefinition = z
+  .strictObject({
+    shape: z.string().max(64).optional(),
+    /** A stored outline of the team, in place of a shape. Stored outlines never change, so a version's never does. */
+    outlineId: z.string().max(64).optional(),
+    /** On the outline, in place of those that it was stored with. */
+    terminals: z.array(terminalSchema).max(64).optional(),
+    /** Width of the bracket on an outline over its value; 1e-4 if left out. */
+    accuracy: z.number().min(1e-8).max(1e-2).optional(),
+    title: line(100).min(1),
+    intro: line(300).optional(),
+    /** In the order in which they are shown. */
+    inputs: z
+      .array(z.strictObject({ name: inputName, rule: inputRule }))
+      .max(40)
+      .superRefine(refuseTwins),
+    /** A graded medium is fixed as a whole. */
+    graded: gradedSchema.optional(),
+    requirement: z
+      .strictObject({ min: quantity.optional(), max: quantity.optional() })
+      .refine(({ min, max }) => min !== undefined || max !== undefined, "must have min, max or both.")
+      .optional(),
+    /** How far the resistance strays; left out where the widget does not ask. */
+    tolerances: tolerances.optional(),
+    show: z.strictObject({ drawing: z.boolean(), bounds: z.boolean(), plots: z.boolean() }),
+    theme: z.enum(["host", "light", "dark"]),
+    accent: z
+      .string()
+      .regex(/^#[0-9a-f]{6}$/, "must be a colour such as #9c4a1f")
+      .optional(),
+    density: z.enum(["comfortable", "compact"]),
+    language: z.enum(["reader", ...LANGUAGES]),
+  })
+  .superRefine(({ shape, outlineId }, context) => {
+    if ((shape === undefined) === (outlineId === undefined)) {
+      context.addIssue({
+        code: "custom",
+        path: ["shape"],
+        message: "must be given, or outlineId, and not both.",
+      });
+    }
+  });
+
 export type EmbedDefinition = z.infer<typeof embedDefinition>;
+
+function refuseTwins(inputs: readonly { readonly name: string }[], context: z.RefinementCtx): void {
+  inputs.forEach(({ name }, index) => {
+    if (inputs.findIndex((other) => other.name === name) === index) return;
+    context.addIssue({ code: "custom", path: [index, "name"], message: `is there twice: ${name}.` });
+  });
+}
 
 /** An origin as browsers send it. */
 export const hostOrigin = z

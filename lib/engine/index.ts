@@ -80,6 +80,8 @@ export {
   type UsedMaterial,
 } from "./resistance/result-schema";
 export {
+  distributionSchema,
+  FEWEST_TRIALS,
   tolerancedQuantitySchema,
   tolerancedSchema,
   uncertaintyRequestSchema,
