@@ -1,6 +1,7 @@
 import { transact } from "@/db/client";
 import { keepersOfTeam, keysEnding, keysNearQuota, type NoticedKey } from "@/db/queries/key-notices";
 import { claimNotice } from "@/db/queries/mails";
+import { SOON_MS } from "../auth/key-expiry";
 import { monthBucket } from "../limits/quota";
 import type { Service } from "../service/service";
 import type { Letter } from "./letter";
@@ -40,17 +41,16 @@ export function tellOfExpiry(service: Service): number {
   const { db, config } = service;
   const now = service.now();
   let mails = 0;
-  for (const key of keysEnding(db, now - LATE_MS, now + EXPIRY_STAGES[0] * DAY_MS)) {
+  for (const key of keysEnding(db, now - LATE_MS, now + SOON_MS)) {
     const stage = expiryStage(key.expiresAt, key.createdAt, now);
     if (stage === undefined) continue;
     transact(db, () => {
       if (!claimNotice(db, `key-expiry:${key.id}:${stage}:${key.expiresAt}`, now)) return;
-      const days = Math.max(0, Math.ceil((key.expiresAt - now) / DAY_MS));
       const about = {
         key: key.name,
         team: key.team,
         url: `${config.origin}/console/keys/${key.id}`,
-        days,
+        leftMs: key.expiresAt - now,
         expiresAt: key.expiresAt,
       };
       mails += tellKeepers(service, key, "key-expiry", (to) => keyExpiryLetter(to, about), now);

@@ -1,3 +1,4 @@
+import { expiryText } from "../auth/key-expiry";
 import type { Letter } from "./letter";
 
 interface Addressee {
@@ -106,14 +107,14 @@ interface KeyNamed {
   readonly url: string;
 }
 
-/** Days left: 14, 3 or 0. */
+/** `leftMs` is the time until the key ends, 0 or less once it has. */
 export function keyExpiryLetter(
   to: Addressee,
-  { key, team, url, days, expiresAt }: KeyNamed & { readonly days: number; readonly expiresAt: number },
+  { key, team, url, leftMs, expiresAt }: KeyNamed & { readonly leftMs: number; readonly expiresAt: number },
 ): Letter {
-  const over = days === 0;
+  const over = leftMs <= 0;
   return {
-    subject: over ? `The key "${key}" has expired` : `The key "${key}" expires in ${days} days`,
+    subject: `The key "${key}" ${expiryText(leftMs)}`,
     greeting: hello(to),
     paragraphs: [
       over

@@ -3,6 +3,7 @@ import { brokenEmbeds } from "@/db/queries/attention";
 import { keysInNeed, type ListedKey } from "@/db/queries/key-list";
 import { listEvents, slowestEvents } from "@/db/queries/usage-events";
 import type { UsageScope } from "@/db/queries/usage-sums";
+import { expiryText, SOON_MS } from "../auth/key-expiry";
 import { callerNames } from "./caller-names";
 import {
   DAY_MS,
@@ -14,9 +15,6 @@ import {
   type Total,
   totalOf,
 } from "./console-usage";
-
-/** A key's end is soon within this time, ms. */
-export const SOON_MS = 14 * DAY_MS;
 
 /** Rows of each short list. */
 const SHORT = 8;
@@ -131,11 +129,9 @@ function quotaAttention({ id, name, teamName, monthUsed, monthQuota }: ListedKey
 }
 
 function endAttention({ id, name, teamName, expiresAt }: ListedKey, now: number): Attention {
-  const days = Math.floor(((expiresAt ?? 0) - now) / DAY_MS);
-  const when = days === 0 ? "within a day" : `in ${days} day${days === 1 ? "" : "s"}`;
   return {
     kind: "key-expires",
-    text: `Key ${name} (${teamName}) ends ${when}.`,
+    text: `Key ${name} (${teamName}) ${expiryText((expiresAt ?? 0) - now)}.`,
     href: `/console/keys/${id}`,
   };
 }

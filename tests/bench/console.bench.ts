@@ -13,9 +13,10 @@ import { pageOfRecords } from "@/db/queries/record-list";
 import { listEvents } from "@/db/queries/usage-events";
 import { BREAKDOWNS, usageByKey, type UsageScope } from "@/db/queries/usage-sums";
 import { keyDetail } from "@/lib/auth/key-detail";
+import { SOON_MS } from "@/lib/auth/key-expiry";
 import { listedMaterials } from "@/lib/materials/console-materials";
 import { DAY_MS, sharesOf, usageOf } from "@/lib/usage/console-usage";
-import { overviewOf, SOON_MS } from "@/lib/usage/overview";
+import { overviewOf } from "@/lib/usage/overview";
 import { fillConsoleData } from "./console-data";
 
 const LIMIT_MS = 300;

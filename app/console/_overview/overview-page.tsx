@@ -142,7 +142,7 @@ function Sections({ overview }: { readonly overview: Overview }) {
 const TITLES: Readonly<Record<string, string>> = {
   failed: "Failed calls",
   quota: "Quota",
-  "key-expires": "Key ends",
+  "key-expires": "Key expires",
   "retired-material": "Retired material in use",
 };
 

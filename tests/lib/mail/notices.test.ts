@@ -3,6 +3,7 @@ import { SMTPServer } from "smtp-server";
 import { afterEach, describe, expect, test } from "vitest";
 import { latestMails, mailById } from "@/db/queries/mails";
 import { SHELL } from "@/lib/activity/append";
+import { expiryText } from "@/lib/auth/key-expiry";
 import { issueKey } from "@/lib/auth/manage-keys";
 import { monthBucket } from "@/lib/limits/quota";
 import { tellOfExpiry, tellOfQuotas } from "@/lib/mail/key-notices";
@@ -10,6 +11,7 @@ import { testLetter } from "@/lib/mail/letters";
 import { post, sendDue } from "@/lib/mail/outbox";
 import { makeRound } from "@/lib/mail/rounds";
 import type { Service } from "@/lib/service/service";
+import { overviewOf } from "@/lib/usage/overview";
 import { scratchService } from "../../support/scratch-service";
 
 const DAY = 86_400_000;
@@ -45,6 +47,34 @@ describe("a key that ends", () => {
       'The key "CAD scripts" expires in 3 days',
       'The key "CAD scripts" expires in 14 days',
     ]);
+  });
+
+  test.each([
+    [14 * DAY, "expires in 14 days"],
+    [9.6 * DAY, "expires in 10 days"],
+    [9.4 * DAY, "expires in 9 days"],
+    [2 * DAY, "expires in 2 days"],
+    [1.5 * DAY, "expires in 36 hours"],
+    [3_700_000, "expires in 1 hour"],
+    [3_599_000, "expires within the hour"],
+    [0, "has expired"],
+  ])("%d ms before its end is said to be so in mails and on the overview", (leftMs, words) => {
+    expect(expiryText(leftMs)).toBe(words);
+    const { service, setTime, team, person } = scratchService({}, START);
+    const busbar = team("busbar");
+    person("developer", [busbar], "dev@merrow-pike.example");
+    keyOf(service, busbar, 30);
+    setTime(START + 30 * DAY - leftMs);
+    tellOfExpiry(service);
+    expect(subjects(service)).toEqual([`The key "CAD scripts" ${words}`]);
+    const { attention } = overviewOf(service.db, {
+      scope: { teamIds: "all" },
+      teamIds: [busbar],
+      now: service.now(),
+    });
+    expect(attention.map(({ text }) => text)).toEqual(
+      leftMs > 0 ? [`Key CAD scripts (busbar) ${words}.`] : [],
+    );
   });
 
   test("is not told of at once where it was issued for a few days, nor when it was revoked or ended long ago", () => {

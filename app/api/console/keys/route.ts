@@ -3,7 +3,7 @@ import { KEY_STATES, pageOfKeys } from "@/db/queries/key-list";
 import { listedKeyView } from "@/lib/auth/key-detail";
 import { keySettings } from "@/lib/auth/key-settings";
 import { issueKey } from "@/lib/auth/manage-keys";
-import { SOON_MS } from "@/lib/usage/overview";
+import { SOON_MS } from "@/lib/auth/key-expiry";
 import { json } from "../../_server/page-call";
 import { consoleRoute } from "../_server/console-route";
 import { csvAnswer, listQuery, paging } from "../_server/list-query";
