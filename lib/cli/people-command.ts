@@ -15,7 +15,7 @@ const USAGE = `Usage: npm run -s people -- <command>
   add-admin <email> [--name TEXT]
         makes an administrator and prints the link with which to choose a password; it works once
   add <email> --role ROLE [--name TEXT] [--teams SLUG,SLUG]
-        the same for any role
+        the same for any role; all but admin need a team
   list
   link <email>
         prints a new link with which to choose a password

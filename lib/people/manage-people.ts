@@ -11,7 +11,7 @@ import {
 } from "@/db/queries/people";
 import { endSessionsOf } from "@/db/queries/sessions";
 import { insertPerson, listTeams } from "@/db/queries/teams";
-import { ROLES } from "@/db/schema/organisation";
+import { type Role, ROLES } from "@/db/schema/organisation";
 import { type Actor, appendActivity } from "../activity/append";
 import { type MadeLink, makeLink } from "../auth/links";
 import { invitationLetter } from "../mail/letters";
@@ -51,6 +51,14 @@ const told = ({ name, email, role, teams }: PersonView) => ({
   teams: teams.map(({ slug }) => slug),
 });
 
+/** Only administrators see anything without a team. */
+function requireSomeTeam(role: Role, teams: readonly unknown[]): void {
+  if (role === "admin" || teams.length > 0) return;
+  throw new Refusal("invalid-input", `A ${role} belongs to at least one team.`, {
+    errors: [{ pointer: "#/teams", detail: "must name at least one team: only an admin may be without." }],
+  });
+}
+
 function requireTeams(service: Service, ids: readonly string[]): void {
   const known = new Set(listTeams(service.db).map(({ id }) => id));
   const index = ids.findIndex((id) => !known.has(id));
@@ -82,6 +90,7 @@ export function invitePerson(service: Service, given: Invitation, actor: Actor):
   const { db } = service;
   const now = service.now();
   requireTeams(service, given.teams);
+  requireSomeTeam(given.role, given.teams);
   return transact(db, () => {
     const before = personByEmail(db, given.email);
     if (before && before.removedAt === null) {
@@ -142,7 +151,8 @@ export function changePerson(service: Service, id: string, change: PersonChange,
     const person = requirePerson(service, id);
     const before = personView(db, person, now);
     if (change.role !== undefined && change.role !== "admin") requireAnotherAdministrator(service, person);
-    const { name = person.name, role = person.role } = change;
+    const { name = person.name, role = person.role, teams = before.teams } = change;
+    if (change.role !== undefined || change.teams !== undefined) requireSomeTeam(role, teams);
     updatePerson(db, id, { name, role });
     if (change.teams) replaceMemberships(db, id, change.teams, now);
     const after = personView(db, requirePerson(service, id), now);

@@ -140,7 +140,7 @@ describe("links", () => {
     secretOf(
       invitePerson(
         scratch.service,
-        { email: "maud@merrow-pike.example", name: "Maud Okerlund", role: "developer", teams: [] },
+        { email: "maud@merrow-pike.example", name: "Maud Okerlund", role: "admin", teams: [] },
         { ...SHELL, kind: "person", name: "Ines Harrow" },
       ).link.url,
     );
@@ -215,21 +215,47 @@ describe("people", () => {
     });
     const back = invitePerson(
       service,
-      { email: "Tomas@merrow-pike.example", name: "Tomas Vell", role: "viewer", teams: [] },
+      { email: "Tomas@merrow-pike.example", name: "Tomas Vell", role: "viewer", teams: [busbar] },
       SHELL,
     );
-    expect(back.person).toMatchObject({ id, state: "invited", teams: [] });
+    expect(back.person).toMatchObject({ id, state: "invited", teams: [{ id: busbar }] });
   });
 
   test("keep one administrator: the last is neither removed nor demoted", async () => {
-    const { service, id, person } = withPerson();
+    const { service, id, person, team } = withPerson();
+    const teams = [team("busbar")];
     expect(await codeOf(() => removePerson(service, id, SHELL))).toBe("last-administrator");
     expect(await codeOf(() => changePerson(service, id, { role: "developer" }, SHELL))).toBe(
       "last-administrator",
     );
     const second = person("admin");
-    changePerson(service, id, { role: "developer" }, SHELL);
+    changePerson(service, id, { role: "developer", teams }, SHELL);
     expect(await codeOf(() => removePerson(service, second, SHELL))).toBe("last-administrator");
+  });
+
+  test("belong to a team, but for administrators: the complaint is about the teams", () => {
+    const { service, id, person, team } = withPerson();
+    person("admin");
+    const busbar = team("busbar");
+    const maud = { email: "maud@merrow-pike.example", name: "Maud Okerlund" };
+    const complaints = (work: () => unknown) => {
+      try {
+        work();
+        return [];
+      } catch (error) {
+        if (error instanceof Refusal) return error.more.errors;
+        throw error;
+      }
+    };
+    const wanted = [
+      { pointer: "#/teams", detail: "must name at least one team: only an admin may be without." },
+    ];
+    for (const role of ["developer", "viewer"] as const)
+      expect(complaints(() => invitePerson(service, { ...maud, role, teams: [] }, SHELL))).toEqual(wanted);
+    const invited = invitePerson(service, { ...maud, role: "developer", teams: [busbar] }, SHELL).person;
+    expect(complaints(() => changePerson(service, invited.id, { teams: [] }, SHELL))).toEqual(wanted);
+    expect(complaints(() => changePerson(service, id, { role: "viewer" }, SHELL))).toEqual(wanted);
+    expect(changePerson(service, invited.id, { role: "admin", teams: [] }, SHELL).teams).toEqual([]);
   });
 
   test("are one an address, whatever its case", async () => {

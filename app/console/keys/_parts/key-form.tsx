@@ -4,6 +4,7 @@ import { useState } from "react";
 import { CONTROL, Field } from "../../../_ui/field";
 import { TextField } from "../../../_ui/text-field";
 import { Toggle } from "../../../_ui/toggle";
+import { Choices } from "../../_parts/choices";
 import { type useFormErrors } from "../../_shell/use-form-errors";
 
 /** What each scope allows, as the form and the document say it. */
@@ -79,8 +80,7 @@ export function KeyFields({ start, errors, onChange }: KeyFieldsProps) {
         error={errors.of("name")}
         onChange={(event) => change({ name: event.target.value })}
       />
-      <fieldset className="mb-1">
-        <legend className="mb-0.5 text-table">Scopes</legend>
+      <Choices legend="Scopes" error={errors.of("scopes")}>
         <div className="grid gap-x-2 narrow:grid-cols-2">
           {SCOPES.map(([scope, meaning]) => (
             <label
@@ -107,8 +107,7 @@ export function KeyFields({ start, errors, onChange }: KeyFieldsProps) {
             </label>
           ))}
         </div>
-        <p className="min-h-2.5 text-small text-oxide">{errors.of("scopes")}</p>
-      </fieldset>
+      </Choices>
       <div className="grid gap-x-2 narrow:grid-cols-2">
         <TextField
           label="Requests a minute"

@@ -1,6 +1,7 @@
 "use client";
 
 import { TextField } from "../../../_ui/text-field";
+import { Choices } from "../../_parts/choices";
 import { ROLE_CHOICES, type RoleShown, type TeamShown } from "./person";
 
 interface PersonFieldsProps {
@@ -23,8 +24,7 @@ export function PersonFields({ name, role, teamIds, teams, errorOf }: PersonFiel
         maxLength={100}
         error={errorOf("name")}
       />
-      <fieldset className="mb-2">
-        <legend className="mb-0.5 text-table">Role</legend>
+      <Choices legend="Role" error={errorOf("role")}>
         {ROLE_CHOICES.map(({ value, label, help }) => (
           <label key={value} className="flex min-h-4 cursor-pointer items-baseline gap-1 py-0.5 text-table">
             <input type="radio" name="role" value={value} defaultChecked={value === role} />
@@ -33,12 +33,11 @@ export function PersonFields({ name, role, teamIds, teams, errorOf }: PersonFiel
             </span>
           </label>
         ))}
-      </fieldset>
-      <fieldset className="mb-1">
-        <legend className="mb-0.5 text-table">Teams</legend>
+      </Choices>
+      <Choices legend="Teams" error={teams.length > 0 ? errorOf("teams") : undefined}>
         {teams.length === 0 ? (
           <p className="text-small text-ink-soft">
-            There are no teams yet. Make one below the list of people.
+            There are no teams yet, and only an admin may be without one. Make one below the list of people.
           </p>
         ) : (
           <div className="flex flex-wrap gap-x-2">
@@ -55,7 +54,7 @@ export function PersonFields({ name, role, teamIds, teams, errorOf }: PersonFiel
             ))}
           </div>
         )}
-      </fieldset>
+      </Choices>
     </>
   );
 }
