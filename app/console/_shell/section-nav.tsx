@@ -7,7 +7,8 @@ import { SECTIONS } from "./sections";
 
 /** The sections: a column at the side where it is wide, a strip that scrolls sideways where it is not. */
 export function SectionNav({ sections }: { readonly sections: readonly string[] }) {
-  const path = usePathname();
+  // Links of a page may end with a slash.
+  const path = usePathname().replace(/(.)\/$/, "$1");
   const current = useRef<HTMLAnchorElement>(null);
   const here = (href: string) =>
     href === "/console" ? path === href : path === href || path.startsWith(`${href}/`);
