@@ -16,6 +16,10 @@ export const problemSchema = z
           z.object({
             pointer: z.string().meta({ description: "JSON pointer of the member, as a URI fragment." }),
             detail: z.string(),
+            at: z.tuple([z.number(), z.number()]).optional().meta({
+              description:
+                "Where on the outline, in its unit, if the place is no vertex: two edges that cross between their ends.",
+            }),
           }),
           z.object({
             parameter: z.string().meta({ description: "Name of the query parameter." }),

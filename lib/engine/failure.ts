@@ -7,6 +7,8 @@
 export interface Problem {
   readonly pointer: string;
   readonly detail: string;
+  /** Where on an outline, in its unit, if the place is no vertex: two edges that cross between their ends. */
+  readonly at?: readonly [number, number];
 }
 
 /** The request cannot be answered as it stands; `errors` holds every complaint found. */
@@ -51,6 +53,11 @@ export class Problems {
 
   add(pointer: string, detail: string): void {
     this.found.push({ pointer, detail });
+  }
+
+  /** Takes over what another check has found. */
+  addAll(problems: readonly Problem[]): void {
+    this.found.push(...problems);
   }
 
   get list(): readonly Problem[] {

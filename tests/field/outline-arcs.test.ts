@@ -209,12 +209,14 @@ describe("arcs that are refused", () => {
     const outer: Outer = [[0, 0], [4, 0], [4, 4], { arcTo: [0, 4], center: [2, 5], clockwise: true }];
     expect(check({ outer }, quarterEnds).ok).toBe(true);
     const low: Outer = [[0, 3], [4, 3], [4, 4], { arcTo: [0, 4], center: [2, 5], clockwise: true }];
-    expect(
-      refusals({ outer: low }, [
-        { name: "a", parts: [{ ring: 0, edge: 1 }] },
-        { name: "b", parts: [{ ring: 0, edge: 3 }] },
-      ])[0],
-    ).toMatch(/^#\/outline\/outer\/2: Edges 0 and 2 of the outer ring cross at \((1|3), 3\)/);
+    const found = refusals({ outer: low }, [
+      { name: "a", parts: [{ ring: 0, edge: 1 }] },
+      { name: "b", parts: [{ ring: 0, edge: 3 }] },
+    ]);
+    expect(found.map((text) => text.split(". ")[0]).sort()).toEqual([
+      "#/outline/outer/2: Edges 0 and 2 of the outer ring cross at (1, 3)",
+      "#/outline/outer/2: Edges 0 and 2 of the outer ring cross at (3, 3)",
+    ]);
   });
 
   it("touching another edge", () => {

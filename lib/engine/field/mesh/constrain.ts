@@ -46,9 +46,44 @@ function ahead(mesh: Triangulation, a: number, b: number, v: number): boolean {
   return dx * (xy[2 * v] - xy[2 * a]) + dy * (xy[2 * v + 1] - xy[2 * a + 1]) > 0;
 }
 
+/**
+ * Everything constrained that stands between a and b, seen from a; vertices on the way count as well.
+ * @param most answers this many at most.
+ */
+export function obstaclesBetween(mesh: Triangulation, a: number, b: number, most: number): Obstacle[] {
+  const { mark } = mesh;
+  const obstacles: Obstacle[] = [];
+  let from = a;
+  while (obstacles.length < most && mesh.findEdge(from, b) < 0) {
+    let next = firstAcross(mesh, from, b);
+    while (typeof next === "number" && obstacles.length < most) {
+      if (mark[next] !== 0) obstacles.push({ kind: "edge", halfEdge: next });
+      next = nextAcross(mesh, from, b, next);
+    }
+    if (next === null || typeof next === "number") break;
+    obstacles.push(next);
+    from = next.vertex;
+  }
+  return obstacles;
+}
+
+type VertexObstacle = Extract<Obstacle, { kind: "vertex" }>;
+
 /** The edges that a→b crosses, as vertex pairs (right of it, left of it). */
 function collectCrossings(mesh: Triangulation, a: number, b: number, crossing: number[]): Obstacle | null {
-  const { corner, twin, mark } = mesh;
+  const { corner, mark } = mesh;
+  let across: number | VertexObstacle | null = firstAcross(mesh, a, b);
+  while (typeof across === "number") {
+    if (mark[across] !== 0) return { kind: "edge", halfEdge: across };
+    crossing.push(corner[across], corner[nextEdge(across)]);
+    across = nextAcross(mesh, a, b, across);
+  }
+  return across;
+}
+
+/** The first half-edge that a→b crosses, or the vertex that it meets before. */
+function firstAcross(mesh: Triangulation, a: number, b: number): number | VertexObstacle {
+  const { corner, twin } = mesh;
   let start = mesh.vertexEdge[a];
   // At a border the turn begins at the half-edge that has nothing on its right.
   for (let g = start; twin[g] >= 0;) {
@@ -57,7 +92,6 @@ function collectCrossings(mesh: Triangulation, a: number, b: number, crossing: n
     if (twin[g] < 0) start = g;
   }
   let h = start;
-  let across = -1;
   do {
     const right = corner[nextEdge(h)];
     const left = corner[previousEdge(h)];
@@ -65,24 +99,26 @@ function collectCrossings(mesh: Triangulation, a: number, b: number, crossing: n
     if (sideOfRight === 0 && ahead(mesh, a, b, right)) return { kind: "vertex", vertex: right };
     const sideOfLeft = side(mesh, a, b, left);
     if (sideOfLeft === 0 && ahead(mesh, a, b, left)) return { kind: "vertex", vertex: left };
-    if (sideOfRight < 0 && sideOfLeft > 0) {
-      across = nextEdge(h);
-      break;
-    }
+    if (sideOfRight < 0 && sideOfLeft > 0) return nextEdge(h);
     h = twin[previousEdge(h)];
   } while (h >= 0 && h !== start);
-  if (across < 0) throw new Error("constraint leaves the triangulated area");
-  for (;;) {
-    if (mark[across] !== 0) return { kind: "edge", halfEdge: across };
-    crossing.push(corner[across], corner[nextEdge(across)]);
-    const w = twin[across];
-    const apex = corner[previousEdge(w)];
-    if (apex === b) return null;
-    const s = side(mesh, a, b, apex);
-    if (s === 0) return { kind: "vertex", vertex: apex };
-    // w runs from the left end to the right end; the next edge starts at the right end.
-    across = s > 0 ? nextEdge(w) : previousEdge(w);
-  }
+  throw new Error("constraint leaves the triangulated area");
+}
+
+/** What a→b meets after the half-edge `across`: another one, a vertex, or b itself: null. */
+function nextAcross(
+  mesh: Triangulation,
+  a: number,
+  b: number,
+  across: number,
+): number | VertexObstacle | null {
+  const w = mesh.twin[across];
+  const apex = mesh.corner[previousEdge(w)];
+  if (apex === b) return null;
+  const s = side(mesh, a, b, apex);
+  if (s === 0) return { kind: "vertex", vertex: apex };
+  // w runs from the left end to the right end; the next edge starts at the right end.
+  return s > 0 ? nextEdge(w) : previousEdge(w);
 }
 
 /** Replaces the diagonal h of its two triangles by the other one. The quadrilateral must be strictly convex. */

@@ -44,16 +44,18 @@ export function drawClear(
   }
 }
 
-/** The conflicts in which the arcs themselves meet, not only their chords. */
+/** The conflicts in which the edges themselves meet, not only the chords of their arcs. */
 function trueMeetings(outline: DrawnOutline, drawing: Drawing, conflicts: readonly Conflict[]): Conflict[] {
   const { rings, frame } = outline;
   const { segmentRing, segmentEdge } = drawing;
+  const bowed = (s: number) => segmentRing[s] >= 0 && rings[segmentRing[s]].arcs[segmentEdge[s]] !== null;
   return conflicts.flatMap((conflict) => {
     const { first, second } = conflict;
+    if (!bowed(first) && !bowed(second)) return [conflict];
     if (segmentRing[first] < 0 || segmentRing[second] < 0) return [];
     const a = rings[segmentRing[first]];
     const b = rings[segmentRing[second]];
-    const point = curvesMeet(a, segmentEdge[first], b, segmentEdge[second], frame.touch);
+    const point = curvesMeet(a, segmentEdge[first], b, segmentEdge[second], frame.touch, conflict);
     return point === null ? [] : [{ ...conflict, x: point[0], y: point[1] }];
   });
 }

@@ -1,76 +1,81 @@
 import type { RegionFault } from "../mesh/planar-graph";
 import type { Conflict } from "./conflicts";
 import type { Drawing } from "./draw";
-import { showDomainPoint, type Frame } from "./frame";
+import { showDomainPoint, submittedPoint, type Frame } from "./frame";
 import { regionPointer } from "./region-net";
 import type { Ring } from "./ring";
 import type { OutlineError } from "./schema";
 
-/** Sentences about segments that meet; at most one for each pair of different rings. */
+/** Sentences about segments that meet, each with the place; one for each pair of edges and place. */
 export function describeConflicts(
   conflicts: readonly Conflict[],
   drawing: Drawing,
   rings: readonly Ring[],
   frame: Frame,
 ): OutlineError[] {
-  const errors: OutlineError[] = [];
-  const pairs = new Set<string>();
+  const { segmentRing } = drawing;
+  const errors = new Map<string, OutlineError>();
   for (const conflict of conflicts) {
-    const { segmentRing, segmentEdge } = drawing;
     let [s, r] = [conflict.first, conflict.second];
-    if (segmentRing[s] < 0 || segmentRing[r] < 0) {
-      if (segmentRing[s] > segmentRing[r]) [s, r] = [r, s];
-      const error = describeRegionConflict(conflict, drawing, s, r, rings, frame);
-      if (!pairs.has(error.pointer)) errors.push(error);
-      pairs.add(error.pointer);
-      continue;
-    }
     if (segmentRing[s] > segmentRing[r]) [s, r] = [r, s];
-    const first = rings[segmentRing[s]];
-    const second = rings[segmentRing[r]];
-    const i = first.source[segmentEdge[s]];
-    const j = second.source[segmentEdge[r]];
-    const where = showDomainPoint(frame, conflict.x, conflict.y);
-    const verb = conflict.kind === "cross" ? "cross" : "touch";
-    if (first === second) {
-      const [low, high] = [Math.min(i, j), Math.max(i, j)];
-      errors.push({
-        pointer: `${first.pointer}/${high}`,
-        detail:
-          low === high
-            ? `Edge ${low} of the ${first.title} touches itself at ${where}. A ring may not touch itself.`
-            : `Edges ${low} and ${high} of the ${first.title} ${verb} at ${where}. ` +
-              `A ring may neither cross nor touch itself; its edges meet only at the vertex they share.`,
-      });
-      continue;
-    }
-    const pair = `${first.number} ${second.number}`;
-    if (pairs.has(pair)) continue;
-    pairs.add(pair);
-    const rule =
-      first.number === 0
-        ? "A hole must lie inside the outer ring without touching it."
-        : "Holes may neither overlap nor touch.";
-    errors.push({
-      pointer: `${second.pointer}/${j}`,
-      detail:
-        `Edge ${j} of ${second.title} ${conflict.kind === "cross" ? "crosses" : "touches"} edge ${i} of ` +
-        `${first.number === 0 ? "the outer ring" : first.title} at ${where}. ${rule}`,
+    const describe = segmentRing[s] < 0 ? describeRegionConflict : describeRingConflict;
+    const { pointer, detail } = describe(conflict, drawing, s, r, rings, frame);
+    // The chords of one arc may meet another edge in the same place.
+    errors.set(`${pointer} ${detail}`, {
+      pointer,
+      detail,
+      at: submittedPoint(frame, conflict.x, conflict.y),
     });
   }
-  return errors;
+  return [...errors.values()];
 }
 
-/** Segment s is the border of a region; r is another border, or a piece of a ring. */
-function describeRegionConflict(
-  conflict: Conflict,
-  drawing: Drawing,
+/** Segments s and r are pieces of rings, s of the one with the smaller number. */
+function describeRingConflict(
+  { kind, x, y }: Conflict,
+  { segmentRing, segmentEdge }: Drawing,
   s: number,
   r: number,
   rings: readonly Ring[],
   frame: Frame,
 ): OutlineError {
-  const { segmentRing, segmentEdge } = drawing;
+  const first = rings[segmentRing[s]];
+  const second = rings[segmentRing[r]];
+  const i = first.source[segmentEdge[s]];
+  const j = second.source[segmentEdge[r]];
+  const where = showDomainPoint(frame, x, y);
+  if (first === second) {
+    const [low, high] = [Math.min(i, j), Math.max(i, j)];
+    return {
+      pointer: `${first.pointer}/${high}`,
+      detail:
+        low === high
+          ? `Edge ${low} of the ${first.title} touches itself at ${where}. A ring may not touch itself.`
+          : `Edges ${low} and ${high} of the ${first.title} ${kind} at ${where}. ` +
+            `A ring may neither cross nor touch itself; its edges meet only at the vertex they share.`,
+    };
+  }
+  const rule =
+    first.number === 0
+      ? "A hole must lie inside the outer ring without touching it."
+      : "Holes may neither overlap nor touch.";
+  return {
+    pointer: `${second.pointer}/${j}`,
+    detail:
+      `Edge ${j} of ${second.title} ${kind === "cross" ? "crosses" : "touches"} edge ${i} of ` +
+      `${first.number === 0 ? "the outer ring" : first.title} at ${where}. ${rule}`,
+  };
+}
+
+/** Segment s is the border of a region; r is another border, or a piece of a ring. */
+function describeRegionConflict(
+  conflict: Conflict,
+  { segmentRing, segmentEdge }: Drawing,
+  s: number,
+  r: number,
+  rings: readonly Ring[],
+  frame: Frame,
+): OutlineError {
   const region = -1 - segmentRing[s];
   const where = showDomainPoint(frame, conflict.x, conflict.y);
   const pointer = `${regionPointer(region)}/${segmentEdge[s]}`;

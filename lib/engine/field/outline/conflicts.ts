@@ -1,5 +1,6 @@
-import { constrain } from "../mesh/constrain";
+import { constrain, type Obstacle, obstaclesBetween } from "../mesh/constrain";
 import { FAR_VERTICES, insertPoints } from "../mesh/planar-graph";
+import { orient } from "../mesh/predicates";
 import { nextEdge, previousEdge, Triangulation } from "../mesh/triangulation";
 import type { Domain } from "./domain";
 
@@ -16,9 +17,9 @@ export interface Conflict {
 const MOST_CONFLICTS = 20;
 
 /**
- * Finds segments that cross, or come nearer to each other than `touch` without being neighbours. The drawing is
- * triangulated: a segment that cannot be inserted meets the one in its way, and a vertex too near to a segment
- * makes a flat triangle. So it takes n log n time for any drawing. Answers the triangulation when all is well.
+ * Finds segments that cross, or come nearer to each other than `touch` without being neighbours; all of them up to a
+ * limit. The drawing is triangulated: a segment that cannot be inserted meets those in its way, and a vertex too near to
+ * a segment makes a flat triangle. So it takes n log n time for any drawing. Answers the triangulation when all is well.
  */
 export function findConflicts(domain: Domain, touch: number): { conflicts: Conflict[]; mesh: Triangulation } {
   return new Search(domain, touch).run();
@@ -28,6 +29,8 @@ class Search {
   private readonly mesh: Triangulation;
   private readonly conflicts: Conflict[] = [];
   private readonly seen = new Set<number>();
+  /** Segments that others keep out of the triangulation. */
+  private readonly blocked: number[] = [];
   /** Segments at each point: the start of its list in `incident`. */
   private readonly start: Int32Array;
   private readonly incident: Int32Array;
@@ -51,7 +54,9 @@ class Search {
     const { segments } = domain;
     for (const [p, q] of insertPoints(mesh, domain.xy)) this.reportPoints(p, q);
     if (conflicts.length === 0) {
-      for (let s = 0; s < segments.length / 2 && conflicts.length < MOST_CONFLICTS; s++) this.insert(s);
+      const full = () => conflicts.length + this.blocked.length >= MOST_CONFLICTS;
+      for (let s = 0; s < segments.length / 2 && !full(); s++) this.insert(s);
+      this.reportBlocked();
     }
     if (conflicts.length === 0) this.findNear();
     conflicts.sort((p, q) => p.first - q.first || p.second - q.second);
@@ -67,16 +72,46 @@ class Search {
       this.report("touch", s, mesh.mark[there] - 1, mesh.xy[2 * a], mesh.xy[2 * a + 1]);
       return;
     }
-    const obstacle = constrain(mesh, a, b, s + 1);
-    if (obstacle === null) return;
+    if (constrain(mesh, a, b, s + 1) !== null) this.blocked.push(s);
+  }
+
+  /** What the segments left out meet, once all others are in; and where they meet each other. */
+  private reportBlocked(): void {
+    const { mesh, blocked } = this;
+    const { segments } = this.domain;
+    for (const s of blocked) {
+      const [a, b] = [segments[2 * s] + FAR_VERTICES, segments[2 * s + 1] + FAR_VERTICES];
+      for (const obstacle of obstaclesBetween(mesh, a, b, MOST_CONFLICTS)) this.reportObstacle(s, obstacle);
+    }
+    blocked.forEach((s, k) => {
+      for (const r of blocked.slice(k + 1)) {
+        if (this.cross(s, r)) this.report("cross", s, r, ...this.meeting(s, r));
+      }
+    });
+  }
+
+  private reportObstacle(s: number, obstacle: Obstacle): void {
+    const { mesh, domain } = this;
     if (obstacle.kind === "vertex") {
       const p = obstacle.vertex - FAR_VERTICES;
       this.report("touch", s, this.incident[this.start[p]], domain.xy[2 * p], domain.xy[2 * p + 1]);
     } else {
       const other = mesh.mark[obstacle.halfEdge] - 1;
-      const [x, y] = this.meeting(s, other);
-      this.report("cross", s, other, x, y);
+      this.report("cross", s, other, ...this.meeting(s, other));
     }
+  }
+
+  /** Whether each of two segments has its ends strictly on both sides of the other. */
+  private cross(s: number, r: number): boolean {
+    const { xy, segments } = this.domain;
+    const turn = (line: number, p: number) => {
+      const [a, b] = [segments[2 * line], segments[2 * line + 1]];
+      return Math.sign(orient(xy[2 * a], xy[2 * a + 1], xy[2 * b], xy[2 * b + 1], xy[2 * p], xy[2 * p + 1]));
+    };
+    return (
+      turn(s, segments[2 * r]) * turn(s, segments[2 * r + 1]) < 0 &&
+      turn(r, segments[2 * s]) * turn(r, segments[2 * s + 1]) < 0
+    );
   }
 
   /** Intersection of the lines of two segments. */

@@ -5,8 +5,9 @@ import { edgeCount, nearestOnEdge, ringPoint, type Ring } from "./ring";
 const AT_VERTEX = 1e-7;
 
 /**
- * A point in which two edges, at least one of them an arc, truly meet or come within `reach` of touching; null if they keep
- * clear of each other. The vertex that neighbours share does not count. Chords may meet where their arcs do not.
+ * The point nearest to `near` in which two edges, at least one of them an arc, truly meet or come within `reach` of
+ * touching; null if they keep clear of each other. The vertex that neighbours share does not count. Chords may meet where
+ * their arcs do not.
  */
 export function curvesMeet(
   first: Ring,
@@ -14,13 +15,19 @@ export function curvesMeet(
   second: Ring,
   other: number,
   reach: number,
+  near: { readonly x: number; readonly y: number },
 ): [number, number] | null {
+  let found: [number, number] | null = null;
+  let least = Infinity;
   for (const [x, y] of commonPoints(first, edge, second, other, reach)) {
     if (distance(first, edge, x, y) > reach || distance(second, other, x, y) > reach) continue;
     if (first === second && isShared(first, edge, other, x, y)) continue;
-    return [x, y];
+    const off = Math.hypot(x - near.x, y - near.y);
+    if (off >= least) continue;
+    least = off;
+    found = [x, y];
   }
-  return null;
+  return found;
 }
 
 function distance(ring: Ring, edge: number, x: number, y: number): number {

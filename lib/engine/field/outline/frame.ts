@@ -85,13 +85,16 @@ export function showPoint(x: number, y: number): string {
   return `(${showNumber(x)}, ${showNumber(y)})`;
 }
 
+/** A point of the domain in the outline's unit, rounded to what the frame can tell, so that a zero is one. */
+export function submittedPoint(frame: Frame, x: number, y: number): [number, number] {
+  const digit = frame.scale * 1e-11;
+  const rounded = (z: number) => Number((Math.round(z / digit) * digit).toPrecision(12));
+  return [rounded(x * frame.scale + frame.originX), rounded(y * frame.scale + frame.originY)];
+}
+
 /** A point of the domain, for people, in the outline's unit. */
 export function showDomainPoint(frame: Frame, x: number, y: number): string {
-  // Rounded to what the frame can tell, so that a zero reads as one.
-  const digit = frame.scale * 1e-11;
-  const px = Math.round((x * frame.scale + frame.originX) / digit) * digit;
-  const py = Math.round((y * frame.scale + frame.originY) / digit) * digit;
-  return showPoint(px, py);
+  return showPoint(...submittedPoint(frame, x, y));
 }
 
 /** A length of the domain, for people: "0.3 mm". */

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import type { Problem } from "../../failure";
 import { LENGTH_UNITS_M, type LengthUnit } from "./length-units";
 
 const unitNames = Object.keys(LENGTH_UNITS_M) as [LengthUnit, ...LengthUnit[]];
@@ -52,9 +53,5 @@ export interface OutlineRequest {
   readonly regions?: ReadonlyArray<readonly Point[]>;
 }
 
-/** A complaint about one member of the request body. */
-export interface OutlineError {
-  /** JSON pointer into the request, such as `#/outline/outer/3`. */
-  readonly pointer: string;
-  readonly detail: string;
-}
+/** A complaint about one member of the request body, its pointer such as `#/outline/outer/3`. */
+export type OutlineError = Problem;

@@ -77,7 +77,7 @@ export function prepareField(body: unknown, context: FieldContext): PreparedFiel
     terminals,
     regions: request.medium.regions?.map(({ ring }) => ring),
   });
-  if (!check.ok) for (const { pointer, detail } of check.errors) problems.add(pointer, detail);
+  if (!check.ok) problems.addAll(check.errors);
   if (check.ok && medium) {
     checkExpression(check.outline, medium.conductance, problems);
     const extreme = medium.conductance.some(
