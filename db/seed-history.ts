@@ -12,7 +12,6 @@ import {
 import { storeRecord } from "@/lib/records/records";
 import { newId } from "@/lib/service/identifier";
 import type { Database } from "./client";
-import { updateKey } from "./queries/keys";
 import { insertUsage } from "./queries/usage";
 import type { Team } from "./queries/teams";
 import { rateLimits } from "./schema/journal";
@@ -137,38 +136,39 @@ const BRONZE: NewMaterial = {
   provenance: "measured",
 };
 
-/**
- * Some weeks of invented history for a team of the demo: keys, calls, materials and records, marked as demo. The calls
- * are drawn by a generator with a fixed seed and go through the same tables as real ones. Call it in a transaction.
- */
-export function seedHistory(db: Database, team: Team, actor: Actor, now: number): void {
-  const random = generator(team.slug.length * 7919 + 17);
-  for (const demo of KEYS[team.slug] ?? []) seedCalls(db, team, demo, actor, now, random);
-  if (team.slug === "busbar") seedMaterials(db, team, actor, now);
+/** Something that is said to have happened, at a moment (Unix ms). */
+export interface PastStep {
+  readonly at: number;
+  readonly run: () => void;
 }
 
-function seedCalls(
+/** How long before now the history begins, ms. */
+export const HISTORY_MS = (DAYS + 3) * DAY_MS;
+
+/**
+ * Some weeks of invented history for a team of the demo: keys, calls, materials and records, marked as demo. The calls
+ * are drawn by a generator with a fixed seed and go through the same tables as real ones. The steps of all teams are to
+ * be run in the order of their time, in one transaction.
+ */
+export function historyOf(db: Database, team: Team, actor: Actor, now: number): PastStep[] {
+  const random = generator(team.slug.length * 7919 + 17);
+  return [
+    ...(KEYS[team.slug] ?? []).flatMap((demo) => stepsOfKey(db, team, demo, actor, now, random)),
+    ...(team.slug === "busbar" ? stepsOfMaterials(db, team, actor, now) : []),
+  ];
+}
+
+function stepsOfKey(
   db: Database,
   team: Team,
   demo: DemoKey,
   actor: Actor,
   now: number,
   random: () => number,
-): void {
-  const issuedAt = now - (DAYS + 3) * DAY_MS;
-  const { view } = issueKey(db, {
-    teamId: team.id,
-    settings: {
-      name: demo.name,
-      scopes: ["compute", "materials:read"],
-      ...demo.settings,
-      ...(demo.endsInDays === undefined
-        ? {}
-        : { expiresAt: new Date(now + demo.endsInDays * DAY_MS).toISOString() }),
-    },
-    actor,
-    now: issuedAt,
-  });
+): PastStep[] {
+  const issuedAt = now - HISTORY_MS;
+  let keyId = "";
+  const steps: PastStep[] = [];
   const pick = (from: readonly string[]) => from[Math.floor(random() * from.length)];
   const last = now - (demo.revokedDaysAgo ?? 0) * DAY_MS;
   const today = new Date(now);
@@ -191,10 +191,9 @@ function seedCalls(
       const spread = Math.sqrt(-2 * Math.log(1 - random())) * Math.cos(2 * Math.PI * random());
       const computations = refused || !shaped ? 0 : 1 + Math.floor(random() * (demo.computations ?? 1));
       if (at >= monthStart) used += computations;
-      insertUsage(db, {
+      const call = {
         at,
         requestId: newId("req"),
-        keyId: view.id,
         teamId: team.id,
         operation,
         shape: shaped && !refused ? pick(demo.shapes) : null,
@@ -202,13 +201,37 @@ function seedCalls(
         latencyUs: Math.round(1000 * demo.latencyMs * Math.exp(0.7 * spread)),
         computations,
         client: demo.client,
-      });
+      };
+      steps.push({ at, run: () => insertUsage(db, { ...call, keyId }) });
     }
   }
-  if (used > 0) spendMonth(db, view.id, used, now);
-  if (used > 0 && demo.monthShare !== undefined)
-    updateKey(db, view.id, { monthQuota: Math.ceil(used / demo.monthShare) });
-  if (demo.revokedDaysAgo !== undefined) revokeKey(db, { id: view.id, actor, now: last });
+  const issue: PastStep = {
+    at: issuedAt,
+    run: () => {
+      keyId = issueKey(db, { teamId: team.id, settings: settingsOf(demo, used, now), actor, now: issuedAt })
+        .view.id;
+      if (used > 0) spendMonth(db, keyId, used, now);
+    },
+  };
+  const revoke: PastStep = { at: last, run: () => revokeKey(db, { id: keyId, actor, now: last }) };
+  return [issue, ...steps, ...(demo.revokedDaysAgo === undefined ? [] : [revoke])];
+}
+
+/** A demo key's settings; where a share of its month is to be spent, the quota follows from the computations used. */
+function settingsOf(
+  { name, settings, endsInDays, monthShare }: DemoKey,
+  used: number,
+  now: number,
+): KeySettings {
+  return {
+    name,
+    scopes: ["compute", "materials:read"],
+    ...settings,
+    ...(used > 0 && monthShare !== undefined
+      ? { quotas: { ...settings?.quotas, month: Math.ceil(used / monthShare) } }
+      : {}),
+    ...(endsInDays === undefined ? {} : { expiresAt: new Date(now + endsInDays * DAY_MS).toISOString() }),
+  };
 }
 
 /** Sets a key's counter of the month, as the limiter keeps it. */
@@ -222,19 +245,24 @@ function spendMonth(db: Database, keyId: string, points: number, now: number): v
     .run();
 }
 
-function seedMaterials(db: Database, team: Team, actor: Actor, now: number): void {
-  const write = (daysAgo: number) => ({ teamId: team.id, actor, now: now - daysAgo * DAY_MS });
-  const bronze = createMaterial(db, write(30), BRONZE);
-  const record = (label: string, daysAgo: number) => {
+function stepsOfMaterials(db: Database, team: Team, actor: Actor, now: number): PastStep[] {
+  type Write = Parameters<typeof createMaterial>[1];
+  const step = (daysAgo: number, run: (write: Write) => void): PastStep => {
+    const at = now - daysAgo * DAY_MS;
+    return { at, run: () => run({ teamId: team.id, actor, now: at }) };
+  };
+  let bronze = "";
+  let old = "";
+  const record = (write: Write, label: string) => {
     const shape = findShape("bar");
     if (!shape) throw new Error("The demo computes the shape bar, which the catalogue lacks.");
     const request = {
       ...exampleRequest(shape),
-      medium: { material: bronze.id },
+      medium: { material: bronze },
       include: ["steps", "checks"],
     };
     const result = computeResistance(request, { material: (id) => usableMaterial(db, team.id, id) });
-    storeRecord(db, write(daysAgo), {
+    storeRecord(db, write, {
       operation: "resistance",
       label,
       shape: shape.id,
@@ -243,14 +271,23 @@ function seedMaterials(db: Database, team: Team, actor: Actor, now: number): voi
       materials: result.materials,
     });
   };
-  record("Spring contact, first lot (demo)", 28);
-  changeMaterial(db, write(16), bronze.id, 1, {
-    resistivity: { model: "linear", resistivity: 9.32e-8, coefficient: 0.00114, reference: 20 },
-    uncertainty: { lower: 0.99, upper: 1.01, note: "Invented for the demo: measured again." },
-  });
-  record("Spring contact, second lot (demo)", 12);
-  const old = createMaterial(db, write(33), { ...BRONZE, name: "Contact bronze, lot 5 (demo)" });
-  retireMaterial(db, write(30), old.id, 1);
+  return [
+    step(33, (write) => {
+      old = createMaterial(db, write, { ...BRONZE, name: "Contact bronze, lot 5 (demo)" }).id;
+    }),
+    step(30, (write) => {
+      retireMaterial(db, write, old, 1);
+      bronze = createMaterial(db, write, BRONZE).id;
+    }),
+    step(28, (write) => record(write, "Spring contact, first lot (demo)")),
+    step(16, (write) =>
+      changeMaterial(db, write, bronze, 1, {
+        resistivity: { model: "linear", resistivity: 9.32e-8, coefficient: 0.00114, reference: 20 },
+        uncertainty: { lower: 0.99, upper: 1.01, note: "Invented for the demo: measured again." },
+      }),
+    ),
+    step(12, (write) => record(write, "Spring contact, second lot (demo)")),
+  ];
 }
 
 /** Numbers from 0 to 1, the same for the same seed (mulberry32, public domain; from memory). */

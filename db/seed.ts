@@ -10,14 +10,14 @@ import { createEmbed, publishEmbed } from "@/lib/embeds/manage-embeds";
 import { storeRecord } from "@/lib/records/records";
 import { bytesToText, newId } from "@/lib/service/identifier";
 import type { Service } from "@/lib/service/service";
-import { transact } from "./client";
+import { type Database, transact } from "./client";
 import { embedById } from "./queries/embeds";
 import { keyById } from "./queries/keys";
 import { personByEmail, updatePerson } from "./queries/people";
 import { readSetting, writeSetting } from "./queries/settings";
 import { insertMembership, insertPerson, insertTeam, type Team, teamBySlug } from "./queries/teams";
 import type { Role } from "./schema/organisation";
-import { seedHistory } from "./seed-history";
+import { HISTORY_MS, historyOf } from "./seed-history";
 
 interface DemoTeam {
   readonly slug: string;
@@ -103,30 +103,38 @@ export function seedDemo(service: Service): void {
   transact(db, () => {
     if (readSetting(db, "organisation") === undefined)
       writeSetting(db, "organisation", { name: COMPANY }, now());
-    for (const demo of TEAMS) {
-      let team: Team | undefined = teamBySlug(db, demo.slug);
-      const fresh = team === undefined;
-      if (!team) {
-        team = { id: newId("team"), slug: demo.slug, name: demo.name, createdAt: now() };
-        insertTeam(db, team);
-        for (const person of demo.people) {
-          const id = newId("per");
-          insertPerson(db, { id, ...person, createdAt: now() });
-          insertMembership(db, id, team.id, now());
-        }
-      }
+    const startedAt = now();
+    const fresh = TEAMS.filter(({ slug }) => !teamBySlug(db, slug)).map((demo) => ({
+      demo,
+      team: seedTeam(db, demo, startedAt - HISTORY_MS),
+    }));
+    const actor = { ...SHELL, name: "Demo" };
+    const steps = fresh.flatMap(({ team }) => historyOf(db, team, actor, startedAt));
+    // What is appended stands in the order of time, whichever team did it.
+    for (const { run } of steps.sort((a, b) => a.at - b.at)) run();
+    for (const { slug } of TEAMS) {
+      const team = teamBySlug(db, slug);
+      if (!team) continue;
       seedKey(service, team);
-      if (fresh) {
-        seedHistory(db, team, { ...SHELL, name: "Demo" }, now());
-        seedRecords(service, team, demo.records);
-      }
-      if (team.slug === "busbar") seedEmbed(service, team);
+      if (slug === "busbar") seedEmbed(service, team);
     }
+    for (const { demo, team } of fresh) seedRecords(service, team, demo.records);
     const first = personByEmail(db, DEMO_EMAIL);
     if (first && first.passwordHash === null) {
       updatePerson(db, first.id, { passwordHash: hashPasswordNow(demoPassword(config.secret)) });
     }
   });
+}
+
+function seedTeam(db: Database, demo: DemoTeam, createdAt: number): Team {
+  const team = { id: newId("team"), slug: demo.slug, name: demo.name, createdAt };
+  insertTeam(db, team);
+  for (const person of demo.people) {
+    const id = newId("per");
+    insertPerson(db, { id, ...person, createdAt });
+    insertMembership(db, id, team.id, createdAt);
+  }
+  return team;
 }
 
 function seedKey({ db, config, now }: Service, team: Team): void {

@@ -63,6 +63,22 @@ describe("the demo company", () => {
     expect(demoKey(service)).toBeUndefined();
   });
 
+  test("its history stands in the order of time: acts, calls and records", () => {
+    seedDemo(service);
+    for (const [table, time] of [
+      ["activity", "at"],
+      ["usage_events", "at"],
+      ["records", "created_at"],
+    ]) {
+      const times = service.db.$client
+        .prepare<[], number>(`select ${time} from ${table} order by rowid`)
+        .pluck()
+        .all();
+      expect(times.length, table).toBeGreaterThan(6);
+      expect(times, table).toEqual(times.toSorted((a, b) => a - b));
+    }
+  });
+
   test("its records were really computed", () => {
     seedDemo(service);
     const rows = ["busbar", "thin-film", "earthing"].flatMap(recordsOf);
