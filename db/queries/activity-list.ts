@@ -1,14 +1,19 @@
 import { and, asc, count, desc, eq, gte, inArray, like, lt, or, type SQL, sql } from "drizzle-orm";
 import type { Database } from "../client";
+import { embeds } from "../schema/embeds";
 import { activity } from "../schema/journal";
 import { keys } from "../schema/keys";
+import { materials, materialVersions } from "../schema/materials";
 import { people, teams } from "../schema/organisation";
+import { records } from "../schema/records";
 import type { ActivityRow } from "./activity";
 
 /** An act with the names of what it concerns, as they are now. */
 export interface ActivityEntry extends ActivityRow {
   readonly team: { readonly id: string; readonly name: string } | null;
   readonly subjectName: string | null;
+  /** Whether the subject is still there. */
+  readonly subjectPresent: boolean;
 }
 
 export interface ActivityWanted {
@@ -28,6 +33,20 @@ export interface ActivityWanted {
   readonly limit: number;
   readonly offset: number;
 }
+
+/** The name of what an act concerned: its present one, or the one that was kept when it was deleted. */
+const NAMES: readonly SQL[] = [
+  sql`(select ${people.name} from ${people} where ${people.id} = ${activity.subjectId} and ${people.removedAt} is null)`,
+  sql`(select ${keys.name} from ${keys} where ${keys.id} = ${activity.subjectId})`,
+  sql`(select ${embeds.name} from ${embeds} where ${embeds.id} = ${activity.subjectId})`,
+  sql`(select json_extract(${materialVersions.data}, '$.name') from ${materials} join ${materialVersions} on ${materialVersions.materialId} = ${materials.id} and ${materialVersions.version} = ${materials.version} where ${materials.id} = ${activity.subjectId})`,
+  sql`(select ${records.label} from ${records} where ${records.id} = ${activity.subjectId})`,
+  sql`(select ${teams.name} from ${teams} where ${teams.id} = ${activity.subjectId})`,
+];
+const PRESENT = sql<string | null>`coalesce(${sql.join(NAMES, sql`, `)})`;
+const KEPT = sql<
+  string | null
+>`coalesce((select ${people.name} from ${people} where ${people.id} = ${activity.subjectId}), json_extract(${activity.before}, '$.label'))`;
 
 function conditions(wanted: ActivityWanted): SQL | undefined {
   const { readers, teamId, kind, actorKind, subjectId, search, from, before } = wanted;
@@ -52,7 +71,7 @@ function conditions(wanted: ActivityWanted): SQL | undefined {
           contains(activity.actorName),
           contains(sql`${activity.action}`),
           contains(sql`${activity.subjectId}`),
-          contains(sql`coalesce(${people.name}, ${keys.name}, '')`),
+          contains(sql`coalesce(${PRESENT}, ${KEPT}, '')`),
         ),
   );
 }
@@ -63,35 +82,26 @@ export function pageOfActivity(
   wanted: ActivityWanted,
 ): { readonly rows: ActivityEntry[]; readonly total: number } {
   const where = conditions(wanted);
-  const ofPerson = eq(people.id, activity.subjectId);
-  const ofKey = eq(keys.id, activity.subjectId);
   const rows = db
     .select({
       act: activity,
       teamName: teams.name,
-      subjectName: sql<string | null>`coalesce(${people.name}, ${keys.name})`,
+      present: PRESENT,
+      kept: KEPT,
     })
     .from(activity)
     .leftJoin(teams, eq(teams.id, activity.teamId))
-    .leftJoin(people, ofPerson)
-    .leftJoin(keys, ofKey)
     .where(where)
     .orderBy(wanted.oldestFirst ? asc(activity.seq) : desc(activity.seq))
     .limit(wanted.limit)
     .offset(wanted.offset)
     .all()
-    .map(({ act, teamName, subjectName }) => ({
+    .map(({ act, teamName, present, kept }) => ({
       ...act,
       team: act.teamId === null ? null : { id: act.teamId, name: teamName ?? act.teamId },
-      subjectName,
+      subjectName: present ?? kept,
+      subjectPresent: present !== null,
     }));
-  const total =
-    db
-      .select({ acts: count() })
-      .from(activity)
-      .leftJoin(people, ofPerson)
-      .leftJoin(keys, ofKey)
-      .where(where)
-      .get()?.acts ?? 0;
+  const total = db.select({ acts: count() }).from(activity).where(where).get()?.acts ?? 0;
   return { rows, total };
 }

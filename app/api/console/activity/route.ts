@@ -12,7 +12,12 @@ const view = (act: ActivityEntry) => ({
   actor: { kind: act.actorKind, id: act.actorId, name: act.actorName },
   team: act.team,
   action: act.action,
-  subject: { kind: act.subjectKind, id: act.subjectId, name: act.subjectName },
+  subject: {
+    kind: act.subjectKind,
+    id: act.subjectId,
+    name: act.subjectName,
+    present: act.subjectPresent,
+  },
   before: act.before ?? null,
   after: act.after ?? null,
   address: act.address,

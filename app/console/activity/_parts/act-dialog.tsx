@@ -1,14 +1,18 @@
 "use client";
 
+import Link from "next/link";
 import { Button } from "../../../_ui/button";
 import { Dialog } from "../../../_ui/dialog";
 import { LocalTime } from "../../../_ui/local-time";
-import { actionWords, type ActShown, differences } from "./activity-words";
+import { actionWords, type ActShown, subjectName, subjectPage } from "./activity-words";
+import { toldChanges } from "./told-changes";
 
 /** One act with all that is kept of it: who, from where, before and after. */
 export function ActDialog({ act, onClose }: { readonly act: ActShown; readonly onClose: () => void }) {
   const { actor, subject, team, before, after, address, requestId } = act;
-  const changed = differences(before, after);
+  const changed = toldChanges(act);
+  const page = subjectPage(act);
+  const has = (side: "before" | "after") => changed.some((each) => each[side] !== "");
   return (
     <Dialog
       open
@@ -24,8 +28,14 @@ export function ActDialog({ act, onClose }: { readonly act: ActShown; readonly o
         </dd>
         <dt className="text-ink-soft">About</dt>
         <dd className="[overflow-wrap:anywhere]">
-          {subject.name ? `${subject.name}, ` : ""}
-          {subject.kind} <code>{subject.id}</code>
+          {page ? (
+            <Link className="link" href={page}>
+              {subjectName(act)}
+            </Link>
+          ) : (
+            subjectName(act)
+          )}
+          , {subject.kind} <code>{subject.id}</code>
         </dd>
         {team ? (
           <>
@@ -57,14 +67,18 @@ export function ActDialog({ act, onClose }: { readonly act: ActShown; readonly o
             <thead>
               <tr className="text-start text-ink-soft">
                 <th scope="col" className="pe-2 pb-0.5 text-start font-medium">
-                  Member
+                  What
                 </th>
-                <th scope="col" className="pe-2 pb-0.5 text-start font-medium">
-                  Before
-                </th>
-                <th scope="col" className="pb-0.5 text-start font-medium">
-                  After
-                </th>
+                {has("before") ? (
+                  <th scope="col" className="pe-2 pb-0.5 text-start font-medium">
+                    Before
+                  </th>
+                ) : null}
+                {has("after") ? (
+                  <th scope="col" className="pb-0.5 text-start font-medium">
+                    After
+                  </th>
+                ) : null}
               </tr>
             </thead>
             <tbody>
@@ -73,14 +87,29 @@ export function ActDialog({ act, onClose }: { readonly act: ActShown; readonly o
                   <th scope="row" className="py-0.5 pe-2 text-start font-normal">
                     {member}
                   </th>
-                  <td className="py-0.5 pe-2 font-mono text-small [overflow-wrap:anywhere]">{was}</td>
-                  <td className="py-0.5 font-mono text-small [overflow-wrap:anywhere]">{is}</td>
+                  {has("before") ? (
+                    <td className="py-0.5 pe-2 [overflow-wrap:anywhere]">{was || "–"}</td>
+                  ) : null}
+                  {has("after") ? <td className="py-0.5 [overflow-wrap:anywhere]">{is || "–"}</td> : null}
                 </tr>
               ))}
             </tbody>
           </table>
         </div>
       ) : null}
+      {before === null && after === null ? null : (
+        <details className="mt-2 text-table">
+          <summary className="cursor-pointer rounded py-0.5 text-ink-soft">
+            Everything that is kept of it
+          </summary>
+          <pre
+            tabIndex={0}
+            className="mt-0.5 max-h-40 overflow-auto rounded border border-rule bg-paper p-1 font-mono text-small"
+          >
+            {JSON.stringify({ before, after }, null, 2)}
+          </pre>
+        </details>
+      )}
     </Dialog>
   );
 }

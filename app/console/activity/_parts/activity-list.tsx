@@ -1,5 +1,6 @@
 "use client";
 
+import Link from "next/link";
 import { useState } from "react";
 import { CONTROL } from "../../../_ui/field";
 import { LocalTime } from "../../../_ui/local-time";
@@ -12,7 +13,15 @@ import { ConsoleTable } from "../../_table/console-table";
 import { ListFilter, ListTools } from "../../_table/list-tools";
 import { type ListState, useListState } from "../../_table/use-list-state";
 import { ActDialog } from "./act-dialog";
-import { ACT_KINDS, actionWords, ACTOR_KINDS, type ActShown } from "./activity-words";
+import {
+  ACT_KINDS,
+  actionWords,
+  ACTOR_KINDS,
+  type ActShown,
+  subjectName,
+  subjectPage,
+} from "./activity-words";
+import { changesLine } from "./told-changes";
 
 const FILTERS = ["team", "kind", "actor", "subject", "from", "to"] as const;
 
@@ -109,17 +118,30 @@ function columnsFor(onOpen: (act: ActShown) => void): readonly ListColumn<ActSho
       id: "action",
       title: "What",
       fixed: true,
-      cell: (act) => (
-        <button type="button" onClick={() => onOpen(act)} className="link cursor-pointer rounded text-start">
-          {actionWords(act.action)}
-          {act.subject.id === act.actor.id ? null : (
-            <span className="[overflow-wrap:anywhere]"> {act.subject.name ?? act.subject.id}</span>
-          )}
-        </button>
-      ),
+      cell: (act) => <What act={act} onOpen={onOpen} />,
     },
     { id: "team", title: "Team", from: "medium", cell: ({ team }) => team?.name ?? "" },
     { id: "address", title: "From", from: "wide", cell: ({ address }) => <code>{address ?? ""}</code> },
     { id: "subject", title: "Id", from: "extra", cell: ({ subject }) => <code>{subject.id}</code> },
   ];
+}
+
+function What({ act, onOpen }: { readonly act: ActShown; readonly onOpen: (act: ActShown) => void }) {
+  const page = subjectPage(act);
+  const line = changesLine(act);
+  const own = act.subject.id === act.actor.id;
+  return (
+    <>
+      <button type="button" onClick={() => onOpen(act)} className="link cursor-pointer rounded text-start">
+        {actionWords(act.action)}
+        {own || page ? null : <span className="[overflow-wrap:anywhere]"> {subjectName(act)}</span>}
+      </button>{" "}
+      {!own && page ? (
+        <Link className="link [overflow-wrap:anywhere]" href={page}>
+          {subjectName(act)}
+        </Link>
+      ) : null}
+      {line ? <span className="block text-small text-ink-soft [overflow-wrap:anywhere]">{line}</span> : null}
+    </>
+  );
 }

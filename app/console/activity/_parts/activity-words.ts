@@ -9,7 +9,13 @@ export interface ActShown {
   };
   readonly team: { readonly id: string; readonly name: string } | null;
   readonly action: string;
-  readonly subject: { readonly kind: string; readonly id: string; readonly name: string | null };
+  readonly subject: {
+    readonly kind: string;
+    readonly id: string;
+    readonly name: string | null;
+    /** Whether it is still there, or again. */
+    readonly present: boolean;
+  };
   readonly before: unknown;
   readonly after: unknown;
   readonly address: string | null;
@@ -25,6 +31,8 @@ const WORDS: Readonly<Record<string, string>> = {
   "embed.change": "changed the embed",
   "embed.publish": "published the embed",
   "embed.withdraw": "withdrew the embed",
+  "embed.roll-back": "brought back an earlier version of the embed",
+  "embed.discard-draft": "threw away the draft of the embed",
   "material.create": "created the material",
   "material.change": "changed the material",
   "material.retire": "retired the material",
@@ -55,6 +63,31 @@ export function actionWords(action: string): string {
   return `${kind}: ${verb.replaceAll("-", " ")}`;
 }
 
+/** What each setting is called on the page of settings. */
+const SETTINGS: Readonly<Record<string, string>> = {
+  organisation: "Organisation",
+  retention: "Kept for",
+  "signed-out-limit": "Without signing in",
+};
+
+/** What an act was about, as people call it. */
+export function subjectName({ subject }: ActShown): string {
+  if (subject.kind === "setting") return SETTINGS[subject.id] ?? subject.id;
+  return subject.name || subject.id;
+}
+
+/** The page of what an act was about; none where it is gone. */
+export function subjectPage({ subject: { kind, id, name, present } }: ActShown): string | undefined {
+  if (kind === "setting") return "/console/settings";
+  if (!present) return undefined;
+  if (kind === "key") return `/console/keys/${id}`;
+  if (kind === "embed") return `/console/embeds/${id}`;
+  if (kind === "material") return `/console/materials/${id}`;
+  if (kind === "record") return `/records/${id}`;
+  if (kind === "person") return `/console/people?q=${encodeURIComponent(name ?? "")}`;
+  return kind === "team" ? "/console/people" : undefined;
+}
+
 /** Kinds of acts to filter by: the first word of their name. */
 export const ACT_KINDS = [
   { value: "key", label: "keys" },
@@ -75,30 +108,3 @@ export const ACTOR_KINDS = [
   { value: "shell", label: "shell" },
   { value: "service", label: "the service" },
 ] as const;
-
-/** One member that an act changed. */
-export interface Difference {
-  readonly member: string;
-  readonly before: string;
-  readonly after: string;
-}
-
-const isObject = (value: unknown): value is Record<string, unknown> =>
-  typeof value === "object" && value !== null && !Array.isArray(value);
-
-function shown(value: unknown): string {
-  if (value === undefined || value === null) return "";
-  if (typeof value === "string") return value;
-  if (Array.isArray(value) && value.every((each) => typeof each === "string")) return value.join(", ");
-  return JSON.stringify(value);
-}
-
-/** What an act changed, member by member; members that stayed are left out. */
-export function differences(before: unknown, after: unknown): readonly Difference[] {
-  const [old, now] = [isObject(before) ? before : {}, isObject(after) ? after : {}];
-  const members = [...new Set([...Object.keys(old), ...Object.keys(now)])];
-  return members.flatMap((member) => {
-    const [was, is] = [shown(old[member]), shown(now[member])];
-    return was === is ? [] : [{ member, before: was, after: is }];
-  });
-}

@@ -15,8 +15,9 @@ import type { ListColumn, ListPage } from "../../_table/column";
 import { ConsoleTable } from "../../_table/console-table";
 import { ListFilter, ListTools } from "../../_table/list-tools";
 import { useListState } from "../../_table/use-list-state";
-import { KINDS, type ListedMaterial, resistivityText } from "./material";
+import { KINDS, type ListedMaterial } from "./material";
 import { MaterialDialog } from "./material-dialog";
+import { resistivityText } from "./material-facts";
 
 const COLUMNS: readonly ListColumn<ListedMaterial>[] = [
   {
@@ -51,7 +52,7 @@ const COLUMNS: readonly ListColumn<ListedMaterial>[] = [
     cell: ({ resistivityOhmM, atC }) => (
       <>
         {resistivityText(resistivityOhmM)}
-        <span className="block text-small text-ink-soft">{Number(atC.toPrecision(4))} °C</span>
+        <span className="block text-small text-ink-soft">{`${Number(atC.toPrecision(4))}\u2009°C`}</span>
       </>
     ),
   },

@@ -12,8 +12,9 @@ import { useToast } from "../../../_ui/toast";
 import { countText } from "../../_parts/numbers";
 import { PageHead } from "../../_parts/page-head";
 import { useConsole } from "../../_shell/use-console";
-import { factsOf, type MaterialHistory, type MaterialVersion } from "./material";
+import type { MaterialHistory, MaterialVersion } from "./material";
 import { MaterialDialog } from "./material-dialog";
+import { factsOf } from "./material-facts";
 import { RetireDialog } from "./retire-dialog";
 import { VersionDifference } from "./version-difference";
 

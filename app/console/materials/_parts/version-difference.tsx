@@ -3,7 +3,8 @@
 import { useState } from "react";
 import { DataTable } from "../../../_ui/data-table";
 import { Select } from "../../../_ui/select";
-import { factsOf, type MaterialVersion } from "./material";
+import type { MaterialVersion } from "./material";
+import { factsOf } from "./material-facts";
 
 /** What two versions of a material say differently, member by member. */
 export function VersionDifference({ versions }: { readonly versions: readonly MaterialVersion[] }) {
