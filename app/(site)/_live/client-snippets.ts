@@ -109,7 +109,9 @@ function inline(values: Readonly<Record<string, string>>): string {
 
 /** JSON as people write it in TypeScript: names without quotes. */
 function unquoted(json: string): string {
-  return json.replace(/^(\s*)"([A-Za-z_]\w*)":/gm, "$1$2:");
+  return json.replace(/"((?:[^"\\]|\\.)*)"(:)?/g, (token, text: string, colon?: string) =>
+    colon !== undefined && /^[A-Za-z_]\w*$/.test(text) ? `${text}:` : token,
+  );
 }
 
 function snake(name: string): string {

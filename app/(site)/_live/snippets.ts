@@ -150,9 +150,40 @@ function snippets(origin: string, parts: SnippetParts): readonly Snippet[] {
   ];
 }
 
-/** JSON for people: indented, but a pair of numbers on one line. */
+/** Longest line of JSON on a page, in characters. */
+const LINE = 84;
+
+/** JSON for people: what fits on a line stands on one, and the rest is indented. The whole is never one line. */
 export function jsonText(value: object): string {
-  return JSON.stringify(value, null, 2).replace(/\[\s+(-?[\d.eE+-]+),\s+(-?[\d.eE+-]+)\s+\]/g, "[$1, $2]");
+  return spread(value, "");
+}
+
+function spread(value: object, margin: string): string {
+  const inner = `${margin}  `;
+  const named = !Array.isArray(value);
+  const lines = Object.entries(value)
+    .filter(([, member]) => member !== undefined)
+    .map(([name, member]: [string, unknown]) => {
+      const label = named ? `${JSON.stringify(name)}: ` : "";
+      const line = onOneLine(member);
+      const fits = inner.length + label.length + line.length < LINE;
+      return inner + label + (fits || !isComposite(member) ? line : spread(member, inner));
+    });
+  const [open, close] = named ? "{}" : "[]";
+  return lines.length === 0 ? `${open}${close}` : `${open}\n${lines.join(",\n")}\n${margin}${close}`;
+}
+
+function onOneLine(value: unknown): string {
+  if (!isComposite(value)) return JSON.stringify(value) ?? "null";
+  if (Array.isArray(value)) return `[${value.map(onOneLine).join(", ")}]`;
+  const members = Object.entries(value)
+    .filter(([, member]) => member !== undefined)
+    .map(([name, member]: [string, unknown]) => `${JSON.stringify(name)}: ${onOneLine(member)}`);
+  return members.length === 0 ? "{}" : `{ ${members.join(", ")} }`;
+}
+
+function isComposite(value: unknown): value is object {
+  return typeof value === "object" && value !== null;
 }
 
 /** JSON's flags as Python spells them; texts are left alone. */
