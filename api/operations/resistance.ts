@@ -45,7 +45,7 @@ function computeWidget(body: unknown, context: CallContext, { definition }: Embe
   const request = widgetRequest(definition, body);
   try {
     const result = compute(request, context);
-    return json(200, result, { shape: result.shape, computations: 1 });
+    return json(200, result, { shape: result.shape, computations: computationsOf(request) });
   } catch (error) {
     if (!(error instanceof InputError)) throw error;
     throw new InputError(widgetComplaints(definition, error.errors));

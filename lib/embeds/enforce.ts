@@ -1,6 +1,7 @@
-import { findShape, InputError, type Problem, Problems, readQuantity } from "@/lib/engine";
-import type { EmbedDefinition, InputRule } from "./definition";
-import { type InputFacts, inputsOf } from "./inputs";
+import { InputError, type Problem, Problems } from "@/lib/engine";
+import type { EmbedDefinition, InputRule, ToleranceRule } from "./definition";
+import { definitionInputs, type InputFacts, sizeOf } from "./inputs";
+import { openTolerances, toleranceName, toleranceRefusal } from "./tolerances";
 
 /** What a widget's page sends: the values of open inputs by name; those left out keep their default. */
 export type OpenValues = Readonly<Record<string, string>>;
@@ -16,28 +17,67 @@ type OpenRule = Extract<InputRule, { mode: "open" }>;
  * @throws InputError for whatever the definition does not leave open, with pointers below `#/values`.
  */
 export function widgetRequest(definition: EmbedDefinition, body: unknown): Record<string, unknown> {
-  const shape = findShape(definition.shape);
-  if (!shape)
+  const facts = definitionInputs(definition);
+  if (!facts)
     throw new InputError([{ pointer: "#", detail: "The shape of this widget is not in the catalogue." }]);
-  const facts = inputsOf(shape);
+  const { shape, outlineId, terminals, accuracy } = definition;
+  // Members left undefined are none.
+  const request: Record<string, unknown> =
+    outlineId === undefined ? { shape, dimensions: {} } : { outlineId, terminals, accuracy, medium: {} };
+  for (const { input, value, tolerance } of readInputs(definition, facts, body)) {
+    place(request, input, value, tolerance);
+  }
+  if (definition.graded) request.medium = { graded: definition.graded };
+  if (definition.requirement) request.requirement = definition.requirement;
+  if (definition.tolerances) request.uncertainty = definition.tolerances.uncertainty;
+  if (outlineId !== undefined) return request;
+  request.include = definition.show.plots ? ["checks", "profile"] : ["checks"];
+  return request;
+}
+
+/** The dimensions alone, without their tolerances: for the drawing. */
+export function widgetDimensions(definition: EmbedDefinition, body: unknown): Record<string, unknown> {
+  const facts = definitionInputs(definition);
+  const inputs = facts ? readInputs(definition, facts, body) : [];
+  const request: Record<string, unknown> = {};
+  for (const { input, value } of inputs) {
+    if (input.place === "dimension") place(request, input, value);
+  }
+  return isObject(request.dimensions) ? request.dimensions : {};
+}
+
+interface GivenInput {
+  readonly input: InputFacts;
+  readonly value: string;
+  readonly tolerance?: Pick<ToleranceRule, "value" | "distribution">;
+}
+
+/** Every input with what counts for it: the page's value where it is open, and the definition's where it is not. */
+function readInputs(
+  definition: EmbedDefinition,
+  facts: ReadonlyMap<string, InputFacts>,
+  body: unknown,
+): readonly GivenInput[] {
   const problems = new Problems();
   const values = readValues(body, definition, problems);
-  const request: Record<string, unknown> = { shape: definition.shape, dimensions: {} };
-  for (const { name, rule } of definition.inputs) {
+  const inputs = definition.inputs.flatMap(({ name, rule }): GivenInput[] => {
     const input = facts.get(name);
-    if (!input) continue;
+    if (!input) return [];
     const given = rule.mode === "open" ? values[name] : undefined;
     if (given !== undefined && rule.mode === "open") {
       const complaint = refusalOf(given, rule, input);
       if (complaint !== undefined) problems.add(pointerOf(name), complaint);
     }
-    place(request, input, given ?? rule.value);
-  }
+    const value = given ?? rule.value;
+    const own = definition.tolerances?.inputs.find((tolerance) => tolerance.name === name)?.rule;
+    if (!own) return [{ input, value }];
+    const set = own.mode === "open" ? values[toleranceName(name)] : undefined;
+    const complaint = set === undefined ? undefined : toleranceRefusal(set, value, own, input);
+    if (complaint !== undefined) problems.add(pointerOf(toleranceName(name)), complaint);
+    return [{ input, value, tolerance: { value: set ?? own.value, distribution: own.distribution } }];
+  });
   problems.throwIfAny();
-  if (definition.graded) request.medium = { graded: definition.graded };
-  if (definition.requirement) request.requirement = definition.requirement;
-  request.include = definition.show.plots ? ["checks", "profile"] : ["checks"];
-  return request;
+  return inputs;
 }
 
 function readValues(body: unknown, definition: EmbedDefinition, problems: Problems): OpenValues {
@@ -53,7 +93,10 @@ function readValues(body: unknown, definition: EmbedDefinition, problems: Proble
     problems.add("#/values", "must be an object of open inputs by name.");
     return {};
   }
-  const open = new Set(definition.inputs.filter(({ rule }) => rule.mode === "open").map(({ name }) => name));
+  const open = new Set([
+    ...definition.inputs.filter(({ rule }) => rule.mode === "open").map(({ name }) => name),
+    ...openTolerances(definition).map(({ name }) => toleranceName(name)),
+  ]);
   const read: Record<string, string> = {};
   for (const [name, value] of Object.entries(values).slice(0, 100)) {
     const pointer = pointerOf(name);
@@ -89,50 +132,76 @@ export function refusalOf(
   return `must lie between ${rule.min} and ${rule.max}.`;
 }
 
-/** A value in the base unit of its kind; undefined where it cannot be read. */
-export function sizeOf(text: string, input: InputFacts): number | undefined {
-  if (input.type === "integer") return /^[+-]?\d{1,15}$/.test(text) ? Number(text) : undefined;
-  if (input.kind === null) return undefined;
-  const reading = readQuantity(text, input.kind, input.gauge ? { gauge: input.gauge } : {});
-  return reading.ok ? reading.value : undefined;
-}
-
 function sameText(one: string, other: string): boolean {
   return one.replace(/\s+/g, "") === other.replace(/\s+/g, "");
 }
 
-function place(request: Record<string, unknown>, input: InputFacts, text: string): void {
+function place(
+  request: Record<string, unknown>,
+  input: InputFacts,
+  text: string,
+  tolerance?: GivenInput["tolerance"],
+): void {
   let target = request;
   for (const part of input.path.slice(0, -1)) {
     const next = target[part];
     target = isObject(next) ? next : (target[part] = {});
   }
   const [last] = input.path.slice(-1);
-  if (input.type === "integer" && /^[+-]?\d{1,15}$/.test(text)) target[last] = Number(text);
+  if (tolerance) {
+    const { value, distribution } = tolerance;
+    target[last] = { value: text, tolerance: value, ...(distribution ? { distribution } : {}) };
+  } else if (input.type === "integer" && /^[+-]?\d{1,15}$/.test(text)) target[last] = Number(text);
   else target[last] = input.type === "flag" ? text === "true" : text;
 }
 
 /**
- * The engine's complaints as the widget's page can use them: those about an open input at that input, everything else
- * at the whole, without the values that the widget does not show.
+ * The engine's complaints as the widget's page can use them: those about an open input or its tolerance at that input,
+ * everything else at the whole, without the values that the widget does not show.
  */
 export function widgetComplaints(
   definition: EmbedDefinition,
   complaints: readonly Problem[],
 ): readonly Problem[] {
-  const shape = findShape(definition.shape);
-  const facts = shape ? inputsOf(shape) : new Map<string, InputFacts>();
+  const facts = definitionInputs(definition) ?? new Map<string, InputFacts>();
   const hidden = definition.inputs.some(({ rule }) => rule.mode === "hidden");
+  const tolerances = new Map(definition.tolerances?.inputs.map(({ name, rule }) => [name, rule]));
   return complaints.map(({ pointer, detail }) => {
-    const found = definition.inputs.find(
-      ({ name }) => `#/${facts.get(name)?.path.map(escaped).join("/")}` === pointer,
-    );
-    if (found?.rule.mode === "open") return { pointer: pointerOf(found.name), detail };
-    if (found?.rule.mode === "fixed" || !hidden) {
-      return { pointer: "#", detail: found ? `${found.name} ${detail}` : detail };
+    const [found, member] = inputAt(pointer, definition, facts);
+    const tolerance = found && tolerances.get(found.name);
+    // What a tolerance reaches is told with the values of the other inputs.
+    const text = hidden && (tolerance || pointer.startsWith("#/uncertainty")) ? REACHES : detail;
+    if (tolerance?.mode === "open" && (member === "tolerance" || found?.rule.mode !== "open")) {
+      return { pointer: pointerOf(toleranceName(found?.name ?? "")), detail: text };
     }
-    return { pointer: "#", detail: "These values do not go together." };
+    if (found?.rule.mode === "open") {
+      const own = member === "tolerance" ? `has a tolerance of ±${tolerance?.value}, which ${text}` : text;
+      return { pointer: pointerOf(found.name), detail: own };
+    }
+    if (found?.rule.mode === "fixed" || !hidden) {
+      return { pointer: "#", detail: found ? `${found.name} ${text}` : detail };
+    }
+    return {
+      pointer: "#",
+      detail: text === REACHES ? `A tolerance ${text}` : "These values do not go together.",
+    };
   });
+}
+
+const REACHES = "reaches values for which there is no answer; make it smaller.";
+
+/** The input that a pointer of the engine is about, and the member of it: "tolerance" or nothing. */
+function inputAt(
+  pointer: string,
+  { inputs }: EmbedDefinition,
+  facts: ReadonlyMap<string, InputFacts>,
+): readonly [found: EmbedDefinition["inputs"][number] | undefined, member: string | undefined] {
+  for (const input of inputs) {
+    const place = `#/${facts.get(input.name)?.path.map(escaped).join("/")}`;
+    if (pointer === place || pointer === `${place}/value`) return [input, undefined];
+    if (pointer.startsWith(`${place}/`)) return [input, "tolerance"];
+  }
+  return [undefined, undefined];
 }
 
 function pointerOf(name: string): string {

@@ -1,4 +1,5 @@
-import { type QuantityKindName, type Shape, shapeEntry } from "@/lib/engine";
+import { findShape, type QuantityKindName, readQuantity, type Shape, shapeEntry } from "@/lib/engine";
+import type { EmbedDefinition } from "./definition";
 
 /** What an input of a widget is: the catalogue's words for it, and how its text is read. */
 export interface InputFacts {
@@ -52,6 +53,8 @@ const MEDIUM: readonly Member[] = [
   { name: "extrapolate", label: "Beyond the material's range", symbol: "", type: "flag", kind: null },
 ];
 
+const SHEET_ONLY: readonly string[] = ["sheetResistance", "thickness"];
+
 const OPERATING: readonly Member[] = [
   { name: "temperature", label: "Temperature", symbol: "T", type: "quantity", kind: "temperature" },
   { name: "voltage", label: "Voltage", symbol: "U", type: "quantity", kind: "voltage" },
@@ -82,30 +85,60 @@ export function inputsOf(shape: Shape): ReadonlyMap<string, InputFacts> {
       path: ["dimensions", name],
     };
   });
-  const taken = new Set(facts.map(({ name }) => name));
   const media =
     entry.media.kind === "two" ? entry.media.names.map(({ name, label }) => ({ name, label })) : [null];
-  for (const medium of media) {
-    for (const member of MEDIUM) {
-      const sheetOnly = member.name === "sheetResistance" || member.name === "thickness";
-      if (sheetOnly && entry.media.kind !== "sheet") continue;
-      const name = medium ? `${medium.name}.${member.name}` : member.name;
-      if (taken.has(name)) continue;
-      facts.push({
-        ...member,
-        name,
-        label: medium ? `${member.label}, ${medium.label.toLowerCase()}` : member.label,
-        place: "medium",
-        ...gaugeOf(member.name),
-        choices: [],
-        path: medium ? ["media", medium.name, member.name] : ["medium", member.name],
-      });
-    }
-  }
+  return byName([...facts, ...media.flatMap((medium) => mediumFacts(entry.media.kind === "sheet", medium))]);
+}
+
+/**
+ * Every input that a widget of a stored outline can have.
+ * @param axisymmetric A body about an axis takes neither a sheet resistance nor a thickness.
+ */
+export function outlineInputs(axisymmetric = false): ReadonlyMap<string, InputFacts> {
+  return byName(mediumFacts(!axisymmetric, null));
+}
+
+/** The inputs that a definition may name; undefined where its shape is not in the catalogue. */
+export function definitionInputs({
+  shape: id,
+  outlineId,
+}: Pick<EmbedDefinition, "shape" | "outlineId">): ReadonlyMap<string, InputFacts> | undefined {
+  if (outlineId !== undefined) return outlineInputs();
+  const shape = findShape(id ?? "");
+  return shape && inputsOf(shape);
+}
+
+function mediumFacts(
+  sheet: boolean,
+  medium: { readonly name: string; readonly label: string } | null,
+): InputFacts[] {
+  return MEDIUM.filter(({ name }) => sheet || !SHEET_ONLY.includes(name)).map((member) => ({
+    ...member,
+    name: medium ? `${medium.name}.${member.name}` : member.name,
+    label: medium ? `${member.label}, ${medium.label.toLowerCase()}` : member.label,
+    place: "medium",
+    ...gaugeOf(member.name),
+    choices: [],
+    path: medium ? ["media", medium.name, member.name] : ["medium", member.name],
+  }));
+}
+
+/** With the operating point behind; a dimension goes before a member of the medium of the same name. */
+function byName(facts: readonly InputFacts[]): ReadonlyMap<string, InputFacts> {
+  const found = new Map<string, InputFacts>();
+  for (const fact of facts) if (!found.has(fact.name)) found.set(fact.name, fact);
   for (const member of OPERATING) {
-    facts.push({ ...member, place: "operating", choices: [], path: ["operating", member.name] });
+    found.set(member.name, { ...member, place: "operating", choices: [], path: ["operating", member.name] });
   }
-  return new Map(facts.map((fact) => [fact.name, fact]));
+  return found;
+}
+
+/** A value in the base unit of its kind; undefined where it cannot be read. */
+export function sizeOf(text: string, input: InputFacts): number | undefined {
+  if (input.type === "integer") return /^[+-]?\d{1,15}$/.test(text) ? Number(text) : undefined;
+  if (input.kind === null) return undefined;
+  const reading = readQuantity(text, input.kind, input.gauge ? { gauge: input.gauge } : {});
+  return reading.ok ? reading.value : undefined;
 }
 
 /** Which lengths may be written as a wire's gauge or a foil's weight, as the engine reads them. */

@@ -1,8 +1,10 @@
 "use client";
 
 import { bracketText } from "../../_ui/bracket";
+import { cautionIn } from "../_cautions/caution-in";
 import type { FrameResult, FrameView } from "./frame-view";
 import { localNumbers } from "./local-number";
+import { StrayRange } from "./stray-range";
 
 interface AnswerProps {
   readonly view: FrameView;
@@ -40,9 +42,9 @@ export function FrameAnswerPane({ view, result, stale }: AnswerProps) {
       {cautions.length > 0 ? (
         <section className="border-s-3 border-s-amber ps-1.5 text-table" aria-label={words.cautions}>
           <h2 className="text-table! text-amber">{words.cautions}</h2>
-          <ul lang="en">
+          <ul>
             {cautions.map((caution) => (
-              <li key={caution}>{caution}</li>
+              <Caution key={caution} caution={caution} view={view} />
             ))}
           </ul>
         </section>
@@ -51,9 +53,14 @@ export function FrameAnswerPane({ view, result, stale }: AnswerProps) {
   );
 }
 
+function Caution({ caution, view }: { readonly caution: string; readonly view: FrameView }) {
+  const { text, english } = cautionIn(view.cautionTexts, caution);
+  return <li lang={english ? "en" : undefined}>{english ? text : localNumbers(text, view.locale)}</li>;
+}
+
 function Numbers({ view, result }: { readonly view: FrameView; readonly result: FrameResult }) {
   const { words, locale, show } = view;
-  const { value, lower, upper, text, proved } = result.resistance;
+  const { value, lower, upper, text, proved, boundsBasis } = result.resistance;
   const bracket = bracketText(value, lower, upper, "Ω");
   return (
     <>
@@ -63,9 +70,13 @@ function Numbers({ view, result }: { readonly view: FrameView; readonly result: 
       {show.bounds ? (
         <p data-testid="bracket" className="font-mono text-small [overflow-wrap:anywhere]">
           [{localNumbers(bracket.lower, locale)} … {localNumbers(bracket.upper, locale)}] {bracket.unit}
-          <span className="font-sans text-ink-soft"> {proved ? words.proved : words.notProved}</span>
+          <span className="font-sans text-ink-soft">
+            {" "}
+            {proved ? words.proved : words.notProved} ({words.basis[boundsBasis]})
+          </span>
         </p>
       ) : null}
+      {result.uncertainty ? <StrayRange view={view} uncertainty={result.uncertainty} /> : null}
     </>
   );
 }
@@ -74,11 +85,13 @@ const TONES = { met: "text-verdigris", "not-met": "text-oxide", undecided: "text
 
 function Verdict({
   verdict,
-  view: { words },
+  view: { words, tolerances },
 }: {
   readonly verdict: NonNullable<FrameResult["verdict"]>;
   readonly view: FrameView;
 }) {
-  const sentences = { met: words.met, "not-met": words.notMet, undecided: words.undecided };
+  const sentences = tolerances
+    ? { met: words.metTolerances, "not-met": words.notMetTolerances, undecided: words.undecidedTolerances }
+    : { met: words.met, "not-met": words.notMet, undecided: words.undecided };
   return <strong className={`font-semibold ${TONES[verdict]}`}>{sentences[verdict]}</strong>;
 }

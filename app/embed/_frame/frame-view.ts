@@ -2,6 +2,7 @@ import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
 import type { UnitKind } from "../../_ui/quantity/units";
 import type { ShapeDrawing } from "../../_ui/drawing/shape-drawing";
 import type { ComponentProps } from "react";
+import type { CautionTexts } from "../_cautions/caution-in";
 import type { Words } from "../_words/words";
 
 /** An input that visitors may change. */
@@ -20,6 +21,29 @@ export interface OpenInput {
   /** "50 mm to 4 m", in the reader's locale; null where every value may be tried. */
   readonly range: string | null;
   readonly choices: readonly { readonly value: string; readonly label: string }[] | null;
+  /** "± 0.1 mm", where the tolerance is fixed; empty otherwise. */
+  readonly about: string;
+}
+
+/** The tolerance of one input that visitors may change. */
+export interface OpenTolerance {
+  /** Among the values: "width.tolerance". */
+  readonly name: string;
+  /** Input that it belongs to. */
+  readonly input: string;
+  readonly label: string;
+  readonly value: string;
+  /** What it is a tolerance of, where the input itself is fixed. */
+  readonly about: string;
+  readonly range: string | null;
+}
+
+export interface FrameTolerances {
+  readonly open: readonly OpenTolerance[];
+  readonly method: NonNullable<FrameResult["uncertainty"]>["method"];
+  readonly budget: boolean;
+  /** Names of the budget's entries by their place in the request; what is not there is not shown. */
+  readonly labels: Readonly<Record<string, string>>;
 }
 
 export interface FixedInput {
@@ -42,6 +66,8 @@ export interface FrameView {
   readonly intro: string | null;
   readonly open: readonly OpenInput[];
   readonly fixed: readonly FixedInput[];
+  /** Null where the widget does not ask how far the resistance strays. */
+  readonly tolerances: FrameTolerances | null;
   readonly requirement: string | null;
   readonly show: { readonly drawing: boolean; readonly bounds: boolean; readonly plots: boolean };
   readonly accent: string | null;
@@ -54,6 +80,8 @@ export interface FrameView {
   readonly service: string;
   /** Cautions of the shape, shown before there is an answer too. */
   readonly cautions: readonly string[];
+  /** Cautions in the frame's language by the engine's English. */
+  readonly cautionTexts: CautionTexts;
   /** Coordinate along the flow, for the plots. */
   readonly coordinateLabel: string;
   readonly preview: boolean;

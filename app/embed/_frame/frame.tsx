@@ -9,11 +9,15 @@ import { filled } from "../_words/words";
 import { FrameAnswerPane } from "./answer-pane";
 import { FrameApi, type Values } from "./frame-api";
 import { InputField } from "./input-field";
+import { ToleranceField } from "./tolerance-field";
 import { TroubleCard } from "./trouble-card";
 import { useAnswer, useDrawing } from "./use-answer";
 import { useHost } from "./use-host";
-import type { FrameView } from "./frame-view";
+import type { FrameView, OpenTolerance } from "./frame-view";
 
+const FrameBudget = dynamic(() => import("./frame-budget").then(({ FrameBudget: Budget }) => Budget), {
+  ssr: false,
+});
 const FramePlots = dynamic(() => import("./frame-plots").then(({ FramePlots: Plots }) => Plots), {
   ssr: false,
 });
@@ -28,19 +32,26 @@ export function Frame({ view }: { readonly view: FrameView }) {
   const drawing = useDrawing(api, values, view.drawing);
   const content = useRef<HTMLElement>(null);
 
-  const names = useMemo(() => new Set(view.open.map(({ name }) => name)), [view.open]);
+  const { tolerances } = view;
+  /** What visitors may change, with what it starts as. */
+  const defaults = useMemo(
+    () =>
+      Object.fromEntries([...view.open, ...(tolerances?.open ?? [])].map(({ name, value }) => [name, value])),
+    [view.open, tolerances],
+  );
+  const put = (name: string, text: string) => setValues((before) => ({ ...before, [name]: text }));
   const onSet = useCallback(
     (given: Values) => {
-      const own = Object.entries(given).filter(([name]) => names.has(name));
+      const own = Object.entries(given).filter(([name]) => Object.hasOwn(defaults, name));
       if (own.length > 0) setValues((before) => ({ ...before, ...Object.fromEntries(own) }));
     },
-    [names],
+    [defaults],
   );
   const tell = useHost({ embed: view.embed, hosts: view.hosts, content, onSet, onCompute: ask });
   useEffect(() => {
-    const inputs = view.open.map(({ name, value }) => ({ name, value }));
+    const inputs = Object.entries(defaults).map(([name, value]) => ({ name, value }));
     tell("ready", { title: view.title, inputs });
-  }, [tell, view]);
+  }, [tell, view, defaults]);
   useEffect(() => {
     if (result && !pending && !trouble) tell("result", result);
   }, [tell, result, pending, trouble]);
@@ -55,7 +66,19 @@ export function Frame({ view }: { readonly view: FrameView }) {
   const accent = view.accent ?? "var(--copper)";
   const style: CSSProperties & Record<"--accent", string> = { "--accent": accent };
   const errors = trouble?.kind === "fields" ? trouble.fields : {};
-  const changed = view.open.some(({ name, value }) => values[name] !== value);
+  const changed = Object.entries(defaults).some(([name, value]) => values[name] !== value);
+  const toleranceOf = (tolerance: OpenTolerance) => (
+    <ToleranceField
+      key={tolerance.name}
+      tolerance={tolerance}
+      about={values[tolerance.input] ?? tolerance.about}
+      value={values[tolerance.name] ?? ""}
+      error={errors[tolerance.name]}
+      words={words}
+      locale={locale}
+      onChange={(text) => put(tolerance.name, text)}
+    />
+  );
   return (
     <main
       ref={content}
@@ -72,17 +95,22 @@ export function Frame({ view }: { readonly view: FrameView }) {
         <form aria-label={words.inputs} onSubmit={(event) => event.preventDefault()}>
           <div className={`grid ${gap} min-[400px]:max-[600px]:grid-cols-2`}>
             {view.open.map((input) => (
-              <InputField
-                key={input.name}
-                input={input}
-                value={values[input.name] ?? ""}
-                error={errors[input.name]}
-                words={words}
-                locale={locale}
-                onChange={(text) => setValues((before) => ({ ...before, [input.name]: text }))}
-                onFocusChange={(on) => setFocused(on ? input.line : undefined)}
-              />
+              <div key={input.name}>
+                <InputField
+                  input={input}
+                  value={values[input.name] ?? ""}
+                  error={errors[input.name]}
+                  words={words}
+                  locale={locale}
+                  onChange={(text) => put(input.name, text)}
+                  onFocusChange={(on) => setFocused(on ? input.line : undefined)}
+                />
+                {tolerances?.open.filter((own) => own.input === input.name).map(toleranceOf)}
+              </div>
             ))}
+            {tolerances?.open
+              .filter((own) => !view.open.some(({ name }) => name === own.input))
+              .map(toleranceOf)}
           </div>
           {view.fixed.length > 0 ? (
             <dl className="grid grid-cols-[auto_1fr] gap-x-2 text-table" aria-label={words.fixed}>
@@ -97,11 +125,7 @@ export function Frame({ view }: { readonly view: FrameView }) {
             </dl>
           ) : null}
           {changed ? (
-            <Button
-              variant="quiet"
-              className="mt-0.5 -ms-2 print:hidden"
-              onClick={() => setValues(Object.fromEntries(view.open.map(({ name, value }) => [name, value])))}
-            >
+            <Button variant="quiet" className="mt-0.5 -ms-2 print:hidden" onClick={() => setValues(defaults)}>
               {words.reset}
             </Button>
           ) : null}
@@ -118,6 +142,9 @@ export function Frame({ view }: { readonly view: FrameView }) {
           ) : null}
         </div>
       </div>
+      {tolerances?.budget && result?.uncertainty ? (
+        <FrameBudget view={view} tolerances={tolerances} result={result} />
+      ) : null}
       {show.plots && result?.profile ? <FramePlots view={view} profile={result.profile} /> : null}
       <footer className="mt-2 border-t border-rule pt-1 text-small text-ink-soft">
         <p>{words.disclaimer}</p>

@@ -27,8 +27,8 @@ export function InputField(props: InputFieldProps) {
       {label} {symbol ? <QuantitySymbol text={symbol} /> : null}
     </>
   );
-  const help = [input.help, range].filter((text) => text !== null).join(" ") || undefined;
-  const message = error === undefined ? undefined : errorText(error, words, locale, range);
+  const help = [input.about, input.help, range].filter(Boolean).join(" ") || undefined;
+  const message = error === undefined ? undefined : refusalText(error, words, locale, range);
   if (choices) {
     // What the page around has set may be off the list; it stays in sight, with its complaint.
     const known = choices.some((choice) => choice.value === value);
@@ -66,7 +66,7 @@ export function InputField(props: InputFieldProps) {
 }
 
 /** In the reader's language first; the particulars are the API's own, in English. */
-function errorText(error: string, words: Words, locale: string, range: string | null): string {
+export function refusalText(error: string, words: Words, locale: string, range: string | null): string {
   if (locale.startsWith("en")) return sentence(error);
   return range === null ? `${words.refused} (${error})` : `${words.refused} ${sentence(range)}`;
 }

@@ -31,3 +31,8 @@ export function shownQuantity(text: string, locale: string): string {
     locale,
   );
 }
+
+/** A share, 0 … 1, in per cent with up to three digits: "95 %", "12.3 %". */
+export function localShare(share: number, locale: string): string {
+  return new Intl.NumberFormat(locale, { style: "percent", maximumSignificantDigits: 3 }).format(share);
+}

@@ -11,9 +11,9 @@ interface Envelope<Type extends string> {
   readonly data: unknown;
 }
 
-/** Longest text and largest number of values that a page around may set. */
+/** Longest text and largest number of values, tolerances among them, that a page around may set. */
 const LONGEST_VALUE = 120;
-const MOST_VALUES = 40;
+const MOST_VALUES = 80;
 
 export function frameMessage(type: FrameMessage, embed: string, data: unknown): Envelope<FrameMessage> {
   return { source: "rhoform", version: 1, type, embed, data };

@@ -1,3 +1,5 @@
+import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
+
 /** What a frame itself says. `{0}` and `{1}` are filled in. */
 export interface Words {
   readonly resistance: string;
@@ -41,8 +43,26 @@ export interface Words {
   readonly field: string;
   readonly currentDensity: string;
   readonly atOneVolt: string;
-  /** Names of common inputs, by what the catalogue calls them. */
-  readonly names: Readonly<Record<string, string>>;
+  /** Where the bounds come from. */
+  readonly basis: Readonly<Record<ResistanceResult["resistance"]["boundsBasis"], string>>;
+  readonly metTolerances: string;
+  readonly notMetTolerances: string;
+  readonly undecidedTolerances: string;
+  readonly tolerance: string;
+  readonly withTolerances: string;
+  readonly propagation: string;
+  readonly worstCase: string;
+  readonly monteCarlo: string;
+  readonly budget: string;
+  readonly share: string;
+  readonly shareOfRange: string;
+  readonly ofInput: string;
+  readonly notShown: string;
+  readonly stated: string;
+  readonly standard: string;
+  readonly noTolerance: string;
+  readonly readOff: string;
+  readonly noPosition: string;
 }
 
 /** A text with its places filled in. */

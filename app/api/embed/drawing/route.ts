@@ -2,7 +2,7 @@ import { parseBody, receiveBody } from "@/api/body";
 import { z } from "zod";
 import { readGeometry } from "@/app/(site)/calculate/_server/geometry";
 import { embedPrincipal } from "@/lib/auth/embed-principal";
-import { widgetRequest } from "@/lib/embeds/enforce";
+import { widgetDimensions } from "@/lib/embeds/enforce";
 import { findShape, InputError } from "@/lib/engine";
 import { answerFrameCall, answerFramePreflight, frameToken } from "../_server/frame-call";
 import { frameDrawing } from "../_server/frame-drawing";
@@ -14,9 +14,8 @@ export function POST(request: Request): Promise<Response> {
     const readers = { description: "Open values.", schema: z.unknown(), maxBytes: 20_000 };
     const body = parseBody(readers, await receiveBody(request, readers), call.url.searchParams);
     const { definition } = principal;
-    const shape = findShape(definition.shape);
-    const { dimensions } = widgetRequest(definition, body);
-    const reading = shape && readGeometry(shape, Object(dimensions) as Record<string, unknown>);
+    const shape = findShape(definition.shape ?? "");
+    const reading = shape && readGeometry(shape, widgetDimensions(definition, body));
     if (!reading?.ok)
       throw new InputError([{ pointer: "#/values", detail: "These values cannot be drawn." }]);
     return frameDrawing(definition, reading.geometry);

@@ -2,6 +2,7 @@
 
 import type { ShapeEntry } from "@/lib/engine";
 import type { Uncertainty } from "@/lib/engine/resistance/uncertainty/result-schema";
+import { ShareBar } from "../../../../_ui/share-bar";
 
 const METHOD_WORDS: Readonly<Record<Uncertainty["method"], string>> = {
   propagation: "95 % of the time, by first-order propagation",
@@ -54,12 +55,7 @@ export function Budget({ uncertainty, entry }: BudgetProps) {
                       {label}
                     </th>
                     <td className="py-0.5 pe-2">
-                      <span className="flex items-center gap-1">
-                        <span aria-hidden className="h-1.5 grow bg-rule">
-                          <span className="block h-full bg-copper" style={{ width: `${100 * share}%` }} />
-                        </span>
-                        <span className="w-7 text-end font-mono tabular-nums">{percent(share)}</span>
-                      </span>
+                      <ShareBar share={share} text={percent(share)} />
                     </td>
                     <td className="py-0.5 pe-2 text-end font-mono whitespace-nowrap">
                       {input.endsWith("material") ? (
