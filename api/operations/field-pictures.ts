@@ -145,6 +145,7 @@ export const readFieldPlot = defineOperation({
   description:
     "The finished picture: outline, terminals, current density, equipotentials and stream lines, with scale bar and legend.",
   scope: "field",
+  widgets: true,
   produces: ["image/svg+xml"],
   request: { path: fieldId },
   responses: {
@@ -156,6 +157,10 @@ export const readFieldPlot = defineOperation({
   errors: ["not-found", "not-ready"],
   examples: [...notReady],
   handler: async ({ path }, context) => {
+    const { principal } = context;
+    if (principal.kind === "embed" && !principal.definition.show.plots) {
+      throw new Refusal("insufficient-scope", "This widget shows no picture of the field.");
+    }
     const { map, request, result, names } = await solved(context, path.id);
     const text = plotSvg(map, plotTextOf(result, map, names, request.outline?.unit ?? "m"));
     return { status: 200, content: { kind: "text", text, mediaType: "image/svg+xml" } };

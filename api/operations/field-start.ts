@@ -1,6 +1,7 @@
 import { fieldById, fieldOfOwner, type FieldRow } from "@/db/queries/fields";
 import { keyActor } from "@/lib/activity/append";
 import { requireRecorder } from "@/lib/auth/access";
+import { widgetComplaints } from "@/lib/embeds/enforce";
 import type { PreparedField } from "@/lib/engine";
 import { fieldView } from "@/lib/fields/field-view";
 import { chargeOf, requireCaller, requireOwner } from "@/lib/fields/owner";
@@ -22,6 +23,14 @@ export function callersField({ service, principal }: CallContext, id: string): F
 
 export function viewOf(row: FieldRow) {
   return fieldView(row, (id) => `${BASE_PATH}/records/${id}`);
+}
+
+/** As the caller may see it: why it failed could tell a visitor what the widget hides. */
+export function viewFor({ principal }: CallContext, row: FieldRow) {
+  const view = viewOf(row);
+  if (principal.kind !== "embed" || view.failure === undefined) return view;
+  const [{ detail }] = widgetComplaints(principal.definition, [{ pointer: "#", detail: view.failure }]);
+  return { ...view, failure: detail };
 }
 
 /** A guess at the work, for the order of the queue: vertices, and digits wanted. */
@@ -82,7 +91,7 @@ export async function answerField(context: CallContext, started: FieldRow): Prom
   if (wait > 0) await service.fields.waitFor(id, wait * 1000);
   // Only another call that cancelled and deleted it can have taken it away; what it held was given back then.
   const row = fieldById(service.db, id) ?? { ...started, status: "cancelled", finishedAt: service.now() };
-  return json(isFinished(row) ? 200 : 202, viewOf(row), {
+  return json(isFinished(row) ? 200 : 202, viewFor(context, row), {
     held: MOST_COMPUTATIONS,
     headers: {
       Location: `${BASE_PATH}/fields/${id}`,

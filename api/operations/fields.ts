@@ -1,15 +1,17 @@
 import { z } from "zod";
 import { deleteField as deleteRow, outlineOfOwner } from "@/db/queries/fields";
-import { prepareField } from "@/lib/engine";
+import type { EmbedPrincipal } from "@/lib/auth/principal";
+import { widgetComplaints, widgetRequest } from "@/lib/embeds/enforce";
+import { InputError, prepareField } from "@/lib/engine";
 import { contentOf } from "@/lib/fields/field-view";
-import { requireOwner } from "@/lib/fields/owner";
+import { outlineOwner } from "@/lib/fields/owner";
 import { FIELD_COSTS, MOST_COMPUTATIONS } from "@/lib/jobs/field-cost";
 import { isFinished } from "@/lib/jobs/field-jobs";
 import { usableMaterial } from "@/lib/materials/team-materials";
 import { type CallContext, defineOperation, json } from "../operation";
 import { preferredWait } from "../prefer";
 import { fieldRequest, fieldSchema } from "../schemas/field";
-import { answerField, callersField, type FieldStart, startField, viewOf } from "./field-start";
+import { answerField, callersField, type FieldStart, startField, viewFor } from "./field-start";
 import { bracketOutline, bracketTerminals, OUTLINE_MAX_BYTES } from "./outlines";
 
 export const fieldId = z.object({
@@ -18,8 +20,8 @@ export const fieldId = z.object({
 
 /** Checks the body with what the caller may use; materials it names are kept as they are now. */
 function prepare(body: unknown, { service, principal }: CallContext): FieldStart {
-  const owner = requireOwner(principal, service.config.secret);
-  const teamId = principal.kind === "key" ? principal.teamId : undefined;
+  const owner = outlineOwner(principal, service.config.secret);
+  const teamId = principal.kind === "key" || principal.kind === "embed" ? principal.teamId : undefined;
   const materials = new Map<string, unknown>();
   const prepared = prepareField(body, {
     material: (id) => {
@@ -33,6 +35,17 @@ function prepare(body: unknown, { service, principal }: CallContext): FieldStart
     },
   });
   return { prepared, materials: [...materials.values()] };
+}
+
+/** The open values of a widget on an outline, with everything else as its version fixes it. */
+function prepareWidget(body: unknown, context: CallContext, { definition }: EmbedPrincipal): FieldStart {
+  const request = widgetRequest(definition, body);
+  try {
+    return prepare(request, context);
+  } catch (error) {
+    if (!(error instanceof InputError)) throw error;
+    throw new InputError(widgetComplaints(definition, error.errors));
+  }
 }
 
 /** The table of costs in words. */
@@ -57,6 +70,7 @@ export const postField = defineOperation({
   summary: "Solve the field on an outline",
   description: `From any outline, its terminals and a medium to a resistance between a lower and an upper bound from two independent field solutions. Everything about the outline, the terminals and the medium is checked at once; then the solution runs as a job. \`Prefer: wait=N\` waits up to N seconds (at most 30) for its end: 200 if it is ready, else 202 with \`Location\`. It counts against the month by its unknowns: ${costTable()}; the most is reserved before, the rest given back at the end. One that is cancelled, refused or fails costs nothing.`,
   scope: "field",
+  widgets: true,
   request: {
     body: {
       description: "What to solve.",
@@ -116,8 +130,12 @@ export const postField = defineOperation({
   ],
   reserve: () => MOST_COMPUTATIONS,
   stores: () => true,
-  handler: async ({ body }, context) =>
-    answerField(context, await startField(context, prepare(body, context))),
+  handler: async ({ body }, context) => {
+    const { principal } = context;
+    const start =
+      principal.kind === "embed" ? prepareWidget(body, context, principal) : prepare(body, context);
+    return answerField(context, await startField(context, start));
+  },
 });
 
 export const readField = defineOperation({
@@ -129,6 +147,7 @@ export const readField = defineOperation({
   description:
     "Its status, the bracket so far and, once it is finished, the result. `Prefer: wait=N` waits up to N seconds (at most 30) for its end.",
   scope: "field",
+  widgets: true,
   request: { path: fieldId },
   responses: { 200: { description: "The solution.", content: { "application/json": fieldSchema } } },
   errors: ["not-found"],
@@ -141,7 +160,7 @@ export const readField = defineOperation({
     if (wait > 0 && !isFinished(callersField(context, path.id))) {
       await context.service.fields.waitFor(path.id, wait * 1000);
     }
-    return json(200, viewOf(callersField(context, path.id)), {
+    return json(200, viewFor(context, callersField(context, path.id)), {
       headers: wait > 0 ? { "Preference-Applied": `wait=${wait}` } : {},
     });
   },
@@ -156,6 +175,7 @@ export const deleteField = defineOperation({
   description:
     "Cancels one that waits or runs: its status becomes `cancelled` and what it reserved is given back. Deletes one that is finished.",
   scope: "field",
+  widgets: true,
   request: { path: fieldId },
   responses: { 204: { description: "Cancelled or deleted." } },
   errors: ["not-found"],

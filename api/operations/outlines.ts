@@ -53,11 +53,11 @@ export const postOutline = defineOperation({
   tag: "Fields",
   summary: "Store an outline",
   description:
-    "Checks a plan drawing, repairs what is harmless (repeated and collinear vertices) and stores it for field solutions. The answer is the cleaned outline; terminals come back on its edges.",
+    "Checks a plan drawing, repairs what is harmless (repeated and collinear vertices) and stores it for field solutions. The answer is the cleaned outline; terminals come back on its edges. A stored outline never changes and stays: what refers to it, a published widget too, refers to this very drawing.",
   scope: "field",
   request: {
     body: {
-      description: "An outline and, if they are known, its terminals.",
+      description: "An outline and, if they are known, its name and its terminals.",
       // The engine checks the body itself: it finds every mistake at once.
       schema: z.unknown(),
       documented: () => outlineRequest,
@@ -78,7 +78,7 @@ export const postOutline = defineOperation({
       summary: "A bent track with its terminals",
       status: 201,
       headers: { "Idempotency-Key": "track-rev-b" },
-      body: { outline: bracketOutline, terminals: bracketTerminals },
+      body: { name: "Track, rev B", outline: bracketOutline, terminals: bracketTerminals },
     },
     {
       name: "crossing",

@@ -56,6 +56,7 @@ export const fieldSchema = z
 export const storedOutlineSchema = z
   .object({
     id: z.string(),
+    name: z.string().meta({ description: "Empty where it was stored without one." }),
     createdAt: z.iso.datetime(),
     outline: outlineSchema.meta({ description: "The outline as it was cleaned." }),
     terminals: z.array(terminalSchema),

@@ -210,6 +210,30 @@ export function countEmbedCall(
   });
 }
 
+/** Adds what a call cost that was counted before: a field solution knows at its end. */
+export function addEmbedComputations(
+  db: Database,
+  {
+    embedId,
+    host,
+    at,
+    computations,
+  }: {
+    readonly embedId: string;
+    readonly host: string;
+    readonly at: number;
+    readonly computations: number;
+  },
+): void {
+  db.insert(embedUsage)
+    .values({ embedId, day: Math.floor(at / DAY_MS), host, requests: 0, computations, refused: 0 })
+    .onConflictDoUpdate({
+      target: [embedUsage.embedId, embedUsage.day, embedUsage.host],
+      set: { computations: sql`computations + ${computations}` },
+    })
+    .run();
+}
+
 export interface EmbedUsageRow {
   readonly embedId: string;
   /** `2025-03-01`, UTC. */

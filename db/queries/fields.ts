@@ -1,4 +1,4 @@
-import { and, eq, inArray, lt, ne, or, sql } from "drizzle-orm";
+import { and, desc, eq, inArray, lt, ne, or, sql } from "drizzle-orm";
 import type { Database } from "../client";
 import { fields, outlines } from "../schema/fields";
 
@@ -111,4 +111,15 @@ export function outlineOfOwner(db: Database, owner: string, id: string): Outline
     .from(outlines)
     .where(and(eq(outlines.id, id), eq(outlines.owner, owner)))
     .get();
+}
+
+/** Outlines of an owner, newest first. */
+export function outlinesOfOwner(db: Database, owner: string, limit: number): OutlineRow[] {
+  return db
+    .select()
+    .from(outlines)
+    .where(eq(outlines.owner, owner))
+    .orderBy(desc(outlines.createdAt), desc(outlines.id))
+    .limit(limit)
+    .all();
 }

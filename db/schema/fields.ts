@@ -5,10 +5,10 @@ export const outlines = sqliteTable(
   "outlines",
   {
     id: text().primaryKey(),
-    /** Who may use it: `team:<id>` or `address:<hash>` for signed-out pages. */
+    /** Who may use it: `team:<id>` or `address:<hash>` for signed-out pages. A row never changes and stays. */
     owner: text().notNull(),
     createdAt: integer("created_at").notNull(),
-    /** JSON text: outline, terminals, repairs. */
+    /** JSON text: name, outline, terminals, repairs. */
     content: text().notNull(),
   },
   (table) => [index("outlines_owner").on(table.owner, table.createdAt)],
@@ -19,6 +19,7 @@ export const fields = sqliteTable(
   "fields",
   {
     id: text().primaryKey(),
+    /** As of an outline, or `embed:<id>` for what a widget's frame asked for. */
     owner: text().notNull(),
     status: text({ enum: ["queued", "running", "done", "limited", "failed", "cancelled"] }).notNull(),
     createdAt: integer("created_at").notNull(),
@@ -44,6 +45,8 @@ export const fields = sqliteTable(
       .$type<{
         keyId: string;
         teamId: string;
+        /** Origin of the page around, where `keyId` is a widget. */
+        host?: string;
         subject: string;
         quota: number;
         reserved: number;

@@ -38,7 +38,7 @@ export async function embedPrincipal(
     host: read.host,
     teamId: row.teamId,
     team: row.team,
-    scopes: ["compute"],
+    scopes: [shown.definition.outlineId === undefined ? "compute" : "field"],
     minuteQuota: EMBED_MINUTE_QUOTA,
     monthQuota: row.monthQuota,
     address,

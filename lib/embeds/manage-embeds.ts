@@ -16,6 +16,8 @@ import {
   showVersion,
 } from "@/db/queries/embeds";
 import { type Act, type Actor, appendActivity } from "../activity/append";
+import type { Problem } from "@/lib/engine";
+import { teamOutline } from "../fields/team-outlines";
 import { usableMaterial } from "../materials/team-materials";
 import { newId } from "../service/identifier";
 import { Refusal } from "../service/refusal";
@@ -130,9 +132,7 @@ export function publishEmbed(db: Database, { actor, now }: By, id: string): Embe
   return transact(db, () => {
     const embed = mustFind(db, id);
     const draft = requireDraft(db, id);
-    const problems = definitionProblems(storedDefinition(draft.definition), (material) =>
-      usableMaterial(db, embed.teamId, material),
-    );
+    const problems = teamProblems(db, embed.teamId, storedDefinition(draft.definition));
     if (problems.length > 0) {
       throw new Refusal("invalid-input", "The draft cannot be published yet.", { errors: problems });
     }
@@ -155,9 +155,7 @@ export function rollBackEmbed(db: Database, { actor, now }: By, id: string, numb
     if (!earlier || earlier.publishedAt === null) {
       throw new Refusal("not-found", "There is no such published version.");
     }
-    const problems = definitionProblems(storedDefinition(earlier.definition), (material) =>
-      usableMaterial(db, embed.teamId, material),
-    );
+    const problems = teamProblems(db, embed.teamId, storedDefinition(earlier.definition));
     if (problems.length > 0) {
       throw new Refusal("invalid-input", `Version ${number} cannot be shown any more.`, { errors: problems });
     }
@@ -191,6 +189,15 @@ export function withdrawEmbed(db: Database, by: By, id: string): EmbedView {
     record(db, by, "embed.withdraw", view, { before: { version: before.version } });
     return view;
   });
+}
+
+/** What stands in the way of publishing, with the materials and outlines that the team may use. */
+export function teamProblems(db: Database, teamId: string, definition: EmbedDefinition): readonly Problem[] {
+  return definitionProblems(
+    definition,
+    (id) => usableMaterial(db, teamId, id),
+    (id) => teamOutline(db, teamId, id),
+  );
 }
 
 function record(

@@ -1,4 +1,4 @@
-import { exampleRequest, type Shape } from "@/lib/engine";
+import { type CleanedOutline, exampleRequest, type Shape } from "@/lib/engine";
 import { type EmbedDefinition, embedDefinition, type InputRule } from "./definition";
 import { inputsOf } from "./inputs";
 
@@ -28,14 +28,36 @@ export function startDefinition(
   });
   const graded = medium ? undefined : at(example, ["medium", "graded"]);
   return embedDefinition.parse({
+    ...LOOK,
     shape: shape.id,
     title: shape.title,
     inputs,
     ...(graded === undefined ? {} : { graded }),
-    show: { drawing: true, bounds: true, plots: false },
-    theme: "host",
-    density: "comfortable",
-    language: "reader",
+  });
+}
+
+const LOOK = {
+  show: { drawing: true, bounds: true, plots: false },
+  theme: "host",
+  density: "comfortable",
+  language: "reader",
+} as const;
+
+/** What a new widget on a stored outline starts as: copper, of a thickness that visitors set where it is a sheet. */
+export function startOnOutline(
+  id: string,
+  { name, outline }: Pick<CleanedOutline, "name" | "outline">,
+): EmbedDefinition {
+  const sheet = outline.symmetry !== "axisymmetric";
+  return embedDefinition.parse({
+    ...LOOK,
+    outlineId: id,
+    title: name || "Outline",
+    inputs: [
+      { name: "material", rule: { mode: "fixed", value: "copper-annealed" } },
+      ...(sheet ? [{ name: "thickness", rule: { mode: "open", value: "1 mm" } }] : []),
+      { name: "temperature", rule: { mode: "open", value: "20 degC" } },
+    ],
   });
 }
 

@@ -34,15 +34,17 @@ function replayView(
 }
 
 export function contentOf(row: OutlineRow): CleanedOutline {
-  // Written by this application only, from what `cleanOutline` made.
-  return JSON.parse(row.content) as CleanedOutline;
+  // Written by this application only, from what `cleanOutline` made; the first ones had no names.
+  const content = JSON.parse(row.content) as Omit<CleanedOutline, "name"> & { readonly name?: string };
+  return { ...content, name: content.name ?? "" };
 }
 
 /** A stored outline as it is answered. */
 export function outlineView(row: OutlineRow) {
-  const { outline, terminals, repairs } = contentOf(row);
+  const { name, outline, terminals, repairs } = contentOf(row);
   return {
     id: row.id,
+    name,
     createdAt: new Date(row.createdAt).toISOString(),
     outline,
     terminals,

@@ -11,6 +11,7 @@ import {
   releaseClaims,
   updateOpenField,
 } from "@/db/queries/fields";
+import { addEmbedComputations } from "@/db/queries/embeds";
 import { addComputations } from "@/db/queries/usage";
 import { CheckFailure, type Material, prepareField } from "@/lib/engine";
 import type { Limiter } from "../limits/limiter";
@@ -226,11 +227,13 @@ export class FieldJobs {
   /** The end of a solution and what it cost, in one transaction; then what was reserved beyond it is given back. */
   private async settle(row: FieldRow, cost: number, status: number, end: () => boolean): Promise<boolean> {
     const { db, limiter, now } = this.options;
-    const { keyId, teamId, subject, quota, reserved, reservedAt } = row.charge;
+    const { keyId, teamId, host, subject, quota, reserved, reservedAt } = row.charge;
     const ended = transact(db, () => {
       if (!end()) return false;
-      if (cost > 0)
-        addComputations(db, now(), { keyId, teamId, operation: "solveField", status, computations: cost });
+      if (cost === 0) return true;
+      addComputations(db, now(), { keyId, teamId, operation: "solveField", status, computations: cost });
+      if (host !== undefined)
+        addEmbedComputations(db, { embedId: keyId, host, at: now(), computations: cost });
       return true;
     });
     if (ended && reserved > cost)

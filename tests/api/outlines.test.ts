@@ -18,10 +18,11 @@ const get = (id: string, as = key) => call(server, "get", `/outlines/${id}`, { k
 describe("POST /outlines 201", () => {
   test("stored, with where it is, and read again", async () => {
     const { outline, terminals } = BEND;
-    const { status, body, headers } = await post({ outline, terminals });
+    const { status, body, headers } = await post({ name: " Track, rev B ", outline, terminals });
     expect([status, headers.location]).toEqual([201, `/api/v1/outlines/${body.id}`]);
     expect(body).toEqual({
       id: expect.stringMatching(/^out_/),
+      name: "Track, rev B",
       createdAt: expect.stringMatching(/^\d{4}-/),
       outline: { ...outline, holes: [], symmetry: "plan" },
       terminals,
@@ -32,7 +33,10 @@ describe("POST /outlines 201", () => {
   });
 
   test("the members of an outline by themselves", async () => {
-    const { body } = await post(STRIP.outline);
+    const { body } = await post({ ...STRIP.outline, name: "Strip" });
+    expect(body.name).toBe("Strip");
+    expect((await post(STRIP.outline)).body.name).toBe("");
+    expect(places(await post({ ...STRIP.outline, name: "two\nlines" }))).toEqual(["#/name"]);
     expect(body.outline.outer).toEqual(STRIP.outline.outer);
     expect(body.terminals).toEqual([]);
   });

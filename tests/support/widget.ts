@@ -1,7 +1,12 @@
+import { insertOutline } from "@/db/queries/fields";
 import { teamBySlug } from "@/db/queries/teams";
 import { SHELL } from "@/lib/activity/append";
 import type { EmbedDefinition } from "@/lib/embeds/definition";
 import { createEmbed, type EmbedSettings, publishEmbed } from "@/lib/embeds/manage-embeds";
+import { cleanOutline } from "@/lib/engine";
+import { teamOwner } from "@/lib/fields/owner";
+import { newId } from "@/lib/service/identifier";
+import { BEND } from "./field";
 import type { TestServer } from "./server";
 
 /** A busbar: length open within a range, thickness a list, width fixed, temperature hidden, material a list. */
@@ -54,4 +59,35 @@ export function publishedWidget(
   });
   const { version } = publishEmbed(db, by, id);
   return { id, version: version ?? 0, teamId };
+}
+
+/** What the definition of a widget on a stored outline has in place of a shape: a sheet, open from 10 to 100 ohm/sq. */
+export function onOutline(
+  outlineId: string,
+  change: Partial<EmbedDefinition> = {},
+): Partial<EmbedDefinition> {
+  return {
+    shape: undefined,
+    outlineId,
+    title: "Bent track",
+    inputs: [
+      {
+        name: "sheetResistance",
+        rule: { mode: "open", value: "50 ohm/sq", min: "10 ohm/sq", max: "100 ohm/sq" },
+      },
+      { name: "temperature", rule: { mode: "hidden", value: "23.75 degC" } },
+      { name: "current", rule: { mode: "fixed", value: "2 mA" } },
+    ],
+    ...change,
+  };
+}
+
+/** Stores the bend of the field tests for a team; the id. */
+export function storedBend(server: TestServer, team = "widgets", name = "Bent track"): string {
+  server.issue({ team });
+  const { db } = server.service;
+  const id = newId("out");
+  const content = JSON.stringify(cleanOutline({ name, outline: BEND.outline, terminals: BEND.terminals }));
+  insertOutline(db, { id, owner: teamOwner(teamBySlug(db, team)?.id ?? ""), createdAt: Date.now(), content });
+  return id;
 }

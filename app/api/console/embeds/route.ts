@@ -1,10 +1,12 @@
 import { z } from "zod";
 import { teamById } from "@/db/queries/teams";
-import { DEFAULT_EMBED_QUOTA, embedSettings } from "@/lib/embeds/definition";
+import type { Database } from "@/db/client";
+import { DEFAULT_EMBED_QUOTA, type EmbedDefinition, embedSettings } from "@/lib/embeds/definition";
 import { type EmbedRowView, embedRows } from "@/lib/embeds/embed-list";
 import { createEmbed } from "@/lib/embeds/manage-embeds";
-import { startDefinition } from "@/lib/embeds/start-definition";
-import { findShape } from "@/lib/engine";
+import { startDefinition, startOnOutline } from "@/lib/embeds/start-definition";
+import { findShape, type Problem } from "@/lib/engine";
+import { teamOutline } from "@/lib/fields/team-outlines";
 import { Refusal } from "@/lib/service/refusal";
 import { json } from "../../_server/page-call";
 import { consoleRoute } from "../_server/console-route";
@@ -63,30 +65,49 @@ export const GET = consoleRoute({
   },
 });
 
-/** Makes a widget with a draft that starts as the shape's example. */
-export const POST = consoleRoute({
-  action: "embeds.manage",
-  body: z.strictObject({
+const newEmbed = z
+  .strictObject({
     teamId: z.string().max(40),
     name: embedSettings.shape.name,
-    shape: z.string().max(64),
-    /** Values of a calculation page, by the names of inputs. */
+    shape: z.string().max(64).optional(),
+    /** In place of a shape. */
+    outlineId: z.string().max(64).optional(),
+    /** Values of a calculation page, by the names of the shape's inputs. */
     values: z.record(z.string().max(90), z.string().max(120)).optional(),
-  }),
+  })
+  .refine(({ shape, outlineId }) => (shape === undefined) !== (outlineId === undefined), {
+    path: ["shape"],
+    error: "must be given, or outlineId, and not both.",
+  });
+
+/** Makes a widget with a draft that starts as the shape's example, or on a stored outline of the team. */
+export const POST = consoleRoute({
+  action: "embeds.manage",
+  body: newEmbed,
   handle: ({ db, body, actor, now, requireTeam }) => {
-    const { teamId, name, shape: shapeId, values } = body;
+    const { teamId, name } = body;
     requireTeam(teamId);
-    const shape = findShape(shapeId);
-    const errors = [
-      ...(shape ? [] : [{ pointer: "#/shape", detail: "is not a shape of the catalogue." }]),
-      ...(teamById(db, teamId) ? [] : [{ pointer: "#/teamId", detail: "is not a team." }]),
-    ];
-    if (!shape || errors.length > 0)
-      throw new Refusal("invalid-input", "The widget cannot be made.", { errors });
+    if (!teamById(db, teamId)) throw refused({ pointer: "#/teamId", detail: "is not a team." });
     const settings = { name, origins: [], monthQuota: DEFAULT_EMBED_QUOTA };
-    return json(
-      createEmbed(db, { actor, now }, { teamId, settings, definition: startDefinition(shape, values) }),
-      201,
-    );
+    return json(createEmbed(db, { actor, now }, { teamId, settings, definition: firstDraft(db, body) }), 201);
   },
 });
+
+/** Refuses an unknown shape, and an outline that is not the team's as one that there is not. */
+function firstDraft(
+  db: Database,
+  { teamId, shape: shapeId = "", outlineId, values }: z.infer<typeof newEmbed>,
+): EmbedDefinition {
+  if (outlineId !== undefined) {
+    const stored = teamOutline(db, teamId, outlineId);
+    if (stored) return startOnOutline(outlineId, stored);
+    throw new Refusal("not-found", "There is no outline of this id that the team has stored.");
+  }
+  const shape = findShape(shapeId);
+  if (!shape) throw refused({ pointer: "#/shape", detail: "is not a shape of the catalogue." });
+  return startDefinition(shape, values);
+}
+
+function refused(error: Problem): Refusal {
+  return new Refusal("invalid-input", "The widget cannot be made.", { errors: [error] });
+}

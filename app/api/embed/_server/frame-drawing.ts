@@ -7,7 +7,7 @@ export type FrameDrawing = Pick<Geometry, "drawing" | "toScale" | "labels">;
 
 /** What a frame draws: without the lengths that its version hides, and whatever would tell them. */
 export function frameDrawing(definition: EmbedDefinition, geometry: Geometry): FrameDrawing {
-  const shape = findShape(definition.shape);
+  const shape = findShape(definition.shape ?? "");
   const { drawing, toScale, labels } = geometry;
   const hidden = definition.inputs.flatMap(({ name, rule }) => {
     if (rule.mode !== "hidden") return [];

@@ -51,7 +51,7 @@ export function EmbedEditor({ first, origin }: EditorProps) {
         <div className="grow">
           <h1>{embed.name}</h1>
           <p className="text-table text-ink-soft">
-            {detail.shapeTitle}, {embed.teamName}. <StateMark state={embed.state} version={embed.version} />
+            {detail.subject}, {embed.teamName}. <StateMark state={embed.state} version={embed.version} />
           </p>
         </div>
         {detail.mayManage && embed.state === "published" ? (

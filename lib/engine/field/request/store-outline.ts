@@ -12,8 +12,17 @@ import {
 } from "../outline/schema";
 import type { StoredOutline } from "./prepare-field";
 
+const LONGEST_NAME = 100;
+
 export const outlineRequestSchema = z
   .strictObject({
+    name: z
+      .string()
+      .trim()
+      .max(LONGEST_NAME)
+      .regex(/^\P{Cc}*$/u, "must be one line.")
+      .default("")
+      .meta({ description: "What the team calls it; shown where one is chosen.", example: "Track, rev B" }),
     outline: outlineSchema,
     terminals: z
       .array(terminalSchema)
@@ -24,21 +33,27 @@ export const outlineRequestSchema = z
   .meta({ description: "An outline to store." });
 
 export interface CleanedOutline extends StoredOutline {
+  /** Empty where it was stored without one. */
+  readonly name: string;
   /** What was put right, as sentences. */
   readonly repairs: readonly string[];
 }
 
 /**
  * Checks and cleans an outline.
- * @param body `{ outline, terminals? }` as it arrived, or the members of `outline` themselves.
+ * @param body `{ name?, outline, terminals? }` as it arrived, or the members of `outline` themselves.
  * @throws InputError with every complaint found.
  */
 export function cleanOutline(body: unknown): CleanedOutline {
   if (typeof body !== "object" || body === null || !("outer" in body) || "outline" in body)
     return clean(body);
-  const { terminals, ...outline } = body as { terminals?: unknown };
+  const { terminals, name, ...outline } = body as { terminals?: unknown; name?: unknown };
   try {
-    return clean(terminals === undefined ? { outline } : { outline, terminals });
+    return clean({
+      outline,
+      ...(terminals === undefined ? {} : { terminals }),
+      ...(name === undefined ? {} : { name }),
+    });
   } catch (error) {
     if (!(error instanceof InputError)) throw error;
     const bare = (pointer: string): string => pointer.replace(/^#\/outline(?=\/|$)/, "#");
@@ -53,12 +68,13 @@ function clean(body: unknown): CleanedOutline {
     addSchemaComplaints(outlineRequestSchema, parsed.error.issues, "#", problems);
     throw new InputError(problems.list);
   }
-  const { outline, terminals } = parsed.data;
+  const { name, outline, terminals } = parsed.data;
   const check = checkOutline({ outline, terminals }, { leastTerminals: 0 });
   if (!check.ok) throw new InputError(check.errors);
   const submitted = [outline.outer, ...outline.holes];
   const [outer, ...holes] = submitted.map((ring, r) => cleanRing(ring, check.outline, r));
   return {
+    name,
     outline: { ...outline, outer, holes },
     terminals: terminals.map((terminal) => onCleanedEdges(terminal, submitted, check.outline)),
     repairs: check.outline.repairs,

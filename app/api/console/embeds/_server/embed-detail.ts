@@ -1,22 +1,26 @@
 import "server-only";
 import { embedById, embedHistory, type EmbedRow } from "@/db/queries/embeds";
-import { definitionProblems } from "@/lib/embeds/check-definition";
-import type { EmbedDefinition } from "@/lib/embeds/definition";
 import { embedView, type EmbedView, versionView, type VersionView } from "@/lib/embeds/embed-view";
-import { type InputFacts, inputsOf } from "@/lib/embeds/inputs";
+import { type InputFacts, inputsOf, outlineInputs } from "@/lib/embeds/inputs";
+import { teamProblems } from "@/lib/embeds/manage-embeds";
 import { embedQuota, type EmbedQuota, type HostUsage, usageByHost } from "@/lib/embeds/usage";
 import { findShape, libraryMaterials, type Problem } from "@/lib/engine";
-import { materialOf, usableMaterial } from "@/lib/materials/team-materials";
+import { teamOutline } from "@/lib/fields/team-outlines";
+import { materialOf } from "@/lib/materials/team-materials";
 import { Refusal } from "@/lib/service/refusal";
 import type { Service } from "@/lib/service/service";
+import { type OutlineChoice, outlineChoice } from "./outline-choice";
 import { listMaterials } from "@/db/queries/materials";
 
 /** Everything that the page of one widget shows. */
 export interface EmbedDetail {
   readonly embed: EmbedView;
   readonly versions: readonly VersionView[];
-  readonly shapeTitle: string;
-  /** Every input that the shape has, used or not. */
+  /** What it computes, in words. */
+  readonly subject: string;
+  /** The stored outline that it is on; null for a shape. */
+  readonly outline: OutlineChoice | null;
+  /** Every input that there is, used or not. */
   readonly inputs: readonly InputFacts[];
   readonly materials: readonly { readonly id: string; readonly name: string }[];
   readonly hasCautions: boolean;
@@ -40,20 +44,27 @@ export async function embedDetail(
 ): Promise<EmbedDetail> {
   const versions = embedHistory(service.db, row.id).map((version) => versionView(version, row));
   const { definition } = versions[0];
-  const shape = findShape(definition.shape);
+  const shape = findShape(definition.shape ?? "");
+  const stored =
+    definition.outlineId === undefined
+      ? undefined
+      : teamOutline(service.db, row.teamId, definition.outlineId);
+  const inputs = shape ? inputsOf(shape) : outlineInputs(stored?.outline.symmetry === "axisymmetric");
   return {
     embed: embedView(row),
     versions,
-    shapeTitle: shape?.title ?? definition.shape,
-    inputs: shape ? [...inputsOf(shape).values()] : [],
+    subject: shape?.title ?? (stored?.name ? `Outline “${stored.name}”` : "Outline"),
+    outline: stored && definition.outlineId ? outlineChoice(definition.outlineId, stored) : null,
+    inputs: [...inputs.values()],
     materials: [...ownMaterials(service, row.teamId), ...libraryMaterials].map(({ id, name }) => ({
       id,
       name,
     })),
-    hasCautions: (shape?.cautions.length ?? 0) > 0,
+    // A field solution always has one.
+    hasCautions: shape === undefined || shape.cautions.length > 0,
     month: await embedQuota(service, row, now),
     hosts: usageByHost(service, row.id, now),
-    problems: problemsOf(service, row.teamId, definition),
+    problems: teamProblems(service.db, row.teamId, definition),
     mayManage,
   };
 }
@@ -63,13 +74,4 @@ function ownMaterials({ db }: Service, teamId: string) {
   return listMaterials(db, teamId, 200)
     .filter(({ retiredAt }) => retiredAt === null)
     .map(materialOf);
-}
-
-/** What stands in the way of publishing. */
-export function problemsOf(
-  service: Service,
-  teamId: string,
-  definition: EmbedDefinition,
-): readonly Problem[] {
-  return definitionProblems(definition, (id) => usableMaterial(service.db, teamId, id));
 }

@@ -1,8 +1,8 @@
 import { z } from "zod";
 import { embedDefinition } from "@/lib/embeds/definition";
-import { discardEmbedDraft, saveEmbedDraft } from "@/lib/embeds/manage-embeds";
+import { discardEmbedDraft, saveEmbedDraft, teamProblems } from "@/lib/embeds/manage-embeds";
 import { consoleRoute } from "../../../_server/console-route";
-import { mustFindEmbed, problemsOf } from "../../_server/embed-detail";
+import { mustFindEmbed } from "../../_server/embed-detail";
 
 /** Saves the draft; answers with what still stands in the way of publishing it. */
 export const PUT = consoleRoute({
@@ -12,7 +12,7 @@ export const PUT = consoleRoute({
     const row = mustFindEmbed(service, params.id);
     requireTeam(row.teamId);
     const version = saveEmbedDraft(db, { actor, now }, row.id, body);
-    return { version, problems: problemsOf(service, row.teamId, version.definition) };
+    return { version, problems: teamProblems(db, row.teamId, version.definition) };
   },
 });
 
