@@ -77,6 +77,7 @@ export function pageOfRecords(
     .limit(limit)
     .offset(offset)
     .all();
+  if (page.length === 0) return { rows: [], total: 0 };
   const rows = db
     .select({
       id: records.id,
@@ -102,7 +103,7 @@ export function pageOfRecords(
   const byId = new Map(rows.map((row) => [row.id, row]));
   return {
     rows: page.map(({ id }) => byId.get(id)).filter((row) => row !== undefined),
-    total: page[0]?.total ?? 0,
+    total: page[0].total,
   };
 }
 
