@@ -2,6 +2,7 @@
 
 import { type ReactNode, useMemo, useState } from "react";
 import { ArrowDown, ArrowUp, ChevronsUpDown } from "lucide-react";
+import { ScrollFrame } from "./scroll-frame";
 
 export interface Column<Row> {
   readonly key: string;
@@ -37,13 +38,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
   const [sorting, setSorting] = useState<Sorting | null>(null);
   const sorted = useMemo(() => sortRows(rows, columns, sorting), [rows, columns, sorting]);
   return (
-    <div
-      tabIndex={0}
-      role="group"
-      aria-label={caption}
-      style={{ maxHeight }}
-      className="relative overflow-auto rounded border border-rule bg-sheet"
-    >
+    <ScrollFrame label={caption} style={{ maxHeight }}>
       <table className="w-full border-collapse text-table">
         <caption className={captionShown ? "px-1.5 py-1 text-start text-small text-ink-soft" : "sr-only"}>
           {caption}
@@ -78,7 +73,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
           ) : null}
         </tbody>
       </table>
-    </div>
+    </ScrollFrame>
   );
 }
 

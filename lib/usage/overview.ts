@@ -124,7 +124,7 @@ function quotaAttention({ id, name, teamName, monthUsed, monthQuota }: ListedKey
   const text =
     monthUsed >= monthQuota
       ? `Key ${name} (${teamName}) has used up its month: further computations are refused.`
-      : `Key ${name} (${teamName}) has used ${share} % of its month.`;
+      : `Key ${name} (${teamName}) has used ${share}\u00a0% of its month.`;
   return { kind: "quota", text, href: `/console/keys/${id}` };
 }
 

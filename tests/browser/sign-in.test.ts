@@ -122,10 +122,11 @@ describe("an administrator", () => {
       `${base()}/console/activity?subject=${personByEmail(server.service.db, invited)?.id ?? ""}`,
     );
     await page.getByRole("button", { name: "accepted the invitation" }).waitFor();
-    await page.getByRole("button", { name: "invited Jori Banfield" }).click();
+    await page.getByRole("link", { name: "Jori Banfield" }).first().waitFor();
+    await page.getByRole("button", { name: "invited", exact: true }).click();
     await page
       .getByRole("dialog")
-      .getByRole("row", { name: `email ${invited}` })
+      .getByRole("row", { name: `E-mail address ${invited}` })
       .waitFor();
 
     await page.goto(`${base()}/console/people?q=${encodeURIComponent(invited)}`);

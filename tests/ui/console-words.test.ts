@@ -1,10 +1,17 @@
 import { describe, expect, test } from "vitest";
 import { changesLine, toldChanges } from "@/app/console/activity/_parts/told-changes";
+import { msText, shareText } from "@/app/console/_parts/numbers";
 import { factsOf, resistivityText } from "@/app/console/materials/_parts/material-facts";
 import { libraryMaterials, resistivityAt } from "@/lib/engine";
 
-/** Thin spaces are plain ones here. */
-const plain = (text: string) => text.replaceAll("\u2009", " ");
+/** Narrow spaces are plain ones here. */
+const plain = (text: string) => text.replace(/[\u2009\u202f\u00a0]/g, " ");
+
+test("shares and latencies stay on one line", () => {
+  const texts = [shareText(99, 100), shareText(1, 1000), msText(3.02), msText(1500)];
+  expect(texts.map(plain)).toEqual(["99 %", "< 1 %", "3.02 ms", "1.50 s"]);
+  expect(texts.join("")).not.toContain(" ");
+});
 
 describe("the library's materials in the console", () => {
   test.each([

@@ -11,6 +11,12 @@ export interface PlotAxis {
   readonly unit: string;
 }
 
+/** Values along the coordinate. Where each has a name of its own, such as a date, names stand for numbers and unit. */
+export interface PlotPlaces extends PlotAxis {
+  readonly values: readonly number[];
+  readonly names?: readonly { readonly tick: string; readonly full: string }[];
+}
+
 export interface PlotSeries {
   readonly label: string;
   readonly values: readonly number[];
@@ -18,7 +24,7 @@ export interface PlotSeries {
 
 interface LinePlotProps {
   readonly title: string;
-  readonly x: PlotAxis & { readonly values: readonly number[] };
+  readonly x: PlotPlaces;
   readonly y: PlotAxis;
   readonly series: readonly PlotSeries[];
   readonly logX: boolean;
@@ -78,7 +84,9 @@ export function LinePlot(props: LinePlotProps) {
       horizontal,
       vertical,
       paths,
-      xTicks: ticksOf(horizontal, logX, Math.max(3, Math.floor(width / 90))),
+      xTicks: x.names
+        ? namedTicks(xs, x.names, Math.max(2, Math.floor(width / 90)))
+        : ticksOf(horizontal, logX, Math.max(3, Math.floor(width / 90))),
       yTicks: ticksOf(vertical, logY, 5),
     };
   }, [x, y, series, logX, logY, width]);
@@ -161,7 +169,7 @@ export function LinePlot(props: LinePlotProps) {
           {plot.xTicks.map(({ value, label }) => (
             <g key={value} transform={`translate(${horizontal(value)} ${HEIGHT - MARGIN.bottom})`}>
               <path d="M0 0V5" className="stroke-edge" />
-              <text y="18" textAnchor="middle" stroke="none">
+              <text y="18" textAnchor={x.names && value === xs[last] ? "end" : "middle"} stroke="none">
                 {label}
               </text>
             </g>
@@ -173,7 +181,7 @@ export function LinePlot(props: LinePlotProps) {
           className="stroke-edge"
         />
         <text x={width - MARGIN.right} y={HEIGHT - 6} textAnchor="end" className="fill-ink">
-          {x.label} / {xUnit.label}
+          {x.names ? x.label : `${x.label} / ${xUnit.label}`}
         </text>
         <text transform={`translate(12 ${MARGIN.top}) rotate(-90)`} textAnchor="end" className="fill-ink">
           {y.label} / {yUnit.label}
@@ -230,6 +238,16 @@ interface Tick {
   readonly label: string;
 }
 
+/** The names of some places, evenly spread. */
+function namedTicks(
+  xs: readonly number[],
+  names: NonNullable<PlotPlaces["names"]>,
+  count: number,
+): readonly Tick[] {
+  const every = Math.max(1, Math.ceil(xs.length / count));
+  return xs.flatMap((value, index) => (index % every === 0 ? [{ value, label: names[index].tick }] : []));
+}
+
 function ticksOf(
   scale: ReturnType<typeof scaleLinear<number, number>> | ReturnType<typeof scaleLog<number, number>>,
   log: boolean,
@@ -266,7 +284,8 @@ function readingText(
     const text = Number.isFinite(value) ? `${readOff(value)} ${yUnit.label}` : "none here";
     return series.length > 1 ? `${label} ${text}` : text;
   });
-  return `${x.label} ${readOff(position)} ${xUnit.label}: ${y.label.toLowerCase()} ${values.join("; ")}`;
+  const place = x.names ? x.names[index].full : `${x.label} ${readOff(position)} ${xUnit.label}`;
+  return `${place}: ${y.label.toLowerCase()} ${values.join("; ")}`;
 }
 
 /** Width of the frame in pixels; text in the plot then has its true size everywhere. */

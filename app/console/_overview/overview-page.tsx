@@ -46,6 +46,8 @@ export function OverviewPage() {
 
 function Sections({ overview }: { readonly overview: Overview }) {
   const { today, month, hours, days, quotas, errors, slowest, attention } = overview;
+  // The last of the days is today; months are those of UTC, as quotas count them.
+  const beginsToday = days.at(-1)?.at.slice(8, 10) === "01";
   const idle = month.requests === 0 && days.every(({ requests }) => requests === 0);
   return (
     <div className="grid gap-4">
@@ -53,7 +55,7 @@ function Sections({ overview }: { readonly overview: Overview }) {
         <h2 className="mb-1">Needs attention</h2>
         {attention.length === 0 ? (
           <p className="text-table text-ink-soft">
-            Nothing: no quota above 80 %, no key about to end, no failed call.
+            Nothing: no quota above 80&nbsp;%, no key about to expire, no failed call.
           </p>
         ) : (
           <ul className="grid gap-1">
@@ -91,16 +93,21 @@ function Sections({ overview }: { readonly overview: Overview }) {
           </section>
           <section>
             <h2 className="mb-1">This month</h2>
-            <Figures total={month} />
-            <div className="mt-2">
-              <Requests title="Requests of the last 30 days" periods={days} by="day" />
-            </div>
+            {beginsToday ? (
+              <p className="text-table text-ink-soft">It began today: its figures are those of today.</p>
+            ) : (
+              <Figures total={month} />
+            )}
+          </section>
+          <section>
+            <h2 className="mb-1">Last 30 days</h2>
+            <Requests title="Requests, day by day" periods={days} by="day" />
           </section>
         </>
       )}
       {quotas.length > 0 ? (
         <section>
-          <h2 className="mb-1">Quotas above 80 %</h2>
+          <h2 className="mb-1">Quotas above 80&nbsp;%</h2>
           <ul className="grid gap-x-3 gap-y-1 medium:grid-cols-2">
             {quotas.map(({ keyId, name, team, used, quota }) => (
               <li key={keyId} className="text-table">
@@ -198,16 +205,18 @@ function Calls({ caption, rows, empty, slow = false }: CallsProps) {
         {
           key: "operation",
           title: "Call",
+          minWidth: "10rem",
           cell: ({ operation, shape }) => (
             <>
               {operationText(operation)}
-              {shape ? <span className="text-ink-soft"> · {shape}</span> : null}
+              {shape ? <span className="text-ink-soft">&nbsp;· {shape}</span> : null}
             </>
           ),
         },
         {
           key: "caller",
           title: "Caller",
+          minWidth: "10rem",
           cell: ({ caller }) => (
             <Link className="link" href={`/console/usage?caller=${encodeURIComponent(caller.id)}`}>
               {caller.name}

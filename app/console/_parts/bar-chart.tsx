@@ -31,9 +31,14 @@ const FILLS: Readonly<Record<BarPart["tone"], string>> = {
   copper: "fill-copper",
 };
 
-/** When a period began, in UTC as the sums are kept: `12-01` or `12-01 14h`. */
+/** When a period began, in UTC as the sums are kept: `2025-12-01` or `12-01 14:00`. */
 export function periodText(at: string, by: "day" | "hour"): string {
   return by === "day" ? at.slice(0, 10) : `${at.slice(5, 10)} ${at.slice(11, 13)}:00`;
+}
+
+/** The same on an axis: a day as `12-01`, an hour within it as `14h`. */
+export function periodTick(at: string, by: "day" | "hour"): string {
+  return by === "day" || at.slice(11, 13) === "00" ? at.slice(5, 10) : `${at.slice(11, 13)}h`;
 }
 
 /** Counts over time as stacked bars, with the numbers behind them. */
@@ -125,11 +130,7 @@ export function BarChart({ title, at, by, parts, beside }: BarChartProps) {
                     textAnchor={index === 0 ? "start" : "middle"}
                     className="fill-ink-soft"
                   >
-                    {by === "day"
-                      ? moment.slice(5, 10)
-                      : moment.slice(11, 13) === "00"
-                        ? moment.slice(5, 10)
-                        : `${moment.slice(11, 13)}h`}
+                    {periodTick(moment, by)}
                   </text>
                 ) : null}
               </g>

@@ -16,7 +16,7 @@ export function Figures({ total }: { readonly total: Total }) {
       <Figure
         title="Latency, median"
         value={msText(p50Ms)}
-        more={`95 % under ${msText(p95Ms)}, 99 % under ${msText(p99Ms)}`}
+        more={`95\u00a0% under ${msText(p95Ms)}, 99\u00a0% under ${msText(p99Ms)}`}
       />
     </dl>
   );

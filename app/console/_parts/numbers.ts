@@ -1,3 +1,6 @@
+/** Keeps a number and its unit on one line. */
+const NO_BREAK = "\u00a0";
+
 /** A count as people read it: 12,345. */
 export function countText(value: number): string {
   return value.toLocaleString("en");
@@ -6,14 +9,17 @@ export function countText(value: number): string {
 /** A latency in ms with three digits; a dash where there was no call. */
 export function msText(value: number | null): string {
   if (value === null) return "–";
-  return value >= 1000 ? `${(value / 1000).toPrecision(3)} s` : `${Number(value.toPrecision(3))} ms`;
+  return value >= 1000
+    ? `${(value / 1000).toPrecision(3)}${NO_BREAK}s`
+    : `${Number(value.toPrecision(3))}${NO_BREAK}ms`;
 }
 
 /** A share of a whole in whole per cent; 100 % means all of it. */
 export function shareText(part: number, whole: number): string {
   if (whole === 0) return "–";
   const percent = (100 * part) / whole;
-  return percent > 0 && percent < 1 ? "< 1 %" : `${Math.min(Math.round(percent), part < whole ? 99 : 100)} %`;
+  const shown = percent > 0 && percent < 1 ? "< 1" : Math.min(Math.round(percent), part < whole ? 99 : 100);
+  return `${shown} %`.replaceAll(" ", NO_BREAK);
 }
 
 const CLIENTS: Readonly<Record<string, string>> = {

@@ -11,6 +11,7 @@ import {
   useTable,
 } from "@tanstack/react-table";
 import { ArrowDown, ArrowUp, ChevronsUpDown } from "lucide-react";
+import { ScrollFrame } from "../../_ui/scroll-frame";
 import { Loading } from "../../_ui/states";
 import { ProblemNotice } from "../../_ui/problem-notice";
 import { Button } from "../../_ui/button";
@@ -95,13 +96,7 @@ export function ConsoleTable<Row extends object>(props: ConsoleTableProps<Row>) 
   return (
     <div>
       {error ? <Failed error={error} onRetry={onRetry} /> : null}
-      <div
-        tabIndex={0}
-        role="group"
-        aria-label={caption}
-        aria-busy={busy}
-        className={`relative overflow-x-auto rounded border border-rule bg-sheet ${busy ? "opacity-70" : ""}`}
-      >
+      <ScrollFrame label={caption} busy={busy} className={busy ? "opacity-70" : ""}>
         <table className="w-full border-collapse text-table">
           <caption className="sr-only">{caption}</caption>
           <thead>
@@ -158,7 +153,7 @@ export function ConsoleTable<Row extends object>(props: ConsoleTableProps<Row>) 
             ) : null}
           </tbody>
         </table>
-      </div>
+      </ScrollFrame>
       {paged ? <Pager state={state} data={data} /> : null}
     </div>
   );

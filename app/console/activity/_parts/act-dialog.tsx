@@ -4,6 +4,7 @@ import Link from "next/link";
 import { Button } from "../../../_ui/button";
 import { Dialog } from "../../../_ui/dialog";
 import { LocalTime } from "../../../_ui/local-time";
+import { ScrollFrame } from "../../../_ui/scroll-frame";
 import { actionWords, type ActShown, subjectName, subjectPage } from "./activity-words";
 import { toldChanges } from "./told-changes";
 
@@ -61,7 +62,7 @@ export function ActDialog({ act, onClose }: { readonly act: ActShown; readonly o
         ) : null}
       </dl>
       {changed.length > 0 ? (
-        <div tabIndex={0} role="group" aria-label="What changed" className="mt-2 overflow-x-auto">
+        <ScrollFrame label="What changed" className="mt-2">
           <table className="w-full border-collapse text-table">
             <caption className="sr-only">What changed</caption>
             <thead>
@@ -95,7 +96,7 @@ export function ActDialog({ act, onClose }: { readonly act: ActShown; readonly o
               ))}
             </tbody>
           </table>
-        </div>
+        </ScrollFrame>
       ) : null}
       {before === null && after === null ? null : (
         <details className="mt-2 text-table">

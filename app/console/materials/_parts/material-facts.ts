@@ -2,22 +2,25 @@ import { formatQuantity, type TextUnit } from "@/lib/engine/quantity/format-quan
 import type { Law, MaterialVersion } from "./material";
 
 const DIGITS = 8;
-const THIN_SPACE = "\u2009";
+/** Keeps a number and its unit on one line, where the engine's thin space would not. */
+const NO_BREAK = "\u202f";
 
 /** A resistivity in Ω·m as lists show it: 17.24 nΩ·m, 10 PΩ·m. */
 export function resistivityText(ohmM: number): string {
   return formatQuantity(ohmM, "ohm m", { digits: 4 });
 }
 
+const unbroken = (text: string) => text.replaceAll("\u2009", NO_BREAK);
+
 type Fact = readonly [title: string, text: string];
 
 const number = (value: unknown, digits = DIGITS) =>
   typeof value === "number" ? formatQuantity(value, "1", { digits }) : String(value);
 
-const withUnit = (unit: string) => (value: unknown) => `${number(value)}${THIN_SPACE}${unit}`;
+const withUnit = (unit: string) => (value: unknown) => `${number(value)}${NO_BREAK}${unit}`;
 
 const quantity = (unit: TextUnit) => (value: unknown) =>
-  typeof value === "number" ? formatQuantity(value, unit, { digits: DIGITS }) : String(value);
+  typeof value === "number" ? unbroken(formatQuantity(value, unit, { digits: DIGITS })) : String(value);
 
 const degrees = withUnit("°C");
 
@@ -48,7 +51,7 @@ function lawFacts(law: Law): Fact[] {
       if (name === "coefficients" && Array.isArray(member)) {
         const symbol = law.quantity === "conductivity" ? "S/m" : "Ω·m";
         const of = (each: unknown, power: number) =>
-          `${number(each)}${THIN_SPACE}${symbol}${["", "/K", "/K²", "/K³"][power] ?? `/K^${power}`}`;
+          `${number(each)}${NO_BREAK}${symbol}${["", "/K", "/K²", "/K³"][power] ?? `/K^${power}`}`;
         return [[`${titled}, powers of the temperature`, listText(member, of)]];
       }
       const known = MEMBERS[name];

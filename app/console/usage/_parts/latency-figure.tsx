@@ -4,7 +4,7 @@ import { useState } from "react";
 import { Button } from "../../../_ui/button";
 import { DataTable } from "../../../_ui/data-table";
 import { LinePlot } from "../../../_ui/plot/line-plot";
-import { periodText } from "../../_parts/bar-chart";
+import { periodText, periodTick } from "../../_parts/bar-chart";
 import { msText } from "../../_parts/numbers";
 import type { Period } from "./usage-answers";
 
@@ -20,15 +20,15 @@ export function LatencyFigure({ periods, by }: LatencyFigureProps) {
   const [cursor, setCursor] = useState<number | null>(null);
   const [table, setTable] = useState(false);
   const kept = periods.some(({ p50Ms }) => p50Ms !== null);
+  const longest = Math.max(...periods.map(({ p99Ms, meanMs }) => p99Ms ?? meanMs ?? 0));
+  const [unit, perUnit] = longest >= 1000 ? ["s", 1000] : ["ms", 1];
   const series = kept
     ? (["p50Ms", "p95Ms", "p99Ms"] as const).map((name) => ({
         label: NAMES[name],
-        values: periods.map((each) => (each[name] ?? NaN) / 1000),
+        values: periods.map((each) => (each[name] ?? NaN) / perUnit),
       }))
-    : [{ label: "mean", values: periods.map(({ meanMs }) => (meanMs ?? NaN) / 1000) }];
+    : [{ label: "mean", values: periods.map(({ meanMs }) => (meanMs ?? NaN) / perUnit) }];
   const points = series[0].values.filter(Number.isFinite).length;
-  const first = Date.parse(periods[0]?.at ?? "");
-  const stepMs = by === "day" ? 86_400_000 : 3_600_000;
   const title = kept ? "Latency" : "Latency, mean";
   return (
     <figure>
@@ -42,11 +42,12 @@ export function LatencyFigure({ periods, by }: LatencyFigureProps) {
         <LinePlot
           title={title}
           x={{
-            label: "Since the first",
-            unit: by === "day" ? "d" : "h",
-            values: periods.map(({ at }) => (Date.parse(at) - first) / stepMs),
+            label: by === "day" ? "Day (UTC)" : "Hour (UTC)",
+            unit: "",
+            values: periods.map((_, index) => index),
+            names: periods.map(({ at }) => ({ tick: periodTick(at, by), full: periodText(at, by) })),
           }}
-          y={{ label: "Latency", unit: "s" }}
+          y={{ label: "Latency", unit }}
           series={series}
           logX={false}
           logY={false}
