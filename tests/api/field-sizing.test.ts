@@ -121,6 +121,38 @@ describe("POST /sizing on an outline", () => {
     expect(Math.abs(cylinder.body.solutions[0].dimension.value / 3 - 1)).toBeLessThan(1e-4);
   });
 
+  test("422 with the minimum between the ends of a bend, which stretched in x is longer and wider", async () => {
+    // Arms 3 squares long either way: R = R□·(3x + 3/x + corner), least near x = 1.
+    const bend = [
+      [0, 0],
+      [40, 0],
+      [40, 10],
+      [10, 10],
+      [10, 40],
+      [0, 40],
+    ];
+    const ends = [
+      [bend[1], bend[2]],
+      [bend[4], bend[5]],
+    ];
+    const response = await size({
+      outline: { unit: "mm", outer: bend },
+      terminals: ends.map((segment, k) => ({ name: ["in", "out"][k], segments: [segment] })),
+      target: 200,
+      within: [0.25, 4],
+    });
+    expectProblem(response, 422, "invalid-input");
+    const detail = response.body.errors[0].detail.replaceAll("\u2009", " ");
+    const found =
+      /at scaleX = 0\.25 and .* at scaleX = 4, and between them a minimum of about ([\d.]+) Ω at scaleX = ([\d.]+)\.$/.exec(
+        detail,
+      );
+    expect(found).not.toBeNull();
+    // The corner of equal arms has 1 - (2/π)·ln 2 = 0.5587 squares.
+    expect(Math.abs(Number(found?.[1]) / (50 * 6.5587) - 1)).toBeLessThan(0.01);
+    expect(Math.abs(Number(found?.[2]) - 1)).toBeLessThan(0.1);
+  });
+
   test.each<[string, object, string, RegExp]>([
     ["a plan sheet under an even scale", { solveFor: "scale" }, "#/solveFor", /scaleX or scaleY/],
     ["an unknown scale", { solveFor: "width" }, "#/solveFor", /scaleX/],

@@ -129,9 +129,10 @@ export function memberText(
   dimension: FormDimension,
   value: number | undefined,
   before: string | undefined,
+  digits?: number,
 ): string {
   if (value === undefined) return "";
   const units = unitsOf(kindOf(dimension), dimension.foil);
   const unit = splitQuantity(before ?? "", units).unit ?? findUnit(FIRST_UNIT[kindOf(dimension)], units);
-  return unit ? `${textInUnit(value, unit)} ${unit.id}` : String(value);
+  return unit ? `${textInUnit(value, unit, digits)} ${unit.id}` : String(value);
 }

@@ -15,6 +15,8 @@ import { useForm } from "./form-context";
 import { SaveRecord, type Saving } from "./save-record";
 
 const PAUSE_MS = 300;
+const FEW_DIGITS = 12;
+const ALL_DIGITS = 17;
 
 interface SolveForProps {
   readonly saving: Saving | undefined;
@@ -46,7 +48,7 @@ export function SolveFor({ saving, back }: SolveForProps) {
   const own = ["solveFor", "target", "from", "to"];
   const others = [...atField].filter(([name]) => !own.includes(name)).map(([, detail]) => detail);
 
-  const use = (value: number): void => {
+  const use = ({ value, text }: SizingResult["within"][number]): void => {
     if (!chosen) return;
     const group = dimensionGroups(entry).find((names) => names.includes(chosen.name)) ?? [chosen.name];
     const cleared = Object.fromEntries(
@@ -56,7 +58,13 @@ export function SolveFor({ saving, back }: SolveForProps) {
     );
     change({
       ...cleared,
-      [chosen.name]: memberText(chosen, value, group.map((name) => parameters[name]).find(Boolean)),
+      [chosen.name]: memberText(
+        chosen,
+        value,
+        group.map((name) => parameters[name]).find(Boolean),
+        // A text of that many digits would be rounded away: a thin wall by two radii.
+        text.replace(/\D/g, "").length >= FEW_DIGITS ? ALL_DIGITS : FEW_DIGITS,
+      ),
     });
   };
 
@@ -112,7 +120,7 @@ export function SolveFor({ saving, back }: SolveForProps) {
       <div aria-live="polite" aria-busy={isValidating} className="min-h-5">
         {body && !error && data && chosen ? (
           <>
-            <Solutions result={data} label={chosen.label} onUse={use} />
+            <Solutions result={data} label={chosen.label} whole={chosen.type === "integer"} onUse={use} />
             {saving ? (
               <div className="mt-1">
                 <SaveRecord
@@ -147,23 +155,25 @@ export function SolveFor({ saving, back }: SolveForProps) {
 interface SolutionsProps {
   readonly result: SizingResult;
   readonly label: string;
-  readonly onUse: (value: number) => void;
+  /** Whether what is looked for is a whole number. */
+  readonly whole: boolean;
+  readonly onUse: (found: SizingResult["within"][number]) => void;
 }
 
-function Solutions({ result, label, onUse }: SolutionsProps) {
+function Solutions({ result, label, whole, onUse }: SolutionsProps) {
   const { solutions } = result;
-  const exact = solutions.every((solution) => solution.exact);
+  const between = whole && !solutions.every((solution) => solution.exact);
   return (
     <>
       <p className="mb-0.5 text-table">
-        {!exact
+        {between
           ? "No whole number gives it exactly; these are the nearest on either side."
           : solutions.length === 1
             ? "One solution in the range."
             : `${solutions.length} solutions in the range.`}
       </p>
       <ul className="grid gap-1" data-testid="solutions">
-        {solutions.map(({ dimension, resistance }) => (
+        {solutions.map(({ dimension, resistance, exact, cautions }) => (
           <li key={dimension.value} className="flex flex-wrap items-center gap-x-2 gap-y-0.5">
             <span className="font-mono text-lead font-medium">{dimension.text}</span>
             <span className="text-table text-ink-soft">
@@ -171,10 +181,11 @@ function Solutions({ result, label, onUse }: SolutionsProps) {
             </span>
             <Button
               aria-label={`Use ${label.toLowerCase()} ${dimension.text}`}
-              onClick={() => onUse(dimension.value)}
+              onClick={() => onUse(dimension)}
             >
               Use it
             </Button>
+            {!exact && !whole ? <p className="w-full max-w-prose text-table">{cautions.at(-1)}</p> : null}
           </li>
         ))}
       </ul>

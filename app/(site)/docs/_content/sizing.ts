@@ -43,7 +43,8 @@ export const sizing: DocPage = {
       title: "What comes back",
       blocks: [
         "Every value of the dimension in the range that gives the target, smallest first: some shapes have more than one. Each has its `resistance` with bounds and a `sensitivity`, how much the resistance changes with the dimension. `include`, `requirement` and `uncertainty` work as in a resistance.",
-        "A dimension that is a whole number rarely gives the target exactly; then the two numbers on either side are answered.",
+        "A dimension that is a whole number rarely gives the target exactly; then the two numbers on either side are answered, with `exact` false.",
+        "`resistance` is computed from `dimension.value` as it stands, and `exact` says whether the target lies within its bounds. A wall much thinner than its radius cannot be told by two radii: then `exact` is false, and a caution says how far off the nearest double is and which input resolves it, such as `wall`. `dimension.text` has as many digits as a request needs.",
         "A sizing can be stored as a [record](/docs/records) as well.",
         "A target out of reach is a 422 that states the resistances at both ends of the range, so that you see on which side to look.",
       ],

@@ -14,10 +14,19 @@ export function sizingHeadline(label: string, { target, solutions }: SizingResul
     statements: [
       `There the resistance is ${first.resistance.text} ${bracketOf(first.resistance)}.`,
       ...(solutions.length > 1 ? [`${solutions.length} values in the range give it.`] : []),
-      ...(first.exact ? [] : ["No whole number gives the target; these lie on either side of it."]),
+      ...(first.exact ? [] : [missed(first)]),
     ],
     verdict: verdictOf(first.verdict),
   };
+}
+
+/** Two whole numbers, or a value that a double cannot hold finely enough, of which the last caution tells. */
+function missed({ dimension, cautions }: SizingResult["solutions"][number]): string {
+  const whole = dimension.unit === "1" && Number.isInteger(dimension.value);
+  return (
+    (whole ? undefined : cautions.at(-1)) ??
+    "No whole number gives the target; these lie on either side of it."
+  );
 }
 
 /** What was looked for, and where. */

@@ -26,6 +26,10 @@ interface Place {
   readonly value: number;
 }
 
+interface Solved extends Place {
+  readonly result: FieldResult | null;
+}
+
 /** @throws InputError where no scale in the range gives the target. */
 export async function findScale(sizing: FieldSizing, solve: SolveBody): Promise<SizingResult> {
   const { prepared, solveFor, target, from, to } = sizing;
@@ -60,18 +64,16 @@ export async function findScale(sizing: FieldSizing, solve: SolveBody): Promise<
     const scaled = await solveAt(scale, accuracy);
     if (!scaled) throw unsolvable();
     last = scaled;
-    solutions.push(solution(scale, { ...scaled, resistance: exactly(whole, scale).resistance }, -1));
+    const answered = { ...scaled, resistance: exactly(whole, scale).resistance };
+    solutions.push(solution(scale, target, answered, -1));
   } else {
-    const at = async (
-      x: number,
-      wanted: number,
-    ): Promise<Place & { readonly result: FieldResult | null }> => {
+    let [low, high] = [Infinity, -Infinity].map((value): Place => ({ x: 0, value }));
+    const at = async (x: number, wanted: number): Promise<Solved> => {
       const result = await solveAt(Math.exp(x), wanted);
-      return {
-        x,
-        value: result?.resistance ? Math.log(result.resistance.value / target) : Number.NaN,
-        result,
-      };
+      const value = result?.resistance ? Math.log(result.resistance.value / target) : Number.NaN;
+      if (value < low.value) low = { x, value };
+      if (value > high.value) high = { x, value };
+      return { x, value, result };
     };
     const [start, end] = [Math.log(from), Math.log(to)];
     const grid = Array.from({ length: PLACES }, (_, k) => start + ((end - start) * k) / (PLACES - 1));
@@ -83,9 +85,9 @@ export async function findScale(sizing: FieldSizing, solve: SolveBody): Promise<
       const found = await root(left, right, (x) => at(x, accuracy), accuracy);
       if (!found.result) continue;
       last = found.result;
-      solutions.push(solution(Math.exp(found.x), found.result, found.slope));
+      solutions.push(solution(Math.exp(found.x), target, found.result, found.slope));
     }
-    if (solutions.length === 0) throw refused(sizing, places[0], places[places.length - 1]);
+    if (solutions.length === 0) throw refused(sizing, places[0], places[places.length - 1], [low, high]);
   }
   if (!last) throw unsolvable();
   return {
@@ -134,8 +136,7 @@ async function brackets(
   return found.sort((one, other) => one[0].x - other[0].x);
 }
 
-interface Found extends Place {
-  readonly result: FieldResult | null;
+interface Found extends Solved {
   /** d ln R / d ln scale */
   readonly slope: number;
 }
@@ -144,7 +145,7 @@ interface Found extends Place {
 async function root(
   left: Place,
   right: Place,
-  at: (x: number) => Promise<Place & { readonly result: FieldResult | null }>,
+  at: (x: number) => Promise<Solved>,
   accuracy: number,
 ): Promise<Found> {
   let [a, b] = [left, right];
@@ -176,15 +177,17 @@ function exactly(whole: FieldResult, scale: number): FieldResult {
   return { ...whole, resistance: { ...resistance, ...widened, text: formatQuantity(value, "ohm", widened) } };
 }
 
-function solution(scale: number, result: FieldResult, slope: number): SizingSolution {
+function solution(scale: number, target: number, result: FieldResult, slope: number): SizingSolution {
   const { resistance, method, operating, verdict, checks, cautions } = result;
   if (!resistance) throw unsolvable();
   const { value, lower, upper } = resistance;
+  const exact = lower <= target && target <= upper;
+  const off = Number((100 * Math.abs(value / target - 1)).toPrecision(2));
   return {
     dimension: shown(scale),
     resistance,
     sensitivity: (slope * value) / scale,
-    exact: true,
+    exact,
     conductance: {
       value: 1 / value,
       unit: "siemens",
@@ -194,7 +197,12 @@ function solution(scale: number, result: FieldResult, slope: number): SizingSolu
     operating,
     verdict,
     checks,
-    cautions,
+    cautions: exact
+      ? cautions
+      : [
+          ...cautions,
+          `The search ended ${off} % from the target, which lies outside the bounds there: give a narrower range.`,
+        ],
   };
 }
 
@@ -202,11 +210,23 @@ function shown(scale: number): SizingResult["within"][number] {
   return { value: scale, unit: "1", text: formatQuantity(scale, "1", { digits: 6 }) };
 }
 
-function refused({ solveFor, target }: FieldSizing, from: Place, to: Place): InputError {
+function refused(
+  { solveFor, target }: FieldSizing,
+  from: Place,
+  to: Place,
+  extremes?: readonly [Place, Place],
+): InputError {
   const at = ({ x, value }: Place): string =>
     `${formatQuantity(target * Math.exp(value), "ohm", { digits: 4 })} at ${solveFor} = ${formatQuantity(Math.exp(x), "1", { digits: 4 })}`;
+  // The extreme towards the target, where it is not at an end; a step below the look's accuracy is none.
+  const below = from.value > 0;
+  const extreme = extremes?.[below ? 0 : 1];
+  const inner = extreme && [from, to].every(({ value }) => Math.abs(value - extreme.value) > LOOK);
+  const between = inner
+    ? `, and between them a ${below ? "minimum" : "maximum"} of about ${at(extreme)}`
+    : "";
   return new InputError([
-    { pointer: "#/target", detail: `is not reached: the resistance is ${at(from)} and ${at(to)}.` },
+    { pointer: "#/target", detail: `is not reached: the resistance is ${at(from)} and ${at(to)}${between}.` },
   ]);
 }
 

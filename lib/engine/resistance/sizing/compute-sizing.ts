@@ -4,7 +4,6 @@ import { Collected } from "../../medium/collected";
 import { derivative } from "../../numeric/derivative";
 import { brent, findRoots } from "../../numeric/find-roots";
 import { formatQuantity } from "../../quantity/format-quantity";
-import { radiansToDegrees } from "../../quantity/parse-quantity";
 import type { Dimensions, Resolved } from "../../shape/define-shape";
 import { VaryingDimensions } from "../../shape/vary-dimensions";
 import type { ComputeContext } from "../compute-context";
@@ -14,12 +13,13 @@ import { readMedia } from "../read-media";
 import { solve } from "../solve";
 import type { ResistanceResult } from "../result-schema";
 import { readSizing, type ReadSizing } from "./read-sizing";
-import { searchGrid, unitOf } from "./search-range";
+import { bare, searchGrid, TEXT_UNITS, unitOf } from "./search-range";
 import type { SizingResult, SizingSolution } from "./sizing-schema";
+import { endsByResolution, exactness, nearestDouble, roundTripText } from "./settle-solution";
 import { findWholeNumbers } from "./whole-numbers";
 
-/** A whole number meets the target where they differ by no more than rounding. */
-const MEETS = 1e-9;
+/** A whole number meets the target where they differ by no more than a closed form's rounding. */
+const MEETS = 1e-13;
 /** The value of a search and of the finished answer differ by no more than this, unless a field solution steps in. */
 const SAME = 1e-11;
 const BETWEEN_LOOKS = 32;
@@ -60,12 +60,16 @@ export function computeSizing(request: unknown, context: ComputeContext): Sizing
   const solutions: SizingSolution[] = [];
   let first: ResistanceResult | undefined;
   for (const { x, exact } of found) {
-    const place = exact && dimension.type !== "integer" ? sharpened(x, read, context) : x;
-    const value = bare(place, read);
+    const whole = dimension.type === "integer";
+    const place = whole ? x : nearestDouble(f, sharpened(x, read, context), read);
+    const value = bare(place, dimension);
     const dimensions = { ...(read.body.dimensions as Record<string, unknown>), [read.solveFor]: value };
     const result = computeResistance({ ...read.body, dimensions }, context);
     first ??= result;
-    solutions.push(solution(result, place, value, exact, read, evaluator));
+    const settled = whole
+      ? { exact, cautions: [] }
+      : exactness(result.resistance, result.method === "field", f, place, read);
+    solutions.push(solution(result, place, value, settled, read, evaluator));
   }
   if (!first) throw new Error("a search without solutions was not refused");
   return {
@@ -98,7 +102,7 @@ function realNumbers(
       },
     ]);
   }
-  if (roots.length === 0) throw refuseTarget(read, ends, [low, high]);
+  if (roots.length === 0) throw refuseTarget(read, f, evaluator, ends, [low, high]);
   return roots.slice(0, MOST_SOLUTIONS).map((x) => ({ x, exact: true }));
 }
 
@@ -108,14 +112,14 @@ function wholeNumbers(
   evaluator: Evaluator,
 ): { x: number; exact: boolean }[] {
   const { from, to } = read.range;
-  const { found, ends } = findWholeNumbers(
+  const { found, ends, low, high } = findWholeNumbers(
     f,
     Math.ceil(from),
     Math.floor(to),
     (_, value) => Math.abs(value) <= MEETS,
   );
   if (!ends) throw refuseRange(read, evaluator, Math.ceil(from));
-  if (found.length === 0) throw refuseTarget(read, ends, []);
+  if (found.length === 0) throw refuseTarget(read, f, evaluator, ends, [low, high]);
   return found.slice(0, MOST_SOLUTIONS).map(({ n, exact }) => ({ x: n, exact }));
 }
 
@@ -154,7 +158,7 @@ function solution(
   result: ResistanceResult,
   x: number,
   value: number,
-  exact: boolean,
+  settled: { readonly exact: boolean; readonly cautions: readonly string[] },
   read: ReadSizing,
   evaluator: Evaluator,
 ): SizingSolution {
@@ -172,10 +176,10 @@ function solution(
   const { resistance, conductance, method, operating, quadrature, uncertainty, verdict, cautions } = result;
   const { peak, steps, profile, checks } = result;
   return {
-    dimension: { ...shown(x, read), value },
+    dimension: { value, unit: unitOf(dimension), text: roundTripText(value, x, evaluator, read) },
     resistance,
     sensitivity: Number.isFinite(sensitivity) ? sensitivity : 0,
-    exact,
+    exact: settled.exact,
     conductance,
     method,
     operating,
@@ -186,19 +190,13 @@ function solution(
     steps,
     profile,
     checks,
-    cautions,
+    cautions: [...cautions, ...settled.cautions],
   };
 }
 
-function bare(x: number, { dimension }: ReadSizing): number {
-  return unitOf(dimension) === "deg" ? radiansToDegrees(x) : x;
-}
-
-const TEXT_UNITS = { m: "metre", "m^2": "m^2", deg: "degree", "1": "1" } as const;
-
 function shown(x: number, read: ReadSizing): SizingResult["within"][number] {
   const unit = unitOf(read.dimension);
-  const value = bare(x, read);
+  const value = bare(x, read.dimension);
   return { value, unit, text: formatQuantity(value, TEXT_UNITS[unit], { digits: 6 }) };
 }
 
@@ -206,23 +204,28 @@ function ohms(place: Place, { target }: ReadSizing): string {
   return formatQuantity(target * Math.exp(place.value), "ohm");
 }
 
-function at(place: Place, read: ReadSizing): string {
-  return `${ohms(place, read)} at ${read.solveFor} = ${shown(place.x, read).text}`;
-}
-
-/** Nothing gives the target: the resistances at both ends, and beyond them where they are not the extremes. */
+/** Nothing gives the target: the resistances at both ends, and between them where they are not the extremes. */
 function refuseTarget(
   read: ReadSizing,
+  f: (x: number) => number,
+  evaluator: Evaluator,
   ends: readonly [Place, Place],
-  extremes: readonly Place[],
+  [low, high]: readonly [Place, Place],
 ): InputError {
-  const inner = extremes.filter((place) => ends.every((end) => Math.abs(end.value - place.value) > 1e-9));
-  const between =
-    inner.length === 0 ? "" : `, and between them ${inner.map((place) => at(place, read)).join(" and ")}`;
+  const at = (place: Place): string =>
+    `${ohms(place, read)} at ${read.solveFor} = ${roundTripText(bare(place.x, read.dimension), place.x, evaluator, read)}`;
+  const inner = (place: Place): boolean => ends.every((end) => Math.abs(end.value - place.value) > 1e-9);
+  // Only the extreme towards the target has been searched for closely.
+  const between = [
+    ...(!(high.value < 0) && inner(low) ? [`a minimum of ${at(low)}`] : []),
+    ...(!(low.value > 0) && inner(high) ? [`a maximum of ${at(high)}`] : []),
+  ];
+  const nearest = Math.abs(ends[0].value) < Math.abs(ends[1].value) ? ends[0] : ends[1];
+  const finer = read.dimension.type === "integer" ? "" : endsByResolution(f, nearest.x, read);
   return new InputError([
     {
       pointer: "#/target",
-      detail: `is not reached: the resistance is ${at(ends[0], read)} and ${at(ends[1], read)}${between}.`,
+      detail: `is not reached: the resistance is ${at(ends[0])} and ${at(ends[1])}${between.length === 0 ? "" : `, and between them ${between.join(" and ")}`}.${finer}`,
     },
   ]);
 }

@@ -1,6 +1,6 @@
 /** Where a dimension is looked for: its range, in SI, and the places to look at first. */
 import { pointerTo, type Problems } from "../../failure";
-import { readQuantity } from "../../quantity/parse-quantity";
+import { radiansToDegrees, readQuantity } from "../../quantity/parse-quantity";
 import type { QuantityKindName } from "../../quantity/quantity-kind";
 import type { Dimension, Shape } from "../../shape/define-shape";
 import {
@@ -28,6 +28,14 @@ const NEAR = [0, 1e-9, 1e-6, 1e-4, 1e-2];
 export function unitOf(dimension: FindableDimension): "m" | "m^2" | "deg" | "1" {
   if (dimension.type !== "quantity") return "1";
   return dimension.kind === "angle" ? "deg" : dimension.kind === "area" ? "m^2" : "m";
+}
+
+/** How `formatQuantity` is told each of these units. */
+export const TEXT_UNITS = { m: "metre", "m^2": "m^2", deg: "degree", "1": "1" } as const;
+
+/** The bare number that means this value (SI, radians) in a request. */
+export function bare(x: number, dimension: FindableDimension): number {
+  return unitOf(dimension) === "deg" ? radiansToDegrees(x) : x;
 }
 
 /** The range of the request, or the whole one; null after complaints. */

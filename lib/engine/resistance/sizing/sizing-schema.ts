@@ -42,7 +42,10 @@ const found = z
       description: "Value of the dimension in `unit`; as a bare number it goes back into `dimensions`.",
     }),
     unit: z.enum(["m", "m^2", "deg", "1"]),
-    text: z.string().meta({ description: "The value for people." }),
+    text: z.string().meta({
+      description:
+        "The value for people; of a solution with at least as many digits as give the same resistance to 1e-5 when the text is used in a request.",
+    }),
   })
   .meta({ description: "A value of the dimension." });
 
@@ -71,7 +74,7 @@ export const sizingSolutionSchema = z
     }),
     exact: z.boolean().meta({
       description:
-        "Whether the dimension gives the target: false for the whole numbers on either side of it where none does.",
+        "Whether the target lies within the bounds of `resistance`, which is computed from this very value. False for the whole numbers on either side of the target where none gives it, and where a double cannot hold the dimension finely enough: `cautions` then say how far off it is, and which other dimension resolves it.",
     }),
     conductance,
     method,

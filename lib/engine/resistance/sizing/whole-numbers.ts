@@ -3,12 +3,16 @@
 export interface WholeSearch {
   /** Numbers of a solution, and whether it meets zero there (else its neighbour is the other side). */
   readonly found: readonly { readonly n: number; readonly exact: boolean }[];
-  readonly ends:
-    | readonly [
-        { readonly x: number; readonly value: number },
-        { readonly x: number; readonly value: number },
-      ]
-    | null;
+  /** First and last number at which the function has a value; null where it has none at all. */
+  readonly ends: readonly [Place, Place] | null;
+  /** Smallest and largest value met, and where. */
+  readonly low: Place;
+  readonly high: Place;
+}
+
+interface Place {
+  readonly x: number;
+  readonly value: number;
 }
 
 const EVERY = 200;
@@ -25,7 +29,7 @@ export function findWholeNumbers(
   to: number,
   meets: (n: number, value: number) => boolean,
 ): WholeSearch {
-  const places: { x: number; value: number }[] = [];
+  const places: Place[] = [];
   for (let n = from; n <= to; n = n < from + EVERY ? n + 1 : Math.max(n + 1, Math.ceil(n * GROWTH))) {
     places.push({ x: n, value: f(n) });
   }
@@ -50,5 +54,7 @@ export function findWholeNumbers(
   return {
     found: [...found].map(([n, exact]) => ({ n, exact })).sort((a, b) => a.n - b.n),
     ends: defined.length === 0 ? null : [defined[0], defined[defined.length - 1]],
+    low: defined.reduce((least, place) => (place.value < least.value ? place : least), defined[0]),
+    high: defined.reduce((most, place) => (place.value > most.value ? place : most), defined[0]),
   };
 }

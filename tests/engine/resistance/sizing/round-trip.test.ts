@@ -55,7 +55,18 @@ describe("sizing gives back", () => {
         include: [],
       }).resistance;
       expect(back).toEqual(solution.resistance);
+      // The text goes back as well, and gives the same resistance to what it promises.
+      const typed = compute({
+        ...body,
+        dimensions: { ...others, [name]: solution.dimension.text },
+        include: [],
+      }).resistance;
+      expect(Math.abs(typed.value / back.value - 1)).toBeLessThan(
+        solution.method === "field" ? 2e-5 : 1.001e-5,
+      );
       if (!solution.exact) continue;
+      expect(solution.resistance.lower).toBeLessThanOrEqual(before.value);
+      expect(solution.resistance.upper).toBeGreaterThanOrEqual(before.value);
       // A field solution's mesh jumps a little with the dimensions; the target then lies between its bounds.
       if (solution.method === "field") {
         expect(solution.resistance.lower).toBeLessThanOrEqual(before.value * (1 + 1e-9));

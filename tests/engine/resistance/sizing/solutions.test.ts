@@ -81,19 +81,56 @@ describe("several solutions, one and none", () => {
     }
     expect(
       refused({ shape, dimensions, medium, solveFor, target: least * 0.9, within: ["1 mm", "20 m"] }),
-    ).toMatch(/at \w+ = 1 mm and .* at \w+ = 20 m, and between them /);
+    ).toMatch(/at \w+ = 1 mm and .* at \w+ = 20 m, and between them a minimum of /);
   });
 
-  it("follows a shape to the edge where it vanishes", () => {
-    // A wall of 1e-9 of the radius, found by the outer radius alone.
-    const { solutions } = size({
+  it("states a maximum between the ends where the target lies above it", () => {
+    const within = [0.1, 89.9];
+    const at = (angle: number): number =>
+      compute({
+        shape: neck.shape,
+        dimensions: { ...neck.dimensions, openingAngle: angle },
+        medium: neck.medium,
+        include: [],
+      }).resistance.value;
+    const values = Array.from({ length: 899 }, (_, k) => at((k + 1) / 10));
+    const most = Math.max(...values);
+    const inner = most > Math.max(at(0.1), at(89.9)) * (1 + 1e-6);
+    const told = refused({ ...neck, target: most * 2, within });
+    expect(/and between them a maximum of /.test(told)).toBe(inner);
+    expect(told).not.toMatch(/minimum/);
+  });
+
+  describe("a thin wall by two radii", () => {
+    const shell = (solveFor: string, target: number) => ({
       shape: "cylindrical-shell",
-      dimensions: { innerRadius: 1, length: 1 },
+      dimensions: { innerRadius: "10 mm", length: 1 },
       medium: { resistivity: 1 },
-      solveFor: "outerRadius",
-      target: 1e-9 / (2 * Math.PI),
+      include: [],
+      solveFor,
+      target,
     });
-    expect(Math.abs((solutions[0].dimension.value - 1) / 1e-9 - 1)).toBeLessThan(1e-6);
+
+    it.each([1e-4, 1e-6, 1e-9, 1e-12, 1e-15])("claims no more than outerRadius resolves: %d Ω", (target) => {
+      const [solution] = size(shell("outerRadius", target)).solutions;
+      const { resistance, exact, cautions, dimension } = solution;
+      expect(exact).toBe(resistance.lower <= target && target <= resistance.upper);
+      if (exact) return;
+      // The neighbours of that double are on the other side or further off.
+      const wall = target * 2 * Math.PI * 0.01;
+      expect(Math.abs(resistance.value / target - 1)).toBeLessThan((2 * 0.01 * Number.EPSILON) / wall);
+      expect(cautions.at(-1)).toMatch(/A double cannot hold outerRadius .* Solve for wall/);
+      expect(dimension.text.length).toBeGreaterThan(8);
+    });
+
+    it("names the input that goes further where the target is below the last double", () => {
+      expect(refused(shell("outerRadius", 1e-18))).toMatch(
+        /outerRadius = 10\.000000000000002 mm .* cannot hold outerRadius any closer to its limit: solve for wall\.$/,
+      );
+      const [solution] = size(shell("wall", 1e-10)).solutions;
+      expect(solution.exact).toBe(true);
+      expect(refused(shell("wall", 1e-18))).not.toMatch(/solve for/);
+    });
   });
 
   it("works on a graded medium and at a temperature", () => {
