@@ -280,6 +280,10 @@ class _Answer:
         self.body = body
 
     @property
+    def text(self) -> str:
+        return self.body.decode("utf-8", "replace")
+
+    @property
     def media_type(self) -> str:
         return (self.headers.get("Content-Type") or "").split(";")[0].strip().lower()
 
@@ -287,8 +291,7 @@ class _Answer:
         """JSON as Python values, anything else as text; None where it is empty."""
         if not self.body:
             return None
-        text = self.body.decode("utf-8", "replace")
-        return json.loads(text) if self.media_type.endswith("json") else text
+        return json.loads(self.text) if self.media_type.endswith("json") else self.text
 
 
 class _NoRedirects(urllib.request.HTTPRedirectHandler):
@@ -337,6 +340,8 @@ class _Transport:
             return opener.open(request, timeout=seconds)
 
         self._send = send
+        # An answer that repeats the key, as the page of a proxy may, is told without it.
+        self._hide = lambda text: text if key is None else text.replace(key, "rho_...")
 
     def __repr__(self) -> str:
         return f"{type(self).__name__}({self._base!r})"
@@ -375,7 +380,7 @@ class _Transport:
             repeatable = method == "GET" or "Idempotency-Key" in sent
         answer = self._persist(method, url, data, sent, timeout or self._timeout, repeatable)
         if answer.status >= 300:
-            raise _problem_of(answer)
+            raise _problem_of(answer, self._hide)
         return answer.content()
 
     def _persist(
@@ -435,10 +440,10 @@ class _Transport:
         raise RhoformUnreachable(f"The service at {self._host} could not be reached: {name}")
 
 
-def _problem_of(answer: _Answer) -> RhoformProblem:
+def _problem_of(answer: _Answer, hide: Callable[[str], str]) -> RhoformProblem:
     """What a refused answer says; anything that is no problem document is told by its status."""
     try:
-        content = answer.content()
+        content = _Answer(answer.status, answer.headers, hide(answer.text).encode("utf-8")).content()
     except ValueError:
         content = None
     problem = content if isinstance(content, dict) else {}
@@ -2147,7 +2152,7 @@ class AnsweredSizingWithin:
     #: Value of the dimension in `unit`; as a bare number it goes back into `dimensions`.
     value: float
     unit: str
-    #: The value for people.
+    #: The value for people; of a solution with at least as many digits as give the same resistance to 1e-5 when the text is used in a request.
     text: str
 
 
@@ -2164,7 +2169,7 @@ class SizingSolution:
     resistance: BoundedResistance
     #: Derivative of the resistance by the dimension there, in ohms per `unit` of the dimension.
     sensitivity: float
-    #: Whether the dimension gives the target: false for the whole numbers on either side of it where none does.
+    #: Whether the target lies within the bounds of `resistance`, which is computed from this very value. False for the whole numbers on either side of the target where none gives it, and where a double cannot hold the dimension finely enough: `cautions` then say how far off it is, and which other dimension resolves it.
     exact: bool
     #: The reciprocal of the resistance.
     conductance: AnsweredResistanceConductance
@@ -2271,6 +2276,8 @@ class RefusedItemProblemError:
     #: JSON pointer of the member, as a URI fragment.
     pointer: str
     detail: str
+    #: Where on the outline, in its unit, if the place is no vertex: two edges that cross between their ends.
+    at: Optional[List[Any]] = None
 
 
 @dataclass(frozen=True)
@@ -2540,9 +2547,11 @@ class Outline:
 
     _NAMES: ClassVar[Mapping[str, str]] = {"created_at": "createdAt"}
     _SPECS: ClassVar[Mapping[str, _Spec]] = {"outline": "OutlineOutline", "terminals": ("list", "OutlineTerminal")}
-    _REQUIRED: ClassVar[Tuple[str, ...]] = ("id", "createdAt", "outline", "terminals", "regions", "repairs")
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("id", "name", "createdAt", "outline", "terminals", "regions", "repairs")
     _FIXED: ClassVar[Mapping[str, Any]] = {}
     id: str
+    #: Empty where it was stored without one.
+    name: str
     created_at: str
     #: The outline as it was cleaned.
     outline: OutlineOutline
@@ -3732,7 +3741,7 @@ class FieldJob:
     def wait(
         self,
         timeout: Optional[float] = None,
-        on_progress: Optional[Callable[[Field], None]] = None,
+        on_progress: Optional[Callable[[FieldProgress], None]] = None,
         stop: Optional[threading.Event] = None,
         every: float = 0.5,
     ) -> Field:
@@ -3740,11 +3749,17 @@ class FieldJob:
         Waits for the end and answers with it; "limited" and "failed" are ends too.
 
         :param timeout: seconds after which RhoformTimeout is raised; the solution goes on.
-        :param on_progress: called with each state that was asked for.
+        :param on_progress: called with each new bracket, not before there is one.
         :param stop: once it is set, the solution is cancelled and RhoformStopped raised.
         """
         end = None if timeout is None else time.monotonic() + timeout
-        while not self.ended:
+        told: Optional[FieldProgress] = None
+        while True:
+            if on_progress is not None and self.field.progress not in (None, told):
+                told = self.field.progress
+                on_progress(told)
+            if self.ended:
+                return self.field
             if stop is not None and stop.is_set():
                 self.cancel()
                 raise RhoformStopped(f"The field solution {self.id} was cancelled.")
@@ -3755,9 +3770,6 @@ class FieldJob:
             else:
                 time.sleep(every)
             self.refresh()
-            if on_progress is not None:
-                on_progress(self.field)
-        return self.field
 
     def cancel(self) -> None:
         """Cancels it; what it reserved of the month is given back. One that has ended stays as it is."""
@@ -3840,7 +3852,7 @@ class Client(_Operations):
         self,
         body: Any,
         timeout: Optional[float] = None,
-        on_progress: Optional[Callable[[Field], None]] = None,
+        on_progress: Optional[Callable[[FieldProgress], None]] = None,
         stop: Optional[threading.Event] = None,
     ) -> Field:
         """
@@ -3953,9 +3965,8 @@ def _refused_rows(table: str) -> int:
 def _solve(client: Client, arguments: Sequence[str]) -> None:
     (name,) = arguments
 
-    def show(field: Field) -> None:
-        if field.progress is not None:
-            print(f"{field.progress.lower:.9g} ... {field.progress.upper:.9g} ohm", file=sys.stderr)
+    def show(bracket: FieldProgress) -> None:
+        print(f"{bracket.lower:.9g} ... {bracket.upper:.9g} ohm", file=sys.stderr)
 
     _print_json(client.field(json.loads(_text_of(name)), on_progress=show))
 

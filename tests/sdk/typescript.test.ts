@@ -2,6 +2,7 @@ import { afterEach, describe, expect, expectTypeOf, it } from "vitest";
 import {
   computeAll,
   computeResistance,
+  type FieldProgress,
   type DimensionsOf,
   readResistance,
   replayRecord,
@@ -66,23 +67,37 @@ describe("a batch", () => {
 });
 
 describe("a field", () => {
-  const field = (status: string) => ({ id: "field_1", status, progress: null, result: null });
+  const field = (status: string, lower?: number) => ({
+    id: "field_1",
+    status,
+    progress: lower === undefined ? null : { lower, upper: 2, unknowns: 10, refinements: 1 },
+    result: null,
+  });
   const body = { terminals: [], medium: { sheetResistance: 1 } };
 
-  it("is asked after until it ends", async () => {
+  it("is asked after until it ends, and tells each new bracket, none before the first", async () => {
+    const brackets = [undefined, undefined, 0.5, 0.5, 1];
     const { calls, client } = await service((request, response, call) =>
-      answer(response, request.method === "POST" ? 202 : 200, field(call < 3 ? "running" : "done")),
+      answer(
+        response,
+        request.method === "POST" ? 202 : 200,
+        field(call < 5 ? "running" : "done", brackets[call - 1]),
+      ),
     );
-    const states: string[] = [];
-    const onProgress = ({ status }: { status: string }) => states.push(status);
+    const told: [number, number, string][] = [];
+    const onProgress = ({ lower, upper }: FieldProgress, { status }: { status: string }) =>
+      told.push([lower, upper, status]);
     expect(await runField({ client, body, everyMs: 5, onProgress })).toMatchObject({ status: "done" });
-    expect(states).toEqual(["running", "running", "done"]);
-    expect(calls).toHaveLength(3);
+    expect(told).toEqual([
+      [0.5, 2, "running"],
+      [1, 2, "done"],
+    ]);
+    expect(calls).toHaveLength(5);
   });
 
   it("is cancelled by an abort, which is thrown with its reason", async () => {
     const { calls, client } = await service((request, response) =>
-      answer(response, request.method === "DELETE" ? 204 : 200, field("running")),
+      answer(response, request.method === "DELETE" ? 204 : 200, field("running", 1)),
     );
     const stop = new AbortController();
     const reason = new Error("changed my mind");
@@ -92,22 +107,8 @@ describe("a field", () => {
   });
 });
 
-describe("statuses", () => {
-  it.each([
-    [401, "invalid-key"],
-    [403, "insufficient-scope"],
-    [409, "request-in-progress"],
-    [413, "body-too-large"],
-    [422, "invalid-input"],
-  ])("%i is a problem, and is not tried again", async (status, code) => {
-    const { calls, client } = await service((_request, response) =>
-      answer(response, status, problem(code, status)),
-    );
-    await expect(computeResistance({ client, body: request(1) })).rejects.toMatchObject({ status, code });
-    expect(calls).toHaveLength(1);
-  });
-
-  it("a dropped connection is tried again with the key of the first try, and never for a replay", async () => {
+describe("a broken connection", () => {
+  it("is tried again with the key of the first try, and never for a replay", async () => {
     const { calls, client } = await service((request, response, call) =>
       call === 2 ? answer(response, 200, {}) : request.socket.destroy(),
     );

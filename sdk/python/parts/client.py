@@ -33,7 +33,7 @@ class FieldJob:
     def wait(
         self,
         timeout: Optional[float] = None,
-        on_progress: Optional[Callable[[Field], None]] = None,
+        on_progress: Optional[Callable[[FieldProgress], None]] = None,
         stop: Optional[threading.Event] = None,
         every: float = 0.5,
     ) -> Field:
@@ -41,11 +41,17 @@ class FieldJob:
         Waits for the end and answers with it; "limited" and "failed" are ends too.
 
         :param timeout: seconds after which RhoformTimeout is raised; the solution goes on.
-        :param on_progress: called with each state that was asked for.
+        :param on_progress: called with each new bracket, not before there is one.
         :param stop: once it is set, the solution is cancelled and RhoformStopped raised.
         """
         end = None if timeout is None else time.monotonic() + timeout
-        while not self.ended:
+        told: Optional[FieldProgress] = None
+        while True:
+            if on_progress is not None and self.field.progress not in (None, told):
+                told = self.field.progress
+                on_progress(told)
+            if self.ended:
+                return self.field
             if stop is not None and stop.is_set():
                 self.cancel()
                 raise RhoformStopped(f"The field solution {self.id} was cancelled.")
@@ -56,9 +62,6 @@ class FieldJob:
             else:
                 time.sleep(every)
             self.refresh()
-            if on_progress is not None:
-                on_progress(self.field)
-        return self.field
 
     def cancel(self) -> None:
         """Cancels it; what it reserved of the month is given back. One that has ended stays as it is."""
@@ -141,7 +144,7 @@ class Client(_Operations):
         self,
         body: Any,
         timeout: Optional[float] = None,
-        on_progress: Optional[Callable[[Field], None]] = None,
+        on_progress: Optional[Callable[[FieldProgress], None]] = None,
         stop: Optional[threading.Event] = None,
     ) -> Field:
         """

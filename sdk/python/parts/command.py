@@ -72,9 +72,8 @@ def _refused_rows(table: str) -> int:
 def _solve(client: Client, arguments: Sequence[str]) -> None:
     (name,) = arguments
 
-    def show(field: Field) -> None:
-        if field.progress is not None:
-            print(f"{field.progress.lower:.9g} ... {field.progress.upper:.9g} ohm", file=sys.stderr)
+    def show(bracket: FieldProgress) -> None:
+        print(f"{bracket.lower:.9g} ... {bracket.upper:.9g} ohm", file=sys.stderr)
 
     _print_json(client.field(json.loads(_text_of(name)), on_progress=show))
 

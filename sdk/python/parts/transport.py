@@ -65,6 +65,10 @@ class _Answer:
         self.body = body
 
     @property
+    def text(self) -> str:
+        return self.body.decode("utf-8", "replace")
+
+    @property
     def media_type(self) -> str:
         return (self.headers.get("Content-Type") or "").split(";")[0].strip().lower()
 
@@ -72,8 +76,7 @@ class _Answer:
         """JSON as Python values, anything else as text; None where it is empty."""
         if not self.body:
             return None
-        text = self.body.decode("utf-8", "replace")
-        return json.loads(text) if self.media_type.endswith("json") else text
+        return json.loads(self.text) if self.media_type.endswith("json") else self.text
 
 
 class _NoRedirects(urllib.request.HTTPRedirectHandler):
@@ -122,6 +125,8 @@ class _Transport:
             return opener.open(request, timeout=seconds)
 
         self._send = send
+        # An answer that repeats the key, as the page of a proxy may, is told without it.
+        self._hide = lambda text: text if key is None else text.replace(key, "rho_...")
 
     def __repr__(self) -> str:
         return f"{type(self).__name__}({self._base!r})"
@@ -160,7 +165,7 @@ class _Transport:
             repeatable = method == "GET" or "Idempotency-Key" in sent
         answer = self._persist(method, url, data, sent, timeout or self._timeout, repeatable)
         if answer.status >= 300:
-            raise _problem_of(answer)
+            raise _problem_of(answer, self._hide)
         return answer.content()
 
     def _persist(
@@ -220,10 +225,10 @@ class _Transport:
         raise RhoformUnreachable(f"The service at {self._host} could not be reached: {name}")
 
 
-def _problem_of(answer: _Answer) -> RhoformProblem:
+def _problem_of(answer: _Answer, hide: Callable[[str], str]) -> RhoformProblem:
     """What a refused answer says; anything that is no problem document is told by its status."""
     try:
-        content = answer.content()
+        content = _Answer(answer.status, answer.headers, hide(answer.text).encode("utf-8")).content()
     except ValueError:
         content = None
     problem = content if isinstance(content, dict) else {}

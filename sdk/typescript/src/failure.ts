@@ -45,8 +45,12 @@ export class RhoformUnreachable extends Error {
   }
 }
 
-/** What a refused answer says. Anything that is no problem document (a proxy's page, for instance) is told by its status. */
-export function problemOf(body: unknown, response: Response): RhoformProblem {
+/**
+ * What a refused answer says. Anything that is no problem document (a proxy's page, for instance) is told by its status.
+ * An answer that repeats the key, as the page of a proxy may, is told without it.
+ */
+export function problemOf(answered: unknown, response: Response, key?: string): RhoformProblem {
+  const body = key === undefined ? answered : withoutKey(answered, key);
   const problem: Partial<Problem> = typeof body === "object" && body !== null ? body : {};
   const title = text(problem.title) ?? (response.statusText || "The call was refused");
   return new RhoformProblem(
@@ -58,6 +62,11 @@ export function problemOf(body: unknown, response: Response): RhoformProblem {
     text(problem.instance) ?? response.headers.get("Request-Id"),
     retryAfterSeconds(response),
   );
+}
+
+function withoutKey(answered: unknown, key: string): unknown {
+  const written = JSON.stringify(answered ?? null);
+  return written.includes(key) ? JSON.parse(written.replaceAll(key, "rho_…")) : answered;
 }
 
 /** `Retry-After` in seconds, given as a number or as a date; null where there is none. */

@@ -3,11 +3,14 @@ import { deleteField, readField, solveField } from "./generated/sdk.gen.js";
 import type { Field, FieldRequest } from "./generated/types.gen.js";
 import { pause } from "./persistent-fetch.js";
 
+/** A bracket on the way: ohms, and how much was solved for it. */
+export type FieldProgress = NonNullable<Field["progress"]>;
+
 export interface RunFieldOptions {
   readonly client: Client;
   readonly body: FieldRequest;
-  /** Called with each state that was asked for, the first and the last one too. */
-  readonly onProgress?: (field: Field) => void;
+  /** Called with each new bracket, and the state it came with; not before there is one. */
+  readonly onProgress?: (progress: FieldProgress, field: Field) => void;
   /** An abort cancels the solution, and the call throws the signal's reason. */
   readonly signal?: AbortSignal;
   /** Time between two looks, ms; 500 where left out. */
@@ -26,12 +29,18 @@ export function hasEnded({ status }: Field): boolean {
 export async function runField(options: RunFieldOptions): Promise<Field> {
   const { client, body, onProgress, signal = new AbortController().signal, everyMs = 500 } = options;
   let field = await solveField({ client, body, signal });
-  onProgress?.(field);
+  let told = "null";
+  const tell = () => {
+    const news = JSON.stringify(field.progress);
+    if (field.progress && news !== told) onProgress?.(field.progress, field);
+    told = news;
+  };
+  tell();
   try {
     while (!hasEnded(field)) {
       await pause(everyMs, signal);
       field = await readField({ client, path: { id: field.id }, signal });
-      onProgress?.(field);
+      tell();
     }
   } catch (error) {
     if (signal.aborted) await cancelField({ client, id: field.id });

@@ -51,7 +51,7 @@ export function rhoform(options: RhoformOptions): Client {
   client.interceptors.request.use(withIdempotencyKey);
   client.interceptors.error.use((error, response) =>
     // Without a response the error is one of ours, or the caller's reason to abort.
-    (response as Response | undefined) ? problemOf(error, response) : error,
+    (response as Response | undefined) ? problemOf(error, response, key) : error,
   );
   return client;
 }
