@@ -2,15 +2,19 @@
 
 import { useId } from "react";
 
-interface FileButtonProps {
+type FileButtonProps = {
   readonly label: string;
   /** Endings and media types that the reader's dialog offers. */
   readonly accept: string;
-  readonly onText: (text: string) => void;
-}
+} & (
+  | { readonly onText: (text: string) => void }
+  /** The file itself, where its bytes matter. */
+  | { readonly onFile: (file: File) => void }
+);
 
-/** Reads a text file from the reader's disk. */
-export function FileButton({ label, accept, onText }: FileButtonProps) {
+/** Takes a file from the reader's disk. */
+export function FileButton(props: FileButtonProps) {
+  const { label, accept } = props;
   const id = useId();
   return (
     <label
@@ -26,7 +30,9 @@ export function FileButton({ label, accept, onText }: FileButtonProps) {
         onChange={async (event) => {
           const file = event.target.files?.[0];
           event.target.value = "";
-          if (file) onText(await file.text());
+          if (!file) return;
+          if ("onFile" in props) props.onFile(file);
+          else props.onText(await file.text());
         }}
       />
     </label>

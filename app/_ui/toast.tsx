@@ -9,9 +9,11 @@ interface Message {
   readonly text: string;
   /** A way back, where there is one. */
   readonly undo?: () => void;
+  /** What it is about: of messages about one thing only the last is shown. */
+  readonly about?: string;
 }
 
-type Show = (text: string, options?: { readonly undo?: () => void }) => void;
+type Show = (text: string, options?: Pick<Message, "undo" | "about">) => void;
 
 const Context = createContext<Show>(() => undefined);
 
@@ -25,8 +27,11 @@ const SHOWN_MS = 6000;
 /** Holds the short messages of the pages inside it, at the lower edge, and reads them out. */
 export function ToastArea({ children }: { readonly children: ReactNode }) {
   const [messages, setMessages] = useState<readonly Message[]>([]);
-  const show = useCallback<Show>((text, { undo } = {}) => {
-    setMessages((before) => [...before.slice(-2), { id: (before.at(-1)?.id ?? 0) + 1, text, undo }]);
+  const show = useCallback<Show>((text, { undo, about } = {}) => {
+    setMessages((before) => {
+      const others = before.filter((message) => about === undefined || message.about !== about);
+      return [...others.slice(-2), { id: (before.at(-1)?.id ?? 0) + 1, text, undo, about }];
+    });
   }, []);
   const drop = (id: number) => setMessages((before) => before.filter((message) => message.id !== id));
   const value = useMemo(() => show, [show]);

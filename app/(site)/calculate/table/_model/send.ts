@@ -16,6 +16,8 @@ export type Outcome =
   | {
       readonly ok: false;
       readonly status: number;
+      /** Nothing is wrong with it: the time was over before its turn. */
+      readonly later: boolean;
       /** Complaints by the name of their column. */
       readonly atColumn: Readonly<Record<string, string>>;
       /** Everything in one text. */
@@ -24,8 +26,10 @@ export type Outcome =
 
 export interface Sent {
   readonly body: string;
-  /** Ids of the rows, in the order of their lines. */
-  readonly ids: readonly number[];
+  /** The rows in the order of their lines. */
+  readonly rows: readonly Row[];
+  /** The columns that go, by their places in the table. */
+  readonly places: readonly number[];
 }
 
 /** The rows as a CSV table in the API's own spelling: decimal points, units as the API reads them. */
@@ -38,7 +42,11 @@ export async function toSend(table: Table, rows: readonly Row[], vocabulary: Voc
     used.map(({ column, k }) => spelled(cells[k] ?? "", kinds.get(column.name) !== null, table.decimalComma)),
   );
   const header = used.map(({ column }) => headerOf(column));
-  return { body: Papa.unparse([header, ...lines], { newline: "\n" }), ids: full.map(({ id }) => id) };
+  return {
+    body: Papa.unparse([header, ...lines], { newline: "\n" }),
+    rows: full,
+    places: used.map(({ k }) => k),
+  };
 }
 
 export function headerOf({ name, unit }: Column): string {
@@ -96,7 +104,13 @@ export function outcomeOf({ status, result, problem }: Item): Outcome {
   const atColumn: Record<string, string> = {};
   for (const { pointer, detail } of errors) atColumn[columnOf(pointer ?? "#")] ??= detail;
   const text = errors.map(({ pointer, detail }) => `${columnOf(pointer ?? "#")} ${detail}`.trim()).join(" ");
-  return { ok: false, status, atColumn, text: text || (problem?.detail ?? "was refused.") };
+  return {
+    ok: false,
+    status,
+    later: status === 503,
+    atColumn,
+    text: text || (problem?.detail ?? "was refused."),
+  };
 }
 
 /** `#/media/core/material` as the column `core.material`. */
@@ -105,18 +119,32 @@ function columnOf(pointer: string): string {
   return place === "media" ? path.join(".") : (path[0] ?? place);
 }
 
-/** The whole table with what came out, for a spreadsheet. */
-export async function toDownload(table: Table, outcomes: ReadonlyMap<number, Outcome>): Promise<string> {
+/** The whole table with what came out, for a spreadsheet: decimal mark and cells parted as in the table itself. */
+export async function toDownload(table: Table, outcomes: ReadonlyMap<Row, Outcome>): Promise<string> {
   const { default: Papa } = await import("papaparse");
   const titles = table.columns.map((column) => (column.name === "" ? column.title : headerOf(column)));
-  const header = [...titles, "resistance/ohm", "lower/ohm", "upper/ohm", "text", "problem"];
-  const lines = table.rows.map(({ id, cells }) => {
-    const outcome = outcomes.get(id);
-    const results = outcome?.ok
-      ? [outcome.value, outcome.lower, outcome.upper, outcome.text, ""].map(String)
-      : ["", "", "", "", outcome?.text ?? ""];
-    return [...table.columns.map((_, k) => cells[k] ?? ""), ...results].map(defused);
+  const lines = table.rows.map((row) => {
+    const own = table.columns.map((_, k) => safe(row.cells[k] ?? "", table.decimalComma));
+    return [...own, ...resultCells(outcomes.get(row), table.decimalComma)];
   });
-  const delimiter = table.decimalComma ? ";" : ",";
+  const header = [...titles.map(defused), ...RESULT_HEADER];
+  const delimiter = table.decimalComma && table.delimiter === "," ? ";" : table.delimiter;
   return `\uFEFF${Papa.unparse([header, ...lines], { delimiter, newline: "\r\n" })}\r\n`;
+}
+
+/** No cell is a formula; a negative number with a decimal comma is as harmless as one with a point. */
+function safe(cell: string, decimalComma: boolean): string {
+  const pointed = decimalComma ? cell.replace(/(\d),(?=\d)/, "$1.") : cell;
+  return defused(pointed) === pointed ? cell : defused(cell);
+}
+
+/** The columns that the API's own answer adds. */
+const RESULT_HEADER = ["resistance/ohm", "lower/ohm", "upper/ohm", "text", "status", "problem"];
+
+function resultCells(outcome: Outcome | undefined, decimalComma: boolean): readonly string[] {
+  if (!outcome) return RESULT_HEADER.map(() => "");
+  if (!outcome.ok) return ["", "", "", "", String(outcome.status), defused(outcome.text)];
+  const { value, lower, upper, text } = outcome;
+  const cells = [...[value, lower, upper].map(String), text];
+  return [...(decimalComma ? cells.map((cell) => cell.replace(".", ",")) : cells), "200", ""];
 }

@@ -15,11 +15,16 @@ export interface Row {
   readonly cells: readonly string[];
 }
 
+/** What parts the cells of a file. */
+export type Delimiter = "," | ";" | "\t";
+
 export interface Table {
   readonly columns: readonly Column[];
   readonly rows: readonly Row[];
   /** Whether numbers are written with a decimal comma. */
   readonly decimalComma: boolean;
+  /** What parted the cells of the file that it came from, and parts those of its download. */
+  readonly delimiter: Delimiter;
 }
 
 let lastId = 0;
@@ -35,6 +40,7 @@ export function startTable(vocabulary: Vocabulary, shape: string): Table {
     columns: choice.header.map((name) => ({ name, unit: "", title: name })),
     rows: [newRow(choice.row)],
     decimalComma: false,
+    delimiter: ",",
   };
 }
 
@@ -59,6 +65,15 @@ export function withColumn(table: Table, index: number, change: Partial<Column>)
 
 export function withNewColumn(table: Table, name: string): Table {
   return { ...table, columns: [...table.columns, { name, unit: "", title: name }] };
+}
+
+/** A column in front that says the same shape in every row. */
+export function withShape(table: Table, shape: string): Table {
+  return {
+    ...table,
+    columns: [{ name: "shape", unit: "", title: "shape" }, ...table.columns],
+    rows: table.rows.map(({ cells }) => newRow([shape, ...cells])),
+  };
 }
 
 export function withoutColumn(table: Table, index: number): Table {

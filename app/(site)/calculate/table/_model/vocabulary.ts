@@ -31,3 +31,22 @@ export const GROUP_TITLES: Readonly<Record<ColumnChoice["group"], string>> = {
   medium: "Medium",
   operating: "Operating point",
 };
+
+/** The shape whose columns a table has most of; null where it has no dimension. */
+export function likelyShape(
+  columns: readonly { readonly name: string }[],
+  vocabulary: Vocabulary,
+): string | null {
+  const dimensions = new Set(
+    vocabulary.columns.filter(({ group }) => group === "dimension").map(({ name }) => name),
+  );
+  const given = columns.map(({ name }) => name).filter((name) => dimensions.has(name));
+  if (given.length === 0) return null;
+  const score = ({ columns: own, header }: ShapeChoice): number => {
+    const fitting = given.filter((name) => own.includes(name)).length;
+    const missing = header.filter((name) => dimensions.has(name) && !given.includes(name)).length;
+    return 2 * fitting - given.length - 0.5 * missing;
+  };
+  const best = vocabulary.shapes.toSorted((one, other) => score(other) - score(one))[0];
+  return best.id;
+}

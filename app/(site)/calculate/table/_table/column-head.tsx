@@ -1,5 +1,6 @@
 "use client";
 
+import { memo } from "react";
 import { UNITS } from "../../../../_ui/quantity/units";
 import type { Column } from "../_model/table";
 import { type ColumnChoice, GROUP_TITLES } from "../_model/vocabulary";
@@ -10,8 +11,10 @@ interface ColumnHeadProps {
   readonly choices: readonly ColumnChoice[];
   /** Names that other columns have. */
   readonly taken: ReadonlySet<string>;
-  readonly onChange: (change: Partial<Column>) => void;
-  readonly onRemove: () => void;
+  /** What is wrong with it as a whole. */
+  readonly complaint: string | undefined;
+  readonly onChange: (place: number, change: Partial<Column>) => void;
+  readonly onRemove: (place: number) => void;
 }
 
 /** In the menu of names: takes the column away. No name has a space. */
@@ -20,8 +23,16 @@ const REMOVE = "remove it";
 const CONTROL =
   "min-h-5.5 w-full rounded border border-edge bg-sheet px-0.5 font-normal hover:border-ink medium:min-h-4";
 
-/** What a column stands for and the unit of its bare numbers. */
-export function ColumnHead({ column, place, choices, taken, onChange, onRemove }: ColumnHeadProps) {
+/** What a column stands for and the unit of its bare numbers. Its long menu is not drawn again while cells are typed. */
+export const ColumnHead = memo(function ColumnHead({
+  column,
+  place,
+  choices,
+  taken,
+  complaint,
+  onChange,
+  onRemove,
+}: ColumnHeadProps) {
   const choice = choices.find(({ name }) => name === column.name);
   const units = choice?.kind
     ? UNITS[choice.kind].filter(({ hidden, id }) => !hidden || id === column.unit)
@@ -34,9 +45,13 @@ export function ColumnHead({ column, place, choices, taken, onChange, onRemove }
         aria-label={`What ${called} is`}
         value={column.name}
         onChange={(event) =>
-          event.target.value === REMOVE ? onRemove() : onChange({ name: event.target.value, unit: "" })
+          event.target.value === REMOVE
+            ? onRemove(place)
+            : onChange(place, { name: event.target.value, unit: "" })
         }
-        className={`${CONTROL} ${column.name === "" ? "text-amber" : ""}`}
+        aria-invalid={complaint === undefined ? undefined : true}
+        aria-describedby={complaint === undefined ? undefined : `column-${place}-problem`}
+        className={`${CONTROL} aria-invalid:border-2 aria-invalid:border-oxide ${column.name === "" ? "text-amber" : ""}`}
       >
         <option value="">left out</option>
         <option value={REMOVE}>remove the column</option>
@@ -56,7 +71,7 @@ export function ColumnHead({ column, place, choices, taken, onChange, onRemove }
         <select
           aria-label={`Unit of ${called}`}
           value={column.unit}
-          onChange={(event) => onChange({ unit: event.target.value })}
+          onChange={(event) => onChange(place, { unit: event.target.value })}
           className={`${CONTROL} mt-0.5 text-ink-soft`}
         >
           <option value="">{choice?.kind === "temperature" ? "own, or °C" : "own, or SI"}</option>
@@ -70,6 +85,14 @@ export function ColumnHead({ column, place, choices, taken, onChange, onRemove }
       ) : column.name === "" && column.title !== "" ? (
         <span className="mt-0.5 block text-small font-normal text-ink-soft">{column.title}</span>
       ) : null}
+      {complaint === undefined ? null : (
+        <span
+          id={`column-${place}-problem`}
+          className="mt-0.5 block max-w-24 text-small font-normal text-oxide"
+        >
+          {complaint}
+        </span>
+      )}
     </th>
   );
-}
+});

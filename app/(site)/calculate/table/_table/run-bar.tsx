@@ -61,12 +61,14 @@ function startText(full: number, open: number): string {
   return open === 0 ? "All rows are answered" : `Compute the ${count(open, "open row")}`;
 }
 
-function progressText(run: Run, answered: number, refused: number): string {
+/** How far the run is, or how it ended. */
+export function progressText(run: Run, answered: number, refused: number): string {
   if (run.sent === 0 || run.problem) return "Refused rows cost nothing.";
-  if (run.busy || run.done < run.sent) {
-    return `${run.done.toLocaleString("en")} of ${count(run.sent, "row")} came back`;
-  }
-  return `${count(answered, "row")} answered, ${refused.toLocaleString("en")} refused`;
+  if (run.busy) return `${run.done.toLocaleString("en")} of ${count(run.sent, "row")} came back`;
+  const told = `${count(answered, "row")} answered, ${refused.toLocaleString("en")} refused`;
+  return run.done < run.sent
+    ? `Stopped: ${run.done.toLocaleString("en")} of ${count(run.sent, "row")} came back. ${told}.`
+    : `${told}.`;
 }
 
 export function count(number: number, noun: string): string {

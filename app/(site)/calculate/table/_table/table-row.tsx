@@ -7,8 +7,8 @@ import type { Column, Row } from "../_model/table";
 
 interface TableRowProps {
   readonly row: Row;
-  /** From 1, as it is counted for people. */
-  readonly number: number;
+  /** Its place in the table, from 0. */
+  readonly place: number;
   readonly columns: readonly Column[];
   readonly outcome: Outcome | undefined;
   readonly listOf: (name: string) => string | undefined;
@@ -18,7 +18,8 @@ interface TableRowProps {
 
 /** One request: its cells, and what came out. */
 export const TableRow = memo(function TableRow(props: TableRowProps) {
-  const { row, number, columns, outcome, listOf, onCell, onRemove } = props;
+  const { row, place, columns, outcome, listOf, onCell, onRemove } = props;
+  const number = place + 1;
   const complaints = outcome && !outcome.ok ? outcome.atColumn : {};
   const problemId = `row-${row.id}-problem`;
   return (
@@ -37,6 +38,7 @@ export const TableRow = memo(function TableRow(props: TableRowProps) {
               aria-describedby={wrong === undefined ? undefined : problemId}
               list={listOf(column.name)}
               title={wrong}
+              data-row={place}
               data-column={k}
               onChange={(event) => onCell(row.id, k, event.target.value)}
               onKeyDown={move}
@@ -50,6 +52,10 @@ export const TableRow = memo(function TableRow(props: TableRowProps) {
       <td className="min-w-24 px-1 align-middle">
         {outcome?.ok ? (
           <span className="font-mono whitespace-nowrap">{outcome.text}</span>
+        ) : outcome?.later ? (
+          <span className="block max-w-[44ch] min-w-28 py-0.5 text-small text-amber">
+            Not computed in time; compute again.
+          </span>
         ) : outcome ? (
           <span id={problemId} className="block max-w-[44ch] min-w-28 py-0.5 text-small text-oxide">
             {outcome.text}

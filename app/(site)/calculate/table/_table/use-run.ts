@@ -3,7 +3,7 @@
 import { useCallback, useRef, useState } from "react";
 import type { ProblemShown } from "../../../../_ui/problem-notice";
 import { ApiProblem, callApi } from "../../../_live/call-api";
-import { type Outcome, outcomeOf, readItems, toSend } from "../_model/send";
+import { type Outcome, outcomeOf, readItems, type Sent, toSend } from "../_model/send";
 import type { Row, Table } from "../_model/table";
 import type { Vocabulary } from "../_model/vocabulary";
 
@@ -13,15 +13,17 @@ export interface Run {
   readonly sent: number;
   readonly done: number;
   readonly problem: ProblemShown | null;
+  /** What is wrong with a column as a whole, by its place in the table. */
+  readonly atColumn: ReadonlyMap<number, string>;
 }
 
-const IDLE: Run = { busy: false, sent: 0, done: 0, problem: null };
+const IDLE: Run = { busy: false, sent: 0, done: 0, problem: null, atColumn: new Map() };
 /** How often the page is redrawn while answers arrive, ms. */
 const REDRAW_MS = 150;
 
-/** Sends rows and gathers what comes out of them, while it arrives. */
+/** Sends rows and gathers what comes out of them, while it arrives. An answer belongs to its row as it was sent. */
 export function useRun(vocabulary: Vocabulary) {
-  const [outcomes, setOutcomes] = useState<ReadonlyMap<number, Outcome>>(new Map());
+  const [outcomes, setOutcomes] = useState<ReadonlyMap<Row, Outcome>>(new Map());
   const [run, setRun] = useState<Run>(IDLE);
   const stopper = useRef<AbortController>(undefined);
 
@@ -29,9 +31,10 @@ export function useRun(vocabulary: Vocabulary) {
     async (table: Table, rows: readonly Row[]) => {
       const controller = new AbortController();
       stopper.current = controller;
-      const { body, ids } = await toSend(table, rows, vocabulary);
-      setRun({ busy: true, sent: ids.length, done: 0, problem: null });
-      const fresh = new Map<number, Outcome>();
+      const sent = await toSend(table, rows, vocabulary);
+      const count = sent.rows.length;
+      setRun({ ...IDLE, busy: true, sent: count });
+      const fresh = new Map<Row, Outcome>();
       let done = 0;
       let drawn = 0;
       const show = () => {
@@ -39,7 +42,7 @@ export function useRun(vocabulary: Vocabulary) {
         const news = new Map(fresh);
         fresh.clear();
         setOutcomes((before) => new Map([...before, ...news]));
-        setRun({ busy: true, sent: ids.length, done, problem: null });
+        setRun({ ...IDLE, busy: true, sent: count, done });
       };
       let problem: ProblemShown | null = null;
       try {
@@ -47,18 +50,25 @@ export function useRun(vocabulary: Vocabulary) {
           "POST",
           "/resistance/batch",
           { signal: controller.signal, mediaType: "text/csv", accept: "application/json" },
-          body,
+          sent.body,
         );
         await readItems(response, (items) => {
-          for (const item of items) fresh.set(ids[item.index], outcomeOf(item));
+          for (const item of items) fresh.set(sent.rows[item.index], outcomeOf(item));
           done += items.length;
           if (Date.now() - drawn > REDRAW_MS) show();
         });
+        if (done < count) problem = cutOff(done, count);
       } catch (failure) {
-        problem = controller.signal.aborted ? null : shown(failure);
+        problem = controller.signal.aborted
+          ? null
+          : failure instanceof ApiProblem
+            ? failure.problem
+            : cutOff(done, count);
       }
+      // What was changed as a whole meanwhile has no use for these answers.
+      if (stopper.current !== controller) return;
       show();
-      setRun({ busy: false, sent: ids.length, done, problem });
+      setRun({ busy: false, sent: count, done, ...sorted(problem, sent) });
     },
     [vocabulary],
   );
@@ -68,26 +78,38 @@ export function useRun(vocabulary: Vocabulary) {
     run,
     start,
     stop: useCallback(() => stopper.current?.abort(), []),
-    /** Forgets what came out for a row that has changed. */
-    forget: useCallback((id: number) => {
-      setOutcomes((before) => {
-        if (!before.has(id)) return before;
-        const left = new Map(before);
-        left.delete(id);
-        return left;
-      });
-    }, []),
-    forgetAll: useCallback(() => {
-      setOutcomes((before) => (before.size === 0 ? before : new Map()));
+    restore: useCallback((known: ReadonlyMap<Row, Outcome>) => {
+      setOutcomes((before) => new Map([...before, ...known]));
       setRun((before) => (before.busy ? before : IDLE));
+    }, []),
+    /** Forgets every answer, and those that are on their way: a column now means something else. */
+    forgetAll: useCallback(() => {
+      stopper.current?.abort();
+      stopper.current = undefined;
+      setOutcomes((before) => (before.size === 0 ? before : new Map()));
+      setRun(IDLE);
     }, []),
   };
 }
 
-function shown(failure: unknown): ProblemShown {
-  if (failure instanceof ApiProblem) return failure.problem;
-  return {
-    title: "The service cannot be reached",
-    detail: "The table is still here. Try again in a moment.",
-  };
+/** Complaints about a column go to its head. */
+function sorted(problem: ProblemShown | null, { places }: Sent): Pick<Run, "problem" | "atColumn"> {
+  const atColumn = new Map<number, string>();
+  const rest = (problem?.errors ?? []).filter(({ pointer, detail }) => {
+    const place = places[Number(/^#\/header\/(\d+)$/.exec(pointer ?? "")?.[1] ?? NaN)];
+    if (place !== undefined) atColumn.set(place, detail);
+    return place === undefined;
+  });
+  if (!problem || atColumn.size === 0) return { problem, atColumn };
+  const detail = rest.length > 0 ? undefined : "A column cannot be read: see its head.";
+  return { problem: { ...problem, detail, errors: rest }, atColumn };
+}
+
+function cutOff(done: number, sent: number): ProblemShown {
+  return done === 0
+    ? { title: "The service cannot be reached", detail: "The table is still here. Try again in a moment." }
+    : {
+        title: "The connection broke off",
+        detail: `${done.toLocaleString("en")} of ${sent.toLocaleString("en")} rows came back and stay; compute the rest when the service can be reached again.`,
+      };
 }

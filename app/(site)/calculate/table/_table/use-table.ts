@@ -1,50 +1,70 @@
 "use client";
 
 import { useCallback, useEffect, useState } from "react";
-import { type Column, newRow, type Table } from "../_model/table";
+import { replaceAddress } from "../../replace-address";
+import type { Outcome } from "../_model/send";
+import type { Row, Table } from "../_model/table";
+import { keep, type Kept, readKept } from "./kept";
 
-const KEPT = "rhoform-table";
 const KEEP_MS = 500;
 
-/** The table of this tab: it outlives a reload and signing in. */
-export function useTable(start: Table, fresh: boolean) {
+interface UseTableOptions {
+  /** What the page begins with: an example. */
+  readonly start: Table;
+  /** Whether the address asks for this very example. */
+  readonly fresh: boolean;
+  readonly outcomes: ReadonlyMap<Row, Outcome>;
+  readonly restore: (outcomes: ReadonlyMap<Row, Outcome>) => void;
+}
+
+/** The table of this tab. Where the address asks for an example, what the tab had is set aside and not lost. */
+export function useTable({ start, fresh, outcomes, restore }: UseTableOptions) {
   const [table, setTable] = useState(start);
+  const [aside, setAside] = useState<Kept | null>(null);
+  const [unkept, setUnkept] = useState(false);
+  const touched = table !== start;
+
+  const bringBack = useCallback(
+    (kept: Kept) => {
+      setTable(kept.table);
+      restore(kept.outcomes);
+      setAside(null);
+    },
+    [restore],
+  );
 
   useEffect(() => {
-    const kept = fresh ? null : readKept();
     // Only the browser knows what this tab kept; the server's first picture is the example.
-    if (kept) queueMicrotask(() => setTable((now) => (now === start ? kept : now)));
-  }, [fresh, start]);
+    const kept = readKept();
+    if (kept) queueMicrotask(() => (fresh ? setAside(kept) : bringBack(kept)));
+  }, [fresh, bringBack]);
 
   useEffect(() => {
-    if (table === start) return;
-    const timer = setTimeout(() => keep(table), KEEP_MS);
+    if (!touched) return;
+    const timer = setTimeout(() => {
+      setUnkept(!keep(table, outcomes));
+      // From now on a reload brings this table, not the example that the address asked for.
+      if (window.location.search !== "") replaceAddress(window.location.pathname);
+    }, KEEP_MS);
     return () => clearTimeout(timer);
-  }, [table, start]);
+  }, [table, touched, outcomes]);
 
-  const edit = useCallback((change: (table: Table) => Table) => setTable(change), []);
-  return { table, edit };
-}
+  useEffect(() => {
+    if (!unkept) return;
+    const warn = (event: BeforeUnloadEvent) => event.preventDefault();
+    window.addEventListener("beforeunload", warn);
+    return () => window.removeEventListener("beforeunload", warn);
+  }, [unkept]);
 
-function keep({ columns, rows, decimalComma }: Table): void {
-  try {
-    const text = JSON.stringify({ columns, rows: rows.map(({ cells }) => cells), decimalComma });
-    window.sessionStorage.setItem(KEPT, text);
-  } catch {
-    // A table too large for the store lives as long as the page.
-  }
-}
-
-function readKept(): Table | null {
-  try {
-    const kept = JSON.parse(window.sessionStorage.getItem(KEPT) ?? "null") as {
-      columns: Column[];
-      rows: string[][];
-      decimalComma: boolean;
-    } | null;
-    if (!kept || kept.columns.length === 0) return null;
-    return { ...kept, rows: kept.rows.map((cells) => newRow(cells)) };
-  } catch {
-    return null;
-  }
+  return {
+    table,
+    edit: useCallback((change: (table: Table) => Table) => setTable(change), []),
+    touched,
+    /** What the tab had before. */
+    aside,
+    bringBack,
+    forgetAside: useCallback(() => setAside(null), []),
+    /** The browser has no room to keep this table over a reload. */
+    unkept,
+  };
 }
