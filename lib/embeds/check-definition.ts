@@ -15,7 +15,8 @@ import { accentContrasts, LEAST_CONTRAST } from "./contrast";
 import type { EmbedDefinition, InputRule, ToleranceRule } from "./definition";
 import { refusalOf, widgetComplaints, widgetRequest } from "./enforce";
 import { definitionInputs, type InputFacts, sizeOf } from "./inputs";
-import { readTolerance, takesTolerance, toleranceName, toleranceRefusal } from "./tolerances";
+import { takesTolerance } from "./takes-tolerance";
+import { readTolerance, toleranceName, toleranceRefusal } from "./tolerances";
 
 /**
  * What stands in the way of publishing a version: inputs that there are not, ranges that contradict themselves or

@@ -2,11 +2,6 @@ import { readQuantity } from "@/lib/engine";
 import type { EmbedDefinition, ToleranceRule } from "./definition";
 import { sizeOf, type InputFacts } from "./inputs";
 
-/** Whether the engine takes a tolerance on an input: on lengths, angles, numbers, members of the medium, temperature. */
-export function takesTolerance({ type, place, name }: InputFacts): boolean {
-  return type === "quantity" && (place !== "operating" || name === "temperature");
-}
-
 /** What a widget's page calls the tolerance of an input among the values that it sends. */
 export function toleranceName(input: string): string {
   return `${input}.tolerance`;

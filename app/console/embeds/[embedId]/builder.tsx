@@ -9,6 +9,7 @@ import { callConsole } from "../../_shell/call-console";
 import { AppearanceFields } from "./appearance-fields";
 import { InputRules } from "./input-rules";
 import { Preview } from "./preview";
+import { ToleranceFields } from "./tolerance-fields";
 import { type Draft, useDraft } from "./use-draft";
 
 interface BuilderProps {
@@ -41,6 +42,7 @@ function BuilderFields({ detail, onChanged, act }: BuilderProps) {
           <legend className="sr-only">What the embed says</legend>
           <AppearanceFields detail={detail} draft={draft} />
           <InputRules detail={detail} draft={draft} />
+          <ToleranceFields detail={detail} draft={draft} />
         </fieldset>
       </div>
       <div className="min-w-0 wide:sticky wide:top-2 wide:self-start">
@@ -104,12 +106,20 @@ const PLACES: Readonly<Record<string, string>> = {
   requirement: "The requirement",
   graded: "The graded medium",
   inputs: "Inputs:",
+  tolerances: "Tolerances:",
   shape: "The shape",
 };
 
 function placeText(pointer: string, { definition }: Draft, { inputs }: EmbedDetail): string {
-  const [, place, index] = pointer.split("/");
-  const name = place === "inputs" && index !== undefined ? definition.inputs[Number(index)]?.name : undefined;
-  if (name !== undefined) return `${inputs.find((input) => input.name === name)?.label ?? name}:`;
+  const [, place, ...rest] = pointer.split("/");
+  const labelOf = (name: string) => inputs.find((input) => input.name === name)?.label ?? name;
+  if (place === "inputs") {
+    const name = definition.inputs[Number(rest[0])]?.name;
+    if (name !== undefined) return `${labelOf(name)}:`;
+  }
+  if (place === "tolerances" && rest[0] === "inputs") {
+    const name = definition.tolerances?.inputs[Number(rest[1])]?.name;
+    if (name !== undefined) return `Tolerance of ${labelOf(name)}:`;
+  }
   return PLACES[place ?? ""] ?? "";
 }

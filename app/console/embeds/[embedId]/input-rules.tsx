@@ -32,6 +32,16 @@ export function InputRules({ detail, draft }: RulesProps) {
     setAdding("");
   }
 
+  function remove(gone: string) {
+    const kept = <Entry extends { readonly name: string }>(entries: readonly Entry[]) =>
+      entries.filter(({ name }) => name !== gone);
+    const { inputs, tolerances } = definition;
+    change({
+      inputs: kept(inputs),
+      tolerances: tolerances && { ...tolerances, inputs: kept(tolerances.inputs) },
+    });
+  }
+
   return (
     <>
       <h2 className="text-h3! mt-1 mb-0.5">Inputs</h2>
@@ -56,7 +66,7 @@ export function InputRules({ detail, draft }: RulesProps) {
             onChange={(next: InputRule) =>
               put(definition.inputs.map((each, at) => (at === index ? { name, rule: next } : each)))
             }
-            onRemove={() => put(definition.inputs.filter((_, at) => at !== index))}
+            onRemove={() => remove(name)}
             onUp={index === 0 ? undefined : () => put(swapped(definition.inputs, index))}
           />
         );
