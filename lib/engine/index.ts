@@ -115,7 +115,7 @@ export {
   type FieldRequest,
 } from "./field/request/field-request-schema";
 export { fieldPeakSchema, fieldResultSchema, type FieldResult } from "./field/request/field-result-schema";
-export { presentField, presentProgress } from "./field/request/field-result";
+export { FIELD_CAUTION, presentField, presentProgress } from "./field/request/field-result";
 export {
   prepareField,
   type FieldContext,
@@ -137,6 +137,7 @@ export { boundaryFlux } from "./field/picture/boundary-flux";
 export { fieldLines } from "./field/picture/contours";
 export type { FieldMap } from "./field/picture/field-map";
 export { sampleLine } from "./field/picture/line";
+export { PAPER_COLOURS, type PlotColours, type PlotLook } from "./field/picture/plot-look";
 export { plotSvg, type PlotText } from "./field/picture/plot-svg";
 export { densityPeak } from "./field/picture/peak";
 export { densityRaster } from "./field/picture/raster";

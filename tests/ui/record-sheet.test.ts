@@ -1,10 +1,24 @@
 import { describe, expect, it } from "vitest";
 import { recordContent } from "@/app/(site)/records/_content/build-content";
 import { readRecordCode, recordCode } from "@/app/(site)/records/_content/record-code";
+import type { Draw } from "@/app/(site)/records/_content/content";
 import { sheetPdf } from "@/app/(site)/records/_sheet/sheet-pdf";
-import { computeResistance, computeSizing, exampleRequest, findShape, libraryMaterial } from "@/lib/engine";
+import { inOutline } from "@/app/(site)/records/_content/open-again";
+import { outlineSvg, storedOutline } from "@/app/(site)/records/_content/outline-svg";
+import { sketchFromHash } from "@/app/(site)/outline/_model/address";
+import { fieldBody } from "@/app/(site)/outline/_model/field-body";
+import { EMPTY_SKETCH } from "@/app/(site)/outline/_model/start-outlines";
+import {
+  computeResistance,
+  computeSizing,
+  exampleRequest,
+  findShape,
+  libraryMaterial,
+  PAPER_COLOURS,
+  type PlotLook,
+} from "@/lib/engine";
 import type { RecordView } from "@/lib/records/records";
-import { BEND } from "../support/field";
+import { BEND, polygon } from "../support/field";
 import { pdfPages, pdfTitle } from "../support/pdf-text";
 
 const INCLUDE = ["steps", "profile", "checks", "peak"];
@@ -26,9 +40,10 @@ function recordOf(request: Readonly<Record<string, unknown>>, label = "Main bar,
   };
 }
 
-const contentOf = (record: RecordView, plot: string | null = null) =>
+const contentOf = (record: RecordView, plot: Draw | null = null) =>
   recordContent(record, { origin: "https://rho.merrow-pike.example", team: "Busbar", lookUp, plot });
 
+const LOOK = { width: 640, tallest: 400, titled: false, colours: PAPER_COLOURS, id: "test" };
 const BAR = {
   shape: "bar",
   dimensions: { length: "250 mm", width: { value: "40 mm", tolerance: "0.1 mm" }, thickness: "5 mm" },
@@ -110,11 +125,11 @@ describe("what a record tells", () => {
   });
 
   it("opens again with the same inputs", () => {
-    expect(content.openHref).toBe(
+    expect(content.openAgain?.href).toBe(
       "/calculate/bar?length=250mm&width=40mm&width.tolerance=0.1mm&thickness=5mm&material=copper-annealed&temperature=75degC&current=630A&max=1mohm&uncertainty=propagation",
     );
     const uneven = { ...BAR, dimensions: { ...BAR.dimensions, width: { value: "40 mm", plus: "1 mm" } } };
-    expect(contentOf(recordOf(uneven)).openHref).toBeUndefined();
+    expect(contentOf(recordOf(uneven)).openAgain).toBeUndefined();
   });
 
   it("shows what was stored as it is where it does not know the form", () => {
@@ -159,7 +174,86 @@ describe("a sizing's record", () => {
     const result = { ...rest, shape: undefined, solveFor: "scaleX", solutions };
     const content = sizing({ ...BEND, solveFor: "scaleX", target: "400 ohm" }, result);
     expect(content.subject).toBe("Outline: sizing");
-    expect(content.picture?.kind === "svg" && content.picture.svg).toContain("<tspan");
+    expect(content.picture?.kind === "svg" && content.picture.draw(LOOK)).toContain("<tspan");
+  });
+});
+
+describe("a field's record, opened again in Outline", () => {
+  const opened = async (body: object) => {
+    const again = inOutline(body);
+    if (!again) throw new Error("There is no way back.");
+    expect(again.page).toBe("Outline");
+    const sketch = await sketchFromHash(
+      new URL(again.href, "https://rho.example").hash.slice(1),
+      EMPTY_SKETCH,
+    );
+    return { href: again.href, body: sketch && fieldBody(sketch) };
+  };
+
+  it("has the outline, terminals, medium, accuracy, operating point and requirement of the record", async () => {
+    const asked = {
+      outline: {
+        ...BEND.outline,
+        symmetry: "plan",
+        holes: [
+          [
+            [0.4, 0.4],
+            [0.6, 0.4],
+            [0.5, 0.6],
+          ],
+        ],
+      },
+      terminals: BEND.terminals,
+      medium: {
+        sheetResistance: "50 ohm/sq",
+        regions: [
+          {
+            ring: [
+              [2, 0],
+              [3, 0],
+              [3, 1],
+              [2, 1],
+            ],
+            medium: { sheetResistance: 5 },
+          },
+        ],
+      },
+      accuracy: 3e-5,
+      operating: { voltage: "5 V" },
+      requirement: { max: "400 ohm" },
+    };
+    const { href, body } = await opened(asked);
+    expect(href).toMatch(/^\/outline#body=/);
+    expect(body).toMatchObject({
+      outline: { unit: "mm", outer: BEND.outline.outer, holes: asked.outline.holes },
+      terminals: [
+        { name: "in", parts: [{ ring: 0, edge: 1 }] },
+        { name: "out", parts: [{ ring: 0, edge: 4 }] },
+      ],
+      medium: { sheetResistance: "50 ohm/sq", regions: [{ medium: { sheetResistance: "5" } }] },
+      accuracy: 3e-5,
+      operating: { voltage: "5 V" },
+      requirement: { max: "400 ohm" },
+    });
+  });
+
+  it("is packed where it is long", async () => {
+    const outer = polygon(0, 0, 10, 200);
+    const asked = {
+      ...BEND,
+      outline: { unit: "mm", outer },
+      terminals: [
+        { name: "a", parts: [{ ring: 0, edge: 0 }] },
+        { name: "b", parts: [{ ring: 0, edge: 100 }] },
+      ],
+    };
+    const { href, body } = await opened(asked);
+    expect(href).toMatch(/^\/outline#packed=[\w-]+$/);
+    expect(body?.outline.outer).toEqual(outer);
+  });
+
+  it("is not offered where the page has no field for what was asked", () => {
+    expect(inOutline({ ...BEND, medium: { ...BEND.medium, weather: "wet" } })).toBeUndefined();
   });
 });
 
@@ -182,6 +276,22 @@ describe.each(["a4", "letter"] as const)("the printed sheet on %s", (paper) => {
       expect(page).toContain(`page ${index + 1} of ${pages.length}`);
     });
     for (const { title } of content.sections) expect(all).toContain(title);
+  });
+
+  it("draws a field over the width of the text, on white, its words at 7 points or more", async () => {
+    let look: PlotLook | undefined;
+    const draw = (asked: PlotLook) => {
+      look = asked;
+      return outlineSvg(storedOutline.parse(BEND.outline), BEND.terminals, asked);
+    };
+    const content = { ...contentOf(recordOf(BAR)), picture: { kind: "svg" as const, draw, description: "" } };
+    await sheetPdf(content, paper);
+    const textWidth = (paper === "a4" ? 595.28 : 612) - 92;
+    const points = textWidth / (look?.width ?? 0);
+    expect(14 * points).toBeGreaterThanOrEqual(7);
+    // A square conductor covers more than half of the paper's width.
+    expect((look?.tallest ?? 0) * points).toBeGreaterThan(textWidth / 2 + 46);
+    expect(look?.colours.ground).toBeNull();
   });
 
   it("carries a graded shell with its layers", async () => {

@@ -48,7 +48,10 @@ export function done(setCookies: readonly string[] = []): PageAnswer {
   return new PageAnswer(204, { kind: "none" }, {}, setCookies);
 }
 
-/** Runs `work` for a call and answers with what it returns, or with the problem it throws. Never throws. */
+/**
+ * Runs `work` for a call and answers with what it returns, or with the problem it throws. Never throws. A Response is a
+ * document of its own, with its own headers, and goes out as it is.
+ */
 export async function answerPageCall(
   request: Request,
   work: (call: PageCall, limits: BucketState[]) => Promise<unknown>,
@@ -67,9 +70,13 @@ export async function answerPageCall(
   const limits: BucketState[] = [];
   let answer: Answer;
   let setCookies: readonly string[] = [];
+  let document: Response | undefined;
   try {
     const result = await work(call, limits);
-    if (result instanceof PageAnswer) {
+    if (result instanceof Response) {
+      document = result;
+      answer = answerOf(result.status, { kind: "none" });
+    } else if (result instanceof PageAnswer) {
       answer = answerOf(result.status, result.content, result.headers);
       setCookies = result.setCookies;
     } else {
@@ -90,6 +97,7 @@ export async function answerPageCall(
     caller: "page",
     address: call.address,
   });
+  if (document) return document;
   const response = respond(answer, {
     requestId: call.requestId,
     secure: service.config.origin.startsWith("https:"),

@@ -14,9 +14,21 @@ const LONGEST_PLAIN = 1500;
 
 export async function sketchToHash(sketch: Sketch): Promise<string> {
   const text = JSON.stringify(fieldBody(sketch));
-  if (text.length <= LONGEST_PLAIN) return `body=${encodePlain(text)}`;
-  const packed = await pump(new TextEncoder().encode(text), new CompressionStream("deflate-raw"));
+  return plainHash(text) ?? packedHash(await pump(encoded(text), new CompressionStream("deflate-raw")));
+}
+
+/** The body's JSON as it is; null where it is too long for that. */
+export function plainHash(text: string): string | null {
+  return text.length <= LONGEST_PLAIN ? `body=${encodePlain(text)}` : null;
+}
+
+/** `packed` is the body's JSON in UTF-8, compressed as "deflate-raw". */
+export function packedHash(packed: Uint8Array): string {
   return `packed=${toBase64(packed)}`;
+}
+
+function encoded(text: string): Uint8Array<ArrayBuffer> {
+  return new TextEncoder().encode(text);
 }
 
 /** The sketch behind the "#", without it; null where there is none or it cannot be read. */

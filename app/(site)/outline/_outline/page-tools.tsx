@@ -27,7 +27,8 @@ export function PageTools({ state, onReplace }: PageToolsProps) {
 
   function begin(id: string) {
     onReplace(id === "empty" ? EMPTY_SKETCH : startSketch(id));
-    toast("Another drawing is there.", { undo });
+    const title = START_OUTLINES.find((start) => start.id === id)?.title ?? "An empty board";
+    toast(`“${title}” has taken the place of your drawing. Undo brings yours back.`, { undo });
   }
 
   async function copyLink() {

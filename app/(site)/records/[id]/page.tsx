@@ -35,7 +35,7 @@ export default async function RecordPage({ params }: PageProps) {
       <RecordActions
         id={content.id}
         label={content.label}
-        openHref={content.openHref}
+        openAgain={content.openAgain}
         readOnly={readOnly(rights, content.team)}
       />
       <RecordSheet content={content} />

@@ -1,5 +1,5 @@
 import type { RecordView } from "@/lib/records/records";
-import type { Fact, RecordContent, Told } from "./content";
+import type { Draw, Fact, RecordContent, Told } from "./content";
 import { tellField } from "./of-field";
 import { tellNetwork } from "./of-network";
 import { type LookUp, tellResistance } from "./of-resistance";
@@ -12,8 +12,8 @@ interface Surroundings {
   readonly origin: string;
   readonly team: string;
   readonly lookUp: LookUp;
-  /** The picture of a field solution, where it is kept. */
-  readonly plot: string | null;
+  /** Draws the picture of a field solution, where it is kept. */
+  readonly plot: Draw | null;
 }
 
 /** Everything that a record tells, whichever operation it is of. */
@@ -58,7 +58,7 @@ function tell(
   request: unknown,
   result: unknown,
   lookUp: LookUp,
-  plot: string | null,
+  plot: Draw | null,
 ): Told | null {
   switch (operation) {
     case "resistance":

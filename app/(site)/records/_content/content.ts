@@ -1,5 +1,5 @@
 /** What a record says, in the order in which it says it; the page and the printed sheet both show exactly this. */
-import type { Drawing } from "@/lib/engine";
+import type { Drawing, PlotLook } from "@/lib/engine";
 
 /** One line of a list of pairs. */
 export interface Fact {
@@ -55,6 +55,9 @@ export interface Headline {
   readonly verdict: { readonly outcome: "met" | "not-met" | "undecided"; readonly sentence: string } | null;
 }
 
+/** Draws a picture as SVG in the size and the colours of where it stands; without rules of style. */
+export type Draw = (look: PlotLook) => string;
+
 export type Picture =
   | {
       readonly kind: "shape";
@@ -63,7 +66,17 @@ export type Picture =
       readonly labels: Readonly<Record<string, { readonly symbol: string; readonly value: string }>>;
       readonly terminals: { readonly high: string; readonly low: string };
     }
-  | { readonly kind: "svg"; readonly svg: string; readonly description: string };
+  | {
+      readonly kind: "svg";
+      readonly draw: Draw;
+      readonly description: string;
+    };
+
+/** The page on which the same calculation can be opened again to go on with it. */
+export interface OpenAgain {
+  readonly page: "Calculate" | "Outline";
+  readonly href: string;
+}
 
 /** What an operation tells of its record. */
 export interface Told {
@@ -73,8 +86,7 @@ export interface Told {
   readonly picture: Picture | null;
   readonly cautions: readonly string[];
   readonly sections: readonly Section[];
-  /** Where the same calculation can be opened again to go on with it. */
-  readonly openHref?: string;
+  readonly openAgain?: OpenAgain;
 }
 
 export interface RecordContent extends Told {

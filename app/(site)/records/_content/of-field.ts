@@ -2,10 +2,11 @@
 import { z } from "zod";
 import { fieldResultSchema, type FieldResult } from "@/lib/engine";
 import { bracketOf, boundedHeadline, checksSection, linesSection, operatingFacts, verdictOf } from "./answer";
-import type { Block, Fact, Headline, Picture, Section, Told } from "./content";
+import type { Block, Draw, Fact, Headline, Picture, Section, Told } from "./content";
 import { askedTable } from "./inputs";
 import { materialBlocks, mediumBlocks } from "./medium";
 import type { LookUp } from "./of-resistance";
+import { inOutline } from "./open-again";
 import { outlineSvg, storedOutline, storedTerminals } from "./outline-svg";
 import { plainNumber } from "./typed";
 
@@ -22,12 +23,12 @@ export const storedFieldRequest = z.object({
 });
 type StoredRequest = z.infer<typeof storedFieldRequest>;
 
-/** `plot` is the finished picture, where its map is still kept; without it the outline is drawn. */
+/** `plot` draws the finished picture, where its map is still kept; without it the outline is drawn. */
 export function tellField(
   request: unknown,
   result: unknown,
   lookUp: LookUp,
-  plot: string | null,
+  plot: Draw | null,
 ): Told | null {
   const asked = storedFieldRequest.safeParse(request);
   const answer = fieldResultSchema.safeParse(result);
@@ -35,12 +36,12 @@ export function tellField(
   const picture: Picture = plot
     ? {
         kind: "svg",
-        svg: plot,
+        draw: plot,
         description: "Current density, equipotentials and stream lines on the outline.",
       }
     : {
         kind: "svg",
-        svg: outlineSvg(asked.data.outline, asked.data.terminals),
+        draw: (look) => outlineSvg(asked.data.outline, asked.data.terminals, look),
         description: "The outline with its terminals.",
       };
   return {
@@ -49,6 +50,7 @@ export function tellField(
     picture,
     cautions: answer.data.cautions,
     sections: [...outlineSections(asked.data, answer.data.materials, lookUp), ...answers(answer.data)],
+    openAgain: inOutline(request),
   };
 }
 

@@ -20,7 +20,7 @@ import {
 import type { Block, Fact, Section, Told } from "./content";
 import { askedTable, dimensionsTable, shapePicture } from "./inputs";
 import { materialBlocks, mediumBlocks } from "./medium";
-import { calculatorHref } from "./open-again";
+import { inCalculator } from "./open-again";
 import { words } from "./typed";
 
 const given = z.record(z.string(), z.unknown());
@@ -54,7 +54,7 @@ export function tellResistance(request: unknown, result: unknown, lookUp: LookUp
     },
     picture: shapePicture(asked.data.shape, asked.data.dimensions),
     cautions,
-    openHref: calculatorHref(asked.data),
+    openAgain: inCalculator(asked.data),
     sections: [
       ...inputSections(asked.data, answer.data.materials, lookUp),
       ...answerSections(asked.data, answer.data),

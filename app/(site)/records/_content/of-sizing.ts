@@ -64,7 +64,7 @@ function ofOutline(asked: z.infer<typeof onOutline>, result: SizingResult, lookU
     headline: sizingHeadline(label, result),
     picture: {
       kind: "svg",
-      svg: outlineSvg(outline, terminals),
+      draw: (look) => outlineSvg(outline, terminals, look),
       description: "The outline with its terminals, before it is scaled.",
     },
     cautions: allCautions(result),

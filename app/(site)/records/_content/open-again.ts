@@ -1,8 +1,14 @@
-/** The address of the calculator with the inputs of a record, to go on from there. */
+/** The address of the page on which a record's calculation can be gone on with, its inputs in place. */
+import { deflateRawSync } from "node:zlib";
 import { findShape, shapeEntry } from "@/lib/engine";
 import { splitAddress } from "../../calculate/_model/address";
 import { exampleParameters } from "../../calculate/_model/parameters";
 import { stateQuery } from "../../calculate/_model/variants";
+import { packedHash, plainHash } from "../../outline/_model/address";
+import { fieldBody } from "../../outline/_model/field-body";
+import { readBody } from "../../outline/_model/read-body";
+import { EMPTY_SKETCH } from "../../outline/_model/start-outlines";
+import type { OpenAgain } from "./content";
 import { nominal } from "./typed";
 
 type Given = Readonly<Record<string, unknown>>;
@@ -18,7 +24,7 @@ interface Asked {
 }
 
 /** Undefined where the calculator has no field for something that was asked. */
-export function calculatorHref(asked: Asked): string | undefined {
+export function inCalculator(asked: Asked): OpenAgain | undefined {
   const shape = findShape(asked.shape);
   if (!shape) return undefined;
   const { dimensions, medium, media, operating = {}, requirement = {}, uncertainty = {} } = asked;
@@ -41,7 +47,18 @@ export function calculatorHref(asked: Asked): string | undefined {
   tolerances("", { ...dimensions, ...operating, ...medium }, parameters);
   for (const [name, one] of Object.entries(media ?? {})) tolerances(`${name}.`, one, parameters);
   const { query, behind } = splitAddress(stateQuery({ variants: [parameters], active: 0 }, entry));
-  return `/calculate/${entry.id}?${query}${behind === "" ? "" : `#${behind}`}`;
+  return { page: "Calculate", href: `/calculate/${entry.id}?${query}${behind === "" ? "" : `#${behind}`}` };
+}
+
+/**
+ * `body` is the stored request of a field, its outline and terminals in it: a stored outline that was named by its id
+ * has been put in its place. Undefined where the outline page has no field for something that was asked.
+ */
+export function inOutline(body: unknown): OpenAgain | undefined {
+  const reading = readBody(body, EMPTY_SKETCH);
+  if (!reading.ok) return undefined;
+  const text = JSON.stringify(fieldBody(reading.sketch));
+  return { page: "Outline", href: `/outline#${plainHash(text) ?? packedHash(deflateRawSync(text))}` };
 }
 
 function tolerances(prefix: string, given: Given, parameters: Record<string, string>): void {

@@ -9,13 +9,13 @@ import { CONTROL, Field } from "../../../_ui/field";
 import { ProblemNotice, type ProblemShown } from "../../../_ui/problem-notice";
 import { ToastArea, useToast } from "../../../_ui/toast";
 import { ApiProblem, callApi } from "../../_live/call-api";
+import type { OpenAgain } from "../_content/content";
 import { Replay } from "./replay";
 
 interface RecordActionsProps {
   readonly id: string;
   readonly label: string;
-  /** The same calculation on its page, to go on with it. */
-  readonly openHref?: string;
+  readonly openAgain?: OpenAgain;
   /** Why the reader cannot replay, relabel and delete; null where they can. */
   readonly readOnly: string | null;
 }
@@ -29,7 +29,7 @@ export function RecordActions(props: RecordActionsProps) {
   );
 }
 
-function Actions({ id, label, openHref, readOnly }: RecordActionsProps) {
+function Actions({ id, label, openAgain, readOnly }: RecordActionsProps) {
   const [asking, setAsking] = useState<"relabel" | "delete" | null>(null);
   const [replaying, setReplaying] = useState(0);
   return (
@@ -40,9 +40,9 @@ function Actions({ id, label, openHref, readOnly }: RecordActionsProps) {
         <Button variant="quiet" onClick={() => window.print()}>
           <Printer aria-hidden size={16} /> Print
         </Button>
-        {openHref ? (
-          <ButtonLink href={openHref} variant="quiet" prefetch={false}>
-            <SquarePen aria-hidden size={16} /> Open in Calculate
+        {openAgain ? (
+          <ButtonLink href={openAgain.href} variant="quiet" prefetch={false}>
+            <SquarePen aria-hidden size={16} /> Open in {openAgain.page}
           </ButtonLink>
         ) : null}
         {readOnly === null ? (

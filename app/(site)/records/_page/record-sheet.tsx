@@ -2,8 +2,8 @@ import type { ReactNode } from "react";
 import { LocalTime } from "../../../_ui/local-time";
 import { Notice } from "../../../_ui/notice";
 import { ShapeDrawing } from "../../../_ui/drawing/shape-drawing";
+import { FieldPicture } from "./field-picture";
 import type { Headline, Picture, RecordContent } from "../_content/content";
-import { plainSvg } from "../_content/plain-svg";
 import { RecordSection } from "./blocks";
 
 const TONES = {
@@ -36,7 +36,7 @@ export function RecordSheet({ content }: { readonly content: RecordContent }) {
         </Meta>
       </dl>
       <div
-        className={`mt-2 grid grid-cols-1 items-start gap-x-5 gap-y-2 ${picture ? "wide:grid-cols-[minmax(0,5fr)_minmax(0,6fr)] print:grid-cols-1" : ""}`}
+        className={`mt-2 grid grid-cols-1 items-start gap-x-5 gap-y-2 ${picture?.kind === "shape" ? "wide:grid-cols-[minmax(0,5fr)_minmax(0,6fr)] print:grid-cols-1" : ""}`}
       >
         <div className="grid grid-cols-1 gap-1.5">
           <HeadlineView headline={headline} />
@@ -105,23 +105,19 @@ function Cautions({ cautions }: { readonly cautions: readonly string[] }) {
 }
 
 function PictureView({ picture, id }: { readonly picture: Picture; readonly id: string }) {
-  return (
-    <div className="rounded border border-rule bg-sheet px-1 py-1.5 print:mx-auto print:w-full print:max-w-[150mm] print:break-inside-avoid">
-      {picture.kind === "shape" ? (
-        <ShapeDrawing
-          drawing={picture.drawing}
-          toScale={picture.toScale}
-          labels={picture.labels}
-          terminals={picture.terminals}
-        />
-      ) : (
-        <div
-          role="img"
-          aria-label={picture.description}
-          className="[&>svg]:mx-auto [&>svg]:h-auto [&>svg]:w-full [&>svg]:max-w-[720px] [&_text]:font-sans"
-          dangerouslySetInnerHTML={{ __html: plainSvg(picture.svg, `${id}-conductor`) }}
-        />
-      )}
+  const frame = "rounded border border-rule bg-sheet px-1 py-1.5 print:break-inside-avoid";
+  return picture.kind === "shape" ? (
+    <div className={`${frame} print:mx-auto print:w-full print:max-w-[150mm]`}>
+      <ShapeDrawing
+        drawing={picture.drawing}
+        toScale={picture.toScale}
+        labels={picture.labels}
+        terminals={picture.terminals}
+      />
+    </div>
+  ) : (
+    <div className={`${frame} print:border-0 print:p-0`}>
+      <FieldPicture draw={picture.draw} description={picture.description} id={id} />
     </div>
   );
 }

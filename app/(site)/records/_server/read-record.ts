@@ -10,7 +10,7 @@ import { pinnedMaterial } from "@/lib/materials/team-materials";
 import { recordView } from "@/lib/records/records";
 import { type Service, sharedService } from "@/lib/service/service";
 import { recordContent } from "../_content/build-content";
-import type { RecordContent } from "../_content/content";
+import type { Draw, RecordContent } from "../_content/content";
 import { readRecordCode, recordCode } from "../_content/record-code";
 
 /** What a reader of a record may do with it. */
@@ -67,8 +67,8 @@ function idOfCode({ db }: Service, reader: SignedIn, code: string): string | und
   ).find((id) => recordCode(id) === code);
 }
 
-/** The picture of the field solution that stored a record; null where its map is gone. */
-async function fieldPlot({ db, fields }: Service, recordId: string): Promise<string | null> {
+/** Draws the picture of the field solution that stored a record; null where its map is gone. */
+async function fieldPlot({ db, fields }: Service, recordId: string): Promise<Draw | null> {
   const row = fieldOfRecord(db, recordId);
   if (!row?.result) return null;
   const map = await fields.files.read(row.id);
@@ -77,5 +77,6 @@ async function fieldPlot({ db, fields }: Service, recordId: string): Promise<str
   const request = JSON.parse(row.request) as FieldRequest;
   const result = JSON.parse(row.result) as FieldResult;
   const names = (request.terminals ?? []).map(({ name }) => name);
-  return plotSvg(map, plotTextOf(result, map, names, request.outline?.unit ?? "m"));
+  const text = plotTextOf(result, map, names, request.outline?.unit ?? "m");
+  return (look) => plotSvg(map, text, look);
 }

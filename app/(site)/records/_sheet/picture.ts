@@ -4,8 +4,8 @@ import { type Arrowhead, type PlacedDimension } from "../../../_ui/drawing/dimen
 import { layoutSheet } from "../../../_ui/drawing/sheet";
 import type { ViewLayout } from "../../../_ui/drawing/view-layout";
 import { symbolParts } from "../../../_ui/symbol-text";
-import type { Picture } from "../_content/content";
-import { plainSvg } from "../_content/plain-svg";
+import { PAPER_COLOURS } from "@/lib/engine";
+import type { Draw, Picture } from "../_content/content";
 import { INK, type Pen, SOFT } from "./pen";
 
 const COPPER = "#9C4A1F";
@@ -20,7 +20,7 @@ const TALLEST = 300;
 /** Draws the picture of a record as vectors, centred, and moves on below it. */
 export function drawPicture(pen: Pen, picture: Picture): void {
   if (picture.kind === "shape") drawShape(pen, picture);
-  else drawSvg(pen, picture.svg);
+  else drawSvg(pen, picture.draw);
 }
 
 function drawShape(pen: Pen, picture: Extract<Picture, { kind: "shape" }>): void {
@@ -172,28 +172,35 @@ function arrowPath({ tip, angle }: Arrowhead): string {
   return `M${tip[0]} ${tip[1]}L${back(0.18)}L${back(-0.18)}Z`;
 }
 
-/** Size of an SVG by its viewBox. */
-function sizeOf(svg: string): readonly [number, number] {
-  const box = /viewBox="0 0 ([\d.]+) ([\d.]+)"/.exec(svg);
-  return box ? [Number(box[1]), Number(box[2])] : [LAYOUT, LAYOUT];
-}
+/** Points for a unit of a picture's layout: its texts, 14 units high, are printed at 8.4 points. */
+const POINTS = 0.6;
+/** Tallest conductor on paper, points: with scale and legend below it stays on the first page. */
+const TALLEST_FIELD = 340;
 
-function drawSvg(pen: Pen, source: string): void {
-  // Its own size would outrank the one on paper, and a halo would be drawn over its letters.
-  const svg = withSymbols(plainSvg(source, "conductor"))
-    .replace(/(<svg[^>]*?) width="[^"]*" height="[^"]*"/, "$1")
-    .replaceAll(' stroke="#faf8f3" stroke-width="5" paint-order="stroke"', "");
-  const [width, height] = sizeOf(svg);
-  const scale = Math.min(pen.width / width, (TALLEST * 1.25) / height);
-  pen.keep(height * scale + 10);
-  svgToPdf(pen.doc, svg, pen.left + (pen.width - width * scale) / 2, pen.y, {
-    width: width * scale,
-    height: height * scale,
+function drawSvg(pen: Pen, draw: Draw): void {
+  const look = {
+    width: Math.floor(pen.width / POINTS),
+    tallest: TALLEST_FIELD / POINTS,
+    titled: false,
+    colours: PAPER_COLOURS,
+    id: "sheet",
+  };
+  const drawn = draw(look);
+  const height = Number(/viewBox="0 0 [\d.]+ ([\d.]+)"/.exec(drawn)?.[1] ?? look.width) * POINTS;
+  // Title and description are for screens, and its own size would outrank the one on paper.
+  const svg = withSymbols(drawn.replace(/<title[^>]*>.*?<\/title>|<desc[^>]*>.*?<\/desc>/gs, "")).replace(
+    /(<svg[^>]*?) width="[^"]*" height="[^"]*"/,
+    "$1",
+  );
+  pen.keep(height + 10);
+  svgToPdf(pen.doc, svg, pen.left, pen.y, {
+    width: look.width * POINTS,
+    height,
     assumePt: true,
     fontCallback: (family: string, bold: boolean) =>
       family.includes("symbol") ? "symbol" : bold ? "strong" : "text",
   });
-  pen.y += height * scale + 8;
+  pen.y += height + 8;
 }
 
 /** Characters that the text face lacks, in texts of a picture, get the face that has them. */

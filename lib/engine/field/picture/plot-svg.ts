@@ -7,7 +7,10 @@ import { fieldLines } from "./contours";
 import type { FieldMap } from "./field-map";
 import { regionBorders } from "./region-borders";
 import { densityRaster, type DensityRaster } from "./raster";
-import { placeLabel, TERMINAL_COLOURS } from "./terminal-label";
+import { plotFoot, footHeight } from "./plot-foot";
+import { FILE_LOOK, FONT, MARGIN, NARROW, type PlotLook } from "./plot-look";
+import { namedPieces, padsFor, plotTerminals } from "./plot-terminals";
+import { escapeText, px } from "./plot-text";
 
 export interface PlotText {
   /** First line, such as "R = 327.94 Ω". */
@@ -19,13 +22,10 @@ export interface PlotText {
   readonly unit: string;
 }
 
-const WIDTH = 960;
-const MARGIN = 56;
-const HEAD = 100;
-const FOOT = 124;
-/** Tallest and flattest drawing, as height over width; longer ones are fitted into the frame. */
-const TALLEST = 1;
-const FLATTEST = 0.22;
+/** Room above the conductor for result and bounds, px. */
+const HEAD = 72;
+/** A conductor of any proportions is drawn at least so high, px. */
+const LOWEST = 8;
 const BANDS = 9;
 const LINES = 20;
 /** Shares of voltage and current that lines may cut, and how near they may come to each other on average, px. */
@@ -33,23 +33,33 @@ const SHARES = [LINES, 10, 5, 4, 2];
 const LEAST_APART = 4;
 /** Densities above this share of the raster's cells are one colour: a corner would swallow the scale. */
 const TOP_SHARE = 0.985;
+/** An axis that is farther from the conductor than this share of its width is told and not drawn. */
+const AXIS_NEAR = 0.6;
 
-/** SVG text of the picture. */
-export function plotSvg(map: FieldMap, text: PlotText): string {
+/** SVG text of the picture. It has attributes and no rules of style, so that it can stand inside a page. */
+export function plotSvg(map: FieldMap, text: PlotText, look: PlotLook = FILE_LOOK): string {
+  const { width, colours } = look;
   const { rings, pieces } = boundaryRings(map);
-  const box = boxOf(rings);
-  const inner = WIDTH - 2 * MARGIN;
-  const shape = (box.maxY - box.minY) / (box.maxX - box.minX);
-  const height = inner * Math.min(TALLEST, Math.max(FLATTEST, shape));
-  const scale = Math.min(inner / (box.maxX - box.minX), height / (box.maxY - box.minY));
-  const left = MARGIN + (inner - scale * (box.maxX - box.minX)) / 2;
-  const top = HEAD + (height - scale * (box.maxY - box.minY)) / 2;
-  const px = (x: number): number => left + scale * (x - box.minX);
-  const py = (y: number): number => top + scale * (box.maxY - y);
+  const body = boxOf(rings);
+  const axisShown = map.axisymmetric && body.minX < AXIS_NEAR * (body.maxX - body.minX);
+  const box = axisShown ? { ...body, minX: Math.min(0, body.minX) } : body;
+  const named = namedPieces(pieces, text.terminalNames);
+  const pads = padsFor(named, width);
+  const inner = width - 2 * MARGIN - pads.left - pads.right;
+  const scale = Math.min(inner / (box.maxX - box.minX), look.tallest / (box.maxY - box.minY));
+  const height = Math.max(LOWEST, scale * (box.maxY - box.minY));
+  const left = MARGIN + pads.left + (inner - scale * (box.maxX - box.minX)) / 2;
+  const head = look.titled ? HEAD : 0;
+  const top = head + pads.top + (height - scale * (box.maxY - box.minY)) / 2;
+  const bottom = head + pads.top + height + pads.bottom;
+  const x = (value: number): number => left + scale * (value - box.minX);
+  const y = (value: number): number => top + scale * (box.maxY - value);
+  const shown = (line: readonly number[]): number[] =>
+    line.map((value, k) => (k % 2 === 0 ? x(value) : y(value)));
   const path = (line: readonly number[], closed = false): string => {
     let d = "";
     for (let k = 0; k < line.length; k += 2)
-      d += `${k === 0 ? "M" : "L"}${n(px(line[k]))} ${n(py(line[k + 1]))}`;
+      d += `${k === 0 ? "M" : "L"}${px(x(line[k]))} ${px(y(line[k + 1]))}`;
     return closed ? `${d}Z` : d;
   };
   const outline = rings.map((ring) => path(ring, true)).join("");
@@ -63,32 +73,28 @@ export function plotSvg(map: FieldMap, text: PlotText): string {
   const borders = regionBorders(map)
     .map((segment) => path(segment))
     .join("");
-  const total = HEAD + height + FOOT;
-  const frame = { left: MARGIN, right: WIDTH - MARGIN };
-  const terminals = pieces.map(({ terminal, line }) => {
-    const role = ["high", "low"][map.between.indexOf(terminal)] as "high" | "low" | undefined;
-    const colour = TERMINAL_COLOURS[role ?? "open"];
-    const [x, y] = middleOf(line);
-    const shown = line.map((value, k) => (k % 2 === 0 ? px(value) : py(value)));
-    const label = placeLabel(shown, [px(x), py(y)], text.terminalNames[terminal] ?? "", frame);
-    return {
-      bar: `<path d="${path(line)}" fill="none" stroke="${colour}" stroke-width="6" stroke-linecap="round"/>`,
-      name: `<text x="${n(label.x)}" y="${n(label.y)}" text-anchor="${label.anchor}" class="name" style="fill:${colour}">${escape(label.text)}</text>`,
-    };
+  const notes = notesOf({ look, voltages, currents, axisApart: map.axisymmetric && !axisShown });
+  const total = bottom + footHeight(look, notes.length);
+  const terminals = plotTerminals({
+    map,
+    pieces: pieces.map(({ terminal, line }) => ({ terminal, line: shown(line) })),
+    named: named.map((piece) => ({ ...piece, line: shown(piece.line) })),
+    rings: rings.map(shown),
+    frame: { x: 4, y: head + 2, width: width - 8, height: bottom - head - 4 },
+    colours,
   });
-  const axis = map.axisymmetric
-    ? `<path d="M${n(px(0))} ${n(top)}V${n(top + scale * (box.maxY - box.minY))}" stroke="#566067" stroke-dasharray="14 4 3 4"/>`
-    : "";
+  const id = (name: string): string => `${look.id}-${name}`;
   return [
-    `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${WIDTH} ${n(total)}" width="${WIDTH}" height="${n(total)}" role="img" aria-labelledby="t d">`,
-    `<title id="t">${escape(text.title)}</title>`,
-    `<desc id="d">${escape(text.subtitle)} ${voltages - 1} equipotentials and ${currents} equal shares of the current over the current density.</desc>`,
-    `<style>text{font:14px "Spline Sans",system-ui,sans-serif;fill:#1b2226}.title{font-size:22px;font-weight:600}.soft{fill:#566067}.name{font-weight:600;paint-order:stroke;stroke:#faf8f3;stroke-width:5px}</style>`,
-    `<rect width="${WIDTH}" height="${n(total)}" fill="#faf8f3"/>`,
-    `<text x="${MARGIN}" y="34" class="title">${escape(text.title)}</text>`,
-    `<text x="${MARGIN}" y="57" class="soft">${escape(text.subtitle)}</text>`,
-    `<clipPath id="c"><path d="${outline}" clip-rule="evenodd"/></clipPath>`,
-    `<g clip-path="url(#c)">`,
+    `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${width} ${px(total)}" width="${width}" height="${px(total)}" role="img" aria-labelledby="${id("title")} ${id("text")}" font-family="'Spline Sans', system-ui, sans-serif" font-size="${FONT}">`,
+    `<title id="${id("title")}">${escapeText(text.title)}</title>`,
+    `<desc id="${id("text")}">${escapeText(text.subtitle)} ${voltages - 1} equipotentials and ${currents} equal shares of the current over the current density.</desc>`,
+    colours.ground === null ? "" : `<rect width="${width}" height="${px(total)}" fill="${colours.ground}"/>`,
+    look.titled
+      ? `<text x="${MARGIN}" y="34" font-size="22" font-weight="600" fill="${colours.ink}">${escapeText(text.title)}</text>` +
+        `<text x="${MARGIN}" y="57" fill="${colours.soft}">${escapeText(text.subtitle)}</text>`
+      : "",
+    `<clipPath id="${id("conductor")}"><path d="${outline}" clip-rule="evenodd"/></clipPath>`,
+    `<g clip-path="url(#${id("conductor")})">`,
     `<path d="${outline}" fill="${bands.colours[0]}"/>`,
     ...bands.levels.map(
       ({ colour, polygons }) =>
@@ -100,19 +106,44 @@ export function plotSvg(map: FieldMap, text: PlotText): string {
       ? ""
       : `<path d="${borders}" fill="none" stroke="#1b2226" stroke-width="2" stroke-linecap="round"/>`,
     `</g>`,
-    `<path d="${outline}" fill="none" stroke="#1b2226" stroke-width="1.5" stroke-linejoin="round"/>`,
-    axis,
-    ...terminals.map(({ bar }) => bar),
-    ...terminals.map(({ name }) => name),
-    scaleBar(scale, total, text.unit),
-    legend(
-      bands,
-      total,
-      map,
-      `solid: equipotentials, ${100 / voltages} % of the voltage apart · dashed: stream lines, ${100 / currents} % of the current apart`,
-    ),
+    `<path d="${outline}" fill="none" stroke="${colours.ink}" stroke-width="1.5" stroke-linejoin="round"/>`,
+    axisShown
+      ? `<path d="M${px(x(0))} ${px(y(box.maxY) - 12)}V${px(y(box.minY) + 12)}" stroke="${colours.soft}" stroke-dasharray="14 4 3 4"/>`
+      : "",
+    ...terminals,
+    plotFoot({
+      look,
+      y: bottom,
+      scale,
+      unit: text.unit,
+      colours: bands.colours,
+      top: formatQuantity(bands.limits[BANDS - 1], map.axisymmetric ? "A/m^2" : "A/m", { digits: 3 }),
+      notes,
+    }),
     `</svg>`,
   ].join("\n");
+}
+
+/** What the lines are, in as many lines of text as the width asks for. */
+function notesOf({
+  look,
+  voltages,
+  currents,
+  axisApart,
+}: {
+  readonly look: PlotLook;
+  readonly voltages: number;
+  readonly currents: number;
+  readonly axisApart: boolean;
+}): string[] {
+  const lines = [
+    `solid: equipotentials, ${100 / voltages} % of the voltage apart`,
+    `dashed: stream lines, ${100 / currents} % of the current apart`,
+  ];
+  return [
+    ...(look.width < NARROW ? lines : [lines.join(" · ")]),
+    ...(axisApart ? ["The axis x = 0 lies to the left of the picture."] : []),
+  ];
 }
 
 /** As many lines as keep apart from each other: in a long narrow conductor twenty stream lines are one stripe. */
@@ -228,70 +259,4 @@ function bandPath(
 ): string {
   const place = ([x, y]: number[]): number[] => [origin[0] + (x - 0.5) * cell, origin[1] + (y - 0.5) * cell];
   return polygons.flatMap((rings) => rings.map((ring) => path(ring.flatMap(place), true))).join("");
-}
-
-/** The point half way along a line. */
-function middleOf(line: readonly number[]): [number, number] {
-  const lengths: number[] = [];
-  for (let k = 2; k < line.length; k += 2)
-    lengths.push(Math.hypot(line[k] - line[k - 2], line[k + 1] - line[k - 1]));
-  let rest = lengths.reduce((a, b) => a + b, 0) / 2;
-  for (let k = 0; k < lengths.length; k++) {
-    if (rest <= lengths[k] && lengths[k] > 0) {
-      const t = rest / lengths[k];
-      return [
-        line[2 * k] + t * (line[2 * k + 2] - line[2 * k]),
-        line[2 * k + 1] + t * (line[2 * k + 3] - line[2 * k + 1]),
-      ];
-    }
-    rest -= lengths[k];
-  }
-  return [line[0], line[1]];
-}
-
-function scaleBar(scale: number, total: number, unit: string): string {
-  const wanted = 180 / scale;
-  const power = 10 ** Math.floor(Math.log10(wanted));
-  const length = [5, 2, 1].map((f) => f * power).find((l) => l <= wanted) ?? power;
-  const y = total - 64;
-  const width = length * scale;
-  return (
-    `<path d="M${MARGIN} ${n(y - 5)}v10m0 -5h${n(width)}m0 -5v10" stroke="#1b2226" fill="none"/>` +
-    `<text x="${MARGIN}" y="${n(y + 24)}">${plain(length)}\u2009${escape(unit.replace(/^u/, "µ"))}</text>`
-  );
-}
-
-/** 1, 2 or 5 times a power of ten, without rows of zeros. */
-function plain(length: number): string {
-  const power = Math.floor(Math.log10(length) + 1e-9);
-  if (power >= -3 && power < 5) return String(Number(length.toPrecision(3)));
-  const digits = [...String(Math.abs(power))].map((digit) => "⁰¹²³⁴⁵⁶⁷⁸⁹"[Number(digit)]).join("");
-  return `${Math.round(length / 10 ** power)}×10${power < 0 ? "⁻" : ""}${digits}`;
-}
-
-function legend(bands: Bands, total: number, map: FieldMap, lines: string): string {
-  const x = WIDTH - MARGIN - 360;
-  const y = total - 76;
-  const width = 360 / BANDS;
-  const unit = map.axisymmetric ? "A/m^2" : "A/m";
-  const boxes = bands.colours.map(
-    (colour, k) =>
-      `<rect x="${n(x + k * width)}" y="${n(y)}" width="${n(width)}" height="14" fill="${colour}"/>`,
-  );
-  const top = bands.limits[BANDS - 1];
-  return [
-    ...boxes,
-    `<rect x="${n(x)}" y="${n(y)}" width="360" height="14" fill="none" stroke="#857f73"/>`,
-    `<text x="${n(x)}" y="${n(y + 32)}">0</text>`,
-    `<text x="${n(x + 360)}" y="${n(y + 32)}" text-anchor="end">${escape(formatQuantity(top, unit, { digits: 3 }))} and more, at one volt</text>`,
-    `<text x="${n(x + 360)}" y="${n(y + 54)}" text-anchor="end" class="soft">${lines}</text>`,
-  ].join("\n");
-}
-
-function n(value: number): string {
-  return String(Math.round(value * 100) / 100);
-}
-
-function escape(text: string): string {
-  return text.replace(/[&<>"']/g, (c) => `&#${c.charCodeAt(0)};`);
 }

@@ -1,3 +1,7 @@
+import { z } from "zod";
+import { parseParameters } from "@/api/parameters";
+import { Refusal } from "@/lib/service/refusal";
+import { answerPageCall, PageAnswer } from "../../../../api/_server/page-call";
 import { readRecordFor } from "../../_server/read-record";
 import { sheetPdf } from "../../_sheet/sheet-pdf";
 
@@ -5,20 +9,48 @@ interface Context {
   readonly params: Promise<{ readonly id: string }>;
 }
 
-/** The printed sheet of a record: `?paper=a4` (also where nothing is said) or `?paper=letter`. */
+const query = z.strictObject({ paper: z.enum(["a4", "letter"]).default("a4") });
+
+/**
+ * The printed sheet of a record: `?paper=a4` (also where nothing is said) or `?paper=letter`. Refusals are problem
+ * documents; a reader of pages who is signed out is led to the sign-in and back instead.
+ */
 export async function GET(request: Request, { params }: Context): Promise<Response> {
   const { id } = await params;
-  const { pathname, searchParams, search } = new URL(request.url);
-  const paper = searchParams.get("paper") ?? "a4";
-  if (paper !== "a4" && paper !== "letter") return plain(400, "The paper is a4 or letter.");
-  const record = await readRecordFor(request.headers.get("cookie"), id);
-  if (record.kind === "signed-out") return leadTo(`/sign-in?next=${encodeURIComponent(pathname + search)}`);
-  if (record.kind === "elsewhere") return leadTo(`/records/${record.id}/sheet.pdf${search}`);
-  if (record.kind === "unknown") return plain(404, "There is no record under this id that you may see.");
-  const { content } = record;
+  return answerPageCall(request, async ({ url, headers }) => {
+    const { paper } = parseParameters(query, url.searchParams) as z.infer<typeof query>;
+    const record = await readRecordFor(headers.get("cookie"), id);
+    if (record.kind === "signed-out") {
+      if (!headers.get("accept")?.includes("text/html")) {
+        throw new Refusal("sign-in-required", "Sign in first; programs read records from /api/v1/records.");
+      }
+      return leadTo(`/sign-in?next=${encodeURIComponent(url.pathname + url.search)}`);
+    }
+    if (record.kind === "elsewhere") return leadTo(`/records/${record.id}/sheet.pdf${url.search}`);
+    if (record.kind === "unknown") {
+      throw new Refusal("not-found", "There is no record of this id or code that you may see.");
+    }
+    const { label, code } = record.content;
+    return new Response(await sheetPdf(record.content, paper), {
+      headers: {
+        "Content-Type": "application/pdf",
+        "Content-Disposition": disposition(label, code),
+        "Cache-Control": "private, no-store",
+      },
+    });
+  });
+}
+
+/** A redirect by path alone: behind a proxy the request does not tell the address that the reader used. */
+function leadTo(path: string): PageAnswer {
+  return new PageAnswer(303, { kind: "none" }, { Location: path });
+}
+
+/** How the file is called where it is kept: by the record's name, as far as file names and headers bear it. */
+function disposition(label: string, code: string): string {
   // By whole characters: half of one could not be written into a header.
   const name = [
-    ...content.label
+    ...label
       .replace(/[^\p{L}\p{N} ._-]+/gu, " ")
       .replace(/ +/g, " ")
       .trim(),
@@ -26,20 +58,6 @@ export async function GET(request: Request, { params }: Context): Promise<Respon
     .slice(0, 80)
     .join("");
   const ascii = name.replace(/[^ -~]/g, "_");
-  return new Response(await sheetPdf(content, paper), {
-    headers: {
-      "Content-Type": "application/pdf",
-      "Content-Disposition": `inline; filename="${ascii || "Record"} ${content.code}.pdf"; filename*=UTF-8''${encodeURIComponent(`${name || "Record"} ${content.code}.pdf`)}`,
-      "Cache-Control": "private, no-store",
-    },
-  });
-}
-
-/** A redirect by path alone: behind a proxy the request does not tell the address that the reader used. */
-function leadTo(path: string): Response {
-  return new Response(null, { status: 303, headers: { Location: path } });
-}
-
-function plain(status: number, text: string): Response {
-  return new Response(`${text}\n`, { status, headers: { "Content-Type": "text/plain; charset=utf-8" } });
+  const whole = encodeURIComponent(`${name || "Record"} ${code}.pdf`);
+  return `inline; filename="${ascii || "Record"} ${code}.pdf"; filename*=UTF-8''${whole}`;
 }
