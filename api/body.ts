@@ -1,5 +1,6 @@
 import type { z } from "zod";
 import { type Complaint, Refusal } from "@/lib/service/refusal";
+import { decodeText } from "./decode-text";
 import { bodyComplaints } from "./issues";
 
 /** Largest body where an operation names no other limit, bytes. */
@@ -146,12 +147,7 @@ export function bodyRefusal(errors: readonly Complaint[]): Refusal {
 }
 
 function read(readers: BodyReaders, body: ReceivedBody, query: URLSearchParams): unknown {
-  let text: string;
-  try {
-    text = new TextDecoder("utf-8", { fatal: true, ignoreBOM: true }).decode(body.bytes);
-  } catch {
-    throw new Refusal("malformed-json", "The body is not UTF-8.");
-  }
+  const text = decodeText(body.bytes);
   const other = readers.others?.[body.mediaType];
   if (other) return other.read(text, query);
   try {

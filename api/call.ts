@@ -127,6 +127,10 @@ function refused(code: "too-many-requests" | "quota-exhausted", spending: Spendi
   const detail =
     code === "too-many-requests"
       ? `The ${bucket.quota} requests of this minute are used up; the next window starts in ${resetSeconds} s.`
-      : `The call needs ${wanted} of the month's ${bucket.quota} computations and ${remaining} are left until ${ends}.`;
+      : `The call needs ${counted(wanted)}; ${remaining === 0 ? "none" : remaining} of this month's ${bucket.quota} ${remaining === 1 ? "is" : "are"} left until the quota starts anew at ${ends}.`;
   return new Refusal(code, detail, { headers: { "Retry-After": String(resetSeconds) } });
+}
+
+function counted(computations: number): string {
+  return `${computations} ${computations === 1 ? "computation" : "computations"}`;
 }

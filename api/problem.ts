@@ -14,9 +14,9 @@ export interface ProblemKind {
 export const PROBLEMS: Readonly<Record<RefusalCode, ProblemKind>> = {
   "malformed-json": {
     status: 400,
-    title: "The body is not JSON",
-    description: "The body could not be read as JSON in UTF-8.",
-    remedy: "Send one JSON text. The detail names the place where reading stopped.",
+    title: "The body cannot be read",
+    description: "The body is not text in UTF-8, or not JSON where JSON is asked for.",
+    remedy: "Send one JSON text, or a file saved as UTF-8. The detail names the place where reading stopped.",
   },
   "invalid-header": {
     status: 400,
@@ -212,7 +212,7 @@ export const PROBLEMS: Readonly<Record<RefusalCode, ProblemKind>> = {
   },
   "quota-exhausted": {
     status: 429,
-    title: "The quota of this month is used up",
+    title: "The quota of this month does not suffice",
     description: "The call would need more computations than are left of the calendar month (UTC).",
     remedy: "Wait for the next month or have the key's quota raised. Refused computations cost nothing.",
   },

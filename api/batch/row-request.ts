@@ -17,6 +17,8 @@ interface Place {
 /** A cell that is nothing but a number, also a misspelt one: the unit of its column is put behind it. */
 const BARE = /^[\d.,'\s+\-−eE]+$/;
 
+const DECIMAL_COMMA = /^([+\-−]?\d*),(?=\d)/;
+
 /** Turns the rows of one table into requests; what a name means is decided shape by shape. */
 export class RowReader {
   private readonly shapeColumn: number;
@@ -24,23 +26,25 @@ export class RowReader {
 
   constructor(
     private readonly columns: readonly Column[],
-    private readonly width = columns.length,
+    private readonly decimalComma = false,
   ) {
     this.shapeColumn = columns.findIndex((column) => column.role === "row" && column.name === "shape");
   }
 
   /** The body of `POST /resistance` that a row stands for, or why it stands for none. */
   request(cells: readonly string[]): { readonly body: Values } | { readonly complaint: string } {
-    if (cells.slice(this.width).some((cell) => cell.trim() !== "")) {
-      return { complaint: `has ${cells.length} cells; the header names ${this.width} columns.` };
+    const width = this.columns.length;
+    if (cells.slice(width).some((cell) => cell.trim() !== "")) {
+      return { complaint: `has ${cells.length} cells; the header names ${width} columns.` };
     }
     const shape = (cells[this.shapeColumn] ?? "").trim();
     const body: Values = { shape, dimensions: {} };
     const parts: Record<string, Values> = { dimensions: {}, medium: {}, operating: {} };
     const media: Record<string, Values> = {};
     for (const place of this.placesFor(shape)) {
-      const text = (cells[place.index] ?? "").trim();
-      if (text === "") continue;
+      const cell = (cells[place.index] ?? "").trim();
+      if (cell === "") continue;
+      const text = this.decimalComma ? cell.replace(DECIMAL_COMMA, "$1.") : cell;
       const target = place.at === "media" ? (media[place.medium] ??= {}) : parts[place.at];
       target[place.member] = valueOf(text, place);
     }

@@ -109,7 +109,10 @@ describe("POST /resistance/batch refused whole", () => {
     const { key: own } = server.issue({ quotas: { minute: 100, month: 3 } });
     const refused = await post({ items: new Array(4).fill(bar("1 mm")) }, {}, own);
     expectProblem(refused, 429, "quota-exhausted");
-    expect(refused.body.detail).toContain("needs 4 of the month's 3 computations and 3 are left");
+    expect(refused.body.title).not.toContain("used up");
+    expect(refused.body.detail).toContain(
+      "needs 4 computations; 3 of this month's 3 are left until the quota starts anew at ",
+    );
     expect((await post({ items: new Array(3).fill(bar("1 mm")) }, {}, own)).status).toBe(200);
   });
 
@@ -169,19 +172,53 @@ describe("CSV in and out", () => {
     expect((await post(text, CSV)).text).toBe(text);
   });
 
-  test("semicolons, a byte order mark, tabs and decimal commas", async () => {
+  test("semicolons, a byte order mark and tabs", async () => {
     const table = (delimiter: string, mark = "") =>
       mark +
-      ["shape;length;width;thickness;resistivity", "bar;1;2;3;4", "bar;1,5 m;2;3;4"]
+      ["shape;length;width;thickness;resistivity", "bar;1;2;3;4", "bar;1,5 m;2;3;0.4"]
         .join("\n")
         .replaceAll(";", delimiter);
     const semicolons = await post(table(";", "\uFEFF"), CSV);
     expect(semicolons.text.startsWith("\uFEFFshape;length;")).toBe(true);
     expect(lines(semicolons.text)[1]).toMatch(/^bar;1;2;3;4;0\.66666/);
+    // Beside a decimal point a comma may be a slip.
     expect(lines(semicolons.text)[2]).toContain("decimal comma");
     expect(lines((await post(table("\t"), CSV)).text)[1]).toMatch(/^bar\t1\t2\t3\t4\t0\.66666/);
     const commas = await post(table(","), CSV);
     expect(lines(commas.text)[2]).toContain("422,has 6 cells; the header names 5 columns.");
+  });
+
+  test("decimal commas between semicolons: read, and written behind the row", async () => {
+    const table = [
+      "shape;length;width/mm;thickness;resistivity;temperature;label",
+      "bar;1,5 m;2,5;3 mm;4;-12,5;Riser, 1,5 m",
+      "bar;1 m;2;3 mm;1.234,5;;",
+      "bar;1 m;2;3 kg;1e-3;;",
+    ].join("\n");
+    const [header, first, second] = lines((await post(table.replace("1.234,5", "12,5e-1"), CSV)).text);
+    expect(header).toMatch(/;resistance\/ohm;lower\/ohm;upper\/ohm;text;status;problem$/);
+    const { body } = await call(server, "post", "/resistance", {
+      key,
+      body: {
+        shape: "bar",
+        dimensions: { length: 1.5, width: "2.5 mm", thickness: "3 mm" },
+        medium: { resistivity: 4 },
+        operating: { temperature: -12.5 },
+      },
+    });
+    const { value, lower, upper, text } = body.resistance;
+    const cells = [value, lower, upper, text].map((cell) => String(cell).replace(".", ","));
+    expect(first).toBe(`bar;1,5 m;2,5;3 mm;4;-12,5;Riser, 1,5 m;${cells.join(";")};200;`);
+    expect(second).toMatch(/^bar;1 m;2;3 mm;12,5e-1;;;208333,3\d+;.*;200;$/);
+    const grouped = lines((await post(table, CSV)).text);
+    expect(grouped[1]).toContain(";200;");
+    expect(grouped[2]).toContain("has a thousands separator or a decimal comma");
+    expect(grouped[3]).toMatch(/;;;;422;"?thickness must be a length/);
+    const mixed = lines((await post(table.replace("1.234,5", "1234.5"), CSV)).text);
+    expect(mixed[1]).toContain("decimal comma");
+    expect(mixed[2]).toContain(";200;");
+    const answer = (await post(table.replace("1.234,5", "12,5e-1"), CSV)).text;
+    expect((await post(answer, CSV)).text).toBe(answer);
   });
 
   test("every complaint about the header at once", async () => {
@@ -202,12 +239,28 @@ describe("CSV in and out", () => {
     expect(places(await post("", CSV))).toEqual(["#"]);
     expect(places(await post("\n \n", CSV))).toEqual(["#"]);
     expect((await post('shape,label\nbar,"open\n', CSV)).body.detail).toContain("quote in row 2");
-    const latin = await fetch(`${server.base}/api/v1/resistance/batch`, {
-      method: "POST",
-      headers: { Authorization: `Bearer ${key}`, ...CSV },
-      body: Buffer.from("shape,label\nbar,\xb5\n", "latin1"),
-    });
-    expect([latin.status, (await latin.json()).detail]).toEqual([400, "The body is not UTF-8."]);
+    const bytes = async (body: Buffer) => {
+      const answer = await fetch(`${server.base}/api/v1/resistance/batch`, {
+        method: "POST",
+        headers: { Authorization: `Bearer ${key}`, ...CSV },
+        body: new Uint8Array(body),
+      });
+      const { title, detail } = await answer.json();
+      return [answer.status, title, detail];
+    };
+    const title = "The body cannot be read";
+    const remedy = "Save or send it as UTF-8.";
+    expect(await bytes(Buffer.from("shape,label\nbar,\xb5\n", "latin1"))).toEqual([
+      400,
+      title,
+      `The body is not UTF-8: byte 17 (0xB5, in line 2) is part of no character. ${remedy}`,
+    ]);
+    const shown = Buffer.concat([Buffer.from("shape,\uFFFD\uFFFD\n"), Buffer.from([0xd9])]);
+    expect((await bytes(shown))[2]).toContain("byte 14 (0xD9, in line 2)");
+    const wide = [400, title, `The body is not UTF-8: it looks like UTF-16. ${remedy}`];
+    expect(await bytes(Buffer.from("\uFEFFshape,label\nbar,µ\n", "utf16le"))).toEqual(wide);
+    expect(await bytes(Buffer.from("shape,label\nbar,x\n", "utf16le"))).toEqual(wide);
+    expect(await bytes(Buffer.from("shape,label\nbar,x\n", "utf16le").swap16())).toEqual(wide);
   });
 
   test("a table answered as JSON, and items answered as a table", async () => {
@@ -246,7 +299,7 @@ describe("cells that a spreadsheet would take for a formula", () => {
       '=HYPERLINK("x")',
     ])
       expect(defused(cell)).toBe(`'${cell}`);
-    for (const cell of ["-40", "+1.5e-3", "-40 degC", "-5 %", "-.5", "a=b", "", "1.72e-8 ohm m"])
+    for (const cell of ["-40", "-12,5", "+1.5e-3", "-40 degC", "-5 %", "-.5", "a=b", "", "1.72e-8 ohm m"])
       expect(defused(cell)).toBe(cell);
   });
 

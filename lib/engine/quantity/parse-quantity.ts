@@ -179,7 +179,7 @@ function wireGauge(text: string, kind: QuantityKind, options: QuantityOptions): 
 }
 
 function misspeltNumber(text: string): string {
-  if (/^[+-]?\d+(?:[,'_ ]\d{3})+(?!\d)/.test(text) || /^[+-]?\d*,\d+/.test(text)) {
+  if (/^[+-]?\d+(?:[,'_ ]\d{3})+(?!\d)/.test(text) || /^[+-]?\d*(?:\.\d{3})*,\d+/.test(text)) {
     return `"${shorten(text)}" has a thousands separator or a decimal comma; write digits with a decimal point, such as 1234.5.`;
   }
   return `"${shorten(text)}" does not begin with a number such as 1.5 or 1.5e-3.`;

@@ -168,7 +168,7 @@ export interface FlowAnswer<D extends Dimensions> {
 /** Known by potential theory for a uniform medium only. */
 export interface FactorAnswer<D extends Dimensions> {
   readonly kind: "factor";
-  /** How many times a plain closed form's work one value takes, where that is a lot: fewer trials by default. */
+  /** How many times a plain closed form's work one value takes, where that is a lot: fewer trials by default and at most. */
   readonly work?: number;
   readonly factor: (d: Resolved<D>) => Factor;
   readonly peak?: (d: Resolved<D>) => FactorPeak;
@@ -184,7 +184,7 @@ export interface FactorAnswer<D extends Dimensions> {
 /** Two media of uniform resistivity (ohm metres each). */
 export interface MediaAnswer<D extends Dimensions> {
   readonly kind: "media";
-  /** How many times a plain closed form's work one value takes, where that is a lot: fewer trials by default. */
+  /** How many times a plain closed form's work one value takes, where that is a lot: fewer trials by default and at most. */
   readonly work?: number;
   readonly media: readonly { readonly name: string; readonly label: string }[];
   /** Resistance in ohms. */

@@ -1,4 +1,5 @@
 /** From a solved resistance and its uncertain inputs to the range in which it lies, with a budget by input. */
+import { InputError } from "../../failure";
 import { formatQuantity } from "../../quantity/format-quantity";
 import { Evaluator, type EvaluatorSource } from "../evaluator";
 import type { ComputeContext } from "../compute-context";
@@ -8,7 +9,7 @@ import { COVERAGE, monteCarlo } from "./monte-carlo";
 import { checkEnds, type UncertainResistance } from "./problem-box";
 import { propagate, type Contribution, type Propagated } from "./propagation";
 import type { Uncertainty } from "./result-schema";
-import { DEFAULT_TRIALS, type UncertaintyRequest } from "./tolerance-schema";
+import { DEFAULT_TRIALS, MOST_TRIALS, type UncertaintyRequest } from "./tolerance-schema";
 import { worstCase } from "./worst-case";
 
 /** Two-sided 95 % of a normal distribution (JCGM 100, table G.1). */
@@ -50,7 +51,7 @@ export function findUncertainty(
   const propagated = propagate(resistance);
   const { answer } = source.shape;
   const work = integral ? INTEGRAL_WORK : answer.kind === "flow" ? 1 : (answer.work ?? 1);
-  const { uncertainty, cautions } = byMethod(request, resistance, propagated, DEFAULT_TRIALS / work);
+  const { uncertainty, cautions } = byMethod(request, resistance, propagated, work);
   if (inputs.length === 0) cautions.push("No input has a tolerance, so the uncertainty is zero.");
   if (solution.method === "field") {
     cautions.push(
@@ -69,7 +70,7 @@ function byMethod(
   request: UncertaintyRequest,
   resistance: UncertainResistance,
   propagated: Propagated,
-  defaultTrials: number,
+  work: number,
 ): ByMethod {
   const { value } = resistance;
   const { standard, shift, contributions, bent } = propagated;
@@ -89,7 +90,9 @@ function byMethod(
     };
   }
   if (request.method === "monte-carlo") {
-    const trials = request.trials ?? defaultTrials;
+    const most = MOST_TRIALS / work;
+    const trials = request.trials ?? DEFAULT_TRIALS / work;
+    if (trials > most) throw tooManyTrials(most);
     const seed = request.seed ?? 1;
     const { mean, low, high, variances, ...found } = monteCarlo(resistance, trials, seed);
     return {
@@ -131,6 +134,16 @@ function byMethod(
     },
     cautions,
   };
+}
+
+/** What would never fit is refused before any work, whatever else the machine has to do. */
+function tooManyTrials(most: number): InputError {
+  return new InputError([
+    {
+      pointer: "#/uncertainty/trials",
+      detail: `must be at most ${most.toLocaleString("en")} here, where one value takes more work than a plain formula.`,
+    },
+  ]);
 }
 
 /** The range with its text: both ends to the second significant digit of half the width (JCGM 100, 7.2.6). */

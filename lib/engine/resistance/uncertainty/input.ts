@@ -93,6 +93,13 @@ function readTolerance(found: FoundTolerance, shape: Shape, problems: Problems):
     );
     return null;
   }
+  if (positive === "or-zero" && nominal === 0 && minus > 0) {
+    problems.add(
+      pointerTo(pointer, lower),
+      "reaches below 0, at which the value is already: give plus alone.",
+    );
+    return null;
+  }
   if (kind === "temperature" && nominal - minus < -273.15) {
     problems.add(pointerTo(pointer, lower), "reaches below absolute zero (-273.15 °C).");
     return null;
@@ -175,6 +182,13 @@ function readSides(
       problems.add(
         at,
         'must be a temperature difference such as "2 K": a share of a temperature depends on its zero.',
+      );
+      return null;
+    }
+    if (share && nominal === 0 && Number(share[1]) > 0) {
+      problems.add(
+        at,
+        "is a share of a value that is 0, which is nothing: give a quantity, as plus or minus where the value may stray to one side only.",
       );
       return null;
     }

@@ -1,7 +1,7 @@
 /** Propagation of distributions by Monte Carlo: JCGM 101 (GUM Supplement 1), clause 7; the same answer for a seed. */
 import { Random } from "../../numeric/random";
 import { samplerOf, varianceOf } from "./distribution";
-import { refusePoint, refuseTime, type UncertainResistance } from "./problem-box";
+import { refusePoint, refuseTrials, type UncertainResistance } from "./problem-box";
 import { calibration } from "./propagation";
 
 export interface MonteCarlo {
@@ -25,7 +25,7 @@ export function monteCarlo(resistance: UncertainResistance, trials: number, seed
   const values = nominal.slice();
   const found = new Float64Array(trials);
   for (let trial = 0; trial < trials; trial++) {
-    if (trial % BETWEEN_LOOKS === 0 && overdue()) refuseTime(trial, cost, true);
+    if (trial % BETWEEN_LOOKS === 0 && overdue()) refuseTrials(trial, trials, cost);
     for (let i = 0; i < samplers.length; i++) values[i] = samplers[i]();
     const value = at(values);
     if (Number.isNaN(value)) refusePoint(resistance, values, "#/uncertainty", `trial ${trial + 1} met`);

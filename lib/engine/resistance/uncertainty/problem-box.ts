@@ -3,6 +3,7 @@ import { InputError, pointerTo, type Problem } from "../../failure";
 import { siText } from "../../quantity/format-quantity";
 import type { Evaluator } from "../evaluator";
 import type { UncertainInput } from "./input";
+import { FEWEST_TRIALS } from "./tolerance-schema";
 
 /** Resistance in ohms as a function of the uncertain inputs. */
 export interface UncertainResistance {
@@ -63,20 +64,35 @@ export function checkEnds(resistance: UncertainResistance): void {
   if (problems.length > 0) throw new InputError(problems);
 }
 
-/** Refuses what takes longer than a call may. @throws InputError always. */
-export function refuseTime(done: number, cost: number, trials: boolean): never {
-  const price = cost > 0 ? ` Each takes about ${cost} evaluations of the medium's law.` : "";
+/** Part of the trials that were made in time which another call is likely to make. */
+const LIKELY = 0.8;
+
+/** Refuses trials that take longer than a call may, naming a number that fits. @throws InputError always. */
+export function refuseTrials(done: number, asked: number, cost: number): never {
+  const size = 10 ** Math.max(0, Math.floor(Math.log10(Math.max(1, LIKELY * done))) - 1);
+  const fitting = Math.floor((LIKELY * done) / size) * size;
+  const advice =
+    fitting < FEWEST_TRIALS ? "Ask for propagation." : `Ask for ${fitting.toLocaleString("en")} at most.`;
   throw new InputError([
-    trials
-      ? {
-          pointer: pointerTo("#/uncertainty", "trials"),
-          detail: `are too many for the time a call may take: ${done} were made.${price} Ask for fewer.`,
-        }
-      : {
-          pointer: "#/uncertainty",
-          detail: `takes longer than a call may: ${done} evaluations were made.${price} Give fewer tolerances, or ask for propagation.`,
-        },
+    {
+      pointer: pointerTo("#/uncertainty", "trials"),
+      detail: `are too many for the time a call may take: ${done.toLocaleString("en")} of ${asked.toLocaleString("en")} were made.${priceOf(cost)} ${advice}`,
+    },
   ]);
+}
+
+/** Refuses a search that takes longer than a call may. @throws InputError always. */
+export function refuseTime(done: number, cost: number): never {
+  throw new InputError([
+    {
+      pointer: "#/uncertainty",
+      detail: `takes longer than a call may: ${done.toLocaleString("en")} evaluations were made.${priceOf(cost)} Give fewer tolerances, or ask for propagation.`,
+    },
+  ]);
+}
+
+function priceOf(cost: number): string {
+  return cost > 0 ? ` Each takes about ${cost} evaluations of the medium's law.` : "";
 }
 
 function complaint({ pointer, detail }: Problem): string {

@@ -85,7 +85,7 @@ export const uncertaintyRequestSchema = z
           method: z.literal("monte-carlo"),
           trials: z.int().min(FEWEST_TRIALS).max(MOST_TRIALS).optional().meta({
             description:
-              "Number of trials; if left out 100,000, or 10,000 for a graded medium and less where one value takes still more work. Each 100,000 begun count one computation.",
+              "Number of trials, at most 1,000,000; if left out 100,000. For a graded medium both are a tenth of this, and less where one value takes still more work. Each 100,000 begun count one computation.",
             example: 100_000,
           }),
           seed: z.int().min(0).max(4_294_967_295).optional().meta({

@@ -23,7 +23,7 @@ export function worstCase(resistance: UncertainResistance): WorstCase {
   const values = nominal.slice();
   let evaluations = 0;
   const step = (): void => {
-    if (++evaluations % BETWEEN_LOOKS === 0 && overdue()) refuseTime(evaluations, cost, false);
+    if (++evaluations % BETWEEN_LOOKS === 0 && overdue()) refuseTime(evaluations, cost);
   };
   const over = (indices: readonly number[], effort: { readonly lines: number; readonly points: number }) => {
     const put = (point: ArrayLike<number>): Float64Array => {

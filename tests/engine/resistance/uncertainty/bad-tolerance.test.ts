@@ -9,6 +9,11 @@ const bar = {
   medium: { material: "copper-annealed" },
 };
 const width = (given: unknown) => ({ ...bar, dimensions: { ...bar.dimensions, width: given } });
+const offset = (given: unknown) => ({
+  shape: "eccentric-cylinders",
+  dimensions: { innerRadius: "2 mm", outerRadius: "5 mm", length: 1, offset: given },
+  medium: { resistivity: 1 },
+});
 const propagation = { method: "propagation" };
 
 describe("tolerances that cannot be", () => {
@@ -31,6 +36,18 @@ describe("tolerances that cannot be", () => {
       width({ value: "1 mm", plus: "1 mm", minus: "1 mm" }),
       "#/dimensions/width/minus",
       /smaller/,
+    ],
+    [
+      "a share of an offset of 0",
+      offset({ value: 0, tolerance: "1 %" }),
+      "#/dimensions/offset/tolerance",
+      /a share of a value that is 0.*plus or minus/,
+    ],
+    [
+      "below an offset of 0",
+      offset({ value: 0, tolerance: "0.1 mm" }),
+      "#/dimensions/offset/tolerance",
+      /below 0.*plus alone/,
     ],
     [
       "of another kind",
@@ -168,6 +185,35 @@ describe("tolerances that cannot be", () => {
       /reaches 1\.1 m/,
     ],
   ])("%s", (_, request, pointer, pattern) => expectComplaint(request, pointer, pattern));
+});
+
+describe("trials", () => {
+  const trials = (count: number, over: object = {}) => ({
+    ...width({ value: "1 mm", tolerance: "1 %" }),
+    ...over,
+    include: [],
+    uncertainty: { method: "monte-carlo", trials: count },
+  });
+  const graded = {
+    coordinate: "length",
+    quantity: "conductivity",
+    profile: { kind: "expression", value: "1e6*(1+u^2)" },
+  };
+
+  it("that take too long are told with a number that fits", () => {
+    let looks = 0;
+    const overdue = () => ++looks > 50;
+    expect(() => computeResistance(trials(1_000_000), { material: libraryMaterial, overdue })).toThrow(
+      "51,200 of 1,000,000 were made. Ask for 40,000 at most.",
+    );
+  });
+
+  it("that never fit are refused before any work", () => {
+    expectComplaint(trials(100_001, { medium: { graded } }), "#/uncertainty/trials", /at most 100,000 here/);
+    expect(computeResistance(offset({ value: 0, plus: "0.1 mm" }), { material: libraryMaterial }).shape).toBe(
+      "eccentric-cylinders",
+    );
+  });
 });
 
 describe("anything for a tolerance or a sizing", () => {
