@@ -68,7 +68,7 @@ export const spreadsheets: DocPage = {
       id: "table",
       title: "A whole sheet",
       blocks: [
-        "Save the sheet as CSV, send it, open what comes back: the same rows and columns, and behind them `resistance/ohm`, `lower/ohm`, `upper/ohm`, `text`, `status` and `problem`. No key is in the file. A unit stands in the cell or in the header, as `width/mm`. Semicolons and tabs separate as well as commas; decimal commas do not count as numbers here, so write points.",
+        "Save the sheet as CSV, send it, open what comes back: the same rows and columns, and behind them `resistance/ohm`, `lower/ohm`, `upper/ohm`, `text`, `status` and `problem`. No key is in the file. A unit stands in the cell or in the header, as `width/mm`. Semicolons and tabs separate as well as commas. Where semicolons separate, numbers may have decimal commas, all of them; the results then have them too.",
         {
           snippets: [
             {
