@@ -4,6 +4,7 @@ import { embedUsageSince } from "@/db/queries/embeds";
 import { SHELL } from "@/lib/activity/append";
 import { deriveKey } from "@/lib/config/secret";
 import { rollBackEmbed, publishEmbed, saveEmbedDraft, withdrawEmbed } from "@/lib/embeds/manage-embeds";
+import type { EmbedDefinition } from "@/lib/embeds/definition";
 import { issueEmbedToken } from "@/lib/embeds/token";
 import { issueSiteToken } from "@/lib/auth/site-token";
 import { call, expectProblem, places, SLEEVE } from "../support/call";
@@ -117,6 +118,127 @@ describe("a widget's call", () => {
     const response = await compute(key, { values: { outerRadius: "10 mm" } });
     expect(response.status).toBe(422);
     expect(response.text).not.toMatch(/17\.3|0\.0173/);
+  });
+});
+
+describe("a widget's tolerances", () => {
+  const tolerances: EmbedDefinition["tolerances"] = {
+    uncertainty: { method: "worst-case" },
+    budget: true,
+    inputs: [
+      { name: "length", rule: { mode: "open", value: "2 mm", min: "1 mm", max: "1 %" } },
+      { name: "width", rule: { mode: "fixed", value: "0.4 mm", distribution: "normal" } },
+      { name: "temperature", rule: { mode: "fixed", value: "5 K" } },
+    ],
+  };
+  const withTolerances = (change: Partial<NonNullable<typeof tolerances>> = {}) =>
+    publishedWidget(server, { tolerances: { ...tolerances, ...change }, requirement: { max: "13 uohm" } });
+
+  test("answer as the whole request does, with range, budget and verdict", async () => {
+    const key = await tokenOf({ embedId: withTolerances().id });
+    const { key: team } = server.issue({ team: "widgets" });
+    const plain = (length: string, tolerance: string) =>
+      call(server, "post", "/resistance", {
+        key: team,
+        body: {
+          shape: "bar",
+          dimensions: {
+            length: { value: length, tolerance },
+            width: { value: "40 mm", tolerance: "0.4 mm", distribution: "normal" },
+            thickness: "10 mm",
+          },
+          medium: { material: "copper-annealed" },
+          operating: { temperature: { value: "60 degC", tolerance: "5 K" } },
+          requirement: { max: "13 uohm" },
+          uncertainty: { method: "worst-case" },
+        },
+      });
+    const defaults = await compute(key);
+    expect(defaults.status).toBe(200);
+    const whole = await plain("250 mm", "2 mm");
+    expect(defaults.body.uncertainty).toEqual(whole.body.uncertainty);
+    expect(defaults.body.verdict).toBe(whole.body.verdict);
+    expect(
+      defaults.body.uncertainty.contributions.map(({ input }: { input: string }) => input).sort(),
+    ).toEqual(["dimensions.length", "dimensions.width", "medium.material", "operating.temperature"]);
+    const changed = await compute(key, { values: { length: "1 m", "length.tolerance": "10 mm" } });
+    expect(changed.body.uncertainty).toEqual((await plain("1 m", "10 mm")).body.uncertainty);
+  });
+
+  test("422 for those that are fixed, unknown or beyond their limits, and for another method", async () => {
+    const key = await tokenOf({ embedId: withTolerances().id });
+    const refused = async (body: object) => {
+      const response = await compute(key, body);
+      expectProblem(response, 422, "invalid-input");
+      return places(response);
+    };
+    const values = (given: object) => refused({ values: given });
+    expect(await values({ "width.tolerance": "4 mm" })).toEqual(["#/values/width.tolerance"]);
+    expect(await values({ "thickness.tolerance": "0 mm" })).toEqual(["#/values/thickness.tolerance"]);
+    expect(await values({ "temperature.tolerance": "0 K" })).toEqual(["#/values/temperature.tolerance"]);
+    // 1 % of the length is its limit, however it is written, and follows the length.
+    expect(await values({ "length.tolerance": "2.51 mm" })).toEqual(["#/values/length.tolerance"]);
+    expect(await values({ "length.tolerance": "1.01 %" })).toEqual(["#/values/length.tolerance"]);
+    expect((await compute(key, { values: { "length.tolerance": "1 %" } })).status).toBe(200);
+    expect((await compute(key, { values: { "length.tolerance": "2.5 mm" } })).status).toBe(200);
+    expect(await values({ "length.tolerance": "0.9 mm" })).toEqual(["#/values/length.tolerance"]);
+    expect(await values({ "length.tolerance": "-2 mm" })).toEqual(["#/values/length.tolerance"]);
+    expect(await values({ "length.tolerance": "2 kg" })).toEqual(["#/values/length.tolerance"]);
+    expect(await values({ "length.tolerance": "" })).toEqual(["#/values/length.tolerance"]);
+    expect(await values({ "length.tolerance": { plus: "1 m" } })).toEqual(["#/values/length.tolerance"]);
+    expect(await values({ "length.distribution": "normal" })).toEqual(["#/values/length.distribution"]);
+    expect(await values({ "length.tolerance.tolerance": "2 mm" })).toHaveLength(1);
+    expect(await refused({ values: {}, uncertainty: { method: "monte-carlo", trials: 1_000_000 } })).toEqual([
+      "#/uncertainty",
+    ]);
+    expect(await values({ method: "propagation", trials: 1000 })).toEqual([
+      "#/values/method",
+      "#/values/trials",
+    ]);
+  });
+
+  test("are none in a widget that has none", async () => {
+    const key = await tokenOf({ embedId: publishedWidget(server).id });
+    expect((await compute(key)).body.uncertainty).toBeUndefined();
+    const response = await compute(key, { values: { "length.tolerance": "2 mm" } });
+    expectProblem(response, 422, "invalid-input");
+    expect(places(response)).toEqual(["#/values/length.tolerance"]);
+  });
+
+  test("make the trials of their version, and cost one computation", async () => {
+    const { id } = withTolerances({ uncertainty: { method: "monte-carlo", trials: 2000, seed: 7 } });
+    const { body } = await compute(await tokenOf({ embedId: id }));
+    expect([body.uncertainty.trials, body.uncertainty.seed]).toEqual([2000, 7]);
+    const [usage] = embedUsageSince(server.service.db, Date.now() - 86_400_000, id);
+    expect(usage.computations).toBe(1);
+  });
+
+  test("that reach too far are told at their own field, and never with a hidden value", async () => {
+    const { id } = publishedWidget(server, {
+      shape: "cylindrical-shell",
+      inputs: [
+        { name: "innerRadius", rule: { mode: "hidden", value: "17.3 mm" } },
+        { name: "outerRadius", rule: { mode: "fixed", value: "20 mm" } },
+        { name: "length", rule: { mode: "open", value: "1 m" } },
+        { name: "resistivity", rule: { mode: "hidden", value: "1e-7 ohm m" } },
+      ],
+      tolerances: {
+        uncertainty: { method: "worst-case" },
+        budget: false,
+        inputs: [
+          { name: "outerRadius", rule: { mode: "open", value: "0.1 mm" } },
+          { name: "length", rule: { mode: "fixed", value: "10 mm" } },
+        ],
+      },
+    });
+    const key = await tokenOf({ embedId: id });
+    const wide = await compute(key, { values: { "outerRadius.tolerance": "3 mm" } });
+    expectProblem(wide, 422, "invalid-input");
+    expect(places(wide)).toEqual(["#/values/outerRadius.tolerance"]);
+    const long = await compute(key, { values: { length: "5 mm" } });
+    expectProblem(long, 422, "invalid-input");
+    expect(places(long)).toEqual(["#/values/length"]);
+    expect(wide.text + long.text).not.toMatch(/17\.3|0\.0173/);
   });
 });
 

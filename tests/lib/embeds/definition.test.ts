@@ -2,7 +2,12 @@ import { describe, expect, test } from "vitest";
 import { catalogue, exampleRequest, findShape, libraryMaterial } from "@/lib/engine";
 import { definitionProblems } from "@/lib/embeds/check-definition";
 import { accentContrasts, contrastOf } from "@/lib/embeds/contrast";
-import { embedDefinition, embedSettings, type InputRule } from "@/lib/embeds/definition";
+import {
+  type EmbedDefinition,
+  embedDefinition,
+  embedSettings,
+  type InputRule,
+} from "@/lib/embeds/definition";
 import { widgetRequest } from "@/lib/embeds/enforce";
 import { inputsOf } from "@/lib/embeds/inputs";
 import { speechOf } from "@/lib/embeds/language";
@@ -37,6 +42,33 @@ describe("definitionProblems", () => {
     expect(problems({ requirement: { max: "5 kg" } })).toEqual(["#/requirement/max"]);
     expect(problems({ accent: "#ffff00", theme: "light" })).toEqual(["#/accent"]);
     expect(problems({ accent: "#101010", theme: "host" })).toEqual(["#/accent"]);
+  });
+
+  test("names the place of each mistake in a tolerance", () => {
+    const found = (...inputs: NonNullable<EmbedDefinition["tolerances"]>["inputs"]) =>
+      problems({ tolerances: { uncertainty: { method: "propagation" }, budget: true, inputs } });
+    expect(found({ name: "width", rule: { mode: "fixed", value: "1 %" } })).toEqual([]);
+    expect(found({ name: "temperature", rule: { mode: "open", value: "5 K", max: "10 K" } })).toEqual([]);
+    expect(found({ name: "voltage", rule: { mode: "fixed", value: "1 %" } })).toEqual([
+      "#/tolerances/inputs/0/name",
+    ]);
+    expect(found({ name: "material", rule: { mode: "fixed", value: "1 %" } })).toEqual([
+      "#/tolerances/inputs/0/name",
+    ]);
+    expect(found({ name: "temperature", rule: { mode: "fixed", value: "1 %" } })).toEqual([
+      "#/tolerances/inputs/0/value",
+    ]);
+    expect(
+      found(
+        { name: "width", rule: { mode: "open", value: "5 kg" } },
+        { name: "length", rule: { mode: "open", value: "3 mm", min: "5 mm", max: "4 mm" } },
+      ),
+    ).toEqual(["#/tolerances/inputs/0/value", "#/tolerances/inputs/1/max", "#/tolerances/inputs/1/value"]);
+    // What only the engine knows: the width would vanish.
+    expect(found({ name: "width", rule: { mode: "open", value: "40 mm" } })).toEqual([
+      "#/tolerances/inputs/0/value",
+    ]);
+    expect(found({ name: "width", rule: { mode: "fixed", value: "40 mm" } })).toEqual(["#/inputs"]);
   });
 
   test("every shape of the catalogue can become a widget of its example", () => {
@@ -78,6 +110,19 @@ describe("embedDefinition", () => {
       { extra: 1 },
       { inputs: [{ name: "length<script>", rule: { mode: "fixed", value: "1" } }] },
       { inputs: [BUSBAR.inputs[0], BUSBAR.inputs[0]] },
+      { tolerances: { uncertainty: { method: "propagation" }, budget: true } },
+      { tolerances: { uncertainty: { method: "guess" }, budget: true, inputs: [] } },
+      { tolerances: { uncertainty: { method: "monte-carlo", trials: 100_001 }, budget: true, inputs: [] } },
+      {
+        tolerances: {
+          uncertainty: { method: "propagation" },
+          budget: true,
+          inputs: [
+            { name: "width", rule: { mode: "fixed", value: "1 %" } },
+            { name: "width", rule: { mode: "open", value: "1 %" } },
+          ],
+        },
+      },
     ];
     for (const change of bad) expect(embedDefinition.safeParse({ ...BUSBAR, ...change }).success).toBe(false);
     expect(embedDefinition.safeParse(BUSBAR).success).toBe(true);
