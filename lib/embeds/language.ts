@@ -1,4 +1,4 @@
-/** Languages of a widget's own words. Titles, labels and cautions stay as their authors wrote them. */
+/** Languages of a widget's own words, of the catalogue's labels and its cautions. What a team wrote stays as it is. */
 export const LANGUAGES = ["en", "de", "fr", "es", "sv", "ja"] as const;
 
 export type Language = (typeof LANGUAGES)[number];

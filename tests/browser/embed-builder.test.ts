@@ -1,6 +1,7 @@
 import AxeBuilder from "@axe-core/playwright";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { embedHistory, listEmbeds } from "@/db/queries/embeds";
+import type { EmbedDefinition } from "@/lib/embeds/definition";
 import { startServer, type TestServer } from "../support/server";
 import { signedInCookie } from "../support/signed-in";
 import { BUSBAR, publishedWidget } from "../support/widget";
@@ -28,6 +29,12 @@ async function openAs(team: string, path: string, width?: number, role?: "viewer
 }
 
 const LONG = { timeout: 45_000 };
+
+const OPEN_LENGTH: EmbedDefinition["tolerances"] = {
+  uncertainty: { method: "propagation" },
+  budget: true,
+  inputs: [{ name: "length", rule: { mode: "open", value: "3 mm", max: "5 mm" } }],
+};
 
 describe("the builder", () => {
   test("from a calculation to a snippet that works in a bare file of another origin, and back to version 1", async () => {
@@ -94,9 +101,50 @@ describe("the builder", () => {
     await close();
   }, 120_000);
 
+  test("gives inputs tolerances, says what is wrong with one, and shows them in the preview", async () => {
+    const team = `tolerances-${Date.now()}`;
+    const { id } = publishedWidget(server, {}, { team });
+    const { page, close } = await openAs(team, `/console/embeds/${id}`);
+    const preview = page.frameLocator('iframe[title="Preview of the embed"]');
+    await preview.getByTestId("resistance").waitFor(LONG);
+    expect(await preview.getByTestId("stray-range").count()).toBe(0);
+    await page.getByText("Evaluate tolerances").click();
+    const length = page.getByRole("group", { name: "Tolerance of Length", exact: true });
+    await length.getByLabel("Tolerance", { exact: true }).selectOption({ label: "Open to visitors" });
+    await length.getByLabel("± starts with").fill("3 mm");
+    await length.getByLabel("Up to").fill("2 mm");
+    await page.getByText("Tolerance of Length: must be at most 2 mm.").waitFor(LONG);
+    await length.getByLabel("Up to").fill("5 mm");
+    const temperature = page.getByRole("group", { name: "Tolerance of Temperature", exact: true });
+    await temperature.getByLabel("Tolerance", { exact: true }).selectOption({ label: "Fixed" });
+    expect(await temperature.getByLabel("±", { exact: true }).inputValue()).toBe("5 K");
+    // What is chosen from a list of materials takes none.
+    expect(await page.getByRole("group", { name: "Tolerance of Material" }).count()).toBe(0);
+    await page.getByLabel("Evaluated by").selectOption({ label: "Monte Carlo (GUM Supplement 1)" });
+    await page.getByLabel("Trials").fill("200000");
+    await page.getByText("Before it can be published").waitFor(LONG);
+    await page.getByLabel("Trials").fill("5000");
+    await page.getByText("Before it can be published").waitFor({ state: "detached", ...LONG });
+    await preview.getByTestId("stray-range").waitFor(LONG);
+    await preview.getByTestId("budget").waitFor(LONG);
+    expect(await preview.getByLabel("Tolerance: Length").inputValue()).toBe("3 mm");
+    const [{ definition: saved }] = embedHistory(server.service.db, id);
+    expect(Object(saved).tolerances).toEqual({
+      uncertainty: { method: "monte-carlo", trials: 5000 },
+      budget: true,
+      inputs: [
+        { name: "length", rule: { mode: "open", value: "3 mm", max: "5 mm" } },
+        { name: "temperature", rule: { mode: "fixed", value: "5 K" } },
+      ],
+    });
+    await page.getByRole("button", { name: "Remove Temperature" }).click();
+    await temperature.waitFor({ state: "detached", ...LONG });
+    await close();
+  });
+
   test("has no accessibility complaint at 360 px", async () => {
     const team = `axe-${Date.now()}`;
-    const { id } = publishedWidget(server, {}, { team });
+    const { id } = publishedWidget(server, { tolerances: OPEN_LENGTH }, { team });
     const { page, close } = await openAs(team, `/console/embeds/${id}`, 360);
     await page.frameLocator("iframe").getByTestId("resistance").waitFor(LONG);
     const { violations } = await new AxeBuilder({ page }).exclude("iframe").analyze();

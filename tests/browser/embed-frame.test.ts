@@ -2,11 +2,37 @@ import { gzipSync } from "node:zlib";
 import { existsSync, readFileSync } from "node:fs";
 import { AxeBuilder } from "@axe-core/playwright";
 import { describe, expect, test } from "vitest";
+import type { EmbedDefinition } from "@/lib/embeds/definition";
+import type { Uncertainty } from "@/lib/engine";
 import { BUSBAR } from "../support/widget";
 import { base } from "./browser";
-import { isDevelopment, newPage, setUpPages, widget } from "./embed-pages";
+import { host, isDevelopment, newPage, setUpPages, told, widget } from "./embed-pages";
+import { loaderPage } from "./host-page";
 
 setUpPages();
+
+/** Open within limits, fixed, and of an input that is hidden. */
+const TOLERANCES: EmbedDefinition["tolerances"] = {
+  uncertainty: { method: "worst-case" },
+  budget: true,
+  inputs: [
+    { name: "length", rule: { mode: "open", value: "2 mm", max: "5 mm" } },
+    { name: "thickness", rule: { mode: "fixed", value: "1 %" } },
+    { name: "temperature", rule: { mode: "fixed", value: "5 K" } },
+  ],
+};
+
+const LAYERED: Partial<EmbedDefinition> = {
+  shape: "earth-rod-layered",
+  title: "EN 50522",
+  inputs: [
+    { name: "length", rule: { mode: "open", value: "3 m" } },
+    { name: "diameter", rule: { mode: "open", value: "20 mm" } },
+    { name: "upperDepth", rule: { mode: "open", value: "1 m" } },
+    { name: "upper.resistivity", rule: { mode: "open", value: "300 ohm m" } },
+    { name: "lower.resistivity", rule: { mode: "open", value: "60 ohm m" } },
+  ],
+};
 
 describe("the frame", () => {
   test("renews its token, keeps inputs while the service is away, and says when a quota returns", async () => {
@@ -72,6 +98,104 @@ describe("the frame", () => {
     expect(complaints.filter((text) => !text.includes("422"))).toEqual([]);
   });
 
+  test("takes tolerances, and shows range, verdict and budget in the reader's language", async () => {
+    const { page } = await newPage("de-DE");
+    const { id } = widget({
+      requirement: { max: "12 uohm" },
+      tolerances: TOLERANCES,
+      inputs: BUSBAR.inputs.map(({ name, rule }) =>
+        name === "thickness" && rule.mode === "open"
+          ? { name, rule: { ...rule, label: "Blechdicke" } }
+          : { name, rule },
+      ),
+    });
+    await page.goto(`${base()}/embed/${id}?lang=de&length.tolerance=1mm`);
+    const range = page.getByTestId("stray-range");
+    await range.waitFor({ timeout: 45_000 });
+    expect(await range.innerText()).toMatch(/^Mit den Toleranzen [\d,]+ µΩ … [\d,]+ µΩ \(ungünstigster Fall/);
+    expect(await page.getByTestId("bracket").innerText()).toMatch(/Schranken .*bewiesen \(/);
+    const verdict = page.getByTestId("verdict");
+    expect(await verdict.innerText()).toContain("Schranken und Toleranzen");
+    // The team's own wording, the catalogue's in the language, and what is hidden without its name.
+    const rows = page.getByTestId("budget").getByRole("row");
+    await rows.nth(3).waitFor({ timeout: 45_000 });
+    const budget = await page.getByTestId("budget").innerText();
+    for (const label of ["Länge", "Blechdicke", "hier nicht gezeigt"]) expect(budget).toContain(label);
+    expect(budget).not.toContain("Temperatur");
+
+    const length = page.getByLabel("Toleranz: Länge");
+    expect(await length.inputValue()).toBe("1mm");
+    const before = await range.innerText();
+    // Typed as people write it: a decimal comma, and the unit of the value.
+    await length.fill("2,5");
+    await page.waitForFunction(
+      (text) => document.querySelector('[data-testid="stray-range"]')?.textContent !== text,
+      before,
+    );
+    await length.blur();
+    expect(await length.inputValue()).toBe("2,5 mm");
+    await length.fill("90 mm");
+    await page.getByText("Dieser Wert kann nicht verwendet werden. Höchstens 5 mm").waitFor();
+    expect(await length.getAttribute("aria-invalid")).toBe("true");
+    await page.getByRole("button", { name: "Zurück zu den Vorgaben" }).click();
+    expect(await length.inputValue()).toBe("2 mm");
+  });
+
+  test("tells the page around of its tolerances, and lets it set those that are open", async () => {
+    const { page } = await newPage();
+    const { id } = widget({ tolerances: TOLERANCES });
+    await page.goto(
+      host.origin + host.serve(loaderPage(base(), `<rhoform-embed id="one" embed="${id}"></rhoform-embed>`)),
+    );
+    const events = await told(page, "result", "one");
+    const ready: unknown = events.find(({ type }) => type === "ready")?.detail;
+    expect(ready).toMatchObject({
+      inputs: expect.arrayContaining([{ name: "length.tolerance", value: "2 mm" }]),
+    });
+    const contribution = async (count: number) => {
+      const all = await told(page, "result", "one", count);
+      const { uncertainty }: { uncertainty?: Uncertainty } = Object(all.at(-1)?.detail);
+      return uncertainty?.contributions.find(({ input }) => input === "dimensions.length")?.standard;
+    };
+    // Anywhere within ±2 mm: 2/√3 mm.
+    expect(await contribution(1)).toBeCloseTo(0.002 / Math.sqrt(3), 10);
+    await page.evaluate(() => {
+      const element = document.getElementById("one") as HTMLElement & { set: (values: object) => void };
+      element.set({
+        "length.tolerance": "4 mm",
+        "thickness.tolerance": "9 mm",
+        "length.distribution": "normal",
+      });
+    });
+    expect(await contribution(2)).toBeCloseTo(0.004 / Math.sqrt(3), 10);
+  });
+
+  test.each(["de", "fr", "es", "sv", "ja"])(
+    "holds its words at 320 px in %s, cautions and labels among them",
+    async (lang) => {
+      const { page } = await newPage(lang);
+      await page.setViewportSize({ width: 320, height: 900 });
+      const { id } = widget({ ...LAYERED, tolerances: { ...TOLERANCES, inputs: [] } });
+      await page.goto(`${base()}/embed/${id}?lang=${lang}`);
+      await page.getByTestId("resistance").waitFor({ timeout: 45_000 });
+      await page.getByTestId("stray-range").waitFor({ timeout: 45_000 });
+      expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(320);
+      const text = await page.locator("main").innerText();
+      for (const english of [
+        "Length",
+        "Resistivity",
+        "layer",
+        "resistance",
+        "This is a DC",
+        "soil changes",
+        "competent",
+      ]) {
+        expect([english, text.includes(english)]).toEqual([english, false]);
+      }
+      expect(await page.locator('main [lang="en"]').count()).toBe(0);
+    },
+  );
+
   test.each([
     [320, "light"],
     [720, "dark"],
@@ -80,6 +204,7 @@ describe("the frame", () => {
     await page.setViewportSize({ width, height: 900 });
     const { id } = widget({
       requirement: { max: "40 uohm" },
+      tolerances: TOLERANCES,
       show: { drawing: true, bounds: true, plots: true },
       language: theme === "dark" ? "de" : "en",
     });
@@ -93,7 +218,7 @@ describe("the frame", () => {
 
   test("loads at most 60 kB of script beyond the framework's own", async () => {
     const { page } = await newPage();
-    const { id } = widget({ show: { drawing: true, bounds: true, plots: true } });
+    const { id } = widget({ show: { drawing: true, bounds: true, plots: true }, tolerances: TOLERANCES });
     // Only what was built for production has a size to speak of.
     if ((await isDevelopment(id)) || !existsSync(".next/build-manifest.json")) return;
     const manifest: { rootMainFiles: string[]; polyfillFiles: string[] } = JSON.parse(

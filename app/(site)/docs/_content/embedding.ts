@@ -1,4 +1,4 @@
-import { DEFAULT_EMBED_QUOTA } from "@/lib/embeds/definition";
+import { DEFAULT_EMBED_QUOTA, MOST_WIDGET_TRIALS } from "@/lib/embeds/definition";
 import type { DocPage } from "./page";
 
 export const embedding: DocPage = {
@@ -75,6 +75,22 @@ export const embedding: DocPage = {
           ],
         },
         'Underneath, frame and page exchange messages `{ "source": "rhoform", "version": 1, "type", "embed", "data" }` by `postMessage`: the frame sends `ready`, `size`, `result` and `error`, the page `set` and `compute`. Both sides check origin, window, source and version. A page that works without the script must check them itself.',
+      ],
+    },
+    {
+      id: "tolerances",
+      title: "Tolerances",
+      blocks: [
+        "A widget of a shape can say how far its resistance strays: by first-order propagation, in the worst case, or by Monte Carlo with up to " +
+          `${MOST_WIDGET_TRIALS.toLocaleString("en")} trials, which cost one computation. Each input has no tolerance, a fixed one, or one that visitors change within limits. The frame shows the range beside the bounds, a verdict that counts both, and, where the builder says so, the budget by input. A [material](/docs/materials) brings its own stated uncertainty.`,
+        'An open tolerance is a value like any other, named after its input: `widget.set({ "length.tolerance": "0.5 mm" })`, `values=\'{"length.tolerance":"1 %"}\'`, `?length.tolerance=1%25`. Fixed tolerances, method and trials are the version\'s, whatever a page sends. `detail.uncertainty` of `rhoform:result` is the API\'s own, described under [Uncertainty](/docs/uncertainty).',
+      ],
+    },
+    {
+      id: "languages",
+      title: "Languages",
+      blocks: [
+        "The frame speaks English, German, French, Spanish, Swedish or Japanese, with numbers in the reader's locale: the language that the builder fixes, else that of `lang`, of the page, of the reader's browser. The catalogue's labels and the cautions come in the same language; title, labels and help that you write stay as you wrote them. Details of a refused value, names of materials and the result of `rhoform:result` stay in English, as the API has them.",
       ],
     },
     {
