@@ -28,7 +28,7 @@ export function OutlineDrawing({ plan, label, bare = false, className = "" }: Ou
         : terminals.map(({ name, at }) => (
             <text
               key={name}
-              {...labelAt(at, width)}
+              {...labelAt(at, plan)}
               aria-hidden
               fontSize="13"
               strokeWidth="4"
@@ -47,11 +47,14 @@ function stroke(index: number): string {
   return index === 1 ? "stroke-verdigris" : "stroke-ink-soft";
 }
 
-/** Beside the terminal, towards the middle of the sheet, so that no name is cut off. */
-function labelAt([x, y]: PlanPoint, width: number) {
-  const share = x / width;
-  if (share < 0.35) return { x: x + 7, y: y + 4, textAnchor: "start" as const };
-  return share > 0.65
-    ? { x: x - 7, y: y + 4, textAnchor: "end" as const }
-    : { x, y: y + 4, textAnchor: "middle" as const };
+/** Beside the terminal, on the side of the sheet's middle, so that no name is cut off. */
+function labelAt([x, y]: PlanPoint, { width, height }: OutlinePlan) {
+  const [across, up] = [x / width - 0.5, y / height - 0.5];
+  if (Math.abs(across) > Math.abs(up)) {
+    return across < 0
+      ? { x: x + 7, y: y + 4, textAnchor: "start" as const }
+      : { x: x - 7, y: y + 4, textAnchor: "end" as const };
+  }
+  const anchor = across < -0.35 ? "start" : across > 0.35 ? "end" : "middle";
+  return { x, y: up < 0 ? y + 17 : y - 8, textAnchor: anchor } as const;
 }

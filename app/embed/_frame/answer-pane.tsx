@@ -2,7 +2,10 @@
 
 import { bracketText } from "../../_ui/bracket";
 import { cautionIn } from "../_cautions/caution-in";
+import { filled } from "../_words/words";
+import { FrameClosing } from "./frame-closing";
 import type { FrameResult, FrameView } from "./frame-view";
+import type { FrameAnswer } from "./use-answer";
 import { localNumbers } from "./local-number";
 import { StrayRange } from "./stray-range";
 
@@ -11,10 +14,11 @@ interface AnswerProps {
   readonly result: FrameResult | null;
   /** Whether it belongs to an earlier input. */
   readonly stale: boolean;
+  readonly closing: FrameAnswer["closing"];
 }
 
 /** The number, its bounds, the verdict and the cautions. */
-export function FrameAnswerPane({ view, result, stale }: AnswerProps) {
+export function FrameAnswerPane({ view, result, stale, closing }: AnswerProps) {
   const { words } = view;
   const cautions = result?.cautions ?? view.cautions;
   return (
@@ -31,6 +35,9 @@ export function FrameAnswerPane({ view, result, stale }: AnswerProps) {
           <p className="min-h-7 text-table text-ink-soft">{stale ? "…" : words.noAnswer}</p>
         )}
       </div>
+      {closing && view.outline ? (
+        <FrameClosing view={view} {...closing} goal={view.outline.accuracy} />
+      ) : null}
       {view.requirement ? (
         <p className="text-table" data-testid="verdict">
           <span className="text-ink-soft">
@@ -59,25 +66,51 @@ function Caution({ caution, view }: { readonly caution: string; readonly view: F
 }
 
 function Numbers({ view, result }: { readonly view: FrameView; readonly result: FrameResult }) {
-  const { words, locale, show } = view;
-  const { value, lower, upper, text, proved, boundsBasis } = result.resistance;
-  const bracket = bracketText(value, lower, upper, "Ω");
+  const { words, locale } = view;
+  const { resistance, pairs = [], limit, uncertainty } = result;
   return (
     <>
-      <p data-testid="resistance" className="font-mono text-figure font-medium whitespace-nowrap">
-        {localNumbers(text, locale)}
-      </p>
-      {show.bounds ? (
-        <p data-testid="bracket" className="font-mono text-small [overflow-wrap:anywhere]">
-          [{localNumbers(bracket.lower, locale)} … {localNumbers(bracket.upper, locale)}] {bracket.unit}
-          <span className="font-sans text-ink-soft">
-            {" "}
-            {proved ? words.proved : words.notProved} ({words.basis[boundsBasis]})
-          </span>
+      {resistance ? (
+        <p data-testid="resistance" className="font-mono text-figure font-medium whitespace-nowrap">
+          {localNumbers(resistance.text, locale)}
         </p>
       ) : null}
-      {result.uncertainty ? <StrayRange view={view} uncertainty={result.uncertainty} /> : null}
+      {resistance ? <Bounds view={view} bounded={resistance} /> : null}
+      {pairs.length > 0 ? (
+        <dl data-testid="pairs" className="grid grid-cols-[auto_1fr] gap-x-2 text-table">
+          {pairs.map(({ between: [from, to], floating }) => (
+            <div key={`${from} ${to}`} className="contents">
+              <dt className="text-ink-soft">{filled(words.between, from, to)}</dt>
+              <dd>
+                <span className="font-mono font-medium">{localNumbers(floating.text, locale)}</span>
+                <Bounds view={view} bounded={floating} />
+              </dd>
+            </div>
+          ))}
+        </dl>
+      ) : null}
+      {limit === undefined ? null : <p className="text-small text-amber">{words.limited}</p>}
+      {uncertainty ? <StrayRange view={view} uncertainty={uncertainty} /> : null}
     </>
+  );
+}
+
+type Bounded = NonNullable<FrameResult["resistance"]> | NonNullable<FrameResult["pairs"]>[number]["floating"];
+
+/** Both bounds and where they come from, where the widget shows them and there are two. */
+function Bounds({ view, bounded }: { readonly view: FrameView; readonly bounded: Bounded }) {
+  const { words, locale, show } = view;
+  const { value, lower, upper, proved, boundsBasis } = bounded;
+  if (!show.bounds || value === null || upper === null) return null;
+  const bracket = bracketText(value, lower, upper, "Ω");
+  return (
+    <p data-testid="bracket" className="font-mono text-small [overflow-wrap:anywhere]">
+      [{localNumbers(bracket.lower, locale)} … {localNumbers(bracket.upper, locale)}] {bracket.unit}
+      <span className="font-sans text-ink-soft">
+        {" "}
+        {proved ? words.proved : words.notProved} ({words.basis[boundsBasis]})
+      </span>
+    </p>
   );
 }
 

@@ -14,7 +14,7 @@ interface BudgetProps {
 /** What each input contributes to the range; loaded only where the widget shows it. */
 export function FrameBudget({ view: { words, locale }, tolerances, result }: BudgetProps) {
   const { uncertainty, resistance } = result;
-  if (!uncertainty) return null;
+  if (!uncertainty || !resistance) return null;
   const rows = rowsOf(uncertainty.contributions, tolerances.labels, words.notShown);
   const title = tolerances.method === "worst-case" ? words.shareOfRange : words.share;
   const standard = localShare(uncertainty.standard / resistance.value, locale);

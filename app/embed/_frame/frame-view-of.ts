@@ -4,12 +4,14 @@ import { frameDrawing } from "@/app/api/embed/_server/frame-drawing";
 import { readGeometry } from "@/app/(site)/calculate/_server/geometry";
 import type { EmbedDefinition } from "@/lib/embeds/definition";
 import { widgetDimensions } from "@/lib/embeds/enforce";
-import { inputsOf } from "@/lib/embeds/inputs";
+import { definitionInputs } from "@/lib/embeds/inputs";
 import { speechOf } from "@/lib/embeds/language";
 import type { ShownEmbed } from "@/lib/embeds/show-embed";
 import { issueEmbedToken } from "@/lib/embeds/token";
-import { findShape, InputError, type Shape } from "@/lib/engine";
+import { FIELD_CAUTION, findShape, InputError, type Shape, type StoredOutline } from "@/lib/engine";
+import { teamOutline } from "@/lib/fields/team-outlines";
 import type { Service } from "@/lib/service/service";
+import { outlinePlan } from "../../_ui/drawing/outline-plan";
 import { cautionTexts } from "../_cautions/choose";
 import { labelIn } from "../_labels/label-in";
 import { wordsOf } from "../_words/choose";
@@ -36,11 +38,16 @@ export async function frameViewOf(
   asked: Asked,
 ): Promise<FrameView | null> {
   const { embed, version, definition } = shown;
-  const shape = findShape(definition.shape);
-  if (!shape) return null;
+  const shape = findShape(definition.shape ?? "");
+  const stored =
+    definition.outlineId === undefined
+      ? undefined
+      : teamOutline(service.db, embed.teamId, definition.outlineId);
+  const facts = definitionInputs(definition);
+  if (!facts || !(shape ?? stored)) return null;
+  const cautions = shape?.cautions ?? [FIELD_CAUTION];
   const { language, locale } = speechOf(definition.language, asked.language, asked.acceptLanguage);
   const words = wordsOf(language);
-  const facts = inputsOf(shape);
   const naming: Naming = { service, teamId: embed.teamId, shape, language, words, locale };
   const { open, fixed, tolerances } = shownInputs(definition, facts, naming);
   const start = Object.fromEntries(
@@ -62,15 +69,29 @@ export async function frameViewOf(
     words,
     owner: ownerText(service, embed.teamName),
     service: service.config.origin,
-    cautions: shape.cautions,
-    cautionTexts: cautionTexts(language, shape.cautions),
-    coordinateLabel: labelIn(language, shape.coordinates.find(({ role }) => role === "along")?.label ?? ""),
+    cautions,
+    cautionTexts: cautionTexts(language, cautions),
+    coordinateLabel: labelIn(language, shape?.coordinates.find(({ role }) => role === "along")?.label ?? ""),
     preview: asked.preview,
     hosts: [...new Set([...asked.own, ...embed.origins])],
     token: await issueEmbedToken(service.config.secret, binding, service.now()),
     start,
-    drawing: definition.show.drawing ? firstDrawing(definition, shape, start) : null,
+    drawing: shape && definition.show.drawing ? firstDrawing(definition, shape, start) : null,
+    outline: stored ? shownOutline(definition, stored) : null,
   };
+}
+
+/** Where a version does not say how narrow the bracket shall be: as the API has it. */
+const USUAL_ACCURACY = 1e-4;
+
+/** A sheet on which the names of the terminals can be read at 320 px. */
+const PLAN_SHEET = { width: 300, tallest: 220, margin: 14 };
+
+function shownOutline(
+  { show, terminals, accuracy = USUAL_ACCURACY }: EmbedDefinition,
+  { outline, terminals: own }: StoredOutline,
+): NonNullable<FrameView["outline"]> {
+  return { plan: show.drawing ? outlinePlan(outline, terminals ?? own, PLAN_SHEET) : null, accuracy };
 }
 
 function ownerText({ db }: Service, teamName: string): string {

@@ -1,5 +1,7 @@
+import type { FieldResult } from "@/lib/engine/field/request/field-result-schema";
 import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
 import type { UnitKind } from "../../_ui/quantity/units";
+import type { OutlinePlan } from "../../_ui/drawing/outline-plan";
 import type { ShapeDrawing } from "../../_ui/drawing/shape-drawing";
 import type { ComponentProps } from "react";
 import type { CautionTexts } from "../_cautions/caution-in";
@@ -91,6 +93,22 @@ export interface FrameView {
   /** What it opens with: the defaults, or what the page around asked for. */
   readonly start: Readonly<Record<string, string>>;
   readonly drawing: FrameDrawing | null;
+  /** What it is on, where that is an outline; null for a shape. */
+  readonly outline: {
+    /** Null where the widget shows no drawing. */
+    readonly plan: OutlinePlan | null;
+    /** Width of the bracket over its value that is wanted. */
+    readonly accuracy: number;
+  } | null;
 }
 
-export type FrameResult = ResistanceResult;
+/** What a frame reads of an answer: of a shape, or of a field solution on an outline. */
+export type FrameResult = Pick<ResistanceResult, "verdict" | "cautions"> &
+  Partial<Pick<ResistanceResult, "resistance" | "uncertainty" | "profile">> &
+  Pick<FieldResult, "pairs" | "limit">;
+
+/** The bracket of a field solution on its way, Ω. */
+export interface FrameProgress {
+  readonly lower: number;
+  readonly upper: number;
+}

@@ -3,11 +3,14 @@
 import dynamic from "next/dynamic";
 import { type CSSProperties, useCallback, useEffect, useMemo, useRef, useState } from "react";
 import { Button } from "../../_ui/button";
+import { OutlineDrawing } from "../../_ui/drawing/outline-drawing";
+import type { OutlinePlan } from "../../_ui/drawing/outline-plan";
 import { ShapeDrawing } from "../../_ui/drawing/shape-drawing";
 import { QuantitySymbol } from "../../_ui/quantity-symbol";
 import { filled } from "../_words/words";
 import { FrameAnswerPane } from "./answer-pane";
-import { FrameApi, type Values } from "./frame-api";
+import { FrameApi, type Trouble, type Values } from "./frame-api";
+import { localNumbers } from "./local-number";
 import { InputField } from "./input-field";
 import { ToleranceField } from "./tolerance-field";
 import { TroubleCard } from "./trouble-card";
@@ -22,13 +25,17 @@ const FramePlots = dynamic(() => import("./frame-plots").then(({ FramePlots: Plo
   ssr: false,
 });
 
+const FramePicture = dynamic(() => import("./frame-picture").then(({ FramePicture: Picture }) => Picture), {
+  ssr: false,
+});
+
 /** One widget: inputs, drawing, answer, cautions, and whose service it is. Complete by keyboard, from 320 px. */
 export function Frame({ view }: { readonly view: FrameView }) {
   const { words, locale, show } = view;
   const [values, setValues] = useState<Values>(view.start);
   const [focused, setFocused] = useState<string>();
   const [api] = useState(() => new FrameApi(view));
-  const { result, trouble, pending, ask } = useAnswer(api, values);
+  const { result, trouble, pending, closing, path, ask } = useAnswer(api, values, view.outline !== null);
   const drawing = useDrawing(api, values, view.drawing);
   const content = useRef<HTMLElement>(null);
 
@@ -58,8 +65,7 @@ export function Frame({ view }: { readonly view: FrameView }) {
   useEffect(() => {
     if (!trouble) return;
     const errors = trouble.kind === "fields" ? trouble.fields : {};
-    const message = trouble.kind === "fields" ? [...Object.values(errors), ...trouble.whole].join(" ") : "";
-    tell("error", { code: trouble.kind, message, errors });
+    tell("error", { code: trouble.kind, message: messageOf(trouble), errors });
   }, [tell, trouble]);
 
   const gap = view.density === "compact" ? "gap-x-2 gap-y-0.5" : "gap-x-3 gap-y-1";
@@ -131,7 +137,12 @@ export function Frame({ view }: { readonly view: FrameView }) {
           ) : null}
         </form>
         <div className="grid content-start gap-1.5">
-          <FrameAnswerPane view={view} result={result} stale={pending || trouble !== null} />
+          <FrameAnswerPane
+            view={view}
+            result={result}
+            stale={pending || trouble !== null}
+            closing={closing}
+          />
           {trouble ? <TroubleCard view={view} trouble={trouble} values={values} onAgain={ask} /> : null}
           {drawing ? (
             <ShapeDrawing
@@ -140,12 +151,14 @@ export function Frame({ view }: { readonly view: FrameView }) {
               words={{ high: words.high, low: words.low, notToScale: words.notToScale }}
             />
           ) : null}
+          {view.outline?.plan ? <PlanView view={view} plan={view.outline.plan} /> : null}
         </div>
       </div>
       {tolerances?.budget && result?.uncertainty ? (
         <FrameBudget view={view} tolerances={tolerances} result={result} />
       ) : null}
       {show.plots && result?.profile ? <FramePlots view={view} profile={result.profile} /> : null}
+      {show.plots && path !== null ? <FramePicture key={path} view={view} api={api} path={path} /> : null}
       <footer className="mt-2 border-t border-rule pt-1 text-small text-ink-soft">
         <p>{words.disclaimer}</p>
         <p>
@@ -156,4 +169,25 @@ export function Frame({ view }: { readonly view: FrameView }) {
       </footer>
     </main>
   );
+}
+
+function PlanView({ view, plan }: { readonly view: FrameView; readonly plan: OutlinePlan }) {
+  const { words, locale } = view;
+  const size = localNumbers(plan.size, locale);
+  const names = plan.terminals.map(({ name }) => name).join(", ");
+  return (
+    <figure>
+      <OutlineDrawing
+        plan={plan}
+        label={filled(words.outlineOf, size, names)}
+        className="mx-auto block w-full max-w-[20rem]"
+      />
+      <figcaption className="text-center font-mono text-small text-ink-soft">{size}</figcaption>
+    </figure>
+  );
+}
+
+function messageOf(trouble: Trouble): string {
+  if (trouble.kind === "failed") return trouble.detail;
+  return trouble.kind === "fields" ? [...Object.values(trouble.fields), ...trouble.whole].join(" ") : "";
 }

@@ -29,6 +29,12 @@ export function TroubleCard({ view, trouble, values, onAgain }: TroubleProps) {
           ) : null}
         </Notice>
       );
+    case "failed":
+      return (
+        <Notice tone="problem" title={words.noSolution}>
+          {trouble.detail ? <p lang="en">{trouble.detail}</p> : null}
+        </Notice>
+      );
     case "quota": {
       const day = new Intl.DateTimeFormat(locale, { dateStyle: "long" }).format(trouble.until);
       return (

@@ -2,22 +2,31 @@
 
 import { useCallback, useEffect, useRef, useState } from "react";
 import { type FrameApi, FrameTrouble, type Trouble, type Values } from "./frame-api";
-import type { FrameDrawing, FrameResult } from "./frame-view";
+import type { FrameDrawing, FrameProgress, FrameResult } from "./frame-view";
+import { solveOutline } from "./solve-outline";
 
 /** How long typing may pause before a call is made, ms. */
 const PAUSE_MS = 250;
+/** Before a field solution is begun, which costs more than a formula. */
+const SOLVE_PAUSE_MS = 700;
 
 export interface FrameAnswer {
   /** The answer to what was typed last, or the one before while that is on its way or refused. */
   readonly result: FrameResult | null;
   readonly trouble: Trouble | null;
   readonly pending: boolean;
+  /** The bracket of a field solution on its way, and the first one; null where there is none. */
+  readonly closing: { readonly now: FrameProgress; readonly first: FrameProgress } | null;
+  /** Path of the field solution that answered; null for a shape. */
+  readonly path: string | null;
   /** Asks at once, also for what was asked before. */
   readonly ask: () => void;
 }
 
 /** The answer to the open values: asked for when they rest, and again by itself while the service is away. */
-export function useAnswer(api: FrameApi, values: Values): FrameAnswer {
+export function useAnswer(api: FrameApi, values: Values, onOutline: boolean): FrameAnswer {
+  const [path, setPath] = useState<string | null>(null);
+  const [closing, setClosing] = useState<FrameAnswer["closing"]>(null);
   const [result, setResult] = useState<FrameResult | null>(null);
   const [trouble, setTrouble] = useState<Trouble | null>(null);
   const [pending, setPending] = useState(true);
@@ -27,27 +36,35 @@ export function useAnswer(api: FrameApi, values: Values): FrameAnswer {
 
   useEffect(() => {
     const abort = new AbortController();
+    const pause = onOutline ? SOLVE_PAUSE_MS : PAUSE_MS;
     const compute = async () => {
       setPending(true);
       try {
-        const answer = await api.post<FrameResult>("/api/v1/resistance", JSON.parse(text), abort.signal);
+        const given: Values = JSON.parse(text);
+        const tell = (now: FrameProgress) => setClosing((before) => ({ now, first: before?.first ?? now }));
+        const solved = onOutline
+          ? await solveOutline(api, given, abort.signal, tell)
+          : { result: await api.post<FrameResult>("/api/v1/resistance", given, abort.signal), path: null };
         if (abort.signal.aborted) return;
-        setResult(answer);
+        setResult(solved.result);
+        setPath(solved.path);
         setTrouble(null);
       } catch (error) {
         if (abort.signal.aborted || !(error instanceof FrameTrouble)) return;
         setTrouble(error.trouble);
       }
       setPending(false);
+      setClosing(null);
     };
     // What the frame opens with, and what was asked for, is not waited for.
-    const timer = setTimeout(() => void compute(), asked.current ? PAUSE_MS : 0);
+    const timer = setTimeout(() => void compute(), asked.current ? pause : 0);
     asked.current = true;
     return () => {
       clearTimeout(timer);
       abort.abort();
+      setClosing(null);
     };
-  }, [api, text, turn]);
+  }, [api, text, turn, onOutline]);
 
   const ask = useCallback(() => {
     asked.current = false;
@@ -61,7 +78,7 @@ export function useAnswer(api: FrameApi, values: Values): FrameAnswer {
     return () => clearTimeout(timer);
   }, [trouble, waitMs, ask]);
 
-  return { result, trouble, pending, ask };
+  return { result, trouble, pending, closing, path, ask };
 }
 
 /** The drawing of the open values, and of the last ones that could be drawn. */

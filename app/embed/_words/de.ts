@@ -43,6 +43,11 @@ export const de: Words = {
   field: "Feldstärke",
   currentDensity: "Stromdichte",
   atOneVolt: "bei 1 V",
+  outlineOf: "Umriss von {0} mit den Anschlüssen {1}",
+  solving: "Die Schranken rücken zusammen …",
+  limited: "An einer Grenze angehalten; die bis dahin erreichten Schranken gelten.",
+  noSolution: "Für diese Werte gibt es keine Lösung",
+  fieldPicture: "Stromdichte, Äquipotential- und Stromlinien",
   basis: {
     rounding: "geschlossene Formel, auf Rundung genau",
     quadrature: "Fehlerschätzung des Integrals",

@@ -43,6 +43,11 @@ export const en: Words = {
   field: "Field strength",
   currentDensity: "Current density",
   atOneVolt: "at 1 V",
+  outlineOf: "Outline of {0} with the terminals {1}",
+  solving: "Closing in …",
+  limited: "Stopped at a limit; the bounds reached by then stand.",
+  noSolution: "There is no solution for these values",
+  fieldPicture: "Current density, equipotentials and stream lines",
   basis: {
     rounding: "a closed form, to its rounding",
     quadrature: "error estimate of the integral",

@@ -43,6 +43,11 @@ export const es: Words = {
   field: "Campo eléctrico",
   currentDensity: "Densidad de corriente",
   atOneVolt: "a 1 V",
+  outlineOf: "Contorno de {0} con los terminales {1}",
+  solving: "Las cotas se acercan …",
+  limited: "Detenido en un límite; valen las cotas alcanzadas hasta entonces.",
+  noSolution: "No hay solución para estos valores",
+  fieldPicture: "Densidad de corriente, equipotenciales y líneas de corriente",
   basis: {
     rounding: "fórmula exacta, salvo redondeo",
     quadrature: "error estimado de la integral",

@@ -19,7 +19,8 @@ export const fr: Words = {
   undecided: "Indécise : l’encadrement chevauche une limite.",
   requirement: "Exigence",
   cautions: "Précautions",
-  disclaimer: "Une résistance en courant continu sous les hypothèses indiquées, et non une preuve de conformité.",
+  disclaimer:
+    "Une résistance en courant continu sous les hypothèses indiquées, et non une preuve de conformité.",
   service: "Calculé par Rhoform pour {0}",
   reset: "Revenir aux valeurs initiales",
   again: "Réessayer",
@@ -43,6 +44,11 @@ export const fr: Words = {
   field: "Champ électrique",
   currentDensity: "Densité de courant",
   atOneVolt: "à 1 V",
+  outlineOf: "Contour de {0} avec les bornes {1}",
+  solving: "L’encadrement se resserre …",
+  limited: "Arrêté à une limite ; l’encadrement atteint jusque-là reste valable.",
+  noSolution: "Il n’y a pas de solution pour ces valeurs",
+  fieldPicture: "Densité de courant, équipotentielles et lignes de courant",
   basis: {
     rounding: "formule exacte, à l’arrondi près",
     quadrature: "erreur estimée de l’intégrale",

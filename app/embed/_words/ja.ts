@@ -43,6 +43,11 @@ export const ja: Words = {
   field: "電界強度",
   currentDensity: "電流密度",
   atOneVolt: "1 V あたり",
+  outlineOf: "外形 {0}、端子 {1}",
+  solving: "上下限を絞り込んでいます…",
+  limited: "上限に達して停止しました。それまでに得られた上下限は有効です。",
+  noSolution: "この値では解がありません",
+  fieldPicture: "電流密度、等電位線、流線",
   basis: {
     rounding: "閉じた式（丸め誤差のみ）",
     quadrature: "積分の推定誤差",

@@ -43,6 +43,11 @@ export const sv: Words = {
   field: "Fältstyrka",
   currentDensity: "Strömtäthet",
   atOneVolt: "vid 1 V",
+  outlineOf: "Kontur på {0} med anslutningarna {1}",
+  solving: "Gränserna närmar sig varandra …",
+  limited: "Stoppad vid en gräns; de gränser som nåddes dittills gäller.",
+  noSolution: "Det finns ingen lösning för de här värdena",
+  fieldPicture: "Strömtäthet, ekvipotentialer och strömlinjer",
   basis: {
     rounding: "sluten formel, så när som på avrundning",
     quadrature: "integralens uppskattade fel",

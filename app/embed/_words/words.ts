@@ -43,6 +43,12 @@ export interface Words {
   readonly field: string;
   readonly currentDensity: string;
   readonly atOneVolt: string;
+  /** Of a stored outline: its size, and the names of its terminals. */
+  readonly outlineOf: string;
+  readonly solving: string;
+  readonly limited: string;
+  readonly noSolution: string;
+  readonly fieldPicture: string;
   /** Where the bounds come from. */
   readonly basis: Readonly<Record<ResistanceResult["resistance"]["boundsBasis"], string>>;
   readonly metTolerances: string;

@@ -17,7 +17,8 @@ const PLAN = "The conductor is a sheet: the current density does not vary across
 const AXISYMMETRIC = "The conductor is the body swept by the outline around the axis x = 0.";
 const ESTIMATED =
   "The conductivity varies inside the elements, so the integrals behind the bounds are estimated and the bracket is not proved.";
-const CAUTION =
+/** Stands with every field solution. */
+export const FIELD_CAUTION =
   "The result is a DC resistance under the stated assumptions and no proof of compliance: ampacity, temperature rise, insulation and protection are for the local code and a licensed or otherwise competent engineer.";
 
 /** Names of what may end the work early, for people. */
@@ -56,7 +57,7 @@ export function presentField(prepared: PreparedField, solution: FieldSolution, s
     seconds,
     checks: solution.checks.map((check) => ({ ...check, applies: true })),
     repairs: [...outline.repairs],
-    cautions: [CAUTION, ...(solution.proved ? [] : [ESTIMATED]), ...collected.cautions],
+    cautions: [FIELD_CAUTION, ...(solution.proved ? [] : [ESTIMATED]), ...collected.cautions],
     assumptions: [...ASSUMPTIONS, outline.axisymmetric ? AXISYMMETRIC : PLAN, ...collected.assumptions],
     materials: collected.used,
     engine: ENGINE_VERSION,
