@@ -57,9 +57,9 @@ export function writeMessage(letter: Letter, origin: string): Message {
   const p = (body: string, style = "") => `<p style="margin:0 0 16px;${style}">${body}</p>`;
   const soft = "font-size:13px;color:#566067";
   const html = [
-    '<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="color-scheme" content="light dark">',
+    '<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width"><meta name="color-scheme" content="light">',
     `<title>${escaped(subject)}</title></head>`,
-    '<body style="margin:0;padding:24px;font:16px/1.6 system-ui,sans-serif">',
+    '<body style="margin:0;padding:24px;background:#ffffff;color:#1b2226;font:16px/1.6 system-ui,sans-serif">',
     '<div style="max-width:544px;margin:0 auto">',
     p(escaped(greeting)),
     ...paragraphs.map((paragraph) => p(escaped(paragraph))),

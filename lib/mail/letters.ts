@@ -122,7 +122,7 @@ export function keyExpiryLetter(
         : `The key "${key}" of the team ${team} expires on ${momentText(expiresAt)}. Calls with it are refused from then on.`,
       "Issue a new key and give it to the programs that use this one.",
     ],
-    action: { label: "Open the keys", url },
+    action: { label: "Open the key", url },
     closing: ["You get this because you look after keys of the team."],
   };
 }
@@ -158,7 +158,7 @@ export function quotaLetter(
         ? `Its calls are refused until ${momentText(resetsAt)}, unless its quota is raised.`
         : `The count starts anew on ${momentText(resetsAt)}.`,
     ],
-    action: { label: "Open the keys", url },
+    action: { label: "Open the key", url },
     closing: ["You get this because you look after keys of the team."],
   };
 }
