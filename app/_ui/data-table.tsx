@@ -101,7 +101,7 @@ function HeadCell<Row>({ column, sorting, onSort }: HeadCellProps<Row>) {
           className={`inline-flex min-h-5.5 cursor-pointer items-center gap-0.5 rounded hover:text-ink medium:min-h-3 ${own ? "text-ink" : ""}`}
         >
           {title}
-          <Icon aria-hidden size={14} />
+          <Icon aria-hidden size={14} className="shrink-0" />
         </button>
       ) : (
         title

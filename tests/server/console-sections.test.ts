@@ -208,3 +208,29 @@ test("the overview sums what the team did", async () => {
   expect(overview.errors.total).toBeGreaterThan(0);
   expect(overview.slowest.length).toBeGreaterThan(0);
 });
+
+test("somebody invited without a team is refused at the teams; the activity names the material that was changed", async () => {
+  const { name, value } = await signedInCookie(server.service, { role: "admin", team: OURS });
+  const admin = { Cookie: `${name}=${value}`, Origin: server.base, "Content-Type": "application/json" };
+  const refused = await fetch(`${server.base}/api/console/people`, {
+    method: "POST",
+    headers: admin,
+    body: JSON.stringify({ email: "maud@merrow-pike.example", name: "Maud", role: "viewer", teams: [] }),
+  });
+  expect(refused.status).toBe(422);
+  expect(await refused.json()).toMatchObject({
+    detail: "A viewer belongs to at least one team.",
+    errors: [{ pointer: "#/teams" }],
+  });
+
+  const { id } = await answer<{ id: string }>("POST", "materials", { teamId, ...BRONZE });
+  await answer("PATCH", `materials/${id}`, { from: 1, name: "Contact bronze, lot 9" });
+  const acts = await answer<Page>("GET", `activity?subject=${id}`);
+  expect(acts.rows).toMatchObject([
+    { action: "material.change", subject: { id, name: "Contact bronze, lot 9", present: true } },
+    { action: "material.create", before: null, after: { name: "Contact bronze" } },
+  ]);
+  const file = await (await send("GET", `activity?subject=${id}&csv=1`)).text();
+  expect(file).toContain("Contact bronze, lot 9");
+  expect(file).toContain('""coefficient"":0.0011');
+});

@@ -1,9 +1,10 @@
 "use client";
 
-import { type KeyboardEvent, type PointerEvent, useEffect, useId, useMemo, useRef, useState } from "react";
+import { type KeyboardEvent, type PointerEvent, useId, useMemo, useRef } from "react";
 import { scaleLinear, scaleLog } from "d3-scale";
 import { line } from "d3-shape";
 import { type AxisUnit, axisUnit, domainOf, powerLabel, readOff } from "./axis";
+import { useWidth } from "./use-width";
 
 export interface PlotAxis {
   readonly label: string;
@@ -32,6 +33,8 @@ interface LinePlotProps {
   /** Index of the sample that is read off. */
   readonly cursor: number | null;
   readonly onCursor: (index: number | null) => void;
+  /** What is read out, where the page speaks another language: what the plot is for, and that nothing is chosen yet. */
+  readonly spoken?: { readonly readOff: string; readonly noPosition: string };
 }
 
 const HEIGHT = 220;
@@ -45,7 +48,7 @@ const STROKES = [
 
 /** One or a few lines over one coordinate. Pointer and arrow keys move a hair line that reads the values off. */
 export function LinePlot(props: LinePlotProps) {
-  const { title, x, y, series, logX, logY, cursor, onCursor } = props;
+  const { title, x, y, series, logX, logY, cursor, onCursor, spoken } = props;
   const frame = useRef<HTMLDivElement>(null);
   const clip = useId();
   const width = useWidth(frame);
@@ -136,12 +139,12 @@ export function LinePlot(props: LinePlotProps) {
         viewBox={`0 0 ${width} ${HEIGHT}`}
         height={HEIGHT}
         role="slider"
-        aria-label={`${title}: read off a value`}
+        aria-label={spoken?.readOff ?? `${title}: read off a value`}
         aria-orientation="horizontal"
         aria-valuemin={0}
         aria-valuemax={last}
         aria-valuenow={cursor ?? 0}
-        aria-valuetext={reading ?? "No position chosen"}
+        aria-valuetext={reading ?? spoken?.noPosition ?? "No position chosen"}
         tabIndex={0}
         onPointerMove={follow}
         onPointerDown={follow}
@@ -286,19 +289,4 @@ function readingText(
   });
   const place = x.names ? x.names[index].full : `${x.label} ${readOff(position)} ${xUnit.label}`;
   return `${place}: ${y.label.toLowerCase()} ${values.join("; ")}`;
-}
-
-/** Width of the frame in pixels; text in the plot then has its true size everywhere. */
-function useWidth(frame: { readonly current: HTMLElement | null }): number {
-  const [width, setWidth] = useState(600);
-  useEffect(() => {
-    const element = frame.current;
-    if (!element) return;
-    const observer = new ResizeObserver(([entry]) =>
-      setWidth(Math.max(220, Math.round(entry.contentRect.width))),
-    );
-    observer.observe(element);
-    return () => observer.disconnect();
-  }, [frame]);
-  return width;
 }

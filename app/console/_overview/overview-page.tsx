@@ -1,6 +1,7 @@
 "use client";
 
 import Link from "next/link";
+import type { ReactNode } from "react";
 import { DataTable } from "../../_ui/data-table";
 import { LocalTime } from "../../_ui/local-time";
 import { Notice } from "../../_ui/notice";
@@ -10,6 +11,7 @@ import { BarChart } from "../_parts/bar-chart";
 import { Figures } from "../_parts/figures";
 import { Meter } from "../_parts/meter";
 import { countText, msText, operationText } from "../_parts/numbers";
+import { NoTeamYet } from "../_parts/no-team-yet";
 import { PageHead } from "../_parts/page-head";
 import { StatusWord } from "../_parts/status-word";
 import { useConsole } from "../_shell/use-console";
@@ -32,19 +34,60 @@ interface Overview {
   readonly attention: readonly { readonly kind: string; readonly text: string; readonly href: string }[];
 }
 
+interface OverviewPageProps {
+  /** Whether there is any team that the person sees. */
+  readonly anyTeam: boolean;
+  /** Whether the person may issue keys. */
+  readonly mayIssue: boolean;
+}
+
 /** Today and this month at a glance, and what needs somebody. */
-export function OverviewPage() {
+export function OverviewPage({ anyTeam, mayIssue }: OverviewPageProps) {
   const { data, error } = useConsole<Overview>("overview", { refreshInterval: 20_000 });
   return (
     <>
       <PageHead title="Overview">Sums of your teams; days and hours are in UTC.</PageHead>
       {error ? <ProblemNotice problem={error.problem} /> : null}
-      {data ? <Sections overview={data} /> : error ? null : <Loading what="the overview" className="h-60" />}
+      {data ? (
+        <Sections
+          overview={data}
+          start={anyTeam ? <NoCalls mayIssue={mayIssue} /> : <NoTeamYet what="Keys" />}
+        />
+      ) : error ? null : (
+        <Loading what="the overview" className="h-60" />
+      )}
     </>
   );
 }
 
-function Sections({ overview }: { readonly overview: Overview }) {
+function NoCalls({ mayIssue }: Pick<OverviewPageProps, "mayIssue">) {
+  if (!mayIssue)
+    return (
+      <EmptyState title="No calls yet">
+        A developer of your team can issue a key; its calls appear here within seconds.
+      </EmptyState>
+    );
+  return (
+    <EmptyState
+      title="No calls yet"
+      action={
+        <Link className="link" href="/console/keys">
+          Issue a key
+        </Link>
+      }
+    >
+      Issue a key, call the API with it, and the call appears here within seconds.
+    </EmptyState>
+  );
+}
+
+interface SectionsProps {
+  readonly overview: Overview;
+  /** In place of the figures, until there is a call: what to do first. */
+  readonly start: ReactNode;
+}
+
+function Sections({ overview, start }: SectionsProps) {
   const { today, month, hours, days, quotas, errors, slowest, attention } = overview;
   // The last of the days is today; months are those of UTC, as quotas count them.
   const beginsToday = days.at(-1)?.at.slice(8, 10) === "01";
@@ -72,16 +115,7 @@ function Sections({ overview }: { readonly overview: Overview }) {
         )}
       </section>
       {idle ? (
-        <EmptyState
-          title="No calls yet"
-          action={
-            <Link className="link" href="/console/keys">
-              Issue a key
-            </Link>
-          }
-        >
-          Issue a key, call the API with it, and the call appears here within seconds.
-        </EmptyState>
+        start
       ) : (
         <>
           <section>

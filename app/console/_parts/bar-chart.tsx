@@ -1,9 +1,10 @@
 "use client";
 
-import { type ReactNode, useEffect, useMemo, useRef, useState } from "react";
+import { type ReactNode, useMemo, useRef, useState } from "react";
 import { scaleBand, scaleLinear } from "d3-scale";
 import { Button } from "../../_ui/button";
 import { DataTable } from "../../_ui/data-table";
+import { useWidth } from "../../_ui/plot/use-width";
 
 export interface BarPart {
   readonly label: string;
@@ -178,19 +179,4 @@ export function BarChart({ title, at, by, parts, beside }: BarChartProps) {
       ) : null}
     </figure>
   );
-}
-
-/** Width of the frame in pixels; text in the chart then has its true size everywhere. */
-function useWidth(frame: { readonly current: HTMLElement | null }): number {
-  const [width, setWidth] = useState(600);
-  useEffect(() => {
-    const element = frame.current;
-    if (!element) return;
-    const observer = new ResizeObserver(([entry]) =>
-      setWidth(Math.max(220, Math.round(entry.contentRect.width))),
-    );
-    observer.observe(element);
-    return () => observer.disconnect();
-  }, [frame]);
-  return width;
 }

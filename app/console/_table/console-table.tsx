@@ -183,7 +183,7 @@ function SortButton({ title, sorted, onPress }: SortButtonProps) {
       className={`inline-flex min-h-5.5 cursor-pointer items-center gap-0.5 rounded hover:text-ink medium:min-h-3 ${sorted ? "text-ink" : ""}`}
     >
       {title}
-      <Icon aria-hidden size={14} />
+      <Icon aria-hidden size={14} className="shrink-0" />
     </button>
   );
 }

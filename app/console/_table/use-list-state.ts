@@ -32,7 +32,7 @@ export interface ListChange {
   readonly columns?: readonly string[];
 }
 
-interface ListOptions {
+export interface ListOptions {
   readonly sort: string;
   readonly size?: number;
   /** Names of the list's own filters, as the server takes them. */

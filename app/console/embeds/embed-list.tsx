@@ -6,11 +6,13 @@ import { useState } from "react";
 import type { EmbedRowView } from "@/lib/embeds/embed-list";
 import { Button } from "../../_ui/button";
 import { EmptyState } from "../../_ui/states";
-import { useConsole } from "../_shell/use-console";
-import type { ListColumn, ListPage } from "../_table/column";
+import { countText } from "../_parts/numbers";
+import { NoTeamYet } from "../_parts/no-team-yet";
+import type { ListColumn } from "../_table/column";
 import { ConsoleTable } from "../_table/console-table";
 import { ListFilter, ListTools } from "../_table/list-tools";
-import { useListState } from "../_table/use-list-state";
+import { madeColumn, teamColumn } from "../_table/shared-columns";
+import { useList } from "../_table/use-list";
 import { NewEmbed } from "./new-embed";
 import { StateMark } from "./state-mark";
 
@@ -23,6 +25,8 @@ export interface ShapeChoice {
 interface EmbedListProps {
   /** Teams for which the person may make widgets. */
   readonly teams: readonly { readonly id: string; readonly name: string }[];
+  /** Whether there is any team that the person sees. */
+  readonly anyTeam: boolean;
   readonly ownTeam: string;
   readonly shapes: readonly ShapeChoice[];
 }
@@ -51,13 +55,13 @@ const COLUMNS: readonly ListColumn<EmbedRowView>[] = [
     sortable: true,
     cell: ({ state, version }) => <StateMark state={state} version={version} />,
   },
-  { id: "team", title: "Team", sortable: true, from: "medium", cell: ({ teamName }) => teamName },
+  teamColumn(),
   {
     id: "requests",
     title: "Calls, 31 days",
     sortable: true,
     align: "end",
-    cell: ({ requests }) => requests.toLocaleString("en"),
+    cell: ({ requests }) => countText(requests),
   },
   {
     id: "remaining",
@@ -65,7 +69,7 @@ const COLUMNS: readonly ListColumn<EmbedRowView>[] = [
     sortable: true,
     align: "end",
     from: "medium",
-    cell: ({ month }) => `${month.remaining.toLocaleString("en")} of ${month.quota.toLocaleString("en")}`,
+    cell: ({ month }) => `${countText(month.remaining)} of ${countText(month.quota)}`,
   },
   {
     id: "origins",
@@ -73,32 +77,20 @@ const COLUMNS: readonly ListColumn<EmbedRowView>[] = [
     from: "wide",
     cell: ({ origins }) => (origins.length === 0 ? "none yet" : origins.join(", ")),
   },
-  {
-    id: "createdAt",
-    title: "Made",
-    sortable: true,
-    from: "wide",
-    cell: ({ createdAt, createdBy }) => (
-      <>
-        <time dateTime={createdAt} title={createdAt} suppressHydrationWarning>
-          {new Date(createdAt).toLocaleDateString("en-GB")}
-        </time>{" "}
-        by {createdBy}
-      </>
-    ),
-  },
+  madeColumn("Made", "wide"),
 ];
 
 const FILTERS = ["state"];
 
 /** The widgets of the person's teams, and the way to a new one. */
-export function EmbedList({ teams, ownTeam, shapes }: EmbedListProps) {
-  const state = useListState({ sort: "-createdAt", filters: FILTERS });
-  const { data, error, isValidating, mutate } = useConsole<ListPage<EmbedRowView>>(`embeds?${state.query}`);
+export function EmbedList({ teams, anyTeam, ownTeam, shapes }: EmbedListProps) {
+  const { state, table } = useList<EmbedRowView>("embeds", { sort: "-createdAt", filters: FILTERS });
   // A calculation page leads here with its shape and its values.
   const address = useSearchParams();
   const wanted = shapes.find(({ id }) => id === address.get("shape"));
-  const [making, setMaking] = useState(wanted !== undefined);
+  // The outline page leads here with what it kept.
+  const outlineId = address.get("outline") ?? undefined;
+  const [making, setMaking] = useState(wanted !== undefined || outlineId !== undefined);
   const mayMake = teams.length > 0;
   return (
     <>
@@ -106,7 +98,8 @@ export function EmbedList({ teams, ownTeam, shapes }: EmbedListProps) {
         <div className="grow">
           <h1>Embeds</h1>
           <p className="mt-0.5 max-w-prose text-table text-ink-soft">
-            Calculators of your team for intranet pages and wikis: one shape, your own limits, in a frame.
+            Calculators of your team for intranet pages and wikis: one shape or outline, your own limits, in a
+            frame.
           </p>
         </div>
         {mayMake ? (
@@ -121,18 +114,18 @@ export function EmbedList({ teams, ownTeam, shapes }: EmbedListProps) {
       <ConsoleTable
         caption="Embeds"
         columns={COLUMNS}
-        state={state}
-        data={data}
-        error={error}
-        busy={isValidating}
-        onRetry={() => void mutate()}
+        {...table}
         rowKey={({ id }) => id}
         empty={
-          <EmptyState title="No embeds yet">
-            {mayMake
-              ? "Make one: choose a shape, say what visitors may change, publish, and copy the snippet."
-              : "Developers of your team make them; they will stand here."}
-          </EmptyState>
+          anyTeam ? (
+            <EmptyState title="No embeds yet">
+              {mayMake
+                ? "Make one: choose a shape or an outline, say what visitors may change, publish, and copy the snippet."
+                : "Developers of your team make them; they will stand here."}
+            </EmptyState>
+          ) : (
+            <NoTeamYet what="Embeds" />
+          )
         }
       />
       {making && mayMake ? (
@@ -142,6 +135,7 @@ export function EmbedList({ teams, ownTeam, shapes }: EmbedListProps) {
           shapes={shapes}
           shape={wanted?.id}
           values={wanted ? Object.fromEntries(address) : {}}
+          outlineId={wanted ? undefined : outlineId}
           onClose={() => setMaking(false)}
         />
       ) : null}

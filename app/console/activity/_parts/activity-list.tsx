@@ -7,11 +7,12 @@ import { LocalTime } from "../../../_ui/local-time";
 import { EmptyState } from "../../../_ui/states";
 import { PageHead } from "../../_parts/page-head";
 import type { TeamChoice } from "../../_shell/team-choices";
-import { useConsole } from "../../_shell/use-console";
-import type { ListColumn, ListPage } from "../../_table/column";
+import type { ListColumn } from "../../_table/column";
 import { ConsoleTable } from "../../_table/console-table";
 import { ListFilter, ListTools } from "../../_table/list-tools";
-import { type ListState, useListState } from "../../_table/use-list-state";
+import { TeamFilter } from "../../_table/shared-columns";
+import { useList } from "../../_table/use-list";
+import type { ListState } from "../../_table/use-list-state";
 import { ActDialog } from "./act-dialog";
 import {
   ACT_KINDS,
@@ -33,9 +34,10 @@ interface ActivityListProps {
 
 /** Who did what, newest first; nothing in it can be changed or removed. */
 export function ActivityList({ teams, all }: ActivityListProps) {
-  const state = useListState({ sort: "-at", filters: FILTERS });
-  const { data, error, isLoading, mutate } = useConsole<ListPage<ActShown>>(`activity?${state.query}`, {
-    refreshInterval: 30_000,
+  const { state, table } = useList<ActShown>("activity", {
+    sort: "-at",
+    filters: FILTERS,
+    refreshMs: 30_000,
   });
   const [open, setOpen] = useState<ActShown | null>(null);
   const columns = columnsFor(setOpen);
@@ -47,14 +49,7 @@ export function ActivityList({ teams, all }: ActivityListProps) {
         cannot be altered.
       </PageHead>
       <ListTools state={state} columns={columns} searches="who, what, id" csv="activity">
-        {teams.length > 1 ? (
-          <ListFilter
-            state={state}
-            name="team"
-            label="Team"
-            options={teams.map(({ id, name }) => ({ value: id, label: name }))}
-          />
-        ) : null}
+        <TeamFilter state={state} teams={teams} />
         <ListFilter state={state} name="kind" label="About" options={ACT_KINDS} />
         <ListFilter state={state} name="actor" label="By" options={ACTOR_KINDS} />
         <DayFilter state={state} name="from" label="From (UTC)" />
@@ -63,11 +58,7 @@ export function ActivityList({ teams, all }: ActivityListProps) {
       <ConsoleTable
         caption="Activity"
         columns={columns}
-        state={state}
-        data={data}
-        error={error}
-        busy={isLoading}
-        onRetry={() => void mutate()}
+        {...table}
         rowKey={({ id }) => id}
         empty={
           <EmptyState title="Nothing yet">Changes are listed here as soon as somebody makes one.</EmptyState>

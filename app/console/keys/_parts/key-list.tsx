@@ -8,13 +8,14 @@ import { LocalTime } from "../../../_ui/local-time";
 import { EmptyState } from "../../../_ui/states";
 import { Meter } from "../../_parts/meter";
 import { clientText } from "../../_parts/numbers";
+import { NoTeamYet } from "../../_parts/no-team-yet";
 import { PageHead } from "../../_parts/page-head";
 import type { TeamChoice } from "../../_shell/team-choices";
-import { useConsole } from "../../_shell/use-console";
-import type { ListColumn, ListPage } from "../../_table/column";
+import type { ListColumn } from "../../_table/column";
 import { ConsoleTable } from "../../_table/console-table";
 import { ListFilter, ListTools } from "../../_table/list-tools";
-import { useListState } from "../../_table/use-list-state";
+import { columnsForTeams, madeColumn, TeamFilter, teamColumn } from "../../_table/shared-columns";
+import { useList } from "../../_table/use-list";
 import { IssueDialog } from "./issue-dialog";
 import type { Key } from "./key";
 import { KeyState } from "./key-state";
@@ -39,7 +40,7 @@ const COLUMNS: readonly ListColumn<Key>[] = [
     title: "State",
     cell: ({ state, expiresAt }) => <KeyState state={state} expiresAt={expiresAt} />,
   },
-  { id: "team", title: "Team", sortable: true, from: "medium", cell: ({ teamName }) => teamName },
+  teamColumn(),
   {
     id: "month",
     title: "This month",
@@ -65,7 +66,7 @@ const COLUMNS: readonly ListColumn<Key>[] = [
   },
   {
     id: "expiresAt",
-    title: "Ends",
+    title: "Expires",
     sortable: true,
     from: "wide",
     cell: ({ expiresAt }) =>
@@ -77,23 +78,12 @@ const COLUMNS: readonly ListColumn<Key>[] = [
     from: "extra",
     cell: ({ scopes }) => <span className="font-mono text-small">{scopes.join(" ")}</span>,
   },
-  {
-    id: "createdAt",
-    title: "Issued",
-    sortable: true,
-    from: "extra",
-    cell: ({ createdAt, createdBy }) => (
-      <>
-        <LocalTime at={createdAt} />
-        <span className="block text-small text-ink-soft">by {createdBy}</span>
-      </>
-    ),
-  },
+  madeColumn("Issued", "extra"),
 ];
 
 const STATES = [
   { value: "active", label: "Active" },
-  { value: "expiring", label: "Ending soon" },
+  { value: "expiring", label: "Expiring soon" },
   { value: "expired", label: "Expired" },
   { value: "revoked", label: "Revoked" },
 ];
@@ -109,13 +99,9 @@ interface KeyListProps {
 
 /** All keys of the person's teams. */
 export function KeyList({ teams, issueFor, ownTeamId }: KeyListProps) {
-  const state = useListState({ sort: "-createdAt", filters: FILTERS });
-  const { data, error, isValidating, mutate } = useConsole<ListPage<Key>>(`keys?${state.query}`);
+  const { state, table, mutate } = useList<Key>("keys", { sort: "-createdAt", filters: FILTERS });
   const [issuing, setIssuing] = useState(false);
-  const columns = useMemo(
-    () => (teams.length > 1 ? COLUMNS : COLUMNS.filter(({ id }) => id !== "team")),
-    [teams.length],
-  );
+  const columns = useMemo(() => columnsForTeams(COLUMNS, teams.length > 1), [teams.length]);
   const issue =
     issueFor.length > 0 ? (
       <Button variant="primary" onClick={() => setIssuing(true)}>
@@ -129,31 +115,24 @@ export function KeyList({ teams, issueFor, ownTeamId }: KeyListProps) {
         it.
       </PageHead>
       <ListTools state={state} columns={columns} searches="name, id, issuer" csv="keys">
-        {teams.length > 1 ? (
-          <ListFilter
-            state={state}
-            name="team"
-            label="Team"
-            options={teams.map(({ id, name }) => ({ value: id, label: name }))}
-          />
-        ) : null}
+        <TeamFilter state={state} teams={teams} />
         <ListFilter state={state} name="state" label="State" options={STATES} />
       </ListTools>
       <ConsoleTable
         caption="Keys"
         columns={columns}
-        state={state}
-        data={data}
-        error={error}
-        busy={isValidating && !data}
-        onRetry={() => void mutate()}
+        {...table}
         rowKey={({ id }) => id}
         empty={
-          <EmptyState title="No keys yet">
-            {issueFor.length > 0
-              ? "Issue the first one: it is shown once, ready to copy into a script."
-              : "A developer of your team can issue one."}
-          </EmptyState>
+          teams.length === 0 ? (
+            <NoTeamYet what="Keys" />
+          ) : (
+            <EmptyState title="No keys yet">
+              {issueFor.length > 0
+                ? "Issue the first one: it is shown once, ready to copy into a script."
+                : "A developer of your team can issue one."}
+            </EmptyState>
+          )
         }
       />
       {issuing ? (

@@ -102,7 +102,7 @@ function Facts({ keyShown: key }: { readonly keyShown: KeyDetail }) {
         <dd className="font-mono break-all">{key.origins.length > 0 ? key.origins.join("  ") : "none"}</dd>
         <dt>In a URL</dt>
         <dd>{key.allowedInUrl ? "may travel as ?key=" : "not accepted"}</dd>
-        <dt>Ends</dt>
+        <dt>Expires</dt>
         <dd>{key.expiresAt ? <LocalTime at={key.expiresAt} /> : "never"}</dd>
         <dt>Issued</dt>
         <dd>

@@ -10,11 +10,10 @@ import { countText } from "../../_parts/numbers";
 import { PageHead } from "../../_parts/page-head";
 import { StateWord } from "../../_parts/state-word";
 import type { TeamChoice } from "../../_shell/team-choices";
-import { useConsole } from "../../_shell/use-console";
-import type { ListColumn, ListPage } from "../../_table/column";
+import type { ListColumn } from "../../_table/column";
 import { ConsoleTable } from "../../_table/console-table";
 import { ListFilter, ListTools } from "../../_table/list-tools";
-import { useListState } from "../../_table/use-list-state";
+import { useList } from "../../_table/use-list";
 import { KINDS, type ListedMaterial } from "./material";
 import { MaterialDialog } from "./material-dialog";
 import { resistivityText } from "./material-facts";
@@ -84,10 +83,7 @@ interface MaterialListProps {
 
 /** The library and the teams' own materials. */
 export function MaterialList({ teams, createFor, ownTeamId }: MaterialListProps) {
-  const state = useListState({ sort: "name", filters: FILTERS });
-  const { data, error, isValidating, mutate } = useConsole<ListPage<ListedMaterial>>(
-    `materials?${state.query}`,
-  );
+  const { state, table, mutate } = useList<ListedMaterial>("materials", { sort: "name", filters: FILTERS });
   const [creating, setCreating] = useState(false);
   const toast = useToast();
   return (
@@ -133,11 +129,7 @@ export function MaterialList({ teams, createFor, ownTeamId }: MaterialListProps)
       <ConsoleTable
         caption="Materials"
         columns={COLUMNS}
-        state={state}
-        data={data}
-        error={error}
-        busy={isValidating && !data}
-        onRetry={() => void mutate()}
+        {...table}
         rowKey={({ id }) => id}
         empty={<EmptyState title="No materials" />}
       />

@@ -1,18 +1,6 @@
 /** Materials as the console's JSON has them. */
 
-export interface ListedMaterial {
-  readonly id: string;
-  readonly version: number;
-  readonly name: string;
-  readonly kind: string;
-  readonly teamId: string | null;
-  readonly teamName: string | null;
-  readonly resistivityOhmM: number;
-  readonly atC: number;
-  readonly provenance: string;
-  readonly retiredAt: string | null;
-  readonly records: number;
-}
+export type { ListedMaterial } from "@/lib/materials/console-materials";
 
 export type Law = { readonly model: string } & Readonly<Record<string, unknown>>;
 

@@ -10,10 +10,11 @@ import { PageHead } from "../../_parts/page-head";
 import { StateWord } from "../../_parts/state-word";
 import { callConsole } from "../../_shell/call-console";
 import { useConsole } from "../../_shell/use-console";
-import type { ListColumn, ListPage } from "../../_table/column";
+import type { ListColumn } from "../../_table/column";
 import { ConsoleTable } from "../../_table/console-table";
 import { ListFilter, ListTools } from "../../_table/list-tools";
-import { useListState } from "../../_table/use-list-state";
+import { TeamFilter } from "../../_table/shared-columns";
+import { useList } from "../../_table/use-list";
 import { InviteDialog } from "./invite-dialog";
 import { type PersonShown, ROLE_CHOICES, type TeamShown } from "./person";
 import { PersonDialog } from "./person-dialog";
@@ -31,8 +32,7 @@ type Open =
 
 /** Who may sign in, with what role, for which teams. */
 export function PeopleList({ manages, selfId }: PeopleListProps) {
-  const state = useListState({ sort: "name", filters: FILTERS });
-  const { data, error, isLoading, mutate } = useConsole<ListPage<PersonShown>>(`people?${state.query}`);
+  const { state, table, mutate } = useList<PersonShown>("people", { sort: "name", filters: FILTERS });
   const { data: teams, mutate: mutateTeams } = useConsole<{ rows: readonly TeamShown[] }>("teams");
   const [open, setOpen] = useState<Open | null>(null);
   const say = useToast();
@@ -64,12 +64,7 @@ export function PeopleList({ manages, selfId }: PeopleListProps) {
         {manages ? undefined : "Those who belong to your teams."}
       </PageHead>
       <ListTools state={state} columns={columns} searches="name, e-mail" csv="people">
-        <ListFilter
-          state={state}
-          name="team"
-          label="Team"
-          options={(teams?.rows ?? []).map(({ id, name }) => ({ value: id, label: name }))}
-        />
+        <TeamFilter state={state} teams={teams?.rows ?? []} />
         <ListFilter state={state} name="role" label="Role" options={ROLE_CHOICES} />
         <ListFilter
           state={state}
@@ -84,11 +79,7 @@ export function PeopleList({ manages, selfId }: PeopleListProps) {
       <ConsoleTable
         caption="People"
         columns={columns}
-        state={state}
-        data={data}
-        error={error}
-        busy={isLoading}
-        onRetry={() => void mutate()}
+        {...table}
         rowKey={({ id }) => id}
         empty={<EmptyState title="Nobody belongs to your teams">An administrator sets who does.</EmptyState>}
       />

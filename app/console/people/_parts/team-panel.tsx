@@ -27,7 +27,10 @@ export function TeamPanel({ manages }: { readonly manages: boolean }) {
       </div>
       {error ? <ProblemNotice problem={error.problem} /> : null}
       {data && data.rows.length === 0 ? (
-        <EmptyState title="No teams yet">Keys, embeds, materials and records belong to a team.</EmptyState>
+        <EmptyState title="No teams yet">
+          Keys, embeds, materials and records belong to a team.
+          {manages ? " Make the first one, then invite people into it." : null}
+        </EmptyState>
       ) : null}
       {data && data.rows.length > 0 ? (
         <DataTable
@@ -52,7 +55,11 @@ export function TeamPanel({ manages }: { readonly manages: boolean }) {
                   team.name
                 ),
             },
-            { key: "slug", title: "Short name", cell: ({ slug }) => <code>{slug}</code> },
+            {
+              key: "slug",
+              title: "Short name",
+              cell: ({ slug }) => <code className="whitespace-nowrap">{slug}</code>,
+            },
             {
               key: "people",
               title: "People",

@@ -7,13 +7,14 @@ import { Button, ButtonLink } from "../../../_ui/button";
 import { LocalTime } from "../../../_ui/local-time";
 import { EmptyState } from "../../../_ui/states";
 import { operationText } from "../../_parts/numbers";
+import { NoTeamYet } from "../../_parts/no-team-yet";
 import { PageHead } from "../../_parts/page-head";
 import type { TeamChoice } from "../../_shell/team-choices";
-import { useConsole } from "../../_shell/use-console";
-import type { ListColumn, ListPage } from "../../_table/column";
+import type { ListColumn } from "../../_table/column";
 import { ConsoleTable } from "../../_table/console-table";
 import { ListFilter, ListTools } from "../../_table/list-tools";
-import { useListState } from "../../_table/use-list-state";
+import { columnsForTeams, TeamFilter, teamColumn } from "../../_table/shared-columns";
+import { useList } from "../../_table/use-list";
 import { DriftWord } from "./drift-word";
 import { LabelCell } from "./label-cell";
 import { useReplays } from "./use-replays";
@@ -45,8 +46,11 @@ interface RecordListProps {
 
 /** Stored calculations: found, relabelled, replayed. */
 export function RecordList({ teams, managed }: RecordListProps) {
-  const state = useListState({ sort: "-createdAt", size: 25, filters: FILTERS });
-  const { data, error, isValidating, mutate } = useConsole<ListPage<ListedRecord>>(`records?${state.query}`);
+  const { state, table, data, mutate } = useList<ListedRecord>("records", {
+    sort: "-createdAt",
+    size: 25,
+    filters: FILTERS,
+  });
   const { replays, running, replayAll } = useReplays();
   const [relabelling, setRelabelling] = useState<string | null>(null);
   const replayable = (data?.rows ?? []).filter(
@@ -88,7 +92,7 @@ export function RecordList({ teams, managed }: RecordListProps) {
         from: "extra",
         cell: ({ operation }) => operationText(operation),
       },
-      { id: "team", title: "Team", sortable: true, from: "wide", cell: ({ teamName }) => teamName },
+      teamColumn("wide"),
       {
         id: "createdAt",
         title: "Stored",
@@ -99,7 +103,7 @@ export function RecordList({ teams, managed }: RecordListProps) {
       { id: "by", title: "By", sortable: true, from: "wide", cell: ({ byName }) => byName },
       { id: "engine", title: "Engine", from: "extra", cell: ({ engine }) => engine },
     ];
-    return teams.length > 1 ? all : all.filter(({ id }) => id !== "team");
+    return columnsForTeams(all, teams.length > 1);
   }, [managed, mutate, relabelling, replays, teams.length]);
   const material = state.filter("material");
   return (
@@ -127,29 +131,22 @@ export function RecordList({ teams, managed }: RecordListProps) {
         </p>
       ) : null}
       <ListTools state={state} columns={columns} searches="label, who" csv="records">
-        {teams.length > 1 ? (
-          <ListFilter
-            state={state}
-            name="team"
-            label="Team"
-            options={teams.map(({ id, name }) => ({ value: id, label: name }))}
-          />
-        ) : null}
+        <TeamFilter state={state} teams={teams} />
         <ListFilter state={state} name="operation" label="Operation" options={OPERATIONS} />
       </ListTools>
       <ConsoleTable
         caption="Records"
         columns={columns}
-        state={state}
-        data={data}
-        error={error}
-        busy={isValidating && !data}
-        onRetry={() => void mutate()}
+        {...table}
         rowKey={({ id }) => id}
         empty={
-          <EmptyState title="No records yet" action={<ButtonLink href="/calculate">Calculate</ButtonLink>}>
-            Save an answer on the pages, or send <code>record</code> with a request.
-          </EmptyState>
+          teams.length === 0 ? (
+            <NoTeamYet what="Records" />
+          ) : (
+            <EmptyState title="No records yet" action={<ButtonLink href="/calculate">Calculate</ButtonLink>}>
+              Save an answer on the pages, or send <code>record</code> with a request.
+            </EmptyState>
+          )
         }
       />
     </>

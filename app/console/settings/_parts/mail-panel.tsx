@@ -83,7 +83,9 @@ export function MailPanel({
       {error ? <ProblemNotice problem={error.problem} /> : null}
       {data ? (
         data.rows.length === 0 ? (
-          <EmptyState title="No mails yet" />
+          <EmptyState title="No mails yet">
+            Invitations, new passwords and notices about keys are listed here.
+          </EmptyState>
         ) : (
           <DataTable
             caption="Latest mails"

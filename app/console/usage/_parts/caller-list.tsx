@@ -3,19 +3,21 @@
 import { useMemo } from "react";
 import { EmptyState } from "../../../_ui/states";
 import { countText, msText } from "../../_parts/numbers";
-import { useConsole } from "../../_shell/use-console";
-import type { ListColumn, ListPage } from "../../_table/column";
+import type { ListColumn } from "../../_table/column";
 import { ConsoleTable } from "../../_table/console-table";
 import { ListTools } from "../../_table/list-tools";
-import { useListState } from "../../_table/use-list-state";
+import { columnsForTeams } from "../../_table/shared-columns";
+import { useList } from "../../_table/use-list";
 import type { CallerRow } from "./usage-answers";
 import type { Span } from "./use-span";
 
 /** Who called, with sums; a press on one leads to its own usage. */
 export function CallerList({ span, manyTeams }: { readonly span: Span; readonly manyTeams: boolean }) {
-  const state = useListState({ sort: "-requests", size: 25 });
-  const path = `usage/callers?${state.query}&${span.query}`;
-  const { data, error, isValidating, mutate } = useConsole<ListPage<CallerRow>>(path);
+  const { state, table } = useList<CallerRow>("usage/callers", {
+    sort: "-requests",
+    size: 25,
+    more: span.query,
+  });
   const { change } = span;
   const columns = useMemo((): readonly ListColumn<CallerRow>[] => {
     const all: readonly ListColumn<CallerRow>[] = [
@@ -77,7 +79,7 @@ export function CallerList({ span, manyTeams }: { readonly span: Span; readonly 
         cell: ({ meanMs }) => msText(meanMs),
       },
     ];
-    return manyTeams ? all : all.filter(({ id }) => id !== "team");
+    return columnsForTeams(all, manyTeams);
   }, [change, manyTeams]);
   return (
     <>
@@ -85,11 +87,7 @@ export function CallerList({ span, manyTeams }: { readonly span: Span; readonly 
       <ConsoleTable
         caption="Callers"
         columns={columns}
-        state={state}
-        data={data}
-        error={error}
-        busy={isValidating && !data}
-        onRetry={() => void mutate()}
+        {...table}
         rowKey={({ caller }) => caller.id}
         empty={<EmptyState title="Nobody called in these days">Choose a longer span.</EmptyState>}
       />

@@ -4,11 +4,10 @@ import { LocalTime } from "../../../_ui/local-time";
 import { EmptyState } from "../../../_ui/states";
 import { clientText, countText, msText, operationText } from "../../_parts/numbers";
 import { StatusWord } from "../../_parts/status-word";
-import { useConsole } from "../../_shell/use-console";
-import type { ListColumn, ListPage } from "../../_table/column";
+import type { ListColumn } from "../../_table/column";
 import { ConsoleTable } from "../../_table/console-table";
 import { ListFilter, ListTools } from "../../_table/list-tools";
-import { useListState } from "../../_table/use-list-state";
+import { useList } from "../../_table/use-list";
 import type { RequestRow } from "./usage-answers";
 import type { Span } from "./use-span";
 
@@ -51,10 +50,14 @@ const STATUSES = [
 
 /** Call by call. */
 export function RequestList({ span }: { readonly span: Span }) {
-  const state = useListState({ sort: "-at", size: 25, filters: FILTERS, prefix: "requests-" });
-  const path = `usage/requests?${state.query}&${span.query}`;
-  const { data, error, isValidating, mutate } = useConsole<ListPage<RequestRow>>(path, {
-    refreshInterval: state.page === 1 ? 15_000 : 0,
+  const { state, table } = useList<RequestRow>("usage/requests", {
+    sort: "-at",
+    size: 25,
+    filters: FILTERS,
+    prefix: "requests-",
+    more: span.query,
+    refreshMs: 15_000,
+    firstPageOnly: true,
   });
   return (
     <>
@@ -64,11 +67,7 @@ export function RequestList({ span }: { readonly span: Span }) {
       <ConsoleTable
         caption="Single requests"
         columns={COLUMNS}
-        state={state}
-        data={data}
-        error={error}
-        busy={isValidating && !data}
-        onRetry={() => void mutate()}
+        {...table}
         rowKey={({ requestId, at }) => requestId + at}
         empty={<EmptyState title="No request in these days">Choose a longer span.</EmptyState>}
       />
