@@ -178,9 +178,28 @@ describe("the network", () => {
       (selector) => document.querySelector(selector)?.textContent?.startsWith("57.037"),
       RESISTANCE,
     );
-    expect(await page.getByRole("img", { name: /Resistance 57\.037/ }).count()).toBe(1);
+    expect(await page.getByRole("group", { name: /Resistance 57\.037/ }).count()).toBe(1);
     expect(await page.locator("pre").first().textContent()).toContain('"resistance": "16 uohm"');
     await page.waitForFunction(() => location.hash.startsWith("#network="));
+
+    // An element whose name is taken has no numbers, least of all those of its namesake.
+    const name = page.getByLabel("Name of element 2");
+    await name.fill("bar A");
+    await page
+      .getByText(/is the name of|taken|again|unique/i)
+      .first()
+      .waitFor();
+    expect(await page.getByRole("row").nth(2).textContent()).not.toMatch(/µΩ|A\b/);
+    await name.fill("bar B");
+    await page.getByRole("group", { name: /Resistance 57\.037/ }).waitFor();
+
+    // From the drawing by keyboard to the element's row.
+    await page.getByRole("button", { name: /^bar A from in to joint/ }).focus();
+    await page.keyboard.press("ArrowRight");
+    await page.keyboard.press("Enter");
+    await page.waitForFunction(
+      () => document.activeElement?.getAttribute("aria-label") === "Name of element 2",
+    );
 
     // A mistake stands at its element, a link reproduces the page.
     await page.getByLabel("Second node of element 3").fill("lugg");

@@ -2,6 +2,7 @@ import { describe, expect, test } from "vitest";
 import { networkBody } from "@/app/(site)/network/_model/body";
 import { layOut } from "@/app/(site)/network/_model/layout";
 import { addressOf, fromText, newElement, START, toText } from "@/app/(site)/network/_model/network";
+import { readBodyText } from "@/app/(site)/network/_model/read-body";
 import { firstSolution } from "@/app/(site)/network/_server/first-solution";
 import { shapeRequest } from "@/app/(site)/network/_server/shape-request";
 
@@ -48,6 +49,50 @@ describe("a network in an address", () => {
   });
 });
 
+describe("a network as JSON", () => {
+  test("comes back from the body of its own call", () => {
+    const request = { shape: "bar", dimensions: { length: "1 m" } };
+    const body = {
+      elements: [
+        { name: "a", between: ["in", "n"], resistance: "42 uohm" },
+        { name: "b", between: ["n", "out"], request },
+      ],
+      ports: ["in", "out"],
+      operating: { temperature: "65 degC", current: "630 A" },
+    };
+    const reading = readBodyText(JSON.stringify(body));
+    if (!reading.ok) throw new Error(JSON.stringify(reading.complaints));
+    expect(networkBody(reading.network, new Map())).toEqual(body);
+    const kept = fromText(toText(reading.network));
+    expect(kept && networkBody(kept, new Map())).toEqual(body);
+  });
+
+  test.each([
+    ["{", "#", "is no JSON"],
+    ["5", "#", "must be an object"],
+    ['{"elements":[],"ports":["in"]}', "#/ports", "must name two nodes"],
+    [
+      '{"elements":[],"ports":["a","b"],"requirement":{"max":1}}',
+      "#/requirement",
+      "has no field on this page",
+    ],
+    [
+      '{"elements":[{"name":"a","between":["a","b"]}],"ports":["a","b"]}',
+      "#/elements/0",
+      "exactly one of resistance and request",
+    ],
+    [
+      '{"elements":[{"name":"a","between":["a","b"],"resistance":true}],"ports":["a","b"]}',
+      "#/elements/0/resistance",
+      "a number or a text with a unit",
+    ],
+  ])("%s has its complaint at %s", (text, pointer, detail) => {
+    const reading = readBodyText(text);
+    const found = reading.ok ? [] : reading.complaints;
+    expect(found.find((complaint) => complaint.pointer === pointer)?.detail).toContain(detail);
+  });
+});
+
 describe("the drawing", () => {
   const element = (name: string, from: string, to: string) =>
     newElement({ name, from, to, value: { kind: "resistance", text: "1" } });
@@ -77,5 +122,32 @@ describe("the drawing", () => {
     expect(new Set(spots).size).toBe(spots.length);
     expect(spots.join(" ")).not.toContain("NaN");
     expect(layOut({ ...odd, elements: [] }).nodes).toHaveLength(2);
+  });
+
+  test("islands stand apart from the ports' part and from each other", () => {
+    const island = (name: string) => [
+      element(`${name}1`, `${name}p`, `${name}q`),
+      element(`${name}2`, `${name}q`, `${name}r`),
+      element(`${name}3`, `${name}p`, `${name}r`),
+    ];
+    const network = { ...START, elements: [...START.elements, ...island("a"), ...island("b")] };
+    const { nodes, width, height } = layOut(network);
+    const box = (prefix: RegExp) => {
+      const own = nodes.filter(({ name }) => prefix.test(name));
+      const [xs, ys] = [own.map(({ x }) => x), own.map(({ y }) => y)];
+      return { left: Math.min(...xs), right: Math.max(...xs), top: Math.min(...ys), foot: Math.max(...ys) };
+    };
+    const boxes = [box(/^(in|joint|lug|out)$/), box(/^a[pqr]$/), box(/^b[pqr]$/)];
+    for (const [k, one] of boxes.entries()) {
+      for (const other of boxes.slice(k + 1)) {
+        const apart =
+          one.right < other.left || other.right < one.left || one.foot < other.top || other.foot < one.top;
+        expect(apart).toBe(true);
+      }
+      expect(one.right < width && one.foot < height).toBe(true);
+    }
+    // Two ports that nothing joins are two parts.
+    const parted = layOut({ ...START, elements: [element("x", "in", "a"), element("y", "out", "b")] });
+    expect(new Set(parted.nodes.map(({ x, y }) => `${x} ${y}`)).size).toBe(4);
   });
 });

@@ -15,6 +15,7 @@ export function networkBody(
   const list = elements.map(({ name, from, to, value }) => {
     const ends = { name: name.trim(), between: [from.trim(), to.trim()] };
     if (value.kind === "resistance") return { ...ends, resistance: spelled(value.text) };
+    if (value.kind === "request") return { ...ends, request: value.request };
     const known = requests.get(value.address);
     return known && { ...ends, request: known.request };
   });

@@ -4,7 +4,9 @@
 export type Value =
   | { readonly kind: "resistance"; readonly text: string }
   /** A shape with the state of its calculation page, behind `/calculate/`: `bar?length=1m&…`. */
-  | { readonly kind: "shape"; readonly address: string };
+  | { readonly kind: "shape"; readonly address: string }
+  /** The body of a call that gives it, as it came with a network's JSON. */
+  | { readonly kind: "request"; readonly request: Readonly<Record<string, unknown>> };
 
 export interface Element {
   readonly id: number;
@@ -74,12 +76,7 @@ export function addressOf(text: string): string | null {
 
 /** Behind the "#" of the address and in this tab's store: JSON without the row ids. */
 export function toText({ elements, ports, drive, temperature }: Network): string {
-  const rows = elements.map(({ name, from, to, value }) => [
-    name,
-    from,
-    to,
-    value.kind === "shape" ? `/calculate/${value.address}` : value.text,
-  ]);
+  const rows = elements.map(({ name, from, to, value }) => [name, from, to, valueText(value)]);
   return JSON.stringify({ elements: rows, ports, drive, temperature });
 }
 
@@ -109,7 +106,28 @@ export function fromText(text: string): Network | null {
   }
 }
 
+/** What is typed for a resistance: a quantity, the link of a calculation, or a call's body as JSON. */
 export function readValue(text: string): Value {
   const address = addressOf(text);
-  return address === null ? { kind: "resistance", text } : { kind: "shape", address };
+  if (address !== null) return { kind: "shape", address };
+  const request = text.trim().startsWith("{") ? objectOf(text) : null;
+  return request === null ? { kind: "resistance", text } : { kind: "request", request };
+}
+
+/** The inverse. */
+export function valueText(value: Value): string {
+  if (value.kind === "shape") return `/calculate/${value.address}`;
+  return value.kind === "request" ? JSON.stringify(value.request) : value.text;
+}
+
+function objectOf(text: string): Readonly<Record<string, unknown>> | null {
+  try {
+    return recordOf(JSON.parse(text));
+  } catch {
+    return null;
+  }
+}
+
+export function recordOf(value: unknown): Readonly<Record<string, unknown>> | null {
+  return typeof value === "object" && value !== null && !Array.isArray(value) ? { ...value } : null;
 }

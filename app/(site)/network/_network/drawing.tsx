@@ -1,14 +1,17 @@
 "use client";
 
-import { useMemo } from "react";
+import { type KeyboardEvent, useMemo, useState } from "react";
 import { formatQuantity } from "@/lib/engine/quantity/format-quantity";
 import type { NetworkResult } from "@/lib/engine/network/result-schema";
 import { layOut, type PlacedElement } from "../_model/layout";
 import type { Network } from "../_model/network";
+import type { Answer } from "./use-solution";
 
 interface DrawingProps {
   readonly network: Network;
   readonly result: NetworkResult | undefined;
+  /** By the elements' ids. */
+  readonly answers: ReadonlyMap<number, Answer>;
   readonly stale: boolean;
   readonly focused: number | null;
   readonly onPick: (id: number) => void;
@@ -21,18 +24,16 @@ const MOST_LABELLED = 40;
 const BODY = { length: 46, width: 15 };
 
 /** The network with its answers: voltages at the nodes, current and share of the loss at the elements. */
-export function NetworkDrawing({ network, result, stale, focused, onPick }: DrawingProps) {
+export function NetworkDrawing({ network, result, answers, stale, focused, onPick }: DrawingProps) {
   const layout = useMemo(() => layOut(network), [network]);
-  const answers = useMemo(
-    () => new Map(result?.elements.map((element) => [element.name, element]) ?? []),
-    [result],
-  );
+  /** The one element that the tab key reaches; arrows go on from there. */
+  const [reached, setReached] = useState(0);
   const voltages = useMemo(
     () => new Map(result?.nodes.map(({ name, voltage }) => [name, voltage]) ?? []),
     [result],
   );
   const labelled = network.elements.length <= MOST_LABELLED;
-  const largest = Math.max(1e-300, ...(result?.elements.map(({ current }) => Math.abs(current)) ?? []));
+  const largest = Math.max(1e-300, ...[...answers.values()].map(({ current }) => Math.abs(current)));
   return (
     <div
       role="group"
@@ -41,16 +42,16 @@ export function NetworkDrawing({ network, result, stale, focused, onPick }: Draw
       className="relative overflow-x-auto rounded border border-rule bg-sheet"
     >
       <svg
-        role="img"
+        role="group"
         aria-label={describe(network, result)}
         viewBox={`0 0 ${layout.width} ${layout.height}`}
         style={{ minWidth: Math.min(layout.width, 700), maxHeight: "34rem" }}
         className={`mx-auto block w-full font-sans ${stale ? "opacity-60" : ""}`}
         fontSize={13}
       >
-        {layout.elements.map((placed) => {
+        {layout.elements.map((placed, k) => {
           const element = network.elements[placed.index];
-          const answer = answers.get(element.name.trim());
+          const answer = answers.get(placed.id);
           return (
             <Branch
               key={placed.id}
@@ -61,6 +62,8 @@ export function NetworkDrawing({ network, result, stale, focused, onPick }: Draw
               current={answer?.current}
               share={answer?.share}
               weight={answer ? Math.abs(answer.current) / largest : 0}
+              reachable={k === Math.min(reached, layout.elements.length - 1)}
+              onReach={() => setReached(k)}
               onPick={() => onPick(placed.id)}
             />
           );
@@ -92,10 +95,13 @@ interface BranchProps {
   readonly share: number | undefined;
   /** Its current over the largest. */
   readonly weight: number;
+  readonly reachable: boolean;
+  readonly onReach: () => void;
   readonly onPick: () => void;
 }
 
-function Branch({ placed, name, labelled, focused, current, share, weight, onPick }: BranchProps) {
+function Branch(props: BranchProps) {
+  const { placed, name, labelled, focused, current, share, weight, onPick } = props;
   const { from, to, bend } = placed;
   const [dx, dy] = [to.x - from.x, to.y - from.y];
   const length = Math.hypot(dx, dy) || 1;
@@ -106,8 +112,25 @@ function Branch({ placed, name, labelled, focused, current, share, weight, onPic
   const upright = angle > 90 || angle <= -90 ? angle + 180 : angle;
   const width = 1.2 + 2.3 * weight;
   const backwards = (current ?? 0) < 0;
+  const figures =
+    current === undefined || share === undefined
+      ? ""
+      : `${formatQuantity(Math.abs(current), "ampere", { digits: 4 })} · ${percent(share)}`;
   return (
-    <g onClick={onPick} className="cursor-pointer">
+    <g
+      role="button"
+      tabIndex={props.reachable ? 0 : -1}
+      aria-label={`${name || "Element"} from ${from.name} to ${to.name}${figures === "" ? "" : `, ${figures}`}: go to its row`}
+      onClick={onPick}
+      onFocus={props.onReach}
+      onKeyDown={(event) => {
+        if (event.key === "Enter" || event.key === " ") {
+          event.preventDefault();
+          onPick();
+        } else stepOn(event);
+      }}
+      className="group cursor-pointer outline-none"
+    >
       <path
         d={`M${from.x} ${from.y}Q${cx} ${cy} ${to.x} ${to.y}`}
         fill="none"
@@ -121,7 +144,7 @@ function Branch({ placed, name, labelled, focused, current, share, weight, onPic
           width={BODY.length}
           height={BODY.width}
           strokeWidth={focused ? 3 : 1.4}
-          className={focused ? "fill-sheet stroke-verdigris" : "fill-sheet stroke-copper"}
+          className={`fill-sheet group-focus-visible:stroke-verdigris group-focus-visible:[stroke-width:4] ${focused ? "stroke-verdigris" : "stroke-copper"}`}
         />
         {share ? (
           <rect
@@ -144,19 +167,30 @@ function Branch({ placed, name, labelled, focused, current, share, weight, onPic
             text={name}
             start={Math.abs(upright) > 60}
           />
-          {current !== undefined && share !== undefined ? (
+          {figures === "" ? null : (
             <Label
               x={Math.abs(upright) > 60 ? 34 : 0}
               y={Math.abs(upright) > 60 ? 13 : 23}
-              text={`${formatQuantity(Math.abs(current), "ampere", { digits: 4 })} · ${percent(share)}`}
+              text={figures}
               start={Math.abs(upright) > 60}
               mono
             />
-          ) : null}
+          )}
         </g>
       ) : null}
     </g>
   );
+}
+
+/** Arrows go from element to element, as between the rows of a list. */
+function stepOn(event: KeyboardEvent<SVGGElement>): void {
+  const step = { ArrowRight: 1, ArrowDown: 1, ArrowLeft: -1, ArrowUp: -1 }[event.key];
+  if (step === undefined) return;
+  event.preventDefault();
+  const all = [
+    ...(event.currentTarget.ownerSVGElement?.querySelectorAll<SVGGElement>("[role=button]") ?? []),
+  ];
+  all[all.indexOf(event.currentTarget) + step]?.focus();
 }
 
 interface LabelProps {

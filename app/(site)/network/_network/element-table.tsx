@@ -3,19 +3,17 @@
 import { memo } from "react";
 import { SquareArrowOutUpRight, Trash2 } from "lucide-react";
 import { formatQuantity } from "@/lib/engine/quantity/format-quantity";
-import type { NetworkResult } from "@/lib/engine/network/result-schema";
 import type { ShapeRequest } from "../_model/body";
-import { type Element, type Network, readValue } from "../_model/network";
+import { type Element, type Network, readValue, type Value, valueText } from "../_model/network";
 import { percent } from "./drawing";
-import type { Complaints } from "./use-solution";
-
-type Answer = NetworkResult["elements"][number];
+import type { Answer, Complaints } from "./use-solution";
 
 interface ElementTableProps {
   readonly network: Network;
   /** Places of the elements to show, in their order. */
   readonly shown: readonly number[];
-  readonly answers: ReadonlyMap<string, Answer>;
+  /** By the elements' ids, as are the complaints. */
+  readonly answers: ReadonlyMap<number, Answer>;
   readonly stale: boolean;
   readonly complaints: ReadonlyMap<number, Complaints>;
   readonly requests: ReadonlyMap<string, ShapeRequest>;
@@ -72,14 +70,10 @@ export function ElementTable(props: ElementTableProps) {
                 key={element.id}
                 element={element}
                 number={index + 1}
-                answer={answers.get(element.name.trim())}
+                answer={answers.get(element.id)}
                 stale={stale}
-                wrong={complaints.get(index)}
-                title={
-                  element.value.kind === "shape"
-                    ? props.requests.get(element.value.address)?.title
-                    : undefined
-                }
+                wrong={complaints.get(element.id)}
+                title={titleOf(element.value, props.requests)}
                 onChange={props.onChange}
                 onRemove={props.onRemove}
                 onFocus={props.onFocus}
@@ -99,6 +93,10 @@ export function ElementTable(props: ElementTableProps) {
   );
 }
 
+function titleOf(value: Value, requests: ElementTableProps["requests"]): string | undefined {
+  return value.kind === "shape" ? requests.get(value.address)?.title : undefined;
+}
+
 interface ElementRowProps {
   readonly element: Element;
   readonly number: number;
@@ -116,7 +114,7 @@ const ElementRow = memo(function ElementRow(props: ElementRowProps) {
   const { element, number, answer, stale, wrong, title, onChange, onRemove, onFocus } = props;
   const { id, name, from, to, value } = element;
   const problemId = `element-${id}-problem`;
-  const text = value.kind === "shape" ? `/calculate/${value.address}` : value.text;
+  const text = valueText(value);
   const cell = (
     label: string,
     content: string,

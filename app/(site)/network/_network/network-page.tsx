@@ -1,18 +1,19 @@
 "use client";
 
 import { type ReactNode, useMemo, useState } from "react";
-import { Plus, RotateCcw } from "lucide-react";
+import { Braces, Plus, RotateCcw } from "lucide-react";
 import { Button } from "../../../_ui/button";
 import { LiveRegion } from "../../../_ui/live-region";
 import { Notice } from "../../../_ui/notice";
 import { ProblemNotice } from "../../../_ui/problem-notice";
 import { ToastArea, useToast } from "../../../_ui/toast";
 import { SaveRecord, type Saving } from "../../calculate/_calculator/save-record";
-import { type Element, freeName, newElement, nodeNames, START } from "../_model/network";
+import { type Element, freeName, type Network, newElement, nodeNames, START } from "../_model/network";
 import { ConditionFields } from "./condition-fields";
 import { MOST_DRAWN, NetworkDrawing } from "./drawing";
 import { ElementTable } from "./element-table";
 import { Elsewhere } from "./elsewhere";
+import { JsonDialog } from "./json-dialog";
 import { NetworkHeadline, Statements } from "./outcome";
 import { useNetwork } from "./use-network";
 import { type FirstSolution, useSolution } from "./use-solution";
@@ -40,19 +41,14 @@ export function NetworkPage(props: NetworkPageProps) {
 
 function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProps) {
   const [network, edit] = useNetwork();
-  const { body, result, stale, refused, problem, complaints, portComplaints, requests } = useSolution(
-    network,
-    first,
-  );
+  const solution = useSolution(network, first);
+  const { body, result, answers, stale, problem, complaints, portComplaints, requests } = solution;
   const [focused, setFocused] = useState<number | null>(null);
   const [page, setPage] = useState(0);
   const [shape, setShape] = useState("bar");
+  const [json, setJson] = useState(false);
   const toast = useToast();
   const { elements } = network;
-  const answers = useMemo(
-    () => new Map(result?.elements.map((element) => [element.name, element]) ?? []),
-    [result],
-  );
   const names = useMemo(() => nodeNames(network), [network]);
   const pages = Math.max(1, Math.ceil(elements.length / PAGE_ROWS));
   const at = Math.min(page, pages - 1);
@@ -75,13 +71,15 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
   function remove(id: number) {
     const before = network;
     edit((now) => ({ ...now, elements: now.elements.filter((element) => element.id !== id) }));
-    toast("The element is gone.", { undo: () => edit(() => before) });
+    toast("The element is gone.", { undo: () => edit(() => before), about: "network" });
   }
 
-  function restart() {
+  function replace(next: Network, said: string) {
     const before = network;
-    edit(() => START);
-    toast("The example stands again.", { undo: () => edit(() => before) });
+    edit(() => next);
+    setPage(0);
+    setJson(false);
+    toast(said, { undo: () => edit(() => before), about: "network" });
   }
 
   return (
@@ -89,7 +87,10 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
       <div className="flex flex-wrap items-end gap-x-3 gap-y-1">
         <div className="min-w-0 grow basis-[28rem]">{heading}</div>
         <div className="flex flex-wrap items-center gap-0.5 print:hidden">
-          <Button variant="quiet" onClick={restart}>
+          <Button variant="quiet" onClick={() => setJson(true)}>
+            <Braces aria-hidden size={16} /> JSON
+          </Button>
+          <Button variant="quiet" onClick={() => replace(START, "The example stands again.")}>
             <RotateCcw aria-hidden size={16} /> Start over
           </Button>
           {saving && body ? (
@@ -115,7 +116,8 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
         {elements.length === 0 ? null : elements.length <= MOST_DRAWN ? (
           <NetworkDrawing
             network={network}
-            result={refused ? undefined : result}
+            result={result}
+            answers={answers}
             stale={stale}
             focused={focused}
             onPick={(id) => {
@@ -187,8 +189,17 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
       </div>
       <p className="mt-1 max-w-prose text-table text-ink-soft">
         A shape starts with its example. Open it in a new tab, change it there, and paste the link of that
-        page here in its place.
+        page here in its place. A call’s body as JSON can stand there as well.
       </p>
+      {json ? (
+        <JsonDialog
+          body={body}
+          onClose={() => setJson(false)}
+          onTake={(next) =>
+            replace(next, `A network of ${next.elements.length.toLocaleString("en")} elements stands here.`)
+          }
+        />
+      ) : null}
       {result ? <Statements result={result} stale={stale} /> : null}
       {body ? (
         <section aria-labelledby="elsewhere" className="mt-5 print:hidden">

@@ -13,16 +13,28 @@ const PAUSE_MS = 350;
 
 export interface Solution {
   readonly body: Readonly<Record<string, unknown>> | null;
-  /** Of what was typed last, or of what stood there before. */
+  /** Of what was typed last, or of what stood there before; none where it was refused. */
   readonly result: NetworkResult | undefined;
   readonly stale: boolean;
-  /** What was typed last has no answer. */
-  readonly refused: boolean;
   readonly problem: ProblemShown | null;
-  /** Complaints by element, by what they concern. */
+  /** What passes through each element, by its id; an element with a complaint has none. */
+  readonly answers: ReadonlyMap<number, Answer>;
+  /** Complaints by the element's id, by what they concern. */
   readonly complaints: ReadonlyMap<number, Complaints>;
   readonly portComplaints: readonly string[];
   readonly requests: ReadonlyMap<string, ShapeRequest>;
+}
+
+export type Answer = NetworkResult["elements"][number];
+
+/** What was asked, with the ids of its elements in their order: an answer belongs to them, whatever they are called. */
+interface Asked {
+  readonly text: string;
+  readonly ids: readonly number[];
+}
+
+interface Answered extends Asked {
+  readonly result: NetworkResult;
 }
 
 export interface Complaints {
@@ -43,35 +55,53 @@ export function useSolution(network: Network, first: FirstSolution): Solution {
   const requests = useRequests(network, first.requests);
   const body = useMemo(() => networkBody(network, requests), [network, requests]);
   const text = body === null ? null : JSON.stringify(body);
-  const [asked, setAsked] = useState<string | null>(first.text);
+  const [asked, setAsked] = useState<Asked | null>(() => ({
+    text: first.text,
+    ids: network.elements.map(({ id }) => id),
+  }));
   useEffect(() => {
-    const timer = setTimeout(() => setAsked(text), PAUSE_MS);
+    const ids = network.elements.map(({ id }) => id);
+    const timer = setTimeout(() => setAsked(text === null ? null : { text, ids }), PAUSE_MS);
     return () => clearTimeout(timer);
-  }, [text]);
-  const { data, error, isLoading } = useSWR<NetworkResult, unknown>(
-    asked === null ? null : ["/networks", asked],
-    ([path, wanted]: [string, string]) => postApi<NetworkResult>(path, wanted),
+  }, [text, network.elements]);
+  const { data, error, isLoading } = useSWR<Answered, unknown>(
+    asked === null ? null : ["/networks", asked.text],
+    async ([path, wanted]: [string, string]) => ({
+      text: wanted,
+      ids: asked?.ids ?? [],
+      result: await postApi<NetworkResult>(path, wanted),
+    }),
     {
       keepPreviousData: true,
-      fallbackData: asked === first.text ? first.result : undefined,
+      fallbackData:
+        asked?.text === first.text ? { text: first.text, ids: asked.ids, result: first.result } : undefined,
       revalidateOnMount: false,
       revalidateOnFocus: false,
       shouldRetryOnError: false,
     },
   );
   const problem = error === undefined ? null : shown(error);
-  const sorted = useMemo(() => sortComplaints(problem), [problem]);
+  const sorted = useMemo(() => sortComplaints(problem, asked?.ids ?? []), [problem, asked]);
+  const refused = problem !== null;
+  const answers = useMemo(() => {
+    if (!data || refused) return NO_ANSWERS;
+    // The same network may have been asked before with other rows: then the rows of now stand in the same order.
+    const ids = data.text === asked?.text ? asked.ids : data.ids;
+    return new Map(data.result.elements.map((element, k) => [ids[k], element]));
+  }, [data, asked, refused]);
   return {
     body,
-    result: data,
-    stale: isLoading || asked !== text || problem !== null,
-    refused: problem !== null,
+    result: refused ? undefined : data?.result,
+    stale: isLoading || text === null || asked?.text !== text || refused,
     problem: sorted.rest,
+    answers,
     complaints: sorted.complaints,
     portComplaints: sorted.ports,
     requests,
   };
 }
+
+const NO_ANSWERS: ReadonlyMap<number, Answer> = new Map();
 
 function shown(error: unknown): ProblemShown {
   if (error instanceof ApiProblem) return error.problem;
@@ -84,7 +114,10 @@ function shown(error: unknown): ProblemShown {
 const NOTHING: ReadonlyMap<number, Complaints> = new Map();
 
 /** Complaints that have a place on the page go there; what is left is told as a whole. */
-function sortComplaints(problem: ProblemShown | null): {
+function sortComplaints(
+  problem: ProblemShown | null,
+  ids: readonly number[],
+): {
   readonly complaints: ReadonlyMap<number, Complaints>;
   readonly ports: readonly string[];
   readonly rest: ProblemShown | null;
@@ -104,9 +137,10 @@ function sortComplaints(problem: ProblemShown | null): {
     }
     const place = member === "name" || member === "between" ? member : "value";
     const within = path.join("").split("/").pop() ?? "";
-    const known = complaints.get(Number(index)) ?? {};
+    const id = ids[Number(index)];
+    const known = complaints.get(id) ?? {};
     if (known[place] === undefined) {
-      complaints.set(Number(index), { ...known, [place]: `${within} ${detail}`.trim() });
+      complaints.set(id, { ...known, [place]: `${within} ${detail}`.trim() });
     }
   }
   return {
