@@ -14,7 +14,7 @@ export async function proxy(request: NextRequest): Promise<Response> {
   const elsewhere = await leadToSignIn(request);
   if (elsewhere) return elsewhere;
   // Written as other teams would write them, down to the policy.
-  if (request.nextUrl.pathname.startsWith("/embed-examples/")) return NextResponse.next();
+  if (/^\/embed-examples(?:\/|$)/.test(request.nextUrl.pathname)) return NextResponse.next();
   const nonce = crypto.randomUUID().replaceAll("-", "");
   const secure = process.env.RHOFORM_ORIGIN?.startsWith("https:") ?? false;
   const development = process.env.NODE_ENV === "development";

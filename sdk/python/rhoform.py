@@ -50,6 +50,8 @@ __all__ = [
     "AnsweredNetworkElementBounds",
     "AnsweredNetworkNode",
     "AnsweredNetworkResistance",
+    "AnsweredNetworkUncertainty",
+    "AnsweredNetworkUncertaintyContribution",
     "AnsweredResistance",
     "AnsweredResistanceCheck",
     "AnsweredResistanceConductance",
@@ -2380,6 +2382,51 @@ class AnsweredNetworkResistance:
 
 
 @dataclass(frozen=True)
+class AnsweredNetworkUncertaintyContribution:
+    """What one element or material contributes."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("sensitivity", "standard", "share")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    #: Derivative of the network's resistance: ohm per ohm of the element, or ohm per unit of the material's ratio of true to nominal resistivity.
+    sensitivity: float
+    #: Standard uncertainty of the element (ohm) or of the ratio.
+    standard: float
+    #: Part of the whole, 0 … 1: of the variance, or for `worst-case` of the elements' spans to first order.
+    share: float
+    #: Name of the element, or else:
+    element: Optional[str] = None
+    #: A material whose stated uncertainty all its elements share; for `worst-case` it counts within them.
+    material: Optional[str] = None
+
+
+@dataclass(frozen=True)
+class AnsweredNetworkUncertainty:
+    """How far the network's resistance strays with its elements; bounds are a separate statement."""
+
+    _NAMES: ClassVar[Mapping[str, str]] = {}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"contributions": ("list", "AnsweredNetworkUncertaintyContribution")}
+    _REQUIRED: ClassVar[Tuple[str, ...]] = ("method", "standard", "low", "high", "coverage", "text", "basis", "contributions")
+    _FIXED: ClassVar[Mapping[str, Any]] = {}
+    method: str
+    #: Standard uncertainty of the resistance in ohms; for `worst-case` that of first-order propagation.
+    standard: float
+    #: Lower end of the range in ohms.
+    low: float
+    #: Upper end of the range in ohms.
+    high: float
+    #: Probability that the range covers the resistance: 0.95; 1 for `worst-case`, whose range is the whole box.
+    coverage: float
+    #: The range for people, rounded by JCGM 100, 7.2.6.
+    text: str
+    #: How the range was found, in one or two sentences.
+    basis: str
+    #: The budget, largest share first.
+    contributions: List[AnsweredNetworkUncertaintyContribution]
+
+
+@dataclass(frozen=True)
 class AnsweredNetworkNode:
     """A node."""
 
@@ -2461,7 +2508,7 @@ class AnsweredNetwork:
     """The resistance between the ports, element by element."""
 
     _NAMES: ClassVar[Mapping[str, str]] = {}
-    _SPECS: ClassVar[Mapping[str, _Spec]] = {"resistance": "AnsweredNetworkResistance", "conductance": "AnsweredResistanceConductance", "operating": "AnsweredResistanceOperating", "nodes": ("list", "AnsweredNetworkNode"), "elements": ("list", "AnsweredNetworkElement"), "checks": ("list", "AnsweredNetworkCheck"), "sources": ("list", "ShapeSource"), "materials": ("list", "AnsweredResistanceMaterial"), "record": "AnsweredResistanceRecord"}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"resistance": "AnsweredNetworkResistance", "conductance": "AnsweredResistanceConductance", "operating": "AnsweredResistanceOperating", "uncertainty": "AnsweredNetworkUncertainty", "nodes": ("list", "AnsweredNetworkNode"), "elements": ("list", "AnsweredNetworkElement"), "checks": ("list", "AnsweredNetworkCheck"), "sources": ("list", "ShapeSource"), "materials": ("list", "AnsweredResistanceMaterial"), "record": "AnsweredResistanceRecord"}
     _REQUIRED: ClassVar[Tuple[str, ...]] = ("resistance", "conductance", "operating", "per", "nodes", "elements", "checks", "cautions", "assumptions", "sources", "materials", "engine", "catalogue")
     _FIXED: ClassVar[Mapping[str, Any]] = {}
     #: The resistance between the ports, with its bounds.
@@ -2481,6 +2528,8 @@ class AnsweredNetwork:
     materials: List[AnsweredResistanceMaterial]
     engine: str
     catalogue: str
+    #: How far the network's resistance strays with its elements; bounds are a separate statement.
+    uncertainty: Optional[AnsweredNetworkUncertainty] = None
     #: Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
     verdict: Optional[str] = None
     #: Where the calculation was stored; only if `record` was in the request.
@@ -3227,7 +3276,7 @@ class NetworkResult:
     """The resistance between the ports, and what passes through each element."""
 
     _NAMES: ClassVar[Mapping[str, str]] = {}
-    _SPECS: ClassVar[Mapping[str, _Spec]] = {"resistance": "AnsweredNetworkResistance", "conductance": "AnsweredResistanceConductance", "operating": "AnsweredResistanceOperating", "nodes": ("list", "AnsweredNetworkNode"), "elements": ("list", "AnsweredNetworkElement"), "checks": ("list", "AnsweredNetworkCheck"), "sources": ("list", "ShapeSource"), "materials": ("list", "AnsweredResistanceMaterial")}
+    _SPECS: ClassVar[Mapping[str, _Spec]] = {"resistance": "AnsweredNetworkResistance", "conductance": "AnsweredResistanceConductance", "operating": "AnsweredResistanceOperating", "uncertainty": "AnsweredNetworkUncertainty", "nodes": ("list", "AnsweredNetworkNode"), "elements": ("list", "AnsweredNetworkElement"), "checks": ("list", "AnsweredNetworkCheck"), "sources": ("list", "ShapeSource"), "materials": ("list", "AnsweredResistanceMaterial")}
     _REQUIRED: ClassVar[Tuple[str, ...]] = ("resistance", "conductance", "operating", "per", "nodes", "elements", "checks", "cautions", "assumptions", "sources", "materials", "engine", "catalogue")
     _FIXED: ClassVar[Mapping[str, Any]] = {}
     #: The resistance between the ports, with its bounds.
@@ -3247,6 +3296,8 @@ class NetworkResult:
     materials: List[AnsweredResistanceMaterial]
     engine: str
     catalogue: str
+    #: How far the network's resistance strays with its elements; bounds are a separate statement.
+    uncertainty: Optional[AnsweredNetworkUncertainty] = None
     #: Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
     verdict: Optional[str] = None
 

@@ -241,6 +241,26 @@ describe("the frame", () => {
 });
 
 describe("the examples", () => {
+  test("are listed, and lead to each other with the widget that was asked for", async () => {
+    const { page, complaints } = await newPage();
+    const { id } = widget();
+    await page.goto(`${base()}/embed-examples?embed=${id}`);
+    expect(await page.locator("dl a").allInnerTexts()).toEqual([
+      "Plain HTML",
+      "React",
+      "A page with a strict policy",
+      "Two widgets that feed each other",
+    ]);
+    await page.getByRole("link", { name: "A page with a strict policy" }).click();
+    await page.waitForURL(`**/embed-examples/strict-policy?embed=${id}`);
+    await page.getByRole("link", { name: "React" }).click();
+    await page.waitForURL(`**/embed-examples/react?embed=${id}`);
+    await page.getByRole("link", { name: "All examples" }).click();
+    await page.waitForURL(`**/embed-examples?embed=${id}`);
+    expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
+    expect(complaints).toEqual([]);
+  });
+
   test.each(["plain", "react", "strict-policy", "two-widgets"])("%s runs as it is served", async (name) => {
     const { page, complaints } = await newPage();
     const { id } = widget({

@@ -3,7 +3,9 @@ import { join } from "node:path";
 import { demoEmbedId } from "@/lib/embeds/demo";
 import { publishedEmbed } from "@/lib/embeds/show-embed";
 import { sharedService } from "@/lib/service/service";
-import { EXAMPLES, examplePage, noWidgetPage } from "../_pages/examples";
+import { EXAMPLES } from "../_pages/examples";
+import { examplePage, noWidgetPage } from "../_pages/documents";
+import { newNonce, page, usualPolicy } from "../_pages/page-response";
 
 interface Context {
   readonly params: Promise<{ readonly name: string }>;
@@ -19,27 +21,14 @@ export async function GET(request: Request, { params }: Context): Promise<Respon
   const service = sharedService();
   const asked = new URL(request.url).searchParams.get("embed");
   const shown = publishedEmbed(service.db, asked ?? demoEmbedId(service.config.secret));
-  if (!shown) return page(noWidgetPage(), 200, "default-src 'none'");
-  const nonce = crypto.randomUUID().replaceAll("-", "");
+  const nonce = newNonce();
+  const usual = usualPolicy(nonce);
+  if (!shown) return page(noWidgetPage(nonce), 200, usual);
   const facts = { origin: originOf(request, service.config.origin), embed: shown.embed.id, nonce };
-  const usual = `default-src 'self'; style-src 'nonce-${nonce}'; script-src 'self' 'nonce-${nonce}'`;
-  return page(examplePage(example, facts), 200, example.policy?.(facts) ?? usual);
+  return page(examplePage(name, facts, asked ?? undefined), 200, example.policy?.(facts) ?? usual);
 }
 
 const PLAIN = { "Content-Type": "text/plain; charset=utf-8" };
-
-function page(body: string, status: number, policy: string): Response {
-  return new Response(body, {
-    status,
-    headers: {
-      "Content-Type": "text/html; charset=utf-8",
-      "Cache-Control": "no-store",
-      "Content-Security-Policy": `${policy}; frame-ancestors 'none'`,
-      "X-Content-Type-Options": "nosniff",
-      "Referrer-Policy": "strict-origin-when-cross-origin",
-    },
-  });
-}
 
 /** The address that the page was called at: examples run on whatever name the service has here. */
 function originOf(request: Request, configured: string): string {

@@ -23,7 +23,7 @@ function Example({ embed, origin }: { readonly embed: string; readonly origin: s
         origin={origin}
         embed={embed}
         values={{ length }}
-        onResult={(result) => setAnswer(result.resistance.text)}
+        onResult={(result) => setAnswer(result.resistance?.text ?? "")}
         onError={(error) => setAnswer(error.message)}
       />
     </>

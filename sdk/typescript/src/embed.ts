@@ -2,7 +2,7 @@
  * Widgets in your own page: types of the element that `/embed/v1.js` defines, and a way to load it once. The element
  * fires `rhoform:ready`, `rhoform:result` and `rhoform:error`.
  */
-import type { AnsweredResistance } from "./generated/types.gen.js";
+import type { AnsweredResistance, FieldResult } from "./generated/types.gen.js";
 
 /** Values of a widget's open inputs by name, as its fields would take them: `{ length: "250 mm" }`. */
 export type EmbedValues = Readonly<Record<string, string | number>>;
@@ -14,14 +14,14 @@ export interface EmbedReady {
   readonly inputs: readonly { readonly name: string; readonly value: string }[];
 }
 
-/** A result is the API's own. */
-export type EmbedResult = AnsweredResistance;
+/** A result is the API's own: of a shape, or of a field solution where the widget is on an outline (`method` "field"). */
+export type EmbedResult = AnsweredResistance | FieldResult;
 
 /** Why a widget has no answer, or is not there. */
 export interface EmbedError {
   /**
-   * `fields` (values that cannot be used), `quota`, `pause`, `away`, `gone`, `stale` of the frame; `not-found`,
-   * `withdrawn` in its place; `refused`, `away`, `policy` where the page cannot show it.
+   * `fields` (values that cannot be used), `failed` (no field solution), `quota`, `pause`, `away`, `gone`, `stale` of the
+   * frame; `not-found`, `withdrawn` in its place; `refused`, `away`, `policy` where the page cannot show it.
    */
   readonly code: string;
   readonly message: string;

@@ -10,9 +10,18 @@ export const embedding: DocPage = {
       id: "make",
       title: "Make one",
       blocks: [
-        "A widget is made in the [console](/console/embeds): a shape, which inputs are fixed, hidden or open and within which limits, a requirement, what is shown, and how it looks. Its visitors can change what is open and nothing else; the service holds every call to that.",
+        "A widget is made in the [console](/console/embeds): a shape of the catalogue or [an outline](#outlines), which inputs are fixed, hidden or open and within which limits, a requirement, what is shown, and how it looks. Its visitors can change what is open and nothing else; the service holds every call to that.",
         "A widget appears only on pages whose origins it names. It has a quota of its own, " +
           `${DEFAULT_EMBED_QUOTA.toLocaleString("en")} computations a month where nothing else is said. A change is published as a new version; the pages show it at once.`,
+      ],
+    },
+    {
+      id: "outlines",
+      title: "On an outline",
+      blocks: [
+        "A widget may stand on an outline that your team has stored: “Keep outline” on the [outline page](/outline) stores what is drawn there, `POST /outlines` what a program sends. Its terminals come with it, or are given in the builder. What fills it (a sheet resistance, or a material, resistivity or conductivity with a thickness) and the operating point are fixed, hidden or open as for a shape; how narrow the bracket shall be is the builder's to say.",
+        "A stored outline never changes and stays, so what is published stays as it is; another drawing is another outline and another widget.",
+        "The frame sends its values to `POST /fields`, shows the bracket closing in, and then the bounds, the drawing and, where the builder says so, the picture of the field. It costs what [a field solution](/docs/fields) costs: while one runs, the most that it can cost is held back from the widget's month. A value that is changed on the way cancels it. `rhoform:result` then carries the `result` of `GET /fields/{id}`; its `method` is `field`.",
       ],
     },
     {
@@ -126,13 +135,17 @@ export const embedding: DocPage = {
             head: ["`code`", "meaning"],
             rows: [
               ["`fields`", "a value cannot be used; `errors` names the inputs"],
+              ["`failed`", "the field on an outline has no solution for these values; `message` says why"],
               ["`quota`", "the month's computations are used up; the frame says when they return"],
               ["`pause`", "too many calls in this minute; the frame asks again by itself"],
               ["`away`", "the service cannot be reached; it is asked again"],
               ["`stale`", "another version was published; the frame offers to reload"],
               ["`gone`, `withdrawn`", "the widget was withdrawn, while it was open or before"],
               ["`not-found`", "no widget is published under this id"],
-              ["`refused`", "the page's origin is not among those of the widget"],
+              [
+                "`refused`",
+                "the page's origin is not among those of the widget; its team adds it in the console, under “Place”, and it counts at once",
+              ],
               ["`policy`", "the page's own policy has no `frame-src` for this service"],
             ],
           },
@@ -143,6 +156,7 @@ export const embedding: DocPage = {
       id: "examples",
       title: "Examples",
       blocks: [
+        "[Pages with widgets](/embed-examples), each with its source to copy:",
         {
           list: [
             "[Plain HTML](/embed-examples/plain)",

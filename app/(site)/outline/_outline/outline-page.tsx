@@ -20,6 +20,7 @@ import { Board } from "./board/board";
 import { HoverStore } from "./board/hover-store";
 import type { DrawTarget, Readings, Tool } from "./board/tools";
 import { BoardTools } from "./board-tools";
+import { KeepOutline } from "./keep-outline";
 import { GoalPanel } from "./goal-panel";
 import { MediumPanel } from "./medium-panel";
 import { type Grid, OutlineProvider, type OutlineState, type Selection } from "./outline-context";
@@ -123,6 +124,7 @@ function LiveOutline({ heading, start, materials, origin, saving }: OutlinePageP
         <div className="min-w-0 grow basis-[18rem]">{heading}</div>
         <div className="flex flex-wrap items-center gap-0.5 print:hidden">
           <PageTools state={state} onReplace={state.replace} />
+          {saving?.kind === "signed-in" ? <KeepOutline body={body} /> : null}
           {saving ? <SaveRecord saving={saving} path="/fields" body={body} title="Outline" /> : null}
         </div>
       </div>

@@ -95,14 +95,12 @@ export function AppearanceFields({ detail, draft }: FieldsProps) {
           onChange={(bounds) => change({ show: { ...show, bounds } })}
         />
         <Toggle
-          label="Plots along the flow"
+          label={definition.outlineId === undefined ? "Plots along the flow" : "Picture of the field"}
           checked={show.plots}
           onChange={(plots) => change({ show: { ...show, plots } })}
         />
       </div>
-      {detail.hasCautions ? (
-        <p className="text-small text-ink-soft">The cautions of this shape always show.</p>
-      ) : null}
+      {detail.hasCautions ? <p className="text-small text-ink-soft">Its cautions always show.</p> : null}
       <div className="mt-1 flex flex-wrap gap-x-3 gap-y-1">
         <Segmented
           label="Theme"

@@ -8,6 +8,7 @@ import { ProblemNotice } from "../../../_ui/problem-notice";
 import { callConsole } from "../../_shell/call-console";
 import { AppearanceFields } from "./appearance-fields";
 import { InputRules } from "./input-rules";
+import { OutlineFields } from "./outline-fields";
 import { Preview } from "./preview";
 import { ToleranceFields } from "./tolerance-fields";
 import { type Draft, useDraft } from "./use-draft";
@@ -40,9 +41,12 @@ function BuilderFields({ detail, onChanged, act }: BuilderProps) {
       <div className="min-w-0">
         <fieldset disabled={!mayManage} className="min-w-0">
           <legend className="sr-only">What the embed says</legend>
+          <OutlineFields detail={detail} draft={draft} />
           <AppearanceFields detail={detail} draft={draft} />
           <InputRules detail={detail} draft={draft} />
-          <ToleranceFields detail={detail} draft={draft} />
+          {draft.definition.outlineId === undefined ? (
+            <ToleranceFields detail={detail} draft={draft} />
+          ) : null}
         </fieldset>
       </div>
       <div className="min-w-0 wide:sticky wide:top-2 wide:self-start">
@@ -108,6 +112,9 @@ const PLACES: Readonly<Record<string, string>> = {
   inputs: "Inputs:",
   tolerances: "Tolerances:",
   shape: "The shape",
+  outlineId: "The outline:",
+  terminals: "The terminals:",
+  accuracy: "The width of the bracket",
 };
 
 function placeText(pointer: string, { definition }: Draft, { inputs }: EmbedDetail): string {

@@ -85,7 +85,7 @@ export function InputRules({ detail, draft }: RulesProps) {
           </Button>
         </div>
       ) : null}
-      <GradedField draft={draft} />
+      {definition.outlineId === undefined ? <GradedField draft={draft} /> : null}
     </>
   );
 }

@@ -31,6 +31,10 @@ export function Placing({ detail, origin, onChanged }: PlacingProps) {
           shows the frame on pages of these origins only; files opened from a disk have none. The service’s
           own pages always may.
         </p>
+        <p className="mt-1 max-w-prose text-table text-ink-soft">
+          On any other page the browser refuses the frame. The loader then says so in its place and names the
+          origin: add it above, and the page works when it is loaded again.
+        </p>
       </section>
       <section className="grid min-w-0 grid-cols-[minmax(0,1fr)] content-start gap-1.5">
         <h2 className="text-h3!">Snippets</h2>

@@ -111,7 +111,7 @@ export const sizeDimension = <ThrowOnError extends boolean = true>(options: Opti
 /**
  * Compute up to 10,000 resistances
  *
- * Each item is answered or refused on its own, in order, as `POST /resistance` would; only `record` is not for batches. Answers stream out as they are ready. As `text/csv` a row is a request: columns `shape`, the dimensions by name, `material`, `resistivity`, `conductivity`, `sheetResistance`, `thickness`, `core.material` and the like, `temperature`, `voltage`, `current`, `power`, `label`; a unit stands in the cell or in the header (`width/mm`); comma, semicolon or tab separates. The answer has the same rows and columns and behind them what came out. A cell that a spreadsheet would take for a formula gets an apostrophe in front. A table is answered as a table and JSON as JSON, unless `Accept` or `format` says otherwise. Each answered item costs what it would by itself, as a rule one computation; what all of them would cost is reserved before the work, and what was not needed is given back. Where the time of a batch is over, the items that are left are told with status 503. Needs the scope `compute`.
+ * Each item is answered or refused on its own, in order, as `POST /resistance` would; only `record` is not for batches. Answers stream out as they are ready. As `text/csv` a row is a request: columns `shape`, the dimensions by name, `material`, `resistivity`, `conductivity`, `sheetResistance`, `thickness`, `core.material` and the like, `temperature`, `voltage`, `current`, `power`, `label`; a unit stands in the cell or in the header (`width/mm`); comma, semicolon or tab separates. A table between semicolons may have decimal commas, and then its answer has them too. The answer has the same rows and columns and behind them what came out. A cell that a spreadsheet would take for a formula gets an apostrophe in front. A table is answered as a table and JSON as JSON, unless `Accept` or `format` says otherwise. Each answered item costs what it would by itself, as a rule one computation; what all of them would cost is reserved before the work, and what was not needed is given back. Where the time of a batch is over, the items that are left are told with status 503. Needs the scope `compute`.
  */
 export const computeBatch = <ThrowOnError extends boolean = true>(options: Options<ComputeBatchData, ThrowOnError>) => (options.client ?? client).post<ComputeBatchResponses, ComputeBatchErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',
@@ -131,7 +131,7 @@ export const computeBatch = <ThrowOnError extends boolean = true>(options: Optio
 /**
  * Solve a network of resistances
  *
- * Elements between named nodes, each with a resistance or with a request that gives it, to the resistance between two ports, the voltage of every node, and what passes through every element: current, power, share of the loss, and by how much the whole rises when the element does. Bounds come from all elements at their lowest and at their highest. At most 10,000 elements. With `record` the calculation is stored for the team; then an `Idempotency-Key` counts. Costs one computation, or one for each element with a request where there are more. Needs the scope `compute`.
+ * Elements between named nodes, each with a resistance or with a request that gives it, to the resistance between two ports, the voltage of every node, and what passes through every element: current, power, share of the loss, and by how much the whole rises when the element does. Bounds come from all elements at their lowest and at their highest. With `uncertainty` the tolerances of elements, those in their requests and the stated uncertainty of materials tell how far the whole strays, with a budget by element. At most 10,000 elements. With `record` the calculation is stored for the team; then an `Idempotency-Key` counts. Costs one computation, or one for each element with a request where there are more. Needs the scope `compute`.
  */
 export const solveNetwork = <ThrowOnError extends boolean = true>(options: Options<SolveNetworkData, ThrowOnError>) => (options.client ?? client).post<SolveNetworkResponses, SolveNetworkErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',
@@ -151,7 +151,7 @@ export const solveNetwork = <ThrowOnError extends boolean = true>(options: Optio
 /**
  * Store an outline
  *
- * Checks a plan drawing, repairs what is harmless (repeated and collinear vertices) and stores it for field solutions. The answer is the cleaned outline; terminals come back on its edges. Needs the scope `field`.
+ * Checks a plan drawing, repairs what is harmless (repeated and collinear vertices) and stores it for field solutions. The answer is the cleaned outline; terminals come back on its edges. A stored outline never changes and stays: what refers to it, a published widget too, refers to this very drawing. Needs the scope `field`.
  */
 export const storeOutline = <ThrowOnError extends boolean = true>(options: Options<StoreOutlineData, ThrowOnError>) => (options.client ?? client).post<StoreOutlineResponses, StoreOutlineErrors, ThrowOnError, 'data'>({
     responseStyle: 'data',

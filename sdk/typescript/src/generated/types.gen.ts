@@ -145,6 +145,13 @@ export type Problem = {
          */
         pointer: string;
         detail: string;
+        /**
+         * Where on the outline, in its unit, if the place is no vertex: two edges that cross between their ends.
+         */
+        at?: [
+            number,
+            number
+        ];
     } | {
         /**
          * Name of the query parameter.
@@ -997,7 +1004,7 @@ export type UncertaintyRequest = {
 } | {
     method: 'monte-carlo';
     /**
-     * Number of trials; if left out 100,000, or 10,000 for a graded medium and less where one value takes still more work. Each 100,000 begun count one computation.
+     * Number of trials, at most 1,000,000; if left out 100,000. For a graded medium both are a tenth of this, and less where one value takes still more work. Each 100,000 begun count one computation.
      */
     trials?: number;
     /**
@@ -3414,7 +3421,7 @@ export type AnsweredSizing = {
         value: number;
         unit: '1' | 'm' | 'm^2' | 'deg';
         /**
-         * The value for people.
+         * The value for people; of a solution with at least as many digits as give the same resistance to 1e-5 when the text is used in a request.
          */
         text: string;
     }>;
@@ -3461,7 +3468,7 @@ export type SizingSolution = {
         value: number;
         unit: '1' | 'm' | 'm^2' | 'deg';
         /**
-         * The value for people.
+         * The value for people; of a solution with at least as many digits as give the same resistance to 1e-5 when the text is used in a request.
          */
         text: string;
     };
@@ -3471,7 +3478,7 @@ export type SizingSolution = {
      */
     sensitivity: number;
     /**
-     * Whether the dimension gives the target: false for the whole numbers on either side of it where none does.
+     * Whether the target lies within the bounds of `resistance`, which is computed from this very value. False for the whole numbers on either side of the target where none gives it, and where a double cannot hold the dimension finely enough: `cautions` then say how far off it is, and which other dimension resolves it.
      */
     exact: boolean;
     /**
@@ -7228,6 +7235,13 @@ export type RefusedItem = {
              */
             pointer: string;
             detail: string;
+            /**
+             * Where on the outline, in its unit, if the place is no vertex: two edges that cross between their ends.
+             */
+            at?: [
+                number,
+                number
+            ];
         } | {
             /**
              * Name of the query parameter.
@@ -7321,6 +7335,61 @@ export type AnsweredNetwork = {
      * Whether nodes and elements are told at the operating point or for one volt between the ports.
      */
     per: 'operating-point' | 'volt';
+    /**
+     * How far the network's resistance strays with its elements; bounds are a separate statement.
+     */
+    uncertainty?: {
+        method: 'propagation' | 'worst-case';
+        /**
+         * Standard uncertainty of the resistance in ohms; for `worst-case` that of first-order propagation.
+         */
+        standard: number;
+        /**
+         * Lower end of the range in ohms.
+         */
+        low: number;
+        /**
+         * Upper end of the range in ohms.
+         */
+        high: number;
+        /**
+         * Probability that the range covers the resistance: 0.95; 1 for `worst-case`, whose range is the whole box.
+         */
+        coverage: number;
+        /**
+         * The range for people, rounded by JCGM 100, 7.2.6.
+         */
+        text: string;
+        /**
+         * How the range was found, in one or two sentences.
+         */
+        basis: string;
+        /**
+         * The budget, largest share first.
+         */
+        contributions: Array<{
+            /**
+             * Name of the element, or else:
+             */
+            element?: string;
+            /**
+             * A material whose stated uncertainty all its elements share; for `worst-case` it counts within them.
+             */
+            material?: string;
+            /**
+             * Derivative of the network's resistance: ohm per ohm of the element, or ohm per unit of the material's ratio of true to nominal resistivity.
+             */
+            sensitivity: number;
+            /**
+             * Standard uncertainty of the element (ohm) or of the ratio.
+             */
+            standard: number;
+            /**
+             * Part of the whole, 0 … 1: of the variance, or for `worst-case` of the elements' spans to first order.
+             */
+            share: number;
+        }>;
+    };
     /**
      * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
      */
@@ -7449,6 +7518,12 @@ export type NetworkRequest = {
     };
     requirement?: Requirement;
     /**
+     * How far the resistance strays with the tolerances of elements, those in their requests, and the stated uncertainty of materials: by first-order propagation (JCGM 100), or as the range between all elements at their lowest and at their highest.
+     */
+    uncertainty?: {
+        method: 'propagation' | 'worst-case';
+    };
+    /**
      * Store this calculation as a record.
      */
     record?: {
@@ -7472,9 +7547,9 @@ export type NetworkElementRequest = {
      */
     between: Array<string>;
     /**
-     * Its resistance (a resistance; a bare number is in ohm, or a text with a unit).
+     * Its resistance (a resistance; a bare number is in ohm, or a text with a unit, or an object with a tolerance).
      */
-    resistance?: number | string;
+    resistance?: number | string | TolerancedQuantity;
     /**
      * In place of a resistance: a body of `POST /resistance` that gives it, without record, include, requirement, uncertainty and drive.
      */
@@ -7588,6 +7663,10 @@ export type NetworkElementRequest = {
  */
 export type Outline = {
     id: string;
+    /**
+     * Empty where it was stored without one.
+     */
+    name: string;
     createdAt: string;
     /**
      * The outline as it was cleaned.
@@ -7657,6 +7736,10 @@ export type Outline = {
  * An outline to store.
  */
 export type OutlineRequest = {
+    /**
+     * What the team calls it; shown where one is chosen.
+     */
+    name?: string;
     outline: {
         unit?: 'km' | 'm' | 'dm' | 'cm' | 'mm' | 'um' | 'µm' | 'μm' | 'nm' | 'in' | 'mil' | 'ft';
         outer: Array<[
@@ -9012,7 +9095,7 @@ export type SizingResult = {
         value: number;
         unit: '1' | 'm' | 'm^2' | 'deg';
         /**
-         * The value for people.
+         * The value for people; of a solution with at least as many digits as give the same resistance to 1e-5 when the text is used in a request.
          */
         text: string;
     }>;
@@ -9108,6 +9191,61 @@ export type NetworkResult = {
      * Whether nodes and elements are told at the operating point or for one volt between the ports.
      */
     per: 'operating-point' | 'volt';
+    /**
+     * How far the network's resistance strays with its elements; bounds are a separate statement.
+     */
+    uncertainty?: {
+        method: 'propagation' | 'worst-case';
+        /**
+         * Standard uncertainty of the resistance in ohms; for `worst-case` that of first-order propagation.
+         */
+        standard: number;
+        /**
+         * Lower end of the range in ohms.
+         */
+        low: number;
+        /**
+         * Upper end of the range in ohms.
+         */
+        high: number;
+        /**
+         * Probability that the range covers the resistance: 0.95; 1 for `worst-case`, whose range is the whole box.
+         */
+        coverage: number;
+        /**
+         * The range for people, rounded by JCGM 100, 7.2.6.
+         */
+        text: string;
+        /**
+         * How the range was found, in one or two sentences.
+         */
+        basis: string;
+        /**
+         * The budget, largest share first.
+         */
+        contributions: Array<{
+            /**
+             * Name of the element, or else:
+             */
+            element?: string;
+            /**
+             * A material whose stated uncertainty all its elements share; for `worst-case` it counts within them.
+             */
+            material?: string;
+            /**
+             * Derivative of the network's resistance: ohm per ohm of the element, or ohm per unit of the material's ratio of true to nominal resistivity.
+             */
+            sensitivity: number;
+            /**
+             * Standard uncertainty of the element (ohm) or of the ratio.
+             */
+            standard: number;
+            /**
+             * Part of the whole, 0 … 1: of the variance, or for `worst-case` of the elements' spans to first order.
+             */
+            share: number;
+        }>;
+    };
     /**
      * Whether the requirement is met; decided only if the bounds, and with `uncertainty` its range too, lie wholly on one side.
      */
@@ -9661,7 +9799,7 @@ export type ComputeResistanceErrors = {
      *
      * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
@@ -9898,7 +10036,7 @@ export type SizeDimensionErrors = {
      *
      * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
@@ -9989,7 +10127,7 @@ export type ComputeBatchErrors = {
     /**
      * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
@@ -10077,7 +10215,7 @@ export type SolveNetworkErrors = {
      *
      * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
@@ -10153,7 +10291,7 @@ export type SolveNetworkResponse = SolveNetworkResponses[keyof SolveNetworkRespo
 
 export type StoreOutlineData = {
     /**
-     * An outline and, if they are known, its terminals.
+     * An outline and, if they are known, its name and its terminals.
      */
     body: OutlineRequest;
     headers?: {
@@ -10173,7 +10311,7 @@ export type StoreOutlineErrors = {
      *
      * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
@@ -10343,7 +10481,7 @@ export type SolveFieldErrors = {
      *
      * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
@@ -10376,6 +10514,10 @@ export type SolveFieldErrors = {
      * `request-in-progress`: A call with this Idempotency-Key has started and not finished.
      */
     409: Problem;
+    /**
+     * `embed-withdrawn`: The team that owns this widget has taken it off all pages.
+     */
+    410: Problem;
     /**
      * `body-too-large`: The body is longer than this call takes.
      */
@@ -10467,6 +10609,10 @@ export type DeleteFieldErrors = {
      */
     406: Problem;
     /**
+     * `embed-withdrawn`: The team that owns this widget has taken it off all pages.
+     */
+    410: Problem;
+    /**
      * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
      */
     422: Problem;
@@ -10540,6 +10686,10 @@ export type ReadFieldErrors = {
      * `not-acceptable`: The Accept header admits none of the media types that this call can answer with.
      */
     406: Problem;
+    /**
+     * `embed-withdrawn`: The team that owns this widget has taken it off all pages.
+     */
+    410: Problem;
     /**
      * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
      */
@@ -10705,6 +10855,10 @@ export type ReadFieldPlotErrors = {
      * `not-ready`: The field solution has no picture: it is not finished yet, or it ended without a result.
      */
     409: Problem;
+    /**
+     * `embed-withdrawn`: The team that owns this widget has taken it off all pages.
+     */
+    410: Problem;
     /**
      * `invalid-input`: The call is well formed, but its content is not: a value is missing, out of range or contradictory.
      */
@@ -11016,7 +11170,7 @@ export type CreateMaterialErrors = {
      *
      * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
@@ -11284,7 +11438,7 @@ export type ChangeMaterialErrors = {
      *
      * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
@@ -11623,7 +11777,7 @@ export type RelabelRecordErrors = {
     /**
      * `ambiguous-credentials`: The call carries a key in more than one place, so it is not clear on whose behalf it acts.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
@@ -11879,7 +12033,7 @@ export type IssueKeyErrors = {
      *
      * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
@@ -12130,7 +12284,7 @@ export type RotateKeyErrors = {
      *
      * `invalid-header`: A header that this call reads is missing or does not have the form that its standard asks for.
      *
-     * `malformed-json`: The body could not be read as JSON in UTF-8.
+     * `malformed-json`: The body is not text in UTF-8, or not JSON where JSON is asked for.
      */
     400: Problem;
     /**
