@@ -34,6 +34,15 @@ describe("tolerances and sizing on a shape's page", () => {
 
     await page.getByRole("textbox", { name: "Tolerance of width" }).fill("60 mm");
     await page.getByText("it must be smaller than the value").waitFor();
+
+    // Plus and minus apart: 34 µΩ over 1 + 4 % and over 1 − 2 %.
+    await page.getByRole("button", { name: "plus and minus apart for width" }).click();
+    await page.getByRole("textbox", { name: "Tolerance above of width" }).fill("4 %");
+    await page.getByRole("textbox", { name: "Tolerance below of width" }).fill("2 %");
+    await range.getByText(/32\.69\sµΩ … 34\.69\sµΩ/u).waitFor();
+    expect(new URL(await addressOf(page)).searchParams.get("width.minus")).toBe("2%");
+    await page.getByRole("textbox", { name: "Tolerance below of width" }).fill("60 mm");
+    await page.getByText("it must be smaller than the value").waitFor();
     await page.getByRole("button", { name: "Take the tolerance of width away" }).click();
     await settled(page);
     // The browser notes the answer to the tolerance that cannot be; nothing else is wrong.
@@ -45,6 +54,7 @@ describe("tolerances and sizing on a shape's page", () => {
     const { page, close } = await bench.open(`${BAR}&solveFor=width&target=20uohm`);
     const solutions = page.getByTestId("solutions");
     await solutions.getByText("85\u2009mm").waitFor();
+    await solutions.getByText("1 % more makes it 1 % smaller").waitFor();
     await page.getByRole("button", { name: /Use width/ }).click();
     expect(await settled(page, (text) => text.startsWith("20"))).toMatch(/^20\sµΩ$/);
     expect(await page.locator('[name="width"]').inputValue()).toBe("85");

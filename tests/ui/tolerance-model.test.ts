@@ -6,7 +6,14 @@ import { plainDimensions, requestBody } from "@/app/(site)/calculate/_model/requ
 import { sizingBody } from "@/app/(site)/calculate/_model/sizing";
 import { toleranceText } from "@/app/(site)/calculate/_model/tolerances";
 import { readState, stateQuery } from "@/app/(site)/calculate/_model/variants";
-import { computeResistance, findShape, libraryMaterial, shapeEntry } from "@/lib/engine";
+import {
+  computeResistance,
+  computeSizing,
+  findShape,
+  InputError,
+  libraryMaterial,
+  shapeEntry,
+} from "@/lib/engine";
 
 const shape = findShape("cylindrical-shell");
 if (!shape) throw new Error("the catalogue lacks its sleeve");
@@ -28,6 +35,25 @@ describe("tolerances of a page", () => {
     expect(body.uncertainty).toEqual({ method: "monte-carlo", trials: 2000, seed: 4 });
     expect(computeResistance(body, { material: libraryMaterial }).uncertainty?.trials).toBe(2000);
     expect(plainDimensions(entry, read(query))).toEqual({ innerRadius: "2 mm", wall: "3 mm", length: "1 m" });
+  });
+
+  it("may differ to both sides, also inside a law of the medium", () => {
+    const text =
+      "innerRadius=2mm&innerRadius.plus=0.1mm&innerRadius.minus=2%&wall=3mm&length=1m&graded=radius&quantity=conductivity&profile=linear&profile.from=50MS/m&profile.from.tolerance=1%&profile.to=40MS/m&uncertainty=worst-case";
+    const body = requestBody(entry, read(text));
+    expect(body.dimensions.innerRadius).toEqual({ value: "2 mm", plus: "0.1 mm", minus: "2 %" });
+    expect(body.medium).toMatchObject({
+      graded: { profile: { kind: "linear", from: { value: "50 MS/m", tolerance: "1 %" }, to: "40 MS/m" } },
+    });
+    const { uncertainty } = computeResistance(body, { material: libraryMaterial });
+    expect(uncertainty?.contributions.map(({ input }) => input).toSorted()).toEqual([
+      "dimensions.innerRadius",
+      "medium.graded.profile.from",
+    ]);
+    expect(addressCall("https://rhoform.example", entry, read(text)).ok).toBe(false);
+    const state = stateQuery({ variants: [read(text)], active: 0 }, entry);
+    const again = readState(new URLSearchParams(state), entry, exampleParameters(entry));
+    expect(requestBody(entry, again.variants[0])).toEqual(body);
   });
 
   it("come back from the address that keeps them", () => {
@@ -62,6 +88,8 @@ describe("tolerances of a page", () => {
 
   it("have their complaints at their own fields", () => {
     expect(parameterAt("#/dimensions/innerRadius/tolerance")).toBe("innerRadius.tolerance");
+    expect(parameterAt("#/dimensions/innerRadius/minus")).toBe("innerRadius.minus");
+    expect(parameterAt("#/medium/graded/profile/from/tolerance")).toBe("profile.from.tolerance");
     expect(parameterAt("#/media/core/resistivity/distribution")).toBe("core.resistivity.tolerance");
     expect(parameterAt("#/operating/temperature")).toBe("temperature");
     expect(parameterAt("#/uncertainty/trials")).toBe("trials");
@@ -76,5 +104,9 @@ describe("the sizing of a page", () => {
     expect(body).toMatchObject({ solveFor: "outerDiameter", target: "5 ohm", within: ["5 mm", "9 mm"] });
     expect(Object.keys(body?.dimensions ?? {})).toEqual(["innerRadius", "length"]);
     expect(sizingBody(entry, read(`${query}&solveFor=wall`))).toBeNull();
+    // One end alone is not dropped: the API says at the other that it is missing.
+    const half = sizingBody(entry, read(`${query}&solveFor=wall&target=5ohm&to=9mm`));
+    expect(half?.within).toEqual(["", "9 mm"]);
+    expect(() => computeSizing(half, { material: libraryMaterial })).toThrow(InputError);
   });
 });

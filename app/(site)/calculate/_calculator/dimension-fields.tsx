@@ -9,6 +9,7 @@ import { splitQuantity } from "../../../_ui/quantity/quantity-text";
 import { FIRST_UNIT, findUnit, type UnitKind, unitsOf } from "../../../_ui/quantity/units";
 import { sentence } from "../_model/complaints";
 import { chosenMember, dimensionGroups } from "../_model/parameters";
+import { noTolerance } from "../_model/tolerances";
 import type { FormDimension } from "../_server/form-facts";
 import { useForm } from "./form-context";
 import { MemberMenu } from "./member-menu";
@@ -69,8 +70,7 @@ function DimensionField({ dimension, members }: DimensionFieldProps) {
   const swap = (next: FormDimension) =>
     change({
       [name]: undefined,
-      [`${name}.tolerance`]: undefined,
-      [`${name}.distribution`]: undefined,
+      ...noTolerance(name),
       [next.name]: memberText(next, values[next.name], parameters[name]),
     });
   const toleranced = type === "quantity" && text !== "";

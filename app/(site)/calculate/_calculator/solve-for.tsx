@@ -9,6 +9,7 @@ import { Select } from "../../../_ui/select";
 import { ApiProblem, postApi } from "../../_live/call-api";
 import { type Complaint, sentence, sortComplaints } from "../_model/complaints";
 import { dimensionGroups } from "../_model/parameters";
+import { noTolerance } from "../_model/tolerances";
 import { sizingBody } from "../_model/sizing";
 import { kindOf, memberText } from "./dimension-fields";
 import { useForm } from "./form-context";
@@ -52,9 +53,7 @@ export function SolveFor({ saving, back }: SolveForProps) {
     if (!chosen) return;
     const group = dimensionGroups(entry).find((names) => names.includes(chosen.name)) ?? [chosen.name];
     const cleared = Object.fromEntries(
-      group
-        .flatMap((name) => [name, `${name}.tolerance`, `${name}.distribution`])
-        .map((name) => [name, undefined]),
+      group.flatMap((name) => [[name, undefined] as const, ...Object.entries(noTolerance(name))]),
     );
     change({
       ...cleared,
@@ -161,23 +160,32 @@ interface SolutionsProps {
 }
 
 function Solutions({ result, label, whole, onUse }: SolutionsProps) {
-  const { solutions } = result;
-  const between = whole && !solutions.every((solution) => solution.exact);
+  const { solutions, within } = result;
+  const beside = whole && !solutions.every((solution) => solution.exact);
+  const [least, most] = within;
   return (
     <>
       <p className="mb-0.5 text-table">
-        {between
+        {beside
           ? "No whole number gives it exactly; these are the nearest on either side."
           : solutions.length === 1
-            ? "One solution in the range."
-            : `${solutions.length} solutions in the range.`}
+            ? "One solution"
+            : `${solutions.length} solutions, smallest first,`}
+        {beside ? null : (
+          <>
+            {" between "}
+            <span className="font-mono">{least.text}</span> and <span className="font-mono">{most.text}</span>
+            .
+          </>
+        )}
       </p>
       <ul className="grid gap-1" data-testid="solutions">
-        {solutions.map(({ dimension, resistance, exact, cautions }) => (
+        {solutions.map(({ dimension, resistance, sensitivity, exact, cautions }) => (
           <li key={dimension.value} className="flex flex-wrap items-center gap-x-2 gap-y-0.5">
             <span className="font-mono text-lead font-medium">{dimension.text}</span>
             <span className="text-table text-ink-soft">
               gives <span className="font-mono">{resistance.text}</span>
+              {whole ? null : `; ${slopeText((sensitivity * dimension.value) / resistance.value)}`}
             </span>
             <Button
               aria-label={`Use ${label.toLowerCase()} ${dimension.text}`}
@@ -191,6 +199,13 @@ function Solutions({ result, label, whole, onUse }: SolutionsProps) {
       </ul>
     </>
   );
+}
+
+/** How the resistance moves there, by which two solutions differ: relative change over relative change. */
+function slopeText(slope: number): string {
+  if (!Number.isFinite(slope) || Math.abs(slope) < 5e-4) return "around it the resistance hardly moves";
+  const size = Number(Math.abs(slope).toPrecision(2));
+  return `1 % more makes it ${size} % ${slope > 0 ? "larger" : "smaller"}`;
 }
 
 /** The text once typing has paused. */

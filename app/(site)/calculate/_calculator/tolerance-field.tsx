@@ -2,7 +2,7 @@
 
 import { X } from "lucide-react";
 import { CONTROL } from "../../../_ui/field";
-import { DISTRIBUTIONS } from "../_model/tolerances";
+import { DISTRIBUTIONS, hasTolerance, noTolerance } from "../_model/tolerances";
 import type { PlainForm } from "./form-context";
 
 interface ToleranceProps {
@@ -16,7 +16,9 @@ interface ToleranceProps {
 /** Offers a tolerance at the end of a field's label; nothing once there is one. */
 export function ToleranceButton({ form, name, label }: ToleranceProps) {
   const { parameters, change, tolerances } = form;
-  if (!tolerances || `${name}.tolerance` in parameters) return null;
+  if (!tolerances || hasTolerance(parameters, name)) return null;
+  // A share of a temperature would depend on where its zero lies.
+  const start = /temperature$/i.test(name) ? "1 K" : "1 %";
   return (
     <button
       type="button"
@@ -25,7 +27,7 @@ export function ToleranceButton({ form, name, label }: ToleranceProps) {
       className="relative grid size-2.5 cursor-pointer place-items-center rounded border border-edge font-mono text-small leading-none text-ink-soft before:absolute before:-inset-1.5 before:content-[''] hover:border-ink hover:text-ink"
       onClick={() =>
         change({
-          [`${name}.tolerance`]: "1 %",
+          [`${name}.tolerance`]: start,
           // A tolerance that nothing evaluates would say nothing.
           uncertainty: parameters.uncertainty ?? "propagation",
         })
@@ -36,41 +38,78 @@ export function ToleranceButton({ form, name, label }: ToleranceProps) {
   );
 }
 
-/** The tolerance of a quantity: how far, and how it is spread. */
+const SIDES = {
+  tolerance: { sign: "±", said: "Tolerance" },
+  plus: { sign: "+", said: "Tolerance above" },
+  minus: { sign: "−", said: "Tolerance below" },
+} as const;
+
+/** The tolerance of a quantity: how far, to both sides alike or to each, and how it is spread. */
 export function ToleranceRow({ form, name, label }: ToleranceProps) {
   const { parameters, change, errorAt } = form;
-  const tolerance = parameters[`${name}.tolerance`];
-  if (!form.tolerances || tolerance === undefined) return null;
-  const error = errorAt(`${name}.tolerance`);
+  if (!form.tolerances || !hasTolerance(parameters, name)) return null;
+  const said = label.toLowerCase();
+  const uneven = `${name}.plus` in parameters || `${name}.minus` in parameters;
+  const members = uneven ? (["plus", "minus"] as const) : (["tolerance"] as const);
+  const errors = [...new Set(["tolerance", "plus", "minus"].flatMap((m) => errorAt(`${name}.${m}`) ?? []))];
   const errorId = `${name}-tolerance-error`;
+  const text = (member: string) => parameters[`${name}.${member}`] ?? "";
+  const part = () =>
+    change({
+      [`${name}.tolerance`]: undefined,
+      [`${name}.plus`]: text("tolerance"),
+      [`${name}.minus`]: text("tolerance"),
+    });
+  const join = () =>
+    change({
+      [`${name}.plus`]: undefined,
+      [`${name}.minus`]: undefined,
+      [`${name}.tolerance`]: text("plus") || text("minus"),
+    });
   return (
     <div className="mb-1.5 border-s-2 border-rule ps-1">
-      <div className="grid grid-cols-[auto_minmax(4.5rem,1fr)_minmax(0,1.4fr)_auto] items-center gap-1">
-        <span aria-hidden className="font-mono">
-          ±
-        </span>
-        <input
-          aria-label={`Tolerance of ${label.toLowerCase()}`}
-          aria-invalid={error ? true : undefined}
-          aria-describedby={error ? errorId : undefined}
-          name={`${name}.tolerance`}
-          value={tolerance}
-          onChange={(event) => change({ [`${name}.tolerance`]: event.target.value })}
-          type="text"
-          autoComplete="off"
-          autoCapitalize="off"
-          spellCheck={false}
-          className={CONTROL}
-        />
+      <div className="grid grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto] items-center gap-1">
+        {members.map((member) => (
+          <label key={member} className="flex items-center gap-0.5">
+            <span aria-hidden className="w-1.5 shrink-0 font-mono">
+              {SIDES[member].sign}
+            </span>
+            <input
+              aria-label={`${SIDES[member].said} of ${said}`}
+              aria-invalid={errorAt(`${name}.${member}`) ? true : undefined}
+              aria-describedby={errors.length > 0 ? errorId : undefined}
+              name={`${name}.${member}`}
+              value={text(member)}
+              placeholder={uneven ? "0" : undefined}
+              onChange={(event) => change({ [`${name}.${member}`]: event.target.value })}
+              type="text"
+              autoComplete="off"
+              autoCapitalize="off"
+              spellCheck={false}
+              className={`${CONTROL} min-w-0`}
+            />
+          </label>
+        ))}
+        {uneven ? null : <span />}
+        <button
+          type="button"
+          aria-label={`Take the tolerance of ${said} away`}
+          className="grid size-4 cursor-pointer place-items-center rounded text-ink-soft hover:text-ink"
+          onClick={() => change(noTolerance(name))}
+        >
+          <X aria-hidden size={15} />
+        </button>
+      </div>
+      <div className="mt-0.5 flex flex-wrap items-center gap-1">
         <select
-          aria-label={`Distribution of ${label.toLowerCase()}`}
+          aria-label={`Distribution of ${said}`}
           value={parameters[`${name}.distribution`] ?? "uniform"}
           onChange={(event) =>
             change({
               [`${name}.distribution`]: event.target.value === "uniform" ? undefined : event.target.value,
             })
           }
-          className={`${CONTROL} font-sans!`}
+          className={`${CONTROL} w-auto! max-w-full min-w-0 font-sans!`}
         >
           {DISTRIBUTIONS.map((option) => (
             <option key={option.value} value={option.value}>
@@ -80,15 +119,15 @@ export function ToleranceRow({ form, name, label }: ToleranceProps) {
         </select>
         <button
           type="button"
-          aria-label={`Take the tolerance of ${label.toLowerCase()} away`}
-          className="grid size-4 cursor-pointer place-items-center rounded text-ink-soft hover:text-ink"
-          onClick={() => change({ [`${name}.tolerance`]: undefined, [`${name}.distribution`]: undefined })}
+          className="min-h-4 cursor-pointer rounded px-0.5 text-small link"
+          onClick={uneven ? join : part}
         >
-          <X aria-hidden size={15} />
+          {uneven ? "the same to both sides" : "plus and minus apart"}
+          <span className="sr-only"> for {said}</span>
         </button>
       </div>
       <p id={errorId} className="mt-0.5 text-small text-oxide">
-        {error}
+        {errors.join(" ")}
       </p>
     </div>
   );

@@ -53,6 +53,11 @@ function refusal(entry: ShapeEntry, parameters: Parameters): string | null {
     return name.endsWith(".distribution") && own !== "uniform" && own !== "";
   });
   if (shaped) return "Only tolerances without a distribution fit an address: use one of the other forms.";
+  if (
+    Object.keys(parameters).some((name) => /\.(?:plus|minus)$/.test(name) && parameters[name].trim() !== "")
+  ) {
+    return "Plus and minus apart do not fit an address: use one of the other forms.";
+  }
   if (parameters.min?.trim() || parameters.max?.trim()) {
     return "A requirement does not fit an address, which answers a bare number: use one of the other forms.";
   }

@@ -33,6 +33,7 @@ export function parameterAt(pointer: string): string | undefined {
 
 /** What is wrong with a tolerance stands at the tolerance's own field. */
 function withTolerance(name: string | undefined, part: string | undefined): string | undefined {
+  if (part === "plus" || part === "minus") return `${name}.${part}`;
   return part === "tolerance" || part === "distribution" ? `${name}.tolerance` : name;
 }
 
@@ -53,7 +54,7 @@ function profileParameter(path: readonly string[], name: string): string {
   if (field === "positions")
     return [`${name}.table`, ...rest, ...(rest.length > 0 ? ["position"] : [])].join("/");
   if (field === "values") return [`${name}.table`, ...rest, ...(rest.length > 0 ? ["value"] : [])].join("/");
-  return `${name}.${field}`;
+  return withTolerance(`${name}.${field}`, rest[0]) ?? name;
 }
 
 /** The first complaint about each parameter, and those that no field of the page stands for. */

@@ -113,7 +113,7 @@ function profileBody(parameters: Parameters, name: string): { readonly kind: str
     } else if (field.type === "flag") {
       if (text === "true") profile[field.name] = true;
     } else if (field.type === "choice") profile[field.name] = text || field.choices[0].value;
-    else if (text) profile[field.name] = text;
+    else if (text) profile[field.name] = given(parameters, key, text);
   }
   return { kind, ...profile };
 }

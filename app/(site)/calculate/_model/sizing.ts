@@ -14,13 +14,13 @@ export function sizingBody(
   const { dimensions, ...rest } = requestBody(entry, parameters);
   const group = dimensionGroups(entry).find((names) => names.includes(solveFor)) ?? [solveFor];
   const others = Object.entries(dimensions).filter(([name]) => !group.includes(name));
-  const from = parameters.from?.trim();
-  const to = parameters.to?.trim();
+  const [from, to] = [parameters.from?.trim() ?? "", parameters.to?.trim() ?? ""];
   return {
     ...rest,
     dimensions: Object.fromEntries(others),
     solveFor,
     target,
-    ...(from && to ? { within: [from, to] } : {}),
+    // One end alone is asked as it is: the API then says at the other that it is missing.
+    ...(from !== "" || to !== "" ? { within: [from, to] } : {}),
   };
 }

@@ -1,4 +1,7 @@
-/** Tolerances among a page's parameters: "width.tolerance" and "width.distribution" stand beside "width". */
+/**
+ * Tolerances among a page's parameters: "width.tolerance", or "width.plus" and "width.minus", and "width.distribution"
+ * stand beside "width".
+ */
 import type { Parameters } from "./parameters";
 
 export const DISTRIBUTIONS = [
@@ -16,7 +19,22 @@ export const UNCERTAINTY_NAMES: readonly string[] = ["uncertainty", "trials", "s
 /** What is looked for: a dimension, the resistance that it is to give, and where to look. */
 export const SIZING_NAMES: readonly string[] = ["solveFor", "target", "from", "to"];
 
-const MEMBERS = /\.(?:tolerance|distribution)$/;
+const MEMBERS = /\.(?:tolerance|plus|minus|distribution)$/;
+
+/** Whether a parameter has a tolerance. */
+export function hasTolerance(parameters: Parameters, name: string): boolean {
+  return ["tolerance", "plus", "minus"].some((member) => `${name}.${member}` in parameters);
+}
+
+/** The change that takes a parameter's tolerance away. */
+export function noTolerance(name: string): Readonly<Record<string, undefined>> {
+  return {
+    [`${name}.tolerance`]: undefined,
+    [`${name}.plus`]: undefined,
+    [`${name}.minus`]: undefined,
+    [`${name}.distribution`]: undefined,
+  };
+}
 
 /** The parameter that a tolerance belongs to; the name itself where it is none. */
 export function tolerancedName(name: string): string {
@@ -24,14 +42,26 @@ export function tolerancedName(name: string): string {
 }
 
 /** A text of the page, or the object with its tolerance that the API takes. */
-export type Given = string | number | { readonly value: string; readonly tolerance: string };
+export type Given =
+  | string
+  | number
+  | {
+      readonly value: string;
+      readonly tolerance?: string;
+      readonly plus?: string;
+      readonly minus?: string;
+      readonly distribution?: string;
+    };
 
 /** The value of a parameter with its tolerance, where it has one. */
 export function given(parameters: Parameters, name: string, text: string): Given {
-  const tolerance = toleranceText(parameters[`${name}.tolerance`] ?? "", text);
-  if (tolerance === "") return text;
+  const members = (["tolerance", "plus", "minus"] as const).flatMap((member) => {
+    const typed = toleranceText(parameters[`${name}.${member}`] ?? "", text);
+    return typed === "" ? [] : [[member, typed] as const];
+  });
+  if (members.length === 0) return text;
   const distribution = parameters[`${name}.distribution`];
-  return { value: text, tolerance, ...(distribution ? { distribution } : {}) };
+  return { value: text, ...Object.fromEntries(members), ...(distribution ? { distribution } : {}) };
 }
 
 const DECIMAL_COMMA = /^(\d+),(\d+)(?=[^\d,]|$)/;

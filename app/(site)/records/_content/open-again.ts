@@ -28,8 +28,6 @@ export function inCalculator(asked: Asked): OpenAgain | undefined {
   const shape = findShape(asked.shape);
   if (!shape) return undefined;
   const { dimensions, medium, media, operating = {}, requirement = {}, uncertainty = {} } = asked;
-  const places = [dimensions, operating, ...(medium ? [medium] : []), ...Object.values(media ?? {})];
-  if (places.some((place) => Object.values(place).some(hasUnevenTolerance))) return undefined;
   const entry = shapeEntry(shape);
   const plain = (given: Given): Given =>
     Object.fromEntries(Object.entries(given).map(([name, value]) => [name, nominal(value)]));
@@ -61,14 +59,12 @@ export function inOutline(body: unknown): OpenAgain | undefined {
   return { page: "Outline", href: `/outline#${plainHash(text) ?? packedHash(deflateRawSync(text))}` };
 }
 
+const MEMBERS = ["tolerance", "plus", "minus", "distribution"];
+
 function tolerances(prefix: string, given: Given, parameters: Record<string, string>): void {
   for (const [name, value] of Object.entries(given)) {
-    if (value === null || typeof value !== "object" || !("tolerance" in value)) continue;
-    parameters[`${prefix}${name}.tolerance`] = String(value.tolerance);
-    if ("distribution" in value) parameters[`${prefix}${name}.distribution`] = String(value.distribution);
+    if (value === null || typeof value !== "object") continue;
+    const members = Object.entries(value).filter(([member]) => MEMBERS.includes(member));
+    for (const [member, said] of members) parameters[`${prefix}${name}.${member}`] = String(said);
   }
-}
-
-function hasUnevenTolerance(value: unknown): boolean {
-  return value !== null && typeof value === "object" && ("plus" in value || "minus" in value);
 }

@@ -113,9 +113,23 @@ function wordsOf(
     const dimension = entry.dimensions.find(({ name }) => name === last);
     return { label: dimension?.label ?? last, unit: UNITS[dimension?.unit ?? "1"] ?? "" };
   }
+  const profile = path.indexOf("profile");
   const medium = path[0] === "media" ? entry.media.names.find(({ name }) => name === path[1]) : undefined;
-  const [label, unit] = MEMBERS[last] ?? [`Profile: ${last}`, ""];
+  const [label, unit] =
+    profile < 0 ? (MEMBERS[last] ?? [last, ""]) : [profileWords(path.slice(profile + 1)), ""];
   return { label: medium ? `${medium.label}: ${label.toLowerCase()}` : label, unit };
+}
+
+/** "layers.0.value" as "Profile: layer 1, value". */
+function profileWords(path: readonly string[]): string {
+  const places = { layers: "layer", positions: "position", values: "value", table: "point" };
+  const words: string[] = [];
+  for (const part of path) {
+    const number = /^\d+$/.test(part) ? Number(part) + 1 : null;
+    if (number === null) words.push(part in places ? places[part as keyof typeof places] : part);
+    else words.push(`${words.pop() ?? ""} ${number}`.trim());
+  }
+  return `Profile: ${words.join(", ")}`;
 }
 
 function percent(share: number): string {

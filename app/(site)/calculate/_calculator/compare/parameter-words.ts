@@ -37,7 +37,7 @@ export function parameterLabel(
   entry: ShapeEntry,
   dimensions: readonly FormDimension[],
 ): { readonly label: string; readonly symbol?: string } {
-  if (name.endsWith(".tolerance") || name.endsWith(".distribution")) {
+  if (tolerancedName(name) !== name) {
     const of = parameterLabel(tolerancedName(name), entry, dimensions);
     return { label: `${of.label}: ${name.slice(name.lastIndexOf(".") + 1)}` };
   }
