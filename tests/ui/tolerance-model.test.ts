@@ -4,7 +4,7 @@ import { parameterAt } from "@/app/(site)/calculate/_model/complaints";
 import { exampleParameters, readParameters } from "@/app/(site)/calculate/_model/parameters";
 import { plainDimensions, requestBody } from "@/app/(site)/calculate/_model/request";
 import { sizingBody } from "@/app/(site)/calculate/_model/sizing";
-import { toleranceText } from "@/app/(site)/calculate/_model/tolerances";
+import { nominalParameters, toleranceText } from "@/app/(site)/calculate/_model/tolerances";
 import { readState, stateQuery } from "@/app/(site)/calculate/_model/variants";
 import {
   computeResistance,
@@ -51,6 +51,10 @@ describe("tolerances of a page", () => {
       "medium.graded.profile.from",
     ]);
     expect(addressCall("https://rhoform.example", entry, read(text)).ok).toBe(false);
+    // What is plotted is the law without them.
+    expect(requestBody(entry, nominalParameters(read(text))).medium).toMatchObject({
+      graded: { profile: { from: "50 MS/m", to: "40 MS/m" } },
+    });
     const state = stateQuery({ variants: [read(text)], active: 0 }, entry);
     const again = readState(new URLSearchParams(state), entry, exampleParameters(entry));
     expect(requestBody(entry, again.variants[0])).toEqual(body);

@@ -77,7 +77,16 @@ export function MediumQuantity({ form, name, optional = false, ...field }: Mediu
         value={parameters[name] ?? ""}
         error={errorAt(name)}
         onChange={(text) => change({ [name]: text === "" && optional ? undefined : text })}
-        beside={toleranced ? <ToleranceButton form={form} name={name} label={field.label} /> : null}
+        beside={
+          toleranced ? (
+            <ToleranceButton
+              form={form}
+              name={name}
+              label={field.label}
+              temperature={field.kind === "temperature"}
+            />
+          ) : null
+        }
       />
       {toleranced ? <ToleranceRow form={form} name={name} label={field.label} /> : null}
     </div>

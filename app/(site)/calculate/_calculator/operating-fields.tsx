@@ -32,7 +32,7 @@ export function OperatingFields({ form }: { readonly form: PlainForm }) {
             onChange={(text) => change({ temperature: text === "" ? undefined : text })}
             beside={
               parameters.temperature ? (
-                <ToleranceButton form={form} name="temperature" label="Temperature" />
+                <ToleranceButton form={form} name="temperature" label="Temperature" temperature />
               ) : null
             }
           />

@@ -13,12 +13,16 @@ interface ToleranceProps {
   readonly label: string;
 }
 
+interface Temperature {
+  readonly temperature?: boolean;
+}
+
 /** Offers a tolerance at the end of a field's label; nothing once there is one. */
-export function ToleranceButton({ form, name, label }: ToleranceProps) {
+export function ToleranceButton({ form, name, label, temperature = false }: ToleranceProps & Temperature) {
   const { parameters, change, tolerances } = form;
   if (!tolerances || hasTolerance(parameters, name)) return null;
   // A share of a temperature would depend on where its zero lies.
-  const start = /temperature$/i.test(name) ? "1 K" : "1 %";
+  const start = temperature ? "1 K" : "1 %";
   return (
     <button
       type="button"

@@ -21,6 +21,11 @@ export const SIZING_NAMES: readonly string[] = ["solveFor", "target", "from", "t
 
 const MEMBERS = /\.(?:tolerance|plus|minus|distribution)$/;
 
+/** The same without any tolerance. */
+export function nominalParameters(parameters: Parameters): Parameters {
+  return Object.fromEntries(Object.entries(parameters).filter(([name]) => tolerancedName(name) === name));
+}
+
 /** Whether a parameter has a tolerance. */
 export function hasTolerance(parameters: Parameters, name: string): boolean {
   return ["tolerance", "plus", "minus"].some((member) => `${name}.${member}` in parameters);

@@ -5,6 +5,7 @@ import useSWR from "swr";
 import { PlotFigure } from "../../../../_ui/plot/plot-figure";
 import { Loading } from "../../../../_ui/states";
 import { plainDimensions, requestBody } from "../../_model/request";
+import { nominalParameters } from "../../_model/tolerances";
 import type { ProfilePreview } from "../../_server/profile-preview";
 import { useForm } from "../form-context";
 
@@ -19,7 +20,7 @@ const QUANTITIES = {
 /** The profile as it stands, over the whole range of its coordinate; the last one that made sense while it does not. */
 export function ProfilePlot({ prefix, label }: { readonly prefix: string; readonly label: string }) {
   const { entry, parameters } = useForm();
-  const body = requestBody(entry, parameters);
+  const body = requestBody(entry, nominalParameters(parameters));
   const medium = prefix === "" ? body.medium : body.media?.[prefix.slice(0, -1)];
   const text = JSON.stringify({
     dimensions: plainDimensions(entry, parameters),
