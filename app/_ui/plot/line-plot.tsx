@@ -33,8 +33,12 @@ interface LinePlotProps {
   /** Index of the sample that is read off. */
   readonly cursor: number | null;
   readonly onCursor: (index: number | null) => void;
-  /** What is read out, where the page speaks another language: what the plot is for, and that nothing is chosen yet. */
-  readonly spoken?: { readonly readOff: string; readonly noPosition: string };
+  /** Where the page speaks another language: what the plot is for, that nothing is chosen yet, how numbers are written. */
+  readonly spoken?: {
+    readonly readOff: string;
+    readonly noPosition: string;
+    readonly numbers: (text: string) => string;
+  };
 }
 
 const HEIGHT = 220;
@@ -96,8 +100,11 @@ export function LinePlot(props: LinePlotProps) {
 
   const { xUnit, yUnit, xs, horizontal, vertical, paths } = plot;
   const last = x.values.length - 1;
+  const numbers = spoken?.numbers ?? ((text: string) => text);
   const reading =
-    cursor === null || cursor > last ? null : readingText(cursor, x, series, y, { xUnit, yUnit }, xs[cursor]);
+    cursor === null || cursor > last
+      ? null
+      : numbers(readingText(cursor, x, series, y, { xUnit, yUnit }, xs[cursor]));
 
   function follow(event: PointerEvent<SVGSVGElement>) {
     const box = event.currentTarget.getBoundingClientRect();
@@ -165,7 +172,7 @@ export function LinePlot(props: LinePlotProps) {
             <g key={value} transform={`translate(0 ${vertical(value)})`}>
               <path d={`M${MARGIN.left} 0H${width - MARGIN.right}`} />
               <text x={MARGIN.left - 6} dy="0.35em" textAnchor="end" stroke="none">
-                {label}
+                {numbers(label)}
               </text>
             </g>
           ))}
@@ -173,7 +180,7 @@ export function LinePlot(props: LinePlotProps) {
             <g key={value} transform={`translate(${horizontal(value)} ${HEIGHT - MARGIN.bottom})`}>
               <path d="M0 0V5" className="stroke-edge" />
               <text y="18" textAnchor={x.names && value === xs[last] ? "end" : "middle"} stroke="none">
-                {label}
+                {numbers(label)}
               </text>
             </g>
           ))}

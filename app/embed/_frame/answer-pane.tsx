@@ -49,7 +49,7 @@ export function FrameAnswerPane({ view, result, stale, closing }: AnswerProps) {
       {cautions.length > 0 ? (
         <section className="border-s-3 border-s-amber ps-1.5 text-table" aria-label={words.cautions}>
           <h2 className="text-table! text-amber">{words.cautions}</h2>
-          <ul>
+          <ul className="grid gap-0.5">
             {cautions.map((caution) => (
               <Caution key={caution} caution={caution} view={view} />
             ))}

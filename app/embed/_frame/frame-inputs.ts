@@ -132,7 +132,8 @@ function valueText(input: InputFacts, value: string, naming: Naming): string {
   const { service, teamId, locale, language } = naming;
   if (input.type === "material") return usableMaterial(service.db, teamId, value)?.name ?? value;
   const choice = input.choices.find((entry) => entry.value === value);
-  return choice ? labelIn(language, choice.label) : shownQuantity(value, locale);
+  // A number and its unit stay on one line.
+  return choice ? labelIn(language, choice.label) : shownQuantity(value, locale).replaceAll(" ", "\u00a0");
 }
 
 type Range = Pick<Extract<ToleranceRule, { mode: "open" }>, "min" | "max">;

@@ -2,7 +2,9 @@
 
 import { useState } from "react";
 import { LinePlot } from "../../_ui/plot/line-plot";
+import { filled } from "../_words/words";
 import type { FrameResult, FrameView } from "./frame-view";
+import { localNumbers } from "./local-number";
 
 interface FramePlotsProps {
   readonly view: FrameView;
@@ -39,6 +41,11 @@ export function FramePlots({ view, profile }: FramePlotsProps) {
             logY={false}
             cursor={cursor}
             onCursor={setCursor}
+            spoken={{
+              readOff: filled(words.readOff, title),
+              noPosition: words.noPosition,
+              numbers: (text) => localNumbers(text, view.locale),
+            }}
           />
         </figure>
       ))}

@@ -53,6 +53,7 @@ export async function frameViewOf(
   const start = Object.fromEntries(
     [...open, ...(tolerances?.open ?? [])].map(({ name, value }) => [name, asked.values[name] ?? value]),
   );
+  const drawing = shape && definition.show.drawing ? firstDrawing(definition, shape, start) : null;
   const binding = { embedId: embed.id, version, host: asked.host, preview: asked.preview };
   return {
     embed: embed.id,
@@ -76,7 +77,10 @@ export async function frameViewOf(
     hosts: [...new Set([...asked.own, ...embed.origins])],
     token: await issueEmbedToken(service.config.secret, binding, service.now()),
     start,
-    drawing: shape && definition.show.drawing ? firstDrawing(definition, shape, start) : null,
+    drawing,
+    viewTitles: Object.fromEntries(
+      (drawing?.drawing.views ?? []).map(({ title }) => [title, labelIn(language, title)]),
+    ),
     outline: stored ? shownOutline(definition, stored) : null,
   };
 }

@@ -93,6 +93,8 @@ export interface FrameView {
   /** What it opens with: the defaults, or what the page around asked for. */
   readonly start: Readonly<Record<string, string>>;
   readonly drawing: FrameDrawing | null;
+  /** Names of the drawing's views in the frame's language, by the engine's. */
+  readonly viewTitles: Readonly<Record<string, string>>;
   /** What it is on, where that is an outline; null for a shape. */
   readonly outline: {
     /** Null where the widget shows no drawing. */

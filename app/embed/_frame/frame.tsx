@@ -10,6 +10,7 @@ import { QuantitySymbol } from "../../_ui/quantity-symbol";
 import { filled } from "../_words/words";
 import { FrameAnswerPane } from "./answer-pane";
 import { FrameApi, type Trouble, type Values } from "./frame-api";
+import { localDrawing } from "./local-drawing";
 import { localNumbers } from "./local-number";
 import { InputField } from "./input-field";
 import { ToleranceField } from "./tolerance-field";
@@ -36,7 +37,8 @@ export function Frame({ view }: { readonly view: FrameView }) {
   const [focused, setFocused] = useState<string>();
   const [api] = useState(() => new FrameApi(view));
   const { result, trouble, pending, closing, path, ask } = useAnswer(api, values, view.outline !== null);
-  const drawing = useDrawing(api, values, view.drawing);
+  const drawn = useDrawing(api, values, view.drawing);
+  const drawing = useMemo(() => drawn && localDrawing(drawn, view), [drawn, view]);
   const content = useRef<HTMLElement>(null);
 
   const { tolerances } = view;

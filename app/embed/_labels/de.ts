@@ -167,4 +167,19 @@ export const de: Labels = {
   "Angle round the bend from the high end": "Winkel im Bogen vom oberen Ende",
   "Place on the axis, from the throat outwards; the second side mirrors it":
     "Stelle auf der Achse, vom Hals nach außen; die zweite Seite spiegelt sie",
+  // Views of a drawing.
+  "side view": "Seitenansicht",
+  section: "Schnitt",
+  plan: "Draufsicht",
+  "section along the axis": "Längsschnitt",
+  "end view": "Stirnansicht",
+  "plan of a plate": "Draufsicht einer Platte",
+  "section of the wire": "Drahtquerschnitt",
+  "section at the start": "Schnitt am Anfang",
+  "section through the axis": "Schnitt durch die Achse",
+  "section along the axes": "Schnitt längs der Achsen",
+  "section through the centres": "Schnitt durch die Mittelpunkte",
+  "plan of the spot": "Draufsicht der Kontaktstelle",
+  "section across the wire": "Schnitt quer zum Draht",
+  "section along an arm": "Schnitt längs eines Strahls",
 };

@@ -169,4 +169,19 @@ export const es: Labels = {
   "Angle round the bend from the high end": "Ángulo a lo largo de la curva desde el extremo alto",
   "Place on the axis, from the throat outwards; the second side mirrors it":
     "Posición en el eje, de la garganta hacia fuera; el segundo lado es simétrico",
+  // Views of a drawing.
+  "side view": "vista lateral",
+  section: "sección",
+  plan: "planta",
+  "section along the axis": "sección por el eje",
+  "end view": "vista de extremo",
+  "plan of a plate": "planta de una placa",
+  "section of the wire": "sección del hilo",
+  "section at the start": "sección inicial",
+  "section through the axis": "sección que contiene el eje",
+  "section along the axes": "sección por los ejes",
+  "section through the centres": "sección por los centros",
+  "plan of the spot": "planta del punto",
+  "section across the wire": "sección transversal del hilo",
+  "section along an arm": "sección por un brazo",
 };

@@ -169,4 +169,19 @@ export const fr: Labels = {
   "Angle round the bend from the high end": "Angle le long du coude depuis l’extrémité haute",
   "Place on the axis, from the throat outwards; the second side mirrors it":
     "Position sur l’axe, du col vers l’extérieur ; le second côté est symétrique",
+  // Views of a drawing.
+  "side view": "vue de côté",
+  section: "coupe",
+  plan: "vue de dessus",
+  "section along the axis": "coupe suivant l’axe",
+  "end view": "vue en bout",
+  "plan of a plate": "vue de dessus d’une plaque",
+  "section of the wire": "section du fil",
+  "section at the start": "coupe au début",
+  "section through the axis": "coupe passant par l’axe",
+  "section along the axes": "coupe suivant les axes",
+  "section through the centres": "coupe passant par les centres",
+  "plan of the spot": "vue de dessus de la tache",
+  "section across the wire": "coupe en travers du fil",
+  "section along an arm": "coupe suivant un bras",
 };

@@ -165,4 +165,19 @@ export const ja: Labels = {
   "Angle round the bend from the high end": "高電位端からの曲げに沿った角度",
   "Place on the axis, from the throat outwards; the second side mirrors it":
     "軸上の位置（のど部から外向き、反対側は対称）",
+  // Views of a drawing.
+  "side view": "側面図",
+  section: "断面図",
+  plan: "平面図",
+  "section along the axis": "軸に沿った断面図",
+  "end view": "端面図",
+  "plan of a plate": "板の平面図",
+  "section of the wire": "線の断面図",
+  "section at the start": "始端の断面図",
+  "section through the axis": "軸を通る断面図",
+  "section along the axes": "両軸に沿った断面図",
+  "section through the centres": "中心を通る断面図",
+  "plan of the spot": "接触点の平面図",
+  "section across the wire": "線を横切る断面図",
+  "section along an arm": "腕に沿った断面図",
 };

@@ -168,4 +168,19 @@ export const sv: Labels = {
   "Angle round the bend from the high end": "Vinkel längs böjen från höga änden",
   "Place on the axis, from the throat outwards; the second side mirrors it":
     "Läge på axeln, från halsen utåt; andra sidan speglar det",
+  // Views of a drawing.
+  "side view": "sidovy",
+  section: "snitt",
+  plan: "planvy",
+  "section along the axis": "längdsnitt",
+  "end view": "ändvy",
+  "plan of a plate": "plattans planvy",
+  "section of the wire": "trådens tvärsnitt",
+  "section at the start": "snitt vid början",
+  "section through the axis": "snitt genom axeln",
+  "section along the axes": "snitt längs axlarna",
+  "section through the centres": "snitt genom mittpunkterna",
+  "plan of the spot": "kontaktfläckens planvy",
+  "section across the wire": "snitt tvärs tråden",
+  "section along an arm": "snitt längs en arm",
 };

@@ -39,6 +39,7 @@ export const de: Words = {
   high: "oberer Anschluss",
   low: "unterer Anschluss",
   notToScale: "nicht maßstäblich",
+  drawing: "Zeichnung: {0}",
   potential: "Potential",
   field: "Feldstärke",
   currentDensity: "Stromdichte",

@@ -39,6 +39,7 @@ export const en: Words = {
   high: "high terminal",
   low: "low terminal",
   notToScale: "not to scale",
+  drawing: "Drawing: {0}",
   potential: "Potential",
   field: "Field strength",
   currentDensity: "Current density",

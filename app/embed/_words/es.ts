@@ -39,6 +39,7 @@ export const es: Words = {
   high: "terminal alto",
   low: "terminal bajo",
   notToScale: "no está a escala",
+  drawing: "Dibujo: {0}",
   potential: "Potencial",
   field: "Campo eléctrico",
   currentDensity: "Densidad de corriente",

@@ -40,6 +40,7 @@ export const fr: Words = {
   high: "borne haute",
   low: "borne basse",
   notToScale: "pas à l’échelle",
+  drawing: "Dessin : {0}",
   potential: "Potentiel",
   field: "Champ électrique",
   currentDensity: "Densité de courant",

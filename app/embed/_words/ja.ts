@@ -39,6 +39,7 @@ export const ja: Words = {
   high: "高電位側の端子",
   low: "低電位側の端子",
   notToScale: "縮尺は正確ではありません",
+  drawing: "図面：{0}",
   potential: "電位",
   field: "電界強度",
   currentDensity: "電流密度",

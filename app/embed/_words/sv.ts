@@ -39,6 +39,7 @@ export const sv: Words = {
   high: "hög anslutning",
   low: "låg anslutning",
   notToScale: "inte skalenlig",
+  drawing: "Ritning: {0}",
   potential: "Potential",
   field: "Fältstyrka",
   currentDensity: "Strömtäthet",

@@ -39,6 +39,7 @@ export interface Words {
   readonly high: string;
   readonly low: string;
   readonly notToScale: string;
+  readonly drawing: string;
   readonly potential: string;
   readonly field: string;
   readonly currentDensity: string;

@@ -1,5 +1,12 @@
 import { describe, expect, test } from "vitest";
-import { catalogue, computeResistance, exampleRequest, libraryMaterials } from "@/lib/engine";
+import {
+  catalogue,
+  computeResistance,
+  exampleRequest,
+  libraryMaterials,
+  readableDrawing,
+  resolveDimensions,
+} from "@/lib/engine";
 import { inputsOf } from "@/lib/embeds/inputs";
 import { LANGUAGES } from "@/lib/embeds/language";
 import { cautionIn } from "@/app/embed/_cautions/caution-in";
@@ -59,6 +66,9 @@ describe("the catalogue's labels", () => {
       for (const choice of choices) labels.add(choice.label);
     }
     for (const { role, label } of shape.coordinates) if (role === "along") labels.add(label);
+    const { dimensions }: { dimensions?: Record<string, unknown> } = Object(exampleRequest(shape));
+    const { drawing } = readableDrawing(shape, resolveDimensions(shape, dimensions ?? {}));
+    for (const { title } of drawing.views) labels.add(title);
   }
   /** Words that the other language shares with English. */
   const SHARED: Readonly<Record<string, readonly string[]>> = {
