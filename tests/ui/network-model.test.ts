@@ -124,6 +124,30 @@ describe("the drawing", () => {
     expect(layOut({ ...odd, elements: [] }).nodes).toHaveLength(2);
   });
 
+  test("an element keeps off nodes that it does not join", () => {
+    const network = {
+      ...START,
+      elements: [...START.elements, element("tie", "in", "lug"), element("open", "lug", "spare")],
+    };
+    const { nodes, elements } = layOut(network);
+    for (const { from, to, bend } of elements) {
+      const [dx, dy] = [to.x - from.x, to.y - from.y];
+      const length = Math.hypot(dx, dy);
+      const [cx, cy] = [
+        (from.x + to.x) / 2 - (2 * bend * dy) / length,
+        (from.y + to.y) / 2 + (2 * bend * dx) / length,
+      ];
+      for (const node of nodes) {
+        if (node.name === from.name || node.name === to.name) continue;
+        for (let t = 0; t <= 1; t += 0.02) {
+          const x = (1 - t) ** 2 * from.x + 2 * t * (1 - t) * cx + t * t * to.x;
+          const y = (1 - t) ** 2 * from.y + 2 * t * (1 - t) * cy + t * t * to.y;
+          expect(Math.hypot(x - node.x, y - node.y)).toBeGreaterThan(38);
+        }
+      }
+    }
+  });
+
   test("islands stand apart from the ports' part and from each other", () => {
     const island = (name: string) => [
       element(`${name}1`, `${name}p`, `${name}q`),

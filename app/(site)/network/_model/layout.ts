@@ -32,6 +32,8 @@ const LINE = 104;
 const MARGIN_X = 70;
 const MARGIN_Y = 56;
 const SWEEPS = 8;
+/** So near a line covers what is written at a node. */
+const NEAR = 40;
 /** Small parts stand side by side up to this width. */
 const ROW_WIDTH = 3 * COLUMN + 2 * MARGIN_X;
 
@@ -143,8 +145,8 @@ function layOutPart(
   for (const group of pairs.values()) {
     for (const [k, { index, a, b }] of group.entries()) {
       const offset = (k - (group.length - 1) / 2) * 84;
-      const through = crossesNode(nodes, a, b) ? LINE * 0.55 : 0;
-      bends.set(index, (leftToRight(nodes[a], nodes[b]) ? 1 : -1) * (offset + through));
+      const side = leftToRight(nodes[a], nodes[b]) ? 1 : -1;
+      bends.set(index, side * offset + LINE * 0.6 * awayFromNode(nodes, a, b, side));
     }
   }
   const reach = Math.max(0, ...[...bends.values()].map(Math.abs));
@@ -176,18 +178,26 @@ function leftToRight(from: PlacedNode, to: PlacedNode): boolean {
   return from.x === to.x ? from.y < to.y : from.x < to.x;
 }
 
-/** Whether a straight line would run through a third node. */
-function crossesNode(nodes: readonly PlacedNode[], a: number, b: number): boolean {
+/**
+ * To which side a straight line must bend so that it keeps off a third node and what is written there: 1, -1, or 0 where
+ * none is near. `side` decides for a node right on the line.
+ */
+function awayFromNode(nodes: readonly PlacedNode[], a: number, b: number, side: number): number {
   const [p, q] = [nodes[a], nodes[b]];
-  return nodes.some((node, k) => {
-    if (k === a || k === b) return false;
-    const along =
-      ((node.x - p.x) * (q.x - p.x) + (node.y - p.y) * (q.y - p.y)) /
-      ((q.x - p.x) ** 2 + (q.y - p.y) ** 2 || 1);
-    if (along <= 0.02 || along >= 0.98) return false;
-    const off = Math.hypot(p.x + along * (q.x - p.x) - node.x, p.y + along * (q.y - p.y) - node.y);
-    return off < 24;
-  });
+  const [dx, dy] = [q.x - p.x, q.y - p.y];
+  const length = Math.hypot(dx, dy) || 1;
+  let nearest = NEAR;
+  let away = 0;
+  for (const [k, node] of nodes.entries()) {
+    if (k === a || k === b) continue;
+    const along = ((node.x - p.x) * dx + (node.y - p.y) * dy) / length ** 2;
+    if (along <= 0.02 || along >= 0.98) continue;
+    const off = ((node.y - p.y) * dx - (node.x - p.x) * dy) / length;
+    if (Math.abs(off) >= nearest) continue;
+    nearest = Math.abs(off);
+    away = nearest < 1 ? side : -Math.sign(off);
+  }
+  return away;
 }
 
 function inColumns(
