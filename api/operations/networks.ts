@@ -7,11 +7,16 @@ import { usableMaterial } from "@/lib/materials/team-materials";
 import { storeRecord } from "@/lib/records/records";
 import { Refusal } from "@/lib/service/refusal";
 import { BASE_PATH } from "../base-path";
+import { overdueAfter } from "../deadline";
 import { type CallContext, defineOperation, json } from "../operation";
 import { answeredNetwork, documentedNetwork } from "../schemas/network";
 
 /** Largest body of a network, bytes. */
 const NETWORK_MAX_BYTES = 20_000_000;
+
+/** Longest that the uncertainties of all elements and of one may take: others wait during the one. */
+const LONGEST_MS = 20_000;
+const LONGEST_ELEMENT_MS = 1_000;
 
 /** Only what has to be known before the work; everything is the engine's to check. */
 const members = z.looseObject({ elements: z.array(z.unknown()) });
@@ -45,7 +50,15 @@ async function compute(body: unknown, { service, principal }: CallContext): Prom
     if (!known.has(id)) known.set(id, usableMaterial(service.db, teamId, id));
     return known.get(id);
   };
-  return workInTurns(networkInStretches(body, { material }));
+  const whole = overdueAfter(LONGEST_MS);
+  let stretch = whole;
+  const work = networkInStretches(body, { material, overdue: () => stretch() || whole() });
+  return workInTurns({
+    next: () => {
+      stretch = overdueAfter(LONGEST_ELEMENT_MS);
+      return work.next();
+    },
+  });
 }
 
 const riser = {
@@ -74,7 +87,7 @@ export const postNetwork = defineOperation({
   tag: "Networks",
   summary: "Solve a network of resistances",
   description:
-    "Elements between named nodes, each with a resistance or with a request that gives it, to the resistance between two ports, the voltage of every node, and what passes through every element: current, power, share of the loss, and by how much the whole rises when the element does. Bounds come from all elements at their lowest and at their highest. At most 10,000 elements. With `record` the calculation is stored for the team; then an `Idempotency-Key` counts. Costs one computation, or one for each element with a request where there are more.",
+    "Elements between named nodes, each with a resistance or with a request that gives it, to the resistance between two ports, the voltage of every node, and what passes through every element: current, power, share of the loss, and by how much the whole rises when the element does. Bounds come from all elements at their lowest and at their highest. With `uncertainty` the tolerances of elements, those in their requests and the stated uncertainty of materials tell how far the whole strays, with a budget by element. At most 10,000 elements. With `record` the calculation is stored for the team; then an `Idempotency-Key` counts. Costs one computation, or one for each element with a request where there are more.",
   scope: "compute",
   request: {
     body: {
@@ -99,6 +112,20 @@ export const postNetwork = defineOperation({
       summary: "Two bars side by side, a bolted joint and a braid at 630 A",
       status: 200,
       body: riser,
+    },
+    {
+      name: "toleranced",
+      summary: "How far the path strays with its elements, and which one matters",
+      status: 200,
+      body: {
+        ...riser,
+        elements: [
+          { ...riser.elements[0], resistance: { value: "42 uohm", tolerance: "5 %" } },
+          ...riser.elements.slice(1, 3),
+          { ...riser.elements[3], resistance: { value: "18 uohm", plus: "6 uohm" } },
+        ],
+        uncertainty: { method: "propagation" },
+      },
     },
     {
       name: "storedRecord",

@@ -1,5 +1,10 @@
 import { z } from "zod";
-import { networkElementSchema, networkRequestSchema, networkResultSchema } from "@/lib/engine";
+import {
+  networkElementSchema,
+  networkRequestSchema,
+  networkResultSchema,
+  tolerancedQuantitySchema,
+} from "@/lib/engine";
 import { documentedResistanceRequest } from "./resistance";
 
 /** The body of a network as the document tells it. */
@@ -8,6 +13,7 @@ export function documentedNetwork(): z.ZodType {
   const element = z
     .strictObject({
       ...networkElementSchema.shape,
+      resistance: tolerancedQuantitySchema("resistance", "Its resistance", "42 uohm").optional(),
       request: documentedResistanceRequest().optional().meta({
         description:
           "In place of a resistance: a body of `POST /resistance` that gives it, without record, include, requirement, uncertainty and drive.",

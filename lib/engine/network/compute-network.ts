@@ -9,6 +9,7 @@ import { addSchemaComplaints } from "../schema-complaints";
 import { CATALOGUE_VERSION, ENGINE_VERSION } from "../version";
 import { carryingElements, incidenceOf, reachedFrom, type Incidence } from "./branches";
 import { checkFlow, flowOf, spreadPotential } from "./flow";
+import { CORNERS, findNetworkUncertainty } from "./network-uncertainty";
 import {
   MOST_COMPLAINTS,
   nameNodes,
@@ -62,7 +63,14 @@ export function* networkInStretches(
     nodes.high,
     nodes.low,
   );
-  const { solution, active } = yield* solveCarrying(nodes, elements, carrying, problems);
+  const asked = body.uncertainty?.method;
+  const { solution, active, corners } = yield* solveCarrying(
+    nodes,
+    elements,
+    carrying,
+    asked ? CORNERS : [],
+    problems,
+  );
 
   const rounded = elements.every(({ result }) => !result || result.resistance.boundsBasis === "rounding");
   const [value, highest = value, lowest = value] = solution.conductance.map((conductance) => 1 / conductance);
@@ -113,11 +121,18 @@ export function* networkInStretches(
       sensitivity: flow.current[e] ** 2,
     })),
     checks,
-    ...collectStatements(body, elements, carrying),
+    ...collectStatements(body, elements, carrying, asked !== undefined),
     engine: ENGINE_VERSION,
     catalogue: CATALOGUE_VERSION,
   };
-  if (requirement) result.verdict = verdictOf(requirement, bounds);
+  if (asked) {
+    const names = body.elements.map(({ name }) => name);
+    const sensitivity = flow.current.map((part) => part ** 2);
+    const found = findNetworkUncertainty(asked, { names, elements, sensitivity, value, corners });
+    result.uncertainty = found.uncertainty;
+    result.cautions.push(...found.cautions);
+  }
+  if (requirement) result.verdict = verdictOf(requirement, bounds, result.uncertainty);
   return result;
 }
 

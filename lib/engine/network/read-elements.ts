@@ -4,8 +4,11 @@ import { readQuantity } from "../quantity/parse-quantity";
 import { computeResistance } from "../resistance/compute-resistance";
 import type { ComputeContext } from "../resistance/compute-context";
 import type { ResistanceResult } from "../resistance/result-schema";
+import { tolerancedSchema } from "../resistance/uncertainty/tolerance-schema";
+import { addSchemaComplaints } from "../schema-complaints";
 import { suggestion } from "../shape/nearest-names";
 import type { NetworkRequest } from "./request-schema";
+import { type Stray, strayOfResult, strayOfTolerance } from "./stray";
 
 /** Complaints beyond so many are not told; they are counted. */
 export const MOST_COMPLAINTS = 100;
@@ -14,7 +17,7 @@ export const MOST_COMPLAINTS = 100;
 const UNFIT: Readonly<Record<string, string>> = {
   record: "is for the network as a whole.",
   requirement: "is for the network as a whole.",
-  uncertainty: "is not for elements of a network.",
+  uncertainty: "is for the network as a whole.",
   include: "is not for elements of a network.",
 };
 const DRIVES = ["voltage", "current", "power"];
@@ -25,13 +28,17 @@ export interface NetworkElement {
   readonly upper: number;
   /** The answer to its request, if it has one. */
   readonly result: ResistanceResult | null;
+  /** How far it strays, where the network's uncertainty is asked for and something of it is uncertain. */
+  readonly stray: Stray | null;
+  /** Whether it has a tolerance of its own. */
+  readonly toleranced: boolean;
 }
 
 type Element = NetworkRequest["elements"][number];
 
 /** Reads every element; pauses after each that is computed. Elements with complaints come back as null. */
 export function* readElements(
-  { elements, operating }: NetworkRequest,
+  { elements, operating, uncertainty }: NetworkRequest,
   context: ComputeContext,
   problems: Problems,
 ): Generator<void, (NetworkElement | null)[]> {
@@ -39,7 +46,8 @@ export function* readElements(
   for (const [index, element] of elements.entries()) {
     const pointer = pointerTo("#/elements", index);
     if (element.request !== undefined) {
-      read.push(compute(element.request, `${pointer}/request`, operating?.temperature, context, problems));
+      const more = { temperature: operating?.temperature, uncertainty };
+      read.push(compute(element.request, `${pointer}/request`, more, context, problems));
       yield;
     } else read.push(plain(element, `${pointer}/resistance`, problems));
   }
@@ -47,13 +55,22 @@ export function* readElements(
 }
 
 function plain({ resistance }: Element, pointer: string, problems: Problems): NetworkElement | null {
-  const reading = readQuantity(resistance, "resistance");
+  const toleranced = typeof resistance === "object" && resistance !== null;
+  const parsed = toleranced ? tolerancedSchema.safeParse(resistance, { reportInput: true }) : null;
+  if (parsed && !parsed.success) {
+    addSchemaComplaints(tolerancedSchema, parsed.error.issues, pointer, problems);
+    return null;
+  }
+  const reading = readQuantity(parsed ? parsed.data.value : resistance, "resistance");
   if (!reading.ok) {
-    problems.add(pointer, reading.detail);
+    problems.add(parsed ? pointerTo(pointer, "value") : pointer, reading.detail);
     return null;
   }
   const ohm = reading.value;
-  if (ohm >= 1e-300 && ohm <= 1e300) return { ohm, lower: ohm, upper: ohm, result: null };
+  if (ohm >= 1e-300 && ohm <= 1e300) {
+    const stray = parsed ? strayOfTolerance(parsed.data, ohm, pointer, problems) : null;
+    return { ohm, lower: ohm, upper: ohm, result: null, stray, toleranced };
+  }
   problems.add(
     pointer,
     ohm === 0
@@ -68,7 +85,12 @@ function plain({ resistance }: Element, pointer: string, problems: Problems): Ne
 function compute(
   request: Readonly<Record<string, unknown>>,
   pointer: string,
-  temperature: number | string | undefined,
+  {
+    temperature,
+    uncertainty,
+  }: Readonly<Pick<NetworkRequest, "uncertainty">> & {
+    readonly temperature: number | string | undefined;
+  },
   context: ComputeContext,
   problems: Problems,
 ): NetworkElement | null {
@@ -88,14 +110,21 @@ function compute(
   }
   if (!fit) return null;
   const inherits = temperature !== undefined && readable && !("temperature" in own);
-  const whole = inherits ? { ...request, operating: { ...own, temperature } } : request;
+  const whole = {
+    ...request,
+    ...(inherits ? { operating: { ...own, temperature } } : {}),
+    ...(uncertainty ? { uncertainty } : {}),
+  };
   try {
     const result = computeResistance(whole, context);
     const { value, lower, upper } = result.resistance;
-    return { ohm: value, lower, upper, result };
+    return { ohm: value, lower, upper, result, stray: strayOfResult(result, request), toleranced: false };
   } catch (error) {
     if (!(error instanceof InputError)) throw error;
-    for (const { pointer: place, detail } of error.errors) problems.add(pointer + place.slice(1), detail);
+    for (const { pointer: place, detail } of error.errors) {
+      // The uncertainty is not a member of this request.
+      problems.add(place.startsWith("#/uncertainty") ? pointer : pointer + place.slice(1), detail);
+    }
     return null;
   }
 }

@@ -1,6 +1,5 @@
 /** The body of a network request. What the names in it join is checked after this. */
 import { z } from "zod";
-import { quantitySchema } from "../quantity/quantity-schema";
 import { operatingSchema, recordRequestSchema, requirementSchema } from "../resistance/request-schema";
 
 /** Most elements of one network. */
@@ -19,7 +18,8 @@ export const networkElementSchema = z
       .array(nodeName)
       .length(2, { error: "must name the two nodes that the element joins." })
       .meta({ description: "The two nodes; its current counts as positive from the first to the second." }),
-    resistance: quantitySchema("resistance", "Its resistance", "42 uohm").optional(),
+    // Read with its tolerance, if it has one, when its turn comes.
+    resistance: z.unknown().optional(),
     request: z
       .record(z.string(), z.unknown())
       .optional()
@@ -37,6 +37,17 @@ export const networkElementSchema = z
   })
   .meta({ description: "A resistance between two nodes." });
 
+/** What to make of the tolerances of elements and of their requests. */
+export const networkUncertaintyRequestSchema = z
+  .strictObject({
+    method: z.enum(["propagation", "worst-case"]),
+  })
+  .meta({
+    description:
+      "How far the resistance strays with the tolerances of elements, those in their requests, and the stated uncertainty of materials: by first-order propagation (JCGM 100), or as the range between all elements at their lowest and at their highest.",
+    example: { method: "propagation" },
+  });
+
 export const networkRequestSchema = z
   .strictObject({
     elements: z.array(networkElementSchema).min(1).max(MOST_ELEMENTS),
@@ -49,6 +60,7 @@ export const networkRequestSchema = z
         "At most one of voltage, current and power between the ports; the temperature holds for elements whose request names none.",
     }),
     requirement: requirementSchema.optional(),
+    uncertainty: networkUncertaintyRequestSchema.optional(),
     record: recordRequestSchema.optional(),
   })
   .meta({ description: "Elements between named nodes, and the two nodes to measure between." });

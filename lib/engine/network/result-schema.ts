@@ -9,6 +9,7 @@ import {
   usedMaterialSchema,
   verdictSchema,
 } from "../resistance/result-schema";
+import { uncertaintySchema } from "../resistance/uncertainty/result-schema";
 
 const plain = (description: string) => z.number().meta({ description });
 
@@ -63,6 +64,42 @@ export const networkCheckSchema = z
       "One of the checks on this very answer: currents at each node add up to nothing (current-law), element voltages are differences of node voltages (voltage-law), the elements' power is that of the ports (power-balance).",
   });
 
+const contribution = z
+  .object({
+    element: z.string().optional().meta({ description: "Name of the element, or else:" }),
+    material: z.string().optional().meta({
+      description:
+        "A material whose stated uncertainty all its elements share; for `worst-case` it counts within them.",
+    }),
+    sensitivity: plain(
+      "Derivative of the network's resistance: ohm per ohm of the element, or ohm per unit of the material's ratio of true to nominal resistivity.",
+    ),
+    standard: plain("Standard uncertainty of the element (ohm) or of the ratio."),
+    share: plain(
+      "Part of the whole, 0 … 1: of the variance, or for `worst-case` of the elements' spans to first order.",
+    ),
+  })
+  .meta({ description: "What one element or material contributes." });
+
+const { standard, low, high, coverage, text, basis } = uncertaintySchema.shape;
+export const networkUncertaintySchema = z
+  .object({
+    method: z.enum(["propagation", "worst-case"]),
+    standard,
+    low,
+    high,
+    coverage,
+    text,
+    basis,
+    contributions: z.array(contribution).meta({ description: "The budget, largest share first." }),
+  })
+  .meta({
+    description:
+      "How far the network's resistance strays with its elements; bounds are a separate statement.",
+  });
+
+export type NetworkUncertainty = z.infer<typeof networkUncertaintySchema>;
+
 export const networkResultSchema = z
   .object({
     resistance: networkResistanceSchema,
@@ -72,6 +109,7 @@ export const networkResultSchema = z
       description:
         "Whether nodes and elements are told at the operating point or for one volt between the ports.",
     }),
+    uncertainty: networkUncertaintySchema.optional(),
     verdict: verdictSchema.optional(),
     nodes: z.array(networkNodeSchema),
     elements: z.array(networkElementResultSchema),

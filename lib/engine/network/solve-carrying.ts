@@ -1,5 +1,6 @@
 /** The part of a network that can carry current, scaled, numbered by itself and solved. */
 import { InputError, type Problems } from "../failure";
+import type { Corner } from "./network-uncertainty";
 import type { NamedNodes, NetworkElement } from "./read-elements";
 import { type NetworkSolution, solveLinks } from "./solve-network";
 import { RatioError } from "./sparse-elimination";
@@ -17,15 +18,16 @@ export interface Active {
 
 /**
  * Solves the carrying part. Where all elements are exact there is one set of conductances; else the nominal, the
- * smallest and the largest, in this order.
+ * smallest and the largest, in this order. The resistances at `corners`, in ohms, come beside them.
  * @throws InputError where resistances are too far apart for doubles.
  */
 export function* solveCarrying(
   { names, from, to, high, low }: NamedNodes,
   elements: readonly NetworkElement[],
   carrying: Uint8Array,
+  corners: readonly Corner[],
   problems: Problems,
-): Generator<void, { solution: NetworkSolution; active: Active }> {
+): Generator<void, { solution: NetworkSolution; active: Active; corners: readonly number[] }> {
   const number = new Int32Array(names.length).fill(-1);
   const node: number[] = [];
   const numberOf = (n: number): number => {
@@ -47,7 +49,10 @@ export function* solveCarrying(
     chosen.push(element);
   }
   // A power of two: dividing by it rounds nothing.
-  const smallest = chosen.reduce((least, { lower }) => Math.min(least, lower), Infinity);
+  const smallest = chosen.reduce(
+    (least, element, k) => Math.min(least, element.lower, ...corners.map((corner) => corner(element, k))),
+    Infinity,
+  );
   const unitSiemens = 2 ** -Math.floor(Math.log2(smallest));
   const exact = chosen.every(({ lower, upper }) => lower === upper);
   const sets = exact
@@ -57,13 +62,19 @@ export function* solveCarrying(
     nodes: node.length,
     a: Int32Array.from(a),
     b: Int32Array.from(b),
-    conductance: sets.map((ohm) => Float64Array.from(chosen, (element) => 1 / (ohm(element) * unitSiemens))),
+    conductance: [...sets, ...corners].map((ohm) =>
+      Float64Array.from(chosen, (element, k) => 1 / (ohm(element, k) * unitSiemens)),
+    ),
   };
   try {
     if (links.conductance.some((values) => values.some((value) => value < SMALLEST))) throw new RatioError();
     const solution = yield* solveLinks(links, number[high], number[low]);
     const conductance = solution.conductance.map((value) => value * unitSiemens);
-    return { solution: { ...solution, conductance }, active: { link, node } };
+    return {
+      solution: { ...solution, conductance: conductance.slice(0, sets.length) },
+      active: { link, node },
+      corners: conductance.slice(sets.length).map((siemens) => 1 / siemens),
+    };
   } catch (error) {
     if (!(error instanceof RatioError)) throw error;
     problems.add(

@@ -1,4 +1,6 @@
 /** What has to be said beside the numbers of a network. */
+import { UNUSED_TOLERANCES } from "../resistance/compute-resistance";
+import { NO_TOLERANCE } from "../resistance/uncertainty/find-uncertainty";
 import type { NetworkElement } from "./read-elements";
 import type { NetworkRequest } from "./request-schema";
 import type { NetworkResult } from "./result-schema";
@@ -18,6 +20,7 @@ export function collectStatements(
   { elements: inputs }: NetworkRequest,
   elements: readonly NetworkElement[],
   carrying: Uint8Array,
+  uncertain: boolean,
 ): Statements {
   const cautions = new Set<string>();
   const assumptions = new Set([JOINED]);
@@ -31,9 +34,11 @@ export function collectStatements(
       `${idle.slice(0, 5).join(", ")}${more} ${verb} no current: no way through leads from port to port.`,
     );
   }
-  for (const { result } of elements) {
+  for (const { result, toleranced } of elements) {
+    if (toleranced && !uncertain) assumptions.add(UNUSED_TOLERANCES);
     if (!result) continue;
-    for (const caution of result.cautions) cautions.add(caution);
+    // That one element has no tolerance says nothing of the network.
+    for (const caution of result.cautions) if (caution !== NO_TOLERANCE) cautions.add(caution);
     for (const assumption of result.assumptions) assumptions.add(assumption);
     for (const source of result.sources) sources.set(source.title + (source.detail ?? ""), source);
     for (const material of result.materials) materials.set(material.id, material);

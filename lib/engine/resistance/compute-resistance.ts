@@ -116,7 +116,7 @@ export function computeResistance(request: unknown, context: ComputeContext): Re
   return result;
 }
 
-const UNUSED_TOLERANCES =
+export const UNUSED_TOLERANCES =
   "The tolerances in the request are not used, since it asks for no uncertainty: the value is that of the nominal inputs.";
 
 /** The body by its schema. What can still be read after a complaint is checked as well, so that all complaints show. */

@@ -58,6 +58,14 @@ export const networks: DocPage = {
       ],
     },
     {
+      id: "tolerances",
+      title: "How far the whole strays",
+      blocks: [
+        'An element’s resistance may have a tolerance, `{ "value": "42 uohm", "tolerance": "5 %" }`, and so may the dimensions, media and temperature in its request. With `"uncertainty": { "method": "propagation" }` beside `elements` the answer has an `uncertainty`: the standard uncertainty of the whole, a range of 95 %, and a budget that names the elements, largest share first. Elements count as independent, but those of one material stray together with its stated uncertainty.',
+        "`worst-case` is the range between all elements at their lowest and all at their highest; no combination lies outside. A `requirement` is then met only if the whole range meets it. Monte Carlo is for single resistances.",
+      ],
+    },
+    {
       id: "mistakes",
       title: "Mistakes",
       blocks: [

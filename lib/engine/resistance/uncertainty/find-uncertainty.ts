@@ -13,9 +13,14 @@ import { DEFAULT_TRIALS, MOST_TRIALS, type UncertaintyRequest } from "./toleranc
 import { worstCase } from "./worst-case";
 
 /** Two-sided 95 % of a normal distribution (JCGM 100, table G.1). */
-const COVERAGE_FACTOR = 1.959963984540054;
+export const COVERAGE_FACTOR = 1.959963984540054;
 /** Work of an integral over a closed form's. */
 const INTEGRAL_WORK = 10;
+
+/** Cautions. */
+export const NO_TOLERANCE = "No input has a tolerance, so the uncertainty is zero.";
+export const ROUGH_PROPAGATION =
+  "The resistance is not straight over the tolerances, so first-order propagation is rough here; its range is widened to the values at their ends. monte-carlo takes the bend into account.";
 
 export interface FoundUncertainty {
   readonly uncertainty: Uncertainty;
@@ -52,7 +57,7 @@ export function findUncertainty(
   const { answer } = source.shape;
   const work = integral ? INTEGRAL_WORK : answer.kind === "flow" ? 1 : (answer.work ?? 1);
   const { uncertainty, cautions } = byMethod(request, resistance, propagated, work);
-  if (inputs.length === 0) cautions.push("No input has a tolerance, so the uncertainty is zero.");
+  if (inputs.length === 0) cautions.push(NO_TOLERANCE);
   if (solution.method === "field") {
     cautions.push(
       "The sensitivities are those of the formula; the value is that of the field solution on the nominal plan.",
@@ -81,7 +86,7 @@ function byMethod(
       uncertainty: {
         method: "worst-case",
         standard,
-        ...range(low, high),
+        ...rangeOf(low, high),
         coverage: 1,
         basis,
         contributions: budget(contributions, spans),
@@ -99,7 +104,7 @@ function byMethod(
       uncertainty: {
         method: "monte-carlo",
         standard: found.standard,
-        ...range(low, high),
+        ...rangeOf(low, high),
         coverage: COVERAGE,
         basis: `${trials.toLocaleString("en")} trials with seed ${seed}; the range leaves 2.5 % of them on either side (JCGM 101, 7.7). Shares are the variances that the inputs give one at a time (annex B).`,
         mean,
@@ -116,15 +121,13 @@ function byMethod(
     // No verdict may rest on a range that the tolerances' own ends leave.
     low = Math.min(low, propagated.low);
     high = Math.max(high, propagated.high);
-    cautions.push(
-      "The resistance is not straight over the tolerances, so first-order propagation is rough here; its range is widened to the values at their ends. monte-carlo takes the bend into account.",
-    );
+    cautions.push(ROUGH_PROPAGATION);
   }
   return {
     uncertainty: {
       method: "propagation",
       standard,
-      ...range(low, high),
+      ...rangeOf(low, high),
       coverage: COVERAGE,
       basis: `First order (JCGM 100, 5.1.2), the inputs taken as independent; the range is ±1.96 standard uncertainties${shift === 0 ? "" : " about the expectation, which tolerances of unequal sides move"}.`,
       contributions: budget(
@@ -147,7 +150,7 @@ function tooManyTrials(most: number): InputError {
 }
 
 /** The range with its text: both ends to the second significant digit of half the width (JCGM 100, 7.2.6). */
-function range(low: number, high: number): { low: number; high: number; text: string } {
+export function rangeOf(low: number, high: number): { low: number; high: number; text: string } {
   const half = (high - low) / 2;
   const end = (value: number): string =>
     formatQuantity(value, "ohm", { lower: value - half, upper: value + half });

@@ -76,11 +76,31 @@ function readTolerance(found: FoundTolerance, shape: Shape, problems: Problems):
   const { pointer, given, place, path } = found;
   const measured = measuredAt(place, shape, pointer, problems);
   if (!measured) return null;
-  const { kind, gauge, positive } = measured;
+  const { kind, gauge } = measured;
   const reading = readQuantity(given.value, kind, { gauge });
   // The request's own reading complains about the value itself.
   if (!reading.ok) return null;
   const nominal = reading.value;
+  const spread = readSpread(given, nominal, measured, pointer, problems);
+  if (!spread) return null;
+  return {
+    name: path.join("."),
+    pointer,
+    nominal,
+    ...spread,
+    unit: kind === "length" ? "m" : kind === "angle" ? "rad" : undefined,
+    site: siteOf(place, path, kind),
+  };
+}
+
+/** How far a value may lie from its nominal one; null after a complaint. */
+export function readSpread(
+  given: TolerancedInput,
+  nominal: number,
+  { kind, positive }: Measured,
+  pointer: string,
+  problems: Problems,
+): Pick<UncertainInput, "minus" | "plus" | "distribution"> | null {
   const sides = readSides(given, nominal, kind, pointer, problems);
   if (!sides) return null;
   const { minus, plus } = sides;
@@ -111,16 +131,7 @@ function readTolerance(found: FoundTolerance, shape: Shape, problems: Problems):
     );
     return null;
   }
-  return {
-    name: path.join("."),
-    pointer,
-    nominal,
-    minus,
-    plus,
-    distribution,
-    unit: kind === "length" ? "m" : kind === "angle" ? "rad" : undefined,
-    site: siteOf(place, path, kind),
-  };
+  return { minus, plus, distribution };
 }
 
 function siteOf(place: Place, path: readonly (string | number)[], kind: QuantityKindName): InputSite {
