@@ -9,7 +9,7 @@
  */
 import { acosh1p } from "../../numeric/acosh1p";
 import { sumChebyshev } from "../../numeric/chebyshev";
-import { solveDense } from "../../numeric/dense-solve";
+import { solveInPlace } from "../../numeric/lu-solve";
 
 /** 4·√(4π)/Γ(¼)², the factor for a thin wire in a square duct. */
 const THIN_WIRE = 1.0787052023767587;
@@ -76,7 +76,7 @@ export function squareDuctCollocation(delta: number, terms = 16): { span: number
     }
     rows.push(row);
   }
-  const solution = solveDense(rows, new Array<number>(terms + 1).fill(1));
+  const solution = solveInPlace(Float64Array.from(rows.flat()), new Float64Array(terms + 1).fill(1));
   let field = solution[0];
   for (let k = 1; k <= terms; k++) {
     const n = 4 * k;

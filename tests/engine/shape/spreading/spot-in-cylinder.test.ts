@@ -2,7 +2,7 @@
 import { describe, expect, it } from "vitest";
 import { EULER_GAMMA } from "@/lib/engine/numeric/digamma";
 import { gaussLegendre } from "@/lib/engine/numeric/gauss-legendre";
-import { solveDense } from "@/lib/engine/numeric/dense-solve";
+import { solveInPlace } from "@/lib/engine/numeric/lu-solve";
 import { spotConstriction } from "@/lib/engine/shape/spreading/spot-in-cylinder-law";
 import { factor } from "../../../support/shape-law";
 
@@ -71,9 +71,9 @@ function solved(ratio: number, nodes: number): number {
       return ((2 * ratio) / Math.PI ** 2) * weights[j] * values + (i === j ? 1 : 0);
     }),
   );
-  const h = solveDense(
-    rows,
-    t.map(() => 1),
+  const h = solveInPlace(
+    Float64Array.from(rows.flat()),
+    Float64Array.from(t, () => 1),
   );
   return 1 / h.reduce((sum, value, i) => sum + weights[i] * value, 0);
 }

@@ -1,7 +1,7 @@
 /** The cylinder in a square duct: series, near-touching strips, collocation and limits. */
 import { describe, expect, it } from "vitest";
 import { acosh1p } from "@/lib/engine/numeric/acosh1p";
-import { solveDense } from "@/lib/engine/numeric/dense-solve";
+import { solveInPlace } from "@/lib/engine/numeric/lu-solve";
 import { squareDuctCollocation, squareDuctSpan } from "@/lib/engine/shape/spreading/square-duct";
 
 /** Recomputed with the multipole system of up to 390 terms in 33-digit arithmetic. */
@@ -47,7 +47,7 @@ function multipoles(delta: number, count: number): number {
     orders.map((n) => choose(n + m - 1, m) * latticeSum(n + m) * a ** (n + m) + (n === m ? 1 : 0)),
   );
   const right = orders.map((m) => (-(a ** m) * latticeSum(m)) / m);
-  const x = solveDense(rows, right);
+  const x = solveInPlace(Float64Array.from(rows.flat()), Float64Array.from(right));
   const thin = 1.0787052023767587;
   return (
     Math.log(thin / delta) +
