@@ -37,11 +37,11 @@ describe("tolerances and sizing on a shape's page", () => {
 
     // Plus and minus apart: 34 µΩ over 1 + 4 % and over 1 − 2 %.
     await page.getByRole("button", { name: "plus and minus apart for width" }).click();
-    await page.getByRole("textbox", { name: "Tolerance above of width" }).fill("4 %");
-    await page.getByRole("textbox", { name: "Tolerance below of width" }).fill("2 %");
+    await page.getByRole("textbox", { name: "Upper tolerance of width" }).fill("4 %");
+    await page.getByRole("textbox", { name: "Lower tolerance of width" }).fill("2 %");
     await range.getByText(/32\.69\sµΩ … 34\.69\sµΩ/u).waitFor();
     expect(new URL(await addressOf(page)).searchParams.get("width.minus")).toBe("2%");
-    await page.getByRole("textbox", { name: "Tolerance below of width" }).fill("60 mm");
+    await page.getByRole("textbox", { name: "Lower tolerance of width" }).fill("60 mm");
     await page.getByText("it must be smaller than the value").waitFor();
     await page.getByRole("button", { name: "Take the tolerance of width away" }).click();
     await settled(page);

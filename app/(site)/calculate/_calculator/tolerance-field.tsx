@@ -44,8 +44,8 @@ export function ToleranceButton({ form, name, label, temperature = false }: Tole
 
 const SIDES = {
   tolerance: { sign: "±", said: "Tolerance" },
-  plus: { sign: "+", said: "Tolerance above" },
-  minus: { sign: "−", said: "Tolerance below" },
+  plus: { sign: "+", said: "Upper tolerance" },
+  minus: { sign: "−", said: "Lower tolerance" },
 } as const;
 
 /** The tolerance of a quantity: how far, to both sides alike or to each, and how it is spread. */
