@@ -39,10 +39,27 @@ async function violations(page: Page): Promise<readonly string[]> {
   return found.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => String(target)).join(" | ")}`);
 }
 
+/** Its first edge is crossed by four others. */
+const ZIGZAG = [
+  [0, 0],
+  [10, 0],
+  [10, 10],
+  [8, -2],
+  [6, 10],
+  [4, -2],
+  [2, 10],
+  [0, 10],
+];
+
 describe("an outline", () => {
   it("is drawn, gets its terminals by presses, and is solved to the known corner", async () => {
     const { page, complaints, close } = await bench.open("/outline");
     await page.getByLabel("Begin with").selectOption("An empty board");
+    await page
+      .getByText("“An empty board” has taken the place of your drawing. Undo brings yours back.")
+      .waitFor();
+    expect(await page.getByRole("button", { name: "Solve" }).isDisabled()).toBe(true);
+    await page.getByText(/^Draw the outer ring first/).waitFor();
     const press = await presser(page);
     for (const [x, y] of [
       [0, 0],
@@ -160,8 +177,22 @@ describe("an outline", () => {
     expect(await field.getAttribute("aria-invalid")).toBe("true");
     await field.fill("5");
     await page.getByRole("button", { name: "Solve" }).click();
-    await page.getByRole("button", { name: "Show it" }).first().click();
+    await page.getByRole("button", { name: "Outer ring, edge 2" }).click();
     await page.locator("tr", { hasText: "cross at (5, 5)" }).waitFor();
+    expect(await page.getByTestId("selection").textContent()).toContain("Outer ring, edge 2");
+    // Every crossing has its mark and its sentence; a terminal's complaint leads to its fields.
+    await page.getByRole("button", { name: "Terminal b, part 1" }).click();
+    expect(await page.locator("#terminal-1 :focus").count()).toBe(1);
+    expect(await page.locator("#board svg [data-complaint]").count()).toBe(1);
+    await page.getByRole("button", { name: "JSON", exact: true }).click();
+    const zigzag = { ...crossing, outline: { unit: "mm", outer: ZIGZAG }, medium: { sheetResistance: 5 } };
+    await page.getByRole("textbox", { name: "JSON" }).fill(JSON.stringify(zigzag));
+    await page.getByRole("button", { name: "Take over" }).click();
+    await page.getByRole("button", { name: "Solve" }).click();
+    await page.getByRole("button", { name: "Outer ring, edge 5" }).waitFor();
+    expect(await page.locator("#board svg [data-complaint]").count()).toBe(4);
+    expect(await page.locator("tr", { hasText: "cross at" }).count()).toBe(4);
+    expect(await page.getByText("#/").count()).toBe(0);
     expect(await violations(page)).toEqual([]);
 
     // A limit passes by itself; the same attempt is then answered.

@@ -8,9 +8,13 @@ import type { Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { recordCode } from "@/app/(site)/records/_content/record-code";
 import { pdfPages } from "../support/pdf-text";
+import { insertMembership, insertTeam, teamBySlug } from "@/db/queries/teams";
+import { newId } from "@/lib/service/identifier";
+import { BEND } from "../support/field";
 import { startServer, type TestServer } from "../support/server";
 import { signedInCookie } from "../support/signed-in";
 import { base, closeBrowser, visit, type Visit } from "./browser";
+import { alive } from "./calculation";
 
 const run = promisify(execFile);
 const PDFTOPPM = "/usr/bin/pdftoppm";
@@ -82,6 +86,91 @@ describe("a record", () => {
     await page.waitForURL("**/records/rec_*");
     await page.getByRole("heading", { level: 1, name: /^Rectangular bar: width for 20/ }).waitFor();
     await close();
+  });
+
+  it("tells its code and its team, which is chosen where there are several", async () => {
+    const { page, close } = await openAs("busbar", "/docs/changelog");
+    const { db } = server.service;
+    const { id: personId } = db.$client
+      .prepare("select id from people order by created_at desc, rowid desc limit 1")
+      .get() as { id: string };
+    if (!teamBySlug(db, "thin-film")) {
+      insertTeam(db, { id: newId("team"), slug: "thin-film", name: "Thin film", createdAt: Date.now() });
+    }
+    const other = teamBySlug(db, "thin-film");
+    insertMembership(db, personId, other?.id ?? "", Date.now());
+    await page.goto(base() + BAR);
+    await alive(page);
+    await page.getByRole("button", { name: "Save as a record" }).click();
+    await page.getByLabel("Team that owns it").selectOption(other?.name ?? "");
+    await page.getByRole("button", { name: "Save", exact: true }).click();
+    const stored = page.getByTestId("stored");
+    await stored.waitFor();
+    const link = stored.getByRole("link").first();
+    const id = (await link.getAttribute("href"))?.split("/").at(-1) ?? "";
+    expect(await link.textContent()).toBe(recordCode(id));
+    expect(await stored.innerText()).toContain(other?.name);
+    expect(db.$client.prepare("select team_id from records where id = ?").get(id)).toEqual({
+      team_id: other?.id,
+    });
+    await close();
+  });
+
+  it("of a field is opened again in Outline and solves to the same, a stored outline in it", async () => {
+    const { key } = server.issue({ team: "busbar" });
+    const post = async (path: string, body: object) => {
+      const response = await fetch(`${base()}/api/v1${path}`, {
+        method: "POST",
+        headers: {
+          Authorization: `Bearer ${key}`,
+          "Content-Type": "application/json",
+          Prefer: "wait=30",
+        },
+        body: JSON.stringify(body),
+      });
+      return response.json();
+    };
+    const outline = await post("/outlines", { outline: BEND.outline, terminals: BEND.terminals });
+    const { record, result } = await post("/fields", {
+      outlineId: outline.id,
+      medium: BEND.medium,
+      record: { label: "Bend" },
+    });
+    const { page, close } = await openAs("busbar", `/records/${record.id}`);
+    await page.getByRole("link", { name: "Open in Outline" }).click();
+    await page.waitForURL("**/outline#body=*");
+    await alive(page);
+    await expect.poll(() => page.getByLabel("Vertex 1, x").inputValue()).toBe("4");
+    await page.getByRole("button", { name: "Solve" }).click();
+    await page.getByTestId("picture").waitFor({ timeout: 30_000 });
+    expect(await page.getByTestId("resistance").first().textContent()).toBe(result.resistance.text);
+    await close();
+  });
+
+  it("has a sheet whose refusals are problem documents", async () => {
+    const cookie = await signedInCookie(server.service, { team: "busbar" });
+    const signedIn = { cookie: `${cookie.name}=${cookie.value}` };
+    const ask = async (path: string, headers: Record<string, string> = {}) => {
+      const response = await fetch(base() + path, { headers, redirect: "manual" });
+      return { response, body: response.status === 303 ? null : await response.json() };
+    };
+    const paper = await ask("/records/rec_0/sheet.pdf?paper=a5", signedIn);
+    expect(paper.response.status).toBe(422);
+    expect(paper.response.headers.get("content-type")).toMatch(/^application\/problem\+json/);
+    expect(paper.body.errors).toEqual([
+      { parameter: "paper", detail: expect.stringMatching(/"a4".*"letter"/) },
+    ]);
+    const unknown = await ask("/records/rec_0/sheet.pdf", signedIn);
+    expect([unknown.response.status, unknown.body.type.split("/").at(-1)]).toEqual([404, "not-found"]);
+    const signedOut = await ask("/records/rec_0/sheet.pdf", { accept: "application/pdf" });
+    expect([signedOut.response.status, signedOut.body.type.split("/").at(-1)]).toEqual([
+      401,
+      "sign-in-required",
+    ]);
+    const person = await ask("/records/rec_0/sheet.pdf?paper=letter", { accept: "text/html,*/*" });
+    expect(person.response.headers.get("location")).toBe(
+      "/sign-in?next=%2Frecords%2Frec_0%2Fsheet.pdf%3Fpaper%3Dletter",
+    );
   });
 
   it("is stored from the page, stands alone, prints, replays, is relabelled and deleted", async () => {

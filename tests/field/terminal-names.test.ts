@@ -130,7 +130,7 @@ function pictured({ outer, holes = [], symmetry, terminals }: Case, width: numbe
   const svg = plotSvg(
     map,
     { title: "R", subtitle: "", terminalNames: names, unit: "mm" },
-    { width, tallest: 560, titled: false, colours: PAPER_COLOURS, id: "p" },
+    { width, tallest: 560, titled: false, ground: false, colours: PAPER_COLOURS, id: "p" },
   );
   const placed: Name[] = [
     ...svg.matchAll(/<text x="([\d.]+)" y="([\d.]+)"[^>]*font-weight="600"[^>]*>([^<]*)</g),

@@ -4,6 +4,7 @@ import { readRecordCode, recordCode } from "@/app/(site)/records/_content/record
 import type { Draw } from "@/app/(site)/records/_content/content";
 import { sheetPdf } from "@/app/(site)/records/_sheet/sheet-pdf";
 import { inOutline } from "@/app/(site)/records/_content/open-again";
+import { networkSvg } from "@/app/(site)/records/_content/network-svg";
 import { outlineSvg, storedOutline } from "@/app/(site)/records/_content/outline-svg";
 import { sketchFromHash } from "@/app/(site)/outline/_model/address";
 import { fieldBody } from "@/app/(site)/outline/_model/field-body";
@@ -43,7 +44,7 @@ function recordOf(request: Readonly<Record<string, unknown>>, label = "Main bar,
 const contentOf = (record: RecordView, plot: Draw | null = null) =>
   recordContent(record, { origin: "https://rho.merrow-pike.example", team: "Busbar", lookUp, plot });
 
-const LOOK = { width: 640, tallest: 400, titled: false, colours: PAPER_COLOURS, id: "test" };
+const LOOK = { width: 640, tallest: 400, titled: false, ground: false, colours: PAPER_COLOURS, id: "test" };
 const BAR = {
   shape: "bar",
   dimensions: { length: "250 mm", width: { value: "40 mm", tolerance: "0.1 mm" }, thickness: "5 mm" },
@@ -178,6 +179,26 @@ describe("a sizing's record", () => {
   });
 });
 
+describe("a network's picture", () => {
+  const drawn = [
+    { name: "bar <A>", from: "in", to: "joint", resistance: "42 µΩ" },
+    { name: "bolts", from: "joint", to: "out", resistance: "6 µΩ" },
+    { name: "bypass", from: "in", to: "out", resistance: "1 mΩ" },
+  ];
+
+  it.each([400, 880])("has every node and element inside its %i px", (width) => {
+    const svg = networkSvg(drawn, ["in", "out"], { ...LOOK, width });
+    for (const words of ["bar &#60;A&#62;", "42 µΩ", "bolts", "6 µΩ", "bypass", "1 mΩ", "joint"]) {
+      expect(svg).toContain(`>${words}</text>`);
+    }
+    const height = Number(/viewBox="0 0 \d+ ([\d.]+)"/.exec(svg)?.[1]);
+    const places = [...svg.matchAll(/<text x="([\d.-]+)" y="([\d.-]+)"/g)];
+    for (const [, x, y] of places) {
+      expect(Number(x) > 0 && Number(x) < width && Number(y) > 10 && Number(y) < height).toBe(true);
+    }
+  });
+});
+
 describe("a field's record, opened again in Outline", () => {
   const opened = async (body: object) => {
     const again = inOutline(body);
@@ -291,7 +312,7 @@ describe.each(["a4", "letter"] as const)("the printed sheet on %s", (paper) => {
     expect(14 * points).toBeGreaterThanOrEqual(7);
     // A square conductor covers more than half of the paper's width.
     expect((look?.tallest ?? 0) * points).toBeGreaterThan(textWidth / 2 + 46);
-    expect(look?.colours.ground).toBeNull();
+    expect([look?.ground, look?.colours.sheet]).toEqual([false, "#ffffff"]);
   });
 
   it("carries a graded shell with its layers", async () => {

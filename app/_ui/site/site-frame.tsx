@@ -3,24 +3,23 @@ import type { ReactNode } from "react";
 import type { Theme } from "../theme";
 import { ThemeSwitch } from "../theme-switch";
 import { Mark } from "./mark";
+import { NAVIGATION } from "./navigation";
 import { SiteLink } from "./site-link";
-
-const NAVIGATION = [
-  { href: "/calculate", label: "Calculate" },
-  { href: "/outline", label: "Outline" },
-  { href: "/network", label: "Network" },
-  { href: "/docs", label: "Docs" },
-  { href: "/docs/api", label: "API reference" },
-  { href: "/console", label: "Console" },
-] as const;
 
 const FOOTER = [
   { href: "/docs/problems", label: "Problems" },
   { href: "/docs/changelog", label: "Changelog" },
 ] as const;
 
+interface SiteFrameProps {
+  readonly theme: Theme;
+  /** Who is signed in, or the way to sign in; left out where a page is about just that. */
+  readonly reader?: ReactNode;
+  readonly children: ReactNode;
+}
+
 /** Header, main region and footer of every public page. */
-export function SiteFrame({ theme, children }: { readonly theme: Theme; readonly children: ReactNode }) {
+export function SiteFrame({ theme, reader, children }: SiteFrameProps) {
   return (
     <div className="flex min-h-dvh flex-col">
       <a
@@ -30,14 +29,14 @@ export function SiteFrame({ theme, children }: { readonly theme: Theme; readonly
         Skip to content
       </a>
       <header className="border-b border-rule print:hidden">
-        <div className="mx-auto flex max-w-page flex-wrap items-center justify-between gap-x-3 gap-y-0.5 px-2 py-1.5 medium:px-4">
+        <div className="mx-auto flex max-w-page flex-wrap items-center justify-between gap-x-2 gap-y-0.5 px-2 py-1.5 medium:gap-x-3 medium:px-4">
           <Link href="/" className="flex items-center gap-1 rounded text-lead font-semibold tracking-tight">
             <Mark className="h-2.5 w-3.5" />
             Rhoform
           </Link>
           <nav
             aria-label="Site"
-            className="order-last flex w-full grow flex-wrap gap-x-2.5 text-table medium:order-none medium:w-auto"
+            className="order-last flex w-full grow flex-wrap gap-x-2.5 text-table wide:order-none wide:w-auto"
           >
             {NAVIGATION.map(({ href, label }) => (
               <SiteLink
@@ -49,7 +48,10 @@ export function SiteFrame({ theme, children }: { readonly theme: Theme; readonly
               </SiteLink>
             ))}
           </nav>
-          <ThemeSwitch initial={theme} />
+          <div className="flex min-w-0 items-center gap-x-1">
+            {reader}
+            <ThemeSwitch initial={theme} />
+          </div>
         </div>
       </header>
       <main

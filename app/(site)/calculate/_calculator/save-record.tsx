@@ -4,14 +4,27 @@ import { useRef, useState } from "react";
 import { Save } from "lucide-react";
 import { useRouter } from "next/navigation";
 import { Button, ButtonLink } from "../../../_ui/button";
+import { callConsole, ConsoleProblem } from "../../../console/_shell/call-console";
+import type { TeamChoice } from "../../../console/_shell/team-choices";
 import { Dialog } from "../../../_ui/dialog";
 import { CONTROL, Field } from "../../../_ui/field";
 import { ProblemNotice } from "../../../_ui/problem-notice";
+import { Select } from "../../../_ui/select";
 import { newAttemptKey } from "../../_live/attempt-key";
 import { ApiProblem, postApi } from "../../_live/call-api";
+import type { RecordSummary } from "../../records/_server/record-summary";
+import { StoredDialog, type StoredRecord } from "./stored-dialog";
 
 /** Who may save: a reader who is signed in, or one who has to sign in first. */
-export type Saving = { readonly kind: "signed-in" } | { readonly kind: "sign-in"; readonly href: string };
+export type Saving =
+  | {
+      readonly kind: "signed-in";
+      /** Id of the team that this browser's pages work for. */
+      readonly team: string;
+      /** Those whose records the reader may store. */
+      readonly teams: readonly TeamChoice[];
+    }
+  | { readonly kind: "sign-in"; readonly href: string };
 
 interface SaveRecordProps {
   readonly saving: Saving;
@@ -27,10 +40,13 @@ interface SaveRecordProps {
 }
 
 interface Stored {
-  readonly record?: { readonly id: string; readonly url: string };
+  readonly record?: { readonly id: string };
 }
 
-/** Stores the calculation for the reader's team. One press stores once, however often it is repeated. */
+/** The same width for both words, so that what stands beside it does not move when the reader signs in. */
+const SAVE_WIDTH = "min-w-[12rem]";
+
+/** Stores the calculation for a team of the reader's. One press stores once, however often it is repeated. */
 export function SaveRecord({
   saving,
   path,
@@ -45,15 +61,17 @@ export function SaveRecord({
   /** A repeat of the same text has the same key, so that it stores once; another text is another record. */
   const attempt = useRef({ text: "", key: "" });
   const [busy, setBusy] = useState(false);
-  const [problem, setProblem] = useState<ApiProblem | Error | null>(null);
-  /** What was stored; its id is null while a field solution is still on its way. */
-  const [stored, setStored] = useState<{ readonly label: string; readonly id: string | null } | null>(null);
+  const [problem, setProblem] = useState<Error | null>(null);
+  const [stored, setStored] = useState<StoredRecord | null>(null);
+  /** The team that was chosen here; the pages' own where nothing was. */
+  const [chosen, setChosen] = useState<string | null>(null);
 
   if (saving.kind === "sign-in") {
     return (
       <ButtonLink
         href={saving.href}
         variant="primary"
+        className={SAVE_WIDTH}
         prefetch={false}
         onClick={(event) => {
           if (!back || event.metaKey || event.ctrlKey || event.shiftKey) return;
@@ -66,6 +84,9 @@ export function SaveRecord({
     );
   }
 
+  const { teams } = saving;
+  const team = teams.find(({ id }) => id === (chosen ?? saving.team)) ?? teams[0];
+
   function start() {
     attempt.current = { text: "", key: "" };
     setProblem(null);
@@ -77,10 +98,23 @@ export function SaveRecord({
     setBusy(true);
     setProblem(null);
     const text = JSON.stringify({ ...body, record: { label: label.trim() } });
-    if (attempt.current.text !== text) attempt.current = { text, key: newAttemptKey() };
+    // For another team it is another record.
+    if (attempt.current.text !== text + team.id) {
+      attempt.current = { text: text + team.id, key: newAttemptKey() };
+    }
     try {
+      if (team.id !== saving.team) {
+        await callConsole("PATCH", "account", { team: team.id });
+        router.refresh();
+      }
       const { record } = await postApi<Stored>(path, text, { idempotencyKey: attempt.current.key, wait: 20 });
-      setStored({ label: label.trim(), id: record?.id ?? null });
+      const told = record ? await summaryOf(record.id) : null;
+      setStored({
+        label: label.trim(),
+        id: record?.id ?? null,
+        code: told?.code ?? null,
+        team: told?.team ?? team.name,
+      });
     } catch (failure) {
       setProblem(failure instanceof Error ? failure : new Error("The record was not saved."));
     } finally {
@@ -90,11 +124,11 @@ export function SaveRecord({
 
   return (
     <>
-      <Button variant="primary" onClick={start}>
+      <Button variant="primary" className={SAVE_WIDTH} onClick={start}>
         <Save aria-hidden size={16} /> {action}
       </Button>
       {stored ? (
-        <StoredDialog open={open} onOpenChange={setOpen} label={stored.label} id={stored.id} />
+        <StoredDialog open={open} onOpenChange={setOpen} stored={stored} />
       ) : (
         <Dialog
           open={open}
@@ -124,10 +158,23 @@ export function SaveRecord({
               />
             )}
           </Field>
+          {teams.length > 1 ? (
+            <Select
+              label="Team that owns it"
+              help="The pages of this browser then work for that team."
+              value={team.id}
+              options={teams.map(({ id, name }) => ({ value: id, label: name }))}
+              onChange={(event) => setChosen(event.target.value)}
+            />
+          ) : (
+            <p className="text-table text-ink-soft">
+              It belongs to the team <span className="text-ink">{team.name}</span>.
+            </p>
+          )}
           {problem ? (
             <ProblemNotice
               problem={
-                problem instanceof ApiProblem
+                problem instanceof ApiProblem || problem instanceof ConsoleProblem
                   ? problem.problem
                   : {
                       title: "The record was not saved",
@@ -142,47 +189,12 @@ export function SaveRecord({
   );
 }
 
-interface StoredDialogProps {
-  readonly open: boolean;
-  readonly onOpenChange: (open: boolean) => void;
-  readonly label: string;
-  readonly id: string | null;
-}
-
-/** What was stored, and where it is. */
-function StoredDialog({ open, onOpenChange, label, id }: StoredDialogProps) {
-  return (
-    <Dialog
-      open={open}
-      onOpenChange={onOpenChange}
-      title={id ? "The record is saved" : "The record is on its way"}
-      description={
-        id
-          ? `“${label}” keeps the request, the answer and all versions.`
-          : `“${label}” is stored once the field is solved; it then stands among the team’s records.`
-      }
-      actions={
-        <>
-          <Button onClick={() => onOpenChange(false)}>Go on here</Button>
-          <ButtonLink href={id ? `/records/${id}` : "/console/records"} variant="primary" prefetch={false}>
-            {id ? "Open the record" : "Open the records"}
-          </ButtonLink>
-        </>
-      }
-    >
-      {id ? (
-        <p className="flex flex-wrap gap-x-2 text-table">
-          Its sheet as PDF:
-          <a className="link" href={`/records/${id}/sheet.pdf?paper=a4`}>
-            A4
-          </a>
-          <a className="link" href={`/records/${id}/sheet.pdf?paper=letter`}>
-            Letter
-          </a>
-        </p>
-      ) : (
-        <p className="text-table">It needs nothing more from this page.</p>
-      )}
-    </Dialog>
-  );
+/** Code and owner of what was stored; null where they cannot be asked for now. */
+async function summaryOf(id: string): Promise<RecordSummary | null> {
+  try {
+    const response = await fetch(`/records/${id}/summary`);
+    return response.ok ? ((await response.json()) as RecordSummary) : null;
+  } catch {
+    return null;
+  }
 }

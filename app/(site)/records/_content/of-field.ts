@@ -24,12 +24,7 @@ export const storedFieldRequest = z.object({
 type StoredRequest = z.infer<typeof storedFieldRequest>;
 
 /** `plot` draws the finished picture, where its map is still kept; without it the outline is drawn. */
-export function tellField(
-  request: unknown,
-  result: unknown,
-  lookUp: LookUp,
-  plot: Draw | null,
-): Told | null {
+export function tellField(request: unknown, result: unknown, lookUp: LookUp, plot: Draw | null): Told | null {
   const asked = storedFieldRequest.safeParse(request);
   const answer = fieldResultSchema.safeParse(result);
   if (!asked.success || !answer.success) return null;

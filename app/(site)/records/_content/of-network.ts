@@ -3,9 +3,10 @@ import { z } from "zod";
 import { findShape, networkResultSchema, type ShapeEntry, shapeEntry } from "@/lib/engine";
 import { engineering } from "../../calculate/_calculator/answer/engineering";
 import { bracketOf, checksSection, linesSection, operatingFacts, sourceLines, verdictOf } from "./answer";
-import type { Block, Section, Told } from "./content";
+import type { Block, Picture, Section, Told } from "./content";
 import { askedTable } from "./inputs";
 import { materialBlocks } from "./medium";
+import { MOST_DRAWN, networkSvg } from "./network-svg";
 import type { LookUp } from "./of-resistance";
 import { plainNumber, typedText, words } from "./typed";
 
@@ -55,7 +56,7 @@ export function tellNetwork(request: unknown, result: unknown, lookUp: LookUp): 
       ],
       verdict: verdictOf(verdict),
     },
-    picture: null,
+    picture: pictureOf(answer.data.elements, ports),
     cautions,
     sections: [
       {
@@ -69,6 +70,23 @@ export function tellNetwork(request: unknown, result: unknown, lookUp: LookUp): 
       ...linesSection("assumptions", "Assumptions", assumptions),
       ...linesSection("sources", "Sources", sourceLines(sources)),
     ],
+  };
+}
+
+function pictureOf(
+  elements: z.infer<typeof networkResultSchema>["elements"],
+  ports: readonly string[],
+): Picture | null {
+  const [first, second] = ports;
+  if (elements.length > MOST_DRAWN || second === undefined) return null;
+  const drawn = elements.map(({ name, between, resistance }) => {
+    const [from, to] = between;
+    return { name, from, to, resistance: engineering(resistance, "Ω") };
+  });
+  return {
+    kind: "svg",
+    draw: (look) => networkSvg(drawn, [first, second], look),
+    description: `The network from ${first} to ${second}: ${elements.length} elements with their resistances.`,
   };
 }
 

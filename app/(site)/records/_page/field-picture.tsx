@@ -3,7 +3,7 @@ import type { Draw } from "../_content/content";
 
 /** The page's own colours, so that the picture follows the theme; paper is always light. */
 const COLOURS: PlotColours = {
-  ground: null,
+  sheet: "var(--sheet)",
   ink: "var(--ink)",
   soft: "var(--ink-soft)",
   edge: "var(--edge)",
@@ -24,8 +24,22 @@ interface FieldPictureProps {
  * texts stay legible at each width without a script, and on paper.
  */
 export function FieldPicture({ draw, description, id }: FieldPictureProps) {
-  const narrow = draw({ width: 400, tallest: 480, titled: false, colours: COLOURS, id: `${id}-narrow` });
-  const wide = draw({ width: 880, tallest: 560, titled: false, colours: COLOURS, id: `${id}-wide` });
+  const narrow = draw({
+    width: 400,
+    tallest: 480,
+    titled: false,
+    ground: false,
+    colours: COLOURS,
+    id: `${id}-narrow`,
+  });
+  const wide = draw({
+    width: 880,
+    tallest: 560,
+    titled: false,
+    ground: false,
+    colours: COLOURS,
+    id: `${id}-wide`,
+  });
   const fill = "[&>svg]:block [&>svg]:h-auto [&>svg]:w-full [&_text]:font-sans";
   return (
     <div role="img" aria-label={description} className="@container">

@@ -182,6 +182,7 @@ function drawSvg(pen: Pen, draw: Draw): void {
     width: Math.floor(pen.width / POINTS),
     tallest: TALLEST_FIELD / POINTS,
     titled: false,
+    ground: false,
     colours: PAPER_COLOURS,
     id: "sheet",
   };

@@ -2,8 +2,8 @@
 
 /** Anything that SVG takes for a paint. */
 export interface PlotColours {
-  /** Behind the picture; null leaves what is behind it. */
-  readonly ground: string | null;
+  /** What the picture stands on. */
+  readonly sheet: string;
   readonly ink: string;
   readonly soft: string;
   readonly edge: string;
@@ -20,13 +20,15 @@ export interface PlotLook {
   readonly tallest: number;
   /** Whether result and bounds stand above it. */
   readonly titled: boolean;
+  /** Whether the picture brings its own sheet along. */
+  readonly ground: boolean;
   readonly colours: PlotColours;
   /** Begins the ids inside, which are then unique in a document that holds several pictures. */
   readonly id: string;
 }
 
 export const PAPER_COLOURS: PlotColours = {
-  ground: null,
+  sheet: "#ffffff",
   ink: "#1b2226",
   soft: "#566067",
   edge: "#857f73",
@@ -40,7 +42,8 @@ export const FILE_LOOK: PlotLook = {
   width: 960,
   tallest: 848,
   titled: true,
-  colours: { ...PAPER_COLOURS, ground: "#faf8f3" },
+  ground: true,
+  colours: { ...PAPER_COLOURS, sheet: "#faf8f3" },
   id: "plot",
 };
 

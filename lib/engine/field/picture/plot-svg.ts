@@ -88,7 +88,7 @@ export function plotSvg(map: FieldMap, text: PlotText, look: PlotLook = FILE_LOO
     `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${width} ${px(total)}" width="${width}" height="${px(total)}" role="img" aria-labelledby="${id("title")} ${id("text")}" font-family="'Spline Sans', system-ui, sans-serif" font-size="${FONT}">`,
     `<title id="${id("title")}">${escapeText(text.title)}</title>`,
     `<desc id="${id("text")}">${escapeText(text.subtitle)} ${voltages - 1} equipotentials and ${currents} equal shares of the current over the current density.</desc>`,
-    colours.ground === null ? "" : `<rect width="${width}" height="${px(total)}" fill="${colours.ground}"/>`,
+    look.ground ? `<rect width="${width}" height="${px(total)}" fill="${colours.sheet}"/>` : "",
     look.titled
       ? `<text x="${MARGIN}" y="34" font-size="22" font-weight="600" fill="${colours.ink}">${escapeText(text.title)}</text>` +
         `<text x="${MARGIN}" y="57" fill="${colours.soft}">${escapeText(text.subtitle)}</text>`

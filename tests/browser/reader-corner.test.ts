@@ -1,0 +1,86 @@
+import AxeBuilder from "@axe-core/playwright";
+import type { Page } from "playwright-core";
+import { afterAll, beforeAll, describe, expect, it } from "vitest";
+import { startServer, type TestServer } from "../support/server";
+import { signedInCookie } from "../support/signed-in";
+import { base, closeBrowser, visit, type Visit } from "./browser";
+
+let server: TestServer;
+beforeAll(async () => {
+  server = await startServer();
+});
+afterAll(async () => {
+  await closeBrowser();
+  await server.stop();
+});
+
+const NAME = "Magnus Oyelaran-Whitcombe";
+
+async function openAs(path: string, width?: number): Promise<Visit> {
+  const cookie = await signedInCookie(server.service, { team: "busbar", name: NAME });
+  return visit(path, { width, prepare: (page) => page.context().addCookies([{ ...cookie, url: base() }]) });
+}
+
+const excess = (page: Page) =>
+  page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+
+describe("the corner of a page", () => {
+  it("says who is signed in and for which team, leads on, and signs out", async () => {
+    const { page, close } = await openAs("/docs/start", 360);
+    await page.waitForLoadState("networkidle");
+    const menu = page.locator("header details");
+    expect(await menu.locator("summary").getAttribute("aria-label")).toBe(`Signed in as ${NAME}`);
+    await menu.locator("summary").click();
+    expect(await menu.innerText()).toContain(NAME);
+    expect(await menu.innerText()).toContain("These pages work for the team ");
+    for (const [name, href] of [
+      ["Console", "/console"],
+      ["Account", "/console/account"],
+    ]) {
+      expect(await menu.getByRole("link", { name }).getAttribute("href")).toBe(href);
+    }
+    expect(await excess(page)).toBe(0);
+    const { violations } = await new AxeBuilder({ page }).include("header").analyze();
+    expect(violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html}`)).toEqual([]);
+    await page.keyboard.press("Escape");
+    await expect.poll(() => menu.getByRole("button", { name: "Sign out" }).isVisible()).toBe(false);
+    await menu.locator("summary").click();
+    await menu.getByRole("button", { name: "Sign out" }).click();
+    await page.getByRole("link", { name: "Sign in" }).waitFor();
+    expect(new URL(page.url()).pathname).toBe("/docs/start");
+    expect(await page.locator("header details").count()).toBe(0);
+    await close();
+  });
+
+  it("loads nothing of the menu for a signed-out reader", async () => {
+    const { page, requests, close } = await visit("/docs/start", { width: 360 });
+    await page.waitForLoadState("networkidle");
+    expect(await page.locator("header").getByRole("link", { name: "Sign in" }).getAttribute("href")).toBe(
+      "/sign-in",
+    );
+    expect(await excess(page)).toBe(0);
+    for (const address of requests.filter((url) => url.includes("/_next/static/") && url.includes(".js"))) {
+      expect(await (await fetch(address)).text(), address).not.toContain("auth/sign-out");
+    }
+    await close();
+  });
+});
+
+describe.each([360, 768, 1024, 1440])("at %i px", (width) => {
+  it("the header and the row of a calculator's actions stand alike, signed in or not", async () => {
+    const places: object[] = [];
+    for (const open of [() => openAs("/calculate/bar", width), () => visit("/calculate/bar", { width })]) {
+      const { page, close } = await open();
+      const box = (locator: ReturnType<Page["locator"]>) => locator.first().boundingBox();
+      await page.evaluate(() => document.fonts.ready);
+      places.push({
+        header: await box(page.locator("header")),
+        compare: await box(page.getByRole("button", { name: "Compare with a variant" })),
+        link: await box(page.getByRole("button", { name: "Copy link" })),
+        form: await box(page.locator("form[aria-label=Inputs]")),
+      });
+      await close();
+    }
+    expect(places[0]).toEqual(places[1]);
+  });
+});
