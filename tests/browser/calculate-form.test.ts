@@ -71,6 +71,15 @@ describe("a quantity's field", () => {
     expect(await width.getAttribute("aria-invalid")).toBe("true");
     expect(await page.locator(RESISTANCE).textContent()).toBe(before);
     await page.getByText("No answer to this input", { exact: true }).waitFor();
+    // What is kept says on itself that it is not of this input, and looks it.
+    await page.getByText("To the input before", { exact: true }).waitFor();
+    await page.getByText("Drawn with other dimensions", { exact: true }).waitFor();
+    const dimmed = () =>
+      page
+        .locator("figure:visible")
+        .first()
+        .evaluate((figure) => getComputedStyle(figure).opacity);
+    expect(Number(await dimmed())).toBeLessThan(0.5);
     await width.fill("1,234");
     await page.getByText(/thousands separator or a decimal comma/).waitFor();
     await width.blur();
@@ -78,6 +87,8 @@ describe("a quantity's field", () => {
     await width.fill("40 mm");
     await page.getByText("No answer to this input", { exact: true }).waitFor({ state: "detached" });
     expect(await settled(page)).toBe(before);
+    expect(Number(await dimmed())).toBe(1);
+    expect(await page.getByText("To the input before").count()).toBe(0);
     await close();
   });
 

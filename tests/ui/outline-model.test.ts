@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { sketchFromHash, sketchToHash } from "@/app/(site)/outline/_model/address";
-import { placeOf } from "@/app/(site)/outline/_model/complaints";
+import { complaintsAt, placed, placeId, placeOf, placeTitle } from "@/app/(site)/outline/_model/complaints";
 import { bowOf, bowThrough, centreOfRadius, edgeOf, pointAt } from "@/app/(site)/outline/_model/edges";
 import {
   bowEdge,
@@ -20,6 +20,7 @@ import { roomiest } from "@/app/(site)/outline/_model/room";
 import type { Sketch } from "@/app/(site)/outline/_model/sketch";
 import { EMPTY_SKETCH, START_OUTLINES, startSketch } from "@/app/(site)/outline/_model/start-outlines";
 import { partOfSegment, toggleEdge } from "@/app/(site)/outline/_model/terminals";
+import { whatIsMissing } from "@/app/(site)/outline/_model/unready";
 import { fitView, shownStep, snapTo, toPlane, toScreen, zoomAt } from "@/app/(site)/outline/_model/view";
 import { libraryMaterial, prepareField } from "@/lib/engine";
 
@@ -254,6 +255,55 @@ describe("complaints", () => {
     ["#/requirement/min", { kind: "setting", name: "min" }],
     ["#/elsewhere", null],
   ])("%s", (pointer, place) => expect(placeOf(pointer)).toEqual(place));
+
+  it.each([
+    ["#/outline/outer/3", [1, 2] as const, "Outer ring, edge 3", null],
+    ["#/outline/holes/0/1", undefined, "Hole 0, vertex 1", null],
+    ["#/outline/outer", undefined, "Outer ring", null],
+    ["#/terminals/0", undefined, "Terminal in", "terminal-0"],
+    ["#/terminals/1/parts/0/edge", undefined, "Terminal out, part 1", "terminal-1"],
+    ["#/terminals", undefined, "Terminals", "terminals"],
+    ["#/medium/sheetResistance", undefined, "Medium, sheet resistance", "medium"],
+    ["#/medium/regions/2/medium/thickness", undefined, "Region 2, thickness", "region-2"],
+    ["#/requirement/min", undefined, "Requirement, at least", "goal"],
+    ["#", undefined, "This outline", null],
+  ])("%s has words and a place on the page", (pointer, at, title, id) => {
+    const [complaint] = placed([{ pointer, detail: "is wrong.", at }]);
+    expect(placeTitle(complaint, bend)).toBe(title);
+    expect(complaint.place && placeId(complaint.place)).toBe(id);
+  });
+
+  it("are all told at one place, each once", () => {
+    const found = placed(
+      ["cross at (1, 0).", "cross at (2, 0).", "cross at (2, 0)."].map((detail) => ({
+        pointer: "#/outline/outer/3",
+        detail,
+      })),
+    );
+    expect(complaintsAt(found, ({ kind }) => kind === "vertex")).toEqual([
+      "Cross at (1, 0).",
+      "Cross at (2, 0).",
+    ]);
+    expect(complaintsAt(found, ({ kind }) => kind === "ring")).toEqual([]);
+  });
+});
+
+describe("what is missing", () => {
+  const bare = (terminal: Sketch["terminals"][number]) => ({ ...terminal, parts: [] });
+  it.each([
+    ["an outer ring", EMPTY_SKETCH, /^Draw the outer ring first/],
+    ["terminals", { ...bend, terminals: [] }, /^Add two terminals/],
+    ["one more terminal", { ...bend, terminals: bend.terminals.slice(1) }, /^Add a second terminal/],
+    [
+      "an edge",
+      { ...bend, terminals: [bend.terminals[0], bare(bend.terminals[1])] },
+      /^Give terminal out an edge/,
+    ],
+  ])("%s", (_, sketch, words) => expect(whatIsMissing(sketch)).toMatch(words));
+
+  it("is nothing once the API can be asked", () => {
+    for (const { id } of START_OUTLINES) expect(whatIsMissing(startSketch(id))).toBeNull();
+  });
 });
 
 describe("the view", () => {

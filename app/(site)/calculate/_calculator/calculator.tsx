@@ -123,7 +123,7 @@ function LiveCalculator(props: CalculatorProps) {
         </div>
       </div>
       {variants.length > 1 ? <VariantBar state={state} actions={actions} /> : null}
-      <AnswerStrip result={answer.result} stale={answer.stale} />
+      <AnswerStrip result={answer.result} stale={answer.stale} outdated={trouble !== undefined} />
       <div className="mt-2 grid items-start gap-x-5 gap-y-3 wide:grid-cols-[24rem_minmax(0,1fr)]">
         <form
           key={active}
@@ -143,6 +143,7 @@ function LiveCalculator(props: CalculatorProps) {
             entry={entry}
             geometry={geometry}
             focused={focused}
+            outdated={refusedBecause(trouble)}
             className="order-1 wide:order-none"
           />
           <Particulars answer={answer} className="order-4 wide:order-none" />
@@ -179,6 +180,14 @@ function LiveCalculator(props: CalculatorProps) {
       <LiveRegion text={spoken(answer)} />
     </FormProvider>
   );
+}
+
+/** What the drawing is marked with while the fields are refused. */
+function refusedBecause(trouble: ReturnType<typeof useAnswers>[number]["trouble"]): string | undefined {
+  if (trouble?.kind !== "input") return undefined;
+  return trouble.complaints.some(({ pointer }) => pointer?.startsWith("#/dimensions"))
+    ? "Drawn with other dimensions"
+    : "Input refused";
 }
 
 /** What a reader hears once an answer has settled. */

@@ -5,16 +5,19 @@ import type { ShapeEntry } from "@/lib/engine";
 import { Button } from "../../../_ui/button";
 import { ShapeDrawing } from "../../../_ui/drawing/shape-drawing";
 import type { Geometry } from "../_server/geometry";
+import { OutdatedTag } from "./answer/outdated-tag";
 
 interface DrawingPaneProps {
   readonly entry: ShapeEntry;
   readonly geometry: Geometry | null;
   readonly focused: string | undefined;
+  /** Why what is drawn has no answer, or is not what the fields say; undefined where all is well. */
+  readonly outdated: string | undefined;
   readonly className: string;
 }
 
 /** The drawing, in a place that keeps its height, with its files. */
-export function DrawingPane({ entry, geometry, focused, className }: DrawingPaneProps) {
+export function DrawingPane({ entry, geometry, focused, outdated, className }: DrawingPaneProps) {
   const frame = useRef<HTMLDivElement>(null);
 
   /** The sheet that the container shows: the narrow or the wide one. */
@@ -35,8 +38,11 @@ export function DrawingPane({ entry, geometry, focused, className }: DrawingPane
     <div className={className}>
       <div
         ref={frame}
-        className="grid min-h-[17rem] place-items-center rounded border border-rule bg-sheet px-1 py-1.5 medium:min-h-[23rem] [&>figure]:w-full"
+        className={`relative grid min-h-[17rem] place-items-center rounded border border-rule bg-sheet px-1 py-1.5 medium:min-h-[23rem] [&>figure]:w-full ${outdated ? "[&>figure]:opacity-45" : ""}`}
       >
+        {outdated && geometry ? (
+          <OutdatedTag className="absolute start-1 top-1 z-1">{outdated}</OutdatedTag>
+        ) : null}
         {geometry ? (
           <ShapeDrawing
             drawing={geometry.drawing}

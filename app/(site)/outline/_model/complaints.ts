@@ -1,9 +1,12 @@
-/** Where the page shows a complaint of the API. */
-import type { RingKey } from "./sketch";
+/** Where the page shows a complaint of the API, and how it names the place. */
+import { sentence } from "../../calculate/_model/complaints";
+import { type Point, type RingKey, ringTitle, type Sketch } from "./sketch";
 
 export interface Complaint {
   readonly pointer?: string;
   readonly detail: string;
+  /** On the outline, in its unit, where the place is no vertex. */
+  readonly at?: Point;
 }
 
 export type Place =
@@ -72,11 +75,69 @@ export function placed(complaints: readonly Complaint[]): readonly PlacedComplai
   }));
 }
 
-/** The first complaint for which `test` holds, as a sentence. */
+/** The complaints for which `test` holds, as sentences, each once. */
+export function complaintsAt(
+  complaints: readonly PlacedComplaint[],
+  test: (place: Place) => boolean,
+): readonly string[] {
+  const found = complaints.filter(({ place }) => place !== null && test(place));
+  return [...new Set(found.map(({ detail }) => sentence(detail)))];
+}
+
+/** The same as one text, for a field; undefined where there is nothing to say. */
 export function complaintAt(
   complaints: readonly PlacedComplaint[],
   test: (place: Place) => boolean,
 ): string | undefined {
-  const found = complaints.find(({ place }) => place !== null && test(place));
-  return found && found.detail.charAt(0).toUpperCase() + found.detail.slice(1);
+  return complaintsAt(complaints, test).join(" ") || undefined;
+}
+
+const SETTINGS: Readonly<Record<string, string>> = {
+  accuracy: "Width of the bracket",
+  min: "Requirement, at least",
+  max: "Requirement, at most",
+};
+
+/** A complaint's place in the words of the page: "Outer ring, edge 3", "Terminal in, part 1". */
+export function placeTitle({ place, at }: PlacedComplaint, sketch: Sketch): string {
+  switch (place?.kind) {
+    case "vertex":
+      return `${ringTitle(place.ring)}, ${at ? "edge" : "vertex"} ${place.index}`;
+    case "ring":
+      return ringTitle(place.ring);
+    case "terminal": {
+      const name = sketch.terminals[place.terminal]?.name || String(place.terminal + 1);
+      const stretch = place.list === "segments" ? "stretch" : "part";
+      return `Terminal ${name}${place.item === undefined ? "" : `, ${stretch} ${place.item + 1}`}`;
+    }
+    case "medium":
+      return place.name === "medium" ? "Medium" : `Medium, ${spoken(place.name)}`;
+    case "region":
+      return `Region ${place.region}${place.name === "medium" ? "" : `, ${spoken(place.name)}`}`;
+    case "setting":
+      return SETTINGS[place.name] ?? sentence(spoken(place.name));
+    default:
+      return "This outline";
+  }
+}
+
+/** "sheetResistance" as "sheet resistance". */
+function spoken(name: string): string {
+  return name.replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`);
+}
+
+/** Id of the part of the page that has the fields of a place; null for places on the board. */
+export function placeId(place: Place): string | null {
+  switch (place.kind) {
+    case "terminal":
+      return `terminal-${place.terminal}`;
+    case "medium":
+      return "medium";
+    case "region":
+      return `region-${place.region}`;
+    case "setting":
+      return place.name === "terminals" ? "terminals" : "goal";
+    default:
+      return null;
+  }
 }

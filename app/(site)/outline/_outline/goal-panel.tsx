@@ -33,8 +33,9 @@ export function GoalPanel() {
   };
   const options = [...new Set([...ACCURACIES, sketch.accuracy])].sort((a, b) => b - a);
   return (
-    <>
+    <div id="goal" className="grid grid-cols-1 gap-3">
       <Select
+        name="accuracy"
         label="Width of the bracket, relative"
         value={String(sketch.accuracy)}
         error={errorAt("accuracy")}
@@ -46,7 +47,7 @@ export function GoalPanel() {
       />
       <OperatingFields form={form} />
       <RequirementFields form={form} />
-    </>
+    </div>
   );
 }
 

@@ -13,7 +13,7 @@ import { useOutline } from "./outline-context";
 
 const LABELS: Readonly<Record<OutlineMediumKind, string>> = {
   sheetResistance: "A sheet resistance",
-  material: "A material of the library",
+  material: "A material",
   resistivity: "A resistivity",
   conductivity: "A conductivity",
   expression: "An expression in x and y",
@@ -25,6 +25,7 @@ export function MediumPanel() {
   return (
     <>
       <OneMedium
+        id="medium"
         legend={sketch.regions.length > 0 ? "Medium outside the regions" : "Medium"}
         medium={sketch.medium}
         kinds={MEDIUM_KINDS}
@@ -34,6 +35,7 @@ export function MediumPanel() {
       {sketch.regions.map((region, k) => (
         <OneMedium
           key={k}
+          id={`region-${k}`}
           legend={`Region ${k}`}
           medium={region.medium}
           kinds={MEDIUM_KINDS.filter((kind) => kind !== "expression")}
@@ -55,6 +57,8 @@ function withRegionMedium(sketch: Sketch, index: number, medium: Parameters): Sk
 }
 
 interface OneMediumProps {
+  /** As `placeId` names it. */
+  readonly id: string;
   readonly legend: string;
   readonly medium: Parameters;
   readonly kinds: readonly OutlineMediumKind[];
@@ -63,7 +67,7 @@ interface OneMediumProps {
   readonly isHere: (place: Place, name: string) => boolean;
 }
 
-function OneMedium({ legend, medium, kinds, set, isHere }: OneMediumProps) {
+function OneMedium({ id, legend, medium, kinds, set, isHere }: OneMediumProps) {
   const { sketch, complaints, materials } = useOutline();
   const remembered = useRef(new Map<OutlineMediumKind, Parameters>());
   const axisymmetric = sketch.symmetry === "axisymmetric";
@@ -83,7 +87,7 @@ function OneMedium({ legend, medium, kinds, set, isHere }: OneMediumProps) {
   }
 
   return (
-    <fieldset>
+    <fieldset id={id}>
       <legend className="mb-0.5 font-semibold">{legend}</legend>
       <Select
         label="Given as"
@@ -153,6 +157,7 @@ function Expression({ form }: { readonly form: MediumForm }) {
         {(control) => (
           <input
             {...control}
+            name="expression"
             value={parameters.expression ?? ""}
             maxLength={1000}
             spellCheck={false}

@@ -6,13 +6,14 @@ import { Button } from "../../../_ui/button";
 import { Notice } from "../../../_ui/notice";
 import { ProblemNotice } from "../../../_ui/problem-notice";
 import { Numbers, Verdict } from "../../calculate/_calculator/answer/headline";
+import { OUTDATED } from "../../calculate/_calculator/answer/outdated-tag";
 import { sentence } from "../../calculate/_model/complaints";
-import { type PlacedComplaint, placeOf } from "../_model/complaints";
 import type { FieldView } from "../_model/field-view";
-import { ringOf } from "../_model/sketch";
+import { whatIsMissing } from "../_model/unready";
 import { ClosingBar } from "./closing-bar";
 import { useOutline } from "./outline-context";
 import { PairTable } from "./pair-table";
+import { Refusal } from "./refusal";
 import type { Solution, SolveTrouble } from "./use-solution";
 
 interface SolvePanelProps {
@@ -30,6 +31,7 @@ export function SolvePanel({ solution, body, className }: SolvePanelProps) {
     phase === "starting" || phase === "running" || (trouble?.kind === "wait" && trouble.seconds !== null);
   const current = solution.body === body;
   const { resistance, pairs } = field?.result ?? {};
+  const missing = whatIsMissing(sketch);
   const asked = solution.body === null ? undefined : (JSON.parse(solution.body) as { accuracy: number });
   return (
     <section
@@ -39,7 +41,13 @@ export function SolvePanel({ solution, body, className }: SolvePanelProps) {
       className={`grid min-h-14 scroll-mt-2 grid-cols-1 content-start gap-1 ${className}`}
     >
       <div className="flex flex-wrap items-center gap-1">
-        <Button variant="primary" disabled={busy} onClick={() => solution.solve(body)} className="min-w-12">
+        <Button
+          variant="primary"
+          disabled={busy || missing !== null}
+          aria-describedby={missing === null ? undefined : "solve-missing"}
+          onClick={() => solution.solve(body)}
+          className="min-w-12"
+        >
           {busy ? "Solving …" : "Solve"}
         </Button>
         {busy ? <Button onClick={solution.cancel}>Cancel</Button> : null}
@@ -64,7 +72,7 @@ export function SolvePanel({ solution, body, className }: SolvePanelProps) {
       ) : null}
       {trouble ? <Trouble trouble={trouble} current={current} /> : null}
       {phase === "over" && field ? (
-        <div className={`grid grid-cols-1 gap-1 ${current ? "" : "opacity-60"}`}>
+        <div className={`grid grid-cols-1 gap-1 ${current ? "" : OUTDATED}`}>
           {resistance ? (
             <div>
               <h2 className="text-table font-normal text-ink-soft">Resistance between the terminals</h2>
@@ -77,7 +85,11 @@ export function SolvePanel({ solution, body, className }: SolvePanelProps) {
           <Ending solution={solution} />
         </div>
       ) : null}
-      {phase === "idle" && !trouble ? (
+      {missing !== null && !busy ? (
+        <p id="solve-missing" className="text-table text-ink-soft">
+          {missing}
+        </p>
+      ) : phase === "idle" && !trouble ? (
         <p className="text-table text-ink-soft">
           No answer yet. Solve brackets the resistance between two field solutions.
         </p>
@@ -141,7 +153,7 @@ function Ending({ solution }: { readonly solution: Solution }) {
 function Trouble({ trouble, current }: { readonly trouble: SolveTrouble; readonly current: boolean }) {
   switch (trouble.kind) {
     case "input":
-      return current ? <Refusal complaints={trouble.complaints} /> : null;
+      return current ? <Refusal /> : null;
     case "wait": {
       const busy = trouble.problem.status === 503;
       return (
@@ -164,47 +176,6 @@ function Trouble({ trouble, current }: { readonly trouble: SolveTrouble; readonl
     case "service":
       return <ProblemNotice problem={trouble.problem.problem} />;
   }
-}
-
-/** Complaints with a way to each place; they also stand at their fields. */
-function Refusal({
-  complaints,
-}: {
-  readonly complaints: readonly Pick<PlacedComplaint, "pointer" | "detail">[];
-}) {
-  const { sketch, select } = useOutline();
-  return (
-    <Notice tone="problem" title="This cannot be solved yet">
-      <ul className="grid gap-0.5">
-        {complaints.map(({ pointer, detail }, k) => {
-          const place = pointer === undefined ? null : placeOf(pointer);
-          return (
-            <li key={k}>
-              {sentence(detail)}{" "}
-              {place?.kind === "vertex" ||
-              (place?.kind === "ring" && ringOf(sketch, place.ring).length > 0) ? (
-                <button
-                  type="button"
-                  className="link cursor-pointer rounded"
-                  onClick={() =>
-                    select({
-                      kind: "vertex",
-                      ring: place.ring,
-                      index: place.kind === "vertex" ? place.index : 0,
-                    })
-                  }
-                >
-                  Show it
-                </button>
-              ) : (
-                <code className="text-small text-ink-soft">{pointer}</code>
-              )}
-            </li>
-          );
-        })}
-      </ul>
-    </Notice>
-  );
 }
 
 function Countdown({ seconds }: { readonly seconds: number | null }) {

@@ -2,7 +2,7 @@
 
 import { Plus, Trash2, X } from "lucide-react";
 import { Button } from "../../../_ui/button";
-import { CONTROL } from "../../../_ui/field";
+import { CONTROL, ERROR_LINE } from "../../../_ui/field";
 import { RowButton } from "../../calculate/_calculator/graded/row-button";
 import { complaintAt, type Place } from "../_model/complaints";
 import { coordinateText, type Part, ringTitle, type Terminal } from "../_model/sketch";
@@ -28,7 +28,7 @@ export function TerminalPanel() {
     (place) => place.kind === "setting" && place.name === "terminals",
   );
   return (
-    <fieldset>
+    <fieldset id="terminals">
       <legend className="mb-0.5 font-semibold">Terminals</legend>
       <p className="mb-1 text-small text-ink-soft">
         Choose one, then press edges on the board with the tool Terminals. With three or more the answer is a
@@ -39,7 +39,7 @@ export function TerminalPanel() {
           <TerminalItem key={index} terminal={terminal} index={index} />
         ))}
       </ul>
-      <p className="min-h-2.5 text-small text-oxide">{complaint}</p>
+      <p className={ERROR_LINE}>{complaint}</p>
       <Button
         onClick={() => {
           edit(addTerminal);
@@ -60,7 +60,7 @@ function TerminalItem({ terminal, index }: { readonly terminal: Terminal; readon
   const complaint = at(({ item }) => item === undefined);
   const edge = selection?.ring !== undefined && selection.ring >= 0 ? selection : { ring: 0, index: 0 };
   return (
-    <li className={`border-s-4 ps-1 ${MARKS[Math.min(index, 2)]}`}>
+    <li id={`terminal-${index}`} className={`border-s-4 ps-1 ${MARKS[Math.min(index, 2)]}`}>
       <div className="flex items-center gap-0.5">
         <label className="grid min-h-5.5 min-w-5.5 cursor-pointer place-items-center medium:min-h-4 medium:min-w-3">
           <input

@@ -1,7 +1,7 @@
 "use client";
 
 import { Plus, X } from "lucide-react";
-import { complaintAt } from "../_model/complaints";
+import { complaintsAt } from "../_model/complaints";
 import { centreOfRadius, edgeOf } from "../_model/edges";
 import { bowEdge, insertVertex, moveVertex, QUARTER_BOW, removeVertex, setArc } from "../_model/edit";
 import { type RingKey, ringOf } from "../_model/sketch";
@@ -21,7 +21,7 @@ export function VertexRow({ ring, index }: { readonly ring: RingKey; readonly in
   const edge = edgeOf(vertices, index);
   const { arc } = edge.to;
   const marked = selection?.ring === ring && selection.index === index;
-  const complaint = complaintAt(
+  const here = complaintsAt(
     complaints,
     (place) => place.kind === "vertex" && place.ring === ring && place.index === index,
   );
@@ -51,6 +51,7 @@ export function VertexRow({ ring, index }: { readonly ring: RingKey; readonly in
   return (
     <>
       <tr
+        data-vertex={index}
         className={`border-t border-rule ${marked ? "bg-paper" : ""}`}
         onFocus={() => {
           if (!marked) select({ kind: "vertex", ring, index });
@@ -65,7 +66,7 @@ export function VertexRow({ ring, index }: { readonly ring: RingKey; readonly in
             label={`Vertex ${index}, x`}
             value={vertex.x}
             unit={sketch.unit}
-            invalid={complaint !== undefined}
+            invalid={here.length > 0}
             onCommit={(x) => edit((sketch) => moveVertex(sketch, ring, index, x, vertex.y))}
             className="w-full min-w-8"
           />
@@ -75,7 +76,7 @@ export function VertexRow({ ring, index }: { readonly ring: RingKey; readonly in
             label={`Vertex ${index}, y`}
             value={vertex.y}
             unit={sketch.unit}
-            invalid={complaint !== undefined}
+            invalid={here.length > 0}
             onCommit={(y) => edit((sketch) => moveVertex(sketch, ring, index, vertex.x, y))}
             className="w-full min-w-8"
           />
@@ -176,10 +177,15 @@ export function VertexRow({ ring, index }: { readonly ring: RingKey; readonly in
           </td>
         </tr>
       ) : null}
-      {complaint ? (
-        <tr>
-          <td colSpan={6} className="px-0.5 pb-0.5 text-small text-oxide">
-            {complaint}
+      {here.length > 0 ? (
+        <tr className={marked ? "bg-paper" : ""}>
+          <td />
+          <td colSpan={5} className="px-0.5 pb-0.5 text-small text-oxide">
+            <ul className="grid gap-0.25">
+              {here.map((complaint) => (
+                <li key={complaint}>{complaint}</li>
+              ))}
+            </ul>
           </td>
         </tr>
       ) : null}

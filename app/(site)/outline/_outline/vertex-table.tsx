@@ -1,10 +1,10 @@
 "use client";
 
-import { useState } from "react";
+import { useEffect, useRef, useState } from "react";
 import { Plus, Trash2 } from "lucide-react";
 import { Button } from "../../../_ui/button";
 import { CONTROL } from "../../../_ui/field";
-import { complaintAt } from "../_model/complaints";
+import { complaintsAt, type PlacedComplaint } from "../_model/complaints";
 import { addRegion, addRing, removeRing } from "../_model/edit";
 import { roomiest } from "../_model/room";
 import { type Ring, type RingKey, regionKey, ringOf, ringTitle, type Sketch, tidy } from "../_model/sketch";
@@ -34,7 +34,12 @@ export function VertexTable() {
   const ring = ringOf(sketch, key);
   const pages = Math.max(1, Math.ceil(ring.length / PAGE));
   const first = Math.min(page, pages - 1) * PAGE;
-  const complaint = complaintAt(complaints, (place) => place.kind === "ring" && place.ring === key);
+  const here = complaintsAt(complaints, (place) => place.kind === "ring" && place.ring === key);
+  const frame = useRef<HTMLDivElement>(null);
+  const marked = selection?.ring === key ? selection.index : null;
+  useEffect(() => {
+    if (marked !== null) bringIntoView(frame.current, marked);
+  }, [marked]);
 
   function show(next: RingKey) {
     setChosen(next);
@@ -68,6 +73,7 @@ export function VertexTable() {
           {keys.map((value) => (
             <option key={value} value={value}>
               {ringTitle(value)}
+              {complaintCount(complaints, value)}
             </option>
           ))}
         </select>
@@ -95,13 +101,18 @@ export function VertexTable() {
           </Button>
         ) : null}
       </div>
-      {complaint ? <p className="mb-0.5 text-small text-oxide">{complaint}</p> : null}
+      {here.map((complaint) => (
+        <p key={complaint} className="mb-0.5 text-small text-oxide">
+          {complaint}
+        </p>
+      ))}
       {ring.length === 0 ? (
         <p className="rounded border border-dashed border-edge px-2 py-3 text-table text-ink-soft">
           There is no outer ring yet. Draw one on the board, add a square to start from, or open JSON.
         </p>
       ) : (
         <div
+          ref={frame}
           tabIndex={0}
           role="group"
           aria-label={`${ringTitle(key)}: coordinates`}
@@ -143,6 +154,21 @@ export function VertexTable() {
       ) : null}
     </section>
   );
+}
+
+/** Scrolls the table, and not the page, to a row that is out of sight. */
+function bringIntoView(frame: HTMLElement | null, index: number): void {
+  const row = frame?.querySelector<HTMLElement>(`[data-vertex="${index}"]`);
+  if (!frame || !row) return;
+  const head = frame.querySelector("thead")?.offsetHeight ?? 0;
+  const [top, bottom] = [row.offsetTop - head, row.offsetTop + row.offsetHeight];
+  if (top < frame.scrollTop || bottom > frame.scrollTop + frame.clientHeight) frame.scrollTop = top;
+}
+
+/** How many complaints a ring has, for its name in the menu. */
+function complaintCount(complaints: readonly PlacedComplaint[], ring: RingKey): string {
+  const count = complaints.filter(({ place }) => place && "ring" in place && place.ring === ring).length;
+  return count === 0 ? "" : ` (${count} ${count === 1 ? "complaint" : "complaints"})`;
 }
 
 /** Middle and half width of a ring to start from: where the conductor has most room, or one of its own. */

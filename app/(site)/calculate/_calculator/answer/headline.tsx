@@ -3,24 +3,29 @@
 import { bracketText } from "../../../../_ui/bracket";
 import { CopyButton } from "../../../../_ui/copy-button";
 import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
+import { OUTDATED, OutdatedTag } from "./outdated-tag";
 import { BOUNDS_MEANING, METHODS, VERDICTS } from "./words";
 
 interface HeadlineProps {
   readonly result: ResistanceResult | undefined;
   /** Whether it belongs to an earlier input. */
   readonly stale: boolean;
+  /** Whether no newer one will come: the fields are refused, or the service gives no answer. */
+  readonly outdated: boolean;
 }
 
 /** The number, its bracket, and in one sentence what the bracket means. Keeps its height in every state. */
-export function Headline({ result, stale }: HeadlineProps) {
+export function Headline({ result, stale, outdated }: HeadlineProps) {
+  const dimmed = !result ? "" : outdated ? OUTDATED : stale ? "opacity-60" : "";
   return (
-    <div
-      id="answer"
-      aria-busy={stale}
-      className={`scroll-mt-8 transition-opacity delay-300 duration-100 ${stale && result ? "opacity-60" : ""}`}
-    >
-      <h2 className="text-table font-normal text-ink-soft">Resistance between the terminals</h2>
-      {result ? <Numbers resistance={result.resistance} method={result.method} /> : <NoNumbers />}
+    <div id="answer" aria-busy={stale && !outdated} className="scroll-mt-8">
+      <h2 className="flex min-h-3 flex-wrap items-center gap-x-1 text-table font-normal text-ink-soft">
+        Resistance between the terminals
+        {outdated && result ? <OutdatedTag>To the input before</OutdatedTag> : null}
+      </h2>
+      <div className={`transition-opacity duration-100 ${outdated ? "" : "delay-300"} ${dimmed}`}>
+        {result ? <Numbers resistance={result.resistance} method={result.method} /> : <NoNumbers />}
+      </div>
     </div>
   );
 }
@@ -57,14 +62,14 @@ export function Numbers({ resistance, method }: NumbersProps) {
 }
 
 /** The number alone, at the upper edge of narrow windows, where the answer itself is below the fields. */
-export function AnswerStrip({ result, stale }: HeadlineProps) {
+export function AnswerStrip({ result, stale, outdated }: HeadlineProps) {
   return (
     <a
       href="#answer"
       className="sticky top-0 z-10 -mx-2 mt-1 flex min-h-5.5 items-center gap-1.5 border-y border-rule bg-paper px-2 wide:hidden print:hidden"
     >
-      <span className="text-small text-ink-soft">Resistance</span>
-      <span className={`font-mono font-medium ${stale ? "opacity-60" : ""}`}>
+      <span className="text-small text-ink-soft">{outdated && result ? "Before" : "Resistance"}</span>
+      <span className={`font-mono font-medium ${outdated ? "text-ink-soft" : stale ? "opacity-60" : ""}`}>
         {result?.resistance.text ?? "–"}
       </span>
       <span className="link ms-auto text-small">bounds</span>

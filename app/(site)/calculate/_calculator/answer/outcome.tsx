@@ -5,6 +5,7 @@ import type { Answer } from "../use-answer";
 import { Facts } from "./facts";
 import { StrayRange } from "./budget";
 import { Headline, Verdict } from "./headline";
+import { OUTDATED } from "./outdated-tag";
 import { Cautions } from "./statements";
 import { TroubleNotice } from "./trouble-notice";
 
@@ -17,11 +18,14 @@ interface OutcomeProps {
 /** The answer with what must stand at the number: its verdict, or why there is none. */
 export function Outcome({ answer, elsewhere, className }: OutcomeProps) {
   const { result, stale, trouble, retry } = answer;
+  const outdated = trouble !== undefined;
   return (
     <section aria-label="Answer" className={`grid gap-1.5 ${className}`}>
-      <Headline result={result} stale={stale} />
-      {result?.uncertainty ? <StrayRange uncertainty={result.uncertainty} /> : null}
-      {result ? <Verdict result={result} /> : null}
+      <Headline result={result} stale={stale} outdated={outdated} />
+      <div className={`grid gap-1.5 empty:hidden ${outdated ? OUTDATED : ""}`}>
+        {result?.uncertainty ? <StrayRange uncertainty={result.uncertainty} /> : null}
+        {result ? <Verdict result={result} /> : null}
+      </div>
       {trouble ? (
         <TroubleNotice
           trouble={trouble}
@@ -39,7 +43,10 @@ export function Particulars({ answer, className }: Pick<OutcomeProps, "answer" |
   const { result } = answer;
   if (!result) return null;
   return (
-    <section aria-label="Particulars of the answer" className={`grid gap-1.5 ${className}`}>
+    <section
+      aria-label="Particulars of the answer"
+      className={`grid gap-1.5 ${answer.trouble ? OUTDATED : ""} ${className}`}
+    >
       <Facts result={result} />
       <Cautions cautions={result.cautions} />
     </section>

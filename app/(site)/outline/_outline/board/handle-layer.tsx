@@ -5,7 +5,7 @@ import { ringKeys, ringOf, type Sketch } from "../../_model/sketch";
 import { toScreen } from "../../_model/view";
 import type { Selection } from "../outline-context";
 import { handlesShown } from "./conductor-layer";
-import { type Lens, pathOf } from "./paths";
+import { type Lens, pathOf, ringPath } from "./paths";
 import { stretch } from "../../_model/edges";
 
 interface HandleLayerProps {
@@ -29,19 +29,9 @@ export function HandleLayer(props: HandleLayerProps) {
       {selection?.kind === "edge" ? (
         <EdgeMark {...props} ring={selection.ring} index={selection.index} />
       ) : null}
-      {complaints.map((complaint, k) => {
-        if (complaint.place?.kind !== "vertex") return null;
-        const { ring, index } = complaint.place;
-        const vertex = ringOf(sketch, ring)[index];
-        if (!vertex) return null;
-        const [x, y] = place(vertex.x, vertex.y);
-        return (
-          <g key={k}>
-            <EdgeMark {...props} ring={ring} index={index} wrong />
-            <circle cx={x} cy={y} r="10" fill="none" className="stroke-oxide" strokeWidth="2.5" />
-          </g>
-        );
-      })}
+      {complaints.map((complaint, k) => (
+        <ComplaintMark key={k} {...props} complaint={complaint} />
+      ))}
       {shown
         ? ringKeys(sketch).flatMap((ring) =>
             ringOf(sketch, ring).map(({ x, y }, index) => {
@@ -69,6 +59,42 @@ export function HandleLayer(props: HandleLayerProps) {
   );
 }
 
+interface ComplaintMarkProps extends Pick<HandleLayerProps, "sketch" | "lens"> {
+  readonly complaint: PlacedComplaint;
+}
+
+/** Where a complaint is: the edge with the place on it, the vertex, the whole ring, or a terminal's stretch. */
+function ComplaintMark({ sketch, lens, complaint: { place, at } }: ComplaintMarkProps) {
+  const shared = { sketch, lens, wrong: true };
+  if (place?.kind === "ring") {
+    return (
+      <path
+        d={ringPath(lens, ringOf(sketch, place.ring))}
+        fill="none"
+        className="stroke-oxide"
+        strokeWidth="3"
+      />
+    );
+  }
+  if (place?.kind === "terminal") {
+    const parts = sketch.terminals[place.terminal]?.parts ?? [];
+    const marked = place.list === "parts" && place.item !== undefined ? [parts[place.item]] : [];
+    return marked.map((part) =>
+      part ? <EdgeMark key={part.edge} {...shared} ring={part.ring} index={part.edge} /> : null,
+    );
+  }
+  if (place?.kind !== "vertex") return null;
+  const vertex = ringOf(sketch, place.ring)[place.index];
+  if (!vertex) return null;
+  const [x, y] = toScreen(lens.view, lens.size, at ?? [vertex.x, vertex.y]);
+  return (
+    <g data-complaint={`${place.ring}/${place.index}`}>
+      {at ? <EdgeMark {...shared} ring={place.ring} index={place.index} /> : null}
+      <circle cx={x} cy={y} r="10" fill="none" className="stroke-oxide" strokeWidth="2.5" />
+    </g>
+  );
+}
+
 interface MarkProps extends Pick<HandleLayerProps, "sketch" | "lens"> {
   readonly ring: number;
   readonly index: number;
@@ -78,7 +104,7 @@ interface MarkProps extends Pick<HandleLayerProps, "sketch" | "lens"> {
 
 function EdgeMark({ sketch, lens, ring, index, soft = false, wrong = false }: MarkProps) {
   const vertices = ringOf(sketch, ring);
-  if (index >= vertices.length) return null;
+  if (index < 0 || index >= vertices.length) return null;
   return (
     <path
       d={pathOf(lens, stretch(edgeOf(vertices, index), 0, 1))}
