@@ -66,12 +66,10 @@ describe("the profile editor", () => {
       expect(level).toBe("145.83\u2009GΩ");
       await page.getByLabel("Law", { exact: true }).selectOption(kind === "linear" ? "constant" : kind);
       if (kind === "linear") await page.getByLabel("Law", { exact: true }).selectOption("linear");
-      if (kind === "dopant") await field(page, "profile.value").fill("1e17");
       const shown = await agrees(page);
       // A temperature and a dopant bring a resistivity of their own.
       if (kind !== "temperature" && kind !== "dopant") expect(shown).toBe(level);
-      // The browser notes the refusal of a field that is still empty.
-      expect(complaints.filter((text) => !text.includes("422"))).toEqual([]);
+      expect(complaints).toEqual([]);
       await close();
     },
   );

@@ -1,11 +1,9 @@
 "use client";
 
 import { useRef } from "react";
-import { convertUnit, textInUnit } from "../../../_ui/quantity/convert";
-import { splitQuantity } from "../../../_ui/quantity/quantity-text";
-import { toNumber } from "../../../_ui/quantity/rational";
-import { findUnit, type Unit, UNITS } from "../../../_ui/quantity/units";
 import { mediumKind, type MediumKind, ofMedium, type Parameters } from "../_model/parameters";
+import { START_VALUES } from "../_model/profile-starts";
+import { baseValue, neatText } from "../_model/value-texts";
 import { useForm } from "./form-context";
 import type { Patch } from "./use-page-state";
 
@@ -48,7 +46,7 @@ export function useMediumSwitch(prefix: string): (kind: MediumKind) => void {
       case "sheetResistance":
         return { [`${prefix}sheetResistance`]: neatText(sheetNow(resistivity), "sheetResistance", "ohm/sq") };
       case "graded": {
-        const value = neatText(inverse, "conductivity", "S/m");
+        const value = neatText(inverse, "conductivity", "S/m") || START_VALUES.conductivity;
         const coordinate = entry.media.gradable.find((name) => name in ranges) ?? entry.media.gradable[0];
         return {
           [`${prefix}graded`]: coordinate,
@@ -75,36 +73,4 @@ export function useMediumSwitch(prefix: string): (kind: MediumKind) => void {
     const thickness = baseValue(parameters[`${prefix}thickness`], "length", "m");
     return resistivity === null || thickness === null ? null : resistivity / thickness;
   }
-}
-
-/** A value in the prefix that reads best, with the digits that it has. */
-function neatText(
-  value: number | null,
-  kind: "resistivity" | "conductivity" | "sheetResistance",
-  base: string,
-): string {
-  if (value === null) return "";
-  const prefixed = UNITS[kind].filter((unit) => !unit.hidden && unit.id.endsWith(base));
-  const size = (unit: Unit) => (typeof unit.scale === "number" ? unit.scale : toNumber(unit.scale));
-  const sorted = [...prefixed].sort((a, b) => size(b) - size(a));
-  const unit = sorted.find((own) => value / size(own) >= 1) ?? sorted.at(-1);
-  if (!unit) return "";
-  const short = textInUnit(value, unit, 12);
-  const exact = Math.abs((Number(short) * size(unit)) / value - 1) < 1e-14;
-  return `${exact ? short : textInUnit(value, unit, 15)} ${unit.id}`;
-}
-
-/** The number that a field's text stands for in the unit of bare numbers; null where it is none greater than 0. */
-export function baseValue(
-  text: string | undefined,
-  kind: "resistivity" | "conductivity" | "length" | "angle",
-  base: string,
-): number | null {
-  if (!text) return null;
-  const units = UNITS[kind];
-  const unit = findUnit(base, units);
-  const parts = splitQuantity(text, units);
-  if (!unit || parts.foreign !== undefined) return null;
-  const number = Number(convertUnit(parts.number, parts.unit ?? unit, unit));
-  return Number.isFinite(number) && number > 0 ? number : null;
 }

@@ -1,8 +1,9 @@
+import type { ProfileValues } from "../../_model/profile-starts";
 import type { CoordinateSpan } from "../../_server/geometry";
 
 /** Where a profile's fields stand: what its values measure, and the range of its coordinate once it is known. */
 export interface FieldSite {
-  readonly values: "conductivity" | "resistivity" | "density";
+  readonly values: ProfileValues;
   readonly span: CoordinateSpan | undefined;
   /** Prefix of the medium's parameters. */
   readonly prefix: string;

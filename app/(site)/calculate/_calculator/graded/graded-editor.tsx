@@ -3,10 +3,11 @@
 import { Segmented } from "../../../../_ui/segmented";
 import { Select } from "../../../../_ui/select";
 import { SELF_DESCRIBING } from "../../_model/profile-forms";
+import { reciprocalProfile } from "../../_model/profile-starts";
 import { useForm } from "../form-context";
 import { ProfileFields } from "./profile-fields";
 import { ProfilePlot } from "./profile-plot";
-import { useProfileSwitch } from "./use-profile-switch";
+import { ownParameters, useProfileSwitch } from "./use-profile-switch";
 
 /** A medium that varies along one coordinate: which one, what varies, by which law; the law is plotted as it stands. */
 export function GradedEditor({ prefix }: { readonly prefix: string }) {
@@ -16,7 +17,7 @@ export function GradedEditor({ prefix }: { readonly prefix: string }) {
   const coordinate = parameters[`${prefix}graded`];
   const quantity = parameters[`${prefix}quantity`] === "resistivity" ? "resistivity" : "conductivity";
   const facts = profiles.find((profile) => profile.kind === kind);
-  const switchKind = useProfileSwitch(name, prefix);
+  const { switchKind, forget } = useProfileSwitch(name, prefix, quantity);
   const coordinates = entry.coordinates.filter(({ name: own }) => entry.media.gradable.includes(own));
   const chosen = coordinates.find((own) => own.name === coordinate);
   return (
@@ -39,10 +40,14 @@ export function GradedEditor({ prefix }: { readonly prefix: string }) {
           label="What varies"
           value={quantity}
           options={[
-            { value: "conductivity", label: "Conductivity σ" },
-            { value: "resistivity", label: "Resistivity ρ" },
+            { value: "conductivity" as const, label: "Conductivity σ" },
+            { value: "resistivity" as const, label: "Resistivity ρ" },
           ]}
-          onChange={(next) => change({ [`${prefix}quantity`]: next })}
+          onChange={(next) => {
+            forget();
+            const turned = reciprocalProfile(name, ownParameters(name, parameters), next);
+            change({ [`${prefix}quantity`]: next, ...turned });
+          }}
           className="mb-2"
         />
       )}

@@ -3,16 +3,17 @@
 import { type ReactNode, useState } from "react";
 import { ArrowUp, Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
+import { ERROR_LINE } from "../../../../_ui/field";
 import { FileButton } from "../../../../_ui/file-button";
 import { readRows, writeRows } from "../../_model/profile-forms";
 import { useForm } from "../form-context";
-import { baseValue } from "../use-medium-switch";
+import { spanText } from "../../_model/profile-starts";
+import { baseValue } from "../../_model/value-texts";
 import { CellInput } from "./cell-input";
 import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
 import { type PointsReading, readPoints } from "./read-points";
 import { RowButton } from "./row-button";
 import { MOST_ROWS_SHOWN, ReadingNotes, RowsText } from "./rows-text";
-import { spanText } from "./use-profile-switch";
 
 type Rows = readonly (readonly [string, string])[];
 
@@ -178,7 +179,7 @@ function LayersSum({ sum, fits, site, complaint, onFit, children }: LayersSumPro
   const known = span !== undefined && sum !== null;
   return (
     <>
-      <p className="min-h-2.5 text-small text-oxide">{complaint}</p>
+      <p className={ERROR_LINE}>{complaint}</p>
       <div className="flex flex-wrap items-center gap-1">
         {children}
         <Button onClick={onFit} disabled={!known || fits}>

@@ -3,6 +3,7 @@
 import { useState } from "react";
 import { Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
+import { ERROR_LINE } from "../../../../_ui/field";
 import { FileButton } from "../../../../_ui/file-button";
 import { readRows, writeRows } from "../../_model/profile-forms";
 import { useForm } from "../form-context";
@@ -100,9 +101,7 @@ export function PointsTable({ name, site }: { readonly name: string; readonly si
           </tbody>
         </table>
       )}
-      <p className="min-h-2.5 text-small text-oxide">
-        {errorAt(name) ?? firstInside(name, errorAt, rows.length, long)}
-      </p>
+      <p className={ERROR_LINE}>{errorAt(name) ?? firstInside(name, errorAt, rows.length, long)}</p>
       <div className="flex flex-wrap items-center gap-1">
         {long ? null : (
           <>

@@ -132,7 +132,7 @@ function OneField({ field, name, site }: OneFieldProps) {
 /** A profile inside a profile: the dopant density. */
 function InnerProfile({ name, site }: { readonly name: string; readonly site: FieldSite }) {
   const { parameters, errorAt, profiles } = useForm();
-  const switchKind = useProfileSwitch(name, site.prefix);
+  const { switchKind } = useProfileSwitch(name, site.prefix, "density");
   const kind = parameters[name] ?? "constant";
   const inner = profiles.filter((profile) => !["temperature", "dopant"].includes(profile.kind));
   return (
