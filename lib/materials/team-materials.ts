@@ -3,6 +3,7 @@ import {
   currentMaterial,
   insertMaterial,
   insertNextVersion,
+  listMaterials,
   markRetired,
   type MaterialRow,
   materialVersion,
@@ -13,6 +14,8 @@ import { randomText } from "../service/identifier";
 import { Refusal } from "../service/refusal";
 import { type MaterialChange, type MaterialView, type NewMaterial, newMaterialSchema } from "./input";
 import { requireSoundLaw } from "./sound-law";
+
+const MOST_LISTED = 1000;
 
 /** A row with what was checked when it was written. */
 export function materialOf(row: MaterialRow): Material {
@@ -51,6 +54,13 @@ export function usableMaterial(db: Database, teamId: string | undefined, id: str
   if (fromLibrary || teamId === undefined) return fromLibrary;
   const row = currentMaterial(db, teamId, id);
   return row && row.retiredAt === null ? materialOf(row) : undefined;
+}
+
+/** The newest versions of what the team has in use; a team has dozens. */
+export function teamMaterialsInUse(db: Database, teamId: string): readonly Material[] {
+  return listMaterials(db, teamId, MOST_LISTED)
+    .filter(({ retiredAt }) => retiredAt === null)
+    .map(materialOf);
 }
 
 /** What a replay uses: the version that the record pinned. The library has one version of each, its current one. */

@@ -1,7 +1,7 @@
 import type { Metadata } from "next";
-import { libraryMaterials } from "@/lib/engine";
 import { sharedService } from "@/lib/service/service";
 import { materialChoices } from "../calculate/_server/material-choices";
+import { readerMaterials } from "../calculate/_server/reader-materials";
 import { savingFor } from "../calculate/_server/saving";
 import { startSketch } from "./_model/start-outlines";
 import { KEPT_QUERY } from "./_model/address";
@@ -28,7 +28,7 @@ export default async function Outline() {
         </>
       }
       start={START}
-      materials={materialChoices(libraryMaterials, START_C)}
+      materials={materialChoices((await readerMaterials()).all, START_C)}
       origin={sharedService().config.origin}
       saving={await savingFor(`/outline?${KEPT_QUERY}`)}
     />

@@ -1,6 +1,6 @@
 import type { Metadata } from "next";
 import { notFound } from "next/navigation";
-import { findShape, libraryMaterials, readQuantity, shapeEntry } from "@/lib/engine";
+import { findShape, readQuantity, shapeEntry } from "@/lib/engine";
 import { sharedService } from "@/lib/service/service";
 import { Breadcrumb } from "../../../_ui/breadcrumb";
 import { Tex } from "../../../_ui/tex";
@@ -13,6 +13,7 @@ import { firstAnswer } from "../_server/first-answer";
 import { formDimensions, profileFacts } from "../_server/form-facts";
 import { readGeometry } from "../_server/geometry";
 import { materialChoices } from "../_server/material-choices";
+import { readerMaterials } from "../_server/reader-materials";
 import { savingFor } from "../_server/saving";
 
 interface PageProps {
@@ -36,6 +37,7 @@ export default async function ShapePage({ params, searchParams }: PageProps) {
   const geometry = readGeometry(shape, plainDimensions(entry, active));
   const exampleGeometry = readGeometry(shape, plainDimensions(entry, example));
   const drawn = geometry.ok ? geometry.geometry : exampleGeometry.ok ? exampleGeometry.geometry : null;
+  const materials = await readerMaterials();
   const temperature = readQuantity(active.temperature?.trim() || 20, "temperature");
   return (
     <Calculator
@@ -53,9 +55,9 @@ export default async function ShapePage({ params, searchParams }: PageProps) {
       dimensions={formDimensions(shape, entry)}
       example={example}
       start={state}
-      answers={bodies.map(firstAnswer)}
+      answers={bodies.map((body) => firstAnswer(body, materials.find))}
       geometry={drawn}
-      materials={materialChoices(libraryMaterials, temperature.ok ? temperature.value : 20)}
+      materials={materialChoices(materials.all, temperature.ok ? temperature.value : 20)}
       profiles={entry.media.gradable.length > 0 ? profileFacts() : []}
       origin={sharedService().config.origin}
       saving={await savingFor(`/calculate/${entry.id}`)}

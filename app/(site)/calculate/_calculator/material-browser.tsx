@@ -19,8 +19,8 @@ interface MaterialBrowserProps {
 export function MaterialBrowser({ materials, chosen, onChoose, onClose }: MaterialBrowserProps) {
   const [search, setSearch] = useState("");
   const words = search.toLowerCase().split(/\s+/).filter(Boolean);
-  const shown = materials.filter(({ id, name, kind, source }) => {
-    const text = `${id} ${name} ${kind} ${source}`.toLowerCase();
+  const shown = materials.filter(({ id, name, kind, source, owner }) => {
+    const text = `${id} ${name} ${kind} ${source} ${owner}`.toLowerCase();
     return words.every((word) => text.includes(word));
   });
   return (
@@ -83,6 +83,7 @@ export function MaterialBrowser({ materials, chosen, onChoose, onClose }: Materi
             align: "end",
             cell: ({ range }) => `${range.from} … ${range.to} °C`,
           },
+          { key: "owner", title: "Of", sortBy: ({ owner }) => owner, cell: ({ owner }) => owner },
           { key: "kind", title: "Kind", sortBy: ({ kind }) => kind, cell: ({ kind }) => kind },
           {
             key: "source",

@@ -16,7 +16,7 @@ interface MaterialPickerProps {
   readonly form: MediumForm;
 }
 
-/** A material of the library, with what it stands for at the operating temperature. */
+/** A material of the library or the team, with what it stands for at the operating temperature. */
 export function MaterialPicker({ name, form }: MaterialPickerProps) {
   const { parameters, change, errorAt, materials } = form;
   const [browsing, setBrowsing] = useState(false);
@@ -25,7 +25,8 @@ export function MaterialPicker({ name, form }: MaterialPickerProps) {
   const id = parameters[name] ?? "";
   const chosen = materials.find((material) => material.id === id);
   const allowed = parameters[extrapolate] === "true";
-  const kinds = [...new Set(materials.map(({ kind }) => kind))];
+  const own = materials.filter(({ owner }) => owner !== LIBRARY);
+  const groups = [...new Set([...own, ...materials].map(groupOf))];
   return (
     <>
       <Field
@@ -50,10 +51,10 @@ export function MaterialPicker({ name, form }: MaterialPickerProps) {
             className={`${CONTROL} pe-3 font-sans!`}
           >
             {chosen ? null : <option value={id}>{id === "" ? "Choose …" : id}</option>}
-            {kinds.map((kind) => (
-              <optgroup key={kind} label={kind}>
+            {groups.map((group) => (
+              <optgroup key={group} label={group}>
                 {materials
-                  .filter((material) => material.kind === kind)
+                  .filter((material) => groupOf(material) === group)
                   .map((material) => (
                     <option key={material.id} value={material.id}>
                       {material.name}
@@ -85,6 +86,13 @@ export function MaterialPicker({ name, form }: MaterialPickerProps) {
       ) : null}
     </>
   );
+}
+
+const LIBRARY = "library";
+
+/** A team's own stand together, those of the library by kind. */
+function groupOf({ owner, kind }: MaterialChoice): string {
+  return owner === LIBRARY ? kind : `Of the team ${owner}`;
 }
 
 function MaterialCard({ material }: { readonly material: MaterialChoice }) {

@@ -14,7 +14,7 @@ const GradedEditor = dynamic(() => import("./graded/graded-editor").then((module
 });
 
 const KIND_LABELS: Readonly<Record<MediumKind, string>> = {
-  material: "A material of the library",
+  material: "A material",
   resistivity: "A resistivity",
   conductivity: "A conductivity",
   sheetResistance: "A sheet resistance",

@@ -3,7 +3,7 @@ import {
   CheckFailure,
   computeResistance,
   InputError,
-  libraryMaterial,
+  type Material,
   type ResistanceResult,
 } from "@/lib/engine";
 import { INCLUDE, type RequestBody } from "../_model/request";
@@ -13,12 +13,15 @@ import type { Complaint } from "../_model/complaints";
 export type FirstAnswer =
   { readonly result: ResistanceResult } | { readonly complaints: readonly Complaint[] };
 
-/** Computes with the library's materials; a team's own are the API's, which the page then asks. */
-export function firstAnswer(body: RequestBody): FirstAnswer | null {
+/** Computes with the materials that the reader of the page may use. */
+export function firstAnswer(
+  body: RequestBody,
+  material: (id: string) => Material | undefined,
+): FirstAnswer | null {
   // A page does not wait for a hundred thousand trials; it asks the API for them.
   if (body.uncertainty?.method === "monte-carlo") return null;
   try {
-    return { result: computeResistance({ ...body, include: INCLUDE }, { material: libraryMaterial }) };
+    return { result: computeResistance({ ...body, include: INCLUDE }, { material }) };
   } catch (error) {
     if (error instanceof InputError) {
       const unknownMaterial = error.errors.some(({ pointer }) => pointer.endsWith("/material"));

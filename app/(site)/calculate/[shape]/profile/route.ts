@@ -1,6 +1,7 @@
 import { z } from "zod";
-import { findShape, libraryMaterial } from "@/lib/engine";
+import { findShape } from "@/lib/engine";
 import { previewProfile } from "../../_server/profile-preview";
+import { readerMaterials } from "../../_server/reader-materials";
 
 /** As large as a body of the API may be. */
 const LARGEST = 1_000_000;
@@ -22,7 +23,7 @@ export async function POST(
   if (text.length > LARGEST) return tooLarge();
   const parsed = bodySchema.safeParse(readJson(text));
   if (!parsed.success) return Response.json({ errors: [] }, { status: 422 });
-  const reading = previewProfile(shape, parsed.data, libraryMaterial);
+  const reading = previewProfile(shape, parsed.data, (await readerMaterials()).find);
   return reading.ok
     ? Response.json(reading.preview)
     : Response.json({ errors: reading.errors }, { status: 422 });

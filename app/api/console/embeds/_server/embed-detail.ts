@@ -6,11 +6,10 @@ import { teamProblems } from "@/lib/embeds/manage-embeds";
 import { embedQuota, type EmbedQuota, type HostUsage, usageByHost } from "@/lib/embeds/usage";
 import { findShape, libraryMaterials, type Problem } from "@/lib/engine";
 import { teamOutline } from "@/lib/fields/team-outlines";
-import { materialOf } from "@/lib/materials/team-materials";
+import { teamMaterialsInUse } from "@/lib/materials/team-materials";
 import { Refusal } from "@/lib/service/refusal";
 import type { Service } from "@/lib/service/service";
 import { type OutlineChoice, outlineChoice } from "./outline-choice";
-import { listMaterials } from "@/db/queries/materials";
 
 /** Everything that the page of one widget shows. */
 export interface EmbedDetail {
@@ -56,7 +55,7 @@ export async function embedDetail(
     subject: shape?.title ?? (stored?.name ? `Outline “${stored.name}”` : "Outline"),
     outline: stored && definition.outlineId ? outlineChoice(definition.outlineId, stored) : null,
     inputs: [...inputs.values()],
-    materials: [...ownMaterials(service, row.teamId), ...libraryMaterials].map(({ id, name }) => ({
+    materials: [...teamMaterialsInUse(service.db, row.teamId), ...libraryMaterials].map(({ id, name }) => ({
       id,
       name,
     })),
@@ -67,11 +66,4 @@ export async function embedDetail(
     problems: teamProblems(service.db, row.teamId, definition),
     mayManage,
   };
-}
-
-/** The team's own materials in use; a team has dozens. */
-function ownMaterials({ db }: Service, teamId: string) {
-  return listMaterials(db, teamId, 200)
-    .filter(({ retiredAt }) => retiredAt === null)
-    .map(materialOf);
 }
