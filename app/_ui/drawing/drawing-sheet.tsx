@@ -10,18 +10,24 @@ interface DrawingSheetProps {
   /** Prefix of the ids inside, unique on the page. */
   readonly id: string;
   readonly description: string;
+  /** What is read out beside the description. */
+  readonly words?: { readonly notToScale: string; readonly dimensions: string };
   readonly focused?: string;
   readonly className?: string;
 }
 
+const WORDS = { notToScale: "not to scale", dimensions: "Dimensions" };
+
 /** One laid-out sheet as SVG. Colours come from the tokens, so it follows the theme and prints dark on light. */
-export function DrawingSheet({ sheet, toScale, id, description, focused, className }: DrawingSheetProps) {
+export function DrawingSheet(props: DrawingSheetProps) {
+  const { sheet, toScale, id, description, words = WORDS, focused, className } = props;
   const values = sheet.views
     .flatMap(({ view }) => view.dimensions)
     .filter(({ label }) => label.value)
     .map(({ label }) => `${label.symbol} = ${label.value}`);
-  const note = toScale ? "" : " Not to scale.";
-  const text = `${description}${values.length > 0 ? ` Dimensions: ${[...new Set(values)].join(", ")}.` : ""}${note}`;
+  const dimensions = values.length > 0 ? ` ${words.dimensions}: ${[...new Set(values)].join(", ")}.` : "";
+  const note = words.notToScale[0].toUpperCase() + words.notToScale.slice(1);
+  const text = `${description}${dimensions}${toScale ? "" : ` ${note}.`}`;
   return (
     <svg
       role="img"

@@ -14,11 +14,23 @@ interface ShapeDrawingProps {
   readonly focused?: string;
   /** The terminals in words, as the shape names them. */
   readonly terminals?: { readonly high: string; readonly low: string };
-  /** The legend's words, where the page speaks another language than English. */
-  readonly words?: { readonly high: string; readonly low: string; readonly notToScale: string };
+  /** The legend's words and those that are read out, where the page speaks another language than English. */
+  readonly words?: DrawingWords;
 }
 
-const WORDS = { high: "high terminal", low: "low terminal", notToScale: "not to scale" };
+export interface DrawingWords {
+  readonly high: string;
+  readonly low: string;
+  readonly notToScale: string;
+  readonly dimensions: string;
+}
+
+const WORDS: DrawingWords = {
+  high: "high terminal",
+  low: "low terminal",
+  notToScale: "not to scale",
+  dimensions: "Dimensions",
+};
 
 /** Widths for which the sheet is laid out; in between it scales. */
 const NARROW = 320;
@@ -42,6 +54,7 @@ export function ShapeDrawing(props: ShapeDrawingProps) {
         id={`${id}n`}
         focused={focused}
         description={drawing.description}
+        words={words}
         className="mx-auto block w-full max-w-[420px] @min-[460px]:hidden"
       />
       <DrawingSheet
@@ -50,6 +63,7 @@ export function ShapeDrawing(props: ShapeDrawingProps) {
         id={`${id}w`}
         focused={focused}
         description={drawing.description}
+        words={words}
         className="mx-auto hidden w-full max-w-[720px] @min-[460px]:block"
       />
       <figcaption className="mt-1 flex flex-wrap gap-x-2 gap-y-0.5 text-small text-ink-soft">

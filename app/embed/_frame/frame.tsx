@@ -146,13 +146,7 @@ export function Frame({ view }: { readonly view: FrameView }) {
             closing={closing}
           />
           {trouble ? <TroubleCard view={view} trouble={trouble} values={values} onAgain={ask} /> : null}
-          {drawing ? (
-            <ShapeDrawing
-              {...drawing}
-              focused={focused}
-              words={{ high: words.high, low: words.low, notToScale: words.notToScale }}
-            />
-          ) : null}
+          {drawing ? <ShapeDrawing {...drawing} focused={focused} words={words} /> : null}
           {view.outline?.plan ? <PlanView view={view} plan={view.outline.plan} /> : null}
         </div>
       </div>

@@ -4,7 +4,7 @@ import { localNumbers } from "./local-number";
 
 /**
  * A drawing in the frame's language: the names of its views, its numbers, and for readers who do not see it which views
- * there are and what is written in them. In English it is described as the engine does.
+ * there are. In English it is described as the engine does.
  */
 export function localDrawing(
   { drawing, labels, toScale }: FrameDrawing,
@@ -18,11 +18,6 @@ export function localDrawing(
   );
   const views = drawing.views.map((each) => ({ ...each, title: viewTitles[each.title] ?? each.title }));
   if (locale.startsWith("en")) return { drawing, labels: local, toScale };
-  const shown = new Set(views.flatMap(({ dimensions }) => dimensions.map(({ name }) => name)));
-  const values = [...shown].flatMap((name) => {
-    const label = local[name];
-    return label?.value ? [`${label.symbol.replaceAll("_", "")} = ${label.value}`] : [];
-  });
-  const parts = [...views.map(({ title }) => title), ...values].join(", ");
-  return { drawing: { views, description: filled(words.drawing, parts) }, labels: local, toScale };
+  const names = views.map(({ title }) => title).join(", ");
+  return { drawing: { views, description: filled(words.drawing, names) }, labels: local, toScale };
 }

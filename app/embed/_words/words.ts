@@ -40,6 +40,7 @@ export interface Words {
   readonly low: string;
   readonly notToScale: string;
   readonly drawing: string;
+  readonly dimensions: string;
   readonly potential: string;
   readonly field: string;
   readonly currentDensity: string;
