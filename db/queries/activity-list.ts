@@ -35,7 +35,7 @@ export interface ActivityWanted {
 }
 
 /** The name of what an act concerned: its present one, or the one that was kept when it was deleted. */
-const NAMES: readonly SQL[] = [
+const NAMES: SQL[] = [
   sql`(select ${people.name} from ${people} where ${people.id} = ${activity.subjectId} and ${people.removedAt} is null)`,
   sql`(select ${keys.name} from ${keys} where ${keys.id} = ${activity.subjectId})`,
   sql`(select ${embeds.name} from ${embeds} where ${embeds.id} = ${activity.subjectId})`,

@@ -101,16 +101,16 @@ it.each([
   ["2026-12-01", "It began today"],
   ["2026-12-02", "Computations"],
 ])("on %s tells the month apart from today: %s", async (today, shown) => {
-  const { page, close } = await open("/console", 1440, (each) =>
-    each.route("**/api/console/overview", async (route) => {
+  const { page, close } = await open("/console", 1440, async (each) => {
+    await each.route("**/api/console/overview", async (route) => {
       const answer = await (await route.fetch()).json();
       const days = answer.days.map((day: object, index: number) => ({
         ...day,
         at: new Date(Date.parse(today) - (answer.days.length - 1 - index) * 86_400_000).toISOString(),
       }));
       await route.fulfill({ json: { ...answer, days } });
-    }),
-  );
+    });
+  });
   const month = page.locator("section").filter({ has: page.getByRole("heading", { name: "This month" }) });
   await month.getByText(shown).waitFor();
   expect(await month.locator("figure").count()).toBe(0);
