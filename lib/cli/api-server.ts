@@ -13,7 +13,8 @@ export function createApiServer(service: Service): Server {
   const server = createServer((incoming, outgoing) => {
     const answer = async () => {
       const request = toRequest(incoming, service.config.origin);
-      if (!new URL(request.url).pathname.startsWith(`${BASE_PATH}/`)) {
+      const { pathname } = new URL(request.url);
+      if (pathname !== BASE_PATH && !pathname.startsWith(`${BASE_PATH}/`)) {
         outgoing.writeHead(404, { "Content-Type": "text/plain; charset=utf-8" });
         outgoing.end("This process serves the API only.\n");
         return;
@@ -21,7 +22,7 @@ export function createApiServer(service: Service): Server {
       await writeResponse(await dispatch(request, service, registry), outgoing);
     };
     answer().catch((error: unknown) => {
-      // A request that cannot even be represented, such as one with a method the standard forbids.
+      // A request that cannot even be represented, such as one with a header the standard forbids.
       service.log.warn({ error: String(error) });
       if (!outgoing.headersSent) outgoing.writeHead(400, { "Content-Type": "text/plain; charset=utf-8" });
       outgoing.end();

@@ -3,6 +3,10 @@ import { Readable } from "node:stream";
 import type { ReadableStream as NodeStream } from "node:stream/web";
 import { PEER_HEADER } from "../http/client-address";
 
+/** Methods that no standard Request has; by another name the dispatcher refuses them as it does any unknown one. */
+const FORBIDDEN: ReadonlySet<string> = new Set(["TRACE", "TRACK", "CONNECT"]);
+const UNKNOWN = "UNKNOWN";
+
 /** A request of node:http as the standard Request that the dispatcher takes. */
 export function toRequest(incoming: IncomingMessage, origin: string): Request {
   const headers = new Headers();
@@ -10,7 +14,8 @@ export function toRequest(incoming: IncomingMessage, origin: string): Request {
     headers.append(incoming.rawHeaders[i], incoming.rawHeaders[i + 1]);
   }
   headers.set(PEER_HEADER, incoming.socket.remoteAddress ?? "");
-  const method = incoming.method ?? "GET";
+  const given = incoming.method ?? "GET";
+  const method = FORBIDDEN.has(given) ? UNKNOWN : given;
   const target = incoming.url?.startsWith("/") ? incoming.url : "/";
   const bodyless = method === "GET" || method === "HEAD";
   return new Request(new URL(origin + target), {

@@ -1,5 +1,6 @@
 import { type ChildProcess, spawn } from "node:child_process";
 import { mkdtempSync, rmSync } from "node:fs";
+import { request } from "node:http";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { afterEach, beforeEach, expect, test } from "vitest";
@@ -65,6 +66,23 @@ test("what was answered is counted, exactly once, also if the process is killed 
   }
   expect(one("select points from rate_limits where key like 'month:%'")).toBe(25);
   db.$client.close();
+});
+
+test("the base path alone and TRACE are refused with problem details", async () => {
+  const bare = await fetch(`${base}/api/v1`);
+  expect(bare.status).toBe(404);
+  expect(bare.headers.get("content-type")).toMatch(/^application\/problem\+json/);
+  const { method, status, type, allow } = await new Promise<Record<string, unknown>>((resolve, reject) => {
+    const asked = request(`${base}/api/v1/resistance`, { method: "TRACE" }, (answer) => {
+      const { "content-type": own, allow: methods } = answer.headers;
+      answer.resume();
+      resolve({ method: asked.method, status: answer.statusCode, type: own, allow: methods });
+    });
+    asked.once("error", reject).end();
+  });
+  expect([method, status]).toEqual(["TRACE", 405]);
+  expect(type).toMatch(/^application\/problem\+json/);
+  expect(allow).toMatch(/POST/);
 });
 
 test("SIGTERM ends it with 0 and leaves one database file", async () => {
