@@ -4,15 +4,17 @@ interface CodeBlockProps {
   readonly code: string;
   /** What the code is, for its caption and for the copy button: "curl", "the answer". */
   readonly label: string;
+  /** What the copy button copies, where that is more than is shown. */
+  readonly copies?: string;
 }
 
 /** Code to read and to copy; long lines scroll inside the block. */
-export function CodeBlock({ code, label }: CodeBlockProps) {
+export function CodeBlock({ code, label, copies = code }: CodeBlockProps) {
   return (
     <figure className="rounded border border-rule bg-sheet">
       <figcaption className="flex items-center justify-between border-b border-rule ps-2 pe-0.5 text-small text-ink-soft">
         {label}
-        <CopyButton text={code} what={label} />
+        <CopyButton text={copies} what={label} />
       </figcaption>
       <pre
         // Reachable by keyboard, since it scrolls.

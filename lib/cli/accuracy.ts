@@ -16,6 +16,7 @@ interface Row {
   cases: number;
   worst: number;
   worstCase: string;
+  readonly shapes: Record<string, { cases: number; worst: number }>;
 }
 
 /** One line that a test wrote; see tests/support/accuracy.ts. */
@@ -24,6 +25,7 @@ interface Noted {
   readonly group: string;
   readonly test: string;
   readonly deviation: number;
+  readonly shapes: readonly string[];
 }
 
 const folder = mkdtempSync(join(tmpdir(), "rhoform-accuracy-"));
@@ -45,11 +47,17 @@ try {
         cases: 0,
         worst: -1,
         worstCase: "",
+        shapes: {},
       };
       row.cases += 1;
       if (noted.deviation > row.worst) {
         row.worst = noted.deviation;
         row.worstCase = noted.test;
+      }
+      for (const shape of noted.shapes) {
+        const own = (row.shapes[shape] ??= { cases: 0, worst: 0 });
+        own.cases += 1;
+        own.worst = Math.max(own.worst, noted.deviation);
       }
       rows.set(key, row);
     }
@@ -57,7 +65,7 @@ try {
   const table = [...rows.values()]
     .sort((a, b) => a.file.localeCompare(b.file) || a.group.localeCompare(b.group))
     // Two digits, rounded up: what the docs say is never less than what was found.
-    .map((row) => ({ ...row, worst: roundedUp(row.worst) }));
+    .map((row) => ({ ...row, worst: roundedUp(row.worst), shapes: inOrder(row.shapes) }));
   mkdirSync(dirname(TABLE), { recursive: true });
   writeFileSync(TABLE, `${JSON.stringify(table, null, 2)}\n`);
   console.log(`${table.length} groups written to ${TABLE}.`);
@@ -66,6 +74,13 @@ try {
   process.exitCode = 1;
 } finally {
   rmSync(folder, { recursive: true, force: true });
+}
+
+function inOrder(shapes: Row["shapes"]): Row["shapes"] {
+  const entries = Object.entries(shapes).sort(([a], [b]) => a.localeCompare(b));
+  return Object.fromEntries(
+    entries.map(([id, { cases, worst }]) => [id, { cases, worst: roundedUp(worst) }]),
+  );
 }
 
 function roundedUp(value: number): number {

@@ -4,7 +4,7 @@
  */
 import { spawnSync } from "node:child_process";
 import { createHash } from "node:crypto";
-import { existsSync, readFileSync, readdirSync, writeFileSync } from "node:fs";
+import { existsSync, mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } from "node:fs";
 import { dirname, join } from "node:path";
 import { fileURLToPath } from "node:url";
 
@@ -88,6 +88,11 @@ const SOURCES = [
   "fonts",
   "lib",
   "public",
+  "sdk/typescript/examples",
+  "sdk/typescript/package.json",
+  "sdk/typescript/README.md",
+  "sdk/typescript/src",
+  "sdk/typescript/tsconfig.json",
   "instrumentation.ts",
   "instrumentation-node.ts",
   "next.config.ts",
@@ -98,6 +103,7 @@ const SOURCES = [
 ];
 
 const STAMP = join(ROOT, ".next", "rhoform-sources");
+const CLIENTS = join(ROOT, "dist", "clients");
 
 /** Builds the pages if their sources changed since the last build. */
 export function ensureBuilt() {
@@ -106,6 +112,7 @@ export function ensureBuilt() {
     STAMP,
     join(ROOT, ".next", "BUILD_ID"),
     join(ROOT, "dist", "workers", "field-worker.mjs"),
+    CLIENTS,
   ].every((path) => existsSync(path));
   if (built && readFileSync(STAMP, "utf8") === hash) return;
   console.error("Building …");
@@ -115,6 +122,7 @@ export function ensureBuilt() {
 /** Builds in any case, and remembers from what. */
 export function build(hash = hashSources()) {
   buildWorkers();
+  packClient();
   runNode("node_modules/next/dist/bin/next", ["build"], {
     quiet: true,
     env: { NODE_ENV: "production", NEXT_TELEMETRY_DISABLED: "1" },
@@ -124,6 +132,13 @@ export function build(hash = hashSources()) {
 
 export function buildWorkers() {
   runNode("lib/cli/build-workers.mjs", [], { quiet: true });
+}
+
+/** The TypeScript client as the docs hand it out; the same sources make the same bytes. */
+export function packClient() {
+  rmSync(CLIENTS, { recursive: true, force: true });
+  mkdirSync(CLIENTS, { recursive: true });
+  run(["npm", "pack", "./sdk/typescript", "--silent", "--pack-destination", CLIENTS], { quiet: true });
 }
 
 function hashSources() {

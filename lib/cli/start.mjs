@@ -11,6 +11,7 @@ import {
   checkNode,
   ensureBuilt,
   ensureInstalled,
+  packClient,
   runNode,
 } from "./setup.mjs";
 import { serve } from "./serve.mjs";
@@ -83,8 +84,10 @@ async function main() {
   process.env.NEXT_TELEMETRY_DISABLED = "1";
   checkNode();
   ensureInstalled();
-  if (dev) buildWorkers();
-  else ensureBuilt();
+  if (dev) {
+    buildWorkers();
+    packClient();
+  } else ensureBuilt();
   const settings = prepare();
   if (dev) return develop(settings);
 

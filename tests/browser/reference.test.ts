@@ -1,5 +1,7 @@
 import AxeBuilder from "@axe-core/playwright";
 import { afterAll, describe, expect, it } from "vitest";
+import { NAVIGATION } from "@/app/_ui/site/navigation";
+import { THEME_COOKIE } from "@/app/_ui/theme";
 import { startServer } from "../support/server";
 import { base, closeBrowser, visit } from "./browser";
 
@@ -10,8 +12,12 @@ describe("/docs/api", () => {
     const { page, close } = await visit("/docs/api", { scripts: false });
     expect(await page.title()).toBe("API reference · Rhoform");
     expect(await page.locator("html").getAttribute("lang")).toBe("en");
-    expect(await page.locator("h1").allTextContents()).toEqual(["Rhoform API reference"]);
+    expect(await page.locator("h1").allTextContents()).toEqual(["API reference"]);
     expect(await page.locator("a[href='/api/v1/openapi.json']").count()).toBe(1);
+    const places = page.getByRole("navigation", { name: "Site" }).getByRole("link");
+    expect(await places.allTextContents()).toEqual(
+      NAVIGATION.filter(({ href }) => href !== "/docs/api").map(({ label }) => label),
+    );
     await close();
   });
 
@@ -22,7 +28,25 @@ describe("/docs/api", () => {
     expect(requests.filter((url) => !/^(data|blob):/.test(url) && !url.startsWith(base()))).toEqual([]);
     expect(requests).toContain(`${base()}/api/v1/openapi.json`);
     expect(complaints).toEqual([]);
-    expect(await page.locator("h1").count()).toBe(1);
+    // The heading that was there before the script stays, and nothing of the package's own name is shown.
+    expect(await page.locator("h1:visible").allTextContents()).toEqual(["API reference"]);
+    for (const foreign of [/Powered by/, /Client Libraries/])
+      expect(await page.getByText(foreign).filter({ visible: true }).count()).toBe(0);
+    await close();
+  });
+
+  it("changes its colours by the switch of the other pages, and keeps the choice", async () => {
+    const { page, context, close } = await visit("/docs/api", { colorScheme: "light" });
+    await page.getByText("Compute one resistance").first().waitFor({ timeout: 30_000 });
+    const ground = () => page.evaluate(() => getComputedStyle(document.body).backgroundColor);
+    const light = await ground();
+    await page.getByTitle("Dark").click();
+    expect(await ground()).not.toBe(light);
+    expect(await page.evaluate(() => document.body.className)).toContain("dark-mode");
+    expect((await context.cookies()).find(({ name }) => name === THEME_COOKIE)?.value).toBe("dark");
+    await page.reload();
+    await page.getByText("Compute one resistance").first().waitFor({ timeout: 30_000 });
+    expect(await ground()).not.toBe(light);
     await close();
   });
 
@@ -45,7 +69,7 @@ describe("/docs/api", () => {
     const { key } = server.issue();
     const { page, requests, close } = await visit("/docs/start");
     await page.getByLabel("Your key").fill(key);
-    await page.getByText(`export RHOFORM_KEY=${key}`).waitFor();
+    await page.getByRole("button", { name: "Forget it" }).waitFor();
     await page.goto(`${base()}/docs/api#tag/resistance/POST/resistance`);
     const token = page.getByPlaceholder("Token").first();
     await token.waitFor({ timeout: 30_000 });

@@ -2,13 +2,7 @@ import { type IncomingMessage, type Server, type ServerResponse, createServer } 
 import type { AddressInfo } from "node:net";
 import { inspect } from "node:util";
 import { afterEach, describe, expect, it } from "vitest";
-import {
-  RhoformProblem,
-  computeResistance,
-  issueKey,
-  readHealth,
-  rhoform,
-} from "@/sdk/typescript/src/index";
+import { RhoformProblem, computeResistance, issueKey, readHealth, rhoform } from "@/sdk/typescript/src/index";
 import { retryAfterSeconds } from "@/sdk/typescript/src/failure";
 
 const KEY = "rho_abc123_secretsecretsecret";

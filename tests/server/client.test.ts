@@ -1,5 +1,5 @@
 import { execFileSync } from "node:child_process";
-import { mkdtempSync, rmSync, writeFileSync } from "node:fs";
+import { mkdtempSync, readFileSync, readdirSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
@@ -13,6 +13,8 @@ import {
   readUsage,
   rhoform,
 } from "@/sdk/typescript/src/index";
+import { packedClient } from "@/app/(site)/docs/_content/client-files";
+import { base } from "../browser/browser";
 import { type TestServer, startServer } from "../support/server";
 
 let server: TestServer;
@@ -99,16 +101,21 @@ describe("the client against the live service", () => {
 });
 
 describe("the packed client", () => {
-  it("is made without the application, installs into an empty project and runs", async () => {
+  it("installs from the docs into an empty project, asking no other host, and runs", async () => {
     const folder = mkdtempSync(join(tmpdir(), "rhoform-client-"));
     const run = (program: string, args: string[], cwd: string) =>
       execFileSync(program, args, { cwd, encoding: "utf8", stdio: ["ignore", "pipe", "pipe"] });
-    const [file] = run("npm", ["pack", "--silent", "--pack-destination", folder], "sdk/typescript")
-      .trim()
-      .split("\n")
-      .slice(-1);
-    writeFileSync(join(folder, "package.json"), '{ "name": "empty", "private": true, "type": "module" }');
-    run("npm", ["install", "--offline", "--no-audit", "--no-fund", `./${file}`], folder);
+    const page = await (await fetch(`${base()}/docs/clients`)).text();
+    const [path] = /\/docs\/clients\/rhoform-client-[\d.]+\.tgz/.exec(page) ?? expect.fail("no link");
+    // No registry answers at that address, and nothing of an earlier install is left in this store.
+    run(
+      "npm",
+      [
+        ...["install", base() + path, "--registry", "http://127.0.0.1:9", "--cache", join(folder, "store")],
+        ...["--fetch-retries", "0", "--no-audit", "--no-fund"],
+      ],
+      folder,
+    );
     writeFileSync(
       join(folder, "call.mjs"),
       `import { computeResistance, rhoform } from "@rhoform/client";
@@ -152,6 +159,19 @@ export const text: Promise<string> = computeResistance({
     };
     expect(compile("thickness")).not.toThrow();
     expect(compile("thicknes")).toThrow();
+    rmSync(folder, { recursive: true });
+  }, 120_000);
+
+  it("is the same whenever it is packed, and another name is not found", async () => {
+    const folder = mkdtempSync(join(tmpdir(), "rhoform-client-"));
+    const served = await fetch(`${base()}/docs/clients/${packedClient()}`);
+    expect(served.headers.get("Content-Disposition")).toContain(packedClient());
+    const bytes = Buffer.from(await served.arrayBuffer());
+    for (const other of ["rhoform-client-0.0.0.tgz", "..%2F..%2Fpackage.json"])
+      expect((await fetch(`${base()}/docs/clients/${other}`)).status).toBe(404);
+    execFileSync("npm", ["pack", "./sdk/typescript", "--silent", "--pack-destination", folder]);
+    expect(readdirSync(folder)).toEqual([packedClient()]);
+    expect(readFileSync(join(folder, packedClient())).equals(bytes)).toBe(true);
     rmSync(folder, { recursive: true });
   }, 120_000);
 

@@ -27,6 +27,11 @@ beforeAll(async () => {
     RHOFORM_URL_KEY: urlKey,
     PYTHONIOENCODING: "utf-8",
     PYTHONDONTWRITEBYTECODE: "1",
+    // What npm installs comes from the service alone: no registry answers there.
+    npm_config_registry: "http://127.0.0.1:9",
+    npm_config_audit: "false",
+    npm_config_fund: "false",
+    npm_config_cache: join(folder, "npm"),
   };
 });
 

@@ -17,6 +17,8 @@ export const accuracyTable = z.array(
     cases: z.int(),
     worst: z.number(),
     worstCase: z.string(),
+    /** The same by shape, for the comparisons in which one was computed. */
+    shapes: z.record(z.string(), z.object({ cases: z.int(), worst: z.number() })),
   }),
 );
 
@@ -36,6 +38,18 @@ function worstOf(file: string, group: string): number | undefined {
   return known.get(`${file}\n${group}`);
 }
 
+/** What was computed since the last comparison of a test: the next one is about these shapes. */
+const involved = { test: "", compared: false, shapes: new Set<string>() };
+
+/** Says that the running test computed a shape. */
+export function involve(shape: string): void {
+  const test = expect.getState().currentTestName ?? "";
+  if (involved.compared || involved.test !== test) involved.shapes.clear();
+  involved.test = test;
+  involved.compared = false;
+  involved.shapes.add(shape);
+}
+
 /** Notes a relative deviation of the running test and gives it back. */
 export function note(deviation: number): number {
   const { currentTestName, testPath } = expect.getState();
@@ -45,7 +59,9 @@ export function note(deviation: number): number {
   const file = relative(process.cwd(), testPath);
   const folder = process.env.RHOFORM_ACCURACY;
   if (folder) {
-    const line = JSON.stringify({ file, group, test: test.join(", "), deviation });
+    const shapes = involved.test === currentTestName ? [...involved.shapes] : [];
+    involved.compared = true;
+    const line = JSON.stringify({ file, group, test: test.join(", "), deviation, shapes });
     appendFileSync(join(folder, `${process.pid}.jsonl`), `${line}\n`);
     return deviation;
   }

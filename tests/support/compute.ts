@@ -1,5 +1,5 @@
 /** Short ways to compute, and to be refused, in tests of the engine. */
-import { note } from "./accuracy";
+import { involve, note } from "./accuracy";
 import {
   computeResistance,
   InputError,
@@ -12,7 +12,9 @@ const context = { material: libraryMaterial };
 
 /** The answer to a request. */
 export function compute(request: unknown): ResistanceResult {
-  return computeResistance(request, context);
+  const result = computeResistance(request, context);
+  involve(result.shape);
+  return result;
 }
 
 /** The complaints about a request; fails the test where there are none. */

@@ -4,7 +4,7 @@ import { readFileSync } from "node:fs";
 import { findShape } from "@/lib/engine/shape/catalogue";
 import type { Dimensions, Factor, FlowTubes, Resolved, Shape } from "@/lib/engine/shape/define-shape";
 import { resolveDimensions } from "@/lib/engine/shape/resolve-dimensions";
-import { note } from "./accuracy";
+import { involve, note } from "./accuracy";
 
 export type Given = Readonly<Record<string, number | string>>;
 
@@ -23,6 +23,7 @@ export function shapeOf(id: string): Shape {
 }
 
 export function resolve(id: string, given: Given): Resolved<Dimensions> {
+  involve(id);
   return resolveDimensions(shapeOf(id), given);
 }
 

@@ -2,8 +2,8 @@ import { readFile } from "node:fs/promises";
 import { join } from "node:path";
 import { ApiReference } from "@scalar/nextjs-api-reference";
 import type { NextRequest } from "next/server";
-import { KEY_PLACE } from "../../_ui/docs-key";
 import { THEME_COOKIE, parseTheme } from "../../_ui/theme";
+import { FRAME_CSS, REFERENCE_SCRIPT, referenceHeader } from "./reference-frame";
 import { referenceScript } from "./reference-script";
 
 const TITLE = "API reference · Rhoform";
@@ -28,6 +28,7 @@ export async function GET(request: NextRequest): Promise<Response> {
     hideClientButton: true,
     hideDarkModeToggle: true,
     ...(theme === "system" ? {} : { forceDarkModeState: theme }),
+    hiddenClients: OTHER_CLIENTS,
     defaultHttpClient: { targetKey: "shell", clientKey: "curl" } as const,
     authentication: { preferredSecurityScheme: "key" },
     metaData: { title: TITLE },
@@ -40,54 +41,30 @@ export async function GET(request: NextRequest): Promise<Response> {
       "</head>",
       `<link rel="icon" href="/icon.svg" type="image/svg+xml"><style>${tokens}${FRAME_CSS}</style></head>`,
     )
-    .replace("<body>", `<body>${HEADER}`)
-    // In the place where the script mounts its own: the page has one first heading, before and after.
-    .replace('<div id="app"></div>', '<div id="app"><h1>Rhoform API reference</h1></div>')
+    .replace("<body>", `<body>${referenceHeader(theme)}<script>${REFERENCE_SCRIPT}</script>`)
     .replace("Scalar.createApiReference(", "createWithKey(Scalar.createApiReference, ")
-    .replace("</header>", `</header><script>${WITH_KEY}</script>`)
     .replaceAll("<script", `<script nonce="${nonce}"`);
   return new Response(html, {
     headers: { "Content-Type": "text/html; charset=utf-8", "Cache-Control": "no-store" },
   });
 }
 
-const HEADER = `
-    <header class="frame">
-      <a class="frame-home" href="/">Rhoform</a>
-      <a href="/docs">Docs</a>
-      <span aria-current="page">API reference</span>
-    </header>
-    <noscript><p class="frame-note">The interactive reference needs scripts. The same contract is the
-      <a href="/api/v1/openapi.json">OpenAPI document</a>.</p></noscript>`;
+/** Forms of a call that the list does not offer: the docs have clients of our own, and curl for everything else. */
+const OTHER_CLIENTS = {
+  ...Object.fromEntries(
+    "c clojure csharp dart fsharp go http java kotlin node objc ocaml php r ruby rust swift"
+      .split(" ")
+      .map((language) => [language, true as const]),
+  ),
+  js: ["axios", "jquery", "ofetch", "xhr"],
+  python: ["aiohttp", "httpx_async", "httpx_sync", "python3"],
+  shell: ["httpie", "wget"],
+};
 
-/** The key that the reader typed on the start page, from this tab's own storage: it is in no answer of the server. */
-const WITH_KEY = `
-function createWithKey(create, place, configuration) {
-  let key = null;
-  try { key = sessionStorage.getItem("${KEY_PLACE}"); } catch { /* Storage may be forbidden. */ }
-  if (key) configuration.authentication.securitySchemes = { key: { token: key } };
-  return create(place, configuration);
-}`;
-
-const FRAME_CSS = `
-@font-face { font-family: "Spline Sans"; font-weight: 300 700; font-display: swap;
-  src: url("/fonts/spline-sans.woff2") format("woff2"); }
-@font-face { font-family: "Spline Sans Mono"; font-weight: 400; font-display: swap;
-  src: url("/fonts/spline-sans-mono-400.woff2") format("woff2"); }
-@font-face { font-family: "Spline Sans Mono"; font-weight: 600; font-display: swap;
-  src: url("/fonts/spline-sans-mono-600.woff2") format("woff2"); }
-body { margin: 0; background: var(--paper); color: var(--ink); font-family: "Spline Sans", system-ui, sans-serif; }
-.frame { display: flex; flex-wrap: wrap; align-items: baseline; gap: 4px 20px; padding: 12px 24px;
-  border-bottom: 1px solid var(--rule); font-size: 14px; }
-.frame a { color: var(--ink-soft); }
-.frame a.frame-home { color: var(--ink); font-size: 19px; font-weight: 600; text-decoration: none; }
-.frame [aria-current] { font-weight: 600; }
-#app > h1 { padding: 24px; margin: 0; font-size: 34px; font-weight: 600; }
-.frame-note { padding: 24px; }
-`;
-
-/** The package's colours, set to ours. */
+/** The package's colours, set to ours, and what is not ours to show: its own heading, its name, its list of clients. */
 const CSS = `
+.introduction-section h1, .introduction-section .badge, .scalar-reference-intro-clients, .darklight-reference,
+.scalar-version-number { display: none !important; }
 .light-mode, .dark-mode {
   --scalar-font: "Spline Sans", system-ui, sans-serif;
   --scalar-font-code: "Spline Sans Mono", ui-monospace, monospace;

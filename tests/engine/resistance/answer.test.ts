@@ -83,6 +83,11 @@ describe("the contract's example", () => {
       "Resistance",
     ]);
     for (const { tex } of result.steps ?? []) expect(tex.length).toBeGreaterThan(3);
+    // E = V₀/(r·ln(b/a)) at both radii, and J = σE with σ = 1e-12 S/m.
+    const said = Object.fromEntries(result.steps?.map(({ title, value }) => [title, value]) ?? []);
+    expect(said.Potential).toBe("from 500\u2009V at s = 2\u2009mm to 0\u2009V at s = 5\u2009mm");
+    expect(said.Field).toMatch(/^272\.84\u2009kV\/m at s = 2\u2009mm, 109\.14\u2009kV\/m at s = 5\u2009mm/);
+    expect(said["Current density"]).toMatch(/^2\.7284.*10⁻⁷.A\/m² at s = 2.mm/);
     expect(result.checks?.map(({ name }) => name)).toEqual([
       "voltage-independence",
       "current-continuity",

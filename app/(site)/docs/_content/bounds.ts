@@ -1,6 +1,29 @@
 import { resistanceBlock } from "./call-blocks";
 import type { DocPage } from "./page";
 
+/** Each basis, where its bounds come from, and whether they are proved. */
+export const BASES: readonly (readonly [basis: string, from: string, proved: string])[] = [
+  ["rounding", "a closed form or a converged series; only the rounding of the computation remains", "yes"],
+  [
+    "rayleigh",
+    "perfectly conducting sheets laid across the flow give the lower value, insulating walls laid along it the upper one",
+    "yes",
+  ],
+  [
+    "energy",
+    "two field solutions, of the potential and of its conjugate, whose energies lie on either side of the true value",
+    "yes",
+  ],
+  [
+    "energy-quadrature",
+    "the same where the conductivity varies inside the elements, so that their integrals are estimated",
+    "no",
+  ],
+  ["elements", "of a network: all elements at their lowest and all at their highest", "where all theirs are"],
+  ["quadrature", "the error estimate of a numerical integral", "no"],
+  ["formula-accuracy", "a published formula and its stated accuracy", "no"],
+];
+
 export const bounds: DocPage = {
   slug: "bounds",
   title: "Bounds",
@@ -21,35 +44,7 @@ export const bounds: DocPage = {
         {
           table: {
             head: ["boundsBasis", "where the bounds come from", "proved"],
-            rows: [
-              [
-                "`rounding`",
-                "a closed form or a converged series; only the rounding of the computation remains",
-                "yes",
-              ],
-              [
-                "`rayleigh`",
-                "perfectly conducting sheets laid across the flow give the lower value, insulating walls laid along it the upper one",
-                "yes",
-              ],
-              [
-                "`energy`",
-                "two field solutions, of the potential and of its conjugate, whose energies lie on either side of the true value",
-                "yes",
-              ],
-              [
-                "`energy-quadrature`",
-                "the same where the conductivity varies inside the elements, so that their integrals are estimated",
-                "no",
-              ],
-              [
-                "`elements`",
-                "of a network: all elements at their lowest and all at their highest",
-                "where all theirs are",
-              ],
-              ["`quadrature`", "the error estimate of a numerical integral", "no"],
-              ["`formula-accuracy`", "a published formula and its stated accuracy", "no"],
-            ],
+            rows: BASES.map(([basis, from, proved]) => [`\`${basis}\``, from, proved]),
           },
         },
       ],

@@ -1,3 +1,4 @@
+import { clientInstall, packedClient, pythonDownload } from "./client-files";
 import type { DocPage } from "./page";
 
 export const clients: DocPage = {
@@ -10,15 +11,7 @@ export const clients: DocPage = {
       title: "Python",
       blocks: [
         "One file, Python 3.9 and newer, standard library only. Put it beside your script, or into the script folder of a CAD program:",
-        {
-          snippets: [
-            {
-              language: "sh",
-              label: "download",
-              code: `curl -fsSO ${origin}/docs/python/rhoform.py`,
-            },
-          ],
-        },
+        pythonDownload(origin),
         "It can be downloaded [here](/docs/python/rhoform.py) as well. With the repository at hand, `python3 -m pip install ./sdk/python` installs it; that needs no network.",
         {
           snippets: [
@@ -69,17 +62,11 @@ export const clients: DocPage = {
       id: "typescript",
       title: "TypeScript and JavaScript",
       blocks: [
-        "ES modules with types for Node 18.17 and newer and for browsers, without dependencies. Make the package once from the repository and install it where you need it:",
-        {
-          snippets: [
-            {
-              language: "sh",
-              label: "package",
-              code: "(cd sdk/typescript && npm pack)\nnpm install ./sdk/typescript/rhoform-client-1.0.0.tgz",
-              shownOnly: true,
-            },
-          ],
-        },
+        "ES modules with types for Node 18.17 and newer and for browsers, without dependencies. This service hands out the package of its own version:",
+        clientInstall(origin),
+        "The lock file of your project then holds its address and digest. Where builds do not reach this service, [download the file](/docs/clients/" +
+          packedClient() +
+          ") and install it from your repository.",
         {
           snippets: [
             {
@@ -154,7 +141,7 @@ export const clients: DocPage = {
             ],
           },
         },
-        "They stand in `sdk/python/examples` and `sdk/typescript/examples`, and in the packed TypeScript client.",
+        "They stand in `sdk/python/examples` and `sdk/typescript/examples` of the repository; the TypeScript ones come with the package, in `node_modules/@rhoform/client/examples`.",
       ],
     },
   ],

@@ -72,7 +72,7 @@ export const fields: DocPage = {
       id: "jobs",
       title: "Longer ones",
       blocks: [
-        "The clients wait for the end, tell the progress, and can stop:",
+        "The clients wait for the end, tell each new bracket in ohms, and can stop:",
         {
           snippets: [
             {
@@ -87,7 +87,7 @@ export const fields: DocPage = {
                 "  client,",
                 "  // An abort cancels the solution as well.",
                 "  signal: AbortSignal.timeout(300_000),",
-                "  onProgress: ({ progress }) => console.log(progress?.lower, progress?.upper),",
+                "  onProgress: ({ lower, upper }) => console.log(lower, upper),",
                 "  body: {",
                 '    outline: { unit: "mm", outer: [[0, 0], [30, 0], [30, 10], [0, 10]] },',
                 "    terminals: [",
@@ -119,7 +119,7 @@ export const fields: DocPage = {
                 '        "medium": {"material": "copper-annealed", "thickness": "35 um"},',
                 "    },",
                 "    timeout=300,",
-                "    on_progress=lambda state: print(state.progress),",
+                "    on_progress=lambda bracket: print(bracket.lower, bracket.upper),",
                 ")",
                 "print(field.status, field.result.resistance.text)",
               ].join("\n"),

@@ -1,5 +1,6 @@
 import { SHELL_START, shellRequest } from "../../_live/shell-request";
 import { resistanceBlock } from "./call-blocks";
+import { clientInstall, pythonDownload } from "./client-files";
 import type { DocPage } from "./page";
 
 export const start: DocPage = {
@@ -11,22 +12,44 @@ export const start: DocPage = {
       id: "key",
       title: "1. Get a key",
       blocks: [
-        "Every computation needs a key of your team. Whoever runs the service issues it in the [console](/console/keys) or in a shell; the demo company’s key is printed when the service starts. A key is shown once: keep it in your password store or secret manager.",
+        "Every computation needs a key of your team. Issue one in the [console](/console/keys) and press “Open the start page with this key”: the calls on these pages are then copied with it. Without an account, ask whoever runs the service; the demo company’s key is printed when the service starts.",
         { part: "key" },
+        "A key is shown once. Keep it in your password store, and give it to programs by a variable:",
+        {
+          snippets: [
+            { language: "sh", label: "shell", code: "export RHOFORM_KEY=rho_…", shownOnly: true },
+            {
+              language: "text",
+              label: "PowerShell",
+              code: '$env:RHOFORM_KEY = "rho_…"',
+              shownOnly: true,
+            },
+          ],
+        },
+      ],
+    },
+    {
+      id: "client",
+      title: "2. Get a client, or none",
+      blocks: [
+        "curl needs nothing else. For TypeScript or JavaScript, in an empty folder with Node 18.17 or newer:",
+        clientInstall(origin),
+        "For Python 3.9 or newer, one file beside your script:",
+        pythonDownload(origin),
       ],
     },
     {
       id: "call",
-      title: "2. Make a call",
+      title: "3. Make a call",
       blocks: [
         "This asks for the resistance of an insulating sleeve between its inside and its outside. Dimensions carry their unit; a bare number is SI.",
         resistanceBlock(origin, shellRequest(SHELL_START), undefined, "145.83\u2009GΩ"),
-        "The curl form needs nothing but curl. The other two need [a client](/docs/clients): one file for Python, one package for TypeScript.",
+        "Paste the curl form into the shell. Save the TypeScript form as `call.mjs` and run `node call.mjs`; save the Python form as `call.py` and run `python3 call.py`. For a formula in a cell see [spreadsheets](/docs/spreadsheets).",
       ],
     },
     {
       id: "answer",
-      title: "3. Read the answer",
+      title: "4. Read the answer",
       blocks: [
         {
           list: [

@@ -1,10 +1,11 @@
-import { CodeBlock } from "../../../_ui/code-block";
 import { Notice } from "../../../_ui/notice";
 import { Tabs } from "../../../_ui/tabs";
 import { Tex } from "../../../_ui/tex";
 import type { Block, DocSnippet } from "../_content/page";
 import { Inline } from "./inline";
 import { KeyField } from "./key-field";
+import { OwnCode } from "./own-code";
+import { ScrollTable } from "./scroll-table";
 
 /** The parts of a section, one after the other. */
 export function Blocks({ blocks }: { readonly blocks: readonly Block[] }) {
@@ -61,42 +62,40 @@ function Table({
   readonly rows: readonly (readonly string[])[];
 }) {
   return (
-    <div className="overflow-x-auto" tabIndex={0} role="group" aria-label={head.join(", ")}>
-      <table className="w-full">
-        <thead>
-          <tr>
-            {head.map((text) => (
-              <th key={text} scope="col" className="font-semibold">
-                {text}
-              </th>
+    <ScrollTable label={head.join(", ")}>
+      <thead>
+        <tr>
+          {head.map((text) => (
+            <th key={text} scope="col" className="font-semibold">
+              {text}
+            </th>
+          ))}
+        </tr>
+      </thead>
+      <tbody>
+        {rows.map((cells) => (
+          <tr key={cells.join(" ")}>
+            {cells.map((cell, index) => (
+              <td key={index}>
+                <Inline text={cell} />
+              </td>
             ))}
           </tr>
-        </thead>
-        <tbody>
-          {rows.map((cells) => (
-            <tr key={cells.join(" ")}>
-              {cells.map((cell, index) => (
-                <td key={index}>
-                  <Inline text={cell} />
-                </td>
-              ))}
-            </tr>
-          ))}
-        </tbody>
-      </table>
-    </div>
+        ))}
+      </tbody>
+    </ScrollTable>
   );
 }
 
 export function Snippets({ snippets }: { readonly snippets: readonly DocSnippet[] }) {
-  if (snippets.length === 1) return <CodeBlock code={snippets[0].code} label={snippets[0].label} />;
+  if (snippets.length === 1) return <OwnCode code={snippets[0].code} label={snippets[0].label} />;
   return (
     <Tabs
       label="Forms of the call"
       tabs={snippets.map(({ label, code }) => ({
         id: label.toLowerCase().replaceAll(" ", "-"),
         label,
-        content: <CodeBlock code={code} label={label} />,
+        content: <OwnCode code={code} label={label} />,
       }))}
     />
   );

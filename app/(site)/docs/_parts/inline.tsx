@@ -19,7 +19,14 @@ export function Inline({ text }: { readonly text: string }) {
   });
 }
 
-/** The same without its marks, for search. */
+/** The same without its marks, for search. What stands in code keeps its own stars and brackets. */
 export function plainText(text: string): string {
-  return text.replace(/\[([^\]]+)\]\([^)]+\)/g, "$1").replace(/[`*]/g, "");
+  return text
+    .split(MARKUP)
+    .map((part) => {
+      if (part.startsWith("`") && part.length > 2) return part.slice(1, -1);
+      if (part.startsWith("**")) return part.slice(2, -2);
+      return /^\[([^\]]+)\]\([^)]+\)$/.exec(part)?.[1].replace(/`/g, "") ?? part;
+    })
+    .join("");
 }

@@ -1,41 +1,38 @@
 import type { DimensionEntry, ShapeEntry } from "@/lib/engine";
 import { SiteLink } from "../../../_ui/site/site-link";
+import { ScrollTable } from "./scroll-table";
 
 /** Every dimension as a request may give it, and which exclude each other. */
 export function Dimensions({ entry }: { readonly entry: ShapeEntry }) {
   return (
     <>
-      <div className="overflow-x-auto" tabIndex={0} role="group" aria-label="Dimensions">
-        <table className="w-full">
-          <thead>
-            <tr>
-              {["name", "symbol", "what it is", "bare number in"].map((head) => (
-                <th key={head} scope="col" className="font-semibold">
-                  {head}
-                </th>
-              ))}
-            </tr>
-          </thead>
-          <tbody>
-            {entry.dimensions.map((dimension) => (
-              <tr key={dimension.name}>
-                <td>
-                  <code>{dimension.name}</code>
-                </td>
-                <td>
-                  <i>{dimension.symbol}</i>
-                </td>
-                <td className="min-w-24">
-                  {dimension.label}. {dimension.help} <Allowed dimension={dimension} />
-                </td>
-                <td className="whitespace-nowrap">
-                  {dimension.unit === "1" ? "–" : (dimension.unit ?? "–")}
-                </td>
-              </tr>
+      <ScrollTable label="Dimensions">
+        <thead>
+          <tr>
+            {["name", "symbol", "what it is", "bare number in"].map((head) => (
+              <th key={head} scope="col" className="font-semibold">
+                {head}
+              </th>
             ))}
-          </tbody>
-        </table>
-      </div>
+          </tr>
+        </thead>
+        <tbody>
+          {entry.dimensions.map((dimension) => (
+            <tr key={dimension.name}>
+              <td>
+                <code>{dimension.name}</code>
+              </td>
+              <td>
+                <i>{dimension.symbol}</i>
+              </td>
+              <td className="min-w-24">
+                {dimension.label}. {dimension.help} <Allowed dimension={dimension} />
+              </td>
+              <td className="whitespace-nowrap">{dimension.unit === "1" ? "–" : (dimension.unit ?? "–")}</td>
+            </tr>
+          ))}
+        </tbody>
+      </ScrollTable>
       {entry.alternatives.map((names) => (
         <p key={names.join(" ")}>
           Exactly one of{" "}
@@ -77,39 +74,37 @@ export function Coordinates({ entry }: { readonly entry: ShapeEntry }) {
   const { gradable } = entry.media;
   return (
     <>
-      <div className="overflow-x-auto" tabIndex={0} role="group" aria-label="Coordinates">
-        <table className="w-full">
-          <thead>
-            <tr>
-              {["name", "what it is", "from", "to", "runs", "graded media"].map((head) => (
-                <th key={head} scope="col" className="font-semibold">
-                  {head}
-                </th>
-              ))}
-            </tr>
-          </thead>
-          <tbody>
-            {entry.coordinates.map(({ name, label, start, end, role }) => (
-              <tr key={name}>
-                <td>
-                  <code>{name}</code>
-                </td>
-                <td className="min-w-16">{label}</td>
-                <td>{start}</td>
-                <td>{end}</td>
-                <td>{role} the flow</td>
-                <td>
-                  {!gradable.includes(name)
-                    ? "not possible"
-                    : role === "along"
-                      ? "resistivities add up"
-                      : "conductivities add up"}
-                </td>
-              </tr>
+      <ScrollTable label="Coordinates">
+        <thead>
+          <tr>
+            {["name", "what it is", "from", "to", "runs", "graded media"].map((head) => (
+              <th key={head} scope="col" className="font-semibold">
+                {head}
+              </th>
             ))}
-          </tbody>
-        </table>
-      </div>
+          </tr>
+        </thead>
+        <tbody>
+          {entry.coordinates.map(({ name, label, start, end, role }) => (
+            <tr key={name}>
+              <td>
+                <code>{name}</code>
+              </td>
+              <td className="min-w-16">{label}</td>
+              <td>{start}</td>
+              <td>{end}</td>
+              <td>{role} the flow</td>
+              <td>
+                {!gradable.includes(name)
+                  ? "not possible"
+                  : role === "along"
+                    ? "resistivities add up"
+                    : "conductivities add up"}
+              </td>
+            </tr>
+          ))}
+        </tbody>
+      </ScrollTable>
       {gradable.length > 0 ? (
         <p>
           Positions of a profile are values of the coordinate, in metres or degrees. The kinds of profiles are

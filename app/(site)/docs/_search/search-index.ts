@@ -4,6 +4,7 @@ import { PROBLEMS } from "@/api/problem";
 import { plainText } from "../_parts/inline";
 import { GROUPS } from "../_content/pages";
 import type { Block } from "../_content/page";
+import { TRADE_WORDS } from "./trade-words";
 
 export interface Hit {
   readonly href: string;
@@ -16,6 +17,10 @@ export interface Hit {
 interface Entry extends Hit {
   readonly id: number;
   readonly text: string;
+  /** What snippets say. */
+  readonly code: string;
+  /** Other words of the trade for it. */
+  readonly trade: string;
 }
 
 /** Longest excerpt, characters. */
@@ -23,55 +28,76 @@ const EXCERPT = 180;
 
 let kept: MiniSearch<Entry> | undefined;
 
+/** Words of a question that say nothing about its subject. */
+const SMALL_WORDS = new Set(
+  "a an the of to in on at by for from with without and or not is are be do does i my we our it its how what where which why can".split(
+    " ",
+  ),
+);
+
 /**
  * The best places for a query, each once; words may be begun only, and mistyped by a letter. All words must be there,
  * or, where that finds nothing, any of them.
  */
 export function searchDocs(query: string): readonly Hit[] {
-  const words = query.trim();
-  if (words === "") return [];
   kept ??= build();
-  return kept
-    .search(words)
-    .slice(0, 20)
-    .map(({ href, title, page, excerpt }): Hit => ({
-      href: String(href),
-      title: String(title),
-      page: String(page),
-      excerpt: String(excerpt),
-    }));
+  const all = kept.search(query, { combineWith: "AND" });
+  const found = all.length > 0 ? all : kept.search(query, { combineWith: "OR" });
+  return found.slice(0, 20).map(({ href, title, page, excerpt }): Hit => ({
+    href: String(href),
+    title: String(title),
+    page: String(page),
+    excerpt: String(excerpt),
+  }));
 }
 
 function build(): MiniSearch<Entry> {
   const index = new MiniSearch<Entry>({
-    fields: ["title", "page", "text"],
+    fields: ["title", "page", "trade", "text", "code"],
     storeFields: ["href", "title", "page", "excerpt"],
+    processTerm: (term) => {
+      const word = term.toLowerCase();
+      return SMALL_WORDS.has(word) ? null : word;
+    },
     searchOptions: {
-      prefix: true,
+      prefix: (term) => term.length > 1,
       fuzzy: (term) => (term.length > 4 ? 0.2 : false),
-      boost: { title: 4, page: 2 },
-      combineWith: "AND",
+      boost: { title: 4, trade: 3, page: 2, code: 0.2 },
     },
   });
-  index.addAll([...guides(), ...shapes(), ...problems()].map((hit, id) => ({ ...hit, id })));
+  index.addAll(
+    [...guides(), ...shapes(), ...problems()].map((hit, id) => ({
+      ...hit,
+      id,
+      trade: TRADE_WORDS[hit.href] ?? "",
+    })),
+  );
   return index;
 }
 
-type Found = Omit<Entry, "id">;
+type Found = Omit<Entry, "id" | "trade">;
 
 function* guides(): Generator<Found> {
   for (const page of GROUPS.flatMap(({ pages }) => pages)) {
     if (!("slug" in page)) {
-      yield { href: page.href, title: page.title, page: "", excerpt: page.summary, text: page.summary };
+      const { href, title, summary } = page;
+      yield { href, title, page: "", excerpt: summary, text: summary, code: "" };
       continue;
     }
     const href = `/docs/${page.slug}`;
     const summary = plainText(page.summary);
-    yield { href, title: page.title, page: "", excerpt: summary, text: summary };
+    yield { href, title: page.title, page: "", excerpt: summary, text: summary, code: "" };
     for (const { id, title, blocks } of page.sections({ origin: "" })) {
       const text = blocks.map(blockText).join(" ");
       const first = plainText(blocks.find((block) => typeof block === "string") ?? text);
-      yield { href: `${href}#${id}`, title, page: page.title, excerpt: cut(first), text };
+      yield {
+        href: `${href}#${id}`,
+        title,
+        page: page.title,
+        excerpt: cut(first),
+        text,
+        code: blocks.map(blockCode).join(" "),
+      };
     }
   }
 }
@@ -81,7 +107,7 @@ function* shapes(): Generator<Found> {
     const names = entry.dimensions.flatMap(({ name, label }) => [name, label]);
     const text = [entry.id, entry.summary, ...names, ...entry.validity].join(" ");
     const href = `/docs/shapes/${entry.id}`;
-    yield { href, title: entry.title, page: "Shapes", excerpt: cut(entry.summary), text };
+    yield { href, title: entry.title, page: "Shapes", excerpt: cut(entry.summary), text, code: "" };
   }
 }
 
@@ -94,6 +120,7 @@ function* problems(): Generator<Found> {
       page: "Problems",
       excerpt: cut(plainText(description)),
       text,
+      code: "",
     };
   }
 }
@@ -106,6 +133,11 @@ function blockText(block: Block): string {
   if ("caution" in block) return plainText(block.caution);
   if ("note" in block) return plainText(block.note);
   return "";
+}
+
+function blockCode(block: Block): string {
+  if (typeof block === "string" || !("snippets" in block)) return "";
+  return block.snippets.map(({ label, code }) => `${label} ${code}`).join(" ");
 }
 
 function cut(text: string): string {

@@ -1,7 +1,9 @@
 import type { Metadata } from "next";
 import { Breadcrumb } from "../../../_ui/breadcrumb";
+import { ScrollFrame } from "../../../_ui/scroll-frame";
 import table from "./table.json";
 import { neighbours } from "../_content/pages";
+import { Deviation } from "../_parts/deviation";
 import { PageLinks } from "../_parts/page-links";
 
 export const metadata: Metadata = { title: "Accuracy" };
@@ -32,17 +34,17 @@ export default function Accuracy() {
         return rows.length === 0 ? null : (
           <section key={prefix} className="mt-4">
             <h2>{title}</h2>
-            <div className="mt-1 overflow-x-auto">
-              <table className="w-full max-w-prose border-collapse text-table">
+            <ScrollFrame label={title} className="mt-1 max-w-prose print:overflow-visible">
+              <table className="w-full border-collapse text-table">
                 <thead>
                   <tr className="border-b border-edge">
-                    <th scope="col" className="py-1 pe-3 text-start font-semibold">
+                    <th scope="col" className="px-1 py-1 text-start font-semibold">
                       Compared
                     </th>
-                    <th scope="col" className="py-1 pe-3 text-end font-semibold">
+                    <th scope="col" className="px-1 py-1 text-end font-semibold">
                       Comparisons
                     </th>
-                    <th scope="col" className="py-1 text-end font-semibold">
+                    <th scope="col" className="px-1 py-1 text-end font-semibold">
                       Worst relative deviation
                     </th>
                   </tr>
@@ -50,29 +52,20 @@ export default function Accuracy() {
                 <tbody>
                   {rows.map(({ file, group, cases, worst }) => (
                     <tr key={`${file} ${group}`} className="border-b border-rule">
-                      <td className="py-1 pe-3">{group}</td>
-                      <td className="py-1 pe-3 text-end font-mono">{cases}</td>
-                      <td className="py-1 text-end font-mono">{shown(worst)}</td>
+                      <td className="px-1 py-1">{group}</td>
+                      <td className="px-1 py-1 text-end font-mono">{cases}</td>
+                      <td className="px-1 py-1 text-end font-mono">
+                        <Deviation value={worst} />
+                      </td>
                     </tr>
                   ))}
                 </tbody>
               </table>
-            </div>
+            </ScrollFrame>
           </section>
         );
       })}
       <PageLinks {...neighbours("/docs/accuracy")} />
-    </>
-  );
-}
-
-/** A deviation with its exponent typeset. */
-function shown(worst: number) {
-  if (worst === 0) return "0";
-  const [mantissa, exponent] = worst.toExponential(1).split("e");
-  return (
-    <>
-      {mantissa}&#8239;·&#8239;10<sup>{exponent.replace("-", "−").replace("+", "")}</sup>
     </>
   );
 }

@@ -2,6 +2,7 @@ import type { Metadata } from "next";
 import Link from "next/link";
 import { PROBLEMS } from "@/api/problem";
 import { Breadcrumb } from "../../../_ui/breadcrumb";
+import { ScrollFrame } from "../../../_ui/scroll-frame";
 import { neighbours } from "../_content/pages";
 import { PageLinks } from "../_parts/page-links";
 
@@ -17,14 +18,14 @@ export default function Problems() {
         A call that is refused answers with a problem document (RFC 9457). Its <code>type</code> is the
         address of one of these pages, and for a 422 <code>errors</code> names each field that was wrong.
       </p>
-      <div className="mt-3 overflow-x-auto">
-        <table className="w-full max-w-prose border-collapse text-table">
+      <ScrollFrame label="All problems" className="mt-3 max-w-prose print:overflow-visible">
+        <table className="w-full border-collapse text-table">
           <thead>
             <tr className="border-b border-edge text-start">
-              <th scope="col" className="py-1 pe-3 text-start font-semibold">
+              <th scope="col" className="px-1 py-1 text-start font-semibold">
                 Status
               </th>
-              <th scope="col" className="py-1 text-start font-semibold">
+              <th scope="col" className="px-1 py-1 text-start font-semibold">
                 Problem
               </th>
             </tr>
@@ -32,8 +33,8 @@ export default function Problems() {
           <tbody>
             {entries.map(([code, { status, title }]) => (
               <tr key={code} className="border-b border-rule">
-                <td className="py-1 pe-3 align-top font-mono">{status}</td>
-                <td className="py-1">
+                <td className="px-1 py-1 align-top font-mono">{status}</td>
+                <td className="px-1 py-1">
                   <Link href={`/docs/problems/${code}`} className="link">
                     {title}
                   </Link>
@@ -44,7 +45,7 @@ export default function Problems() {
             ))}
           </tbody>
         </table>
-      </div>
+      </ScrollFrame>
       <PageLinks {...neighbours("/docs/problems")} />
     </>
   );

@@ -1,13 +1,25 @@
 "use client";
 
+import { useRouter } from "next/navigation";
+import { useState } from "react";
 import { Button } from "../../../_ui/button";
 import { CopyButton } from "../../../_ui/copy-button";
 import { Dialog } from "../../../_ui/dialog";
+import { keepKey } from "../../../_ui/docs-key";
 import { LocalTime } from "../../../_ui/local-time";
 import type { ShownKey } from "./key";
 
 /** The whole key, this once. Only the button closes it: a stray press must not lose it. */
 export function ShownSecret({ shown, onClose }: { readonly shown: ShownKey; readonly onClose: () => void }) {
+  const router = useRouter();
+  const [kept, setKept] = useState(true);
+
+  function start() {
+    // Kept by the tab alone: an address would be written down on the way.
+    if (keepKey(shown.key)) router.push("/docs/start");
+    else setKept(false);
+  }
+
   return (
     <Dialog
       open
@@ -15,9 +27,12 @@ export function ShownSecret({ shown, onClose }: { readonly shown: ShownKey; read
       title="Copy the key now"
       description="It is shown this once; only its hash is stored. Who loses it rotates the key."
       actions={
-        <Button variant="primary" onClick={onClose}>
-          I have copied it
-        </Button>
+        <>
+          <Button onClick={start}>Open the start page with this key</Button>
+          <Button variant="primary" onClick={onClose}>
+            I have copied it
+          </Button>
+        </>
       }
     >
       <p className="text-table">{shown.name}</p>
@@ -32,6 +47,11 @@ export function ShownSecret({ shown, onClose }: { readonly shown: ShownKey; read
           The secret before counts until <LocalTime at={shown.previousUntil} />.
         </p>
       ) : null}
+      {kept ? null : (
+        <p role="alert" className="mt-1 text-table text-oxide">
+          This browser keeps nothing for the page; copy the key and paste it there.
+        </p>
+      )}
       <p className="mt-1 text-table text-ink-soft">
         Send it as <code>Authorization: Bearer …</code>, from a place that only the program can read.
       </p>

@@ -18,6 +18,7 @@ import { FAMILY_TITLES } from "../../../calculate/_model/families";
 import { readGeometry } from "../../../calculate/_server/geometry";
 import { Snippets } from "../../_parts/blocks";
 import { PageLinks } from "../../_parts/page-links";
+import { ShapeAccuracy } from "../../_parts/shape-accuracy";
 import { Coordinates, Dimensions } from "../../_parts/shape-tables";
 import { WorkedExample } from "../../_parts/worked-example";
 import { shapeSnippets } from "../shape-snippets";
@@ -38,7 +39,10 @@ export default async function ShapeDoc({ params }: Props) {
   if (!shape) notFound();
   const entry = shapeEntry(shape);
   const request = exampleRequest(shape);
-  const result = computeResistance({ ...request, include: ["steps"] }, { material: libraryMaterial });
+  const result = computeResistance(
+    { ...request, include: ["steps", "checks"] },
+    { material: libraryMaterial },
+  );
   const geometry = readGeometry(shape, shape.example.dimensions);
   const place = catalogue.indexOf(shape);
   const linkTo = (other: (typeof catalogue)[number] | undefined) =>
@@ -93,6 +97,8 @@ export default async function ShapeDoc({ params }: Props) {
             {text}
           </Notice>
         ))}
+        <h2 id="accuracy">Accuracy</h2>
+        <ShapeAccuracy result={result} />
         <h2 id="example">A worked example</h2>
         <WorkedExample result={result} />
         <h2 id="call">The call</h2>
