@@ -30,7 +30,7 @@ export function FramePicture({ view, api, path }: PictureProps) {
         viewBox={picture.viewBox}
         role="img"
         aria-label={view.words.fieldPicture}
-        className="mt-1 block w-full"
+        className="mx-auto mt-1 block w-full max-w-[32rem]"
       >
         {/* As an image: whatever is in it, it runs and loads nothing. */}
         <image href={picture.address} width="100%" height="100%" />
