@@ -15,7 +15,7 @@ export interface EmbedReady {
 }
 
 /** A result is the API's own: of a shape, or of a field solution where the widget is on an outline (`method` "field"). */
-export type EmbedResult = AnsweredResistance | FieldResult;
+export type EmbedResult = AnsweredResistance | NonNullable<FieldResult>;
 
 /** Why a widget has no answer, or is not there. */
 export interface EmbedError {
