@@ -1,13 +1,17 @@
 "use client";
 
+import dynamic from "next/dynamic";
 import { bracketText } from "../../_ui/bracket";
 import { cautionIn } from "../_cautions/caution-in";
 import { filled } from "../_words/words";
-import { FrameClosing } from "./frame-closing";
 import type { FrameResult, FrameView } from "./frame-view";
 import type { FrameAnswer } from "./use-answer";
 import { localNumbers } from "./local-number";
 import { StrayRange } from "./stray-range";
+
+const FrameClosing = dynamic(() => import("./frame-closing").then(({ FrameClosing: Closing }) => Closing), {
+  ssr: false,
+});
 
 interface AnswerProps {
   readonly view: FrameView;

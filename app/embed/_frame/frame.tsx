@@ -3,15 +3,12 @@
 import dynamic from "next/dynamic";
 import { type CSSProperties, useCallback, useEffect, useMemo, useRef, useState } from "react";
 import { Button } from "../../_ui/button";
-import { OutlineDrawing } from "../../_ui/drawing/outline-drawing";
-import type { OutlinePlan } from "../../_ui/drawing/outline-plan";
 import { ShapeDrawing } from "../../_ui/drawing/shape-drawing";
 import { QuantitySymbol } from "../../_ui/quantity-symbol";
 import { filled } from "../_words/words";
 import { FrameAnswerPane } from "./answer-pane";
 import { FrameApi, type Trouble, type Values } from "./frame-api";
 import { localDrawing } from "./local-drawing";
-import { localNumbers } from "./local-number";
 import { InputField } from "./input-field";
 import { ToleranceField } from "./tolerance-field";
 import { TroubleCard } from "./trouble-card";
@@ -26,6 +23,7 @@ const FramePlots = dynamic(() => import("./frame-plots").then(({ FramePlots: Plo
   ssr: false,
 });
 
+const PlanView = dynamic(() => import("./plan-view").then(({ PlanView: View }) => View));
 const FramePicture = dynamic(() => import("./frame-picture").then(({ FramePicture: Picture }) => Picture), {
   ssr: false,
 });
@@ -164,22 +162,6 @@ export function Frame({ view }: { readonly view: FrameView }) {
         </p>
       </footer>
     </main>
-  );
-}
-
-function PlanView({ view, plan }: { readonly view: FrameView; readonly plan: OutlinePlan }) {
-  const { words, locale } = view;
-  const size = localNumbers(plan.size, locale);
-  const names = plan.terminals.map(({ name }) => name).join(", ");
-  return (
-    <figure>
-      <OutlineDrawing
-        plan={plan}
-        label={filled(words.outlineOf, size, names)}
-        className="mx-auto block w-full max-w-[20rem]"
-      />
-      <figcaption className="text-center font-mono text-small text-ink-soft">{size}</figcaption>
-    </figure>
   );
 }
 
