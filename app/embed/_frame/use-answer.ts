@@ -3,12 +3,14 @@
 import { useCallback, useEffect, useRef, useState } from "react";
 import { type FrameApi, FrameTrouble, type Trouble, type Values } from "./frame-api";
 import type { FrameDrawing, FrameProgress, FrameResult } from "./frame-view";
-import { solveOutline } from "./solve-outline";
 
 /** How long typing may pause before a call is made, ms. */
 const PAUSE_MS = 250;
 /** Before a field solution is begun, which costs more than a formula. */
 const SOLVE_PAUSE_MS = 700;
+
+/** Where not even the way of asking could be loaded, ms. */
+const AGAIN_MS = 10_000;
 
 export interface FrameAnswer {
   /** The answer to what was typed last, or the one before while that is on its way or refused. */
@@ -43,15 +45,16 @@ export function useAnswer(api: FrameApi, values: Values, onOutline: boolean): Fr
         const given: Values = JSON.parse(text);
         const tell = (now: FrameProgress) => setClosing((before) => ({ now, first: before?.first ?? now }));
         const solved = onOutline
-          ? await solveOutline(api, given, abort.signal, tell)
+          ? await (await import("./solve-outline")).solveOutline(api, given, abort.signal, tell)
           : { result: await api.post<FrameResult>("/api/v1/resistance", given, abort.signal), path: null };
         if (abort.signal.aborted) return;
         setResult(solved.result);
         setPath(solved.path);
         setTrouble(null);
       } catch (error) {
-        if (abort.signal.aborted || !(error instanceof FrameTrouble)) return;
-        setTrouble(error.trouble);
+        if (abort.signal.aborted) return;
+        // What cannot be loaded, as the way of solving an outline, is away with the service.
+        setTrouble(error instanceof FrameTrouble ? error.trouble : { kind: "away", waitMs: AGAIN_MS });
       }
       setPending(false);
       setClosing(null);
