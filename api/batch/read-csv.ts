@@ -14,8 +14,6 @@ export interface CsvTable {
   /** Cells as they came; an empty row has no item. */
   readonly rows: readonly (readonly string[])[];
   readonly delimiter: string;
-  /** Whether its numbers have decimal commas, which only a table between semicolons may have. */
-  readonly decimalComma: boolean;
   /** Whether the file began with a byte order mark; spreadsheets tell UTF-8 by it. */
   readonly marked: boolean;
 }
@@ -55,26 +53,7 @@ export function readCsv(text: string, marked: boolean): CsvTable {
     throw tooManyItems(`The table has more than ${MOST_LINES.toLocaleString("en")} lines`);
   }
   const columns = readHeader(header, rows);
-  const decimalComma = delimiter === ";" && hasDecimalCommas(columns, rows);
-  return { header, columns, rows, delimiter, decimalComma, marked };
-}
-
-const BEGINS_WITH_COMMA = /^\s*[+\-−]?\d*,\d/;
-/** Not "1.234,5", which is refused by itself. */
-const BEGINS_WITH_POINT = /^\s*[+\-−]?\d*\.\d+(?![\d.,])/;
-
-/** Whether some numbers of the inputs have a decimal comma and none a point: where both occur either may be a slip. */
-function hasDecimalCommas(columns: readonly Column[], rows: readonly (readonly string[])[]): boolean {
-  const inputs = columns.flatMap(({ role }, index) => (role === "input" ? [index] : []));
-  let found = false;
-  for (const row of rows) {
-    for (const index of inputs) {
-      const cell = row[index] ?? "";
-      if (BEGINS_WITH_POINT.test(cell)) return false;
-      found ||= BEGINS_WITH_COMMA.test(cell);
-    }
-  }
-  return found;
+  return { header, columns, rows, delimiter, marked };
 }
 
 export function isEmptyRow(row: readonly string[]): boolean {

@@ -17,17 +17,12 @@ interface Place {
 /** A cell that is nothing but a number, also a misspelt one: the unit of its column is put behind it. */
 const BARE = /^[\d.,'\s+\-−eE]+$/;
 
-const DECIMAL_COMMA = /^([+\-−]?\d*),(?=\d)/;
-
 /** Turns the rows of one table into requests; what a name means is decided shape by shape. */
 export class RowReader {
   private readonly shapeColumn: number;
   private readonly places = new Map<string, readonly Place[]>();
 
-  constructor(
-    private readonly columns: readonly Column[],
-    private readonly decimalComma = false,
-  ) {
+  constructor(private readonly columns: readonly Column[]) {
     this.shapeColumn = columns.findIndex((column) => column.role === "row" && column.name === "shape");
   }
 
@@ -42,9 +37,8 @@ export class RowReader {
     const parts: Record<string, Values> = { dimensions: {}, medium: {}, operating: {} };
     const media: Record<string, Values> = {};
     for (const place of this.placesFor(shape)) {
-      const cell = (cells[place.index] ?? "").trim();
-      if (cell === "") continue;
-      const text = this.decimalComma ? cell.replace(DECIMAL_COMMA, "$1.") : cell;
+      const text = (cells[place.index] ?? "").trim();
+      if (text === "") continue;
       const target = place.at === "media" ? (media[place.medium] ??= {}) : parts[place.at];
       target[place.member] = valueOf(text, place);
     }

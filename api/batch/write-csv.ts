@@ -23,18 +23,12 @@ export class CsvWriter {
 
   row(cells: readonly string[], outcome: ItemOutcome | null): string {
     const own = this.kept.map((index) => cells[index] ?? "");
-    const results = outcome ? resultCells(outcome) : RESULT_COLUMNS.map(() => "");
-    return this.line([...own, ...(this.table.decimalComma ? results.map(withComma) : results)]);
+    return this.line([...own, ...(outcome ? resultCells(outcome) : RESULT_COLUMNS.map(() => ""))]);
   }
 
   private line(cells: readonly string[]): string {
     return csvLine(cells, this.table.delimiter);
   }
-}
-
-/** A result with the decimal comma of the table it came in; a sentence about a problem stays as it is. */
-function withComma(cell: string): string {
-  return cell.replace(/^([\-−]?\d+)\.(?=\d)/, "$1,");
 }
 
 /** One line with its end, every cell defused and quoted where it must be. */

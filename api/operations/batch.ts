@@ -44,7 +44,7 @@ function* requestsOf(
     }
     return;
   }
-  const reader = new RowReader(body.table.columns, body.table.decimalComma);
+  const reader = new RowReader(body.table.columns);
   for (const row of body.table.rows) {
     if (isEmptyRow(row)) {
       yield { row, step: { kind: "empty" } };
@@ -119,7 +119,7 @@ export const postBatch = defineOperation({
   tag: "Resistance",
   summary: "Compute up to 10,000 resistances",
   description:
-    "Each item is answered or refused on its own, in order, as `POST /resistance` would; only `record` is not for batches. Answers stream out as they are ready. As `text/csv` a row is a request: columns `shape`, the dimensions by name, `material`, `resistivity`, `conductivity`, `sheetResistance`, `thickness`, `core.material` and the like, `temperature`, `voltage`, `current`, `power`, `label`; a unit stands in the cell or in the header (`width/mm`); comma, semicolon or tab separates. A table between semicolons may have decimal commas, and then its answer has them too. The answer has the same rows and columns and behind them what came out. A cell that a spreadsheet would take for a formula gets an apostrophe in front. A table is answered as a table and JSON as JSON, unless `Accept` or `format` says otherwise. Each answered item costs what it would by itself, as a rule one computation; what all of them would cost is reserved before the work, and what was not needed is given back. Where the time of a batch is over, the items that are left are told with status 503.",
+    "Each item is answered or refused on its own, in order, as `POST /resistance` would; only `record` is not for batches. Answers stream out as they are ready. As `text/csv` a row is a request: columns `shape`, the dimensions by name, `material`, `resistivity`, `conductivity`, `sheetResistance`, `thickness`, `core.material` and the like, `temperature`, `voltage`, `current`, `power`, `label`; a unit stands in the cell or in the header (`width/mm`); comma, semicolon or tab separates. Numbers have decimal points, whatever separates. The answer has the same rows and columns and behind them what came out. A cell that a spreadsheet would take for a formula gets an apostrophe in front. A table is answered as a table and JSON as JSON, unless `Accept` or `format` says otherwise. Each answered item costs what it would by itself, as a rule one computation; what all of them would cost is reserved before the work, and what was not needed is given back. Where the time of a batch is over, the items that are left are told with status 503.",
   scope: "compute",
   produces: [JSON_TYPE, CSV_TYPE],
   request: {

@@ -84,8 +84,8 @@ export function SaveRecord({
     );
   }
 
-  const { teams } = saving;
-  const team = teams.find(({ id }) => id === (chosen ?? saving.team)) ?? teams[0];
+  const { teams, team: current } = saving;
+  const team = teams.find(({ id }) => id === (chosen ?? current)) ?? teams[0];
 
   function start() {
     attempt.current = { text: "", key: "" };
@@ -103,7 +103,7 @@ export function SaveRecord({
       attempt.current = { text: text + team.id, key: newAttemptKey() };
     }
     try {
-      if (team.id !== saving.team) {
+      if (team.id !== current) {
         await callConsole("PATCH", "account", { team: team.id });
         router.refresh();
       }

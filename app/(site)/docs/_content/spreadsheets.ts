@@ -104,7 +104,7 @@ export const spreadsheets: DocPage = {
         {
           steps: [
             "Download the table of the shape from its [page](/docs/shapes), “Table of requests to start from”: its columns, with the example as the first row. Open it in the spreadsheet and fill in a row for each part.",
-            "Save it as CSV in UTF-8. Commas, semicolons and tabs separate; a unit stands in the cell or in the header, as `width/mm`. Between semicolons numbers may have decimal commas, and the answer then has them too; elsewhere write points.",
+            "Save it as CSV in UTF-8. Commas, semicolons and tabs separate; a unit stands in the cell or in the header, as `width/mm`. Numbers need decimal points here: a cell with a decimal comma is refused in its row. The [table page](/calculate/table) reads decimal commas and gives them back.",
             "Send the file as below, or paste it into the [table](/calculate/table), which needs no key.",
             "Open what comes back: the same rows and columns, and behind them `resistance/ohm`, `lower/ohm`, `upper/ohm`, `text`, `status` and `problem`.",
           ],

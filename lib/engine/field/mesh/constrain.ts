@@ -55,7 +55,7 @@ export function obstaclesBetween(mesh: Triangulation, a: number, b: number, most
   const obstacles: Obstacle[] = [];
   let from = a;
   while (obstacles.length < most && mesh.findEdge(from, b) < 0) {
-    let next = firstAcross(mesh, from, b);
+    let next: number | VertexObstacle | null = firstAcross(mesh, from, b);
     while (typeof next === "number" && obstacles.length < most) {
       if (mark[next] !== 0) obstacles.push({ kind: "edge", halfEdge: next });
       next = nextAcross(mesh, from, b, next);

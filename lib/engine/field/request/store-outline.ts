@@ -20,7 +20,8 @@ export const outlineRequestSchema = z
       .string()
       .trim()
       .max(LONGEST_NAME)
-      .regex(/^\P{Cc}*$/u, "must be one line.")
+      // A pattern would stand in the OpenAPI document with its flag, which JSON Schema does not know.
+      .refine((name) => !/\p{Cc}/u.test(name), "must be one line.")
       .default("")
       .meta({ description: "What the team calls it; shown where one is chosen.", example: "Track, rev B" }),
     outline: outlineSchema,
