@@ -217,4 +217,43 @@ describe("the network", () => {
     );
     await close();
   });
+
+  it("evaluates tolerances of elements, tells their budget, and keeps them in the link and the JSON", async () => {
+    const { page, close } = await bench.open("/network");
+    const range = page.getByTestId("stray-range");
+    await page.getByRole("button", { name: "Give element 3 a tolerance" }).click();
+    // One press evaluates them: the material of the shape beside it brings its own.
+    await range.getByText("by first-order propagation").waitFor();
+    await page.getByRole("textbox", { name: "Resistance of element 2" }).fill("48.697 uohm");
+    await page.getByLabel("Evaluated by").selectOption("worst-case");
+    await page.getByRole("textbox", { name: "Tolerance of element 3" }).fill("2");
+    // 22.551 + 6 + 18.486 µΩ by hand, the bolts between 4 and 8 µΩ: a bare tolerance is in the value's unit.
+    await range.getByText(/45\.0\sµΩ … 49\.0\sµΩ/u).waitFor();
+    const budget = page.getByTestId("budget");
+    await budget.getByRole("row", { name: /^bolts 100\.0 %/ }).waitFor();
+    expect(await page.locator("pre").first().textContent()).toContain('"tolerance": "2 uohm"');
+
+    // The API's complaint stands at the row's field.
+    await page.getByRole("textbox", { name: "Tolerance of element 3" }).fill("7 uohm");
+    const cell = page.getByRole("cell", { name: /it must be smaller than the value/ });
+    await cell.waitFor();
+    expect(await cell.getByRole("textbox").getAttribute("aria-invalid")).toBe("true");
+    await page.getByRole("button", { name: "plus and minus apart for element 3" }).click();
+    await page.getByRole("textbox", { name: "Lower tolerance of element 3" }).fill("0");
+    await range.getByText(/47\.0\sµΩ … 54\.0\sµΩ/u).waitFor();
+
+    await page.waitForFunction(() => decodeURIComponent(location.hash).includes("plus=7"));
+    await page.reload({ waitUntil: "load" });
+    await range.getByText(/47\.0\sµΩ … 54\.0\sµΩ/u).waitFor();
+    expect(await page.getByLabel("Evaluated by").inputValue()).toBe("worst-case");
+    await page.getByRole("button", { name: "JSON", exact: true }).click();
+    const json = page.getByRole("textbox", { name: "JSON" });
+    expect(JSON.parse(await json.inputValue())).toMatchObject({ uncertainty: { method: "worst-case" } });
+    await json.fill(
+      '{"elements":[{"name":"a","between":["p","q"],"resistance":{"value":"10 ohm","tolerance":"10 %"}}],"ports":["p","q"],"uncertainty":{"method":"worst-case"}}',
+    );
+    await page.getByRole("button", { name: "Take over" }).click();
+    await range.getByText(/9\.0\sΩ … 11\.0\sΩ/u).waitFor();
+    await close();
+  });
 });

@@ -1,10 +1,20 @@
 import { describe, expect, test } from "vitest";
 import { networkBody } from "@/app/(site)/network/_model/body";
+import { sortComplaints } from "@/app/(site)/network/_model/complaints";
 import { layOut } from "@/app/(site)/network/_model/layout";
-import { addressOf, fromText, newElement, START, toText } from "@/app/(site)/network/_model/network";
+import {
+  addressOf,
+  fromText,
+  newElement,
+  readValue,
+  START,
+  toText,
+} from "@/app/(site)/network/_model/network";
 import { readBodyText } from "@/app/(site)/network/_model/read-body";
+import { bringsTolerance, changedTolerance } from "@/app/(site)/network/_model/tolerance";
 import { firstSolution } from "@/app/(site)/network/_server/first-solution";
 import { shapeRequest } from "@/app/(site)/network/_server/shape-request";
+import { computeNetwork, libraryMaterial } from "@/lib/engine";
 
 describe("a network in an address", () => {
   test("comes back as it was; a foreign text does not", () => {
@@ -90,6 +100,122 @@ describe("a network as JSON", () => {
     const reading = readBodyText(text);
     const found = reading.ok ? [] : reading.complaints;
     expect(found.find((complaint) => complaint.pointer === pointer)?.detail).toContain(detail);
+  });
+});
+
+describe("tolerances of a network", () => {
+  const body = {
+    elements: [
+      { name: "a", between: ["in", "n"], resistance: { value: "42 uohm", tolerance: "5 %" } },
+      {
+        name: "b",
+        between: ["n", "m"],
+        resistance: { value: "6 uohm", plus: "2 uohm", minus: "1 uohm", distribution: "triangular" },
+      },
+      { name: "c", between: ["m", "out"], resistance: "1 uohm" },
+    ],
+    ports: ["in", "out"],
+    uncertainty: { method: "worst-case" },
+  };
+  const read = (asked: object) => {
+    const reading = readBodyText(JSON.stringify(asked));
+    if (!reading.ok) throw new Error(JSON.stringify(reading.complaints));
+    return reading.network;
+  };
+
+  test("come from JSON, stand in the address and go into the body", () => {
+    const network = read(body);
+    expect(networkBody(network, new Map())).toEqual(body);
+    const kept = fromText(toText(network));
+    expect(kept && networkBody(kept, new Map())).toEqual(body);
+    // An address without tolerances is as it always was.
+    expect(toText(START)).not.toContain("uncertainty");
+  });
+
+  test("a bare one is in ohms in the body and in the value's unit on the page", () => {
+    const resistance = { value: "42 uohm", tolerance: 2e-6 };
+    const network = read({ ...body, elements: [{ ...body.elements[0], resistance }] });
+    const ports = ["in", "n"];
+    const before = { ...body, elements: [{ ...body.elements[0], resistance }], ports };
+    const after = { ...networkBody(network, new Map()), ports };
+    const [asked, given] = [before, after].map((one) => computeNetwork(one, { material: libraryMaterial }));
+    expect(given.uncertainty?.low).toBe(asked.uncertainty?.low);
+
+    const typed = {
+      ...START,
+      elements: [{ ...network.elements[0], value: readValue("42 µΩ", { plus: "1,5" }) }],
+    };
+    expect(networkBody(typed, new Map())?.elements).toMatchObject([
+      { resistance: { value: "42 µΩ", plus: "1.5 µΩ" } },
+    ]);
+  });
+
+  test("change as the fields of a calculation do, and stay with a resistance that is typed anew", () => {
+    const one = changedTolerance("element-3", undefined, {
+      "element-3.tolerance": "1 %",
+      uncertainty: "propagation",
+    });
+    expect(one).toEqual({ tolerance: "1 %" });
+    const apart = { "element-3.tolerance": undefined, "element-3.plus": "1 %", "element-3.minus": "" };
+    expect(changedTolerance("element-3", one, apart)).toEqual({ plus: "1 %", minus: "" });
+    expect(changedTolerance("element-3", one, { "element-3.tolerance": undefined })).toBeUndefined();
+    expect(readValue("7 ohm", one)).toEqual({ kind: "resistance", text: "7 ohm", tolerance: one });
+    expect(readValue("/calculate/bar", one)).toEqual({ kind: "shape", address: "bar" });
+  });
+
+  test("of a calculation come with its link", () => {
+    const link = "/calculate/bar?length=1m&width=2mm&width.tolerance=1%25&thickness=3mm&resistivity=1";
+    expect(bringsTolerance(readValue(link))).toBe(true);
+    expect(bringsTolerance(readValue("/calculate/bar?length=1m"))).toBe(false);
+    const found = shapeRequest("bar", new URLSearchParams(link.split("?")[1]));
+    expect(found?.request.dimensions).toMatchObject({ width: { value: "2 mm", tolerance: "1 %" } });
+    expect(found?.request.uncertainty).toBeUndefined();
+  });
+
+  test.each([
+    [{ value: "1", tolerance: true }, "#/elements/0/resistance/tolerance", "a number or a text"],
+    [{ value: "1", tolerance: 1, plus: 1 }, "#/elements/0/resistance", "either tolerance, or plus and minus"],
+    [{ value: null, plus: 1 }, "#/elements/0/resistance/value", "a number or a text"],
+    [{ value: 1, plus: 1, distribution: "gauss" }, "#/elements/0/resistance/distribution", "uniform, normal"],
+    [{ value: 1, plus: 1, sigma: 1 }, "#/elements/0/resistance/sigma", "has no field"],
+  ])("%j is not taken over", (resistance, pointer, detail) => {
+    const reading = readBodyText(
+      JSON.stringify({ ...body, elements: [{ ...body.elements[0], resistance }] }),
+    );
+    const found = reading.ok ? [] : reading.complaints;
+    expect(found.find((complaint) => complaint.pointer === pointer)?.detail).toContain(detail);
+  });
+
+  test.each([
+    [{ method: "monte-carlo" }, "#/uncertainty/method", '"propagation" or "worst-case"'],
+    [{ method: "propagation", trials: 5 }, "#/uncertainty/trials", "has no field"],
+    ["propagation", "#/uncertainty", "an object with a method"],
+  ])("the method %j is not taken over", (uncertainty, pointer, detail) => {
+    const reading = readBodyText(JSON.stringify({ ...body, uncertainty }));
+    const found = reading.ok ? [] : reading.complaints;
+    expect(found.find((complaint) => complaint.pointer === pointer)?.detail).toContain(detail);
+  });
+
+  test("complaints stand at the row, at the choice, or are told as a whole", () => {
+    const errors = [
+      { pointer: "#/elements/1/resistance/tolerance", detail: "must be smaller." },
+      { pointer: "#/elements/2/resistance/distribution", detail: "must be uniform." },
+      { pointer: "#/elements/2/resistance/value", detail: "must be a resistance." },
+      { pointer: "#/elements/0/request/dimensions/width", detail: "must be a length." },
+      { pointer: "#/uncertainty/method", detail: "must be known." },
+      { pointer: "#/ports/0", detail: "is no node." },
+      { pointer: "#/operating/current", detail: "must be a current." },
+    ];
+    const sorted = sortComplaints({ title: "Wrong", errors }, [11, 12, 13]);
+    expect(sorted.complaints.get(12)).toEqual({ tolerance: { tolerance: "Must be smaller." } });
+    expect(sorted.complaints.get(13)).toEqual({
+      tolerance: { tolerance: "Must be uniform." },
+      value: "must be a resistance.",
+    });
+    expect(sorted.complaints.get(11)).toEqual({ value: "width must be a length." });
+    expect(sorted.uncertainty).toBe("Must be known.");
+    expect(sorted.ports).toEqual(["is no node."]);
+    expect(sorted.rest?.errors).toEqual([errors[6]]);
   });
 });
 

@@ -10,6 +10,7 @@ import { sketchFromHash } from "@/app/(site)/outline/_model/address";
 import { fieldBody } from "@/app/(site)/outline/_model/field-body";
 import { EMPTY_SKETCH } from "@/app/(site)/outline/_model/start-outlines";
 import {
+  computeNetwork,
   computeResistance,
   computeSizing,
   exampleRequest,
@@ -176,6 +177,44 @@ describe("a sizing's record", () => {
     const content = sizing({ ...BEND, solveFor: "scaleX", target: "400 ohm" }, result);
     expect(content.subject).toBe("Outline: sizing");
     expect(content.picture?.kind === "svg" && content.picture.draw(LOOK)).toContain("<tspan");
+  });
+});
+
+describe("a network's record", () => {
+  it("has the range that its tolerances leave, and the budget by element", () => {
+    const request = {
+      elements: [
+        { name: "bolts", between: ["in", "m"], resistance: { value: "6 uohm", plus: "2 uohm" } },
+        {
+          name: "bar",
+          between: ["m", "out"],
+          request: {
+            shape: "bar",
+            dimensions: BAR.dimensions,
+            medium: { resistivity: { value: "17 nohm m", tolerance: "3 %" } },
+          },
+        },
+      ],
+      ports: ["in", "out"],
+      uncertainty: { method: "worst-case" },
+    };
+    const result = computeNetwork(request, { material: libraryMaterial });
+    const { sections } = contentOf({ ...recordOf(BAR), operation: "network", request, result });
+    const inputs = sections.find(({ id }) => id === "inputs")?.blocks[0];
+    expect(inputs?.kind === "table" && inputs.rows.map((row) => row[2])).toEqual([
+      "6 uohm + 2 uohm, − 0\u2009Ω",
+      "Rectangular bar, length 250 mm, width 40 mm ± 0.1 mm, thickness 5 mm, 17 nohm m ± 3 %",
+    ]);
+    const stray = sections.find(({ id }) => id === "uncertainty");
+    const facts = stray?.blocks.flatMap((block) => (block.kind === "facts" ? block.facts : [])) ?? [];
+    // 21.25 µΩ of the bar × 0.97 / 1.0025 + 6 µΩ, and × 1.03 / 0.9975 + 8 µΩ.
+    expect(facts[1]).toEqual({
+      name: "Range",
+      value: expect.stringMatching(/^26\.56\sµΩ … 29\.94\sµΩ$/u),
+      note: "covers every value inside the tolerances",
+    });
+    const budget = stray?.blocks.find((block) => block.kind === "table");
+    expect(budget?.kind === "table" && budget.rows.map(([name]) => name)).toEqual(["bolts", "bar"]);
   });
 });
 

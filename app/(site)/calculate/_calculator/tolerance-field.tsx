@@ -17,6 +17,11 @@ interface Temperature {
   readonly temperature?: boolean;
 }
 
+interface Compact {
+  /** One line for a table's cell. */
+  readonly compact?: boolean;
+}
+
 /** Offers a tolerance at the end of a field's label; nothing once there is one. */
 export function ToleranceButton({ form, name, label, temperature = false }: ToleranceProps & Temperature) {
   const { parameters, change, tolerances } = form;
@@ -48,8 +53,26 @@ const SIDES = {
   minus: { sign: "−", said: "Lower tolerance" },
 } as const;
 
+const EVENLY = "the same to both sides";
+const APART = "plus and minus apart";
+
+const IN_FORM = {
+  row: "mb-1.5 border-s-2 border-rule ps-1",
+  sides: "grid grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto] items-center gap-1",
+  side: "min-w-0",
+  spread: "mt-0.5 flex flex-wrap items-center gap-1",
+  distribution: "w-auto! max-w-full min-w-0",
+};
+const IN_CELL: typeof IN_FORM = {
+  row: "flex flex-wrap items-center gap-x-0.5",
+  sides: "flex items-center gap-0.5",
+  side: "w-10! medium:min-h-4!",
+  spread: "flex items-center gap-0.5",
+  distribution: "w-12! medium:min-h-4!",
+};
+
 /** The tolerance of a quantity: how far, to both sides alike or to each, and how it is spread. */
-export function ToleranceRow({ form, name, label }: ToleranceProps) {
+export function ToleranceRow({ form, name, label, compact = false }: ToleranceProps & Compact) {
   const { parameters, change, errorAt } = form;
   if (!form.tolerances || !hasTolerance(parameters, name)) return null;
   const said = label.toLowerCase();
@@ -70,9 +93,10 @@ export function ToleranceRow({ form, name, label }: ToleranceProps) {
       [`${name}.minus`]: undefined,
       [`${name}.tolerance`]: text("plus") || text("minus"),
     });
+  const look = compact ? IN_CELL : IN_FORM;
   return (
-    <div className="mb-1.5 border-s-2 border-rule ps-1">
-      <div className="grid grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto] items-center gap-1">
+    <div className={look.row}>
+      <div className={look.sides}>
         {members.map((member) => (
           <label key={member} className="flex items-center gap-0.5">
             <span aria-hidden className="w-1.5 shrink-0 font-mono">
@@ -90,11 +114,11 @@ export function ToleranceRow({ form, name, label }: ToleranceProps) {
               autoComplete="off"
               autoCapitalize="off"
               spellCheck={false}
-              className={`${CONTROL} min-w-0`}
+              className={`${CONTROL} ${look.side}`}
             />
           </label>
         ))}
-        {uneven ? null : <span />}
+        {uneven || compact ? null : <span />}
         <button
           type="button"
           aria-label={`Take the tolerance of ${said} away`}
@@ -104,7 +128,7 @@ export function ToleranceRow({ form, name, label }: ToleranceProps) {
           <X aria-hidden size={15} />
         </button>
       </div>
-      <div className="mt-0.5 flex flex-wrap items-center gap-1">
+      <div className={look.spread}>
         <select
           aria-label={`Distribution of ${said}`}
           value={parameters[`${name}.distribution`] ?? "uniform"}
@@ -113,7 +137,7 @@ export function ToleranceRow({ form, name, label }: ToleranceProps) {
               [`${name}.distribution`]: event.target.value === "uniform" ? undefined : event.target.value,
             })
           }
-          className={`${CONTROL} w-auto! max-w-full min-w-0 font-sans!`}
+          className={`${CONTROL} ${look.distribution} font-sans!`}
         >
           {DISTRIBUTIONS.map((option) => (
             <option key={option.value} value={option.value}>
@@ -123,14 +147,25 @@ export function ToleranceRow({ form, name, label }: ToleranceProps) {
         </select>
         <button
           type="button"
-          className="min-h-4 cursor-pointer rounded px-0.5 text-small link"
+          className="min-h-4 cursor-pointer rounded px-0.5 text-small whitespace-nowrap link"
           onClick={uneven ? join : part}
         >
-          {uneven ? "the same to both sides" : "plus and minus apart"}
+          {compact ? (
+            <>
+              <span aria-hidden title={uneven ? EVENLY : APART} className="font-mono">
+                {uneven ? "±" : "+ −"}
+              </span>
+              <span className="sr-only">{uneven ? EVENLY : APART}</span>
+            </>
+          ) : uneven ? (
+            EVENLY
+          ) : (
+            APART
+          )}
           <span className="sr-only"> for {said}</span>
         </button>
       </div>
-      <p id={errorId} className="mt-0.5 text-small text-oxide">
+      <p id={errorId} className="mt-0.5 text-small text-oxide empty:hidden">
         {errors.join(" ")}
       </p>
     </div>

@@ -2,17 +2,24 @@
 
 import { CONTROL, Field } from "../../../_ui/field";
 import { Select } from "../../../_ui/select";
+import { UNCERTAINTY_METHODS, type UncertaintyMethod } from "../_model/tolerances";
 import type { PlainForm } from "./form-context";
 
-const METHODS = [
+const METHODS: readonly { readonly value: UncertaintyMethod | ""; readonly label: string }[] = [
   { value: "", label: "Not evaluated" },
   { value: "propagation", label: "First-order propagation (GUM)" },
   { value: "worst-case", label: "Worst case" },
   { value: "monte-carlo", label: "Monte Carlo (GUM Supplement 1)" },
 ];
 
+interface UncertaintyProps {
+  readonly form: PlainForm;
+  /** Methods that are offered; all of them if left out. */
+  readonly methods?: readonly UncertaintyMethod[];
+}
+
 /** How tolerances are evaluated; for Monte Carlo how often, and from which seed. */
-export function UncertaintyFields({ form }: { readonly form: PlainForm }) {
+export function UncertaintyFields({ form, methods = UNCERTAINTY_METHODS }: UncertaintyProps) {
   const { parameters, change, errorAt } = form;
   const method = parameters.uncertainty ?? "";
   return (
@@ -21,7 +28,7 @@ export function UncertaintyFields({ form }: { readonly form: PlainForm }) {
       <Select
         label="Evaluated by"
         value={method}
-        options={METHODS}
+        options={METHODS.filter(({ value }) => value === "" || methods.includes(value))}
         error={errorAt("uncertainty")}
         help={
           method === ""

@@ -1,5 +1,6 @@
 import { readTyped } from "../../../_ui/quantity/read-typed";
 import type { Network } from "./network";
+import { givenResistance, uncertaintyMember } from "./tolerance";
 
 /** What an address of a calculation page asks for, as the service read it. */
 export interface ShapeRequest {
@@ -9,12 +10,15 @@ export interface ShapeRequest {
 
 /** The body of `POST /networks`; null while a shape's request is still on its way. */
 export function networkBody(
-  { elements, ports, drive, temperature }: Network,
+  network: Network,
   requests: ReadonlyMap<string, ShapeRequest>,
 ): Readonly<Record<string, unknown>> | null {
+  const { elements, ports, drive, temperature } = network;
   const list = elements.map(({ name, from, to, value }) => {
     const ends = { name: name.trim(), between: [from.trim(), to.trim()] };
-    if (value.kind === "resistance") return { ...ends, resistance: spelled(value.text) };
+    if (value.kind === "resistance") {
+      return { ...ends, resistance: givenResistance(spelled(value.text), value.tolerance) };
+    }
     if (value.kind === "request") return { ...ends, request: value.request };
     const known = requests.get(value.address);
     return known && { ...ends, request: known.request };
@@ -28,6 +32,7 @@ export function networkBody(
     elements: list,
     ports: ports.map((name) => name.trim()),
     ...(Object.keys(operating).length > 0 ? { operating } : {}),
+    ...uncertaintyMember(network),
   };
 }
 

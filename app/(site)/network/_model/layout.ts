@@ -46,7 +46,7 @@ interface Joint {
 }
 
 /** What no chain of elements joins stands apart: the ports' part first, the others below it, side by side. */
-export function layOut(network: Network): Layout {
+export function layOut(network: Pick<Network, "elements" | "ports">): Layout {
   const names = nodeNames(network);
   const number = new Map(names.map((name, k) => [name, k]));
   const joints = network.elements.flatMap(({ id, from, to }, index): Joint[] => {

@@ -1,8 +1,12 @@
 /** A network as the page keeps it: everything as it was typed. */
+import { tolerancedName } from "../../calculate/_model/tolerances";
+
+/** How far a resistance may be off, by the names that the API has for it: `tolerance`, or `plus` and `minus`. */
+export type Tolerance = Readonly<Record<string, string>>;
 
 /** What gives an element its resistance. */
 export type Value =
-  | { readonly kind: "resistance"; readonly text: string }
+  | { readonly kind: "resistance"; readonly text: string; readonly tolerance?: Tolerance }
   /** A shape with the state of its calculation page, behind `/calculate/`: `bar?length=1m&…`. */
   | { readonly kind: "shape"; readonly address: string }
   /** The body of a call that gives it, as it came with a network's JSON. */
@@ -23,6 +27,16 @@ export interface Network {
   readonly ports: readonly [string, string];
   readonly drive: { readonly kind: DriveKind; readonly text: string };
   readonly temperature: string;
+  /** How the tolerances are evaluated; "" where they are not. */
+  readonly uncertainty: UncertaintyMethod | "";
+}
+
+export const UNCERTAINTY_METHODS = ["propagation", "worst-case"] as const;
+export type UncertaintyMethod = (typeof UNCERTAINTY_METHODS)[number];
+
+/** The method of this name; "" for anything else. */
+export function methodOf(name: unknown): Network["uncertainty"] {
+  return UNCERTAINTY_METHODS.find((method) => method === name) ?? "";
 }
 
 let lastId = 0;
@@ -54,10 +68,11 @@ export const START: Network = {
   ports: ["in", "out"],
   drive: { kind: "current", text: "630 A" },
   temperature: "65 degC",
+  uncertainty: "",
 };
 
 /** Names of all nodes, ports first, in the order of the elements. */
-export function nodeNames({ elements, ports }: Network): readonly string[] {
+export function nodeNames({ elements, ports }: Pick<Network, "elements" | "ports">): readonly string[] {
   const names = [...ports, ...elements.flatMap(({ from, to }) => [from, to])];
   return [...new Set(names.map((name) => name.trim()).filter((name) => name !== ""))];
 }
@@ -75,43 +90,64 @@ export function addressOf(text: string): string | null {
 }
 
 /** Behind the "#" of the address and in this tab's store: JSON without the row ids. */
-export function toText({ elements, ports, drive, temperature }: Network): string {
-  const rows = elements.map(({ name, from, to, value }) => [name, from, to, valueText(value)]);
-  return JSON.stringify({ elements: rows, ports, drive, temperature });
+export function toText({ elements, ports, drive, temperature, uncertainty }: Network): string {
+  const rows = elements.map(({ name, from, to, value }) => {
+    const tolerance = value.kind === "resistance" && value.tolerance;
+    const row = [name, from, to, valueText(value)];
+    return tolerance ? [...row, new URLSearchParams(tolerance).toString()] : row;
+  });
+  return JSON.stringify({
+    elements: rows,
+    ports,
+    drive,
+    temperature,
+    ...(uncertainty === "" ? {} : { uncertainty }),
+  });
 }
 
 /** The inverse; null where the text is none of ours. */
 export function fromText(text: string): Network | null {
   try {
-    const { elements, ports, drive, temperature } = JSON.parse(text) as {
+    const { elements, ports, drive, temperature, uncertainty } = JSON.parse(text) as {
       elements: string[][];
       ports: [string, string];
       drive: Network["drive"];
       temperature: string;
+      uncertainty?: unknown;
     };
     const kinds: readonly DriveKind[] = ["none", "current", "voltage", "power"];
     const texts = [...elements.flat(), ...ports, drive.text, temperature];
     if (ports.length !== 2 || !kinds.includes(drive.kind)) return null;
     if (texts.some((entry) => typeof entry !== "string") || elements.length > 10_000) return null;
     return {
-      elements: elements.map(([name = "", from = "", to = "", value = ""]) =>
-        newElement({ name, from, to, value: readValue(value) }),
+      elements: elements.map(([name = "", from = "", to = "", value = "", tolerance = ""]) =>
+        newElement({ name, from, to, value: readValue(value, readTolerance(tolerance)) }),
       ),
       ports: [ports[0], ports[1]],
       drive: { kind: drive.kind, text: drive.text },
       temperature,
+      uncertainty: methodOf(uncertainty),
     };
   } catch {
     return null;
   }
 }
 
-/** What is typed for a resistance: a quantity, the link of a calculation, or a call's body as JSON. */
-export function readValue(text: string): Value {
+function readTolerance(text: string): Tolerance | undefined {
+  const members = [...new URLSearchParams(text)].filter(([name]) => tolerancedName(`.${name}`) === "");
+  return members.length > 0 ? Object.fromEntries(members) : undefined;
+}
+
+/**
+ * What is typed for a resistance: a quantity, the link of a calculation, or a call's body as JSON. A quantity has the
+ * tolerance that stands beside it; the others bring theirs along.
+ */
+export function readValue(text: string, tolerance?: Tolerance): Value {
   const address = addressOf(text);
   if (address !== null) return { kind: "shape", address };
   const request = text.trim().startsWith("{") ? objectOf(text) : null;
-  return request === null ? { kind: "resistance", text } : { kind: "request", request };
+  if (request !== null) return { kind: "request", request };
+  return { kind: "resistance", text, ...(tolerance ? { tolerance } : {}) };
 }
 
 /** The inverse. */

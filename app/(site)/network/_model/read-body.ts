@@ -1,5 +1,15 @@
 /** The body of `POST /networks`, pasted or from a file, as the page keeps a network. */
-import { type DriveKind, type Element, type Network, newElement, recordOf, type Value } from "./network";
+import { DISTRIBUTIONS } from "../../calculate/_model/tolerances";
+import {
+  type DriveKind,
+  type Element,
+  methodOf,
+  type Network,
+  newElement,
+  recordOf,
+  UNCERTAINTY_METHODS,
+  type Value,
+} from "./network";
 
 export interface BodyComplaint {
   readonly pointer: string;
@@ -30,7 +40,7 @@ function readBody(body: unknown): BodyReading {
   if (!record) return refused([{ pointer: "#", detail: "must be an object with elements and ports." }]);
   const complaints: BodyComplaint[] = [];
   const complain = (pointer: string, detail: string) => complaints.push({ pointer, detail });
-  unknown(record, ["elements", "ports", "operating", "record"], "#", complain);
+  unknown(record, ["elements", "ports", "operating", "uncertainty", "record"], "#", complain);
   const list = Array.isArray(record.elements) ? record.elements : null;
   if (!list) complain("#/elements", "must be an array of elements.");
   else if (list.length > MOST_ELEMENTS) {
@@ -49,17 +59,37 @@ function readBody(body: unknown): BodyReading {
   const text = (name: string): string => {
     const value = operating?.[name];
     if (typeof value === "string" || typeof value === "number") return String(value);
-    if (value !== undefined) complain(`#/operating/${name}`, "must be a number or a text with a unit.");
+    if (value !== undefined) complain(`#/operating/${name}`, QUANTITY);
     return "";
   };
   const [drive = "none"] = given;
   const driveText = drive === "none" ? "" : text(drive);
   const temperature = text("temperature");
+  const uncertainty = readMethod(record.uncertainty, complain);
   if (complaints.length > 0 || !ports) return refused(complaints);
-  return { ok: true, network: { elements, ports, drive: { kind: drive, text: driveText }, temperature } };
+  return {
+    ok: true,
+    network: { elements, ports, drive: { kind: drive, text: driveText }, temperature, uncertainty },
+  };
 }
 
 type Complain = (pointer: string, detail: string) => void;
+
+function readMethod(given: unknown, complain: Complain): Network["uncertainty"] {
+  if (given === undefined) return "";
+  const record = recordOf(given);
+  if (!record) {
+    complain("#/uncertainty", "must be an object with a method.");
+    return "";
+  }
+  unknown(record, ["method"], "#/uncertainty", complain);
+  const method = methodOf(record.method);
+  if (method === "") {
+    const names = UNCERTAINTY_METHODS.map((name) => `"${name}"`).join(" or ");
+    complain("#/uncertainty/method", `must be ${names}.`);
+  }
+  return method;
+}
 
 function readElement(entry: unknown, pointer: string, complain: Complain): Element[] {
   const record = recordOf(entry);
@@ -91,11 +121,53 @@ function readGiven(
     if (!record) complain(`${pointer}/request`, "must be an object.");
     return record && { kind: "request", request: record };
   }
-  if (typeof resistance === "string" || typeof resistance === "number") {
-    return { kind: "resistance", text: String(resistance) };
-  }
-  complain(`${pointer}/resistance`, "must be a number or a text with a unit.");
+  if (isQuantity(resistance)) return { kind: "resistance", text: String(resistance) };
+  const toleranced = recordOf(resistance);
+  if (toleranced) return readToleranced(toleranced, `${pointer}/resistance`, complain);
+  complain(`${pointer}/resistance`, `${QUANTITY.slice(0, -1)}, or an object with a tolerance.`);
   return null;
+}
+
+const QUANTITY = "must be a number or a text with a unit.";
+
+function isQuantity(value: unknown): value is string | number {
+  return typeof value === "string" || typeof value === "number";
+}
+
+function readToleranced(
+  record: Readonly<Record<string, unknown>>,
+  pointer: string,
+  complain: Complain,
+): Value | null {
+  unknown(record, ["value", "tolerance", "plus", "minus", "distribution"], pointer, complain);
+  const { value, distribution } = record;
+  if (!isQuantity(value)) complain(`${pointer}/value`, QUANTITY);
+  const tolerance: Record<string, string> = {};
+  for (const side of ["tolerance", "plus", "minus"] as const) {
+    const given = record[side];
+    if (isQuantity(given)) tolerance[side] = inOhms(given);
+    else if (given !== undefined) complain(`${pointer}/${side}`, QUANTITY);
+  }
+  if (record.tolerance !== undefined && (record.plus !== undefined || record.minus !== undefined)) {
+    complain(pointer, "must have either tolerance, or plus and minus.");
+  }
+  const known = DISTRIBUTIONS.find((law) => law.value === distribution);
+  if (known) tolerance.distribution = known.value;
+  else if (distribution !== undefined) {
+    complain(`${pointer}/distribution`, `must be ${DISTRIBUTIONS.map((law) => law.value).join(", ")}.`);
+  }
+  if (!isQuantity(value)) return null;
+  return {
+    kind: "resistance",
+    text: String(value),
+    ...(Object.keys(tolerance).length > 0 ? { tolerance } : {}),
+  };
+}
+
+/** The page takes a bare tolerance in the unit of its value, the API in ohms. */
+function inOhms(given: string | number): string {
+  const text = String(given).trim();
+  return text !== "" && Number.isFinite(Number(text)) ? `${text} ohm` : text;
 }
 
 function pairOf(value: unknown): readonly [string, string] | null {

@@ -3,13 +3,15 @@
 import { CONTROL, Field } from "../../../_ui/field";
 import { QuantityInput } from "../../../_ui/quantity-input";
 import { Select } from "../../../_ui/select";
-import type { DriveKind, Network } from "../_model/network";
+import { UncertaintyFields } from "../../calculate/_calculator/uncertainty-fields";
+import { type DriveKind, methodOf, type Network, UNCERTAINTY_METHODS } from "../_model/network";
 
 interface ConditionFieldsProps {
   readonly network: Network;
   /** Nodes that there are. */
   readonly names: readonly string[];
   readonly complaints: readonly string[];
+  readonly uncertaintyComplaint: string | undefined;
   readonly onChange: (change: (network: Network) => Network) => void;
 }
 
@@ -22,8 +24,9 @@ const DRIVES: readonly { readonly value: DriveKind; readonly label: string }[] =
 const START_TEXT = { none: "", current: "1 A", voltage: "1 V", power: "1 W" } as const;
 
 /** Between which nodes, under what, and how warm. */
-export function ConditionFields({ network, names, complaints, onChange }: ConditionFieldsProps) {
-  const { ports, drive, temperature } = network;
+export function ConditionFields(props: ConditionFieldsProps) {
+  const { network, names, complaints, uncertaintyComplaint, onChange } = props;
+  const { ports, drive, temperature, uncertainty } = network;
   const port = (place: 0 | 1, label: string) => (
     <Field label={label} error={place === 0 ? undefined : complaints.join(" ") || undefined}>
       {(control) => (
@@ -80,6 +83,16 @@ export function ConditionFields({ network, names, complaints, onChange }: Condit
       <p className="self-center text-small text-ink-soft">
         {names.length} nodes, {network.elements.length} elements
       </p>
+      <div className="col-span-2">
+        <UncertaintyFields
+          methods={UNCERTAINTY_METHODS}
+          form={{
+            parameters: uncertainty === "" ? {} : { uncertainty },
+            change: (patch) => onChange((now) => ({ ...now, uncertainty: methodOf(patch.uncertainty) })),
+            errorAt: () => uncertaintyComplaint,
+          }}
+        />
+      </div>
     </form>
   );
 }

@@ -4,9 +4,11 @@ import { memo } from "react";
 import { SquareArrowOutUpRight, Trash2 } from "lucide-react";
 import { formatQuantity } from "@/lib/engine/quantity/format-quantity";
 import type { ShapeRequest } from "../_model/body";
+import type { Complaints } from "../_model/complaints";
 import { type Element, type Network, readValue, type Value, valueText } from "../_model/network";
 import { percent } from "./drawing";
-import type { Answer, Complaints } from "./use-solution";
+import { ToleranceCell } from "./tolerance-cell";
+import type { Answer } from "./use-solution";
 
 interface ElementTableProps {
   readonly network: Network;
@@ -17,7 +19,7 @@ interface ElementTableProps {
   readonly stale: boolean;
   readonly complaints: ReadonlyMap<number, Complaints>;
   readonly requests: ReadonlyMap<string, ShapeRequest>;
-  readonly onChange: (id: number, change: Partial<Element>) => void;
+  readonly onChange: (id: number, change: Partial<Element>, whole?: Partial<Network>) => void;
   readonly onRemove: (id: number) => void;
   readonly onFocus: (id: number | null) => void;
 }
@@ -27,6 +29,7 @@ const HEADS = [
   "From",
   "To",
   "Resistance, or a link to a calculation",
+  "Tolerance",
   "Resistance",
   "Current",
   "Loss",
@@ -52,7 +55,7 @@ export function ElementTable(props: ElementTableProps) {
               <th
                 key={k}
                 scope="col"
-                className={`px-1 py-0.5 font-medium whitespace-nowrap text-ink-soft ${k > 3 ? "text-end" : "text-start"}`}
+                className={`px-1 py-0.5 font-medium whitespace-nowrap text-ink-soft ${k > 4 ? "text-end" : "text-start"}`}
               >
                 {head}
               </th>
@@ -74,6 +77,7 @@ export function ElementTable(props: ElementTableProps) {
                 stale={stale}
                 wrong={complaints.get(element.id)}
                 title={titleOf(element.value, props.requests)}
+                uncertainty={network.uncertainty}
                 onChange={props.onChange}
                 onRemove={props.onRemove}
                 onFocus={props.onFocus}
@@ -97,7 +101,7 @@ function titleOf(value: Value, requests: ElementTableProps["requests"]): string 
   return value.kind === "shape" ? requests.get(value.address)?.title : undefined;
 }
 
-interface ElementRowProps {
+interface ElementRowProps extends Pick<ElementTableProps, "onChange" | "onRemove" | "onFocus"> {
   readonly element: Element;
   readonly number: number;
   readonly answer: Answer | undefined;
@@ -105,9 +109,7 @@ interface ElementRowProps {
   readonly wrong: Complaints | undefined;
   /** Title of the shape, where it is one. */
   readonly title: string | undefined;
-  readonly onChange: (id: number, change: Partial<Element>) => void;
-  readonly onRemove: (id: number) => void;
-  readonly onFocus: (id: number | null) => void;
+  readonly uncertainty: Network["uncertainty"];
 }
 
 const ElementRow = memo(function ElementRow(props: ElementRowProps) {
@@ -115,6 +117,7 @@ const ElementRow = memo(function ElementRow(props: ElementRowProps) {
   const { id, name, from, to, value } = element;
   const problemId = `element-${id}-problem`;
   const text = valueText(value);
+  const tolerance = value.kind === "resistance" ? value.tolerance : undefined;
   const cell = (
     label: string,
     content: string,
@@ -160,7 +163,13 @@ const ElementRow = memo(function ElementRow(props: ElementRowProps) {
         </td>
         <td className="p-0.5">
           <span className="flex items-center gap-0.5">
-            {cell("Resistance", text, (next) => ({ value: readValue(next) }), wrong?.value, "min-w-24")}
+            {cell(
+              "Resistance",
+              text,
+              (next) => ({ value: readValue(next, tolerance) }),
+              wrong?.value,
+              "min-w-24",
+            )}
             {value.kind === "shape" ? (
               <a
                 href={`/calculate/${value.address}`}
@@ -174,6 +183,15 @@ const ElementRow = memo(function ElementRow(props: ElementRowProps) {
               </a>
             ) : null}
           </span>
+        </td>
+        <td className="p-0.5">
+          <ToleranceCell
+            element={element}
+            number={number}
+            uncertainty={props.uncertainty}
+            wrong={wrong}
+            onChange={onChange}
+          />
         </td>
         {figures.map((figure, k) => (
           <td key={k} className={`px-1 text-end font-mono whitespace-nowrap ${stale ? "text-ink-soft" : ""}`}>

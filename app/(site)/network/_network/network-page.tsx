@@ -9,6 +9,7 @@ import { ProblemNotice } from "../../../_ui/problem-notice";
 import { ToastArea, useToast } from "../../../_ui/toast";
 import { SaveRecord, type Saving } from "../../calculate/_calculator/save-record";
 import { type Element, freeName, type Network, newElement, nodeNames, START } from "../_model/network";
+import { NetworkBudget } from "./budget";
 import { ConditionFields } from "./condition-fields";
 import { MOST_DRAWN, NetworkDrawing } from "./drawing";
 import { ElementTable } from "./element-table";
@@ -54,9 +55,10 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
   const at = Math.min(page, pages - 1);
   const shown = elements.map((_, k) => k).slice(at * PAGE_ROWS, (at + 1) * PAGE_ROWS);
 
-  function change(id: number, part: Partial<Element>) {
+  function change(id: number, part: Partial<Element>, whole: Partial<Network> = {}) {
     edit((now) => ({
       ...now,
+      ...whole,
       elements: now.elements.map((element) => (element.id === id ? { ...element, ...part } : element)),
     }));
   }
@@ -104,7 +106,13 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
         </div>
       </div>
       <div className="mt-2 grid items-start gap-x-5 gap-y-2 wide:grid-cols-[24rem_minmax(0,1fr)]">
-        <ConditionFields network={network} names={names} complaints={portComplaints} onChange={edit} />
+        <ConditionFields
+          network={network}
+          names={names}
+          complaints={portComplaints}
+          uncertaintyComplaint={solution.uncertaintyComplaint}
+          onChange={edit}
+        />
         <NetworkHeadline result={result} stale={stale} />
       </div>
       {problem ? (
@@ -199,6 +207,14 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
             replace(next, `A network of ${next.elements.length.toLocaleString("en")} elements stands here.`)
           }
         />
+      ) : null}
+      {result?.uncertainty ? (
+        <section aria-labelledby="budget" className={`mt-3 ${stale ? "opacity-60" : ""}`}>
+          <h2 id="budget" className="mb-1">
+            Tolerance budget
+          </h2>
+          <NetworkBudget uncertainty={result.uncertainty} />
+        </section>
       ) : null}
       {result ? <Statements result={result} stale={stale} /> : null}
       {body ? (

@@ -4,6 +4,7 @@ import { bracketText } from "../../../_ui/bracket";
 import { CopyButton } from "../../../_ui/copy-button";
 import { formatQuantity } from "@/lib/engine/quantity/format-quantity";
 import type { NetworkResult } from "@/lib/engine/network/result-schema";
+import { StrayRange } from "../../calculate/_calculator/answer/budget";
 
 interface HeadlineProps {
   readonly result: NetworkResult | undefined;
@@ -42,6 +43,11 @@ export function NetworkHeadline({ result, stale }: HeadlineProps) {
       <p className="mt-0.5 text-table text-ink-soft">
         Bounds {proved ? "proved" : "not proved"}. {MEANING[boundsBasis]}
       </p>
+      {result.uncertainty ? (
+        <div className="mt-1">
+          <StrayRange uncertainty={result.uncertainty} />
+        </div>
+      ) : null}
       {voltage !== undefined && current !== undefined && power !== undefined ? (
         <p className="mt-0.5 font-mono text-table">
           {formatQuantity(voltage, "volt")} · {formatQuantity(current, "ampere")} ·{" "}

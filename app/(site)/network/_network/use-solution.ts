@@ -6,6 +6,7 @@ import type { NetworkResult } from "@/lib/engine/network/result-schema";
 import type { ProblemShown } from "../../../_ui/problem-notice";
 import { ApiProblem, postApi } from "../../_live/call-api";
 import { networkBody, type ShapeRequest } from "../_model/body";
+import { type Complaints, sortComplaints } from "../_model/complaints";
 import type { Network } from "../_model/network";
 
 /** How long typing may pause before a call is made, ms. */
@@ -22,6 +23,7 @@ export interface Solution {
   /** Complaints by the element's id, by what they concern. */
   readonly complaints: ReadonlyMap<number, Complaints>;
   readonly portComplaints: readonly string[];
+  readonly uncertaintyComplaint: string | undefined;
   readonly requests: ReadonlyMap<string, ShapeRequest>;
 }
 
@@ -35,12 +37,6 @@ interface Asked {
 
 interface Answered extends Asked {
   readonly result: NetworkResult;
-}
-
-export interface Complaints {
-  readonly name?: string;
-  readonly between?: string;
-  readonly value?: string;
 }
 
 /** What the server has solved already. */
@@ -97,6 +93,7 @@ export function useSolution(network: Network, first: FirstSolution): Solution {
     answers,
     complaints: sorted.complaints,
     portComplaints: sorted.ports,
+    uncertaintyComplaint: sorted.uncertainty,
     requests,
   };
 }
@@ -108,45 +105,6 @@ function shown(error: unknown): ProblemShown {
   return {
     title: "The service cannot be reached",
     detail: "The network is still here. Try again in a moment.",
-  };
-}
-
-const NOTHING: ReadonlyMap<number, Complaints> = new Map();
-
-/** Complaints that have a place on the page go there; what is left is told as a whole. */
-function sortComplaints(
-  problem: ProblemShown | null,
-  ids: readonly number[],
-): {
-  readonly complaints: ReadonlyMap<number, Complaints>;
-  readonly ports: readonly string[];
-  readonly rest: ProblemShown | null;
-} {
-  const errors = problem?.errors ?? [];
-  if (!problem || errors.length === 0) return { complaints: NOTHING, ports: [], rest: problem };
-  const complaints = new Map<number, Complaints>();
-  const ports: string[] = [];
-  const rest: { pointer?: string; detail: string }[] = [];
-  for (const { pointer = "#", detail } of errors) {
-    const [, index, member, ...path] =
-      /^#\/elements\/(\d+)(?:\/(name|between|resistance|request))?(.*)$/.exec(pointer) ?? [];
-    if (index === undefined) {
-      if (pointer.startsWith("#/ports")) ports.push(detail);
-      else rest.push({ pointer, detail });
-      continue;
-    }
-    const place = member === "name" || member === "between" ? member : "value";
-    const within = path.join("").split("/").pop() ?? "";
-    const id = ids[Number(index)];
-    const known = complaints.get(id) ?? {};
-    if (known[place] === undefined) {
-      complaints.set(id, { ...known, [place]: `${within} ${detail}`.trim() });
-    }
-  }
-  return {
-    complaints,
-    ports,
-    rest: rest.length > 0 ? { ...problem, detail: undefined, errors: rest } : null,
   };
 }
 

@@ -83,10 +83,30 @@ const UNCERTAINTY_METHODS = {
   "monte-carlo": "Monte Carlo (GUM Supplement 1)",
 } as const;
 
+type Strayed = NonNullable<ResistanceResult["uncertainty"]>;
+
+interface Part {
+  readonly name: string;
+  readonly sensitivity: number;
+  readonly standard: number;
+  readonly share: number;
+}
+
 /** The range that the tolerances of the inputs span, and what each contributes. */
 export function uncertaintySection(uncertainty: ResistanceResult["uncertainty"]): Section[] {
   if (!uncertainty) return [];
-  const { method, standard, low, high, coverage, contributions, basis, trials, seed } = uncertainty;
+  const parts = uncertainty.contributions.map(({ input, ...part }) => ({ name: inputName(input), ...part }));
+  return toleranceSection("Tolerances of the inputs", "Input", uncertainty, parts);
+}
+
+/** The same of whatever has a budget; `of` says what its parts are. */
+export function toleranceSection(
+  title: string,
+  of: string,
+  uncertainty: Omit<Strayed, "contributions">,
+  parts: readonly Part[],
+): Section[] {
+  const { method, standard, low, high, coverage, basis, trials, seed } = uncertainty;
   const facts: Fact[] = [
     { name: "Method", value: UNCERTAINTY_METHODS[method] },
     {
@@ -106,25 +126,25 @@ export function uncertaintySection(uncertainty: ResistanceResult["uncertainty"])
     { kind: "facts", facts },
     { kind: "paragraph", text: basis },
   ];
-  if (contributions.length > 0) {
+  if (parts.length > 0) {
     blocks.push({
       kind: "table",
       label: "Contributions",
       columns: [
-        { title: "Input", weight: 1.4 },
+        { title: of, weight: 1.4 },
         { title: "Sensitivity, Ω per SI unit", numeric: true },
         { title: "Standard uncertainty, SI", numeric: true },
         { title: "Share", numeric: true, weight: 0.5 },
       ],
-      rows: contributions.map(({ input, sensitivity, standard: of, share }) => [
-        inputName(input),
+      rows: parts.map(({ name, sensitivity, standard: own, share }) => [
+        name,
         plainNumber(Number(sensitivity.toPrecision(4))),
-        plainNumber(Number(of.toPrecision(3))),
+        plainNumber(Number(own.toPrecision(3))),
         `${plainNumber(Number((share * 100).toPrecision(3)))} %`,
       ]),
     });
   }
-  return [{ id: "uncertainty", title: "Tolerances of the inputs", blocks }];
+  return [{ id: "uncertainty", title, blocks }];
 }
 
 /** "dimensions.innerRadius" is "Inner radius". */

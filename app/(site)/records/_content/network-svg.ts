@@ -29,8 +29,6 @@ export function networkSvg(
       newElement({ name, from, to, value: { kind: "resistance", text: resistance } }),
     ),
     ports,
-    drive: { kind: "none", text: "" },
-    temperature: "",
   });
   const scale = Math.min(LARGEST, width / layout.width);
   const left = (width - scale * layout.width) / 2;

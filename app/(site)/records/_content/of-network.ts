@@ -1,8 +1,17 @@
 /** What a record of `network` tells: elements between named nodes, and what each carries. */
 import { z } from "zod";
 import { findShape, networkResultSchema, type ShapeEntry, shapeEntry } from "@/lib/engine";
+import type { NetworkUncertainty } from "@/lib/engine/network/result-schema";
 import { engineering } from "../../calculate/_calculator/answer/engineering";
-import { bracketOf, checksSection, linesSection, operatingFacts, sourceLines, verdictOf } from "./answer";
+import {
+  bracketOf,
+  checksSection,
+  linesSection,
+  operatingFacts,
+  sourceLines,
+  toleranceSection,
+  verdictOf,
+} from "./answer";
 import type { Block, Picture, Section, Told } from "./content";
 import { askedTable } from "./inputs";
 import { materialBlocks } from "./medium";
@@ -28,6 +37,9 @@ const networkRequest = z.object({
   requirement: given.optional(),
 });
 type Element = z.infer<typeof networkRequest>["elements"][number];
+
+/** Members of a medium that a line of a table has no room for. */
+const NOT_TOLD = new Set(["graded", "extrapolate"]);
 
 /** A sheet of paper is not the place for ten thousand elements; the stored request has them all. */
 const MOST_ROWS = 200;
@@ -66,11 +78,22 @@ export function tellNetwork(request: unknown, result: unknown, lookUp: LookUp): 
       },
       ...(used.length > 0 ? [{ id: "medium", title: "Materials", blocks: used }] : []),
       ...carriedSections(answer.data),
+      ...straySection(answer.data.uncertainty),
       ...checksSection(checks),
       ...linesSection("assumptions", "Assumptions", assumptions),
       ...linesSection("sources", "Sources", sourceLines(sources)),
     ],
   };
+}
+
+/** What the tolerances of the elements do to the whole; materials that several share stand for themselves. */
+function straySection(uncertainty: NetworkUncertainty | undefined): Section[] {
+  if (!uncertainty) return [];
+  const parts = shown(uncertainty.contributions).map(({ element, material = "", ...part }) => ({
+    name: element ?? `${material}, as stated`,
+    ...part,
+  }));
+  return toleranceSection("Tolerances of the elements", "Element or material", uncertainty, parts);
 }
 
 function pictureOf(
@@ -114,7 +137,9 @@ function elementText({ resistance, request }: Element): string {
   const parts = Object.entries(request.dimensions).map(
     ([name, value]) => `${symbolOf(entry, name)} ${typedText(value)}`,
   );
-  const medium = Object.values(request.medium ?? {}).filter((value) => typeof value !== "object");
+  const medium = Object.entries(request.medium ?? {}).flatMap(([name, value]) =>
+    NOT_TOLD.has(name) ? [] : [value],
+  );
   return [entry?.title ?? words(request.shape), ...parts, ...medium.map((value) => typedText(value))].join(
     ", ",
   );

@@ -2,7 +2,7 @@
 
 import type { ShapeEntry } from "@/lib/engine";
 import type { Uncertainty } from "@/lib/engine/resistance/uncertainty/result-schema";
-import { ShareBar } from "../../../../_ui/share-bar";
+import { BudgetTable } from "./budget-table";
 
 const METHOD_WORDS: Readonly<Record<Uncertainty["method"], string>> = {
   propagation: "95 % of the time, by first-order propagation",
@@ -11,7 +11,7 @@ const METHOD_WORDS: Readonly<Record<Uncertainty["method"], string>> = {
 };
 
 /** The range that tolerances leave, beside the bounds. */
-export function StrayRange({ uncertainty }: { readonly uncertainty: Uncertainty }) {
+export function StrayRange({ uncertainty }: { readonly uncertainty: Pick<Uncertainty, "text" | "method"> }) {
   return (
     <p className="border-s-3 border-s-copper ps-1.5 text-table" data-testid="stray-range">
       With its tolerances <span className="font-mono whitespace-nowrap">{uncertainty.text}</span>{" "}
@@ -34,57 +34,20 @@ export function Budget({ uncertainty, entry }: BudgetProps) {
       {contributions.length === 0 ? (
         <p className="text-table">Nothing has a tolerance: press ± at a quantity.</p>
       ) : (
-        <div className="overflow-x-auto" tabIndex={0} role="group" aria-label="Tolerance budget">
-          <table className="w-full min-w-[34rem] max-w-[60rem] text-table" data-testid="budget">
-            <thead>
-              <tr className="border-b border-edge text-start">
-                <th className="py-0.5 pe-2 text-start font-medium">Input</th>
-                <th className="w-2/5 py-0.5 pe-2 text-start font-medium">
-                  Share of the {method === "worst-case" ? "range" : "variance"}
-                </th>
-                <th className="py-0.5 pe-2 text-end font-medium">Standard uncertainty</th>
-                <th className="py-0.5 text-end font-medium">Sensitivity</th>
-              </tr>
-            </thead>
-            <tbody>
-              {contributions.map(({ input, share, standard: own, sensitivity }) => {
-                const { label, unit } = wordsOf(input, entry);
-                return (
-                  <tr key={input} className="border-b border-rule">
-                    <th scope="row" className="py-0.5 pe-2 text-start font-normal">
-                      {label}
-                    </th>
-                    <td className="py-0.5 pe-2">
-                      <ShareBar share={share} text={percent(share)} />
-                    </td>
-                    <td className="py-0.5 pe-2 text-end font-mono whitespace-nowrap">
-                      {input.endsWith("material") ? (
-                        <Figure value={100 * own} unit="%" />
-                      ) : (
-                        <Figure value={own} unit={unit} />
-                      )}
-                    </td>
-                    <td className="py-0.5 text-end font-mono whitespace-nowrap">
-                      <Figure value={sensitivity} unit={`Ω${unit === "" ? "" : `/${unit}`}`} />
-                    </td>
-                  </tr>
-                );
-              })}
-            </tbody>
-            <tfoot>
-              <tr>
-                <th scope="row" className="py-0.5 pe-2 text-start font-medium">
-                  Standard uncertainty of the resistance
-                </th>
-                <td />
-                <td className="py-0.5 pe-2 text-end font-mono whitespace-nowrap">
-                  <Figure value={standard} unit="Ω" />
-                </td>
-                <td />
-              </tr>
-            </tfoot>
-          </table>
-        </div>
+        <BudgetTable
+          head="Input"
+          method={method}
+          standard={standard}
+          rows={contributions.map(({ input, share, standard: own, sensitivity }) => {
+            const { label, unit } = wordsOf(input, entry);
+            return {
+              label,
+              share,
+              standard: input.endsWith("material") ? { value: 100 * own, unit: "%" } : { value: own, unit },
+              sensitivity: { value: sensitivity, unit: `Ω${unit === "" ? "" : `/${unit}`}` },
+            };
+          })}
+        />
       )}
     </>
   );
@@ -130,25 +93,4 @@ function profileWords(path: readonly string[]): string {
     else words.push(`${words.pop() ?? ""} ${number}`.trim());
   }
   return `Profile: ${words.join(", ")}`;
-}
-
-function percent(share: number): string {
-  return share > 0 && share < 0.001 ? "<0.1 %" : `${(100 * share).toFixed(1)} %`;
-}
-
-/** Three significant digits, with a power of ten where it is far from 1, and the unit. */
-function Figure({ value, unit }: { readonly value: number; readonly unit: string }) {
-  const far = Math.abs(value) >= 1e4 || (value !== 0 && Math.abs(value) < 1e-2);
-  const [mantissa, exponent] = (far ? value.toExponential(2) : value.toPrecision(3)).split("e");
-  return (
-    <>
-      {mantissa.replace("-", "−")}
-      {exponent === undefined ? null : (
-        <>
-          ·10<sup>{String(Number(exponent)).replace("-", "−")}</sup>
-        </>
-      )}
-      {unit === "" ? "" : `\u2009${unit}`}
-    </>
-  );
 }
