@@ -82,7 +82,7 @@ describe("the queue", () => {
     await call(server, "post", "/fields", { key: own, body: BEND });
     const third = await call(server, "post", "/fields", { key: own, body: BEND });
     expectProblem(third, 429, "quota-exhausted");
-    expect(third.body.detail).toContain(`needs ${MOST_COMPUTATIONS} of`);
+    expect(third.body.detail).toContain(`needs ${MOST_COMPUTATIONS} computations; none of this month's`);
     expect((await usage()).month.remaining).toBe(0);
     await call(server, "delete", `/fields/${first.body.id}`, { key: own });
     expect((await usage()).month.remaining).toBe(MOST_COMPUTATIONS);
