@@ -205,7 +205,7 @@ describe("the network", () => {
     await page.getByLabel("Second node of element 3").fill("lugg");
     await page.getByText(/No chain of elements joins/).waitFor();
     await page.getByRole("textbox", { name: "Resistance of element 1" }).fill("0");
-    await page.getByText(/must be greater than 0; nodes that nothing parts/).waitFor();
+    await page.getByText(/Must be greater than 0; nodes that nothing parts/).waitFor();
     await page.reload({ waitUntil: "load" });
     await page.waitForFunction(() =>
       [...document.querySelectorAll("input")].some((input) => input.value === "lugg"),

@@ -210,7 +210,7 @@ describe("tolerances of a network", () => {
     expect(sorted.complaints.get(12)).toEqual({ tolerance: { tolerance: "Must be smaller." } });
     expect(sorted.complaints.get(13)).toEqual({
       tolerance: { tolerance: "Must be uniform." },
-      value: "must be a resistance.",
+      value: "Must be a resistance.",
     });
     expect(sorted.complaints.get(11)).toEqual({ value: "width must be a length." });
     expect(sorted.uncertainty).toBe("Must be known.");

@@ -181,7 +181,7 @@ describe("a sizing's record", () => {
 });
 
 describe("a network's record", () => {
-  it("has the range that its tolerances leave, and the budget by element", () => {
+  it("has the range that its tolerances leave, and the budget by element", async () => {
     const request = {
       elements: [
         { name: "bolts", between: ["in", "m"], resistance: { value: "6 uohm", plus: "2 uohm" } },
@@ -199,7 +199,8 @@ describe("a network's record", () => {
       uncertainty: { method: "worst-case" },
     };
     const result = computeNetwork(request, { material: libraryMaterial });
-    const { sections } = contentOf({ ...recordOf(BAR), operation: "network", request, result });
+    const content = contentOf({ ...recordOf(BAR), operation: "network", request, result });
+    const { sections } = content;
     const inputs = sections.find(({ id }) => id === "inputs")?.blocks[0];
     expect(inputs?.kind === "table" && inputs.rows.map((row) => row[2])).toEqual([
       "6 uohm + 2 uohm, − 0\u2009Ω",
@@ -215,6 +216,10 @@ describe("a network's record", () => {
     });
     const budget = stray?.blocks.find((block) => block.kind === "table");
     expect(budget?.kind === "table" && budget.rows.map(([name]) => name)).toEqual(["bolts", "bar"]);
+    const paper = pdfPages(await sheetPdf(content, "a4")).join("\n");
+    for (const said of ["Tolerances of the elements", "covers every value inside the tolerances"]) {
+      expect(paper).toContain(said);
+    }
   });
 });
 

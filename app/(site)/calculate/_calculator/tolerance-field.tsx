@@ -57,18 +57,20 @@ const EVENLY = "the same to both sides";
 const APART = "plus and minus apart";
 
 const IN_FORM = {
-  row: "mb-1.5 border-s-2 border-rule ps-1",
+  row: "-mt-1 mb-3 border-s-2 border-rule ps-1",
   sides: "grid grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto] items-center gap-1",
   side: "min-w-0",
+  away: "size-4",
   spread: "mt-0.5 flex flex-wrap items-center gap-1",
   distribution: "w-auto! max-w-full min-w-0",
 };
 const IN_CELL: typeof IN_FORM = {
   row: "flex flex-wrap items-center gap-x-0.5",
   sides: "flex items-center gap-0.5",
-  side: "w-10! medium:min-h-4!",
+  side: "w-9! px-0.5! medium:min-h-4!",
+  away: "size-5.5 medium:size-3",
   spread: "flex items-center gap-0.5",
-  distribution: "w-12! medium:min-h-4!",
+  distribution: "w-16! px-0.5! medium:min-h-4!",
 };
 
 /** The tolerance of a quantity: how far, to both sides alike or to each, and how it is spread. */
@@ -122,7 +124,7 @@ export function ToleranceRow({ form, name, label, compact = false }: TolerancePr
         <button
           type="button"
           aria-label={`Take the tolerance of ${said} away`}
-          className="grid size-4 cursor-pointer place-items-center rounded text-ink-soft hover:text-ink"
+          className={`grid ${look.away} cursor-pointer place-items-center rounded text-ink-soft hover:text-ink`}
           onClick={() => change(noTolerance(name))}
         >
           <X aria-hidden size={15} />

@@ -49,8 +49,9 @@ export function sortComplaints(problem: ProblemShown | null, ids: readonly numbe
     }
     const place = member === "name" || member === "between" ? member : "value";
     // A request has many members, a resistance one.
-    const within = member === "request" ? `${path.split("/").pop() ?? ""} ` : "";
-    if (known[place] === undefined) complaints.set(id, { ...known, [place]: (within + detail).trim() });
+    const within = member === "request" ? (path.split("/").pop() ?? "") : "";
+    const said = within === "" ? sentence(detail) : `${within} ${detail}`;
+    if (known[place] === undefined) complaints.set(id, { ...known, [place]: said });
   }
   const [first] = uncertainty;
   return {

@@ -1,14 +1,20 @@
 "use client";
 
-import type { NetworkUncertainty } from "@/lib/engine/network/result-schema";
+import type { NetworkResult, NetworkUncertainty } from "@/lib/engine/network/result-schema";
 import { BudgetTable } from "../../calculate/_calculator/answer/budget-table";
 
 /** So many elements are told; what the others contribute is told together. */
 const MOST_ROWS = 20;
 
+interface BudgetProps {
+  readonly uncertainty: NetworkUncertainty;
+  readonly materials: NetworkResult["materials"];
+}
+
 /** What each element, and each material that several share, does to the uncertainty of the whole. */
-export function NetworkBudget({ uncertainty }: { readonly uncertainty: NetworkUncertainty }) {
+export function NetworkBudget({ uncertainty, materials }: BudgetProps) {
   const { contributions, method, standard, basis } = uncertainty;
+  const nameOf = (id = "") => materials.find((one) => one.id === id)?.name ?? id;
   const rest = contributions.slice(MOST_ROWS);
   const left = rest.reduce((sum, { share }) => sum + share, 0);
   return (
@@ -22,7 +28,7 @@ export function NetworkBudget({ uncertainty }: { readonly uncertainty: NetworkUn
           method={method}
           standard={standard}
           rows={contributions.slice(0, MOST_ROWS).map(({ element, material, share, ...part }) => ({
-            label: element ?? `${material}, as stated, in all its elements`,
+            label: element ?? `${nameOf(material)}: resistivity as stated, in all its elements`,
             share,
             standard:
               element === undefined

@@ -28,7 +28,7 @@ const HEADS = [
   "Element",
   "From",
   "To",
-  "Resistance, or a link to a calculation",
+  "Resistance, or a link",
   "Tolerance",
   "Resistance",
   "Current",
@@ -168,7 +168,7 @@ const ElementRow = memo(function ElementRow(props: ElementRowProps) {
               text,
               (next) => ({ value: readValue(next, tolerance) }),
               wrong?.value,
-              "min-w-24",
+              "min-w-20",
             )}
             {value.kind === "shape" ? (
               <a
@@ -213,7 +213,10 @@ const ElementRow = memo(function ElementRow(props: ElementRowProps) {
       {told.length > 0 ? (
         <tr>
           <td colSpan={HEADS.length + 1} className="px-1 pb-0.5 text-small text-oxide">
-            <span id={problemId}>{told.join(" ")}</span>
+            {/* In view wherever the table is scrolled to. */}
+            <span id={problemId} className="sticky start-1 block w-fit max-w-[calc(100vw-4rem)]">
+              {told.join(" ")}
+            </span>
           </td>
         </tr>
       ) : null}

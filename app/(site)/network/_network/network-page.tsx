@@ -213,7 +213,7 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
           <h2 id="budget" className="mb-1">
             Tolerance budget
           </h2>
-          <NetworkBudget uncertainty={result.uncertainty} />
+          <NetworkBudget uncertainty={result.uncertainty} materials={result.materials} />
         </section>
       ) : null}
       {result ? <Statements result={result} stale={stale} /> : null}

@@ -13,6 +13,7 @@ import type { Network } from "../_model/network";
 const PAUSE_MS = 350;
 
 export interface Solution {
+  /** Null while a shape's request is on its way, and where there is no element to ask about. */
   readonly body: Readonly<Record<string, unknown>> | null;
   /** Of what was typed last, or of what stood there before; none where it was refused. */
   readonly result: NetworkResult | undefined;
@@ -49,7 +50,8 @@ export interface FirstSolution {
 /** Solves the network whenever it changes; requests of shapes are read from their addresses first. */
 export function useSolution(network: Network, first: FirstSolution): Solution {
   const requests = useRequests(network, first.requests);
-  const body = useMemo(() => networkBody(network, requests), [network, requests]);
+  const empty = network.elements.length === 0;
+  const body = useMemo(() => (empty ? null : networkBody(network, requests)), [empty, network, requests]);
   const text = body === null ? null : JSON.stringify(body);
   const [asked, setAsked] = useState<Asked | null>(() => ({
     text: first.text,
@@ -87,8 +89,8 @@ export function useSolution(network: Network, first: FirstSolution): Solution {
   }, [data, asked, refused]);
   return {
     body,
-    result: refused ? undefined : data?.result,
-    stale: isLoading || text === null || asked?.text !== text || refused,
+    result: refused || empty ? undefined : data?.result,
+    stale: !empty && (isLoading || text === null || asked?.text !== text || refused),
     problem: sorted.rest,
     answers,
     complaints: sorted.complaints,

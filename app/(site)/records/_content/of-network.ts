@@ -1,7 +1,7 @@
 /** What a record of `network` tells: elements between named nodes, and what each carries. */
 import { z } from "zod";
 import { findShape, networkResultSchema, type ShapeEntry, shapeEntry } from "@/lib/engine";
-import type { NetworkUncertainty } from "@/lib/engine/network/result-schema";
+import type { NetworkResult } from "@/lib/engine/network/result-schema";
 import { engineering } from "../../calculate/_calculator/answer/engineering";
 import {
   bracketOf,
@@ -78,7 +78,7 @@ export function tellNetwork(request: unknown, result: unknown, lookUp: LookUp): 
       },
       ...(used.length > 0 ? [{ id: "medium", title: "Materials", blocks: used }] : []),
       ...carriedSections(answer.data),
-      ...straySection(answer.data.uncertainty),
+      ...straySection(answer.data),
       ...checksSection(checks),
       ...linesSection("assumptions", "Assumptions", assumptions),
       ...linesSection("sources", "Sources", sourceLines(sources)),
@@ -87,10 +87,10 @@ export function tellNetwork(request: unknown, result: unknown, lookUp: LookUp): 
 }
 
 /** What the tolerances of the elements do to the whole; materials that several share stand for themselves. */
-function straySection(uncertainty: NetworkUncertainty | undefined): Section[] {
+function straySection({ uncertainty, materials }: NetworkResult): Section[] {
   if (!uncertainty) return [];
   const parts = shown(uncertainty.contributions).map(({ element, material = "", ...part }) => ({
-    name: element ?? `${material}, as stated`,
+    name: element ?? `${materials.find(({ id }) => id === material)?.name ?? material}, as stated`,
     ...part,
   }));
   return toleranceSection("Tolerances of the elements", "Element or material", uncertainty, parts);
