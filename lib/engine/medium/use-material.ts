@@ -1,6 +1,8 @@
 /** Looking a material up for a request, and holding a temperature against its range. */
 import type { Problems } from "../failure";
 import { formatQuantity } from "../quantity/format-quantity";
+import { suggestion } from "../shape/nearest-names";
+import { libraryMaterials } from "./library/materials";
 import { coversTemperature, resistivityAt, type Material } from "./material";
 
 /** What reading a medium needs to know and to tell. */
@@ -15,7 +17,11 @@ export interface MaterialUse {
 export function findMaterial(id: string, pointer: string, use: MaterialUse): Material | null {
   const material = use.material(id);
   if (!material) {
-    use.problems.add(pointer, `"${id}" is no material of the library or of your team.`);
+    const near = suggestion(
+      id,
+      libraryMaterials.map((entry) => entry.id),
+    );
+    use.problems.add(pointer, `"${id}" is no material of the library or of your team.${near}`);
     return null;
   }
   use.use(material);

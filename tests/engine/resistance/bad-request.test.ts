@@ -175,6 +175,12 @@ describe("the medium", () => {
     ],
     ["an unknown material", medium({ material: "unobtainium" }), "#/medium/material", /no material/],
     [
+      "a material without its state",
+      medium({ material: "copper" }),
+      "#/medium/material",
+      /Did you mean .*"copper-annealed"/,
+    ],
+    [
       "the wrong unit",
       medium({ conductivity: "5 ohm m" }),
       "#/medium/conductivity",

@@ -8,7 +8,7 @@ import {
   type Material,
   type ResistanceResult,
 } from "@/lib/engine";
-import { compute } from "../../../support/compute";
+import { complaints, compute } from "../../../support/compute";
 
 interface Body {
   readonly shape: string;
@@ -187,6 +187,74 @@ describe("what joins in", () => {
       "media.cladding.graded.profile.material",
       "media.cladding.graded.profile.to",
       "media.core.material",
+    ]);
+  });
+
+  it("numbers inside a graded profile, by each method", () => {
+    // ρ straight from 1 to 2 nΩ·m along 1 m of 1 mm²: R = (from + to)/2 · 1e6, to first order and beyond.
+    const body: Body = {
+      shape: "bar",
+      dimensions: { length: "1 m", width: "1 mm", thickness: "1 mm" },
+      medium: {
+        graded: {
+          coordinate: "length",
+          quantity: "resistivity",
+          profile: {
+            kind: "linear",
+            from: { value: 1e-9, tolerance: "10 %" },
+            to: { value: 2e-9, plus: 4e-10 },
+          },
+        },
+      },
+    };
+    const [from, to] = [1e-10 / Math.sqrt(3), 4e-10 / Math.sqrt(12)];
+    const standard = (1e6 / 2) * Math.hypot(from, to);
+    const first = uncertaintyOf(body, { method: "propagation" });
+    expect(first.value).toBeCloseTo(1.5e-3, 12);
+    expect(Math.abs(first.standard / standard - 1)).toBeLessThan(1e-6);
+    expect(first.contributions.map(({ input }) => input)).toEqual([
+      "medium.graded.profile.to",
+      "medium.graded.profile.from",
+    ]);
+    expect(first.contributions[0].share).toBeCloseTo(to ** 2 / (from ** 2 + to ** 2), 6);
+    const worst = uncertaintyOf(body, { method: "worst-case" });
+    expect(worst.low / 1.45e-3).toBeCloseTo(1, 9);
+    expect(worst.high / 1.75e-3).toBeCloseTo(1, 9);
+    const drawn = uncertaintyOf(body, { method: "monte-carlo", trials: 4000, seed: 5 });
+    expect(Math.abs(drawn.standard / standard - 1)).toBeLessThan(0.06);
+  });
+
+  it("values of layers and of a table, but not their places", () => {
+    const medium = (profile: unknown) => ({
+      graded: { coordinate: "length", quantity: "resistivity", profile },
+    });
+    const layers = (thickness: unknown) =>
+      medium({
+        kind: "layers",
+        layers: [
+          { thickness, value: { value: 1e-8, tolerance: "10 %" } },
+          { thickness: "0.6 m", value: 2e-8 },
+        ],
+      });
+    const table = medium({
+      kind: "table",
+      positions: [0, 1],
+      values: [1e-8, { value: 2e-8, tolerance: "10 %" }],
+      interpolation: "linear",
+    });
+    for (const [profile, input] of [
+      [layers("0.4 m"), "medium.graded.profile.layers.0.value"],
+      [table, "medium.graded.profile.values.1"],
+    ] as const) {
+      const { contributions } = uncertaintyOf({ ...bar, medium: profile }, { method: "propagation" });
+      expect(contributions.map((entry) => entry.input)).toEqual([input]);
+    }
+    const toleranced = { ...bar, medium: layers({ value: "0.4 m", tolerance: "1 mm" }) };
+    expect(complaints({ ...toleranced, uncertainty: { method: "propagation" } })).toEqual([
+      expect.objectContaining({
+        pointer: "#/medium/graded/profile/layers/0/thickness",
+        detail: expect.stringContaining("takes no tolerance"),
+      }),
     ]);
   });
 

@@ -44,7 +44,7 @@ export const TableRow = memo(function TableRow(props: TableRowProps) {
               onKeyDown={move}
               autoComplete="off"
               spellCheck={false}
-              className={`min-h-5.5 w-full rounded border border-transparent bg-transparent px-0.5 font-mono hover:border-edge focus:border-edge aria-invalid:border-2 aria-invalid:border-oxide medium:min-h-4 ${listOf(column.name) || column.name === "label" ? "min-w-18" : "min-w-11"} ${column.name === "" ? "text-ink-soft" : ""}`}
+              className={`min-h-5.5 w-full rounded border border-transparent bg-transparent px-0.5 font-mono hover:border-edge focus:border-edge aria-invalid:border-2 aria-invalid:border-oxide medium:min-h-4 ${listOf(column.name) || column.name === "label" ? "min-w-20" : "min-w-11"} ${column.name === "" ? "text-ink-soft" : ""}`}
             />
           </td>
         );
