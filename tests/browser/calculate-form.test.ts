@@ -39,6 +39,43 @@ describe("a quantity's field", () => {
     await close();
   });
 
+  it("keeps the menu's unit however a number is typed, key by key", async () => {
+    const { page, close } = await bench.open("/calculate/bar");
+    const width = input(page, "width");
+    const read = async () => [await width.inputValue(), await unitOf(page, "Width").inputValue()];
+    const type = async (keys: string) => {
+      await width.selectText();
+      await width.pressSequentially(keys);
+    };
+    expect(await read()).toEqual(["40", "mm"]);
+    await type(".5");
+    expect(await read()).toEqual([".5", "mm"]);
+    await type("-4");
+    expect(await read()).toEqual(["-4", "mm"]);
+    await type("what");
+    await type("40");
+    expect(await read()).toEqual(["40", "mm"]);
+    // A unit that is typed counts; deleted again, the one before stands again, and no remainder of it.
+    await type("30 mm");
+    await width.press("Backspace");
+    await width.press("Backspace");
+    expect(await read()).toEqual(["30 ", "mm"]);
+    await type("12 kg");
+    await page.locator("[name=width][aria-invalid]").waitFor();
+    await type("12");
+    expect(await read()).toEqual(["12", "mm"]);
+    await type("3 in");
+    await type("2");
+    expect(await read()).toEqual(["2", "in"]);
+    const temperature = input(page, "temperature");
+    for (const keys of ["-40 °F", "-4"]) {
+      await temperature.selectText();
+      await temperature.pressSequentially(keys);
+    }
+    expect(await unitOf(page, "Temperature").inputValue()).toBe("degF");
+    await close();
+  });
+
   it("takes a foil by weight and a wire by gauge", async () => {
     const bar = await bench.open(
       "/calculate/bar?length=10mm&width=1mm&thickness=1oz/ft^2&material=copper-annealed",

@@ -57,19 +57,17 @@ export function UnitEntry(props: UnitEntryProps) {
   const comma = locale !== undefined && commaLocale(locale);
   const units = unitsOf(kind, foil);
   const [draft, setDraft] = useState<string | null>(null);
-  const [emptyUnit, setEmptyUnit] = useState((placeholder && bareUnit) || FIRST_UNIT[kind]);
+  /** The unit that a number takes whose own is deleted, or that comes after what is no quantity: "-" before "-40". */
+  const [held, setHeld] = useState((placeholder && bareUnit) || FIRST_UNIT[kind]);
   const [origin, setOrigin] = useState<Origin | null>(null);
 
   const parts = splitQuantity(value, units);
   const gauge = gaugeMm(value);
+  const unclear = parts.number === "" || readTyped(value, false).kind === "unclear";
   const bare = findUnit(bareUnit ?? BASE_UNITS[kind] ?? "", units);
   const current =
     parts.unit ??
-    (parts.foreign !== undefined || gauge !== null
-      ? undefined
-      : parts.number === ""
-        ? findUnit(emptyUnit, units)
-        : bare);
+    (parts.foreign !== undefined || gauge !== null ? undefined : unclear ? findUnit(held, units) : bare);
   const foreign = gauge === null ? parts.foreign : "AWG";
   /** A unit that only the API knows cannot be converted here; one that is wrong may be replaced. */
   const fixed = parts.foreign !== undefined && gauge === null && control["aria-invalid"] !== true;
@@ -79,22 +77,31 @@ export function UnitEntry(props: UnitEntryProps) {
     setOrigin(null);
     const typed = readTyped(text, locale === undefined ? decimalComma() : comma);
     if (typed.kind === "empty") {
-      if (current) setEmptyUnit(current.id);
+      if (current) setHeld(current.id);
       onChange("");
     } else if (typed.kind !== "quantity") onChange(typed.text);
     else {
       const known = findUnit(typed.unit, units);
-      const unit = typed.unit === "" ? (current?.id ?? parts.foreign ?? "") : (known?.id ?? typed.unit);
+      const unit = typed.unit === "" ? unitOfBare(text) : (known?.id ?? typed.unit);
       onChange(joinQuantity(typed.number, unit));
     }
+  }
+
+  /** A number without unit keeps the menu's; where its own was deleted, the one that stood there before typing. */
+  function unitOfBare(text: string): string {
+    const before = draft?.startsWith(text) ? readTyped(draft, false) : null;
+    const deleted = before?.kind === "gauge" || (before?.kind === "quantity" && before.unit !== "");
+    if (current && !deleted) return current.id;
+    if (fixed && !deleted) return parts.foreign ?? "";
+    return findUnit(held, units)?.id ?? "";
   }
 
   function convertTo(id: string) {
     const target = findUnit(id, units);
     if (!target) return;
     setDraft(null);
-    if (parts.number === "") {
-      setEmptyUnit(id);
+    if (unclear) {
+      setHeld(id);
       return;
     }
     const from = origin?.text === value ? origin : present();
@@ -123,7 +130,10 @@ export function UnitEntry(props: UnitEntryProps) {
         value={draft ?? (gauge === null ? (comma ? parts.number.replace(".", ",") : parts.number) : value)}
         placeholder={placeholder}
         onChange={(event) => type(event.target.value)}
-        onFocus={() => onFocusChange?.(true)}
+        onFocus={() => {
+          if (current) setHeld(current.id);
+          onFocusChange?.(true);
+        }}
         onBlur={() => {
           setDraft(null);
           onFocusChange?.(false);
