@@ -237,6 +237,10 @@ describe("search of the catalogue", () => {
     expect(found("φ")).not.toContain("bar");
     expect(found("w t")).toContain("bar");
     expect(found("w1")).toContain("tapered-strip");
+    // Words of the trade that the pages do not use.
+    expect(found("busbar")).toContain("bar");
+    expect(found("pcb via")).toEqual(["via-barrel"]);
+    expect(found("ground rod")).toContain("earth-rod");
     expect(found("no such thing")).toEqual([]);
     expect(found("  ")).toHaveLength(catalogue.length);
     expect(() => found("([.*")).not.toThrow();

@@ -1,8 +1,9 @@
 /** Search of the catalogue by words and symbols. */
 import type { ShapeEntry } from "@/lib/engine";
+import { TRADE_WORDS } from "../../docs/_search/trade-words";
 import { FAMILY_TITLES } from "../_model/families";
 
-/** Everything a shape may be searched by; symbols are kept as words of their own. */
+/** Everything a shape may be searched by, the trade's other words included; symbols are kept as words of their own. */
 export function searchText(entry: ShapeEntry): string {
   const symbols = entry.dimensions.map(({ symbol }) => plain(symbol));
   return plain(
@@ -14,6 +15,7 @@ export function searchText(entry: ShapeEntry): string {
       ...entry.dimensions.flatMap(({ label, name }) => [label, name]),
       ...entry.coordinates.map(({ label }) => label),
       ...entry.media.names.map(({ label }) => label),
+      TRADE_WORDS[`/docs/shapes/${entry.id}`] ?? "",
     ].join(" "),
   ).concat(" ", symbols.map((symbol) => `=${symbol}=`).join(" "));
 }
