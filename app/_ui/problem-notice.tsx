@@ -8,22 +8,29 @@ export interface ProblemShown {
   readonly type?: string;
   /** Request id, to quote to an administrator. */
   readonly instance?: string;
-  readonly errors?: readonly {
-    readonly pointer?: string;
-    readonly parameter?: string;
-    readonly detail: string;
-  }[];
+  readonly errors?: readonly ErrorShown[];
+}
+
+export interface ErrorShown {
+  readonly pointer?: string;
+  readonly parameter?: string;
+  readonly detail: string;
 }
 
 /** A problem of the API as a person reads it; complaints about fields that the page shows elsewhere are left out. */
 export function ProblemNotice({
   problem,
   tone = "problem",
+  placeOf,
 }: {
   readonly problem: ProblemShown;
   readonly tone?: "problem" | "caution";
+  /** How the page calls the place of an error; without it the error's pointer stands there. */
+  readonly placeOf?: (error: ErrorShown) => string | undefined;
 }) {
-  const { title, detail, type, instance, errors = [] } = problem;
+  const { title, type, instance, errors = [] } = problem;
+  // A document's detail repeats its first error, so that it can be read alone.
+  const detail = errors.some((error) => problem.detail?.includes(error.detail)) ? undefined : problem.detail;
   return (
     <Notice tone={tone} title={title}>
       {detail ? <p>{detail}</p> : null}
@@ -31,7 +38,7 @@ export function ProblemNotice({
         <ul className="mt-0.5">
           {errors.map((error, index) => (
             <li key={index}>
-              <code>{error.pointer ?? error.parameter}</code> {error.detail}
+              <Place error={error} placeOf={placeOf} /> {error.detail}
             </li>
           ))}
         </ul>
@@ -49,4 +56,16 @@ export function ProblemNotice({
       ) : null}
     </Notice>
   );
+}
+
+function Place({
+  error,
+  placeOf,
+}: {
+  readonly error: ErrorShown;
+  readonly placeOf: ((error: ErrorShown) => string | undefined) | undefined;
+}) {
+  if (!placeOf) return <code>{error.pointer ?? error.parameter}</code>;
+  const title = placeOf(error);
+  return title === undefined ? null : <strong className="font-semibold">{title}:</strong>;
 }

@@ -77,6 +77,34 @@ describe("a record", () => {
     await close();
   });
 
+  it("of what cannot be answered is refused in the page's own words", async () => {
+    const { page, close } = await openAs("busbar", "/outline");
+    await alive(page);
+    await page.getByLabel("Begin with").selectOption("An empty board");
+    const dialog = page.getByRole("dialog");
+    const refused = async () => {
+      await dialog.getByText("The input cannot be used").waitFor();
+      const text = await dialog.innerText();
+      expect(text).toContain("Outer ring: The outer ring has 0 points");
+      expect(text).not.toContain("#/");
+      expect(text.split("has 0 points")).toHaveLength(2);
+      await page.keyboard.press("Escape");
+    };
+    await page.getByRole("button", { name: "Save as a record" }).click();
+    await dialog.getByRole("button", { name: "Save", exact: true }).click();
+    await refused();
+    await page.getByRole("button", { name: "Keep outline" }).click();
+    await page.getByLabel("Name of the outline").fill("Nothing yet");
+    await dialog.getByRole("button", { name: "Keep", exact: true }).click();
+    await refused();
+    await page.goto(`${base()}${BAR.replace("width=40mm", "width=-40mm")}`);
+    await alive(page);
+    await page.getByRole("button", { name: "Save as a record" }).click();
+    await dialog.getByRole("button", { name: "Save", exact: true }).click();
+    await dialog.getByText("Width: must be greater than 0").waitFor();
+    await close();
+  });
+
   it("keeps a dimension that was found", async () => {
     const { page, close } = await openAs("busbar", `${BAR}&solveFor=width&target=20uohm`);
     await page.getByTestId("solutions").waitFor();
@@ -137,6 +165,8 @@ describe("a record", () => {
       record: { label: "Bend" },
     });
     const { page, close } = await openAs("busbar", `/records/${record.id}`);
+    // Places are called as the page of the outline calls them.
+    expect(await page.getByRole("cell", { name: /^outer ring, edge \d/ }).count()).toBe(2);
     await page.getByRole("link", { name: "Open in Outline" }).click();
     await page.waitForURL("**/outline#body=*");
     await alive(page);

@@ -1,4 +1,5 @@
 import { type ReactNode, useId } from "react";
+import { ERROR_LINE } from "../../_ui/field";
 
 interface ChoicesProps {
   readonly legend: string;
@@ -14,7 +15,7 @@ export function Choices({ legend, error, children }: ChoicesProps) {
     <fieldset className="mb-1" aria-describedby={error ? errorId : undefined}>
       <legend className="mb-0.5 text-table">{legend}</legend>
       {children}
-      <p id={errorId} className="mt-0.5 min-h-2.5 text-small text-oxide">
+      <p id={errorId} className={ERROR_LINE}>
         {error}
       </p>
     </fieldset>

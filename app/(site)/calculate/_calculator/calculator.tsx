@@ -6,7 +6,7 @@ import type { ShapeEntry } from "@/lib/engine";
 import { LiveRegion } from "../../../_ui/live-region";
 import { ToastArea } from "../../../_ui/toast";
 import { splitAddress } from "../_model/address";
-import { sortComplaints } from "../_model/complaints";
+import { parameterAt, sortComplaints } from "../_model/complaints";
 import { mediumKind, mediumPrefixes, type Parameters } from "../_model/parameters";
 import { INCLUDE, plainDimensions, requestBody } from "../_model/request";
 import { type PageState, stateQuery } from "../_model/variants";
@@ -118,6 +118,9 @@ function LiveCalculator(props: CalculatorProps) {
               body={{ ...bodies[active], include: INCLUDE }}
               title={entry.title}
               back={back}
+              placeOf={({ pointer = "" }) =>
+                dimensions.find(({ name }) => name === parameterAt(pointer))?.label
+              }
             />
           ) : null}
         </div>

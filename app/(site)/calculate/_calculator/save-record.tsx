@@ -8,7 +8,7 @@ import { callConsole, ConsoleProblem } from "../../../console/_shell/call-consol
 import type { TeamChoice } from "../../../console/_shell/team-choices";
 import { Dialog } from "../../../_ui/dialog";
 import { CONTROL, Field } from "../../../_ui/field";
-import { ProblemNotice } from "../../../_ui/problem-notice";
+import { type ErrorShown, ProblemNotice } from "../../../_ui/problem-notice";
 import { Select } from "../../../_ui/select";
 import { newAttemptKey } from "../../_live/attempt-key";
 import { ApiProblem, postApi } from "../../_live/call-api";
@@ -37,6 +37,8 @@ interface SaveRecordProps {
   readonly back?: () => string;
   /** Words of the button where the page has more than one thing to save. */
   readonly action?: string;
+  /** How the page calls the place of what is wrong with the body. */
+  readonly placeOf?: (error: ErrorShown) => string | undefined;
 }
 
 interface Stored {
@@ -54,6 +56,7 @@ export function SaveRecord({
   title,
   back,
   action = "Save as a record",
+  placeOf,
 }: SaveRecordProps) {
   const router = useRouter();
   const [open, setOpen] = useState(false);
@@ -173,6 +176,7 @@ export function SaveRecord({
           )}
           {problem ? (
             <ProblemNotice
+              placeOf={placeOf}
               problem={
                 problem instanceof ApiProblem || problem instanceof ConsoleProblem
                   ? problem.problem

@@ -4,7 +4,7 @@ import { useState } from "react";
 import { Bookmark } from "lucide-react";
 import { Button, ButtonLink } from "../../../_ui/button";
 import { Dialog } from "../../../_ui/dialog";
-import { ProblemNotice } from "../../../_ui/problem-notice";
+import { type ErrorShown, ProblemNotice } from "../../../_ui/problem-notice";
 import { TextField } from "../../../_ui/text-field";
 import { newAttemptKey } from "../../_live/attempt-key";
 import { ApiProblem, postApi } from "../../_live/call-api";
@@ -16,7 +16,14 @@ const AWAY = {
 };
 
 /** Stores the drawing with its terminals for the team: for widgets, and for calls by its id. */
-export function KeepOutline({ body }: { readonly body: FieldBody }) {
+export function KeepOutline({
+  body,
+  placeOf,
+}: {
+  readonly body: FieldBody;
+  /** How the page calls the place of what is wrong with the outline. */
+  readonly placeOf: (error: ErrorShown) => string;
+}) {
   const [open, setOpen] = useState(false);
   const [name, setName] = useState("");
   const [busy, setBusy] = useState(false);
@@ -96,7 +103,7 @@ export function KeepOutline({ body }: { readonly body: FieldBody }) {
                 if (event.key === "Enter" && !busy && name.trim() !== "") void keep();
               }}
             />
-            {problem ? <ProblemNotice problem={problem} /> : null}
+            {problem ? <ProblemNotice problem={problem} placeOf={placeOf} /> : null}
           </>
         )}
       </Dialog>

@@ -11,7 +11,7 @@ import { fieldSnippets } from "../../_live/snippets";
 import { SaveRecord, type Saving } from "../../calculate/_calculator/save-record";
 import type { MaterialChoice } from "../../calculate/_server/material-choices";
 import { useMaterials } from "../../calculate/_calculator/use-materials";
-import { placed } from "../_model/complaints";
+import { type Complaint, placed, placeTitle } from "../_model/complaints";
 import { boxOf } from "../_model/edges";
 import { fieldBody } from "../_model/field-body";
 import type { Sketch } from "../_model/sketch";
@@ -101,6 +101,7 @@ function LiveOutline({ heading, start, materials, origin, saving }: OutlinePageP
     () => (current && trouble?.kind === "input" ? placed(trouble.complaints) : []),
     [current, trouble],
   );
+  const titleOf = (complaint: Complaint) => placeTitle(placed([complaint])[0], sketch);
   const empty = sketch.rings[0].length === 0;
   const tool: Tool = chosen === "read" && !map ? "shape" : chosen;
 
@@ -124,8 +125,10 @@ function LiveOutline({ heading, start, materials, origin, saving }: OutlinePageP
         <div className="min-w-0 grow basis-[18rem]">{heading}</div>
         <div className="flex flex-wrap items-center gap-0.5 print:hidden">
           <PageTools state={state} onReplace={state.replace} />
-          {saving?.kind === "signed-in" ? <KeepOutline body={body} /> : null}
-          {saving ? <SaveRecord saving={saving} path="/fields" body={body} title="Outline" /> : null}
+          {saving?.kind === "signed-in" ? <KeepOutline body={body} placeOf={titleOf} /> : null}
+          {saving ? (
+            <SaveRecord saving={saving} path="/fields" body={body} title="Outline" placeOf={titleOf} />
+          ) : null}
         </div>
       </div>
       <div className="mt-2 grid grid-cols-1 items-start gap-x-4 gap-y-3 wide:grid-cols-[minmax(0,1fr)_22rem]">

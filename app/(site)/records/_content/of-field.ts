@@ -154,7 +154,7 @@ type Part = NonNullable<StoredRequest["terminals"][number]["parts"]>[number];
 
 function partText({ ring, edge, from, to }: Part): string {
   const share = from === 0 && to === 1 ? "" : `, ${plainNumber(from)} to ${plainNumber(to)}`;
-  return `ring ${ring}, edge ${edge}${share}`;
+  return `${ring === 0 ? "outer ring" : `hole ${ring}`}, edge ${edge}${share}`;
 }
 
 function terminalTable(terminals: StoredRequest["terminals"]): Block {
