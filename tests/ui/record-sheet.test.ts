@@ -160,6 +160,10 @@ describe("a sizing's record", () => {
     expect(content.sections.map(({ id }) => id)).toEqual(
       expect.arrayContaining(["solutions", "inputs", "checks"]),
     );
+    // Opened again the found width stands in the form, and what was looked for below it.
+    const query = new URL(content.openAgain?.href ?? "", "http://x.example").searchParams;
+    expect(query.get("width")).toMatch(/mm$/);
+    expect([query.get("solveFor"), query.get("target")]).toEqual(["width", "20uohm"]);
   });
 
   it("draws the outline that was scaled", () => {

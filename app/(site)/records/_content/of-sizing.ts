@@ -6,11 +6,16 @@ import type { Told } from "./content";
 import { shapePicture } from "./inputs";
 import { outlineSections, storedFieldRequest } from "./of-field";
 import { answerSections, inputSections, type LookUp, storedRequest } from "./of-resistance";
+import { inCalculator } from "./open-again";
 import { outlineSvg } from "./outline-svg";
 import { allCautions, lookedFor, sizingHeadline, solutionsTable } from "./sizing-answer";
 import { words } from "./typed";
 
-const sought = { solveFor: z.string(), target: z.unknown().optional() };
+const sought = {
+  solveFor: z.string(),
+  target: z.unknown().optional(),
+  within: z.array(z.unknown()).optional(),
+};
 const onShape = storedRequest.extend(sought);
 const onOutline = storedFieldRequest.extend(sought);
 
@@ -32,11 +37,13 @@ function ofShape(asked: z.infer<typeof onShape>, result: SizingResult, lookUp: L
   const label = dimension?.label ?? words(solveFor);
   const [inputs, ...others] = inputSections(asked, result.materials, lookUp);
   const rest = { shape: shapeId, assumptions: result.assumptions, sources: result.sources };
+  const found = { ...dimensions, [solveFor]: first.dimension.text };
   return {
     subject: `${shape?.title ?? words(shapeId)}: sizing`,
     headline: sizingHeadline(label, result),
     picture: shapePicture(shapeId, { ...dimensions, [solveFor]: first.dimension.value }),
     cautions: allCautions(result),
+    openAgain: inCalculator({ ...asked, dimensions: found }),
     sections: [
       { id: "solutions", title: "Solutions", blocks: [solutionsTable(label, result)] },
       { ...inputs, blocks: [lookedFor(label, target, result), ...inputs.blocks] },

@@ -21,6 +21,10 @@ interface Asked {
   readonly operating?: Given;
   readonly requirement?: Given;
   readonly uncertainty?: Given;
+  /** Of a sizing: the dimension that was looked for, the resistance it was to give, and where it was sought. */
+  readonly solveFor?: string;
+  readonly target?: unknown;
+  readonly within?: readonly unknown[];
 }
 
 /** Undefined where the calculator has no field for something that was asked. */
@@ -40,7 +44,9 @@ export function inCalculator(asked: Asked): OpenAgain | undefined {
   };
   const parameters: Record<string, string> = { ...exampleParameters({ ...entry, example }) };
   const { method, trials, seed } = uncertainty;
-  const rest = { ...plain(operating), ...requirement, uncertainty: method, trials, seed };
+  const { solveFor, target, within: [from, to] = [] } = asked;
+  const sought = { solveFor, target, from, to };
+  const rest = { ...plain(operating), ...requirement, uncertainty: method, trials, seed, ...sought };
   for (const [name, value] of Object.entries(rest)) if (value !== undefined) parameters[name] = String(value);
   tolerances("", { ...dimensions, ...operating, ...medium }, parameters);
   for (const [name, one] of Object.entries(media ?? {})) tolerances(`${name}.`, one, parameters);
