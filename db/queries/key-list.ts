@@ -78,7 +78,10 @@ export function pageOfKeys(db: Database, filter: KeyFilter): { rows: ListedKey[]
     .limit(limit)
     .offset(offset)
     .all();
-  return { rows: rows.map(({ total: _total, ...row }) => row), total: rows[0]?.total ?? 0 };
+  // A page past the end has no row to tell the total.
+  const total =
+    rows.at(0)?.total ?? (offset > 0 ? pageOfKeys(db, { ...filter, limit: 1, offset: 0 }).total : 0);
+  return { rows: rows.map(({ total: _total, ...row }) => row), total };
 }
 
 /** Keys of some teams that want attention: end within `soonMs`, or have used four fifths of their month and more. */

@@ -1,4 +1,4 @@
-import { and, asc, count, eq, isNull, sql } from "drizzle-orm";
+import { and, asc, count, eq, isNull, ne, sql } from "drizzle-orm";
 import { type Database, prepared } from "../client";
 import { memberships, people, type Role, teams } from "../schema/organisation";
 import type { Team } from "./teams";
@@ -51,6 +51,16 @@ export function countRole(db: Database, role: Role): number {
       .where(and(eq(people.role, role), isNull(people.removedAt)))
       .get()?.people ?? 0
   );
+}
+
+/** Administrators besides one person: how many there are, and how many of them have chosen a password. */
+export function otherAdministrators(db: Database, personId: string): { all: number; entered: number } {
+  const counted = db
+    .select({ all: count(), entered: count(people.passwordHash) })
+    .from(people)
+    .where(and(eq(people.role, "admin"), isNull(people.removedAt), ne(people.id, personId)))
+    .get();
+  return counted ?? { all: 0, entered: 0 };
 }
 
 /** The teams of a person, by short name. */

@@ -77,7 +77,11 @@ export function pageOfRecords(
     .limit(limit)
     .offset(offset)
     .all();
-  if (page.length === 0) return { rows: [], total: 0 };
+  if (page.length === 0) {
+    // A page past the end has no row to tell the total.
+    const total = offset > 0 ? pageOfRecords(db, { ...filter, limit: 1, offset: 0 }).total : 0;
+    return { rows: [], total };
+  }
   const rows = db
     .select({
       id: records.id,

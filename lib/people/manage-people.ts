@@ -2,7 +2,7 @@ import { z } from "zod";
 import { transact } from "@/db/client";
 import { voidLinks } from "@/db/queries/links";
 import {
-  countRole,
+  otherAdministrators,
   personByEmail,
   personById,
   type PersonRow,
@@ -76,8 +76,16 @@ export function requirePerson(service: Service, id: string): PersonRow {
 }
 
 function requireAnotherAdministrator(service: Service, person: PersonRow): void {
-  if (person.role !== "admin" || countRole(service.db, "admin") > 1) return;
-  throw new Refusal("last-administrator", "This is the only administrator: make somebody else one first.");
+  if (person.role !== "admin") return;
+  const others = otherAdministrators(service.db, person.id);
+  // Who was invited may never come, so one who can sign in leaves only behind another who can.
+  if ((person.passwordHash === null ? others.all : others.entered) > 0) return;
+  throw new Refusal(
+    "last-administrator",
+    others.all === 0
+      ? "This is the only administrator: make somebody else one first."
+      : "No other administrator has followed the invitation yet: wait until one has.",
+  );
 }
 
 export interface Invited {

@@ -57,7 +57,12 @@ it("first key, first call, its usage; revoked in a second browser it is refused 
   await dialog.getByRole("button", { name: "Issue" }).click();
   const key = (await page.getByTestId("secret").textContent()) ?? "";
   expect(key).toMatch(/^rho_/);
+  // A stray press loses nothing; the button goes back to where it began.
+  await page.keyboard.press("Escape");
+  await page.mouse.click(5, 5);
+  expect(await page.getByTestId("secret").textContent()).toBe(key);
   await dialog.getByRole("button", { name: "I have copied it" }).click();
+  await page.waitForFunction(() => document.activeElement?.textContent?.includes("Issue a key"));
   await page.getByRole("link", { name: "Shop floor" }).waitFor();
   expect(await page.content()).not.toContain(key);
 

@@ -171,6 +171,7 @@ test("a material from a measured table to its next version, its records and its 
     mayManage: true,
   });
   const used = await answer<Page>("GET", `records?material=${id}`);
+  expect(await answer<Page>("GET", `records?material=${id}&page=9`)).toEqual({ rows: [], total: used.total });
   expect(used.rows).toMatchObject([{ id: stored.body.record.id, label: "Contact" }]);
   const replay = await answer<object>("POST", `records/${stored.body.record.id}/replay`);
   expect(replay).toMatchObject({ drift: 0, identical: true });
@@ -184,6 +185,8 @@ test("lists search, order, page and export", async () => {
   for (const name of ["Ampere", "Biot", "Coulomb"]) await issue(name);
   const two = await answer<Page>("GET", "keys?q=o&sort=-name&size=1&page=2&state=active");
   expect(two.total).toBeGreaterThanOrEqual(2);
+  // Past the end there are no rows, and still the total.
+  expect(await answer<Page>("GET", "keys?q=o&page=99&state=active")).toEqual({ rows: [], total: two.total });
   const sorted = await answer<Page>("GET", "keys?sort=name");
   const names = sorted.rows.map(({ name }) => String(name));
   expect(names).toEqual([...names].sort((a, b) => a.toLowerCase().localeCompare(b.toLowerCase(), "en")));

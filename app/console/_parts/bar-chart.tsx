@@ -1,7 +1,7 @@
 "use client";
 
 import { type ReactNode, useMemo, useRef, useState } from "react";
-import { scaleBand, scaleLinear } from "d3-scale";
+import { scaleBand, type ScaleLinear, scaleLinear } from "d3-scale";
 import { Button } from "../../_ui/button";
 import { DataTable } from "../../_ui/data-table";
 import { useWidth } from "../../_ui/plot/use-width";
@@ -40,6 +40,11 @@ export function periodText(at: string, by: "day" | "hour"): string {
 /** The same on an axis: a day as `12-01`, an hour within it as `14h`. */
 export function periodTick(at: string, by: "day" | "hour"): string {
   return by === "day" || at.slice(11, 13) === "00" ? at.slice(5, 10) : `${at.slice(11, 13)}h`;
+}
+
+/** Counts are whole, and so are the numbers beside them, however few there are. */
+export function countTicks(y: ScaleLinear<number, number>): number[] {
+  return y.ticks(4).filter((value) => Number.isInteger(value));
 }
 
 /** Counts over time as stacked bars, with the numbers behind them. */
@@ -86,7 +91,7 @@ export function BarChart({ title, at, by, parts, beside }: BarChartProps) {
           className="block w-full font-sans text-[12px]"
         >
           <g className="fill-ink-soft stroke-rule">
-            {y.ticks(4).map((value) => (
+            {countTicks(y).map((value) => (
               <g key={value} transform={`translate(0 ${y(value)})`}>
                 <path d={`M${MARGIN.left} 0H${width - MARGIN.right}`} />
                 <text x={MARGIN.left - 5} dy="0.35em" textAnchor="end" stroke="none">

@@ -11,12 +11,20 @@ export function Figures({ total }: { readonly total: Total }) {
       <Figure
         title="Refused or failed"
         value={countText(refused)}
-        more={`${shareText(refused, requests)} of the requests; ${countText(failed)} failed`}
+        more={
+          requests > 0
+            ? `${shareText(refused, requests)} of the requests; ${countText(failed)} failed`
+            : undefined
+        }
       />
       <Figure
         title="Latency, median"
         value={msText(p50Ms)}
-        more={`95\u00a0% under ${msText(p95Ms)}, 99\u00a0% under ${msText(p99Ms)}`}
+        more={
+          requests > 0
+            ? `95\u00a0% under ${msText(p95Ms)}, 99\u00a0% under ${msText(p99Ms)}`
+            : "no call to measure"
+        }
       />
     </dl>
   );

@@ -233,6 +233,25 @@ describe("people", () => {
     expect(await codeOf(() => removePerson(service, second, SHELL))).toBe("last-administrator");
   });
 
+  test("keep an administrator who can sign in: one who was only invited does not count", async () => {
+    const { service, id, person } = withPerson();
+    const maud = {
+      email: "maud@merrow-pike.example",
+      name: "Maud Okerlund",
+      role: "admin" as const,
+      teams: [],
+    };
+    const invited = invitePerson(service, maud, SHELL);
+    expect(await codeOf(() => removePerson(service, id, SHELL))).toBe("last-administrator");
+    removePerson(service, invited.person.id, SHELL);
+    const again = invitePerson(service, maud, SHELL);
+    await choosePassword(service, { secret: secretOf(again.link.url), password: PASSWORD }, caller());
+    removePerson(service, id, SHELL);
+    const third = person("admin");
+    removePerson(service, again.person.id, SHELL);
+    expect(await codeOf(() => removePerson(service, third, SHELL))).toBe("last-administrator");
+  });
+
   test("belong to a team, but for administrators: the complaint is about the teams", () => {
     const { service, id, person, team } = withPerson();
     person("admin");

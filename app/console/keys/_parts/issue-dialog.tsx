@@ -47,11 +47,14 @@ export function IssueDialog({ teams, ownTeamId, onClose, onIssued }: IssueDialog
   return (
     <Dialog
       open
+      deliberate={busy}
       onOpenChange={onClose}
       title="Issue a key"
       actions={
         <>
-          <Button onClick={onClose}>Cancel</Button>
+          <Button onClick={onClose} disabled={busy}>
+            Cancel
+          </Button>
           <Button variant="primary" type="submit" form={form} disabled={busy}>
             {busy ? "Issuing …" : "Issue"}
           </Button>

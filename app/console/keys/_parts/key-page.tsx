@@ -83,7 +83,7 @@ function Facts({ keyShown: key }: { readonly keyShown: KeyDetail }) {
           </Notice>
         </div>
       ) : null}
-      <dl className="grid gap-x-3 gap-y-1 text-table medium:grid-cols-[auto_1fr] [&_dt]:text-ink-soft">
+      <dl className="grid gap-x-3 text-table max-medium:[&_dt:not(:first-child)]:mt-1 medium:grid-cols-[auto_1fr] medium:gap-y-1 [&_dt]:text-ink-soft">
         <dt>State</dt>
         <dd>
           <KeyState state={key.state} expiresAt={key.expiresAt} />

@@ -50,12 +50,15 @@ export function RotateDialog({ keyShown: key, onClose, onRotated }: RotateDialog
   return (
     <Dialog
       open
+      deliberate={busy}
       onOpenChange={onClose}
       title={`Rotate ${key.name}?`}
       description={`A new secret counts at once. ${reachText(key)} They must change over before the overlap is over.`}
       actions={
         <>
-          <Button onClick={onClose}>Cancel</Button>
+          <Button onClick={onClose} disabled={busy}>
+            Cancel
+          </Button>
           <Button variant="primary" onClick={rotate} disabled={busy}>
             {busy ? "Rotating …" : "Rotate"}
           </Button>

@@ -23,6 +23,7 @@ export function ShownSecret({ shown, onClose }: { readonly shown: ShownKey; read
   return (
     <Dialog
       open
+      deliberate
       onOpenChange={onClose}
       title="Copy the key now"
       description="It is shown this once; only its hash is stored. Who loses it rotates the key."

@@ -95,7 +95,7 @@ function Facts({ history, current }: FactsProps) {
           </Notice>
         </div>
       ) : null}
-      <dl className="grid gap-x-3 gap-y-0.5 text-table medium:grid-cols-[auto_1fr] [&_dt]:text-ink-soft">
+      <dl className="grid gap-x-3 text-table max-medium:[&_dt:not(:first-child)]:mt-1 medium:grid-cols-[auto_1fr] medium:gap-y-0.5 [&_dt]:text-ink-soft">
         {factsOf(current)
           .filter(([, value]) => value !== "")
           .map(([title, value]) => (
