@@ -1,9 +1,9 @@
 "use client";
 
 import { type KeyboardEvent, type PointerEvent, useId, useMemo, useRef } from "react";
-import { scaleLinear, scaleLog } from "d3-scale";
 import { line } from "d3-shape";
 import { type AxisUnit, axisUnit, domainOf, powerLabel, readOff } from "./axis";
+import { decadeTicks, roundDomain, roundLabels, roundTicks, type Scale, scaleOf } from "./scale";
 import { useWidth } from "./use-width";
 
 export interface PlotAxis {
@@ -62,19 +62,13 @@ export function LinePlot(props: LinePlotProps) {
     const all = series.flatMap(({ values }) => values.filter((value) => Number.isFinite(value)));
     const xUnit = axisUnit(x.values, x.unit);
     const yUnit = axisUnit(all, y.unit);
-    const scale = (log: boolean, domain: readonly [number, number], range: readonly [number, number]) =>
-      log ? scaleLog(domain, range) : scaleLinear(domain, range);
     const xs = x.values.map((value) => value * xUnit.factor);
-    const horizontal = scale(logX, domainOf(xs, logX, false), [MARGIN.left, width - MARGIN.right]);
-    const vertical = scale(
-      logY,
-      domainOf(
-        all.map((value) => value * yUnit.factor),
-        logY,
-        true,
-      ),
-      [HEIGHT - MARGIN.bottom, MARGIN.top],
-    ).nice();
+    const horizontal = scaleOf(logX, domainOf(xs, logX, false), [MARGIN.left, width - MARGIN.right]);
+    const ys = all.map((value) => value * yUnit.factor);
+    const vertical = scaleOf(logY, roundDomain(logY, domainOf(ys, logY, true)), [
+      HEIGHT - MARGIN.bottom,
+      MARGIN.top,
+    ]);
     const paths = series.map(({ values }) => {
       const draw = line<number>()
         .x((_, i) => horizontal(xs[i]))
@@ -258,18 +252,14 @@ function namedTicks(
   return xs.flatMap((value, index) => (index % every === 0 ? [{ value, label: names[index].tick }] : []));
 }
 
-function ticksOf(
-  scale: ReturnType<typeof scaleLinear<number, number>> | ReturnType<typeof scaleLog<number, number>>,
-  log: boolean,
-  count: number,
-): readonly Tick[] {
+function ticksOf({ domain }: Scale, log: boolean, count: number): readonly Tick[] {
   if (!log) {
-    const format = scale.tickFormat(count);
-    return scale.ticks(count).map((value) => ({ value, label: format(value) }));
+    const label = roundLabels(domain, count);
+    return roundTicks(domain, count).map((value) => ({ value, label: label(value) }));
   }
-  const [from, to] = scale.domain();
+  const [from, to] = domain;
   const decades = Math.log10(to / from);
-  const wanted = scale.ticks().filter((value) => {
+  const wanted = decadeTicks(domain).filter((value) => {
     const power = Math.log10(value);
     const whole = Math.abs(power - Math.round(power)) < 1e-9;
     const every = Math.max(1, Math.ceil(decades / count));
