@@ -64,6 +64,8 @@ describe("the builder", () => {
     await page.getByText("Before it can be published").waitFor(LONG);
     expect(await page.getByRole("button", { name: "Publish version 1" }).isDisabled()).toBe(true);
     await length.getByLabel("To", { exact: true }).fill("2 m");
+    await length.getByLabel("Help").fill("Between the joints");
+    await preview.getByText("Between the joints").waitFor(LONG);
     await page.getByText("Before it can be published").waitFor({ state: "detached", ...LONG });
     await page.getByRole("button", { name: "Publish version 1" }).click();
     await page.getByText("published, version 1").waitFor(LONG);

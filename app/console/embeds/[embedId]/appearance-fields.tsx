@@ -78,7 +78,7 @@ export function AppearanceFields({ detail, draft }: FieldsProps) {
           placeholder="no limit"
           value={requirement?.max ?? ""}
           error={errorAt("#/requirement/max")}
-          help="Visitors see the verdict: 40 uohm"
+          help="Such as 40 uohm; visitors see the verdict."
           onChange={(event) => limit("max", event.target.value)}
         />
       </div>

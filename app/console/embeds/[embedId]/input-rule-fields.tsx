@@ -115,6 +115,15 @@ export function InputRuleFields(props: RuleProps) {
             onChange={(event) => onChange({ ...rule, label: event.target.value || undefined })}
           />
         )}
+        {rule.mode === "open" ? (
+          <TextField
+            label="Help"
+            placeholder="none"
+            value={rule.help ?? ""}
+            maxLength={200}
+            onChange={(event) => onChange({ ...rule, help: event.target.value || undefined })}
+          />
+        ) : null}
       </div>
       {way === "list" && rule.mode === "open" ? (
         <ChoicesField
@@ -154,10 +163,11 @@ function changedWay(
 ): InputRule {
   const { value } = rule;
   const label = rule.mode === "hidden" ? {} : { label: rule.label };
+  const words = rule.mode === "open" ? { ...label, help: rule.help } : label;
   if (way === "hidden") return { mode: "hidden", value };
   if (way === "fixed") return { mode: "fixed", value, ...label };
-  if (way === "range") return { mode: "open", value, ...label, min: value, max: value };
-  if (way === "open") return { mode: "open", value, ...label };
+  if (way === "range") return { mode: "open", value, ...words, min: value, max: value };
+  if (way === "open") return { mode: "open", value, ...words };
   const known = choices.find((choice) => choice.value === value);
-  return { mode: "open", value, ...label, choices: [known ? { value, label: known.label } : { value }] };
+  return { mode: "open", value, ...words, choices: [known ? { value, label: known.label } : { value }] };
 }

@@ -105,7 +105,7 @@ function SettingsForm({
           label="Origins, one a line"
           error={
             originErrors
-              .map(([name, text]) => `Line ${Number(name.split(".")[1] ?? 0) + 1}: ${text}`)
+              .map(([name, text]) => `Origin ${Number(name.split(".")[1] ?? 0) + 1}: ${text}`)
               .join(" ") || undefined
           }
         >
@@ -135,6 +135,7 @@ function SettingsForm({
             type="number"
             min={0}
             step={1}
+            required
             prose={false}
             defaultValue={embed.monthQuota}
             error={errors?.get("monthQuota")}
