@@ -11,10 +11,12 @@ interface CodeBlockProps {
 /** Code to read and to copy; long lines scroll inside the block. */
 export function CodeBlock({ code, label, copies = code }: CodeBlockProps) {
   return (
-    <figure className="rounded border border-rule bg-sheet">
+    <figure className="break-inside-avoid rounded border border-rule bg-sheet">
       <figcaption className="flex items-center justify-between border-b border-rule ps-2 pe-0.5 text-small text-ink-soft">
         {label}
-        <CopyButton text={copies} what={label} />
+        <span className="print:hidden">
+          <CopyButton text={copies} what={label} />
+        </span>
       </figcaption>
       <pre
         // Reachable by keyboard, since it scrolls.

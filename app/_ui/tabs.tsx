@@ -30,7 +30,12 @@ export function Tabs({ label, tabs }: { readonly label: string; readonly tabs: r
 
   return (
     <div>
-      <div role="tablist" aria-label={label} onKeyDown={move} className="flex flex-wrap gap-x-2 text-table">
+      <div
+        role="tablist"
+        aria-label={label}
+        onKeyDown={move}
+        className="flex flex-wrap gap-x-2 text-table print:hidden"
+      >
         {tabs.map((tab) => (
           <button
             key={tab.id}

@@ -121,10 +121,31 @@ describe("the docs", () => {
     }
   });
 
-  it("hand out the Python client and a table for a shape", async () => {
+  it("show every form of a call without scripts, and no marks of their source", async () => {
+    const start = await (await fetch(`${base()}/docs/start`)).text();
+    const unscripted = [...start.matchAll(/<noscript>(.*?)<\/noscript>/gs)].map(([, html]) => html).join("");
+    expect(unscripted).toContain("@rhoform/client");
+    expect(unscripted).toContain("rhoform.Client(");
+    for (const path of [...walked.keys()].filter((path) => /^\/docs\/[a-z-]+$/.test(path))) {
+      const html = await (await fetch(base() + path)).text();
+      const prose = [...html.matchAll(/<(p|li|th|td)\b[^>]*>(.*?)<\/\1>/gs)].map(([, , text]) =>
+        text.replace(/<(code|script)\b.*?<\/\1>/gs, "").replace(/<[^>]+>/g, ""),
+      );
+      expect(
+        prose.filter((text) => /`|\*\w/.test(text)),
+        path,
+      ).toEqual([]);
+    }
+  });
+
+  it("hand out the Python client, its examples and a table for a shape", async () => {
     const client = await fetch(`${base()}/docs/python/rhoform.py`);
     expect(client.headers.get("Content-Disposition")).toContain("rhoform.py");
     expect(await client.text()).toContain("class Client(");
+    const example = await fetch(`${base()}/docs/python/examples/replay_records.py`);
+    expect(example.headers.get("Content-Disposition")).toContain("replay_records.py");
+    expect(await example.text()).toContain("sys.exit(1 if drifted else 0)");
+    expect((await fetch(`${base()}/docs/python/examples/nothing.py`)).status).toBe(404);
     const table = await fetch(`${base()}/docs/shapes/bar/template.csv`);
     expect((await table.text()).split("\r\n")[0]).toMatch(/^shape,length,width,thickness,/);
     expect((await fetch(`${base()}/docs/shapes/nothing/template.csv`)).status).toBe(404);

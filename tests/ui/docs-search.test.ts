@@ -36,6 +36,8 @@ const QUERIES: readonly (readonly [query: string, expected: string])[] = [
   ["monte carlo", "/docs/uncertainty"],
   ["tolerance", "/docs/uncertainty"],
   ["iframe", "/docs/embedding#iframe"],
+  ["kelvin", "/docs/quantities"],
+  ["temperature coefficient", "/docs/media#medium"],
   ["finite element", "/docs/fields"],
   ["goal seek thickness", "/docs/sizing"],
   ["kirchhoff", "/docs/networks"],

@@ -2,6 +2,9 @@ import { readFileSync } from "node:fs";
 import { join } from "node:path";
 import type { Block } from "./page";
 
+/** The scripts in `sdk/python/examples`, which this service hands out one by one. */
+export const PYTHON_EXAMPLES = ["sweep.py", "parts_list.py", "replay_records.py"] as const;
+
 /** File name of the packed TypeScript client, as npm names it. */
 export function packedClient(): string {
   const text = readFileSync(join(process.cwd(), "sdk/typescript/package.json"), "utf8");

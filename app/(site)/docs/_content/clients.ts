@@ -66,7 +66,7 @@ export const clients: DocPage = {
         clientInstall(origin),
         "The lock file of your project then holds its address and digest. Where builds do not reach this service, [download the file](/docs/clients/" +
           packedClient() +
-          ") and install it from your repository.",
+          ") and install it from your repository. In a project whose `package.json` lacks `type: module`, name a file `.mjs`, or `.mts` where it has types.",
         {
           snippets: [
             {
@@ -132,16 +132,22 @@ export const clients: DocPage = {
           table: {
             head: ["script", "what it does"],
             rows: [
-              ["`sweep`", "sweeps one dimension and prints a table"],
-              ["`parts_list`, `parts-list`", "reads a parts list from CSV; exits with 1 if a row is refused"],
               [
-                "`replay_records`, `replay-records`",
+                "[`sweep.py`](/docs/python/examples/sweep.py), `sweep.ts`",
+                "sweeps one dimension and prints a table",
+              ],
+              [
+                "[`parts_list.py`](/docs/python/examples/parts_list.py), `parts-list.ts`",
+                "reads a parts list from CSV; exits with 1 if a row is refused",
+              ],
+              [
+                "[`replay_records.py`](/docs/python/examples/replay_records.py), `replay-records.ts`",
                 "replays records, as a nightly job; exits with 1 on drift",
               ],
             ],
           },
         },
-        "They stand in `sdk/python/examples` and `sdk/typescript/examples` of the repository; the TypeScript ones come with the package, in `node_modules/@rhoform/client/examples`.",
+        "They read `RHOFORM_URL` and `RHOFORM_KEY`. Put a Python one beside `rhoform.py`; the TypeScript ones come with the package, in `node_modules/@rhoform/client/examples`.",
       ],
     },
   ],

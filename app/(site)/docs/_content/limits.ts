@@ -54,6 +54,7 @@ export const limits: DocPage = {
               ["body of a call", "1 MB"],
               ["body of an outline or a field", "10 MB"],
               ["body of a batch", "20 MB and 10,000 items"],
+              ["body of a network", "20 MB and 10,000 elements"],
               ["`Prefer: wait`", "30 s"],
               ["an expression", "1,000 characters"],
               ["a page of a list", "`limit`, with the next page in `next` and in the `Link` header"],

@@ -28,7 +28,7 @@ export const media: DocPage = {
             ],
           },
         },
-        "A plain resistivity or conductivity may have a `temperatureCoefficient` and a `referenceTemperature`. Sheet shapes take a `thickness` beside a material, resistivity or conductivity. A temperature outside the material’s range is refused unless `extrapolate` is true, and then it is a caution of the answer.",
+        "A plain resistivity or conductivity may have a temperature coefficient, `temperatureCoefficient` in 1/K, and the `referenceTemperature` at which it holds. Sheet shapes take a `thickness` beside a material, resistivity or conductivity. A temperature outside the material’s range is refused unless `extrapolate` is true, and then it is a caution of the answer.",
         resistanceBlock(
           origin,
           {
@@ -47,7 +47,7 @@ export const media: DocPage = {
       id: "graded",
       title: "Graded media",
       blocks: [
-        "A shape has coordinates; each runs *along* the flow or *across* it. A graded medium names one of them, says whether its values are conductivities or resistivities, and gives a profile. Positions are values of that coordinate, in metres (or degrees) with the coordinate’s own start and end: a radius runs from the inner to the outer radius.",
+        "A shape has coordinates; each runs along the flow or across it. A graded medium names one of them, says whether its values are conductivities or resistivities, and gives a profile. Positions are values of that coordinate, in metres (or degrees) with the coordinate’s own start and end: a radius runs from the inner to the outer radius.",
         resistanceBlock(
           origin,
           {

@@ -42,6 +42,7 @@ export const running: DocPage = {
             },
           ],
         },
+        "Both folders belong to the user `rhoform`: the start installs and builds in the one and writes the database into the other. The first start takes a few minutes; `journalctl -u rhoform -f` shows how far it is.",
         "`npm run api` serves the API alone, without the pages, several times the calls a second.",
       ],
     },

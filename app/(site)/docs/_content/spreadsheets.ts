@@ -26,7 +26,7 @@ export const spreadsheets: DocPage = {
           steps: [
             "Open [Keys](/console/keys) and press “Issue a key”.",
             "Name it after the workbook, such as “Cost sheet”.",
-            "Leave the scope `compute` ticked and no other.",
+            "Tick the scope `compute` and untick every other: a formula needs no more, library materials included.",
             `Switch on “May travel in a URL, as ?key=”. The quotas become small by that: ${URL_MINUTE_QUOTA} requests a minute, ${URL_MONTH_QUOTA.toLocaleString("en")} computations a month.`,
             "Choose a last day, such as the end of the project.",
             "Press “Issue”, copy the key, and paste it into cell B1 of the workbook. Hide that cell before you pass the file on, or clear it.",

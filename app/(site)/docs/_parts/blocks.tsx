@@ -2,7 +2,7 @@ import { Notice } from "../../../_ui/notice";
 import { Tabs } from "../../../_ui/tabs";
 import { Tex } from "../../../_ui/tex";
 import type { Block, DocSnippet } from "../_content/page";
-import { Inline } from "./inline";
+import { Inline, plainText } from "./inline";
 import { KeyField } from "./key-field";
 import { OwnCode } from "./own-code";
 import { ScrollTable } from "./scroll-table";
@@ -62,12 +62,12 @@ function Table({
   readonly rows: readonly (readonly string[])[];
 }) {
   return (
-    <ScrollTable label={head.join(", ")}>
+    <ScrollTable label={plainText(head.join(", "))}>
       <thead>
         <tr>
           {head.map((text) => (
             <th key={text} scope="col" className="font-semibold">
-              {text}
+              <Inline text={text} />
             </th>
           ))}
         </tr>
@@ -87,16 +87,31 @@ function Table({
   );
 }
 
+/** The forms of a call, one shown at a time; without scripts, one below the other. */
 export function Snippets({ snippets }: { readonly snippets: readonly DocSnippet[] }) {
   if (snippets.length === 1) return <OwnCode code={snippets[0].code} label={snippets[0].label} />;
   return (
-    <Tabs
-      label="Forms of the call"
-      tabs={snippets.map(({ label, code }) => ({
-        id: label.toLowerCase().replaceAll(" ", "-"),
-        label,
-        content: <OwnCode code={code} label={label} />,
-      }))}
-    />
+    <>
+      <Tabs
+        label="Forms of the call"
+        tabs={snippets.map(({ label, code }) => ({
+          id: label.toLowerCase().replaceAll(" ", "-"),
+          label,
+          content: <OwnCode code={code} label={label} />,
+        }))}
+      />
+      <noscript>
+        {snippets.slice(1).map(({ label, code }) => (
+          <figure key={label} className="mt-2 rounded border border-rule bg-sheet">
+            <figcaption className="border-b border-rule px-2 py-1 text-small text-ink-soft">
+              {label}
+            </figcaption>
+            <pre tabIndex={0} aria-label={label} className="overflow-x-auto px-2 py-1.5 text-small">
+              <code>{code}</code>
+            </pre>
+          </figure>
+        ))}
+      </noscript>
+    </>
   );
 }

@@ -3,7 +3,7 @@ import { SiteLink } from "../../../_ui/site/site-link";
 
 const MARKUP = /(`[^`]+`|\*\*[^*]+\*\*|\[[^\]]+\]\([^)]+\))/;
 
-/** Running text of the docs: `code`, **strong**, [link](address). */
+/** Running text of the docs: `code`, **strong**, [link](address), and code in a link. */
 export function Inline({ text }: { readonly text: string }) {
   return text.split(MARKUP).map((part, index) => {
     if (part.startsWith("`") && part.length > 2) return <code key={index}>{part.slice(1, -1)}</code>;
@@ -12,7 +12,7 @@ export function Inline({ text }: { readonly text: string }) {
     if (link)
       return (
         <SiteLink key={index} href={link[2]} className="link">
-          {link[1]}
+          <Inline text={link[1]} />
         </SiteLink>
       );
     return <Fragment key={index}>{part}</Fragment>;

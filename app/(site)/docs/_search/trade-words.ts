@@ -54,7 +54,7 @@ export const TRADE_WORDS: Readonly<Record<string, string>> = {
   "/docs/clients#examples": "sweep parametric script nightly sample code",
   "/docs/spreadsheets": "excel libreoffice google sheets calc workbook cell macro",
   "/docs/authentication": "login token api key bearer credentials cors",
-  "/docs/quantities": "si units inch mil mm conversion degrees prefix",
+  "/docs/quantities": "si units inch mil mm conversion degrees kelvin celsius fahrenheit prefix",
   "/docs/media#medium": "resistivity conductivity sheet resistance squares four-point probe measured alloy",
   "/docs/media#graded": "functionally graded gradient diffusion profile doping layers inhomogeneous variable",
   "/docs/operating-point": "voltage current power loss heating temperature rise joule",

@@ -2,6 +2,8 @@ import type { Metadata } from "next";
 import { ROLES, type Role } from "@/db/schema/organisation";
 import { type Action, ACTIONS, PERMISSIONS, type Reach } from "@/lib/auth/permissions";
 import { Breadcrumb } from "../../../_ui/breadcrumb";
+import { neighbours } from "../_content/pages";
+import { PageLinks } from "../_parts/page-links";
 
 export const metadata: Metadata = { title: "Roles and permissions" };
 
@@ -71,6 +73,7 @@ export default function Permissions() {
         The last administrator can be neither removed nor given another role. Somebody who is removed is
         signed out at once; keys, embeds, materials and records stay with their teams.
       </p>
+      <PageLinks {...neighbours("/docs/permissions")} />
     </>
   );
 }
