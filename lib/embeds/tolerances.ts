@@ -22,7 +22,8 @@ export function openTolerances({ tolerances }: EmbedDefinition): readonly OpenTo
 /** How a tolerance of that input reads, in the base unit of its kind; `about` is the value that it belongs to. */
 type Reading = { readonly ok: true; readonly size: number } | { readonly ok: false; readonly detail: string };
 
-const SHARE = /^(\d+\.?\d*(?:[eE][+-]?\d+)?|\.\d+(?:[eE][+-]?\d+)?)\s*%$/;
+const SHARE = /^([+\-−]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*%$/;
+const NEGATIVE = "must be 0 or greater: it is a distance from the value.";
 
 /**
  * Reads a tolerance as the engine will.
@@ -31,15 +32,15 @@ const SHARE = /^(\d+\.?\d*(?:[eE][+-]?\d+)?|\.\d+(?:[eE][+-]?\d+)?)\s*%$/;
 export function readTolerance(text: string, about: string, input: InputFacts): Reading {
   const share = SHARE.exec(text.trim());
   if (share && input.kind !== "temperature") {
-    return { ok: true, size: (Number(share[1]) / 100) * Math.abs(sizeOf(about, input) ?? NaN) };
+    const percent = Number(share[1].replace("−", "-"));
+    if (percent < 0) return { ok: false, detail: NEGATIVE };
+    return { ok: true, size: (percent / 100) * Math.abs(sizeOf(about, input) ?? NaN) };
   }
   if (share) return { ok: false, detail: 'must be a difference such as "2 K".' };
   if (input.kind === null) return { ok: false, detail: "belongs to an input that takes none." };
   const reading = readQuantity(text, input.kind === "temperature" ? "temperatureDifference" : input.kind);
   if (!reading.ok) return { ok: false, detail: reading.detail };
-  return reading.value >= 0
-    ? { ok: true, size: reading.value }
-    : { ok: false, detail: "must be 0 or greater: it is a distance from the value." };
+  return reading.value >= 0 ? { ok: true, size: reading.value } : { ok: false, detail: NEGATIVE };
 }
 
 /** Why the definition does not allow a tolerance; undefined where it does. */

@@ -1,6 +1,6 @@
 import { existsSync } from "node:fs";
 import { describe, expect, it } from "vitest";
-import { AGAINST, comparisonsOf, ROWS } from "@/app/(site)/docs/accuracy/compared";
+import { AGAINST, comparisonsOf, ROWS, titleOf } from "@/app/(site)/docs/accuracy/compared";
 import { BASES } from "@/app/(site)/docs/_content/bounds";
 import { catalogue } from "@/lib/engine";
 
@@ -22,7 +22,7 @@ describe("the accuracy part of a shape's page", () => {
   });
 
   it("tells the comparisons of that very shape", () => {
-    expect(comparisonsOf("clad-wire").map(({ group }) => group)).toContain("reference values with 50 digits");
+    expect(comparisonsOf("clad-wire").map(({ group }) => group)).toContain("Reference values with 50 digits");
     expect(comparisonsOf("round-wire")).toContainEqual(
       expect.objectContaining({
         group: expect.stringContaining("CRC Handbook wire tables"),
@@ -31,6 +31,11 @@ describe("the accuracy part of a shape's page", () => {
     );
     expect(comparisonsOf("earth-rod").some(({ group }) => group.includes("clad-wire"))).toBe(false);
     expect(comparisonsOf("no-such-shape")).toEqual([]);
+  });
+
+  it("calls the groups by words, not by names of the code", () => {
+    for (const { group } of ROWS) expect(titleOf(group)).not.toMatch(/^[a-z]|^\w+-\w+$|[a-z][A-Z]/);
+    expect(titleOf("torus-arc")).toBe("Bent round bar");
   });
 
   it("has a sentence for every basis that a shape may have", () => {

@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
 import { networkBody } from "@/app/(site)/network/_model/body";
-import { sortComplaints } from "@/app/(site)/network/_model/complaints";
+import { elementAt, sortComplaints } from "@/app/(site)/network/_model/complaints";
 import { layOut } from "@/app/(site)/network/_model/layout";
 import {
   addressOf,
@@ -216,6 +216,13 @@ describe("tolerances of a network", () => {
     expect(sorted.uncertainty).toBe("Must be known.");
     expect(sorted.ports).toEqual(["is no node."]);
     expect(sorted.rest?.errors).toEqual([errors[6]]);
+  });
+
+  test("an element's place is told by its name", () => {
+    const names = ["bar A", "braid"];
+    expect(elementAt("#/elements/1/resistance/tolerance", names)).toBe("Element braid");
+    expect(elementAt("#/elements/7/name", names)).toBeUndefined();
+    expect(elementAt("#/ports/0", names)).toBeUndefined();
   });
 });
 

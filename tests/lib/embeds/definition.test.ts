@@ -12,6 +12,7 @@ import { widgetRequest } from "@/lib/embeds/enforce";
 import { inputsOf } from "@/lib/embeds/inputs";
 import { speechOf } from "@/lib/embeds/language";
 import { startDefinition } from "@/lib/embeds/start-definition";
+import { readTolerance } from "@/lib/embeds/tolerances";
 import { BUSBAR, definition } from "../../support/widget";
 
 const problems = (change: Parameters<typeof definition>[0]) =>
@@ -207,5 +208,19 @@ describe("startDefinition", () => {
       { name: "thickness", rule: { mode: "open", value: "1 mm" } },
       { name: "resistivity", rule: { mode: "fixed", value: "2e-8" } },
     ]);
+  });
+});
+
+describe("readTolerance", () => {
+  test("a share of the value, a length, and neither below 0", () => {
+    const bar = findShape("bar");
+    const width = bar && inputsOf(bar).get("width");
+    if (!width) throw new Error("a bar has a width");
+    const read = (text: string) => readTolerance(text, "50 mm", width);
+    expect(read("2 %")).toEqual({ ok: true, size: 0.001 });
+    expect(read("+2%")).toEqual({ ok: true, size: 0.001 });
+    expect(read("0.4 mm")).toEqual({ ok: true, size: 0.0004 });
+    for (const below of ["-2 %", "−2%", "-0.4 mm"])
+      expect(read(below)).toMatchObject({ ok: false, detail: expect.stringContaining("0 or greater") });
   });
 });

@@ -1,3 +1,4 @@
+import { findShape } from "@/lib/engine";
 import table from "./table.json";
 
 /** One group of comparisons in which a shape was computed. */
@@ -32,11 +33,32 @@ interface Row {
 /** The table as `npm run accuracy` wrote it. */
 export const ROWS: readonly Row[] = table;
 
+/** Groups whose tests are named after a function or after several shapes. */
+const TITLES: Readonly<Record<string, string>> = {
+  asinhIncrease: "Growth of the inverse hyperbolic sine, for electrodes side by side",
+  inlineMean: "Mean potential of one segment on another in line with it",
+  peak: "Field at its peak",
+  rods: "Earth rods",
+  "sheet-end-terminal and sheet-slit": "Sheet with a partial end terminal, strip with a slit",
+  "what an answer says": "Earth rod in two layers",
+};
+
+/** What a group compares, as a reader would call it. */
+export function titleOf(group: string): string {
+  const title = findShape(group)?.title ?? TITLES[group] ?? group;
+  return title.charAt(0).toUpperCase() + title.slice(1);
+}
+
+export function againstOf(file: string): string {
+  return AGAINST.find(([prefix]) => file.startsWith(prefix))?.[1] ?? "";
+}
+
 /** The comparisons in which a shape was computed, from the tests' own results. */
 export function comparisonsOf(shape: string): readonly Comparison[] {
   return ROWS.flatMap(({ file, group, shapes }) => {
     const own = shapes[shape];
-    const against = AGAINST.find(([prefix]) => file.startsWith(prefix))?.[1] ?? "";
-    return own ? [{ group: group === shape ? "closed form" : group, against, ...own }] : [];
+    return own
+      ? [{ group: group === shape ? "Closed form" : titleOf(group), against: againstOf(file), ...own }]
+      : [];
   });
 }

@@ -1,7 +1,7 @@
 import type { Metadata } from "next";
 import { Breadcrumb } from "../../../_ui/breadcrumb";
 import { ScrollFrame } from "../../../_ui/scroll-frame";
-import table from "./table.json";
+import { againstOf, ROWS, titleOf } from "./compared";
 import { neighbours } from "../_content/pages";
 import { Deviation } from "../_parts/deviation";
 import { PageLinks } from "../_parts/page-links";
@@ -30,16 +30,19 @@ export default function Accuracy() {
         worse than its row. A group against a printed table shows the rounding of the print.
       </p>
       {PARTS.map(([prefix, title]) => {
-        const rows = table.filter(({ file }) => file.startsWith(prefix));
+        const rows = ROWS.filter(({ file }) => file.startsWith(prefix));
         return rows.length === 0 ? null : (
           <section key={prefix} className="mt-4">
             <h2>{title}</h2>
-            <ScrollFrame label={title} className="mt-1 max-w-prose print:overflow-visible">
+            <ScrollFrame label={title} className="mt-1 max-w-[56rem] print:overflow-visible">
               <table className="w-full border-collapse text-table">
                 <thead>
                   <tr className="border-b border-edge">
                     <th scope="col" className="px-1 py-1 text-start font-semibold">
                       Compared
+                    </th>
+                    <th scope="col" className="px-1 py-1 text-start font-semibold">
+                      With
                     </th>
                     <th scope="col" className="px-1 py-1 text-end font-semibold">
                       Comparisons
@@ -52,7 +55,8 @@ export default function Accuracy() {
                 <tbody>
                   {rows.map(({ file, group, cases, worst }) => (
                     <tr key={`${file} ${group}`} className="border-b border-rule">
-                      <td className="px-1 py-1">{group}</td>
+                      <td className="px-1 py-1">{titleOf(group)}</td>
+                      <td className="px-1 py-1">{againstOf(file)}</td>
                       <td className="px-1 py-1 text-end font-mono">{cases}</td>
                       <td className="px-1 py-1 text-end font-mono">
                         <Deviation value={worst} />

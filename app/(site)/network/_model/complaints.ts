@@ -62,6 +62,13 @@ export function sortComplaints(problem: ProblemShown | null, ids: readonly numbe
   };
 }
 
+/** How the page calls the place of a complaint, where it lies in an element; `names` are those of the elements asked. */
+export function elementAt(pointer: string, names: readonly string[]): string | undefined {
+  const [, index] = ELEMENT.exec(pointer) ?? [];
+  const name = index === undefined ? undefined : names[Number(index)];
+  return name === undefined ? undefined : `Element ${name}`;
+}
+
 function restOf(
   problem: ProblemShown | null,
   rest: NonNullable<ProblemShown["errors"]>,

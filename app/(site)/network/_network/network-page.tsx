@@ -8,6 +8,7 @@ import { Notice } from "../../../_ui/notice";
 import { ProblemNotice } from "../../../_ui/problem-notice";
 import { ToastArea, useToast } from "../../../_ui/toast";
 import { SaveRecord, type Saving } from "../../calculate/_calculator/save-record";
+import { elementAt } from "../_model/complaints";
 import { type Element, freeName, type Network, newElement, nodeNames, START } from "../_model/network";
 import { NetworkBudget } from "./budget";
 import { ConditionFields } from "./condition-fields";
@@ -101,6 +102,12 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
               path="/networks"
               body={body}
               title={`${network.ports[0]} to ${network.ports[1]}`}
+              placeOf={({ pointer = "" }) =>
+                elementAt(
+                  pointer,
+                  elements.map(({ name }) => name),
+                )
+              }
             />
           ) : null}
         </div>
