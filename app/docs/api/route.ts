@@ -65,6 +65,8 @@ const OTHER_CLIENTS = {
 const CSS = `
 .introduction-section h1, .introduction-section .badge, .scalar-reference-intro-clients, .darklight-reference,
 .scalar-version-number { display: none !important; }
+/* Room for the heading that is not shown. */
+.introduction-section.section { padding-top: 0 !important; }
 .light-mode, .dark-mode {
   --scalar-font: "Spline Sans", system-ui, sans-serif;
   --scalar-font-code: "Spline Sans Mono", ui-monospace, monospace;
