@@ -52,7 +52,7 @@ export function Field({ label, help, error, className = "", beside, children }: 
 }
 
 /** A line kept for what is wrong, and room below it, so that nothing jumps and the words keep clear of the next label. */
-export const ERROR_LINE = "mt-0.25 min-h-2.5 pb-1 text-small text-oxide";
+export const ERROR_LINE = "mt-0.25 min-h-3.5 pb-1 text-small text-oxide";
 
 /** The look shared by text inputs and selects. */
 export const CONTROL =

@@ -112,7 +112,9 @@ describe("the frame", () => {
     await page.goto(`${base()}/embed/${id}?lang=de&length.tolerance=1mm`);
     const range = page.getByTestId("stray-range");
     await range.waitFor({ timeout: 45_000 });
-    expect(await range.innerText()).toMatch(/^Mit den Toleranzen [\d,]+ µΩ … [\d,]+ µΩ \(ungünstigster Fall/);
+    expect(await range.innerText()).toMatch(
+      /^Mit den Toleranzen [\d,]+\sµΩ … [\d,]+\sµΩ \(ungünstigster Fall/,
+    );
     expect(await page.getByTestId("bracket").innerText()).toMatch(/Schranken .*bewiesen \(/);
     const verdict = page.getByTestId("verdict");
     expect(await verdict.innerText()).toContain("Nicht entschieden: Schranken oder Toleranzen");
@@ -188,7 +190,7 @@ describe("the frame", () => {
         "resistance",
         "This is a DC",
         "soil changes",
-        "competent",
+        "competent engineer",
       ]) {
         expect([english, text.includes(english)]).toEqual([english, false]);
       }

@@ -158,7 +158,11 @@ describe("a record", () => {
       });
       return response.json();
     };
-    const outline = await post("/outlines", { outline: BEND.outline, terminals: BEND.terminals });
+    const terminals = [
+      { name: "in", parts: [{ ring: 0, edge: 1 }] },
+      { name: "out", parts: [{ ring: 0, edge: 4 }] },
+    ];
+    const outline = await post("/outlines", { outline: BEND.outline, terminals });
     const { record, result } = await post("/fields", {
       outlineId: outline.id,
       medium: BEND.medium,

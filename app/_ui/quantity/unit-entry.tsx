@@ -79,8 +79,11 @@ export function UnitEntry(props: UnitEntryProps) {
     if (typed.kind === "empty") {
       if (current) setHeld(current.id);
       onChange("");
-    } else if (typed.kind !== "quantity") onChange(typed.text);
-    else {
+    } else if (typed.kind !== "quantity") {
+      // What is typed over a quantity keeps its unit; what is left of one while it is deleted does not.
+      if (current && !draft?.startsWith(text)) setHeld(current.id);
+      onChange(typed.text);
+    } else {
       const known = findUnit(typed.unit, units);
       const unit = typed.unit === "" ? unitOfBare(text) : (known?.id ?? typed.unit);
       onChange(joinQuantity(typed.number, unit));
