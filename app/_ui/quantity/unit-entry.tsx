@@ -81,7 +81,7 @@ export function UnitEntry(props: UnitEntryProps) {
       onChange("");
     } else if (typed.kind !== "quantity") {
       // What is typed over a quantity keeps its unit; what is left of one while it is deleted does not.
-      if (current && !draft?.startsWith(text)) setHeld(current.id);
+      if (current && !shortened(draft, text)) setHeld(current.id);
       onChange(typed.text);
     } else {
       const known = findUnit(typed.unit, units);
@@ -92,7 +92,7 @@ export function UnitEntry(props: UnitEntryProps) {
 
   /** A number without unit keeps the menu's; where its own was deleted, the one that stood there before typing. */
   function unitOfBare(text: string): string {
-    const before = draft?.startsWith(text) ? readTyped(draft, false) : null;
+    const before = draft !== null && shortened(draft, text) ? readTyped(draft, false) : null;
     const deleted = before?.kind === "gauge" || (before?.kind === "quantity" && before.unit !== "");
     if (current && !deleted) return current.id;
     if (fixed && !deleted) return parts.foreign ?? "";
@@ -169,6 +169,11 @@ export function UnitEntry(props: UnitEntryProps) {
       ) : null}
     </div>
   );
+}
+
+/** Whether the last character was deleted: typing over the whole leaves its first character as often as not. */
+function shortened(before: string | null, text: string): boolean {
+  return before !== null && before.slice(0, -1) === text;
 }
 
 /** What a number without unit means to the API. */

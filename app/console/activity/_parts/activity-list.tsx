@@ -128,7 +128,7 @@ function What({ act, onOpen }: { readonly act: ActShown; readonly onOpen: (act: 
         {own || page ? null : <span className="[overflow-wrap:anywhere]"> {subjectName(act)}</span>}
       </button>{" "}
       {!own && page ? (
-        <Link className="link [overflow-wrap:anywhere]" href={page}>
+        <Link className="link inline-block min-w-3 [overflow-wrap:anywhere]" href={page}>
           {subjectName(act)}
         </Link>
       ) : null}
