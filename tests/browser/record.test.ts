@@ -162,9 +162,10 @@ describe("a record", () => {
       { name: "in", parts: [{ ring: 0, edge: 1 }] },
       { name: "out", parts: [{ ring: 0, edge: 4 }] },
     ];
-    const outline = await post("/outlines", { outline: BEND.outline, terminals });
+    const outline = await post("/outlines", { outline: BEND.outline });
     const { record, result } = await post("/fields", {
       outlineId: outline.id,
+      terminals,
       medium: BEND.medium,
       record: { label: "Bend" },
     });

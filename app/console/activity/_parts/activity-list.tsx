@@ -123,12 +123,16 @@ function What({ act, onOpen }: { readonly act: ActShown; readonly onOpen: (act: 
   const own = act.subject.id === act.actor.id;
   return (
     <>
-      <button type="button" onClick={() => onOpen(act)} className="link cursor-pointer rounded text-start">
+      <button
+        type="button"
+        onClick={() => onOpen(act)}
+        className="link min-h-3 cursor-pointer rounded text-start"
+      >
         {actionWords(act.action)}
         {own || page ? null : <span className="[overflow-wrap:anywhere]"> {subjectName(act)}</span>}
       </button>{" "}
       {!own && page ? (
-        <Link className="link inline-block min-w-3 [overflow-wrap:anywhere]" href={page}>
+        <Link className="link inline-block min-h-3 min-w-3 [overflow-wrap:anywhere]" href={page}>
           {subjectName(act)}
         </Link>
       ) : null}
