@@ -1,12 +1,7 @@
 import "server-only";
-import dynamic from "next/dynamic";
 import { SiteLink } from "../../_ui/site/site-link";
 import { currentPerson } from "../../console/_shell/require-session";
-
-/** Of its own, so that a signed-out reader's page does not load it. */
-const ReaderMenu = dynamic(() =>
-  import("../../console/_shell/reader-menu").then((module) => module.ReaderMenu),
-);
+import { LateReaderMenu } from "./late-reader-menu";
 
 /** Who is signed in, or the way to sign in, in the corner of every page. */
 export async function ReaderCorner() {
@@ -23,6 +18,11 @@ export async function ReaderCorner() {
   }
   const { name, email, teams, team } = person;
   return (
-    <ReaderMenu name={name} email={email} teams={teams.map((each) => each.name)} team={team?.name ?? null} />
+    <LateReaderMenu
+      name={name}
+      email={email}
+      teams={teams.map((each) => each.name)}
+      team={team?.name ?? null}
+    />
   );
 }
