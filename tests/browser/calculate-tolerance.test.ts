@@ -39,7 +39,7 @@ describe("tolerances and sizing on a shape's page", () => {
     await page.getByRole("button", { name: "plus and minus apart for width" }).click();
     await page.getByRole("textbox", { name: "Upper tolerance of width" }).fill("4 %");
     await page.getByRole("textbox", { name: "Lower tolerance of width" }).fill("2 %");
-    await range.getByText(/32\.69\sµΩ … 34\.69\sµΩ/u).waitFor();
+    await range.getByText(/32\.7\sµΩ … 34\.7\sµΩ/u).waitFor();
     expect(new URL(await addressOf(page)).searchParams.get("width.minus")).toBe("2%");
     await page.getByRole("textbox", { name: "Lower tolerance of width" }).fill("60 mm");
     await page.getByText("it must be smaller than the value").waitFor();
