@@ -6,7 +6,7 @@ import { convertUnit, numberText } from "./convert";
 import { gaugeMm } from "./gauge";
 import { joinQuantity, splitQuantity } from "./quantity-text";
 import { readTyped } from "./read-typed";
-import { FIRST_UNIT, findUnit, type Unit, type UnitKind, unitsOf } from "./units";
+import { BASE_UNITS, FIRST_UNIT, findUnit, type Unit, type UnitKind, unitsOf } from "./units";
 
 interface UnitEntryProps {
   readonly control: ControlProps;
@@ -175,23 +175,6 @@ export function UnitEntry(props: UnitEntryProps) {
 function shortened(before: string | null, text: string): boolean {
   return before !== null && before.slice(0, -1) === text;
 }
-
-/** What a number without unit means to the API. */
-const BASE_UNITS: Partial<Record<UnitKind, string>> = {
-  length: "m",
-  area: "m^2",
-  angle: "deg",
-  temperature: "degC",
-  temperatureCoefficient: "1/K",
-  resistivity: "ohm m",
-  conductivity: "S/m",
-  sheetResistance: "ohm/sq",
-  resistance: "ohm",
-  voltage: "V",
-  current: "A",
-  power: "W",
-  density: "1/cm^3",
-};
 
 /** Whether the reader's language writes "1,5". */
 function decimalComma(): boolean {

@@ -199,3 +199,20 @@ function plainSpelling(text: string): string {
     .replace(/\s+/g, " ")
     .trim();
 }
+
+/** What a number without unit means to the API. */
+export const BASE_UNITS: Partial<Record<UnitKind, string>> = {
+  length: "m",
+  area: "m^2",
+  angle: "deg",
+  temperature: "degC",
+  temperatureCoefficient: "1/K",
+  resistivity: "ohm m",
+  conductivity: "S/m",
+  sheetResistance: "ohm/sq",
+  resistance: "ohm",
+  voltage: "V",
+  current: "A",
+  power: "W",
+  density: "1/cm^3",
+};

@@ -1,5 +1,5 @@
 /** New rows beside those that are there: below them, or from one cell on. */
-import type { UnitKind } from "../../../../_ui/quantity/units";
+import { BASE_UNITS, type UnitKind } from "../../../../_ui/quantity/units";
 import { readTyped } from "../../../../_ui/quantity/read-typed";
 import { MOST_ROWS } from "./import-text";
 import { type Column, newRow, type Row, type Table } from "./table";
@@ -74,29 +74,11 @@ function respelled(cell: string, source: Table, target: Table, measured: boolean
   return typed.unit === "" ? number : `${number} ${typed.unit}`;
 }
 
-/** What a bare number is in where neither its cell nor its column says so. */
-const BARE: Readonly<Record<UnitKind, string>> = {
-  length: "m",
-  area: "m^2",
-  angle: "deg",
-  temperature: "degC",
-  temperatureCoefficient: "1/K",
-  resistivity: "ohm m",
-  conductivity: "S/m",
-  sheetResistance: "ohm/sq",
-  resistance: "ohm",
-  voltage: "V",
-  current: "A",
-  power: "W",
-  density: "",
-  number: "",
-};
-
 /** A bare number keeps what it was in when its column says another unit. */
 function withUnit(cell: string, source: Column, target: Column, vocabulary: Vocabulary): string {
   const kind = kindOf(target, vocabulary);
   if (kind === null || source.unit === target.unit || !BARE_NUMBER.test(cell)) return cell;
-  return `${cell.trim()} ${source.unit === "" ? BARE[kind] : source.unit}`.trim();
+  return `${cell.trim()} ${source.unit === "" ? (BASE_UNITS[kind] ?? "") : source.unit}`.trim();
 }
 
 const BARE_NUMBER = /^\s*[+-]?[\d.,' ]*\d[\d.,' ]*(?:[eE][+-]?\d+)?\s*$/;
