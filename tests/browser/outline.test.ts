@@ -56,7 +56,9 @@ describe("an outline", () => {
     const { page, complaints, close } = await bench.open("/outline");
     await page.getByLabel("Begin with").selectOption("An empty board");
     await page
-      .getByText("“An empty board” has taken the place of your drawing. Undo brings yours back.")
+      .getByText("“An empty board” has taken the place of your drawing. Undo brings yours back.", {
+        exact: true,
+      })
       .waitFor();
     expect(await page.getByRole("button", { name: "Solve" }).isDisabled()).toBe(true);
     await page.getByText(/^Draw the outer ring first/).waitFor();

@@ -38,7 +38,7 @@ export function DrawingPane({ entry, geometry, focused, outdated, className }: D
     <div className={className}>
       <div
         ref={frame}
-        className={`relative grid min-h-[17rem] place-items-center rounded border border-rule bg-sheet px-1 py-1.5 medium:min-h-[23rem] [&>figure]:w-full ${outdated ? "[&>figure]:opacity-45" : ""}`}
+        className={`relative grid min-h-[17rem] place-items-center rounded border border-rule bg-sheet px-1 py-1.5 medium:min-h-[23rem] [&>figure]:w-full ${outdated ? "[&_svg[role=img]]:opacity-45" : ""}`}
       >
         {outdated && geometry ? (
           <OutdatedTag className="absolute start-1 top-1 z-1">{outdated}</OutdatedTag>
