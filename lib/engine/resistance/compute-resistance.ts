@@ -8,6 +8,7 @@ import { CATALOGUE_VERSION, ENGINE_VERSION } from "../version";
 import { isRepresentable } from "./bounds";
 import { runChecks } from "./checks";
 import type { ComputeContext } from "./compute-context";
+import { coverInputRounding } from "./input-rounding";
 import { operatingPoint, readOperating } from "./operating-point";
 import { findPeak } from "./peak";
 import { sampleProfile } from "./profile-arrays";
@@ -44,7 +45,7 @@ export function computeResistance(request: unknown, context: ComputeContext): Re
   const media = readMedia(shape, body, dimensions, operatingInput.temperatureC, context, collected, problems);
   if (problems.any || !dimensions || !media) throw new InputError(problems.list);
 
-  const solution = solve(shape, dimensions, media);
+  const solution = coverInputRounding(solve(shape, dimensions, media), shape, body.dimensions, media);
   const { value, lower, upper } = solution;
   if (!isRepresentable(value) || !isRepresentable(lower) || !isRepresentable(upper)) {
     const size = Number.isNaN(value)
