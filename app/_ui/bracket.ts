@@ -27,15 +27,18 @@ export interface BracketText {
  * @param value Positive; decides the prefix, as in the value's own text.
  * @param lower At most the value.
  * @param upper At least the value.
- * @param symbol Symbol of the unit, without prefix.
+ * @param symbol Symbol of the unit, without prefix; "" for a bare number.
  */
 export function bracketText(value: number, lower: number, upper: number, symbol: string): BracketText {
   const exponent = exponentOf(Number(value.toPrecision(5)));
-  const thousand = Math.floor(exponent / 3) * 3;
-  const prefix = PREFIXES[thousand];
+  // A bare number takes no prefix: "220 m" would be read as metres.
+  const thousand = symbol === "" && exponent >= -4 && exponent < 6 ? 0 : Math.floor(exponent / 3) * 3;
+  const prefix = symbol === "" && thousand !== 0 ? undefined : PREFIXES[thousand];
   const shift = prefix === undefined ? exponent : thousand;
   const unit =
-    prefix === undefined ? `×10${superscript(exponent)}${THIN_SPACE}${symbol}` : `${prefix}${symbol}`;
+    prefix === undefined
+      ? `×10${superscript(exponent)}${symbol === "" ? "" : `${THIN_SPACE}${symbol}`}`
+      : `${prefix}${symbol}`;
   // Two digits of the width, and never more than a double holds.
   const width = (upper - lower) / value;
   const digits = Math.min(17, Math.max(4, 2 - Math.floor(Math.log10(width > 0 ? width : 1e-17))));

@@ -29,6 +29,12 @@ describe("bracketText", () => {
     expect(bracketText(3e-15, 2e-15, 4e-15, "Ω").unit).toBe("×10⁻¹⁵\u2009Ω");
   });
 
+  it("gives a bare number no prefix", () => {
+    expect(bracketText(0.2208, 0.2195, 0.2221, "")).toEqual({ lower: "0.2195", upper: "0.2221", unit: "" });
+    expect(bracketText(12345, 12344, 12346, "")).toEqual({ lower: "12344.0", upper: "12346.0", unit: "" });
+    expect(bracketText(3e-9, 2e-9, 4e-9, "").unit).toBe("×10⁻⁹");
+  });
+
   it("never excludes the value", () => {
     fc.assert(
       fc.property(
