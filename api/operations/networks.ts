@@ -12,7 +12,7 @@ import { type CallContext, defineOperation, json } from "../operation";
 import { answeredNetwork, documentedNetwork } from "../schemas/network";
 
 /** Largest body of a network, bytes. */
-const NETWORK_MAX_BYTES = 20_000_000;
+export const NETWORK_MAX_BYTES = 20_000_000;
 
 /** Longest that the uncertainties of all elements and of one may take: others wait during the one. */
 const LONGEST_MS = 20_000;

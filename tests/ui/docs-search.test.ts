@@ -46,6 +46,9 @@ const QUERIES: readonly (readonly [query: string, expected: string])[] = [
   ["doping profile", "/docs/media#graded"],
   ["wcag", "/docs/accessibility"],
   ["429", "/docs/problems/too-many-requests"],
+  ["csp", "/docs/embedding#place"],
+  ["pagination", "/docs/limits#sizes"],
+  ["thin film sheet resistance", "/docs/shapes/sheet-strip"],
   ["invalid input", "/docs/problems/invalid-input"],
   ["taperd strip", "/docs/shapes/tapered-strip"],
 ];

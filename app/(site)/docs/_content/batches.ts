@@ -1,4 +1,5 @@
 import { callBlock } from "./call-blocks";
+import { CALL_LIMITS } from "./call-limits";
 import type { DocPage } from "./page";
 
 const bar = (width: string) => ({
@@ -11,7 +12,7 @@ const bar = (width: string) => ({
 export const batches: DocPage = {
   slug: "batches",
   title: "Batches",
-  summary: "Up to 10,000 requests in one call, each answered or refused on its own.",
+  summary: `Up to ${CALL_LIMITS.batchItems} requests in one call, each answered or refused on its own.`,
   sections: ({ origin }) => [
     {
       id: "call",
@@ -115,7 +116,7 @@ export const batches: DocPage = {
       id: "limits",
       title: "Limits",
       blocks: [
-        "A call takes 10,000 items and 20 MB; more is [413](/docs/problems/body-too-large). As many computations as there are items are reserved of the month at the start; those of refused items are given back. The items for which the time of a batch does not suffice have status 503 and can be sent again.",
+        `A call takes ${CALL_LIMITS.batchItems} items and ${CALL_LIMITS.batchBody}; more is [413](/docs/problems/body-too-large). As many computations as there are items are reserved of the month at the start; those of refused items are given back. The items for which the time of a batch does not suffice have status 503 and can be sent again.`,
       ],
     },
   ],

@@ -33,7 +33,7 @@ export const clients: DocPage = {
             },
           ],
         },
-        "Methods and members have Python’s names (`compute_resistance`, `bounds_basis`); bodies given as dictionaries keep the API’s. `rhoform.to_dict(answer)` gives plain values again.",
+        "Methods and members have Python’s names (`compute_resistance`, `bounds_basis`); bodies given as dictionaries keep the API’s. `rhoform.to_dict(answer)` gives plain values again. A refusal raises `rhoform.RhoformProblem`; `RhoformTimeout` and `RhoformUnreachable` tell of the way there, and all of them are `rhoform.RhoformError`.",
       ],
     },
     {
@@ -115,9 +115,9 @@ export const clients: DocPage = {
               ],
               [
                 "a call that may store something",
-                "gets an `Idempotency-Key` by itself, except issuing and rotating keys",
+                "gets an `Idempotency-Key` by itself, except issuing and rotating keys and replaying records",
               ],
-              ["any other refusal", "throws a problem with `status`, `code`, `detail` and `errors`"],
+              ["any other refusal", "throws a `RhoformProblem` with `status`, `code`, `detail` and `errors`"],
               ["an error of any kind", "never has the key in its text"],
             ],
           },
@@ -147,7 +147,32 @@ export const clients: DocPage = {
             ],
           },
         },
-        "They read `RHOFORM_URL` and `RHOFORM_KEY`. Put a Python one beside `rhoform.py`; the TypeScript ones come with the package, in `node_modules/@rhoform/client/examples`.",
+        "They read `RHOFORM_URL` and `RHOFORM_KEY` from the environment. A Python one goes beside `rhoform.py`; each says at its top what it is called with:",
+        {
+          snippets: [
+            {
+              language: "sh",
+              label: "Python, in a shell",
+              prints: "width/mm,resistance/ohm",
+              code: [
+                `export RHOFORM_URL=${origin}`,
+                `curl -fsSO ${origin}/docs/python/examples/sweep.py`,
+                "python3 sweep.py",
+              ].join("\n"),
+            },
+            {
+              language: "sh",
+              label: "TypeScript, in a shell",
+              shownOnly: true,
+              code: [
+                `export RHOFORM_URL=${origin}`,
+                "cp node_modules/@rhoform/client/examples/sweep.ts sweep.mts",
+                "npx tsx sweep.mts",
+              ].join("\n"),
+            },
+          ],
+        },
+        "The TypeScript ones come with the package. Copy one into your project before you change it; Node 22.18 and newer runs the copy without `tsx`, as `node sweep.mts`.",
       ],
     },
   ],

@@ -1,5 +1,6 @@
 import { FIELD_COSTS, SIGNED_OUT_UNKNOWNS } from "@/lib/jobs/field-cost";
 import { callBlock } from "./call-blocks";
+import { CALL_LIMITS } from "./call-limits";
 import type { DocPage } from "./page";
 
 const ELBOW = {
@@ -65,7 +66,7 @@ export const fields: DocPage = {
           },
           "done",
         ),
-        "`Prefer: wait=30` waits up to 30 s for the end. A solution that is not ready is answered with 202 and a `Location` to ask at; `GET /fields/{id}/events` streams the progress as server-sent events.",
+        `\`Prefer: wait=30\` waits up to ${CALL_LIMITS.wait} for the end. A solution that is not ready is answered with 202 and a \`Location\` to ask at; \`GET /fields/{id}/events\` streams the progress as server-sent events.`,
       ],
     },
     {

@@ -1,4 +1,5 @@
 import { DEFAULT_MINUTE_QUOTA, DEFAULT_MONTH_QUOTA } from "@/lib/limits/quota";
+import { CALL_LIMITS } from "./call-limits";
 import type { DocPage } from "./page";
 
 const count = (value: number) => value.toLocaleString("en");
@@ -51,12 +52,12 @@ export const limits: DocPage = {
           table: {
             head: ["what", "most"],
             rows: [
-              ["body of a call", "1 MB"],
-              ["body of an outline or a field", "10 MB"],
-              ["body of a batch", "20 MB and 10,000 items"],
-              ["body of a network", "20 MB and 10,000 elements"],
-              ["`Prefer: wait`", "30 s"],
-              ["an expression", "1,000 characters"],
+              ["body of a call", CALL_LIMITS.body],
+              ["body of an outline or a field", CALL_LIMITS.outlineBody],
+              ["body of a batch", `${CALL_LIMITS.batchBody} and ${CALL_LIMITS.batchItems} items`],
+              ["body of a network", `${CALL_LIMITS.networkBody} and ${CALL_LIMITS.networkElements} elements`],
+              ["`Prefer: wait`", CALL_LIMITS.wait],
+              ["an expression", `${CALL_LIMITS.expression} characters`],
               ["a page of a list", "`limit`, with the next page in `next` and in the `Link` header"],
             ],
           },

@@ -1,4 +1,5 @@
 import { resistanceBlock } from "./call-blocks";
+import { CALL_LIMITS } from "./call-limits";
 import type { DocPage } from "./page";
 
 const shell = { innerRadius: "2 mm", outerRadius: "5 mm", length: "1 m" };
@@ -121,7 +122,7 @@ export const media: DocPage = {
       id: "expressions",
       title: "Expressions",
       blocks: [
-        "An expression knows numbers, `s`, `u`, `pi`, `e`, the signs `+ - * / ^`, comparisons inside `if(c, a, b)`, and abs, sqrt, cbrt, exp, log, log10, the trigonometric and hyperbolic functions with sin, cos and tan inverted, min, max, erf and erfc. Multiplication is always written. It may have 1,000 characters. A value that is no positive number is a 422 that names the place.",
+        `An expression knows numbers, \`s\`, \`u\`, \`pi\`, \`e\`, the signs \`+ - * / ^\`, comparisons inside \`if(c, a, b)\`, and abs, sqrt, cbrt, exp, log, log10, the trigonometric and hyperbolic functions with sin, cos and tan inverted, min, max, erf and erfc. Multiplication is always written. It may have ${CALL_LIMITS.expression} characters. A value that is no positive number is a 422 that names the place.`,
         resistanceBlock(
           origin,
           {

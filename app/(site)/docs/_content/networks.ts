@@ -1,4 +1,5 @@
 import { callBlock } from "./call-blocks";
+import { CALL_LIMITS } from "./call-limits";
 import type { DocPage } from "./page";
 
 export const networks: DocPage = {
@@ -76,7 +77,7 @@ export const networks: DocPage = {
       id: "limits",
       title: "Limits",
       blocks: [
-        "At most 10,000 elements and 20 MB. A network costs one computation, or one for each element with a request where there are more.",
+        `At most ${CALL_LIMITS.networkElements} elements and ${CALL_LIMITS.networkBody}. A network costs one computation, or one for each element with a request where there are more.`,
       ],
     },
   ],

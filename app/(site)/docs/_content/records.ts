@@ -54,7 +54,7 @@ export const records: DocPage = {
       title: "Replay",
       blocks: [
         "`POST /records/{id}/replay` computes the stored request again with today’s engine and the stored versions of the materials. The answer has the result `before` and `now`, the relative `drift` between them, and `identical`. Nothing is stored. A field solution is replayed as a job, and answered as `POST /fields` is.",
-        "A change of any number by more than its bounds raises the engine’s major version and stands in the [changelog](/docs/changelog); replaying your records on every update shows what it means for you. A script that does it every night comes with the clients: `sdk/python/examples/replay_records.py` and `sdk/typescript/examples/replay-records.ts`.",
+        "A change of any number by more than its bounds raises the engine’s major version and stands in the [changelog](/docs/changelog); replaying your records on every update shows what it means for you. A script that does it every night comes with the clients: [`replay_records.py`](/docs/python/examples/replay_records.py) and `replay-records.ts`, see [examples](/docs/clients#examples).",
       ],
     },
   ],

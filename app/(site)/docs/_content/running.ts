@@ -1,9 +1,16 @@
 import type { Block, DocPage } from "./page";
 import { readmeSettings } from "./readme-settings";
 
+/** Where the examples of this page have the data, and what people type. */
+const DATA = "/var/lib/rhoform";
+const ORIGIN = "https://rhoform.example";
+
 const shell = (label: string, code: string): Block => ({
   snippets: [{ language: "sh", label, code, shownOnly: true }],
 });
+
+/** What the unit below sets, for commands that are not started by it. */
+const OF_THE_SERVICE = `export RHOFORM_DATA=${DATA} RHOFORM_ORIGIN=${ORIGIN}`;
 
 export const running: DocPage = {
   slug: "running",
@@ -30,8 +37,8 @@ export const running: DocPage = {
                 "[Service]",
                 "User=rhoform",
                 "WorkingDirectory=/srv/rhoform",
-                "Environment=NODE_ENV=production RHOFORM_DATA=/var/lib/rhoform RHOFORM_DEMO=0",
-                "Environment=RHOFORM_ORIGIN=https://rhoform.example RHOFORM_TRUSTED_PROXIES=127.0.0.1",
+                `Environment=NODE_ENV=production RHOFORM_DATA=${DATA} RHOFORM_DEMO=0`,
+                `Environment=RHOFORM_ORIGIN=${ORIGIN} RHOFORM_TRUSTED_PROXIES=127.0.0.1`,
                 "ExecStart=/usr/bin/node lib/cli/start.mjs",
                 "Restart=on-failure",
                 "",
@@ -58,11 +65,16 @@ export const running: DocPage = {
       id: "people",
       title: "People and mail",
       blocks: [
-        "The first administrator is made in a shell. The command prints a link with which to choose a password; it works once.",
+        "The first administrator is made in a shell, in the repository’s folder. The command prints a link with which to choose a password; it works once.",
         shell(
           "shell, while the service runs",
-          ["npm run -s people -- add-admin ada@company.example", "npm run -s people -- list"].join("\n"),
+          [
+            OF_THE_SERVICE,
+            "npm run -s people -- add-admin ada@company.example",
+            "npm run -s people -- list",
+          ].join("\n"),
         ),
+        "All commands of the shell read the same settings as the service: without its `RHOFORM_DATA` they would open another database, without its `RHOFORM_ORIGIN` their links would lead elsewhere. Run them as the user that the service runs as.",
         "Everyone else is invited in the console. Invitations and links for new passwords go out by the mail server of `RHOFORM_SMTP_URL`, from the address in `RHOFORM_MAIL_FROM`. Without them no mail leaves: administrators read the messages in the console and pass the links on.",
       ],
     },
@@ -73,6 +85,8 @@ export const running: DocPage = {
         shell(
           "shell, while the service runs",
           [
+            OF_THE_SERVICE,
+            'npm run -s teams -- add busbar --name "Busbar"',
             "npm run -s teams -- list",
             'npm run -s keys -- issue --team busbar --name "CAD scripts" --scopes compute,field',
             "npm run -s keys -- list",
@@ -120,7 +134,7 @@ export const running: DocPage = {
       title: "Backup and restore",
       blocks: [
         "`npm run backup -- <folder>` copies the database and the rest of the data folder consistently while the service runs. The copy holds the service’s secret: keep it as safe as the data folder itself. The logs are not in it.",
-        shell("backup", "npm run backup -- /backup/rhoform-monday"),
+        shell("backup", `${OF_THE_SERVICE}\nnpm run backup -- /backup/rhoform-monday`),
         "To restore, stop the service, put the copy in the place of the data folder, and start:",
         shell(
           "restore",
