@@ -30,6 +30,7 @@ await build({
   platform: "browser",
   format: "iife",
   jsx: "automatic",
+  alias: { "@rhoform/client/react": "./sdk/typescript/src/embed-react.ts" },
   define: { "process.env.NODE_ENV": '"production"' },
   target: "es2022",
   charset: "utf8",

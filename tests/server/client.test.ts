@@ -159,6 +159,40 @@ export const text: Promise<string> = computeResistance({
     };
     expect(compile("thickness")).not.toThrow();
     expect(compile("thicknes")).toThrow();
+
+    // What the README tells of widgets compiles against the package, and so do the examples that come with it.
+    const readme = readFileSync(join(folder, "node_modules/@rhoform/client/README.md"), "utf8");
+    const told = (language: string) =>
+      new RegExp("```" + language + "\\n([\\s\\S]*?)```").exec(readme)?.[1] ?? expect.fail(language);
+    writeFileSync(join(folder, "page.mts"), told("js"));
+    writeFileSync(join(folder, "widget.tsx"), told("tsx"));
+    const examples = join(folder, "node_modules/@rhoform/client/examples");
+    for (const name of readdirSync(examples)) {
+      const copy = name.endsWith(".tsx") ? name : name.replace(/\.ts$/, ".mts");
+      writeFileSync(join(folder, copy), readFileSync(join(examples, name)));
+    }
+    const types = join(process.cwd(), "node_modules/@types");
+    writeFileSync(join(folder, "package.json"), JSON.stringify({ type: "module" }));
+    writeFileSync(
+      join(folder, "tsconfig.json"),
+      JSON.stringify({
+        compilerOptions: {
+          ...{ noEmit: true, strict: true, target: "es2022", module: "nodenext", jsx: "react-jsx" },
+          // Node runs the examples without a compiler, by leaving out their types.
+          ...{ erasableSyntaxOnly: true, verbatimModuleSyntax: true, skipLibCheck: true },
+          lib: ["es2023", "dom", "dom.iterable"],
+          typeRoots: [types],
+          types: ["node"],
+          paths: {
+            react: [join(types, "react/index.d.ts")],
+            "react/*": [join(types, "react/*.d.ts")],
+            "react-dom/*": [join(types, "react-dom/*.d.ts")],
+          },
+        },
+        include: ["*.mts", "*.tsx"],
+      }),
+    );
+    expect(run(process.execPath, [compiler, "-p", "tsconfig.json"], folder)).toBe("");
     rmSync(folder, { recursive: true });
   }, 120_000);
 

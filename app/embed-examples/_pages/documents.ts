@@ -1,3 +1,5 @@
+import { readFileSync } from "node:fs";
+import { join } from "node:path";
 import { type ExampleFacts, EXAMPLES } from "./examples";
 
 const STYLE = `
@@ -16,7 +18,7 @@ dd { margin: 0; }
 
 /** The whole document of an example, with its own source to read, and the ways to the others. */
 export function examplePage(name: string, facts: ExampleFacts, asked?: string): string {
-  const { title, about, body, policy } = EXAMPLES[name];
+  const { title, about, body, policy, script } = EXAMPLES[name];
   const source = body({ ...facts, nonce: "" }).replaceAll(' nonce=""', "");
   const others = Object.entries(EXAMPLES)
     .filter(([other]) => other !== name)
@@ -25,7 +27,7 @@ export function examplePage(name: string, facts: ExampleFacts, asked?: string): 
 <p>${about} <a href="/docs/embedding">How embedding works</a></p>
 ${body(facts)}
 <details><summary>The source of this part</summary><pre tabindex="0">${escaped(source)}</pre></details>
-<nav aria-label="Examples"><a href="${addressOf(undefined, asked)}">All examples</a> · ${others.join(" · ")}</nav>`;
+${script ? scriptSource(script) : ""}<nav aria-label="Examples"><a href="${addressOf(undefined, asked)}">All examples</a> · ${others.join(" · ")}</nav>`;
   return documentOf(`${title} · widgets`, content, facts.nonce, policy === undefined);
 }
 
@@ -57,6 +59,12 @@ export function noWidgetPage(nonce: string): string {
 function addressOf(name?: string, asked?: string): string {
   const path = name === undefined ? "/embed-examples" : `/embed-examples/${name}`;
   return asked === undefined ? path : `${path}?embed=${encodeURIComponent(asked)}`;
+}
+
+/** The module that a page's own bundle was made from. */
+function scriptSource(file: string): string {
+  const text = readFileSync(join(process.cwd(), file), "utf8");
+  return `<details><summary>The source of its script</summary><pre tabindex="0">${escaped(text)}</pre></details>\n`;
 }
 
 function documentOf(title: string, content: string, nonce: string, withIcon: boolean): string {

@@ -11,6 +11,8 @@ export interface Example {
   readonly about: string;
   /** What stands in the body, after the heading. */
   readonly body: (facts: ExampleFacts) => string;
+  /** File of the repository that its own script was bundled from, to be shown beside it. */
+  readonly script?: string;
   /** Its policy; without one the page has none, like most bare files. */
   readonly policy?: (facts: ExampleFacts) => string;
 }
@@ -56,6 +58,7 @@ ${loader(facts)}
     about: "The component of the TypeScript client: values go in as a prop, results come out as a call.",
     body: ({ origin, embed, nonce }) => `<div id="root" data-origin="${origin}" data-embed="${embed}"></div>
 <script nonce="${nonce}" src="${origin}/embed-examples/react.js" defer></script>`,
+    script: "sdk/typescript/examples/embed-react.tsx",
   },
   "strict-policy": {
     title: "A page with a strict policy",

@@ -1,7 +1,7 @@
 /** The React example that the service shows under /embed-examples/react; its own source is printed beside it. */
 import { useState } from "react";
 import { createRoot } from "react-dom/client";
-import { RhoformEmbed } from "../src/embed-react.js";
+import { RhoformEmbed } from "@rhoform/client/react";
 
 function Example({ embed, origin }: { readonly embed: string; readonly origin: string }) {
   const [length, setLength] = useState("250 mm");
