@@ -282,6 +282,14 @@ describe("python -m rhoform", () => {
     const wrong = await python(["-m", "rhoform", "guess"], variables);
     expect(wrong.code).toBe(2);
     expect(wrong.err).toContain("There is no command 'guess'.");
+    const many = await python(
+      ["-m", "rhoform", "batch", "a.csv", "b.csv", "--url", served.baseUrl],
+      variables,
+    );
+    expect([many.code, many.err.split("\n")[0]]).toEqual([
+      2,
+      "batch needs one file, and was given 2 arguments.",
+    ]);
     expect(refused.err + wrong.err).not.toContain("secretsecret");
   });
 });

@@ -1,6 +1,6 @@
 # Hand-written: sdk/python/parts/command.py
 
-_USAGE = """usage: python -m rhoform [--url URL] COMMAND ...
+_USAGE = """usage: python -m rhoform COMMAND ... [--url URL]
 
   resistance SHAPE name=value ...   one resistance; the same names as in GET /resistance/{shape}
   shapes [SHAPE]                    the catalogue, or one shape's dimensions
@@ -28,6 +28,12 @@ def _text_of(name: str) -> str:
         return sys.stdin.read()
     with open(name, encoding="utf-8-sig", newline="") as file:
         return file.read()
+
+
+def _one_file(command: str, arguments: Sequence[str]) -> str:
+    if len(arguments) != 1:
+        raise ValueError(f"{command} needs one file, and was given {len(arguments)} arguments.")
+    return arguments[0]
 
 
 def _print_json(value: Any) -> None:
@@ -70,7 +76,7 @@ def _refused_rows(table: str) -> int:
 
 
 def _solve(client: Client, arguments: Sequence[str]) -> None:
-    (name,) = arguments
+    name = _one_file("field", arguments)
 
     def show(bracket: FieldProgress) -> None:
         print(f"{bracket.lower:.9g} ... {bracket.upper:.9g} ohm", file=sys.stderr)
@@ -83,6 +89,8 @@ def _call(client: Client, arguments: Sequence[str]) -> None:
     body: Any = None
     if "--body" in rest:
         place = rest.index("--body")
+        if place + 1 == len(rest):
+            raise ValueError("--body needs a file.")
         body = json.loads(_text_of(rest[place + 1]))
         del rest[place : place + 2]
     operation = _OPERATIONS.get(rest[0] if rest else "")
@@ -113,8 +121,12 @@ def main(arguments: Optional[Sequence[str]] = None) -> int:
             reconfigure(encoding="utf-8", errors="replace")
     url = os.environ.get("RHOFORM_URL") or "http://127.0.0.1:3000"
     try:
-        if rest[:1] == ["--url"]:
-            url, rest = rest[1], rest[2:]
+        if "--url" in rest:
+            place = rest.index("--url")
+            if place + 1 == len(rest):
+                raise ValueError("--url needs an address.")
+            url = rest[place + 1]
+            del rest[place : place + 2]
         if not rest or rest[0] in ("-h", "--help", "help"):
             print(_USAGE)
             return 0 if rest else 2
@@ -125,7 +137,7 @@ def main(arguments: Optional[Sequence[str]] = None) -> int:
         elif command == "shapes":
             _print_shapes(client, rest)
         elif command == "batch":
-            (name,) = rest
+            name = _one_file("batch", rest)
             headers = {"Content-Type": "text/csv", "Accept": "text/csv"}
             table = client.call(
                 "POST",
