@@ -8,7 +8,7 @@ interface CodeBlockProps {
   readonly copies?: string;
 }
 
-/** Code to read and to copy; long lines scroll inside the block. */
+/** Code to read and to copy; long lines scroll inside the block, and break on paper. */
 export function CodeBlock({ code, label, copies = code }: CodeBlockProps) {
   return (
     <figure className="break-inside-avoid rounded border border-rule bg-sheet">
@@ -22,7 +22,7 @@ export function CodeBlock({ code, label, copies = code }: CodeBlockProps) {
         // Reachable by keyboard, since it scrolls.
         tabIndex={0}
         aria-label={label}
-        className="overflow-x-auto px-2 py-1.5 text-small"
+        className="overflow-x-auto px-2 py-1.5 text-small print:break-words print:whitespace-pre-wrap"
       >
         <code>{code}</code>
       </pre>

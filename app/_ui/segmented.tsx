@@ -23,7 +23,7 @@ export function Segmented<Value extends string>(props: SegmentedProps<Value>) {
         {options.map((option) => (
           <label
             key={option.value}
-            className="flex min-h-5.5 cursor-pointer items-center rounded px-1.5 text-table text-ink-soft hover:text-ink has-checked:bg-ink has-checked:font-medium has-checked:text-paper has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-verdigris medium:min-h-4.5"
+            className="relative flex min-h-5.5 cursor-pointer items-center rounded px-1.5 text-table text-ink-soft hover:text-ink has-checked:bg-ink has-checked:font-medium has-checked:text-paper has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-verdigris medium:min-h-4.5"
           >
             <input
               type="radio"

@@ -16,7 +16,7 @@ export function Toggle({ label, checked, onChange, disabled = false, help }: Tog
   return (
     <div>
       <label
-        className={`inline-flex min-h-5.5 items-center gap-1 text-table medium:min-h-4 ${disabled ? "opacity-55" : "cursor-pointer"}`}
+        className={`relative inline-flex min-h-5.5 items-center gap-1 text-table medium:min-h-4 ${disabled ? "opacity-55" : "cursor-pointer"}`}
       >
         <input
           type="checkbox"

@@ -53,6 +53,12 @@ it("first key, first call, its usage; revoked in a second browser it is refused 
   expect(await dialog.getByLabel("Computations a month").inputValue()).toBe("many");
   await dialog.getByLabel("Name").fill("Shop floor");
   await dialog.getByLabel("Computations a month").fill("500");
+  // A switch is not seen itself; the dialog follows it all the same.
+  await page.setViewportSize({ width: 1280, height: 500 });
+  const mayTravel = dialog.getByRole("switch", { name: "May travel" });
+  await mayTravel.focus();
+  const [at, place] = [await mayTravel.boundingBox(), await dialog.boundingBox()];
+  expect(at && place && at.y > place.y && at.y + at.height < place.y + place.height).toBe(true);
   await accessible(page);
   await dialog.getByRole("button", { name: "Issue" }).click();
   const key = (await page.getByTestId("secret").textContent()) ?? "";
