@@ -134,6 +134,42 @@ describe("what a record tells", () => {
     expect(contentOf(recordOf(uneven)).openAgain?.href).toContain("width=40mm&width.plus=1mm&");
   });
 
+  it("opens again with the unit that a bare tolerance has in the API", () => {
+    const queryOf = (request: Readonly<Record<string, unknown>>) =>
+      new URL(contentOf(recordOf(request)).openAgain?.href ?? "", "http://x.example").searchParams;
+    const query = queryOf({
+      ...BAR,
+      dimensions: { ...BAR.dimensions, width: { value: "40 mm", plus: 0.0005, minus: "1 %" } },
+      medium: { resistivity: { value: "17 nohm m", tolerance: "1e-9" } },
+      operating: { temperature: { value: "68 degF", tolerance: 2 } },
+    });
+    expect(
+      ["width.plus", "width.minus", "resistivity.tolerance", "temperature.tolerance"].map((name) =>
+        query.get(name),
+      ),
+    ).toEqual(["0.0005m", "1%", "1e-9ohm m", "2K"]);
+    const profile = {
+      kind: "gaussian",
+      peak: { value: "58 MS/m", tolerance: 1e6 },
+      center: { value: "125 mm", tolerance: 0.01 },
+      spread: "50 mm",
+      background: 1e6,
+    };
+    const graded = queryOf({
+      ...BAR,
+      medium: { graded: { coordinate: "length", quantity: "conductivity", profile } },
+    });
+    expect(
+      ["profile.peak", "profile.peak.tolerance", "profile.center.tolerance"].map((name) => graded.get(name)),
+    ).toEqual(["58MS/m", "1000000S/m", "0.01m"]);
+  });
+
+  it("does not open again without the tolerance of a layer", () => {
+    const layers = [{ thickness: "250 mm", value: { value: "58 MS/m", tolerance: "1 %" } }];
+    const graded = { coordinate: "length", quantity: "conductivity", profile: { kind: "layers", layers } };
+    expect(contentOf(recordOf({ ...BAR, medium: { graded } })).openAgain).toBeUndefined();
+  });
+
   it("shows what was stored as it is where it does not know the form", () => {
     const odd = contentOf({ ...recordOf(BAR), operation: "sizing", result: { solutions: [] } });
     expect(odd.sections.map(({ id }) => id)).toEqual(["request", "result", "versions"]);

@@ -87,7 +87,7 @@ export function exampleParameters(entry: ShapeEntry): Parameters {
 }
 
 /** Units of bare numbers in a medium. */
-const BARE_UNITS: Readonly<Record<string, string>> = {
+export const BARE_UNITS: Readonly<Record<string, string>> = {
   resistivity: "ohm m",
   conductivity: "S/m",
   sheetResistance: "ohm/sq",

@@ -1,15 +1,17 @@
 /** The address of the page on which a record's calculation can be gone on with, its inputs in place. */
 import { deflateRawSync } from "node:zlib";
-import { findShape, shapeEntry } from "@/lib/engine";
+import { findShape, type ShapeEntry, shapeEntry } from "@/lib/engine";
+import { VALUE_UNITS } from "../../calculate/_calculator/graded/field-site";
 import { splitAddress } from "../../calculate/_model/address";
-import { exampleParameters } from "../../calculate/_model/parameters";
+import { BARE_UNITS, exampleParameters } from "../../calculate/_model/parameters";
+import { PROFILE_FORMS } from "../../calculate/_model/profile-forms";
+import type { ProfileValues } from "../../calculate/_model/profile-starts";
 import { stateQuery } from "../../calculate/_model/variants";
 import { packedHash, plainHash } from "../../outline/_model/address";
 import { fieldBody } from "../../outline/_model/field-body";
 import { readBody } from "../../outline/_model/read-body";
 import { EMPTY_SKETCH } from "../../outline/_model/start-outlines";
 import type { OpenAgain } from "./content";
-import { nominal } from "./typed";
 
 type Given = Readonly<Record<string, unknown>>;
 
@@ -33,8 +35,8 @@ export function inCalculator(asked: Asked): OpenAgain | undefined {
   if (!shape) return undefined;
   const { dimensions, medium, media, operating = {}, requirement = {}, uncertainty = {} } = asked;
   const entry = shapeEntry(shape);
-  const plain = (given: Given): Given =>
-    Object.fromEntries(Object.entries(given).map(([name, value]) => [name, nominal(value)]));
+  const gradings = [medium, ...Object.values(media ?? {})].flatMap((one) => gradingOf(one) ?? []);
+  if (gradings.some(({ profile }) => rowsVary(profile))) return undefined;
   const example = {
     dimensions: plain(dimensions),
     ...(medium ? { medium: plain(medium) } : {}),
@@ -48,8 +50,11 @@ export function inCalculator(asked: Asked): OpenAgain | undefined {
   const sought = { solveFor, target, from, to };
   const rest = { ...plain(operating), ...requirement, uncertainty: method, trials, seed, ...sought };
   for (const [name, value] of Object.entries(rest)) if (value !== undefined) parameters[name] = String(value);
-  tolerances("", { ...dimensions, ...operating, ...medium }, parameters);
-  for (const [name, one] of Object.entries(media ?? {})) tolerances(`${name}.`, one, parameters);
+  const put = { parameters, entry };
+  tolerances("", dimensions, (name) => dimensionUnit(entry, name), put);
+  tolerances("", operating, differenceUnit, put);
+  if (medium) mediumTolerances("", medium, put);
+  for (const [name, one] of Object.entries(media ?? {})) mediumTolerances(`${name}.`, one, put);
   const { query, behind } = splitAddress(stateQuery({ variants: [parameters], active: 0 }, entry));
   return { page: "Calculate", href: `/calculate/${entry.id}?${query}${behind === "" ? "" : `#${behind}`}` };
 }
@@ -65,12 +70,113 @@ export function inOutline(body: unknown): OpenAgain | undefined {
   return { page: "Outline", href: `/outline#${plainHash(text) ?? packedHash(deflateRawSync(text))}` };
 }
 
-const MEMBERS = ["tolerance", "plus", "minus", "distribution"];
+const SPREADS = ["tolerance", "plus", "minus"];
+const MEMBERS = [...SPREADS, "distribution"];
 
-function tolerances(prefix: string, given: Given, parameters: Record<string, string>): void {
+/** A quantity with a tolerance; a layer or a constant profile has a value, but other members beside it. */
+function toleranced(value: unknown): value is Given {
+  if (value === null || typeof value !== "object" || !("value" in value)) return false;
+  return Object.keys(value).every((member) => member === "value" || MEMBERS.includes(member));
+}
+
+/** The same without any tolerance, inside a graded medium as well. */
+function plain(given: Given): Given {
+  return Object.fromEntries(
+    Object.entries(given).map(([name, value]) => {
+      if (toleranced(value)) return [name, value.value];
+      return [name, name === "graded" || name === "profile" ? plain(value as Given) : value];
+    }),
+  );
+}
+
+interface Grading {
+  readonly coordinate: string;
+  readonly quantity?: string;
+  readonly profile: Given;
+}
+
+function gradingOf(medium: Given | undefined): Grading | undefined {
+  return medium?.graded as Grading | undefined;
+}
+
+/** Whether a row of a table has a tolerance, for which the calculator's tables have no place. */
+function rowsVary({ layers, positions, values, profile }: Given): boolean {
+  const cells = [layers, positions, values].flatMap((rows) =>
+    Array.isArray(rows) ? (rows as unknown[]) : [],
+  );
+  const inCell = (cell: unknown): boolean =>
+    toleranced(cell) || (typeof cell === "object" && cell !== null && Object.values(cell).some(toleranced));
+  return cells.some(inCell) || (profile !== undefined && rowsVary(profile as Given));
+}
+
+interface Put {
+  readonly parameters: Record<string, string>;
+  readonly entry: ShapeEntry;
+}
+
+/** @param unitOf In which unit the API takes a tolerance without one, by the name of its quantity. */
+function tolerances(
+  prefix: string,
+  given: Given,
+  unitOf: (name: string) => string | undefined,
+  { parameters }: Put,
+): void {
   for (const [name, value] of Object.entries(given)) {
-    if (value === null || typeof value !== "object") continue;
-    const members = Object.entries(value).filter(([member]) => MEMBERS.includes(member));
-    for (const [member, said] of members) parameters[`${prefix}${name}.${member}`] = String(said);
+    if (!toleranced(value)) continue;
+    for (const [member, said] of Object.entries(value)) {
+      if (member === "value") continue;
+      const spread = SPREADS.includes(member) ? withUnit(said, unitOf(name)) : String(said);
+      parameters[`${prefix}${name}.${member}`] = spread;
+    }
   }
+}
+
+function mediumTolerances(prefix: string, medium: Given, put: Put): void {
+  tolerances(prefix, medium, differenceUnit, put);
+  const grading = gradingOf(medium);
+  if (!grading) return;
+  const { coordinate, quantity, profile } = grading;
+  const angle = put.entry.coordinates.find(({ name }) => name === coordinate)?.unit === "rad";
+  const values = quantity === "resistivity" ? "resistivity" : "conductivity";
+  profileTolerances(`${prefix}profile`, profile, angle ? "deg" : "m", values, put);
+}
+
+function profileTolerances(
+  name: string,
+  profile: Given,
+  place: string,
+  values: ProfileValues,
+  put: Put,
+): void {
+  const units = {
+    value: VALUE_UNITS[values],
+    position: place,
+    temperature: "K",
+    density: VALUE_UNITS.density,
+  };
+  const unitOf = (member: string) => {
+    const type = PROFILE_FORMS[String(profile.kind)]?.find((field) => field.name === member)?.type;
+    return type !== undefined && type in units ? units[type as keyof typeof units] : undefined;
+  };
+  tolerances(`${name}.`, profile, unitOf, put);
+  if (profile.profile) profileTolerances(`${name}.profile`, profile.profile as Given, place, "density", put);
+}
+
+/**
+ * The calculator reads a tolerance without a unit in the unit of its value, the API in SI: "12 mm" with 0.0005 is
+ * "12 mm" with "0.0005 m" there.
+ */
+function withUnit(said: unknown, unit: string | undefined): string {
+  const text = String(said).trim();
+  return unit !== undefined && text !== "" && Number.isFinite(Number(text)) ? `${text} ${unit}` : text;
+}
+
+function dimensionUnit(entry: ShapeEntry, name: string): string | undefined {
+  const unit = entry.dimensions.find((dimension) => dimension.name === name)?.unit;
+  return unit === "1" || unit === null ? undefined : unit;
+}
+
+/** Of a member of a medium or an operating point; temperatures differ by kelvins. */
+function differenceUnit(name: string): string | undefined {
+  return /temperature$/i.test(name) ? "K" : BARE_UNITS[name];
 }

@@ -51,10 +51,12 @@ function withUnit(text: string, unit: string | undefined): string {
 function tolerancedText(given: object, kind?: QuantityKindName): string {
   if (!("value" in given)) return JSON.stringify(given);
   const { value, tolerance, plus, minus, distribution } = given as Record<string, unknown>;
+  // Temperatures differ by kelvins, whatever the unit of the value.
+  const difference = kind === "temperature" ? "temperatureDifference" : kind;
   const spread =
     tolerance !== undefined
-      ? `± ${typedText(tolerance, kind)}`
-      : `+ ${typedText(plus ?? 0, kind)}, − ${typedText(minus ?? 0, kind)}`;
+      ? `± ${typedText(tolerance, difference)}`
+      : `+ ${typedText(plus ?? 0, difference)}, − ${typedText(minus ?? 0, difference)}`;
   const law = typeof distribution === "string" ? `, ${distribution}` : "";
   return `${typedText(value, kind)} ${spread}${law}`;
 }
