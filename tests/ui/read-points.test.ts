@@ -25,6 +25,27 @@ describe("readPoints", () => {
     expect((await readPoints("x [mm],σ [S/m]\n1,2")).rows).toEqual([["1 mm", "2 S/m"]]);
   });
 
+  it.each([
+    ["mm,S/m", "1 mm", "2 S/m"],
+    ["m;ohm m", "1 m", "2 ohm m"],
+    ["position mm;conductivity MS/m", "1 mm", "2 MS/m"],
+    ["depth/µm;N/(1/cm^3)", "1 µm", "2 1/cm^3"],
+    ["x;y", "1", "2"],
+  ])("takes %s for the units of a head", async (head, place, value) => {
+    const { rows } = await readPoints(`${head}\n${head.includes(";") ? "1;2" : "1,2"}`);
+    expect(rows).toEqual([[place, value]]);
+  });
+
+  it("refuses more than a request can carry", async () => {
+    const line = (k: number) => `0.${String(k).padStart(12, "0")};57999950.123456`;
+    const text = Array.from({ length: 40_000 }, (_, k) => line(k)).join("\n");
+    const { rows, problems } = await readPoints(`m;S/m\n${text}`);
+    expect(rows).toEqual([]);
+    expect(problems).toEqual([
+      "40000 points with so many digits are longer than a request may be; about 23000 of them fit.",
+    ]);
+  });
+
   it("tells the line and the column of what it cannot read", async () => {
     const { rows, problems } = await readPoints("0;1\n1;x\n2\n3;4");
     expect(rows).toEqual([

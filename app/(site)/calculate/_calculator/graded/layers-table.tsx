@@ -11,9 +11,9 @@ import { spanText } from "../../_model/profile-starts";
 import { baseValue } from "../../_model/value-texts";
 import { CellInput } from "./cell-input";
 import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
-import { type PointsReading, readPoints } from "./read-points";
 import { RowButton } from "./row-button";
 import { MOST_ROWS_SHOWN, ReadingNotes, RowsText } from "./rows-text";
+import { useRowsReading } from "./use-rows-reading";
 
 type Rows = readonly (readonly [string, string])[];
 
@@ -23,14 +23,12 @@ const TOLERANCE = 1e-9;
 /** Layers from the coordinate's start to its end, one row each. */
 export function LayersTable({ name, site }: { readonly name: string; readonly site: FieldSite }) {
   const { parameters, change, errorAt } = useForm();
-  const [notes, setNotes] = useState<PointsReading | null>(null);
-  /** Counts the changes that do not come from the text itself, which then starts anew. */
-  const [revision, setRevision] = useState(0);
   const [asText, setAsText] = useState(false);
   const rows = readRows(parameters[name] ?? "");
   const kind = positionKind(site.span);
   const base = site.span?.unit ?? "m";
   const set = (next: Rows) => change({ [name]: writeRows(next) });
+  const { notes, revision, restart, read, take } = useRowsReading(set);
   const sizes = rows.map(([thickness]) => baseValue(thickness, kind, base));
   const sum = sizes.every((size) => size !== null)
     ? sizes.reduce((total, size) => total + (size ?? 0), 0)
@@ -47,19 +45,8 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
   function scaleToFit() {
     if (sum === null || !site.span) return;
     const { span } = site;
-    setRevision((before) => before + 1);
+    restart();
     set(rows.map(([, value], i) => [spanText(((sizes[i] ?? 0) * span.extent) / sum, span), value] as const));
-  }
-
-  async function readFile(text: string) {
-    await read(text);
-    setRevision((before) => before + 1);
-  }
-
-  async function read(text: string) {
-    const reading = await readPoints(text);
-    setNotes(reading);
-    if (reading.rows.length > 0) set(reading.rows);
   }
 
   const long = rows.length > MOST_ROWS_SHOWN;
@@ -78,7 +65,7 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
         />
         <LayersSum sum={sum} fits={fits} site={site} complaint={errorAt(name)} onFit={scaleToFit}>
           {long ? null : <Button onClick={() => setAsText(false)}>Edit as a table</Button>}
-          <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onText={readFile} />
+          <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onFile={take} />
         </LayersSum>
         <ReadingNotes reading={notes} />
       </div>
@@ -156,7 +143,7 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
           <Plus aria-hidden size={15} /> Layer
         </Button>
         <Button onClick={() => setAsText(true)}>Edit as text</Button>
-        <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onText={readFile} />
+        <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onFile={take} />
       </LayersSum>
       <ReadingNotes reading={notes} />
     </div>

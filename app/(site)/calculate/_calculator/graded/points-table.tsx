@@ -11,7 +11,7 @@ import { CellInput } from "./cell-input";
 import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
 import { RowButton } from "./row-button";
 import { MOST_ROWS_SHOWN, ReadingNotes, RowsText } from "./rows-text";
-import { readPoints, type PointsReading } from "./read-points";
+import { useRowsReading } from "./use-rows-reading";
 
 type Rows = readonly (readonly [string, string])[];
 
@@ -19,23 +19,10 @@ type Rows = readonly (readonly [string, string])[];
 export function PointsTable({ name, site }: { readonly name: string; readonly site: FieldSite }) {
   const { parameters, change, errorAt } = useForm();
   const [asText, setAsText] = useState(false);
-  const [notes, setNotes] = useState<PointsReading | null>(null);
-  /** Counts the changes that do not come from the text itself, which then starts anew. */
-  const [revision, setRevision] = useState(0);
   const rows = readRows(parameters[name] ?? "");
   const long = rows.length > MOST_ROWS_SHOWN;
   const set = (next: Rows) => change({ [name]: writeRows(next) });
-
-  async function readFile(text: string) {
-    await read(text);
-    setRevision((before) => before + 1);
-  }
-
-  async function read(text: string) {
-    const reading = await readPoints(text);
-    setNotes(reading);
-    if (reading.rows.length > 0) set(reading.rows);
-  }
+  const { notes, revision, read, take } = useRowsReading(set);
 
   return (
     <div className="mb-1.5">
@@ -115,7 +102,7 @@ export function PointsTable({ name, site }: { readonly name: string; readonly si
             </Button>
           </>
         )}
-        <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onText={readFile} />
+        <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onFile={take} />
         <p className="text-small text-ink-soft">{rows.length} points</p>
       </div>
       <ReadingNotes reading={notes} />

@@ -7,6 +7,8 @@ import type { PointsReading } from "./read-points";
 /** Longer tables are edited as text. */
 export const MOST_ROWS_SHOWN = 40;
 
+const MOST_PROBLEMS = 5;
+
 interface RowsTextProps {
   readonly label: string;
   /** What the two columns are. */
@@ -42,13 +44,15 @@ export function RowsText({ label, columns, rows, onChange }: RowsTextProps) {
 
 /** What was understood of a text, and what was not. */
 export function ReadingNotes({ reading }: { readonly reading: PointsReading | null }) {
+  const more = (reading?.problems.length ?? 0) - MOST_PROBLEMS;
   return (
     <div aria-live="polite" className="text-small">
-      {reading?.problems.slice(0, 5).map((problem) => (
+      {reading?.problems.slice(0, MOST_PROBLEMS).map((problem) => (
         <p key={problem} className="text-oxide">
           {problem}
         </p>
       ))}
+      {more > 0 ? <p className="text-oxide">And {more} more.</p> : null}
       {reading?.note ? <p className="text-ink-soft">{reading.note}</p> : null}
     </div>
   );
