@@ -12,6 +12,8 @@ const alias = {
 export default defineConfig({
   resolve: { alias },
   test: {
+    // Files share what they import (`isolate: false` below): no test replaces a module, and loading the engine anew for
+    // each file would cost more than most files' tests.
     // Half of most tests is waiting for a server, a browser or the database.
     maxWorkers: Math.max(2, availableParallelism() - 1),
     projects: [
@@ -19,6 +21,7 @@ export default defineConfig({
         resolve: { alias },
         test: {
           name: "engine",
+          isolate: false,
           include: ["tests/engine/**/*.test.ts", "tests/reference/**/*.test.ts", "tests/field/**/*.test.ts"],
           testTimeout: 60_000,
         },
@@ -27,6 +30,7 @@ export default defineConfig({
         resolve: { alias },
         test: {
           name: "units",
+          isolate: false,
           include: [
             "tests/ui/**/*.test.ts",
             "tests/lib/**/*.test.ts",
@@ -38,12 +42,13 @@ export default defineConfig({
       },
       {
         resolve: { alias },
-        test: { name: "db", include: ["tests/db/**/*.test.ts"], testTimeout: 30_000 },
+        test: { name: "db", isolate: false, include: ["tests/db/**/*.test.ts"], testTimeout: 30_000 },
       },
       {
         resolve: { alias },
         test: {
           name: "api",
+          isolate: false,
           include: ["tests/api/**/*.test.ts"],
           globalSetup: ["tests/support/worker-bundle.ts"],
           testTimeout: 60_000,
@@ -54,6 +59,7 @@ export default defineConfig({
         resolve: { alias },
         test: {
           name: "server",
+          isolate: false,
           include: ["tests/api/**/*.test.ts", "tests/server/**/*.test.ts", "tests/browser/**/*.test.ts"],
           globalSetup: ["tests/support/start-server.ts"],
           testTimeout: 60_000,

@@ -1,3 +1,4 @@
+import { setTimeout } from "node:timers/promises";
 import fc from "fast-check";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { csvTemplate } from "@/api/batch/csv-template";
@@ -91,16 +92,17 @@ describe("POST /resistance/batch 200", () => {
   });
 
   test("other calls are answered while a large batch is at work", async () => {
-    const large = post({ items: new Array(10_000).fill(bar("1 mm")) });
-    const waits: number[] = [];
-    for (let i = 0; i < 10; i++) {
-      const start = performance.now();
+    let atWork = true;
+    const large = post({ items: new Array(10_000).fill(bar("1 mm")) }).finally(() => (atWork = false));
+    let between = 0;
+    while (atWork) {
       expect((await call(server, "get", "/health")).status).toBe(200);
-      waits.push(performance.now() - start);
+      if (atWork) between += 1;
+      await setTimeout(20);
     }
     expect((await large).body.counts.answered).toBe(10_000);
     // Reading 2 MB of JSON is one stretch; apart from it the loop is never kept long.
-    expect(waits.sort((a, b) => a - b)[5]).toBeLessThan(500);
+    expect(between).toBeGreaterThan(5);
   });
 });
 

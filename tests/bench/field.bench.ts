@@ -7,6 +7,7 @@
 import { spawnSync } from "node:child_process";
 import { WorkerPool } from "@/lib/jobs/worker-pool";
 import type { FieldResult } from "@/lib/engine";
+import { accept, gon, meshOf } from "../field/support/outlines";
 import { bend, type FieldBody, gradedBend, meander, plate, sieve } from "./field-outlines";
 
 export interface FieldMeasurement {
@@ -171,6 +172,29 @@ async function growth(pool: WorkerPool): Promise<FieldMeasurement> {
   };
 }
 
+/** Growth of the mesher's time with the vertices of a polygon: n·log n gives 12 for ten times as many. */
+async function meshGrowth(): Promise<FieldMeasurement> {
+  const times: number[] = [];
+  for (const count of [5_000, 50_000]) {
+    const ends = [0, count / 2].map((edge, i) => ({ name: "ab"[i], parts: [{ ring: 0, edge }] }));
+    const runs: number[] = [];
+    for (let run = 0; run < 3; run++)
+      runs.push(await milliseconds(() => meshOf(accept({ outer: gon(0, 0, 1, count) }, ends))));
+    times.push(median(runs));
+  }
+  const value = times[1] / times[0];
+  return {
+    name: "mesh of 50,000 vertices over one of 5,000",
+    value,
+    unit: "",
+    target: 20,
+    ratio: null,
+    limit: 20,
+    passed: value < 20,
+    note: times.map((time) => `${Math.round(time)} ms`).join(" and "),
+  };
+}
+
 export async function benchField(): Promise<FieldMeasurement[]> {
   for (let round = 0; round < 3; round++) factoriseDense();
   const first = await firstAnswer();
@@ -179,7 +203,7 @@ export async function benchField(): Promise<FieldMeasurement[]> {
   try {
     const timed: FieldMeasurement[] = [];
     for (const one of CASES) timed.push(await timeCase(pool, one));
-    return [...timed, first, await growth(pool), memoryOfLargest()];
+    return [...timed, first, await growth(pool), await meshGrowth(), memoryOfLargest()];
   } finally {
     await pool.close();
   }
