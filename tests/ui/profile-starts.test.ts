@@ -9,6 +9,7 @@ import { PROFILE_FORMS } from "@/app/(site)/calculate/_model/profile-forms";
 import {
   firstValue,
   levelProfile,
+  movedProfile,
   type ProfileValues,
   reciprocalProfile,
   START_VALUES,
@@ -113,4 +114,48 @@ describe("a law of a graded medium", () => {
     );
     expect(back).toEqual({ "profile.value": "3+u" });
   });
+});
+
+describe("movedProfile", () => {
+  const radius = { unit: "m", start: 0.002, extent: 0.003 } as const;
+  const angle = { unit: "deg", start: 0, extent: 360 } as const;
+
+  it.each([
+    ["power", { at: "5 mm" }, { at: "360 deg" }],
+    ["gaussian", { center: "3.5 mm", spread: "0.75 mm" }, { center: "180 deg", spread: "90 deg" }],
+    ["complementary-error", { length: "0.001" }, { length: "120 deg" }],
+    ["layers", { layers: "1 mm:58 MS/m,2 mm:30 MS/m" }, { layers: "120 deg:58 MS/m,240 deg:30 MS/m" }],
+    ["table", { table: "2 mm:1 S/m,5 mm:2 S/m" }, { table: "0 deg:1 S/m,360 deg:2 S/m" }],
+  ])("keeps the parts of the range at which a %s law has its places", (kind, before, after) => {
+    const named = (fields: object) =>
+      Object.fromEntries(Object.entries(fields).map(([field, text]) => [`profile.${field}`, text]));
+    const own = { profile: kind, ...named(before) };
+    const moved = movedProfile("profile", own, radius, angle);
+    expect(moved).toEqual(named(after));
+    expect(movedProfile("profile", { ...own, ...moved }, angle, angle)).toEqual(named(after));
+  });
+
+  it("leaves what is no position, and everything where a range is not known", () => {
+    const own = { profile: "gaussian", "profile.peak": "58 MS/m", "profile.center": "about half" };
+    expect(movedProfile("profile", own, radius, angle)).toEqual({ "profile.center": "about half" });
+    expect(movedProfile("profile", own, undefined, angle)).toEqual({});
+  });
+
+  it.each(gradable.filter((shape) => shapeEntry(shape).media.gradable.length > 1))(
+    "has an answer along each coordinate of $id, whatever the law",
+    (shape) => {
+      const [first, ...others] = shapeEntry(shape).media.gradable;
+      const { entry, span, base, profile } = graded(shape, first);
+      const material = "copper-annealed";
+      for (const kind of ["power", "gaussian", "complementary-error", "layers", "table"]) {
+        const level = { value: "2 kS/m", material, temperature: "20 degC", span };
+        const own = { [profile]: kind, ...levelProfile(profile, kind, level) };
+        for (const coordinate of others) {
+          const moved = movedProfile(profile, own, span, graded(shape, coordinate).span);
+          const turned = { ...base, ...own, ...moved, [profile.replace("profile", "graded")]: coordinate };
+          expect(resistance(entry, turned), `${kind} along ${coordinate}`).toBeGreaterThan(0);
+        }
+      }
+    },
+  );
 });

@@ -4,7 +4,7 @@ import { findUnit, UNITS } from "../../../_ui/quantity/units";
 import type { CoordinateSpan } from "../_server/geometry";
 import type { Parameters } from "./parameters";
 import { PROFILE_FORMS, readRows, writeRows } from "./profile-forms";
-import { baseValue, neatText } from "./value-texts";
+import { baseValue, neatText, plainValue } from "./value-texts";
 
 export type ProfileValues = "conductivity" | "resistivity" | "density";
 
@@ -118,6 +118,47 @@ export function reciprocalProfile(
 function turnedExpression(text: string): string {
   const inner = /^1\/\(([^()]*)\)$/.exec(text.trim());
   return inner ? inner[1] : `1/(${text.trim()})`;
+}
+
+/** Positions at which something lies; the others are lengths. */
+const PLACES: readonly string[] = ["center", "at"];
+
+/** The positions of a law at the same parts of another coordinate's range. */
+export function movedProfile(
+  name: string,
+  own: Parameters,
+  from: CoordinateSpan | undefined,
+  to: CoordinateSpan | undefined,
+): Parameters {
+  if (!from || !to) return {};
+  const kind = from.unit === "deg" ? "angle" : "length";
+  const part = (text: string) => plainValue(text, kind, from.unit);
+  const width = (text: string) => {
+    const size = part(text);
+    return size === null ? text : widthText(to, size / from.extent);
+  };
+  const place = (text: string) => {
+    const position = part(text);
+    return position === null ? text : positionText(to, (position - from.start) / from.extent);
+  };
+  const fields: Record<string, string> = {};
+  for (const field of PROFILE_FORMS[own[name] ?? "constant"] ?? []) {
+    const key = `${name}.${field.name}`;
+    const text = own[key];
+    if (field.type === "profile") Object.assign(fields, movedProfile(key, own, from, to));
+    else if (!text) continue;
+    else if (field.type === "position") {
+      fields[key] = PLACES.includes(field.name) ? place(text) : width(text);
+      for (const member of ["tolerance", "plus", "minus"]) {
+        const spread = own[`${key}.${member}`];
+        if (spread) fields[`${key}.${member}`] = width(spread);
+      }
+    } else if (field.type === "layers" || field.type === "table") {
+      const moved = field.type === "layers" ? width : place;
+      fields[key] = writeRows(readRows(text).map(([cell, value]) => [moved(cell), value] as const));
+    }
+  }
+  return fields;
 }
 
 /** A place in the range, as a part of it. */

@@ -21,17 +21,21 @@ export function neatText(
   return `${exact ? short : textInUnit(value, unit, 15)} ${unit.id}`;
 }
 
-/** The number that a field's text stands for in the unit of bare numbers; null where it is none greater than 0. */
-export function baseValue(
-  text: string | undefined,
-  kind: "resistivity" | "conductivity" | "density" | "length" | "angle",
-  base: string,
-): number | null {
+type ReadKind = "resistivity" | "conductivity" | "density" | "length" | "angle";
+
+/** The number that a field's text stands for in the unit of bare numbers; null where it is none. */
+export function plainValue(text: string | undefined, kind: ReadKind, base: string): number | null {
   if (!text) return null;
   const units = UNITS[kind];
   const unit = findUnit(base, units);
   const parts = splitQuantity(text, units);
-  if (!unit || parts.foreign !== undefined) return null;
+  if (!unit || parts.foreign !== undefined || parts.number === "") return null;
   const number = Number(convertUnit(parts.number, parts.unit ?? unit, unit));
-  return Number.isFinite(number) && number > 0 ? number : null;
+  return Number.isFinite(number) ? number : null;
+}
+
+/** The same; null where it is none greater than 0. */
+export function baseValue(text: string | undefined, kind: ReadKind, base: string): number | null {
+  const number = plainValue(text, kind, base);
+  return number !== null && number > 0 ? number : null;
 }

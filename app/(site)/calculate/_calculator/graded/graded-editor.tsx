@@ -3,7 +3,7 @@
 import { Segmented } from "../../../../_ui/segmented";
 import { Select } from "../../../../_ui/select";
 import { SELF_DESCRIBING } from "../../_model/profile-forms";
-import { reciprocalProfile } from "../../_model/profile-starts";
+import { movedProfile, reciprocalProfile } from "../../_model/profile-starts";
 import { useForm } from "../form-context";
 import { ProfileFields } from "./profile-fields";
 import { ProfilePlot } from "./profile-plot";
@@ -30,7 +30,11 @@ export function GradedEditor({ prefix }: { readonly prefix: string }) {
           value: own,
           label: `${label} (${role} the flow)`,
         }))}
-        onChange={(event) => change({ [`${prefix}graded`]: event.target.value })}
+        onChange={({ target: { value: next } }) => {
+          forget();
+          const own = ownParameters(name, parameters);
+          change({ [`${prefix}graded`]: next, ...movedProfile(name, own, ranges[coordinate], ranges[next]) });
+        }}
         help={
           chosen ? `${chosen.name} runs from ${spoken(chosen.start)} to ${spoken(chosen.end)}.` : undefined
         }

@@ -38,7 +38,7 @@ export function useProfileSwitch(
     change({ ...cleared, ...start });
   }
 
-  /** For a quantity of another kind, whose numbers are none of this one's. */
+  /** For a quantity or a coordinate of another kind, whose numbers are none of this one's. */
   function forget() {
     remembered.current.clear();
     level.current = "";
