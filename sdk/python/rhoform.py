@@ -2169,7 +2169,7 @@ class SizingSolution:
     #: A value of the dimension.
     dimension: AnsweredSizingWithin
     resistance: BoundedResistance
-    #: Derivative of the resistance by the dimension there, in ohms per `unit` of the dimension.
+    #: Derivative of the resistance by the dimension there, in ohms per `unit` of the dimension; for a whole number the change that one more makes, or that the last one made where no more are admitted.
     sensitivity: float
     #: Whether the target lies within the bounds of `resistance`, which is computed from this very value. False for the whole numbers on either side of the target where none gives it, and where a double cannot hold the dimension finely enough: `cautions` then say how far off it is, and which other dimension resolves it.
     exact: bool

@@ -71,6 +71,30 @@ describe("POST /sizing", () => {
     expect(body.solutions[1].resistance.value).toBeLessThan(3);
   });
 
+  test("200 at the most whole number that is admitted, the sensitivity is what the last one changed", async () => {
+    const resistanceOf = async (strands: number) =>
+      (
+        await call(server, "post", "/resistance", {
+          key,
+          body: {
+            shape: "stranded-conductor",
+            dimensions: { length: "1 km", strandDiameter: "0.4 mm", strands },
+            medium: { resistivity: 1.7e-8 },
+          },
+        })
+      ).body.resistance.value as number;
+    const [last, before] = [await resistanceOf(1_000_000), await resistanceOf(999_999)];
+    const { body } = await size({
+      shape: "stranded-conductor",
+      dimensions: { length: "1 km", strandDiameter: "0.4 mm" },
+      medium: { resistivity: 1.7e-8 },
+      solveFor: "strands",
+      target: last,
+    });
+    expect(body.solutions[0].dimension.value).toBe(1_000_000);
+    expect(body.solutions[0].sensitivity / (last - before)).toBeCloseTo(1, 6);
+  });
+
   test("200 with tolerances, requirement and steps as any request", async () => {
     const { body } = await size({
       dimensions: { length: { value: "1 m", tolerance: "1 %" }, thickness: "10 mm" },

@@ -165,10 +165,10 @@ function solution(
   const { dimension } = read;
   const slope =
     dimension.type === "integer"
-      ? evaluator.at([x + 1]) - evaluator.at([x])
+      ? nextDifference(evaluator, x)
       : derivative((at) => evaluator.at([at]), x, 0.01 * Math.abs(x)).value;
   const sensitivity = unitOf(dimension) === "deg" ? (slope * Math.PI) / 180 : slope;
-  if (!Number.isFinite(sensitivity) && dimension.type !== "integer") {
+  if (!Number.isFinite(sensitivity)) {
     throw new InputError([
       { pointer: "#/solveFor", detail: "has a sensitivity there that a double cannot hold." },
     ]);
@@ -178,7 +178,7 @@ function solution(
   return {
     dimension: { value, unit: unitOf(dimension), text: roundTripText(value, x, evaluator, read) },
     resistance,
-    sensitivity: Number.isFinite(sensitivity) ? sensitivity : 0,
+    sensitivity,
     exact: settled.exact,
     conductance,
     method,
@@ -192,6 +192,15 @@ function solution(
     checks,
     cautions: [...cautions, ...settled.cautions],
   };
+}
+
+/** What one more changes, or the last one did; 0 where no other whole number is admitted. */
+function nextDifference(evaluator: Evaluator, n: number): number {
+  const here = evaluator.at([n]);
+  const after = evaluator.at([n + 1]) - here;
+  if (Number.isFinite(after)) return after;
+  const before = here - evaluator.at([n - 1]);
+  return Number.isNaN(before) ? 0 : before;
 }
 
 function shown(x: number, read: ReadSizing): SizingResult["within"][number] {

@@ -70,7 +70,7 @@ export const sizingSolutionSchema = z
     resistance,
     sensitivity: z.number().meta({
       description:
-        "Derivative of the resistance by the dimension there, in ohms per `unit` of the dimension.",
+        "Derivative of the resistance by the dimension there, in ohms per `unit` of the dimension; for a whole number the change that one more makes, or that the last one made where no more are admitted.",
     }),
     exact: z.boolean().meta({
       description:

@@ -3474,7 +3474,7 @@ export type SizingSolution = {
     };
     resistance: BoundedResistance;
     /**
-     * Derivative of the resistance by the dimension there, in ohms per `unit` of the dimension.
+     * Derivative of the resistance by the dimension there, in ohms per `unit` of the dimension; for a whole number the change that one more makes, or that the last one made where no more are admitted.
      */
     sensitivity: number;
     /**
