@@ -245,4 +245,30 @@ describe("search of the catalogue", () => {
     expect(found("  ")).toHaveLength(catalogue.length);
     expect(() => found("([.*")).not.toThrow();
   });
+
+  it("finds by the symbols of a medium, by names of Greek letters, with or without a subscript's mark", () => {
+    for (const symbol of ["σ", "ρ", "rho", "conductivity"])
+      expect(found(symbol)).toHaveLength(catalogue.length);
+    const sheets = catalogue.filter(({ family }) => family === "sheet").map(({ id }) => id);
+    expect(found("R□")).toEqual(sheets);
+    expect(found("R_s")).toEqual(sheets);
+    expect(found("phi")).toEqual(found("φ"));
+    expect(found("w_1")).toEqual(found("w₁"));
+  });
+
+  it("takes no short word for a part of another", () => {
+    const rings = found("ring");
+    expect(rings).toEqual(expect.arrayContaining(["earth-ring", "torus-arc"]));
+    // Not in "tapering", "spring" nor "earthing".
+    for (const other of ["tapered-strip", "helical-winding", "earth-rod"]) expect(rings).not.toContain(other);
+    expect(found("sphere")).toContain("earth-hemisphere");
+    // A letter is a symbol before it is the start of any word.
+    const a = found("a").map((id) => shapeEntry(findShape(id) ?? catalogue[0]));
+    expect(a.length).toBeLessThan(catalogue.length / 2);
+    expect(
+      a.every(
+        ({ title, dimensions }) => /\ba/i.test(title) || dimensions.some(({ symbol }) => /^a$/i.test(symbol)),
+      ),
+    ).toBe(true);
+  });
 });
