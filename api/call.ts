@@ -120,10 +120,7 @@ export function bucketsOf(
 
 function refused(code: "too-many-requests" | "quota-exhausted", spending: Spending, wanted = 1): Refusal {
   const { bucket, remaining, resetSeconds } = spending;
-  // Both seconds are whole, rounded apart, so that a month ends at midnight.
-  const ends = new Date((Math.floor(Date.now() / 1000) + resetSeconds) * 1000)
-    .toISOString()
-    .replace(".000", "");
+  const ends = new Date(bucket.endsAt ?? Date.now() + resetSeconds * 1000).toISOString().replace(".000", "");
   const detail =
     code === "too-many-requests"
       ? `The ${bucket.quota} requests of this minute are used up; the next window starts in ${resetSeconds} s.`

@@ -24,7 +24,8 @@ const LOCAL = "http://localhost";
 /** Calls that every operation which needs a key refuses. */
 const WITHOUT_KEY = { name: "noKey", summary: "Without a key", status: 401 };
 const WRONG_KEY = { name: "unknownKey", summary: "With a key that was never issued", status: 401 };
-const UNKNOWN_KEY = `rho_k${"0".repeat(15)}_${"0".repeat(43)}`;
+/** Of the form of a key, and never issued. */
+export const UNKNOWN_KEY = `rho_k${"0".repeat(15)}_${"0".repeat(43)}`;
 
 /**
  * Makes every operation's examples on a service in memory and collects the answers, by operation. One that is not

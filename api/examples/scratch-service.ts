@@ -1,19 +1,22 @@
 import { mkdtempSync, rmSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
-import { migrateDatabase, openDatabase } from "@/db/client";
+import { type Database, migrateDatabase, openDatabase } from "@/db/client";
 import { insertTeam } from "@/db/queries/teams";
 import { SHELL } from "@/lib/activity/append";
 import { issueKey } from "@/lib/auth/manage-keys";
 import { SCOPE_NAMES } from "@/lib/auth/scope";
 import { readConfig } from "@/lib/config/environment";
-import { type Bucket, type BucketState, Limiter } from "@/lib/limits/limiter";
+import { type Bucket, type BucketState, Limiter, type Spending } from "@/lib/limits/limiter";
 import { InlineRunner } from "@/lib/jobs/worker-pool";
 import { openLog } from "@/lib/service/log";
 import { assembleService, closeService, type Service } from "@/lib/service/service";
 
 export interface Scratch {
   readonly service: Service;
+  readonly teamId: string;
+  /** The time there, ms. */
+  readonly moment: () => number;
   /** A key with every scope. */
   readonly key: string;
   /** Waits until no field solution is at work, and moves the clock on: call it before each call. */
@@ -26,6 +29,20 @@ const MOMENT = Date.UTC(2026, 2, 2, 12);
 
 /** Counts as usual, but every window looks as if it had just begun: examples do not depend on how long they take. */
 class SteadyLimiter extends Limiter {
+  constructor(
+    db: Database,
+    private readonly clock: () => number,
+  ) {
+    super(db);
+  }
+
+  override async spend(bucket: Bucket, points?: number): Promise<Spending> {
+    const spending = await super.spend(bucket, points);
+    const { endsAt, windowSeconds } = bucket;
+    const resetSeconds = endsAt === undefined ? windowSeconds : Math.ceil((endsAt - this.clock()) / 1000);
+    return { ...spending, resetSeconds };
+  }
+
   override async look(bucket: Bucket): Promise<BucketState> {
     const state = await super.look(bucket);
     return { ...state, resetSeconds: bucket.windowSeconds };
@@ -47,7 +64,7 @@ export function scratchService(origin: string): Scratch {
   // One second a call, so that lists have an order.
   let now = MOMENT;
   const service = assembleService(config, db, openLog("off"), () => now, {
-    limiter: new SteadyLimiter(db),
+    limiter: new SteadyLimiter(db, () => now),
     runner: new InlineRunner(),
   });
   const teamId = "team_0000000000000000";
@@ -70,5 +87,5 @@ export function scratchService(origin: string): Scratch {
     closeService(service);
     rmSync(folder, { recursive: true, force: true });
   };
-  return { service, key: text, settle, close };
+  return { service, teamId, moment: () => now, key: text, settle, close };
 }

@@ -1,6 +1,10 @@
 import type { Metadata } from "next";
 import { notFound } from "next/navigation";
-import { PROBLEMS, type ProblemKind } from "@/api/problem";
+import { type ShownRefusal, shownRefusal } from "@/api/examples/refusals";
+import { PROBLEMS } from "@/api/problem";
+import { registry } from "@/api/registry";
+import type { RefusalCode } from "@/lib/service/refusal";
+import { sharedService } from "@/lib/service/service";
 import { Breadcrumb } from "../../../../_ui/breadcrumb";
 import { CodeBlock } from "../../../../_ui/code-block";
 import { ProseText } from "../../../../_ui/prose-text";
@@ -9,21 +13,22 @@ interface Props {
   readonly params: Promise<{ readonly code: string }>;
 }
 
-function find(code: string): ProblemKind | undefined {
-  return Object.entries(PROBLEMS).find(([known]) => known === code)?.[1];
+function known(code: string): code is RefusalCode {
+  return Object.keys(PROBLEMS).includes(code);
 }
 
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
-  const problem = find((await params).code);
+  const { code } = await params;
+  const problem = known(code) ? PROBLEMS[code] : undefined;
   return { title: problem ? `${problem.status} ${problem.title}` : "No such problem" };
 }
 
 export default async function Problem({ params }: Props) {
   const { code } = await params;
-  const problem = find(code);
-  if (!problem) notFound();
-  const { status, title, description, remedy } = problem;
-  const example = JSON.stringify({ type: `/docs/problems/${code}`, title, status }, null, 2);
+  if (!known(code)) notFound();
+  const { status, title, description, remedy } = PROBLEMS[code];
+  const { origin } = sharedService().config;
+  const refusal = await shownRefusal(registry, origin, code);
   return (
     <>
       <Breadcrumb
@@ -50,8 +55,31 @@ export default async function Problem({ params }: Props) {
           members; <code>detail</code> says what was wrong this time, and <code>instance</code> is the id of
           the request.
         </p>
-        <CodeBlock code={example} label="Members of the problem document" />
+        {refusal ? (
+          <Refusal {...refusal} />
+        ) : (
+          <CodeBlock
+            code={JSON.stringify({ type: `${origin}/docs/problems/${code}`, title, status }, null, 2)}
+            label="Members of the problem document"
+          />
+        )}
       </article>
+    </>
+  );
+}
+
+/** A call that was really made and refused, with what comes before it. */
+function Refusal({ calls, answer }: ShownRefusal) {
+  return (
+    <>
+      {calls.map((call, index) => (
+        <CodeBlock
+          key={index}
+          code={call}
+          label={index === calls.length - 1 ? "A call that is refused" : "A call before it"}
+        />
+      ))}
+      <CodeBlock code={answer} label="Its answer" />
     </>
   );
 }
