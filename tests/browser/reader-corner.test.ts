@@ -52,6 +52,17 @@ describe("the corner of a page", () => {
     await close();
   });
 
+  it("leads to the account from the reference, which the application's script does not reach", async () => {
+    const { page, close } = await openAs("/docs/api", 360);
+    const account = page.locator("header").getByRole("link", { name: `Signed in as ${NAME}: account` });
+    expect(await account.getAttribute("href")).toBe("/console/account");
+    expect(await excess(page)).toBe(0);
+    await close();
+    const out = await visit("/docs/api", { scripts: false });
+    expect(await out.page.locator("header").getByRole("link", { name: "Sign in" }).count()).toBe(1);
+    await out.close();
+  });
+
   it("loads nothing of the menu for a signed-out reader", async () => {
     const { page, requests, close } = await visit("/docs/start", { width: 360 });
     await page.waitForLoadState("networkidle");

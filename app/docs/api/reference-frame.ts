@@ -2,8 +2,11 @@ import { KEY_PLACE } from "../../_ui/docs-key";
 import { NAVIGATION } from "../../_ui/site/navigation";
 import { THEMES, THEME_COOKIE, THEME_LOOKS, type Theme } from "../../_ui/theme";
 
-/** The site's header and the page's heading, in markup: this page is served whole, without the application's script. */
-export function referenceHeader(theme: Theme): string {
+/**
+ * The site's header and the page's heading, in markup: this page is served whole, without the application's script.
+ * `reader` is the name of who is signed in.
+ */
+export function referenceHeader(theme: Theme, reader?: string): string {
   const links = NAVIGATION.map(({ href, label }) =>
     href === "/docs/api" ? `<span aria-current="page">${label}</span>` : `<a href="${href}">${label}</a>`,
   );
@@ -18,16 +21,25 @@ export function referenceHeader(theme: Theme): string {
     <header class="frame">
       <a class="frame-home" href="/"><img src="/icon.svg" alt="" width="24" height="24">Rhoform</a>
       <nav aria-label="Site">${links.join("")}</nav>
+      ${readerCorner(reader)}
       <fieldset class="frame-theme"><legend class="frame-unseen">Colours</legend>${choices.join("")}</fieldset>
     </header>
     <div class="frame-title">
       <h1>API reference</h1>
-      <p>Every operation with its request, answers and refusals. “Test Request” sends a call to this service; give
-        the tab <a href="/docs/start#key">your key</a> for it first. For generators and other tools there is the
+      <p>Every operation with its request, answers and refusals. “Test Request” sends a call to this service with
+        the key that this tab keeps, never as whoever is signed in: give the tab <a href="/docs/start#key">your key</a>
+        first. What it sends counts and stores as any call does. For generators and other tools there is the
         <a href="/api/v1/openapi.json">OpenAPI document</a>.</p>
     </div>
     <noscript><p class="frame-note">The operations are shown by a script; without scripts, read the OpenAPI
       document.</p></noscript>`;
+}
+
+/** Who is signed in, or the way to sign in. The menu of the other pages is a script of theirs. */
+function readerCorner(reader: string | undefined): string {
+  if (reader === undefined) return `<a href="/sign-in">Sign in</a>`;
+  const name = reader.replace(/[&<>"]/g, (sign) => `&#${sign.charCodeAt(0)};`);
+  return `<a class="frame-reader" href="/console/account" aria-label="Signed in as ${name}: account">${name}</a>`;
 }
 
 /**
@@ -70,6 +82,7 @@ body { margin: 0; background: var(--paper); color: var(--ink); font-family: "Spl
 .frame a:hover { color: var(--ink); text-decoration: underline; }
 .frame a.frame-home { display: flex; align-items: center; gap: 8px; color: var(--ink); font-size: 19px;
   font-weight: 600; }
+.frame-reader { max-width: 18ch; overflow: hidden; text-overflow: ellipsis; white-space: nowrap; }
 .frame nav { display: flex; flex-wrap: wrap; gap: 4px 20px; flex: 1 1 auto; }
 .frame [aria-current] { font-weight: 600; }
 .frame-theme { display: flex; margin: 0; padding: 0; border: 1px solid var(--edge); border-radius: 2px; }
@@ -87,5 +100,5 @@ body { margin: 0; background: var(--paper); color: var(--ink); font-family: "Spl
 .frame-title a { color: var(--verdigris); text-decoration: underline; text-underline-offset: 0.2em; }
 .frame-note { padding: 0 16px; }
 @media (min-width: 768px) { .frame, .frame-title { padding-inline: 32px; } }
-@media (max-width: 767px) { .frame nav { order: 1; flex-basis: 100%; } .frame-theme { margin-inline-start: auto; } }
+@media (max-width: 767px) { .frame nav { order: 1; flex-basis: 100%; } .frame nav + a { margin-inline-start: auto; } }
 `;

@@ -3,6 +3,7 @@ import { join } from "node:path";
 import { ApiReference } from "@scalar/nextjs-api-reference";
 import type { NextRequest } from "next/server";
 import { THEME_COOKIE, parseTheme } from "../../_ui/theme";
+import { currentPerson } from "../../console/_shell/require-session";
 import { FRAME_CSS, REFERENCE_SCRIPT, referenceHeader } from "./reference-frame";
 import { referenceScript } from "./reference-script";
 
@@ -13,6 +14,7 @@ export async function GET(request: NextRequest): Promise<Response> {
   const theme = parseTheme(request.cookies.get(THEME_COOKIE)?.value);
   const nonce = request.headers.get("X-Nonce") ?? "";
   const { path } = await referenceScript();
+  const reader = await currentPerson();
   // Wider than the adapter's own type, which lags behind the script that reads it.
   const configuration = {
     url: "/api/v1/openapi.json",
@@ -41,7 +43,11 @@ export async function GET(request: NextRequest): Promise<Response> {
       "</head>",
       `<link rel="icon" href="/icon.svg" type="image/svg+xml"><style>${tokens}${FRAME_CSS}</style></head>`,
     )
-    .replace("<body>", `<body>${referenceHeader(theme)}<script>${REFERENCE_SCRIPT}</script>`)
+    // By a function: a name may hold what a replacement text would take for a sign of its own.
+    .replace(
+      "<body>",
+      () => `<body>${referenceHeader(theme, reader?.name)}<script>${REFERENCE_SCRIPT}</script>`,
+    )
     .replace("Scalar.createApiReference(", "createWithKey(Scalar.createApiReference, ")
     .replaceAll("<script", `<script nonce="${nonce}"`);
   return new Response(html, {

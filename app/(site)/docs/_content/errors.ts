@@ -1,6 +1,10 @@
 import { jsonBlock } from "./call-blocks";
 import type { DocPage } from "./page";
 
+/** What the API says of the call below; the test of the snippets holds it to that. */
+const COMPLAINT =
+  'must be a length, but "kg" measures a mass; give a length, such as 0.00025, "0.25 mm", "10 mil".';
+
 export const errors: DocPage = {
   slug: "errors",
   title: "Errors and retries",
@@ -17,17 +21,17 @@ export const errors: DocPage = {
               language: "sh",
               label: "a wrong unit",
               code: `curl -s ${origin}/api/v1/resistance \\\n  -H "Authorization: Bearer $RHOFORM_KEY" \\\n  -H "Content-Type: application/json" \\\n  -d '{ "shape": "bar", "dimensions": { "length": "1 m", "width": "5 kg", "thickness": "1 mm" }, "medium": { "resistivity": 1 } }'`,
-              prints: "#/dimensions/width",
+              prints: JSON.stringify({ pointer: "#/dimensions/width", detail: COMPLAINT }),
             },
           ],
         },
-        jsonBlock("members", {
+        jsonBlock("its answer", {
           type: `${origin}/docs/problems/invalid-input`,
           title: "The input cannot be used",
           status: 422,
-          detail: "…",
+          detail: `#/dimensions/width ${COMPLAINT}`,
           instance: "req_…",
-          errors: [{ pointer: "#/dimensions/width", detail: "…" }],
+          errors: [{ pointer: "#/dimensions/width", detail: COMPLAINT }],
         }),
         "`type` leads to a page that explains the problem; its last part is a stable code to branch on. `instance` is the id of the request, also in the `Request-Id` header: quote it to whoever runs the service. `errors` has every complaint at once, each with a JSON pointer into the body, or with the name of a query parameter.",
         "All of them are listed under [problems](/docs/problems).",
