@@ -130,6 +130,7 @@ export {
   type FieldProgress,
   type FieldSolution,
 } from "./field/solve-field";
+export { fieldSources } from "./field/sources";
 export { findScale, MOST_FIELD_SOLUTIONS } from "./field/sizing/find-scale";
 export { readFieldSizing } from "./field/sizing/read-field-sizing";
 export type { FieldBody } from "./field/sizing/scale-body";

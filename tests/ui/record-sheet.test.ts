@@ -217,6 +217,8 @@ describe("a sizing's record", () => {
     const content = sizing({ ...BEND, solveFor: "scaleX", target: "400 ohm" }, result);
     expect(content.subject).toBe("Outline: sizing");
     expect(content.picture?.kind === "svg" && content.picture.draw(LOOK)).toContain("<tspan");
+    const sources = content.sections.find(({ id }) => id === "sources")?.blocks[0];
+    expect(sources?.kind === "lines" && sources.lines[0]).toContain("Dirichlet and Thomson");
   });
 });
 
@@ -280,6 +282,46 @@ describe("a network's picture", () => {
     for (const [, x, y] of places) {
       expect(Number(x) > 0 && Number(x) < width && Number(y) > 10 && Number(y) < height).toBe(true);
     }
+  });
+});
+
+describe("a field's record", () => {
+  const result = {
+    method: "field",
+    resistance: {
+      value: 327.94,
+      unit: "ohm",
+      text: "327.94\u2009Ω",
+      lower: 327.93,
+      upper: 327.95,
+      boundsBasis: "energy",
+      proved: true,
+    },
+    operating: { temperature: 20 },
+    mesh: { triangles: 64, unknowns: 436, refinements: 1 },
+    seconds: 0.5,
+    checks: [],
+    repairs: [],
+    cautions: [],
+    assumptions: [],
+    materials: [],
+    engine: "1.0.0",
+  };
+  const sources = (outline: object) => {
+    const request = { ...BEND, outline };
+    const { sections } = contentOf({ ...recordOf(BAR), operation: "field", request, result });
+    const [block] = sections.find(({ id }) => id === "sources")?.blocks ?? [];
+    return block?.kind === "lines" ? block.lines : [];
+  };
+
+  it("names the sources of the method, and that of arcs where it has any", () => {
+    expect(sources(BEND.outline)).toEqual([
+      expect.stringMatching(/^Principles of Dirichlet and Thomson: The energy of any potential/),
+      expect.stringMatching(/by finite elements .* \(derived here\)$/),
+    ]);
+    const arc = { arcTo: [4, 1], center: [4, 0.5] };
+    const rounded = [[0, 0], [4, 0], arc, [1, 1], [1, 4], [0, 4]];
+    expect(sources({ unit: "mm", outer: rounded })[2]).toMatch(/^Lord Rayleigh/);
   });
 });
 

@@ -1,7 +1,15 @@
 /** What a record of `field` tells: an outline, its terminals and medium, the bracket of two solutions. */
 import { z } from "zod";
-import { fieldResultSchema, type FieldResult } from "@/lib/engine";
-import { bracketOf, boundedHeadline, checksSection, linesSection, operatingFacts, verdictOf } from "./answer";
+import { fieldResultSchema, fieldSources, type FieldResult } from "@/lib/engine";
+import {
+  bracketOf,
+  boundedHeadline,
+  checksSection,
+  linesSection,
+  operatingFacts,
+  sourceLines,
+  verdictOf,
+} from "./answer";
 import type { Block, Draw, Fact, Headline, Picture, Section, Told } from "./content";
 import { askedTable } from "./inputs";
 import { materialBlocks, mediumBlocks } from "./medium";
@@ -44,7 +52,11 @@ export function tellField(request: unknown, result: unknown, lookUp: LookUp, plo
     headline: headlineOf(answer.data),
     picture,
     cautions: answer.data.cautions,
-    sections: [...outlineSections(asked.data, answer.data.materials, lookUp), ...answers(answer.data)],
+    sections: [
+      ...outlineSections(asked.data, answer.data.materials, lookUp),
+      ...answers(answer.data),
+      ...linesSection("sources", "Sources", sourceLines(fieldSources(asked.data.outline))),
+    ],
     openAgain: inOutline(request),
   };
 }

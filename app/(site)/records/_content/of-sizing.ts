@@ -1,6 +1,6 @@
 /** What a record of `sizing` tells: the dimension or scale that was looked for, its solutions, and what it rests on. */
 import { z } from "zod";
-import { findShape, shapeEntry, sizingResultSchema, type SizingResult } from "@/lib/engine";
+import { fieldSources, findShape, shapeEntry, sizingResultSchema, type SizingResult } from "@/lib/engine";
 import { checksSection, linesSection, operatingFacts, sourceLines } from "./answer";
 import type { Told } from "./content";
 import { shapePicture } from "./inputs";
@@ -94,7 +94,7 @@ function ofOutline(asked: z.infer<typeof onOutline>, result: SizingResult, lookU
       },
       ...checksSection(first.checks),
       ...linesSection("assumptions", "Assumptions", result.assumptions),
-      ...linesSection("sources", "Sources", sourceLines(result.sources)),
+      ...linesSection("sources", "Sources", sourceLines([...fieldSources(outline), ...result.sources])),
     ],
   };
 }
