@@ -2,7 +2,7 @@
 
 import { QuantityInput } from "../../../_ui/quantity-input";
 import type { UnitKind } from "../../../_ui/quantity/units";
-import type { MediumForm } from "./form-context";
+import type { MediumForm, PlainForm } from "./form-context";
 import { ToleranceButton, ToleranceRow } from "./tolerance-field";
 
 interface PlainMediumProps {
@@ -52,22 +52,22 @@ export function PlainMedium({ form, prefix, kind }: PlainMediumProps) {
 }
 
 interface MediumQuantityProps {
-  readonly form: MediumForm;
+  readonly form: PlainForm;
   readonly name: string;
   readonly label: string;
-  readonly symbol: string;
+  readonly symbol?: string;
   readonly kind: UnitKind;
-  readonly bareUnit: string;
+  readonly bareUnit?: string;
   readonly foil?: boolean;
   readonly placeholder?: string;
   readonly optional?: boolean;
   readonly help?: string;
 }
 
-/** One quantity of a medium. */
+/** One quantity of a medium, with its tolerance unless it is a plain number. */
 export function MediumQuantity({ form, name, optional = false, ...field }: MediumQuantityProps) {
   const { parameters, change, errorAt } = form;
-  const toleranced = (parameters[name] ?? "") !== "";
+  const toleranced = field.kind !== "number" && (parameters[name] ?? "") !== "";
   return (
     <div>
       <QuantityInput

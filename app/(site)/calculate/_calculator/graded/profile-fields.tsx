@@ -1,14 +1,13 @@
 "use client";
 
 import { CONTROL, Field } from "../../../../_ui/field";
-import { QuantityInput } from "../../../../_ui/quantity-input";
 import { Segmented } from "../../../../_ui/segmented";
 import { Select } from "../../../../_ui/select";
 import { Toggle } from "../../../../_ui/toggle";
 import { PROFILE_FORMS, type ProfileField } from "../../_model/profile-forms";
 import { useForm } from "../form-context";
 import { MaterialPicker } from "../material-picker";
-import { ToleranceButton, ToleranceRow } from "../tolerance-field";
+import { MediumQuantity } from "../medium-quantity";
 import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
 import { LayersTable } from "./layers-table";
 import { PointsTable } from "./points-table";
@@ -97,33 +96,17 @@ function OneField({ field, name, site }: OneFieldProps) {
         temperature: "degC",
         density: "1/cm^3",
       };
-      const toleranced = field.type !== "number" && value !== "";
       return (
-        <div>
-          <QuantityInput
-            name={name}
-            label={field.label}
-            help={field.help}
-            helpOnDemand
-            kind={kinds[field.type]}
-            bareUnit={units[field.type]}
-            placeholder={field.optional ? "0" : undefined}
-            value={value}
-            error={error}
-            onChange={(text) => change({ [name]: text === "" && field.optional ? undefined : text })}
-            beside={
-              toleranced ? (
-                <ToleranceButton
-                  form={form}
-                  name={name}
-                  label={field.label}
-                  temperature={field.type === "temperature"}
-                />
-              ) : null
-            }
-          />
-          {toleranced ? <ToleranceRow form={form} name={name} label={field.label} /> : null}
-        </div>
+        <MediumQuantity
+          form={form}
+          name={name}
+          label={field.label}
+          help={field.help}
+          kind={kinds[field.type]}
+          bareUnit={units[field.type]}
+          placeholder={field.optional ? "0" : undefined}
+          optional={field.optional}
+        />
       );
     }
   }
