@@ -123,7 +123,7 @@ function timeIsUp(seconds: number): Refusal {
 
 /** Counts what was computed, and gives back what was reserved for the rest. */
 async function settleBatch(
-  { service, principal, now }: CallContext,
+  { service, principal, requestId, now }: CallContext,
   { operation, reserved }: BatchPlan,
   cost: number,
 ): Promise<void> {
@@ -137,6 +137,7 @@ async function settleBatch(
         operation,
         status: 200,
         computations: cost,
+        call: { requestId, since: now },
       }),
     );
   }

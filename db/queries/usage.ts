@@ -199,16 +199,28 @@ export function daysOfKey(db: Database, keyId: string, since: number): DaySum[] 
     .map((row) => ({ ...row, day: new Date(row.day * DAY_MS).toISOString().slice(0, 10) }));
 }
 
-/** Adds computations that end after their call was counted: to the sums, as no call of its own. */
+/** Adds computations that end after their call was counted: to the sums, and to the call where it is named. */
 export function addComputations(
   db: Database,
   at: number,
-  { keyId, teamId, operation, status, computations }: LateComputations,
+  { keyId, teamId, operation, status, computations, call }: LateComputations,
 ): void {
   const hour = Math.floor(at / HOUR_MS);
   const day = Math.floor(at / DAY_MS);
   const more = { computations: sql`computations + ${computations}` };
   const none = { requests: 0, refused: 0, failed: 0, latencyUs: 0, computations };
+  if (call) {
+    db.update(usageEvents)
+      .set(more)
+      .where(
+        and(
+          eq(usageEvents.keyId, keyId),
+          gte(usageEvents.at, call.since),
+          eq(usageEvents.requestId, call.requestId),
+        ),
+      )
+      .run();
+  }
   db.insert(usageHours)
     .values({ hour, keyId, teamId, ...none })
     .onConflictDoUpdate({ target: [usageHours.keyId, usageHours.hour], set: more })
@@ -232,11 +244,13 @@ export function addComputations(
     .run();
 }
 
-/** Computations of a job, at the moment it ended. */
+/** Computations of a job or of a batch, at the moment it ended. */
 export interface LateComputations {
   readonly keyId: string;
   readonly teamId: string;
   readonly operation: string;
   readonly status: number;
   readonly computations: number;
+  /** The call that they belong to, which came no earlier than `since` (Unix ms); a job outlives its call. */
+  readonly call?: { readonly requestId: string; readonly since: number };
 }

@@ -201,6 +201,18 @@ test("lists search, order, page and export", async () => {
     expect([wrong, (await send("GET", wrong)).status]).toEqual([wrong, 422]);
 });
 
+test("what calls divide into names those that have no shape, in the page's rows and in the file", async () => {
+  const { id, key } = await issue("Shares");
+  const batch = await call(server, "post", "/resistance/batch", { key, body: { items: [SLEEVE] } });
+  expect(batch.status).toBe(200);
+  expect((await compute(key)).status).toBe(200);
+  const { rows } = await answer<Page>("GET", `usage/shares?caller=${id}&by=shape`);
+  expect(rows.map(({ label }) => label).sort()).toEqual(["cylindrical-shell", "no shape"]);
+  const file = await (await send("GET", `usage/shares?caller=${id}&by=shape&csv=1`)).text();
+  expect(file).toMatch(/^shape,requests,computations\r?\n/);
+  expect(file).toMatch(/^no shape,1,1\r?$/m);
+});
+
 test("the overview sums what the team did", async () => {
   const overview = await answer<{ today: { requests: number }; errors: Page; slowest: unknown[] }>(
     "GET",

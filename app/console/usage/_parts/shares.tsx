@@ -91,7 +91,5 @@ export function Shares({ span, teams }: { readonly span: Span; readonly teams: r
 
 function labelOf(by: By, label: string): string {
   if (by === "client") return clientText(label);
-  if (by === "operation") return operationText(label);
-  if (label === "") return "no shape";
-  return label;
+  return by === "operation" ? operationText(label) : label;
 }

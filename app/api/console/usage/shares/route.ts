@@ -6,6 +6,9 @@ import { consoleRoute } from "../../_server/console-route";
 import { csvAnswer } from "../../_server/list-query";
 import { daysOf, isoDays, scopeOf, usageQuery } from "../../_server/usage-scope";
 
+/** Calls that have no such name: batches, networks and outlines have no shape. */
+const UNNAMED = { operation: "", shape: "no shape", status: "", client: "", team: "signed out" } as const;
+
 /** What the calls of some days divide into: operation, shape, status, team or client. */
 export const GET = consoleRoute({
   action: "usage.view",
@@ -19,11 +22,8 @@ export const GET = consoleRoute({
     const days = daysOf(query, now);
     const { rows, sampled } = sharesOf(db, scopeOf(call, query), days, query.by);
     const names = new Map(listTeams(db).map(({ id, name }) => [id, name]));
-    const named = rows.map((row) => ({
-      ...row,
-      label:
-        query.by === "team" ? (names.get(row.name) ?? (row.name === "" ? "signed out" : row.name)) : row.name,
-    }));
+    const labelOf = (name: string): string => names.get(name) ?? (name === "" ? UNNAMED[query.by] : name);
+    const named = rows.map((row) => ({ ...row, label: labelOf(row.name) }));
     if (!query.csv) return { by: query.by, rows: named, sampled };
     const { from, to } = isoDays(days);
     return csvAnswer(
