@@ -147,7 +147,7 @@ describe("a strip", () => {
     expect(raster.origin[0]).toBeCloseTo(10.05, 9);
     expect(raster.origin[1]).toBeCloseTo(5.05, 9);
     for (const value of raster.density) expect(value).toBeCloseTo(5, 8);
-    const peak = densityPeak(map);
+    const peak = densityPeak(map, null);
     expect(peak.unbounded).toBe(false);
     expect(peak.density).toBeCloseTo(5, 8);
     expect(peak.distanceM).toBe(0);
@@ -158,7 +158,7 @@ describe("a bend", () => {
   const { map, resistance } = solve(bend, bendEnds);
 
   it("has an unbounded density at the inner corner and says at what distance it was read", () => {
-    const peak = densityPeak(map);
+    const peak = densityPeak(map, null);
     expect(peak.unbounded).toBe(true);
     expect(peak.position[0]).toBeCloseTo(1, 9);
     expect(peak.position[1]).toBeCloseTo(1, 9);

@@ -6,6 +6,7 @@
  * found.
  */
 
+import { chordDensities } from "./chord-density";
 import type { FieldMap } from "./field-map";
 import { FieldSampler } from "./sampler";
 
@@ -17,6 +18,8 @@ export interface DensityPeak {
   /** A/m (sheet) or A/m² (axisymmetric) for one volt: at `distanceM` from the position, or at it. */
   readonly density: number;
   readonly fieldVperM: number;
+  /** How far off the density of an arc may be because it was read at chords, relatively; 0 elsewhere. */
+  readonly spread: number;
   /** Distance in metres at which an unbounded peak was read; 0 for a bounded one. */
   readonly distanceM: number;
 }
@@ -27,16 +30,19 @@ const WEAKEST = 1e-3;
 /** Distance from a corner as a part of the outline's extent, unless other corners are near. */
 const DISTANCE = 0.005;
 
-export function densityPeak(map: FieldMap): DensityPeak {
+/** @param conductance Of the whole conductor, where it has but one: arcs are then read by the means of their chords. */
+export function densityPeak(map: FieldMap, conductance: number | null): DensityPeak {
   const sampler = new FieldSampler(map);
   const unbounded: number[] = [];
   map.singularVertex.forEach((v, k) => {
     if (map.singularExponent[k] < 1 - WEAKEST) unbounded.push(v);
   });
-  return unbounded.length > 0 ? worstCorner(map, sampler, unbounded) : greatest(map, sampler);
+  return (
+    (unbounded.length > 0 && worstCorner(map, sampler, unbounded)) || greatest(map, sampler, conductance)
+  );
 }
 
-function worstCorner(map: FieldMap, sampler: FieldSampler, corners: readonly number[]): DensityPeak {
+function worstCorner(map: FieldMap, sampler: FieldSampler, corners: readonly number[]): DensityPeak | null {
   const { xy } = map;
   const distance = commonDistance(map, corners);
   let best: DensityPeak | null = null;
@@ -47,10 +53,11 @@ function worstCorner(map: FieldMap, sampler: FieldSampler, corners: readonly num
       unbounded: true,
       position: inOutline(map, xy[2 * v], xy[2 * v + 1]),
       distanceM: distance * map.unitM,
+      spread: 0,
       ...found,
     };
   }
-  return best ?? greatest(map, sampler);
+  return best;
 }
 
 /** One distance for all corners: a part of the extent, but no more than a quarter of the way to the next corner. */
@@ -91,10 +98,10 @@ function aroundCorner(
 }
 
 /**
- * The greatest density over all vertices and middles of the triangles. Vertices of chords have one of their own; there
- * the middles of the sides stand for the arc.
+ * The greatest density over all vertices and middles of the triangles. Vertices of chords have one of their own: at them
+ * the means of the chords stand for the arc, or the middles of the sides where the medium varies.
  */
-function greatest(map: FieldMap, sampler: FieldSampler): DensityPeak {
+function greatest(map: FieldMap, sampler: FieldSampler, conductance: number | null): DensityPeak {
   const { xy, triangles } = map;
   const ofChords = new Set(map.chordVertex);
   let best: DensityPeak = {
@@ -103,10 +110,19 @@ function greatest(map: FieldMap, sampler: FieldSampler): DensityPeak {
     density: 0,
     fieldVperM: 0,
     distanceM: 0,
+    spread: 0,
   };
+  for (const { x, y, density, fieldVperM, spread } of conductance === null
+    ? []
+    : chordDensities(map, conductance)) {
+    if (density <= best.density) continue;
+    best = { unbounded: false, position: inOutline(map, x, y), density, fieldVperM, distanceM: 0, spread };
+  }
   for (let t = 0; t < triangles.length / 3; t++) {
     const [a, b, c] = [2 * triangles[3 * t], 2 * triangles[3 * t + 1], 2 * triangles[3 * t + 2]];
     const corners = [a, b, c].filter((v) => !ofChords.has(v / 2));
+    // In a uniform medium the greatest density is on the boundary, and the chords have theirs.
+    if (corners.length < 3 && conductance !== null) continue;
     const points: [number, number][] = corners.map((v) => [xy[v], xy[v + 1]]);
     if (corners.length < 3) {
       for (const [p, q] of [
@@ -129,6 +145,7 @@ function greatest(map: FieldMap, sampler: FieldSampler): DensityPeak {
         density,
         fieldVperM: Math.hypot(...values.field),
         distanceM: 0,
+        spread: 0,
       };
     }
   }

@@ -152,17 +152,18 @@ function peakOf(
   voltage: number,
   per: "operating-point" | "volt",
 ): FieldResult["peak"] {
-  const { unbounded, position, density, fieldVperM, distanceM } = densityPeak(map);
+  const [only] = problem.conductance;
+  const linked = problem.conductance.length === 1 && typeof only === "number" ? only : null;
+  const { unbounded, position, density, fieldVperM, distanceM, spread } = densityPeak(map, linked);
   const { axisymmetric, frame } = problem.outline;
   const unit = axisymmetric ? "A/m^2" : "A/m";
   const [x, y] = position.map((coordinate) => Number(coordinate.toPrecision(9)));
   const place = `(${x}, ${y}) ${request.outline?.unit ?? frame.unit}`;
   // The field comes from the potential, the density from the stream function. Where one conductance links them, both
   // tell the middle of the two, to the digits in which they agree.
-  const [only] = problem.conductance;
-  const linked = problem.conductance.length === 1 && typeof only === "number" ? only : null;
   const middle = linked === null ? null : (fieldVperM + density / linked) / 2;
-  const apart = linked === null || middle === null ? null : Math.abs(density / linked / middle - 1);
+  const apart =
+    linked === null || middle === null ? null : Math.max(spread, Math.abs(density / linked / middle - 1));
   const quantity = <Unit extends "A/m" | "A/m^2" | "V/m">(atOneVolt: number, of: Unit) => {
     const value = atOneVolt * voltage;
     const digits =
