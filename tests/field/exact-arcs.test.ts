@@ -48,6 +48,38 @@ describe("arcs", () => {
     }
   });
 
+  it("keeps a close bracket where a cap leaves no unknowns between the chords that were asked for", () => {
+    const circle = (r: number) =>
+      [-r, r].map((x) => ({ arcTo: [x, 0] as [number, number], center: [0, 0] as [number, number] }));
+    const outline = accept({ unit: "mm", outer: circle(20), holes: [circle(5)] }, [
+      {
+        name: "in",
+        parts: [
+          { ring: 1, edge: 0 },
+          { ring: 1, edge: 1 },
+        ],
+      },
+      {
+        name: "out",
+        parts: [
+          { ring: 0, edge: 0 },
+          { ring: 0, edge: 1 },
+        ],
+      },
+    ]);
+    const { status, limit, resistance } = solveField(
+      { outline, conductance: [1] },
+      { accuracy: 1e-6, maximumUnknowns: 20_000 },
+    );
+    if (!resistance) throw new Error("no resistance");
+    // ln(b/a)/2π of a ring between its two circles.
+    const exact = Math.log(4) / (2 * Math.PI);
+    expect([status, limit]).toEqual(["limited", "unknowns"]);
+    expect(resistance.lower).toBeLessThanOrEqual(exact);
+    expect(resistance.upper).toBeGreaterThanOrEqual(exact);
+    expect((resistance.upper - resistance.lower) / exact).toBeLessThan(1e-4);
+  });
+
   it("G-sep-polar: graded, radial flow", () => {
     const { value, inputs } = reference("G-sep-polar-1");
     const { a, w, phi, n, k } = inputs;

@@ -37,11 +37,17 @@ const SHARE_OF_SOLUTION = 0.55;
 /** Attempts to find chords that are fine enough. */
 const ATTEMPTS = 4;
 
+/** Unknowns a triangle that leave room for orders up to four, where chords have to be made coarser for a cap. */
+const UNKNOWNS_A_TRIANGLE = 6;
+
 export function solveCurved(run: CurvedRun): AdaptiveResult {
   const best = new CurvedBounds();
   let chords = TRIAL_CHORDS;
   let accuracy = Math.max(run.accuracy * SHARE_OF_SOLUTION, TRIAL_ACCURACY);
   let last: AdaptiveResult | null = null;
+  /** What chords add to the bracket, by their sagitta. */
+  let effect = 0;
+  let coarser = false;
   for (let attempt = 0; ; attempt++) {
     const both = solveRoles(run, chords, accuracy, best, last);
     // Stopped on the way: the bracket of the attempt before stands.
@@ -50,16 +56,29 @@ export function solveCurved(run: CurvedRun): AdaptiveResult {
     const bounds = best.combine(low, high);
     const larger = low.unknowns > high.unknowns ? low : high;
     const { unknowns, triangles, refinements } = larger;
-    const result = { ...high, bounds, unknowns, triangles, refinements };
+    const narrower: ReachedBounds = last && widthOf(last.bounds) < widthOf(bounds) ? last.bounds : bounds;
+    const result: AdaptiveResult = { ...high, bounds: narrower, unknowns, triangles, refinements };
     last = result;
     if (widthOf(bounds) <= run.accuracy) return { ...result, status: "done", limit: "none" };
     const limited = low.status === "limited" ? low : high;
+    if (coarser) return { ...result, status: "limited", limit: "unknowns" };
+    if (limited.limit === "unknowns" && effect > 0) {
+      // So fine chords leave no unknowns for the field between them; triangles go with one over the root of the sagitta.
+      const roomy = chords * ((UNKNOWNS_A_TRIANGLE * triangles) / run.limits.unknowns) ** 2;
+      if (roomy > 2 * chords && !run.limits.shouldStop()) {
+        coarser = true;
+        chords = Math.min(roomy, TRIAL_CHORDS);
+        accuracy = SHARE_OF_SOLUTION * Math.max(run.accuracy, effect * chords);
+        continue;
+      }
+    }
     if (limited.status === "limited") return { ...result, status: "limited", limit: limited.limit };
     if (run.limits.shouldStop()) return { ...result, status: "limited", limit: "stopped" };
     if (attempt === ATTEMPTS || chords <= FINEST_CHORDS)
       return { ...result, status: "limited", limit: "rounding" };
     // What the chords themselves do, as well as the brackets tell; it is proportional to their sagitta.
     const own = relativeDistance(low.bounds.resistance, high.bounds.resistance);
+    effect = own / chords;
     accuracy = run.accuracy * SHARE_OF_SOLUTION;
     chords = Math.max(FINEST_CHORDS, chords * Math.min(1, (SHARE_OF_CHORDS * run.accuracy) / own));
   }
