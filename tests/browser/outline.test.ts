@@ -155,6 +155,14 @@ describe("an outline", () => {
     await page.getByRole("textbox", { name: "JSON" }).fill('{"outer": [[0, 0], [1]]}');
     await page.getByRole("button", { name: "Take over" }).click();
     await page.getByText("#/outer/1", { exact: true }).waitFor();
+    // A file that the API would not take is refused unread, and what stands in the field stays.
+    await page.locator("input[type=file]").setInputFiles({
+      name: "huge.json",
+      mimeType: "application/json",
+      buffer: Buffer.alloc(10_100_000, " "),
+    });
+    await page.getByText("has 10.1 MB; at most 10 MB are taken.").waitFor();
+    expect(await page.getByRole("textbox", { name: "JSON" }).inputValue()).toContain('"outer"');
     const crossing = {
       outline: {
         unit: "mm",

@@ -218,6 +218,42 @@ describe("the network", () => {
     await close();
   });
 
+  it("holds the answer against a requirement, and waits out a limit and a lost connection", async () => {
+    const { page, close } = await bench.open("/network");
+    const verdict = page.getByTestId("verdict");
+    await page.getByLabel("At most").fill("50 uohm");
+    await verdict.getByText("Requirement met.").waitFor();
+    expect(await page.locator("pre").first().textContent()).toContain('"requirement": { "max": "50 uohm" }');
+    await page.getByLabel("At least").fill("60 uohm");
+    await page.locator("input[aria-invalid=true]").first().waitFor();
+    await page.getByLabel("At least").fill("48 uohm");
+    await verdict.getByText("Requirement not met.").waitFor();
+    await page.waitForFunction(() => decodeURIComponent(location.hash).includes('"min":"48 uohm"'));
+
+    let failures = 0;
+    await page.route("**/api/v1/networks", async (route) => {
+      if (failures++ > 1) return route.continue();
+      if (failures === 2) return route.abort();
+      await route.fulfill({
+        status: 429,
+        headers: { "Retry-After": "1", "Content-Type": "application/problem+json" },
+        body: JSON.stringify({ title: "Too many requests", status: 429 }),
+      });
+    });
+    await page.getByRole("textbox", { name: "Resistance of element 3" }).fill("16 uohm");
+    await page.getByText("A short pause").waitFor();
+    // The numbers of before stay, faint.
+    expect(await page.locator(RESISTANCE).textContent()).toMatch(/^47\.037/);
+    await page.getByText("No connection").waitFor();
+    await page.waitForFunction(
+      (selector) => document.querySelector(selector)?.textContent?.startsWith("57.037"),
+      RESISTANCE,
+    );
+    await verdict.getByText("Requirement met.").waitFor({ state: "detached" });
+    expect(await page.getByText("No connection").count()).toBe(0);
+    await close();
+  });
+
   it("evaluates tolerances of elements, tells their budget, and keeps them in the link and the JSON", async () => {
     const { page, close } = await bench.open("/network");
     const range = page.getByTestId("stray-range");

@@ -69,6 +69,7 @@ describe("a network as JSON", () => {
       ],
       ports: ["in", "out"],
       operating: { temperature: "65 degC", current: "630 A" },
+      requirement: { min: "1 uohm", max: "50 uohm" },
     };
     const reading = readBodyText(JSON.stringify(body));
     if (!reading.ok) throw new Error(JSON.stringify(reading.complaints));
@@ -80,12 +81,15 @@ describe("a network as JSON", () => {
   test.each([
     ["{", "#", "is no JSON"],
     ["5", "#", "must be an object"],
-    ['{"elements":[],"ports":["in"]}', "#/ports", "must name two nodes"],
+    ['{"elements":[],"ports":["a","b"],"requirement":5}', "#/requirement", "must be an object"],
     [
-      '{"elements":[],"ports":["a","b"],"requirement":{"max":1}}',
-      "#/requirement",
-      "has no field on this page",
+      '{"elements":[],"ports":["a","b"],"requirement":{"max":true}}',
+      "#/requirement/max",
+      "a number or a text",
     ],
+    ['{"elements":[],"ports":["a","b"],"requirement":{"most":1}}', "#/requirement/most", "has no field"],
+    ['{"elements":[],"ports":["in"]}', "#/ports", "must name two nodes"],
+    ['{"elements":[],"ports":["a","b"],"include":["checks"]}', "#/include", "has no field on this page"],
     [
       '{"elements":[{"name":"a","between":["a","b"]}],"ports":["a","b"]}',
       "#/elements/0",
@@ -130,6 +134,7 @@ describe("tolerances of a network", () => {
     expect(kept && networkBody(kept, new Map())).toEqual(body);
     // An address without tolerances is as it always was.
     expect(toText(START)).not.toContain("uncertainty");
+    expect(toText(START)).not.toContain("requirement");
   });
 
   test("a bare one is in ohms in the body and in the value's unit on the page", () => {
@@ -205,6 +210,8 @@ describe("tolerances of a network", () => {
       { pointer: "#/uncertainty/method", detail: "must be known." },
       { pointer: "#/ports/0", detail: "is no node." },
       { pointer: "#/operating/current", detail: "must be a current." },
+      { pointer: "#/requirement/min", detail: "must be a resistance." },
+      { pointer: "#/requirement", detail: "must have min below max." },
     ];
     const sorted = sortComplaints({ title: "Wrong", errors }, [11, 12, 13]);
     expect(sorted.complaints.get(12)).toEqual({ tolerance: { tolerance: "Must be smaller." } });
@@ -215,6 +222,10 @@ describe("tolerances of a network", () => {
     expect(sorted.complaints.get(11)).toEqual({ value: "width must be a length." });
     expect(sorted.uncertainty).toBe("Must be known.");
     expect(sorted.ports).toEqual(["is no node."]);
+    expect([...sorted.requirement]).toEqual([
+      ["min", "Must be a resistance."],
+      ["max", "Must have min below max."],
+    ]);
     expect(sorted.rest?.errors).toEqual([errors[6]]);
   });
 

@@ -213,6 +213,21 @@ describe("bodies", () => {
     expect(reading.ok && fieldBody(reading.sketch).terminals).toEqual(body.terminals);
   });
 
+  it("come from the answer to a stored outline as well", () => {
+    const outline = {
+      unit: "mm",
+      outer: [
+        [0, 0],
+        [4, 0],
+        [0, 4],
+      ],
+      holes: [],
+      symmetry: "plan",
+    };
+    const stored = { id: "out_1", name: "", createdAt: "", outline, terminals: [], regions: [], repairs: [] };
+    expect(readBody(stored, bend)).toMatchObject({ ok: true, sketch: { unit: "mm" } });
+  });
+
   it.each([
     ["{", "#"],
     ["[]", "#"],
@@ -222,6 +237,16 @@ describe("bodies", () => {
     ['{"unit":"parsec","outer":[]}', "#/unit"],
     ['{"outer":[],"terminals":[{"name":"a","parts":[{"ring":0}]}]}', "#/terminals/0/parts/0/edge"],
     ['{"outline":{"outer":[]},"medium":{"colour":1}}', "#/medium/colour"],
+    ['{"outer":[],"hole":[[[1,1],[2,1],[2,2]]]}', "#/hole"],
+    ['{"outline":{"outer":[],"colour":"red"}}', "#/outline/colour"],
+    ['{"outline":{"outer":[]},"accurracy":1e-6}', "#/accurracy"],
+    ['{"outline":{"outer":[]},"regions":[{"name":"a","ring":[]}]}', "#/regions"],
+    ['{"outer":[{"arcTo":[1,1],"center":[0,0],"cw":true}]}', "#/outer/0/cw"],
+    ['{"outer":[],"terminals":[{"name":"a","edges":[1]}]}', "#/terminals/0/edges"],
+    [
+      '{"outer":[],"terminals":[{"name":"a","parts":[{"ring":0,"edge":1,"until":0.5}]}]}',
+      "#/terminals/0/parts/0/until",
+    ],
     ['{"outline":{"outer":[]},"medium":{"resistivity":1,"sheetResistance":2}}', "#/medium"],
   ])("complain at the place: %s", (text, pointer) => {
     const reading = readBodyText(text, EMPTY_SKETCH);

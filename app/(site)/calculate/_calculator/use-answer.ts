@@ -85,7 +85,8 @@ export function useAnswer(body: string | null, first: FirstAnswer | null): Answe
   };
 }
 
-function waitBeforeRetry(failure: Error, retryCount: number): number | null {
+/** Seconds until a call that failed may be made again by itself; null if it would fail again or that is far off. */
+export function waitBeforeRetry(failure: Error, retryCount: number): number | null {
   const backOff = Math.min(LONGEST_WAIT_S, 2 ** Math.min(retryCount, 5));
   if (!(failure instanceof ApiProblem)) return backOff;
   if (failure.status === 429) {

@@ -13,7 +13,7 @@ export function networkBody(
   network: Network,
   requests: ReadonlyMap<string, ShapeRequest>,
 ): Readonly<Record<string, unknown>> | null {
-  const { elements, ports, drive, temperature } = network;
+  const { elements, ports, drive, temperature, requirement } = network;
   const list = elements.map(({ name, from, to, value }) => {
     const ends = { name: name.trim(), between: [from.trim(), to.trim()] };
     if (value.kind === "resistance") {
@@ -28,10 +28,14 @@ export function networkBody(
     ...(temperature.trim() === "" ? {} : { temperature: spelled(temperature) }),
     ...(drive.kind === "none" || drive.text.trim() === "" ? {} : { [drive.kind]: spelled(drive.text) }),
   };
+  const limits = Object.entries(requirement).flatMap(([name, text]) =>
+    text.trim() === "" ? [] : [[name, spelled(text)]],
+  );
   return {
     elements: list,
     ports: ports.map((name) => name.trim()),
     ...(Object.keys(operating).length > 0 ? { operating } : {}),
+    ...(limits.length > 0 ? { requirement: Object.fromEntries(limits) } : {}),
     ...uncertaintyMember(network),
   };
 }

@@ -16,6 +16,8 @@ export interface SortedComplaints {
   readonly complaints: ReadonlyMap<number, Complaints>;
   readonly ports: readonly string[];
   readonly uncertainty: string | undefined;
+  /** By the limit's name. */
+  readonly requirement: ReadonlyMap<string, string>;
   /** What no field stands for. */
   readonly rest: ProblemShown | null;
 }
@@ -28,13 +30,17 @@ export function sortComplaints(problem: ProblemShown | null, ids: readonly numbe
   const complaints = new Map<number, Complaints>();
   const ports: string[] = [];
   const uncertainty: string[] = [];
+  const requirement = new Map<string, string>();
   const rest: { pointer?: string; detail: string }[] = [];
   for (const { pointer = "#", detail } of problem?.errors ?? []) {
     const [, index, member, path = ""] = ELEMENT.exec(pointer) ?? [];
     if (index === undefined) {
       if (pointer.startsWith("#/ports")) ports.push(detail);
       else if (pointer.startsWith("#/uncertainty")) uncertainty.push(sentence(detail));
-      else rest.push({ pointer, detail });
+      else if (pointer.startsWith("#/requirement")) {
+        // What concerns both limits stands at the second.
+        requirement.set(pointer.split("/")[2] ?? "max", sentence(detail));
+      } else rest.push({ pointer, detail });
       continue;
     }
     const id = ids[Number(index)];
@@ -58,6 +64,7 @@ export function sortComplaints(problem: ProblemShown | null, ids: readonly numbe
     complaints,
     ports,
     uncertainty: first,
+    requirement,
     rest: restOf(problem, rest),
   };
 }

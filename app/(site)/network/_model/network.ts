@@ -27,9 +27,15 @@ export interface Network {
   readonly ports: readonly [string, string];
   readonly drive: { readonly kind: DriveKind; readonly text: string };
   readonly temperature: string;
+  /** Limits that the resistance is held against; "" where there is none. */
+  readonly requirement: Requirement;
   /** How the tolerances are evaluated; "" where they are not. */
   readonly uncertainty: UncertaintyMethod | "";
 }
+
+export type Requirement = Readonly<Record<"min" | "max", string>>;
+
+export const NO_REQUIREMENT: Requirement = { min: "", max: "" };
 
 export const UNCERTAINTY_METHODS = ["propagation", "worst-case"] as const;
 export type UncertaintyMethod = (typeof UNCERTAINTY_METHODS)[number];
@@ -68,6 +74,7 @@ export const START: Network = {
   ports: ["in", "out"],
   drive: { kind: "current", text: "630 A" },
   temperature: "65 degC",
+  requirement: NO_REQUIREMENT,
   uncertainty: "",
 };
 
@@ -90,7 +97,8 @@ export function addressOf(text: string): string | null {
 }
 
 /** Behind the "#" of the address and in this tab's store: JSON without the row ids. */
-export function toText({ elements, ports, drive, temperature, uncertainty }: Network): string {
+export function toText(network: Network): string {
+  const { elements, ports, drive, temperature, requirement, uncertainty } = network;
   const rows = elements.map(({ name, from, to, value }) => {
     const tolerance = value.kind === "resistance" && value.tolerance;
     const row = [name, from, to, valueText(value)];
@@ -101,6 +109,7 @@ export function toText({ elements, ports, drive, temperature, uncertainty }: Net
     ports,
     drive,
     temperature,
+    ...(requirement.min === "" && requirement.max === "" ? {} : { requirement }),
     ...(uncertainty === "" ? {} : { uncertainty }),
   });
 }
@@ -108,15 +117,17 @@ export function toText({ elements, ports, drive, temperature, uncertainty }: Net
 /** The inverse; null where the text is none of ours. */
 export function fromText(text: string): Network | null {
   try {
-    const { elements, ports, drive, temperature, uncertainty } = JSON.parse(text) as {
+    const { elements, ports, drive, temperature, requirement, uncertainty } = JSON.parse(text) as {
       elements: string[][];
       ports: [string, string];
       drive: Network["drive"];
       temperature: string;
+      requirement?: Partial<Requirement>;
       uncertainty?: unknown;
     };
     const kinds: readonly DriveKind[] = ["none", "current", "voltage", "power"];
-    const texts = [...elements.flat(), ...ports, drive.text, temperature];
+    const { min, max } = { ...NO_REQUIREMENT, ...requirement };
+    const texts = [...elements.flat(), ...ports, drive.text, temperature, min, max];
     if (ports.length !== 2 || !kinds.includes(drive.kind)) return null;
     if (texts.some((entry) => typeof entry !== "string") || elements.length > 10_000) return null;
     return {
@@ -126,6 +137,7 @@ export function fromText(text: string): Network | null {
       ports: [ports[0], ports[1]],
       drive: { kind: drive.kind, text: drive.text },
       temperature,
+      requirement: { min, max },
       uncertainty: methodOf(uncertainty),
     };
   } catch {

@@ -6,6 +6,7 @@ import {
   methodOf,
   type Network,
   newElement,
+  NO_REQUIREMENT,
   recordOf,
   UNCERTAINTY_METHODS,
   type Value,
@@ -40,7 +41,7 @@ function readBody(body: unknown): BodyReading {
   if (!record) return refused([{ pointer: "#", detail: "must be an object with elements and ports." }]);
   const complaints: BodyComplaint[] = [];
   const complain = (pointer: string, detail: string) => complaints.push({ pointer, detail });
-  unknown(record, ["elements", "ports", "operating", "uncertainty", "record"], "#", complain);
+  unknown(record, ["elements", "ports", "operating", "requirement", "uncertainty", "record"], "#", complain);
   const list = Array.isArray(record.elements) ? record.elements : null;
   if (!list) complain("#/elements", "must be an array of elements.");
   else if (list.length > MOST_ELEMENTS) {
@@ -51,29 +52,45 @@ function readBody(body: unknown): BodyReading {
     .flatMap((entry, k): Element[] => readElement(entry, `#/elements/${k}`, complain));
   const ports = pairOf(record.ports);
   if (!ports) complain("#/ports", "must name two nodes.");
-  const operating = record.operating === undefined ? {} : recordOf(record.operating);
-  if (!operating) complain("#/operating", "must be an object.");
-  else unknown(operating, [...DRIVES, "temperature"], "#/operating", complain);
-  const given = DRIVES.filter((kind) => operating?.[kind] !== undefined);
+  const operating = quantities(record.operating, [...DRIVES, "temperature"], "#/operating", complain);
+  const given = DRIVES.filter((kind) => operating[kind] !== undefined);
   if (given.length > 1) complain("#/operating", `has ${given.join(" and ")}; at most one is taken.`);
-  const text = (name: string): string => {
-    const value = operating?.[name];
-    if (typeof value === "string" || typeof value === "number") return String(value);
-    if (value !== undefined) complain(`#/operating/${name}`, QUANTITY);
-    return "";
-  };
-  const [drive = "none"] = given;
-  const driveText = drive === "none" ? "" : text(drive);
-  const temperature = text("temperature");
+  const [kind = "none"] = given;
+  const drive = { kind, text: operating[kind] ?? "" };
+  const { temperature = "" } = operating;
+  const limits = quantities(record.requirement, ["min", "max"], "#/requirement", complain);
+  const requirement = { ...NO_REQUIREMENT, ...limits };
   const uncertainty = readMethod(record.uncertainty, complain);
   if (complaints.length > 0 || !ports) return refused(complaints);
   return {
     ok: true,
-    network: { elements, ports, drive: { kind: drive, text: driveText }, temperature, uncertainty },
+    network: { elements, ports, drive, temperature, requirement, uncertainty },
   };
 }
 
 type Complain = (pointer: string, detail: string) => void;
+
+/** A group of quantities as the texts that their fields show. */
+function quantities(
+  given: unknown,
+  known: readonly string[],
+  pointer: string,
+  complain: Complain,
+): Readonly<Record<string, string | undefined>> {
+  const group = given === undefined ? {} : recordOf(given);
+  if (!group) {
+    complain(pointer, "must be an object.");
+    return {};
+  }
+  unknown(group, known, pointer, complain);
+  const texts: Record<string, string> = {};
+  for (const name of known) {
+    const value = group[name];
+    if (isQuantity(value)) texts[name] = String(value);
+    else if (value !== undefined) complain(`${pointer}/${name}`, QUANTITY);
+  }
+  return texts;
+}
 
 function readMethod(given: unknown, complain: Complain): Network["uncertainty"] {
   if (given === undefined) return "";

@@ -3,6 +3,7 @@
 import { CONTROL, Field } from "../../../_ui/field";
 import { QuantityInput } from "../../../_ui/quantity-input";
 import { Select } from "../../../_ui/select";
+import { RequirementFields } from "../../calculate/_calculator/requirement-fields";
 import { UncertaintyFields } from "../../calculate/_calculator/uncertainty-fields";
 import { type DriveKind, methodOf, type Network, UNCERTAINTY_METHODS } from "../_model/network";
 
@@ -12,6 +13,7 @@ interface ConditionFieldsProps {
   readonly names: readonly string[];
   readonly complaints: readonly string[];
   readonly uncertaintyComplaint: string | undefined;
+  readonly requirementComplaints: ReadonlyMap<string, string>;
   readonly onChange: (change: (network: Network) => Network) => void;
 }
 
@@ -25,8 +27,8 @@ const START_TEXT = { none: "", current: "1 A", voltage: "1 V", power: "1 W" } as
 
 /** Between which nodes, under what, and how warm. */
 export function ConditionFields(props: ConditionFieldsProps) {
-  const { network, names, complaints, uncertaintyComplaint, onChange } = props;
-  const { ports, drive, temperature, uncertainty } = network;
+  const { network, names, complaints, uncertaintyComplaint, requirementComplaints, onChange } = props;
+  const { ports, drive, temperature, requirement, uncertainty } = network;
   const port = (place: 0 | 1, label: string) => (
     <Field label={label} error={place === 0 ? undefined : complaints.join(" ") || undefined}>
       {(control) => (
@@ -83,7 +85,18 @@ export function ConditionFields(props: ConditionFieldsProps) {
       <p className="self-center text-small text-ink-soft">
         {names.length} nodes, {network.elements.length} elements
       </p>
-      <div className="col-span-2">
+      <div className="col-span-2 grid gap-1">
+        <RequirementFields
+          form={{
+            parameters: requirement,
+            change: (patch) =>
+              onChange((now) => {
+                const { min, max } = { ...now.requirement, ...patch };
+                return { ...now, requirement: { min: min ?? "", max: max ?? "" } };
+              }),
+            errorAt: (name) => requirementComplaints.get(name),
+          }}
+        />
         <UncertaintyFields
           methods={UNCERTAINTY_METHODS}
           form={{

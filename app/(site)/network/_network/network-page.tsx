@@ -7,15 +7,16 @@ import { LiveRegion } from "../../../_ui/live-region";
 import { Notice } from "../../../_ui/notice";
 import { ProblemNotice } from "../../../_ui/problem-notice";
 import { ToastArea, useToast } from "../../../_ui/toast";
+import { JsonDialog } from "../../_live/json-dialog";
 import { SaveRecord, type Saving } from "../../calculate/_calculator/save-record";
 import { elementAt } from "../_model/complaints";
 import { type Element, freeName, type Network, newElement, nodeNames, START } from "../_model/network";
+import { readBodyText } from "../_model/read-body";
 import { NetworkBudget } from "./budget";
 import { ConditionFields } from "./condition-fields";
 import { MOST_DRAWN, NetworkDrawing } from "./drawing";
 import { ElementTable } from "./element-table";
 import { Elsewhere } from "./elsewhere";
-import { JsonDialog } from "./json-dialog";
 import { NetworkHeadline, Statements } from "./outcome";
 import { useNetwork } from "./use-network";
 import { type FirstSolution, useSolution } from "./use-solution";
@@ -85,6 +86,14 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
     toast(said, { undo: () => edit(() => before), about: "network" });
   }
 
+  function take(text: string) {
+    const reading = readBodyText(text);
+    if (!reading.ok) return reading.complaints;
+    const count = reading.network.elements.length.toLocaleString("en");
+    replace(reading.network, `A network of ${count} elements stands here.`);
+    return [];
+  }
+
   return (
     <>
       <div className="flex flex-wrap items-end gap-x-3 gap-y-1">
@@ -118,10 +127,18 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
           names={names}
           complaints={portComplaints}
           uncertaintyComplaint={solution.uncertaintyComplaint}
+          requirementComplaints={solution.requirementComplaints}
           onChange={edit}
         />
         <NetworkHeadline result={result} stale={stale} />
       </div>
+      {solution.pause ? (
+        <div className="mt-1">
+          <Notice tone="caution" title={solution.pause.title}>
+            <p>{solution.pause.detail}</p>
+          </Notice>
+        </div>
+      ) : null}
       {problem ? (
         <div className="mt-1">
           <ProblemNotice problem={problem} />
@@ -208,11 +225,13 @@ function LiveNetwork({ heading, shapes, first, origin, saving }: NetworkPageProp
       </p>
       {json ? (
         <JsonDialog
+          title="Network as JSON"
+          description="The body of POST /networks."
           body={body}
+          fileName="network.json"
+          mostMB={20}
+          take={take}
           onClose={() => setJson(false)}
-          onTake={(next) =>
-            replace(next, `A network of ${next.elements.length.toLocaleString("en")} elements stands here.`)
-          }
         />
       ) : null}
       {result?.uncertainty ? (

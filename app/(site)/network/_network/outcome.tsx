@@ -5,6 +5,7 @@ import { CopyButton } from "../../../_ui/copy-button";
 import { formatQuantity } from "@/lib/engine/quantity/format-quantity";
 import type { NetworkResult } from "@/lib/engine/network/result-schema";
 import { StrayRange } from "../../calculate/_calculator/answer/budget";
+import { Verdict } from "../../calculate/_calculator/answer/headline";
 
 interface HeadlineProps {
   readonly result: NetworkResult | undefined;
@@ -43,6 +44,11 @@ export function NetworkHeadline({ result, stale }: HeadlineProps) {
       <p className="mt-0.5 text-table text-ink-soft">
         Bounds {proved ? "proved" : "not proved"}. {MEANING[boundsBasis]}
       </p>
+      {result.verdict ? (
+        <div className="mt-1">
+          <Verdict result={result} />
+        </div>
+      ) : null}
       {result.uncertainty ? (
         <div className="mt-1">
           <StrayRange uncertainty={result.uncertainty} />

@@ -5,6 +5,7 @@ import useSWR from "swr";
 import type { NetworkResult } from "@/lib/engine/network/result-schema";
 import type { ProblemShown } from "../../../_ui/problem-notice";
 import { ApiProblem, postApi } from "../../_live/call-api";
+import { waitBeforeRetry } from "../../calculate/_calculator/use-answer";
 import { networkBody, type ShapeRequest } from "../_model/body";
 import { type Complaints, sortComplaints } from "../_model/complaints";
 import type { Network } from "../_model/network";
@@ -19,13 +20,22 @@ export interface Solution {
   readonly result: NetworkResult | undefined;
   readonly stale: boolean;
   readonly problem: ProblemShown | null;
+  /** Why there is no answer for now, though nothing is wrong with the network; the numbers before stay. */
+  readonly pause: Pause | null;
   /** What passes through each element, by its id; an element with a complaint has none. */
   readonly answers: ReadonlyMap<number, Answer>;
   /** Complaints by the element's id, by what they concern. */
   readonly complaints: ReadonlyMap<number, Complaints>;
   readonly portComplaints: readonly string[];
   readonly uncertaintyComplaint: string | undefined;
+  /** By the limit's name. */
+  readonly requirementComplaints: ReadonlyMap<string, string>;
   readonly requests: ReadonlyMap<string, ShapeRequest>;
+}
+
+export interface Pause {
+  readonly title: string;
+  readonly detail: string;
 }
 
 export type Answer = NetworkResult["elements"][number];
@@ -62,7 +72,7 @@ export function useSolution(network: Network, first: FirstSolution): Solution {
     const timer = setTimeout(() => setAsked(text === null ? null : { text, ids }), PAUSE_MS);
     return () => clearTimeout(timer);
   }, [text, network.elements]);
-  const { data, error, isLoading } = useSWR<Answered, unknown>(
+  const { data, error, isLoading } = useSWR<Answered, Error>(
     asked === null ? null : ["/networks", asked.text],
     async ([path, wanted]: [string, string]) => ({
       text: wanted,
@@ -75,10 +85,14 @@ export function useSolution(network: Network, first: FirstSolution): Solution {
         asked?.text === first.text ? { text: first.text, ids: asked.ids, result: first.result } : undefined,
       revalidateOnMount: false,
       revalidateOnFocus: false,
-      shouldRetryOnError: false,
+      onErrorRetry: (failure: Error, _key, _config, revalidate, { retryCount }) => {
+        const wait = waitBeforeRetry(failure, retryCount);
+        if (wait !== null) setTimeout(() => void revalidate({ retryCount }), wait * 1000);
+      },
     },
   );
-  const problem = error === undefined ? null : shown(error);
+  const pause = error === undefined ? null : pauseOf(error);
+  const problem = error instanceof ApiProblem && pause === null ? error.problem : null;
   const sorted = useMemo(() => sortComplaints(problem, asked?.ids ?? []), [problem, asked]);
   const refused = problem !== null;
   const answers = useMemo(() => {
@@ -90,24 +104,31 @@ export function useSolution(network: Network, first: FirstSolution): Solution {
   return {
     body,
     result: refused || empty ? undefined : data?.result,
-    stale: !empty && (isLoading || text === null || asked?.text !== text || refused),
+    stale: !empty && (isLoading || text === null || asked?.text !== text || error !== undefined),
     problem: sorted.rest,
+    pause,
     answers,
     complaints: sorted.complaints,
     portComplaints: sorted.ports,
     uncertaintyComplaint: sorted.uncertainty,
+    requirementComplaints: sorted.requirement,
     requests,
   };
 }
 
 const NO_ANSWERS: ReadonlyMap<number, Answer> = new Map();
 
-function shown(error: unknown): ProblemShown {
-  if (error instanceof ApiProblem) return error.problem;
-  return {
-    title: "The service cannot be reached",
-    detail: "The network is still here. Try again in a moment.",
-  };
+function pauseOf(error: Error): Pause | null {
+  const again = waitBeforeRetry(error, 0) !== null;
+  if (!(error instanceof ApiProblem)) {
+    return {
+      title: "No connection",
+      detail: "The service cannot be reached. The network is still here; the page asks again by itself.",
+    };
+  }
+  if (error.status !== 429) return null;
+  const then = again ? "The page asks again by itself." : "They come back later, or after signing in.";
+  return { title: "A short pause", detail: `The calls that this page may make are used up for now. ${then}` };
 }
 
 /** What the addresses of shapes ask for, read by the service; kept once known. */

@@ -14,6 +14,11 @@ export type BodyReading =
   | { readonly ok: false; readonly complaints: readonly BodyComplaint[] };
 
 const MOST_COMPLAINTS = 20;
+
+const BODY_MEMBERS = ["outline", "terminals", "medium", "accuracy", "operating", "requirement", "record"];
+/** What the answer to `POST /outlines` says beside the outline and its terminals. */
+const STORED_FACTS = ["id", "name", "createdAt", "repairs", "regions"];
+const OUTLINE_MEMBERS = ["unit", "outer", "holes", "symmetry"];
 export const DEFAULT_ACCURACY = 1e-4;
 
 /** Text of a file or a paste. `around` gives the medium and settings where the text is an outline alone. */
@@ -61,12 +66,17 @@ class Reader {
       return this.complain("#/outlineId", "is not read here: paste the outline itself.");
     }
     if (json.outline === undefined) return this.complain("#/outline", "is required.");
+    this.only(json, BODY_MEMBERS, "#", STORED_FACTS);
+    if (Array.isArray(json.regions) && json.regions.length > 0) {
+      this.complain("#/regions", "have no medium: write each as { ring, medium } into medium/regions.");
+    }
     return this.whole(json, "#/outline", around);
   }
 
   private whole(json: Json, at: string, around: Sketch): Sketch | null {
     const { outline } = json;
     if (!isRecord(outline)) return this.complain(at, "must be an object with `outer`.");
+    this.only(outline, OUTLINE_MEMBERS, at);
     const unit = outline.unit ?? "m";
     if (typeof unit !== "string" || !(unit in LENGTH_UNITS_M)) {
       this.complain(`${at}/unit`, `must be one of ${Object.keys(LENGTH_UNITS_M).join(", ")}.`);
@@ -126,6 +136,7 @@ class Reader {
     if (!isRecord(item)) {
       return this.complain(pointer, "must be a vertex [x, y] or an arc { arcTo, center, clockwise }.");
     }
+    this.only(item, ["arcTo", "center", "clockwise"], pointer);
     const end = this.point(item.arcTo, `${pointer}/arcTo`);
     const center = this.point(item.center, `${pointer}/center`);
     const clockwise = item.clockwise ?? false;
@@ -143,6 +154,7 @@ class Reader {
   private terminal(value: unknown, pointer: string, rings: readonly Ring[]): Terminal | null {
     if (!isRecord(value))
       return this.complain(pointer, "must be an object with a name and parts or segments.");
+    this.only(value, ["name", "parts", "segments"], pointer);
     if (typeof value.name !== "string") return this.complain(`${pointer}/name`, "must be a text.");
     const parts = this.list(value.parts ?? [], `${pointer}/parts`, (part, at) => this.part(part, at));
     const segments = this.list(value.segments ?? [], `${pointer}/segments`, (segment, at) => {
@@ -162,6 +174,7 @@ class Reader {
 
   private part(value: unknown, pointer: string): Part | null {
     if (!isRecord(value)) return this.complain(pointer, "must be an object { ring, edge, from, to }.");
+    this.only(value, ["ring", "edge", "from", "to"], pointer);
     const { ring, edge, from = 0, to = 1 } = value;
     const whole = { ring, edge, from, to };
     for (const [name, number] of Object.entries(whole)) {
@@ -185,6 +198,7 @@ class Reader {
       medium,
       regions: this.list(regions, `${pointer}/regions`, (region, at) => {
         if (!isRecord(region)) return this.complain(at, "must be an object with a ring and a medium.");
+        this.only(region, ["ring", "medium"], at);
         const ring = this.ring(region.ring, `${at}/ring`);
         if (ring.some(({ arc }) => arc)) return this.complain(`${at}/ring`, "must have straight edges only.");
         const inner = this.medium(region.medium, `${at}/medium`, false);
@@ -201,12 +215,25 @@ class Reader {
       return {};
     }
     const texts: Record<string, string> = {};
+    this.only(value, members, pointer);
     for (const [name, entry] of Object.entries(value)) {
-      if (!members.includes(name)) {
-        this.complain(`${pointer}/${name}`, `is not known here; there are ${members.join(", ")}.`);
-      } else if (["string", "number", "boolean"].includes(typeof entry)) texts[name] = String(entry);
+      if (!members.includes(name)) continue;
+      if (["string", "number", "boolean"].includes(typeof entry)) texts[name] = String(entry);
       else this.complain(`${pointer}/${name}`, "must be a number or a text.");
     }
     return texts;
+  }
+
+  /** Nothing is dropped in silence: a misspelt member would be a drawing without its holes. */
+  private only(
+    record: Json,
+    members: readonly string[],
+    pointer: string,
+    passed: readonly string[] = [],
+  ): void {
+    for (const name of Object.keys(record)) {
+      if (members.includes(name) || passed.includes(name)) continue;
+      this.complain(`${pointer}/${name}`, `is not known here; there are ${members.join(", ")}.`);
+    }
   }
 }

@@ -7,11 +7,15 @@ import { Button } from "../../../_ui/button";
 import { CONTROL } from "../../../_ui/field";
 import { useToast } from "../../../_ui/toast";
 import { sketchToHash } from "../_model/address";
+import { fieldBody } from "../_model/field-body";
+import { readBodyText } from "../_model/read-body";
 import type { Sketch } from "../_model/sketch";
 import { EMPTY_SKETCH, START_OUTLINES, startSketch } from "../_model/start-outlines";
 import type { SketchState } from "./use-sketch";
 
-const JsonDialog = dynamic(() => import("./json-dialog").then((module) => module.JsonDialog), { ssr: false });
+const JsonDialog = dynamic(() => import("../../_live/json-dialog").then((module) => module.JsonDialog), {
+  ssr: false,
+});
 
 interface PageToolsProps {
   readonly state: SketchState;
@@ -39,6 +43,15 @@ export function PageTools({ state, onReplace }: PageToolsProps) {
     } catch {
       toast("The browser does not let the page copy; the address bar has the link.");
     }
+  }
+
+  function take(text: string) {
+    const reading = readBodyText(text, sketch);
+    if (!reading.ok) return reading.complaints;
+    setJson(false);
+    onReplace(reading.sketch);
+    toast("The drawing is taken over.", { undo });
+    return [];
   }
 
   return (
@@ -79,13 +92,13 @@ export function PageTools({ state, onReplace }: PageToolsProps) {
       </Button>
       {json ? (
         <JsonDialog
-          sketch={sketch}
+          title="Outline as JSON"
+          description="An outline alone, or the whole body of POST /fields."
+          body={fieldBody(sketch)}
+          fileName="outline.json"
+          mostMB={10}
+          take={take}
           onClose={() => setJson(false)}
-          onTake={(next) => {
-            setJson(false);
-            onReplace(next);
-            toast("The drawing is taken over.", { undo });
-          }}
         />
       ) : null}
     </>
