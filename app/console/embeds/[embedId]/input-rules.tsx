@@ -5,8 +5,8 @@ import type { EmbedDefinition, InputRule } from "@/lib/embeds/definition";
 import type { EmbedDetail } from "../../../api/console/embeds/_server/embed-detail";
 import { Button } from "../../../_ui/button";
 import { Select } from "../../../_ui/select";
-import { GradedField } from "./graded-field";
 import { InputRuleFields } from "./input-rule-fields";
+import { JsonField } from "./json-field";
 import type { Draft } from "./use-draft";
 
 interface RulesProps {
@@ -85,7 +85,17 @@ export function InputRules({ detail, draft }: RulesProps) {
           </Button>
         </div>
       ) : null}
-      {definition.outlineId === undefined ? <GradedField draft={draft} /> : null}
+      {definition.outlineId === undefined ? (
+        <JsonField
+          label="Graded medium"
+          help="As the member graded of the API, in JSON; empty for none. It takes the place of material or resistivity."
+          offer="Fix a graded medium"
+          placeholder={GRADED}
+          value={definition.graded}
+          error={problems.find(({ pointer }) => pointer.startsWith("#/graded"))?.detail}
+          onChange={(graded) => change({ graded: graded as typeof definition.graded })}
+        />
+      ) : null}
     </>
   );
 }
@@ -116,3 +126,9 @@ function firstValue(type: string, kind: string | null, choice: string | undefine
   if (type === "flag") return "true";
   return choice ?? FIRST_VALUES[kind ?? ""] ?? "1";
 }
+
+const GRADED = `{
+  "coordinate": "length",
+  "quantity": "resistivity",
+  "profile": { "kind": "linear", "from": 1.7e-8, "to": 2.2e-8 }
+}`;

@@ -1,11 +1,10 @@
 "use client";
 
-import { useState } from "react";
 import type { EmbedDetail } from "../../../api/console/embeds/_server/embed-detail";
 import { OutlineDrawing } from "../../../_ui/drawing/outline-drawing";
-import { CONTROL, Field } from "../../../_ui/field";
 import { Select } from "../../../_ui/select";
 import { outlineFacts, outlineName } from "../outline-picker";
+import { JsonField } from "./json-field";
 import type { Draft } from "./use-draft";
 
 /** Width of the bracket over its value, as the API takes it. */
@@ -54,59 +53,17 @@ export function OutlineFields({ detail, draft }: { readonly detail: EmbedDetail;
         }
         onChange={(event) => change({ accuracy: Number(event.target.value) })}
       />
-      <TerminalsField draft={draft} error={errorAt("terminals")} />
+      {/* Other terminals than those that the outline was stored with; they are needed where it has none. */}
+      <JsonField
+        label="Terminals"
+        help="As the member terminals of the API, in JSON; empty for those that the outline was stored with."
+        offer="Give other terminals"
+        placeholder={PLACEHOLDER}
+        value={definition.terminals}
+        error={errorAt("terminals")}
+        onChange={(terminals) => change({ terminals: terminals as typeof definition.terminals })}
+      />
     </>
-  );
-}
-
-/** Other terminals than those that the outline was stored with; they are needed where it has none. */
-function TerminalsField({ draft, error }: { readonly draft: Draft; readonly error: string | undefined }) {
-  const { definition, change } = draft;
-  const [text, setText] = useState(() => JSON.stringify(definition.terminals, null, 2) ?? "");
-  const [broken, setBroken] = useState(false);
-  const [shown, setShown] = useState(text !== "");
-  if (!shown && !error) {
-    return (
-      <button
-        type="button"
-        className="link min-h-5.5 cursor-pointer text-table"
-        onClick={() => setShown(true)}
-      >
-        Give other terminals
-      </button>
-    );
-  }
-  return (
-    <Field
-      label="Terminals"
-      help="As the member terminals of the API, in JSON; empty for those that the outline was stored with."
-      error={broken ? "is not JSON yet." : error}
-    >
-      {(control) => (
-        <textarea
-          {...control}
-          rows={6}
-          value={text}
-          spellCheck={false}
-          placeholder={PLACEHOLDER}
-          className={CONTROL}
-          onChange={(event) => {
-            setText(event.target.value);
-            if (event.target.value.trim() === "") {
-              setBroken(false);
-              change({ terminals: undefined });
-              return;
-            }
-            try {
-              change({ terminals: JSON.parse(event.target.value) });
-              setBroken(false);
-            } catch {
-              setBroken(true);
-            }
-          }}
-        />
-      )}
-    </Field>
   );
 }
 
