@@ -126,6 +126,40 @@ describe("a page of another origin", () => {
     expect(complaints).toEqual([]);
   });
 
+  test("keeps what was typed when the page around changes its theme or its language", async () => {
+    const { page } = await newPage();
+    const { id } = widget({ theme: "host" });
+    const path = host.serve(
+      loaderPage(
+        base(),
+        `<rhoform-embed id="one" embed="${id}" values='{"length":"1 m"}' theme="light"></rhoform-embed>`,
+      ),
+    );
+    await page.goto(host.origin + path);
+    await told(page, "result", "one");
+    await frameOf(page, id).locator("input").first().fill("1.5");
+    await told(page, "result", "one", 2);
+    const text = await shownText(frameOf(page, id));
+    // Both at once, as a framework sets them one after the other.
+    await page.evaluate(() => {
+      const element = document.getElementById("one");
+      element?.setAttribute("theme", "dark");
+      element?.setAttribute("lang", "de");
+    });
+    await told(page, "ready", "one", 2);
+    await told(page, "result", "one", 3);
+    const frame = frameOf(page, id);
+    expect(await frame.locator("html").getAttribute("data-theme")).toBe("dark");
+    expect(await frame.locator("label", { hasText: "Länge" }).count()).toBe(1);
+    expect(await frame.locator("input").first().inputValue()).toBe("1,5");
+    expect((await shownText(frame)).replace(",", ".")).toBe(text);
+    // Another widget in the same element has nothing to do with it.
+    const other = widget().id;
+    await page.evaluate((next) => document.getElementById("one")?.setAttribute("embed", next), other);
+    await told(page, "result", "one", 4);
+    expect(await frameOf(page, other).locator("input").first().inputValue()).toBe("1");
+  });
+
   test("changes nothing by hostile messages, and reads nothing", async () => {
     const { page } = await newPage();
     const { id } = widget();

@@ -60,6 +60,9 @@ export function Frame({ view }: { readonly view: FrameView }) {
     tell("ready", { title: view.title, inputs });
   }, [tell, view, defaults]);
   useEffect(() => {
+    tell("values", { values });
+  }, [tell, values]);
+  useEffect(() => {
     if (result && !pending && !trouble) tell("result", result);
   }, [tell, result, pending, trouble]);
   useEffect(() => {

@@ -1,6 +1,6 @@
 /** The messages between a frame and the page around it; both sides check every one. */
 
-export type FrameMessage = "ready" | "size" | "result" | "error";
+export type FrameMessage = "ready" | "size" | "values" | "result" | "error";
 export type HostMessage = "set" | "compute";
 
 interface Envelope<Type extends string> {

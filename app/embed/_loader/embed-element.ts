@@ -24,6 +24,8 @@ export function defineEmbedElement(origin: string): void {
     private ready = false;
     private silence: ReturnType<typeof setTimeout> | undefined;
     private waiting: Record<string, string | number> = {};
+    /** What stands in the fields: a frame that is loaded again, for another theme or language, starts with it. */
+    private typed: Values = {};
 
     connectedCallback(): void {
       window.addEventListener("message", this.listen);
@@ -39,8 +41,9 @@ export function defineEmbedElement(origin: string): void {
 
     attributeChangedCallback(name: string, before: string | null, after: string | null): void {
       if (!this.frame || before === after) return;
-      if (name === "values") this.set(this.startValues());
-      else this.show();
+      if (name === "values") return this.set(this.startValues());
+      if (name === "embed") this.typed = {};
+      this.show();
     }
 
     /** Sets open inputs by name, as their fields would take them: "250 mm". */
@@ -83,7 +86,7 @@ export function defineEmbedElement(origin: string): void {
 
     private address(): string {
       const address = new URL(`/embed/${encodeURIComponent(this.embed)}`, origin);
-      for (const [name, value] of Object.entries(this.startValues())) {
+      for (const [name, value] of Object.entries({ ...this.startValues(), ...this.typed })) {
         address.searchParams.set(name, String(value));
       }
       // These two are the frame's own; a value of the same name does not take their place.
@@ -142,6 +145,10 @@ export function defineEmbedElement(origin: string): void {
       clearTimeout(this.silence);
       if (message.type === "size") {
         this.frame.style.height = `${Math.ceil(message.height)}px`;
+        return;
+      }
+      if (message.type === "values") {
+        this.typed = message.values;
         return;
       }
       if (message.type === "ready") {

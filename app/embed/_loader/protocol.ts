@@ -3,11 +3,16 @@
 export type FrameEvent =
   | { readonly type: "ready"; readonly data: object }
   | { readonly type: "size"; readonly height: number }
+  | { readonly type: "values"; readonly values: Readonly<Record<string, string>> }
   | { readonly type: "result"; readonly data: object }
   | { readonly type: "error"; readonly data: { readonly code: string; readonly message: string } };
 
 /** No frame is higher, px. */
 const HIGHEST = 20_000;
+
+/** Most values that a widget has, and the longest one, as the frame takes them. */
+const MOST_VALUES = 80;
+const LONGEST_VALUE = 120;
 
 /** What a frame says; undefined for anything that is not exactly a message of the protocol about that widget. */
 export function readFrameMessage(message: unknown, embed: string): FrameEvent | undefined {
@@ -23,6 +28,10 @@ export function readFrameMessage(message: unknown, embed: string): FrameEvent | 
       const sound = typeof height === "number" && height >= 0 && height <= HIGHEST;
       return sound ? { type, height } : undefined;
     }
+    case "values": {
+      const values = textsOf(data.values);
+      return values ? { type, values } : undefined;
+    }
     case "error":
       return typeof data.code === "string" && typeof data.message === "string"
         ? { type, data: { ...data, code: data.code, message: data.message } }
@@ -30,6 +39,16 @@ export function readFrameMessage(message: unknown, embed: string): FrameEvent | 
     default:
       return undefined;
   }
+}
+
+function textsOf(values: unknown): Readonly<Record<string, string>> | undefined {
+  if (!isPlain(values)) return undefined;
+  const entries = Object.entries(values);
+  const sound = ([, text]: [string, unknown]): boolean =>
+    typeof text === "string" && text.length <= LONGEST_VALUE;
+  return entries.length <= MOST_VALUES && entries.every(sound)
+    ? (values as Record<string, string>)
+    : undefined;
 }
 
 export function hostMessage(type: "set" | "compute", embed: string, data: object): object {

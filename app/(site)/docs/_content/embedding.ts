@@ -49,7 +49,7 @@ export const embedding: DocPage = {
             ],
           },
         },
-        "The frame is as high as its content and as wide as its place, from 320 px. It needs no cookies. A page with a Content-Security-Policy must allow it:",
+        "The frame is as high as its content and as wide as its place, from 320 px. Where the page changes an attribute, what was typed stays. It needs no cookies. A page with a Content-Security-Policy must allow it:",
         {
           snippets: [
             {
@@ -83,7 +83,7 @@ export const embedding: DocPage = {
             },
           ],
         },
-        'Underneath, frame and page exchange messages `{ "source": "rhoform", "version": 1, "type", "embed", "data" }` by `postMessage`: the frame sends `ready`, `size`, `result` and `error`, the page `set` and `compute`. Both sides check origin, window, source and version. A page that works without the script must check them itself.',
+        'Underneath, frame and page exchange messages `{ "source": "rhoform", "version": 1, "type", "embed", "data" }` by `postMessage`: the frame sends `ready`, `size`, `values` (what stands in its fields), `result` and `error`, the page `set` and `compute`. Both sides check origin, window, source and version. A page that works without the script must check them itself.',
       ],
     },
     {
