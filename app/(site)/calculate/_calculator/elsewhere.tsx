@@ -7,7 +7,14 @@ import { Tabs } from "../../../_ui/tabs";
 import { resistanceClientSnippets } from "../../_live/client-snippets";
 import { resistanceSnippets, sizingSnippets } from "../../_live/snippets";
 import { addressCall } from "../_model/address-call";
-import { compactValue, orderedPairs, type Parameters, queryText } from "../_model/parameters";
+import {
+  compactValue,
+  mediumPrefixes,
+  ofMedium,
+  orderedPairs,
+  type Parameters,
+  queryText,
+} from "../_model/parameters";
 import { requestBody } from "../_model/request";
 import { sizingBody } from "../_model/sizing";
 
@@ -80,10 +87,8 @@ export function Elsewhere({ entry, parameters, origin }: ElsewhereProps) {
 
 /** A frame for pages of others: it shows a widget, which the team makes once. */
 function FrameSnippet({ entry, parameters, origin }: ElsewhereProps) {
-  const dimensions = orderedPairs(parameters, entry).filter(([name]) =>
-    entry.dimensions.some((dimension) => dimension.name === name),
-  );
-  const query = queryText(dimensions.map(([name, value]) => [name, compactValue(name, value)] as const));
+  const inputs = orderedPairs(parameters, entry).filter(([name]) => widgetInput(name, entry));
+  const query = queryText(inputs.map(([name, value]) => [name, compactValue(name, value)] as const));
   const code = `<iframe src="${origin}/embed/emb_…?${query.replaceAll("&", "&amp;")}"\n  title="${entry.title}" width="480" height="720"\n  style="border: 0; max-width: 100%"></iframe>`;
   const start = queryText([["shape", entry.id], ...orderedPairs(parameters, entry)]);
   return (
@@ -98,4 +103,11 @@ function FrameSnippet({ entry, parameters, origin }: ElsewhereProps) {
       </p>
     </div>
   );
+}
+
+/** What a widget may leave open: dimensions, plain media, the temperature. What it fixes it keeps, whatever the address says. */
+function widgetInput(name: string, entry: ShapeEntry): boolean {
+  if (name === "temperature" || entry.dimensions.some((dimension) => dimension.name === name)) return true;
+  const graded = /^(?:\w+\.)?(?:graded|quantity|profile)\b/.test(name);
+  return !graded && mediumPrefixes(entry).some((prefix) => ofMedium(name, prefix, entry));
 }
