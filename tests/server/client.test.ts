@@ -159,6 +159,7 @@ export const text: Promise<string> = computeResistance({
     };
     expect(compile("thickness")).not.toThrow();
     expect(compile("thicknes")).toThrow();
+    rmSync(join(folder, "use.mts"));
 
     // What the README tells of widgets compiles against the package, and so do the examples that come with it.
     const readme = readFileSync(join(folder, "node_modules/@rhoform/client/README.md"), "utf8");
