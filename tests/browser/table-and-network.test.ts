@@ -221,12 +221,12 @@ describe("the network", () => {
   it("holds the answer against a requirement, and waits out a limit and a lost connection", async () => {
     const { page, close } = await bench.open("/network");
     const verdict = page.getByTestId("verdict");
-    await page.getByLabel("At most").fill("50 uohm");
+    await page.getByRole("textbox", { name: "At most" }).fill("50 uohm");
     await verdict.getByText("Requirement met.").waitFor();
     expect(await page.locator("pre").first().textContent()).toContain('"requirement": { "max": "50 uohm" }');
-    await page.getByLabel("At least").fill("60 uohm");
+    await page.getByRole("textbox", { name: "At least" }).fill("60 uohm");
     await page.locator("input[aria-invalid=true]").first().waitFor();
-    await page.getByLabel("At least").fill("48 uohm");
+    await page.getByRole("textbox", { name: "At least" }).fill("48 uohm");
     await verdict.getByText("Requirement not met.").waitFor();
     await page.waitForFunction(() => decodeURIComponent(location.hash).includes('"min":"48 uohm"'));
 
