@@ -165,7 +165,7 @@ export const embedding: DocPage = {
             "[Two widgets that feed each other](/embed-examples/two-widgets)",
           ],
         },
-        "They show the demo's widget, or yours: add `?embed=emb_…` to the address. `@rhoform/client/embed` has the types of the element and its events, and `loadEmbeds(origin)`, which loads it once.",
+        "They show the demo's widget, or yours: add `?embed=emb_…` to the address. `@rhoform/client/embed` has the types of the element and its events, and `loadEmbeds(origin)`, which loads it once. `@rhoform/client/react` needs React 18 or newer in your project, and its types; the package brings none. Both come with the [TypeScript client](/docs/clients#typescript).",
       ],
     },
     {

@@ -9,3 +9,18 @@ export function ScrollTable({ label, children }: { readonly label: string; reado
     </ScrollFrame>
   );
 }
+
+/** The row of a table's heads. */
+export function TableHead({ columns }: { readonly columns: readonly string[] }) {
+  return (
+    <thead>
+      <tr>
+        {columns.map((column) => (
+          <th key={column} scope="col" className="font-semibold">
+            {column}
+          </th>
+        ))}
+      </tr>
+    </thead>
+  );
+}

@@ -4,7 +4,7 @@ import { BASES } from "../_content/bounds";
 import { comparisonsOf } from "../accuracy/compared";
 import { Deviation } from "./deviation";
 import { Inline } from "./inline";
-import { ScrollTable } from "./scroll-table";
+import { ScrollTable, TableHead } from "./scroll-table";
 
 /** What a shape's bounds promise, what its example's own checks found, and how far the tests found it off. */
 export function ShapeAccuracy({ result }: { readonly result: ResistanceResult }) {
@@ -45,15 +45,7 @@ export function ShapeAccuracy({ result }: { readonly result: ResistanceResult })
             relative deviation of this shape, rounded up:
           </p>
           <ScrollTable label="Comparisons in the tests">
-            <thead>
-              <tr>
-                {["group of tests", "compared with", "comparisons", "largest deviation"].map((head) => (
-                  <th key={head} scope="col" className="font-semibold">
-                    {head}
-                  </th>
-                ))}
-              </tr>
-            </thead>
+            <TableHead columns={["group of tests", "compared with", "comparisons", "largest deviation"]} />
             <tbody>
               {compared.map(({ group, against, cases, worst }) => (
                 <tr key={`${group} ${against}`}>

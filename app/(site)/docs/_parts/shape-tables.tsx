@@ -1,21 +1,13 @@
 import type { DimensionEntry, ShapeEntry } from "@/lib/engine";
 import { SiteLink } from "../../../_ui/site/site-link";
-import { ScrollTable } from "./scroll-table";
+import { ScrollTable, TableHead } from "./scroll-table";
 
 /** Every dimension as a request may give it, and which exclude each other. */
 export function Dimensions({ entry }: { readonly entry: ShapeEntry }) {
   return (
     <>
       <ScrollTable label="Dimensions">
-        <thead>
-          <tr>
-            {["name", "symbol", "what it is", "bare number in"].map((head) => (
-              <th key={head} scope="col" className="font-semibold">
-                {head}
-              </th>
-            ))}
-          </tr>
-        </thead>
+        <TableHead columns={["name", "symbol", "what it is", "bare number in"]} />
         <tbody>
           {entry.dimensions.map((dimension) => (
             <tr key={dimension.name}>
@@ -75,15 +67,7 @@ export function Coordinates({ entry }: { readonly entry: ShapeEntry }) {
   return (
     <>
       <ScrollTable label="Coordinates">
-        <thead>
-          <tr>
-            {["name", "what it is", "from", "to", "runs", "graded media"].map((head) => (
-              <th key={head} scope="col" className="font-semibold">
-                {head}
-              </th>
-            ))}
-          </tr>
-        </thead>
+        <TableHead columns={["name", "what it is", "from", "to", "runs", "graded media"]} />
         <tbody>
           {entry.coordinates.map(({ name, label, start, end, role }) => (
             <tr key={name}>
