@@ -314,6 +314,22 @@ describe("a field's record", () => {
     return block?.kind === "lines" ? block.lines : [];
   };
 
+  it("counts holes as the page and the complaints of the API do", () => {
+    const hole = [
+      [0.2, 0.2],
+      [0.8, 0.2],
+      [0.8, 0.8],
+    ];
+    const terminals = [BEND.terminals[0], { name: "b", parts: [{ ring: 1, edge: 0, from: 0, to: 1 }] }];
+    const request = { ...BEND, outline: { ...BEND.outline, holes: [hole] }, terminals };
+    const { sections } = contentOf({ ...recordOf(BAR), operation: "field", request, result });
+    const cells = sections.flatMap(({ blocks }) =>
+      blocks.flatMap((block) => (block.kind === "table" ? block.rows.flat() : [])),
+    );
+    expect(cells).toContain("hole 0");
+    expect(cells).toContain("hole 0, edge 0");
+  });
+
   it("names the sources of the method, and that of arcs where it has any", () => {
     expect(sources(BEND.outline)).toEqual([
       expect.stringMatching(/^Principles of Dirichlet and Thomson: The energy of any potential/),

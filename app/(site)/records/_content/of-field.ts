@@ -150,7 +150,7 @@ function vertexTable(outline: StoredRequest["outline"]): Block {
         const arc = Array.isArray(vertex) ? null : vertex;
         const way = arc ? `arc about ${pair(arc.center)}${arc.clockwise ? ", clockwise" : ""}` : "line";
         return [
-          index === 0 ? "outer" : `hole ${index}`,
+          index === 0 ? "outer" : `hole ${index - 1}`,
           String(place),
           pair(Array.isArray(vertex) ? vertex : vertex.arcTo),
           ...(curved ? [way] : []),
@@ -166,7 +166,7 @@ type Part = NonNullable<StoredRequest["terminals"][number]["parts"]>[number];
 
 function partText({ ring, edge, from, to }: Part): string {
   const share = from === 0 && to === 1 ? "" : `, ${plainNumber(from)} to ${plainNumber(to)}`;
-  return `${ring === 0 ? "outer ring" : `hole ${ring}`}, edge ${edge}${share}`;
+  return `${ring === 0 ? "outer ring" : `hole ${ring - 1}`}, edge ${edge}${share}`;
 }
 
 function terminalTable(terminals: StoredRequest["terminals"]): Block {

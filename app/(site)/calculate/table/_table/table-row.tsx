@@ -53,11 +53,11 @@ export const TableRow = memo(function TableRow(props: TableRowProps) {
         {outcome?.ok ? (
           <span className="font-mono whitespace-nowrap">{outcome.text}</span>
         ) : outcome?.later ? (
-          <span className="block max-w-[44ch] min-w-28 py-0.5 text-small text-amber">
+          <span className="block max-w-[44ch] py-0.5 text-small text-amber">
             Not computed in time; compute again.
           </span>
         ) : outcome ? (
-          <span id={problemId} className="block max-w-[44ch] min-w-28 py-0.5 text-small text-oxide">
+          <span id={problemId} className="block max-w-[44ch] py-0.5 text-small text-oxide">
             {outcome.text}
           </span>
         ) : (

@@ -233,6 +233,8 @@ export function useGestures(options: GestureOptions) {
       }, `nudge ${ring} ${index}`);
     } else if (tool === "read" && readings.probe) {
       const [x, y] = readings.probe;
+      // A pointer that rests on the board would hide what the keys read.
+      options.reading.set(null);
       setReadings({ ...readings, probe: [x + dx * step, y + dy * step] });
     } else setView(panBy(view, -40 * dx, 40 * dy));
   }
