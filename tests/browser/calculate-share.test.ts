@@ -123,6 +123,21 @@ describe("use this elsewhere", () => {
     expect(stdout).toContain((await ask(bench.key, bodiesOf(base() + path)[0])).resistance.text);
   });
 
+  it("gives a frame whose address says dimensions, medium and temperature", async () => {
+    const [code] = await codeOf(
+      "/calculate/bar?length=250mm&width=40mm&thickness=10mm&material=aluminium-electrical&temperature=75degC&current=630A&max=1mohm",
+      "iframe",
+    );
+    const address = /src="([^"]+)"/.exec(code)?.[1].replaceAll("&amp;", "&") ?? "";
+    expect(Object.fromEntries(new URL(address.replace("…", "")).searchParams)).toEqual({
+      length: "250mm",
+      width: "40mm",
+      thickness: "10mm",
+      material: "aluminium-electrical",
+      temperature: "75degC",
+    });
+  });
+
   it("gives an address and a formula for spreadsheets, and says when there is none", async () => {
     const path = STATE.replace("&max=1uohm", "");
     const [formula, address] = await codeOf(path, "Spreadsheet");
