@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { readPoints } from "@/app/(site)/calculate/_calculator/graded/read-points";
+import { readPoints, readPointsFile } from "@/app/(site)/calculate/_calculator/graded/read-points";
 
 describe("readPoints", () => {
   it.each([
@@ -57,5 +57,30 @@ describe("readPoints", () => {
       "Line 3 has one column; a point needs two.",
     ]);
     expect((await readPoints("")).problems).toEqual(["There is no line with two numbers."]);
+  });
+});
+
+describe("readPointsFile", () => {
+  const given = (name: string, bytes: string | Buffer) => readPointsFile(new File([bytes], name));
+
+  it("takes nothing of a file with a line that is no point", async () => {
+    expect(await given("torn.csv", "mm;pS/m\n2;1\n3;x\n4\n5;2")).toEqual({
+      rows: [],
+      problems: ['Line 3, column 2: "x" is no number.', "Line 4 has one column; a point needs two."],
+      note: "Nothing of “torn.csv” was taken.",
+    });
+    expect((await given("empty.csv", "")).problems).toEqual(["There is no line with two numbers."]);
+    expect((await given("picture.csv", Buffer.from([0x89, 0x50, 0x4e, 0x47]))).problems[0]).toContain(
+      "a PNG",
+    );
+  });
+
+  it("reads a file that is not in UTF-8, and says so", async () => {
+    const { rows, note } = await given("western.csv", Buffer.from("Länge/µm;pS/m\n2000;1\n5000;2", "latin1"));
+    expect(rows).toEqual([
+      ["2000 µm", "1 pS/m"],
+      ["5000 µm", "2 pS/m"],
+    ]);
+    expect(note).toMatch(/^Columns taken: Länge\/µm and pS\/m\. “western\.csv” is not in UTF-8\./);
   });
 });

@@ -141,7 +141,12 @@ function LiveCalculator(props: CalculatorProps) {
           <UncertaintyFields form={form} />
         </form>
         <div className="contents wide:sticky wide:top-2 wide:grid wide:gap-3">
-          <Outcome answer={answer} elsewhere={complaints.elsewhere} className="order-3 wide:order-none" />
+          <Outcome
+            answer={answer}
+            elsewhere={complaints.elsewhere}
+            signedOut={props.saving?.kind === "sign-in"}
+            className="order-3 wide:order-none"
+          />
           <DrawingPane
             entry={entry}
             geometry={geometry}

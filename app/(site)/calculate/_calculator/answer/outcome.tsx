@@ -12,11 +12,13 @@ import { TroubleNotice } from "./trouble-notice";
 interface OutcomeProps {
   readonly answer: Answer;
   readonly elsewhere: readonly Complaint[];
+  /** Whether signing in would allow more calculations. */
+  readonly signedOut: boolean;
   readonly className: string;
 }
 
 /** The answer with what must stand at the number: its verdict, or why there is none. */
-export function Outcome({ answer, elsewhere, className }: OutcomeProps) {
+export function Outcome({ answer, elsewhere, signedOut, className }: OutcomeProps) {
   const { result, stale, trouble, retry } = answer;
   const outdated = trouble !== undefined;
   return (
@@ -31,6 +33,7 @@ export function Outcome({ answer, elsewhere, className }: OutcomeProps) {
           trouble={trouble}
           elsewhere={elsewhere}
           answered={result !== undefined}
+          signedOut={signedOut}
           retry={retry}
         />
       ) : null}

@@ -8,17 +8,22 @@ import type { Complaint } from "../../_model/complaints";
 import { sentence } from "../../_model/complaints";
 import type { Trouble } from "../use-answer";
 
+/** Longer waits are told with their end, by the API. */
+const LONGEST_COUNTDOWN_S = 120;
+
 interface TroubleNoticeProps {
   readonly trouble: Trouble;
   /** Complaints for which the page has no field. */
   readonly elsewhere: readonly Complaint[];
   /** Whether an earlier answer still stands above. */
   readonly answered: boolean;
+  /** Whether signing in would allow more calculations. */
+  readonly signedOut: boolean;
   readonly retry: () => void;
 }
 
 /** Why there is no new answer, calmly, and what happens next. */
-export function TroubleNotice({ trouble, elsewhere, answered, retry }: TroubleNoticeProps) {
+export function TroubleNotice({ trouble, elsewhere, answered, signedOut, retry }: TroubleNoticeProps) {
   const stands = answered ? " What stands above is the answer to the input before." : "";
   switch (trouble.kind) {
     case "input":
@@ -41,8 +46,14 @@ export function TroubleNotice({ trouble, elsewhere, answered, retry }: TroubleNo
       return (
         <Notice tone="caution" title="A short pause">
           <p>
-            The calculations that this address may make without signing in are used up for now.{" "}
-            <Countdown key={trouble.seconds} seconds={trouble.seconds} />
+            {trouble.seconds !== null && trouble.seconds <= LONGEST_COUNTDOWN_S ? (
+              <>
+                The calculations of this minute are used up.{" "}
+                <Countdown key={trouble.seconds} seconds={trouble.seconds} />
+              </>
+            ) : (
+              `${trouble.detail || "The calculations of this month are used up."}${signedOut ? " Signing in allows more." : ""}`
+            )}
             {stands}
           </p>
         </Notice>
@@ -61,13 +72,11 @@ export function TroubleNotice({ trouble, elsewhere, answered, retry }: TroubleNo
   }
 }
 
-function Countdown({ seconds }: { readonly seconds: number | null }) {
-  const [left, setLeft] = useState(seconds ?? 0);
+function Countdown({ seconds }: { readonly seconds: number }) {
+  const [left, setLeft] = useState(seconds);
   useEffect(() => {
-    if (seconds === null) return;
     const timer = setInterval(() => setLeft((before) => Math.max(0, before - 1)), 1000);
     return () => clearInterval(timer);
-  }, [seconds]);
-  if (seconds === null || seconds > 120) return "They come back with the next month, or after signing in.";
+  }, []);
   return left > 0 ? `The page asks again in ${left} s.` : "The page asks again now.";
 }

@@ -2,6 +2,7 @@
 import { joinQuantity } from "../../../../_ui/quantity/quantity-text";
 import { readTyped } from "../../../../_ui/quantity/read-typed";
 import { findUnit, UNITS } from "../../../../_ui/quantity/units";
+import { readFile } from "../../table/_model/read-file";
 
 export interface PointsReading {
   readonly rows: readonly (readonly [string, string])[];
@@ -67,6 +68,18 @@ export async function readPoints(text: string): Promise<PointsReading> {
   if (rows.length === 0 && problems.length === 0) problems.push("There is no line with two numbers.");
   const note = hasHead ? `Columns taken: ${lines[0].slice(0, 2).join(" and ")}.` : undefined;
   return { rows, problems, ...(note ? { note } : {}) };
+}
+
+/** Reads a file whole or not at all: who uploads one does not see which of its lines are missing. */
+export async function readPointsFile(file: File): Promise<PointsReading> {
+  const content = await readFile(file);
+  if (!content.ok) return { rows: [], problems: [content.reason] };
+  const reading = await readPoints(content.text);
+  if (reading.problems.length > 0) {
+    return { rows: [], problems: reading.problems, note: `Nothing of “${file.name}” was taken.` };
+  }
+  const note = [reading.note, content.note].filter(Boolean).join(" ");
+  return { ...reading, note: note === "" ? undefined : note };
 }
 
 /** What parts the columns in most of the first lines; one bad line must not decide. */

@@ -1,8 +1,7 @@
 "use client";
 
 import { useState } from "react";
-import { readFile } from "../../table/_model/read-file";
-import { type PointsReading, readPoints } from "./read-points";
+import { type PointsReading, readPoints, readPointsFile } from "./read-points";
 
 export interface RowsReading {
   /** What was understood of the last text or file; null before the first. */
@@ -12,7 +11,7 @@ export interface RowsReading {
   readonly restart: () => void;
   /** Takes what can be read of a text while it is written. */
   readonly read: (text: string) => Promise<void>;
-  /** Takes a file, or nothing of it: who uploads one does not see which lines are missing. */
+  /** Takes a file, or nothing of it. */
   readonly take: (file: File) => Promise<void>;
 }
 
@@ -29,18 +28,9 @@ export function useRowsReading(set: (rows: PointsReading["rows"]) => void): Rows
   }
 
   async function take(file: File) {
-    const content = await readFile(file);
-    if (!content.ok) {
-      setNotes({ rows: [], problems: [content.reason] });
-      return;
-    }
-    const reading = await readPoints(content.text);
-    if (reading.problems.length > 0) {
-      setNotes({ ...reading, rows: [], note: `Nothing of “${file.name}” was taken.` });
-      return;
-    }
-    const said = [reading.note, content.note].filter(Boolean).join(" ");
-    setNotes({ ...reading, note: said === "" ? undefined : said });
+    const reading = await readPointsFile(file);
+    setNotes(reading);
+    if (reading.rows.length === 0) return;
     set(reading.rows);
     restart();
   }
