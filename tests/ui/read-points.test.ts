@@ -61,7 +61,7 @@ describe("readPoints", () => {
 });
 
 describe("readPointsFile", () => {
-  const given = (name: string, bytes: string | Buffer) => readPointsFile(new File([bytes], name));
+  const given = (name: string, bytes: BlobPart) => readPointsFile(new File([bytes], name));
 
   it("takes nothing of a file with a line that is no point", async () => {
     expect(await given("torn.csv", "mm;pS/m\n2;1\n3;x\n4\n5;2")).toEqual({
