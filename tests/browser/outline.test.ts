@@ -205,6 +205,16 @@ describe("an outline", () => {
     expect(await page.getByText("#/").count()).toBe(0);
     expect(await violations(page)).toEqual([]);
 
+    // A coordinate that cannot be read says so in its cell, and what holds instead.
+    const cell = page.getByLabel("Vertex 1, x");
+    const stands = await cell.inputValue();
+    await cell.fill("5 kg");
+    await cell.press("Enter");
+    await page.getByText(`This is no length. ${stands} still holds.`).waitFor();
+    await cell.press("Escape");
+    expect(await cell.inputValue()).toBe(stands);
+    expect(await page.getByText("still holds").count()).toBe(0);
+
     // A limit passes by itself; the same attempt is then answered.
     let refused = 0;
     await page.route("**/api/v1/fields", async (route) => {
@@ -278,6 +288,18 @@ describe("an outline", () => {
     await page.getByRole("button", { name: "Cancel" }).click();
     await page.getByText("Cancelled").waitFor();
     await expect.poll(() => deleted).toBe(1);
+
+    // One that the service has lost is told as such.
+    await page.unroute("**/api/v1/fields/fld_x/events");
+    await page.route("**/api/v1/fields/fld_x/events", (route) =>
+      route.fulfill({
+        status: 404,
+        contentType: "application/problem+json",
+        body: JSON.stringify({ title: "Not found", status: 404 }),
+      }),
+    );
+    await page.getByRole("button", { name: "Solve" }).click();
+    await page.getByText("This solution is gone").waitFor();
     await close();
   });
 });

@@ -88,6 +88,13 @@ describe("vertices", () => {
       bend.rings[0].map(({ x, y }) => [x, y]),
     );
   });
+
+  it("change unit around many times and come back to the decimals that were typed", () => {
+    const typed = { ...bend, rings: [[0, 7, 0.1, 12.345, 1e-7].map((x) => ({ x, y: 7 - x }))] };
+    let there = typed as typeof bend;
+    for (const ratio of [0.1, 1 / 2.54, 25.4, 1000, 1e-3 / 0.0254, 0.0254, 1]) there = rescale(there, ratio);
+    expect(there.rings[0].map(({ x }) => x)).toEqual(typed.rings[0].map(({ x }) => x));
+  });
 });
 
 describe("arcs", () => {

@@ -182,8 +182,12 @@ export function addRegion(sketch: Sketch, ring: Ring): Sketch {
 
 /** All coordinates in another unit: converted, not read anew. `ratio` is old unit over new. */
 export function rescale(sketch: Sketch, ratio: number): Sketch {
-  // More digits than are shown, so that there and back is the same number.
-  const digits = (value: number) => Number(value.toPrecision(15));
+  // More digits than are shown, so that there and back is the same number; what rounding alone keeps from a plain
+  // decimal is that decimal, however many units it has been through.
+  const digits = (value: number) => {
+    const plain = tidy(value);
+    return Math.abs(plain - value) <= 4e-15 * Math.abs(value) ? plain : Number(value.toPrecision(15));
+  };
   const scale = (ring: Ring): Ring =>
     ring.map(({ x, y, arc }) => ({
       x: digits(x * ratio),

@@ -91,7 +91,8 @@ export function BoardTools({ tool, setTool, drawTarget, setDrawTarget, readable 
             unit={sketch.unit}
             refuse={(step) => (step > 0 ? null : "The step is greater than 0.")}
             onCommit={(step) => setGrid({ ...grid, step })}
-            className="w-7 medium:min-h-4.5!"
+            className="w-7"
+            inputClass="medium:min-h-4.5"
           />
         </span>
         <Toggle label="Snap" checked={grid.snap} onChange={(snap) => setGrid({ ...grid, snap })} />

@@ -1,6 +1,6 @@
 "use client";
 
-import { type KeyboardEvent, useState } from "react";
+import { type KeyboardEvent, useId, useState } from "react";
 import { LENGTH_UNITS_M, type LengthUnit } from "@/lib/engine/field/outline/length-units";
 import { readTyped } from "../../../_ui/quantity/read-typed";
 import { coordinateText, tidy } from "../_model/sketch";
@@ -13,7 +13,10 @@ interface NumberCellProps {
   readonly unit?: LengthUnit;
   readonly invalid?: boolean;
   readonly disabled?: boolean;
+  /** Its width. */
   readonly className?: string;
+  /** Height on wide screens; the table's where left out. */
+  readonly inputClass?: string;
   /** What may not be taken, as a sentence; null where all is well. */
   readonly refuse?: (value: number) => string | null;
 }
@@ -28,15 +31,17 @@ export function NumberCell(props: NumberCellProps) {
     invalid = false,
     disabled = false,
     className = "w-full",
+    inputClass = "medium:min-h-4",
     refuse,
   } = props;
   const [draft, setDraft] = useState<string | null>(null);
   const [wrong, setWrong] = useState<string | null>(null);
+  const reason = useId();
 
   function commit() {
     if (draft === null) return;
     const number = readNumber(draft, unit);
-    const why = number === null ? "This is no number." : (refuse?.(number) ?? null);
+    const why = number === null ? `This is no ${unit ? "length" : "number"}.` : (refuse?.(number) ?? null);
     if (number === null || why !== null) return setWrong(why);
     setDraft(null);
     setWrong(null);
@@ -52,22 +57,29 @@ export function NumberCell(props: NumberCellProps) {
   }
 
   return (
-    <input
-      aria-label={label}
-      aria-invalid={wrong !== null || invalid ? true : undefined}
-      title={wrong ?? undefined}
-      value={draft ?? coordinateText(value)}
-      disabled={disabled}
-      onChange={(event) => setDraft(event.target.value)}
-      onBlur={commit}
-      onKeyDown={onKeyDown}
-      // Undo is the page's once nothing half-typed stands here.
-      data-cell={draft === null ? "settled" : "draft"}
-      inputMode="text"
-      autoComplete="off"
-      spellCheck={false}
-      className={`min-h-5.5 rounded border border-edge bg-sheet px-0.5 text-end font-mono text-table hover:border-ink disabled:opacity-55 aria-invalid:border-2 aria-invalid:border-oxide medium:min-h-4 ${className}`}
-    />
+    <span className={`inline-block ${className}`}>
+      <input
+        aria-label={label}
+        aria-invalid={wrong !== null || invalid ? true : undefined}
+        aria-describedby={wrong === null ? undefined : reason}
+        value={draft ?? coordinateText(value)}
+        disabled={disabled}
+        onChange={(event) => setDraft(event.target.value)}
+        onBlur={commit}
+        onKeyDown={onKeyDown}
+        // Undo is the page's once nothing half-typed stands here.
+        data-cell={draft === null ? "settled" : "draft"}
+        inputMode="text"
+        autoComplete="off"
+        spellCheck={false}
+        className={`min-h-5.5 w-full rounded border border-edge bg-sheet px-0.5 text-end font-mono text-table hover:border-ink disabled:opacity-55 aria-invalid:border-2 aria-invalid:border-oxide ${inputClass}`}
+      />
+      {wrong === null ? null : (
+        <span id={reason} role="alert" className="block text-small text-oxide">
+          {wrong} {coordinateText(value)} still holds.
+        </span>
+      )}
+    </span>
   );
 }
 

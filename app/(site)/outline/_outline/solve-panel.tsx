@@ -173,6 +173,12 @@ function Trouble({ trouble, current }: { readonly trouble: SolveTrouble; readonl
           <p>The service cannot be reached. The drawing is safe; solve again when it is back.</p>
         </Notice>
       );
+    case "gone":
+      return (
+        <Notice tone="caution" title="This solution is gone">
+          <p>The service no longer has it. The drawing is safe; solve again.</p>
+        </Notice>
+      );
     case "service":
       return <ProblemNotice problem={trouble.problem.problem} />;
   }

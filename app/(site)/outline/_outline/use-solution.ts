@@ -13,6 +13,8 @@ export type SolveTrouble =
   /** A limit or a full queue: the page asks again after so many seconds, null if that would be long. */
   | { readonly kind: "wait"; readonly seconds: number | null; readonly problem: ApiProblem }
   | { readonly kind: "offline" }
+  /** The service knows the solution no longer: it was deleted, or its time is over. */
+  | { readonly kind: "gone" }
   | { readonly kind: "service"; readonly problem: ApiProblem };
 
 export interface SolutionState {
@@ -148,6 +150,7 @@ async function follow(
 
 function troubleOf(failure: unknown): SolveTrouble {
   if (!(failure instanceof ApiProblem)) return { kind: "offline" };
+  if (failure.status === 404) return { kind: "gone" };
   if (failure.status === 422) return { kind: "input", complaints: failure.problem.errors ?? [] };
   if (failure.status === 429 || failure.status === 503) {
     const { retryAfter } = failure;
