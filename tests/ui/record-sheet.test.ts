@@ -3,10 +3,12 @@ import { recordContent } from "@/app/(site)/records/_content/build-content";
 import { readRecordCode, recordCode } from "@/app/(site)/records/_content/record-code";
 import type { Draw } from "@/app/(site)/records/_content/content";
 import { sheetPdf } from "@/app/(site)/records/_sheet/sheet-pdf";
-import { inOutline } from "@/app/(site)/records/_content/open-again";
+import { inNetwork, inOutline } from "@/app/(site)/records/_content/open-again";
 import { networkSvg } from "@/app/(site)/records/_content/network-svg";
 import { outlineSvg, storedOutline } from "@/app/(site)/records/_content/outline-svg";
 import { sketchFromHash } from "@/app/(site)/outline/_model/address";
+import { networkBody } from "@/app/(site)/network/_model/body";
+import { networkFromHash } from "@/app/(site)/network/_model/network";
 import { fieldBody } from "@/app/(site)/outline/_model/field-body";
 import { EMPTY_SKETCH } from "@/app/(site)/outline/_model/start-outlines";
 import {
@@ -262,6 +264,40 @@ describe("a network's record", () => {
     for (const said of ["Tolerances of the elements", "covers every value inside the tolerances"]) {
       expect(paper).toContain(said);
     }
+  });
+});
+
+describe("a network's record, opened again", () => {
+  const asked = {
+    elements: [
+      { name: "bolts", between: ["in", "m"], resistance: { value: "6 uohm", plus: "2 uohm" } },
+      { name: "bar", between: ["m", "out"], request: { shape: "bar", dimensions: BAR.dimensions } },
+    ],
+    ports: ["in", "out"],
+    operating: { temperature: "40 degC", current: "630 A" },
+    requirement: { max: "40 uohm" },
+    uncertainty: { method: "worst-case" },
+  };
+
+  it("has all that was asked", () => {
+    const again = inNetwork(asked);
+    expect(again?.page).toBe("Network");
+    const { pathname, hash } = new URL(again?.href ?? "", "https://rho.example");
+    expect(pathname).toBe("/network");
+    const network = networkFromHash(hash.slice(1));
+    expect(network && networkBody(network, new Map())).toEqual(asked);
+    const result = computeNetwork(
+      { ...asked, elements: asked.elements.slice(0, 1), ports: ["in", "m"] },
+      { material: libraryMaterial },
+    );
+    const content = contentOf({ ...recordOf(BAR), operation: "network", request: asked, result });
+    expect(content.openAgain).toEqual(again);
+  });
+
+  it("is not offered where no address holds it, or the page has no field for it", () => {
+    const many = Array.from({ length: 400 }, (_, k) => ({ ...asked.elements[0], name: `bolt ${k}` }));
+    expect(inNetwork({ ...asked, elements: many })).toBeUndefined();
+    expect(inNetwork({ ...asked, weather: "wet" })).toBeUndefined();
   });
 });
 

@@ -23,7 +23,7 @@ export default function DocsLayout({ children }: { readonly children: ReactNode 
         </details>
         <nav
           aria-label="Docs"
-          className="sticky top-2 hidden max-h-[calc(100dvh-2rem)] gap-2 overflow-y-auto pe-1 wide:grid"
+          className="scroll-shade-down sticky top-2 hidden max-h-[calc(100dvh-2rem)] gap-2 overflow-y-auto pe-1 wide:grid"
         >
           <SearchForm id="docs-search" />
           <Contents groups={groups} />

@@ -1,5 +1,6 @@
 "use client";
 
+import { useEffect, useRef } from "react";
 import { usePathname } from "next/navigation";
 import { SiteLink } from "../../../_ui/site/site-link";
 
@@ -41,9 +42,11 @@ function Entry({
   readonly title: string;
   readonly current: boolean;
 }) {
+  const open = useRef<HTMLSpanElement>(null);
+  useEffect(() => open.current?.scrollIntoView({ block: "nearest" }), []);
   if (current)
     return (
-      <span aria-current="page" className="block py-0.5">
+      <span ref={open} aria-current="page" className="block py-0.5">
         {title}
       </span>
     );

@@ -114,7 +114,26 @@ export function toText(network: Network): string {
   });
 }
 
-/** The inverse; null where the text is none of ours. */
+/** Longest network that stands in an address. */
+const LONGEST_ADDRESS = 6_000;
+
+/** What stands behind the "#" of the page's address; null where the network is too long for one. */
+export function networkHash(network: Network): string | null {
+  const hash = `network=${encodeURIComponent(toText(network))}`;
+  return hash.length <= LONGEST_ADDRESS ? hash : null;
+}
+
+/** The network in a hash; null where it has none of ours. */
+export function networkFromHash(hash: string): Network | null {
+  if (!hash.startsWith("network=")) return null;
+  try {
+    return fromText(decodeURIComponent(hash.slice(8)));
+  } catch {
+    return null;
+  }
+}
+
+/** The inverse of `toText`; null where the text is none of ours. */
 export function fromText(text: string): Network | null {
   try {
     const { elements, ports, drive, temperature, requirement, uncertainty } = JSON.parse(text) as {

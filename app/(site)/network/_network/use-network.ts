@@ -2,12 +2,10 @@
 
 import { useCallback, useEffect, useState } from "react";
 import { replaceAddress } from "../../calculate/replace-address";
-import { fromText, type Network, START, toText } from "../_model/network";
+import { fromText, type Network, networkFromHash, networkHash, START, toText } from "../_model/network";
 
 const KEPT = "rhoform-network";
 const KEEP_MS = 300;
-/** Longest network that stands in the address; a longer one lives in this tab only. */
-const LONGEST_ADDRESS = 6_000;
 
 /** The network of this tab, behind the "#" of the address where it is short enough: a link reproduces it. */
 export function useNetwork(): readonly [Network, (change: (network: Network) => Network) => void] {
@@ -15,9 +13,7 @@ export function useNetwork(): readonly [Network, (change: (network: Network) => 
 
   useEffect(() => {
     const read = () => {
-      const hash = window.location.hash.slice(1);
-      const linked = hash.startsWith("network=") ? fromText(decoded(hash.slice(8))) : null;
-      const found = linked ?? fromText(kept());
+      const found = networkFromHash(window.location.hash.slice(1)) ?? fromText(kept());
       if (found) setNetwork((now) => (toText(now) === toText(found) ? now : found));
     };
     queueMicrotask(read);
@@ -28,15 +24,14 @@ export function useNetwork(): readonly [Network, (change: (network: Network) => 
   useEffect(() => {
     if (network === START) return;
     const timer = setTimeout(() => {
-      const text = toText(network);
       try {
-        window.sessionStorage.setItem(KEPT, text);
+        window.sessionStorage.setItem(KEPT, toText(network));
       } catch {
         // Without a store the address has it.
       }
-      const hash = `network=${encodeURIComponent(text)}`;
-      const address = hash.length <= LONGEST_ADDRESS ? `#${hash}` : "";
-      replaceAddress(`${window.location.pathname}${address}`);
+      // A network too long for the address lives in this tab only.
+      const hash = networkHash(network);
+      replaceAddress(`${window.location.pathname}${hash === null ? "" : `#${hash}`}`);
     }, KEEP_MS);
     return () => clearTimeout(timer);
   }, [network]);
@@ -47,14 +42,6 @@ export function useNetwork(): readonly [Network, (change: (network: Network) => 
 function kept(): string {
   try {
     return window.sessionStorage.getItem(KEPT) ?? "";
-  } catch {
-    return "";
-  }
-}
-
-function decoded(text: string): string {
-  try {
-    return decodeURIComponent(text);
   } catch {
     return "";
   }

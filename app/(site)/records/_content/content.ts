@@ -74,7 +74,7 @@ export type Picture =
 
 /** The page on which the same calculation can be opened again to go on with it. */
 export interface OpenAgain {
-  readonly page: "Calculate" | "Outline";
+  readonly page: "Calculate" | "Outline" | "Network";
   readonly href: string;
 }
 

@@ -17,6 +17,7 @@ import { askedTable } from "./inputs";
 import { materialBlocks } from "./medium";
 import { MOST_DRAWN, networkSvg } from "./network-svg";
 import type { LookUp } from "./of-resistance";
+import { inNetwork } from "./open-again";
 import { plainNumber, typedText, words } from "./typed";
 
 const given = z.record(z.string(), z.unknown());
@@ -59,6 +60,7 @@ export function tellNetwork(request: unknown, result: unknown, lookUp: LookUp): 
       : "The bounds come from all elements at their lowest and all at their highest: a network\u2019s resistance never falls when an element\u2019s rises.";
   return {
     subject: "Network",
+    openAgain: inNetwork(request),
     headline: {
       title: `Resistance from ${ports.join(" to ")}`,
       text: resistance.text,

@@ -7,6 +7,8 @@ import { BARE_UNITS, exampleParameters } from "../../calculate/_model/parameters
 import { PROFILE_FORMS } from "../../calculate/_model/profile-forms";
 import type { ProfileValues } from "../../calculate/_model/profile-starts";
 import { stateQuery } from "../../calculate/_model/variants";
+import { networkHash } from "../../network/_model/network";
+import { readBodyText } from "../../network/_model/read-body";
 import { packedHash, plainHash } from "../../outline/_model/address";
 import { fieldBody } from "../../outline/_model/field-body";
 import { readBody } from "../../outline/_model/read-body";
@@ -68,6 +70,13 @@ export function inOutline(body: unknown): OpenAgain | undefined {
   if (!reading.ok) return undefined;
   const text = JSON.stringify(fieldBody(reading.sketch));
   return { page: "Outline", href: `/outline#${plainHash(text) ?? packedHash(deflateRawSync(text))}` };
+}
+
+/** Undefined where the network page has no field for something that was asked, or no address holds it. */
+export function inNetwork(body: unknown): OpenAgain | undefined {
+  const reading = readBodyText(JSON.stringify(body));
+  const hash = reading.ok ? networkHash(reading.network) : null;
+  return hash === null ? undefined : { page: "Network", href: `/network#${hash}` };
 }
 
 const SPREADS = ["tolerance", "plus", "minus"];
