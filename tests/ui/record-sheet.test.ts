@@ -128,6 +128,37 @@ describe("what a record tells", () => {
     );
   });
 
+  it("gives bare places in a profile their unit, and names what strays in it", () => {
+    const layers = [
+      { thickness: 0.1, value: { value: "58 MS/m", tolerance: "1 %" } },
+      { thickness: "150 mm", value: "30 MS/m" },
+    ];
+    const graded = { coordinate: "length", quantity: "conductivity", profile: { kind: "layers", layers } };
+    const { sections } = contentOf(recordOf({ ...BAR, medium: { graded } }));
+    const table = sections
+      .flatMap(({ blocks }) => blocks)
+      .find((block) => block.kind === "table" && block.label === "Layers");
+    expect(table?.kind === "table" && table.rows.map((row) => row[1])).toEqual(["0.1\u2009m", "150 mm"]);
+    const budget = sections
+      .find(({ id }) => id === "uncertainty")
+      ?.blocks.find(({ kind }) => kind === "table");
+    expect(budget?.kind === "table" && budget.rows.map(([name]) => name)).toEqual([
+      "Profile: layer 1, value",
+      "Width",
+    ]);
+    const arc = findShape("arc-bar");
+    const bell = { kind: "gaussian", peak: "58 MS/m", center: 30, spread: "10 deg", background: "1 MS/m" };
+    const turned = { coordinate: "angle", quantity: "conductivity", profile: bell };
+    const medium = contentOf(
+      recordOf({ ...(arc && exampleRequest(arc)), medium: { graded: turned } }),
+    ).sections.find(({ id }) => id === "medium")?.blocks[0];
+    expect(medium?.kind === "table" && medium.rows.find(([name]) => name === "Centre")).toEqual([
+      "Centre",
+      "30°",
+      "30°",
+    ]);
+  });
+
   it("opens again with the same inputs", () => {
     expect(content.openAgain?.href).toBe(
       "/calculate/bar?length=250mm&width=40mm&width.tolerance=0.1mm&thickness=5mm&material=copper-annealed&temperature=75degC&current=630A&max=1mohm&uncertainty=propagation",

@@ -1,9 +1,10 @@
 /** Parts of an answer that more than one operation has: headline, operating point, checks, uncertainty, sources. */
 import type { z } from "zod";
-import type { boundedResistanceSchema, Check, ResistanceResult } from "@/lib/engine";
+import type { boundedResistanceSchema, Check, ResistanceResult, ShapeEntry } from "@/lib/engine";
 import { bracketText } from "../../../_ui/bracket";
 import { engineering } from "../../calculate/_calculator/answer/engineering";
 import { BOUNDS_MEANING, CHECK_TITLES, PROVENANCE } from "../../calculate/_calculator/answer/words";
+import { inputWords } from "../../calculate/_model/input-words";
 import type { Block, Fact, Headline, Section } from "./content";
 import { plainNumber, words } from "./typed";
 
@@ -93,9 +94,15 @@ interface Part {
 }
 
 /** The range that the tolerances of the inputs span, and what each contributes. */
-export function uncertaintySection(uncertainty: ResistanceResult["uncertainty"]): Section[] {
+export function uncertaintySection(
+  uncertainty: ResistanceResult["uncertainty"],
+  entry: ShapeEntry | undefined,
+): Section[] {
   if (!uncertainty) return [];
-  const parts = uncertainty.contributions.map(({ input, ...part }) => ({ name: inputName(input), ...part }));
+  const parts = uncertainty.contributions.map(({ input, ...part }) => ({
+    name: entry ? inputWords(input, entry).label : input,
+    ...part,
+  }));
   return toleranceSection("Tolerances of the inputs", "Input", uncertainty, parts);
 }
 
@@ -145,11 +152,6 @@ export function toleranceSection(
     });
   }
   return [{ id: "uncertainty", title, blocks }];
-}
-
-/** "dimensions.innerRadius" is "Inner radius". */
-function inputName(path: string): string {
-  return words(path.split(".").at(-1) ?? path);
 }
 
 export function linesSection(id: string, title: string, lines: readonly string[]): Section[] {

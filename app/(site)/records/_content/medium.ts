@@ -1,5 +1,5 @@
 /** The medium of a request, and the materials that went in. */
-import { type QuantityKindName, type Material } from "@/lib/engine";
+import type { Material, QuantityKindName, ShapeEntry } from "@/lib/engine";
 import { PROVENANCE } from "../../calculate/_calculator/answer/words";
 import { PROFILE_FORMS } from "../../calculate/_model/profile-forms";
 import type { Block, Column, Fact } from "./content";
@@ -29,11 +29,11 @@ export const INPUT_COLUMNS: readonly Column[] = [
 export function mediumBlocks(
   medium: Given | undefined,
   media: Readonly<Record<string, Given>> | undefined,
-  names: readonly { readonly name: string; readonly label: string }[] = [],
+  entry?: Pick<ShapeEntry, "media" | "coordinates">,
 ): Block[] {
   const all: (readonly [string, Given])[] = media
     ? Object.entries(media).map(([name, given]) => [
-        names.find((entry) => entry.name === name)?.label ?? words(name),
+        entry?.media.names.find((medium) => medium.name === name)?.label ?? words(name),
         given,
       ])
     : medium
@@ -44,7 +44,7 @@ export function mediumBlocks(
   for (const [label, given] of all) {
     const prefix = label === "" ? "" : `${label}: `;
     for (const [name, value] of Object.entries(given)) {
-      if (name === "graded") gradedRows(prefix, value as Given, rows, behind);
+      if (name === "graded") gradedRows(prefix, value as Given, entry, rows, behind);
       else if (name === "regions") regionRows(value as readonly Given[], rows);
       else rows.push(plainRow(prefix, name, value));
     }
@@ -63,36 +63,53 @@ function sentenceCase(prefix: string, name: string): string {
   return prefix === "" ? name : `${prefix}${name.charAt(0).toLowerCase()}${name.slice(1)}`;
 }
 
-function gradedRows(prefix: string, graded: Given, rows: InputRow[], behind: Block[]): void {
+function gradedRows(
+  prefix: string,
+  graded: Given,
+  entry: Pick<ShapeEntry, "coordinates"> | undefined,
+  rows: InputRow[],
+  behind: Block[],
+): void {
   const profile = (graded.profile ?? {}) as Given;
   const quantity = graded.quantity === "resistivity" ? "resistivity" : "conductivity";
-  rows.push([sentenceCase(prefix, "Varies along"), words(String(graded.coordinate ?? "")).toLowerCase(), ""]);
+  const coordinate = String(graded.coordinate ?? "");
+  const angle = entry?.coordinates.find(({ name }) => name === coordinate)?.unit === "rad";
+  rows.push([sentenceCase(prefix, "Varies along"), words(coordinate).toLowerCase(), ""]);
   if (graded.quantity !== undefined) rows.push([sentenceCase(prefix, "What varies"), quantity, ""]);
-  profileRows(prefix, profile, quantity, rows, behind);
+  profileRows(prefix, profile, { value: quantity, position: angle ? "angle" : "length" }, rows, behind);
+}
+
+interface ProfileKinds {
+  readonly value: QuantityKindName;
+  readonly position: QuantityKindName;
 }
 
 function profileRows(
   prefix: string,
   profile: Given,
-  valueKind: QuantityKindName,
+  kinds: ProfileKinds,
   rows: InputRow[],
   behind: Block[],
 ): void {
   const kind = String(profile.kind);
   rows.push([sentenceCase(prefix, "Profile"), words(kind).toLowerCase(), ""]);
-  if (Array.isArray(profile.layers)) behind.push(layersTable(profile.layers as readonly Given[], valueKind));
+  if (Array.isArray(profile.layers)) behind.push(layersTable(profile.layers as readonly Given[], kinds));
   if (Array.isArray(profile.positions) && Array.isArray(profile.values)) {
-    behind.push(pointsTable(profile.positions, profile.values, valueKind));
+    behind.push(pointsTable(profile.positions, profile.values, kinds));
   }
   for (const [name, value] of Object.entries(profile)) {
     if (name === "kind" || name === "layers" || name === "positions" || name === "values") continue;
     if (name === "profile") {
-      profileRows(`${prefix}Dopant density: `, value as Given, "density", rows, behind);
+      profileRows(`${prefix}Dopant density: `, value as Given, { ...kinds, value: "density" }, rows, behind);
       continue;
     }
     const form = (PROFILE_FORMS[kind] ?? []).find((field) => field.name === name);
     const unit =
-      form?.type === "temperature" ? "temperature" : form?.type === "value" ? valueKind : undefined;
+      form?.type === "temperature"
+        ? "temperature"
+        : form?.type === "value" || form?.type === "position"
+          ? kinds[form.type]
+          : undefined;
     const title = sentenceCase(prefix, form?.label ?? words(name));
     rows.push([title, typedText(value, unit), unit ? siText(value, unit) : ""]);
   }
@@ -101,7 +118,7 @@ function profileRows(
 /** Rows of layers or regions that a sheet of paper takes; the stored request has them all. */
 const MOST_ROWS = 120;
 
-function layersTable(layers: readonly Given[], kind: QuantityKindName): Block {
+function layersTable(layers: readonly Given[], { value: kind, position }: ProfileKinds): Block {
   return {
     kind: "table",
     label: "Layers",
@@ -118,7 +135,7 @@ function layersTable(layers: readonly Given[], kind: QuantityKindName): Block {
       .slice(0, MOST_ROWS)
       .map(({ thickness, value }, index) => [
         String(index + 1),
-        typedText(thickness),
+        typedText(thickness, position),
         typedText(value, kind),
         siText(value, kind),
       ]),
@@ -131,7 +148,7 @@ const MOST_POINTS = 60;
 function pointsTable(
   positions: readonly unknown[],
   values: readonly unknown[],
-  kind: QuantityKindName,
+  { value: kind, position }: ProfileKinds,
 ): Block {
   const step = Math.ceil(positions.length / MOST_POINTS);
   const shown = positions
@@ -151,7 +168,7 @@ function pointsTable(
     ],
     rows: shown.map((index) => [
       String(index + 1),
-      typedText(positions[index]),
+      typedText(positions[index], position),
       typedText(values[index], kind),
       siText(values[index], kind),
     ]),

@@ -79,10 +79,7 @@ export function inputSections(
     {
       id: "medium",
       title: "Medium",
-      blocks: [
-        ...mediumBlocks(request.medium, request.media, entry?.media.names),
-        ...materialBlocks(materials, lookUp),
-      ],
+      blocks: [...mediumBlocks(request.medium, request.media, entry), ...materialBlocks(materials, lookUp)],
     },
     ...(asked.length > 0 ? [{ id: "asked", title: "Asked for", blocks: asked }] : []),
   ];
@@ -111,7 +108,7 @@ export function answerSections(request: StoredRequest, result: AnswerParts): Sec
       title: "Answer at the operating point",
       blocks: [{ kind: "facts", facts: pointFacts(result) }],
     },
-    ...uncertaintySection(result.uncertainty),
+    ...uncertaintySection(result.uncertainty, shape && shapeEntry(shape)),
     ...(how.length > 0 ? [{ id: "steps", title: "How the number came about", blocks: how }] : []),
     ...checksSection(result.checks),
     ...linesSection("assumptions", "Assumptions", result.assumptions),

@@ -2,6 +2,7 @@
 
 import type { ShapeEntry } from "@/lib/engine";
 import type { Uncertainty } from "@/lib/engine/resistance/uncertainty/result-schema";
+import { inputWords } from "../../_model/input-words";
 import { BudgetTable } from "./budget-table";
 
 const METHOD_WORDS: Readonly<Record<Uncertainty["method"], string>> = {
@@ -39,7 +40,7 @@ export function Budget({ uncertainty, entry }: BudgetProps) {
           method={method}
           standard={standard}
           rows={contributions.map(({ input, share, standard: own, sensitivity }) => {
-            const { label, unit } = wordsOf(input, entry);
+            const { label, unit } = inputWords(input, entry);
             return {
               label,
               share,
@@ -51,46 +52,4 @@ export function Budget({ uncertainty, entry }: BudgetProps) {
       )}
     </>
   );
-}
-
-const MEMBERS: Readonly<Record<string, readonly [string, string]>> = {
-  temperature: ["Temperature", "K"],
-  resistivity: ["Resistivity", "Ω·m"],
-  conductivity: ["Conductivity", "S/m"],
-  sheetResistance: ["Sheet resistance", "Ω"],
-  thickness: ["Thickness of the sheet", "m"],
-  temperatureCoefficient: ["Temperature coefficient", "1/K"],
-  referenceTemperature: ["Reference temperature", "K"],
-  material: ["Resistivity of the material, as stated", ""],
-};
-const UNITS: Readonly<Record<string, string>> = { m: "m", "m^2": "m²", deg: "rad", "1": "" };
-
-/** An input's place in the request in the page's words, and its SI unit. */
-function wordsOf(
-  input: string,
-  entry: BudgetProps["entry"],
-): { readonly label: string; readonly unit: string } {
-  const path = input.split(".");
-  const last = path[path.length - 1];
-  if (path[0] === "dimensions") {
-    const dimension = entry.dimensions.find(({ name }) => name === last);
-    return { label: dimension?.label ?? last, unit: UNITS[dimension?.unit ?? "1"] ?? "" };
-  }
-  const profile = path.indexOf("profile");
-  const medium = path[0] === "media" ? entry.media.names.find(({ name }) => name === path[1]) : undefined;
-  const [label, unit] =
-    profile < 0 ? (MEMBERS[last] ?? [last, ""]) : [profileWords(path.slice(profile + 1)), ""];
-  return { label: medium ? `${medium.label}: ${label.toLowerCase()}` : label, unit };
-}
-
-/** "layers.0.value" as "Profile: layer 1, value". */
-function profileWords(path: readonly string[]): string {
-  const places = { layers: "layer", positions: "position", values: "value", table: "point" };
-  const words: string[] = [];
-  for (const part of path) {
-    const number = /^\d+$/.test(part) ? Number(part) + 1 : null;
-    if (number === null) words.push(part in places ? places[part as keyof typeof places] : part);
-    else words.push(`${words.pop() ?? ""} ${number}`.trim());
-  }
-  return `Profile: ${words.join(", ")}`;
 }
