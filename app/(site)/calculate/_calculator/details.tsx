@@ -1,11 +1,12 @@
 "use client";
 
 import dynamic from "next/dynamic";
-import type { ReactNode } from "react";
+import { lazy, type ReactNode, Suspense } from "react";
 import type { ShapeEntry } from "@/lib/engine";
 import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
 import { Loading } from "../../../_ui/states";
 import { Budget } from "./answer/budget";
+import { StepList } from "./answer/step-list";
 import { Checks, Grounds } from "./answer/statements";
 import { WhenSeen } from "./when-seen";
 
@@ -13,10 +14,7 @@ const FlowPlots = dynamic(() => import("./answer/flow-plots").then((module) => m
   ssr: false,
   loading: () => <Loading what="the plots" className="min-h-[640px]" />,
 });
-const Steps = dynamic(() => import("./answer/steps").then((module) => module.Steps), {
-  ssr: false,
-  loading: () => <Loading what="the steps" className="min-h-30" />,
-});
+const Steps = lazy(() => import("./answer/steps").then((module) => ({ default: module.Steps })));
 
 interface DetailsProps {
   readonly entry: ShapeEntry;
@@ -41,8 +39,10 @@ export function Details({ entry, result, formula, graded }: DetailsProps) {
           {formula}
         </div>
         {result?.steps ? (
-          <WhenSeen fallback={<Loading what="the steps" className="min-h-30" />}>
-            <Steps steps={result.steps} />
+          <WhenSeen fallback={<StepList steps={result.steps} />}>
+            <Suspense fallback={<StepList steps={result.steps} />}>
+              <Steps steps={result.steps} />
+            </Suspense>
           </WhenSeen>
         ) : null}
       </section>

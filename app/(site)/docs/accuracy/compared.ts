@@ -35,6 +35,7 @@ export const ROWS: readonly Row[] = table;
 
 /** Groups whose tests are named after a function or after several shapes. */
 const TITLES: Readonly<Record<string, string>> = {
+  "common practice, no source": "Values of common practice, for which no source is at hand",
   asinhIncrease: "Growth of the inverse hyperbolic sine, for electrodes side by side",
   inlineMean: "Mean potential of one segment on another in line with it",
   peak: "Field at its peak",
@@ -45,7 +46,8 @@ const TITLES: Readonly<Record<string, string>> = {
 
 /** What a group compares, as a reader would call it. */
 export function titleOf(group: string): string {
-  const title = findShape(group)?.title ?? TITLES[group] ?? group;
+  // The tests note of which sources the print itself was looked at.
+  const title = findShape(group)?.title ?? TITLES[group] ?? group.replace(" (seen)", "");
   return title.charAt(0).toUpperCase() + title.slice(1);
 }
 
