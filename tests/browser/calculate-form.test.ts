@@ -113,9 +113,9 @@ describe("a quantity's field", () => {
     await page.getByText("Drawn with other dimensions", { exact: true }).waitFor();
     const dimmed = () =>
       page
-        .locator("figure:visible")
+        .locator("figure svg[role=img]:visible")
         .first()
-        .evaluate((figure) => getComputedStyle(figure).opacity);
+        .evaluate((sheet) => getComputedStyle(sheet).opacity);
     expect(Number(await dimmed())).toBeLessThan(0.5);
     await width.fill("1,234");
     await page.getByText(/thousands separator or a decimal comma/).waitFor();
