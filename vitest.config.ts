@@ -62,8 +62,9 @@ export default defineConfig({
           isolate: false,
           include: ["tests/api/**/*.test.ts", "tests/server/**/*.test.ts", "tests/browser/**/*.test.ts"],
           globalSetup: ["tests/support/start-server.ts"],
-          testTimeout: 60_000,
-          hookTimeout: 60_000,
+          // Services and browsers are started and waited for; on a busy machine that takes its time.
+          testTimeout: 180_000,
+          hookTimeout: 180_000,
         },
       },
     ],
