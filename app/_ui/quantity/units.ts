@@ -124,10 +124,10 @@ export const UNITS: Readonly<Record<UnitKind, readonly Unit[]>> = {
   number: [],
 };
 
-/** What the menu starts with where nothing says otherwise. */
-export const FIRST_UNIT: Readonly<Record<UnitKind, string>> = {
-  length: "mm",
-  area: "mm^2",
+/** What a number without unit means to the API. */
+const BARE = {
+  length: "m",
+  area: "m^2",
   angle: "deg",
   temperature: "degC",
   temperatureCoefficient: "1/K",
@@ -139,6 +139,14 @@ export const FIRST_UNIT: Readonly<Record<UnitKind, string>> = {
   current: "A",
   power: "W",
   density: "1/cm^3",
+} as const;
+export const BASE_UNITS: Partial<Record<UnitKind, string>> = BARE;
+
+/** What the menu starts with where nothing says otherwise. */
+export const FIRST_UNIT: Readonly<Record<UnitKind, string>> = {
+  ...BARE,
+  length: "mm",
+  area: "mm^2",
   number: "",
 };
 
@@ -199,20 +207,3 @@ function plainSpelling(text: string): string {
     .replace(/\s+/g, " ")
     .trim();
 }
-
-/** What a number without unit means to the API. */
-export const BASE_UNITS: Partial<Record<UnitKind, string>> = {
-  length: "m",
-  area: "m^2",
-  angle: "deg",
-  temperature: "degC",
-  temperatureCoefficient: "1/K",
-  resistivity: "ohm m",
-  conductivity: "S/m",
-  sheetResistance: "ohm/sq",
-  resistance: "ohm",
-  voltage: "V",
-  current: "A",
-  power: "W",
-  density: "1/cm^3",
-};
