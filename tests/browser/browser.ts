@@ -1,11 +1,13 @@
+import { existsSync } from "node:fs";
 import { type Browser, type BrowserContext, type Page, chromium } from "playwright-core";
+import PACKAGES from "@/lib/cli/chromium.json";
 
 let shared: Promise<Browser> | undefined;
 
 /** One headless Chromium for all tests of a file. */
 export function browser(): Promise<Browser> {
   return (shared ??= chromium.launch({
-    executablePath: "/usr/bin/chromium",
+    executablePath: PACKAGES.map((name) => `/usr/bin/${name}`).find(existsSync),
     args: [
       "--no-sandbox",
       "--disable-gpu",

@@ -104,12 +104,17 @@ export async function settled(page: Page, test: (text: string) => boolean = () =
   throw new Error(`The page does not settle; it shows "${text}".`);
 }
 
-/** The address once it has caught up with the fields. */
+/**
+ * The address once it has caught up with the fields. The page's own clock is waited for: on a busy machine its timers run
+ * late, and ours in the same page run later still.
+ */
 export async function addressOf(page: Page): Promise<string> {
-  let address = "";
-  while (address !== page.url()) {
-    address = page.url();
-    await page.waitForTimeout(600);
-  }
-  return address;
+  return page.evaluate(async () => {
+    let address = "";
+    while (address !== window.location.href) {
+      address = window.location.href;
+      await new Promise((resolve) => setTimeout(resolve, 600));
+    }
+    return address;
+  });
 }
