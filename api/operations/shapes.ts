@@ -54,7 +54,7 @@ export const listShapes = defineOperation({
     },
   },
   errors: [],
-  examples: [{ name: "catalogue", summary: "The whole catalogue", status: 200 }],
+  examples: [{ name: "firstTwo", summary: "The first two shapes", status: 200, query: { limit: "2" } }],
   handler: ({ query: { limit, cursor } }, { url }) => {
     if (cursor === undefined && limit >= catalogue.length) {
       return answer("", () => ({ items: catalogue.map(shapeEntry), next: null }));

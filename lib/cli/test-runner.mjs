@@ -2,7 +2,7 @@
  * `npm test`: sets itself up, then checks formatting, lint, types, generated files and the build, and runs every test.
  * The last line it prints is `N passed, N failed`, where each of those checks counts as one.
  */
-import { spawnSync } from "node:child_process";
+import { spawn, spawnSync } from "node:child_process";
 import { existsSync, mkdtempSync, readFileSync, rmSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
@@ -30,17 +30,36 @@ function ensureChromium() {
 
 const bin = (name) => join("node_modules", ".bin", name);
 
-const CHECKS = [
-  ["format", [bin("prettier"), "--check", "--log-level", "warn", "."]],
-  ["lint", [bin("eslint"), ".", "--max-warnings", "0"]],
-  ["types", [bin("tsc"), "--noEmit", "-p", "."]],
-  ["generated files", [bin("tsx"), "lib/cli/generate.ts", "--check"]],
+/** Checks that do not depend on each other, in lanes that run side by side: each keeps one core busy. */
+const LANES = [
+  [["lint", [bin("eslint"), ".", "--max-warnings", "0"]]],
+  [
+    ["types", [bin("tsc"), "--noEmit", "-p", "."]],
+    ["format", [bin("prettier"), "--check", "--log-level", "warn", "."]],
+    ["generated files", [bin("tsx"), "lib/cli/generate.ts", "--check"]],
+  ],
 ];
 
-/** Runs one check; its output is shown as it comes. */
-function passes(name, [program, ...args]) {
-  console.log(`\n── ${name}`);
-  return spawnSync(program, args, { cwd: ROOT, stdio: ["ignore", "inherit", "inherit"] }).status === 0;
+/** Runs one check; what it says is shown whole once it has ended, so that two do not mingle. */
+function passes([name, [program, ...args]]) {
+  return new Promise((resolve) => {
+    const said = [];
+    const child = spawn(program, args, { cwd: ROOT, stdio: ["ignore", "pipe", "pipe"] });
+    for (const stream of [child.stdout, child.stderr]) stream.on("data", (data) => said.push(data));
+    const end = (passed, text) => {
+      console.log(`\n── ${name}: ${passed ? "passed" : "failed"}${text ? `\n${text}` : ""}`);
+      resolve(passed);
+    };
+    child.on("error", (error) => end(false, error.message));
+    child.on("close", (status) => end(status === 0, Buffer.concat(said).toString().trimEnd()));
+  });
+}
+
+/** Whether each of a lane's checks passes, one after the other. */
+async function runLane(checks) {
+  const results = [];
+  for (const check of checks) results.push(await passes(check));
+  return results;
 }
 
 /** Runs all tests and counts them from vitest's own report. */
@@ -63,7 +82,7 @@ function runTests() {
   }
 }
 
-function main() {
+async function main() {
   process.chdir(ROOT);
   process.env.NEXT_TELEMETRY_DISABLED = "1";
   let passed = 0;
@@ -72,10 +91,9 @@ function main() {
     checkNode();
     ensureInstalled();
     ensureChromium();
-    for (const [name, command] of CHECKS) {
-      if (passes(name, command)) passed += 1;
-      else failed += 1;
-    }
+    const results = (await Promise.all(LANES.map(runLane))).flat();
+    passed += results.filter(Boolean).length;
+    failed += results.filter((result) => !result).length;
     console.log("\n── build");
     ensureBuilt();
     passed += 1;
@@ -90,4 +108,4 @@ function main() {
   process.exit(failed === 0 ? 0 : 1);
 }
 
-main();
+await main();

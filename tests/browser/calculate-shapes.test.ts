@@ -50,7 +50,7 @@ describe.each(catalogue.map((shape) => [shape.id, shape] as const))("%s", (id, s
 });
 
 describe("the page of a shape", () => {
-  it("moves nothing of its own accord while it loads and is scrolled", async () => {
+  it.each([360, 1440])("moves nothing at %i px while it loads and is scrolled", async (width) => {
     const prepare = async (page: Page) => {
       await page.addInitScript(() => {
         const moved: number[] = [];
@@ -60,7 +60,7 @@ describe("the page of a shape", () => {
         }).observe({ type: "layout-shift", buffered: true });
       });
     };
-    const { page, close } = await bench.open("/calculate/cylindrical-shell", { width: 1440, prepare });
+    const { page, close } = await bench.open("/calculate/cylindrical-shell", { width, prepare });
     await page.locator(RESISTANCE).waitFor();
     for (let step = 0; step < 12; step++) {
       await page.evaluate(() => window.scrollBy(0, 450));

@@ -149,6 +149,28 @@ describe("an outline", () => {
     await again.close();
   });
 
+  it("takes rows of coordinates from a spreadsheet, whole or not at all", async () => {
+    const { page, close } = await bench.open("/outline");
+    const x = (k: number) => page.getByLabel(`Vertex ${k}, x`);
+    const paste = (k: number, text: string) =>
+      x(k).evaluate((cell, pasted) => {
+        const clipboardData = new DataTransfer();
+        clipboardData.setData("text/plain", pasted);
+        cell.dispatchEvent(new ClipboardEvent("paste", { clipboardData, bubbles: true, cancelable: true }));
+      }, text);
+    const before = await x(1).inputValue();
+    await paste(1, "50\t0\n50\twide\n");
+    await page.getByText('Nothing was pasted. Line 2, column 2: "wide" is no number.').waitFor();
+    expect(await x(1).inputValue()).toBe(before);
+    await paste(1, "50\t0\n50\t10\n");
+    await page.waitForFunction(
+      () => document.querySelector<HTMLInputElement>('[aria-label="Vertex 2, x"]')?.value === "50",
+    );
+    expect(await x(1).inputValue()).toBe("50");
+    expect(await page.getByText("Nothing was pasted").count()).toBe(0);
+    await close();
+  });
+
   it("says at the place what is wrong, waits out a limit, and takes JSON", async () => {
     const { page, close } = await bench.open("/outline");
     await page.getByRole("button", { name: "JSON", exact: true }).click();

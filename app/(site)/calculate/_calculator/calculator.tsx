@@ -127,7 +127,8 @@ function LiveCalculator(props: CalculatorProps) {
       </div>
       {variants.length > 1 ? <VariantBar state={state} actions={actions} /> : null}
       <AnswerStrip result={answer.result} stale={answer.stale} outdated={trouble !== undefined} />
-      <div className="mt-2 grid items-start gap-x-5 gap-y-3 wide:grid-cols-[24rem_minmax(0,1fr)]">
+      {/* In narrow windows the drawing stands above the fields that come before it: nothing is shown before all is there. */}
+      <div className="mt-2 grid items-start gap-x-5 gap-y-3 max-wide:not-has-[>[data-whole]]:invisible wide:grid-cols-[24rem_minmax(0,1fr)]">
         <form
           key={active}
           aria-label="Inputs"
@@ -156,6 +157,7 @@ function LiveCalculator(props: CalculatorProps) {
           />
           <Particulars answer={answer} className="order-4 wide:order-none" />
         </div>
+        <span hidden data-whole />
       </div>
       {variants.length > 1 ? (
         <section aria-labelledby="compare" className="mt-4">

@@ -67,6 +67,30 @@ export function moveVertex(sketch: Sketch, key: RingKey, index: number, x: numbe
   return withRing(sketch, key, moved);
 }
 
+/**
+ * Gives vertices new places, from `index` on; places beyond the last vertex are appended with straight edges, and what
+ * stood on the closing edge stays on it. Arcs whose ends move keep the angle that they sweep.
+ */
+export function placeVertices(sketch: Sketch, key: RingKey, index: number, points: readonly Point[]): Sketch {
+  const old = ringOf(sketch, key);
+  const n = old.length;
+  const place = (i: number): Place => {
+    const given = points[i - index];
+    return given ? { x: given[0], y: given[1] } : old[i];
+  };
+  const appended = Math.max(0, index + points.length - n);
+  const ring = Array.from({ length: n + appended }, (_, i): Vertex => {
+    const { x, y } = place(i);
+    const arc = old[i]?.arc;
+    if (!arc || (i === 0 && appended > 0)) return { x, y };
+    const before = (i + n - 1) % n;
+    return { x, y, arc: n === 1 ? arc : carried(arc, old[before], old[i], place(before), { x, y }) };
+  });
+  return withParts(withRing(sketch, key, ring), (part) =>
+    part.ring === key && part.edge === n - 1 ? [{ ...part, edge: n - 1 + appended }] : [part],
+  );
+}
+
 interface Place {
   readonly x: number;
   readonly y: number;

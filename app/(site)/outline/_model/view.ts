@@ -74,6 +74,16 @@ export function roundLength(scale: number, most: number): number {
   return tidy(digit * power);
 }
 
+/** Length in drawing units of the board's scale bar. */
+export function scaleBarLength(view: View, size: Size): number {
+  return roundLength(view.scale, Math.min(160, size.width / 3));
+}
+
+/** Where the scale bar and its words begin, in pixels from the left; they stand at the right, on the lower edge. */
+export function scaleBarStart(view: View, size: Size): number {
+  return size.width - scaleBarLength(view, size) * view.scale - 80;
+}
+
 /** A grid step that suits a drawing: a round number near a fortieth of its extent. */
 export function stepFor(box: Box | null): number {
   if (!box) return 1;

@@ -1,9 +1,9 @@
 "use client";
 
 import { type KeyboardEvent, useId, useState } from "react";
-import { LENGTH_UNITS_M, type LengthUnit } from "@/lib/engine/field/outline/length-units";
-import { readTyped } from "../../../_ui/quantity/read-typed";
-import { coordinateText, tidy } from "../_model/sketch";
+import type { LengthUnit } from "@/lib/engine/field/outline/length-units";
+import { readLength } from "../_model/read-length";
+import { coordinateText } from "../_model/sketch";
 
 interface NumberCellProps {
   readonly label: string;
@@ -40,7 +40,7 @@ export function NumberCell(props: NumberCellProps) {
 
   function commit() {
     if (draft === null) return;
-    const number = readNumber(draft, unit);
+    const number = readLength(draft, unit, readerWritesCommas());
     const why = number === null ? `This is no ${unit ? "length" : "number"}.` : (refuse?.(number) ?? null);
     if (number === null || why !== null) return setWrong(why);
     setDraft(null);
@@ -83,15 +83,9 @@ export function NumberCell(props: NumberCellProps) {
   );
 }
 
-/** A typed number in the unit; "1/2 in" in a drawing in mm is 12.7. */
-function readNumber(text: string, unit: LengthUnit | undefined): number | null {
-  const comma =
-    typeof navigator !== "undefined" && new Intl.NumberFormat(navigator.language).format(1.5).includes(",");
-  const typed = readTyped(text, comma);
-  if (typed.kind !== "quantity") return null;
-  const number = Number(typed.number);
-  if (!Number.isFinite(number)) return null;
-  if (typed.unit === "" || typed.unit === unit) return number;
-  if (!unit || !(typed.unit in LENGTH_UNITS_M)) return null;
-  return tidy((number * LENGTH_UNITS_M[typed.unit as LengthUnit]) / LENGTH_UNITS_M[unit]);
+/** Whether the reader's language writes a decimal comma. */
+function readerWritesCommas(): boolean {
+  return (
+    typeof navigator !== "undefined" && new Intl.NumberFormat(navigator.language).format(1.5).includes(",")
+  );
 }

@@ -1,11 +1,12 @@
 "use client";
 
-import { useEffect, useRef, useState } from "react";
+import { type ClipboardEvent, useEffect, useRef, useState } from "react";
 import { Plus, Trash2 } from "lucide-react";
 import { Button } from "../../../_ui/button";
 import { CONTROL } from "../../../_ui/field";
 import { complaintsAt, type PlacedComplaint } from "../_model/complaints";
-import { addRegion, addRing, removeRing } from "../_model/edit";
+import { addRegion, addRing, placeVertices, removeRing } from "../_model/edit";
+import { isTable, readPastedPoints } from "../_model/pasted-points";
 import { roomiest } from "../_model/room";
 import { type Ring, type RingKey, regionKey, ringOf, ringTitle, type Sketch, tidy } from "../_model/sketch";
 import { roundLength } from "../_model/view";
@@ -20,6 +21,7 @@ export function VertexTable() {
   const { sketch, edit, selection, select, complaints } = useOutline();
   const [chosen, setChosen] = useState<RingKey>(0);
   const [page, setPage] = useState(0);
+  const [unread, setUnread] = useState<string | null>(null);
   const [followed, setFollowed] = useState(selection);
   // The table follows what is marked on the board.
   if (selection !== followed) {
@@ -41,8 +43,22 @@ export function VertexTable() {
     if (marked !== null) bringIntoView(frame.current, marked);
   }, [marked]);
 
+  /** Rows of x and y pasted into a cell go from its vertex on; a single number is the cell's own affair. */
+  async function paste(event: ClipboardEvent) {
+    const text = event.clipboardData.getData("text");
+    const row = event.target instanceof Element ? event.target.closest("[data-vertex]") : null;
+    setUnread(null);
+    if (!row || !isTable(text)) return;
+    event.preventDefault();
+    const index = Number(row.getAttribute("data-vertex"));
+    const pasted = await readPastedPoints(text, sketch.unit);
+    if (pasted.ok) edit((sketch) => placeVertices(sketch, key, index, pasted.points));
+    else setUnread(pasted.problem);
+  }
+
   function show(next: RingKey) {
     setChosen(next);
+    setUnread(null);
     setPage(0);
     select(null);
   }
@@ -115,6 +131,7 @@ export function VertexTable() {
           ref={frame}
           tabIndex={0}
           role="group"
+          onPaste={(event) => void paste(event)}
           aria-label={`${ringTitle(key)}: coordinates`}
           className="relative max-h-[26rem] overflow-auto rounded border border-rule bg-sheet"
         >
@@ -139,6 +156,16 @@ export function VertexTable() {
           </table>
         </div>
       )}
+      {ring.length > 0 ? (
+        <p className="mt-0.5 text-small text-ink-soft">
+          Rows of x and y from a spreadsheet can be pasted into a cell: they go from its vertex on.
+        </p>
+      ) : null}
+      {unread ? (
+        <p role="alert" className="mt-0.5 text-small text-oxide">
+          Nothing was pasted. {unread}
+        </p>
+      ) : null}
       {pages > 1 ? (
         <div className="mt-0.5 flex items-center gap-1 text-table">
           <Button disabled={first === 0} onClick={() => setPage(first / PAGE - 1)}>

@@ -29,7 +29,7 @@ export function TableTools(props: TableToolsProps) {
         onChange={(event) => setChosen(event.target.value)}
         className="w-full narrow:w-32"
       />
-      <div className="flex flex-wrap gap-1 pb-3">
+      <div className="flex flex-wrap gap-1 pb-3.75">
         <Button onClick={() => onExample(chosen)}>Use them</Button>
         <a
           href={`/calculate/table/template?shape=${chosen}`}
@@ -48,7 +48,7 @@ export function TableTools(props: TableToolsProps) {
           { value: "comma", label: "0,5" },
         ]}
         onChange={(value) => onDecimalComma(value === "comma")}
-        className="pb-3"
+        className="pb-3.75"
       />
     </div>
   );

@@ -1,6 +1,6 @@
 import { memo } from "react";
 import { coordinateText } from "../../_model/sketch";
-import { type Size, shownStep, toPlane, toScreen, type View } from "../../_model/view";
+import { scaleBarStart, type Size, shownStep, toPlane, toScreen, type View } from "../../_model/view";
 
 interface GridLayerProps {
   readonly view: View;
@@ -29,13 +29,16 @@ export const GridLayer = memo(function GridLayer({ view, size, step, axis }: Gri
   const both = (test: (value: number) => boolean) =>
     verticals(columns.filter(test)) + horizontals(rows.filter(test));
   const axisX = x(0);
+  // Half a label's width in this type; what would touch the scale bar is left out.
+  const half = (value: number) => 3.5 * coordinateText(value).length + 4;
+  const free = scaleBarStart(view, size);
   return (
     <g pointerEvents="none">
       <path d={both((value) => !strong(value))} className="stroke-rule" strokeWidth="1" opacity="0.45" />
       <path d={both(strong)} className="stroke-rule" strokeWidth="1" />
       <g className="fill-ink-soft font-mono text-[11px]">
         {columns.filter(strong).map((value) =>
-          x(value) > 34 && x(value) < size.width - 20 ? (
+          x(value) > 34 && x(value) + half(value) < free ? (
             <text key={value} x={x(value)} y={size.height - 5} textAnchor="middle">
               {coordinateText(value)}
             </text>

@@ -1,5 +1,5 @@
 import { coordinateText } from "../../_model/sketch";
-import { roundLength, type Size, type View } from "../../_model/view";
+import { scaleBarLength, type Size, type View } from "../../_model/view";
 
 /** A round length, to read sizes off. */
 export function ScaleBar({
@@ -11,7 +11,7 @@ export function ScaleBar({
   readonly size: Size;
   readonly unit: string;
 }) {
-  const length = roundLength(view.scale, Math.min(160, size.width / 3));
+  const length = scaleBarLength(view, size);
   const px = length * view.scale;
   return (
     <g transform={`translate(${size.width - px - 10} ${size.height - 9})`} pointerEvents="none">
