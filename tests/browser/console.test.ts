@@ -1,10 +1,10 @@
-import AxeBuilder from "@axe-core/playwright";
 import type { Page } from "playwright-core";
 import { afterAll, beforeAll, expect, it } from "vitest";
 import { newId } from "@/lib/service/identifier";
 import { call, expectProblem, SLEEVE } from "../support/call";
 import { startServer, type TestServer } from "../support/server";
 import { signedInCookie } from "../support/signed-in";
+import { axeViolations } from "./accessibility";
 import { base, closeBrowser, visit, type Visit } from "./browser";
 
 /** A team of its own, so that the tests of others find nothing of it. */
@@ -31,12 +31,7 @@ const open = (
   });
 
 async function accessible(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page })
-    .withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa", "best-practice"])
-    .analyze();
-  expect(
-    violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => String(target)).join(" | ")}`),
-  ).toEqual([]);
+  expect(await axeViolations(page)).toEqual([]);
 }
 
 const compute = (key: string) => call(server, "post", "/resistance", { key, body: SLEEVE });

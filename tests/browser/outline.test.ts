@@ -1,8 +1,8 @@
 import { execFile } from "node:child_process";
 import { promisify } from "node:util";
-import AxeBuilder from "@axe-core/playwright";
 import type { Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
+import { axeViolations } from "./accessibility";
 import { base, closeBrowser } from "./browser";
 import { type Bench, RESISTANCE, startBench } from "./calculation";
 
@@ -29,14 +29,6 @@ async function presser(page: Page): Promise<(x: number, y: number) => Promise<vo
 async function solve(page: Page): Promise<void> {
   await page.getByRole("button", { name: "Solve" }).click();
   await page.getByTestId("picture").waitFor({ timeout: 30_000 });
-}
-
-/** Violations that axe finds on the page as it is. */
-async function violations(page: Page): Promise<readonly string[]> {
-  const { violations: found } = await new AxeBuilder({ page })
-    .withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa", "best-practice"])
-    .analyze();
-  return found.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => String(target)).join(" | ")}`);
 }
 
 /** Its first edge is crossed by four others. */
@@ -103,9 +95,9 @@ describe("an outline", () => {
       .waitFor();
     await page.getByRole("button", { name: "Profile across the middle" }).click();
     await page.getByRole("slider", { name: /Potential along the line/ }).waitFor();
-    expect(await violations(page)).toEqual([]);
+    expect(await axeViolations(page)).toEqual([]);
     await page.emulateMedia({ colorScheme: "dark" });
-    expect(await violations(page)).toEqual([]);
+    expect(await axeViolations(page)).toEqual([]);
     expect(complaints).toEqual([]);
     await close();
   });
@@ -225,7 +217,7 @@ describe("an outline", () => {
     expect(await page.locator("#board svg [data-complaint]").count()).toBe(4);
     expect(await page.locator("tr", { hasText: "cross at" }).count()).toBe(4);
     expect(await page.getByText("#/").count()).toBe(0);
-    expect(await violations(page)).toEqual([]);
+    expect(await axeViolations(page)).toEqual([]);
 
     // A coordinate that cannot be read says so in its cell, and what holds instead.
     const cell = page.getByLabel("Vertex 1, x");

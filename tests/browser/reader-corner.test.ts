@@ -1,8 +1,8 @@
-import AxeBuilder from "@axe-core/playwright";
 import type { Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { startServer, type TestServer } from "../support/server";
 import { signedInCookie } from "../support/signed-in";
+import { axeViolations } from "./accessibility";
 import { base, closeBrowser, visit, type Visit } from "./browser";
 
 let server: TestServer;
@@ -40,8 +40,7 @@ describe("the corner of a page", () => {
       expect(await menu.getByRole("link", { name }).getAttribute("href")).toBe(href);
     }
     expect(await excess(page)).toBe(0);
-    const { violations } = await new AxeBuilder({ page }).include("header").analyze();
-    expect(violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html}`)).toEqual([]);
+    expect(await axeViolations(page, { include: "header" })).toEqual([]);
     await page.keyboard.press("Escape");
     await expect.poll(() => menu.getByRole("button", { name: "Sign out" }).isVisible()).toBe(false);
     await menu.locator("summary").click();

@@ -1,4 +1,3 @@
-import AxeBuilder from "@axe-core/playwright";
 import { execFile } from "node:child_process";
 import { existsSync, mkdtempSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
@@ -13,6 +12,7 @@ import { newId } from "@/lib/service/identifier";
 import { BEND } from "../support/field";
 import { startServer, type TestServer } from "../support/server";
 import { signedInCookie } from "../support/signed-in";
+import { axeViolations } from "./accessibility";
 import { base, closeBrowser, visit, type Visit } from "./browser";
 import { alive } from "./calculation";
 
@@ -231,10 +231,7 @@ describe("a record", () => {
     }
 
     await page.setViewportSize({ width: 360, height: 800 });
-    const { violations } = await new AxeBuilder({ page }).exclude("nextjs-portal").analyze();
-    expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => String(target))}`)).toEqual(
-      [],
-    );
+    expect(await axeViolations(page)).toEqual([]);
     const excess = await page.evaluate(
       () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
     );
