@@ -149,6 +149,8 @@ describe("the builder", () => {
     const { id } = publishedWidget(server, { tolerances: OPEN_LENGTH }, { team });
     const { page, close } = await openAs(team, `/console/embeds/${id}`, 360);
     await page.frameLocator("iframe").getByTestId("resistance").waitFor(LONG);
+    // The preview begins with a width that the screen has room for.
+    await page.getByRole("group", { name: "Frame of 320 px" }).waitFor(LONG);
     expect(await axeViolations(page, { exclude: "iframe" })).toEqual([]);
     expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(360);
     await page.goto(`${base()}/console/embeds`);

@@ -1,6 +1,6 @@
 "use client";
 
-import { useEffect, useRef, useState } from "react";
+import { useEffect, useRef, useState, useSyncExternalStore } from "react";
 import { Segmented } from "../../../_ui/segmented";
 
 interface PreviewProps {
@@ -22,9 +22,20 @@ const THEMES = [
 ] as const;
 type Theme = (typeof THEMES)[number]["value"];
 
+function followWindow(onChange: () => void): () => void {
+  window.addEventListener("resize", onChange);
+  return () => window.removeEventListener("resize", onChange);
+}
+
 /** The saved version in a real frame, as pages show it; anew with every save. */
 export function Preview({ embedId, version, savedAt }: PreviewProps) {
-  const [width, setWidth] = useState<Width>("480");
+  const [chosen, setChosen] = useState<Width>();
+  const roomy = useSyncExternalStore(
+    followWindow,
+    () => window.innerWidth >= 560,
+    () => true,
+  );
+  const width = chosen ?? (roomy ? "480" : "320");
   const [theme, setTheme] = useState<Theme>("light");
   const [height, setHeight] = useState(420);
   const frame = useRef<HTMLIFrameElement>(null);
@@ -43,7 +54,7 @@ export function Preview({ embedId, version, savedAt }: PreviewProps) {
   return (
     <section aria-label="Preview">
       <div className="mb-1 flex flex-wrap items-end gap-2">
-        <Segmented label="Width, px" value={width} options={WIDTHS} onChange={setWidth} />
+        <Segmented label="Width, px" value={width} options={WIDTHS} onChange={setChosen} />
         <Segmented label="Page around" value={theme} options={THEMES} onChange={setTheme} />
       </div>
       <div
