@@ -91,12 +91,13 @@ export async function choosePassword(
   const person = transact(db, () => {
     const { link, person } = followLink(db, secret, PASSWORD_LINKS, now);
     const invited = link.kind === "invitation";
-    updatePerson(db, person.id, { passwordHash, ...(invited && name ? { name } : {}) });
+    const calledNow = invited && name ? name : person.name;
+    updatePerson(db, person.id, { passwordHash, name: calledNow });
     voidLinks(db, person.id, now);
     endSessionsOf(db, person.id, now);
     appendActivity(
       db,
-      personAs(person, call),
+      personAs({ ...person, name: calledNow }, call),
       {
         action: invited ? "invitation.accept" : "password.reset",
         teamId: null,
