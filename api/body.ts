@@ -1,4 +1,5 @@
 import type { z } from "zod";
+import { pointerTo } from "@/lib/engine";
 import { type Complaint, Refusal } from "@/lib/service/refusal";
 import { decodeText } from "./decode-text";
 import { bodyComplaints } from "./issues";
@@ -150,8 +151,9 @@ function read(readers: BodyReaders, body: ReceivedBody, query: URLSearchParams):
   const text = decodeText(body.bytes);
   const other = readers.others?.[body.mediaType];
   if (other) return other.read(text, query);
+  let value: unknown;
   try {
-    return JSON.parse(text.startsWith("\uFEFF") ? text.slice(1) : text);
+    value = JSON.parse(text.startsWith("\uFEFF") ? text.slice(1) : text);
   } catch (error) {
     const place = /position \d+(?: \(line \d+ column \d+\))?/.exec(
       error instanceof Error ? error.message : "",
@@ -161,4 +163,29 @@ function read(readers: BodyReaders, body: ReceivedBody, query: URLSearchParams):
       `The body is not JSON${place ? `: reading stopped at ${place[0]}` : ""}.`,
     );
   }
+  if (MAY_NAME_PROTOTYPE.test(text)) refusePrototypes(value);
+  return value;
+}
+
+/** The name itself, or a letter of it written as an escape. */
+const MAY_NAME_PROTOTYPE = /__proto__|\\u00/i;
+
+/**
+ * Refuses members called `__proto__`. Schemas and copies of objects pass over just this name, so it would be neither
+ * used nor told, and a record would keep it.
+ */
+function refusePrototypes(body: unknown): void {
+  const errors: Complaint[] = [];
+  // Not by recursion: a body may be nested deeper than the stack.
+  const open: (readonly [unknown, string])[] = [[body, "#"]];
+  for (let next = open.pop(); next; next = open.pop()) {
+    const [value, pointer] = next;
+    if (typeof value !== "object" || value === null) continue;
+    for (const [name, member] of Object.entries(value)) {
+      if (name === "__proto__") {
+        errors.push({ pointer: pointerTo(pointer, name), detail: "is not known here." });
+      } else if (typeof member === "object") open.push([member, pointerTo(pointer, name)]);
+    }
+  }
+  if (errors.length > 0) throw bodyRefusal(errors.slice(0, 50));
 }

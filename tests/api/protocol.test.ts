@@ -3,7 +3,7 @@ import { connect } from "node:net";
 import request from "supertest";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { registry } from "@/api/registry";
-import { call, expectProblem, SLEEVE } from "../support/call";
+import { call, expectProblem, places, SLEEVE } from "../support/call";
 import { startServer, type TestServer } from "../support/server";
 
 let server: TestServer;
@@ -41,6 +41,22 @@ describe("400", () => {
       .serialize((body) => body)
       .send(Buffer.from([0x22, 0xff, 0xfe, 0x22]));
     expectProblem(response, 400, "malformed-json");
+  });
+});
+
+describe("a member that schemas pass over", () => {
+  const deep = "[".repeat(5000) + "]".repeat(5000);
+
+  test.each([
+    ["as it is", `"__proto__":${deep}`],
+    ["in escapes", String.raw`"__\u0070roto\u005F_":1`],
+  ])("422 for __proto__ %s, at its place", async (_, member) => {
+    const element = { name: "a", between: ["in", "out"], resistance: 1 };
+    const body = { elements: [element], ports: ["in", "out"], record: { label: "kept" } };
+    const text = JSON.stringify(body).replace('"resistance":1', `"resistance":1,${member}`);
+    const response = await call(server, "post", "/networks", { key, body: text });
+    expectProblem(response, 422, "invalid-input");
+    expect(places(response)).toEqual(["#/elements/0/__proto__"]);
   });
 });
 
