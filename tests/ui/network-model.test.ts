@@ -252,6 +252,13 @@ describe("the drawing", () => {
     for (const { x, y } of nodes) expect(x > 0 && x < width && y > 0 && y < height).toBe(true);
   });
 
+  test("runs on from a node that is given as both ports", () => {
+    const { nodes } = layOut({ ...START, ports: ["in", "in"] });
+    const x = ["in", "joint", "lug", "out"].map((name) => nodes.find((node) => node.name === name)?.x ?? NaN);
+    expect(x).toEqual([...x].sort((a, b) => a - b));
+    expect(new Set(x).size).toBe(4);
+  });
+
   test("holds whatever is typed: islands, loops, ports that are no nodes, nothing at all", () => {
     const odd = {
       ...START,

@@ -159,7 +159,7 @@ function layOutPart(
   };
 }
 
-/** Between which nodes a part runs: from port to port, or from one end to the one farthest from it. */
+/** Between which nodes a part runs: from port to another port, or from one end to the one farthest from it. */
 function endsOf(
   neighbours: readonly (readonly number[])[],
   first?: number,
@@ -169,6 +169,7 @@ function endsOf(
     const steps = stepsFrom(neighbours, from);
     return steps.reduce((best: number, step, k) => ((step ?? 0) > (steps[best] ?? 0) ? k : best), from);
   };
+  if (first !== undefined && first === second) return [first, farthest(first)];
   if (first !== undefined) return [first, second ?? farthest(first)];
   if (second !== undefined) return [farthest(second), second];
   return [0, farthest(0)];

@@ -70,12 +70,15 @@ export function NetworkDrawing({ network, result, answers, stale, focused, onPic
         })}
         {layout.nodes.map(({ name, x, y }, k) => {
           const voltage = voltages.get(name);
-          const look = k === 0 ? "fill-copper" : k === 1 ? "fill-verdigris" : "fill-ink";
+          // One name for both ports is one node; no other stands for the second.
+          const second = k === 1 && name === network.ports[1].trim();
+          const port = k === 0 || second;
+          const look = second ? "fill-verdigris" : port ? "fill-copper" : "fill-ink";
           return (
             <g key={name}>
-              <circle cx={x} cy={y} r={k < 2 ? 7 : 4.5} className={look} />
-              {labelled || k < 2 ? <Label x={x} y={y - 14} text={name} strong /> : null}
-              {voltage !== undefined && (labelled || k < 2) ? (
+              <circle cx={x} cy={y} r={port ? 7 : 4.5} className={look} />
+              {labelled || port ? <Label x={x} y={y - 14} text={name} strong /> : null}
+              {voltage !== undefined && (labelled || port) ? (
                 <Label x={x} y={y + 23} text={formatQuantity(voltage, "volt", { digits: 4 })} mono />
               ) : null}
             </g>
