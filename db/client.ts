@@ -1,4 +1,4 @@
-import { mkdirSync } from "node:fs";
+import { closeSync, mkdirSync, openSync } from "node:fs";
 import { dirname, join } from "node:path";
 import Sqlite from "better-sqlite3";
 import { type BetterSQLite3Database, drizzle } from "drizzle-orm/better-sqlite3";
@@ -12,7 +12,11 @@ export type Database = BetterSQLite3Database & { readonly $client: Sqlite.Databa
  * another process (a shell command) is waited for up to five seconds.
  */
 export function openDatabase(path: string): Database {
-  if (path !== ":memory:") mkdirSync(dirname(path), { recursive: true });
+  if (path !== ":memory:") {
+    // Whoever else has an account on the machine reads no keys' digests, people and records; the log files follow suit.
+    mkdirSync(dirname(path), { recursive: true, mode: 0o700 });
+    closeSync(openSync(path, "a", 0o600));
+  }
   const client = new Sqlite(path);
   client.pragma("journal_mode = WAL");
   client.pragma("busy_timeout = 5000");

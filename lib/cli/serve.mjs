@@ -1,5 +1,6 @@
 /** The web server of the built application, in this process, so that a signal sent to it reaches it. */
 import { createServer } from "node:http";
+import { followParent } from "./follow-parent.mjs";
 import { ROOT } from "./setup.mjs";
 
 /** How long running requests may take to end after a signal, ms. */
@@ -48,15 +49,4 @@ export async function serve({ host, port }) {
     server.listen(port, host, resolve);
   });
   return server;
-}
-
-/** npm passes a signal on to nobody and just ends: whoever stopped it meant us. */
-function followParent(stop) {
-  const parent = process.ppid;
-  const timer = setInterval(() => {
-    if (process.ppid === parent) return;
-    clearInterval(timer);
-    stop();
-  }, 500);
-  timer.unref();
 }

@@ -108,15 +108,20 @@ const CLIENTS = join(ROOT, "dist", "clients");
 /** Builds the pages if their sources changed since the last build. */
 export function ensureBuilt() {
   const hash = hashSources();
+  if (isBuilt(hash)) return;
+  console.error("Building …");
+  build(hash);
+}
+
+/** Whether what is built comes from the sources as they are. */
+export function isBuilt(hash = hashSources()) {
   const built = [
     STAMP,
     join(ROOT, ".next", "BUILD_ID"),
     join(ROOT, "dist", "workers", "field-worker.mjs"),
     CLIENTS,
   ].every((path) => existsSync(path));
-  if (built && readFileSync(STAMP, "utf8") === hash) return;
-  console.error("Building …");
-  build(hash);
+  return built && readFileSync(STAMP, "utf8") === hash;
 }
 
 /** Builds in any case, and remembers from what. */

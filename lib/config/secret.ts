@@ -8,7 +8,7 @@ import { join } from "node:path";
  */
 export function keptSecret(dataFolder: string): string {
   const path = join(dataFolder, "secret");
-  mkdirSync(dataFolder, { recursive: true });
+  mkdirSync(dataFolder, { recursive: true, mode: 0o700 });
   try {
     writeFileSync(path, `${randomBytes(32).toString("base64url")}\n`, { flag: "wx", mode: 0o600 });
   } catch (error) {

@@ -91,6 +91,28 @@ test("SIGTERM ends it with 0 and leaves one database file", async () => {
   expect(await exit).toBe(0);
 });
 
+test("ends when the npm that started it is stopped", async () => {
+  const npm = spawn("npm", ["run", "api"], {
+    env: { ...process.env, RHOFORM_DATA: folder, RHOFORM_LOG: "off", PORT: "0" },
+    stdio: ["ignore", "pipe", "inherit"],
+  });
+  const address = await new Promise<string>((resolve) => {
+    let printed = "";
+    npm.stdout.on("data", (data) => {
+      const found = /http:\/\/[\d.]+:\d+/.exec((printed += String(data)));
+      if (found) resolve(found[0]);
+    });
+  });
+  const state = () =>
+    fetch(`${address}/api/v1/health`).then(
+      () => "answers",
+      () => "gone",
+    );
+  expect(await state()).toBe("answers");
+  npm.kill("SIGTERM");
+  await expect.poll(state, { timeout: 30_000 }).toBe("gone");
+});
+
 test("a team is made once, with a short name", () => {
   newKey();
   for (const argv of [
