@@ -51,7 +51,7 @@ export default function Home() {
           {NEXT.map(({ href, title, text }) => (
             <li key={href}>
               <h3>
-                <SiteLink href={href} className="link">
+                <SiteLink href={href} className="link inline-flex min-h-5.5 items-center medium:min-h-0">
                   {title}
                 </SiteLink>
               </h3>

@@ -15,7 +15,7 @@ export function Help({ about, text }: HelpProps) {
       <Popover.Trigger
         type="button"
         aria-label={`Help: ${about}`}
-        className="relative grid size-2.5 cursor-pointer place-items-center rounded-full! border border-edge text-small leading-none text-ink-soft before:absolute before:-inset-1.5 before:content-[''] hover:border-ink hover:text-ink aria-expanded:border-ink aria-expanded:bg-ink aria-expanded:text-paper"
+        className="relative grid size-2.5 cursor-pointer place-items-center rounded-full! border border-edge text-small leading-none text-ink-soft before:absolute before:-inset-[13px] before:content-[''] hover:border-ink hover:text-ink aria-expanded:border-ink aria-expanded:bg-ink aria-expanded:text-paper"
       >
         ?
       </Popover.Trigger>

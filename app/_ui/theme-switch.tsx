@@ -20,7 +20,7 @@ export function ThemeSwitch({ initial }: { readonly initial: Theme }) {
         <label
           key={option}
           title={THEME_LOOKS[option].label}
-          className="relative grid size-4 cursor-pointer place-items-center text-ink-soft hover:text-ink has-checked:bg-ink has-checked:text-paper has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-verdigris"
+          className="relative grid h-5.5 w-4 cursor-pointer place-items-center text-ink-soft hover:text-ink has-checked:bg-ink has-checked:text-paper has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-verdigris medium:h-4"
         >
           <input
             type="radio"

@@ -43,7 +43,7 @@ export function ToastArea({ children }: { readonly children: ReactNode }) {
           <Primitive.Root
             key={id}
             onOpenChange={(open) => !open && drop(id)}
-            className="flex items-center gap-2 rounded border border-ink bg-ink py-0.5 ps-2 pe-0.5 text-table text-paper"
+            className="pointer-events-none! flex items-center gap-2 rounded border border-ink bg-ink py-0.5 ps-2 pe-0.5 text-table text-paper [&_button]:pointer-events-auto"
           >
             <Primitive.Description className="grow py-1">{text}</Primitive.Description>
             {undo ? (
@@ -63,7 +63,8 @@ export function ToastArea({ children }: { readonly children: ReactNode }) {
             </Primitive.Close>
           </Primitive.Root>
         ))}
-        <Primitive.Viewport className="fixed inset-x-2 bottom-2 z-50 mx-auto flex max-w-[28rem] flex-col gap-1 outline-none" />
+        {/* What lies under a message can be pressed: only its buttons take presses. */}
+        <Primitive.Viewport className="pointer-events-none fixed inset-x-2 bottom-2 z-50 mx-auto flex max-w-[28rem] flex-col gap-1 outline-none" />
       </Primitive.Provider>
     </Context>
   );

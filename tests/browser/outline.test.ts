@@ -141,6 +141,25 @@ describe("an outline", () => {
     await again.close();
   });
 
+  it("is pressed under a message, whose Undo brings the drawing before back also after further steps", async () => {
+    const { page, close } = await bench.open("/outline");
+    const x = page.getByLabel("Vertex 1, x");
+    expect(await x.inputValue()).toBe("40");
+    await page.getByLabel("Begin with").selectOption("An empty board");
+    const message = page.getByRole("listitem").filter({ hasText: "has taken the place of your drawing" });
+    await message.waitFor();
+    const takesPresses = (part: Element) => getComputedStyle(part).pointerEvents !== "none";
+    expect(await message.evaluate(takesPresses)).toBe(false);
+    const press = await presser(page);
+    await press(0, 0);
+    await press(30, 0);
+    await message.getByRole("button", { name: "Undo" }).click();
+    await page.waitForFunction(
+      () => document.querySelector<HTMLInputElement>('[aria-label="Vertex 1, x"]')?.value === "40",
+    );
+    await close();
+  });
+
   it("takes rows of coordinates from a spreadsheet, whole or not at all", async () => {
     const { page, close } = await bench.open("/outline");
     const x = (k: number) => page.getByLabel(`Vertex ${k}, x`);

@@ -94,3 +94,20 @@ describe.each([360, 768, 1024, 1440])("at %i px", (width) => {
     expect(places[0]).toEqual(places[1]);
   });
 });
+
+it.each([openAs, (path: string, width: number) => visit(path, { width })])(
+  "what is pressed in header, trail and footer is 44 px high at phone width (%#)",
+  async (open) => {
+    const { page, close } = await open("/calculate/bar", 360);
+    const parts = page.locator(":is(header, footer, nav[aria-label=Breadcrumb]) :is(a, summary, label)");
+    await parts.first().waitFor();
+    const heights = await parts.evaluateAll((all) =>
+      all
+        .filter((part) => part.checkVisibility())
+        .map((part) => ({ name: part.textContent, height: part.getBoundingClientRect().height })),
+    );
+    expect(heights.length).toBeGreaterThan(10);
+    expect(heights.filter(({ height }) => height < 44)).toEqual([]);
+    await close();
+  },
+);

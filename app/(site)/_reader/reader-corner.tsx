@@ -10,7 +10,7 @@ export async function ReaderCorner() {
     return (
       <SiteLink
         href="/sign-in"
-        className="flex min-h-4 items-center rounded text-table text-ink-soft hover:text-ink hover:underline"
+        className="flex min-h-5.5 items-center rounded text-table text-ink-soft hover:text-ink hover:underline medium:min-h-4"
       >
         Sign in
       </SiteLink>

@@ -29,8 +29,11 @@ export function SiteFrame({ theme, reader, children }: SiteFrameProps) {
         Skip to content
       </a>
       <header className="border-b border-rule print:hidden">
-        <div className="mx-auto flex max-w-page flex-wrap items-center justify-between gap-x-2 gap-y-0.5 px-2 py-1.5 medium:gap-x-3 medium:px-4">
-          <Link href="/" className="flex items-center gap-1 rounded text-lead font-semibold tracking-tight">
+        <div className="mx-auto flex max-w-page flex-wrap items-center justify-between gap-x-2 px-2 py-0.5 medium:gap-x-3 medium:gap-y-0.5 medium:px-4 medium:py-1.5">
+          <Link
+            href="/"
+            className="flex min-h-5.5 items-center gap-1 rounded text-lead font-semibold tracking-tight medium:min-h-0"
+          >
             <Mark className="h-2.5 w-3.5" />
             Rhoform
           </Link>
@@ -42,7 +45,7 @@ export function SiteFrame({ theme, reader, children }: SiteFrameProps) {
               <SiteLink
                 key={href}
                 href={href}
-                className="rounded py-0.5 text-ink-soft hover:text-ink hover:underline"
+                className="flex min-h-5.5 items-center rounded py-0.5 text-ink-soft hover:text-ink hover:underline medium:min-h-0"
               >
                 {label}
               </SiteLink>
@@ -66,9 +69,13 @@ export function SiteFrame({ theme, reader, children }: SiteFrameProps) {
           <p className="max-w-prose">
             Results are DC resistances under the stated assumptions, and no proof of compliance.
           </p>
-          <nav aria-label="More" className="flex gap-x-2.5">
+          <nav aria-label="More" className="-my-1.5 flex gap-x-2.5 medium:my-0">
             {FOOTER.map(({ href, label }) => (
-              <Link key={href} href={href} className="rounded hover:text-ink hover:underline">
+              <Link
+                key={href}
+                href={href}
+                className="flex min-h-5.5 items-center rounded hover:text-ink hover:underline medium:min-h-0"
+              >
                 {label}
               </Link>
             ))}

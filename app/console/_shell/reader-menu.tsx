@@ -54,7 +54,7 @@ export function ReaderMenu({ name, email, teams, team }: ReaderMenuProps) {
     <details ref={menu} className="relative min-w-0">
       <summary
         aria-label={`Signed in as ${name}`}
-        className="flex min-h-4 cursor-pointer list-none items-center gap-0.5 rounded text-table text-ink-soft hover:text-ink [&::-webkit-details-marker]:hidden"
+        className="flex min-h-5.5 cursor-pointer list-none items-center gap-0.5 rounded text-table text-ink-soft hover:text-ink medium:min-h-4 [&::-webkit-details-marker]:hidden"
       >
         <CircleUserRound aria-hidden size={16} className="shrink-0" />
         <span className="max-w-[6ch] truncate narrow:max-w-[12ch] medium:max-w-[18ch]">{name}</span>

@@ -100,5 +100,8 @@ body { margin: 0; background: var(--paper); color: var(--ink); font-family: "Spl
 .frame-title a { color: var(--verdigris); text-decoration: underline; text-underline-offset: 0.2em; }
 .frame-note { padding: 0 16px; }
 @media (min-width: 768px) { .frame, .frame-title { padding-inline: 32px; } }
-@media (max-width: 767px) { .frame nav { order: 1; flex-basis: 100%; } .frame nav + a { margin-inline-start: auto; } }
+@media (max-width: 767px) { .frame { padding-block: 4px; gap: 0 12px; } .frame a.frame-reader { max-width: 9ch; }
+  .frame a, .frame [aria-current] { display: flex; align-items: center; min-height: 44px; }
+  .frame-theme label { height: 44px; }
+  .frame nav { order: 1; flex-basis: 100%; } .frame nav + a { margin-inline-start: auto; } }
 `;

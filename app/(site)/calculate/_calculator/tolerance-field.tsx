@@ -33,7 +33,7 @@ export function ToleranceButton({ form, name, label, temperature = false }: Tole
       type="button"
       aria-label={`Give ${label.toLowerCase()} a tolerance`}
       title="Give a tolerance"
-      className="relative grid size-2.5 cursor-pointer place-items-center rounded border border-edge font-mono text-small leading-none text-ink-soft before:absolute before:-inset-1.5 before:content-[''] hover:border-ink hover:text-ink"
+      className="relative grid size-2.5 cursor-pointer place-items-center rounded border border-edge font-mono text-small leading-none text-ink-soft before:absolute before:-inset-[13px] before:content-[''] hover:border-ink hover:text-ink"
       onClick={() =>
         change({
           [`${name}.tolerance`]: start,

@@ -29,10 +29,13 @@ export function PageTools({ state, onReplace }: PageToolsProps) {
   const [json, setJson] = useState(false);
   const toast = useToast();
 
+  // Also after further steps, which a step back would take first.
+  const undoReplacing = () => onReplace(sketch);
+
   function begin(id: string) {
     onReplace(id === "empty" ? EMPTY_SKETCH : startSketch(id));
     const title = START_OUTLINES.find((start) => start.id === id)?.title ?? "An empty board";
-    toast(`“${title}” has taken the place of your drawing. Undo brings yours back.`, { undo });
+    toast(`“${title}” has taken the place of your drawing. Undo brings yours back.`, { undo: undoReplacing });
   }
 
   async function copyLink() {
@@ -50,7 +53,7 @@ export function PageTools({ state, onReplace }: PageToolsProps) {
     if (!reading.ok) return reading.complaints;
     setJson(false);
     onReplace(reading.sketch);
-    toast("The drawing is taken over.", { undo });
+    toast("The drawing is taken over.", { undo: undoReplacing });
     return [];
   }
 
