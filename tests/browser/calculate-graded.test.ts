@@ -100,8 +100,19 @@ describe("the profile editor", () => {
     await page.getByRole("button", { name: "Move layer 2 up" }).click();
     await settled(page, (text) => text !== ordered);
     await agrees(page);
-    await page.getByRole("button", { name: "Remove layer 3" }).click();
+    await page.getByRole("button", { name: "Remove layer 3" }).press("Enter");
     await page.getByText(/Together 2 mm of 3 mm/).waitFor();
+    // A button that is pressed away leaves the keyboard beside it.
+    const focused = () =>
+      page.evaluate(() => {
+        const { activeElement: at } = document;
+        return at?.getAttribute("aria-label") ?? at?.textContent?.trim();
+      });
+    await expect.poll(focused).toBe("Remove layer 2");
+    await page.getByRole("button", { name: "Scale to fit" }).press("Enter");
+    await expect.poll(focused).toBe("Together 3 mm of 3 mm");
+    await page.getByRole("button", { name: "Remove layer 2" }).press("Enter");
+    await expect.poll(focused).toBe("Layer");
     await close();
   });
 
@@ -132,6 +143,10 @@ describe("the profile editor", () => {
     await page.getByLabel("Points, one a line").fill(rows.join("\n"));
     await page.getByText("600 points").waitFor();
     const shown = await agrees(page);
+    // Its call is copied whole, but the page stays one that can be scrolled.
+    await page.getByText(/^1,?\d{3} more lines are not shown; Copy takes them all\.$/).waitFor();
+    const lines = await page.locator("pre").first().textContent();
+    expect(lines?.split("\n")).toHaveLength(200);
     const link = await addressOf(page);
     expect(new URL(link).hash).toContain("profile.table=");
     await close();

@@ -1,11 +1,12 @@
 "use client";
 
-import { type ReactNode, useState } from "react";
+import { type ReactNode, useId, useState } from "react";
 import { ArrowUp, Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
 import { ERROR_LINE } from "../../../../_ui/field";
 import { FileButton } from "../../../../_ui/file-button";
 import { readRows, writeRows } from "../../_model/profile-forms";
+import { focusSoon } from "../compare/focus";
 import { useForm } from "../form-context";
 import { spanText } from "../../_model/profile-starts";
 import { baseValue } from "../../_model/value-texts";
@@ -23,6 +24,7 @@ const TOLERANCE = 1e-9;
 /** Layers from the coordinate's start to its end, one row each. */
 export function LayersTable({ name, site }: { readonly name: string; readonly site: FieldSite }) {
   const { parameters, change, errorAt } = useForm();
+  const id = useId();
   const [asText, setAsText] = useState(false);
   const rows = readRows(parameters[name] ?? "");
   const kind = positionKind(site.span);
@@ -42,11 +44,18 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
     set(next);
   }
 
+  function remove(index: number) {
+    const last = rows.length - 2;
+    set(rows.filter((_, i) => i !== index));
+    focusSoon(last > 0 ? `${id}-remove-${Math.min(index, last)}` : `${id}-add`);
+  }
+
   function scaleToFit() {
     if (sum === null || !site.span) return;
     const { span } = site;
     restart();
     set(rows.map(([, value], i) => [spanText(((sizes[i] ?? 0) * span.extent) / sum, span), value] as const));
+    focusSoon(`${id}-sum`);
   }
 
   const long = rows.length > MOST_ROWS_SHOWN;
@@ -63,7 +72,14 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
             void read(text);
           }}
         />
-        <LayersSum sum={sum} fits={fits} site={site} complaint={errorAt(name)} onFit={scaleToFit}>
+        <LayersSum
+          id={`${id}-sum`}
+          sum={sum}
+          fits={fits}
+          site={site}
+          complaint={errorAt(name)}
+          onFit={scaleToFit}
+        >
           {long ? null : <Button onClick={() => setAsText(false)}>Edit as a table</Button>}
           <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onFile={take} />
         </LayersSum>
@@ -127,9 +143,10 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
                   <ArrowUp aria-hidden size={15} />
                 </RowButton>
                 <RowButton
+                  id={`${id}-remove-${index}`}
                   label={`Remove layer ${index + 1}`}
                   disabled={rows.length === 1}
-                  onPress={() => set(rows.filter((_, i) => i !== index))}
+                  onPress={() => remove(index)}
                 >
                   <X aria-hidden size={15} />
                 </RowButton>
@@ -138,8 +155,15 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
           ))}
         </tbody>
       </table>
-      <LayersSum sum={sum} fits={fits} site={site} complaint={errorAt(name)} onFit={scaleToFit}>
-        <Button onClick={() => set([...rows, rows.at(-1) ?? ["", ""]])}>
+      <LayersSum
+        id={`${id}-sum`}
+        sum={sum}
+        fits={fits}
+        site={site}
+        complaint={errorAt(name)}
+        onFit={scaleToFit}
+      >
+        <Button id={`${id}-add`} onClick={() => set([...rows, rows.at(-1) ?? ["", ""]])}>
           <Plus aria-hidden size={15} /> Layer
         </Button>
         <Button onClick={() => setAsText(true)}>Edit as text</Button>
@@ -151,6 +175,8 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
 }
 
 interface LayersSumProps {
+  /** Of the line that tells the sum: pressing "Scale to fit" disables it, and focus goes there. */
+  readonly id: string;
   /** Of the thicknesses, in the coordinate's unit; null where one cannot be read. */
   readonly sum: number | null;
   readonly fits: boolean;
@@ -161,7 +187,7 @@ interface LayersSumProps {
 }
 
 /** The buttons below the layers, and whether they fill the range. */
-function LayersSum({ sum, fits, site, complaint, onFit, children }: LayersSumProps) {
+function LayersSum({ id, sum, fits, site, complaint, onFit, children }: LayersSumProps) {
   const { span } = site;
   const known = span !== undefined && sum !== null;
   return (
@@ -172,7 +198,7 @@ function LayersSum({ sum, fits, site, complaint, onFit, children }: LayersSumPro
         <Button onClick={onFit} disabled={!known || fits}>
           Scale to fit
         </Button>
-        <p className={`text-small ${fits ? "text-ink-soft" : "text-amber"}`}>
+        <p id={id} tabIndex={-1} className={`text-small ${fits ? "text-ink-soft" : "text-amber"}`}>
           {known
             ? `Together ${spanText(sum, span)} of ${spanText(span.extent, span)}`
             : "The sum is not known yet."}

@@ -1,11 +1,12 @@
 "use client";
 
-import { useState } from "react";
+import { useId, useState } from "react";
 import { Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
 import { ERROR_LINE } from "../../../../_ui/field";
 import { FileButton } from "../../../../_ui/file-button";
 import { readRows, writeRows } from "../../_model/profile-forms";
+import { focusSoon } from "../compare/focus";
 import { useForm } from "../form-context";
 import { CellInput } from "./cell-input";
 import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
@@ -18,11 +19,18 @@ type Rows = readonly (readonly [string, string])[];
 /** Measured points: typed row by row, pasted as text, or read from a CSV file. */
 export function PointsTable({ name, site }: { readonly name: string; readonly site: FieldSite }) {
   const { parameters, change, errorAt } = useForm();
+  const id = useId();
   const [asText, setAsText] = useState(false);
   const rows = readRows(parameters[name] ?? "");
   const long = rows.length > MOST_ROWS_SHOWN;
   const set = (next: Rows) => change({ [name]: writeRows(next) });
   const { notes, revision, read, take } = useRowsReading(set);
+
+  function remove(index: number) {
+    const last = rows.length - 2;
+    set(rows.filter((_, i) => i !== index));
+    focusSoon(last > 1 ? `${id}-remove-${Math.min(index, last)}` : `${id}-add`);
+  }
 
   return (
     <div className="mb-1.5">
@@ -76,9 +84,10 @@ export function PointsTable({ name, site }: { readonly name: string; readonly si
                 ))}
                 <td className="w-px pb-0.5">
                   <RowButton
+                    id={`${id}-remove-${index}`}
                     label={`Remove point ${index + 1}`}
                     disabled={rows.length <= 2}
-                    onPress={() => set(rows.filter((_, i) => i !== index))}
+                    onPress={() => remove(index)}
                   >
                     <X aria-hidden size={15} />
                   </RowButton>
@@ -93,7 +102,7 @@ export function PointsTable({ name, site }: { readonly name: string; readonly si
         {long ? null : (
           <>
             {asText ? null : (
-              <Button onClick={() => set([...rows, rows.at(-1) ?? ["", ""]])}>
+              <Button id={`${id}-add`} onClick={() => set([...rows, rows.at(-1) ?? ["", ""]])}>
                 <Plus aria-hidden size={15} /> Point
               </Button>
             )}

@@ -3,6 +3,7 @@
 import type { ReactNode } from "react";
 
 interface RowButtonProps {
+  readonly id?: string;
   readonly label: string;
   readonly disabled: boolean;
   readonly onPress: () => void;
@@ -10,9 +11,10 @@ interface RowButtonProps {
 }
 
 /** A small button at the end of a row. */
-export function RowButton({ label, disabled, onPress, children }: RowButtonProps) {
+export function RowButton({ id, label, disabled, onPress, children }: RowButtonProps) {
   return (
     <button
+      id={id}
       type="button"
       aria-label={label}
       disabled={disabled}
