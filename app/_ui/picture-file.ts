@@ -26,7 +26,7 @@ export function svgFile(picture: SVGSVGElement): string {
   const stage = document.createElement("div");
   // Styles are read inside the page, where the tokens are, and always in light colours.
   stage.dataset.theme = "light";
-  stage.style.cssText = "position:absolute;left:-100000px;top:0";
+  stage.style.cssText = "position:absolute;left:-100000px;top:0;color:var(--ink)";
   stage.append(copy);
   document.body.append(stage);
   try {

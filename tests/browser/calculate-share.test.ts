@@ -87,6 +87,27 @@ describe("variants", () => {
   });
 });
 
+describe("a picture to keep", () => {
+  it("has the light colours also where the page is dark", async () => {
+    const { page, close } = await bench.open(STATE, { colorScheme: "dark" });
+    await page.locator("[data-whole]").waitFor({ state: "attached" });
+    const [download] = await Promise.all([
+      page.waitForEvent("download"),
+      page.getByRole("button", { name: "Drawing as SVG" }).click(),
+    ]);
+    const chunks: Buffer[] = [];
+    for await (const chunk of await download.createReadStream()) chunks.push(Buffer.from(chunk));
+    const svg = Buffer.concat(chunks).toString();
+    const colours = new Set(svg.match(/rgb\(\d+, \d+, \d+\)/g));
+    // Copper and ink of the light look; nothing of the dark one's.
+    expect([...colours]).toEqual(expect.arrayContaining(["rgb(156, 74, 31)", "rgb(27, 34, 38)"]));
+    for (const dark of ["rgb(227, 154, 106)", "rgb(236, 232, 223)", "rgb(28, 33, 36)"]) {
+      expect(colours).not.toContain(dark);
+    }
+    await close();
+  });
+});
+
 describe("use this elsewhere", () => {
   const codeOf = async (path: string, tab: string): Promise<readonly string[]> => {
     const { page, close } = await bench.open(path);
