@@ -47,6 +47,16 @@ describe("/docs/api", () => {
     for (const foreign of [/Powered by/, /Client Libraries/])
       expect(await page.getByText(foreign).filter({ visible: true }).count()).toBe(0);
     expect(await contrastViolations(page)).toEqual([]);
+    // The reader of these tests wants no motion; the package would move its own parts.
+    const moving = await page.evaluate(() =>
+      [...document.querySelectorAll("*")]
+        .filter((element) => {
+          const { transitionDuration, animationName } = getComputedStyle(element);
+          return /[1-9]/.test(transitionDuration) || animationName !== "none";
+        })
+        .map(({ className }) => String(className)),
+    );
+    expect(moving).toEqual([]);
     for (const width of [1440, 768, 360]) {
       await page.setViewportSize({ width, height: 900 });
       const excess = await page.evaluate(

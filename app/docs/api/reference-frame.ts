@@ -104,4 +104,6 @@ body { margin: 0; background: var(--paper); color: var(--ink); font-family: "Spl
   .frame a, .frame [aria-current] { display: flex; align-items: center; min-height: 44px; }
   .frame-theme label { height: 44px; }
   .frame nav { order: 1; flex-basis: 100%; } .frame nav + a { margin-inline-start: auto; } }
+@media (prefers-reduced-motion: reduce) { *, ::before, ::after { animation: none !important;
+  transition: none !important; scroll-behavior: auto !important; } }
 `;
