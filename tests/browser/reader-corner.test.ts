@@ -32,6 +32,14 @@ describe("the corner of a page", () => {
     expect(await menu.locator("summary").getAttribute("aria-label")).toBe(`Signed in as ${NAME}`);
     await menu.locator("summary").click();
     expect(await menu.innerText()).toContain(NAME);
+    for (const width of [360, 479, 480, 768]) {
+      await page.setViewportSize({ width, height: 900 });
+      const list = await menu.locator("summary + div").boundingBox();
+      if (!list) throw new Error("The menu is not shown.");
+      expect(list.x, `${width} px`).toBeGreaterThanOrEqual(8);
+      expect(list.x + list.width, `${width} px`).toBeLessThanOrEqual(width - 8);
+    }
+    await page.setViewportSize({ width: 360, height: 900 });
     expect(await menu.innerText()).toContain("These pages work for the team ");
     for (const [name, href] of [
       ["Console", "/console"],

@@ -51,7 +51,8 @@ export function ReaderMenu({ name, email, teams, team }: ReaderMenuProps) {
 
   const others = teams.filter((each) => each !== team);
   return (
-    <details ref={menu} className="relative min-w-0">
+    // In a phone's width the list takes the window's: from the name's end it would reach over the left edge.
+    <details ref={menu} className="min-w-0 narrow:relative">
       <summary
         aria-label={`Signed in as ${name}`}
         className="flex min-h-5.5 cursor-pointer list-none items-center gap-0.5 rounded text-table text-ink-soft hover:text-ink medium:min-h-4 [&::-webkit-details-marker]:hidden"
@@ -60,7 +61,7 @@ export function ReaderMenu({ name, email, teams, team }: ReaderMenuProps) {
         <span className="max-w-[6ch] truncate narrow:max-w-[12ch] medium:max-w-[18ch]">{name}</span>
         <ChevronDown aria-hidden size={14} className="shrink-0" />
       </summary>
-      <div className="absolute end-0 top-full z-20 mt-0.5 w-[17rem] max-w-[calc(100vw-32px)] rounded border border-ink bg-sheet p-1 text-table">
+      <div className="absolute inset-x-2 z-20 mt-0.5 rounded border border-ink bg-sheet p-1 text-table narrow:inset-x-auto narrow:end-0 narrow:top-full narrow:w-[17rem]">
         <p className="px-1 font-medium [overflow-wrap:anywhere]">{name}</p>
         <p className="px-1 text-small text-ink-soft [overflow-wrap:anywhere]">{email}</p>
         <p className="mt-0.5 px-1 text-small text-ink-soft [overflow-wrap:anywhere]">
