@@ -11,6 +11,7 @@ import { type Complaint, sentence, sortComplaints } from "../_model/complaints";
 import { dimensionGroups } from "../_model/parameters";
 import { noTolerance } from "../_model/tolerances";
 import { sizingBody } from "../_model/sizing";
+import { parameterLabel } from "./compare/parameter-words";
 import { kindOf, memberText } from "./dimension-fields";
 import { useForm } from "./form-context";
 import { SaveRecord, type Saving } from "./save-record";
@@ -47,7 +48,13 @@ export function SolveFor({ saving, back }: SolveForProps) {
     error instanceof ApiProblem && error.status === 422 ? (error.problem.errors ?? []) : [];
   const { atField, elsewhere } = sortComplaints(complaints);
   const own = ["solveFor", "target", "from", "to"];
-  const others = [...atField].filter(([name]) => !own.includes(name)).map(([, detail]) => detail);
+  // Their fields are far above, so each is told with its field's name.
+  const others = [...atField]
+    .filter(([name]) => !own.includes(name))
+    .map(([name, detail]) => {
+      const { label } = parameterLabel(name.split("/")[0], entry, dimensions);
+      return `${label}: ${detail.charAt(0).toLowerCase()}${detail.slice(1)}`;
+    });
 
   const use = ({ value, text }: SizingResult["within"][number]): void => {
     if (!chosen) return;

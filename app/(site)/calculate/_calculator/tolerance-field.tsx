@@ -2,6 +2,7 @@
 
 import { X } from "lucide-react";
 import { CONTROL } from "../../../_ui/field";
+import { focusSoon } from "./compare/focus";
 import { DISTRIBUTIONS, hasTolerance, noTolerance } from "../_model/tolerances";
 import type { PlainForm } from "./form-context";
 
@@ -22,6 +23,10 @@ interface Compact {
   readonly compact?: boolean;
 }
 
+/** The button and the field take each other's place, and focus goes from one to the other. */
+const buttonId = (name: string) => `${name}-give-tolerance`;
+const fieldId = (name: string) => `${name}-tolerance`;
+
 /** Offers a tolerance at the end of a field's label; nothing once there is one. */
 export function ToleranceButton({ form, name, label, temperature = false }: ToleranceProps & Temperature) {
   const { parameters, change, tolerances } = form;
@@ -31,16 +36,18 @@ export function ToleranceButton({ form, name, label, temperature = false }: Tole
   return (
     <button
       type="button"
+      id={buttonId(name)}
       aria-label={`Give ${label.toLowerCase()} a tolerance`}
       title="Give a tolerance"
       className="relative grid size-2.5 cursor-pointer place-items-center rounded border border-edge font-mono text-small leading-none text-ink-soft before:absolute before:-inset-[13px] before:content-[''] hover:border-ink hover:text-ink"
-      onClick={() =>
+      onClick={() => {
         change({
           [`${name}.tolerance`]: start,
           // A tolerance that nothing evaluates would say nothing.
           uncertainty: parameters.uncertainty ?? "propagation",
-        })
-      }
+        });
+        focusSoon(fieldId(name));
+      }}
     >
       ±
     </button>
@@ -99,12 +106,13 @@ export function ToleranceRow({ form, name, label, compact = false }: TolerancePr
   return (
     <div className={look.row}>
       <div className={look.sides}>
-        {members.map((member) => (
+        {members.map((member, index) => (
           <label key={member} className="flex items-center gap-0.5">
             <span aria-hidden className="w-1.5 shrink-0 font-mono">
               {SIDES[member].sign}
             </span>
             <input
+              id={index === 0 ? fieldId(name) : undefined}
               aria-label={`${SIDES[member].said} of ${said}`}
               aria-invalid={errorAt(`${name}.${member}`) ? true : undefined}
               aria-describedby={errors.length > 0 ? errorId : undefined}
@@ -125,7 +133,10 @@ export function ToleranceRow({ form, name, label, compact = false }: TolerancePr
           type="button"
           aria-label={`Take the tolerance of ${said} away`}
           className={`grid ${look.away} cursor-pointer place-items-center rounded text-ink-soft hover:text-ink`}
-          onClick={() => change(noTolerance(name))}
+          onClick={() => {
+            change(noTolerance(name));
+            focusSoon(buttonId(name));
+          }}
         >
           <X aria-hidden size={15} />
         </button>
