@@ -51,6 +51,19 @@ const QUERIES: readonly (readonly [query: string, expected: string])[] = [
   ["thin film sheet resistance", "/docs/shapes/sheet-strip"],
   ["invalid input", "/docs/problems/invalid-input"],
   ["taperd strip", "/docs/shapes/tapered-strip"],
+  ["ln(b/a)", "/docs/shapes/cylindrical-shell"],
+  ["hollow cylinder", "/docs/shapes/cylindrical-shell"],
+  ["wire gauge", "/docs/shapes/round-wire"],
+  ["401", "/docs/problems/missing-credentials"],
+  ["503", "/docs/problems/busy"],
+  ["openapi", "/docs/api"],
+  ["anisotropy", "/docs/methods#not"],
+  ["skin effect", "/docs/methods#not"],
+  ["capacitance", "/docs/methods#not"],
+  ["AC resistance", "/docs/methods#not"],
+  ["forgot password", "/docs/running#people"],
+  ["error bars", "/docs/bounds"],
+  ["key in url", "/docs/spreadsheets#key"],
 ];
 
 describe("the search of the docs", () => {

@@ -12,7 +12,7 @@ export const clients: DocPage = {
       blocks: [
         "One file, Python 3.9 and newer, standard library only. Put it beside your script, or into the script folder of a CAD program:",
         pythonDownload(origin),
-        "It can be downloaded [here](/docs/python/rhoform.py) as well. With the repository at hand, `python3 -m pip install ./sdk/python` installs it; that needs no network.",
+        "It can be downloaded [here](/docs/python/rhoform.py) as well. With the repository at hand, `python3 -m pip install ./sdk/python` installs it, in a virtual environment where the system’s Python refuses; that needs no network.",
         {
           snippets: [
             {

@@ -89,6 +89,20 @@ export const methods: DocPage = {
       ],
     },
     {
+      id: "not",
+      title: "What is not computed",
+      blocks: [
+        {
+          list: [
+            "Alternating current: skin and proximity effect, inductance, capacitance, impedance at any frequency.",
+            "A conductivity that depends on direction, on the field strength or on the current.",
+            "The resistance of a joint between two faces, beyond the constriction of a [contact spot](/docs/shapes/contact-spot): terminals are perfect. A measured joint is an element of a [network](/docs/networks).",
+            "Heating: the temperature is an [input](/docs/operating-point).",
+          ],
+        },
+      ],
+    },
+    {
       id: "tests",
       title: "How it is tested",
       blocks: [

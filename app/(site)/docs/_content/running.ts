@@ -75,7 +75,7 @@ export const running: DocPage = {
           ].join("\n"),
         ),
         "All commands of the shell read the same settings as the service: without its `RHOFORM_DATA` they would open another database, without its `RHOFORM_ORIGIN` their links would lead elsewhere. Run them as the user that the service runs as.",
-        "Everyone else is invited in the console. Invitations and links for new passwords go out by the mail server of `RHOFORM_SMTP_URL`, from the address in `RHOFORM_MAIL_FROM`. Without them no mail leaves: administrators read the messages in the console and pass the links on.",
+        "Everyone else is invited in the console. Invitations and links for new passwords go out by the mail server of `RHOFORM_SMTP_URL`, from the address in `RHOFORM_MAIL_FROM`. Without them no mail leaves: administrators read the messages in the console and pass the links on. “Send me a test mail” in the [settings](/console/settings) shows whether the server takes them.",
       ],
     },
     {

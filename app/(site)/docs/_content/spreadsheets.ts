@@ -32,7 +32,7 @@ export const spreadsheets: DocPage = {
             "Press “Issue”, copy the key, and paste it into cell B1 of the workbook. Hide that cell before you pass the file on, or clear it.",
           ],
         },
-        "Whoever runs the service can issue one in a shell as well:",
+        "Whoever runs the service can issue one in a shell as well, with [the service’s settings](/docs/running#people):",
         {
           snippets: [
             {

@@ -69,13 +69,13 @@ function build(): MiniSearch<Entry> {
     [...guides(), ...shapes(), ...problems()].map((hit, id) => ({
       ...hit,
       id,
-      trade: TRADE_WORDS[hit.href] ?? "",
+      trade: [hit.trade, TRADE_WORDS[hit.href]].join(" "),
     })),
   );
   return index;
 }
 
-type Found = Omit<Entry, "id" | "trade">;
+type Found = Omit<Entry, "id" | "trade"> & { readonly trade?: string };
 
 function* guides(): Generator<Found> {
   for (const page of GROUPS.flatMap(({ pages }) => pages)) {
@@ -121,6 +121,8 @@ function* problems(): Generator<Found> {
       excerpt: cut(plainText(description)),
       text,
       code: "",
+      // People look a status up before they know its problem's name.
+      trade: String(status),
     };
   }
 }

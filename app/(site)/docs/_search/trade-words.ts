@@ -4,10 +4,10 @@
  */
 export const TRADE_WORDS: Readonly<Record<string, string>> = {
   "/docs/shapes/bar": "busbar bus bar rail strap shunt flat",
-  "/docs/shapes/round-wire": "cable rod conductor lead awg solid core filament",
+  "/docs/shapes/round-wire": "cable rod conductor lead awg gauge solid core filament",
   "/docs/shapes/stranded-conductor": "cable flex strand litz rope",
   "/docs/shapes/clad-wire": "bimetal copper-clad aluminium plated coated CCA steel core",
-  "/docs/shapes/tube": "pipe hollow conductor ferrule",
+  "/docs/shapes/tube": "pipe hollow conductor cylinder ferrule",
   "/docs/shapes/box-tube": "square pipe hollow section rectangular profile duct",
   "/docs/shapes/prism": "profile extrusion rail arbitrary cross-section",
   "/docs/shapes/etched-trace": "pcb track printed circuit board copper foil ounce undercut",
@@ -19,7 +19,7 @@ export const TRADE_WORDS: Readonly<Record<string, string>> = {
   "/docs/shapes/torus-arc": "elbow hook bent rod curved wire ring",
   "/docs/shapes/bent-tube": "elbow pipe bend curved tube",
   "/docs/shapes/cylindrical-shell":
-    "coaxial cable insulation sleeve washer annulus bushing radial leakage liner jacket pipe",
+    "coaxial cable insulation sleeve washer annulus bushing radial leakage liner jacket pipe ln(b/a) ln(r2/r1) logarithm hollow cylinder",
   "/docs/shapes/spherical-shell": "ball hollow sphere dome",
   "/docs/shapes/conical-shell": "cone funnel insulator",
   "/docs/shapes/confocal-shell": "oval ellipse flattened tube insulation",
@@ -55,8 +55,10 @@ export const TRADE_WORDS: Readonly<Record<string, string>> = {
   "/docs/spreadsheets": "excel libreoffice google sheets calc workbook cell macro",
   "/docs/authentication": "login token api key bearer credentials cors",
   "/docs/quantities": "si units inch mil mm conversion degrees kelvin celsius fahrenheit prefix",
-  "/docs/media#medium": "resistivity conductivity sheet resistance squares four-point probe measured alloy",
-  "/docs/media#graded": "functionally graded gradient diffusion profile doping layers inhomogeneous variable",
+  "/docs/media#medium":
+    "resistivity conductivity sheet resistance squares four-point probe 4-wire measured alloy temperature coefficient alpha tcr",
+  "/docs/media#graded":
+    "functionally graded gradient diffusion profile doping layers inhomogeneous variable semiconductor silicon",
   "/docs/operating-point": "voltage current power loss heating temperature rise joule",
   "/docs/bounds": "error bar interval confidence lower upper guaranteed",
   "/docs/uncertainty": "tolerance monte carlo worst case standard deviation GUM budget sigma",
@@ -74,12 +76,15 @@ export const TRADE_WORDS: Readonly<Record<string, string>> = {
   "/docs/embedding": "iframe widget wordpress intranet react web component",
   "/docs/embedding#place": "csp content security policy headers",
   "/docs/running": "deploy docker nginx self-host server environment variables configuration",
+  "/docs/running#people": "invitation forgot password reset smtp e-mail",
   "/docs/running#backup": "restore disaster recovery sqlite copy dump",
   "/docs/running#monitoring": "health check metrics logs alert uptime",
   "/docs/running#proxy": "nginx apache reverse proxy https tls certificate",
   "/docs/permissions": "admin viewer editor rights access control",
   "/docs/versioning": "semver breaking change deprecation compatibility",
   "/docs/methods": "theory equations derivation how computed",
+  "/docs/methods#not": "ac reactance anisotropic anisotropy heat transfer ampacity superconductor stray",
   "/docs/accuracy": "validation verification benchmark reference tests precision",
+  "/docs/api": "openapi swagger postman playground try schema json",
   "/docs/accessibility": "wcag screen reader keyboard a11y",
 };
