@@ -350,6 +350,31 @@ describe("a network's picture", () => {
       expect(Number(x) > 0 && Number(x) < width && Number(y) > 10 && Number(y) < height).toBe(true);
     }
   });
+
+  it("keeps the words of elements side by side apart on a phone", () => {
+    const pair = ["braid left", "braid right"].map((name) => ({
+      name,
+      from: "in",
+      to: "out",
+      resistance: "36 µΩ",
+    }));
+    const chain = ["joint", "lug", "out"].map((to, k) => ({
+      name: `bar ${k}`,
+      from: ["in", "joint", "lug"][k],
+      to,
+      resistance: "6 µΩ",
+    }));
+    const doubled = [...chain, ...chain.map((each) => ({ ...each, name: `${each.name}′` }))];
+    for (const elements of [pair, doubled]) {
+      const svg = networkSvg(elements, ["in", "out"], { ...LOOK, width: 310 });
+      const places = [...svg.matchAll(/<text x="([\d.-]+)" y="([\d.-]+)"/g)].map(([, x, y]) => [+x, +y]);
+      for (const [k, [x, y]] of places.entries()) {
+        for (const [otherX, otherY] of places.slice(k + 1)) {
+          if (Math.abs(x - otherX) < 1) expect(Math.abs(y - otherY)).toBeGreaterThan(13);
+        }
+      }
+    }
+  });
 });
 
 describe("a field's record", () => {

@@ -10,6 +10,8 @@ const BODY = { length: 46, width: 15 };
 const MARGIN = 44;
 /** Largest width of one unit of the layout, px. */
 const LARGEST = 1.25;
+/** Least height of that unit, px: closer lines would cover each other's names. */
+const LEAST_HEIGHT = 0.7;
 
 export interface DrawnElement {
   readonly name: string;
@@ -31,12 +33,13 @@ export function networkSvg(
     ports,
   });
   const scale = Math.min(LARGEST, width / layout.width);
+  const tall = Math.max(scale, LEAST_HEIGHT);
   const left = (width - scale * layout.width) / 2;
   const heights = [...layout.nodes.map(({ y }) => y), ...layout.elements.map((each) => bowOf(each)[0][1])];
   const [highest, lowest] = [Math.min(...heights), Math.max(...heights)];
-  const height = n(scale * (lowest - highest) + 2 * MARGIN);
+  const height = n(tall * (lowest - highest) + 2 * MARGIN);
   const spot = ([x, y]: readonly [number, number]) =>
-    [n(left + scale * x), n(scale * (y - highest) + MARGIN)] as const;
+    [n(left + scale * x), n(tall * (y - highest) + MARGIN)] as const;
   const branches = layout.elements.map((placed) => {
     const { from, to } = placed;
     const { name, resistance } = elements[placed.index];
