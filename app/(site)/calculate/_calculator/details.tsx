@@ -1,19 +1,15 @@
 "use client";
 
-import dynamic from "next/dynamic";
 import { lazy, type ReactNode, Suspense } from "react";
 import type { ShapeEntry } from "@/lib/engine";
 import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
-import { Loading } from "../../../_ui/states";
 import { Budget } from "./answer/budget";
+import { PlotsPlace } from "./answer/plots-place";
 import { StepList } from "./answer/step-list";
 import { Checks, Grounds } from "./answer/statements";
 import { WhenSeen } from "./when-seen";
 
-const FlowPlots = dynamic(() => import("./answer/flow-plots").then((module) => module.FlowPlots), {
-  ssr: false,
-  loading: () => <Loading what="the plots" className="min-h-[640px]" />,
-});
+const FlowPlots = lazy(() => import("./answer/flow-plots").then((module) => ({ default: module.FlowPlots })));
 const Steps = lazy(() => import("./answer/steps").then((module) => ({ default: module.Steps })));
 
 interface DetailsProps {
@@ -51,8 +47,10 @@ export function Details({ entry, result, formula, graded }: DetailsProps) {
           <h2 id="plots" className="mb-1">
             Along the flow
           </h2>
-          <WhenSeen fallback={<Loading what="the plots" className="min-h-[640px]" />}>
-            <FlowPlots entry={entry} profile={result.profile} />
+          <WhenSeen fallback={<PlotsPlace profile={result.profile} />}>
+            <Suspense fallback={<PlotsPlace profile={result.profile} />}>
+              <FlowPlots entry={entry} profile={result.profile} />
+            </Suspense>
           </WhenSeen>
         </section>
       ) : null}

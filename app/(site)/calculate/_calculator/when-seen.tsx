@@ -2,6 +2,11 @@
 
 import { type ReactNode, useEffect, useRef, useState } from "react";
 
+/** How far outside the window a place counts as near, px. A phone's page is longer, and is thrown past faster. */
+const AHEAD = 400;
+const AHEAD_NARROW = 1500;
+const NARROW = 768;
+
 /** Shows its content once its place comes near the window, so that what nobody looks at is not loaded. */
 export function WhenSeen({
   children,
@@ -19,7 +24,7 @@ export function WhenSeen({
       ([entry]) => {
         if (entry.isIntersecting) setSeen(true);
       },
-      { rootMargin: "400px" },
+      { rootMargin: `${window.innerWidth < NARROW ? AHEAD_NARROW : AHEAD}px` },
     );
     observer.observe(element);
     return () => observer.disconnect();

@@ -4,6 +4,7 @@ import { useState } from "react";
 import type { ShapeEntry } from "@/lib/engine";
 import type { ResistanceResult } from "@/lib/engine/resistance/result-schema";
 import { PlotFigure } from "../../../../_ui/plot/plot-figure";
+import { varies } from "./plots-place";
 
 interface FlowPlotsProps {
   readonly entry: ShapeEntry;
@@ -94,9 +95,4 @@ function axisOf(entry: ShapeEntry, name: string, unit: "m" | "rad", values: read
   return unit === "rad"
     ? { label, unit: "°", values: values.map((value) => (value / Math.PI) * 180) }
     : { label, unit: "m", values };
-}
-
-function varies(values: readonly number[]): boolean {
-  const largest = Math.max(...values);
-  return largest - Math.min(...values) > 1e-9 * largest;
 }

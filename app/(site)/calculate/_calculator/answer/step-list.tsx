@@ -17,7 +17,7 @@ export function StepList({ steps, line }: StepListProps) {
             <span className="font-mono text-small text-ink-soft">{index + 1}</span> {step.title}
           </p>
           <div>
-            <div className="min-h-6">{line?.(step.tex, step.title)}</div>
+            <div className="min-h-7">{line?.(step.tex, step.title)}</div>
             {step.value ? <p className="font-mono text-table">{step.value}</p> : null}
           </div>
         </li>
