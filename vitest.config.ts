@@ -51,6 +51,8 @@ export default defineConfig({
           isolate: false,
           include: ["tests/api/**/*.test.ts"],
           globalSetup: ["tests/support/worker-bundle.ts"],
+          // The set-up of the `server` tests names their service to all; these have the lean process, each file its own.
+          env: { RHOFORM_TEST_BASE: "", RHOFORM_TEST_DATA: "" },
           testTimeout: 60_000,
           hookTimeout: 60_000,
         },
