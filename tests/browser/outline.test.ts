@@ -141,6 +141,39 @@ describe("an outline", () => {
     await again.close();
   });
 
+  it("shows the coordinates of what was just drawn", async () => {
+    const { page, close } = await bench.open("/outline");
+    await page.getByLabel("Begin with").selectOption("An empty board");
+    const draw = async (corners: readonly (readonly [number, number])[]) => {
+      const press = await presser(page);
+      for (const [x, y] of [...corners, corners[0]]) await press(x, y);
+    };
+    await draw([
+      [0, 0],
+      [40, 0],
+      [40, 40],
+      [0, 40],
+    ]);
+    for (const [target, title, from] of [
+      ["Hole", "Hole 0", 5],
+      ["Hole", "Hole 1", 15],
+      ["Region", "Region 0", 25],
+    ] as const) {
+      await page.getByText("Draw", { exact: true }).first().click();
+      await page.getByText(target, { exact: true }).first().click();
+      await draw([
+        [from, from],
+        [from + 5, from],
+        [from + 5, from + 5],
+      ]);
+      await expect
+        .poll(() => page.getByLabel("Ring", { exact: true }).locator("option:checked").textContent())
+        .toBe(title);
+      expect(await page.getByLabel("Vertex 0, x").inputValue()).toBe(String(from));
+    }
+    await close();
+  });
+
   it("is pressed under a message, whose Undo brings the drawing before back also after further steps", async () => {
     const { page, close } = await bench.open("/outline");
     const x = page.getByLabel("Vertex 1, x");

@@ -4,7 +4,7 @@ import { type ReactNode, useRef, useState } from "react";
 import { Maximize, Minus, Plus } from "lucide-react";
 import { Button } from "../../../../_ui/button";
 import { addRegion, addRing } from "../../_model/edit";
-import { type Point, ringTitle, type Sketch, withRing } from "../../_model/sketch";
+import { type Point, regionKey, type RingKey, ringTitle, type Sketch, withRing } from "../../_model/sketch";
 import { zoomAt } from "../../_model/view";
 import { useOutline } from "../outline-context";
 import { ConductorLayer, TerminalLayer } from "./conductor-layer";
@@ -50,7 +50,8 @@ export function Board(props: BoardProps) {
     setDraft([]);
     if (keep && ring.length > 2) {
       edit((sketch) => withDrawn(sketch, drawTarget, ring));
-      select(null);
+      // Its first corner is marked, so that the table shows the coordinates of what was just drawn.
+      select({ kind: "vertex", ring: keyOfDrawn(sketch, drawTarget), index: 0 });
       onDrawn();
     } else if (!keep) onDrawn();
   }
@@ -168,6 +169,12 @@ function withDrawn(sketch: Sketch, target: DrawTarget, points: readonly Point[])
       parts: terminal.parts.filter((part) => part.ring !== 0),
     })),
   };
+}
+
+/** Which ring that becomes. */
+function keyOfDrawn(sketch: Sketch, target: DrawTarget): RingKey {
+  if (target === "region") return regionKey(sketch.regions.length);
+  return target === "hole" ? sketch.rings.length : 0;
 }
 
 /** The drawing in words. */
