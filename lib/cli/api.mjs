@@ -1,6 +1,6 @@
 /**
- * `npm run api`: bundles what worker threads load unless that is done, then serves the API alone in this process, which gets the
- * signals.
+ * `npm run api`: bundles what worker threads load unless that is done, then serves the API alone in this process, which
+ * gets the signals.
  */
 import { register } from "tsx/esm/api";
 import { followParent } from "./follow-parent.mjs";

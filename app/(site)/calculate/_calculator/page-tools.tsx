@@ -5,7 +5,8 @@ import type { ShapeEntry } from "@/lib/engine";
 import { Button } from "../../../_ui/button";
 import { splitAddress } from "../_model/address";
 import { type PageState, stateQuery } from "../_model/variants";
-import { COMPARE_ID, focusSoon, variantId } from "./compare/focus";
+import { COMPARE_ID, variantId } from "./compare/focus";
+import { focusSoon } from "./focus-soon";
 import { useToast } from "../../../_ui/toast";
 import type { PageActions } from "./use-page-state";
 

@@ -2,7 +2,7 @@
 
 import { X } from "lucide-react";
 import { CONTROL } from "../../../_ui/field";
-import { focusSoon } from "./compare/focus";
+import { focusSoon } from "./focus-soon";
 import { DISTRIBUTIONS, hasTolerance, noTolerance } from "../_model/tolerances";
 import type { PlainForm } from "./form-context";
 

@@ -3,7 +3,8 @@
 import { Plus, X } from "lucide-react";
 import { Button } from "../../../../_ui/button";
 import { useToast } from "../../../../_ui/toast";
-import { COMPARE_ID, focusSoon, variantId } from "./focus";
+import { focusSoon } from "../focus-soon";
+import { COMPARE_ID, variantId } from "./focus";
 import { type PageState, VARIANT_NAMES } from "../../_model/variants";
 import type { PageActions } from "../use-page-state";
 

@@ -6,7 +6,7 @@ import { Button } from "../../../../_ui/button";
 import { ERROR_LINE } from "../../../../_ui/field";
 import { FileButton } from "../../../../_ui/file-button";
 import { readRows, writeRows } from "../../_model/profile-forms";
-import { focusSoon } from "../compare/focus";
+import { focusSoon } from "../focus-soon";
 import { useForm } from "../form-context";
 import { spanText } from "../../_model/profile-starts";
 import { baseValue } from "../../_model/value-texts";
@@ -58,6 +58,7 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
     focusSoon(`${id}-sum`);
   }
 
+  const below = { id: `${id}-sum`, sum, fits, site, complaint: errorAt(name), onFit: scaleToFit };
   const long = rows.length > MOST_ROWS_SHOWN;
   if (asText || long) {
     return (
@@ -72,14 +73,7 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
             void read(text);
           }}
         />
-        <LayersSum
-          id={`${id}-sum`}
-          sum={sum}
-          fits={fits}
-          site={site}
-          complaint={errorAt(name)}
-          onFit={scaleToFit}
-        >
+        <LayersSum {...below}>
           {long ? null : <Button onClick={() => setAsText(false)}>Edit as a table</Button>}
           <FileButton label="Read a CSV file" accept=".csv,.txt,.tsv,text/csv,text/plain" onFile={take} />
         </LayersSum>
@@ -155,14 +149,7 @@ export function LayersTable({ name, site }: { readonly name: string; readonly si
           ))}
         </tbody>
       </table>
-      <LayersSum
-        id={`${id}-sum`}
-        sum={sum}
-        fits={fits}
-        site={site}
-        complaint={errorAt(name)}
-        onFit={scaleToFit}
-      >
+      <LayersSum {...below}>
         <Button id={`${id}-add`} onClick={() => set([...rows, rows.at(-1) ?? ["", ""]])}>
           <Plus aria-hidden size={15} /> Layer
         </Button>

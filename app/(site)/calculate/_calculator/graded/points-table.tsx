@@ -6,7 +6,7 @@ import { Button } from "../../../../_ui/button";
 import { ERROR_LINE } from "../../../../_ui/field";
 import { FileButton } from "../../../../_ui/file-button";
 import { readRows, writeRows } from "../../_model/profile-forms";
-import { focusSoon } from "../compare/focus";
+import { focusSoon } from "../focus-soon";
 import { useForm } from "../form-context";
 import { CellInput } from "./cell-input";
 import { type FieldSite, positionKind, VALUE_UNITS } from "./field-site";
